@@ -1,0 +1,13 @@
+/**
+ * Something noted about a boundary file, with its place where there is one.
+ * `code` is stable and machine-readable (see the API description); `message` is a plain sentence.
+ */
+export interface Finding {
+	code: string;
+	severity: 'error' | 'warning' | 'note';
+	message: string;
+	/** keys of the regions concerned; empty when the finding is about the whole file */
+	regions: string[];
+	/** longitude and latitude in degrees, or null */
+	at: [number, number] | null;
+}

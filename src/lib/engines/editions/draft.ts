@@ -1,0 +1,24 @@
+import type { Ink } from '../palettes/palette.ts';
+import type { SheetLayout } from '../sheet/layout.ts';
+
+/**
+ * Everything about a sheet that people decide, kept whole at every save so that any earlier state can
+ * be read again. Regions are named by their key. The colouring is computed from it, never typed in.
+ */
+export interface Draft {
+	inks: number | 'fewest';
+	palette: { id: string; name: string; inks: Ink[] };
+	/** region key -> pinned ink (number from 0), what dropping it costs, and who set it when */
+	locks: Record<string, { ink: number; cost: number; by?: string; at?: string }>;
+	forbidden: { key: string; ink: number }[];
+	alike: [string, string][];
+	apart: [string, string][];
+	/** whether regions that meet in a point only must differ */
+	pointTouches: boolean;
+	/** borders struck out by hand, with the reason */
+	struck: { a: string; b: string; reason: string }[];
+	/** borders added by hand, with the reason */
+	added: { a: string; b: string; reason: string }[];
+	seed: number;
+	layout: SheetLayout;
+}

@@ -1,0 +1,57 @@
+export interface Ink {
+	name: string;
+	/** sRGB, `#rrggbb`, lower case */
+	hex: string;
+}
+
+export interface Palette {
+	/** stable and url-safe */
+	id: string;
+	name: string;
+	inks: Ink[];
+	/** where the values were published, and under which licence */
+	source?: string;
+	licence?: string;
+}
+
+/** The kinds of eyesight a sheet is checked for. */
+export const readers = ['typical', 'protan', 'deutan', 'tritan', 'grey'] as const;
+export type Reader = (typeof readers)[number];
+
+export interface PairVerdict {
+	/** ink numbers, a < b */
+	a: number;
+	b: number;
+	reader: Reader;
+	/** difference as this reader sees it, Lab D65 */
+	ciede2000: number;
+	/** WCAG 2.2 contrast ratio of the two fills, unrounded */
+	contrast: number;
+	/** difference in L* */
+	greyGap: number;
+	passes: boolean;
+}
+
+export interface LabelVerdict {
+	ink: number;
+	label: '#000000' | '#ffffff';
+	contrast: number;
+	passes: boolean;
+}
+
+export interface PaletteVerdict {
+	pairs: PairVerdict[];
+	labels: LabelVerdict[];
+	passes: boolean;
+}
+
+/** A border on this sheet that one kind of reader could miss. */
+export interface WeakBorder {
+	/** index into the sheet's border list */
+	border: number;
+	reader: Reader;
+	/** what was found and what was asked, in CIEDE2000 or, for grey print, in L* */
+	found: number;
+	asked: number;
+	severity: 'error' | 'warning';
+}

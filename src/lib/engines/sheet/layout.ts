@@ -1,0 +1,22 @@
+export const papers = ['A5', 'A4', 'A3', 'A2', 'A1', 'A0'] as const;
+
+/** How the sheet is laid out; everything the reader sees beside fills and borders. Lengths in mm. */
+export interface SheetLayout {
+	title: string;
+	subtitle: string;
+	paper: (typeof papers)[number] | { widthMm: number; heightMm: number };
+	orientation: 'landscape' | 'portrait';
+	marginMm: number;
+	/** 'auto' follows Snyder's guidance for the extent of the regions */
+	projection: 'auto' | 'albers' | 'lambert-azimuthal' | 'cylindrical-equal-area' | 'equal-earth';
+	labels: boolean;
+	/** column of the attribute table that names the level above (a province), or null */
+	groupColumn: string | null;
+	legend: boolean;
+	scaleBar: boolean;
+	credits: string;
+}
+
+/** The line every sheet carries; it can be added to, never removed. */
+export const caution =
+	'Boundaries as supplied; not for navigation or for settling title. Disputed lines follow the supplier; defer to the competent authority and licensed surveyors.';

@@ -1,0 +1,55 @@
+/** The roles of a team; one person may hold several. A guest has none: shared links are read-only. */
+export const roles = [
+	'cartographer',
+	'analyst',
+	'planner',
+	'designer',
+	'approver',
+	'admin',
+] as const;
+export type Role = (typeof roles)[number];
+
+/** What can be done in a team; every service call and route names one of these. */
+export const actions = [
+	'team.read',
+	'team.manage',
+	'members.manage',
+	'tokens.manage',
+	'activity.read',
+	'boundaries.upload',
+	'findings.accept',
+	'sheet.read',
+	'borders.edit',
+	'colours.edit',
+	'palette.edit',
+	'layout.edit',
+	'sheet.delete',
+	'edition.issue',
+	'files.download',
+] as const;
+export type Action = (typeof actions)[number];
+
+const everyone: readonly Role[] = roles;
+
+/** The one table of who may do what. */
+export const may: Record<Action, readonly Role[]> = {
+	'team.read': everyone,
+	'team.manage': ['admin'],
+	'members.manage': ['admin'],
+	'tokens.manage': ['admin'],
+	'activity.read': ['admin', 'approver'],
+	'boundaries.upload': ['cartographer', 'admin'],
+	'findings.accept': ['cartographer'],
+	'sheet.read': everyone,
+	'borders.edit': ['cartographer'],
+	'colours.edit': ['cartographer', 'analyst'],
+	'palette.edit': ['cartographer', 'analyst', 'designer'],
+	'layout.edit': ['cartographer', 'designer'],
+	'sheet.delete': ['cartographer', 'admin'],
+	'edition.issue': ['approver'],
+	'files.download': everyone,
+};
+
+/** Whether any of these roles may do this. */
+export const allows = (held: readonly Role[], action: Action): boolean =>
+	held.some((role) => may[action].includes(role));

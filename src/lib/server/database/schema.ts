@@ -1,0 +1,245 @@
+import type { ColumnType, Generated, Insertable, JSONColumnType, Selectable } from 'kysely';
+
+/** Row types, one interface a table, kept beside `migrations/`. */
+type Moment = ColumnType<Date, Date | string | undefined, Date | string>;
+type OptionalMoment = ColumnType<Date | null, Date | string | null | undefined, Date | string | null>;
+/** bigint columns arrive as numbers: the connection installs the parser */
+type Whole = ColumnType<number, number, number>;
+
+export interface UserTable {
+	id: Generated<string>;
+	name: string | null;
+	email: string;
+	emailVerified: OptionalMoment;
+	image: string | null;
+}
+export interface AccountTable {
+	id: Generated<string>;
+	userId: string;
+	type: string;
+	provider: string;
+	providerAccountId: string;
+	refresh_token: string | null;
+	access_token: string | null;
+	expires_at: Whole | null;
+	token_type: string | null;
+	scope: string | null;
+	id_token: string | null;
+	session_state: string | null;
+}
+export interface SessionTable {
+	id: Generated<string>;
+	userId: string;
+	sessionToken: string;
+	expires: Moment;
+}
+export interface VerificationTokenTable {
+	identifier: string;
+	token: string;
+	expires: Moment;
+}
+export interface PasswordTable {
+	user_id: string;
+	hash: string;
+	changed_at: Moment;
+}
+export interface TeamTable {
+	id: Generated<string>;
+	slug: string;
+	name: string;
+	created_at: Moment;
+}
+export interface MemberTable {
+	team_id: string;
+	user_id: string;
+	roles: string[];
+	joined_at: Moment;
+}
+export interface InvitationTable {
+	id: Generated<string>;
+	team_id: string;
+	email: string;
+	roles: string[];
+	token_hash: Buffer;
+	invited_by: string | null;
+	created_at: Moment;
+	expires_at: Moment;
+	accepted_at: OptionalMoment;
+	revoked_at: OptionalMoment;
+}
+export interface ApiTokenTable {
+	id: Generated<string>;
+	team_id: string;
+	name: string;
+	hash: Buffer;
+	hint: string;
+	scopes: string[];
+	created_by: string | null;
+	created_at: Moment;
+	expires_at: Moment;
+	revoked_at: OptionalMoment;
+	last_used_at: OptionalMoment;
+}
+export interface ActivityTable {
+	id: Generated<number>;
+	team_id: string | null;
+	at: Moment;
+	user_id: string | null;
+	token_id: string | null;
+	action: string;
+	subject_kind: string | null;
+	subject_id: string | null;
+	detail: JSONColumnType<Record<string, unknown>, string | undefined, string>;
+}
+export interface RateLimitTable {
+	key: string;
+	window_start: Moment;
+	hits: number;
+}
+export interface BoundarySetTable {
+	id: Generated<string>;
+	team_id: string;
+	file_name: string;
+	file_digest: string;
+	file_bytes: Whole;
+	source: JSONColumnType<Record<string, unknown>>;
+	columns: string[];
+	region_count: number;
+	geometry: Buffer;
+	planar: boolean;
+	created_by: string | null;
+	created_at: Moment;
+}
+export interface RegionTable {
+	boundary_set_id: string;
+	ordinal: number;
+	key: string;
+	name: string;
+	parts: number;
+	area_km2: number;
+	enclave_of: number | null;
+	attributes: JSONColumnType<Record<string, string | number | boolean | null>>;
+}
+export interface BorderTable {
+	boundary_set_id: string;
+	a: number;
+	b: number;
+	kind: string;
+	metres: number;
+	at_lon: number;
+	at_lat: number;
+}
+export interface FindingTable {
+	id: Generated<number>;
+	boundary_set_id: string;
+	code: string;
+	severity: 'error' | 'warning' | 'note';
+	message: string;
+	regions: string[];
+	lon: number | null;
+	lat: number | null;
+	accepted_by: string | null;
+	accepted_at: OptionalMoment;
+}
+export type IntakeState = 'waiting' | 'reading' | 'done' | 'refused' | 'cancelled' | 'failed';
+export interface IntakeTable {
+	id: Generated<string>;
+	team_id: string;
+	created_by: string | null;
+	created_at: Moment;
+	updated_at: Moment;
+	file_name: string;
+	file_bytes: Whole;
+	file_digest: string | null;
+	sheet_name: string;
+	options: JSONColumnType<Record<string, unknown>, string | undefined, string>;
+	state: IntakeState;
+	step: Generated<string>;
+	share: Generated<number>;
+	refusal: JSONColumnType<Record<string, unknown>> | null;
+	attempts: Generated<number>;
+	boundary_set_id: string | null;
+	sheet_id: string | null;
+}
+export interface PaletteTable {
+	id: Generated<string>;
+	team_id: string;
+	name: string;
+	inks: JSONColumnType<{ name: string; hex: string }[]>;
+	created_by: string | null;
+	created_at: Moment;
+}
+export interface SheetTable {
+	id: Generated<string>;
+	team_id: string;
+	number: number;
+	name: string;
+	boundary_set_id: string;
+	revision: Generated<number>;
+	created_by: string | null;
+	created_at: Moment;
+	updated_at: Moment;
+}
+export interface ColouringTable {
+	id: Generated<string>;
+	sheet_id: string;
+	inks: number[];
+	inks_used: number;
+	lower_bound: number;
+	proof: JSONColumnType<Record<string, unknown>>;
+	created_at: Moment;
+}
+export interface DraftTable {
+	sheet_id: string;
+	revision: number;
+	document: JSONColumnType<Record<string, unknown>>;
+	colouring_id: string | null;
+	explanation: JSONColumnType<Record<string, unknown>> | null;
+	saved_by: string | null;
+	saved_at: Moment;
+}
+export interface EditionTable {
+	id: Generated<string>;
+	sheet_id: string;
+	number: number;
+	digest: string;
+	content: JSONColumnType<Record<string, unknown>>;
+	note: Generated<string>;
+	issued_by: string | null;
+	issued_at: Moment;
+}
+export interface EditionFileTable {
+	edition_id: string;
+	name: string;
+	media_type: string;
+	digest: string;
+	bytes: Whole;
+}
+
+export interface Database {
+	User: UserTable;
+	Account: AccountTable;
+	Session: SessionTable;
+	VerificationToken: VerificationTokenTable;
+	passwords: PasswordTable;
+	teams: TeamTable;
+	members: MemberTable;
+	invitations: InvitationTable;
+	api_tokens: ApiTokenTable;
+	activity: ActivityTable;
+	rate_limits: RateLimitTable;
+	boundary_sets: BoundarySetTable;
+	regions: RegionTable;
+	borders: BorderTable;
+	findings: FindingTable;
+	intakes: IntakeTable;
+	palettes: PaletteTable;
+	sheets: SheetTable;
+	colourings: ColouringTable;
+	drafts: DraftTable;
+	editions: EditionTable;
+	edition_files: EditionFileTable;
+}
+
+export type Row<T extends keyof Database> = Selectable<Database[T]>;
+export type NewRow<T extends keyof Database> = Insertable<Database[T]>;

@@ -1,0 +1,37 @@
+import { defineConfig } from 'vitest/config';
+
+/**
+ * Four suites, each started on its own by `npm test`. Engines and published values need nothing;
+ * database and faults need DATABASE_URL; journeys need a running product (MERESTONE_URL).
+ */
+export default defineConfig({
+	test: {
+		projects: [
+			{
+				test: {
+					name: 'engines',
+					include: ['src/**/*.test.ts', 'tests/published/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+					testTimeout: 60_000,
+				},
+			},
+			{
+				test: {
+					name: 'database',
+					include: ['tests/database/**/*.test.ts', 'tests/faults/**/*.test.ts'],
+					fileParallelism: false,
+					testTimeout: 120_000,
+					hookTimeout: 120_000,
+				},
+			},
+			{
+				test: {
+					name: 'journeys',
+					include: ['tests/journeys/**/*.test.ts'],
+					fileParallelism: false,
+					testTimeout: 300_000,
+					hookTimeout: 120_000,
+				},
+			},
+		],
+	},
+});
