@@ -1,7 +1,6 @@
-import { sql, type Kysely } from 'kysely';
-import type { Database, NewRow, Row } from '../database/schema.ts';
-
-type Db = Kysely<Database>;
+import { sql } from 'kysely';
+import type { Db } from '../database/connection.ts';
+import type { NewRow, Row } from '../database/schema.ts';
 
 /** The whole of an accepted file, in columns: one entry a region, a border, a finding. */
 export interface BoundaryColumns {

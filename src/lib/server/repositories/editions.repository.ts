@@ -1,7 +1,5 @@
-import type { Kysely } from 'kysely';
-import type { Database, NewRow } from '../database/schema.ts';
-
-type Db = Kysely<Database>;
+import type { Db } from '../database/connection.ts';
+import type { NewRow } from '../database/schema.ts';
 
 export async function nextEditionNumber(trx: Db, sheetId: string): Promise<number> {
 	const { last } = await trx

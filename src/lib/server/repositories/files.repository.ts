@@ -1,7 +1,5 @@
-import { sql, type Kysely } from 'kysely';
-import type { Database } from '../database/schema.ts';
-
-type Db = Kysely<Database>;
+import { sql } from 'kysely';
+import type { Db } from '../database/connection.ts';
 
 /**
  * Holds every other transaction that keeps or drops the bytes with this digest until this one ends, so

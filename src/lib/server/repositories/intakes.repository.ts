@@ -1,7 +1,6 @@
-import { sql, type Kysely } from 'kysely';
-import type { Database, IntakeState, NewRow } from '../database/schema.ts';
-
-type Db = Kysely<Database>;
+import { sql } from 'kysely';
+import type { Db } from '../database/connection.ts';
+import type { IntakeState, NewRow } from '../database/schema.ts';
 
 export async function insertIntake(trx: Db, intake: NewRow<'intakes'>): Promise<string> {
 	const { id } = await trx
@@ -107,6 +106,7 @@ export interface IntakeEnd {
 	refusal?: string | null;
 	file_digest?: string | null;
 	boundary_set_id?: string;
+	attempts?: number;
 	sheet_id?: string;
 }
 

@@ -1,7 +1,4 @@
-import type { Kysely } from 'kysely';
-import type { Database } from '../database/schema.ts';
-
-type Db = Kysely<Database>;
+import type { Db } from '../database/connection.ts';
 
 export const listPalettes = (db: Db, teamId: string) =>
 	db.selectFrom('palettes').selectAll().where('team_id', '=', teamId).orderBy('name').execute();

@@ -1,7 +1,6 @@
-import { sql, type Kysely } from 'kysely';
-import type { Database, Row } from '../database/schema.ts';
-
-type Db = Kysely<Database>;
+import { sql } from 'kysely';
+import type { Db } from '../database/connection.ts';
+import type { Row } from '../database/schema.ts';
 
 /** Makes the next sheet of a team; its number is one more than the last ever given. */
 export async function insertSheet(
