@@ -41,7 +41,24 @@ describe('checkDrup', () => {
 	});
 
 	it('is not fooled by repeated literals and clauses that are always true', () => {
-		expect(checkDrup([[1, 1], [2, -2], [-1, 3, 3]], '3 0\n').valid).toBe(false);
-		expect(checkDrup([[1, 1], [-1, -1]], '').valid).toBe(true);
+		expect(
+			checkDrup(
+				[
+					[1, 1],
+					[2, -2],
+					[-1, 3, 3],
+				],
+				'3 0\n',
+			).valid,
+		).toBe(false);
+		expect(
+			checkDrup(
+				[
+					[1, 1],
+					[-1, -1],
+				],
+				'',
+			).valid,
+		).toBe(true);
 	});
 });

@@ -28,7 +28,8 @@ function reference(clauses: number[][]): boolean {
 
 function bruteForce(variables: number, clauses: number[][]): boolean {
 	for (let bits = 0; bits < 1 << variables; bits++) {
-		const holds = (literal: number) => ((bits >> (Math.abs(literal) - 1)) & 1) === Number(literal > 0);
+		const holds = (literal: number) =>
+			((bits >> (Math.abs(literal) - 1)) & 1) === Number(literal > 0);
 		if (clauses.every((clause) => clause.some(holds))) return true;
 	}
 	return false;
@@ -57,7 +58,9 @@ const instance = fc.integer({ min: 1, max: 9 }).chain((variables) =>
 		variables: fc.constant(variables),
 		clauses: fc.array(
 			fc.array(
-				fc.tuple(fc.integer({ min: 1, max: variables }), fc.boolean()).map(([v, yes]) => (yes ? v : -v)),
+				fc
+					.tuple(fc.integer({ min: 1, max: variables }), fc.boolean())
+					.map(([v, yes]) => (yes ? v : -v)),
 				{ maxLength: 4 },
 			),
 			{ maxLength: 45 },
@@ -80,7 +83,9 @@ describe('small formulas against brute force', () => {
 	});
 
 	it('answers under assumptions, again and again, with cores that clash by themselves', () => {
-		const asked = fc.array(fc.array(fc.integer({ min: -9, max: 9 }), { maxLength: 6 }), { maxLength: 6 });
+		const asked = fc.array(fc.array(fc.integer({ min: -9, max: 9 }), { maxLength: 6 }), {
+			maxLength: 6,
+		});
 		fc.assert(
 			fc.property(instance, asked, ({ variables, clauses }, questions) => {
 				const sat = load(variables, clauses);
