@@ -107,6 +107,7 @@ export interface BoundarySetTable {
 	region_count: number;
 	geometry: Buffer;
 	planar: boolean;
+	planar_witness: JSONColumnType<Record<string, unknown>> | null;
 	created_by: string | null;
 	created_at: Moment;
 }
@@ -158,6 +159,9 @@ export interface IntakeTable {
 	share: Generated<number>;
 	refusal: JSONColumnType<Record<string, unknown>> | null;
 	attempts: Generated<number>;
+	/** who reads it now: renewed at every take-up, so that a late answer of an earlier one is dropped */
+	claim: string | null;
+	heard_at: OptionalMoment;
 	boundary_set_id: string | null;
 	sheet_id: string | null;
 }
@@ -204,6 +208,8 @@ export interface EditionTable {
 	number: number;
 	digest: string;
 	content: JSONColumnType<Record<string, unknown>>;
+	/** the draft it was issued from */
+	revision: Generated<number>;
 	note: Generated<string>;
 	issued_by: string | null;
 	issued_at: Moment;
