@@ -32,6 +32,7 @@ export interface SessionTable {
 	userId: string;
 	sessionToken: string;
 	expires: Moment;
+	created_at: Moment;
 }
 export interface VerificationTokenTable {
 	identifier: string;
@@ -95,6 +96,11 @@ export interface RateLimitTable {
 	key: string;
 	window_start: Moment;
 	hits: number;
+}
+export interface WorkerHeartbeatTable {
+	id: string;
+	started_at: Moment;
+	seen_at: Moment;
 }
 export interface BoundarySetTable {
 	id: Generated<string>;
@@ -234,6 +240,7 @@ export interface Database {
 	api_tokens: ApiTokenTable;
 	activity: ActivityTable;
 	rate_limits: RateLimitTable;
+	worker_heartbeats: WorkerHeartbeatTable;
 	boundary_sets: BoundarySetTable;
 	regions: RegionTable;
 	borders: BorderTable;
