@@ -5,8 +5,7 @@ export interface ColourRequest {
 	problem: ColouringProblem;
 }
 export type ColourReply =
-	| { id: number; result: ColouringResult; milliseconds: number }
-	| { id: number; failed: string };
+	{ id: number; result: ColouringResult; milliseconds: number } | { id: number; failed: string };
 
 /** A run that is still going when it is overtaken gets this long to end by itself. */
 const patience = 250;

@@ -45,4 +45,5 @@ export function standings(
 	});
 }
 
-export const isLine = (borders: BorderList, border: number): boolean => borders.kind[border] === line;
+export const isLine = (borders: BorderList, border: number): boolean =>
+	borders.kind[border] === line;
