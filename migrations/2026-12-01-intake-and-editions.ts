@@ -3,7 +3,7 @@ import { sql, type Kysely } from 'kysely';
 /**
  * What the first run of the whole chain asked for: who holds an intake and since when it was last
  * heard of (so that a dead worker's intake is taken up again, and only once), why a set of boundaries
- * is not planar, which draft an edition was issued from, and which draft follows which edition.
+ * is not planar, and which draft an edition was issued from.
  */
 export async function up(db: Kysely<unknown>): Promise<void> {
 	await sql`

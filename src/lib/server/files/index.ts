@@ -7,8 +7,8 @@ export { FileMissing, type FileStore, type Received } from './store.ts';
 
 let store: FileStore | undefined;
 
-/** This process's store of uploaded and exported bytes; MERESTONE_FILES names its folder. */
+/** This process's store of uploaded and exported bytes; a folder below MERESTONE_DATA. */
 export function fileStore(): FileStore {
-	store ??= folderStore(resolve(process.env.MERESTONE_FILES ?? '.data/files'));
+	store ??= folderStore(resolve(process.env.MERESTONE_DATA ?? '.data', 'files'));
 	return store;
 }
