@@ -1,14 +1,36 @@
-/**
- * Thrown by services when there is no such thing, or none that the one who asks may know of: another
- * team's sheet is as unknown as one that never was. Routes turn it into 404.
- */
+/** What a service throws when the answer is no; routes turn each into its status. */
+
+/** 404: there is no such thing, or not for this member. */
 export class NotFound extends Error {
-	constructor(readonly what: string) {
-		super(`there is no such ${what}`);
+	constructor(what: string) {
+		super(`There is no such ${what} here.`);
 	}
 }
 
-/** Thrown when what was asked does not fit how things stand now. Routes turn it into 409. */
+/** 422: understood and permitted, but a rule of the product forbids it. The message is for the reader. */
+export class Refused extends Error {
+	constructor(
+		message: string,
+		/** the form's field that the message belongs to */
+		readonly field: string | null = null,
+	) {
+		super(message);
+	}
+}
+
+/** 429: too many tries; says after how many seconds one more is allowed. */
+export class TooMany extends Error {
+	constructor(readonly retryAfter: number) {
+		super(`Too many tries. Wait ${waitingTime(retryAfter)}, then try again.`);
+	}
+}
+
+const waitingTime = (seconds: number): string =>
+	seconds < 90
+		? `${Math.max(1, Math.ceil(seconds))} seconds`
+		: `${Math.ceil(seconds / 60)} minutes`;
+
+/** 409: what was asked does not fit how things stand now. */
 export class Conflict extends Error {
 	constructor(
 		readonly code: string,
@@ -18,7 +40,7 @@ export class Conflict extends Error {
 	}
 }
 
-/** Thrown when what was given is understood but cannot be taken. Routes turn it into 422. */
+/** 422: what was given is understood but cannot be taken; the details name what and where. */
 export class Unfit extends Error {
 	constructor(
 		readonly code: string,
