@@ -32,7 +32,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			id uuid primary key default gen_random_uuid(),
 			"userId" uuid not null references "User" on delete cascade,
 			"sessionToken" text not null unique,
-			expires timestamptz not null
+			expires timestamptz not null,
+			created_at timestamptz not null default now()
 		);
 		create table "VerificationToken" (
 			identifier text not null,
@@ -107,6 +108,11 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			window_start timestamptz not null,
 			hits integer not null,
 			primary key (key, window_start)
+		);
+		create table worker_heartbeats (
+			id uuid primary key,
+			started_at timestamptz not null default now(),
+			seen_at timestamptz not null default now()
 		);
 
 		create table boundary_sets (
