@@ -29,3 +29,24 @@ const waitingTime = (seconds: number): string =>
 	seconds < 90
 		? `${Math.max(1, Math.ceil(seconds))} seconds`
 		: `${Math.ceil(seconds / 60)} minutes`;
+
+/** 409: what was asked does not fit how things stand now. */
+export class Conflict extends Error {
+	constructor(
+		readonly code: string,
+		message: string,
+	) {
+		super(message);
+	}
+}
+
+/** 422: what was given is understood but cannot be taken; the details name what and where. */
+export class Unfit extends Error {
+	constructor(
+		readonly code: string,
+		message: string,
+		readonly details?: Record<string, unknown>,
+	) {
+		super(message);
+	}
+}
