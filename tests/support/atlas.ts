@@ -35,5 +35,8 @@ export const bytesOf = (value: unknown) => new TextEncoder().encode(JSON.stringi
 
 function areas(pack: 'us-atlas' | 'world-atlas', file: string, layer: string): Areas {
 	const topology = topologyOf(pack, file);
-	return feature(topology, topology.objects[layer] as GeometryCollection<{ name: string }>) as Areas;
+	return feature(
+		topology,
+		topology.objects[layer] as GeometryCollection<{ name: string }>,
+	) as Areas;
 }

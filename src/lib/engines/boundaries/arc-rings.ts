@@ -4,7 +4,10 @@ import type { Arcs } from './arcs.ts';
 export type ArcRing = number[];
 
 /** Arcs of each region in compressed rows: those with the region on the left forward, on the right backward. */
-export function arcsByRegion(arcs: Arcs, regions: number): { offsets: Uint32Array; list: Int32Array } {
+export function arcsByRegion(
+	arcs: Arcs,
+	regions: number,
+): { offsets: Uint32Array; list: Int32Array } {
 	const offsets = new Uint32Array(regions + 1);
 	const count = arcs.left.length;
 	for (let a = 0; a < count; a++) {

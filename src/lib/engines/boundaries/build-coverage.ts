@@ -60,7 +60,9 @@ function assembleRings(arcs: Arcs, outlines: Outlines) {
 	for (let r = 0; r < regions; r++) {
 		regionParts.push(partRings.length);
 		const halves = byRegion.list.subarray(byRegion.offsets[r], byRegion.offsets[r + 1]);
-		const traced = traceRings(halves, arcs, positions).map((ring) => traced1(ring, arcs, positions));
+		const traced = traceRings(halves, arcs, positions).map((ring) =>
+			traced1(ring, arcs, positions),
+		);
 		for (const part of groupParts(traced)) {
 			partRings.push(ringStarts.length);
 			for (const ring of part) {

@@ -30,7 +30,8 @@ export function encodeCoverage(coverage: Coverage): Uint8Array {
 	const text = strToU8(JSON.stringify([coverage.keys, coverage.names]));
 	const lengths = columns.map(([name]) => coverage[name].length);
 	let size = align8(4 * columns.length) + text.length;
-	for (const [name, Kind] of columns) size += align8(coverage[name].length * Kind.BYTES_PER_ELEMENT);
+	for (const [name, Kind] of columns)
+		size += align8(coverage[name].length * Kind.BYTES_PER_ELEMENT);
 	const body = new Uint8Array(size);
 	body.set(new Uint8Array(Uint32Array.from(lengths).buffer), 0);
 	let at = align8(4 * columns.length);
@@ -58,7 +59,8 @@ export function decodeCoverage(bytes: Uint8Array): Coverage {
 	const [found, made, size, textBytes] = [0, 4, 8, 12].map((at) => header.getUint32(at, true));
 	if (found !== magic) throw new RangeError('These bytes are not a coverage.');
 	if (made !== version) throw new RangeError(`The coverage is of version ${made}, not ${version}.`);
-	if (size > mostBytes || textBytes > size) throw new RangeError('The coverage tells a wrong length.');
+	if (size > mostBytes || textBytes > size)
+		throw new RangeError('The coverage tells a wrong length.');
 	const body = unpacked(bytes.subarray(headerBytes), size);
 	return fromBody(body, textBytes);
 }
@@ -105,7 +107,9 @@ function checkBounds(c: Coverage): void {
 		[c.arcRight, c.arcMetres].every((column) => column.length === arcs) &&
 		[c.names, c.areasKm2, c.enclaveOf].every((column) => column.length === regions) &&
 		c.ringArcs.every((half) => (half >= 0 ? half : ~half) < arcs) &&
-		[c.arcLeft, c.arcRight, c.enclaveOf].every((column) => column.every((r) => r >= -1 && r < regions));
+		[c.arcLeft, c.arcRight, c.enclaveOf].every((column) =>
+			column.every((r) => r >= -1 && r < regions),
+		);
 	if (!fits) throw new RangeError('The columns of the coverage do not fit together.');
 }
 

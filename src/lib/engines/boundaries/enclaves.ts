@@ -50,7 +50,8 @@ function surroundings(cut: Cut, holes: Hole[]): Int32Array {
 	const parts = cut.partRings.length - 1;
 	const around = new Int32Array(parts).fill(-1);
 	const index = new Flatbush(parts);
-	for (let part = 0; part < parts; part++) index.add(...boxOf(ringPoints(cut, cut.partRings[part])));
+	for (let part = 0; part < parts; part++)
+		index.add(...boxOf(ringPoints(cut, cut.partRings[part])));
 	index.finish();
 	const owner = ownersOfParts(cut);
 	for (const hole of holes) {

@@ -18,7 +18,8 @@ function* lengthFaults(c: Coverage): Generator<string> {
 	if (c.areasKm2.length !== regions || c.enclaveOf.length !== regions) {
 		yield 'Areas or enclaves are not one a region.';
 	}
-	if (c.arcRight.length !== arcs || c.arcMetres.length !== arcs) yield 'Arc columns differ in length.';
+	if (c.arcRight.length !== arcs || c.arcMetres.length !== arcs)
+		yield 'Arc columns differ in length.';
 	yield* startsFaults('arcStarts', c.arcStarts, arcs, c.arcPoints.length / 2);
 	yield* startsFaults('ringStarts', c.ringStarts, c.ringStarts.length - 1, c.ringArcs.length);
 	yield* startsFaults('partRings', c.partRings, c.partRings.length - 1, c.ringStarts.length - 1);
@@ -133,6 +134,7 @@ function* sideFaults(c: Coverage): Generator<string> {
 	}
 	for (let arc = 0; arc < arcs; arc++) {
 		if (c.arcLeft[arc] >= 0 !== walked[2 * arc] > 0) yield `The left of arc ${arc} is in no ring.`;
-		if (c.arcRight[arc] >= 0 !== walked[2 * arc + 1] > 0) yield `The right of arc ${arc} is in no ring.`;
+		if (c.arcRight[arc] >= 0 !== walked[2 * arc + 1] > 0)
+			yield `The right of arc ${arc} is in no ring.`;
 	}
 }

@@ -19,7 +19,11 @@ export interface Naming {
  * unique, else the record number from 1. Names: `nameField`, else a column called name, else the key.
  * `kept` says which features have an area; the others get no region.
  */
-export function nameRegions(table: AttributeTable, kept: boolean[], options: BoundaryOptions): Naming {
+export function nameRegions(
+	table: AttributeTable,
+	kept: boolean[],
+	options: BoundaryOptions,
+): Naming {
 	const wanted = featureKeys(table, kept, options.keyField);
 	const names = featureNames(table, options.nameField);
 	const naming: Naming = {
@@ -48,7 +52,8 @@ export function nameRegions(table: AttributeTable, kept: boolean[], options: Bou
 		naming.keys.push(key);
 		naming.names.push(names[f] ?? key);
 	}
-	if (doubles.size) naming.findings.push(duplicates([...doubles], options.duplicateKeys ?? 'refuse'));
+	if (doubles.size)
+		naming.findings.push(duplicates([...doubles], options.duplicateKeys ?? 'refuse'));
 	return naming;
 }
 
@@ -66,7 +71,8 @@ function featureKeys(table: AttributeTable, kept: boolean[], keyField?: string):
 }
 
 const hasIds = (table: AttributeTable, kept: boolean[]) =>
-	table.ids.every((id, f) => !kept[f] || keyText(id) !== null) && table.ids.some((id) => id !== null);
+	table.ids.every((id, f) => !kept[f] || keyText(id) !== null) &&
+	table.ids.some((id) => id !== null);
 
 function columnKeys(table: AttributeTable, kept: boolean[], name: string): string[] {
 	const column = table.columns.indexOf(name);

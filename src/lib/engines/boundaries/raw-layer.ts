@@ -65,12 +65,8 @@ export class RawLayer {
 		];
 	}
 	backTo(mark: number[]): void {
-		[
-			this.points.length,
-			this.ringStarts.length,
-			this.partRings.length,
-			this.regionParts.length,
-		] = mark;
+		[this.points.length, this.ringStarts.length, this.partRings.length, this.regionParts.length] =
+			mark;
 	}
 	pointsBefore(ring: number): number {
 		return ring < this.ringStarts.length ? this.ringStarts.items[ring] : this.points.length / 2;

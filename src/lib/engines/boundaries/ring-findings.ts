@@ -5,7 +5,12 @@ import type { RingRepairs } from './outlines-of.ts';
 /** One finding for each kind of mend made while the rings were taken over. */
 export function ringFindings(repairs: RingRepairs, naming: Naming): Finding[] {
 	const findings: Finding[] = [];
-	const note = (code: string, severity: Finding['severity'], features: Set<number>, said: string) => {
+	const note = (
+		code: string,
+		severity: Finding['severity'],
+		features: Set<number>,
+		said: string,
+	) => {
 		if (features.size === 0) return;
 		const regions = new Set<string>();
 		for (const f of features) regions.add(naming.keys[naming.regionOf[f]]);

@@ -8,6 +8,8 @@ import { twoColouring } from './two-colouring.ts';
 export interface Bound {
 	inks: number;
 	proof: Proof;
+	/** a largest clique found */
+	clique: number[];
 	/** the two sides when the graph is bipartite: the colouring is then at hand */
 	sides: Int32Array | null;
 }
@@ -24,6 +26,7 @@ export function structuralBound(
 	const sure = (inks: number, kind: Proof['kind'], regions: number[]) => ({
 		inks,
 		proof: { kind, regions },
+		clique: regions,
 		sides: null,
 	});
 	if (graph.targets.length === 0) return sure(Math.min(1, graph.count), 'none-needed', []);
@@ -32,8 +35,8 @@ export function structuralBound(
 	const { clique } = largestClique(graph, order, { enough, steps });
 	if (clique.length > 3) return sure(clique.length, 'clique', clique);
 	const wheel = oddWheel(graph, steps);
-	if (wheel) return sure(4, 'odd-wheel', wheel);
-	return sure(3, 'odd-cycle', oddCycle);
+	if (wheel) return { ...sure(4, 'odd-wheel', wheel), clique };
+	return { ...sure(3, 'odd-cycle', oddCycle), clique };
 }
 
 function firstEdge({ offsets, targets }: RegionGraph): number[] {

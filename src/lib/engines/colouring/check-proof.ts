@@ -1,3 +1,4 @@
+import { checkRefutation } from './check-refutation.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
 type Coloured = Extract<ColouringResult, { status: 'coloured' }>;
@@ -24,7 +25,7 @@ export function checkProof(problem: ColouringProblem, result: Coloured): string[
 		case 'odd-wheel':
 			return [...wheel(regions, touch), ...needs(4, result.inksUsed)];
 		case 'refutation':
-			return ['The refutation cannot be replayed.'];
+			return checkRefutation(problem, result);
 	}
 }
 

@@ -1,12 +1,13 @@
-import { buildGraph } from '../graph/build-graph.ts';
 import { smallestLastOrder } from '../graph/smallest-last.ts';
-import { quickColouring, type AttemptSettings } from './attempt.ts';
+import { exactColouring, quickColouring, type AttemptSettings } from './attempt.ts';
 import { structuralBound, type Bound } from './bounds.ts';
+import { certify } from './certify.ts';
 import { effortOf } from './effort.ts';
+import { explain } from './explain.ts';
 import { problemFaults } from './faults.ts';
-import { fewestInks } from './fewest.ts';
+import { fewestInks, type FewestOutcome } from './fewest.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
-import type { ColouringProblem, ColouringResult, Proof } from './problem.ts';
+import type { ColouringProblem, ColouringResult } from './problem.ts';
 
 /**
  * Colours a map: the fewest inks (or the number asked for) such that bordering regions differ and all
@@ -19,68 +20,73 @@ export async function colour(problem: ColouringProblem): Promise<ColouringResult
 	const [fault] = problemFaults(problem);
 	if (fault) throw new RangeError(fault);
 	const prepared = prepare(problem);
-	if (prepared.clash) return undecided(0, 'Two rules contradict each other.');
+	if (prepared.clash) return impossible(problem);
+	const { bound, settings } = measured(problem, prepared);
+	const outcome = search(problem, prepared, bound, settings);
+	if (outcome === 'impossible') return impossible(problem);
+	if (outcome === 'undecided') return undecided(problem, prepared, bound);
+	return coloured(problem, prepared, bound, outcome);
+}
+
+async function impossible(problem: ColouringProblem): Promise<ColouringResult> {
+	return { status: 'impossible', explanation: await explain(problem) };
+}
+
+function measured(problem: ColouringProblem, { graph }: Prepared) {
 	const effort = effortOf(problem);
-	const { order, degeneracy } = smallestLastOrder(prepared.graph);
+	const { order } = smallestLastOrder(graph);
 	const enough = problem.inks === 'fewest' ? Infinity : problem.inks + 1;
-	const bound = structuralBound(prepared.graph, order, { enough, steps: effort.boundSteps });
+	const bound = structuralBound(graph, order, { enough, steps: effort.boundSteps });
 	const settings: AttemptSettings = {
 		order,
 		sides: bound.sides,
+		clique: bound.clique,
 		effort,
 		seed: problem.seed ?? 0,
 		cancelled: problem.cancelled,
 	};
+	return { bound, settings };
+}
+
+function search(
+	problem: ColouringProblem,
+	prepared: Prepared,
+	bound: Bound,
+	settings: AttemptSettings,
+): FewestOutcome | 'impossible' | 'undecided' {
+	const quick = (inks: number) => quickColouring(prepared, inks, settings);
+	const exact = (inks: number) => exactColouring(prepared, inks, settings);
 	const lowest = Math.max(bound.inks, prepared.inksLocked);
-	const highest = problem.inks === 'fewest' ? lowest + degeneracy + 1 : problem.inks;
-	const outcome = fewestInks(
-		problem.inks === 'fewest' ? lowest : problem.inks,
-		highest,
-		(inks) => quickColouring(prepared, inks, settings),
-		() => ({ status: 'unknown' }),
-	);
-	if (!outcome) return undecided(lowest, 'No colouring was found within the effort.');
-	return coloured(problem, prepared, bound, outcome.ink, outcome.inks);
+	if (problem.inks === 'fewest') {
+		return fewestInks(lowest, lowest + problem.regions, quick, exact) ?? 'undecided';
+	}
+	const { inks } = problem;
+	if (inks < lowest) return 'impossible';
+	const ink = quick(inks);
+	if (ink) return { inks, ink, lowerBound: lowest };
+	const answer = exact(inks);
+	if (answer.status === 'coloured') return { inks, ink: answer.ink, lowerBound: lowest };
+	return answer.status === 'refuted' ? 'impossible' : 'undecided';
 }
 
 function coloured(
 	problem: ColouringProblem,
 	prepared: Prepared,
 	bound: Bound,
-	ink: Int32Array,
-	inks: number,
+	outcome: FewestOutcome,
 ): ColouringResult {
-	const colouring = byRegion(prepared, ink);
+	const colouring = byRegion(prepared, outcome.ink);
 	const used = colouring.reduce((most, c) => Math.max(most, c + 1), 0);
-	const inksUsed = problem.inks === 'fewest' ? inks : used;
-	const lowerBound = Math.max(bound.inks, prepared.inksLocked);
-	const proof = proofOf(problem, prepared, bound, inksUsed);
+	const inksUsed = problem.inks === 'fewest' ? outcome.inks : used;
+	const proof = certify(problem, prepared, bound, inksUsed);
+	const lowerBound = proof.kind === 'not-proved' ? outcome.lowerBound : inksUsed;
 	return { status: 'coloured', inksUsed, colouring, lowerBound, proof };
 }
 
-function proofOf(
-	problem: ColouringProblem,
-	prepared: Prepared,
-	bound: Bound,
-	inksUsed: number,
-): Proof {
-	const literal = prepared.grouped ? ungroupedBound(problem) : bound;
-	if (literal.inks < inksUsed) return { kind: 'not-proved', regions: [] };
-	if (prepared.grouped) return literal.proof;
-	return { ...literal.proof, regions: literal.proof.regions.map((v) => prepared.regionOf[v]) };
-}
-
-/** The bound of the borders alone: with regions kept alike, its proof names real borders. */
-function ungroupedBound(problem: ColouringProblem): Bound {
-	const { a, b } = problem.borders;
-	const graph = buildGraph(problem.regions, a, b);
-	const { order } = smallestLastOrder(graph);
-	return structuralBound(graph, order, {
-		enough: Infinity,
-		steps: effortOf(problem).boundSteps,
-	});
-}
-
-function undecided(lowerBound: number, message: string): ColouringResult {
+function undecided(problem: ColouringProblem, prepared: Prepared, bound: Bound): ColouringResult {
+	const lowerBound = Math.max(bound.inks, prepared.inksLocked);
+	const message = problem.cancelled?.()
+		? 'The run was stopped before a colouring was found.'
+		: 'Within this effort neither a colouring was found nor shown to be impossible.';
 	return { status: 'undecided', lowerBound, message };
 }

@@ -12,6 +12,10 @@ export interface Effort {
 	/** solver conflicts on one ball of regions, and on a whole map */
 	ballConflicts: number;
 	wholeConflicts: number;
+	/** regions times inks that are still put to the solver at once */
+	solverSize: number;
+	/** regions in the largest ball */
+	ballSize: number;
 	/** moves of the improver for each region, and at least */
 	movesEach: number;
 }
@@ -24,6 +28,8 @@ const efforts: Record<NonNullable<ColouringProblem['effort']>, Effort> = {
 		boundSteps: 2_000_000,
 		ballConflicts: 5_000,
 		wholeConflicts: 5_000,
+		solverSize: 200_000,
+		ballSize: 1_000,
 		movesEach: 20,
 	},
 	normal: {
@@ -33,6 +39,8 @@ const efforts: Record<NonNullable<ColouringProblem['effort']>, Effort> = {
 		boundSteps: 20_000_000,
 		ballConflicts: 20_000,
 		wholeConflicts: 50_000,
+		solverSize: 2_000_000,
+		ballSize: 10_000,
 		movesEach: 100,
 	},
 	thorough: {
@@ -42,6 +50,8 @@ const efforts: Record<NonNullable<ColouringProblem['effort']>, Effort> = {
 		boundSteps: 200_000_000,
 		ballConflicts: 20_000,
 		wholeConflicts: 1_000_000,
+		solverSize: 10_000_000,
+		ballSize: 100_000,
 		movesEach: 500,
 	},
 };

@@ -34,10 +34,7 @@ export class GrowingInts {
 	}
 }
 
-function doubled<T extends Float64Array | Int32Array>(
-	old: T,
-	Kind: new (length: number) => T,
-): T {
+function doubled<T extends Float64Array | Int32Array>(old: T, Kind: new (length: number) => T): T {
 	const next = new Kind(old.length * 2);
 	next.set(old as never);
 	return next;

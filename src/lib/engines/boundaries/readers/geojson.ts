@@ -74,7 +74,14 @@ class RootReader {
 
 	mark() {
 		const { stage, roots, first, members, lone, sawFeatures } = this;
-		const kept = { stage, roots, first, members: { ...members }, lone: lone && { ...lone }, sawFeatures };
+		const kept = {
+			stage,
+			roots,
+			first,
+			members: { ...members },
+			lone: lone && { ...lone },
+			sawFeatures,
+		};
 		return { at: this.json.at, feature: this.json.feature, layer: this.layer.mark(), kept };
 	}
 
@@ -99,7 +106,8 @@ class RootReader {
 		while (json.at < json.bytes.length && isBetween(json.bytes[json.at])) json.at++;
 		if (json.at === json.bytes.length) {
 			if (!json.last) throw needMore;
-			if (this.roots === 0) throw new Refusal('empty-file', 'The file holds nothing but white space.');
+			if (this.roots === 0)
+				throw new Refusal('empty-file', 'The file holds nothing but white space.');
 			return false;
 		}
 		if (json.peek() !== byte.openObject) {
@@ -241,5 +249,8 @@ function legacyCrs(value: unknown): string | null {
 function startsWrong(json: JsonBytes): Refusal {
 	const start = json.bytes[json.at];
 	if (start === byte.open) return notGeoJson(json, 'it begins with a list');
-	return new Refusal('unsupported-format', 'The file is neither GeoJSON, TopoJSON nor a zipped shapefile.');
+	return new Refusal(
+		'unsupported-format',
+		'The file is neither GeoJSON, TopoJSON nor a zipped shapefile.',
+	);
 }

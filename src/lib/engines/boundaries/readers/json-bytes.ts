@@ -57,7 +57,8 @@ export class JsonBytes {
 	/** After an item: true when another follows, false when the list is closed. */
 	another(close: number): boolean {
 		const c = this.peek();
-		if (c !== byte.comma && c !== close) throw this.notJson('expected a comma or a closing bracket');
+		if (c !== byte.comma && c !== close)
+			throw this.notJson('expected a comma or a closing bracket');
 		this.at++;
 		return c === byte.comma;
 	}
@@ -79,7 +80,8 @@ export class JsonBytes {
 		}
 		if (c === 46) {
 			const first = at + 1;
-			for (c = bytes[++at]; c >= 48 && c <= 57; c = bytes[++at]) mantissa = mantissa * 10 + (c - 48);
+			for (c = bytes[++at]; c >= 48 && c <= 57; c = bytes[++at])
+				mantissa = mantissa * 10 + (c - 48);
 			scale = at - first;
 			if (scale === 0 && at < bytes.length) digits = 0;
 		}
