@@ -11,7 +11,11 @@ export interface Pool {
 	 * Runs one task in a thread. Rejects with `PoolBusy` when too many wait already, with an AbortError when
 	 * `signal` fires (the thread is ended), and with whatever the task throws.
 	 */
-	run<N extends TaskName>(name: N, input: TaskInput<N>, options?: RunOptions): Promise<TaskOutput<N>>;
+	run<N extends TaskName>(
+		name: N,
+		input: TaskInput<N>,
+		options?: RunOptions,
+	): Promise<TaskOutput<N>>;
 	close(): Promise<void>;
 }
 
@@ -43,7 +47,10 @@ export function createPool(options: PoolOptions = {}): Pool {
 		idleTimeout: 60_000,
 		resourceLimits: { maxOldGenerationSizeMb: options.heapMb ?? 2_048 },
 	});
-	return { run: (name, input, how) => run(piscina, name, input, how), close: () => piscina.destroy() };
+	return {
+		run: (name, input, how) => run(piscina, name, input, how),
+		close: () => piscina.destroy(),
+	};
 }
 
 /** The bundled thread where the product was built, else the source itself. */
