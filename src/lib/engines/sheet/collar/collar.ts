@@ -77,7 +77,7 @@ function layOut(input: CollarInput, scale: number): Collar {
 		map: { x: left, y: mapTop, width, height: row - air - mapTop },
 		texts: [...head.texts, ...base.texts],
 		legend: showLegend
-			? { x: left + width - legendWidth, y: row, width: legendWidth, size, columns, weak }
+			? { x: left + width - legendWidth, y: row, width: legendWidth, size, ...grid, weak }
 			: null,
 		bar: layout.scaleBar ? { x: left, y: row, longest: Math.round(width * 0.2), size } : null,
 		scale,
