@@ -4,6 +4,7 @@ import {
 	geoEqualEarth,
 	geoProjection,
 	type GeoProjection,
+	type GeoRawProjection,
 } from 'd3-geo';
 import { latitudeWords, longitudeWords } from './degrees.ts';
 
@@ -16,6 +17,11 @@ export interface ChosenProjection {
 
 const unit = <P extends GeoProjection>(projection: P): P =>
 	projection.scale(1).translate([0, 0]).precision(0) as P;
+
+type Formula = (a: number, b: number) => [number, number];
+
+const withInverse = (formula: Formula, inverse: Formula): GeoRawProjection =>
+	Object.assign(formula, { invert: inverse });
 
 /** Source: Snyder 1987, USGS PP 1395, pp. 98-103. */
 export function albers(south: number, north: number, centre: number): ChosenProjection {
