@@ -22,7 +22,13 @@ export interface ReceivedForm {
 	fileName: string;
 }
 
-const fieldLimits = { fields: 40, fieldSize: 10_000, fieldNameSize: 100, files: 1, headerPairs: 100 };
+const fieldLimits = {
+	fields: 40,
+	fieldSize: 10_000,
+	fieldNameSize: 100,
+	files: 1,
+	headerPairs: 100,
+};
 
 /**
  * Reads a multipart form as it arrives, its one file straight to the store, so that memory does not grow
@@ -46,7 +52,11 @@ export async function receiveForm(
 }
 
 const tooLarge = (maxBytes: number) =>
-	new UploadFault(413, 'too-large', `the file is larger than the limit of ${sizeInWords(maxBytes)}`);
+	new UploadFault(
+		413,
+		'too-large',
+		`the file is larger than the limit of ${sizeInWords(maxBytes)}`,
+	);
 
 export const sizeInWords = (bytes: number): string =>
 	bytes >= 1e9
