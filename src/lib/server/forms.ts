@@ -1,7 +1,7 @@
 import { error, fail, type ActionFailure } from '@sveltejs/kit';
 import { z } from 'zod';
 import { Forbidden } from './access/member.ts';
-import { NotFound, Refused, TooMany } from './services/outcomes.ts';
+import { Conflict, NotFound, Refused, TooMany, Unfit } from './services/outcomes.ts';
 
 /** What a form is told when it cannot be taken as it is. */
 export interface FormProblem {
@@ -69,6 +69,10 @@ export async function attempt<T>(
 		}
 		if (problem instanceof TooMany) {
 			return { failure: fail(429, { message: problem.message, errors: {}, values }) };
+		}
+		if (problem instanceof Conflict || problem instanceof Unfit) {
+			const status = problem instanceof Conflict ? 409 : 422;
+			return { failure: fail(status, { message: problem.message, errors: {}, values }) };
 		}
 		if (problem instanceof NotFound) error(404, problem.message);
 		if (problem instanceof Forbidden) error(403, 'Your roles in this team do not include this.');
