@@ -97,7 +97,9 @@ export interface DeskEdition {
 export interface DraftSaved {
 	revision: number;
 	savedAt: string;
-	colouring: DeskColouring;
+	/** as stored: new locks carry who set them and when */
+	document: Draft;
+	colouring: DeskColouring | null;
 }
 
 /** `POST sheets/[sheet]/draft`: 409, somebody else saved first; nothing was overwritten */
