@@ -5,6 +5,7 @@ import { handleBooth } from '$lib/server/hooks/booth';
 import { handleGuard } from '$lib/server/hooks/guard';
 import { handleHeaders } from '$lib/server/hooks/headers';
 import { handleBodySize, handleRate } from '$lib/server/hooks/limits';
+import { handleOrigin } from '$lib/server/hooks/origin';
 import { handleError, handleRequest } from '$lib/server/hooks/request';
 import { handleSession } from '$lib/server/hooks/session';
 
@@ -13,6 +14,7 @@ export const handle = sequence(
 	handleRequest,
 	handleHeaders,
 	handleAddress,
+	handleOrigin,
 	handleBodySize,
 	handleAuth,
 	handleSession,

@@ -1,7 +1,7 @@
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { ReadableStream } from 'node:stream/web';
-import Busboy from '@fastify/busboy';
+import Busboy, { type BusboyInstance } from '@fastify/busboy';
 import type { FileStore, Received } from './store.ts';
 
 /** Why a form with a file was not taken; `status` is the HTTP status that says so. */
@@ -63,7 +63,7 @@ export const sizeInWords = (bytes: number): string =>
 		? `${Number((bytes / 1e9).toPrecision(3))} GB`
 		: `${Number((bytes / 1e6).toPrecision(3))} MB`;
 
-function parser(type: string, maxBytes: number): Busboy {
+function parser(type: string, maxBytes: number): BusboyInstance {
 	try {
 		const headers = { 'content-type': type };
 		return new Busboy({ headers, limits: { ...fieldLimits, fileSize: maxBytes } });
@@ -75,7 +75,7 @@ function parser(type: string, maxBytes: number): Busboy {
 const malformed = (message: string) => new UploadFault(400, 'malformed', message);
 
 async function collect(
-	busboy: Busboy,
+	busboy: BusboyInstance,
 	source: Readable,
 	store: FileStore,
 	maxBytes: number,

@@ -63,17 +63,14 @@ async function prepare(
 	tell: (step: string, share: number) => void,
 ): Promise<ReadOutcome> {
 	tell('Judging whether the map is planar', 0.86);
-	const { planar, witness } = planarityOf(coverage.keys.length, borders);
+	const regions = regionColumns(coverage, attributes);
+	const { planar, witness } = planarityOf(regions.name, regions.parts, borders);
 	tell('Colouring', 0.9);
 	const { draft, colouring } = await colourFirst(input.title, coverage, borders);
 	tell('Packing', 0.97);
 	return {
 		status: 'accepted',
-		columns: {
-			regions: regionColumns(coverage, attributes),
-			borders: borderColumns(borders),
-			findings,
-		},
+		columns: { regions, borders: borderColumns(borders), findings },
 		borders,
 		geometry: encodeCoverage(coverage),
 		attributeColumns: attributes.columns,

@@ -16,7 +16,7 @@ const sizes = [282, 247, 212, 176];
 /** For the level above: 10, 9, 8 and 7 point. */
 const groupSizes = [353, 318, 282, 247];
 /** Smaller sizes are tried until this share of the names is placed. */
-const wanted = 0.9;
+const wanted = 0.85;
 const enough = 0.6;
 /** Without a level above, a map with some names says more than a map with none. */
 const enoughAlone = 0.2;

@@ -60,11 +60,12 @@ export function cylindrical(parallel: number, centre: number): ChosenProjection 
 export function transverseCylindrical(centre: number): ChosenProjection {
 	return {
 		projection: unit(
-			geoProjection((lon, lat) => [Math.sin(lat), -lon] as [number, number]).rotate([
-				-centre,
-				0,
-				90,
-			]),
+			geoProjection(
+				withInverse(
+					(lon, lat) => [Math.sin(lat), -lon],
+					(x, y) => [-y, Math.asin(x)],
+				),
+			).rotate([-centre, 0, 90]),
 		),
 		sentence: `Transverse cylindrical equal-area, true along ${longitudeWords(centre)}.`,
 	};
