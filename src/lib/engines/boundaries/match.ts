@@ -1,5 +1,4 @@
-import { bordersOf } from '../borders/borders-of.ts';
-import type { BorderList } from '../borders/border-list.ts';
+import { surveyOf, type Survey } from '../borders/survey.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { buildCoverage } from './build-coverage.ts';
 import type { Finding } from './finding.ts';
@@ -12,7 +11,7 @@ import { settleParallel } from './settle-parallel.ts';
 
 export interface Matched {
 	coverage: Coverage;
-	borders: BorderList;
+	survey: Survey;
 	findings: Finding[];
 }
 
@@ -38,22 +37,22 @@ export function matchOutlines(
 	if (vanished.length) return { vanished };
 	const findings = joinedFinding(noded.joined, keys);
 	const coverage = buildCoverage(noded.outlines, noded.segments, keys, names);
-	const borders = bordersOf(coverage, options);
-	if (tolerance <= noiseMetres) return { coverage, borders, findings };
+	const survey = surveyOf(coverage, options);
+	if (tolerance <= noiseMetres) return { coverage, survey, findings };
 
 	noded.joined = { regions: new Set(), places: 0, at: null };
 	const joined = joinWithin(noded, tolerance, keys);
-	if (joined === noded) return { coverage, borders, findings };
+	if (joined === noded) return { coverage, survey, findings };
 	settleParallel(joined.segments);
 	const gone = withoutSegments(joined, keys.length);
 	if (gone.length) return { vanished: gone };
 	const after = buildCoverage(joined.outlines, joined.segments, keys, names);
-	const bordersAfter = bordersOf(after, options);
+	const surveyAfter = surveyOf(after, options);
 	findings.push(
 		...toleranceFinding(joined.joined, keys, tolerance),
-		...gainedAndLost(borders, bordersAfter, keys, tolerance),
+		...gainedAndLost(survey.borders, surveyAfter.borders, keys, tolerance),
 	);
-	return { coverage: after, borders: bordersAfter, findings };
+	return { coverage: after, survey: surveyAfter, findings };
 }
 
 function withoutSegments({ segments }: Noded, regions: number): number[] {

@@ -16,7 +16,8 @@ import { Cancelled, Refusal } from './refusal.ts';
 import { reproject } from './reproject.ts';
 import type { BoundariesResult } from './result.ts';
 import { readLayer } from './readers/index.ts';
-import { ringFindings } from './ring-findings.ts';
+import { crossingFinding, ringFindings } from './ring-findings.ts';
+import { surveyFindings } from './survey-findings.ts';
 
 /**
  * Reads a boundary file into a coverage, its borders, the attribute table and what there was to note.
@@ -50,21 +51,23 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 	};
 	stage('Placing the positions', 0.5);
 	const crs = reproject(layer, options);
-	const west = placeLongitudes(layer);
+	const { west, crossing } = placeLongitudes(layer);
 	stage('Matching the outlines', 0.6);
 	const { naming, repairs, matched, left } = matchLayer(layer, west, options, stage);
-	const { coverage, borders } = matched;
+	const { coverage, survey } = matched;
 	return {
 		status: 'accepted',
 		coverage,
-		borders,
+		borders: survey.borders,
 		attributes: layer.table.take(naming.featureOf),
 		findings: [
 			...layer.findings,
 			...naming.findings,
 			...leftOutFinding(left),
+			...crossingFinding(crossing, naming),
 			...ringFindings(repairs, naming, layer.format),
 			...matched.findings,
+			...surveyFindings(survey, coverage.keys),
 		],
 		source: {
 			format: layer.format,

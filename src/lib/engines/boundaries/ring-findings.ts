@@ -38,3 +38,20 @@ export function ringFindings(repairs: RingRepairs, naming: Naming, format: strin
 	);
 	return findings;
 }
+
+/** Outlines that step over the 180th meridian. */
+export function crossingFinding(features: Set<number>, naming: Naming): Finding[] {
+	const regions = new Set<string>();
+	for (const f of features)
+		if (naming.regionOf[f] >= 0) regions.add(naming.keys[naming.regionOf[f]]);
+	if (regions.size === 0) return [];
+	return [
+		{
+			code: 'antimeridian',
+			severity: 'note',
+			message: 'Outlines that cross the 180th meridian were put together across it.',
+			regions: [...regions],
+			at: null,
+		},
+	];
+}
