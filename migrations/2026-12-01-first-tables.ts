@@ -9,7 +9,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 		create table "User" (
 			id uuid primary key default gen_random_uuid(),
 			name text,
-			email text not null unique,
+			email text not null unique check (email = lower(email)),
 			"emailVerified" timestamptz,
 			image text
 		);
@@ -32,7 +32,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			id uuid primary key default gen_random_uuid(),
 			"userId" uuid not null references "User" on delete cascade,
 			"sessionToken" text not null unique,
-			expires timestamptz not null
+			expires timestamptz not null,
+			created_at timestamptz not null default now()
 		);
 		create table "VerificationToken" (
 			identifier text not null,
@@ -66,7 +67,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 		create table invitations (
 			id uuid primary key default gen_random_uuid(),
 			team_id uuid not null references teams on delete cascade,
-			email text not null,
+			email text not null check (email = lower(email)),
 			roles text[] not null check (cardinality(roles) > 0),
 			token_hash bytea not null unique,
 			invited_by uuid references "User" on delete set null,
@@ -107,6 +108,11 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			window_start timestamptz not null,
 			hits integer not null,
 			primary key (key, window_start)
+		);
+		create table worker_heartbeats (
+			id uuid primary key,
+			started_at timestamptz not null default now(),
+			seen_at timestamptz not null default now()
 		);
 
 		create table boundary_sets (

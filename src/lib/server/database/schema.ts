@@ -2,7 +2,11 @@ import type { ColumnType, Generated, Insertable, JSONColumnType, Selectable } fr
 
 /** Row types, one interface a table, kept beside `migrations/`. */
 type Moment = ColumnType<Date, Date | string | undefined, Date | string>;
-type OptionalMoment = ColumnType<Date | null, Date | string | null | undefined, Date | string | null>;
+type OptionalMoment = ColumnType<
+	Date | null,
+	Date | string | null | undefined,
+	Date | string | null
+>;
 /** bigint columns arrive as numbers: the connection installs the parser */
 type Whole = ColumnType<number, number, number>;
 
@@ -32,6 +36,7 @@ export interface SessionTable {
 	userId: string;
 	sessionToken: string;
 	expires: Moment;
+	created_at: Moment;
 }
 export interface VerificationTokenTable {
 	identifier: string;
@@ -96,6 +101,11 @@ export interface RateLimitTable {
 	window_start: Moment;
 	hits: number;
 }
+export interface WorkerHeartbeatTable {
+	id: string;
+	started_at: Moment;
+	seen_at: Moment;
+}
 export interface BoundarySetTable {
 	id: Generated<string>;
 	team_id: string;
@@ -107,6 +117,7 @@ export interface BoundarySetTable {
 	region_count: number;
 	geometry: Buffer;
 	planar: boolean;
+	planar_witness: JSONColumnType<Record<string, unknown>> | null;
 	created_by: string | null;
 	created_at: Moment;
 }
@@ -158,6 +169,9 @@ export interface IntakeTable {
 	share: Generated<number>;
 	refusal: JSONColumnType<Record<string, unknown>> | null;
 	attempts: Generated<number>;
+	/** who reads it now: renewed at every take-up, so that a late answer of an earlier one is dropped */
+	claim: string | null;
+	heard_at: OptionalMoment;
 	boundary_set_id: string | null;
 	sheet_id: string | null;
 }
@@ -204,6 +218,8 @@ export interface EditionTable {
 	number: number;
 	digest: string;
 	content: JSONColumnType<Record<string, unknown>>;
+	/** the draft it was issued from */
+	revision: Generated<number>;
 	note: Generated<string>;
 	issued_by: string | null;
 	issued_at: Moment;
@@ -228,6 +244,7 @@ export interface Database {
 	api_tokens: ApiTokenTable;
 	activity: ActivityTable;
 	rate_limits: RateLimitTable;
+	worker_heartbeats: WorkerHeartbeatTable;
 	boundary_sets: BoundarySetTable;
 	regions: RegionTable;
 	borders: BorderTable;

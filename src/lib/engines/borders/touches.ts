@@ -1,0 +1,43 @@
+import type { Coverage } from '../geometry/coverage.ts';
+import type { PairTally } from './pair-tally.ts';
+
+/** Point touches: regions around a place where four or more arcs end and that share no line anywhere. */
+export function addTouches(coverage: Coverage, tally: PairTally): void {
+	const { arcLeft, arcRight } = coverage;
+	for (const { x, y, arcs } of meetings(coverage)) {
+		if (arcs.length < 4) continue;
+		const around = new Set<number>();
+		for (const arc of arcs) around.add(arcLeft[arc]).add(arcRight[arc]);
+		around.delete(-1);
+		const regions = [...around].sort((a, b) => a - b);
+		for (let i = 0; i < regions.length; i++) {
+			for (let j = i + 1; j < regions.length; j++) {
+				if (!tally.has(regions[i], regions[j])) tally.add(regions[i], regions[j], 1, 0, x, y);
+			}
+		}
+	}
+}
+
+/** Places where arcs end, with one entry for each end (a closed arc has two). */
+export function meetings(coverage: Coverage): Iterable<{ x: number; y: number; arcs: number[] }> {
+	const { arcPoints, arcStarts } = coverage;
+	const places = new Map<number, Map<number, { x: number; y: number; arcs: number[] }>>();
+	const all: { x: number; y: number; arcs: number[] }[] = [];
+	const end = (arc: number, point: number) => {
+		const x = arcPoints[2 * point];
+		const y = arcPoints[2 * point + 1];
+		let row = places.get(x);
+		if (!row) places.set(x, (row = new Map()));
+		let place = row.get(y);
+		if (!place) {
+			row.set(y, (place = { x, y, arcs: [] }));
+			all.push(place);
+		}
+		place.arcs.push(arc);
+	};
+	for (let arc = 0; arc + 1 < arcStarts.length; arc++) {
+		end(arc, arcStarts[arc]);
+		end(arc, arcStarts[arc + 1] - 1);
+	}
+	return all;
+}

@@ -1,0 +1,117 @@
+import { sweptKm2 } from '../geometry/areas.ts';
+import type { Coverage } from '../geometry/coverage.ts';
+import { lineMetres } from '../geometry/ellipsoid.ts';
+import { GrowingInts } from '../geometry/growing.ts';
+import { doubleArea } from '../geometry/rings.ts';
+import { arcsByRegion, traceRings, type ArcRing } from './arc-rings.ts';
+import { chainArcs, type Arcs } from './arcs.ts';
+import { enclaves } from './enclaves.ts';
+import type { Outlines } from './outlines.ts';
+import { groupParts, type TracedRing } from './parts.ts';
+import { indexSegments } from './segments.ts';
+import { settleParallel } from './settle-parallel.ts';
+
+/** Cuts noded outlines into shared arcs and puts the regions together from them again. */
+export function buildCoverage(outlines: Outlines, keys: string[], names: string[]): Coverage {
+	const segments = indexSegments(outlines);
+	settleParallel(segments);
+	const arcs = chainArcs(outlines, segments);
+	const arcPoints = pointsOf(arcs, outlines.positions);
+	const arcStarts = Uint32Array.from(arcs.starts);
+	const rings = assembleRings(arcs, outlines);
+	const cut = {
+		keys,
+		names,
+		arcPoints,
+		arcStarts,
+		arcLeft: arcs.left.slice(),
+		arcRight: arcs.right.slice(),
+		arcMetres: metresOf(arcPoints, arcStarts),
+		...rings,
+	};
+	return { ...cut, areasKm2: areasOf(cut), enclaveOf: enclaves(cut) };
+}
+
+function pointsOf(arcs: Arcs, positions: Float64Array): Float64Array {
+	const points = new Float64Array(2 * arcs.vertices.length);
+	for (let i = 0; i < arcs.vertices.length; i++) {
+		const v = arcs.vertices[i];
+		points[2 * i] = positions[2 * v];
+		points[2 * i + 1] = positions[2 * v + 1];
+	}
+	return points;
+}
+
+function metresOf(points: Float64Array, starts: Uint32Array): Float64Array {
+	const metres = new Float64Array(starts.length - 1);
+	for (let a = 0; a < metres.length; a++) {
+		metres[a] = lineMetres(points, starts[a], starts[a + 1] - 1);
+	}
+	return metres;
+}
+
+function assembleRings(arcs: Arcs, outlines: Outlines) {
+	const { regions, positions } = outlines;
+	const byRegion = arcsByRegion(arcs, regions);
+	const ringArcs = new GrowingInts();
+	const ringStarts = new GrowingInts();
+	const partRings = new GrowingInts();
+	const regionParts = new GrowingInts();
+	for (let r = 0; r < regions; r++) {
+		regionParts.push(partRings.length);
+		const halves = byRegion.list.subarray(byRegion.offsets[r], byRegion.offsets[r + 1]);
+		const traced = traceRings(halves, arcs, positions).map((ring) =>
+			traced1(ring, arcs, positions),
+		);
+		for (const part of groupParts(traced)) {
+			partRings.push(ringStarts.length);
+			for (const ring of part) {
+				ringStarts.push(ringArcs.length);
+				for (const half of ring.arcs) ringArcs.push(half);
+			}
+		}
+	}
+	regionParts.push(partRings.length);
+	partRings.push(ringStarts.length);
+	ringStarts.push(ringArcs.length);
+	return {
+		ringArcs: ringArcs.taken().slice(),
+		ringStarts: Uint32Array.from(ringStarts.taken()),
+		partRings: Uint32Array.from(partRings.taken()),
+		regionParts: Uint32Array.from(regionParts.taken()),
+	};
+}
+
+function traced1(ring: ArcRing, arcs: Arcs, positions: Float64Array): TracedRing {
+	let length = 0;
+	for (const half of ring) length += arcLength(arcs, half) - 1;
+	const points = new Float64Array(2 * length);
+	let at = 0;
+	for (const half of ring) {
+		const a = half >= 0 ? half : ~half;
+		const first = arcs.starts[a];
+		const last = arcs.starts[a + 1] - 1;
+		for (let k = 0; k < last - first; k++) {
+			const v = arcs.vertices[half >= 0 ? first + k : last - k];
+			points[at++] = positions[2 * v];
+			points[at++] = positions[2 * v + 1];
+		}
+	}
+	return { arcs: ring, points, doubleArea: doubleArea(points, 0, length) };
+}
+
+function arcLength(arcs: Arcs, half: number): number {
+	const a = half >= 0 ? half : ~half;
+	return arcs.starts[a + 1] - arcs.starts[a];
+}
+
+/** One pass over the arcs: what lies between an arc and the equator is added on its left, taken on its right. */
+function areasOf(cut: Omit<Coverage, 'areasKm2' | 'enclaveOf'>): Float64Array {
+	const areas = new Float64Array(cut.keys.length);
+	for (let a = 0; a < cut.arcLeft.length; a++) {
+		const swept = sweptKm2(cut.arcPoints, cut.arcStarts[a], cut.arcStarts[a + 1] - 1);
+		if (cut.arcLeft[a] >= 0) areas[cut.arcLeft[a]] += swept;
+		if (cut.arcRight[a] >= 0) areas[cut.arcRight[a]] -= swept;
+	}
+	return areas;
+}

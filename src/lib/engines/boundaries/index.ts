@@ -1,0 +1,11 @@
+/** File bytes -> clean shared-arc coverage, its borders, and findings. */
+export { readBoundaries } from './read-boundaries.ts';
+export type { BoundariesResult, SourceNote } from './result.ts';
+export type { BoundaryOptions, ByteSource, Limits, Watch } from './options.ts';
+export type { RefusalCode } from './refusal.ts';
+export type { Finding } from './finding.ts';
+export type { Coverage } from './coverage.ts';
+export { coverageFaults } from './faults.ts';
+export { encodeCoverage, decodeCoverage } from './codec.ts';
+export { coverageToGeoJson } from './to-geojson.ts';
+export { sourceOf } from './byte-source.ts';

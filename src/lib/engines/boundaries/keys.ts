@@ -1,0 +1,147 @@
+import type { AttributeTable, Cell } from './attribute-table.ts';
+import type { Finding } from './finding.ts';
+import type { BoundaryOptions } from './options.ts';
+import { Refusal } from './refusal.ts';
+
+/** Which region each feature belongs to, and what the regions are called. */
+export interface Naming {
+	keys: string[];
+	names: string[];
+	/** region of each feature, -1 where it is left out */
+	regionOf: Int32Array;
+	/** first feature of each region */
+	featureOf: number[];
+	findings: Finding[];
+}
+
+/**
+ * Keys: `keyField`, else the feature's `id`, else the first column whose values are all present and
+ * unique, else the record number from 1. Names: `nameField`, else a column called name, else the key.
+ * `kept` says which features have an area; the others get no region.
+ */
+export function nameRegions(
+	table: AttributeTable,
+	kept: boolean[],
+	options: BoundaryOptions,
+): Naming {
+	const wanted = featureKeys(table, kept, options.keyField);
+	const names = featureNames(table, options.nameField);
+	const naming: Naming = {
+		keys: [],
+		names: [],
+		regionOf: new Int32Array(kept.length).fill(-1),
+		featureOf: [],
+		findings: [],
+	};
+	const known = new Map<string, number>();
+	const doubles = new Set<string>();
+	for (let f = 0; f < kept.length; f++) {
+		if (!kept[f]) continue;
+		let key = wanted[f];
+		if (known.has(key)) {
+			doubles.add(key);
+			if (options.duplicateKeys === 'merge') {
+				naming.regionOf[f] = known.get(key) as number;
+				continue;
+			}
+			key = freshKey(key, known, wanted);
+		}
+		known.set(key, naming.keys.length);
+		naming.regionOf[f] = naming.keys.length;
+		naming.featureOf.push(f);
+		naming.keys.push(key);
+		naming.names.push(names[f] ?? key);
+	}
+	if (doubles.size)
+		naming.findings.push(duplicates([...doubles], options.duplicateKeys ?? 'refuse'));
+	return naming;
+}
+
+function featureKeys(table: AttributeTable, kept: boolean[], keyField?: string): string[] {
+	if (keyField !== undefined && keyField !== 'id') return columnKeys(table, kept, keyField);
+	if (keyField === 'id' && table.columns.includes('id') && !hasIds(table, kept)) {
+		return columnKeys(table, kept, 'id');
+	}
+	if (keyField === 'id' || hasIds(table, kept)) {
+		return table.ids.map((id, f) => keyText(id) ?? absent(kept, f, 'id'));
+	}
+	const column = table.columns.findIndex((_, c) => isUnique(table, kept, c));
+	if (column < 0) return table.rows.map((_, f) => String(f + 1));
+	return table.rows.map((row) => keyText(row[column] ?? null) ?? '');
+}
+
+const hasIds = (table: AttributeTable, kept: boolean[]) =>
+	table.ids.every((id, f) => !kept[f] || keyText(id) !== null) &&
+	table.ids.some((id) => id !== null);
+
+function columnKeys(table: AttributeTable, kept: boolean[], name: string): string[] {
+	const column = table.columns.indexOf(name);
+	if (column < 0) {
+		const message = `There is no column "${name}". The columns are: ${table.columns.join(', ')}.`;
+		throw new Refusal('duplicate-keys', message);
+	}
+	return table.rows.map((row, f) => keyText(row[column] ?? null) ?? absent(kept, f, name));
+}
+
+function absent(kept: boolean[], feature: number, field: string): string {
+	if (!kept[feature]) return '';
+	const message = `Feature ${feature + 1} has no value in "${field}", so it has no key.`;
+	throw new Refusal('duplicate-keys', message);
+}
+
+function isUnique(table: AttributeTable, kept: boolean[], column: number): boolean {
+	const seen = new Set<string>();
+	for (let f = 0; f < kept.length; f++) {
+		if (!kept[f]) continue;
+		const key = keyText(table.rows[f][column] ?? null);
+		if (key === null || seen.has(key)) return false;
+		seen.add(key);
+	}
+	return true;
+}
+
+function featureNames(table: AttributeTable, nameField?: string): (string | null)[] {
+	const wanted = nameField ?? table.columns.find((c) => /^(name|naam|nom|nombre|navn)$/i.test(c));
+	const column = wanted === undefined ? -1 : table.columns.indexOf(wanted);
+	if (nameField !== undefined && column < 0) {
+		const message = `There is no column "${nameField}". The columns are: ${table.columns.join(', ')}.`;
+		throw new Refusal('duplicate-keys', message);
+	}
+	return table.rows.map((row) => keyText(row[column] ?? null));
+}
+
+/** A key as text: numbers as plain decimals, never with an exponent; empty text is no key. */
+export function keyText(value: Cell): string | null {
+	if (value === null || value === '') return null;
+	if (typeof value !== 'number') return String(value);
+	const text = String(value);
+	if (!text.includes('e')) return text;
+	if (Number.isInteger(value)) return BigInt(value).toString();
+	return value.toFixed(100).replace(/0+$/, '');
+}
+
+function freshKey(key: string, known: Map<string, number>, wanted: string[]): string {
+	const taken = new Set(wanted);
+	for (let n = 2; ; n++) {
+		const fresh = `${key} (${n})`;
+		if (!known.has(fresh) && !taken.has(fresh)) return fresh;
+	}
+}
+
+function duplicates(regions: string[], how: 'refuse' | 'merge' | 'rename'): Finding {
+	const some = regions.slice(0, 5).join(', ') + (regions.length > 5 ? ', ...' : '');
+	const said = {
+		refuse: `Keys stand for more than one feature: ${some}.`,
+		merge: `Features with the same key were joined into one region: ${some}.`,
+		rename: `Features with the same key were told apart by a number in brackets: ${some}.`,
+	}[how];
+	const finding: Finding = {
+		code: 'duplicate-keys',
+		severity: how === 'refuse' ? 'error' : 'warning',
+		message: said,
+		regions,
+		at: null,
+	};
+	if (how === 'refuse') throw new Refusal('duplicate-keys', said, [finding]);
+	return finding;
+}

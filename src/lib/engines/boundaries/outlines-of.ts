@@ -1,0 +1,84 @@
+import { doubleArea } from '../geometry/rings.ts';
+import type { Outlines } from './outlines.ts';
+import type { RawLayer } from './raw-layer.ts';
+import { VertexTable } from './vertices.ts';
+
+/** What had to be mended while the rings were taken over; features by number. */
+export interface RingRepairs {
+	closed: Set<number>;
+	turned: Set<number>;
+	/** rings left out because fewer than three different vertices remain */
+	collapsed: Set<number>;
+}
+
+/**
+ * Takes the rings over: closes them, drops repeated vertices, leaves out those without area, and turns
+ * them so that their region is on the left (outer rings anticlockwise, holes clockwise).
+ * `regionOf` gives the region of each feature (several features may be one region), -1 to leave it out.
+ */
+export function outlinesOf(
+	layer: RawLayer,
+	west: number,
+	regionOf: Int32Array,
+	regions: number,
+): { outlines: Outlines; repairs: RingRepairs } {
+	const points = layer.points.items;
+	const total = layer.points.length / 2;
+	const table = new VertexTable(west, Math.ceil(total * 0.6));
+	const ringVertices = new Uint32Array(total);
+	const ringStarts: number[] = [];
+	const ringRegion: number[] = [];
+	const repairs: RingRepairs = { closed: new Set(), turned: new Set(), collapsed: new Set() };
+	let used = 0;
+	for (const ring of eachRing(layer)) {
+		const region = regionOf[ring.feature];
+		if (region < 0) continue;
+		if (!isClosed(points, ring.from, ring.to)) repairs.closed.add(ring.feature);
+		const start = used;
+		for (let i = ring.from; i < ring.to; i++) {
+			const v = table.at(points[2 * i], points[2 * i + 1]);
+			if (used === start || ringVertices[used - 1] !== v) ringVertices[used++] = v;
+		}
+		while (used > start + 1 && ringVertices[used - 1] === ringVertices[start]) used--;
+		if (used - start < 3) {
+			repairs.collapsed.add(ring.feature);
+			used = start;
+			continue;
+		}
+		const area = doubleArea(points, ring.from, ring.to);
+		if (area > 0 === ring.isHole) {
+			ringVertices.subarray(start, used).reverse();
+			repairs.turned.add(ring.feature);
+		}
+		ringStarts.push(start);
+		ringRegion.push(region);
+	}
+	ringStarts.push(used);
+	const outlines = {
+		positions: table.positions.subarray(0, 2 * table.count),
+		vertices: table.count,
+		ringVertices: ringVertices.subarray(0, used),
+		ringStarts: Uint32Array.from(ringStarts),
+		ringRegion: Uint32Array.from(ringRegion),
+		regions,
+	};
+	return { outlines, repairs };
+}
+
+/** Every ring of a layer with its feature; the first of a part is its outer ring. */
+export function* eachRing(layer: RawLayer) {
+	for (let feature = 0; feature < layer.regions; feature++) {
+		for (let part = layer.partsBefore(feature); part < layer.partsBefore(feature + 1); part++) {
+			const first = layer.ringsBefore(part);
+			for (let ring = first; ring < layer.ringsBefore(part + 1); ring++) {
+				const from = layer.pointsBefore(ring);
+				yield { feature, isHole: ring > first, from, to: layer.pointsBefore(ring + 1) };
+			}
+		}
+	}
+}
+
+function isClosed(points: Float64Array, from: number, to: number): boolean {
+	const last = to - 1;
+	return points[2 * from] === points[2 * last] && points[2 * from + 1] === points[2 * last + 1];
+}

@@ -1,0 +1,80 @@
+import { GrowingFloats, GrowingInts } from '../geometry/growing.ts';
+import { Refusal } from './refusal.ts';
+import { AttributeTable } from './attribute-table.ts';
+import type { Finding } from './finding.ts';
+import type { Limits } from './options.ts';
+
+/** Regions as a file holds them: points as written, rings of parts of regions, each started in turn. */
+export class RawLayer {
+	points: GrowingFloats;
+	/** first point of each ring, of parts their first ring, of regions their first part */
+	ringStarts = new GrowingInts();
+	partRings = new GrowingInts();
+	regionParts = new GrowingInts();
+	table = new AttributeTable();
+	/** the coordinate system the file declares: a name, WKT or PROJ string; null when it is silent */
+	crs: string | null = null;
+	/** the format's own rule when the file is silent: GeoJSON is in degrees, a shapefile is unknown */
+	crsByFormat: string | null = null;
+	encoding = 'UTF-8';
+	format = '';
+	layer: string | null = null;
+	findings: Finding[] = [];
+
+	constructor(
+		private limits: Limits,
+		expectedPoints = 1024,
+	) {
+		this.points = new GrowingFloats(2 * expectedPoints);
+	}
+
+	get regions(): number {
+		return this.regionParts.length;
+	}
+	startRegion(): void {
+		if (this.regions >= this.limits.regions) {
+			throw new Refusal(
+				'too-large-unpacked',
+				`The file has more than ${this.limits.regions} features, which is the most this reader takes.`,
+			);
+		}
+		this.regionParts.push(this.partRings.length);
+	}
+	startPart(): void {
+		this.partRings.push(this.ringStarts.length);
+	}
+	startRing(): void {
+		this.ringStarts.push(this.points.length / 2);
+	}
+	point(x: number, y: number): void {
+		this.points.push2(x, y);
+		if (this.points.length > 2 * this.limits.points) {
+			throw new Refusal(
+				'too-large-unpacked',
+				`The file has more than ${this.limits.points} points, which is the most this reader takes.`,
+			);
+		}
+	}
+	/** A place to come back to when a feature has to be read again from its start. */
+	mark(): number[] {
+		return [
+			this.points.length,
+			this.ringStarts.length,
+			this.partRings.length,
+			this.regionParts.length,
+		];
+	}
+	backTo(mark: number[]): void {
+		[this.points.length, this.ringStarts.length, this.partRings.length, this.regionParts.length] =
+			mark;
+	}
+	pointsBefore(ring: number): number {
+		return ring < this.ringStarts.length ? this.ringStarts.items[ring] : this.points.length / 2;
+	}
+	ringsBefore(part: number): number {
+		return part < this.partRings.length ? this.partRings.items[part] : this.ringStarts.length;
+	}
+	partsBefore(region: number): number {
+		return region < this.regions ? this.regionParts.items[region] : this.partRings.length;
+	}
+}

@@ -1,0 +1,32 @@
+import type { Finding } from './finding.ts';
+
+/** Codes by which a file is refused; see the API description. */
+export type RefusalCode =
+	| 'crs-missing'
+	| 'axes-swapped'
+	| 'file-truncated'
+	| 'not-json'
+	| 'not-geojson'
+	| 'empty-file'
+	| 'bad-coordinate'
+	| 'too-large-unpacked'
+	| 'zip-damaged'
+	| 'bad-arc'
+	| 'layer-needed'
+	| 'duplicate-keys'
+	| 'no-areas'
+	| 'unsupported-format';
+
+/** Ends the reading of a file from any depth; `readBoundaries` turns it into a refused result. */
+export class Refusal extends Error {
+	constructor(
+		readonly code: RefusalCode,
+		message: string,
+		readonly findings: Finding[] = [],
+	) {
+		super(message);
+	}
+}
+
+/** Ends the reading because the caller asked for it. */
+export class Cancelled extends Error {}

@@ -1,0 +1,13 @@
+/** Colouring: region graph and rules in; a colouring with its proof, or an explanation, out. */
+export type {
+	ColouringProblem,
+	ColouringResult,
+	Explanation,
+	Proof,
+	ProofKind,
+	Release,
+	Rule,
+} from './problem.ts';
+export { colour } from './colour.ts';
+export { checkColouring } from './check-colouring.ts';
+export { problemFaults } from './faults.ts';

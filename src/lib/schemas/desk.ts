@@ -1,0 +1,155 @@
+import type { BorderList } from '../engines/borders/border-list.ts';
+import type { Finding } from '../engines/boundaries/finding.ts';
+import type { Explanation, Proof } from '../engines/colouring/problem.ts';
+import type { Draft } from '../engines/editions/draft.ts';
+import type { Action } from '../server/access/roles.ts';
+
+/**
+ * What a sheet's pages are given by the server. Regions and inks are numbered from 0 in the order of
+ * the boundary set; long lists are columns, so that 33,000 regions travel as a few arrays.
+ */
+export interface DeskSheet {
+	id: string;
+	/** the number in the sheet's address, counted within the team */
+	number: number;
+	name: string;
+	/** of the draft that is shown; sent back with every save */
+	revision: number;
+	savedBy: string | null;
+	/** ISO 8601 */
+	savedAt: string;
+	boundarySet: DeskBoundarySet;
+	draft: Draft;
+	colouring: DeskColouring | null;
+	regions: DeskRegions;
+	borders: BorderList;
+	findings: DeskFinding[];
+	/** newest first */
+	editions: DeskEdition[];
+	/** what the one who looks may do here */
+	rights: Action[];
+}
+
+export interface DeskBoundarySet {
+	id: string;
+	fileName: string;
+	regionCount: number;
+	/** about the graph of the line borders */
+	planar: boolean;
+	/** why not, when it is not */
+	planarWitness: PlanarWitness | null;
+	source: SourceNote;
+	columns: string[];
+}
+
+/** Regions that no plane drawing can join as their borders do: `paths` run from hub to hub. */
+export interface PlanarWitness {
+	kind: 'K5' | 'K3,3';
+	hubs: number[];
+	paths: number[][];
+	/** every region on it */
+	regions: number[];
+	sentence: string;
+}
+
+/** How the file was understood. */
+export interface SourceNote {
+	format: string;
+	layer: string | null;
+	crs: string;
+	encoding: string | null;
+	features: number;
+	toleranceMetres: number;
+}
+
+/** One entry a region in each column. */
+export interface DeskRegions {
+	key: string[];
+	name: string[];
+	parts: number[];
+	areaKm2: number[];
+	/** the region that surrounds every part of this one, or -1 */
+	enclaveOf: number[];
+	/** value of the draft's group column, null where there is none */
+	group: (string | null)[];
+}
+
+export type DeskColouring =
+	| {
+			status: 'coloured';
+			/** ink of each region */
+			inks: number[];
+			inksUsed: number;
+			lowerBound: number;
+			proof: Proof;
+			/** why no fewer inks do, in one sentence */
+			sentence: string;
+	  }
+	| { status: 'impossible'; explanation: Explanation; sentence: string }
+	| { status: 'undecided'; lowerBound: number; message: string; sentence: string };
+
+export interface DeskFinding extends Finding {
+	id: number;
+	acceptedBy: string | null;
+	acceptedAt: string | null;
+}
+
+export interface DeskEdition {
+	number: number;
+	issuedAt: string;
+	issuedBy: string | null;
+	digest: string;
+	note: string;
+	files: { name: string; mediaType: string; bytes: number }[];
+}
+
+/** `POST sheets/[sheet]/draft`: 200 */
+export interface DraftSaved {
+	revision: number;
+	savedAt: string;
+	/** as stored: new locks carry who set them and when */
+	document: Draft;
+	colouring: DeskColouring | null;
+}
+
+/** `POST sheets/[sheet]/draft`: 409, somebody else saved first; nothing was overwritten */
+export interface DraftStale {
+	revision: number;
+	savedBy: string | null;
+	savedAt: string;
+	/** what they saved */
+	document: Draft;
+}
+
+/** `GET sheets`, one row of the list */
+export interface SheetRow {
+	number: number;
+	name: string;
+	regionCount: number;
+	openFindings: number;
+	/** null while the locks collide or nothing is coloured */
+	inksUsed: number | null;
+	lastEdition: number | null;
+	savedAt: string;
+	savedBy: string | null;
+}
+
+/** `GET intakes/[intake]/status` and the intake page */
+export interface IntakeStatus {
+	id: string;
+	fileName: string;
+	fileBytes: number;
+	sheetName: string;
+	state: 'waiting' | 'reading' | 'done' | 'refused' | 'cancelled' | 'failed';
+	/** what is being done, in words */
+	step: string;
+	/** 0 to 1 */
+	share: number;
+	attempts: number;
+	createdAt: string;
+	createdBy: string | null;
+	/** when refused or failed: why and where */
+	refusal: { code: string; message: string; findings: Finding[] } | null;
+	/** number of the sheet, when done */
+	sheet: number | null;
+}

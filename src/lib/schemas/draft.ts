@@ -1,0 +1,73 @@
+import { z } from 'zod';
+import type { Draft } from '../engines/editions/draft.ts';
+import { papers } from '../engines/sheet/layout.ts';
+
+/** The shape and limits of a draft as it arrives from outside; `Draft` says what each part means. */
+
+/** Widest map that a plan of 100,000 regions can ask for. */
+const mostRules = 100_000;
+
+const key = z.string().min(1).max(400);
+const inkNumber = z.int().min(0).max(255);
+const reason = z.string().max(1_000);
+
+export const ink = z.strictObject({
+	name: z.string().max(80),
+	hex: z.string().regex(/^#[0-9a-f]{6}$/, 'an ink is written #rrggbb in lower case'),
+});
+
+const lock = z.strictObject({
+	ink: inkNumber,
+	cost: z.number().positive().max(1e9),
+	by: z.string().max(200).optional(),
+	at: z.string().max(40).optional(),
+});
+
+const millimetres = z.number().min(40).max(5_000);
+
+export const sheetLayout = z.strictObject({
+	title: z.string().max(200),
+	subtitle: z.string().max(300),
+	paper: z.union([z.enum(papers), z.strictObject({ widthMm: millimetres, heightMm: millimetres })]),
+	orientation: z.enum(['landscape', 'portrait']),
+	marginMm: z.number().min(0).max(200),
+	projection: z.enum([
+		'auto',
+		'albers',
+		'lambert-azimuthal',
+		'cylindrical-equal-area',
+		'equal-earth',
+	]),
+	labels: z.boolean(),
+	groupColumn: z.string().max(400).nullable(),
+	legend: z.boolean(),
+	scaleBar: z.boolean(),
+	credits: z.string().max(1_000),
+});
+
+const handBorder = z.strictObject({ a: key, b: key, reason });
+
+export const draftDocument = z.strictObject({
+	inks: z.union([z.int().min(1).max(64), z.literal('fewest')]),
+	palette: z.strictObject({
+		id: z.string().min(1).max(100),
+		name: z.string().min(1).max(120),
+		inks: z.array(ink).min(1).max(64),
+	}),
+	locks: z.record(key, lock),
+	forbidden: z.array(z.strictObject({ key, ink: inkNumber })).max(mostRules),
+	alike: z.array(z.tuple([key, key])).max(mostRules),
+	apart: z.array(z.tuple([key, key])).max(mostRules),
+	pointTouches: z.boolean(),
+	struck: z.array(handBorder).max(mostRules),
+	added: z.array(handBorder).max(mostRules),
+	seed: z.int().min(0).max(0xffffffff),
+	layout: sheetLayout,
+}) satisfies z.ZodType<Draft>;
+
+/** Body of `POST sheets/[sheet]/draft`: the draft, and the revision it was made from. */
+export const saveDraft = z.strictObject({
+	revision: z.int().min(0),
+	document: draftDocument,
+});
+export type SaveDraft = z.infer<typeof saveDraft>;
