@@ -96,7 +96,9 @@ export function coverageFrom(
 			(one, i) => options.key?.(one.properties ?? {}, String(one.id), i) ?? String(one.id ?? i),
 		),
 		names: geometries.map((one) =>
-			options.name ? options.name(one.properties ?? {}) : String(one.properties?.name ?? ''),
+			options.name
+				? options.name(one.properties ?? {})
+				: String((one.properties as { name?: unknown } | undefined)?.name ?? ''),
 		),
 		arcPoints: Float64Array.from(arcs.flat(2)),
 		arcStarts: Uint32Array.from(arcStarts),

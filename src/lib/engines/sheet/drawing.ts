@@ -93,5 +93,7 @@ export interface LegendPlace {
 	/** type size */
 	size: number;
 	columns: number;
+	/** from one column to the next */
+	step: number;
 	weak: boolean;
 }

@@ -1,27 +1,18 @@
-import type { Coverage } from '../boundaries/coverage.ts';
 import type { SheetArcs } from './plane/quantise.ts';
 
 const arcOf = (signed: number): number => (signed < 0 ? ~signed : signed);
 
 /**
- * The rings of every region as signed arcs, without arcs that shrank to one point and without rings
- * of fewer than three places, which would paint nothing. A region may be left with no ring at all.
+ * The rings of every region without arcs that shrank to one point and without rings of fewer than
+ * three places, which would paint nothing. A region may be left with no ring at all.
  */
-export function regionRings(coverage: Coverage, { arcStarts }: SheetArcs): Int32Array[][] {
-	const { ringArcs, ringStarts, partRings, regionParts } = coverage;
+export function drawnRings(regions: Int32Array[][], { arcStarts }: SheetArcs): Int32Array[][] {
 	const steps = (signed: number) => arcStarts[arcOf(signed) + 1] - arcStarts[arcOf(signed)] - 1;
-	return coverage.keys.map((_, region) => {
-		const rings: Int32Array[] = [];
-		const last = partRings[regionParts[region + 1]];
-		for (let ring = partRings[regionParts[region]]; ring < last; ring++) {
-			const arcs = ringArcs
-				.subarray(ringStarts[ring], ringStarts[ring + 1])
-				.filter((signed) => steps(signed) > 0);
-			const points = arcs.reduce((sum, signed) => sum + steps(signed), 0);
-			if (points >= 3) rings.push(arcs);
-		}
-		return rings;
-	});
+	return regions.map((rings) =>
+		rings
+			.map((ring) => ring.filter((signed) => steps(signed) > 0))
+			.filter((ring) => ring.reduce((sum, signed) => sum + steps(signed), 0) >= 3),
+	);
 }
 
 /** Points of one ring on the paper, x and y interleaved, the first not repeated at the end. */

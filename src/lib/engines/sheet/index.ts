@@ -11,6 +11,8 @@ export { extentOf, type Extent } from './plane/extent.ts';
 export { type ChosenProjection } from './plane/projections.ts';
 export { paperLimits, paperSize } from './paper.ts';
 export { caution, papers, type SheetLayout } from './layout.ts';
+export { cutRing } from './plane/cut-open.ts';
+export { ringLonLat, type LonLat } from './plane/ring-lonlat.ts';
 export { isSetIn, textWidth } from './type/text-width.ts';
 export { faceStyles, type Face } from './type/face.ts';
 export type {

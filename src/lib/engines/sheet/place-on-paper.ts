@@ -1,8 +1,9 @@
 import type { Coverage } from '../boundaries/coverage.ts';
-import { regionRings } from './fills.ts';
+import { drawnRings } from './fills.ts';
 import type { SheetLayout } from './layout.ts';
 import type { ArcSides } from './lines.ts';
 import { chooseProjection } from './plane/choose-projection.ts';
+import { drawable } from './plane/drawable.ts';
 import { extentOf } from './plane/extent.ts';
 import { fitInto, type Box, type Fit } from './plane/fit.ts';
 import { projectArcs } from './plane/project-arcs.ts';
@@ -29,8 +30,9 @@ export function placeOnPaper(
 	const extent = extentOf(coverage);
 	const chosen = chooseProjection(extent, layout);
 	const reach = Math.max(extent.north - extent.south, extent.east - extent.west) * (Math.PI / 180);
-	const plane = projectArcs(coverage, chosen.projection, Math.min(reach, 2) * slackShare);
+	const ready = drawable(coverage, extent.crossed);
+	const plane = projectArcs(ready, chosen.projection, Math.min(reach, 2) * slackShare);
 	const fit = fitInto(plane, boxFor(chosen.sentence));
 	const arcs = quantise(plane, fit);
-	return { chosen, fit, arcs, sides: coverage, rings: regionRings(coverage, arcs) };
+	return { chosen, fit, arcs, sides: ready, rings: drawnRings(ready.rings, arcs) };
 }

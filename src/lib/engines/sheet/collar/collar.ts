@@ -64,10 +64,9 @@ function layOut(input: CollarInput, scale: number): Collar {
 	const barWidth = layout.scaleBar ? Math.round(width * 0.3) : 0;
 	const showLegend = layout.legend && coloured && inks.length > 0;
 	const legendWidth = width - (barWidth ? barWidth + 2 * size : 0);
-	const columns = showLegend ? legendColumns(inks, size, legendWidth) : 1;
-	const legendHigh = showLegend
-		? legendHeight(legendRows({ columns, weak }, inks.length), size)
-		: 0;
+	const grid = showLegend ? legendColumns(inks, size, legendWidth) : { columns: 1, step: 0 };
+	const rows = showLegend ? legendRows({ ...grid, weak }, inks.length) : 0;
+	const legendHigh = legendHeight(rows, size);
 	const barHigh = layout.scaleBar ? Math.round(size * 2.3) : 0;
 	const high = Math.max(legendHigh, barHigh);
 	const row = bottom - base.height - (high ? high + air : 0);
@@ -77,7 +76,7 @@ function layOut(input: CollarInput, scale: number): Collar {
 		map: { x: left, y: mapTop, width, height: row - air - mapTop },
 		texts: [...head.texts, ...base.texts],
 		legend: showLegend
-			? { x: left + width - legendWidth, y: row, width: legendWidth, size, columns, weak }
+			? { x: left + width - legendWidth, y: row, width: legendWidth, size, ...grid, weak }
 			: null,
 		bar: layout.scaleBar ? { x: left, y: row, longest: Math.round(width * 0.2), size } : null,
 		scale,

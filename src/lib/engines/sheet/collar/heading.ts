@@ -37,9 +37,9 @@ export function setBlock(text: string, style: Style, x: number, y: number, width
 	return { texts, height: kept.length ? Math.ceil(size * (1 + leading * (kept.length - 1))) : 0 };
 }
 
-/** Title sizes on A4 in hundredths of a millimetre: 18 point, or less where that saves a line. */
-const titleSizes = [635, 560, 490, 420, 350];
-const subtitleSize = 340;
+/** Title sizes on A4 in hundredths of a millimetre: 16 point, or less where that saves a line. */
+const titleSizes = [565, 500, 440, 390, 340];
+const subtitleSize = 335;
 
 /**
  * Title and subtitle in the upper left: the title in one line as large as it goes, else in up to
@@ -63,6 +63,7 @@ export function heading(
 		y,
 		width,
 	);
+	const air = top.height ? Math.round(size * 0.3) : 0;
 	const below = setBlock(
 		subtitle,
 		{
@@ -73,8 +74,11 @@ export function heading(
 			leading: 1.2,
 		},
 		x,
-		y + top.height,
+		y + top.height + air,
 		width,
 	);
-	return { texts: [...top.texts, ...below.texts], height: top.height + below.height };
+	return {
+		texts: [...top.texts, ...below.texts],
+		height: top.height + (below.height ? air + below.height : 0),
+	};
 }

@@ -24,11 +24,14 @@ export function legendRows({ columns, weak }: Pick<LegendPlace, 'columns' | 'wea
 export const legendHeight = (rows: number, size: number): number =>
 	Math.ceil(rows * rowHigh * size);
 
-/** How many columns the longest name allows in a width; at least one. */
-export function legendColumns(inks: DrawnInk[], size: number, width: number): number {
+/** As many columns as the longest name allows in a width; at least one, and never wider than that. */
+export function legendColumns(inks: DrawnInk[], size: number, width: number) {
 	const names = inks.map((ink, number) => textWidth('sans', size, nameOf(ink, number)));
-	const entry = Math.max(...names, 0) + size * (boxWide + gap + between);
-	return Math.max(1, Math.min(inks.length, Math.floor((width + size * between) / entry)));
+	const step = Math.ceil(Math.max(...names, 0) + size * (boxWide + gap + between));
+	const columns = Math.floor((width + size * between) / step);
+	return columns < 1
+		? { columns: 1, step: Math.floor(width + size * between) }
+		: { columns: Math.min(columns, inks.length), step };
 }
 
 /**
@@ -36,20 +39,19 @@ export function legendColumns(inks: DrawnInk[], size: number, width: number): nu
  * ascending order. Out: rects and texts of layer `legend`; names too long for a column are shortened.
  */
 export function drawLegend(place: LegendPlace, inks: DrawnInk[], used: number[]) {
-	const { size, columns } = place;
-	const entry = (place.width + size * between) / columns;
+	const { size, columns, step } = place;
 	const rows = Math.ceil(used.length / columns);
 	const rects: DrawnRect[] = [];
 	const texts: DrawnText[] = [];
 	used.forEach((ink, i) => {
-		const x = Math.round(place.x + entry * Math.floor(i / rows));
+		const x = Math.round(place.x + step * Math.floor(i / rows));
 		const y = Math.round(place.y + size * rowHigh * (i % rows));
 		const [wide, high] = [Math.round(size * boxWide), Math.round(size * boxHigh)];
 		rects.push(box(x, y, wide, high, inks[ink].shown));
 		const number = word('sans-bold', size, String(ink + 1), labelInk(inks[ink].shown));
 		const base = y + Math.round(high / 2 + size * 0.33);
 		texts.push({ ...number, x: Math.round(x + (wide - number.width) / 2), y: base });
-		const room = entry - size * (boxWide + gap + between);
+		const room = step - size * (boxWide + gap + between);
 		const name = shortened('sans', size, nameOf(inks[ink], ink), room);
 		const left = Math.round(x + size * (boxWide + gap));
 		if (name) texts.push({ ...word('sans', size, name, '#000000'), x: left, y: base });

@@ -3,7 +3,16 @@ import { allOwnedBy, paper, type RegionRaster } from './region-raster.ts';
 import type { TextBox } from './text-box.ts';
 
 /** Distance of a label from the coast it stands off, in parts of its size. */
-const off = 0.35;
+const off = 0.45;
+/** Part of that distance kept clear all round. */
+const clear = 0.7;
+
+const sides = [
+	[1, 0],
+	[-1, 0],
+	[0, -1],
+	[0, 1],
+];
 
 /** Cells from the pole to the first that is not the region's, going one way. */
 function shore(raster: RegionRaster, region: number, pole: Pole, dx: number, dy: number): number {
@@ -37,23 +46,21 @@ export function spotBeside(
 	box: TextBox,
 ): { x: number; y: number } | null {
 	const gap = box.size * off;
-	for (const [dx, dy] of [
-		[1, 0],
-		[-1, 0],
-		[0, -1],
-		[0, 1],
-	]) {
-		const away = shore(raster, region, pole, dx, dy) + gap;
-		const x = pole.x + dx * (away + box.width / 2);
-		const y = pole.y + dy * (away + box.height / 2);
-		const { width, height } = box;
-		const around = {
-			x: x - width / 2 - gap / 2,
-			y: y - height / 2 - gap / 2,
-			width: width + gap,
-			height: height + gap,
-		};
-		if (allOwnedBy(raster, around, paper)) return { x, y };
+	const { width, height } = box;
+	for (const [dx, dy] of sides) {
+		const coast = shore(raster, region, pole, dx, dy);
+		for (const gaps of [1, 2, 3]) {
+			const x = pole.x + dx * (coast + gap * gaps + width / 2);
+			const y = pole.y + dy * (coast + gap * gaps + height / 2);
+			const pad = gap * clear;
+			const around = {
+				x: x - width / 2 - pad,
+				y: y - height / 2 - pad,
+				width: width + 2 * pad,
+				height: height + 2 * pad,
+			};
+			if (allOwnedBy(raster, around, paper)) return { x, y };
+		}
 	}
 	return null;
 }

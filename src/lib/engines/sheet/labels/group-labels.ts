@@ -9,6 +9,8 @@ import { paper, type RegionRaster } from './region-raster.ts';
 import { setAt, textBox } from './text-box.ts';
 
 const face = 'serif-bold';
+/** A smaller size is tried until this share of the names fits. */
+const wanted = 0.85;
 
 /** The raster of regions read as a raster of groups, with the middle of each group's cells. */
 function groupRaster(raster: RegionRaster, groupOf: number[], groups: number) {
@@ -39,26 +41,35 @@ function groupRaster(raster: RegionRaster, groupOf: number[], groups: number) {
 }
 
 /**
- * Names of the level above, each inside its group and haloed because it crosses several fills.
+ * Names of the level above at one of the sizes, the first that suits, each inside its group and haloed because it crosses several fills.
  * Regions without a group have no name here. Groups whose name finds no room are left out.
  */
 export function labelGroups(
 	raster: RegionRaster,
 	groups: (string | null)[],
-	size: number,
+	sizes: number[],
 ): DrawnText[] {
 	const names = [...new Set(groups.filter((group) => group !== null))];
 	const groupOf = groups.map((group) => (group === null ? paper : names.indexOf(group)));
 	const read = groupRaster(raster, groupOf, names.length);
 	const room = headroom(read.raster);
-	const width = (text: string) => textWidth(face, size, text);
-	return names.flatMap((name, group) => {
-		for (const lines of linesOfName(cleanText(name), width)) {
-			const box = textBox(lines, face, size);
-			const spot = spotInside(read.raster, room, group, read.middles[group], box.width, box.height);
-			if (spot)
-				return setAt(box, spot.x, spot.y, { layer: 'label', hex: '#000000', halo: '#ffffff' });
-		}
-		return [];
-	});
+	const setIn = (size: number) =>
+		names.map((name, group) => {
+			const width = (text: string) => textWidth(face, size, text);
+			for (const lines of linesOfName(cleanText(name), width)) {
+				const box = textBox(lines, face, size);
+				const middle = read.middles[group];
+				const spot = spotInside(read.raster, room, group, middle, box.width, box.height);
+				if (spot) {
+					return setAt(box, spot.x, spot.y, { layer: 'label', hex: '#000000', halo: '#ffffff' });
+				}
+			}
+			return [];
+		});
+	let set: DrawnText[][] = [];
+	for (const size of sizes) {
+		set = setIn(size);
+		if (set.filter((lines) => lines.length).length >= wanted * names.length) break;
+	}
+	return set.flat();
 }

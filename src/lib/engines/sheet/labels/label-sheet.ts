@@ -13,8 +13,10 @@ import { rasterise } from './region-raster.ts';
 
 /** Type sizes on A4, hundredths of a millimetre: 8, 7, 6 and 5 point. */
 const sizes = [282, 247, 212, 176];
-/** The smallest size, taken only where it lets a level be named at all. */
-const wanted = 0.9;
+/** For the level above: 10, 9, 8 and 7 point. */
+const groupSizes = [353, 318, 282, 247];
+/** Smaller sizes are tried until this share of the names is placed. */
+const wanted = 0.85;
 const enough = 0.6;
 /** Without a level above, a map with some names says more than a map with none. */
 const enoughAlone = 0.2;
@@ -45,6 +47,12 @@ export function labelSheet(input: LabelInput): Labelled {
 	}
 	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
 	if (share >= (grouped ? enough : enoughAlone)) return found;
-	const texts = grouped ? labelGroups(raster, groups, Math.round(sizes[0] * 1.2 * scale)) : [];
+	const texts = grouped
+		? labelGroups(
+				raster,
+				groups,
+				groupSizes.map((size) => Math.round(size * scale)),
+			)
+		: [];
 	return { texts, unplaced: names.map((_, region) => region) };
 }

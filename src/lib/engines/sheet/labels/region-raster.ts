@@ -2,7 +2,8 @@
  * Which region covers which part of the paper, as a grid of cells. Lettering asks it whether a box
  * lies wholly inside a region or wholly on empty paper: one look-up a cell, exact to a cell.
  *
- * Built by even-odd scan lines through cell centres.
+ * Built by even-odd scan lines through cell centres; cells of empty paper that hold a corner of an
+ * outline belong to that region too.
  */
 import { ringPoints } from '../fills.ts';
 import type { Box } from '../plane/fit.ts';
@@ -86,6 +87,29 @@ function paintRegion(
 		}
 	}
 	spans.set([left, right, top, bottom], 4 * region);
+	claimCorners(raster, region, arcs, rings);
+}
+
+/** Specks and coasts that reach into a cell without its middle keep lettering off it all the same. */
+function claimCorners(
+	raster: RegionRaster,
+	region: number,
+	{ arcPoints, arcStarts }: SheetArcs,
+	rings: Int32Array[],
+): void {
+	const { cell, columns, rows, owner } = raster;
+	for (const ring of rings) {
+		for (const signed of ring) {
+			const arc = signed < 0 ? ~signed : signed;
+			for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++) {
+				const column = Math.floor((arcPoints[2 * point] - raster.x) / cell);
+				const row = Math.floor((arcPoints[2 * point + 1] - raster.y) / cell);
+				if (column < 0 || row < 0 || column >= columns || row >= rows) continue;
+				const i = row * columns + column;
+				if (owner[i] === paper) owner[i] = region;
+			}
+		}
+	}
 }
 
 /** Whether every cell a box touches has this owner. */

@@ -36,7 +36,7 @@ function suits({ west, east, south, north }: Extent): Chosen {
 	const ratio = (span * Math.cos((middle * Math.PI) / 180)) / height;
 	if (ratio < tall) return 'transverse';
 	if (ratio < wide) return 'lambert-azimuthal';
-	const alongEquator = Math.abs(middle) < Math.max(8, height / 2);
+	const alongEquator = Math.abs(middle) < Math.max(8, height / 4);
 	return alongEquator ? 'cylindrical-equal-area' : 'albers';
 }
 

@@ -4,6 +4,7 @@ import {
 	geoEqualEarth,
 	geoProjection,
 	type GeoProjection,
+	type GeoRawProjection,
 } from 'd3-geo';
 import { latitudeWords, longitudeWords } from './degrees.ts';
 
@@ -16,6 +17,11 @@ export interface ChosenProjection {
 
 const unit = <P extends GeoProjection>(projection: P): P =>
 	projection.scale(1).translate([0, 0]).precision(0) as P;
+
+type Formula = (a: number, b: number) => [number, number];
+
+const withInverse = (formula: Formula, inverse: Formula): GeoRawProjection =>
+	Object.assign(formula, { invert: inverse });
 
 /** Source: Snyder 1987, USGS PP 1395, pp. 98-103. */
 export function albers(south: number, north: number, centre: number): ChosenProjection {
@@ -54,11 +60,12 @@ export function cylindrical(parallel: number, centre: number): ChosenProjection 
 export function transverseCylindrical(centre: number): ChosenProjection {
 	return {
 		projection: unit(
-			geoProjection((lon, lat) => [Math.sin(lat), -lon] as [number, number]).rotate([
-				-centre,
-				0,
-				90,
-			]),
+			geoProjection(
+				withInverse(
+					(lon, lat) => [Math.sin(lat), -lon],
+					(x, y) => [-y, Math.asin(x)],
+				),
+			).rotate([-centre, 0, 90]),
 		),
 		sentence: `Transverse cylindrical equal-area, true along ${longitudeWords(centre)}.`,
 	};

@@ -12,8 +12,8 @@ export interface EmbeddedFace {
 
 function faceRule(face: Face): string {
 	const { family, fallback, weight, italic } = faceStyles[face];
-	const slant = italic ? 'italic ' : '';
-	return `.${face}{font:${slant}${weight} 1px "${family}","${family} Variable",${fallback}}`;
+	const slant = italic ? ';font-style:italic' : '';
+	return `.${face}{font-family:"${family}","${family} Variable",${fallback};font-weight:${weight}${slant}}`;
 }
 
 function embedded({ face, format, base64 }: EmbeddedFace): string {
