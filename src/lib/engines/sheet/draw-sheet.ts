@@ -84,7 +84,7 @@ export function drawSheet(input: SheetInput): Drawing {
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
-		? labelSheet({ arcs, rings, names, groups, areas: coverage.areasKm2, box: map, scale })
+		? labelSheet({ arcs, rings, sides, names, groups, areas: coverage.areasKm2, box: map, scale })
 		: { texts: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;

@@ -3,6 +3,7 @@
  * a level, because a size that follows the room would look like rank. A level is lettered where at
  * least 60 % of it fits; else the level above is, and the regions are listed beside the map.
  */
+import type { ArcSides } from '../lines.ts';
 import type { SheetArcs } from '../plane/quantise.ts';
 import type { Box } from '../plane/fit.ts';
 import { labelGroups } from './group-labels.ts';
@@ -24,6 +25,7 @@ const enoughAlone = 0.2;
 export interface LabelInput {
 	arcs: SheetArcs;
 	rings: Int32Array[][];
+	sides: ArcSides;
 	/** cleaned, in region order */
 	names: string[];
 	groups: (string | null)[];
@@ -49,8 +51,7 @@ export function labelSheet(input: LabelInput): Labelled {
 	if (share >= (grouped ? enough : enoughAlone)) return found;
 	const texts = grouped
 		? labelGroups(
-				raster,
-				groups,
+				input,
 				groupSizes.map((size) => Math.round(size * scale)),
 			)
 		: [];

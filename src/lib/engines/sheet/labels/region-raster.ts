@@ -2,8 +2,8 @@
  * Which region covers which part of the paper, as a grid of cells. Lettering asks it whether a box
  * lies wholly inside a region or wholly on empty paper: one look-up a cell, exact to a cell.
  *
- * Built by even-odd scan lines through cell centres; cells of empty paper that hold a corner of an
- * outline belong to that region too.
+ * Built by even-odd scan lines through cell centres; cells that an outline passes through belong to
+ * nobody, so that no lettering stands on a border, a speck or an inlet.
  */
 import { ringPoints } from '../fills.ts';
 import type { Box } from '../plane/fit.ts';
@@ -12,6 +12,7 @@ import type { SheetArcs } from '../plane/quantise.ts';
 /** Cell values that are no region. */
 export const paper = -1;
 export const taken = -2;
+export const outline = -3;
 
 export interface RegionRaster {
 	/** side of a cell, hundredths of a millimetre */
@@ -21,7 +22,7 @@ export interface RegionRaster {
 	/** upper left corner */
 	x: number;
 	y: number;
-	/** region number, `paper` or `taken`, row by row */
+	/** region number, `paper`, `taken` or `outline`, row by row */
 	owner: Int32Array;
 	/** columns and rows each region spans: left, right, top, bottom; right and bottom included */
 	spans: Int32Array;
@@ -30,7 +31,16 @@ export interface RegionRaster {
 /** Most cells in a grid: 4 bytes each, a few milliseconds to read through. */
 const mostCells = 2_000_000;
 
-export function rasterise(arcs: SheetArcs, regions: Int32Array[][], box: Box): RegionRaster {
+/**
+ * In: the rings of every region, and of all arcs those that bound one. Rings of several regions given
+ * as one region melt together, for their common borders cancel.
+ */
+export function rasterise(
+	arcs: SheetArcs,
+	regions: Int32Array[][],
+	box: Box,
+	bounds: (arc: number) => boolean = () => true,
+): RegionRaster {
 	const cell = Math.max(20, Math.ceil(Math.sqrt((box.width * box.height) / mostCells)));
 	const columns = Math.ceil(box.width / cell);
 	const rows = Math.ceil(box.height / cell);
@@ -38,6 +48,9 @@ export function rasterise(arcs: SheetArcs, regions: Int32Array[][], box: Box): R
 	const spans = new Int32Array(4 * regions.length);
 	const raster = { cell, columns, rows, x: box.x, y: box.y, owner, spans };
 	regions.forEach((rings, region) => paintRegion(raster, region, arcs, rings));
+	for (let arc = 0; arc + 1 < arcs.arcStarts.length; arc++) {
+		if (bounds(arc)) markOutline(raster, arcs, arc);
+	}
 	return raster;
 }
 
@@ -87,26 +100,21 @@ function paintRegion(
 		}
 	}
 	spans.set([left, right, top, bottom], 4 * region);
-	claimCorners(raster, region, arcs, rings);
 }
 
-/** Specks and coasts that reach into a cell without its middle keep lettering off it all the same. */
-function claimCorners(
-	raster: RegionRaster,
-	region: number,
-	{ arcPoints, arcStarts }: SheetArcs,
-	rings: Int32Array[],
-): void {
+/** Marks every cell an arc passes through, in steps of half a cell. */
+function markOutline(raster: RegionRaster, { arcPoints, arcStarts }: SheetArcs, arc: number): void {
 	const { cell, columns, rows, owner } = raster;
-	for (const ring of rings) {
-		for (const signed of ring) {
-			const arc = signed < 0 ? ~signed : signed;
-			for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++) {
-				const column = Math.floor((arcPoints[2 * point] - raster.x) / cell);
-				const row = Math.floor((arcPoints[2 * point + 1] - raster.y) / cell);
-				if (column < 0 || row < 0 || column >= columns || row >= rows) continue;
-				const i = row * columns + column;
-				if (owner[i] === paper) owner[i] = region;
+	for (let point = arcStarts[arc] + 1; point < arcStarts[arc + 1]; point++) {
+		const [x, y] = [arcPoints[2 * point] - raster.x, arcPoints[2 * point + 1] - raster.y];
+		const dx = arcPoints[2 * point - 2] - raster.x - x;
+		const dy = arcPoints[2 * point - 1] - raster.y - y;
+		const steps = Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / cell);
+		for (let step = 0; step <= steps; step++) {
+			const column = Math.floor((x + (dx * step) / steps) / cell);
+			const row = Math.floor((y + (dy * step) / steps) / cell);
+			if (column >= 0 && row >= 0 && column < columns && row < rows) {
+				owner[row * columns + column] = outline;
 			}
 		}
 	}
