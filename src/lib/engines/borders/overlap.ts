@@ -87,7 +87,7 @@ function addPieces(line: Outline, other: Outline, isFirst: boolean, sum: Sum): v
 	for (let run = 0; run + 1 < line.starts.length; run++) {
 		for (let i = line.starts[run]; i + 1 < line.starts[run + 1]; i++) {
 			if (isApart(line.points, i, box)) continue;
-			const shares = cutsOf(line.points, i, other);
+			const shares = cutsOf(line.points, i, [line, other]);
 			for (let k = 0; k + 1 < shares.length; k++) {
 				between(line.points, i, shares[k], shares[k + 1], piece);
 				const side = commonSide(piece, line, other, isFirst);
@@ -107,19 +107,22 @@ function isApart(points: Float64Array, i: number, box: Outline['box']): boolean 
 	);
 }
 
-function cutsOf(points: Float64Array, i: number, other: Outline): number[] {
+/** Where a segment is met by the outlines, its own too, as shares of the way along. */
+function cutsOf(points: Float64Array, i: number, outlines: Outline[]): number[] {
 	const [x1, y1, x2, y2] = points.subarray(2 * i, 2 * i + 4);
 	const shares = [0, 1];
 	const box = [Math.min(x1, x2), Math.min(y1, y2), Math.max(x1, x2), Math.max(y1, y2)] as const;
-	other.blocks.search(...box, (_, j) => {
-		const shared = crossing(points, i, other.points, j);
-		if (shared) shares.push(shared[0]);
-		for (const end of [j, j + 1]) {
-			const [px, py] = other.points.subarray(2 * end, 2 * end + 2);
-			const { share, metres } = nearestOnSegment(px, py, x1, y1, x2, y2);
-			if (metres <= onLine && share > 0 && share < 1) shares.push(share);
-		}
-	});
+	for (const outline of outlines) {
+		outline.blocks.search(...box, (_, j) => {
+			const shared = crossing(points, i, outline.points, j);
+			if (shared) shares.push(shared[0]);
+			for (const end of [2 * j, 2 * j + 2]) {
+				const [px, py] = outline.points.subarray(end, end + 2);
+				const { share, metres } = nearestOnSegment(px, py, x1, y1, x2, y2);
+				if (metres <= onLine && share > 0 && share < 1) shares.push(share);
+			}
+		});
+	}
 	return shares.sort((p, q) => p - q);
 }
 
