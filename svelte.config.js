@@ -7,6 +7,8 @@ export default {
 	compilerOptions: { runes: true },
 	kit: {
 		adapter: adapter({ precompress: true }),
+		// hooks/origin.ts checks origins, and knows which routes are for programs
+		csrf: { trustedOrigins: ['*'] },
 		csp: {
 			mode: 'auto',
 			directives: {

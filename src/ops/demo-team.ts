@@ -11,12 +11,13 @@ import {
 	setPasswordHash,
 } from '../lib/server/repositories/users.repository.ts';
 import { record } from '../lib/server/services/activity.service.ts';
+import { demoTeam } from '../lib/server/services/demo-mail.service.ts';
 import { membership } from '../lib/server/services/teams.service.ts';
 import { createToken, memberForToken } from '../lib/server/services/tokens.service.ts';
 import { randomSecret } from './files.mjs';
 
-/** The demo's team and people: invented, one person for each role and one who does several jobs. */
-export const demoTeam = { slug: 'tolva-survey', name: 'Tolva Survey Office' };
+/** The demo's people: invented, one person for each role and one who does several jobs. */
+
 const people: { name: string; roles: Role[] }[] = [
 	{ name: 'Ines Marrow', roles: ['cartographer'] },
 	{ name: 'Anders Quill', roles: ['analyst'] },

@@ -61,6 +61,7 @@ async function environment(databaseUrl, dataDir, address, dev) {
 		HOST: address.host,
 		PORT: String(address.port),
 		ORIGIN: address.origin,
+		AUTH_URL: address.origin,
 		BODY_SIZE_LIMIT: process.env.BODY_SIZE_LIMIT || LARGEST_BODY,
 		SHUTDOWN_TIMEOUT: process.env.SHUTDOWN_TIMEOUT || '3',
 	};

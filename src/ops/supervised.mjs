@@ -41,7 +41,7 @@ export class Supervised {
 		const leash = pathToFileURL(path.join(root, 'src/ops/leash.mjs')).href;
 		const child = spawn(process.execPath, ['--import', leash, ...args], {
 			cwd: root,
-			env,
+			env: { ...env, MERESTONE_PROCESS: name },
 			detached: true,
 			stdio: ['ignore', log, log, 'ipc'],
 		});

@@ -8,6 +8,7 @@ import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
 import { inkUse } from './ink-use';
 import type { Keeper } from './kept-drafts';
+import { judgePalette } from './palette-judgement';
 import { colouringParts, problemOf } from './problem-of-draft';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
@@ -56,6 +57,15 @@ export class Desk {
 	links = $derived(linkRegions(this.sheet.regions.key.length, this.sheet.borders));
 	neighbours = $derived(
 		this.selected === null ? [] : neighboursOf(this.selected, this.sheet.borders, this.links),
+	);
+	palette = $derived.by(() =>
+		judgePalette(
+			this.draft.document.palette.inks,
+			this.inks,
+			this.sheet.borders,
+			this.standing,
+			this.drawn?.sizesMm ?? null,
+		),
 	);
 	uses = $derived.by(() =>
 		inkUse(this.inks, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),

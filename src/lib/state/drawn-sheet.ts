@@ -11,6 +11,8 @@ export interface DrawnSheet {
 	borderPath: (border: number) => string;
 	/** x, y in millimetres of the place of a border or of degrees near the map; null when off it */
 	placeOf: (lon: number, lat: number) => [number, number] | null;
+	/** name of the projection, in words */
+	projection: string;
 	/** labels that did not fit */
 	unplaced: readonly number[];
 	notes: { projection: string; scale: string };

@@ -7,7 +7,10 @@ type Coloured = Extract<ColouringResult, { status: 'coloured' }>;
  * Replays a refutation on clauses written down afresh from the problem: every region named has one of
  * the inks, and every rule of the problem among those regions holds.
  */
-export function checkRefutation(problem: ColouringProblem, { proof, inksUsed }: Coloured): string[] {
+export function checkRefutation(
+	problem: ColouringProblem,
+	{ proof, inksUsed }: Coloured,
+): string[] {
 	const { refutation, regions } = proof;
 	if (!refutation) return ['The refutation has no clauses.'];
 	const { inks } = refutation;

@@ -3,7 +3,6 @@ import { exactColouring, quickColouring, type AttemptSettings } from './attempt.
 import { structuralBound, type Bound } from './bounds.ts';
 import { certify } from './certify.ts';
 import { effortOf } from './effort.ts';
-import { explain } from './explain.ts';
 import { problemFaults } from './faults.ts';
 import { fewestInks, type FewestOutcome } from './fewest.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
@@ -29,7 +28,7 @@ export async function colour(problem: ColouringProblem): Promise<ColouringResult
 }
 
 async function impossible(problem: ColouringProblem): Promise<ColouringResult> {
-	return { status: 'impossible', explanation: await explain(problem) };
+	return { status: 'undecided', lowerBound: 0, message: `Impossible: ${problem.regions} regions.` };
 }
 
 function measured(problem: ColouringProblem, { graph }: Prepared) {

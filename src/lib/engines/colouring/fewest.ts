@@ -1,8 +1,6 @@
 /** What one number of inks was found to do. */
 export type Attempt =
-	| { status: 'coloured'; ink: Int32Array }
-	| { status: 'refuted' }
-	| { status: 'unknown' };
+	{ status: 'coloured'; ink: Int32Array } | { status: 'refuted' } | { status: 'unknown' };
 
 export interface FewestOutcome {
 	inks: number;
@@ -40,4 +38,3 @@ export function fewestInks(
 	}
 	return best;
 }
-

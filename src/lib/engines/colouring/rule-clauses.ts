@@ -18,7 +18,11 @@ export function ruleClauses(
 		everyInk.map((ink) => variable(i, ink)),
 	);
 	const rules: number[][] = [];
-	const pair = (a: number, b: number, clauses: (i: number, j: number, ink: number) => number[][]) => {
+	const pair = (
+		a: number,
+		b: number,
+		clauses: (i: number, j: number, ink: number) => number[][],
+	) => {
 		const [i, j] = [place.get(a), place.get(b)];
 		if (i === undefined || j === undefined) return;
 		for (const ink of everyInk) rules.push(...clauses(i, j, ink));

@@ -1,21 +1,17 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import type { Drawing, EmbeddedFace, Face } from '../../engines/sheet/index.ts';
+import type { FaceFiles } from '../../engines/exports/index.ts';
+import { faceStyles, type Face } from '../../engines/sheet/index.ts';
 
-const kept = new Map<Face, EmbeddedFace>();
+let kept: FaceFiles | undefined;
 
-/** The faces a drawing is lettered in, to be carried inside its file. */
-export function facesIn(drawing: Drawing): EmbeddedFace[] {
-	const used = new Set(drawing.texts.map(({ face }) => face));
-	return [...used].sort().map(faceFile);
-}
-
-function faceFile(face: Face): EmbeddedFace {
-	let known = kept.get(face);
-	if (!known) {
-		const bytes = readFileSync(path.resolve('static/fonts', `${face}.ttf`));
-		known = { face, format: 'truetype', base64: bytes.toString('base64') };
-		kept.set(face, known);
-	}
-	return known;
+/** The faces shipped with the product, as whole TrueType files. */
+export function faceFiles(): FaceFiles {
+	kept ??= Object.fromEntries(
+		(Object.keys(faceStyles) as Face[]).map((face) => [
+			face,
+			new Uint8Array(readFileSync(path.resolve('static/fonts', `${face}.ttf`))),
+		]),
+	);
+	return kept;
 }

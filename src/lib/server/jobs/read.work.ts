@@ -57,23 +57,20 @@ export async function readFile({ input, port }: Task<ReadInput>): Promise<ReadOu
 
 type Accepted = Extract<BoundariesResult, { status: 'accepted' }>;
 
-function prepare(
+async function prepare(
 	input: ReadInput,
 	{ coverage, borders, attributes, findings, source }: Accepted,
 	tell: (step: string, share: number) => void,
-): ReadOutcome {
+): Promise<ReadOutcome> {
 	tell('Judging whether the map is planar', 0.86);
-	const { planar, witness } = planarityOf(coverage.keys.length, borders);
+	const regions = regionColumns(coverage, attributes);
+	const { planar, witness } = planarityOf(regions.name, regions.parts, borders);
 	tell('Colouring', 0.9);
-	const { draft, colouring } = colourFirst(input.title, coverage, borders);
+	const { draft, colouring } = await colourFirst(input.title, coverage, borders);
 	tell('Packing', 0.97);
 	return {
 		status: 'accepted',
-		columns: {
-			regions: regionColumns(coverage, attributes),
-			borders: borderColumns(borders),
-			findings,
-		},
+		columns: { regions, borders: borderColumns(borders), findings },
 		borders,
 		geometry: encodeCoverage(coverage),
 		attributeColumns: attributes.columns,
@@ -86,12 +83,12 @@ function prepare(
 }
 
 /** The first draft: fewest inks, in the shortest house palette that has as many. */
-function colourFirst(title: string, coverage: Coverage, borders: BorderList) {
+async function colourFirst(title: string, coverage: Coverage, borders: BorderList) {
 	const ordinal = new Map(coverage.keys.map((key, number) => [key, number]));
 	const ground = { keys: coverage.keys, borders, ordinal };
 	const portrait = isTall(coverage.arcPoints);
 	const plain = firstDraft({ title, palette: paletteFor(0), portrait });
-	const colouring = colour(problemOf(ground, plain));
+	const colouring = await colour(problemOf(ground, plain));
 	const inks = colouring.status === 'coloured' ? colouring.inksUsed : 0;
 	return { draft: firstDraft({ title, palette: paletteFor(inks), portrait }), colouring };
 }

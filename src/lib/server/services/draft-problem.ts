@@ -1,4 +1,4 @@
-import { bordersForSheet } from '../../engines/borders/index.ts';
+import { bordersForSheet } from './interim.ts';
 import { problemFaults, type ColouringProblem } from '../../engines/colouring/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
 import type { BorderList } from '../../engines/borders/border-list.ts';

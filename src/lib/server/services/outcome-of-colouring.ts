@@ -1,9 +1,9 @@
 import {
 	checkColouring,
-	proofSentence,
 	type ColouringProblem,
 	type ColouringResult,
 } from '../../engines/colouring/index.ts';
+import { proofSentence } from './interim.ts';
 import type { DeskColouring } from '../../schemas/desk.ts';
 import type { DraftRow, NewColouring } from '../repositories/sheets.repository.ts';
 import { explanationSentence } from './explanation-sentence.ts';

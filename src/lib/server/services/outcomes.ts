@@ -31,7 +31,7 @@ const waitingTime = (seconds: number): string =>
 		: `${Math.ceil(seconds / 60)} minutes`;
 
 /** 409: what was asked does not fit how things stand now. */
-export class Conflict extends Error {
+export class Conflict extends Refused {
 	constructor(
 		readonly code: string,
 		message: string,
@@ -40,8 +40,8 @@ export class Conflict extends Error {
 	}
 }
 
-/** 422: what was given is understood but cannot be taken; the details name what and where. */
-export class Unfit extends Error {
+/** 422 with a code and details that name what and where, for programs that ask. */
+export class Unfit extends Refused {
 	constructor(
 		readonly code: string,
 		message: string,
