@@ -1,7 +1,7 @@
 import { isDeepStrictEqual } from 'node:util';
 import type { Draft } from '../../engines/editions/draft.ts';
 import { draftDocument, type SaveDraft } from '../../schemas/draft.ts';
-import type { DraftSaved, DraftStale } from '../../schemas/desk.ts';
+import type { DeskColouring, DraftSaved, DraftStale } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
@@ -112,7 +112,7 @@ const store = (shop: Workshop, member: Member, change: Change): Promise<SaveResu
 		await record(trx, member, 'draft.saved', subject, { sheet: sheet.number, revision, parts });
 		const colouring = outcome
 			? deskOutcome(view.names, outcome)
-			: deskColouring(view.names, current);
+			: standingColouring(view, current);
 		return {
 			status: 'saved',
 			saved: { revision, savedAt: savedAt.toISOString(), document: after, colouring },
@@ -136,11 +136,18 @@ async function keep(
 	return same ? current.colouring_id : insertColouring(trx, sheetId, colouring);
 }
 
+/** What a stored draft is coloured with, or why not: one of the two was stored with it. */
+function standingColouring(view: BoundaryView, draft: DraftRow): DeskColouring {
+	const colouring = deskColouring(view.names, draft);
+	if (!colouring) throw new Error(`draft ${draft.revision} has neither colouring nor explanation`);
+	return colouring;
+}
+
 const savedNote = (view: BoundaryView, draft: DraftRow): DraftSaved => ({
 	revision: draft.revision,
 	savedAt: draft.saved_at.toISOString(),
 	document: documentOf(draft),
-	colouring: deskColouring(view.names, draft),
+	colouring: standingColouring(view, draft),
 });
 
 const staleNote = (draft: DraftRow): DraftStale => ({

@@ -1,0 +1,12 @@
+import { memberFor } from '$lib/server/access/guard';
+import { mayDo } from '$lib/server/access/member';
+import { workshop } from '$lib/server/jobs/workshop';
+import { forPage } from '$lib/server/page';
+import { sheetList } from '$lib/server/services/sheet.service';
+import type { PageServerLoad } from './$types';
+
+export const load = (async ({ locals }) => {
+	const member = memberFor(locals, 'sheet.read');
+	const sheets = await forPage(() => sheetList(workshop(), member));
+	return { sheets, mayUpload: mayDo(member, 'boundaries.upload') };
+}) satisfies PageServerLoad;
