@@ -17,7 +17,7 @@ import {
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { changedParts, changesColouring, rightsFor, signLocks } from './draft-rights.ts';
-import { problemOf, sheetBorders } from './draft-problem.ts';
+import { problemOf } from './draft-problem.ts';
 import { checkedOutcome, deskColouring, deskOutcome, type Outcome } from './outcome-of-colouring.ts';
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
@@ -66,7 +66,6 @@ export async function saveDraft(
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
 	if (parts.length === 0) return { status: 'saved', saved: savedNote(view, current) };
 	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after) : null;
-	if (!outcome) sheetBorders({ ...view }, after);
 	return store(shop, member, { sheet, view, current, after, outcome, parts });
 }
 
@@ -173,4 +172,17 @@ export async function readDraft(
 		document: draftDocument.parse(documentOf(draft)),
 		colouring: deskColouring(view.names, draft),
 	};
+}
+
+/** Saves a new layout on top of whatever the draft is now. */
+export async function saveLayout(
+	shop: Workshop,
+	member: Member,
+	number: number,
+	layout: Draft['layout'],
+): Promise<SaveResult> {
+	requireAccess(member, 'layout.edit');
+	const { id, revision } = await sheetOf(shop.db, member, number);
+	const document = documentOf(await draftOf(shop.db, id, revision));
+	return saveDraft(shop, member, number, { revision, document: { ...document, layout } });
 }

@@ -1,5 +1,4 @@
 import { memberFor } from '$lib/server/access/guard';
-import { mayDo } from '$lib/server/access/member';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
 import { sheetList } from '$lib/server/services/sheet.service';
@@ -7,6 +6,5 @@ import type { PageServerLoad } from './$types';
 
 export const load = (async ({ locals }) => {
 	const member = memberFor(locals, 'sheet.read');
-	const sheets = await forPage(() => sheetList(workshop(), member));
-	return { sheets, mayUpload: mayDo(member, 'boundaries.upload') };
+	return { sheets: await forPage(() => sheetList(workshop(), member)) };
 }) satisfies PageServerLoad;

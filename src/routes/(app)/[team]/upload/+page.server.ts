@@ -9,13 +9,13 @@ import type { Actions, PageServerLoad } from './$types';
 
 export const load = (async ({ locals }) => {
 	const member = memberFor(locals, 'sheet.read');
-	const { intakes, mayUpload } = await forPage(() => listIntakes(workshop(), member));
-	return { intakes, mayUpload, maxBytes: maxUpload() };
+	const intakes = await forPage(() => listIntakes(workshop(), member));
+	return { intakes, maxBytes: maxUpload() };
 }) satisfies PageServerLoad;
 
 export const actions = {
 	/** The form is read as it arrives: the file goes to the disk and is never held in memory. */
-	default: async ({ locals, request, params }) => {
+	upload: async ({ locals, request, params }) => {
 		const member = memberFor(locals, 'boundaries.upload');
 		const begun = await attempt(() => begin(member, request));
 		if (begun.failure) return begun.failure;

@@ -1,5 +1,4 @@
 import { memberFor } from '$lib/server/access/guard';
-import { mayDo } from '$lib/server/access/member';
 import { attempt } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
@@ -8,8 +7,7 @@ import type { Actions, PageServerLoad } from './$types';
 
 export const load = (async ({ locals, params }) => {
 	const member = memberFor(locals, 'sheet.read');
-	const intake = await forPage(() => intakeStatus(workshop(), member, params.intake));
-	return { intake, mayUpload: mayDo(member, 'boundaries.upload') };
+	return { intake: await forPage(() => intakeStatus(workshop(), member, params.intake)) };
 }) satisfies PageServerLoad;
 
 export const actions = {

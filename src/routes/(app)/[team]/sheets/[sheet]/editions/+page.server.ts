@@ -21,6 +21,6 @@ export const actions = {
 			() => issueEdition(workshop(), member, number, revision, note),
 			{ note },
 		);
-		return issued.failure ?? { issued: issued.data };
+		return issued.failure ?? { issued: issued.data.number };
 	},
 } satisfies Actions;

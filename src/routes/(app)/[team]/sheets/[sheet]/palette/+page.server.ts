@@ -6,5 +6,5 @@ import type { PageServerLoad } from './$types';
 
 export const load = (async ({ locals }) => {
 	const member = memberFor(locals, 'sheet.read');
-	return { teamPalettes: await forPage(() => teamPalettes(workshop(), member)) };
+	return { palettes: await forPage(() => teamPalettes(workshop(), member)) };
 }) satisfies PageServerLoad;
