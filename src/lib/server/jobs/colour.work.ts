@@ -1,4 +1,8 @@
-import { colour, type ColouringProblem, type ColouringResult } from '../../engines/colouring/index.ts';
+import {
+	colour,
+	type ColouringProblem,
+	type ColouringResult,
+} from '../../engines/colouring/index.ts';
 
 /** Colours a region graph; the milliseconds are those of the computation alone. */
 export async function colourGraph({

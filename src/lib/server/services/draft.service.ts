@@ -18,11 +18,17 @@ import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { changedParts, changesColouring, rightsFor, signLocks } from './draft-rights.ts';
 import { problemOf } from './draft-problem.ts';
-import { checkedOutcome, deskColouring, deskOutcome, type Outcome } from './outcome-of-colouring.ts';
+import {
+	checkedOutcome,
+	deskColouring,
+	deskOutcome,
+	type Outcome,
+} from './outcome-of-colouring.ts';
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
-export type SaveResult = { status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
+export type SaveResult =
+	{ status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
 
 /** A sheet of this team, or `NotFound`. */
 export async function sheetOf(db: Db, member: Member, number: number): Promise<SheetRecord> {
@@ -109,9 +115,7 @@ const store = (shop: Workshop, member: Member, change: Change): Promise<SaveResu
 		});
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'draft.saved', subject, { sheet: sheet.number, revision, parts });
-		const colouring = outcome
-			? deskOutcome(view.names, outcome)
-			: standingColouring(view, current);
+		const colouring = outcome ? deskOutcome(view.names, outcome) : standingColouring(view, current);
 		return {
 			status: 'saved',
 			saved: { revision, savedAt: savedAt.toISOString(), document: after, colouring },

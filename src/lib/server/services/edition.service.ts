@@ -45,7 +45,10 @@ export async function issueEdition(
 			const sheet = await holdSheet(trx, member.team.id, number);
 			if (!sheet) throw new NotFound('sheet');
 			if (sheet.revision !== revision) {
-				throw new Conflict('stale', 'The draft has been saved again since; look at it before you issue.');
+				throw new Conflict(
+					'stale',
+					'The draft has been saved again since; look at it before you issue.',
+				);
 			}
 			return issue(shop, trx, member, sheet, note, received);
 		});
@@ -84,7 +87,8 @@ async function issue(
 	const stem = `${fileStem(sheet.name)}-edition-${number}`;
 	const kept = await keepFiles(shop, trx, files, stem, received);
 	const stored = JSON.stringify(content);
-	if ((await digestOf(JSON.parse(stored))) !== digest) throw new CheckFailed('the digest does not hold');
+	if ((await digestOf(JSON.parse(stored))) !== digest)
+		throw new CheckFailed('the digest does not hold');
 	await insertEdition(
 		trx,
 		{
@@ -141,7 +145,10 @@ async function contentOf(
 		proof: proofByKey(view, draft.proof as unknown as Proof),
 	});
 	if (outcome.status === 'complete') return outcome.content;
-	throw new Conflict(outcome.reason, 'Only a draft in which every region is coloured can be issued.');
+	throw new Conflict(
+		outcome.reason,
+		'Only a draft in which every region is coloured can be issued.',
+	);
 }
 
 const proofByKey = ({ keys }: BoundaryView, proof: Proof) => ({

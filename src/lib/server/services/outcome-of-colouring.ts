@@ -37,7 +37,9 @@ export function deskColouring(
 		const proof = stored.proof as unknown as DeskProof;
 		return coloured(names, { inks, inksUsed, lowerBound, proof });
 	}
-	return stored.explanation ? uncoloured(names, stored.explanation as unknown as StoredExplanation) : null;
+	return stored.explanation
+		? uncoloured(names, stored.explanation as unknown as StoredExplanation)
+		: null;
 }
 
 type DeskProof = Extract<DeskColouring, { status: 'coloured' }>['proof'];

@@ -1,4 +1,10 @@
-import type { DeskEdition, DeskFinding, DeskSheet, SheetRow, SourceNote } from '../../schemas/desk.ts';
+import type {
+	DeskEdition,
+	DeskFinding,
+	DeskSheet,
+	SheetRow,
+	SourceNote,
+} from '../../schemas/desk.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
@@ -11,7 +17,12 @@ import {
 	readGeometry,
 } from '../repositories/boundaries.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
-import { deleteSheet, holdSheet, listSheets, renameSheet } from '../repositories/sheets.repository.ts';
+import {
+	deleteSheet,
+	holdSheet,
+	listSheets,
+	renameSheet,
+} from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
@@ -170,7 +181,11 @@ export async function nameSheet(
 	await shop.db.transaction().execute(async (trx) => {
 		await renameSheet(trx, sheet.id, name);
 		const subject = { kind: 'sheet', id: sheet.id };
-		await record(trx, member, 'sheet.renamed', subject, { sheet: number, from: sheet.name, to: name });
+		await record(trx, member, 'sheet.renamed', subject, {
+			sheet: number,
+			from: sheet.name,
+			to: name,
+		});
 	});
 }
 
