@@ -225,7 +225,8 @@ export class DraftState {
 	async #settleSaved(saved: DraftSaved, sent: Draft) {
 		this.#failures = 0;
 		this.#revision = saved.revision;
-		this.#base = sent;
+		this.#base = saved.document;
+		if (this.document === sent) this.document = saved.document;
 		this.savedAt = saved.savedAt;
 		this.restoredFrom = null;
 		if (this.dirty) {

@@ -45,7 +45,9 @@ export function judgePalette(
 		}
 	return {
 		mark: !touching.length ? null : markOf(weak),
-		sentence: touching.length ? bordersSentence(weak, counting.borders, shown, inks) : 'No inks touch yet',
+		sentence: touching.length
+			? bordersSentence(weak, counting.borders, shown, inks)
+			: 'No inks touch yet',
 		touching,
 		verdict: checkPalette(hexes, touching),
 		weak: weak.map((one) => ({ ...one, border: counting.numbers[one.border] })),
