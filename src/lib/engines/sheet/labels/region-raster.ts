@@ -29,7 +29,7 @@ export interface RegionRaster {
 }
 
 /** Most cells in a grid: 4 bytes each, a few milliseconds to read through. */
-const mostCells = 2_000_000;
+const mostCells = 1_000_000;
 
 /**
  * In: the rings of every region, and of all arcs those that bound one. Rings of several regions given
@@ -102,31 +102,63 @@ function paintRegion(
 	spans.set([left, right, top, bottom], 4 * region);
 }
 
-/** Marks every cell an arc passes through, in steps of half a cell. */
+/** Index of the cell at a place, -1 off the grid. */
+export function cellAt(
+	{ cell, columns, rows, x, y }: RegionRaster,
+	px: number,
+	py: number,
+): number {
+	const [column, row] = [Math.floor((px - x) / cell), Math.floor((py - y) / cell)];
+	return column >= 0 && row >= 0 && column < columns && row < rows ? row * columns + column : -1;
+}
+
+/** Marks every cell an arc passes through. */
 function markOutline(raster: RegionRaster, { arcPoints, arcStarts }: SheetArcs, arc: number): void {
-	const { cell, columns, rows, owner } = raster;
 	for (let point = arcStarts[arc] + 1; point < arcStarts[arc + 1]; point++) {
-		const [x, y] = [arcPoints[2 * point] - raster.x, arcPoints[2 * point + 1] - raster.y];
-		const dx = arcPoints[2 * point - 2] - raster.x - x;
-		const dy = arcPoints[2 * point - 1] - raster.y - y;
-		const steps = Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / cell);
-		for (let step = 0; step <= steps; step++) {
-			const column = Math.floor((x + (dx * step) / steps) / cell);
-			const row = Math.floor((y + (dy * step) / steps) / cell);
-			if (column >= 0 && row >= 0 && column < columns && row < rows) {
-				owner[row * columns + column] = outline;
-			}
-		}
+		const from = { x: arcPoints[2 * point - 2], y: arcPoints[2 * point - 1] };
+		paintLine(
+			raster,
+			{ from, to: { x: arcPoints[2 * point], y: arcPoints[2 * point + 1] } },
+			null,
+			outline,
+		);
 	}
 }
 
-/** Whether every cell a box touches has this owner. */
+interface Line {
+	from: { x: number; y: number };
+	to: { x: number; y: number };
+}
+
+/** Gives the cells a line passes through a new owner, all or those of one owner; steps of half a cell. */
+export function paintLine(
+	raster: RegionRaster,
+	{ from, to }: Line,
+	of: number | null,
+	owner: number,
+): void {
+	const [dx, dy] = [to.x - from.x, to.y - from.y];
+	const steps = Math.max(1, Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / raster.cell));
+	for (let step = 0; step <= steps; step++) {
+		const cell = cellAt(raster, from.x + (dx * step) / steps, from.y + (dy * step) / steps);
+		if (cell >= 0 && (of === null || raster.owner[cell] === of)) raster.owner[cell] = owner;
+	}
+}
+
+/** First and last column and row that a box touches; may lie off the grid. */
+function cellsOf({ cell, x, y }: RegionRaster, box: Box): [number, number, number, number] {
+	return [
+		Math.floor((box.x - x) / cell),
+		Math.ceil((box.x + box.width - x) / cell) - 1,
+		Math.floor((box.y - y) / cell),
+		Math.ceil((box.y + box.height - y) / cell) - 1,
+	];
+}
+
+/** Whether every cell a box touches has this owner; never for a box that leaves the grid. */
 export function allOwnedBy(raster: RegionRaster, box: Box, wanted: number): boolean {
-	const { cell, columns, rows, owner } = raster;
-	const left = Math.floor((box.x - raster.x) / cell);
-	const right = Math.ceil((box.x + box.width - raster.x) / cell) - 1;
-	const top = Math.floor((box.y - raster.y) / cell);
-	const bottom = Math.ceil((box.y + box.height - raster.y) / cell) - 1;
+	const { columns, rows, owner } = raster;
+	const [left, right, top, bottom] = cellsOf(raster, box);
 	if (left < 0 || top < 0 || right >= columns || bottom >= rows) return false;
 	for (let row = top; row <= bottom; row++) {
 		for (let i = row * columns + left; i <= row * columns + right; i++) {
@@ -136,13 +168,12 @@ export function allOwnedBy(raster: RegionRaster, box: Box, wanted: number): bool
 	return true;
 }
 
-/** Marks the cells a box touches, so that no other text is put there. */
-export function take(raster: RegionRaster, box: Box): void {
-	const { cell, columns, rows, owner } = raster;
-	const left = Math.max(0, Math.floor((box.x - raster.x) / cell));
-	const right = Math.min(columns, Math.ceil((box.x + box.width - raster.x) / cell));
-	const bottom = Math.min(rows, Math.ceil((box.y + box.height - raster.y) / cell));
-	for (let row = Math.max(0, Math.floor((box.y - raster.y) / cell)); row < bottom; row++) {
-		owner.fill(taken, row * columns + left, row * columns + right);
+/** Gives the cells a box touches a new owner, those of one owner only; the box lies on the grid. */
+export function paint(raster: RegionRaster, box: Box, of: number, owner: number): void {
+	const [left, right, top, bottom] = cellsOf(raster, box);
+	for (let row = top; row <= bottom; row++) {
+		for (let i = row * raster.columns + left; i <= row * raster.columns + right; i++) {
+			if (raster.owner[i] === of) raster.owner[i] = owner;
+		}
 	}
 }
