@@ -33,7 +33,10 @@ export function secondSupplier(districts: readonly District[], seed: number): st
 		polygons: structuredClone(polygons),
 	}));
 	const sites = quietSites(copies);
-	const take = (count: number) => sites.splice(0, count);
+	const take = (count: number) => {
+		if (sites.length < count) throw new Error('Not enough borders to spoil');
+		return sites.splice(0, count);
+	};
 	for (const site of take(4)) shift(site, -25 * metre);
 	for (const site of take(3)) shift(site, 40 * metre);
 	for (const site of take(1)) shift(site, -700 * metre);

@@ -12,11 +12,12 @@ import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
 import { labelSheet } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
+import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
 import { placeOnPaper } from './place-on-paper.ts';
 import { drawScale } from './collar/draw-scale.ts';
-import { smallerSide } from './sizes.ts';
+import { smallerSide } from './smaller-side.ts';
 import { cleanText } from './type/clean-text.ts';
 
 export interface SheetInput {
@@ -84,8 +85,8 @@ export function drawSheet(input: SheetInput): Drawing {
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
-		? labelSheet({ arcs, rings, names, groups, areas: coverage.areasKm2, box: map, scale })
-		: { texts: [], unplaced: names.map((_, region) => region) };
+		? labelSheet({ arcs, rings, sides, names, groups, areas: coverage.areasKm2, box: map, scale })
+		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
@@ -96,9 +97,12 @@ export function drawSheet(input: SheetInput): Drawing {
 		description: '',
 		reader,
 		inks,
-		...arcs,
+		...withLeaders(arcs, labels.leaders),
 		fills,
-		lines: lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+		lines: [
+			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+			...leaderLayer(arcs, labels.leaders, scale),
+		],
 		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
 		rects: [...measured.rects, ...keys.rects],
 		unplaced: labels.unplaced,

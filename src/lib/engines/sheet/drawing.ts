@@ -19,7 +19,10 @@ export interface Drawing {
 	arcStarts: Uint32Array;
 	/** one fill a region, in region order */
 	fills: RegionFill[];
-	/** arcs grouped by rank: 'region', 'group', 'outer', 'weak', 'weak-core', drawn in this order */
+	/**
+	 * arcs grouped by rank, drawn in this order: 'region', 'group', 'outer', 'weak', 'weak-core', and
+	 * 'leader' for lines from a region to its name
+	 */
 	lines: LineLayer[];
 	texts: DrawnText[];
 	/** collar furniture: legend boxes, scale bar */

@@ -1,7 +1,6 @@
-import { bordersForSheet } from './interim.ts';
+import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts';
 import { problemFaults, type ColouringProblem } from '../../engines/colouring/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
-import type { BorderList } from '../../engines/borders/border-list.ts';
 import { Unfit } from './outcomes.ts';
 
 /** The regions and borders a draft is about. */
@@ -35,12 +34,8 @@ export function problemOf(ground: DraftGround, draft: Draft): ColouringProblem {
 
 /** The borders that bind on this sheet: as found, without those struck out, with those added by hand. */
 export function sheetBorders(ground: DraftGround, draft: Draft): BorderList {
-	const number = numbering(ground, draft);
-	return bordersForSheet(ground.borders, {
-		pointTouches: draft.pointTouches,
-		struck: draft.struck.map(({ a, b }) => [number(a), number(b)] as const),
-		added: draft.added.map(({ a, b }) => [number(a), number(b)] as const),
-	});
+	numbering(ground, draft);
+	return bordersForSheet(ground.keys, ground.borders, draft);
 }
 
 function numbering({ ordinal }: DraftGround, draft: Draft): (key: string) => number {

@@ -24,6 +24,7 @@ import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
+import { dropUnused } from './stored-files.ts';
 
 /**
  * Issues the draft of this revision as the sheet's next edition: content, digest and files together, all
@@ -48,8 +49,17 @@ export async function issueEdition(
 			}
 			return issue(shop, trx, member, sheet, note, received);
 		});
-	} finally {
-		for (const file of received) await file.discard();
+	} catch (error) {
+		await forget(shop, received);
+		throw error;
+	}
+}
+
+/** Nothing was issued: files that are already in their place go again, unless another edition has them. */
+async function forget(shop: Workshop, received: Received[]): Promise<void> {
+	for (const file of received) {
+		await file.discard();
+		await shop.db.transaction().execute((trx) => dropUnused(trx, shop.files, file.digest));
 	}
 }
 

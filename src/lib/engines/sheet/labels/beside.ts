@@ -1,5 +1,5 @@
 import type { Pole } from './pole.ts';
-import { allOwnedBy, paper, type RegionRaster } from './region-raster.ts';
+import { allOwnedBy, outline, paper, type RegionRaster } from './region-raster.ts';
 import type { TextBox } from './text-box.ts';
 
 /** Distance of a label from the coast it stands off, in parts of its size. */
@@ -19,13 +19,14 @@ function shore(raster: RegionRaster, region: number, pole: Pole, dx: number, dy:
 	const { cell, columns, rows, owner } = raster;
 	let column = Math.floor((pole.x - raster.x) / cell);
 	let row = Math.floor((pole.y - raster.y) / cell);
+	const isOwn = (cellOwner: number) => cellOwner === region || cellOwner === outline;
 	let steps = 0;
 	while (
 		column >= 0 &&
 		row >= 0 &&
 		column < columns &&
 		row < rows &&
-		(owner[row * columns + column] === region || steps === 0)
+		(isOwn(owner[row * columns + column]) || steps === 0)
 	) {
 		column += dx;
 		row += dy;

@@ -10,8 +10,8 @@ export interface Spot {
 
 /**
  * The place nearest to the pole where a box of `width` by `height` lies wholly in the region, found
- * by looking along every row of cells. Null where there is none. The cells round the box are the
- * region's too, so text keeps a cell's distance from every border.
+ * by looking along every row of cells. Null where there is none. Text keeps half a cell's distance
+ * from every border.
  */
 export function spotInside(
 	raster: RegionRaster,
@@ -23,8 +23,8 @@ export function spotInside(
 ): Spot | null {
 	const { cell, columns, owner, spans } = raster;
 	const [left, right, top, bottom] = spans.subarray(4 * region, 4 * region + 4);
-	// two more than the box itself: one for a box that straddles cells, one for clearance
-	const [wide, high] = [Math.ceil(width / cell) + 2, Math.ceil(height / cell) + 2];
+	// one more than the box itself, for a box that straddles cells
+	const [wide, high] = [Math.ceil(width / cell) + 1, Math.ceil(height / cell) + 1];
 	let best: Spot | null = null;
 	if (right - left + 1 < wide || bottom - top + 1 < high) return null;
 	for (let row = top + high - 1; row <= bottom; row++) {

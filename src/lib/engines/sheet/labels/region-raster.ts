@@ -2,8 +2,8 @@
  * Which region covers which part of the paper, as a grid of cells. Lettering asks it whether a box
  * lies wholly inside a region or wholly on empty paper: one look-up a cell, exact to a cell.
  *
- * Built by even-odd scan lines through cell centres; cells of empty paper that hold a corner of an
- * outline belong to that region too.
+ * Built by even-odd scan lines through cell centres; cells that an outline passes through belong to
+ * nobody, so that no lettering stands on a border, a speck or an inlet.
  */
 import { ringPoints } from '../fills.ts';
 import type { Box } from '../plane/fit.ts';
@@ -12,6 +12,7 @@ import type { SheetArcs } from '../plane/quantise.ts';
 /** Cell values that are no region. */
 export const paper = -1;
 export const taken = -2;
+export const outline = -3;
 
 export interface RegionRaster {
 	/** side of a cell, hundredths of a millimetre */
@@ -21,16 +22,25 @@ export interface RegionRaster {
 	/** upper left corner */
 	x: number;
 	y: number;
-	/** region number, `paper` or `taken`, row by row */
+	/** region number, `paper`, `taken` or `outline`, row by row */
 	owner: Int32Array;
 	/** columns and rows each region spans: left, right, top, bottom; right and bottom included */
 	spans: Int32Array;
 }
 
 /** Most cells in a grid: 4 bytes each, a few milliseconds to read through. */
-const mostCells = 2_000_000;
+const mostCells = 1_000_000;
 
-export function rasterise(arcs: SheetArcs, regions: Int32Array[][], box: Box): RegionRaster {
+/**
+ * In: the rings of every region, and of all arcs those that bound one. Rings of several regions given
+ * as one region melt together, for their common borders cancel.
+ */
+export function rasterise(
+	arcs: SheetArcs,
+	regions: Int32Array[][],
+	box: Box,
+	bounds: (arc: number) => boolean = () => true,
+): RegionRaster {
 	const cell = Math.max(20, Math.ceil(Math.sqrt((box.width * box.height) / mostCells)));
 	const columns = Math.ceil(box.width / cell);
 	const rows = Math.ceil(box.height / cell);
@@ -38,6 +48,9 @@ export function rasterise(arcs: SheetArcs, regions: Int32Array[][], box: Box): R
 	const spans = new Int32Array(4 * regions.length);
 	const raster = { cell, columns, rows, x: box.x, y: box.y, owner, spans };
 	regions.forEach((rings, region) => paintRegion(raster, region, arcs, rings));
+	for (let arc = 0; arc + 1 < arcs.arcStarts.length; arc++) {
+		if (bounds(arc)) markOutline(raster, arcs, arc);
+	}
 	return raster;
 }
 
@@ -87,38 +100,65 @@ function paintRegion(
 		}
 	}
 	spans.set([left, right, top, bottom], 4 * region);
-	claimCorners(raster, region, arcs, rings);
 }
 
-/** Specks and coasts that reach into a cell without its middle keep lettering off it all the same. */
-function claimCorners(
-	raster: RegionRaster,
-	region: number,
-	{ arcPoints, arcStarts }: SheetArcs,
-	rings: Int32Array[],
-): void {
-	const { cell, columns, rows, owner } = raster;
-	for (const ring of rings) {
-		for (const signed of ring) {
-			const arc = signed < 0 ? ~signed : signed;
-			for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++) {
-				const column = Math.floor((arcPoints[2 * point] - raster.x) / cell);
-				const row = Math.floor((arcPoints[2 * point + 1] - raster.y) / cell);
-				if (column < 0 || row < 0 || column >= columns || row >= rows) continue;
-				const i = row * columns + column;
-				if (owner[i] === paper) owner[i] = region;
-			}
-		}
+/** Index of the cell at a place, -1 off the grid. */
+export function cellAt(
+	{ cell, columns, rows, x, y }: RegionRaster,
+	px: number,
+	py: number,
+): number {
+	const [column, row] = [Math.floor((px - x) / cell), Math.floor((py - y) / cell)];
+	return column >= 0 && row >= 0 && column < columns && row < rows ? row * columns + column : -1;
+}
+
+/** Marks every cell an arc passes through. */
+function markOutline(raster: RegionRaster, { arcPoints, arcStarts }: SheetArcs, arc: number): void {
+	for (let point = arcStarts[arc] + 1; point < arcStarts[arc + 1]; point++) {
+		const from = { x: arcPoints[2 * point - 2], y: arcPoints[2 * point - 1] };
+		paintLine(
+			raster,
+			{ from, to: { x: arcPoints[2 * point], y: arcPoints[2 * point + 1] } },
+			null,
+			outline,
+		);
 	}
 }
 
-/** Whether every cell a box touches has this owner. */
+interface Line {
+	from: { x: number; y: number };
+	to: { x: number; y: number };
+}
+
+/** Gives the cells a line passes through a new owner, all or those of one owner; steps of half a cell. */
+export function paintLine(
+	raster: RegionRaster,
+	{ from, to }: Line,
+	of: number | null,
+	owner: number,
+): void {
+	const [dx, dy] = [to.x - from.x, to.y - from.y];
+	const steps = Math.max(1, Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / raster.cell));
+	for (let step = 0; step <= steps; step++) {
+		const cell = cellAt(raster, from.x + (dx * step) / steps, from.y + (dy * step) / steps);
+		if (cell >= 0 && (of === null || raster.owner[cell] === of)) raster.owner[cell] = owner;
+	}
+}
+
+/** First and last column and row that a box touches; may lie off the grid. */
+function cellsOf({ cell, x, y }: RegionRaster, box: Box): [number, number, number, number] {
+	return [
+		Math.floor((box.x - x) / cell),
+		Math.ceil((box.x + box.width - x) / cell) - 1,
+		Math.floor((box.y - y) / cell),
+		Math.ceil((box.y + box.height - y) / cell) - 1,
+	];
+}
+
+/** Whether every cell a box touches has this owner; never for a box that leaves the grid. */
 export function allOwnedBy(raster: RegionRaster, box: Box, wanted: number): boolean {
-	const { cell, columns, rows, owner } = raster;
-	const left = Math.floor((box.x - raster.x) / cell);
-	const right = Math.ceil((box.x + box.width - raster.x) / cell) - 1;
-	const top = Math.floor((box.y - raster.y) / cell);
-	const bottom = Math.ceil((box.y + box.height - raster.y) / cell) - 1;
+	const { columns, rows, owner } = raster;
+	const [left, right, top, bottom] = cellsOf(raster, box);
 	if (left < 0 || top < 0 || right >= columns || bottom >= rows) return false;
 	for (let row = top; row <= bottom; row++) {
 		for (let i = row * columns + left; i <= row * columns + right; i++) {
@@ -128,13 +168,12 @@ export function allOwnedBy(raster: RegionRaster, box: Box, wanted: number): bool
 	return true;
 }
 
-/** Marks the cells a box touches, so that no other text is put there. */
-export function take(raster: RegionRaster, box: Box): void {
-	const { cell, columns, rows, owner } = raster;
-	const left = Math.max(0, Math.floor((box.x - raster.x) / cell));
-	const right = Math.min(columns, Math.ceil((box.x + box.width - raster.x) / cell));
-	const bottom = Math.min(rows, Math.ceil((box.y + box.height - raster.y) / cell));
-	for (let row = Math.max(0, Math.floor((box.y - raster.y) / cell)); row < bottom; row++) {
-		owner.fill(taken, row * columns + left, row * columns + right);
+/** Gives the cells a box touches a new owner, those of one owner only; the box lies on the grid. */
+export function paint(raster: RegionRaster, box: Box, of: number, owner: number): void {
+	const [left, right, top, bottom] = cellsOf(raster, box);
+	for (let row = top; row <= bottom; row++) {
+		for (let i = row * raster.columns + left; i <= row * raster.columns + right; i++) {
+			if (raster.owner[i] === of) raster.owner[i] = owner;
+		}
 	}
 }

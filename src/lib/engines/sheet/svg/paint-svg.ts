@@ -29,6 +29,7 @@ const lineNames: Record<string, string> = {
 	outer: 'borders-outer',
 	weak: 'weak',
 	'weak-core': 'weak-core',
+	leader: 'leaders',
 };
 
 /**
