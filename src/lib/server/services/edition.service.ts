@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
-import { checkColouring, type Proof } from '../../engines/colouring/index.ts';
+import type { Proof } from '../../engines/colouring/index.ts';
 import { digestOf, editionContent, type EditionContent } from '../../engines/editions/index.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
@@ -73,7 +73,7 @@ async function issue(
 ): Promise<{ number: number; digest: string }> {
 	const draft = await draftOf(trx, sheet.id, sheet.revision);
 	const view = await boundaryView(trx, sheet.boundary_set_id);
-	const inks = checkedInks(view, draft);
+	const inks = await checkedInks(shop, view, draft);
 	const content = await contentOf(trx, view, draft, inks);
 	const digest = await digestOf(content);
 	const number = await nextEditionNumber(trx, sheet.id);
@@ -105,7 +105,11 @@ async function issue(
 }
 
 /** The draft's colouring, looked over by the checker once more. */
-function checkedInks(view: BoundaryView, draft: DraftRow): number[] {
+async function checkedInks(
+	shop: Workshop,
+	view: BoundaryView,
+	draft: DraftRow,
+): Promise<number[]> {
 	const { inks, inks_used: inksUsed, lower_bound: lowerBound } = draft;
 	if (!inks || inksUsed === null || lowerBound === null) {
 		throw new Conflict('not-coloured', 'Only a coloured draft can be issued.');
@@ -116,12 +120,13 @@ function checkedInks(view: BoundaryView, draft: DraftRow): number[] {
 		const lacks = `The colouring uses ${inksUsed} inks and the palette has ${has}.`;
 		throw new Conflict('palette-too-short', lacks);
 	}
-	const faults = checkColouring(problemOf(view, document), {
+	const result = {
 		status: 'coloured',
 		colouring: Int32Array.from(inks),
 		proof: draft.proof as unknown as Proof,
 		...{ inksUsed, lowerBound },
-	});
+	} as const;
+	const faults = await shop.pool.run('recheck', { problem: problemOf(view, document), result });
 	if (faults.length > 0) throw new CheckFailed(faults.join(' '));
 	return inks;
 }
