@@ -24,6 +24,15 @@ export class Visitor {
 		return this.ask(address, { method: 'POST', headers, body: new URLSearchParams(fields) });
 	}
 
+	/** The same as the page's script sends it: the answer tells what the action alone came to. */
+	postByScript(address: string, fields: Record<string, string>): Promise<Response> {
+		const headers = {
+			...{ origin: this.origin, accept: 'application/json', 'x-sveltekit-action': 'true' },
+			'content-type': 'application/x-www-form-urlencoded',
+		};
+		return this.ask(address, { method: 'POST', headers, body: new URLSearchParams(fields) });
+	}
+
 	/** Follows redirects, other servers' included, to where they end. */
 	async follow(response: Response): Promise<Response> {
 		const next = response.headers.get('location');

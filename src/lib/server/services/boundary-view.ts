@@ -1,8 +1,4 @@
-import {
-	borderKinds,
-	type BorderKind,
-	type BorderList,
-} from '../../engines/borders/border-list.ts';
+import { borderKinds, type BorderKind, type BorderList } from '../../engines/borders/border-list.ts';
 import type { Db } from '../database/connection.ts';
 import {
 	findBoundarySet,

@@ -11,10 +11,15 @@ export interface DraftGround {
 }
 
 /**
- * What the colouring engine is asked for by a draft, regions named by number instead of by key.
+ * What the colouring engine is asked for by a draft, regions named by number instead of by key; with a
+ * colouring before, as few regions as can be change their ink.
  * Throws `Unfit` when the draft names a region the boundary set does not have, or a rule that cannot be.
  */
-export function problemOf(ground: DraftGround, draft: Draft): ColouringProblem {
+export function problemOf(
+	ground: DraftGround,
+	draft: Draft,
+	previous: ArrayLike<number> | null = null,
+): ColouringProblem {
 	const number = numbering(ground, draft);
 	const pair = ([a, b]: readonly [string, string]) => [number(a), number(b)] as const;
 	const problem: ColouringProblem = {
@@ -26,6 +31,7 @@ export function problemOf(ground: DraftGround, draft: Draft): ColouringProblem {
 		alike: draft.alike.map(pair),
 		apart: draft.apart.map(pair),
 		seed: draft.seed,
+		...(previous ? { previous: Int32Array.from(previous), goal: 'fewest-changes' } : {}),
 	};
 	const faults = problemFaults(problem);
 	if (faults.length > 0) throw new Unfit('unfit-rules', faults[0], { faults: faults.slice(0, 20) });

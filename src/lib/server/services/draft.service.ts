@@ -22,13 +22,13 @@ import {
 	checkedOutcome,
 	deskColouring,
 	deskOutcome,
+	type Names,
 	type Outcome,
 } from './outcome-of-colouring.ts';
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
-export type SaveResult =
-	{ status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
+export type SaveResult = { status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
 
 /** A sheet of this team, or `NotFound`. */
 export async function sheetOf(db: Db, member: Member, number: number): Promise<SheetRecord> {
@@ -71,19 +71,19 @@ export async function saveDraft(
 	for (const right of rightsFor(parts)) requireAccess(member, right);
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
 	if (parts.length === 0) return { status: 'saved', saved: savedNote(view, current) };
-	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after) : null;
+	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after, current.inks) : null;
 	return store(shop, member, { sheet, view, current, after, outcome, parts });
 }
 
-/** Colours a draft in a thread and has the result checked. */
+/** Colours a draft in a thread, as near as can be to the colouring before, and has the result checked. */
 export async function colourDraft(
 	shop: Pick<Workshop, 'pool'>,
 	view: BoundaryView,
 	draft: Draft,
+	previous: number[] | null,
 ): Promise<Outcome> {
-	const problem = problemOf(view, draft);
-	const { result } = await shop.pool.run('colourGraph', problem);
-	return checkedOutcome(problem, result);
+	const problem = problemOf(view, draft, previous);
+	return checkedOutcome(await shop.pool.run('colourGraph', problem));
 }
 
 interface Change {
@@ -115,7 +115,9 @@ const store = (shop: Workshop, member: Member, change: Change): Promise<SaveResu
 		});
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'draft.saved', subject, { sheet: sheet.number, revision, parts });
-		const colouring = outcome ? deskOutcome(view.names, outcome) : standingColouring(view, current);
+		const colouring = outcome
+			? deskOutcome(namesIn(view, after), outcome)
+			: standingColouring(view, current);
 		return {
 			status: 'saved',
 			saved: { revision, savedAt: savedAt.toISOString(), document: after, colouring },
@@ -139,9 +141,15 @@ async function keep(
 	return same ? current.colouring_id : insertColouring(trx, sheetId, colouring);
 }
 
+/** What numbers stand for in this draft's sentences. */
+export const namesIn = (view: BoundaryView, draft: Draft): Names => ({
+	regions: view.names,
+	inks: draft.palette.inks,
+});
+
 /** What a stored draft is coloured with, or why not: one of the two was stored with it. */
 function standingColouring(view: BoundaryView, draft: DraftRow): DeskColouring {
-	const colouring = deskColouring(view.names, draft);
+	const colouring = deskColouring(namesIn(view, documentOf(draft)), draft);
 	if (!colouring) throw new Error(`draft ${draft.revision} has neither colouring nor explanation`);
 	return colouring;
 }
@@ -174,7 +182,7 @@ export async function readDraft(
 	return {
 		...staleNote(draft),
 		document: draftDocument.parse(documentOf(draft)),
-		colouring: deskColouring(view.names, draft),
+		colouring: standingColouring(view, draft),
 	};
 }
 

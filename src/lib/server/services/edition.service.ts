@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
-import { checkColouring, type Proof } from '../../engines/colouring/index.ts';
+import type { Proof } from '../../engines/colouring/index.ts';
 import { digestOf, editionContent, type EditionContent } from '../../engines/editions/index.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
@@ -45,10 +45,7 @@ export async function issueEdition(
 			const sheet = await holdSheet(trx, member.team.id, number);
 			if (!sheet) throw new NotFound('sheet');
 			if (sheet.revision !== revision) {
-				throw new Conflict(
-					'stale',
-					'The draft has been saved again since; look at it before you issue.',
-				);
+				throw new Conflict('stale', 'The draft has been saved again since; look at it before you issue.');
 			}
 			return issue(shop, trx, member, sheet, note, received);
 		});
@@ -76,7 +73,7 @@ async function issue(
 ): Promise<{ number: number; digest: string }> {
 	const draft = await draftOf(trx, sheet.id, sheet.revision);
 	const view = await boundaryView(trx, sheet.boundary_set_id);
-	const inks = checkedInks(view, draft);
+	const inks = await checkedInks(shop, view, draft);
 	const content = await contentOf(trx, view, draft, inks);
 	const digest = await digestOf(content);
 	const number = await nextEditionNumber(trx, sheet.id);
@@ -87,8 +84,7 @@ async function issue(
 	const stem = `${fileStem(sheet.name)}-edition-${number}`;
 	const kept = await keepFiles(shop, trx, files, stem, received);
 	const stored = JSON.stringify(content);
-	if ((await digestOf(JSON.parse(stored))) !== digest)
-		throw new CheckFailed('the digest does not hold');
+	if ((await digestOf(JSON.parse(stored))) !== digest) throw new CheckFailed('the digest does not hold');
 	await insertEdition(
 		trx,
 		{
@@ -109,7 +105,11 @@ async function issue(
 }
 
 /** The draft's colouring, looked over by the checker once more. */
-function checkedInks(view: BoundaryView, draft: DraftRow): number[] {
+async function checkedInks(
+	shop: Workshop,
+	view: BoundaryView,
+	draft: DraftRow,
+): Promise<number[]> {
 	const { inks, inks_used: inksUsed, lower_bound: lowerBound } = draft;
 	if (!inks || inksUsed === null || lowerBound === null) {
 		throw new Conflict('not-coloured', 'Only a coloured draft can be issued.');
@@ -120,12 +120,13 @@ function checkedInks(view: BoundaryView, draft: DraftRow): number[] {
 		const lacks = `The colouring uses ${inksUsed} inks and the palette has ${has}.`;
 		throw new Conflict('palette-too-short', lacks);
 	}
-	const faults = checkColouring(problemOf(view, document), {
+	const result = {
 		status: 'coloured',
 		colouring: Int32Array.from(inks),
 		proof: draft.proof as unknown as Proof,
 		...{ inksUsed, lowerBound },
-	});
+	} as const;
+	const faults = await shop.pool.run('recheck', { problem: problemOf(view, document), result });
 	if (faults.length > 0) throw new CheckFailed(faults.join(' '));
 	return inks;
 }
@@ -145,10 +146,7 @@ async function contentOf(
 		proof: proofByKey(view, draft.proof as unknown as Proof),
 	});
 	if (outcome.status === 'complete') return outcome.content;
-	throw new Conflict(
-		outcome.reason,
-		'Only a draft in which every region is coloured can be issued.',
-	);
+	throw new Conflict(outcome.reason, 'Only a draft in which every region is coloured can be issued.');
 }
 
 const proofByKey = ({ keys }: BoundaryView, proof: Proof) => ({

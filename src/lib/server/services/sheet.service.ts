@@ -1,10 +1,4 @@
-import type {
-	DeskEdition,
-	DeskFinding,
-	DeskSheet,
-	SheetRow,
-	SourceNote,
-} from '../../schemas/desk.ts';
+import type { DeskEdition, DeskFinding, DeskSheet, SheetRow, SourceNote } from '../../schemas/desk.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
@@ -17,15 +11,10 @@ import {
 	readGeometry,
 } from '../repositories/boundaries.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
-import {
-	deleteSheet,
-	holdSheet,
-	listSheets,
-	renameSheet,
-} from '../repositories/sheets.repository.ts';
+import { deleteSheet, holdSheet, listSheets, renameSheet } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
-import { documentOf, draftOf, sheetOf } from './draft.service.ts';
+import { documentOf, draftOf, namesIn, sheetOf } from './draft.service.ts';
 import { deskColouring } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
@@ -66,7 +55,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		savedAt: draft.saved_at.toISOString(),
 		boundarySet: boundarySetNote(view),
 		draft: document,
-		colouring: deskColouring(view.names, draft),
+		colouring: deskColouring(namesIn(view, document), draft),
 		regions: {
 			key: view.keys,
 			name: view.names,
@@ -181,11 +170,7 @@ export async function nameSheet(
 	await shop.db.transaction().execute(async (trx) => {
 		await renameSheet(trx, sheet.id, name);
 		const subject = { kind: 'sheet', id: sheet.id };
-		await record(trx, member, 'sheet.renamed', subject, {
-			sheet: number,
-			from: sheet.name,
-			to: name,
-		});
+		await record(trx, member, 'sheet.renamed', subject, { sheet: number, from: sheet.name, to: name });
 	});
 }
 
