@@ -194,8 +194,7 @@ export class DraftState {
 
 	#keep(document: Draft) {
 		const { keeper, sheetId } = this.#start;
-		const plain = { revision: this.#revision, base: this.#base, document };
-		keeper?.keep(sheetId, { ...plain, keptAt: new Date().toISOString() }).then(
+		keeper?.keep(sheetId, { revision: this.#revision, base: this.#base, document }).then(
 			() => (this.kept = true),
 			() => (this.kept = false),
 		);

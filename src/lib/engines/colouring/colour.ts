@@ -6,6 +6,7 @@ import { effortOf } from './effort.ts';
 import { explain } from './explain.ts';
 import { problemFaults } from './faults.ts';
 import { fewestInks, type FewestOutcome } from './fewest.ts';
+import { towardsGoal } from './goal.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
@@ -79,12 +80,21 @@ function coloured(
 	bound: Bound,
 	outcome: FewestOutcome,
 ): ColouringResult {
-	const colouring = byRegion(prepared, outcome.ink);
+	const { ink, changes, objective } = towardsGoal(problem, prepared, outcome.ink, outcome.inks);
+	const colouring = byRegion(prepared, ink);
 	const used = colouring.reduce((most, c) => Math.max(most, c + 1), 0);
 	const inksUsed = problem.inks === 'fewest' ? outcome.inks : used;
 	const proof = certify(problem, prepared, bound, inksUsed);
 	const lowerBound = proof.kind === 'not-proved' ? outcome.lowerBound : inksUsed;
-	return { status: 'coloured', inksUsed, colouring, lowerBound, proof };
+	return {
+		status: 'coloured',
+		inksUsed,
+		colouring,
+		lowerBound,
+		proof,
+		...(changes && { changes }),
+		...(objective !== undefined && { objective }),
+	};
 }
 
 function undecided(problem: ColouringProblem, lowerBound: number): ColouringResult {
