@@ -40,10 +40,15 @@ const engineBlocks = engineOrder.map((engine, place) => ({
 			{
 				patterns: [
 					{ group: [...framework, ...sql, ...node], message: 'Engines are pure: values in, values out.' },
-					{
-						group: engineOrder.slice(place + 1).map((later) => `**/${later}/**`),
-						message: `The ${engine} engine may import only the engines before it.`,
-					},
+					// the last engine may import all others, and an empty group is refused
+					...(place + 1 < engineOrder.length
+						? [
+								{
+									group: engineOrder.slice(place + 1).map((later) => `**/${later}/**`),
+									message: `The ${engine} engine may import only the engines before it.`,
+								},
+							]
+						: []),
 					{
 						group: ['**/server/**', '**/components/**', '**/state/**', '**/routes/**', '**/ops/**'],
 						message: 'Engines import engines only.',

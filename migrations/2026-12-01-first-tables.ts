@@ -9,7 +9,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 		create table "User" (
 			id uuid primary key default gen_random_uuid(),
 			name text,
-			email text not null unique,
+			email text not null unique check (email = lower(email)),
 			"emailVerified" timestamptz,
 			image text
 		);
@@ -67,7 +67,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 		create table invitations (
 			id uuid primary key default gen_random_uuid(),
 			team_id uuid not null references teams on delete cascade,
-			email text not null,
+			email text not null check (email = lower(email)),
 			roles text[] not null check (cardinality(roles) > 0),
 			token_hash bytea not null unique,
 			invited_by uuid references "User" on delete set null,

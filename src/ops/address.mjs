@@ -18,7 +18,8 @@ export async function chooseAddress(wanted = {}) {
 	const port = await choosePort(wanted.port ?? Number(process.env.PORT || 0), host);
 	const name = ['0.0.0.0', '::', '127.0.0.1', '::1'].includes(host) ? 'localhost' : host;
 	const origin = wanted.origin ?? (process.env.ORIGIN || `http://${name}:${port}`);
-	if (!URL.canParse(origin)) throw new Explained(`ORIGIN must be an address like http://host:port.`);
+	if (!URL.canParse(origin))
+		throw new Explained(`ORIGIN must be an address like http://host:port.`);
 	return { host, port, origin: new URL(origin).origin };
 }
 

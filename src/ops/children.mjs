@@ -1,105 +1,76 @@
 import { spawn } from 'node:child_process';
-import { mkdirSync, openSync, readFileSync, closeSync } from 'node:fs';
-import path from 'node:path';
-import { pathToFileURL } from 'node:url';
 import { root } from './files.mjs';
-import { Explained, say } from './say.mjs';
-
-/** How often a child may end by itself within a minute before the whole product is given up. */
-const RESTARTS = 4;
+import { Explained } from './say.mjs';
 
 /**
- * The processes of one product, each with a log file, started again when one ends unasked.
- * `failure` rejects when one keeps ending.
+ * What has to be ended when this process ends, the latest first.
+ * @typedef {() => void | Promise<void>} End
+ * @type {Set<End>}
  */
-export class Children {
-	/** @type {Map<string, import('node:child_process').ChildProcess>} */
-	#running = new Map();
-	/** @type {Map<string, number[]>} */
-	#ends = new Map();
-	#closing = false;
-	/** @type {(reason: Error) => void} */
-	#giveUp = () => {};
-	/** @type {Promise<never>} */
-	failure = new Promise((_, reject) => (this.#giveUp = reject));
+const ends = new Set();
+/** Set once, so that two signals end everything once. @type {Promise<void> | null} */
+let ending = null;
 
-	/** @param {string} logDirectory */
-	constructor(logDirectory) {
-		this.logDirectory = logDirectory;
-		mkdirSync(logDirectory, { recursive: true, mode: 0o700 });
-		this.failure.catch(() => {});
-	}
-
-	/**
-	 * @param {string} name
-	 * @param {string[]} args what follows `node` on the command line
-	 * @param {NodeJS.ProcessEnv} env
-	 */
-	start(name, args, env) {
-		const log = openSync(this.#logFile(name), 'a', 0o600);
-		const leash = pathToFileURL(path.join(root, 'src/ops/leash.mjs')).href;
-		const child = spawn(process.execPath, ['--import', leash, ...args], {
-			cwd: root,
-			env,
-			detached: true,
-			stdio: ['ignore', log, log, 'ipc'],
-		});
-		closeSync(log);
-		this.#running.set(name, child);
-		child.once('exit', (code, signal) => {
-			this.#running.delete(name);
-			if (!this.#closing) this.#again(name, args, env, `${signal ?? `status ${code}`}`);
-		});
-	}
-
-	/** @param {string} name @param {string[]} args @param {NodeJS.ProcessEnv} env @param {string} how */
-	#again(name, args, env, how) {
-		const minuteAgo = Date.now() - 60_000;
-		const ends = (this.#ends.get(name) ?? []).filter((at) => at > minuteAgo).concat(Date.now());
-		this.#ends.set(name, ends);
-		if (ends.length > RESTARTS) {
-			this.#giveUp(new Explained(`The ${name} keeps ending (${how}).\n${this.lastLines(name)}`));
-			return;
-		}
-		say(`The ${name} ended (${how}); starting it again.`);
-		setTimeout(() => !this.#closing && this.start(name, args, env), 250 * ends.length);
-	}
-
-	/** Ends all of them, with force after ten seconds. */
-	async stop() {
-		this.#closing = true;
-		await Promise.all([...this.#running.values()].map(endChild));
-	}
-
-	/** @param {string} name */
-	#logFile(name) {
-		return path.join(this.logDirectory, `${name}.log`);
-	}
-
-	/** @param {string} name */
-	lastLines(name, count = 20) {
-		return readFileSync(this.#logFile(name), 'utf8').trimEnd().split('\n').slice(-count).join('\n');
-	}
+/**
+ * Registers something to be ended.
+ * @param {End} end
+ * @returns {() => Promise<void>} ends it now instead
+ */
+export function atEnd(end) {
+	ends.add(end);
+	return async () => {
+		if (ends.delete(end)) await end();
+	};
 }
 
-/** @param {import('node:child_process').ChildProcess} child */
-function endChild(child) {
-	if (child.exitCode !== null || child.signalCode !== null) return Promise.resolve();
-	const ended = new Promise((resolve) => child.once('exit', resolve));
-	signalGroup(child, 'SIGTERM');
-	const force = setTimeout(() => signalGroup(child, 'SIGKILL'), 10_000);
-	return ended.finally(() => clearTimeout(force));
+/** Ends whatever was registered and still runs, the latest first. */
+export function endChildren() {
+	ending ??= (async () => {
+		for (const end of [...ends].reverse()) await end();
+	})();
+	return ending;
+}
+
+/** Whether the end has begun: what fails from here on fails because of it. */
+export const isEnding = () => ending !== null;
+
+/** Ctrl-C, a closed terminal or a plain kill end everything that was started. */
+export function exitOnSignals(status = 0) {
+	for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
+		process.on(signal, () => void endChildren().then(() => process.exit(status)));
+	}
 }
 
 /**
- * Each child leads a group of its own, so that what it started ends with it.
- * @param {import('node:child_process').ChildProcess} child @param {NodeJS.Signals} signal
+ * Runs a command to its end, its output shown.
+ * @param {string} command @param {string[]} args
+ * @param {NodeJS.ProcessEnv} [extra] added to this process's environment
+ * @returns {Promise<number>} its exit status
  */
-function signalGroup(child, signal) {
-	if (child.pid === undefined) return;
-	try {
-		process.kill(-child.pid, signal);
-	} catch (error) {
-		if (/** @type {NodeJS.ErrnoException} */ (error).code !== 'ESRCH') throw error;
-	}
+export function run(command, args, extra = {}) {
+	return new Promise((resolve, reject) => {
+		const env = { ...process.env, ...extra };
+		const child = spawn(command, args, { cwd: root, env, stdio: ['ignore', 'inherit', 'inherit'] });
+		const end = () => void child.kill('SIGTERM');
+		ends.add(end);
+		child.once('error', (error) =>
+			reject(new Explained(`${command} could not be started: ${error.message}`)),
+		);
+		child.once('exit', (status) => {
+			ends.delete(end);
+			resolve(status ?? 1);
+		});
+	});
 }
+
+/**
+ * Runs a command that has to succeed.
+ * @param {string} command @param {string[]} args @param {NodeJS.ProcessEnv} [extra]
+ */
+export async function mustRun(command, args, extra) {
+	const status = await run(command, args, extra);
+	if (status !== 0) throw new Explained(`"${command} ${args.join(' ')}" failed, see above.`);
+}
+
+/** @param {string[]} args @param {NodeJS.ProcessEnv} [extra] */
+export const runNode = (args, extra) => mustRun(process.execPath, args, extra);

@@ -1,15 +1,15 @@
 import { spawnSync } from 'node:child_process';
-import { existsSync, mkdirSync, readFileSync, readdirSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, readdirSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import { executable, installPostgres } from './install.mjs';
+import { aptInstall, executable } from './debian.mjs';
 import { Explained } from './say.mjs';
 
 /**
  * Finds the server's programs, installing Debian's package where there are none.
  * @param {string | null} major the version that made the cluster, which alone can open it
- * @returns {Promise<string>} the folder with initdb, pg_ctl and psql
+ * @returns {string} the folder with initdb, pg_ctl and psql
  */
-export async function postgresPrograms(major) {
+export function postgresPrograms(major) {
 	const found = findPrograms(major);
 	if (found) return found;
 	if (major && findPrograms(null)) {
@@ -18,10 +18,20 @@ export async function postgresPrograms(major) {
 				`Install postgresql-${major}, or set MERESTONE_DATA to a new folder to begin afresh.`,
 		);
 	}
-	await installPostgres();
+	installPostgres();
 	const installed = findPrograms(major);
 	if (!installed) throw new Explained('PostgreSQL was installed but its programs cannot be found.');
 	return installed;
+}
+
+/** Debian starts a cluster of its own with the package unless told not to; this product brings its own. */
+function installPostgres() {
+	const settings = '/etc/postgresql-common/createcluster.conf';
+	if (process.getuid?.() === 0 && !existsSync(settings)) {
+		mkdirSync(path.dirname(settings), { recursive: true });
+		writeFileSync(settings, 'create_main_cluster = false\n');
+	}
+	aptInstall(['postgresql'], 'PostgreSQL');
 }
 
 /** @param {string | null} major */

@@ -1,13 +1,13 @@
 import path from 'node:path';
 import { chooseAddress, localUrl } from './address.mjs';
-import { Children } from './children.mjs';
+import { atEnd, runNode } from './children.mjs';
 import { prepareDataDirectory } from './files.mjs';
 import { waitForHealth } from './health.mjs';
 import { answers, freePort } from './ports.mjs';
 import { Explained, timed } from './say.mjs';
 import { keptSecrets } from './secrets.mjs';
 import { isBuilt } from './sources.mjs';
-import { runNode } from './steps.mjs';
+import { Supervised } from './supervised.mjs';
 
 /** Room for the largest boundary file and the form around it; smaller limits stand per route. */
 const LARGEST_BODY = '1100M';
@@ -16,12 +16,11 @@ const LARGEST_BODY = '1100M';
  * Migrates, seeds the demo team, builds when sources changed, starts web and worker (and the mail catcher
  * in demo mode) and waits until all are healthy. Whatever was started is ended when any of it fails.
  * @param {{databaseUrl: string, dataDir: string, port?: number, host?: string, origin?: string,
- *   dev?: boolean, env?: Record<string, string>, onStart?: (stop: () => Promise<void>) => void}} options
- *   onStart is told how to end the children as soon as there may be any
- * @returns {Promise<{url: string, stop: () => Promise<void>, failure: Promise<never>}>}
+ *   dev?: boolean, env?: Record<string, string>}} options
+ * @returns {Promise<{url: string, dataDir: string, stop: () => Promise<void>, failure: Promise<never>}>}
  */
 export async function startProduct(options) {
-	const { databaseUrl, dataDir, dev = false, env: extra = {}, onStart, ...wanted } = options;
+	const { databaseUrl, dataDir, dev = false, env: extra = {}, ...wanted } = options;
 	prepareDataDirectory(dataDir);
 	const address = await chooseAddress(wanted);
 	const env = { ...(await environment(databaseUrl, dataDir, address, dev)), ...extra };
@@ -31,16 +30,16 @@ export async function startProduct(options) {
 	}
 	if (dev) await runNode(['node_modules/@sveltejs/kit/svelte-kit.js', 'sync'], env);
 	else if (!isBuilt()) await timed('Building', () => runScript('src/ops/build.ts', env));
-	const children = new Children(path.join(dataDir, 'logs'));
-	onStart?.(() => children.stop());
+	const children = new Supervised(path.join(dataDir, 'logs'));
+	const stop = atEnd(() => children.stop());
 	try {
 		await startChildren(children, env, address, dev);
 		await Promise.race([waitForHealth(localUrl(address), 120_000), children.failure]);
 	} catch (error) {
-		await children.stop();
+		await stop();
 		throw error;
 	}
-	return { url: address.origin, stop: () => children.stop(), failure: children.failure };
+	return { url: address.origin, dataDir, stop, failure: children.failure };
 }
 
 /**
@@ -62,13 +61,14 @@ async function environment(databaseUrl, dataDir, address, dev) {
 		HOST: address.host,
 		PORT: String(address.port),
 		ORIGIN: address.origin,
+		AUTH_URL: address.origin,
 		BODY_SIZE_LIMIT: process.env.BODY_SIZE_LIMIT || LARGEST_BODY,
 		SHUTDOWN_TIMEOUT: process.env.SHUTDOWN_TIMEOUT || '3',
 	};
 }
 
 /**
- * @param {Children} children @param {NodeJS.ProcessEnv} env
+ * @param {Supervised} children @param {NodeJS.ProcessEnv} env
  * @param {import('./address.mjs').Address} address @param {boolean} dev
  */
 async function startChildren(children, env, address, dev) {

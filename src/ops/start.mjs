@@ -1,31 +1,25 @@
 import path from 'node:path';
+import { atEnd, endChildren, exitOnSignals, isEnding } from './children.mjs';
 import { dataDirectory, prepareDataDirectory, readJson } from './files.mjs';
 import { ensureDependencies } from './install.mjs';
 import { startPostgres } from './postgres.mjs';
 import { startProduct } from './product.mjs';
 import { Explained, say, timed } from './say.mjs';
 import { claim } from './start-lock.mjs';
-import { endRunning } from './steps.mjs';
 
 /**
  * `npm start`, and with --dev `npm run dev`: from whatever is there to a product that answers, in the order
  * packages, database, web and worker. Ctrl-C, or a failure of any of them, ends all of it.
  */
 
-/** What has been started so far, ended in the opposite order. @type {(() => void | Promise<void>)[]} */
-const started = [];
-let ending = false;
-
 async function main() {
 	const dataDir = dataDirectory();
 	prepareDataDirectory(dataDir);
-	started.push(claim(dataDir));
+	atEnd(claim(dataDir));
 	await ensureDependencies();
 	const databaseUrl = process.env.DATABASE_URL || (await ownDatabase(dataDir));
 	const dev = process.argv.includes('--dev');
-	const onStart = (/** @type {() => Promise<void>} */ stop) => void started.push(stop);
-	const product = await startProduct({ databaseUrl, dataDir, dev, onStart });
-	if (ending) return;
+	const product = await startProduct({ databaseUrl, dataDir, dev });
 	greet(product.url, dataDir);
 	await product.failure;
 }
@@ -33,7 +27,6 @@ async function main() {
 /** @param {string} dataDir */
 async function ownDatabase(dataDir) {
 	const database = await timed('Starting PostgreSQL', () => startPostgres(dataDir));
-	started.push(database.stop);
 	return database.url;
 }
 
@@ -51,20 +44,10 @@ function greet(url, dataDir) {
 	say(`Logs: ${path.join(dataDir, 'logs')}. Stop with Ctrl-C.`);
 }
 
-/** @param {number} status */
-async function end(status) {
-	if (ending) return;
-	ending = true;
-	endRunning();
-	for (const stop of started.reverse()) await stop();
-	process.exit(status);
-}
-
-for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
-	process.on(signal, () => void end(0));
-}
-
+exitOnSignals();
 main().catch(async (error) => {
-	if (!ending) process.stderr.write(`\n${error instanceof Explained ? error.message : error.stack}\n`);
-	await end(1);
+	if (isEnding()) return;
+	process.stderr.write(`\n${error instanceof Explained ? error.message : error.stack}\n`);
+	await endChildren();
+	process.exit(1);
 });

@@ -37,9 +37,19 @@ export interface DeskBoundarySet {
 	/** about the graph of the line borders */
 	planar: boolean;
 	/** why not, when it is not */
-	planarWitness: { regions: number[]; sentence: string } | null;
+	planarWitness: PlanarWitness | null;
 	source: SourceNote;
 	columns: string[];
+}
+
+/** Regions that no plane drawing can join as their borders do: `paths` run from hub to hub. */
+export interface PlanarWitness {
+	kind: 'K5' | 'K3,3';
+	hubs: number[];
+	paths: number[][];
+	/** every region on it */
+	regions: number[];
+	sentence: string;
 }
 
 /** How the file was understood. */
@@ -97,6 +107,8 @@ export interface DeskEdition {
 export interface DraftSaved {
 	revision: number;
 	savedAt: string;
+	/** as stored: new locks carry who set them and when */
+	document: Draft;
 	colouring: DeskColouring;
 }
 

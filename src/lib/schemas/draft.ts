@@ -28,10 +28,7 @@ const millimetres = z.number().min(40).max(5_000);
 export const sheetLayout = z.strictObject({
 	title: z.string().max(200),
 	subtitle: z.string().max(300),
-	paper: z.union([
-		z.enum(papers),
-		z.strictObject({ widthMm: millimetres, heightMm: millimetres }),
-	]),
+	paper: z.union([z.enum(papers), z.strictObject({ widthMm: millimetres, heightMm: millimetres })]),
 	orientation: z.enum(['landscape', 'portrait']),
 	marginMm: z.number().min(0).max(200),
 	projection: z.enum([

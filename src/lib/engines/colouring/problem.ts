@@ -33,13 +33,7 @@ export interface ColouringProblem {
 }
 
 export type ProofKind =
-	| 'none-needed'
-	| 'edge'
-	| 'odd-cycle'
-	| 'clique'
-	| 'odd-wheel'
-	| 'refutation'
-	| 'not-proved';
+	'none-needed' | 'edge' | 'odd-cycle' | 'clique' | 'odd-wheel' | 'refutation' | 'not-proved';
 
 /**
  * Why no fewer inks do. `regions`: a clique in any order; an odd cycle in ring order; an odd wheel hub

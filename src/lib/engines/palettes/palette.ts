@@ -1,3 +1,7 @@
+import type { Reader } from '../colour/reader.ts';
+
+export { readers, type Reader } from '../colour/reader.ts';
+
 export interface Ink {
 	name: string;
 	/** sRGB, `#rrggbb`, lower case */
@@ -14,9 +18,18 @@ export interface Palette {
 	licence?: string;
 }
 
-/** The kinds of eyesight a sheet is checked for. */
-export const readers = ['typical', 'protan', 'deutan', 'tritan', 'grey'] as const;
-export type Reader = (typeof readers)[number];
+/** What is asked of two inks that touch, and of a label on its ink. */
+export interface Thresholds {
+	/** least CIEDE2000 for every reader but grey print, 0 to 100 */
+	ciede2000: number;
+	/** least difference in L* for grey print, 0 to 100 */
+	grey: number;
+	/** least WCAG contrast of the label ink, 1 to 21 */
+	label: number;
+}
+
+/** Pairs of ink numbers that touch on the sheet, in any order, or every pair. */
+export type Touching = readonly (readonly [number, number])[] | 'all';
 
 export interface PairVerdict {
 	/** ink numbers, a < b */

@@ -1,3 +1,5 @@
+import type { Ink, Reader } from '../palettes/palette.ts';
+
 /**
  * One description of a drawn sheet, read by every painter (SVG, canvas, PDF). Lengths are whole
  * hundredths of a millimetre from the top left corner of the paper, x to the right, y down.
@@ -7,28 +9,45 @@ export interface Drawing {
 	heightMm: number;
 	title: string;
 	description: string;
+	/** whose eyesight the colours are shown for */
+	reader: Reader;
+	/** the whole palette, in the order of ink numbers; `shown` is the colour as the reader sees it */
+	inks: DrawnInk[];
 	/** projected arcs: x, y interleaved; quantised once for all painters */
 	arcPoints: Int32Array;
+	/** arcs + 1; an arc of one point has shrunk to nothing and is in no ring and no line */
 	arcStarts: Uint32Array;
 	/** one fill a region, in region order */
 	fills: RegionFill[];
-	/** arcs grouped by rank: 'outer' | 'group' | 'region' | 'weak' ... drawn in this order */
+	/**
+	 * arcs grouped by rank, drawn in this order: 'region', 'group', 'outer', 'weak', 'weak-core', and
+	 * 'leader' for lines from a region to its name
+	 */
 	lines: LineLayer[];
 	texts: DrawnText[];
-	/** collar furniture: legend boxes, scale bar, frame */
+	/** collar furniture: legend boxes, scale bar */
 	rects: DrawnRect[];
 	/** labels that did not fit and are listed instead */
 	unplaced: number[];
 	/** longer sentences about the drawing: projection, scale, how true the bar is */
 	notes: { projection: string; scale: string };
+	/** where the legend stands, so that it can be set anew when the inks in use change */
+	legend: LegendPlace | null;
+}
+
+export interface DrawnInk extends Ink {
+	shown: string;
 }
 
 export interface RegionFill {
 	region: number;
 	key: string;
 	name: string;
+	/** ink number from 0, -1 while nothing is coloured */
 	ink: number;
+	/** the colour as the drawing's reader sees it */
 	hex: string;
+	locked?: boolean;
 	/** signed arcs of each ring: i forward, ~i backward, as in Coverage */
 	rings: Int32Array[];
 }
@@ -43,7 +62,7 @@ export interface LineLayer {
 }
 
 export interface DrawnText {
-	layer: 'label' | 'title' | 'collar';
+	layer: 'label' | 'title' | 'collar' | 'legend';
 	text: string;
 	/** left end of the baseline */
 	x: number;
@@ -55,10 +74,12 @@ export interface DrawnText {
 	hex: string;
 	halo?: string;
 	region?: number;
+	/** the label stands on its region's fill, from which its colour follows */
+	onFill?: boolean;
 }
 
 export interface DrawnRect {
-	layer: string;
+	layer: 'legend' | 'scale';
 	x: number;
 	y: number;
 	width: number;
@@ -66,4 +87,16 @@ export interface DrawnRect {
 	fill: string | null;
 	stroke: string | null;
 	strokeWidth: number;
+}
+
+export interface LegendPlace {
+	x: number;
+	y: number;
+	width: number;
+	/** type size */
+	size: number;
+	columns: number;
+	/** from one column to the next */
+	step: number;
+	weak: boolean;
 }

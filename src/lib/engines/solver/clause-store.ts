@@ -24,7 +24,7 @@ export class ClauseStore {
 		this.data[at] = literals.length;
 		this.data[at + 1] = glue;
 		this.data[at + 2] = now;
-		this.data.set(literals, at + HEADER);
+		for (let k = 0; k < literals.length; k++) this.data[at + HEADER + k] = literals[k];
 		(glue === 0 ? this.given : this.learnt).push(at);
 		return at;
 	}

@@ -46,6 +46,7 @@ export class Sat {
 	private phases = new Uint8Array(16).fill(1);
 	private model: Int8Array | null = null;
 	private failed: number[] = [];
+	private scratch: number[] = [];
 	private contradiction = false;
 	private nextReduction = FIRST_REDUCTION;
 	private reductionGap = FIRST_REDUCTION;
@@ -77,12 +78,19 @@ export class Sat {
 
 	/** Adds a clause for good. False when the clauses now contradict each other at once. */
 	addClause(literals: readonly number[]): boolean {
-		for (const literal of literals) this.mustKnow(literal);
+		for (let i = 0; i < literals.length; i++) this.mustKnow(literals[i]);
 		if (this.contradiction) return false;
-		const codes = tidy(literals.map(encode));
-		if (!codes || codes.some((code) => this.trail.values[code] === 1)) return true;
-		const open = codes.filter((code) => this.trail.values[code] === 0);
-		if (open.length > 1) {
+		const { values } = this.trail;
+		const open = this.scratch;
+		const size = tidy(literals, open);
+		let keep = 0;
+		for (let i = 0; i < size; i++) {
+			if (values[open[i]] === 1) return true;
+			if (values[open[i]] === 0) open[keep++] = open[i];
+		}
+		if (size < 0) return true;
+		open.length = keep;
+		if (keep > 1) {
 			this.watches.attach(this.store, this.store.add(open, 0, 0));
 			return true;
 		}

@@ -1,5 +1,8 @@
 import { HEADER, type ClauseStore } from './clause-store.ts';
 
+/** shared by all literals that are in no clause yet */
+const NONE = new Int32Array(0);
+
 /**
  * For each literal the clauses to look at when it becomes false: pairs (clause, blocker). A blocker
  * is another literal of the clause: while it is true the clause need not be opened. Clauses of two
@@ -12,7 +15,7 @@ export class Watches {
 
 	/** Room for literal codes below `codes`. */
 	grow(codes: number): void {
-		while (this.lists.length < codes) this.lists.push(new Int32Array(8));
+		while (this.lists.length < codes) this.lists.push(NONE);
 		if (this.sizes.length < codes) {
 			const larger = new Int32Array(codes * 2);
 			larger.set(this.sizes);
@@ -24,7 +27,7 @@ export class Watches {
 		const size = this.sizes[literal];
 		let list = this.lists[literal];
 		if (size + 2 > list.length) {
-			const larger = new Int32Array(list.length * 2);
+			const larger = new Int32Array(Math.max(8, list.length * 2));
 			larger.set(list);
 			list = this.lists[literal] = larger;
 		}

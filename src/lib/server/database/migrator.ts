@@ -8,7 +8,10 @@ import type { Db } from './connection.ts';
  * the same time wait for each other.
  * @returns the names of the migrations that ran now
  */
-export async function migrateToLatest(db: Db, folder = path.resolve('migrations')): Promise<string[]> {
+export async function migrateToLatest(
+	db: Db,
+	folder = path.resolve('migrations'),
+): Promise<string[]> {
 	const provider = new FileMigrationProvider({ fs, path, migrationFolder: folder });
 	const { error, results = [] } = await new Migrator({ db, provider }).migrateToLatest();
 	if (error) throw error;

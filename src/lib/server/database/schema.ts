@@ -2,7 +2,11 @@ import type { ColumnType, Generated, Insertable, JSONColumnType, Selectable } fr
 
 /** Row types, one interface a table, kept beside `migrations/`. */
 type Moment = ColumnType<Date, Date | string | undefined, Date | string>;
-type OptionalMoment = ColumnType<Date | null, Date | string | null | undefined, Date | string | null>;
+type OptionalMoment = ColumnType<
+	Date | null,
+	Date | string | null | undefined,
+	Date | string | null
+>;
 /** bigint columns arrive as numbers: the connection installs the parser */
 type Whole = ColumnType<number, number, number>;
 

@@ -1,6 +1,6 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { createReadStream, createWriteStream } from 'node:fs';
-import { access, mkdir, open, rename, rm, stat } from 'node:fs/promises';
+import { access, mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { Transform, type Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
@@ -27,6 +27,7 @@ export function folderStore(root: string): FileStore {
 				() => false,
 			),
 		delete: (digest) => rm(place(digest), { force: true }),
+		tidy: () => tidy(join(root, 'incoming')),
 	};
 }
 
@@ -79,5 +80,16 @@ async function flush(path: string): Promise<void> {
 		await handle.sync();
 	} finally {
 		await handle.close();
+	}
+}
+
+const dayMilliseconds = 86_400_000;
+
+async function tidy(incoming: string): Promise<void> {
+	await mkdir(incoming, { recursive: true, mode: 0o700 });
+	for (const name of await readdir(incoming)) {
+		const path = join(incoming, name);
+		const { mtimeMs } = await stat(path);
+		if (mtimeMs < Date.now() - dayMilliseconds) await rm(path, { force: true });
 	}
 }

@@ -1,7 +1,7 @@
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { ReadableStream } from 'node:stream/web';
-import Busboy from '@fastify/busboy';
+import Busboy, { type BusboyInstance } from '@fastify/busboy';
 import type { FileStore, Received } from './store.ts';
 
 /** Why a form with a file was not taken; `status` is the HTTP status that says so. */
@@ -22,7 +22,13 @@ export interface ReceivedForm {
 	fileName: string;
 }
 
-const fieldLimits = { fields: 40, fieldSize: 10_000, fieldNameSize: 100, files: 1, headerPairs: 100 };
+const fieldLimits = {
+	fields: 40,
+	fieldSize: 10_000,
+	fieldNameSize: 100,
+	files: 1,
+	headerPairs: 100,
+};
 
 /**
  * Reads a multipart form as it arrives, its one file straight to the store, so that memory does not grow
@@ -46,14 +52,18 @@ export async function receiveForm(
 }
 
 const tooLarge = (maxBytes: number) =>
-	new UploadFault(413, 'too-large', `the file is larger than the limit of ${sizeInWords(maxBytes)}`);
+	new UploadFault(
+		413,
+		'too-large',
+		`the file is larger than the limit of ${sizeInWords(maxBytes)}`,
+	);
 
 export const sizeInWords = (bytes: number): string =>
 	bytes >= 1e9
 		? `${Number((bytes / 1e9).toPrecision(3))} GB`
 		: `${Number((bytes / 1e6).toPrecision(3))} MB`;
 
-function parser(type: string, maxBytes: number): Busboy {
+function parser(type: string, maxBytes: number): BusboyInstance {
 	try {
 		const headers = { 'content-type': type };
 		return new Busboy({ headers, limits: { ...fieldLimits, fileSize: maxBytes } });
@@ -65,7 +75,7 @@ function parser(type: string, maxBytes: number): Busboy {
 const malformed = (message: string) => new UploadFault(400, 'malformed', message);
 
 async function collect(
-	busboy: Busboy,
+	busboy: BusboyInstance,
 	source: Readable,
 	store: FileStore,
 	maxBytes: number,

@@ -18,6 +18,8 @@ export interface FileStore {
 	has(digest: string): Promise<boolean>;
 	/** Forgets the bytes; no error when they are not there. */
 	delete(digest: string): Promise<void>;
+	/** Removes what was being received when a process was killed; whatever is younger than a day stays. */
+	tidy(): Promise<void>;
 }
 
 export interface Received {

@@ -1,7 +1,69 @@
+import { availableParallelism } from 'node:os';
+import type PgBoss from 'pg-boss';
+import { config } from '../config.ts';
+import { database } from '../database/connection.ts';
+import { fileStore } from '../files/index.ts';
+import { log } from '../log.ts';
+import { runIntake, wakeSilentIntakes } from './intake.job.ts';
+import { createPool } from './pool.ts';
+import { openBoss, queueOf, type JobData, type JobName } from './queue.ts';
+import type { Workshop } from './workshop.ts';
+
+type Handler<N extends JobName> = (
+	shop: Workshop,
+	data: JobData[N],
+	shutdown: AbortSignal,
+) => Promise<void>;
+
+/** Who does each job; every name has one. */
+export const handlers: { [N in JobName]: Handler<N> } = {
+	intake: (shop, { intakeId }, shutdown) => runIntake(shop, intakeId, shutdown),
+};
+
+const wakeMilliseconds = 5_000;
+
 /**
  * Starts taking every kind of job.
  * @returns stops taking them, once those at work are finished or handed back
  */
 export async function startJobs(): Promise<() => Promise<void>> {
-	return async () => {};
+	const boss = await openBoss(config().databaseUrl, true);
+	const queue = queueOf(boss);
+	const pool = createPool({ threads: availableParallelism() });
+	const shop: Workshop = { db: database(), files: fileStore(), queue, pool };
+	const shutdown = new AbortController();
+	const atWork = new Set<Promise<void>>();
+	for (const name of Object.keys(handlers) as JobName[]) {
+		await takeJobs(boss, name, (data) => {
+			const work = handlers[name](shop, data, shutdown.signal);
+			atWork.add(work);
+			return work.finally(() => atWork.delete(work));
+		});
+	}
+	await shop.files.tidy();
+	const timer = setInterval(() => void wake(shop), wakeMilliseconds);
+	return async () => {
+		clearInterval(timer);
+		shutdown.abort();
+		await Promise.allSettled(atWork);
+		await boss.stop({ graceful: false });
+		await pool.close();
+	};
 }
+
+/** One loop a core: each takes a job, finishes it, and looks for the next. */
+async function takeJobs<N extends JobName>(
+	boss: PgBoss,
+	name: N,
+	work: (data: JobData[N]) => Promise<void>,
+): Promise<void> {
+	const options = { pollingIntervalSeconds: 0.5, batchSize: 1 };
+	for (let loop = 0; loop < availableParallelism(); loop++) {
+		await boss.work<JobData[N]>(name, options, async ([job]) => work(job.data));
+	}
+}
+
+const wake = (shop: Workshop) =>
+	wakeSilentIntakes(shop).catch((error: unknown) =>
+		log.warn({ error: String(error) }, 'could not look for uploads left lying'),
+	);

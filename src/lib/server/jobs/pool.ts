@@ -11,7 +11,11 @@ export interface Pool {
 	 * Runs one task in a thread. Rejects with `PoolBusy` when too many wait already, with an AbortError when
 	 * `signal` fires (the thread is ended), and with whatever the task throws.
 	 */
-	run<N extends TaskName>(name: N, input: TaskInput<N>, options?: RunOptions): Promise<TaskOutput<N>>;
+	run<N extends TaskName>(
+		name: N,
+		input: TaskInput<N>,
+		options?: RunOptions,
+	): Promise<TaskOutput<N>>;
 	close(): Promise<void>;
 }
 
@@ -36,21 +40,24 @@ export interface PoolOptions {
 
 export function createPool(options: PoolOptions = {}): Pool {
 	const piscina = new Piscina({
-		...entry(),
+		filename: entry(),
 		minThreads: 0,
 		maxThreads: options.threads ?? Math.max(1, availableParallelism() - 1),
 		maxQueue: options.queue ?? 200,
 		idleTimeout: 60_000,
 		resourceLimits: { maxOldGenerationSizeMb: options.heapMb ?? 2_048 },
 	});
-	return { run: (name, input, how) => run(piscina, name, input, how), close: () => piscina.destroy() };
+	return {
+		run: (name, input, how) => run(piscina, name, input, how),
+		close: () => piscina.destroy(),
+	};
 }
 
-/** The bundled thread where the product was built, else the source itself, read through tsx. */
-function entry(): { filename: string; execArgv?: string[] } {
+/** The bundled thread where the product was built, else the source itself. */
+function entry(): string {
 	const built = path.resolve('build/workers/engine.thread.js');
-	if (process.env.NODE_ENV === 'production' && existsSync(built)) return { filename: built };
-	return { filename: path.resolve('src/workers/engine.thread.ts'), execArgv: ['--import', 'tsx'] };
+	const bundled = process.env.NODE_ENV === 'production' && existsSync(built);
+	return bundled ? built : path.resolve('src/workers/from-source.mjs');
 }
 
 async function run<N extends TaskName>(
@@ -60,11 +67,11 @@ async function run<N extends TaskName>(
 	{ signal, progress }: RunOptions = {},
 ): Promise<TaskOutput<N>> {
 	if (piscina.needsDrain && piscina.queueSize >= piscina.options.maxQueue) throw new PoolBusy();
-	if (!progress) return piscina.run({ input }, { name, signal });
+	if (!progress) return piscina.run({ name, input }, { signal });
 	const { port1, port2 } = new MessageChannel();
 	port1.on('message', progress);
 	try {
-		return await piscina.run({ input, port: port2 }, { name, signal, transferList: [port2] });
+		return await piscina.run({ name, input, port: port2 }, { signal, transferList: [port2] });
 	} finally {
 		port1.close();
 	}

@@ -1,6 +1,6 @@
-import type * as tasks from '../../../workers/engine.thread.ts';
+import type * as tasks from './work.ts';
 
-/** The computations that run in threads, by name: `src/workers/engine.thread.ts` is the list. */
+/** The computations that run in threads, by name: `work.ts` is the list. */
 type Tasks = typeof tasks;
 export type TaskName = keyof Tasks;
 

@@ -14,7 +14,14 @@ export interface BoundaryColumns {
 		/** one JSON object a region */
 		attributes: string[];
 	};
-	borders: { a: number[]; b: number[]; kind: string[]; metres: number[]; lon: number[]; lat: number[] };
+	borders: {
+		a: number[];
+		b: number[];
+		kind: string[];
+		metres: number[];
+		lon: number[];
+		lat: number[];
+	};
 	findings: {
 		code: string;
 		severity: 'error' | 'warning' | 'note';

@@ -44,11 +44,10 @@ export async function countOpenIntakes(db: Db, teamId: string): Promise<number> 
 }
 
 /**
- * Takes an intake up for reading, if it waits or if its last reader has not been heard of for
- * `silentSeconds`. The answer carries a fresh claim; every later write names it, so that of two readers
+ * Takes an intake up for reading, if it waits. The answer carries a fresh claim; every later write names it, so that of two readers
  * only the last one counts.
  */
-export const claimIntake = (db: Db, id: string, silentSeconds: number) =>
+export const claimIntake = (db: Db, id: string) =>
 	db
 		.updateTable('intakes')
 		.set({
@@ -59,15 +58,7 @@ export const claimIntake = (db: Db, id: string, silentSeconds: number) =>
 			updated_at: sql`now()`,
 		})
 		.where('id', '=', id)
-		.where(({ or, and, eb }) =>
-			or([
-				eb('state', '=', 'waiting'),
-				and([
-					eb('state', '=', 'reading'),
-					eb('heard_at', '<', sql<Date>`now() - make_interval(secs => ${silentSeconds})`),
-				]),
-			]),
-		)
+		.where('state', '=', 'waiting')
 		.returningAll()
 		.executeTakeFirst();
 
@@ -132,15 +123,24 @@ export async function moveIntake(
 	return numUpdatedRows > 0n;
 }
 
-/** Intakes nobody works on though somebody should: waiting or reading, and silent for so long. */
-export const silentIntakes = (db: Db, silentSeconds: number) =>
-	db
-		.selectFrom('intakes')
-		.select(['id', 'attempts', 'state'])
+/**
+ * Lets go of every intake that nobody has spoken for in so long, waiting or being read, and answers which:
+ * each is handed to one caller only, and comes up again after as long a silence.
+ */
+export async function releaseSilent(db: Db, silentSeconds: number): Promise<string[]> {
+	const rows = await db
+		.updateTable('intakes')
+		.set({ state: 'waiting', claim: null, heard_at: sql`now()` })
 		.where('state', 'in', ['waiting', 'reading'])
 		.where(
-			sql`coalesce(heard_at, created_at)`,
+			sql<Date>`coalesce(heard_at, created_at)`,
 			'<',
-			sql`now() - make_interval(secs => ${silentSeconds})`,
+			sql<Date>`now() - make_interval(secs => ${silentSeconds})`,
 		)
+		.returning('id')
 		.execute();
+	return rows.map(({ id }) => id);
+}
+
+/** An intake as the one who reads it holds it. */
+export type IntakeClaim = { id: string; claim: string };

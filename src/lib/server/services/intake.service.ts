@@ -1,4 +1,4 @@
-import { mayDo, requireAccess, type Member } from '../access/member.ts';
+import { requireAccess, type Member } from '../access/member.ts';
 import type { IntakeStatus } from '../../schemas/desk.ts';
 import { uploadFields } from '../../schemas/upload.ts';
 import { receiveForm, type ReceivedForm } from '../files/multipart.ts';
@@ -12,7 +12,7 @@ import {
 	recentIntakes,
 	type IntakeRow,
 } from '../repositories/intakes.repository.ts';
-import { recordActivity } from './activity.service.ts';
+import { record } from './activity.service.ts';
 import { Conflict, NotFound, Unfit } from './outcomes.ts';
 import { personName } from './people.ts';
 import { dropUnused } from './stored-files.ts';
@@ -63,7 +63,7 @@ async function enter(shop: Workshop, member: Member, form: ReceivedForm): Promis
 			state: 'waiting',
 		});
 		await shop.queue.send(trx, 'intake', { intakeId: id });
-		await recordActivity(trx, member, 'boundaries.upload', { kind: 'intake', id }, { bytes });
+		await record(trx, member, 'boundaries.uploaded', { kind: 'intake', id }, { bytes });
 		await form.file.keep();
 		return id;
 	});
@@ -89,10 +89,10 @@ export async function intakeStatus(
 export async function listIntakes(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
-): Promise<{ intakes: IntakeStatus[]; mayUpload: boolean }> {
+): Promise<IntakeStatus[]> {
 	requireAccess(member, 'sheet.read');
 	const rows = await recentIntakes(shop.db, member.team.id, 50);
-	return { intakes: rows.map(statusOf), mayUpload: mayDo(member, 'boundaries.upload') };
+	return rows.map(statusOf);
 }
 
 /** Stops an intake that waits, is being read or has failed, and forgets its file. */
@@ -103,7 +103,7 @@ export async function cancelIntake(shop: Workshop, member: Member, id: string): 
 		const end = { state: 'cancelled', step: '', share: 0, file_digest: null } as const;
 		const moved = await moveIntake(trx, intake.id, ['waiting', 'reading', 'failed'], end);
 		if (!moved) throw new Conflict('not-open', 'it is not being read any more');
-		await recordActivity(trx, member, 'boundaries.cancel', { kind: 'intake', id: intake.id });
+		await record(trx, member, 'boundaries.cancelled', { kind: 'intake', id: intake.id });
 		if (intake.file_digest) await dropUnused(trx, shop.files, intake.file_digest);
 	});
 }
@@ -118,7 +118,7 @@ export async function retryIntake(shop: Workshop, member: Member, id: string): P
 			throw new Conflict('not-failed', 'only an upload that failed can be read again');
 		}
 		await shop.queue.send(trx, 'intake', { intakeId: intake.id });
-		await recordActivity(trx, member, 'boundaries.retry', { kind: 'intake', id: intake.id });
+		await record(trx, member, 'boundaries.retried', { kind: 'intake', id: intake.id });
 	});
 }
 

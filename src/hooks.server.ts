@@ -1,0 +1,26 @@
+import { sequence } from '@sveltejs/kit/hooks';
+import { handleAddress } from '$lib/server/hooks/address';
+import { handleAuth } from '$lib/server/hooks/auth';
+import { handleBooth } from '$lib/server/hooks/booth';
+import { handleGuard } from '$lib/server/hooks/guard';
+import { handleHeaders } from '$lib/server/hooks/headers';
+import { handleBodySize, handleRate } from '$lib/server/hooks/limits';
+import { handleOrigin } from '$lib/server/hooks/origin';
+import { handleError, handleRequest } from '$lib/server/hooks/request';
+import { handleSession } from '$lib/server/hooks/session';
+
+/** What happens to every request, from the outside in. */
+export const handle = sequence(
+	handleRequest,
+	handleHeaders,
+	handleAddress,
+	handleOrigin,
+	handleBodySize,
+	handleAuth,
+	handleSession,
+	handleRate,
+	handleGuard,
+	handleBooth,
+);
+
+export { handleError };

@@ -1,0 +1,132 @@
+import { readCase, type Case } from './explain-case.ts';
+import { CaseClauses } from './explain-clauses.ts';
+import { immediateCollisions } from './explain-immediate.ts';
+import { inksThatWouldDo } from './explain-inks.ts';
+import { Purse } from './explain-purse.ts';
+import { blamedRules } from './explain-rules.ts';
+import { barePart, shrink, type Clash } from './explain-shrink.ts';
+import { problemFaults } from './faults.ts';
+import type { ColouringProblem, Explanation, Release } from './problem.ts';
+import { cheapestRelease } from './release.ts';
+
+/** Conflicts for one question and for each of the tasks in all; exact choices of locks to release. */
+const EFFORT = {
+	quick: { each: 5_000, all: 20_000, rounds: 3 },
+	normal: { each: 50_000, all: 200_000, rounds: 12 },
+	thorough: { each: 500_000, all: 5_000_000, rounds: 200 },
+};
+
+/**
+ * Why no colouring keeps the locks and rules of a problem, and the cheapest way out.
+ *
+ * Guarantees: `locks` collide with the rules, and without any single one they do not; where they are
+ * empty, `rules` alone cannot be kept, and without any single one they can. Dropping the locks of
+ * `release` makes the problem feasible; no release costs less than its `lowerBound`, and `proved` says
+ * that it is attained. The collision needs no other regions than `regions`. `inksThatWouldDo` is the
+ * smallest number of inks that the effort sufficed to tell. Steps are solver conflicts, by `effort`.
+ *
+ * Null when the problem is feasible, or the effort did not suffice to tell that it is not.
+ * @throws RangeError when the problem is not well formed: ask `problemFaults` first
+ */
+export async function explain(problem: ColouringProblem): Promise<Explanation | null> {
+	const [fault] = problemFaults(problem);
+	if (fault) throw new RangeError(fault);
+	return new Explaining(problem).run();
+}
+
+class Explaining {
+	private readonly of: Case;
+	private readonly seed: number;
+	private readonly whole: CaseClauses;
+	private readonly everything: Uint32Array;
+
+	constructor(private problem: ColouringProblem) {
+		this.of = readCase(problem);
+		this.seed = problem.seed ?? 0;
+		this.everything = Uint32Array.from({ length: this.of.graph.count }, (_, v) => v);
+		this.whole = new CaseClauses(this.of, this.everything, { seed: this.seed });
+		for (const variable of this.whole.demandVariable) {
+			if (variable) this.whole.sat.setPhase(variable, true);
+		}
+	}
+
+	async run(): Promise<Explanation | null> {
+		if (this.of.torn) return this.withRules([]);
+		const withoutLocks = this.ask([], this.purse());
+		if (withoutLocks === 'unsat') return this.withRules(this.refutedPart());
+		if (withoutLocks === 'unknown') return null;
+		const immediate = immediateCollisions(this.of);
+		if (immediate.length === 0 && this.ask(this.of.demands.keys(), this.purse()) !== 'unsat') {
+			return null;
+		}
+		const { clashes, ...found } = await cheapestRelease(
+			this.of,
+			this.whole,
+			immediate,
+			this.purse(),
+			{ rounds: EFFORT[this.problem.effort ?? 'normal'].rounds, seed: this.seed },
+		);
+		const release: Release = {
+			locks: found.demands.flatMap((d) => this.of.demands[d].regions).sort((a, b) => a - b),
+			cost: found.cost,
+			proved: found.proved,
+			lowerBound: found.lowerBound,
+		};
+		const clash = this.irreducible(immediate.length > 0 ? immediate[0] : clashes[0].demands);
+		return {
+			locks: clash.demands.map((d) => this.of.demands[d].regions[0]).sort((a, b) => a - b),
+			rules: [],
+			regions: this.regionsOf(barePart(this.of, clash, this.purse(), this.seed)),
+			release,
+			inksThatWouldDo: inksThatWouldDo(this.of, this.purse(), this.seed),
+		};
+	}
+
+	private purse(): Purse {
+		const { each, all } = EFFORT[this.problem.effort ?? 'normal'];
+		return new Purse(all, each, this.problem.cancelled);
+	}
+
+	private ask(demands: Iterable<number>, purse: Purse) {
+		return purse.pay(this.whole.sat, (budget) => this.whole.solve(demands, budget));
+	}
+
+	/** Leaves out demands until, on the whole map, none can be spared. */
+	private irreducible(start: number[]): Clash {
+		const purse = this.purse();
+		let demands = start;
+		for (const d of start) {
+			if (!demands.includes(d)) continue;
+			const rest = demands.filter((other) => other !== d);
+			if (this.ask(rest, purse) === 'unsat') demands = this.whole.failedDemands();
+		}
+		const clash = shrink(this.of, demands, purse, this.seed);
+		return clash ?? { demands, vertices: Array.from(this.everything) };
+	}
+
+	/** When the rules alone fail: vertices on which they do. */
+	private refutedPart(): number[] {
+		const clash = { demands: [], vertices: Array.from(this.everything) };
+		return barePart(this.of, clash, this.purse(), this.seed);
+	}
+
+	private withRules(vertices: number[]): Explanation {
+		const among = this.regionsOf(vertices);
+		const rules = blamedRules(this.problem, this.of, among, this.purse());
+		const named = rules.flatMap((rule) => {
+			if (rule.kind === 'inks') return [];
+			return rule.kind === 'forbidden' ? [rule.region] : [rule.a, rule.b];
+		});
+		return {
+			locks: [],
+			rules,
+			regions: [...new Set(named)].sort((a, b) => a - b),
+			release: null,
+			inksThatWouldDo: inksThatWouldDo(this.of, this.purse(), this.seed),
+		};
+	}
+
+	private regionsOf(vertices: number[]): number[] {
+		return vertices.flatMap((v) => this.of.members[v]).sort((a, b) => a - b);
+	}
+}

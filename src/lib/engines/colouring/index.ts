@@ -1,0 +1,16 @@
+/** Colouring: region graph and rules in; a colouring with its proof, or an explanation, out. */
+export type {
+	ColouringProblem,
+	ColouringResult,
+	Explanation,
+	Proof,
+	ProofKind,
+	Release,
+	Rule,
+} from './problem.ts';
+export { checkColouring } from './check-colouring.ts';
+export { colour } from './colour.ts';
+export { checkExplanation } from './explain-check.ts';
+export { explanationSentence } from './explanation-sentence.ts';
+export { problemFaults } from './faults.ts';
+export { proofSentence } from './proof-sentence.ts';

@@ -1,0 +1,160 @@
+import { greedyHittingSet } from '../solver/hitting-search.ts';
+import { minimumHittingSet } from '../solver/integer.ts';
+import type { Case } from './explain-case.ts';
+import type { CaseClauses } from './explain-clauses.ts';
+import type { Purse } from './explain-purse.ts';
+import { shrink, type Clash } from './explain-shrink.ts';
+
+export interface CheapestRelease {
+	/** demands to drop */
+	demands: number[];
+	cost: number;
+	lowerBound: number;
+	proved: boolean;
+	/** what was found to clash on the way, smallest first */
+	clashes: Clash[];
+}
+
+const ROUNDING = 1e-9;
+/** choices by rule of thumb tried after each exact one */
+const QUICK_CHOICES = 3;
+/** of the integer program for each choice */
+const NODES = 100;
+
+/**
+ * The cheapest demands to drop so that the rest can be met. `whole` are the clauses of the whole case,
+ * without switches, for which dropping every demand is known to work; `immediate` are clashes known;
+ * at most `rounds` exact choices are made.
+ *
+ * Method: implicit hitting sets (Chandrasekaran et al. 2013; Davies and Bacchus 2011). A cheapest
+ * choice that meets every clash known is dropped; if the rest still clashes, the new clash is shrunk and
+ * set aside, again and again, and all of them are added. What such a choice costs is a lower bound;
+ * what an assignment found on the way leaves unmet is an upper one.
+ */
+export async function cheapestRelease(
+	of: Case,
+	whole: CaseClauses,
+	immediate: readonly number[][],
+	purse: Purse,
+	{ rounds, seed }: { rounds: number; seed: number },
+): Promise<CheapestRelease> {
+	const search = new ReleaseSearch(of, whole, immediate, purse, seed);
+	for (let round = 0; round < rounds && !search.closed && !purse.empty; round++) {
+		if (!(await search.round())) break;
+	}
+	if (!search.closed) search.improve();
+	return search.result();
+}
+
+class ReleaseSearch {
+	private best: number[];
+	private bestCost: number;
+	private lowerBound = 0;
+	private readonly clashes: Clash[];
+	private readonly costs: Float64Array;
+
+	constructor(
+		private of: Case,
+		private whole: CaseClauses,
+		immediate: readonly number[][],
+		private purse: Purse,
+		private seed: number,
+	) {
+		this.clashes = immediate.map((demands) => ({ demands, vertices: [] }));
+		this.costs = Float64Array.from(of.demands, (demand) => demand.cost);
+		this.best = of.demands.map((_, d) => d);
+		this.bestCost = this.costOf(this.best);
+	}
+
+	get closed(): boolean {
+		return this.lowerBound >= this.bestCost * (1 - ROUNDING);
+	}
+
+	/** One exact choice and the clashes it leaves; false when nothing more can be learnt. */
+	async round(): Promise<boolean> {
+		const choice = await minimumHittingSet(this.sets(), this.costs, { nodes: NODES });
+		this.lowerBound = Math.max(this.lowerBound, choice.lowerBound);
+		const before = this.clashes.length;
+		if (this.closed) return false;
+		this.gather(choice.chosen, true);
+		for (let i = 0; i < QUICK_CHOICES && !this.closed; i++) {
+			if (!this.gather(greedyHittingSet(this.sets(), this.costs), false)) break;
+		}
+		return this.clashes.length > before;
+	}
+
+	private sets(): number[][] {
+		return this.clashes.map((clash) => clash.demands);
+	}
+
+	/**
+	 * Gathers clashes of what is held when the choice is dropped, and drops more until the rest can be
+	 * met: every demand of a clash when they are to lie `apart`, else the one that most clashes share.
+	 * Whether there were any.
+	 */
+	private gather(choice: number[], apart: boolean): boolean {
+		const held = new Set(this.of.demands.keys());
+		for (const d of choice) held.delete(d);
+		const before = this.clashes.length;
+		while (!this.closed) {
+			const answer = this.ask(held);
+			if (answer === 'sat') this.offer(held);
+			if (answer !== 'unsat') break;
+			const failed = this.whole.failedDemands();
+			const clash = shrink(this.of, failed, this.purse, this.seed);
+			this.clashes.push(clash ?? { demands: failed, vertices: [] });
+			const { demands } = this.clashes[this.clashes.length - 1];
+			for (const d of apart ? demands : [this.worthiest(demands)]) held.delete(d);
+		}
+		return this.clashes.length > before;
+	}
+
+	/** The demand that takes part in most clashes for its cost. */
+	private worthiest(demands: number[]): number {
+		const shares = new Map(demands.map((d) => [d, 0]));
+		for (const clash of this.clashes) {
+			for (const d of clash.demands) if (shares.has(d)) shares.set(d, (shares.get(d) ?? 0) + 1);
+		}
+		const worth = (d: number) => (shares.get(d) ?? 0) / this.costs[d];
+		return demands.reduce((a, b) => (worth(b) > worth(a) ? b : a));
+	}
+
+	/** Takes demands back one by one where that works, dearest first. */
+	improve(): void {
+		const dearest = [...this.best].sort((a, b) => this.costs[b] - this.costs[a]);
+		for (const d of dearest) {
+			if (this.closed || this.purse.empty) return;
+			if (!this.best.includes(d)) continue;
+			const held = new Set(this.of.demands.keys());
+			for (const dropped of this.best) if (dropped !== d) held.delete(dropped);
+			if (this.ask(held) === 'sat') this.offer(held);
+		}
+	}
+
+	result(): CheapestRelease {
+		const proved = this.closed;
+		const clashes = this.clashes.sort((a, b) => a.demands.length - b.demands.length);
+		const lowerBound = proved ? this.bestCost : this.lowerBound;
+		return { demands: this.best, cost: this.bestCost, lowerBound, proved, clashes };
+	}
+
+	private ask(held: Set<number>) {
+		return this.purse.pay(this.whole.sat, (budget) => this.whole.solve(held, budget));
+	}
+
+	/** What the assignment just found leaves unmet is a release. */
+	private offer(held: Set<number>): void {
+		const unmet: number[] = [];
+		for (let d = 0; d < this.of.demands.length; d++) {
+			if (!held.has(d) && !this.whole.meets(d)) unmet.push(d);
+		}
+		const cost = this.costOf(unmet);
+		if (cost >= this.bestCost) return;
+		this.best = unmet;
+		this.bestCost = cost;
+	}
+
+	private costOf(demands: number[]): number {
+		return demands.reduce((sum, d) => sum + this.costs[d], 0);
+	}
+}

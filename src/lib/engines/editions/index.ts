@@ -1,0 +1,17 @@
+/** What an edition contains, its digest, and the difference between two. */
+export {
+	editionContent,
+	type EditionContent,
+	type EditionInput,
+	type EditionOutcome,
+} from './edition-content.ts';
+export { canonicalJson } from './canonical-json.ts';
+export { digestOf, verifyEdition } from './digest.ts';
+export {
+	differences,
+	type Change,
+	type Comparable,
+	type Differences,
+	type InkChange,
+} from './differences.ts';
+export type { Draft } from './draft.ts';

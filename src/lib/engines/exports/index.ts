@@ -1,0 +1,5 @@
+/** A sheet or an edition as files: SVG, GeoJSON, CSV. Bytes out, the same for the same input. */
+export { exportSvg, type FaceFiles } from './svg.ts';
+export { exportGeoJson } from './geojson.ts';
+export { csvField, exportCsv } from './csv.ts';
+export { subsetFont } from './subset-font.ts';

@@ -1,0 +1,20 @@
+/** Inks to a verdict for every reader and touching pair; mends; house and published palettes. */
+export * from './palette.ts';
+export { housePalettes } from './house.ts';
+export { publishedPalettes } from './published.ts';
+export { checkPalette, defaultThresholds } from './check.ts';
+export {
+	alikeBelow,
+	demandFor,
+	fillAloneFromMm,
+	greySafeFrom,
+	greyWarnBelow,
+	needsLabelOrHatch,
+} from './demand.ts';
+export { weakBorders, type SheetFills } from './weak-borders.ts';
+export { bordersSentence, verdictSentence } from './sentence.ts';
+export { mendPalette, type MendRequest, type MendResult } from './mend.ts';
+export { bestKnown } from './limits.ts';
+export { inkDistances } from './ink-distances.ts';
+export { tritanDoubts } from './tritan-doubts.ts';
+export { checkBorderLine, lineContrastAsked } from './border-line.ts';

@@ -1,0 +1,84 @@
+/**
+ * Everything on the sheet beside the map, and the box it leaves for the map. In: what is to be said.
+ * Out: texts and rects inside the margins, and places for the legend and the scale bar. Where the
+ * paper is too small, all type shrinks together until the map has at least two fifths of its height.
+ */
+import type { DrawnInk, DrawnText, LegendPlace } from '../drawing.ts';
+import type { SheetLayout } from '../layout.ts';
+import { hundredths, paperScale, paperSize } from '../paper.ts';
+import type { Box } from '../plane/fit.ts';
+import { cleanText } from '../type/clean-text.ts';
+import { foot } from './foot.ts';
+import { heading } from './heading.ts';
+import { legendColumns, legendHeight, legendRows } from './legend.ts';
+
+export interface Collar {
+	map: Box;
+	texts: DrawnText[];
+	legend: LegendPlace | null;
+	bar: { x: number; y: number; longest: number; size: number } | null;
+	/** type and line scale that was used */
+	scale: number;
+}
+
+export interface CollarInput {
+	layout: SheetLayout;
+	inks: DrawnInk[];
+	coloured: boolean;
+	weak: boolean;
+	projection: string;
+	issue: string;
+}
+
+/** Legend and scale figures on A4: 7.5 point. */
+const legendSize = 265;
+/** Least share of the paper's height that the map gets. */
+const mapShare = 0.4;
+
+export function collar(input: CollarInput): Collar {
+	const { widthMm, heightMm } = paperSize(input.layout);
+	let scale = paperScale(widthMm, heightMm);
+	let laid = layOut(input, scale);
+	for (let round = 0; round < 20 && laid.map.height < mapShare * hundredths(heightMm); round++) {
+		scale *= 0.9;
+		laid = layOut(input, scale);
+	}
+	return laid;
+}
+
+function layOut(input: CollarInput, scale: number): Collar {
+	const { layout, inks, coloured, weak } = input;
+	const { widthMm, heightMm } = paperSize(layout);
+	const margin = hundredths(
+		Math.min(Math.max(layout.marginMm, 2), Math.min(widthMm, heightMm) / 5),
+	);
+	const [left, top] = [margin, margin];
+	const width = hundredths(widthMm) - 2 * margin;
+	const bottom = hundredths(heightMm) - margin;
+	const [title, subtitle] = [cleanText(layout.title), cleanText(layout.subtitle)];
+	const head = heading(title, subtitle, scale, left, top, width);
+	const base = foot(layout, input.projection, input.issue, scale, left, bottom, width);
+	const size = Math.round(legendSize * scale);
+	const air = Math.round(size * 1.2);
+
+	const barWidth = layout.scaleBar ? Math.round(width * 0.3) : 0;
+	const showLegend = layout.legend && coloured && inks.length > 0;
+	const legendWidth = width - (barWidth ? barWidth + 2 * size : 0);
+	const grid = showLegend ? legendColumns(inks, size, legendWidth) : { columns: 1, step: 0 };
+	const rows = showLegend ? legendRows({ ...grid, weak }, inks.length) : 0;
+	const legendHigh = legendHeight(rows, size);
+	const barHigh = layout.scaleBar ? Math.round(size * 2.3) : 0;
+	const high = Math.max(legendHigh, barHigh);
+	const row = bottom - base.height - (high ? high + air : 0);
+
+	const mapTop = top + (head.height ? head.height + air : 0);
+	return {
+		map: { x: left, y: mapTop, width, height: row - air - mapTop },
+		texts: [...head.texts, ...base.texts],
+		legend: showLegend
+			? { x: left + width - legendWidth, y: row, width: legendWidth, size, ...grid, weak }
+			: null,
+		bar: layout.scaleBar ? { x: left, y: row, longest: Math.round(width * 0.2), size } : null,
+		scale,
+	};
+}

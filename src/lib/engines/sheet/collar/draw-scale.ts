@@ -1,0 +1,60 @@
+import type { DrawnRect, DrawnText } from '../drawing.ts';
+import type { Box } from '../plane/fit.ts';
+import { groundScaleAt, type GroundScale } from '../plane/ground-scale.ts';
+import type { OnPaper } from '../place-on-paper.ts';
+import type { Collar } from './collar.ts';
+import { drawScaleBar } from './draw-scale-bar.ts';
+import { plainWithin, scaleBar, scaleError } from './scale-bar.ts';
+
+/** Places at which the scale is measured. */
+const mostPlaces = 160;
+
+/** The scale at places spread evenly over all borders. */
+function sampled({ arcs, chosen, fit }: OnPaper): GroundScale[] {
+	const points = arcs.arcPoints.length / 2;
+	const step = Math.max(1, Math.floor(points / mostPlaces));
+	const scales: GroundScale[] = [];
+	for (let i = 0; i < points; i += step) {
+		const [x, y] = [arcs.arcPoints[2 * i], arcs.arcPoints[2 * i + 1]];
+		const scale = groundScaleAt(chosen.projection, fit, x, y);
+		if (scale) scales.push(scale);
+	}
+	return scales;
+}
+
+export interface DrawnScale {
+	rects: DrawnRect[];
+	texts: DrawnText[];
+	sentence: string;
+}
+
+/** The scale bar, if there is an honest one and it is wanted, and the scale in a sentence. */
+export function drawScale(placed: OnPaper, map: Box, bar: Collar['bar']): DrawnScale {
+	const none = { rects: [], texts: [] };
+	const centre = groundScaleAt(
+		placed.chosen.projection,
+		placed.fit,
+		map.x + map.width / 2,
+		map.y + map.height / 2,
+	);
+	if (!centre)
+		return { ...none, sentence: 'The scale at the centre of the sheet cannot be measured.' };
+	const places = sampled(placed);
+	const perUnit = Math.sqrt(centre.across * centre.down);
+	const error = scaleError(perUnit, [centre, ...places]);
+	// metres a hundredth of a millimetre are 100,000 to one
+	const ratio = Number((perUnit * 100_000).toPrecision(3)).toLocaleString('en-GB');
+	const about = `About 1 : ${ratio} at the centre`;
+	const percent = `${(error * 100).toFixed(error < 0.1 ? 1 : 0)} %`;
+	const trueBar = scaleBar(centre, places, bar?.longest ?? 1000);
+	if (!trueBar) {
+		const why = `lengths differ by up to ${percent} over the sheet`;
+		return { ...none, sentence: `${about}; no scale bar, because ${why}.` };
+	}
+	const trust =
+		error <= plainWithin
+			? `lengths are true within ${percent} all over the sheet`
+			: `lengths differ by up to ${percent} away from it`;
+	const drawn = bar ? drawScaleBar(trueBar, bar.x, bar.y, bar.size) : none;
+	return { ...drawn, sentence: `${about}; ${trust}.` };
+}

@@ -1,0 +1,135 @@
+import fc from 'fast-check';
+import Flatbush from 'flatbush';
+import { describe, expect, it } from 'vitest';
+import { inks, layout, sheetOf, statesCoverage } from '../../../../tests/support/sheets.ts';
+import type { DrawnText, Drawing } from './drawing.ts';
+import { caution, drawSheet, recolour } from './index.ts';
+import { ringPoints } from './fills.ts';
+
+const coverage = statesCoverage();
+
+/** Box of a text by the cap height and descender of the shipped faces. */
+function boxOf({ x, y, width, size }: DrawnText): [number, number, number, number] {
+	return [x, y - 0.7 * size, x + width, y + 0.2 * size];
+}
+
+/** Pairs of texts whose boxes overlap, found with a spatial index. */
+function overlaps(texts: DrawnText[]): [string, string][] {
+	if (texts.length === 0) return [];
+	const index = new Flatbush(texts.length);
+	for (const text of texts) index.add(...boxOf(text));
+	index.finish();
+	return texts.flatMap((text, i) =>
+		index
+			.search(...boxOf(text))
+			.filter((j) => j > i)
+			.map((j): [string, string] => [text.text, texts[j].text]),
+	);
+}
+
+function isInside(drawing: Drawing, region: number, x: number, y: number): boolean {
+	let inside = false;
+	for (const ring of drawing.fills[region].rings) {
+		const p = ringPoints(drawing, ring);
+		for (let i = 0, j = p.length - 2; i < p.length; j = i, i += 2) {
+			const over = p[i + 1] > y !== p[j + 1] > y;
+			if (over && x < ((p[j] - p[i]) * (y - p[i + 1])) / (p[j + 1] - p[i + 1]) + p[i]) {
+				inside = !inside;
+			}
+		}
+	}
+	return inside;
+}
+
+function strays({ texts, widthMm, heightMm }: Drawing): DrawnText[] {
+	return texts.filter((text) => {
+		const [left, top, right, bottom] = boxOf(text);
+		return left < 0 || top < 0 || right > 100 * widthMm || bottom > 100 * heightMm;
+	});
+}
+
+const word = fc.string({ unit: fc.constantFrom(...'aMiłßΩЖ W-漢'), minLength: 1, maxLength: 24 });
+const anyText = fc.string({ unit: 'binary', maxLength: 200 });
+const longWord = fc.integer({ min: 1, max: 200 }).map((length) => 'M'.repeat(length));
+
+describe('labels', () => {
+	it('never overlap, and stand inside their own region or on empty paper', () => {
+		const names = fc.array(word, { minLength: 49, maxLength: 49 });
+		const paper = fc.constantFrom('A5', 'A4', 'A3') as fc.Arbitrary<'A5' | 'A4' | 'A3'>;
+		fc.assert(
+			fc.property(names, paper, (list, size) => {
+				const drawing = drawSheet(
+					sheetOf({ ...coverage, names: list }, { layout: { ...layout, paper: size } }),
+				);
+				const labels = drawing.texts.filter((text) => text.layer === 'label');
+				expect(overlaps(labels)).toEqual([]);
+				expect(strays(drawing)).toEqual([]);
+				for (const label of labels) {
+					const [left, top, right, bottom] = boxOf(label);
+					for (const x of [left, (left + right) / 2, right]) {
+						for (const y of [top, bottom]) {
+							drawing.fills.forEach(({ region }) => {
+								const own = label.onFill === true && region === label.region;
+								expect(isInside(drawing, region, x, y)).toBe(own);
+							});
+						}
+					}
+				}
+				const placed = new Set(labels.map(({ region }) => region));
+				expect(placed.size + drawing.unplaced.length).toBe(49);
+				for (const region of drawing.unplaced) expect(placed.has(region)).toBe(false);
+			}),
+			{ numRuns: 12 },
+		);
+	});
+});
+
+describe('the collar', () => {
+	it('stays on the paper with the whole caution, whatever is written', () => {
+		const side = fc.integer({ min: 50, max: 900 });
+		const text = fc.oneof(anyText, longWord);
+		fc.assert(
+			fc.property(
+				side,
+				side,
+				fc.double({ min: 0, max: 40, noNaN: true }),
+				text,
+				text,
+				text,
+				(widthMm, heightMm, marginMm, title, subtitle, credits) => {
+					const drawing = drawSheet(
+						sheetOf(coverage, {
+							layout: {
+								...layout,
+								...{ title, subtitle, credits, marginMm, paper: { widthMm, heightMm } },
+							},
+							inks: inks.map((ink) => ({ ...ink, name: title })),
+							issue: subtitle,
+							weak: [{ border: 0, reader: 'deutan', found: 3, asked: 10, severity: 'error' }],
+						}),
+					);
+					expect(strays(drawing)).toEqual([]);
+					const collar = drawing.texts.filter(({ layer }) => layer === 'collar');
+					const said = collar.map((one) => one.text).join(' ');
+					expect(said.replaceAll(' ', '')).toContain(caution.replaceAll(' ', ''));
+					expect(overlaps(drawing.texts.filter(({ layer }) => layer !== 'label'))).toEqual([]);
+				},
+			),
+			{ numRuns: 40 },
+		);
+	});
+});
+
+describe('recolouring', () => {
+	it('gives what drawing anew gives', () => {
+		const sheet = sheetOf(coverage);
+		const drawing = drawSheet(sheet);
+		const other = sheet.colouring!.map((ink) => (ink + 3) % 7);
+		for (const reader of ['typical', 'deutan', 'grey'] as const) {
+			const anew = drawSheet({ ...sheet, colouring: other, reader });
+			expect(recolour(drawing, other, inks, reader)).toEqual(anew);
+		}
+		expect(drawing).toEqual(drawSheet(sheet));
+		expect(() => recolour(drawing, other, inks.slice(1), 'typical')).toThrow(RangeError);
+	});
+});

@@ -1,0 +1,142 @@
+/**
+ * Coverage to drawing: place the regions on the paper, fill them, draw every border once, letter the
+ * map, set the collar. The same input gives the same drawing on every machine.
+ */
+import { asSeenBy as seen, labelInk } from '../colour/index.ts';
+import type { BorderList } from '../borders/border-list.ts';
+import type { Coverage } from '../boundaries/coverage.ts';
+import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
+import { collar } from './collar/collar.ts';
+import { drawLegend } from './collar/legend.ts';
+import { describe } from './describe.ts';
+import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
+import { labelSheet } from './labels/label-sheet.ts';
+import type { SheetLayout } from './layout.ts';
+import { leaderLayer, withLeaders } from './leader-lines.ts';
+import { lineLayers } from './lines.ts';
+import { paperSize } from './paper.ts';
+import { placeOnPaper } from './place-on-paper.ts';
+import { drawScale } from './collar/draw-scale.ts';
+import { smallerSide } from './smaller-side.ts';
+import { cleanText } from './type/clean-text.ts';
+
+export interface SheetInput {
+	coverage: Coverage;
+	borders: BorderList;
+	/** the level above, one a region: a province's name, or null */
+	groups: (string | null)[];
+	/** ink number from 0 for every region; null while nothing is coloured */
+	colouring: Int32Array | null;
+	inks: Ink[];
+	layout: SheetLayout;
+	reader: Reader;
+	weak: WeakBorder[];
+	/** 1 for a locked region */
+	locked?: Uint8Array;
+	/** what is issued and when, in words: `Edition 4, 1 December 2026` */
+	issue: string;
+	/** how a reader sees a colour; that of the colour engine unless given */
+	asSeenBy?: (hex: string, reader: Reader) => string;
+}
+
+/** Regions without an ink: a neutral that no palette is made of. */
+export const uncoloured = '#f2f2f2';
+
+/** Half the regions smaller than this, in hundredths of a millimetre: borders are drawn finer. */
+const fineBelow = 450;
+
+export function fillHex(ink: number, inks: DrawnInk[]): string {
+	return inks[ink]?.shown ?? uncoloured;
+}
+
+/** Ink numbers in use, ascending. */
+export function inksInUse(fills: { ink: number }[]): number[] {
+	return [...new Set(fills.map(({ ink }) => ink))].filter((ink) => ink >= 0).sort((a, b) => a - b);
+}
+
+/**
+ * Draws a sheet.
+ *
+ * In: see `SheetInput`; arrays are in region order, names may hold anything. Out: a drawing in whole
+ * hundredths of a millimetre in which every region has one fill, every border is drawn once, no two
+ * labels overlap, all text stands on the paper, and the caution is whole. Throws RangeError for an
+ * impossible paper size or a colouring that names an ink the palette has not.
+ */
+export function drawSheet(input: SheetInput): Drawing {
+	const { coverage, layout, reader, colouring, weak, groups } = input;
+	const see = input.asSeenBy ?? seen;
+	const inks = input.inks.map((ink) => ({ ...ink, shown: see(ink.hex, reader) }));
+	const marked = weak.length > 0;
+	let around = null as ReturnType<typeof collar> | null;
+	const placed = placeOnPaper(coverage, layout, (sentence) => {
+		const coloured = colouring !== null;
+		around = collar({
+			layout,
+			inks,
+			coloured,
+			weak: marked,
+			projection: sentence,
+			issue: input.issue,
+		});
+		return around.map;
+	});
+	const { map, texts, legend, bar, scale } = around!;
+	const fills = fillRegions(input, inks, placed.rings);
+	const names = coverage.names.map(cleanText);
+	const { arcs, rings, sides } = placed;
+	const labels = layout.labels
+		? labelSheet({ arcs, rings, sides, names, groups, areas: coverage.areasKm2, box: map, scale })
+		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
+	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
+	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
+	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
+	const measured = drawScale(placed, map, bar);
+	const drawing: Drawing = {
+		...paperSize(layout),
+		title: cleanText(layout.title),
+		description: '',
+		reader,
+		inks,
+		...withLeaders(arcs, labels.leaders),
+		fills,
+		lines: [
+			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+			...leaderLayer(arcs, labels.leaders, scale),
+		],
+		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
+		rects: [...measured.rects, ...keys.rects],
+		unplaced: labels.unplaced,
+		notes: { projection: placed.chosen.sentence, scale: measured.sentence },
+		legend,
+	};
+	return { ...drawing, description: describe(drawing) };
+}
+
+function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][]): RegionFill[] {
+	const { coverage, colouring, locked } = input;
+	return coverage.keys.map((key, region) => {
+		const ink = colouring ? colouring[region] : -1;
+		if (ink >= inks.length) throw new RangeError(`ink ${ink} of ${inks.length}`);
+		return {
+			region,
+			key,
+			name: cleanText(coverage.names[region]),
+			ink,
+			hex: fillHex(ink, inks),
+			...(locked?.[region] ? { locked: true } : {}),
+			rings: rings[region],
+		};
+	});
+}
+
+/** Black or white for every label that stands on a fill, whichever reads better. */
+export function inkLabels<T extends { region?: number; onFill?: boolean; hex: string }>(
+	texts: T[],
+	fills: RegionFill[],
+): T[] {
+	return texts.map((text) =>
+		text.onFill && text.region !== undefined
+			? { ...text, hex: labelInk(fills[text.region].hex) }
+			: text,
+	);
+}

@@ -1,0 +1,66 @@
+import type { Drawing } from '../drawing.ts';
+
+type Arcs = Pick<Drawing, 'arcPoints' | 'arcStarts'>;
+
+/** Two whole numbers with as few characters as path data allows: a minus sign parts them. */
+const pair = (x: number, y: number): string => (y < 0 ? `${x}${y}` : `${x} ${y}`);
+
+/** Steps from point to point of an arc, walked either way, without its first point. */
+function steps({ arcPoints, arcStarts }: Arcs, signed: number): string {
+	const arc = signed < 0 ? ~signed : signed;
+	const [start, end] = [arcStarts[arc], arcStarts[arc + 1]];
+	const way = signed < 0 ? -1 : 1;
+	let at = signed < 0 ? end - 1 : start;
+	let text = '';
+	for (let left = end - start - 1; left > 0; left--) {
+		const next = at + way;
+		const dx = arcPoints[2 * next] - arcPoints[2 * at];
+		const dy = arcPoints[2 * next + 1] - arcPoints[2 * at + 1];
+		text += text && dx >= 0 ? ` ${pair(dx, dy)}` : pair(dx, dy);
+		at = next;
+	}
+	return text;
+}
+
+function startOf({ arcPoints, arcStarts }: Arcs, signed: number): string {
+	const point = signed < 0 ? arcStarts[~signed + 1] - 1 : arcStarts[signed];
+	return pair(arcPoints[2 * point], arcPoints[2 * point + 1]);
+}
+
+/**
+ * Closed rings as path data, each a moveto and relative linetos. Arcs that shrank to one point add
+ * nothing: a lineto without numbers would end the path there (SVG 2, section 9.5.4).
+ */
+export function ringsPath(arcs: Arcs, rings: Int32Array[]): string {
+	return rings
+		.map((ring) => {
+			const parts = Array.from(ring, (signed) => steps(arcs, signed)).filter((text) => text !== '');
+			return `M${startOf(arcs, ring[0])}l${joined(parts)}z`;
+		})
+		.join('');
+}
+
+function joined(parts: string[]): string {
+	return parts.reduce(
+		(all, part) => (all && !part.startsWith('-') ? `${all} ${part}` : all + part),
+		'',
+	);
+}
+
+/** Arcs as open lines; a closed arc ends with `z`, so that its corner is joined and not capped. */
+export function linesPath(arcs: Arcs, list: Uint32Array): string {
+	let text = '';
+	for (const arc of list) {
+		const line = steps(arcs, arc);
+		if (line !== '') text += `M${startOf(arcs, arc)}l${line}${isClosed(arcs, arc) ? 'z' : ''}`;
+	}
+	return text;
+}
+
+function isClosed({ arcPoints, arcStarts }: Arcs, arc: number): boolean {
+	const [first, last] = [arcStarts[arc], arcStarts[arc + 1] - 1];
+	return (
+		arcPoints[2 * first] === arcPoints[2 * last] &&
+		arcPoints[2 * first + 1] === arcPoints[2 * last + 1]
+	);
+}

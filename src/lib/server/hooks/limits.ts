@@ -1,0 +1,57 @@
+import { error, type Handle, type RequestEvent } from '@sveltejs/kit';
+import { limits, use } from '../services/limits.service.ts';
+import { TooMany } from '../services/outcomes.ts';
+
+const MEGABYTE = 1024 * 1024;
+/** Routes that read their body as a stream to disk and count it themselves. */
+const streamed = /^\/(\(app\)\/\[team\]\/|api\/v1\/)/;
+
+/** Refuses bodies that are larger than anything this route takes, before a byte of them is read. */
+export const handleBodySize: Handle = ({ event, resolve }) => {
+	const { request } = event;
+	if (request.body && largestBody(event) < bodyLength(request)) {
+		error(413, 'This is more than can be sent here at once.');
+	}
+	return resolve(event);
+};
+
+/** A body of unknown length counts as endless, except where it is counted while it is read. */
+const bodyLength = (request: Request): number =>
+	Number(request.headers.get('content-length') ?? Infinity);
+
+function largestBody(event: RequestEvent): number {
+	const isFile = event.request.headers.get('content-type')?.startsWith('multipart/form-data');
+	if (!streamed.test(event.route.id ?? '')) return MEGABYTE;
+	return isFile || event.route.id?.startsWith('/api/') ? Infinity : 32 * MEGABYTE;
+}
+
+/**
+ * Counts what changes something, by person where one is signed in and by address otherwise. The API counts
+ * its calls by token.
+ */
+export const handleRate: Handle = async ({ event, resolve }) => {
+	const { request, route, locals } = event;
+	const reads = request.method === 'GET' || request.method === 'HEAD';
+	if (reads || route.id?.startsWith('/api/v1/')) return resolve(event);
+	try {
+		if (locals.user) await use(limits.writesByPerson, locals.user.id);
+		else await use(limits.writesByAddress, event.getClientAddress());
+	} catch (problem) {
+		if (problem instanceof TooMany) return tooMany(event, problem);
+		throw problem;
+	}
+	return resolve(event);
+};
+
+/** The answer in the form that the asker reads: a form's script, a program or a person. */
+function tooMany({ request }: RequestEvent, problem: TooMany): Response {
+	const headers = { 'retry-after': String(problem.retryAfter) };
+	if (request.headers.has('x-sveltekit-action')) {
+		const result = { type: 'error', error: { message: problem.message } };
+		return Response.json(result, { status: 429, headers });
+	}
+	return new Response(problem.message, {
+		status: 429,
+		headers: { ...headers, 'content-type': 'text/plain; charset=utf-8' },
+	});
+}

@@ -1,0 +1,73 @@
+import { gzipSync } from 'node:zlib';
+import { decodeCoverage } from '../../engines/boundaries/index.ts';
+import type { BorderList } from '../../engines/borders/index.ts';
+import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
+import type { Ink, Reader } from '../../engines/palettes/index.ts';
+import { drawSheet, sheetTable, type SheetLayout } from '../../engines/sheet/index.ts';
+import { faceFiles } from './faces.ts';
+import type { Task } from './task-port.ts';
+
+export interface PaintInput {
+	/** the coverage as stored */
+	geometry: Uint8Array;
+	/** those that bind on the sheet */
+	borders: BorderList;
+	groups: (string | null)[];
+	/** ink of each region; null while nothing is coloured */
+	colouring: number[] | null;
+	inks: Ink[];
+	layout: SheetLayout;
+	reader: Reader;
+	locked: number[];
+	/** what is issued and when, in words */
+	issue: string;
+}
+
+/** A region whose ink the palette lacks is drawn as not coloured. */
+function draw(input: PaintInput) {
+	const coverage = decodeCoverage(input.geometry);
+	const locked = new Uint8Array(coverage.keys.length);
+	for (const region of input.locked) locked[region] = 1;
+	const { borders, groups, inks, layout, reader, issue } = input;
+	const colouring =
+		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
+	const drawing = drawSheet({
+		...{ coverage, borders, groups, inks, layout, reader, issue },
+		...{ colouring, locked, weak: [] },
+	});
+	return { coverage, drawing };
+}
+
+/** Draws and paints a sheet as an SVG file, packed for its way. */
+export function paintSheet({ input }: Task<PaintInput>): { gzip: Uint8Array } {
+	return { gzip: gzipSync(exportSvg(draw(input).drawing, { fonts: faceFiles() })) };
+}
+
+export interface SheetFile {
+	extension: 'svg' | 'geojson' | 'csv';
+	mediaType: string;
+	bytes: Uint8Array;
+}
+
+/** Every file an edition is issued as, all from one drawing. */
+export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
+	const { coverage, drawing } = draw(input);
+	const rows = sheetTable(drawing, coverage, input.groups);
+	return [
+		{
+			extension: 'svg',
+			mediaType: 'image/svg+xml',
+			bytes: exportSvg(drawing, { fonts: faceFiles() }),
+		},
+		{
+			extension: 'geojson',
+			mediaType: 'application/geo+json',
+			bytes: exportGeoJson(coverage, rows),
+		},
+		{
+			extension: 'csv',
+			mediaType: 'text/csv; charset=utf-8',
+			bytes: exportCsv(rows, { byteOrderMark: true }),
+		},
+	];
+}

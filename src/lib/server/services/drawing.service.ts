@@ -1,0 +1,85 @@
+import type { Reader } from '../../engines/palettes/index.ts';
+import type { Draft } from '../../engines/editions/draft.ts';
+import { requireAccess, type Member } from '../access/member.ts';
+import type { Db } from '../database/connection.ts';
+import type { PaintInput } from '../jobs/paint.work.ts';
+import type { Workshop } from '../jobs/workshop.ts';
+import { readGeometry } from '../repositories/boundaries.repository.ts';
+import { nextEditionNumber } from '../repositories/editions.repository.ts';
+import { boundaryView, type BoundaryView } from './boundary-view.ts';
+import { dayInWords } from './day-in-words.ts';
+import { documentOf, draftOf, sheetOf } from './draft.service.ts';
+import { sheetBorders } from './draft-problem.ts';
+import { NotFound } from './outcomes.ts';
+import { groupsOf } from './sheet.service.ts';
+
+export interface SheetSvg {
+	/** changes whenever the file would */
+	tag: string;
+	fileName: string;
+	/** draws it; the bytes are packed with gzip */
+	paint(signal?: AbortSignal): Promise<Uint8Array>;
+}
+
+/** The current draft of a sheet as an SVG file, as one kind of reader sees it. */
+export async function draftSvg(
+	shop: Workshop,
+	member: Member,
+	number: number,
+	reader: Reader,
+): Promise<SheetSvg> {
+	requireAccess(member, 'sheet.read');
+	const sheet = await sheetOf(shop.db, member, number);
+	const draft = await draftOf(shop.db, sheet.id, sheet.revision);
+	const view = await boundaryView(shop.db, sheet.boundary_set_id);
+	const last = (await nextEditionNumber(shop.db, sheet.id)) - 1;
+	const issue = draftInWords(last, draft.revision, draft.saved_at);
+	return {
+		tag: `${sheet.id}-${draft.revision}-${last}-${reader}`,
+		fileName: `${fileStem(sheet.name)}-draft-${draft.revision}.svg`,
+		async paint(signal) {
+			const document = documentOf(draft);
+			const input = await paintInput(shop.db, view, document, draft.inks, reader, issue);
+			return (await shop.pool.run('paintSheet', input, { signal })).gzip;
+		},
+	};
+}
+
+/** Everything the drawing of a draft depends on. */
+export async function paintInput(
+	db: Db,
+	view: BoundaryView,
+	draft: Draft,
+	colouring: number[] | null,
+	reader: Reader,
+	issue: string,
+): Promise<PaintInput> {
+	const geometry = await readGeometry(db, view.set.id);
+	if (!geometry) throw new NotFound('boundary set');
+	return {
+		geometry,
+		borders: sheetBorders(view, draft),
+		groups: await groupsOf(db, view, draft.layout.groupColumn),
+		colouring,
+		inks: draft.palette.inks,
+		layout: draft.layout,
+		reader,
+		locked: Object.keys(draft.locks).flatMap((key) => view.ordinal.get(key) ?? []),
+		issue,
+	};
+}
+
+const draftInWords = (last: number, revision: number, savedAt: Date): string =>
+	last > 0
+		? `Draft after edition ${last}, ${dayInWords(savedAt)}`
+		: `Draft ${revision}, ${dayInWords(savedAt)}`;
+
+/** A name as part of a file's name: plain letters and digits, so that every system takes it. */
+export const fileStem = (name: string): string =>
+	name
+		.normalize('NFKD')
+		.replace(/\p{M}/gu, '')
+		.toLowerCase()
+		.replace(/[^a-z0-9]+/g, '-')
+		.replace(/^-+|-+$/g, '')
+		.slice(0, 60) || 'sheet';

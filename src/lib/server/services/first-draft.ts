@@ -1,0 +1,35 @@
+import type { Draft } from '../../engines/editions/draft.ts';
+
+/** What a sheet starts with: fewest inks, no locks, every border as found, a plain layout. */
+export function firstDraft(given: {
+	title: string;
+	palette: Draft['palette'];
+	portrait: boolean;
+}): Draft {
+	const { id, name, inks } = given.palette;
+	return {
+		inks: 'fewest',
+		palette: { id, name, inks: inks.map((ink) => ({ name: ink.name, hex: ink.hex })) },
+		locks: {},
+		forbidden: [],
+		alike: [],
+		apart: [],
+		pointTouches: false,
+		struck: [],
+		added: [],
+		seed: 0,
+		layout: {
+			title: given.title,
+			subtitle: '',
+			paper: 'A4',
+			orientation: given.portrait ? 'portrait' : 'landscape',
+			marginMm: 10,
+			projection: 'auto',
+			labels: true,
+			groupColumn: null,
+			legend: true,
+			scaleBar: true,
+			credits: '',
+		},
+	};
+}

@@ -1,0 +1,198 @@
+import type { DeskEdition, DeskFinding, DeskSheet, SheetRow, SourceNote } from '../../schemas/desk.ts';
+import { actions, type Action } from '../access/roles.ts';
+import { mayDo, requireAccess, type Member } from '../access/member.ts';
+import type { Db } from '../database/connection.ts';
+import type { Workshop } from '../jobs/workshop.ts';
+import {
+	acceptFinding as markAccepted,
+	deleteUnusedBoundarySet,
+	readAttribute,
+	readFindings,
+	readGeometry,
+} from '../repositories/boundaries.repository.ts';
+import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
+import { deleteSheet, holdSheet, listSheets, renameSheet } from '../repositories/sheets.repository.ts';
+import { record } from './activity.service.ts';
+import { boundaryView, type BoundaryView } from './boundary-view.ts';
+import { documentOf, draftOf, namesIn, sheetOf } from './draft.service.ts';
+import { deskColouring } from './outcome-of-colouring.ts';
+import { Conflict, NotFound } from './outcomes.ts';
+import { personName } from './people.ts';
+import { dropUnused } from './stored-files.ts';
+
+type Reading = Pick<Workshop, 'db'>;
+
+/** The team's sheets, the one saved last first. */
+export async function sheetList(shop: Reading, member: Member): Promise<SheetRow[]> {
+	requireAccess(member, 'sheet.read');
+	const rows = await listSheets(shop.db, member.team.id);
+	return rows.map((row) => ({
+		number: row.number,
+		name: row.name,
+		regionCount: row.region_count,
+		openFindings: Number(row.open_findings ?? 0),
+		inksUsed: row.inks_used,
+		lastEdition: row.last_edition,
+		savedAt: row.saved_at.toISOString(),
+		savedBy: personName(row),
+	}));
+}
+
+/** Everything a sheet's pages show, but for its geometry. */
+export async function deskSheet(shop: Reading, member: Member, number: number): Promise<DeskSheet> {
+	requireAccess(member, 'sheet.read');
+	const { db } = shop;
+	const sheet = await sheetOf(db, member, number);
+	const draft = await draftOf(db, sheet.id, sheet.revision);
+	const view = await boundaryView(db, sheet.boundary_set_id);
+	const document = documentOf(draft);
+	return {
+		id: sheet.id,
+		number: sheet.number,
+		name: sheet.name,
+		revision: draft.revision,
+		savedBy: personName(draft),
+		savedAt: draft.saved_at.toISOString(),
+		boundarySet: boundarySetNote(view),
+		draft: document,
+		colouring: deskColouring(namesIn(view, document), draft),
+		regions: {
+			key: view.keys,
+			name: view.names,
+			parts: view.parts,
+			areaKm2: view.areasKm2,
+			enclaveOf: view.enclaveOf,
+			group: await groupsOf(db, view, document.layout.groupColumn),
+		},
+		borders: view.borders,
+		findings: await findingsOf(db, view.set.id),
+		editions: await editionsOf(db, sheet.id),
+		rights: rightsOf(member),
+	};
+}
+
+export const rightsOf = (member: Member): Action[] =>
+	actions.filter((action) => mayDo(member, action));
+
+const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
+	id: set.id,
+	fileName: set.file_name,
+	regionCount: set.region_count,
+	planar: set.planar,
+	planarWitness: set.planar_witness as DeskSheet['boundarySet']['planarWitness'],
+	source: set.source as unknown as SourceNote,
+	columns: set.columns,
+});
+
+/** The level above of every region, by the column that names it. */
+export const groupsOf = async (
+	db: Db,
+	view: BoundaryView,
+	column: string | null,
+): Promise<(string | null)[]> =>
+	column !== null && view.set.columns.includes(column)
+		? readAttribute(db, view.set.id, column)
+		: view.keys.map(() => null);
+
+async function findingsOf(db: Db, boundarySetId: string): Promise<DeskFinding[]> {
+	const rows = await readFindings(db, boundarySetId);
+	return rows.map((row) => ({
+		id: row.id,
+		code: row.code,
+		severity: row.severity,
+		message: row.message,
+		regions: row.regions,
+		at: row.lon === null || row.lat === null ? null : [row.lon, row.lat],
+		acceptedBy: personName({ by_name: row.accepted_name, by_email: row.accepted_email }),
+		acceptedAt: row.accepted_at?.toISOString() ?? null,
+	}));
+}
+
+export async function editionsOf(db: Db, sheetId: string): Promise<DeskEdition[]> {
+	const files = await listEditionFiles(db, sheetId);
+	const editions = await listEditions(db, sheetId);
+	return editions.map((edition) => ({
+		number: edition.number,
+		issuedAt: edition.issued_at.toISOString(),
+		issuedBy: personName(edition),
+		digest: edition.digest,
+		note: edition.note,
+		files: files
+			.filter(({ number }) => number === edition.number)
+			.map(({ name, media_type: mediaType, bytes }) => ({ name, mediaType, bytes })),
+	}));
+}
+
+/** The coverage as stored, with the boundary set's id as its tag: it never changes. */
+export async function sheetGeometry(
+	shop: Reading,
+	member: Member,
+	number: number,
+): Promise<{ tag: string; read(): Promise<Buffer> }> {
+	requireAccess(member, 'sheet.read');
+	const sheet = await sheetOf(shop.db, member, number);
+	const tag = sheet.boundary_set_id;
+	return {
+		tag,
+		async read() {
+			const bytes = await readGeometry(shop.db, tag);
+			if (!bytes) throw new NotFound('boundary set');
+			return bytes;
+		},
+	};
+}
+
+export async function acceptFinding(
+	shop: Reading,
+	member: Member,
+	number: number,
+	finding: number,
+): Promise<void> {
+	requireAccess(member, 'findings.accept');
+	const sheet = await sheetOf(shop.db, member, number);
+	await shop.db.transaction().execute(async (trx) => {
+		if (!(await markAccepted(trx, sheet.boundary_set_id, finding, member.userId))) {
+			throw new NotFound('open finding');
+		}
+		const subject = { kind: 'finding', id: String(finding) };
+		await record(trx, member, 'finding.accepted', subject, { sheet: sheet.number });
+	});
+}
+
+export async function nameSheet(
+	shop: Reading,
+	member: Member,
+	number: number,
+	name: string,
+): Promise<void> {
+	requireAccess(member, 'layout.edit');
+	const sheet = await sheetOf(shop.db, member, number);
+	await shop.db.transaction().execute(async (trx) => {
+		await renameSheet(trx, sheet.id, name);
+		const subject = { kind: 'sheet', id: sheet.id };
+		await record(trx, member, 'sheet.renamed', subject, { sheet: number, from: sheet.name, to: name });
+	});
+}
+
+/** Deletes a sheet that was never issued; editions are kept for good. */
+export async function removeSheet(
+	shop: Pick<Workshop, 'db' | 'files'>,
+	member: Member,
+	number: number,
+): Promise<void> {
+	requireAccess(member, 'sheet.delete');
+	await shop.db.transaction().execute(async (trx) => {
+		const sheet = await holdSheet(trx, member.team.id, number);
+		if (!sheet) throw new NotFound('sheet');
+		if ((await listEditions(trx, sheet.id)).length > 0) {
+			throw new Conflict('issued', 'A sheet with issued editions cannot be deleted.');
+		}
+		const { set } = await boundaryView(trx, sheet.boundary_set_id);
+		await deleteSheet(trx, sheet.id);
+		const subject = { kind: 'sheet', id: sheet.id };
+		await record(trx, member, 'sheet.deleted', subject, { sheet: number, name: sheet.name });
+		if (await deleteUnusedBoundarySet(trx, set.id)) {
+			await dropUnused(trx, shop.files, set.file_digest);
+		}
+	});
+}

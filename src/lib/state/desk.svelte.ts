@@ -1,0 +1,217 @@
+import { getContext, setContext } from 'svelte';
+import type { ColouringResult } from '$lib/engines/colouring/problem';
+import type { Draft } from '$lib/engines/editions/draft';
+import type { Reader } from '$lib/engines/palettes/palette';
+import type { DeskColouring, DeskSheet } from '$lib/schemas/desk';
+import { Colourer, type ColourReply } from './colourer';
+import { DraftState } from './draft.svelte';
+import type { Evidence } from './evidence';
+import { inkUse } from './ink-use';
+import type { Keeper } from './kept-drafts';
+import { judgePalette } from './palette-judgement';
+import { colouringParts, problemOf } from './problem-of-draft';
+import { linkRegions, neighboursOf } from './region-links';
+import { numberRegions, standings } from './rules-in-force';
+import type { SaveDraft } from './save-draft';
+import type { DrawnSheet } from './drawn-sheet';
+
+export interface DeskStart {
+	sheet: DeskSheet;
+	/** where the sheet's pages are: /team/sheets/12 */
+	address: string;
+	/** name that goes with a lock */
+	userName: string | null;
+	save: SaveDraft;
+	keeper: Keeper | null;
+	/** says what was found, in one sentence; the engine's own words */
+	sentence: (result: ColouringResult, sheet: DeskSheet, draft: Draft) => string;
+}
+
+/** Everything on the desk of one sheet: what the server gave, the draft on top of it, what is selected. */
+export class Desk {
+	sheet: DeskSheet = $state.raw()!;
+	readonly draft: DraftState;
+	readonly address: string;
+	readonly userName: string | null;
+
+	reader: Reader = $state('typical');
+	/** the one selection: a region's number */
+	selected: number | null = $state(null);
+	evidence: Evidence | null = $state.raw(null);
+	/** ink whose regions are pointed out while the strip is hovered or focused */
+	pointedInk: number | null = $state(null);
+	/** whether every border that some reader could miss stands out on the sheet */
+	showWeak = $state(false);
+	panel: 'stage' | 'region' = $state('stage');
+	view: 'sheet' | 'table' = $state('sheet');
+
+	/** what is known about the draft as it stands */
+	answer: DeskColouring | null = $state.raw(null);
+	/** the last colouring that kept every rule; -1 where there is none */
+	inks: Int32Array = $state.raw()!;
+	working = $state(false);
+	/** the engine ended without an answer: what it said */
+	failure = $state('');
+	drawn: DrawnSheet | null = $state.raw(null);
+	/** why the sheet could not be drawn here; '' while all is well */
+	drawFailure = $state('');
+
+	numbers = $derived(numberRegions(this.sheet.regions.key));
+	standing = $derived.by(() => standings(this.sheet.borders, this.draft.document, this.numbers));
+	links = $derived(linkRegions(this.sheet.regions.key.length, this.sheet.borders));
+	neighbours = $derived(
+		this.selected === null ? [] : neighboursOf(this.selected, this.sheet.borders, this.links),
+	);
+	palette = $derived.by(() =>
+		judgePalette(
+			this.draft.document.palette.inks,
+			this.inks,
+			this.sheet.borders,
+			this.standing,
+			this.drawn?.sizesMm ?? null,
+		),
+	);
+	uses = $derived.by(() =>
+		inkUse(this.inks, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),
+	);
+
+	#start: DeskStart;
+	#colourer: Colourer | null = null;
+	#asked: readonly unknown[];
+	#askedFor: Draft;
+	/** the colouring that belongs to a document, so that undo shows it again at once */
+	#known = new WeakMap<Draft, { answer: DeskColouring | null; inks: Int32Array }>();
+
+	constructor(start: DeskStart) {
+		this.#start = start;
+		this.sheet = start.sheet;
+		this.address = start.address;
+		this.userName = start.userName;
+		this.answer = start.sheet.colouring;
+		this.inks = inksOf(start.sheet.colouring, start.sheet.regions.key.length);
+		this.#askedFor = start.sheet.draft;
+		this.#asked = colouringParts(start.sheet.draft);
+		this.#remember(start.sheet.draft);
+		this.draft = new DraftState({
+			sheetId: start.sheet.id,
+			revision: start.sheet.revision,
+			document: start.sheet.draft,
+			savedAt: start.sheet.savedAt,
+			save: start.save,
+			keeper: start.keeper,
+			onchange: (document) => this.#recolour(document),
+			onsaved: ({ colouring }) => this.#adopt(colouring, this.draft.document),
+		});
+	}
+
+	may(action: DeskSheet['rights'][number]): boolean {
+		return this.sheet.rights.includes(action);
+	}
+
+	/** In the browser: the worker that answers each change. */
+	work(makeWorker: () => Worker): () => void {
+		this.#colourer = new Colourer(makeWorker, (reply) => this.#settle(reply));
+		return () => {
+			this.#colourer?.stop();
+			this.#colourer = null;
+			this.draft.stop();
+		};
+	}
+
+	/** The page was loaded again: after a finding was accepted, an edition issued. */
+	refresh(sheet: DeskSheet) {
+		this.sheet = sheet;
+		this.draft.refresh(sheet.revision, sheet.draft, sheet.savedAt);
+		if (sheet.colouring && !this.draft.dirty && sheet.revision === this.draft.revision)
+			this.#adopt(sheet.colouring, this.draft.document);
+	}
+
+	select(region: number | null, open = false) {
+		this.selected = region;
+		if (region === null) this.panel = 'stage';
+		else if (open) this.panel = 'region';
+	}
+
+	nameOf(region: number): string {
+		return this.sheet.regions.name[region] || this.sheet.regions.key[region];
+	}
+
+	/** Stops a colouring that takes long; what is on the sheet stays. */
+	stopWorking() {
+		this.#colourer?.stop();
+		this.working = false;
+		this.failure = 'Stopped. The sheet shows the last colouring that kept every rule.';
+	}
+
+	#recolour(document: Draft) {
+		const known = this.#known.get(document);
+		const parts = colouringParts(document);
+		const unchanged = parts.every((part, index) => part === this.#asked[index]);
+		this.#asked = parts;
+		if (known) {
+			this.#colourer?.stop();
+			this.working = false;
+			this.answer = known.answer;
+			this.inks = known.inks;
+			this.evidence = null;
+		} else if (unchanged) {
+			if (!this.working) this.#remember(document);
+			else this.#askedFor = document;
+		} else this.#ask(document);
+	}
+
+	#ask(document: Draft) {
+		this.#askedFor = document;
+		this.working = this.#colourer !== null;
+		this.failure = '';
+		this.evidence = null;
+		const { borders } = this.sheet;
+		const standing = standings(borders, document, this.numbers);
+		this.#colourer?.ask(problemOf(document, borders, standing, this.numbers, this.#previous()));
+	}
+
+	#previous(): Int32Array | null {
+		return this.inks.some((ink) => ink >= 0) ? this.inks : null;
+	}
+
+	#settle(reply: ColourReply) {
+		this.working = false;
+		if ('failed' in reply) {
+			this.failure = `The colouring ended without an answer (${reply.failed}).`;
+			return;
+		}
+		const sentence = this.#start.sentence(reply.result, this.sheet, this.#askedFor);
+		this.#adopt(deskColouring(reply.result, sentence), this.#askedFor);
+	}
+
+	#adopt(answer: DeskColouring | null, document: Draft) {
+		if (!answer) return;
+		this.answer = answer;
+		if (answer.status === 'coloured') this.#showInks(Int32Array.from(answer.inks));
+		this.#remember(document);
+	}
+
+	#showInks(inks: Int32Array) {
+		const same = inks.length === this.inks.length && inks.every((ink, i) => ink === this.inks[i]);
+		if (!same) this.inks = inks;
+	}
+
+	#remember(document: Draft) {
+		this.#known.set(document, { answer: this.answer, inks: this.inks });
+	}
+}
+
+const inksOf = (colouring: DeskColouring | null, regions: number): Int32Array =>
+	colouring?.status === 'coloured'
+		? Int32Array.from(colouring.inks)
+		: new Int32Array(regions).fill(-1);
+
+function deskColouring(result: ColouringResult, sentence: string): DeskColouring {
+	if (result.status !== 'coloured') return { ...result, sentence };
+	const { inksUsed, lowerBound, proof, colouring } = result;
+	return { status: 'coloured', inks: [...colouring], inksUsed, lowerBound, proof, sentence };
+}
+
+const place = Symbol('desk');
+export const setDesk = (desk: Desk): Desk => setContext(place, desk);
+export const getDesk = (): Desk => getContext<Desk>(place);

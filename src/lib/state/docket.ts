@@ -1,0 +1,154 @@
+import { borderKinds } from '$lib/engines/borders/border-list';
+import type { Draft } from '$lib/engines/editions/draft';
+import type { DeskColouring, DeskSheet } from '$lib/schemas/desk';
+import type { MarkKind } from '$lib/components/Mark.svelte';
+import { count, counted, date } from '$lib/components/format';
+import type { Standing } from './rules-in-force';
+
+/** A run of the words of a stage; with `to` it leads to the place its number speaks of. */
+export interface DocketWords {
+	text: string;
+	to?: string;
+}
+export interface DocketStage {
+	id: 'boundaries' | 'borders' | 'colours' | 'palette' | 'layout' | 'editions';
+	title: string;
+	mark: MarkKind | null;
+	words: DocketWords[];
+}
+
+export interface DocketState {
+	sheet: DeskSheet;
+	draft: Draft;
+	standing: readonly Standing[];
+	answer: DeskColouring | null;
+	working: boolean;
+	palette: { mark: MarkKind | null; sentence: string };
+	/** names of the projection drawn, and how many labels had to be listed; null until it is drawn */
+	drawn: { projection: string; unplaced: number } | null;
+	/** whether the draft was saved after the last edition was issued */
+	changedSinceEdition: boolean;
+}
+
+/** The stages in the order the work flows, each with its state in words and numbers. */
+export const docket = (state: DocketState): DocketStage[] => [
+	{ id: 'boundaries', title: 'Boundaries', ...boundaries(state) },
+	{ id: 'borders', title: 'Borders', ...borders(state) },
+	{ id: 'colours', title: 'Colours', ...colours(state) },
+	{
+		id: 'palette',
+		title: 'Palette',
+		mark: state.working ? null : state.palette.mark,
+		words: [
+			state.working
+				? { text: 'Waits for the colouring' }
+				: { text: state.palette.sentence, to: '#verdict' },
+		],
+	},
+	{ id: 'layout', title: 'Layout', ...layout(state) },
+	{ id: 'editions', title: 'Editions', ...editions(state) },
+];
+
+type Said = Pick<DocketStage, 'mark' | 'words'>;
+
+function boundaries({ sheet, draft }: DocketState): Said {
+	const open = sheet.findings.filter(({ acceptedAt }) => acceptedAt === null);
+	const worst = open.some(({ severity }) => severity === 'error')
+		? 'error'
+		: open.some(({ severity }) => severity === 'warning')
+			? 'warning'
+			: 'clear';
+	const groups = new Set(sheet.regions.group.filter((group) => group !== null)).size;
+	const regions = counted(sheet.boundarySet.regionCount, 'region');
+	const within =
+		groups > 1 && draft.layout.groupColumn
+			? ` in ${count(groups)} of "${draft.layout.groupColumn}"`
+			: '';
+	return {
+		mark: worst,
+		words: [
+			{ text: regions, to: '#regions' },
+			{ text: `${within}.` },
+			open.length
+				? {
+						text: `${counted(open.length, 'finding')} open${worst === 'error' ? '' : ', none an error'}`,
+						to: '#findings',
+					}
+				: { text: 'No finding open' },
+		],
+	};
+}
+
+function borders({ sheet, draft, standing }: DocketState): Said {
+	const of = (kind: (typeof borderKinds)[number]) =>
+		sheet.borders.kind.reduce((sum, code) => sum + Number(borderKinds[code] === kind), 0);
+	const points = of('point');
+	const struck = standing.filter((one) => one === 'struck').length;
+	const parts = [
+		`${count(of('line'))} by line`,
+		points ? `${count(points)} by point${draft.pointTouches ? '' : ', not counted'}` : '',
+		of('water') ? `${count(of('water'))} across water` : '',
+		struck ? `${count(struck)} struck out` : '',
+		draft.added.length ? `${count(draft.added.length)} added by hand` : '',
+	];
+	const words: DocketWords[] = [
+		{ text: parts.filter(Boolean).join(', '), to: '#borders' },
+		{ text: '.' },
+	];
+	if (!sheet.boundarySet.planar) words.push({ text: 'Not planar', to: '#planar' });
+	return { mark: 'clear', words };
+}
+
+function colours({ answer, draft, working }: DocketState): Said {
+	const locks = Object.keys(draft.locks).length;
+	const held = locks ? { text: `${counted(locks, 'lock')}`, to: '#locks' } : { text: 'No locks' };
+	if (working) return { mark: null, words: [{ text: 'Colouring now.' }, held] };
+	if (!answer) return { mark: null, words: [{ text: 'Not coloured yet.' }, held] };
+	if (answer.status === 'impossible') {
+		const { locks: colliding } = answer.explanation;
+		const what = colliding.length
+			? `${counted(colliding.length, 'lock')} collide`
+			: 'The rules collide';
+		return { mark: 'error', words: [{ text: what, to: '#because' }, { text: '.' }, held] };
+	}
+	if (answer.status === 'undecided')
+		return { mark: 'warning', words: [{ text: 'Undecided', to: '#because' }, { text: '.' }, held] };
+	const proved = answer.lowerBound === answer.inksUsed;
+	return {
+		mark: 'clear',
+		words: [
+			{ text: `${counted(answer.inksUsed, 'ink')},` },
+			{ text: proved ? 'proved fewest' : `at least ${answer.lowerBound} needed`, to: '#because' },
+			{ text: '.' },
+			held,
+		],
+	};
+}
+
+function layout({ draft: { layout: sheet }, drawn }: DocketState): Said {
+	const paper =
+		typeof sheet.paper === 'string'
+			? `${sheet.paper} ${sheet.orientation}`
+			: `${sheet.paper.widthMm} by ${sheet.paper.heightMm} mm`;
+	const words: DocketWords[] = [{ text: drawn ? `${paper}, ${drawn.projection}.` : `${paper}.` }];
+	if (drawn && sheet.labels)
+		words.push(
+			drawn.unplaced
+				? { text: `${counted(drawn.unplaced, 'label')} not placed`, to: '#labels' }
+				: { text: 'Every label placed' },
+		);
+	return { mark: drawn ? 'clear' : null, words };
+}
+
+function editions({ sheet, changedSinceEdition }: DocketState): Said {
+	const [last] = sheet.editions;
+	if (!last) return { mark: null, words: [{ text: 'None issued yet' }] };
+	return {
+		mark: 'clear',
+		words: [
+			{ text: `${counted(sheet.editions.length, 'edition')} issued`, to: '#editions' },
+			{ text: `, last on ${date(last.issuedAt)}.` },
+			...(changedSinceEdition ? [{ text: 'The draft has changed since' }] : []),
+		],
+	};
+}

@@ -1,0 +1,242 @@
+import type { Draft } from '$lib/engines/editions/draft';
+import type { DraftSaved, DraftStale } from '$lib/schemas/desk';
+import type { Keeper, KeptDraft } from './kept-drafts';
+import { rebase } from './rebase';
+import type { SaveAnswer, SaveDraft } from './save-draft';
+
+export type Saving =
+	'saved' | 'waiting' | 'saving' | 'offline' | 'stale' | 'signed-out' | 'refused';
+
+interface Step {
+	/** what the change did, for "Undo: lock Verton" */
+	label: string;
+	before: Draft;
+	after: Draft;
+}
+
+export interface DraftStart {
+	sheetId: string;
+	revision: number;
+	document: Draft;
+	savedAt: string;
+	save: SaveDraft;
+	keeper: Keeper | null;
+	/** told after each save, with what the server computed */
+	onsaved?: (saved: DraftSaved) => void;
+	/** told after each change of the document, by whatever way */
+	onchange?: (document: Draft) => void;
+}
+
+const quiet = 700;
+const retries = [2_000, 5_000, 15_000, 30_000];
+const mostSteps = 200;
+
+/**
+ * The draft being worked on: one document, a line of steps back and forward, saved by itself a moment
+ * after each change, kept in this browser until the server has it. Never overwrites what somebody
+ * else saved: it stops, says who and when, and asks.
+ */
+export class DraftState {
+	document: Draft = $state.raw()!;
+	savedAt: string = $state()!;
+	saving: Saving = $state('saved');
+	stale: DraftStale | null = $state.raw(null);
+	refusal: string = $state('');
+	/** whether the browser could keep the work that the server does not have */
+	kept: boolean = $state(true);
+	/** when what is shown was restored from this browser: since when it had been kept */
+	restoredFrom: string | null = $state(null);
+	past: Step[] = $state.raw([]);
+	future: Step[] = $state.raw([]);
+
+	#start: DraftStart;
+	#revision: number;
+	#base: Draft;
+	#timer: ReturnType<typeof setTimeout> | undefined;
+	#failures = 0;
+	#running = false;
+
+	constructor(start: DraftStart) {
+		this.#start = start;
+		this.#revision = start.revision;
+		this.#base = start.document;
+		this.document = start.document;
+		this.savedAt = start.savedAt;
+	}
+
+	get revision() {
+		return this.#revision;
+	}
+	get dirty() {
+		return this.document !== this.#base;
+	}
+	get undoLabel() {
+		return this.past.at(-1)?.label ?? null;
+	}
+	get redoLabel() {
+		return this.future.at(-1)?.label ?? null;
+	}
+
+	/** One step that can be undone. Steps of the same `run` (typing in a field) become one. */
+	change(label: string, make: (draft: Draft) => Draft, run = false) {
+		const before = this.document;
+		const after = make(before);
+		if (after === before) return;
+		const last = this.past.at(-1);
+		const joined = run && last?.label === label && last.after === before;
+		this.past = joined
+			? [...this.past.slice(0, -1), { ...last, after }]
+			: [...this.past.slice(1 - mostSteps), { label, before, after }];
+		this.future = [];
+		this.#show(after);
+	}
+
+	undo() {
+		const step = this.past.at(-1);
+		if (!step) return;
+		this.past = this.past.slice(0, -1);
+		this.future = [...this.future, step];
+		this.#show(step.before);
+	}
+
+	redo() {
+		const step = this.future.at(-1);
+		if (!step) return;
+		this.future = this.future.slice(0, -1);
+		this.past = [...this.past, step];
+		this.#show(step.after);
+	}
+
+	/** Takes what somebody else saved; my work since then is dropped, by my own choice. */
+	async takeTheirs() {
+		const { stale } = this;
+		if (!stale) return;
+		this.#adopt(stale);
+		this.past = [];
+		this.future = [];
+		this.document = stale.document;
+		this.saving = 'saved';
+		await this.#start.keeper?.forget(this.#start.sheetId);
+		this.#start.onchange?.(stale.document);
+	}
+
+	/** Puts my changes on top of theirs and saves. Returns the places where both had changed the same. */
+	putMineOnTop(): string[] {
+		const { stale } = this;
+		if (!stale) return [];
+		const { draft, both } = rebase(this.#base, this.document, stale.document);
+		const mine = this.document;
+		this.#adopt(stale);
+		this.past = [...this.past, { label: 'putting both together', before: mine, after: draft }];
+		this.#show(draft);
+		return both;
+	}
+
+	/** Picks up work that was kept in this browser and never reached the server. */
+	async restore() {
+		const kept = await this.#start.keeper?.read(this.#start.sheetId).catch(() => null);
+		if (!kept || this.dirty) return;
+		this.restoredFrom = kept.keptAt;
+		if (kept.revision === this.#revision) {
+			this.past = [{ label: 'restored work', before: this.#base, after: kept.document }];
+			this.#show(kept.document);
+		} else this.#restoreStale(kept);
+	}
+
+	/** Saves at once what is waiting: on leaving, on coming back online, on asking again. */
+	async saveNow() {
+		clearTimeout(this.#timer);
+		if (this.#running || this.stale || !this.dirty) return;
+		this.#running = true;
+		this.saving = 'saving';
+		const sent = this.document;
+		const answer = await this.#start.save(this.#revision, sent);
+		this.#running = false;
+		await this.#settle(answer, sent);
+	}
+
+	/** The server's page data changed under an untouched draft. */
+	refresh(revision: number, document: Draft, savedAt: string) {
+		if (this.dirty || revision <= this.#revision) return;
+		this.#revision = revision;
+		this.#base = document;
+		this.document = document;
+		this.savedAt = savedAt;
+		this.#start.onchange?.(document);
+	}
+
+	stop() {
+		clearTimeout(this.#timer);
+	}
+
+	#adopt({ revision, document, savedAt }: DraftStale) {
+		this.#revision = revision;
+		this.#base = document;
+		this.savedAt = savedAt;
+		this.stale = null;
+	}
+
+	#restoreStale(kept: KeptDraft) {
+		const now = { revision: this.#revision, savedBy: null, savedAt: this.savedAt };
+		this.stale = { ...now, document: this.#base };
+		this.#base = kept.base;
+		this.document = kept.document;
+		this.saving = 'stale';
+		this.#start.onchange?.(kept.document);
+	}
+
+	#show(document: Draft) {
+		this.document = document;
+		this.#start.onchange?.(document);
+		this.#keep(document);
+		if (this.saving !== 'stale' || !this.stale) this.#schedule(quiet);
+	}
+
+	#keep(document: Draft) {
+		const { keeper, sheetId } = this.#start;
+		keeper?.keep(sheetId, { revision: this.#revision, base: this.#base, document }).then(
+			() => (this.kept = true),
+			() => (this.kept = false),
+		);
+	}
+
+	#schedule(wait: number) {
+		clearTimeout(this.#timer);
+		if (this.saving === 'saved' || this.saving === 'refused') this.saving = 'waiting';
+		this.#timer = setTimeout(() => void this.saveNow(), wait);
+	}
+
+	async #settle(answer: SaveAnswer, sent: Draft) {
+		if (answer.kind === 'saved') return this.#settleSaved(answer.saved, sent);
+		if (answer.kind === 'stale') {
+			this.stale = answer.stale;
+			this.saving = 'stale';
+		} else if (answer.kind === 'refused') {
+			this.refusal = answer.message;
+			this.saving = 'refused';
+		} else {
+			this.saving = answer.kind === 'signed-out' ? 'signed-out' : 'offline';
+			if (answer.kind === 'unreachable')
+				this.#schedule(retries[Math.min(this.#failures++, retries.length - 1)]);
+		}
+	}
+
+	async #settleSaved(saved: DraftSaved, sent: Draft) {
+		this.#failures = 0;
+		this.#revision = saved.revision;
+		this.#base = saved.document;
+		if (this.document === sent) this.document = saved.document;
+		this.savedAt = saved.savedAt;
+		this.restoredFrom = null;
+		if (this.dirty) {
+			this.saving = 'waiting';
+			this.#keep(this.document);
+			return this.#schedule(quiet);
+		}
+		this.saving = 'saved';
+		this.#start.onsaved?.(saved);
+		await this.#start.keeper?.forget(this.#start.sheetId).catch(() => {
+			this.kept = false;
+		});
+	}
+}

@@ -1,0 +1,28 @@
+/** The log's actions in sentences. An action without one is shown by its own words. */
+const sentences: Record<string, string> = {
+	'team.created': 'made the team',
+	'team.renamed': 'gave the team another name',
+	'member.invited': 'invited somebody',
+	'member.invitation-withdrawn': 'withdrew an invitation',
+	'member.joined': 'joined the team',
+	'member.roles-changed': 'changed the roles of a member',
+	'member.removed': 'removed a member',
+	'member.left': 'left the team',
+	'token.made': 'made an API token',
+	'token.withdrawn': 'withdrew an API token',
+};
+
+export const actionWords = (action: string): string =>
+	sentences[action] ?? action.replace(/[.-]/g, ' ');
+
+/** The detail kept with an entry, in a line of plain words. */
+export const detailWords = (detail: Record<string, unknown>): string =>
+	Object.entries(detail)
+		.map(([name, value]) => `${name.replace(/[_-]/g, ' ')}: ${valueWords(value)}`)
+		.join('; ');
+
+function valueWords(value: unknown): string {
+	if (Array.isArray(value)) return value.map(valueWords).join(', ');
+	if (value === null || value === undefined) return 'none';
+	return typeof value === 'object' ? JSON.stringify(value) : String(value);
+}
