@@ -10,8 +10,8 @@ import { cheapestRelease } from './release.ts';
 
 /** Conflicts for one question and for each of the tasks in all; sets for the integer program. */
 const EFFORT = {
-	quick: { each: 5_000, all: 20_000, rows: 500 },
-	normal: { each: 50_000, all: 200_000, rows: 2_500 },
+	quick: { each: 5_000, all: 20_000, rows: 300 },
+	normal: { each: 50_000, all: 200_000, rows: 1_200 },
 	thorough: { each: 500_000, all: 5_000_000, rows: 100_000 },
 };
 
