@@ -60,10 +60,7 @@ export async function createMember(db: Db, slug: string, ...roles: Role[]): Prom
 		.values({ name, email, image: null })
 		.returning('id')
 		.executeTakeFirstOrThrow();
-	await db
-		.insertInto('members')
-		.values({ team_id: team.id, user_id: user.id, roles })
-		.execute();
+	await db.insertInto('members').values({ team_id: team.id, user_id: user.id, roles }).execute();
 	return { team, userId: user.id, tokenId: null, roles, actions: null };
 }
 
