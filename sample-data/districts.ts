@@ -68,11 +68,8 @@ function relax(
 ): Int32Array {
 	const cost = remembered(cells.centres.length, (from, to) => {
 		const [a, b] = [cells.centres[from], cells.centres[to]];
-		const rough =
-			1 + 1.3 * noise((a[0] + b[0]) / 2, (a[1] + b[1]) / 2, 24, seed + 5, 1.25);
-		return (
-			Math.hypot(a[0] - b[0], a[1] - b[1]) * Math.sqrt(density(a)) * Math.max(0.2, rough)
-		);
+		const rough = 1 + 1.3 * noise((a[0] + b[0]) / 2, (a[1] + b[1]) / 2, 24, seed + 5, 1.25);
+		return Math.hypot(a[0] - b[0], a[1] - b[1]) * Math.sqrt(density(a)) * Math.max(0.2, rough);
 	});
 	let seeds = starts;
 	for (let round = 0; round < 24; round++) {

@@ -109,7 +109,7 @@ export interface DraftSaved {
 	savedAt: string;
 	/** as stored: new locks carry who set them and when */
 	document: Draft;
-	colouring: DeskColouring | null;
+	colouring: DeskColouring;
 }
 
 /** `POST sheets/[sheet]/draft`: 409, somebody else saved first; nothing was overwritten */

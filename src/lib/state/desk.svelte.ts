@@ -40,6 +40,8 @@ export class Desk {
 	evidence: Evidence | null = $state.raw(null);
 	/** ink whose regions are pointed out while the strip is hovered or focused */
 	pointedInk: number | null = $state(null);
+	/** whether every border that some reader could miss stands out on the sheet */
+	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
 	view: 'sheet' | 'table' = $state('sheet');
 
@@ -51,6 +53,8 @@ export class Desk {
 	/** the engine ended without an answer: what it said */
 	failure = $state('');
 	drawn: DrawnSheet | null = $state.raw(null);
+	/** why the sheet could not be drawn here; '' while all is well */
+	drawFailure = $state('');
 
 	numbers = $derived(numberRegions(this.sheet.regions.key));
 	standing = $derived.by(() => standings(this.sheet.borders, this.draft.document, this.numbers));
@@ -180,7 +184,8 @@ export class Desk {
 		this.#adopt(deskColouring(reply.result, sentence), this.#askedFor);
 	}
 
-	#adopt(answer: DeskColouring, document: Draft) {
+	#adopt(answer: DeskColouring | null, document: Draft) {
+		if (!answer) return;
 		this.answer = answer;
 		if (answer.status === 'coloured') this.#showInks(Int32Array.from(answer.inks));
 		this.#remember(document);

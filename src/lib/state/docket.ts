@@ -39,7 +39,11 @@ export const docket = (state: DocketState): DocketStage[] => [
 		id: 'palette',
 		title: 'Palette',
 		mark: state.working ? null : state.palette.mark,
-		words: [state.working ? { text: 'Waits for the colouring' } : { text: state.palette.sentence, to: '#verdict' }],
+		words: [
+			state.working
+				? { text: 'Waits for the colouring' }
+				: { text: state.palette.sentence, to: '#verdict' },
+		],
 	},
 	{ id: 'layout', title: 'Layout', ...layout(state) },
 	{ id: 'editions', title: 'Editions', ...editions(state) },
@@ -56,13 +60,20 @@ function boundaries({ sheet, draft }: DocketState): Said {
 			: 'clear';
 	const groups = new Set(sheet.regions.group.filter((group) => group !== null)).size;
 	const regions = counted(sheet.boundarySet.regionCount, 'region');
-	const within = groups > 1 && draft.layout.groupColumn ? ` in ${count(groups)} of "${draft.layout.groupColumn}"` : '';
+	const within =
+		groups > 1 && draft.layout.groupColumn
+			? ` in ${count(groups)} of "${draft.layout.groupColumn}"`
+			: '';
 	return {
 		mark: worst,
 		words: [
-			{ text: `${regions}${within}.`, to: '#regions' },
+			{ text: regions, to: '#regions' },
+			{ text: `${within}.` },
 			open.length
-				? { text: `${counted(open.length, 'finding')} open${worst === 'error' ? '' : ', none an error'}`, to: '#findings' }
+				? {
+						text: `${counted(open.length, 'finding')} open${worst === 'error' ? '' : ', none an error'}`,
+						to: '#findings',
+					}
 				: { text: 'No finding open' },
 		],
 	};
@@ -80,7 +91,10 @@ function borders({ sheet, draft, standing }: DocketState): Said {
 		struck ? `${count(struck)} struck out` : '',
 		draft.added.length ? `${count(draft.added.length)} added by hand` : '',
 	];
-	const words: DocketWords[] = [{ text: `${parts.filter(Boolean).join(', ')}.`, to: '#borders' }];
+	const words: DocketWords[] = [
+		{ text: parts.filter(Boolean).join(', '), to: '#borders' },
+		{ text: '.' },
+	];
 	if (!sheet.boundarySet.planar) words.push({ text: 'Not planar', to: '#planar' });
 	return { mark: 'clear', words };
 }
@@ -92,11 +106,13 @@ function colours({ answer, draft, working }: DocketState): Said {
 	if (!answer) return { mark: null, words: [{ text: 'Not coloured yet.' }, held] };
 	if (answer.status === 'impossible') {
 		const { locks: colliding } = answer.explanation;
-		const what = colliding.length ? `${counted(colliding.length, 'lock')} collide` : 'The rules collide';
-		return { mark: 'error', words: [{ text: `${what}.`, to: '#because' }, held] };
+		const what = colliding.length
+			? `${counted(colliding.length, 'lock')} collide`
+			: 'The rules collide';
+		return { mark: 'error', words: [{ text: what, to: '#because' }, { text: '.' }, held] };
 	}
 	if (answer.status === 'undecided')
-		return { mark: 'warning', words: [{ text: 'Undecided.', to: '#because' }, held] };
+		return { mark: 'warning', words: [{ text: 'Undecided', to: '#because' }, { text: '.' }, held] };
 	const proved = answer.lowerBound === answer.inksUsed;
 	return {
 		mark: 'clear',

@@ -194,8 +194,7 @@ export class DraftState {
 
 	#keep(document: Draft) {
 		const { keeper, sheetId } = this.#start;
-		const plain = { revision: this.#revision, base: this.#base, document };
-		keeper?.keep(sheetId, { ...plain, keptAt: new Date().toISOString() }).then(
+		keeper?.keep(sheetId, { revision: this.#revision, base: this.#base, document }).then(
 			() => (this.kept = true),
 			() => (this.kept = false),
 		);
@@ -225,7 +224,8 @@ export class DraftState {
 	async #settleSaved(saved: DraftSaved, sent: Draft) {
 		this.#failures = 0;
 		this.#revision = saved.revision;
-		this.#base = sent;
+		this.#base = saved.document;
+		if (this.document === sent) this.document = saved.document;
 		this.savedAt = saved.savedAt;
 		this.restoredFrom = null;
 		if (this.dirty) {

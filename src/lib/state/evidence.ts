@@ -16,8 +16,8 @@ export interface Evidence {
 	ring: boolean;
 	/** numbers into the sheet's border list */
 	borders: readonly number[];
-	/** degrees */
-	place: readonly [number, number] | null;
+	/** number of the finding whose place is marked */
+	finding: number | null;
 }
 
 const nothing: Evidence = {
@@ -27,7 +27,7 @@ const nothing: Evidence = {
 	hub: null,
 	ring: false,
 	borders: [],
-	place: null,
+	finding: null,
 };
 
 export const evidence = (parts: Partial<Evidence>): Evidence => ({ ...nothing, ...parts });

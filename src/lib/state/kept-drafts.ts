@@ -15,7 +15,7 @@ export interface KeptDraft {
 }
 
 export interface Keeper {
-	keep(sheetId: string, draft: KeptDraft): Promise<void>;
+	keep(sheetId: string, draft: Omit<KeptDraft, 'keptAt'>): Promise<void>;
 	read(sheetId: string): Promise<KeptDraft | null>;
 	forget(sheetId: string): Promise<void>;
 }
@@ -47,7 +47,10 @@ async function use<T>(
 }
 
 export const browserKeeper: Keeper = {
-	keep: (sheetId, draft) => use('readwrite', (store) => store.put(draft, sheetId)).then(() => {}),
+	keep: (sheetId, draft) => {
+		const kept: KeptDraft = { ...draft, keptAt: new Date().toISOString() };
+		return use('readwrite', (store) => store.put(kept, sheetId)).then(() => {});
+	},
 	read: (sheetId) =>
 		use<KeptDraft | undefined>('readonly', (store) => store.get(sheetId)).then(
 			(kept) => kept ?? null,

@@ -1,4 +1,4 @@
-import { bordersSentence, checkPalette, weakBorders } from '$lib/engines/palettes';
+import { bordersSentence, checkPalette, readers, weakBorders } from '$lib/engines/palettes';
 import type { Ink, PaletteVerdict, Reader, WeakBorder } from '$lib/engines/palettes/palette';
 import type { BorderList } from '$lib/engines/borders/border-list';
 import type { MarkKind } from '$lib/components/Mark.svelte';
@@ -11,8 +11,8 @@ export interface PaletteJudgement {
 	touching: [number, number][];
 	verdict: PaletteVerdict;
 	weak: WeakBorder[];
-	/** for each ink the readers who could take it for a neighbour's */
-	weakReaders: Reader[][];
+	/** for each ink the readers who could take it for a neighbour's, and how badly */
+	byInk: { readers: Reader[]; severity: 'error' | 'warning' }[];
 }
 
 /** Until the sheet is drawn nobody knows how large regions show; this size asks for the usual 12. */
@@ -37,20 +37,38 @@ export function judgePalette(
 		sizesMm: sizesMm ?? new Float64Array(colouring.length).fill(usualSizeMm),
 		pointTouches: true,
 	});
-	const weakReaders: Reader[][] = inks.map(() => []);
-	for (const { border, reader } of weak)
-		for (const region of [counting.borders.a[border], counting.borders.b[border]]) {
-			const of = weakReaders[shown[region]];
-			if (!of.includes(reader)) of.push(reader);
-		}
 	return {
 		mark: !touching.length ? null : markOf(weak),
-		sentence: touching.length ? bordersSentence(weak, counting.borders, shown, inks) : 'No inks touch yet',
+		sentence: touching.length
+			? bordersSentence(weak, counting.borders, shown, inks)
+			: 'No inks touch yet',
 		touching,
 		verdict: checkPalette(hexes, touching),
 		weak: weak.map((one) => ({ ...one, border: counting.numbers[one.border] })),
-		weakReaders,
+		byInk: weakByInk(inks.length, weak, counting.borders, shown),
 	};
+}
+
+function weakByInk(
+	inks: number,
+	weak: readonly WeakBorder[],
+	borders: BorderList,
+	colouring: ArrayLike<number>,
+): PaletteJudgement['byInk'] {
+	const found = Array.from({ length: inks }, () => ({
+		readers: new Set<Reader>(),
+		severity: 'warning' as 'error' | 'warning',
+	}));
+	for (const { border, reader, severity } of weak)
+		for (const region of [borders.a[border], borders.b[border]]) {
+			const of = found[colouring[region]];
+			of.readers.add(reader);
+			if (severity === 'error') of.severity = 'error';
+		}
+	return found.map(({ readers: seen, severity }) => ({
+		readers: readers.filter((reader) => seen.has(reader)),
+		severity,
+	}));
 }
 
 const markOf = (weak: readonly WeakBorder[]): MarkKind =>

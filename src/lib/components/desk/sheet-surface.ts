@@ -1,12 +1,17 @@
+import { paintSvg } from '$lib/engines/sheet';
+import type { Drawing, RegionFill } from '$lib/engines/sheet/drawing';
 import type { RegionNumbers } from '$lib/state/rules-in-force';
 
-/** The inline SVG of a sheet: finds regions in it and changes fills in place, without a redraw. */
+/** Put before the ids of the sheet's elements, which share the page with others. */
+export const idPrefix = 'sheet-';
+
+/** The inline SVG of a sheet: finds regions in it and changes it in place, without a redraw. */
 export class SheetSurface {
 	readonly svg: SVGSVGElement;
 	readonly viewBox: string;
 	readonly #regions: (SVGElement | undefined)[] = [];
-	readonly #labels = new Map<number, SVGElement[]>();
-	#stop: SVGElement | null = null;
+	#stop: SVGElement;
+	#lettering = '';
 
 	/** `text` is an SVG document made by the sheet's painter; it is parsed as XML, never as markup. */
 	constructor(
@@ -14,14 +19,16 @@ export class SheetSurface {
 		text: string,
 		private numbers: RegionNumbers,
 	) {
-		const parsed = new DOMParser().parseFromString(text, 'image/svg+xml').documentElement;
-		if (parsed.nodeName !== 'svg') throw new Error('the sheet could not be read as SVG');
-		this.svg = document.importNode(parsed as unknown as SVGSVGElement, true);
+		this.svg = document.importNode(parse(text), true);
 		this.viewBox = this.svg.getAttribute('viewBox') ?? '0 0 1 1';
 		this.svg.removeAttribute('width');
 		this.svg.removeAttribute('height');
-		this.#collect();
+		for (const element of this.svg.querySelectorAll<SVGElement>('path[data-key]')) {
+			const region = numbers.get(element.getAttribute('data-key') ?? '');
+			if (region !== undefined) this.#regions[region] = element;
+		}
 		this.svg.setAttribute('tabindex', '0');
+		this.#stop = this.svg;
 		host.replaceChildren(this.svg);
 	}
 
@@ -49,16 +56,21 @@ export class SheetSurface {
 		};
 	}
 
-	/** Fills that differ from what stands there are set; nothing else is touched. */
-	paint(fillOf: (region: number) => string, labelOf: (region: number) => string | null) {
-		this.#regions.forEach((element, region) => {
-			const fill = fillOf(region);
-			if (element && element.getAttribute('fill') !== fill) element.setAttribute('fill', fill);
-		});
-		for (const [region, labels] of this.#labels) {
-			const ink = labelOf(region);
-			if (ink) for (const label of labels) label.setAttribute('fill', ink);
+	/** Shows the same sheet in other colours: fills that differ, then lettering and legend. */
+	paint(drawing: Drawing, locked: (region: number) => boolean) {
+		for (const fill of drawing.fills) {
+			const element = this.#regions[fill.region];
+			const held = locked(fill.region);
+			const words = wordsOf(fill, drawing, held);
+			if (!element || element.getAttribute('aria-label') === words) {
+				if (element?.getAttribute('fill') !== fill.hex) element?.setAttribute('fill', fill.hex);
+				continue;
+			}
+			element.setAttribute('fill', fill.hex);
+			element.setAttribute('aria-label', words);
+			element.querySelector('title')?.replaceChildren(words);
 		}
+		this.#letter(drawing);
 	}
 
 	/** Fades every region for which `stays` is false; null fades none. */
@@ -71,19 +83,38 @@ export class SheetSurface {
 	/** The one stop of the Tab key on the sheet: a region, or the sheet as a whole. */
 	setStop(region: number | null, focus: boolean) {
 		const next = region === null ? this.svg : (this.#regions[region] ?? this.svg);
-		(this.#stop ?? this.svg).setAttribute('tabindex', '-1');
-		next.setAttribute('tabindex', '0');
-		this.#stop = next;
+		if (next !== this.#stop) {
+			this.#stop.setAttribute('tabindex', '-1');
+			next.setAttribute('tabindex', '0');
+			this.#stop = next;
+		}
 		if (focus) next.focus({ preventScroll: true });
 	}
 
-	#collect() {
-		for (const element of this.svg.querySelectorAll<SVGElement>('[data-key]')) {
-			const region = this.numbers.get(element.getAttribute('data-key') ?? '');
-			if (region === undefined) continue;
-			if (element.localName === 'path') this.#regions[region] ??= element;
-			else if (element.localName === 'text')
-				this.#labels.set(region, [...(this.#labels.get(region) ?? []), element]);
+	/** labels take the ink that reads on their fill, the legend lists the inks in use */
+	#letter(drawing: Drawing) {
+		const lettering = paintSvg(
+			{ ...drawing, fills: [], lines: [] },
+			{ fills: 'attribute', idPrefix },
+		);
+		if (lettering === this.#lettering) return;
+		this.#lettering = lettering;
+		const fresh = parse(lettering);
+		for (const name of ['labels', 'collar']) {
+			const now = this.svg.querySelector(`#${idPrefix}${name}`);
+			const next = fresh.querySelector(`#${idPrefix}${name}`);
+			if (now && next) now.replaceWith(document.importNode(next, true));
 		}
 	}
+}
+
+function parse(text: string): SVGSVGElement {
+	const root = new DOMParser().parseFromString(text, 'image/svg+xml').documentElement;
+	if (root.localName !== 'svg') throw new Error('the sheet could not be read as SVG');
+	return root as unknown as SVGSVGElement;
+}
+
+function wordsOf({ name, key, ink }: RegionFill, { inks }: Drawing, locked: boolean): string {
+	if (ink < 0) return `${name || key}, no ink yet`;
+	return `${name || key}, ink ${ink + 1} ${inks[ink]?.name ?? ''}${locked ? ', locked' : ''}`;
 }

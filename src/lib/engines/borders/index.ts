@@ -1,3 +1,6 @@
 /** Coverage -> who touches whom, how, and over how many metres; and what a sheet makes of it. */
 export { borderKinds, type BorderKind, type BorderList } from './border-list.ts';
-export { bordersOf, type BordersOptions } from './borders-of.ts';
+export { bordersOf } from './borders-of.ts';
+export { surveyOf, type BordersOptions, type Survey } from './survey.ts';
+export type { Overlap } from './overlap.ts';
+export { bordersForSheet, type SheetBorderRules } from './for-sheet.ts';

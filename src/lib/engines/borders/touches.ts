@@ -18,11 +18,18 @@ export function addTouches(coverage: Coverage, tally: PairTally): void {
 	}
 }
 
+/** A place where arcs end. */
+export interface Meeting {
+	x: number;
+	y: number;
+	arcs: number[];
+}
+
 /** Places where arcs end, with one entry for each end (a closed arc has two). */
-export function meetings(coverage: Coverage): Iterable<{ x: number; y: number; arcs: number[] }> {
+export function meetings(coverage: Coverage): Meeting[] {
 	const { arcPoints, arcStarts } = coverage;
-	const places = new Map<number, Map<number, { x: number; y: number; arcs: number[] }>>();
-	const all: { x: number; y: number; arcs: number[] }[] = [];
+	const places = new Map<number, Map<number, Meeting>>();
+	const all: Meeting[] = [];
 	const end = (arc: number, point: number) => {
 		const x = arcPoints[2 * point];
 		const y = arcPoints[2 * point + 1];

@@ -8,13 +8,15 @@ import { chainArcs, type Arcs } from './arcs.ts';
 import { enclaves } from './enclaves.ts';
 import type { Outlines } from './outlines.ts';
 import { groupParts, type TracedRing } from './parts.ts';
-import { indexSegments } from './segments.ts';
-import { settleParallel } from './settle-parallel.ts';
+import type { Segments } from './segments.ts';
 
 /** Cuts noded outlines into shared arcs and puts the regions together from them again. */
-export function buildCoverage(outlines: Outlines, keys: string[], names: string[]): Coverage {
-	const segments = indexSegments(outlines);
-	settleParallel(segments);
+export function buildCoverage(
+	outlines: Outlines,
+	segments: Segments,
+	keys: string[],
+	names: string[],
+): Coverage {
 	const arcs = chainArcs(outlines, segments);
 	const arcPoints = pointsOf(arcs, outlines.positions);
 	const arcStarts = Uint32Array.from(arcs.starts);

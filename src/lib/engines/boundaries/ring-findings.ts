@@ -3,7 +3,7 @@ import type { Naming } from './keys.ts';
 import type { RingRepairs } from './outlines-of.ts';
 
 /** One finding for each kind of mend made while the rings were taken over. */
-export function ringFindings(repairs: RingRepairs, naming: Naming): Finding[] {
+export function ringFindings(repairs: RingRepairs, naming: Naming, format: string): Finding[] {
 	const findings: Finding[] = [];
 	const note = (
 		code: string,
@@ -22,12 +22,14 @@ export function ringFindings(repairs: RingRepairs, naming: Naming): Finding[] {
 		repairs.closed,
 		'Outlines that did not end where they began were closed with a straight line.',
 	);
-	note(
-		'ring-turned',
-		'note',
-		repairs.turned,
-		'Outlines walked the other way round were turned; the shape is unchanged.',
-	);
+	if (format === 'GeoJSON') {
+		note(
+			'ring-turned',
+			'note',
+			repairs.turned,
+			'Outlines walked the other way round than RFC 7946 asks were turned; the shape is unchanged.',
+		);
+	}
 	note(
 		'ring-collapsed',
 		'warning',
@@ -35,4 +37,21 @@ export function ringFindings(repairs: RingRepairs, naming: Naming): Finding[] {
 		'Outlines with fewer than three different corners were left out.',
 	);
 	return findings;
+}
+
+/** Outlines that step over the 180th meridian. */
+export function crossingFinding(features: Set<number>, naming: Naming): Finding[] {
+	const regions = new Set<string>();
+	for (const f of features)
+		if (naming.regionOf[f] >= 0) regions.add(naming.keys[naming.regionOf[f]]);
+	if (regions.size === 0) return [];
+	return [
+		{
+			code: 'antimeridian',
+			severity: 'note',
+			message: 'Outlines that cross the 180th meridian were put together across it.',
+			regions: [...regions],
+			at: null,
+		},
+	];
 }

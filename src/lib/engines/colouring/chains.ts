@@ -45,13 +45,25 @@ export class Chains {
 	/** Exchanges the inks of the chain through `v` and ink `d` unless it is held or above `limit`. */
 	flip(v: number, d: number, limit: number): boolean {
 		const c = this.board.ink[v];
-		this.begin();
-		if (!this.push(0, v, c, d)) return false;
-		while (this.head[0] < this.tail[0]) {
-			if (this.tail[0] > limit || this.grow(0, c, d) === 'held') return false;
-		}
+		if (this.chain(v, d, limit) === null) return false;
 		this.exchange(0, c, d);
 		return true;
+	}
+
+	/** The chain through `v` and ink `d`, valid until the next call; null when held or above `limit`. */
+	chain(v: number, d: number, limit: number): Uint32Array | null {
+		const c = this.board.ink[v];
+		this.begin();
+		if (!this.push(0, v, c, d)) return null;
+		while (this.head[0] < this.tail[0]) {
+			if (this.tail[0] > limit || this.grow(0, c, d) === 'held') return null;
+		}
+		return this.queues[0].subarray(0, this.tail[0]);
+	}
+
+	/** Exchanges the inks of the chain asked for last. */
+	turn(c: number, d: number): void {
+		this.exchange(0, c, d);
 	}
 
 	private begin(): void {

@@ -3,8 +3,10 @@ import { exactColouring, quickColouring, type AttemptSettings } from './attempt.
 import { structuralBound, type Bound } from './bounds.ts';
 import { certify } from './certify.ts';
 import { effortOf } from './effort.ts';
+import { explain } from './explain.ts';
 import { problemFaults } from './faults.ts';
 import { fewestInks, type FewestOutcome } from './fewest.ts';
+import { towardsGoal } from './goal.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
@@ -19,16 +21,20 @@ export async function colour(problem: ColouringProblem): Promise<ColouringResult
 	const [fault] = problemFaults(problem);
 	if (fault) throw new RangeError(fault);
 	const prepared = prepare(problem);
-	if (prepared.clash) return impossible(problem);
+	if (prepared.clash) return impossible(problem, 0);
 	const { bound, settings } = measured(problem, prepared);
 	const outcome = search(problem, prepared, bound, settings);
-	if (outcome === 'impossible') return impossible(problem);
-	if (outcome === 'undecided') return undecided(problem, prepared, bound);
+	const least = Math.max(bound.inks, prepared.inksLocked);
+	if (outcome === 'impossible') return impossible(problem, least);
+	if (outcome === 'undecided') return undecided(problem, least);
 	return coloured(problem, prepared, bound, outcome);
 }
 
-async function impossible(problem: ColouringProblem): Promise<ColouringResult> {
-	return { status: 'undecided', lowerBound: 0, message: `Impossible: ${problem.regions} regions.` };
+async function impossible(problem: ColouringProblem, least: number): Promise<ColouringResult> {
+	const explanation = await explain(problem);
+	if (explanation) return { status: 'impossible', explanation };
+	const message = 'No colouring was found; the effort did not suffice to say which rules collide.';
+	return { status: 'undecided', lowerBound: least, message };
 }
 
 function measured(problem: ColouringProblem, { graph }: Prepared) {
@@ -74,16 +80,24 @@ function coloured(
 	bound: Bound,
 	outcome: FewestOutcome,
 ): ColouringResult {
-	const colouring = byRegion(prepared, outcome.ink);
+	const { ink, changes, objective } = towardsGoal(problem, prepared, outcome.ink, outcome.inks);
+	const colouring = byRegion(prepared, ink);
 	const used = colouring.reduce((most, c) => Math.max(most, c + 1), 0);
 	const inksUsed = problem.inks === 'fewest' ? outcome.inks : used;
 	const proof = certify(problem, prepared, bound, inksUsed);
 	const lowerBound = proof.kind === 'not-proved' ? outcome.lowerBound : inksUsed;
-	return { status: 'coloured', inksUsed, colouring, lowerBound, proof };
+	return {
+		status: 'coloured',
+		inksUsed,
+		colouring,
+		lowerBound,
+		proof,
+		...(changes && { changes }),
+		...(objective !== undefined && { objective }),
+	};
 }
 
-function undecided(problem: ColouringProblem, prepared: Prepared, bound: Bound): ColouringResult {
-	const lowerBound = Math.max(bound.inks, prepared.inksLocked);
+function undecided(problem: ColouringProblem, lowerBound: number): ColouringResult {
 	const message = problem.cancelled?.()
 		? 'The run was stopped before a colouring was found.'
 		: 'Within this effort neither a colouring was found nor shown to be impossible.';

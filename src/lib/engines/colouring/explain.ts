@@ -9,11 +9,11 @@ import { problemFaults } from './faults.ts';
 import type { ColouringProblem, Explanation, Release } from './problem.ts';
 import { cheapestRelease } from './release.ts';
 
-/** Conflicts for one question, and for each of the tasks in all. */
+/** Conflicts for one question and for each of the tasks in all; exact choices of locks to release. */
 const EFFORT = {
-	quick: { each: 5_000, all: 20_000 },
-	normal: { each: 50_000, all: 200_000 },
-	thorough: { each: 500_000, all: 5_000_000 },
+	quick: { each: 5_000, all: 20_000, rounds: 3 },
+	normal: { each: 50_000, all: 200_000, rounds: 12 },
+	thorough: { each: 500_000, all: 5_000_000, rounds: 200 },
 };
 
 /**
@@ -64,7 +64,7 @@ class Explaining {
 			this.whole,
 			immediate,
 			this.purse(),
-			this.seed,
+			{ rounds: EFFORT[this.problem.effort ?? 'normal'].rounds, seed: this.seed },
 		);
 		const release: Release = {
 			locks: found.demands.flatMap((d) => this.of.demands[d].regions).sort((a, b) => a - b),

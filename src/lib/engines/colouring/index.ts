@@ -8,6 +8,9 @@ export type {
 	Release,
 	Rule,
 } from './problem.ts';
-export { colour } from './colour.ts';
 export { checkColouring } from './check-colouring.ts';
+export { colour } from './colour.ts';
+export { checkExplanation } from './explain-check.ts';
+export { explanationSentence } from './explanation-sentence.ts';
 export { problemFaults } from './faults.ts';
+export { proofSentence } from './proof-sentence.ts';

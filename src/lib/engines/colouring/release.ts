@@ -1,3 +1,4 @@
+import { greedyHittingSet } from '../solver/hitting-search.ts';
 import { minimumHittingSet } from '../solver/integer.ts';
 import type { Case } from './explain-case.ts';
 import type { CaseClauses } from './explain-clauses.ts';
@@ -15,10 +16,15 @@ export interface CheapestRelease {
 }
 
 const ROUNDING = 1e-9;
+/** choices by rule of thumb tried after each exact one */
+const QUICK_CHOICES = 3;
+/** of the integer program for each choice */
+const NODES = 100;
 
 /**
  * The cheapest demands to drop so that the rest can be met. `whole` are the clauses of the whole case,
- * without switches, for which dropping every demand is known to work; `immediate` are clashes known.
+ * without switches, for which dropping every demand is known to work; `immediate` are clashes known;
+ * at most `rounds` exact choices are made.
  *
  * Method: implicit hitting sets (Chandrasekaran et al. 2013; Davies and Bacchus 2011). A cheapest
  * choice that meets every clash known is dropped; if the rest still clashes, the new clash is shrunk and
@@ -30,10 +36,12 @@ export async function cheapestRelease(
 	whole: CaseClauses,
 	immediate: readonly number[][],
 	purse: Purse,
-	seed: number,
+	{ rounds, seed }: { rounds: number; seed: number },
 ): Promise<CheapestRelease> {
 	const search = new ReleaseSearch(of, whole, immediate, purse, seed);
-	while (!search.closed && !purse.empty) if (!(await search.round())) break;
+	for (let round = 0; round < rounds && !search.closed && !purse.empty; round++) {
+		if (!(await search.round())) break;
+	}
 	if (!search.closed) search.improve();
 	return search.result();
 }
@@ -62,13 +70,31 @@ class ReleaseSearch {
 		return this.lowerBound >= this.bestCost * (1 - ROUNDING);
 	}
 
-	/** One choice and the clashes it left; false when nothing more can be learnt. */
+	/** One exact choice and the clashes it leaves; false when nothing more can be learnt. */
 	async round(): Promise<boolean> {
-		const sets = this.clashes.map((clash) => clash.demands);
-		const choice = await minimumHittingSet(sets, this.costs);
+		const choice = await minimumHittingSet(this.sets(), this.costs, { nodes: NODES });
 		this.lowerBound = Math.max(this.lowerBound, choice.lowerBound);
+		const before = this.clashes.length;
+		if (this.closed) return false;
+		this.gather(choice.chosen, true);
+		for (let i = 0; i < QUICK_CHOICES && !this.closed; i++) {
+			if (!this.gather(greedyHittingSet(this.sets(), this.costs), false)) break;
+		}
+		return this.clashes.length > before;
+	}
+
+	private sets(): number[][] {
+		return this.clashes.map((clash) => clash.demands);
+	}
+
+	/**
+	 * Gathers clashes of what is held when the choice is dropped, and drops more until the rest can be
+	 * met: every demand of a clash when they are to lie `apart`, else the one that most clashes share.
+	 * Whether there were any.
+	 */
+	private gather(choice: number[], apart: boolean): boolean {
 		const held = new Set(this.of.demands.keys());
-		for (const d of choice.chosen) held.delete(d);
+		for (const d of choice) held.delete(d);
 		const before = this.clashes.length;
 		while (!this.closed) {
 			const answer = this.ask(held);
@@ -77,9 +103,20 @@ class ReleaseSearch {
 			const failed = this.whole.failedDemands();
 			const clash = shrink(this.of, failed, this.purse, this.seed);
 			this.clashes.push(clash ?? { demands: failed, vertices: [] });
-			for (const d of (clash ?? { demands: failed }).demands) held.delete(d);
+			const { demands } = this.clashes[this.clashes.length - 1];
+			for (const d of apart ? demands : [this.worthiest(demands)]) held.delete(d);
 		}
 		return this.clashes.length > before;
+	}
+
+	/** The demand that takes part in most clashes for its cost. */
+	private worthiest(demands: number[]): number {
+		const shares = new Map(demands.map((d) => [d, 0]));
+		for (const clash of this.clashes) {
+			for (const d of clash.demands) if (shares.has(d)) shares.set(d, (shares.get(d) ?? 0) + 1);
+		}
+		const worth = (d: number) => (shares.get(d) ?? 0) / this.costs[d];
+		return demands.reduce((a, b) => (worth(b) > worth(a) ? b : a));
 	}
 
 	/** Takes demands back one by one where that works, dearest first. */

@@ -77,19 +77,20 @@ function edgesWithin(graph: RegionGraph, vertices: number[]): Strand[] {
 	return strands;
 }
 
-/** Leaves out every chunk of so many strands that can be spared. */
+/**
+ * Leaves out every chunk of so many strands that can be spared. A chunk that was needed once stays
+ * needed when less is left, so none is tried twice; joined strands are new and are tried again.
+ */
 function withoutChunks(strands: Strand[], chunk: number): Strand[] {
-	for (let i = 0; i < strands.length;) {
-		const rest = strands.filter((_, j) => j < i || j >= i + chunk);
-		if (isFlat(rest)) {
-			i += chunk;
-			continue;
-		}
-		strands = tidied(rest);
-		i = Math.min(i, strands.length - 1);
-		if (chunk === 1) i = 0;
+	const needed = new Set<Strand>();
+	for (;;) {
+		const tried = strands.filter((strand) => !needed.has(strand)).slice(0, chunk);
+		if (tried.length === 0) return strands;
+		const out = new Set(tried);
+		const rest = strands.filter((strand) => !out.has(strand));
+		if (isFlat(rest)) for (const strand of tried) needed.add(strand);
+		else strands = tidied(rest);
 	}
-	return strands;
 }
 
 /** Reads off the hubs; for K3,3 those joined to the first come last. */

@@ -15,3 +15,6 @@ export { weakBorders, type SheetFills } from './weak-borders.ts';
 export { bordersSentence, verdictSentence } from './sentence.ts';
 export { mendPalette, type MendRequest, type MendResult } from './mend.ts';
 export { bestKnown } from './limits.ts';
+export { inkDistances } from './ink-distances.ts';
+export { tritanDoubts } from './tritan-doubts.ts';
+export { checkBorderLine, lineContrastAsked } from './border-line.ts';

@@ -5,11 +5,13 @@ import { labelShortfall, shortfall, type MendTask } from './mend-cost.ts';
 import { covers } from './mend-covers.ts';
 import { anneal, isBetter, type Attempt } from './mend-search.ts';
 
-/** Steps for a first look at each set of inks, for all sets of one size, and for the promising ones. */
+/** Sets of one size that are tried; steps for a first look at each and for the promising ones. */
+const setsOfSize = 80;
 const lookSteps = 300;
-const sizeSteps = 24_000;
 const closeSteps = 3_000;
 const lastSteps = 8_000;
+/** Up to so many pairs a step is cheap; with more of them fewer steps are made. */
+const cheapPairs = 28;
 /** Sets times pairs looked at before the search goes on to moving every free ink at once. */
 const mostSpent = 15_000;
 
@@ -26,11 +28,13 @@ export function smallestMend(
 	const free = task.inks.map((_, ink) => ink).filter((ink) => !locked.includes(ink));
 	const failing = pairs.filter(([a, b]) => shortfall(task.asked, task.start[a], task.start[b]) > 0);
 	const needed = free.filter((ink) => labelShortfall(task.asked, task.inks[ink]) > 0);
+	const pace = Math.min(1, cheapPairs / pairs.length);
 	let spent = 0;
 	for (let size = Math.max(1, needed.length); size <= free.length; size++) {
 		if (spent > mostSpent) size = free.length;
-		const sets = covers(free, size, failing, needed, Math.floor(sizeSteps / lookSteps));
-		const found = sets.length === 0 ? null : bestOfSize(task, sets, size === free.length, random);
+		const sets = covers(free, size, failing, needed, setsOfSize);
+		const found =
+			sets.length === 0 ? null : bestOfSize(task, sets, pace, size === free.length, random);
 		if (found) return found;
 		spent += Math.max(1, sets.length) * pairs.length;
 	}
@@ -41,14 +45,15 @@ export function smallestMend(
 function bestOfSize(
 	task: MendTask,
 	sets: readonly number[][],
+	pace: number,
 	last: boolean,
 	random: () => number,
 ): Attempt | null {
 	const looks = sets
-		.map((set) => ({ set, look: look(task, set, lookSteps, random) }))
+		.map((set) => ({ set, look: look(task, set, Math.ceil(lookSteps * pace), random) }))
 		.sort((one, two) => (isBetter(one.look, two.look) ? -1 : 1))
 		.slice(0, 3);
-	const steps = last ? lastSteps : closeSteps;
+	const steps = Math.ceil((last ? lastSteps : closeSteps) * pace);
 	const close = looks.flatMap(({ set, look: first }) => [
 		first,
 		anneal(task, set, first.inks, steps, random),

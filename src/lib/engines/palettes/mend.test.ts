@@ -127,7 +127,7 @@ describe('mendPalette', () => {
 				expect(after.ciede2000).toBeGreaterThanOrEqual(12 - 1e-4);
 				expect(after.grey).toBeGreaterThanOrEqual(5 - 1e-4);
 			}),
-			{ numRuns: 25 },
+			{ numRuns: 12 },
 		);
 	});
 

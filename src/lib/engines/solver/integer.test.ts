@@ -47,15 +47,18 @@ describe('minimumHittingSet', () => {
 	});
 
 	it('agrees with HiGHS (npm highs) on larger problems, by either way', async () => {
-		const sets = triples(60, 90);
-		const costs = Array.from({ length: 60 }, (_, element) => 1 + (element % 3));
+		const sets = triples(36, 50);
+		const costs = Array.from({ length: 36 }, (_, element) => 1 + (element % 3));
 		const own = await minimumHittingSet(sets, costs, { steps: 1_000_000 });
-		const program = (await loadProgramSolver())(sets, costs);
+		const program = (await loadProgramSolver())(sets, costs, 20_000);
 		const byProgram = program?.chosen.reduce((sum, element) => sum + costs[element], 0);
 		expect(own.proved).toBe(true);
 		expect(byProgram).toBe(own.cost);
 		const small = await minimumHittingSet(sets, costs, { steps: 3 });
 		expect([small.cost, small.proved]).toEqual([own.cost, true]);
+		const hasty = await minimumHittingSet(sets, costs, { steps: 3, nodes: 1 });
+		expect(hasty.lowerBound).toBeLessThanOrEqual(own.cost);
+		expect(hasty.cost).toBeGreaterThanOrEqual(own.cost);
 	});
 
 	it('covers a ring of n pairs with half of them (rounded up), a star with its middle', async () => {

@@ -1,6 +1,6 @@
 import { independentParts, reduceSets } from './hitting-reductions.ts';
 import { costOf, greedyHittingSet, HittingSearch, packingBound } from './hitting-search.ts';
-import { loadProgramSolver } from './integer-program.ts';
+import { loadProgramSolver, type ProgramAnswer } from './integer-program.ts';
 
 export interface HittingSet {
 	/** the elements chosen, ascending */
@@ -13,19 +13,20 @@ export interface HittingSet {
 }
 
 const OWN_STEPS = 1500;
+const PROGRAM_NODES = 20_000;
 
 /**
  * The cheapest elements that meet every set. `sets` hold numbers from 0; `costs[element]` is positive.
  *
  * Independent parts are solved apart: by branch and bound, and where `steps` nodes do not suffice by
- * the integer program solver, which is loaded only then. Everything chosen is checked to meet
- * every set, so a failure of the program costs the proof (`proved` false), never the answer.
+ * the integer program solver with `nodes` nodes, which is loaded only then. What it chooses is checked
+ * to meet every set, so a failure of the program costs the proof (`proved` false), never the answer.
  * @throws RangeError when a set is empty or a cost is not positive.
  */
 export async function minimumHittingSet(
 	sets: readonly (readonly number[])[],
 	costs: ArrayLike<number>,
-	{ steps = OWN_STEPS }: { steps?: number } = {},
+	{ steps = OWN_STEPS, nodes = PROGRAM_NODES }: { steps?: number; nodes?: number } = {},
 ): Promise<HittingSet> {
 	mustBeSound(sets, costs);
 	const { forced, rest } = reduceSets(sets, costs);
@@ -35,11 +36,13 @@ export async function minimumHittingSet(
 		const search = new HittingSearch(costs, steps);
 		const own = search.below(part, Infinity);
 		const answer =
-			own && !search.exhausted ? { chosen: own, proved: true } : await byProgram(part, costs, own);
+			own && !search.exhausted
+				? { chosen: own, proved: true, lowerBound: 0 }
+				: await byProgram(part, costs, own, nodes);
 		const cost = costOf(answer.chosen, costs);
 		result.chosen.push(...answer.chosen);
 		result.cost += cost;
-		result.lowerBound += answer.proved ? cost : packingBound(part, costs);
+		result.lowerBound += answer.proved ? cost : answer.lowerBound;
 		result.proved &&= answer.proved;
 	}
 	result.chosen.sort((a, b) => a - b);
@@ -55,11 +58,20 @@ function mustBeSound(sets: readonly (readonly number[])[], costs: ArrayLike<numb
 	}
 }
 
-async function byProgram(part: number[][], costs: ArrayLike<number>, own: number[] | null) {
+async function byProgram(
+	part: number[][],
+	costs: ArrayLike<number>,
+	own: number[] | null,
+	nodes: number,
+): Promise<ProgramAnswer> {
 	const solve = await loadProgramSolver();
-	const found = solve(part, costs);
-	if (found && part.every((set) => set.some((element) => found.chosen.includes(element)))) {
-		return found;
-	}
-	return { chosen: own ?? greedyHittingSet(part, costs), proved: false };
+	const found = solve(part, costs, nodes);
+	const packing = packingBound(part, costs);
+	const lowerBound = Math.max(packing, found?.lowerBound ?? packing);
+	const meets = (chosen: number[]) => {
+		const set = new Set(chosen);
+		return part.every((elements) => elements.some((element) => set.has(element)));
+	};
+	if (found && meets(found.chosen)) return { ...found, lowerBound };
+	return { chosen: own ?? greedyHittingSet(part, costs), lowerBound, proved: false };
 }

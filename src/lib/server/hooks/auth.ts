@@ -18,9 +18,11 @@ export { signIn };
 export const LINK_MINUTES = 20;
 
 /** Only the ways back into the product are open; everything else about signing in is our own pages. */
+const open = /^\/auth\/(callback\/|verify-request$|error$)/;
+
 export const handleAuth: Handle = (input) => {
 	const { pathname } = input.event.url;
-	const closed = pathname.startsWith('/auth/') && !pathname.startsWith('/auth/callback/');
+	const closed = pathname.startsWith('/auth/') && !open.test(pathname);
 	return closed ? new Response('Not found', { status: 404 }) : handle(input);
 };
 

@@ -7,12 +7,12 @@ import {
 	type Finding,
 } from '../../engines/boundaries/index.ts';
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
-import { colour, type ColouringResult } from '../../engines/colouring/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
 import { problemOf } from '../services/draft-problem.ts';
 import { firstDraft } from '../services/first-draft.ts';
+import { colourGraph, type CheckedColouring } from './colour.work.ts';
 import { fileSource } from './file-source.ts';
 import { paletteFor } from '../services/house-palette.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
@@ -31,7 +31,6 @@ export type ReadOutcome =
 	| {
 			status: 'accepted';
 			columns: BoundaryColumns;
-			borders: BorderList;
 			/** the coverage, encoded as it is stored and sent to browsers */
 			geometry: Uint8Array;
 			attributeColumns: string[];
@@ -39,7 +38,7 @@ export type ReadOutcome =
 			planar: boolean;
 			planarWitness: PlanarityNote['witness'];
 			draft: Draft;
-			colouring: ColouringResult;
+			colouring: CheckedColouring;
 	  };
 
 /** From a file's bytes to everything that is stored about it: read, judged planar or not, coloured. */
@@ -71,7 +70,6 @@ async function prepare(
 	return {
 		status: 'accepted',
 		columns: { regions, borders: borderColumns(borders), findings },
-		borders,
 		geometry: encodeCoverage(coverage),
 		attributeColumns: attributes.columns,
 		source,
@@ -88,8 +86,9 @@ async function colourFirst(title: string, coverage: Coverage, borders: BorderLis
 	const ground = { keys: coverage.keys, borders, ordinal };
 	const portrait = isTall(coverage.arcPoints);
 	const plain = firstDraft({ title, palette: paletteFor(0), portrait });
-	const colouring = await colour(problemOf(ground, plain));
-	const inks = colouring.status === 'coloured' ? colouring.inksUsed : 0;
+	const colouring = await colourGraph({ input: problemOf(ground, plain) });
+	const { result } = colouring;
+	const inks = result.status === 'coloured' ? result.inksUsed : 0;
 	return { draft: firstDraft({ title, palette: paletteFor(inks), portrait }), colouring };
 }
 

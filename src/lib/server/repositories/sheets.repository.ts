@@ -93,7 +93,8 @@ export interface NewColouring {
 	inks: ArrayLike<number>;
 	inksUsed: number;
 	lowerBound: number;
-	proof: unknown;
+	/** stored as JSON */
+	proof: object;
 }
 
 export async function insertColouring(

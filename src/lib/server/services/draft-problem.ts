@@ -1,7 +1,6 @@
-import { bordersForSheet } from './interim.ts';
+import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts';
 import { problemFaults, type ColouringProblem } from '../../engines/colouring/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
-import type { BorderList } from '../../engines/borders/border-list.ts';
 import { Unfit } from './outcomes.ts';
 
 /** The regions and borders a draft is about. */
@@ -12,10 +11,15 @@ export interface DraftGround {
 }
 
 /**
- * What the colouring engine is asked for by a draft, regions named by number instead of by key.
+ * What the colouring engine is asked for by a draft, regions named by number instead of by key; with a
+ * colouring before, as few regions as can be change their ink.
  * Throws `Unfit` when the draft names a region the boundary set does not have, or a rule that cannot be.
  */
-export function problemOf(ground: DraftGround, draft: Draft): ColouringProblem {
+export function problemOf(
+	ground: DraftGround,
+	draft: Draft,
+	previous: ArrayLike<number> | null = null,
+): ColouringProblem {
 	const number = numbering(ground, draft);
 	const pair = ([a, b]: readonly [string, string]) => [number(a), number(b)] as const;
 	const problem: ColouringProblem = {
@@ -27,6 +31,7 @@ export function problemOf(ground: DraftGround, draft: Draft): ColouringProblem {
 		alike: draft.alike.map(pair),
 		apart: draft.apart.map(pair),
 		seed: draft.seed,
+		...(previous ? { previous: Int32Array.from(previous), goal: 'fewest-changes' } : {}),
 	};
 	const faults = problemFaults(problem);
 	if (faults.length > 0) throw new Unfit('unfit-rules', faults[0], { faults: faults.slice(0, 20) });
@@ -35,12 +40,8 @@ export function problemOf(ground: DraftGround, draft: Draft): ColouringProblem {
 
 /** The borders that bind on this sheet: as found, without those struck out, with those added by hand. */
 export function sheetBorders(ground: DraftGround, draft: Draft): BorderList {
-	const number = numbering(ground, draft);
-	return bordersForSheet(ground.borders, {
-		pointTouches: draft.pointTouches,
-		struck: draft.struck.map(({ a, b }) => [number(a), number(b)] as const),
-		added: draft.added.map(({ a, b }) => [number(a), number(b)] as const),
-	});
+	numbering(ground, draft);
+	return bordersForSheet(ground.keys, ground.borders, draft);
 }
 
 function numbering({ ordinal }: DraftGround, draft: Draft): (key: string) => number {

@@ -1,7 +1,7 @@
 import { isDeepStrictEqual } from 'node:util';
 import type { Draft } from '../../engines/editions/draft.ts';
 import { draftDocument, type SaveDraft } from '../../schemas/draft.ts';
-import type { DraftSaved, DraftStale } from '../../schemas/desk.ts';
+import type { DeskColouring, DraftSaved, DraftStale } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
@@ -17,8 +17,14 @@ import {
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { changedParts, changesColouring, rightsFor, signLocks } from './draft-rights.ts';
-import { problemOf, sheetBorders } from './draft-problem.ts';
-import { checkedOutcome, deskColouring, deskOutcome, type Outcome } from './outcome-of-colouring.ts';
+import { problemOf } from './draft-problem.ts';
+import {
+	checkedOutcome,
+	deskColouring,
+	deskOutcome,
+	type Names,
+	type Outcome,
+} from './outcome-of-colouring.ts';
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
@@ -65,20 +71,19 @@ export async function saveDraft(
 	for (const right of rightsFor(parts)) requireAccess(member, right);
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
 	if (parts.length === 0) return { status: 'saved', saved: savedNote(view, current) };
-	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after) : null;
-	if (!outcome) sheetBorders({ ...view }, after);
+	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after, current.inks) : null;
 	return store(shop, member, { sheet, view, current, after, outcome, parts });
 }
 
-/** Colours a draft in a thread and has the result checked. */
+/** Colours a draft in a thread, as near as can be to the colouring before, and has the result checked. */
 export async function colourDraft(
 	shop: Pick<Workshop, 'pool'>,
 	view: BoundaryView,
 	draft: Draft,
+	previous: number[] | null,
 ): Promise<Outcome> {
-	const problem = problemOf(view, draft);
-	const { result } = await shop.pool.run('colourGraph', problem);
-	return checkedOutcome(problem, result);
+	const problem = problemOf(view, draft, previous);
+	return checkedOutcome(await shop.pool.run('colourGraph', problem));
 }
 
 interface Change {
@@ -111,8 +116,8 @@ const store = (shop: Workshop, member: Member, change: Change): Promise<SaveResu
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'draft.saved', subject, { sheet: sheet.number, revision, parts });
 		const colouring = outcome
-			? deskOutcome(view.names, outcome)
-			: deskColouring(view.names, current);
+			? deskOutcome(namesIn(view, after), outcome)
+			: standingColouring(view, current);
 		return {
 			status: 'saved',
 			saved: { revision, savedAt: savedAt.toISOString(), document: after, colouring },
@@ -136,11 +141,24 @@ async function keep(
 	return same ? current.colouring_id : insertColouring(trx, sheetId, colouring);
 }
 
+/** What numbers stand for in this draft's sentences. */
+export const namesIn = (view: BoundaryView, draft: Draft): Names => ({
+	regions: view.names,
+	inks: draft.palette.inks,
+});
+
+/** What a stored draft is coloured with, or why not: one of the two was stored with it. */
+function standingColouring(view: BoundaryView, draft: DraftRow): DeskColouring {
+	const colouring = deskColouring(namesIn(view, documentOf(draft)), draft);
+	if (!colouring) throw new Error(`draft ${draft.revision} has neither colouring nor explanation`);
+	return colouring;
+}
+
 const savedNote = (view: BoundaryView, draft: DraftRow): DraftSaved => ({
 	revision: draft.revision,
 	savedAt: draft.saved_at.toISOString(),
 	document: documentOf(draft),
-	colouring: deskColouring(view.names, draft),
+	colouring: standingColouring(view, draft),
 });
 
 const staleNote = (draft: DraftRow): DraftStale => ({
@@ -164,6 +182,19 @@ export async function readDraft(
 	return {
 		...staleNote(draft),
 		document: draftDocument.parse(documentOf(draft)),
-		colouring: deskColouring(view.names, draft),
+		colouring: standingColouring(view, draft),
 	};
+}
+
+/** Saves a new layout on top of whatever the draft is now. */
+export async function saveLayout(
+	shop: Workshop,
+	member: Member,
+	number: number,
+	layout: Draft['layout'],
+): Promise<SaveResult> {
+	requireAccess(member, 'layout.edit');
+	const { id, revision } = await sheetOf(shop.db, member, number);
+	const document = documentOf(await draftOf(shop.db, id, revision));
+	return saveDraft(shop, member, number, { revision, document: { ...document, layout } });
 }

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
-import { checkColouring, type Proof } from '../../engines/colouring/index.ts';
+import type { Proof } from '../../engines/colouring/index.ts';
 import { digestOf, editionContent, type EditionContent } from '../../engines/editions/index.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
@@ -24,6 +24,7 @@ import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
+import { dropUnused } from './stored-files.ts';
 
 /**
  * Issues the draft of this revision as the sheet's next edition: content, digest and files together, all
@@ -48,8 +49,17 @@ export async function issueEdition(
 			}
 			return issue(shop, trx, member, sheet, note, received);
 		});
-	} finally {
-		for (const file of received) await file.discard();
+	} catch (error) {
+		await forget(shop, received);
+		throw error;
+	}
+}
+
+/** Nothing was issued: files that are already in their place go again, unless another edition has them. */
+async function forget(shop: Workshop, received: Received[]): Promise<void> {
+	for (const file of received) {
+		await file.discard();
+		await shop.db.transaction().execute((trx) => dropUnused(trx, shop.files, file.digest));
 	}
 }
 
@@ -63,7 +73,7 @@ async function issue(
 ): Promise<{ number: number; digest: string }> {
 	const draft = await draftOf(trx, sheet.id, sheet.revision);
 	const view = await boundaryView(trx, sheet.boundary_set_id);
-	const inks = checkedInks(view, draft);
+	const inks = await checkedInks(shop, view, draft);
 	const content = await contentOf(trx, view, draft, inks);
 	const digest = await digestOf(content);
 	const number = await nextEditionNumber(trx, sheet.id);
@@ -95,7 +105,11 @@ async function issue(
 }
 
 /** The draft's colouring, looked over by the checker once more. */
-function checkedInks(view: BoundaryView, draft: DraftRow): number[] {
+async function checkedInks(
+	shop: Workshop,
+	view: BoundaryView,
+	draft: DraftRow,
+): Promise<number[]> {
 	const { inks, inks_used: inksUsed, lower_bound: lowerBound } = draft;
 	if (!inks || inksUsed === null || lowerBound === null) {
 		throw new Conflict('not-coloured', 'Only a coloured draft can be issued.');
@@ -106,12 +120,13 @@ function checkedInks(view: BoundaryView, draft: DraftRow): number[] {
 		const lacks = `The colouring uses ${inksUsed} inks and the palette has ${has}.`;
 		throw new Conflict('palette-too-short', lacks);
 	}
-	const faults = checkColouring(problemOf(view, document), {
+	const result = {
 		status: 'coloured',
 		colouring: Int32Array.from(inks),
 		proof: draft.proof as unknown as Proof,
 		...{ inksUsed, lowerBound },
-	});
+	} as const;
+	const faults = await shop.pool.run('recheck', { problem: problemOf(view, document), result });
 	if (faults.length > 0) throw new CheckFailed(faults.join(' '));
 	return inks;
 }

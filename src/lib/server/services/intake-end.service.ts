@@ -8,7 +8,6 @@ import { holdClaim, moveIntake, type IntakeClaim } from '../repositories/intakes
 import { insertColouring, insertDraft, insertSheet } from '../repositories/sheets.repository.ts';
 import { record, type Actor } from './activity.service.ts';
 import { checkedOutcome } from './outcome-of-colouring.ts';
-import { problemOf } from './draft-problem.ts';
 import { dropUnused } from './stored-files.ts';
 
 type Accepted = Extract<ReadOutcome, { status: 'accepted' }>;
@@ -26,9 +25,7 @@ export async function acceptIntake(
 	claim: IntakeClaim,
 	read: Accepted,
 ): Promise<boolean> {
-	const ordinal = new Map(read.columns.regions.key.map((key, number) => [key, number]));
-	const ground = { keys: read.columns.regions.key, borders: read.borders, ordinal };
-	const outcome = checkedOutcome(problemOf(ground, read.draft), read.colouring);
+	const outcome = checkedOutcome(read.colouring);
 	return shop.db.transaction().execute(async (trx) => {
 		const intake = await holdClaim(trx, claim.id, claim.claim);
 		if (!intake?.file_digest) return false;

@@ -1,4 +1,4 @@
-import { mayDo, requireAccess, type Member } from '../access/member.ts';
+import { requireAccess, type Member } from '../access/member.ts';
 import type { IntakeStatus } from '../../schemas/desk.ts';
 import { uploadFields } from '../../schemas/upload.ts';
 import { receiveForm, type ReceivedForm } from '../files/multipart.ts';
@@ -89,10 +89,10 @@ export async function intakeStatus(
 export async function listIntakes(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
-): Promise<{ intakes: IntakeStatus[]; mayUpload: boolean }> {
+): Promise<IntakeStatus[]> {
 	requireAccess(member, 'sheet.read');
 	const rows = await recentIntakes(shop.db, member.team.id, 50);
-	return { intakes: rows.map(statusOf), mayUpload: mayDo(member, 'boundaries.upload') };
+	return rows.map(statusOf);
 }
 
 /** Stops an intake that waits, is being read or has failed, and forgets its file. */

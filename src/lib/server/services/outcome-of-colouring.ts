@@ -1,63 +1,75 @@
 import {
-	checkColouring,
-	type ColouringProblem,
+	explanationSentence,
+	proofSentence,
 	type ColouringResult,
+	type Explanation,
+	type Proof,
 } from '../../engines/colouring/index.ts';
-import { proofSentence } from './interim.ts';
 import type { DeskColouring } from '../../schemas/desk.ts';
+import type { CheckedColouring } from '../jobs/colour.work.ts';
 import type { DraftRow, NewColouring } from '../repositories/sheets.repository.ts';
-import { explanationSentence } from './explanation-sentence.ts';
 
-/** Thrown when a colouring does not pass the checker: never stored, never shown. */
+/** Thrown when a result does not pass its checker: never stored, never shown. */
 export class CheckFailed extends Error {}
 
 /** How a colouring is stored: the colouring itself, or why there is none. */
 export interface Outcome {
-	colouring: NewColouring | null;
+	colouring: (NewColouring & { proof: Proof }) | null;
 	explanation: StoredExplanation | null;
 }
 export type StoredExplanation = Exclude<ColouringResult, { status: 'coloured' }>;
 
-/** Has the result looked over by the checker, which shares no code with the engine, before it is kept. */
-export function checkedOutcome(problem: ColouringProblem, result: ColouringResult): Outcome {
-	const faults = checkColouring(problem, result);
+/** What may be stored: a result in which its checker, which shares no code with the engine, found no fault. */
+export function checkedOutcome({ result, faults }: CheckedColouring): Outcome {
 	if (faults.length > 0) throw new CheckFailed(faults.join(' '));
 	if (result.status !== 'coloured') return { colouring: null, explanation: result };
 	const { colouring: inks, inksUsed, lowerBound, proof } = result;
 	return { colouring: { inks, inksUsed, lowerBound, proof }, explanation: null };
 }
 
-/** What a stored draft says about its colouring, with the reason in one sentence. */
+/** What numbers stand for in sentences. */
+export interface Names {
+	regions: readonly string[];
+	inks: readonly { name: string }[];
+}
+
+/** What a stored draft says about its colouring, with the reason in a sentence; null if it says nothing. */
 export function deskColouring(
-	names: readonly string[],
+	names: Names,
 	stored: Pick<DraftRow, 'inks' | 'inks_used' | 'lower_bound' | 'proof' | 'explanation'>,
 ): DeskColouring | null {
 	const { inks, inks_used: inksUsed, lower_bound: lowerBound } = stored;
 	if (inks && inksUsed !== null && lowerBound !== null) {
-		const proof = stored.proof as unknown as DeskProof;
+		const proof = stored.proof as unknown as Proof;
 		return coloured(names, { inks, inksUsed, lowerBound, proof });
 	}
-	return stored.explanation ? uncoloured(names, stored.explanation as unknown as StoredExplanation) : null;
+	const { explanation } = stored;
+	return explanation && uncoloured(names, explanation as unknown as StoredExplanation);
 }
 
-type DeskProof = Extract<DeskColouring, { status: 'coloured' }>['proof'];
-
 /** The same for an outcome that is about to be stored. */
-export const deskOutcome = (names: readonly string[], outcome: Outcome): DeskColouring =>
-	outcome.colouring
-		? coloured(names, {
-				...outcome.colouring,
-				inks: Array.from(outcome.colouring.inks),
-				proof: outcome.colouring.proof as DeskProof,
-			})
-		: uncoloured(names, outcome.explanation as StoredExplanation);
+export const deskOutcome = (names: Names, { colouring, explanation }: Outcome): DeskColouring =>
+	colouring
+		? coloured(names, { ...colouring, inks: Array.from(colouring.inks) })
+		: uncoloured(names, explanation as StoredExplanation);
 
 const coloured = (
-	names: readonly string[],
-	found: { inks: number[]; inksUsed: number; lowerBound: number; proof: DeskProof },
-): DeskColouring => ({ status: 'coloured', ...found, sentence: proofSentence(found, names) });
+	names: Names,
+	found: { inks: number[]; inksUsed: number; lowerBound: number; proof: Proof },
+): DeskColouring => {
+	const result = { ...found, status: 'coloured', colouring: Int32Array.from(found.inks) } as const;
+	const sentence = proofSentence(result, (region) => names.regions[region]);
+	return { status: 'coloured', ...found, sentence };
+};
 
-const uncoloured = (names: readonly string[], found: StoredExplanation): DeskColouring =>
+const uncoloured = (names: Names, found: StoredExplanation): DeskColouring =>
 	found.status === 'undecided'
 		? { ...found, sentence: found.message }
-		: { ...found, sentence: explanationSentence(found.explanation, names) };
+		: { ...found, sentence: explanationInWords(names, found.explanation) };
+
+export const explanationInWords = ({ regions, inks }: Names, explanation: Explanation): string =>
+	explanationSentence(
+		explanation,
+		(region) => regions[region],
+		(ink) => inks[ink]?.name || `ink ${ink + 1}`,
+	);

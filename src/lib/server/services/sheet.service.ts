@@ -14,7 +14,7 @@ import { listEditionFiles, listEditions } from '../repositories/editions.reposit
 import { deleteSheet, holdSheet, listSheets, renameSheet } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
-import { documentOf, draftOf, sheetOf } from './draft.service.ts';
+import { documentOf, draftOf, namesIn, sheetOf } from './draft.service.ts';
 import { deskColouring } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
@@ -55,7 +55,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		savedAt: draft.saved_at.toISOString(),
 		boundarySet: boundarySetNote(view),
 		draft: document,
-		colouring: deskColouring(view.names, draft),
+		colouring: deskColouring(namesIn(view, document), draft),
 		regions: {
 			key: view.keys,
 			name: view.names,

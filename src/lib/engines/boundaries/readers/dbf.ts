@@ -1,5 +1,6 @@
 import type { Cell } from '../attribute-table.ts';
 import { Refusal } from '../refusal.ts';
+import { textDecoder } from './windows-1252.ts';
 
 interface Field {
 	name: Uint8Array;
@@ -57,7 +58,7 @@ function fieldsOf(bytes: Uint8Array, end: number, width: number): Field[] {
 
 /** The rows as named values: numbers where they are exact, else their text; empty is null. */
 export function* dbfRows(table: DbfTable, encoding: string): Generator<Record<string, Cell>> {
-	const decoder = new TextDecoder(encoding);
+	const decoder = textDecoder(encoding);
 	const names = table.fields.map((field) => decoder.decode(field.name));
 	for (let i = 0; i < table.records; i++) {
 		const record = table.record(i);

@@ -1,4 +1,5 @@
 import { Refusal } from '../refusal.ts';
+import { textDecoder } from './windows-1252.ts';
 
 /** Thrown when the bytes at hand end before the value does; the reader takes more and starts it again. */
 export const needMore = Symbol('more bytes');
@@ -209,7 +210,7 @@ export class JsonBytes {
 				this.encoding = 'windows-1252';
 			}
 		}
-		return new TextDecoder('windows-1252').decode(slice);
+		return textDecoder('windows-1252').decode(slice);
 	}
 }
 

@@ -1,0 +1,48 @@
+import type { Coverage } from '../geometry/coverage.ts';
+import { SegmentBlocks } from '../geometry/segment-blocks.ts';
+import type { BorderList } from './border-list.ts';
+import { addLines } from './lines.ts';
+import { overlapOf, type Overlap } from './overlap.ts';
+import { PairTally } from './pair-tally.ts';
+import { addSeamLines } from './seam.ts';
+import { suspects, type Suspects } from './suspects.ts';
+import { addTouches } from './touches.ts';
+import { addAcrossWater } from './across-water.ts';
+
+export interface BordersOptions {
+	/** pairs up to this far apart with nothing between are borders across water; none unless given */
+	acrossWaterKm?: number;
+	/** overlaps narrower than this on average are not counted; 0.02 m unless given */
+	toleranceMetres?: number;
+}
+
+export interface Survey {
+	borders: BorderList;
+	overlaps: Overlap[];
+	/** one place for each region whose own outline crosses itself */
+	crossings: Suspects['crossings'];
+}
+
+/** The borders of a coverage with the overlaps and crossings that were found on the way. */
+export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Survey {
+	const tally = new PairTally(coverage.keys.length);
+	addLines(coverage, tally);
+	const blocks = new SegmentBlocks(coverage);
+	const found = suspects(coverage, blocks);
+	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
+	for (const { a, b, metres, at } of overlaps) tally.add(a, b, 0, metres, at[0], at[1]);
+	addSeamLines(coverage, tally);
+	addTouches(coverage, tally);
+	if (options.acrossWaterKm) addAcrossWater(coverage, blocks, options.acrossWaterKm, tally);
+	return { borders: tally.list(), overlaps, crossings: found.crossings };
+}
+
+function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): Overlap[] {
+	const overlaps: Overlap[] = [];
+	for (const [a, b] of found.pairs.values()) {
+		const overlap = overlapOf(coverage, a, b);
+		const meanWidth = (overlap.km2 * 1e6) / Math.max(overlap.metres, 1e-9);
+		if (meanWidth > tolerance) overlaps.push(overlap);
+	}
+	return overlaps.sort((p, q) => p.a - q.a || p.b - q.b);
+}

@@ -1,0 +1,148 @@
+import type { Coverage } from '../geometry/coverage.ts';
+import { ringPoints } from '../geometry/coverage-rings.ts';
+import { crossing } from '../geometry/crossing.ts';
+import type { SegmentBlocks } from '../geometry/segment-blocks.ts';
+import { meetings, type Meeting } from './touches.ts';
+
+/** Pairs that may overlap, and places where a region's own outline crosses itself. */
+export interface Suspects {
+	pairs: Map<number, [number, number]>;
+	crossings: { region: number; at: [number, number] }[];
+}
+
+/**
+ * Finds every pair that could overlap. Regions overlap only where an unmatched outline crosses another
+ * line, where around a meeting place two neighbouring lines disagree about what lies between them, or
+ * where a separate piece of the map lies inside a region. When any of this is found, every part is
+ * looked up too, since a large region laid over many covers some it does not touch.
+ */
+export function suspects(coverage: Coverage, blocks: SegmentBlocks): Suspects {
+	const found: Suspects = { pairs: new Map(), crossings: [] };
+	const places = meetings(coverage);
+	findCrossings(coverage, blocks, found);
+	for (const place of places) {
+		if (place.arcs.length > 2 && disagrees(coverage, place)) {
+			const around = place.arcs.flatMap((arc) => [coverage.arcLeft[arc], coverage.arcRight[arc]]);
+			pairUp(around, around, coverage, found);
+		}
+	}
+	const whole = found.pairs.size > 0;
+	for (const [x, y, region] of whole ? partPlaces(coverage) : piecePlaces(coverage, places)) {
+		pairUp([region], blocks.regionsAt(x, y), coverage, found);
+	}
+	if (!whole && found.pairs.size > 0) {
+		for (const [x, y, region] of partPlaces(coverage)) {
+			pairUp([region], blocks.regionsAt(x, y), coverage, found);
+		}
+	}
+	return found;
+}
+
+function pairUp(these: number[], those: number[], coverage: Coverage, found: Suspects): void {
+	for (const a of these) {
+		for (const b of those) {
+			if (a < 0 || b < 0 || a === b) continue;
+			const [low, high] = a < b ? [a, b] : [b, a];
+			found.pairs.set(low * coverage.keys.length + high, [low, high]);
+		}
+	}
+}
+
+function findCrossings(coverage: Coverage, blocks: SegmentBlocks, found: Suspects): void {
+	const { arcLeft, arcRight, arcStarts, arcPoints: p } = coverage;
+	const crossed = new Set<number>();
+	for (let arc = 0; arc < arcLeft.length; arc++) {
+		if (arcLeft[arc] >= 0 && arcRight[arc] >= 0) continue;
+		for (let i = arcStarts[arc]; i + 1 < arcStarts[arc + 1]; i++) {
+			const [x1, y1, x2, y2] = [p[2 * i], p[2 * i + 1], p[2 * i + 2], p[2 * i + 3]];
+			const box = [Math.min(x1, x2), Math.min(y1, y2), Math.max(x1, x2), Math.max(y1, y2)] as const;
+			blocks.search(...box, (other, j) => {
+				const shares = crossing(p, i, p, j);
+				if (!shares) return;
+				const mine = [arcLeft[arc], arcRight[arc]];
+				const theirs = [arcLeft[other], arcRight[other]];
+				pairUp(mine, theirs, coverage, found);
+				const own = mine.find((region) => region >= 0 && theirs.includes(region));
+				if (own === undefined || crossed.has(own)) return;
+				crossed.add(own);
+				const at: [number, number] = [x1 + shares[0] * (x2 - x1), y1 + shares[0] * (y2 - y1)];
+				found.crossings.push({ region: own, at });
+			});
+		}
+	}
+}
+
+/** Goes round a place from line to line: what is left of one must be right of the next. */
+function disagrees(coverage: Coverage, place: Meeting): boolean {
+	const ends = place.arcs.map((arc, i) => {
+		const isStart = startsHere(coverage, place, i);
+		const near = isStart ? coverage.arcStarts[arc] + 1 : coverage.arcStarts[arc + 1] - 2;
+		const { arcPoints: p, arcLeft, arcRight } = coverage;
+		return {
+			angle: Math.atan2(p[2 * near + 1] - place.y, p[2 * near] - place.x),
+			left: isStart ? arcLeft[arc] : arcRight[arc],
+			right: isStart ? arcRight[arc] : arcLeft[arc],
+		};
+	});
+	ends.sort((a, b) => a.angle - b.angle);
+	return ends.some((end, i) => {
+		const next = ends[(i + 1) % ends.length];
+		return end.left !== next.right || (i + 1 < ends.length && end.angle === next.angle);
+	});
+}
+
+/** A closed arc is listed twice: first its start, then its end. */
+function startsHere(coverage: Coverage, place: Meeting, i: number): boolean {
+	const arc = place.arcs[i];
+	const first = coverage.arcStarts[arc];
+	const { arcPoints: p } = coverage;
+	return p[2 * first] === place.x && p[2 * first + 1] === place.y && place.arcs.indexOf(arc) === i;
+}
+
+/** A place on the outline of every part, slightly inside it, with its region. */
+function* partPlaces(coverage: Coverage): Generator<[number, number, number]> {
+	for (let r = 0; r < coverage.keys.length; r++) {
+		for (let part = coverage.regionParts[r]; part < coverage.regionParts[r + 1]; part++) {
+			const points = ringPoints(coverage, coverage.partRings[part]);
+			yield [...insideFirstEdge(points), r];
+		}
+	}
+}
+
+/** One such place for every connected piece of the map. */
+function* piecePlaces(coverage: Coverage, places: Meeting[]): Generator<[number, number, number]> {
+	const group = groupsOfArcs(coverage, places);
+	const seen = new Set<number>();
+	for (let arc = 0; arc < coverage.arcLeft.length; arc++) {
+		if (seen.has(group[arc])) continue;
+		seen.add(group[arc]);
+		const first = 2 * coverage.arcStarts[arc];
+		const points = coverage.arcPoints.subarray(first, first + 4);
+		const isLeft = coverage.arcLeft[arc] >= 0;
+		const region = isLeft ? coverage.arcLeft[arc] : coverage.arcRight[arc];
+		const place = isLeft ? besideEdge(points, 1) : besideEdge(points, -1);
+		yield [...place, region];
+	}
+}
+
+function groupsOfArcs(coverage: Coverage, places: Meeting[]): Int32Array {
+	const group = Int32Array.from(coverage.arcLeft, (_, arc) => arc);
+	const find = (arc: number): number => {
+		let root = arc;
+		while (group[root] !== root) root = group[root] = group[group[root]];
+		return root;
+	};
+	for (const { arcs } of places) for (const arc of arcs) group[find(arc)] = find(arcs[0]);
+	for (let arc = 0; arc < group.length; arc++) group[arc] = find(arc);
+	return group;
+}
+
+const insideFirstEdge = (points: Float64Array) => besideEdge(points, 1);
+
+/** A ten-thousandth of an edge to its left (1) or right (-1), half way along. */
+function besideEdge(points: Float64Array, side: number): [number, number] {
+	const dx = points[2] - points[0];
+	const dy = points[3] - points[1];
+	const away = side * 1e-4;
+	return [points[0] + dx / 2 - dy * away, points[1] + dy / 2 + dx * away];
+}

@@ -1,0 +1,17 @@
+import { readers } from '../colour/reader.ts';
+import { appearanceOf, differenceFor } from './appearance.ts';
+
+const eyes = readers.filter((reader) => reader !== 'grey');
+
+/**
+ * How far inks are apart for whoever sees them least apart: the least CIEDE2000 over the four kinds of
+ * eyesight, ink by ink, 0 on the diagonal. For the goal `distinct` of the colouring engine, which keeps
+ * the closest inks off each other's borders.
+ * Throws a RangeError on text that is no colour.
+ */
+export function inkDistances(inks: readonly string[]): number[][] {
+	const seen = inks.map(appearanceOf);
+	return seen.map((one) =>
+		seen.map((two) => Math.min(...eyes.map((reader) => differenceFor(reader, one, two)))),
+	);
+}

@@ -1,0 +1,94 @@
+import { z } from 'zod';
+import type { Scope } from '../../server/access/scopes.ts';
+import { saveDraft } from '../draft.ts';
+import { readingFields, uploadFields } from '../upload.ts';
+import { boundariesResponse } from './check-boundaries.ts';
+import { colouringRequest, colouringResponse } from './check-colouring.ts';
+import { paletteRequest, paletteResponse } from './check-palette.ts';
+import * as sheets from './sheets.ts';
+
+/** One route of the API: what it takes and gives. The API's description is made from this list. */
+export interface Operation {
+	method: 'GET' | 'POST' | 'PUT';
+	/** below /api/v1, parameters in braces */
+	path: string;
+	scope: Scope;
+	summary: string;
+	json?: z.ZodType;
+	/** fields that come before the file */
+	form?: z.ZodType;
+	status: 200 | 202;
+	/** a schema of the JSON answered, or the media types of a file */
+	answer: z.ZodType | string[];
+	/** statuses besides 400, 401, 403, 404, 405, 429 */
+	refusals?: number[];
+}
+
+const sheet = '/sheets/{sheet}';
+
+export const operations = {
+	checkBoundaries: {
+		...{ method: 'POST', path: '/check/boundaries', scope: 'boundaries:check', status: 200 },
+		summary: 'Read a boundary file: regions, borders with metres, findings. Nothing is stored.',
+		...{ form: readingFields, answer: boundariesResponse, refusals: [413, 415, 422, 503] },
+	},
+	checkColouring: {
+		...{ method: 'POST', path: '/check/colouring', scope: 'colouring:check', status: 200 },
+		summary: 'Colour regions with a proof, or explain why the rules cannot all be kept.',
+		...{ json: colouringRequest, answer: colouringResponse, refusals: [413, 415, 503] },
+	},
+	checkPalette: {
+		...{ method: 'POST', path: '/check/palette', scope: 'palette:check', status: 200 },
+		summary: 'Check a palette for every reader, and mend it.',
+		...{ json: paletteRequest, answer: paletteResponse, refusals: [413, 415, 503] },
+	},
+	listSheets: {
+		...{ method: 'GET', path: '/sheets', scope: 'sheets:read', status: 200 },
+		...{ summary: 'The team’s sheets, the one saved last first.', answer: sheets.sheetList },
+	},
+	uploadSheet: {
+		...{ method: 'POST', path: '/sheets', scope: 'sheets:write', status: 202 },
+		summary: 'Upload a boundary file to become a sheet; follow the intake that is answered.',
+		...{ form: uploadFields, answer: sheets.intake, refusals: [409, 413, 415, 422] },
+	},
+	readIntake: {
+		...{ method: 'GET', path: '/intakes/{intake}', scope: 'sheets:read', status: 200 },
+		...{ summary: 'How far an uploaded file is.', answer: sheets.intake },
+	},
+	readSheet: {
+		...{ method: 'GET', path: sheet, scope: 'sheets:read', status: 200 },
+		...{ summary: 'A sheet: its regions, findings and editions.', answer: sheets.sheetDetail },
+	},
+	readBorders: {
+		...{ method: 'GET', path: `${sheet}/borders`, scope: 'sheets:read', status: 200 },
+		...{ summary: 'The borders that bind on a sheet.', answer: sheets.sheetBorders },
+	},
+	readColouring: {
+		...{ method: 'GET', path: `${sheet}/colouring`, scope: 'sheets:read', status: 200 },
+		...{ summary: 'The colouring of the draft, or why there is none.', answer: sheets.sheetColouring },
+	},
+	readRules: {
+		...{ method: 'GET', path: `${sheet}/rules`, scope: 'sheets:read', status: 200 },
+		...{ summary: 'Everything people decided about a sheet.', answer: sheets.sheetRules },
+	},
+	saveRules: {
+		...{ method: 'PUT', path: `${sheet}/rules`, scope: 'sheets:write', status: 200 },
+		summary: 'Save decisions as the next revision; 409 when somebody else saved first.',
+		...{ json: saveDraft, answer: sheets.rulesSaved, refusals: [409, 413, 415, 422] },
+	},
+	listEditions: {
+		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
+		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },
+	},
+	readEdition: {
+		...{ method: 'GET', path: `${sheet}/editions/{edition}`, scope: 'editions:read', status: 200 },
+		...{ summary: 'One edition.', answer: sheets.edition },
+	},
+	readEditionFile: {
+		method: 'GET',
+		path: `${sheet}/editions/{edition}/files/{file}`,
+		...{ scope: 'editions:read', status: 200 },
+		summary: 'A file of an edition, byte for byte as it was issued.',
+		answer: ['image/svg+xml', 'application/geo+json', 'text/csv'],
+	},
+} satisfies Record<string, Operation>;

@@ -1,0 +1,56 @@
+import type { z } from 'zod';
+import { ApiFault } from './fault.ts';
+
+/** Largest JSON body, in bytes. */
+export const mostJson = 32 * 1024 * 1024;
+
+/** The bytes of a JSON body; 415 for another type, 413 for too many, as soon as that shows. */
+export async function jsonBytes(request: Request): Promise<Uint8Array> {
+	const type = request.headers.get('content-type') ?? '';
+	if (!/^application\/json\s*(;|$)/i.test(type)) {
+		throw new ApiFault(415, 'unsupported-type', 'send the body as application/json');
+	}
+	if (Number(request.headers.get('content-length') ?? 0) > mostJson) throw tooLarge();
+	const chunks: Uint8Array[] = [];
+	let bytes = 0;
+	for await (const chunk of request.body ?? []) {
+		bytes += chunk.length;
+		if (bytes > mostJson) throw tooLarge();
+		chunks.push(chunk);
+	}
+	return Buffer.concat(chunks);
+}
+
+const tooLarge = () => new ApiFault(413, 'too-large', 'a JSON body may have 32 MB');
+
+/** A body by its schema; whatever does not fit is named by its path. */
+export function parseJson<S extends z.ZodType>(bytes: Uint8Array, schema: S): z.output<S> {
+	const read = schema.safeParse(jsonValue(bytes));
+	if (!read.success) throw unfit(read.error.issues);
+	return read.data;
+}
+
+function jsonValue(bytes: Uint8Array): unknown {
+	try {
+		return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
+	} catch (cause) {
+		throw Object.assign(new ApiFault(400, 'malformed', 'the body is not JSON'), { cause });
+	}
+}
+
+/** The first things that do not fit; an unknown field is named in the message itself. */
+export function unfit(issues: readonly z.core.$ZodIssue[]): ApiFault {
+	const listed = issues.slice(0, 20).map((issue) => ({
+		path: issue.path.map(String).join('.'),
+		message: issue.message,
+	}));
+	for (const issue of issues) {
+		if (issue.code !== 'unrecognized_keys') continue;
+		const fields = issue.keys.map((key) => [...issue.path, key].map(String).join('.'));
+		const message = `there is no field ${fields.map((field) => `"${field}"`).join(', ')}`;
+		return new ApiFault(400, 'unknown-field', message, { fields, issues: listed });
+	}
+	const [first] = listed;
+	const message = first.path ? `${first.path}: ${first.message}` : first.message;
+	return new ApiFault(400, 'malformed', message, { issues: listed });
+}

@@ -1,0 +1,37 @@
+import { gunzipSync } from 'node:zlib';
+import { Readable } from 'node:stream';
+
+/** Whether the asker holds these very bytes already. */
+export const isHeld = (request: Request, tag: string): boolean =>
+	(request.headers.get('if-none-match') ?? '').split(/\s*,\s*/).includes(`"${tag}"`);
+
+export const notModified = (tag: string, headers: Record<string, string> = {}): Response =>
+	new Response(null, { status: 304, headers: { etag: `"${tag}"`, ...headers } });
+
+/** Packed bytes, as they are for those who unpack them and unpacked for those who do not. */
+export function gzipped(
+	request: Request,
+	packed: Uint8Array,
+	headers: Record<string, string>,
+): Response {
+	const unpacks = /\bgzip\b/.test(request.headers.get('accept-encoding') ?? '');
+	const bytes = unpacks ? packed : gunzipSync(packed);
+	return new Response(bytes as Uint8Array<ArrayBuffer>, {
+		headers: {
+			...headers,
+			...(unpacks ? { 'content-encoding': 'gzip' } : {}),
+			vary: 'accept-encoding',
+			'content-length': String(bytes.byteLength),
+		},
+	});
+}
+
+/** Names of files that are made here are plain; whatever else comes is kept out of the header. */
+export const attachment = (fileName: string): string =>
+	`attachment; filename="${fileName.replace(/[^\w.-]/g, '_')}"`;
+
+export const streamed = (stream: Readable, headers: Record<string, string>): Response =>
+	new Response(Readable.toWeb(stream) as ReadableStream, { headers });
+
+/** A drawn sheet may style itself and carry its letters; nothing else, wherever it is opened. */
+export const svgPolicy = "default-src 'none'; style-src 'unsafe-inline'; font-src data:; sandbox";

@@ -1,0 +1,27 @@
+import { memberFor } from '$lib/server/access/guard';
+import { attachment, isHeld, notModified, streamed, svgPolicy } from '$lib/server/bytes';
+import { workshop } from '$lib/server/jobs/workshop';
+import { forPage } from '$lib/server/page';
+import { editionFile } from '$lib/server/services/edition.service';
+import type { RequestHandler } from './$types';
+
+/** A file of an issued edition, byte for byte as it was issued. */
+export const GET = (async ({ locals, params, request }) => {
+	const member = memberFor(locals, 'files.download');
+	const { sheet, number, file: name } = params;
+	const file = await forPage(() =>
+		editionFile(workshop(), member, Number(sheet), Number(number), name),
+	);
+	const headers = {
+		etag: `"${file.digest}"`,
+		'cache-control': 'private, max-age=31536000, immutable',
+	};
+	if (isHeld(request, file.digest)) return notModified(file.digest, headers);
+	return streamed(await file.open(), {
+		...headers,
+		'content-type': file.mediaType,
+		'content-length': String(file.bytes),
+		'content-disposition': attachment(file.name),
+		'content-security-policy': svgPolicy,
+	});
+}) satisfies RequestHandler;

@@ -1,0 +1,34 @@
+import { fail, redirect } from '@sveltejs/kit';
+import { memberFor } from '$lib/server/access/guard';
+import { UploadFault } from '$lib/server/files/multipart';
+import { attempt } from '$lib/server/forms';
+import { workshop } from '$lib/server/jobs/workshop';
+import { forPage } from '$lib/server/page';
+import { beginIntake, listIntakes, maxUpload } from '$lib/server/services/intake.service';
+import type { Actions, PageServerLoad } from './$types';
+
+export const load = (async ({ locals }) => {
+	const member = memberFor(locals, 'sheet.read');
+	const intakes = await forPage(() => listIntakes(workshop(), member));
+	return { intakes, maxBytes: maxUpload() };
+}) satisfies PageServerLoad;
+
+export const actions = {
+	/** The form is read as it arrives: the file goes to the disk and is never held in memory. */
+	upload: async ({ locals, request, params }) => {
+		const member = memberFor(locals, 'boundaries.upload');
+		const begun = await attempt(() => begin(member, request));
+		if (begun.failure) return begun.failure;
+		if ('fault' in begun.data) {
+			const { status, message } = begun.data.fault;
+			return fail(status, { message, errors: {}, values: {} });
+		}
+		redirect(303, `/${params.team}/intakes/${begun.data.id}`);
+	},
+} satisfies Actions;
+
+const begin = (member: ReturnType<typeof memberFor>, request: Request) =>
+	beginIntake(workshop(), member, request).catch((fault: unknown) => {
+		if (fault instanceof UploadFault) return { fault };
+		throw fault;
+	});

@@ -1,0 +1,42 @@
+import type { Action } from '../../src/lib/server/access/roles.ts';
+
+/**
+ * What each way into a team needs, written down a second time and by hand: the source is held against it,
+ * and a walk over the running product with every role as well. Paths are below `/(app)/[team]`.
+ */
+export const routeRights: [path: string, entry: string, action: Action][] = [
+	['', 'load', 'team.read'],
+	['/activity', 'load', 'activity.read'],
+	['/intakes/[intake]', 'load', 'sheet.read'],
+	['/intakes/[intake]', 'action cancel', 'boundaries.upload'],
+	['/intakes/[intake]', 'action retry', 'boundaries.upload'],
+	['/intakes/[intake]/status', 'GET', 'sheet.read'],
+	['/members', 'load', 'team.read'],
+	['/members', 'action invite', 'members.manage'],
+	['/members', 'action withdraw', 'members.manage'],
+	['/members', 'action roles', 'members.manage'],
+	['/members', 'action remove', 'members.manage'],
+	['/members', 'action leave', 'team.read'],
+	['/palettes', 'load', 'sheet.read'],
+	['/palettes', 'action add', 'palette.edit'],
+	['/palettes', 'action delete', 'palette.edit'],
+	['/settings', 'load', 'team.manage'],
+	['/settings', 'action rename', 'team.manage'],
+	['/sheets', 'load', 'sheet.read'],
+	['/sheets/[sheet]', 'load', 'sheet.read'],
+	['/sheets/[sheet]', 'action rename', 'layout.edit'],
+	['/sheets/[sheet]', 'action delete', 'sheet.delete'],
+	['/sheets/[sheet]/boundaries', 'action accept', 'findings.accept'],
+	['/sheets/[sheet]/draft', 'POST', 'sheet.read'],
+	['/sheets/[sheet]/drafts/[revision]', 'GET', 'sheet.read'],
+	['/sheets/[sheet]/editions', 'action issue', 'edition.issue'],
+	['/sheets/[sheet]/editions/[number]/[file]', 'GET', 'files.download'],
+	['/sheets/[sheet]/geometry', 'GET', 'sheet.read'],
+	['/sheets/[sheet]/palette', 'load', 'sheet.read'],
+	['/sheets/[sheet]/sheet.svg', 'GET', 'sheet.read'],
+	['/tokens', 'load', 'tokens.manage'],
+	['/tokens', 'action make', 'tokens.manage'],
+	['/tokens', 'action withdraw', 'tokens.manage'],
+	['/upload', 'load', 'sheet.read'],
+	['/upload', 'action default', 'boundaries.upload'],
+];
