@@ -10,12 +10,11 @@ interface Copy {
 	polygons: Point[][][];
 }
 
-/** A place on the border of two districts: the position `at` of the outer ring of one, shared with the other. */
+/** A place on the border of two districts: the position `at` of the outer ring of one of them. */
 interface Site {
 	ring: Point[];
 	at: number;
 	owner: Copy;
-	other: Copy;
 }
 
 /** About a metre of latitude, in degrees. */
@@ -83,19 +82,23 @@ function quietSites(copies: Copy[]): Site[] {
 			);
 		});
 		if (at < 0) return [];
-		const both = pair(at);
-		both.forEach((copy) => taken.add(copy));
-		return [{ ring, at, owner, other: both.find((copy) => copy !== owner) ?? owner }];
+		pair(at).forEach((copy) => taken.add(copy));
+		return [{ ring, at, owner }];
 	});
 }
 
 /** Moves one corner on one side of the border only: outwards it overlaps, inwards it leaves a gap. */
-function shift({ ring, at }: Site, degrees: number): void {
+function shift(site: Site, degrees: number): void {
+	site.ring[site.at] = beyond(site, degrees);
+}
+
+/** The position straight across the border from a site, positive into the other district. */
+function beyond({ ring, at }: Site, degrees: number): Point {
 	const [before, here, after] = [ring[at - 1], ring[at], ring[at + 1]];
 	const narrow = Math.cos((here[1] * Math.PI) / 180);
 	const [dx, dy] = [(after[0] - before[0]) * narrow, after[1] - before[1]];
 	const length = Math.hypot(dx, dy);
-	ring[at] = [
+	return [
 		tidy(here[0] + ((dy / length) * degrees) / narrow),
 		tidy(here[1] - (dx / length) * degrees),
 	];
@@ -116,8 +119,8 @@ function spike({ ring, at }: Site): void {
 }
 
 /** A crumb of a few square metres as a part of its own, on the far side of the border. */
-function stray({ ring, at, owner }: Site): void {
-	const [x, y] = [ring[at][0] + 900 * metre, ring[at][1] + 100 * metre];
+function stray(site: Site): void {
+	const [x, y] = beyond(site, 400 * metre);
 	const size = 3 * metre;
 	const corners: Point[] = [
 		[x, y],
@@ -125,7 +128,7 @@ function stray({ ring, at, owner }: Site): void {
 		[x, y + size],
 		[x, y],
 	];
-	owner.polygons.push([corners.map(([lon, lat]): Point => [tidy(lon), tidy(lat)])]);
+	site.owner.polygons.push([corners.map(([lon, lat]): Point => [tidy(lon), tidy(lat)])]);
 }
 
 /** Noise of up to a millimetre on every position of a district. */

@@ -72,3 +72,19 @@ it("finds all 445 borders through the noise of the second supplier's file", asyn
 	const found = new Set([...pairs(dirty)].map((pair) => pair.replace('0308B', '0308')));
 	expect([...pairs(clean)].filter((pair) => !found.has(pair))).toEqual([]);
 });
+
+it("tells of every overlap in the second supplier's file and of no other", async () => {
+	const { findings } = await read('tavaroe-second-supplier.geojson');
+	const overlaps = findings.filter(({ code }) => code === 'overlap');
+	// as sample-data/README.md lists them: three made 40 m wide, a crumb, and the district given twice
+	expect(overlaps.map(({ regions }) => [...regions].sort().join(' ')).sort()).toEqual([
+		'0108 0910',
+		'0109 0708',
+		'0110 0111',
+		'0303 0306',
+		'0308 0308B',
+	]);
+	const codes = new Set(findings.map(({ code }) => code));
+	for (const code of ['ring-closed', 'ring-turned', 'vertices-joined'])
+		expect(codes).toContain(code);
+});

@@ -5,6 +5,9 @@ import { crossing } from '../geometry/crossing.ts';
 import type { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import type { PairTally } from './pair-tally.ts';
 
+/** Nearer than this to a corner is touching it, in metres. */
+const touching = 0.02;
+
 interface Gap {
 	a: number;
 	b: number;
@@ -83,7 +86,7 @@ function measure(
 	gaps.set(code, { a, b, metres, from, to: [ux + share * (vx - ux), uy + share * (vy - uy)] });
 }
 
-/** The straight connection must not pass through the inside of another region. */
+/** The straight connection must not pass through another region, nor along its outline. */
 function isCrossed(gap: Gap, coverage: Coverage, blocks: SegmentBlocks): boolean {
 	const { arcLeft, arcRight, arcPoints } = coverage;
 	const line = Float64Array.of(...gap.from, ...gap.to);
@@ -93,7 +96,8 @@ function isCrossed(gap: Gap, coverage: Coverage, blocks: SegmentBlocks): boolean
 	const box = [Math.min(x1, x2), Math.min(y1, y2), Math.max(x1, x2), Math.max(y1, y2)] as const;
 	blocks.search(...box, (arc, j) => {
 		if (crossed || !(isThird(arcLeft[arc]) || isThird(arcRight[arc]))) return;
-		if (crossing(line, 0, arcPoints, j)) crossed = true;
+		const corner = nearestOnSegment(arcPoints[2 * j], arcPoints[2 * j + 1], x1, y1, x2, y2);
+		if (corner.metres < touching || crossing(line, 0, arcPoints, j)) crossed = true;
 	});
 	return crossed;
 }

@@ -35,6 +35,13 @@ const problems = fc.integer({ min: 1, max: 8 }).chain((regions) =>
 		})),
 );
 
+/** Crowded maps of free and locked regions without other rules, where collisions take several locks. */
+const crowded = fc.record({
+	pairs: pairsOf(9, 26),
+	locks: fc.array(fc.integer({ min: -1, max: 2 }), { minLength: 9, maxLength: 9 }),
+	free: fc.array(fc.nat(8), { maxLength: 5 }),
+});
+
 /** More inks than any of these problems can use. */
 const PLENTY = 13;
 const inksOf = ({ inks }: ColouringProblem) => (inks === 'fewest' ? PLENTY : inks);
@@ -85,4 +92,31 @@ describe('explain against trying everything', () => {
 			{ numRuns: 300 },
 		);
 	});
+
+	it('finds collisions of several locks with free regions between them', async () => {
+		const sizes = new Set<number>();
+		await fc.assert(
+			fc.asyncProperty(crowded, async ({ pairs, locks, free }) => {
+				const ordered = properLocks(pairs, locks, free);
+				const borders = { a: pairs.map((pair) => pair[0]), b: pairs.map((pair) => pair[1]) };
+				const problem: ColouringProblem = { regions: 9, borders, inks: 3, locks: ordered };
+				const explanation = await explain(problem);
+				expect(explanation === null).toBe(feasible(problem, 3));
+				if (!explanation) return;
+				expect(await checkExplanation(problem, explanation)).toEqual([]);
+				expect(explanation.release?.cost ?? Infinity).toBe(cheapest(problem));
+				sizes.add(explanation.locks.length);
+			}),
+			{ numRuns: 600, seed: 1 },
+		);
+		expect(Math.max(...sizes)).toBeGreaterThanOrEqual(3);
+	});
 });
+
+/** The locks without those that would collide at sight. */
+function properLocks(pairs: [number, number][], locks: number[], free: number[]): Int32Array {
+	const kept = Int32Array.from(locks);
+	for (const r of free) kept[r] = -1;
+	for (const [a, b] of pairs) if (kept[a] === kept[b]) kept[a] = -1;
+	return kept;
+}

@@ -1,0 +1,178 @@
+import { randomUUID } from 'node:crypto';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import {
+	Forbidden,
+	mayDo,
+	requireAccess,
+	type Member,
+} from '../../src/lib/server/access/member.ts';
+import { actions, allows, may, roles, type Action } from '../../src/lib/server/access/roles.ts';
+import { readActivity } from '../../src/lib/server/services/activity.service.ts';
+import { readDraft, saveDraft } from '../../src/lib/server/services/draft.service.ts';
+import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
+import {
+	editionFile,
+	issueEdition,
+	readEdition,
+} from '../../src/lib/server/services/edition.service.ts';
+import {
+	beginIntake,
+	cancelIntake,
+	intakeStatus,
+	listIntakes,
+	retryIntake,
+} from '../../src/lib/server/services/intake.service.ts';
+import {
+	invite,
+	readInvitations,
+	withdrawInvitation,
+} from '../../src/lib/server/services/invitations.service.ts';
+import {
+	changeRoles,
+	leaveTeam,
+	readMembers,
+	removeMember,
+} from '../../src/lib/server/services/members.service.ts';
+import {
+	addPalette,
+	removePalette,
+	teamPalettes,
+} from '../../src/lib/server/services/palette.service.ts';
+import {
+	acceptFinding,
+	deskSheet,
+	nameSheet,
+	removeSheet,
+	sheetGeometry,
+	sheetList,
+} from '../../src/lib/server/services/sheet.service.ts';
+import { changeTeamName } from '../../src/lib/server/services/teams.service.ts';
+import {
+	createToken,
+	readTokens,
+	withdrawToken,
+} from '../../src/lib/server/services/tokens.service.ts';
+import { join, newTeam, openHouse } from '../support/house.ts';
+import { servicesForMembers } from '../support/member-services.ts';
+import { createWorkshop, type TestWorkshop } from '../support/workshop.ts';
+
+let house: Awaited<ReturnType<typeof openHouse>>;
+let bench: TestWorkshop;
+let shop: TestWorkshop;
+beforeAll(async () => {
+	house = await openHouse();
+	bench = await createWorkshop();
+	shop = { ...bench, db: house.db };
+});
+afterAll(async () => {
+	await bench.close();
+	await house.close();
+});
+
+const id = randomUUID();
+const empty = () => new Request('http://localhost/', { method: 'POST', body: new FormData() });
+const sent = { revision: 1 } as Parameters<typeof saveDraft>[3];
+const token = { name: 'Walk', scopes: [], days: 1 };
+
+/** Every service that acts for a member, what it needs, and a call that touches nothing that exists. */
+const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
+	acceptFinding: ['findings.accept', (member) => acceptFinding(shop, member, 99, 1)],
+	addPalette: [
+		'palette.edit',
+		(member) => addPalette(shop, member, { name: randomUUID(), inks: [] }),
+	],
+	beginIntake: ['boundaries.upload', (member) => beginIntake(shop, member, empty())],
+	cancelIntake: ['boundaries.upload', (member) => cancelIntake(shop, member, id)],
+	changeRoles: ['members.manage', (member) => changeRoles(member, id, ['designer'])],
+	changeTeamName: ['team.manage', (member) => changeTeamName(member, 'Walked')],
+	createToken: ['tokens.manage', (member) => createToken(member, token)],
+	deskSheet: ['sheet.read', (member) => deskSheet(shop, member, 99)],
+	draftSvg: ['sheet.read', (member) => draftSvg(shop, member, 99, 'typical')],
+	editionFile: ['files.download', (member) => editionFile(shop, member, 99, 1, 'sheet.svg')],
+	intakeStatus: ['sheet.read', (member) => intakeStatus(shop, member, id)],
+	invite: [
+		'members.manage',
+		(member) => invite(member, 'Walk', `${randomUUID()}@x.example`, ['planner']),
+	],
+	issueEdition: ['edition.issue', (member) => issueEdition(shop, member, 99, 1, '')],
+	leaveTeam: ['team.read', (member) => leaveTeam(member)],
+	listIntakes: ['sheet.read', (member) => listIntakes(shop, member)],
+	nameSheet: ['layout.edit', (member) => nameSheet(shop, member, 99, 'Walked')],
+	readActivity: [
+		'activity.read',
+		(member) => readActivity(member, { kind: null, userId: null }, 1),
+	],
+	readDraft: ['sheet.read', (member) => readDraft(shop, member, 99, 1)],
+	readEdition: ['sheet.read', (member) => readEdition(shop, member, 99, 1)],
+	readInvitations: ['members.manage', (member) => readInvitations(member)],
+	readMembers: ['team.read', (member) => readMembers(member)],
+	readTokens: ['tokens.manage', (member) => readTokens(member)],
+	removeMember: ['members.manage', (member) => removeMember(member, id)],
+	removePalette: ['palette.edit', (member) => removePalette(shop, member, id)],
+	removeSheet: ['sheet.delete', (member) => removeSheet(shop, member, 99)],
+	retryIntake: ['boundaries.upload', (member) => retryIntake(shop, member, id)],
+	saveDraft: ['sheet.read', (member) => saveDraft(shop, member, 99, sent)],
+	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
+	sheetList: ['sheet.read', (member) => sheetList(shop, member)],
+	teamPalettes: ['sheet.read', (member) => teamPalettes(shop, member)],
+	withdrawInvitation: ['members.manage', (member) => withdrawInvitation(member, id)],
+	withdrawToken: ['tokens.manage', (member) => withdrawToken(member, id)],
+};
+/** They only look up, for services that have asked already, or tell what a member may do. */
+const lookUps = ['rightsOf', 'sheetOf'];
+
+const isForbidden = (work: Promise<unknown>): Promise<boolean> =>
+	work.then(
+		() => false,
+		(problem: unknown) => problem instanceof Forbidden,
+	);
+
+describe('what each role may do', () => {
+	it('is walked for every service that acts for a member', () => {
+		expect([...Object.keys(walk), ...lookUps].sort()).toEqual(servicesForMembers());
+	});
+
+	describe.each(roles)('%s', (role) => {
+		let member: Member;
+		beforeAll(async () => {
+			member = await join(house.db, (await newTeam(house.db)).team, role);
+		});
+		it.each(Object.entries(walk))('%s', async (_name, [action, call]) => {
+			expect(await isForbidden(call(member))).toBe(!allows([role], action));
+		});
+	});
+
+	it('is closed to a token without scopes', async () => {
+		const { team } = await newTeam(house.db);
+		const member: Member = { team, userId: null, tokenId: id, roles: [], actions: [] };
+		for (const [name, [, call]] of Object.entries(walk)) {
+			expect(await isForbidden(call(member)), name).toBe(true);
+		}
+	});
+});
+
+describe('the table of roles', () => {
+	it('names somebody for every action, and only roles that exist', () => {
+		for (const action of actions) {
+			expect(may[action].length, action).toBeGreaterThan(0);
+			for (const role of may[action]) expect(roles).toContain(role);
+		}
+	});
+
+	it('gives members, tokens and the team itself to the admin alone', () => {
+		const kept = actions.filter((action) => action.endsWith('.manage'));
+		expect(kept).toHaveLength(3);
+		for (const action of kept) expect(may[action]).toEqual(['admin']);
+	});
+
+	it('adds up for those who hold several roles', () => {
+		const team = { id, slug: 'walk', name: 'Walk' };
+		const member: Member = {
+			...{ team, userId: id, tokenId: null },
+			roles: ['analyst', 'approver'],
+			actions: null,
+		};
+		expect(mayDo(member, 'colours.edit') && mayDo(member, 'edition.issue')).toBe(true);
+		expect(() => requireAccess(member, 'members.manage')).toThrow(Forbidden);
+	});
+});
