@@ -21,6 +21,8 @@ export interface DeskSheet {
 	boundarySet: DeskBoundarySet;
 	draft: Draft;
 	colouring: DeskColouring | null;
+	/** ink of each region in the last colouring that kept every rule of its draft; null before the first */
+	lastInks: number[] | null;
 	regions: DeskRegions;
 	borders: BorderList;
 	findings: DeskFinding[];

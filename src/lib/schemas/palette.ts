@@ -5,15 +5,21 @@ import type { Ink } from '../engines/palettes/palette.ts';
  * A palette as people paste it: one ink a line or separated by commas, hex digits with or without `#`,
  * in any order with a name beside them: `#ebb855 Ochre`.
  */
-export const inkList = z.string().max(10_000).transform((text, context): Ink[] => {
-	const entries = text.split(/[\n,;]+/).map((entry) => entry.trim()).filter(Boolean);
-	const inks = entries.map(readInk);
-	const wrong = inks.indexOf(null);
-	if (wrong >= 0) context.addIssue(`“${entries[wrong]}” is no colour: write six hex digits.`);
-	if (inks.length === 0) context.addIssue('Paste at least one colour.');
-	if (inks.length > 64) context.addIssue('A palette has at most 64 inks.');
-	return inks.filter((entry) => entry !== null).map(named);
-});
+export const inkList = z
+	.string()
+	.max(10_000)
+	.transform((text, context): Ink[] => {
+		const entries = text
+			.split(/[\n,;]+/)
+			.map((entry) => entry.trim())
+			.filter(Boolean);
+		const inks = entries.map(readInk);
+		const wrong = inks.indexOf(null);
+		if (wrong >= 0) context.addIssue(`“${entries[wrong]}” is no colour: write six hex digits.`);
+		if (inks.length === 0) context.addIssue('Paste at least one colour.');
+		if (inks.length > 64) context.addIssue('A palette has at most 64 inks.');
+		return inks.filter((entry) => entry !== null).map(named);
+	});
 
 function readInk(entry: string): Ink | null {
 	const found = /(?:^|[\s"'(])#?([0-9a-f]{6}|[0-9a-f]{3})(?=$|[\s"')])/i.exec(entry);
@@ -29,7 +35,10 @@ function readInk(entry: string): Ink | null {
 	return { name, hex: `#${hex}` };
 }
 
-const named = (ink: Ink, number: number): Ink => ({ ...ink, name: ink.name || `Ink ${number + 1}` });
+const named = (ink: Ink, number: number): Ink => ({
+	...ink,
+	name: ink.name || `Ink ${number + 1}`,
+});
 
 export const newPalette = z.object({
 	name: z.string().trim().min(1, 'Give the palette a name.').max(120),

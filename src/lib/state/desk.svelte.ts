@@ -79,6 +79,8 @@ export class Desk {
 	#colourer: Colourer | null = null;
 	#asked: readonly unknown[];
 	#askedFor: Draft;
+	/** the last colouring the server has stored: what it stays near to, and so must we */
+	#savedInks: Int32Array | null;
 	/** the colouring that belongs to a document, so that undo shows it again at once */
 	#known = new WeakMap<Draft, { answer: DeskColouring | null; inks: Int32Array }>();
 
@@ -88,7 +90,8 @@ export class Desk {
 		this.address = start.address;
 		this.userName = start.userName;
 		this.answer = start.sheet.colouring;
-		this.inks = inksOf(start.sheet.colouring, start.sheet.regions.key.length);
+		this.#savedInks = start.sheet.lastInks && Int32Array.from(start.sheet.lastInks);
+		this.inks = this.#savedInks ?? new Int32Array(start.sheet.regions.key.length).fill(-1);
 		this.#askedFor = start.sheet.draft;
 		this.#asked = colouringParts(start.sheet.draft);
 		this.#remember(start.sheet.draft);
@@ -100,7 +103,7 @@ export class Desk {
 			save: start.save,
 			keeper: start.keeper,
 			onchange: (document) => this.#recolour(document),
-			onsaved: ({ colouring }) => this.#adopt(colouring, this.draft.document),
+			onsaved: ({ colouring }) => this.#adoptSaved(colouring),
 		});
 	}
 
@@ -123,7 +126,7 @@ export class Desk {
 		this.sheet = sheet;
 		this.draft.refresh(sheet.revision, sheet.draft, sheet.savedAt);
 		if (sheet.colouring && !this.draft.dirty && sheet.revision === this.draft.revision)
-			this.#adopt(sheet.colouring, this.draft.document);
+			this.#adoptSaved(sheet.colouring);
 	}
 
 	select(region: number | null, open = false) {
@@ -165,13 +168,10 @@ export class Desk {
 		this.working = this.#colourer !== null;
 		this.failure = '';
 		this.evidence = null;
-		const { borders } = this.sheet;
-		const standing = standings(borders, document, this.numbers);
-		this.#colourer?.ask(problemOf(document, borders, standing, this.numbers, this.#previous()));
-	}
-
-	#previous(): Int32Array | null {
-		return this.inks.some((ink) => ink >= 0) ? this.inks : null;
+		const { borders, regions } = this.sheet;
+		// another seed asks for another arrangement, so nothing is held to the colouring before
+		const from = document.seed === this.draft.base.seed ? this.#savedInks : null;
+		this.#colourer?.ask(problemOf(document, regions.key, borders, this.numbers, from));
 	}
 
 	#settle(reply: ColourReply) {
@@ -182,6 +182,11 @@ export class Desk {
 		}
 		const sentence = this.#start.sentence(reply.result, this.sheet, this.#askedFor);
 		this.#adopt(deskColouring(reply.result, sentence), this.#askedFor);
+	}
+
+	#adoptSaved(answer: DeskColouring | null) {
+		if (answer?.status === 'coloured') this.#savedInks = Int32Array.from(answer.inks);
+		if (!this.draft.dirty) this.#adopt(answer, this.draft.document);
 	}
 
 	#adopt(answer: DeskColouring | null, document: Draft) {
@@ -200,11 +205,6 @@ export class Desk {
 		this.#known.set(document, { answer: this.answer, inks: this.inks });
 	}
 }
-
-const inksOf = (colouring: DeskColouring | null, regions: number): Int32Array =>
-	colouring?.status === 'coloured'
-		? Int32Array.from(colouring.inks)
-		: new Int32Array(regions).fill(-1);
 
 function deskColouring(result: ColouringResult, sentence: string): DeskColouring {
 	if (result.status !== 'coloured') return { ...result, sentence };

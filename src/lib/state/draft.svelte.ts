@@ -67,6 +67,10 @@ export class DraftState {
 	get revision() {
 		return this.#revision;
 	}
+	/** what the server has */
+	get base() {
+		return this.#base;
+	}
 	get dirty() {
 		return this.document !== this.#base;
 	}
@@ -228,13 +232,13 @@ export class DraftState {
 		if (this.document === sent) this.document = saved.document;
 		this.savedAt = saved.savedAt;
 		this.restoredFrom = null;
+		this.#start.onsaved?.(saved);
 		if (this.dirty) {
 			this.saving = 'waiting';
 			this.#keep(this.document);
 			return this.#schedule(quiet);
 		}
 		this.saving = 'saved';
-		this.#start.onsaved?.(saved);
 		await this.#start.keeper?.forget(this.#start.sheetId).catch(() => {
 			this.kept = false;
 		});

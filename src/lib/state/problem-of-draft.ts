@@ -1,7 +1,7 @@
-import type { BorderList } from '$lib/engines/borders/border-list';
+import { bordersForSheet, type BorderList } from '../engines/borders/index.ts';
 import type { ColouringProblem } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
-import type { RegionNumbers, Standing } from './rules-in-force';
+import type { RegionNumbers } from './rules-in-force';
 
 /** The parts of a draft that a colouring depends on; layout and the look of inks are not among them. */
 export const colouringParts = (draft: Draft): readonly unknown[] => [
@@ -16,23 +16,22 @@ export const colouringParts = (draft: Draft): readonly unknown[] => [
 	draft.seed,
 ];
 
-/** What is asked of the colouring engine for this draft, staying as near as can be to `previous`. */
+/**
+ * What is asked of the colouring engine for this draft, staying as near as can be to `previous`. The
+ * server asks the very same when the draft is saved, and so gets the same answer.
+ */
 export function problemOf(
 	draft: Draft,
+	keys: string[],
 	borders: BorderList,
-	standing: readonly Standing[],
 	numbers: RegionNumbers,
 	previous: Int32Array | null,
 ): ColouringProblem {
-	const pairs = [
-		...countingPairs(borders, standing),
-		...draft.added.flatMap(({ a, b }) => pairOf(a, b, numbers)),
-	];
 	return {
-		regions: numbers.size,
-		borders: { a: Uint32Array.from(pairs, ([a]) => a), b: Uint32Array.from(pairs, ([, b]) => b) },
+		regions: keys.length,
+		borders: bordersForSheet(keys, borders, draft),
 		inks: draft.inks,
-		locks: lockArray(draft, numbers),
+		...lockColumns(draft, numbers),
 		forbidden: draft.forbidden.flatMap(({ key, ink }) => {
 			const region = numbers.get(key);
 			return region === undefined ? [] : [[region, ink] as const];
@@ -44,19 +43,17 @@ export function problemOf(
 	};
 }
 
-/** Ink of each locked region, -1 for free. */
-export function lockArray(draft: Draft, numbers: RegionNumbers): Int32Array {
+/** Ink of each locked region, -1 for free, and what dropping each lock would cost. */
+function lockColumns(draft: Draft, numbers: RegionNumbers) {
 	const locks = new Int32Array(numbers.size).fill(-1);
-	for (const [key, { ink }] of Object.entries(draft.locks)) {
+	const lockCosts = new Float64Array(numbers.size).fill(1);
+	for (const [key, { ink, cost }] of Object.entries(draft.locks)) {
 		const region = numbers.get(key);
-		if (region !== undefined) locks[region] = ink;
+		if (region === undefined) continue;
+		locks[region] = ink;
+		lockCosts[region] = cost;
 	}
-	return locks;
-}
-
-function* countingPairs(borders: BorderList, standing: readonly Standing[]) {
-	for (let border = 0; border < standing.length; border++)
-		if (standing[border] === 'counts') yield [borders.a[border], borders.b[border]] as const;
+	return { locks, lockCosts };
 }
 
 function pairOf(a: string, b: string, numbers: RegionNumbers): [number, number][] {

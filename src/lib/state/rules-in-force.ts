@@ -1,5 +1,5 @@
 import type { BorderList } from '$lib/engines/borders/border-list';
-import { borderKinds } from '$lib/engines/borders/border-list';
+import { borderKinds } from '../engines/borders/border-list.ts';
 import type { Draft } from '$lib/engines/editions/draft';
 
 /** Region numbers by key. */

@@ -7,7 +7,9 @@ export const border = z.strictObject({
 	kind: z.enum(['line', 'point', 'water', 'hand']),
 	metres: z
 		.number()
-		.describe('geodesic length of the shared line; 0 for a point touch; width of a gap across water'),
+		.describe(
+			'geodesic length of the shared line; 0 for a point touch; width of a gap across water',
+		),
 });
 
 export const region = z.strictObject({

@@ -36,4 +36,7 @@ export const errorBody = z.strictObject({
 });
 
 export const moment = z.iso.datetime().describe('ISO 8601, universal time');
-export const digest = z.string().regex(/^[0-9a-f]{64}$/).describe('SHA-256, hexadecimal');
+export const digest = z
+	.string()
+	.regex(/^[0-9a-f]{64}$/)
+	.describe('SHA-256, hexadecimal');

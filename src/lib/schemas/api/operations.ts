@@ -65,7 +65,10 @@ export const operations = {
 	},
 	readColouring: {
 		...{ method: 'GET', path: `${sheet}/colouring`, scope: 'sheets:read', status: 200 },
-		...{ summary: 'The colouring of the draft, or why there is none.', answer: sheets.sheetColouring },
+		...{
+			summary: 'The colouring of the draft, or why there is none.',
+			answer: sheets.sheetColouring,
+		},
 	},
 	readRules: {
 		...{ method: 'GET', path: `${sheet}/rules`, scope: 'sheets:read', status: 200 },

@@ -24,9 +24,7 @@ export const edition = z.strictObject({
 	note: z.string(),
 	issuedAt: moment,
 	issuedBy: z.string().nullable(),
-	files: z.array(
-		z.strictObject({ name: z.string(), mediaType: z.string(), bytes: z.int() }),
-	),
+	files: z.array(z.strictObject({ name: z.string(), mediaType: z.string(), bytes: z.int() })),
 });
 export const editionList = z.strictObject({ editions: z.array(edition) });
 

@@ -116,6 +116,18 @@ export async function insertColouring(
 	return id;
 }
 
+/** Inks of the colouring stored last, whichever draft it was for. */
+export const latestInks = async (db: Db, sheetId: string): Promise<number[] | null> => {
+	const row = await db
+		.selectFrom('colourings')
+		.select('inks')
+		.where('sheet_id', '=', sheetId)
+		.orderBy('created_at', 'desc')
+		.limit(1)
+		.executeTakeFirst();
+	return row?.inks ?? null;
+};
+
 export interface NewDraft {
 	sheetId: string;
 	revision: number;

@@ -11,6 +11,7 @@ import {
 	holdSheet,
 	insertColouring,
 	insertDraft,
+	latestInks,
 	type DraftRow,
 	type SheetRecord,
 } from '../repositories/sheets.repository.ts';
@@ -28,7 +29,8 @@ import {
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
-export type SaveResult = { status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
+export type SaveResult =
+	{ status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
 
 /** A sheet of this team, or `NotFound`. */
 export async function sheetOf(db: Db, member: Member, number: number): Promise<SheetRecord> {
@@ -71,9 +73,15 @@ export async function saveDraft(
 	for (const right of rightsFor(parts)) requireAccess(member, right);
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
 	if (parts.length === 0) return { status: 'saved', saved: savedNote(view, current) };
-	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after, current.inks) : null;
+	// another seed asks for another arrangement, so nothing is held to the colouring before
+	const from = parts.includes('seed') ? null : await inksBefore(shop.db, sheet.id, current);
+	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after, from) : null;
 	return store(shop, member, { sheet, view, current, after, outcome, parts });
 }
+
+/** The colouring of a draft or, where its rules collide, the one that stood before them. */
+export const inksBefore = async (db: Db, sheetId: string, draft: DraftRow) =>
+	draft.inks ?? (await latestInks(db, sheetId));
 
 /** Colours a draft in a thread, as near as can be to the colouring before, and has the result checked. */
 export async function colourDraft(

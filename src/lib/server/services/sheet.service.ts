@@ -1,4 +1,10 @@
-import type { DeskEdition, DeskFinding, DeskSheet, SheetRow, SourceNote } from '../../schemas/desk.ts';
+import type {
+	DeskEdition,
+	DeskFinding,
+	DeskSheet,
+	SheetRow,
+	SourceNote,
+} from '../../schemas/desk.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
@@ -11,10 +17,15 @@ import {
 	readGeometry,
 } from '../repositories/boundaries.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
-import { deleteSheet, holdSheet, listSheets, renameSheet } from '../repositories/sheets.repository.ts';
+import {
+	deleteSheet,
+	holdSheet,
+	listSheets,
+	renameSheet,
+} from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
-import { documentOf, draftOf, namesIn, sheetOf } from './draft.service.ts';
+import { documentOf, draftOf, inksBefore, namesIn, sheetOf } from './draft.service.ts';
 import { deskColouring } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
@@ -56,6 +67,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		boundarySet: boundarySetNote(view),
 		draft: document,
 		colouring: deskColouring(namesIn(view, document), draft),
+		lastInks: await inksBefore(db, sheet.id, draft),
 		regions: {
 			key: view.keys,
 			name: view.names,
@@ -170,7 +182,11 @@ export async function nameSheet(
 	await shop.db.transaction().execute(async (trx) => {
 		await renameSheet(trx, sheet.id, name);
 		const subject = { kind: 'sheet', id: sheet.id };
-		await record(trx, member, 'sheet.renamed', subject, { sheet: number, from: sheet.name, to: name });
+		await record(trx, member, 'sheet.renamed', subject, {
+			sheet: number,
+			from: sheet.name,
+			to: name,
+		});
 	});
 }
 

@@ -1,0 +1,33 @@
+import { describe, expect, it } from 'vitest';
+import { problemOf as serverProblem } from '../server/services/draft-problem';
+import { blankDraft } from '../../../tests/support/blank-draft';
+import { problemOf } from './problem-of-draft';
+import { numberRegions } from './rules-in-force';
+
+describe('problemOf', () => {
+	it('asks what the server asks, so that both get the same answer', () => {
+		const keys = ['a', 'b', 'c', 'd'];
+		const borders = {
+			a: Uint32Array.of(0, 0, 1, 2),
+			b: Uint32Array.of(1, 2, 2, 3),
+			kind: Uint8Array.of(0, 1, 0, 0),
+			metres: Float64Array.of(5, 0, 7, 9),
+			at: new Float64Array(8),
+		};
+		const draft = blankDraft({
+			locks: { b: { ink: 1, cost: 3 } },
+			forbidden: [{ key: 'a', ink: 0 }],
+			alike: [['a', 'd']],
+			apart: [['b', 'd']],
+			pointTouches: true,
+			struck: [{ a: 'b', b: 'c', reason: 'a lake' }],
+			added: [{ a: 'a', b: 'd', reason: 'a ferry' }],
+			seed: 7,
+		});
+		const numbers = numberRegions(keys);
+		for (const previous of [null, Int32Array.of(0, 1, 0, 1)])
+			expect(problemOf(draft, keys, borders, numbers, previous)).toEqual(
+				serverProblem({ keys, borders, ordinal: numbers }, draft, previous),
+			);
+	});
+});
