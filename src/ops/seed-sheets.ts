@@ -47,7 +47,8 @@ async function takeIn(shop: Workshop, member: Member): Promise<number> {
 	const { id } = await beginIntake(shop, member, request);
 	await runIntake(shop, id, new AbortController().signal);
 	const { sheet, state, refusal } = await intakeStatus(shop, member, id);
-	if (sheet === null) throw new Error(`the sample data was not taken in: ${state} ${refusal?.message}`);
+	if (sheet === null)
+		throw new Error(`the sample data was not taken in: ${state} ${refusal?.message}`);
 	return sheet;
 }
 
