@@ -1,3 +1,4 @@
+import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
 /**
@@ -10,11 +11,16 @@ export default defineConfig({
 			{
 				test: {
 					name: 'engines',
-					include: ['src/**/*.test.ts', 'tests/published/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+					include: [
+						'src/**/*.test.ts',
+						'tests/published/**/*.test.ts',
+						'tests/architecture/**/*.test.ts',
+					],
 					testTimeout: 60_000,
 				},
 			},
 			{
+				resolve: { alias: { $lib: fileURLToPath(new URL('src/lib', import.meta.url)) } },
 				test: {
 					name: 'database',
 					include: ['tests/database/**/*.test.ts', 'tests/faults/**/*.test.ts'],
