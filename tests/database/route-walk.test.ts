@@ -21,7 +21,7 @@ const values: Record<string, string> = {
 	'[number]': '1',
 	'[file]': 'sheet.svg',
 };
-const addressOf = (path: string, team = 'tolva-survey') =>
+const addressOf = (path: string, team = 'tavaroe-survey') =>
 	`/${team}${path.replace(/\[\w+\]/g, (name) => values[name] ?? name)}`;
 
 /** @returns the status of the page, or of what the form's action came to */

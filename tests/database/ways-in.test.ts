@@ -32,12 +32,12 @@ const isIn = async (visitor: Visitor) => (await visitor.get('/teams')).status ==
 describe('by password', () => {
 	it('leads to the page that was asked for, with a cookie no script can read', async () => {
 		const visitor = product.visitor();
-		const asked = await visitor.get('/tolva-survey/members?x=1');
+		const asked = await visitor.get('/tavaroe-survey/members?x=1');
 		expect(asked.status).toBe(303);
 		const signInPage = placeOf(asked) ?? '';
-		expect(signInPage).toBe('/sign-in?to=%2Ftolva-survey%2Fmembers%3Fx%3D1');
+		expect(signInPage).toBe('/sign-in?to=%2Ftavaroe-survey%2Fmembers%3Fx%3D1');
 		const { email, password } = product.userWith('designer');
-		const to = '/tolva-survey/members?x=1';
+		const to = '/tavaroe-survey/members?x=1';
 		const response = await visitor.post('/sign-in?/password', { email, password, to });
 		expect([response.status, placeOf(response)]).toEqual([303, to]);
 		const cookie = response.headers.getSetCookie().find((line) => line.includes('session-token'));
