@@ -77,7 +77,12 @@ const states = bytesOf(conterminousStates());
 
 describe('who may call', () => {
 	it('nobody without a token that works', async () => {
-		for (const header of [{}, { authorization: 'Bearer merestone_no' }, { authorization: 'x' }]) {
+		const headers: HeadersInit[] = [
+			{},
+			{ authorization: 'Bearer merestone_no' },
+			{ authorization: 'x' },
+		];
+		for (const header of headers) {
 			const response = await callApi('/sheets', { headers: header });
 			expect(response.headers.get('www-authenticate')).toBe('Bearer');
 			expect(response.status).toBe(401);

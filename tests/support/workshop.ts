@@ -30,7 +30,7 @@ export async function createWorkshop(): Promise<TestWorkshop> {
 	const pool = createPool({ threads: 1 });
 	const asked: string[] = [];
 	return {
-		...{ url: database.url, db: database.db, data, pool, asked },
+		...{ url: database.url, db: database.db, data, pool, checks: pool, asked },
 		files: folderStore(folder),
 		queue: {
 			send: async (_trx, _name, { intakeId }) => void asked.push(intakeId),
