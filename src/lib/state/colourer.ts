@@ -26,6 +26,11 @@ export class Colourer {
 		private answered: (reply: ColourReply) => void,
 	) {}
 
+	/** Starts the worker before it is needed, so that the first answer does not wait for it. */
+	warm() {
+		this.#worker ??= this.#start();
+	}
+
 	ask(problem: ColouringProblem): number {
 		const request = { id: ++this.#id, problem };
 		if (!this.#running) this.#send(request);

@@ -114,6 +114,7 @@ export class Desk {
 	/** In the browser: the worker that answers each change. */
 	work(makeWorker: () => Worker): () => void {
 		this.#colourer = new Colourer(makeWorker, (reply) => this.#settle(reply));
+		this.#colourer.warm();
 		return () => {
 			this.#colourer?.stop();
 			this.#colourer = null;

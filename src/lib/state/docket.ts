@@ -1,6 +1,6 @@
 import { borderKinds } from '$lib/engines/borders/border-list';
 import type { Draft } from '$lib/engines/editions/draft';
-import type { DeskColouring, DeskSheet } from '$lib/schemas/desk';
+import type { DeskColouring, DeskFinding, DeskSheet } from '$lib/schemas/desk';
 import type { MarkKind } from '$lib/components/Mark.svelte';
 import { count, counted, date } from '$lib/components/format';
 import type { Standing } from './rules-in-force';
@@ -51,8 +51,12 @@ export const docket = (state: DocketState): DocketStage[] => [
 
 type Said = Pick<DocketStage, 'mark' | 'words'>;
 
+/** Notes only tell; errors and warnings stay open until somebody accepts them. */
+export const isOpen = ({ severity, acceptedAt }: DeskFinding): boolean =>
+	severity !== 'note' && acceptedAt === null;
+
 function boundaries({ sheet, draft }: DocketState): Said {
-	const open = sheet.findings.filter(({ acceptedAt }) => acceptedAt === null);
+	const open = sheet.findings.filter(isOpen);
 	const worst = open.some(({ severity }) => severity === 'error')
 		? 'error'
 		: open.some(({ severity }) => severity === 'warning')

@@ -43,21 +43,29 @@ export const evidenceWord: Record<Proof['kind'], string | null> = {
 	'not-proved': null,
 };
 
-export function proofEvidence(proof: Proof, words: string): Evidence {
+export function proofEvidence(proof: Proof, nameOf: (region: number) => string): Evidence {
 	const wheel = proof.kind === 'odd-wheel';
 	return evidence({
-		words,
+		words: proofWords(proof, nameOf),
 		hub: wheel ? proof.regions[0] : null,
 		strong: wheel ? proof.regions.slice(1) : proof.regions,
 		ring: wheel || proof.kind === 'odd-cycle',
 	});
 }
 
-export function collisionEvidence(explanation: Explanation, words: string): Evidence {
-	const locked = new Set(explanation.locks);
+function proofWords({ kind, regions }: Proof, nameOf: (region: number) => string): string {
+	const many = regions.length;
+	if (kind === 'odd-wheel') return `A ring of ${many - 1} regions round ${nameOf(regions[0])}`;
+	if (kind === 'odd-cycle') return `A ring of ${many} regions`;
+	if (kind === 'clique') return `${many} regions that all border each other`;
+	return `The ${many} regions that force it`;
+}
+
+export function collisionEvidence({ locks, regions }: Explanation): Evidence {
+	const locked = new Set(locks);
 	return evidence({
-		words,
-		strong: explanation.locks,
-		light: explanation.regions.filter((region) => !locked.has(region)),
+		words: 'Solid outline: locks that collide. Broken outline: the regions between them.',
+		strong: locks,
+		light: regions.filter((region) => !locked.has(region)),
 	});
 }
