@@ -1,3 +1,4 @@
+import { svelte } from '@sveltejs/vite-plugin-svelte';
 import { defineConfig } from 'vitest/config';
 
 /**
@@ -8,6 +9,8 @@ export default defineConfig({
 	test: {
 		projects: [
 			{
+				// compiles the state classes, which are written in runes
+				plugins: [svelte()],
 				test: {
 					name: 'engines',
 					include: ['src/**/*.test.ts', 'tests/published/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
