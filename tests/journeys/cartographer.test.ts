@@ -93,13 +93,15 @@ describe('a cartographer', () => {
 		);
 	});
 
-	it('uploads and sees 3,231 counties and the countries of the world drawn', async () => {
+	it('uploads and sees 3,142 counties and the countries of the world drawn', async () => {
 		const counties = await uploadSheet(page, countiesGeoJson(), 'Counties, journey');
-		expect(await page.locator('main svg [data-key]').count()).toBe(3231);
+		expect(await page.locator('main svg [data-key]').count()).toBe(3141);
+		// one of the 3,142 rows (Falls Church, 51610) has no area left in this simplified file, and is told
+		expect(await docket(page, 'Boundaries').innerText()).toMatch(/3,141 regions.*finding/s);
 		await picture(page, 'counties');
 		const file = parseSvg(await download(page, counties));
 		expect(file.filter(({ attributes }) => attributes['data-key'] !== undefined)).toHaveLength(
-			3231,
+			3142,
 		);
 		await uploadSheet(page, countriesGeoJson(), 'Countries, journey');
 		/** world-atlas 110m: 177 countries, 313 pairs with a line (topojson-client neighbors) */
@@ -159,10 +161,14 @@ describe('a cartographer', () => {
 		await page.getByRole('link', { name: 'States, journey' }).first().click();
 		await drawn(page);
 		await page.locator('main svg[tabindex="0"], main svg [tabindex="0"]').first().focus();
-		await page.keyboard.press('ArrowRight');
-		const first = await page.locator('main [aria-live]').allInnerTexts();
-		await page.keyboard.press('ArrowRight');
-		await expect.poll(() => page.locator('main [aria-live]').allInnerTexts()).not.toEqual(first);
+		const heard = new Set<string>();
+		for (const arrow of ['ArrowRight', 'ArrowLeft', 'ArrowDown', 'ArrowUp', 'ArrowLeft']) {
+			await page.keyboard.press(arrow);
+			heard.add(await page.locator('main p[aria-live]').innerText());
+		}
+		// some arrow may find no neighbour that way, so not every press moves
+		expect(heard.size).toBeGreaterThanOrEqual(3);
+		expect([...heard].at(-1)).toMatch(/neighbours?: /);
 		await page.keyboard.press('Enter');
 		await page
 			.getByRole('complementary')
@@ -171,7 +177,7 @@ describe('a cartographer', () => {
 			.waitFor();
 		await page.keyboard.press('Escape');
 		await expect
-			.poll(async () => (await page.locator('main [aria-live]').allInnerTexts()).join())
+			.poll(async () => (await page.locator('main p[aria-live]').allInnerTexts()).join())
 			.toContain('Nothing selected');
 	});
 

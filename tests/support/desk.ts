@@ -2,11 +2,11 @@ import type { Page } from 'playwright-core';
 import type { ChosenFile } from './uploads.ts';
 
 /** The demo team's address. */
-export const team = '/tolva-survey';
+export const team = '/tavaroe-survey';
 
 /** From the list of teams into the demo team's sheets, as a person would click. */
 export async function enterTeam(page: Page): Promise<void> {
-	await page.getByRole('main').getByRole('link', { name: 'Tolva Survey Office' }).click();
+	await page.getByRole('main').getByRole('link', { name: 'Tavaröe' }).click();
 	await page.waitForURL(/\/sheets$/);
 }
 

@@ -29,8 +29,15 @@ export const statesShapefile = (): ChosenFile => ({
 	),
 });
 
-/** 3,231 counties less Alaska, Hawaii and the territories, or all of them. */
-export const countiesGeoJson = (): ChosenFile => geoJson('counties.geojson', usAtlas('counties'));
+/** FIPS codes of American Samoa, Guam, the Northern Marianas, Puerto Rico and the Virgin Islands. */
+const territories = new Set(['60', '66', '69', '72', '78']);
+
+/** The 3,142 counties and equivalents of the 50 states and DC. */
+export function countiesGeoJson(): ChosenFile {
+	const counties = usAtlas('counties');
+	const features = counties.features.filter(({ id }) => !territories.has(String(id).slice(0, 2)));
+	return geoJson('counties.geojson', { ...counties, features });
+}
 
 export const countriesGeoJson = (): ChosenFile => geoJson('countries.geojson', worldAtlas('110m'));
 
