@@ -39,7 +39,10 @@ const engineBlocks = engineOrder.map((engine, place) => ({
 			'error',
 			{
 				patterns: [
-					{ group: [...framework, ...sql, ...node], message: 'Engines are pure: values in, values out.' },
+					{
+						group: [...framework, ...sql, ...node],
+						message: 'Engines are pure: values in, values out.',
+					},
 					// the last engine may import all others, and an empty group is refused
 					...(place + 1 < engineOrder.length
 						? [
@@ -67,13 +70,18 @@ export default ts.config(
 	{ languageOptions: { globals: { ...globals.browser, ...globals.node } } },
 	{
 		files: ['**/*.svelte', '**/*.svelte.ts'],
-		languageOptions: { parserOptions: { parser: ts.parser, extraFileExtensions: ['.svelte'], svelteConfig } },
+		languageOptions: {
+			parserOptions: { parser: ts.parser, extraFileExtensions: ['.svelte'], svelteConfig },
+		},
 	},
 	{
 		rules: {
 			'no-undef': 'off',
 			'svelte/no-navigation-without-resolve': 'off',
-			'@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
+			'@typescript-eslint/no-unused-vars': [
+				'error',
+				{ argsIgnorePattern: '^_', varsIgnorePattern: '^_' },
+			],
 			'no-empty': ['error', { allowEmptyCatch: false }],
 		},
 	},
@@ -94,7 +102,10 @@ export default ts.config(
 	},
 	{
 		files: ['src/lib/components/**/*', 'src/lib/state/**/*'],
-		rules: forbid(['**/server/**', 'kysely', 'pg'], 'Components and state reach engines and schemas only.'),
+		rules: forbid(
+			['**/server/**', 'kysely', 'pg'],
+			'Components and state reach engines and schemas only.',
+		),
 	},
 	{
 		files: ['src/routes/**/*'],

@@ -1,3 +1,4 @@
+import { fileURLToPath } from 'node:url';
 import { svelte } from '@sveltejs/vite-plugin-svelte';
 import { defineConfig } from 'vitest/config';
 
@@ -13,11 +14,16 @@ export default defineConfig({
 				plugins: [svelte()],
 				test: {
 					name: 'engines',
-					include: ['src/**/*.test.ts', 'tests/published/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+					include: [
+						'src/**/*.test.ts',
+						'tests/published/**/*.test.ts',
+						'tests/architecture/**/*.test.ts',
+					],
 					testTimeout: 60_000,
 				},
 			},
 			{
+				resolve: { alias: { $lib: fileURLToPath(new URL('src/lib', import.meta.url)) } },
 				test: {
 					name: 'database',
 					include: ['tests/database/**/*.test.ts', 'tests/faults/**/*.test.ts'],

@@ -7,8 +7,10 @@ import { hashed } from './random.ts';
 import type { Republic } from './republic.ts';
 
 /** The survey's grid: Lambert azimuthal equal-area on WGS 84, in the open North Atlantic. */
-export const grid =
+const grid =
 	'+proj=laea +lat_0=53.4 +lon_0=-36 +x_0=500000 +y_0=500000 +datum=WGS84 +units=m +no_defs';
+
+const onGrid = proj4('WGS84', grid);
 
 /** The same in the words of a .prj file (OGC 01-009, well-known text 1). */
 export const gridText =
@@ -26,13 +28,13 @@ export interface District {
 
 /** Kilometres on the plane to degrees, kept to five decimals (about a metre). */
 export function toDegrees([x, y]: Point): Point {
-	const [lon, lat] = proj4(grid, 'WGS84', [500_000 + x * 1000, 500_000 + y * 1000]);
+	const [lon, lat] = onGrid.inverse([500_000 + x * 1000, 500_000 + y * 1000]);
 	return [Math.round(lon * 1e5) / 1e5, Math.round(lat * 1e5) / 1e5];
 }
 
 /** Degrees to metres on the survey's grid, kept to a hundredth of a millimetre. */
 export function toGrid(position: Point): Point {
-	const [x, y] = proj4('WGS84', grid, position);
+	const [x, y] = onGrid.forward(position);
 	return [Math.round(x * 1e5) / 1e5, Math.round(y * 1e5) / 1e5];
 }
 

@@ -8,6 +8,7 @@ import { handleBodySize, handleRate } from '$lib/server/hooks/limits';
 import { handleOrigin } from '$lib/server/hooks/origin';
 import { handleError, handleRequest } from '$lib/server/hooks/request';
 import { handleSession } from '$lib/server/hooks/session';
+import { closeOnShutdown } from '$lib/server/hooks/shutdown';
 
 /** What happens to every request, from the outside in. */
 export const handle = sequence(
@@ -23,4 +24,5 @@ export const handle = sequence(
 	handleBooth,
 );
 
+export const init = closeOnShutdown;
 export { handleError };

@@ -17,14 +17,18 @@ async function main(): Promise<void> {
 	writeFileSync(stampFile, digest);
 }
 
+/** What the build says is of interest only when it fails. */
 function buildApplication(): void {
 	const program = path.join(root, 'node_modules/vite/bin/vite.js');
-	const { status } = spawnSync(process.execPath, [program, 'build', '--logLevel', 'warn'], {
+	const { status, stdout, stderr } = spawnSync(process.execPath, [program, 'build'], {
 		cwd: root,
 		env: { ...process.env, NODE_ENV: 'production' },
-		stdio: 'inherit',
+		encoding: 'utf8',
+		maxBuffer: 64 * 1024 * 1024,
 	});
-	if (status !== 0) throw new Error('vite build failed');
+	if (status === 0) return;
+	process.stderr.write(stdout + stderr);
+	throw new Error('vite build failed');
 }
 
 /** src/workers/<name>.thread.ts becomes build/workers/<name>.thread.js; packages stay outside. */
@@ -36,7 +40,7 @@ async function buildThreads(): Promise<void> {
 	await build({
 		configFile: false,
 		root,
-		logLevel: 'warn',
+		logLevel: 'error',
 		resolve: { alias: { $lib: path.join(root, 'src/lib') } },
 		build: {
 			ssr: true,

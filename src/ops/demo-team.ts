@@ -1,4 +1,5 @@
 import { hashPassword, passwordFits } from '../lib/server/access/password.ts';
+import type { Member } from '../lib/server/access/member.ts';
 import type { Role } from '../lib/server/access/roles.ts';
 import { scopes } from '../lib/server/access/scopes.ts';
 import { inTransaction, type Db } from '../lib/server/database/connection.ts';
@@ -43,12 +44,11 @@ export async function seedDemoTeam(kept: Partial<DemoSignIns> | null): Promise<D
 		const password = kept?.users?.find((user) => user.email === email)?.password;
 		return { name, email, password: password ?? randomSecret(12), roles: held };
 	});
-	const team = await inTransaction(async (trx) => {
-		const made = await ensureTeam(trx);
-		for (const user of users) await ensureMember(trx, made, user);
-		return made;
+	await inTransaction(async (trx) => {
+		const team = await ensureTeam(trx);
+		for (const user of users) await ensureMember(trx, team, user);
 	});
-	const token = await ensureToken(team, kept?.token);
+	const token = await ensureToken(kept?.token);
 	return { token, users: users.map(({ email, password, roles }) => ({ email, password, roles })) };
 }
 
@@ -81,12 +81,16 @@ async function ensureMember(
 }
 
 /** A token that works: the kept one, or a new one made by the demo's admin. */
-async function ensureToken(team: TeamRow, kept: string | undefined): Promise<string> {
+async function ensureToken(kept: string | undefined): Promise<string> {
 	if (kept && (await memberForToken(kept))) return kept;
-	const admin = await inTransaction((trx) =>
-		findUserByEmail(trx, `admin@${demoTeam.slug}.example`),
-	);
-	const member = admin && (await membership(team.slug, admin.id));
-	if (!member) throw new Error('the demo team has no admin');
-	return createToken(member, { name: 'Demo', scopes, days: 365 });
+	return createToken(await demoMember('admin'), { name: 'Demo', scopes, days: 365 });
+}
+
+/** One of the demo's people, by the part of their address before the @. */
+export async function demoMember(name: string): Promise<Member> {
+	const email = `${name}@${demoTeam.slug}.example`;
+	const user = await inTransaction((trx) => findUserByEmail(trx, email));
+	const member = user && (await membership(demoTeam.slug, user.id));
+	if (!member) throw new Error(`the demo team has no ${name}`);
+	return member;
 }

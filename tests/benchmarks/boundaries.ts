@@ -6,28 +6,24 @@ import { bytesOf, usAtlas, worldAtlas, type Areas } from '../support/atlas.ts';
 
 const rounds = 5;
 
-/** Milliseconds of processor time: other work on the machine does not count. */
-async function measured(work: () => unknown): Promise<{ milliseconds: number; megabytes: number }> {
-	const before = process.cpuUsage();
-	const memory = process.memoryUsage().rss;
-	let most = memory;
-	const watch = setInterval(() => (most = Math.max(most, process.memoryUsage().rss)), 5);
-	await work();
-	most = Math.max(most, process.memoryUsage().rss);
-	clearInterval(watch);
-	const used = process.cpuUsage(before);
-	return { milliseconds: (used.user + used.system) / 1000, megabytes: (most - memory) / 2 ** 20 };
-}
-
-/** The middle of several runs; the memory of the first, before the heap has grown. */
-async function middle(work: () => unknown) {
-	const runs = [];
-	for (let i = 0; i < rounds; i++) runs.push(await measured(work));
-	const times = runs.map((run) => run.milliseconds).sort((a, b) => a - b);
+/**
+ * Milliseconds of processor time, so that other work on the machine does not count: the first run, and
+ * the middle of the next five. Memory is the most the process has held so far.
+ */
+async function measured(work: () => unknown) {
+	const times: number[] = [];
+	for (let i = 0; i <= rounds; i++) {
+		const before = process.cpuUsage();
+		await work();
+		const used = process.cpuUsage(before);
+		times.push((used.user + used.system) / 1000);
+	}
+	const [first, ...later] = times;
+	later.sort((a, b) => a - b);
 	return {
-		milliseconds: Math.round(times[rounds >> 1]),
-		firstMilliseconds: Math.round(runs[0].milliseconds),
-		peakMegabytes: Math.round(runs[0].megabytes),
+		milliseconds: Math.round(later[rounds >> 1]),
+		firstMilliseconds: Math.round(first),
+		peakMegabytes: Math.round(process.resourceUsage().maxRSS / 1024),
 	};
 }
 
@@ -40,8 +36,8 @@ export async function* run(): AsyncGenerator<object> {
 	];
 	for (const [file, areas] of files) {
 		const bytes = bytesOf(areas);
-		const ours = await middle(() => readBoundaries(sourceOf(file, bytes)));
-		const theirs = await middle(() => reference(bytes));
+		const ours = await measured(() => readBoundaries(sourceOf(file, bytes)));
+		const theirs = await measured(() => reference(bytes));
 		const ratio = Number((ours.milliseconds / theirs.milliseconds).toFixed(2));
 		const shared = { regions: areas.features.length, bytes: bytes.length };
 		yield { name: `${file}: bytes to borders`, ...shared, ...ours, ratio };
@@ -51,6 +47,6 @@ export async function* run(): AsyncGenerator<object> {
 
 function reference(bytes: Uint8Array): number[][] {
 	const areas = JSON.parse(new TextDecoder().decode(bytes)) as Areas;
-	const made = topology({ areas }, 1e5);
+	const made = topology({ areas });
 	return neighbors((made.objects.areas as GeometryCollection).geometries);
 }

@@ -8,12 +8,13 @@ import {
 } from '../../src/lib/server/access/member.ts';
 import { actions, allows, may, roles, type Action } from '../../src/lib/server/access/roles.ts';
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
-import { readDraft, saveDraft } from '../../src/lib/server/services/draft.service.ts';
+import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
 import {
 	editionFile,
 	issueEdition,
 	readEdition,
+	sheetEditions,
 } from '../../src/lib/server/services/edition.service.ts';
 import {
 	beginIntake,
@@ -72,6 +73,7 @@ afterAll(async () => {
 const id = randomUUID();
 const empty = () => new Request('http://localhost/', { method: 'POST', body: new FormData() });
 const sent = { revision: 1 } as Parameters<typeof saveDraft>[3];
+type Layout = Parameters<typeof saveLayout>[3];
 const token = { name: 'Walk', scopes: [], days: 1 };
 
 /** Every service that acts for a member, what it needs, and a call that touches nothing that exists. */
@@ -112,6 +114,8 @@ const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
 	removeSheet: ['sheet.delete', (member) => removeSheet(shop, member, 99)],
 	retryIntake: ['boundaries.upload', (member) => retryIntake(shop, member, id)],
 	saveDraft: ['sheet.read', (member) => saveDraft(shop, member, 99, sent)],
+	saveLayout: ['layout.edit', (member) => saveLayout(shop, member, 99, {} as Layout)],
+	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
 	sheetList: ['sheet.read', (member) => sheetList(shop, member)],
 	teamPalettes: ['sheet.read', (member) => teamPalettes(shop, member)],

@@ -1,6 +1,17 @@
+import { readFileSync } from 'node:fs';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { decodeCoverage } from '../../src/lib/engines/boundaries/index.ts';
 import type { Member } from '../../src/lib/server/access/member.ts';
-import { deskSheet, sheetList } from '../../src/lib/server/services/sheet.service.ts';
+import { cancelIntake, retryIntake } from '../../src/lib/server/services/intake.service.ts';
+import { NotFound } from '../../src/lib/server/services/outcomes.ts';
+import {
+	acceptFinding,
+	deskSheet,
+	nameSheet,
+	removeSheet,
+	sheetGeometry,
+	sheetList,
+} from '../../src/lib/server/services/sheet.service.ts';
 import { bytesOf, conterminousStates } from '../support/atlas.ts';
 import { createMember, createWorkshop, ingest, type TestWorkshop } from '../support/workshop.ts';
 
@@ -11,6 +22,8 @@ beforeAll(async () => {
 	member = await createMember(shop.db, 'intake', 'cartographer');
 });
 afterAll(() => shop.close());
+
+const sample = (name: string) => readFileSync(`sample-data/${name}`);
 
 describe('from an uploaded file to a coloured sheet', () => {
 	it('takes the 48 states and the District of Columbia', async () => {
@@ -31,9 +44,67 @@ describe('from an uploaded file to a coloured sheet', () => {
 			proof: { kind: 'odd-wheel' },
 		});
 		expect(sheet.name).toBe('states');
-		expect(await shop.stored()).toHaveLength(1);
+		expect(sheet.rights).toContain('borders.edit');
+	});
+
+	it('lists the sheet and keeps the file once', async () => {
 		expect(await sheetList(shop, member)).toMatchObject([
 			{ number: 1, name: 'states', regionCount: 49, inksUsed: 4, lastEdition: null },
 		]);
+		expect(await shop.stored()).toHaveLength(1);
+	});
+
+	it('serves the coverage that was read', async () => {
+		const { tag, read } = await sheetGeometry(shop, member, 1);
+		const sheet = await deskSheet(shop, member, 1);
+		expect(tag).toBe(sheet.boundarySet.id);
+		expect(decodeCoverage(new Uint8Array(await read())).keys).toEqual(sheet.regions.key);
+	});
+
+	it('reads the same republic from GeoJSON and from a zipped shapefile on a grid', async () => {
+		const plain = await ingest(shop, member, 'tavaroe.geojson', sample('tavaroe.geojson'));
+		const grid = await ingest(shop, member, 'grid.zip', sample('tavaroe-survey-grid.zip'), {
+			keyField: 'CODE',
+			nameField: 'NAME',
+		});
+		const [one, two] = [
+			await deskSheet(shop, member, plain.sheet ?? 0),
+			await deskSheet(shop, member, grid.sheet ?? 0),
+		];
+		// what sample-data/README.md says the generator put in
+		for (const sheet of [one, two]) {
+			expect(sheet.boundarySet).toMatchObject({ regionCount: 180, planar: false });
+			expect([...sheet.borders.kind].filter((kind) => kind === 0)).toHaveLength(445);
+			expect(sheet.colouring).toMatchObject({ status: 'coloured', inksUsed: 4 });
+		}
+		expect([...two.regions.name].sort()).toEqual([...one.regions.name].sort());
+		expect(one.boundarySet.planarWitness?.sentence).toContain('parts in several places');
+	});
+
+	it('names the sheet, and lets findings be accepted once', async () => {
+		await nameSheet(shop, member, 1, '<script>alert(1)</script>');
+		const sheet = await deskSheet(shop, member, 1);
+		expect(sheet.name).toBe('<script>alert(1)</script>');
+		const [finding] = sheet.findings;
+		await acceptFinding(shop, member, 1, finding.id);
+		await expect(acceptFinding(shop, member, 1, finding.id)).rejects.toBeInstanceOf(NotFound);
+		const { findings } = await deskSheet(shop, member, 1);
+		expect(findings[0].acceptedBy).toBe('cartographer of intake');
+	});
+
+	it('keeps a file that two sheets were read from until both are gone', async () => {
+		const before = await shop.stored();
+		const bytes = bytesOf(conterminousStates());
+		const again = await ingest(shop, member, 'again.geojson', bytes);
+		expect(await shop.stored()).toEqual(before);
+		await removeSheet(shop, member, again.sheet ?? 0);
+		expect(await shop.stored()).toEqual(before);
+		await expect(deskSheet(shop, member, again.sheet ?? 0)).rejects.toBeInstanceOf(NotFound);
+	});
+
+	it('has nothing to cancel or read again once it is done', async () => {
+		const { id } = await ingest(shop, member, 'done.geojson', sample('tavaroe.geojson'));
+		await expect(cancelIntake(shop, member, id)).rejects.toThrow('not being read');
+		await expect(retryIntake(shop, member, id)).rejects.toThrow('only an upload that failed');
 	});
 });

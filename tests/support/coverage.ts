@@ -10,12 +10,15 @@ import type { Coverage } from '../../src/lib/engines/boundaries/coverage.ts';
 
 const earthKm = 6371.0088;
 
-/** Area under a ring in plain longitude and latitude; positive when anticlockwise. */
+/** Area under a ring in plain longitude and latitude, the short way across 180; positive anticlockwise. */
 function turn(points: number[][]): number {
 	let sum = 0;
+	let lon = 0;
 	points.forEach(([x, y], i) => {
 		const [px, py] = points[(i || points.length) - 1];
-		sum += px * y - x * py;
+		const step = x - px - 360 * Math.round((x - px) / 360);
+		sum += lon * y - (lon + step) * py;
+		lon += step;
 	});
 	return sum;
 }

@@ -1,4 +1,4 @@
-import type { Feature, FeatureCollection, Polygon } from 'geojson';
+import type { Feature, Polygon } from 'geojson';
 import {
 	readBoundaries,
 	sourceOf,
@@ -22,6 +22,11 @@ export async function refusal(bytes: Uint8Array, options?: BoundaryOptions): Pro
 	const read = await readBoundaries(sourceOf('test', bytes), options);
 	if (read.status !== 'refused') throw new Error(`not refused: ${read.status}`);
 	return read;
+}
+
+interface Collection<F> {
+	type: 'FeatureCollection';
+	features: F[];
 }
 
 export const readText = (text: string) =>
@@ -50,8 +55,10 @@ export function metresOf(read: Accepted): Record<string, number> {
 	);
 }
 
-export const collection = <F extends Feature>(features: F[]) =>
-	({ type: 'FeatureCollection', features }) as FeatureCollection & { features: F[] };
+export const collection = <F extends Feature>(features: F[]): Collection<F> => ({
+	type: 'FeatureCollection',
+	features,
+});
 
 /** A region from the corners of its rings; rings are closed here. */
 export function region(id: string, ...rings: number[][][]): Feature<Polygon> {

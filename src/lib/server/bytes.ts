@@ -1,5 +1,6 @@
 import { gunzipSync } from 'node:zlib';
 import { Readable } from 'node:stream';
+import type { EditionFile } from './services/edition.service.ts';
 
 /** Whether the asker holds these very bytes already. */
 export const isHeld = (request: Request, tag: string): boolean =>
@@ -30,8 +31,24 @@ export function gzipped(
 export const attachment = (fileName: string): string =>
 	`attachment; filename="${fileName.replace(/[^\w.-]/g, '_')}"`;
 
-export const streamed = (stream: Readable, headers: Record<string, string>): Response =>
-	new Response(Readable.toWeb(stream) as ReadableStream, { headers });
 
 /** A drawn sheet may style itself and carry its letters; nothing else, wherever it is opened. */
 export const svgPolicy = "default-src 'none'; style-src 'unsafe-inline'; font-src data:; sandbox";
+
+/** A file of an edition: the bytes that were issued, which a browser that holds them need not fetch again. */
+export async function editionFileResponse(request: Request, file: EditionFile): Promise<Response> {
+	const headers = {
+		etag: `"${file.digest}"`,
+		'cache-control': 'private, max-age=31536000, immutable',
+	};
+	if (isHeld(request, file.digest)) return notModified(file.digest, headers);
+	return new Response(Readable.toWeb(await file.open()) as ReadableStream, {
+		headers: {
+			...headers,
+			'content-type': file.mediaType,
+			'content-length': String(file.bytes),
+			'content-disposition': attachment(file.name),
+			'content-security-policy': svgPolicy,
+		},
+	});
+}

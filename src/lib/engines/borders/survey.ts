@@ -6,7 +6,7 @@ import { overlapOf, type Overlap } from './overlap.ts';
 import { PairTally } from './pair-tally.ts';
 import { addSeamLines } from './seam.ts';
 import { suspects, type Suspects } from './suspects.ts';
-import { addTouches } from './touches.ts';
+import { addTouches, meetings } from './touches.ts';
 import { addAcrossWater } from './across-water.ts';
 
 export interface BordersOptions {
@@ -28,11 +28,12 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const tally = new PairTally(coverage.keys.length);
 	addLines(coverage, tally);
 	const blocks = new SegmentBlocks(coverage);
-	const found = suspects(coverage, blocks);
+	const places = meetings(coverage);
+	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
 	for (const { a, b, metres, at } of overlaps) tally.add(a, b, 0, metres, at[0], at[1]);
 	addSeamLines(coverage, tally);
-	addTouches(coverage, tally);
+	addTouches(coverage, places, tally);
 	if (options.acrossWaterKm) addAcrossWater(coverage, blocks, options.acrossWaterKm, tally);
 	return { borders: tally.list(), overlaps, crossings: found.crossings };
 }

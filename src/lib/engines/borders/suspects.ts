@@ -1,8 +1,8 @@
 import type { Coverage } from '../geometry/coverage.ts';
-import { ringPoints } from '../geometry/coverage-rings.ts';
+import { boxOf, ringPoints } from '../geometry/coverage-rings.ts';
 import { crossing } from '../geometry/crossing.ts';
 import type { SegmentBlocks } from '../geometry/segment-blocks.ts';
-import { meetings, type Meeting } from './touches.ts';
+import type { Meeting } from './touches.ts';
 
 /** Pairs that may overlap, and places where a region's own outline crosses itself. */
 export interface Suspects {
@@ -13,12 +13,11 @@ export interface Suspects {
 /**
  * Finds every pair that could overlap. Regions overlap only where an unmatched outline crosses another
  * line, where around a meeting place two neighbouring lines disagree about what lies between them, or
- * where a separate piece of the map lies inside a region. When any of this is found, every part is
- * looked up too, since a large region laid over many covers some it does not touch.
+ * where a separate piece of the map lies inside a region. When any of this is found, the parts around
+ * are looked up too, since a large region laid over many covers some it does not touch.
  */
-export function suspects(coverage: Coverage, blocks: SegmentBlocks): Suspects {
+export function suspects(coverage: Coverage, blocks: SegmentBlocks, places: Meeting[]): Suspects {
 	const found: Suspects = { pairs: new Map(), crossings: [] };
-	const places = meetings(coverage);
 	findCrossings(coverage, blocks, found);
 	for (const place of places) {
 		if (place.arcs.length > 2 && disagrees(coverage, place)) {
@@ -26,16 +25,20 @@ export function suspects(coverage: Coverage, blocks: SegmentBlocks): Suspects {
 			pairUp(around, around, coverage, found);
 		}
 	}
-	const whole = found.pairs.size > 0;
-	for (const [x, y, region] of whole ? partPlaces(coverage) : piecePlaces(coverage, places)) {
-		pairUp([region], blocks.regionsAt(x, y), coverage, found);
-	}
-	if (!whole && found.pairs.size > 0) {
-		for (const [x, y, region] of partPlaces(coverage)) {
-			pairUp([region], blocks.regionsAt(x, y), coverage, found);
-		}
-	}
+	lookUp(piecePlaces(coverage, places), coverage, blocks, found);
+	if (found.pairs.size > 0) lookUp(partsNear(coverage, found), coverage, blocks, found);
 	return found;
+}
+
+type Place = [x: number, y: number, region: number];
+
+function lookUp(
+	places: Iterable<Place>,
+	coverage: Coverage,
+	blocks: SegmentBlocks,
+	found: Suspects,
+): void {
+	for (const [x, y, region] of places) pairUp([region], blocks.regionsAt(x, y), coverage, found);
 }
 
 function pairUp(these: number[], those: number[], coverage: Coverage, found: Suspects): void {
@@ -99,18 +102,42 @@ function startsHere(coverage: Coverage, place: Meeting, i: number): boolean {
 	return p[2 * first] === place.x && p[2 * first + 1] === place.y && place.arcs.indexOf(arc) === i;
 }
 
-/** A place on the outline of every part, slightly inside it, with its region. */
-function* partPlaces(coverage: Coverage): Generator<[number, number, number]> {
+/** A place slightly inside every part that lies within the box of a region already suspected. */
+function* partsNear(coverage: Coverage, found: Suspects): Generator<Place> {
+	const suspected = new Set([...found.pairs.values()].flat());
+	const boxes = [...suspected].map((r) => ({ r, box: boxOfRegion(coverage, r) }));
 	for (let r = 0; r < coverage.keys.length; r++) {
 		for (let part = coverage.regionParts[r]; part < coverage.regionParts[r + 1]; part++) {
-			const points = ringPoints(coverage, coverage.partRings[part]);
-			yield [...insideFirstEdge(points), r];
+			const edge = firstEdge(coverage, coverage.partRings[part]);
+			const [x, y] = besideEdge(edge, 1);
+			const isNear = boxes.some(
+				(b) => b.r !== r && x >= b.box[0] && y >= b.box[1] && x <= b.box[2] && y <= b.box[3],
+			);
+			if (isNear) yield [x, y, r];
 		}
 	}
 }
 
+function boxOfRegion(coverage: Coverage, region: number): [number, number, number, number] {
+	const boxes: number[][] = [];
+	for (let part = coverage.regionParts[region]; part < coverage.regionParts[region + 1]; part++) {
+		boxes.push(boxOf(ringPoints(coverage, coverage.partRings[part])));
+	}
+	const side = (i: number, pick: typeof Math.min) => pick(...boxes.map((box) => box[i]));
+	return [side(0, Math.min), side(1, Math.min), side(2, Math.max), side(3, Math.max)];
+}
+
+/** The first two points of a ring. */
+function firstEdge(coverage: Coverage, ring: number): Float64Array {
+	const { arcPoints: p, arcStarts, ringArcs, ringStarts } = coverage;
+	const half = ringArcs[ringStarts[ring]];
+	if (half >= 0) return p.subarray(2 * arcStarts[half], 2 * arcStarts[half] + 4);
+	const last = 2 * (arcStarts[~half + 1] - 1);
+	return Float64Array.of(p[last], p[last + 1], p[last - 2], p[last - 1]);
+}
+
 /** One such place for every connected piece of the map. */
-function* piecePlaces(coverage: Coverage, places: Meeting[]): Generator<[number, number, number]> {
+function* piecePlaces(coverage: Coverage, places: Meeting[]): Generator<Place> {
 	const group = groupsOfArcs(coverage, places);
 	const seen = new Set<number>();
 	for (let arc = 0; arc < coverage.arcLeft.length; arc++) {
@@ -136,8 +163,6 @@ function groupsOfArcs(coverage: Coverage, places: Meeting[]): Int32Array {
 	for (let arc = 0; arc < group.length; arc++) group[arc] = find(arc);
 	return group;
 }
-
-const insideFirstEdge = (points: Float64Array) => besideEdge(points, 1);
 
 /** A ten-thousandth of an edge to its left (1) or right (-1), half way along. */
 function besideEdge(points: Float64Array, side: number): [number, number] {

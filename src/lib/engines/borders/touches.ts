@@ -2,9 +2,9 @@ import type { Coverage } from '../geometry/coverage.ts';
 import type { PairTally } from './pair-tally.ts';
 
 /** Point touches: regions around a place where four or more arcs end and that share no line anywhere. */
-export function addTouches(coverage: Coverage, tally: PairTally): void {
+export function addTouches(coverage: Coverage, places: Meeting[], tally: PairTally): void {
 	const { arcLeft, arcRight } = coverage;
-	for (const { x, y, arcs } of meetings(coverage)) {
+	for (const { x, y, arcs } of places) {
 		if (arcs.length < 4) continue;
 		const around = new Set<number>();
 		for (const arc of arcs) around.add(arcLeft[arc]).add(arcRight[arc]);
@@ -28,17 +28,19 @@ export interface Meeting {
 /** Places where arcs end, with one entry for each end (a closed arc has two). */
 export function meetings(coverage: Coverage): Meeting[] {
 	const { arcPoints, arcStarts } = coverage;
-	const places = new Map<number, Map<number, Meeting>>();
+	const places = new Map<number, Meeting[]>();
 	const all: Meeting[] = [];
 	const end = (arc: number, point: number) => {
 		const x = arcPoints[2 * point];
 		const y = arcPoints[2 * point + 1];
-		let row = places.get(x);
-		if (!row) places.set(x, (row = new Map()));
-		let place = row.get(y);
+		const code = x * 733.7 + y;
+		const near = places.get(code);
+		let place = near?.find((known) => known.x === x && known.y === y);
 		if (!place) {
-			row.set(y, (place = { x, y, arcs: [] }));
+			place = { x, y, arcs: [] };
 			all.push(place);
+			if (near) near.push(place);
+			else places.set(code, [place]);
 		}
 		place.arcs.push(arc);
 	};

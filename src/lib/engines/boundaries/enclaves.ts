@@ -50,8 +50,10 @@ function surroundings(cut: Cut, holes: Hole[]): Int32Array {
 	const parts = cut.partRings.length - 1;
 	const around = new Int32Array(parts).fill(-1);
 	const index = new Flatbush(parts);
-	for (let part = 0; part < parts; part++)
-		index.add(...boxOf(ringPoints(cut, cut.partRings[part])));
+	const boxes = arcBoxes(cut);
+	for (let part = 0; part < parts; part++) {
+		index.add(...ringBox(cut, cut.partRings[part], boxes));
+	}
 	index.finish();
 	const owner = ownersOfParts(cut);
 	for (const hole of holes) {
@@ -66,6 +68,28 @@ function surroundings(cut: Cut, holes: Hole[]): Int32Array {
 		}
 	}
 	return around;
+}
+
+/** West, south, east, north of every arc. */
+function arcBoxes(cut: Cut): Float64Array {
+	const boxes = new Float64Array(4 * cut.arcLeft.length);
+	for (let arc = 0; arc < cut.arcLeft.length; arc++) {
+		const points = cut.arcPoints.subarray(2 * cut.arcStarts[arc], 2 * cut.arcStarts[arc + 1]);
+		boxes.set(boxOf(points), 4 * arc);
+	}
+	return boxes;
+}
+
+function ringBox(cut: Cut, ring: number, boxes: Float64Array): [number, number, number, number] {
+	let [west, south, east, north] = [Infinity, Infinity, -Infinity, -Infinity];
+	for (let i = cut.ringStarts[ring]; i < cut.ringStarts[ring + 1]; i++) {
+		const at = 4 * (cut.ringArcs[i] >= 0 ? cut.ringArcs[i] : ~cut.ringArcs[i]);
+		west = Math.min(west, boxes[at]);
+		south = Math.min(south, boxes[at + 1]);
+		east = Math.max(east, boxes[at + 2]);
+		north = Math.max(north, boxes[at + 3]);
+	}
+	return [west, south, east, north];
 }
 
 function ownersOfParts(cut: Cut): Int32Array {

@@ -7,5 +7,6 @@ export type { Finding } from './finding.ts';
 export type { Coverage } from './coverage.ts';
 export { coverageFaults } from './faults.ts';
 export { encodeCoverage, decodeCoverage } from './codec.ts';
+export { simplifyCoverage } from './simplify.ts';
 export { coverageToGeoJson } from './to-geojson.ts';
 export { sourceOf } from './byte-source.ts';

@@ -5,7 +5,7 @@ export class Purse {
 	constructor(
 		private left: number,
 		private readonly each: number,
-		private readonly cancelled?: () => boolean,
+		readonly cancelled?: () => boolean,
 	) {}
 
 	get empty(): boolean {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { complete, cycle, queens } from '../../../../tests/support/named-graphs.ts';
+import { scatteredMap } from '../../../../tests/support/planar.ts';
 import { checkExplanation } from './explain-check.ts';
 import { explain } from './explain.ts';
 import type { ColouringProblem, Explanation } from './problem.ts';
@@ -127,6 +128,17 @@ describe('rules to blame when no release helps', () => {
 	it('a ring of odd length with two inks, queens on a board of side 5 with four', async () => {
 		expect((await explained({ ...cycle(9), inks: 2 })).rules).toHaveLength(10);
 		expect((await explained({ ...queens(5), inks: 4 })).rules).toHaveLength(11);
+	});
+});
+
+describe('large maps', () => {
+	it('are coloured by chains to show that a release works', async () => {
+		const map = scatteredMap(12_000, 1);
+		const locks = { [map.borders.a[0]]: 1, [map.borders.b[0]]: 1 };
+		const problem = { ...map, inks: 4, locks: locksOf(map.regions, locks) };
+		const explanation = await explain(problem);
+		expect(explanation?.locks).toHaveLength(2);
+		expect(explanation?.release).toMatchObject({ cost: 1, lowerBound: 1, proved: true });
 	});
 });
 

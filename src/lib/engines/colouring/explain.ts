@@ -1,19 +1,18 @@
 import { readCase, type Case } from './explain-case.ts';
-import { CaseClauses } from './explain-clauses.ts';
-import { immediateCollisions } from './explain-immediate.ts';
 import { inksThatWouldDo } from './explain-inks.ts';
 import { Purse } from './explain-purse.ts';
 import { blamedRules } from './explain-rules.ts';
 import { barePart, shrink, type Clash } from './explain-shrink.ts';
+import { Whole } from './explain-whole.ts';
 import { problemFaults } from './faults.ts';
 import type { ColouringProblem, Explanation, Release } from './problem.ts';
 import { cheapestRelease } from './release.ts';
 
-/** Conflicts for one question and for each of the tasks in all; exact choices of locks to release. */
+/** Conflicts for one question and for each of the tasks in all; sets for the integer program. */
 const EFFORT = {
-	quick: { each: 5_000, all: 20_000, rounds: 3 },
-	normal: { each: 50_000, all: 200_000, rounds: 12 },
-	thorough: { each: 500_000, all: 5_000_000, rounds: 200 },
+	quick: { each: 5_000, all: 20_000, rows: 300 },
+	normal: { each: 50_000, all: 200_000, rows: 1_200 },
+	thorough: { each: 500_000, all: 5_000_000, rows: 100_000 },
 };
 
 /**
@@ -37,17 +36,14 @@ export async function explain(problem: ColouringProblem): Promise<Explanation | 
 class Explaining {
 	private readonly of: Case;
 	private readonly seed: number;
-	private readonly whole: CaseClauses;
+	private readonly whole: Whole;
 	private readonly everything: Uint32Array;
 
 	constructor(private problem: ColouringProblem) {
 		this.of = readCase(problem);
 		this.seed = problem.seed ?? 0;
 		this.everything = Uint32Array.from({ length: this.of.graph.count }, (_, v) => v);
-		this.whole = new CaseClauses(this.of, this.everything, { seed: this.seed });
-		for (const variable of this.whole.demandVariable) {
-			if (variable) this.whole.sat.setPhase(variable, true);
-		}
+		this.whole = new Whole(this.of, this.seed);
 	}
 
 	async run(): Promise<Explanation | null> {
@@ -55,17 +51,14 @@ class Explaining {
 		const withoutLocks = this.ask([], this.purse());
 		if (withoutLocks === 'unsat') return this.withRules(this.refutedPart());
 		if (withoutLocks === 'unknown') return null;
-		const immediate = immediateCollisions(this.of);
+		const { immediate } = this.whole;
 		if (immediate.length === 0 && this.ask(this.of.demands.keys(), this.purse()) !== 'unsat') {
 			return null;
 		}
-		const { clashes, ...found } = await cheapestRelease(
-			this.of,
-			this.whole,
-			immediate,
-			this.purse(),
-			{ rounds: EFFORT[this.problem.effort ?? 'normal'].rounds, seed: this.seed },
-		);
+		const { clashes, ...found } = await cheapestRelease(this.of, this.whole, this.purse(), {
+			rows: EFFORT[this.problem.effort ?? 'normal'].rows,
+			seed: this.seed,
+		});
 		const release: Release = {
 			locks: found.demands.flatMap((d) => this.of.demands[d].regions).sort((a, b) => a - b),
 			cost: found.cost,
@@ -88,7 +81,7 @@ class Explaining {
 	}
 
 	private ask(demands: Iterable<number>, purse: Purse) {
-		return purse.pay(this.whole.sat, (budget) => this.whole.solve(demands, budget));
+		return this.whole.ask(demands, purse);
 	}
 
 	/** Leaves out demands until, on the whole map, none can be spared. */

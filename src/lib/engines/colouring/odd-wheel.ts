@@ -1,17 +1,25 @@
 import type { RegionGraph } from '../graph/region-graph.ts';
 
+/** Steps spent on a shorter rim once a wheel has been found. */
+const polish = 200_000;
+
 /**
  * An odd wheel, hub first and then its rim in ring order, or null when there is none or the steps run
  * out. A vertex is a hub exactly when its neighbours' own borders hold an odd cycle; each
- * neighbourhood is coloured with two inks breadth first.
+ * neighbourhood is coloured with two inks breadth first. Of several wheels a short one is preferred:
+ * where there is no clique of four, no rim is shorter than five.
  */
 export function oddWheel(graph: RegionGraph, steps: number): number[] | null {
 	const search = new WheelSearch(graph, steps);
+	let best: number[] | null = null;
 	for (let v = 0; v < graph.count && search.steps > 0; v++) {
 		const rim = search.rimOf(v);
-		if (rim) return [v, ...rim];
+		if (!rim || (best && rim.length + 1 >= best.length)) continue;
+		if (!best) search.steps = Math.min(search.steps, polish);
+		best = [v, ...rim];
+		if (rim.length <= 5) break;
 	}
-	return null;
+	return best;
 }
 
 class WheelSearch {

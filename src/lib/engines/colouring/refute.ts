@@ -31,7 +31,7 @@ const WIDE = 300;
  * the variable of the i-th of `regions` (from 1) and ink c being (i - 1) * inks + c + 1, each has one
  * of the inks, and two that border do not share one. No ink is fixed beforehand in that proof. Null
  * when the graph can be coloured or the effort did not suffice to tell. No region of the part can be
- * spared, unless the effort ran out on the way.
+ * spared, unless the effort ran out on the way or a larger part has a much shorter proof.
  *
  * Method: vertices with fewer neighbours than inks are peeled; failed cores over vertices with one
  * clique coloured beforehand (any colouring can be renamed to agree); then each vertex left out in turn.

@@ -1,9 +1,9 @@
 import { greedyHittingSet } from '../solver/hitting-search.ts';
 import { minimumHittingSet } from '../solver/integer.ts';
 import type { Case } from './explain-case.ts';
-import type { CaseClauses } from './explain-clauses.ts';
 import type { Purse } from './explain-purse.ts';
 import { shrink, type Clash } from './explain-shrink.ts';
+import type { Whole } from './explain-whole.ts';
 
 export interface CheapestRelease {
 	/** demands to drop */
@@ -22,9 +22,8 @@ const QUICK_CHOICES = 3;
 const NODES = 100;
 
 /**
- * The cheapest demands to drop so that the rest can be met. `whole` are the clauses of the whole case,
- * without switches, for which dropping every demand is known to work; `immediate` are clashes known;
- * at most `rounds` exact choices are made.
+ * The cheapest demands to drop so that the rest can be met, where dropping every demand is known to
+ * work. `rows` are the sets that may be handed to the integer program, counted at each choice.
  *
  * Method: implicit hitting sets (Chandrasekaran et al. 2013; Davies and Bacchus 2011). A cheapest
  * choice that meets every clash known is dropped; if the rest still clashes, the new clash is shrunk and
@@ -33,13 +32,12 @@ const NODES = 100;
  */
 export async function cheapestRelease(
 	of: Case,
-	whole: CaseClauses,
-	immediate: readonly number[][],
+	whole: Whole,
 	purse: Purse,
-	{ rounds, seed }: { rounds: number; seed: number },
+	{ rows, seed }: { rows: number; seed: number },
 ): Promise<CheapestRelease> {
-	const search = new ReleaseSearch(of, whole, immediate, purse, seed);
-	for (let round = 0; round < rounds && !search.closed && !purse.empty; round++) {
+	const search = new ReleaseSearch(of, whole, purse, seed);
+	while (search.rows < rows && !search.closed && !purse.empty) {
 		if (!(await search.round())) break;
 	}
 	if (!search.closed) search.improve();
@@ -47,6 +45,8 @@ export async function cheapestRelease(
 }
 
 class ReleaseSearch {
+	/** sets handed to the integer program so far */
+	rows = 0;
 	private best: number[];
 	private bestCost: number;
 	private lowerBound = 0;
@@ -55,12 +55,11 @@ class ReleaseSearch {
 
 	constructor(
 		private of: Case,
-		private whole: CaseClauses,
-		immediate: readonly number[][],
+		private whole: Whole,
 		private purse: Purse,
 		private seed: number,
 	) {
-		this.clashes = immediate.map((demands) => ({ demands, vertices: [] }));
+		this.clashes = whole.immediate.map((demands) => ({ demands, vertices: [] }));
 		this.costs = Float64Array.from(of.demands, (demand) => demand.cost);
 		this.best = of.demands.map((_, d) => d);
 		this.bestCost = this.costOf(this.best);
@@ -74,6 +73,7 @@ class ReleaseSearch {
 	async round(): Promise<boolean> {
 		const choice = await minimumHittingSet(this.sets(), this.costs, { nodes: NODES });
 		this.lowerBound = Math.max(this.lowerBound, choice.lowerBound);
+		this.rows += choice.rows;
 		const before = this.clashes.length;
 		if (this.closed) return false;
 		this.gather(choice.chosen, true);
@@ -139,7 +139,7 @@ class ReleaseSearch {
 	}
 
 	private ask(held: Set<number>) {
-		return this.purse.pay(this.whole.sat, (budget) => this.whole.solve(held, budget));
+		return this.whole.ask(held, this.purse);
 	}
 
 	/** What the assignment just found leaves unmet is a release. */

@@ -1,8 +1,8 @@
+import { contrast, labelInk } from '../colour/contrast.ts';
 import { readers } from '../colour/reader.ts';
 import { found } from './appearance.ts';
 import { bestKnown } from './limits.ts';
 import { labelShortfall, shortfall, type MendTask } from './mend-cost.ts';
-import { contrast, labelInk } from '../colour/contrast.ts';
 
 /** Why no mend can exist, as a sentence, or null when nothing rules it out. Everything said is certain. */
 export function whyImpossible(task: MendTask, locked: readonly number[]): string | null {
@@ -43,14 +43,14 @@ function tooMuchAsked(task: MendTask): string | null {
 }
 
 /** What to say when the search ended without a mend; it claims no more than that. */
-export function whyNotFound(task: MendTask): string {
+export function whyNotFound(task: MendTask, locked: readonly number[]): string {
 	const all = mutualInks(task).length;
 	const best = bestKnown.get(all);
 	if (best !== undefined && task.asked.ciede2000 > best) {
 		return `${task.asked.ciede2000} is asked of ${all} inks that all touch; the best found for so many is ${best}`;
 	}
 	const size = `${task.inks.length} inks`;
-	return `No set of ${size} was found that reaches what is asked with these locks; fewer inks, a lower demand, or a colouring that keeps the unsafe inks apart would help`;
+	return `No set of ${size} was found that reaches what is asked${locked.length > 0 ? ' with these locks' : ''}; fewer inks, a lower demand, or a colouring that keeps the unsafe inks apart would help`;
 }
 
 /** Inks that touch each other pairwise: a large set, found greedily from every ink. */

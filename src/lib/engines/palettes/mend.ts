@@ -3,8 +3,8 @@ import { readHex } from '../colour/hex.ts';
 import { labOf } from '../colour/lab.ts';
 import { checkPalette, defaultThresholds } from './check.ts';
 import { mendTask } from './mend-cost.ts';
-import { smallestMend } from './mend-sets.ts';
 import { whyImpossible, whyNotFound } from './mend-reasons.ts';
+import { smallestMend } from './mend-sets.ts';
 import type { Thresholds, Touching } from './palette.ts';
 import { randomStream } from './random.ts';
 import { touchingPairs } from './touching.ts';
@@ -52,7 +52,7 @@ export function mendPalette(request: MendRequest): MendResult {
 
 	const mended = smallestMend(task, pairs, locked, randomStream(request.seed ?? 0));
 	if (!mended || !checkPalette(mended.inks, request.touching, asked).passes) {
-		return { status: 'not-found', ...stay, reason: whyNotFound(task) };
+		return { status: 'not-found', ...stay, reason: whyNotFound(task, locked) };
 	}
 	return { status: 'mended', inks: mended.inks, moves: movesBetween(inks, mended.inks) };
 }

@@ -10,6 +10,8 @@ export interface HittingSet {
 	lowerBound: number;
 	/** true when `chosen` is a cheapest one */
 	proved: boolean;
+	/** sets handed to the integer program, as a measure of effort */
+	rows: number;
 }
 
 const OWN_STEPS = 1500;
@@ -31,14 +33,21 @@ export async function minimumHittingSet(
 	mustBeSound(sets, costs);
 	const { forced, rest } = reduceSets(sets, costs);
 	const forcedCost = costOf(forced, costs);
-	const result = { chosen: forced, cost: forcedCost, lowerBound: forcedCost, proved: true };
+	const result = {
+		chosen: forced,
+		cost: forcedCost,
+		lowerBound: forcedCost,
+		proved: true,
+		rows: 0,
+	};
 	for (const part of independentParts(rest)) {
 		const search = new HittingSearch(costs, steps);
 		const own = search.below(part, Infinity);
-		const answer =
-			own && !search.exhausted
-				? { chosen: own, proved: true, lowerBound: 0 }
-				: await byProgram(part, costs, own, nodes);
+		const done = own && !search.exhausted;
+		if (!done) result.rows += part.length;
+		const answer = done
+			? { chosen: own, proved: true, lowerBound: 0 }
+			: await byProgram(part, costs, own, nodes);
 		const cost = costOf(answer.chosen, costs);
 		result.chosen.push(...answer.chosen);
 		result.cost += cost;

@@ -1,9 +1,10 @@
-import { error } from '@sveltejs/kit';
+import { error, redirect } from '@sveltejs/kit';
 import { mayDo, type Member } from './member.ts';
 import type { Action } from './roles.ts';
 
 /** The first line of every load, action and handler below a team: who acts, if they may do this. */
 export function memberFor(locals: App.Locals, action: Action): Member {
+	userFor(locals);
 	if (!locals.member) error(404, 'There is no such team here.');
 	if (!mayDo(locals.member, action)) error(403, 'Your roles in this team do not include this.');
 	return locals.member;
@@ -11,6 +12,6 @@ export function memberFor(locals: App.Locals, action: Action): Member {
 
 /** The same for pages about a person rather than a team. */
 export function userFor(locals: App.Locals): NonNullable<App.Locals['user']> {
-	if (!locals.user) error(401, 'Sign in first.');
+	if (!locals.user) redirect(303, locals.signIn ?? '/sign-in');
 	return locals.user;
 }

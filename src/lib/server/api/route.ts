@@ -9,20 +9,21 @@ import { Conflict, NotFound, Refused, TooMany, Unfit } from '../services/outcome
 import { memberForToken, type TokenMember } from '../services/tokens.service.ts';
 import { ApiFault, faultBody } from './fault.ts';
 
-type Params = Record<string, string>;
+/** The event of a route whose parameters are all there: a route is only reached with them. */
+export type ApiEvent = Omit<RequestEvent, 'params'> & { params: Record<string, string> };
 
 /** A route of the API: known by its token, counted, within its scope; every failure in one shape. */
 export const apiRoute =
 	(
 		operation: Operation,
-		handle: (member: TokenMember, event: RequestEvent & { params: Params }) => Promise<Response>,
+		handle: (member: TokenMember, event: ApiEvent) => Promise<Response>,
 	): RequestHandler =>
 	async (event) => {
 		try {
 			const member = await memberOf(event.request);
 			await use(limits.callsByToken, member.tokenId ?? '');
 			requireScope(member, operation);
-			return await handle(member, event as RequestEvent & { params: Params });
+			return await handle(member, event as ApiEvent);
 		} catch (problem) {
 			return faultResponse(faultOf(problem, event.locals.requestId));
 		}

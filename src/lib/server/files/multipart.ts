@@ -47,8 +47,7 @@ export async function receiveForm(
 	const declared = Number(request.headers.get('content-length') ?? 0);
 	if (declared > maxBytes + 1_000_000) throw tooLarge(maxBytes);
 	const source = Readable.fromWeb(request.body as ReadableStream);
-	const form = collect(parser(type, maxBytes), source, store, maxBytes);
-	return form;
+	return collect(parser(type, maxBytes), source, store, maxBytes);
 }
 
 const tooLarge = (maxBytes: number) =>
@@ -74,6 +73,9 @@ function parser(type: string, maxBytes: number): BusboyInstance {
 
 const malformed = (message: string) => new UploadFault(400, 'malformed', message);
 
+/** The first fault of a form rejects the pipeline; those that follow from it must not end the process. */
+const unheard = () => undefined;
+
 async function collect(
 	busboy: BusboyInstance,
 	source: Readable,
@@ -82,14 +84,17 @@ async function collect(
 ): Promise<ReceivedForm> {
 	const fields: Record<string, string> = {};
 	let arriving: { stream: Readable; received: Promise<Received>; name: string } | undefined;
+	busboy.on('error', unheard);
+	source.on('error', unheard);
 	busboy.on('field', (name, value) => {
 		fields[name] = value;
 	});
 	busboy.on('file', (field, stream, name) => {
 		if (field !== 'file' || arriving) return void stream.resume();
+		stream.on('error', unheard);
 		stream.once('limit', () => source.destroy(tooLarge(maxBytes)));
 		const received = store.receive(stream);
-		received.catch(() => undefined); // looked at below, once the whole form is in
+		received.catch(unheard); // looked at below, once the whole form is in
 		arriving = { stream, received, name: cleanFileName(name) };
 	});
 	try {

@@ -20,10 +20,13 @@ export const LINK_MINUTES = 20;
 /** Only the ways back into the product are open; everything else about signing in is our own pages. */
 const open = /^\/auth\/(callback\/|verify-request$|error$)/;
 
-export const handleAuth: Handle = (input) => {
+export const handleAuth: Handle = async (input) => {
 	const { pathname } = input.event.url;
-	const closed = pathname.startsWith('/auth/') && !open.test(pathname);
-	return closed ? new Response('Not found', { status: 404 }) : handle(input);
+	if (!pathname.startsWith('/auth/')) return handle(input);
+	if (!open.test(pathname)) return new Response('Not found', { status: 404 });
+	const answer = await handle(input);
+	// Its redirects cannot be changed; a copy can, and the outer hooks add their headers.
+	return new Response(answer.body, answer);
 };
 
 function authConfig(settings: Config): SvelteKitAuthConfig {

@@ -1,32 +1,40 @@
-import { error, redirect, type Handle, type RequestEvent } from '@sveltejs/kit';
+import type { Handle, RequestEvent } from '@sveltejs/kit';
 import { isTeamSlug } from '../access/reserved.ts';
 import { membership } from '../services/teams.service.ts';
+import { elsewhere, plainAnswer } from './answer.ts';
 
 /**
  * Nobody comes past here unsigned into the working part of the product, and nobody into a team that is not
- * theirs. It stands before loads, form actions and handlers alike: a form's action runs no layout's load.
+ * theirs. It stands before form actions and handlers, which run no layout's load; a page that is only read
+ * goes on to its loads, which say the same (`userFor`, `memberFor`) and can show it as a page.
  */
 export const handleGuard: Handle = async ({ event, resolve }) => {
 	const route = event.route.id ?? '';
+	const { locals } = event;
 	if (!route.startsWith('/(app)')) return resolve(event);
-	if (!event.locals.user) return toSignIn(event);
-	if (route.startsWith('/(app)/[team]')) {
+	if (locals.user && route.startsWith('/(app)/[team]')) {
 		const slug = event.params.team ?? '';
-		event.locals.member = isTeamSlug(slug) ? await membership(slug, event.locals.user.id) : null;
-		// For pages the loads say so, because they can show it as a page.
-		if (!event.locals.member && !isPageRead(event)) error(404, 'There is no such team here.');
+		locals.member = isTeamSlug(slug) ? await membership(slug, locals.user.id) : null;
+	}
+	locals.signIn = signInPath(event);
+	if (isPageRead(event)) return resolve(event);
+	if (!locals.user) return unsigned(event, locals.signIn);
+	if (route.startsWith('/(app)/[team]') && !locals.member) {
+		return plainAnswer(event, 404, 'There is no such team here.');
 	}
 	return resolve(event);
 };
 
-function toSignIn(event: RequestEvent): never {
-	const { request, url } = event;
-	const form = request.method === 'POST' && request.headers.has('x-sveltekit-action');
-	if (!form && !isPageRead(event) && request.method !== 'POST') {
-		error(401, 'Sign in first.');
-	}
+/** People are sent to sign in; a program that reads data is told that it has to. */
+const unsigned = (event: RequestEvent, signIn: string): Response =>
+	event.request.headers.get('accept')?.includes('text/html') ||
+	event.request.headers.has('x-sveltekit-action')
+		? elsewhere(event, signIn)
+		: plainAnswer(event, 401, 'Sign in first.');
+
+function signInPath({ request, url }: RequestEvent): string {
 	const to = request.method === 'GET' ? url.pathname + url.search : url.pathname;
-	redirect(303, `/sign-in?to=${encodeURIComponent(to)}`);
+	return `/sign-in?to=${encodeURIComponent(to)}`;
 }
 
 /** Reading a page, as the browser or the framework's own navigation does. */

@@ -1,6 +1,7 @@
-import { error, type Handle, type RequestEvent } from '@sveltejs/kit';
+import type { Handle, RequestEvent } from '@sveltejs/kit';
 import { limits, use } from '../services/limits.service.ts';
 import { TooMany } from '../services/outcomes.ts';
+import { plainAnswer } from './answer.ts';
 
 const MEGABYTE = 1024 * 1024;
 /** Routes that read their body as a stream to disk and count it themselves. */
@@ -9,10 +10,11 @@ const streamed = /^\/(\(app\)\/\[team\]\/|api\/v1\/)/;
 /** Refuses bodies that are larger than anything this route takes, before a byte of them is read. */
 export const handleBodySize: Handle = ({ event, resolve }) => {
 	const { request } = event;
-	if (request.body && largestBody(event) < bodyLength(request)) {
-		error(413, 'This is more than can be sent here at once.');
-	}
-	return resolve(event);
+	if (!request.body || bodyLength(request) <= largestBody(event)) return resolve(event);
+	// The rest of the body is still on its way: this connection cannot carry another request.
+	return plainAnswer(event, 413, 'This is more than can be sent here at once.', {
+		connection: 'close',
+	});
 };
 
 /** A body of unknown length counts as endless, except where it is counted while it is read. */
@@ -37,21 +39,9 @@ export const handleRate: Handle = async ({ event, resolve }) => {
 		if (locals.user) await use(limits.writesByPerson, locals.user.id);
 		else await use(limits.writesByAddress, event.getClientAddress());
 	} catch (problem) {
-		if (problem instanceof TooMany) return tooMany(event, problem);
-		throw problem;
+		if (!(problem instanceof TooMany)) throw problem;
+		const headers = { 'retry-after': String(problem.retryAfter) };
+		return plainAnswer(event, 429, problem.message, headers);
 	}
 	return resolve(event);
 };
-
-/** The answer in the form that the asker reads: a form's script, a program or a person. */
-function tooMany({ request }: RequestEvent, problem: TooMany): Response {
-	const headers = { 'retry-after': String(problem.retryAfter) };
-	if (request.headers.has('x-sveltekit-action')) {
-		const result = { type: 'error', error: { message: problem.message } };
-		return Response.json(result, { status: 429, headers });
-	}
-	return new Response(problem.message, {
-		status: 429,
-		headers: { ...headers, 'content-type': 'text/plain; charset=utf-8' },
-	});
-}

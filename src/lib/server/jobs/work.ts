@@ -2,3 +2,6 @@
 export { colourGraph, recheck } from './colour.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
 export { readFile } from './read.work.ts';
+export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
+export { checkColouringJson } from './checks/check-colouring.work.ts';
+export { checkPaletteJson } from './checks/check-palette.work.ts';

@@ -59,13 +59,6 @@ export const listEditionFiles = (db: Db, sheetId: string) =>
 		.orderBy('edition_files.name')
 		.execute();
 
-export const findEdition = (db: Db, sheetId: string, number: number) =>
-	withIssuer(db)
-		.select('editions.content')
-		.where('sheet_id', '=', sheetId)
-		.where('number', '=', number)
-		.executeTakeFirst();
-
 export const findEditionFile = (db: Db, sheetId: string, number: number, name: string) =>
 	db
 		.selectFrom('edition_files')

@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
 import { digestOf, editionContent, type EditionContent } from '../../engines/editions/index.ts';
+import type { DeskEdition } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Received } from '../files/index.ts';
@@ -9,7 +10,6 @@ import type { SheetFile } from '../jobs/paint.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { readAttributes, readGeometry } from '../repositories/boundaries.repository.ts';
 import {
-	findEdition,
 	findEditionFile,
 	insertEdition,
 	nextEditionNumber,
@@ -24,6 +24,7 @@ import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
+import { editionsOf } from './sheet.service.ts';
 import { dropUnused } from './stored-files.ts';
 
 /**
@@ -214,18 +215,27 @@ export async function editionFile(
 	};
 }
 
-/** What an edition is, as it was issued. */
+/** The sheet's editions, the newest first. */
+export async function sheetEditions(
+	shop: Pick<Workshop, 'db'>,
+	member: Member,
+	number: number,
+): Promise<DeskEdition[]> {
+	requireAccess(member, 'sheet.read');
+	const sheet = await sheetOf(shop.db, member, number);
+	return editionsOf(shop.db, sheet.id);
+}
+
 export async function readEdition(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
 	number: number,
 	edition: number,
-) {
-	requireAccess(member, 'sheet.read');
-	const sheet = await sheetOf(shop.db, member, number);
-	const row = isNumber(edition) && (await findEdition(shop.db, sheet.id, edition));
-	if (!row) throw new NotFound('edition');
-	return row;
+): Promise<DeskEdition> {
+	const editions = await sheetEditions(shop, member, number);
+	const found = editions.find((one) => one.number === edition);
+	if (!found) throw new NotFound('edition');
+	return found;
 }
 
 const isNumber = (value: number) => Number.isSafeInteger(value) && value > 0 && value < 2 ** 31;

@@ -65,6 +65,8 @@ export class Window {
 }
 
 function joined(pieces: Uint8Array[], length: number): Uint8Array {
+	const filled = pieces.filter((piece) => piece.length > 0);
+	if (filled.length === 1) return filled[0];
 	const all = new Uint8Array(length);
 	let at = 0;
 	for (const piece of pieces) {

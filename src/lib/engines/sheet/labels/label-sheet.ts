@@ -15,13 +15,13 @@ import { labelFace, labelRegions, type Labelled, type LabelGround } from './regi
 import { smallerSide } from '../smaller-side.ts';
 import { rasterise } from './region-raster.ts';
 
-/** Type sizes on A4, hundredths of a millimetre: 8, 7, 6 and 5 point. */
-const sizes = [282, 247, 212];
+/** Type sizes on A4, hundredths of a millimetre: 9, 8, 7 and 6 point, and 5 if it must be. */
+const sizes = [318, 282, 247, 212];
 const smallest = 176;
 /** For the level above: 10, 9, 8 and 7 point. */
 const groupSizes = [353, 318, 282, 247];
-/** A size is large enough for a sheet if this share of the names fits at it. */
-const wanted = 0.85;
+/** A larger size may cost this share of the names that fit at the smallest. */
+const worth = 0.03;
 const enough = 0.6;
 /** Without a level above, a map with some names says more than a map with none. */
 const enoughAlone = 0.2;
@@ -73,16 +73,15 @@ export function labelSheet(input: LabelInput): Labelled {
 	// a name at the end of a leader counts half: better smaller and in its place
 	const share = ({ unplaced, leaders }: Labelled) =>
 		1 - (unplaced.length + leaders.length / 2) / Math.max(1, names.length);
-	// what does not fit at the smallest size fits at no other
 	const least = labelRegions(ground, Math.round(smallest * scale));
-	if (share(least) >= wanted) {
+	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
+	if (share(least) >= (grouped ? enough : enoughAlone)) {
 		for (const size of sizes) {
 			const found = labelRegions(ground, Math.round(size * scale));
-			if (share(found) >= wanted) return found;
+			if (share(found) >= share(least) - worth) return found;
 		}
+		return least;
 	}
-	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
-	if (share(least) >= (grouped ? enough : enoughAlone)) return least;
 	const unplaced = names.map((_, region) => region);
 	if (!grouped) return { texts: [], leaders: [], unplaced };
 	const scaled = groupSizes.map((size) => Math.round(size * scale));

@@ -47,10 +47,12 @@ export function cylindrical(parallel: number, centre: number): ChosenProjection 
 	const words = parallel === 0 ? '0°' : `${latitudeWords(parallel).replace(' N', '')} N and S`;
 	return {
 		projection: unit(
-			geoProjection((lon, lat) => [lon * narrowing, Math.sin(lat) / narrowing]).rotate([
-				-centre,
-				0,
-			]),
+			geoProjection(
+				withInverse(
+					(lon, lat) => [lon * narrowing, Math.sin(lat) / narrowing],
+					(x, y) => [x / narrowing, Math.asin(y * narrowing)],
+				),
+			).rotate([-centre, 0]),
 		),
 		sentence: `Cylindrical equal-area, true along ${words}, centre ${longitudeWords(centre)}.`,
 	};

@@ -107,16 +107,22 @@ describe('SVG of the 48 states and DC', () => {
 		});
 	});
 
-	it('draws every border once, and as many kilometres as there are', () => {
-		const drawn = drawing.lines.flatMap(({ arcs }) => [...arcs]);
+	it('draws every border once, outer edges and those between regions apart', () => {
+		const ranks = drawing.lines.filter(({ rank }) => rank !== 'leader');
+		const drawn = ranks.flatMap(({ arcs }) => [...arcs]);
 		expect(new Set(drawn).size).toBe(drawn.length);
 		const kept = coverage.arcLeft.filter(
 			(_, arc) => drawing.arcStarts[arc + 1] - drawing.arcStarts[arc] > 1,
 		);
 		expect(drawn.length).toBe(kept.length);
+		const outer = ranks.find(({ rank }) => rank === 'outer')!.arcs;
+		const alone = coverage.arcLeft.filter(
+			(left, arc) => outer.includes(arc) && left < 0 === coverage.arcRight[arc] < 0,
+		);
+		expect(alone.length).toBe(0);
 		const lines = elements.filter(({ inside }) => inside.includes('borders'));
 		expect(lines.filter(({ name }) => name === 'g').map(({ attributes }) => attributes.id)).toEqual(
-			['borders-region', 'borders-outer'],
+			['borders-region', 'borders-outer', 'leaders'],
 		);
 	});
 

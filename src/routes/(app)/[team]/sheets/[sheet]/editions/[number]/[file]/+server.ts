@@ -1,5 +1,5 @@
 import { memberFor } from '$lib/server/access/guard';
-import { attachment, isHeld, notModified, streamed, svgPolicy } from '$lib/server/bytes';
+import { editionFileResponse } from '$lib/server/bytes';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
 import { editionFile } from '$lib/server/services/edition.service';
@@ -12,16 +12,5 @@ export const GET = (async ({ locals, params, request }) => {
 	const file = await forPage(() =>
 		editionFile(workshop(), member, Number(sheet), Number(number), name),
 	);
-	const headers = {
-		etag: `"${file.digest}"`,
-		'cache-control': 'private, max-age=31536000, immutable',
-	};
-	if (isHeld(request, file.digest)) return notModified(file.digest, headers);
-	return streamed(await file.open(), {
-		...headers,
-		'content-type': file.mediaType,
-		'content-length': String(file.bytes),
-		'content-disposition': attachment(file.name),
-		'content-security-policy': svgPolicy,
-	});
+	return editionFileResponse(request, file);
 }) satisfies RequestHandler;

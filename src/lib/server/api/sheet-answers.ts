@@ -1,0 +1,72 @@
+import type { DeskEdition, DeskSheet, IntakeStatus } from '../../schemas/desk.ts';
+import { borderRows } from '../jobs/checks/check-boundaries.work.ts';
+import { colouringByKey, explanationByKey, proofByKey } from '../jobs/checks/keyed-result.ts';
+import { sheetBorders } from '../services/draft-problem.ts';
+
+/** A team's sheets as programs see them: regions by key. */
+
+export const sheetAnswer = (sheet: DeskSheet) => ({
+	number: sheet.number,
+	name: sheet.name,
+	revision: sheet.revision,
+	savedAt: sheet.savedAt,
+	savedBy: sheet.savedBy,
+	boundaries: {
+		fileName: sheet.boundarySet.fileName,
+		planar: sheet.boundarySet.planar,
+		source: sheet.boundarySet.source,
+		columns: sheet.boundarySet.columns,
+	},
+	regions: sheet.regions.key.map((key, region) => ({
+		key,
+		name: sheet.regions.name[region],
+		parts: sheet.regions.parts[region],
+		areaKm2: sheet.regions.areaKm2[region],
+		enclaveOf: sheet.regions.key[sheet.regions.enclaveOf[region]] ?? null,
+	})),
+	findings: sheet.findings.map(({ code, severity, message, regions, at, acceptedAt }) => ({
+		...{ code, severity, message, regions, at },
+		accepted: acceptedAt !== null,
+	})),
+	editions: sheet.editions,
+});
+
+export function bordersAnswer({ regions: { key: keys }, borders, draft }: DeskSheet) {
+	const ordinal = new Map(keys.map((key, region) => [key, region]));
+	return { borders: borderRows(keys, sheetBorders({ keys, borders, ordinal }, draft)) };
+}
+
+export function colouringAnswer({ regions: { key: keys }, colouring, revision, draft }: DeskSheet) {
+	if (!colouring) throw new Error('a stored draft has neither colouring nor explanation');
+	if (colouring.status === 'undecided') {
+		const { status, lowerBound, message } = colouring;
+		return { status, revision, lowerBound, message };
+	}
+	if (colouring.status === 'impossible') {
+		const explanation = explanationByKey(keys, colouring.explanation);
+		return { status: colouring.status, revision, explanation };
+	}
+	const { status, inks, inksUsed, lowerBound, proof, sentence } = colouring;
+	return {
+		...{ status, revision, inksUsed, lowerBound },
+		colouring: colouringByKey(keys, inks),
+		inks: draft.palette.inks,
+		proof: proofByKey(keys, proof),
+		message: sentence,
+	};
+}
+
+export const editionAnswer = ({ number, digest, note, issuedAt, issuedBy, files }: DeskEdition) => ({
+	...{ number, digest, note, issuedAt, issuedBy, files },
+});
+
+export const intakeAnswer = (intake: IntakeStatus) => ({
+	id: intake.id,
+	fileName: intake.fileName,
+	fileBytes: intake.fileBytes,
+	state: intake.state,
+	step: intake.step,
+	share: intake.share,
+	refusal: intake.refusal,
+	sheet: intake.sheet,
+});

@@ -1,0 +1,40 @@
+import { readingFields } from '../../schemas/upload.ts';
+import type { Answer } from '../api/answer.ts';
+import { unfit } from '../api/read-json.ts';
+import { receiveForm } from '../files/multipart.ts';
+import type { Workshop } from '../jobs/workshop.ts';
+import { maxUpload } from './intake.service.ts';
+
+/** A check that takes longer is stopped. Budgets are in steps; this only guards the machine. */
+const longestMilliseconds = 300_000;
+
+const until = (asker: AbortSignal): AbortSignal =>
+	AbortSignal.any([asker, AbortSignal.timeout(longestMilliseconds)]);
+
+/** Checks that store nothing. Each runs in a thread, and ends when the asker goes away. */
+export const checkColouring = (
+	{ pool }: Pick<Workshop, 'pool'>,
+	body: Uint8Array,
+	asker: AbortSignal,
+): Promise<Answer> => pool.run('checkColouringJson', body, { signal: until(asker) });
+
+export const checkPalette = (
+	{ pool }: Pick<Workshop, 'pool'>,
+	body: Uint8Array,
+	asker: AbortSignal,
+): Promise<Answer> => pool.run('checkPaletteJson', body, { signal: until(asker) });
+
+export async function checkBoundaries(
+	{ pool, files }: Pick<Workshop, 'pool' | 'files'>,
+	request: Request,
+): Promise<Answer> {
+	const form = await receiveForm(request, files, maxUpload());
+	try {
+		const options = readingFields.safeParse(form.fields);
+		if (!options.success) throw unfit(options.error.issues);
+		const input = { path: form.file.path, fileName: form.fileName, options: options.data };
+		return await pool.run('checkBoundariesFile', input, { signal: until(request.signal) });
+	} finally {
+		await form.file.discard();
+	}
+}

@@ -1,0 +1,3 @@
+import { noSuchRoute } from '$lib/server/api/route';
+
+export const fallback = noSuchRoute;
