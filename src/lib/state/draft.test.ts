@@ -41,7 +41,12 @@ function open(answers: SaveAnswer[], keeper = keeperOf()) {
 
 const savedAs = (revision: number, document: Draft): SaveAnswer => ({
 	kind: 'saved',
-	saved: { revision, savedAt: '2026-12-01T11:00:00Z', document, colouring: null },
+	saved: {
+		revision,
+		savedAt: '2026-12-01T11:00:00Z',
+		document,
+		colouring: { status: 'undecided', lowerBound: 2, message: '', sentence: '' },
+	},
 });
 const theirs = blankDraft({ locks: { d: { ink: 1, cost: 1 } } });
 const stale: SaveAnswer = {
