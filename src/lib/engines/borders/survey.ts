@@ -33,8 +33,9 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
 	for (const { a, b, metres, at } of overlaps) tally.add(a, b, 0, metres, at[0], at[1]);
-	addSeamLines(coverage, tally);
+	const atSeam = addSeamLines(coverage, tally);
 	addTouches(coverage, places, tally);
+	for (const [a, b, at] of atSeam) if (!tally.has(a, b)) tally.add(a, b, 1, 0, ...at);
 	if (options.acrossWaterKm) addAcrossWater(coverage, blocks, options.acrossWaterKm, tally);
 	return { borders: tally.list(), overlaps, crossings: found.crossings };
 }

@@ -295,6 +295,36 @@ describe('the 180th meridian and the poles', () => {
 		const { coverage } = await read([over]);
 		expect(coverage.areasKm2[0] / 2_451_000).toBeCloseTo(1, 1);
 	});
+	it('corners that meet on the seam of a whole world, or at a pole, touch in a point', async () => {
+		const lunes = [-180, -60, 60].map((x) => box(`l${x}`, x, 60, x + 120, 90));
+		const bands = [-180, -60, 60].map((x) => box(`b${x}`, x, -80, x + 120, -70));
+		const tips = [
+			region('w', [
+				[-180, 20],
+				[-170, 10],
+				[-170, 30],
+			]),
+			region('e', [
+				[180, 20],
+				[170, 30],
+				[170, 10],
+			]),
+			region('far', [
+				[180, 21],
+				[170, 35],
+				[170, 32],
+			]),
+		];
+		const pairs = pairsOf(await read([...lunes, ...bands, ...tips]));
+		expect(pairs.filter((pair) => pair.endsWith('point'))).toEqual(['e-w point']);
+		expect(pairs).toContain('l-180-l60 line');
+		const four = [-180, -90, 0, 90].map((x) => box(`${x}`, x, 60, x + 90, 90));
+		const polar = pairsOf(await read([...four, ...bands]));
+		expect(polar.filter((pair) => pair.endsWith('point'))).toEqual([
+			'-180-0 point',
+			'-90-90 point',
+		]);
+	});
 	it('a world of bands and caps keeps its neighbours at the seam', async () => {
 		const lunes = [-180, -90, 0, 90].map((x) => box(`${x}`, x, -60, x + 90, 60));
 		const cap = region('cap', [
