@@ -63,7 +63,7 @@ async function arrange(shop: Workshop, member: Member, number: number): Promise<
 		title: 'Republic of Tavaröe',
 		subtitle: 'Districts and provinces',
 		groupColumn: 'province',
-		credits: 'Tolva Survey Office. An invented country; free to use (CC0-1.0).',
+		credits: 'Tavaröe Survey Office. An invented country; free to use (CC0-1.0).',
 	};
 	const document = { ...draft, locks: Object.fromEntries(locks), layout };
 	const { status } = await saveDraft(shop, member, number, { revision, document });

@@ -68,7 +68,7 @@ describe('each role of a team', () => {
 		await page.getByLabel('Title', { exact: true }).fill(title);
 		await page.getByLabel('Title', { exact: true }).press('Tab');
 		await expect
-			.poll(() => page.locator('main svg').first().innerHTML())
+			.poll(() => page.locator('main svg:has([data-key])').innerHTML())
 			.toContain('&lt;b&gt;bold');
 		await saved(page);
 		await page.getByLabel('Title', { exact: true }).fill(before);

@@ -10,7 +10,7 @@ type Name = (number: number) => string;
 export function explanationSentence(explanation: Explanation, nameOf: Name, inkName: Name): string {
 	const { locks, rules, release, inksThatWouldDo } = explanation;
 	return [
-		locks.length > 0 ? lockSentence(locks, nameOf) : ruleSentence(rules, nameOf, inkName),
+		locks.length > 0 ? lockSentence(explanation, nameOf) : ruleSentence(rules, nameOf, inkName),
 		release ? releaseSentence(release, nameOf) : '',
 		inksThatWouldDo === null
 			? ''
@@ -20,11 +20,13 @@ export function explanationSentence(explanation: Explanation, nameOf: Name, inkN
 		.join(' ');
 }
 
-function lockSentence(locks: number[], nameOf: Name): string {
+function lockSentence({ locks, inksThatWouldDo }: Explanation, nameOf: Name): string {
 	const names = listed(locks.map(nameOf));
 	if (locks.length === 1)
 		return `The lock of ${names} cannot be kept together with the other rules.`;
-	return `The locks of ${names} collide: without any one of them these would no longer.`;
+	if (locks.length === 2 && inksThatWouldDo === null)
+		return `${names} cannot both keep their locks, whatever the number of inks.`;
+	return `The locks of ${names} cannot all be kept, though without any one of them the others can.`;
 }
 
 function ruleSentence(rules: Rule[], nameOf: Name, inkName: Name): string {
