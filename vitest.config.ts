@@ -1,3 +1,4 @@
+import { svelte } from '@sveltejs/vite-plugin-svelte';
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
@@ -9,6 +10,8 @@ export default defineConfig({
 	test: {
 		projects: [
 			{
+				// compiles the state classes, which are written in runes
+				plugins: [svelte()],
 				test: {
 					name: 'engines',
 					include: [

@@ -97,10 +97,12 @@ describe('the counties of the United States', () => {
 				.map((p) => p.split(' ')[0]),
 		);
 		// The file's maker squeezed Falls Church (51610) and a spit of San Francisco (06075) to lines.
-		// The library counts them as neighbours; a region without area has none here.
+		// The library counts them as neighbours; a region without area has none here, and that is told.
 		const squeezed = ['06001-06075', '51013-51610', '51059-51610'];
 		expect([...theirs].filter((pair) => !ours.has(pair)).sort()).toEqual(squeezed);
 		expect([...ours].filter((pair) => !theirs.has(pair))).toEqual([]);
+		const told = read.findings.find(({ code }) => code === 'touch-without-width');
+		for (const pair of squeezed) expect(told?.message).toContain(pair.replace('-', ' and '));
 		expect(coverageFaults(read.coverage)).toEqual([]);
 	});
 });

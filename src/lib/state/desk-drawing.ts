@@ -1,10 +1,13 @@
+import { date } from '$lib/components/format';
 import type { Desk } from './desk.svelte';
 import { Drawer, type DrawReply } from './drawer';
 import { drawnSheet } from './drawn-sheet';
 
-/** The line that tells a draft from an issue, as the server writes it on the sheet. */
-export const draftIssue = (lastEdition: number | undefined): string =>
-	lastEdition === undefined ? 'Draft' : `Draft after edition ${lastEdition}`;
+/** The line that tells a draft from an issue, in the words that the server puts on the sheet. */
+export const draftIssue = (lastEdition: number | undefined, revision: number, savedAt: string) =>
+	lastEdition === undefined
+		? `Draft ${revision}, ${date(savedAt)}`
+		: `Draft after edition ${lastEdition}, ${date(savedAt)}`;
 
 /** Draws the desk's sheet in a worker; asked again whenever the layout changes. */
 export function drawInto(desk: Desk, makeWorker: () => Worker) {
@@ -32,7 +35,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 						: null,
 					reader: 'typical',
 					weak: [],
-					issue: draftIssue(editions[0]?.number),
+					issue: draftIssue(editions[0]?.number, desk.draft.revision, desk.draft.savedAt),
 				},
 				places: Float64Array.from(findings.flatMap(({ at }) => at ?? [0, 0])),
 			});

@@ -64,10 +64,8 @@ function boundaries({ sheet, draft }: DocketState): Said {
 			: 'clear';
 	const groups = new Set(sheet.regions.group.filter((group) => group !== null)).size;
 	const regions = counted(sheet.boundarySet.regionCount, 'region');
-	const within =
-		groups > 1 && draft.layout.groupColumn
-			? ` in ${count(groups)} of "${draft.layout.groupColumn}"`
-			: '';
+	const column = draft.layout.groupColumn;
+	const within = groups > 1 && column ? ` in ${count(groups)} groups by ${column}` : '';
 	return {
 		mark: worst,
 		words: [

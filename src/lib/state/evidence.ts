@@ -14,6 +14,8 @@ export interface Evidence {
 	/** the middle that every region of the ring touches */
 	hub: number | null;
 	ring: boolean;
+	/** whether all other regions step back */
+	alone: boolean;
 	/** numbers into the sheet's border list */
 	borders: readonly number[];
 	/** number of the finding whose place is marked */
@@ -26,6 +28,7 @@ const nothing: Evidence = {
 	light: [],
 	hub: null,
 	ring: false,
+	alone: false,
 	borders: [],
 	finding: null,
 };
@@ -50,6 +53,7 @@ export function proofEvidence(proof: Proof, nameOf: (region: number) => string):
 		hub: wheel ? proof.regions[0] : null,
 		strong: wheel ? proof.regions.slice(1) : proof.regions,
 		ring: wheel || proof.kind === 'odd-cycle',
+		alone: true,
 	});
 }
 

@@ -14,6 +14,8 @@ export interface Overlap {
 	/** half the outline of the common area */
 	metres: number;
 	at: [number, number];
+	/** their outlines are the same, corner for corner */
+	same: boolean;
 }
 
 /** On the line: closer than this, in metres. */
@@ -32,7 +34,8 @@ export function overlapOf(coverage: Coverage, a: number, b: number): Overlap {
 	addPieces(lineA, lineB, true, sum);
 	addPieces(lineB, lineA, false, sum);
 	const most = (sum.metres / 1000) ** 2 / (4 * Math.PI);
-	return { a, b, km2: Math.min(Math.abs(sum.km2), most), metres: sum.metres / 2, at: sum.at };
+	const km2 = Math.min(Math.abs(sum.km2), most);
+	return { a, b, km2, metres: sum.metres / 2, at: sum.at, same: false };
 }
 
 interface Outline {

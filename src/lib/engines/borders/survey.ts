@@ -2,6 +2,7 @@ import type { Coverage } from '../geometry/coverage.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import type { BorderList } from './border-list.ts';
 import { addLines } from './lines.ts';
+import { isSameOutline, outlineMetres } from './same-outline.ts';
 import { overlapOf, type Overlap } from './overlap.ts';
 import { PairTally } from './pair-tally.ts';
 import { addSeamLines } from './seam.ts';
@@ -32,8 +33,9 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
 	for (const { a, b, metres, at } of overlaps) tally.add(a, b, 0, metres, at[0], at[1]);
-	addSeamLines(coverage, tally);
+	const atSeam = addSeamLines(coverage, tally);
 	addTouches(coverage, places, tally);
+	for (const [a, b, at] of atSeam) if (!tally.has(a, b)) tally.add(a, b, 1, 0, ...at);
 	if (options.acrossWaterKm) addAcrossWater(coverage, blocks, options.acrossWaterKm, tally);
 	return { borders: tally.list(), overlaps, crossings: found.crossings };
 }
@@ -41,9 +43,24 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): Overlap[] {
 	const overlaps: Overlap[] = [];
 	for (const [a, b] of found.pairs.values()) {
-		const overlap = overlapOf(coverage, a, b);
+		const overlap = isSameOutline(coverage, a, b)
+			? wholeOf(coverage, a, b)
+			: overlapOf(coverage, a, b);
 		const meanWidth = (overlap.km2 * 1e6) / Math.max(overlap.metres, 1e-9);
 		if (meanWidth > tolerance) overlaps.push(overlap);
 	}
 	return overlaps.sort((p, q) => p.a - q.a || p.b - q.b);
+}
+
+/** What two regions with the same outline have in common: everything. */
+function wholeOf(coverage: Coverage, a: number, b: number): Overlap {
+	const { regionParts, partRings, ringStarts, ringArcs, arcStarts, arcPoints } = coverage;
+	const half = ringArcs[ringStarts[partRings[regionParts[a]]]];
+	const corner = 2 * arcStarts[half >= 0 ? half : ~half];
+	return {
+		...{ a, b, same: true },
+		km2: coverage.areasKm2[a],
+		metres: outlineMetres(coverage, a) / 2,
+		at: [arcPoints[corner], arcPoints[corner + 1]],
+	};
 }

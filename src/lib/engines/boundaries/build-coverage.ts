@@ -10,13 +10,13 @@ import type { Outlines } from './outlines.ts';
 import { groupParts, type TracedRing } from './parts.ts';
 import type { Segments } from './segments.ts';
 
-/** Cuts noded outlines into shared arcs and puts the regions together from them again. */
+/** Cuts noded outlines into shared arcs and puts the regions together from them again; both are answered. */
 export function buildCoverage(
 	outlines: Outlines,
 	segments: Segments,
 	keys: string[],
 	names: string[],
-): Coverage {
+): { coverage: Coverage; arcs: Arcs } {
 	const arcs = chainArcs(outlines, segments);
 	const arcPoints = pointsOf(arcs, outlines.positions);
 	const arcStarts = Uint32Array.from(arcs.starts);
@@ -31,7 +31,7 @@ export function buildCoverage(
 		arcMetres: metresOf(arcPoints, arcStarts),
 		...rings,
 	};
-	return { ...cut, areasKm2: areasOf(cut), enclaveOf: enclaves(cut) };
+	return { coverage: { ...cut, areasKm2: areasOf(cut), enclaveOf: enclaves(cut) }, arcs };
 }
 
 function pointsOf(arcs: Arcs, positions: Float64Array): Float64Array {

@@ -1,4 +1,5 @@
 import { GrowingFloats, GrowingInts } from '../geometry/growing.ts';
+import { doubleArea } from '../geometry/rings.ts';
 import { eachRing } from './outlines-of.ts';
 import type { RawLayer } from './raw-layer.ts';
 
@@ -13,8 +14,10 @@ export function cutAtMeridian(layer: RawLayer, around: Set<number>): void {
 	const rings = [...eachRing(layer)].map((ring) => {
 		const points = layer.points.items.slice(2 * ring.from, 2 * ring.to);
 		const closed = around.has(ring.from) ? alongPole(points) : points;
-		return { ...ring, pieces: piecesOf(closed) };
+		const size = around.has(ring.from) ? Math.abs(doubleArea(closed, 0, closed.length / 2)) : 0;
+		return { ...ring, size, pieces: piecesOf(closed) };
 	});
+	putLargestFirst(rings);
 	const regions = layer.regions;
 	layer.points = new GrowingFloats(layer.points.length + 1024);
 	layer.ringStarts = new GrowingInts();
@@ -29,6 +32,21 @@ export function cutAtMeridian(layer: RawLayer, around: Set<number>): void {
 				layer.startRing();
 				for (let i = 0; i < piece.length; i += 2) layer.point(piece[i], piece[i + 1]);
 			}
+		}
+	}
+}
+
+/**
+ * Of two rings round the same pole the one farther from it is the outer one, whichever the file names
+ * first: a small circle round the pole stands for the hole that it is on the flat map.
+ */
+function putLargestFirst(rings: { isHole: boolean; size: number }[]): void {
+	let outer = 0;
+	for (let i = 1; i < rings.length; i++) {
+		if (!rings[i].isHole) outer = i;
+		else if (rings[outer].size > 0 && rings[i].size > rings[outer].size) {
+			[rings[outer], rings[i]] = [rings[i], rings[outer]];
+			[rings[outer].isHole, rings[i].isHole] = [false, true];
 		}
 	}
 }

@@ -9,6 +9,8 @@ export interface Naming {
 	names: string[];
 	/** region of each feature, -1 where it is left out */
 	regionOf: Int32Array;
+	/** the key each feature asks for, also where it is left out */
+	wanted: string[];
 	/** first feature of each region */
 	featureOf: number[];
 	findings: Finding[];
@@ -27,6 +29,7 @@ export function nameRegions(
 	const wanted = featureKeys(table, kept, options.keyField);
 	const names = featureNames(table, options.nameField);
 	const naming: Naming = {
+		wanted,
 		keys: [],
 		names: [],
 		regionOf: new Int32Array(kept.length).fill(-1),

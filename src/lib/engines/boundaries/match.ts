@@ -2,60 +2,69 @@ import { surveyOf, type Survey } from '../borders/survey.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { buildCoverage } from './build-coverage.ts';
 import type { Finding } from './finding.ts';
+import { holesBetween, type Hole } from './holes.ts';
 import { joinWithin } from './join-within.ts';
 import { gainedAndLost, joinedFinding, toleranceFinding } from './match-findings.ts';
-import { nodeOutlines, type Noded } from './node-outlines.ts';
+import type { Noded } from './node-outlines.ts';
 import { noiseMetres } from './options.ts';
-import type { Outlines } from './outlines.ts';
 import { settleParallel } from './settle-parallel.ts';
 
 export interface Matched {
 	coverage: Coverage;
 	survey: Survey;
+	holes: Hole[];
 	findings: Finding[];
 }
 
-/** Regions of which nothing is left once spikes and outlines of no width are gone. */
+/** Regions of which nothing is left once borders are joined within the tolerance. */
 export interface Vanished {
 	vanished: number[];
 }
 
+interface Options {
+	toleranceMetres?: number;
+	acrossWaterKm?: number;
+}
+
 /**
- * Outlines -> coverage and borders: noise of 2 cm and T-junctions always, then whatever lies within the
- * tolerance the user chose, with every pair gained and lost by that told.
+ * Noded outlines -> coverage, borders and holes, then whatever lies within the tolerance the user chose,
+ * with every pair gained and lost by that told.
  */
 export function matchOutlines(
-	outlines: Outlines,
+	noded: Noded,
 	keys: string[],
 	names: string[],
-	options: { toleranceMetres?: number; acrossWaterKm?: number },
+	options: Options,
 ): Matched | Vanished {
 	const tolerance = options.toleranceMetres ?? noiseMetres;
-	const noded = nodeOutlines(outlines);
-	settleParallel(noded.segments);
-	const vanished = withoutSegments(noded, keys.length);
-	if (vanished.length) return { vanished };
 	const findings = joinedFinding(noded.joined, keys);
-	const coverage = buildCoverage(noded.outlines, noded.segments, keys, names);
-	const survey = surveyOf(coverage, options);
-	if (tolerance <= noiseMetres) return { coverage, survey, findings };
+	const first = cut(noded, keys, names, options);
+	if (tolerance <= noiseMetres) return { ...first, holes: first.holes(), findings };
 
 	noded.joined = { regions: new Set(), places: 0, at: null };
 	const joined = joinWithin(noded, tolerance, keys);
-	if (joined === noded) return { coverage, survey, findings };
+	if (joined === noded) return { ...first, holes: first.holes(), findings };
 	settleParallel(joined.segments);
-	const gone = withoutSegments(joined, keys.length);
-	if (gone.length) return { vanished: gone };
-	const after = buildCoverage(joined.outlines, joined.segments, keys, names);
-	const surveyAfter = surveyOf(after, options);
+	const vanished = withoutSegments(joined, keys.length);
+	if (vanished.length) return { vanished };
+	const after = cut(joined, keys, names, options);
 	findings.push(
 		...toleranceFinding(joined.joined, keys, tolerance),
-		...gainedAndLost(survey.borders, surveyAfter.borders, keys, tolerance),
+		...gainedAndLost(first.survey.borders, after.survey.borders, keys, tolerance),
 	);
-	return { coverage: after, survey: surveyAfter, findings };
+	return { ...after, holes: after.holes(), findings };
 }
 
-function withoutSegments({ segments }: Noded, regions: number): number[] {
+function cut(noded: Noded, keys: string[], names: string[], options: Options) {
+	const { outlines, segments } = noded;
+	const { coverage, arcs } = buildCoverage(outlines, segments, keys, names);
+	const survey = surveyOf(coverage, options);
+	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
+	return { coverage, survey, holes };
+}
+
+/** Regions (or features) that have no segment with themselves on one side only. */
+export function withoutSegments({ segments }: Noded, regions: number): number[] {
 	const has = new Uint8Array(regions);
 	for (let s = 0; s < segments.count; s++) {
 		const left = segments.left[s];

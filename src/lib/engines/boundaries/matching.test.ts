@@ -105,7 +105,10 @@ describe('overlaps', () => {
 	it('the same region twice', async () => {
 		const twice = await read([box('a', 0, 0, 1, 1), box('b', 0, 0, 1, 1)]);
 		expect(pairsOf(twice)).toEqual(['a-b line']);
-		expect(codes(twice)).toContain('overlap');
+		expect(codes(twice)).toEqual(['duplicate-region']);
+		const around =
+			karneyMetres(0, 0, 1, 0) + 2 * karneyMetres(0, 0, 0, 1) + karneyMetres(0, 1, 1, 1);
+		expect(metresOf(twice)['a-b']).toBeCloseTo(around / 2, 3);
 	});
 	it('a region laid over many, also those it does not touch', async () => {
 		const small = [0, 1, 2].flatMap((x) =>
@@ -129,6 +132,42 @@ describe('overlaps', () => {
 		const over = await read([box('w', 0, 0, 1, 1), poke]);
 		expect(pairsOf(over)).toEqual(['e-w line']);
 		expect(codes(over)).toContain('overlap');
+	});
+});
+
+describe('holes', () => {
+	/** Two boxes with a notch in the right one, so deep in degrees, closed above and below. */
+	const notched = (deep: number) => [
+		box('w', 0, 0, 1, 1),
+		region('e', [
+			[1, 0],
+			[2, 0],
+			[2, 1],
+			[1, 1],
+			[1, 0.6],
+			[1 + deep, 0.5],
+			[1, 0.4],
+		]),
+	];
+	const holes = async (deep: number, ...more: ReturnType<typeof box>[]) => {
+		const { findings } = await read([...notched(deep), ...more]);
+		return findings.filter(({ code }) => /sliver|gap/.test(code));
+	};
+	it('between regions are told as slivers or gaps by their mean width', async () => {
+		// At 0.5 degrees north one degree of longitude is about 111.3 km: 33 m and 1.1 km deep.
+		const [sliver] = await holes(0.0003);
+		expect(sliver.code).toBe('sliver');
+		// half of 33.4 m by 22.1 km
+		expect(sliver.message).toMatch(/0\.37 km² between w and e .*17 m wide/);
+		expect(sliver.regions.toSorted()).toEqual(['e', 'w']);
+		expect(sliver.at?.[0]).toBeCloseTo(1, 3);
+		expect((await holes(0.0007)).map(({ code }) => code)).toEqual(['sliver']);
+		const [gap] = await holes(0.0015);
+		expect(gap.code).toBe('gap');
+	});
+	it('wide ones are lakes, and what another region covers is none', async () => {
+		expect(await holes(0.05)).toEqual([]);
+		expect(await holes(0.0003, box('over', 0.9, 0.3, 1.1, 0.7))).toEqual([]);
 	});
 });
 
@@ -191,8 +230,26 @@ describe('shapes that need care', () => {
 			[0.5, 1],
 			[0, 1],
 		]);
-		const { coverage } = await read([spiked]);
+		const { coverage, findings } = await read([spiked]);
 		expect(Math.max(...coverage.arcPoints)).toBe(1);
+		expect(findings.map(({ code, at }) => [code, at])).toEqual([['spike-dropped', [0.5, 2]]]);
+	});
+	it('regions that touch only along a tongue of no width are told, and are no neighbours', async () => {
+		const tongue = region('t', [
+			[0, 0],
+			[1, 0],
+			[1, 0.5],
+			[3, 0.5],
+			[1, 0.5],
+			[1, 1],
+			[0, 1],
+		]);
+		const far = [box('s', 2, 0, 3, 0.5), box('n', 2, 0.5, 3, 1)];
+		const read3 = await read([tongue, ...far]);
+		expect(pairsOf(read3)).toEqual(['n-s line']);
+		const told = read3.findings.find(({ code }) => code === 'touch-without-width');
+		expect(told?.message).toMatch(/n and t; s and t\.$/);
+		expect(told?.regions.toSorted()).toEqual(['n', 's', 't']);
 	});
 	it('an unclosed outline is closed and told', async () => {
 		const open = box('a', 0, 0, 1, 1);
@@ -237,6 +294,36 @@ describe('the 180th meridian and the poles', () => {
 		]);
 		const { coverage } = await read([over]);
 		expect(coverage.areasKm2[0] / 2_451_000).toBeCloseTo(1, 1);
+	});
+	it('corners that meet on the seam of a whole world, or at a pole, touch in a point', async () => {
+		const lunes = [-180, -60, 60].map((x) => box(`l${x}`, x, 60, x + 120, 90));
+		const bands = [-180, -60, 60].map((x) => box(`b${x}`, x, -80, x + 120, -70));
+		const tips = [
+			region('w', [
+				[-180, 20],
+				[-170, 10],
+				[-170, 30],
+			]),
+			region('e', [
+				[180, 20],
+				[170, 30],
+				[170, 10],
+			]),
+			region('far', [
+				[180, 21],
+				[170, 35],
+				[170, 32],
+			]),
+		];
+		const pairs = pairsOf(await read([...lunes, ...bands, ...tips]));
+		expect(pairs.filter((pair) => pair.endsWith('point'))).toEqual(['e-w point']);
+		expect(pairs).toContain('l-180-l60 line');
+		const four = [-180, -90, 0, 90].map((x) => box(`${x}`, x, 60, x + 90, 90));
+		const polar = pairsOf(await read([...four, ...bands]));
+		expect(polar.filter((pair) => pair.endsWith('point'))).toEqual([
+			'-180-0 point',
+			'-90-90 point',
+		]);
 	});
 	it('a world of bands and caps keeps its neighbours at the seam', async () => {
 		const lunes = [-180, -90, 0, 90].map((x) => box(`${x}`, x, -60, x + 90, 60));

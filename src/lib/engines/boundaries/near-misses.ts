@@ -16,12 +16,18 @@ export interface NearMiss {
 	share: number;
 }
 
-/** Segments with a region on one side only: coasts, and borders that were not drawn alike twice. */
+/**
+ * Segments with a region on one side only: coasts, and borders that were not drawn alike twice. Also
+ * those with one region on both sides, since others may run along a spike.
+ */
 export function unmatchedSegments(segments: Segments): Uint32Array {
 	const { count, left, right } = segments;
 	let n = 0;
 	const list = new Uint32Array(count);
-	for (let s = 0; s < count; s++) if (left[s] < 0 !== right[s] < 0) list[n++] = s;
+	for (let s = 0; s < count; s++) {
+		const isSpike = left[s] >= 0 && left[s] === right[s];
+		if (isSpike || left[s] < 0 !== right[s] < 0) list[n++] = s;
+	}
 	return list.subarray(0, n);
 }
 

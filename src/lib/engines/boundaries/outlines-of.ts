@@ -7,20 +7,21 @@ import { VertexTable } from './vertices.ts';
 export interface RingRepairs {
 	closed: Set<number>;
 	turned: Set<number>;
-	/** rings left out because fewer than three different vertices remain */
+	/** a corner written twice in a row, and where the first of them is */
+	doubled: Map<number, [number, number]>;
+	/** rings with fewer than three different vertices; those with two stay as lines of no width */
 	collapsed: Set<number>;
 }
 
 /**
  * Takes the rings over: closes them, drops repeated vertices, leaves out those without area, and turns
  * them so that their region is on the left (outer rings anticlockwise, holes clockwise).
- * `regionOf` gives the region of each feature (several features may be one region), -1 to leave it out.
+ * Each feature is taken for a region of its own; those not in `kept` are left out.
  */
 export function outlinesOf(
 	layer: RawLayer,
 	west: number,
-	regionOf: Int32Array,
-	regions: number,
+	kept: boolean[],
 ): { outlines: Outlines; repairs: RingRepairs } {
 	const points = layer.points.items;
 	const total = layer.points.length / 2;
@@ -28,22 +29,30 @@ export function outlinesOf(
 	const ringVertices = new Uint32Array(total);
 	const ringStarts: number[] = [];
 	const ringRegion: number[] = [];
-	const repairs: RingRepairs = { closed: new Set(), turned: new Set(), collapsed: new Set() };
+	const repairs: RingRepairs = {
+		closed: new Set(),
+		turned: new Set(),
+		doubled: new Map(),
+		collapsed: new Set(),
+	};
 	let used = 0;
 	for (const ring of eachRing(layer)) {
-		const region = regionOf[ring.feature];
-		if (region < 0) continue;
+		if (!kept[ring.feature]) continue;
 		if (!isClosed(points, ring.from, ring.to)) repairs.closed.add(ring.feature);
 		const start = used;
 		for (let i = ring.from; i < ring.to; i++) {
 			const v = table.at(points[2 * i], points[2 * i + 1]);
 			if (used === start || ringVertices[used - 1] !== v) ringVertices[used++] = v;
+			else if (!repairs.doubled.has(ring.feature))
+				repairs.doubled.set(ring.feature, [points[2 * i], points[2 * i + 1]]);
 		}
 		while (used > start + 1 && ringVertices[used - 1] === ringVertices[start]) used--;
 		if (used - start < 3) {
 			repairs.collapsed.add(ring.feature);
-			used = start;
-			continue;
+			if (used - start < 2) {
+				used = start;
+				continue;
+			}
 		}
 		const area = doubleArea(points, ring.from, ring.to);
 		if (area > 0 === ring.isHole) {
@@ -51,7 +60,7 @@ export function outlinesOf(
 			repairs.turned.add(ring.feature);
 		}
 		ringStarts.push(start);
-		ringRegion.push(region);
+		ringRegion.push(ring.feature);
 	}
 	ringStarts.push(used);
 	const outlines = {
@@ -60,7 +69,7 @@ export function outlinesOf(
 		ringVertices: ringVertices.subarray(0, used),
 		ringStarts: Uint32Array.from(ringStarts),
 		ringRegion: Uint32Array.from(ringRegion),
-		regions,
+		regions: layer.regions,
 	};
 	return { outlines, repairs };
 }

@@ -1,8 +1,6 @@
-import { doubleArea } from '../geometry/rings.ts';
-import type { Finding } from './finding.ts';
-import { nameRegions } from './keys.ts';
+import { holeFindings } from './hole-findings.ts';
 import { placeLongitudes } from './longitudes.ts';
-import { matchOutlines } from './match.ts';
+import { matchLayer } from './match-layer.ts';
 import {
 	defaultLimits,
 	noiseMetres,
@@ -10,7 +8,6 @@ import {
 	type ByteSource,
 	type Watch,
 } from './options.ts';
-import { eachRing, outlinesOf } from './outlines-of.ts';
 import type { RawLayer } from './raw-layer.ts';
 import { Cancelled, Refusal } from './refusal.ts';
 import { reproject } from './reproject.ts';
@@ -53,7 +50,7 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 	const crs = reproject(layer, options);
 	const { west, crossing } = placeLongitudes(layer);
 	stage('Matching the outlines', 0.6);
-	const { naming, repairs, matched, left } = matchLayer(layer, west, options, stage);
+	const { naming, repairs, matched, findings } = matchLayer(layer, west, options, stage);
 	const { coverage, survey } = matched;
 	return {
 		status: 'accepted',
@@ -63,11 +60,12 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 		findings: [
 			...layer.findings,
 			...naming.findings,
-			...leftOutFinding(left),
+			...findings,
 			...crossingFinding(crossing, naming),
 			...ringFindings(repairs, naming, layer.format),
 			...matched.findings,
 			...surveyFindings(survey, coverage.keys),
+			...holeFindings(matched.holes, coverage.keys),
 		],
 		source: {
 			format: layer.format,
@@ -78,51 +76,4 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 			toleranceMetres: options.toleranceMetres ?? noiseMetres,
 		},
 	};
-}
-
-/**
- * Names the features with an area and matches them. What has no area left once its spikes are gone is
- * left out, and the rest is named and matched again.
- */
-function matchLayer(
-	layer: RawLayer,
-	west: number,
-	options: BoundaryOptions,
-	stage: (message: string, share: number) => void,
-) {
-	const kept = featuresWithArea(layer);
-	for (;;) {
-		const naming = nameRegions(layer.table, kept, options);
-		if (naming.keys.length === 0) {
-			throw new Refusal('no-areas', 'No feature of the file has an area.');
-		}
-		const { outlines, repairs } = outlinesOf(layer, west, naming.regionOf, naming.keys.length);
-		stage('Cutting the shared borders', 0.75);
-		const matched = matchOutlines(outlines, naming.keys, naming.names, options);
-		if (!('vanished' in matched)) {
-			const left = kept.flatMap((has, f) => (has ? [] : [f]));
-			return { naming, repairs, matched, left };
-		}
-		const gone = new Set(matched.vanished);
-		naming.regionOf.forEach((region, f) => {
-			if (gone.has(region)) kept[f] = false;
-		});
-	}
-}
-
-/** Has at least one ring with three points that enclose something. */
-function featuresWithArea(layer: RawLayer): boolean[] {
-	const kept: boolean[] = new Array(layer.regions).fill(false);
-	for (const ring of eachRing(layer)) {
-		if (ring.isHole || kept[ring.feature] || ring.to - ring.from < 3) continue;
-		kept[ring.feature] = doubleArea(layer.points.items, ring.from, ring.to) !== 0;
-	}
-	return kept;
-}
-
-function leftOutFinding(features: number[]): Finding[] {
-	if (features.length === 0) return [];
-	const some = features.slice(0, 10).map((f) => f + 1);
-	const message = `Features without an area were left out: number ${some.join(', ')}${features.length > 10 ? ` and ${features.length - 10} more` : ''} in the file.`;
-	return [{ code: 'no-area', severity: 'warning', message, regions: [], at: null }];
 }

@@ -10,7 +10,7 @@ export interface Rewrite {
 
 export const segmentCode = (low: number, high: number) => low * 2 ** 32 + high;
 
-/** The outlines with segments split and vertices joined; rings left with under three corners vanish. */
+/** The outlines with segments split and vertices joined; rings left with one corner vanish. */
 export function rewriteOutlines(outlines: Outlines, rewrite: Rewrite): Outlines {
 	const { ringVertices, ringStarts, ringRegion } = outlines;
 	const { inserts, standsFor } = rewrite;
@@ -45,7 +45,7 @@ export function rewriteOutlines(outlines: Outlines, rewrite: Rewrite): Outlines 
 			else for (let k = along.length - 1; k >= 0; k--) push(along[k].vertex);
 		}
 		while (used > start + 1 && vertices[used - 1] === vertices[start]) used--;
-		if (used - start < 3) used = start;
+		if (used - start < 2) used = start;
 		else {
 			starts.push(start);
 			regions.push(ringRegion[ring]);

@@ -8,13 +8,12 @@ export function ringFindings(repairs: RingRepairs, naming: Naming, format: strin
 	const note = (
 		code: string,
 		severity: Finding['severity'],
-		features: Set<number>,
+		features: Iterable<number>,
 		said: string,
+		at: Finding['at'] = null,
 	) => {
-		if (features.size === 0) return;
-		const regions = new Set<string>();
-		for (const f of features) regions.add(naming.keys[naming.regionOf[f]]);
-		findings.push({ code, severity, message: said, regions: [...regions], at: null });
+		const regions = regionsOf(features, naming);
+		if (regions.length) findings.push({ code, severity, message: said, regions, at });
 	};
 	note(
 		'ring-closed',
@@ -31,6 +30,13 @@ export function ringFindings(repairs: RingRepairs, naming: Naming, format: strin
 		);
 	}
 	note(
+		'corner-doubled',
+		'note',
+		repairs.doubled.keys(),
+		'Corners written twice in a row, or within a centimetre of each other, were taken once.',
+		[...repairs.doubled.values()][0],
+	);
+	note(
 		'ring-collapsed',
 		'warning',
 		repairs.collapsed,
@@ -41,17 +47,24 @@ export function ringFindings(repairs: RingRepairs, naming: Naming, format: strin
 
 /** Outlines that step over the 180th meridian. */
 export function crossingFinding(features: Set<number>, naming: Naming): Finding[] {
-	const regions = new Set<string>();
-	for (const f of features)
-		if (naming.regionOf[f] >= 0) regions.add(naming.keys[naming.regionOf[f]]);
-	if (regions.size === 0) return [];
+	const regions = regionsOf(features, naming);
+	if (regions.length === 0) return [];
 	return [
 		{
 			code: 'antimeridian',
 			severity: 'note',
 			message: 'Outlines that cross the 180th meridian were put together across it.',
-			regions: [...regions],
+			regions,
 			at: null,
 		},
 	];
+}
+
+/** Keys of the regions of features, each once; a feature that was left out has none. */
+function regionsOf(features: Iterable<number>, naming: Naming): string[] {
+	const regions = new Set<string>();
+	for (const f of features) {
+		if (naming.regionOf[f] >= 0) regions.add(naming.keys[naming.regionOf[f]]);
+	}
+	return [...regions];
 }

@@ -1,17 +1,17 @@
 import type { Survey } from '../borders/survey.ts';
+import { areaText } from './area-text.ts';
 import type { Finding } from './finding.ts';
 
-/** A finding for each overlap, worst first, and one for the outlines that cross themselves. */
+/** A finding for each overlap or pair with the same outline, worst first, and one for the outlines that cross themselves. */
 export function surveyFindings(survey: Survey, keys: string[]): Finding[] {
 	const overlaps = [...survey.overlaps].sort((p, q) => q.km2 - p.km2);
-	const findings = overlaps.map(({ a, b, km2, at }): Finding => {
-		return {
-			code: 'overlap',
-			severity: 'warning',
-			message: `${keys[a]} and ${keys[b]} overlap by ${areaText(km2)}; they count as neighbours.`,
-			regions: [keys[a], keys[b]],
-			at,
-		};
+	const findings = overlaps.map(({ a, b, km2, at, same }): Finding => {
+		const both = `${keys[a]} and ${keys[b]}`;
+		const message = same
+			? `${both} have the same outline, so that one is probably there twice; they count as neighbours.`
+			: `${both} overlap by ${areaText(km2)}; they count as neighbours.`;
+		const code = same ? 'duplicate-region' : 'overlap';
+		return { code, severity: 'warning', message, regions: [keys[a], keys[b]], at };
 	});
 	const { crossings } = survey;
 	if (crossings.length) {
@@ -24,9 +24,4 @@ export function surveyFindings(survey: Survey, keys: string[]): Finding[] {
 		});
 	}
 	return findings;
-}
-
-function areaText(km2: number): string {
-	if (km2 >= 10) return `${Math.round(km2)} km²`;
-	return km2 >= 0.01 ? `${km2.toPrecision(2)} km²` : `${(km2 * 1e6).toPrecision(2)} m²`;
 }

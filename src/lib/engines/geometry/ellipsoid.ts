@@ -39,13 +39,16 @@ function localMetres(turn: number, lat1: number, lat2: number): number {
 	return Math.sqrt(east * east + north * north);
 }
 
-/** Metres of one degree of longitude and of latitude at a latitude, for small local planes. */
+/**
+ * Metres of one degree of longitude and of latitude at a latitude, for small local planes. Within 57 m of a
+ * pole a degree of longitude counts as a metre, so that places at the pole stay apart on the flat map.
+ */
 export function metresPerDegree(lat: number): { east: number; north: number } {
 	const sine = Math.sin(lat * radians);
 	const w2 = 1 - eccentricity2 * sine * sine;
 	const primeVertical = equatorMetres / Math.sqrt(w2);
 	return {
-		east: Math.max(primeVertical * Math.cos(lat * radians) * radians, 1e-6),
+		east: Math.max(primeVertical * Math.cos(lat * radians) * radians, 1),
 		north: ((primeVertical * (1 - eccentricity2)) / w2) * radians,
 	};
 }

@@ -2,6 +2,7 @@ import { RawLayer } from '../raw-layer.ts';
 import { Cancelled, Refusal } from '../refusal.ts';
 import type { ByteSource, Limits, Watch } from '../options.ts';
 import { byte, JsonBytes, needMore } from './json-bytes.ts';
+import { idOf, nameOf, objectOrNull, readFeature, type LoneFeature } from './geojson-feature.ts';
 import {
 	checkGeometry,
 	notGeoJson,
@@ -197,43 +198,6 @@ class RootReader {
 		this.stage = 'root';
 	}
 }
-
-interface LoneFeature {
-	id: string | number | null;
-	properties: object | null;
-}
-
-function readFeature(json: JsonBytes, layer: RawLayer): void {
-	json.feature = layer.regions + 1;
-	if (json.peek() !== byte.openObject) throw notGeoJson(json, 'a feature is not an object');
-	json.at++;
-	layer.startRegion();
-	let id: string | number | null = null;
-	let properties: object | null = null;
-	let geometries = 0;
-	if (json.peek() === byte.closeObject) json.at++;
-	else {
-		do {
-			const name = json.string();
-			json.take(byte.colon);
-			if (name === 'geometry') {
-				if (geometries++) throw notGeoJson(json, 'a feature has two geometries');
-				readGeometry(json, layer);
-			} else if (name === 'properties') properties = objectOrNull(json.value());
-			else if (name === 'id') id = idOf(json.value());
-			else json.skip();
-		} while (json.another(byte.closeObject));
-	}
-	layer.table.add(id, properties);
-}
-
-const objectOrNull = (value: unknown) =>
-	typeof value === 'object' && !Array.isArray(value) ? value : null;
-
-const idOf = (value: unknown) =>
-	typeof value === 'string' || typeof value === 'number' ? value : null;
-
-const nameOf = (value: unknown) => (typeof value === 'string' ? value : null);
 
 const isBetween = (c: number) =>
 	c === recordSeparator || c === 32 || c === 10 || c === 13 || c === 9;

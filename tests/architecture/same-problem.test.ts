@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import { problemOf as serverProblem } from '../server/services/draft-problem';
-import { blankDraft } from '../../../tests/support/blank-draft';
-import { problemOf } from './problem-of-draft';
-import { numberRegions } from './rules-in-force';
+import { problemOf as serverProblem } from '../../src/lib/server/services/draft-problem';
+import { blankDraft } from '../support/blank-draft';
+import { problemOf } from '../../src/lib/state/problem-of-draft';
+import { numberRegions } from '../../src/lib/state/rules-in-force';
 
 describe('problemOf', () => {
 	it('asks what the server asks, so that both get the same answer', () => {

@@ -1,0 +1,42 @@
+import type { Noded } from './node-outlines.ts';
+import type { Outlines } from './outlines.ts';
+
+/** Features are matched before they are named; here they become regions, and those without one go. */
+export function relabel(noded: Noded, regionOf: Int32Array, regions: number): Noded {
+	const { outlines, segments, joined } = noded;
+	for (const side of [segments.left, segments.right]) {
+		for (let s = 0; s < segments.count; s++) if (side[s] >= 0) side[s] = regionOf[side[s]];
+	}
+	const named = new Set([...joined.regions].map((f) => regionOf[f]).filter((r) => r >= 0));
+	return {
+		outlines: ringsOfRegions(outlines, regionOf, regions),
+		segments,
+		joined: { ...joined, regions: named },
+	};
+}
+
+function ringsOfRegions(outlines: Outlines, regionOf: Int32Array, regions: number): Outlines {
+	const { ringVertices, ringStarts, ringRegion } = outlines;
+	const vertices = new Uint32Array(ringVertices.length);
+	const starts = new Uint32Array(ringStarts.length);
+	const owners = new Uint32Array(ringRegion.length);
+	let used = 0;
+	let rings = 0;
+	for (let ring = 0; ring < ringRegion.length; ring++) {
+		const region = regionOf[ringRegion[ring]];
+		if (region < 0) continue;
+		const run = ringVertices.subarray(ringStarts[ring], ringStarts[ring + 1]);
+		vertices.set(run, used);
+		starts[rings] = used;
+		owners[rings++] = region;
+		used += run.length;
+	}
+	starts[rings] = used;
+	return {
+		...outlines,
+		regions,
+		ringVertices: vertices.subarray(0, used),
+		ringStarts: starts.subarray(0, rings + 1),
+		ringRegion: owners.subarray(0, rings),
+	};
+}
