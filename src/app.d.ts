@@ -7,7 +7,7 @@ declare global {
 			/** who is signed in, with the session's expiry */
 			user: { id: string; email: string; name: string | null } | null;
 			/** where this request is sent when nobody is signed in; set in the signed-in part */
-			signIn?: string;
+			signInAt?: string;
 			/** set below /[team]: this user's membership, with roles */
 			member: Member | null;
 		}

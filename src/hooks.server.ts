@@ -1,3 +1,4 @@
+import { building } from '$app/environment';
 import { sequence } from '@sveltejs/kit/hooks';
 import { handleAddress } from '$lib/server/hooks/address';
 import { handleAuth } from '$lib/server/hooks/auth';
@@ -8,6 +9,7 @@ import { handleBodySize, handleRate } from '$lib/server/hooks/limits';
 import { handleOrigin } from '$lib/server/hooks/origin';
 import { handleError, handleRequest } from '$lib/server/hooks/request';
 import { handleSession } from '$lib/server/hooks/session';
+import { warmUp } from '$lib/server/jobs/workshop';
 import { closeOnShutdown } from '$lib/server/hooks/shutdown';
 
 /** What happens to every request, from the outside in. */
@@ -24,5 +26,9 @@ export const handle = sequence(
 	handleBooth,
 );
 
-export const init = closeOnShutdown;
+export const init = () => {
+	closeOnShutdown();
+	if (!building) warmUp();
+};
+
 export { handleError };

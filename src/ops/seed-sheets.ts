@@ -30,12 +30,11 @@ export async function seedDemoSheets(member: Member): Promise<void> {
 }
 
 /** Jobs are done here and now, so nothing is asked of a worker, and nobody is held up. */
-const seedingWorkshop = (): Workshop => ({
-	db: database(),
-	files: fileStore(),
-	queue: { send: async () => undefined, stop: async () => undefined },
-	pool: inlinePool(),
-});
+function seedingWorkshop(): Workshop {
+	const pool = inlinePool();
+	const queue = { send: async () => undefined, stop: async () => undefined };
+	return { db: database(), files: fileStore(), queue, pool, checks: pool };
+}
 
 async function takeIn(shop: Workshop, member: Member): Promise<number> {
 	const form = new FormData();

@@ -37,7 +37,7 @@ function greet(url, dataDir) {
 	if (demo) {
 		say('Demo sign-ins (e-mail, password, roles):');
 		for (const { email, password, roles } of demo.users) {
-			say(`  ${email.padEnd(32)} ${password.padEnd(20)} ${roles.join(', ')}`);
+			say(`  ${email.padEnd(36)} ${password.padEnd(18)} ${roles.join(', ')}`);
 		}
 		say(`\nMails that the demo would send: ${url}/mail (signed in as the admin).`);
 	}

@@ -1,4 +1,5 @@
-import { decodeCoverage, type Coverage } from '$lib/engines/boundaries';
+import { decodeCoverage } from '$lib/engines/boundaries/codec';
+import type { Coverage } from '$lib/engines/boundaries/coverage';
 import { drawSheet, paintSvg, regionSizesMm } from '$lib/engines/sheet';
 import { anchorsOf, placesOn, sharedArcs } from '$lib/state/sheet-places';
 import type { DrawReply, DrawRequest } from '$lib/state/drawer';

@@ -48,6 +48,7 @@ export async function openPage(
 		javaScriptEnabled: options.javaScript ?? true,
 		acceptDownloads: true,
 	});
+	context.setDefaultTimeout(20_000);
 	const page = await context.newPage();
 	const complaints: string[] = [];
 	page.on('pageerror', (error) => complaints.push(`page error: ${error.message}`));

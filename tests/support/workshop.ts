@@ -1,4 +1,4 @@
-import { mkdtemp, readdir, rm } from 'node:fs/promises';
+import { mkdir, mkdtemp, readdir, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Member } from '../../src/lib/server/access/member.ts';
@@ -14,7 +14,8 @@ import { createDatabase } from './database.ts';
 /** A workshop of one test file's own. Jobs that are asked for are noted in `asked`, not done. */
 export interface TestWorkshop extends Workshop {
 	url: string;
-	folder: string;
+	/** the data folder, as MERESTONE_DATA names it */
+	data: string;
 	asked: string[];
 	/** names of the files in the store, those that are still coming in included */
 	stored(): Promise<string[]>;
@@ -23,11 +24,13 @@ export interface TestWorkshop extends Workshop {
 
 export async function createWorkshop(): Promise<TestWorkshop> {
 	const database = await createDatabase();
-	const folder = await mkdtemp(join(tmpdir(), 'merestone-'));
+	const data = await mkdtemp(join(tmpdir(), 'merestone-'));
+	const folder = join(data, 'files');
+	await mkdir(folder);
 	const pool = createPool({ threads: 1 });
 	const asked: string[] = [];
 	return {
-		...{ url: database.url, db: database.db, folder, pool, asked },
+		...{ url: database.url, db: database.db, data, pool, checks: pool, asked },
 		files: folderStore(folder),
 		queue: {
 			send: async (_trx, _name, { intakeId }) => void asked.push(intakeId),
@@ -40,7 +43,7 @@ export async function createWorkshop(): Promise<TestWorkshop> {
 		async close() {
 			await pool.close();
 			await database.drop();
-			await rm(folder, { recursive: true, force: true });
+			await rm(data, { recursive: true, force: true });
 		},
 	};
 }

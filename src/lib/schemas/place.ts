@@ -7,5 +7,7 @@ export function placeOnThisSite(wanted: unknown, fallback = '/teams'): string {
 	const base = 'http://here.invalid';
 	if (!URL.canParse(wanted, base)) return fallback;
 	const url = new URL(wanted, base);
-	return url.origin === base ? url.pathname + url.search : fallback;
+	const path = url.pathname + url.search;
+	// Dots may fold away and leave a path that reads as another host: `/.//host` becomes `//host`.
+	return url.origin === base && !path.startsWith('//') ? path : fallback;
 }

@@ -12,6 +12,6 @@ export function memberFor(locals: App.Locals, action: Action): Member {
 
 /** The same for pages about a person rather than a team. */
 export function userFor(locals: App.Locals): NonNullable<App.Locals['user']> {
-	if (!locals.user) redirect(303, locals.signIn ?? '/sign-in');
+	if (!locals.user) redirect(303, locals.signInAt ?? '/sign-in');
 	return locals.user;
 }

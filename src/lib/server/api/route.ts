@@ -46,7 +46,13 @@ async function memberOf(request: Request): Promise<TokenMember> {
 	const [, bearer] = /^Bearer\s+(\S+)\s*$/i.exec(request.headers.get('authorization') ?? '') ?? [];
 	const asks = { 'www-authenticate': 'Bearer' };
 	if (!bearer) {
-		throw new ApiFault(401, 'token-missing', 'send a token as Authorization: Bearer', undefined, asks);
+		throw new ApiFault(
+			401,
+			'token-missing',
+			'send a token as Authorization: Bearer',
+			undefined,
+			asks,
+		);
 	}
 	const member = await memberForToken(bearer);
 	if (member) return member;

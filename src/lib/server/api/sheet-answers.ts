@@ -56,7 +56,14 @@ export function colouringAnswer({ regions: { key: keys }, colouring, revision, d
 	};
 }
 
-export const editionAnswer = ({ number, digest, note, issuedAt, issuedBy, files }: DeskEdition) => ({
+export const editionAnswer = ({
+	number,
+	digest,
+	note,
+	issuedAt,
+	issuedBy,
+	files,
+}: DeskEdition) => ({
 	...{ number, digest, note, issuedAt, issuedBy, files },
 });
 

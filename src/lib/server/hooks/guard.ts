@@ -16,9 +16,9 @@ export const handleGuard: Handle = async ({ event, resolve }) => {
 		const slug = event.params.team ?? '';
 		locals.member = isTeamSlug(slug) ? await membership(slug, locals.user.id) : null;
 	}
-	locals.signIn = signInPath(event);
+	locals.signInAt = signInPath(event);
 	if (isPageRead(event)) return resolve(event);
-	if (!locals.user) return unsigned(event, locals.signIn);
+	if (!locals.user) return unsigned(event, locals.signInAt);
 	if (route.startsWith('/(app)/[team]') && !locals.member) {
 		return plainAnswer(event, 404, 'There is no such team here.');
 	}

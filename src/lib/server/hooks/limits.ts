@@ -4,8 +4,9 @@ import { TooMany } from '../services/outcomes.ts';
 import { plainAnswer } from './answer.ts';
 
 const MEGABYTE = 1024 * 1024;
-/** Routes that read their body as a stream to disk and count it themselves. */
-const streamed = /^\/(\(app\)\/\[team\]\/|api\/v1\/)/;
+/** They read their body as it comes and count it themselves; a file goes straight to the disk. */
+const counted = /^\/(\(app\)\/\[team\]\/upload$|api\/v1\/)/;
+const draft = '/(app)/[team]/sheets/[sheet]/draft';
 
 /** Refuses bodies that are larger than anything this route takes, before a byte of them is read. */
 export const handleBodySize: Handle = ({ event, resolve }) => {
@@ -21,10 +22,9 @@ export const handleBodySize: Handle = ({ event, resolve }) => {
 const bodyLength = (request: Request): number =>
 	Number(request.headers.get('content-length') ?? Infinity);
 
-function largestBody(event: RequestEvent): number {
-	const isFile = event.request.headers.get('content-type')?.startsWith('multipart/form-data');
-	if (!streamed.test(event.route.id ?? '')) return MEGABYTE;
-	return isFile || event.route.id?.startsWith('/api/') ? Infinity : 32 * MEGABYTE;
+function largestBody({ route }: RequestEvent): number {
+	if (counted.test(route.id ?? '')) return Infinity;
+	return route.id === draft ? 32 * MEGABYTE : MEGABYTE;
 }
 
 /**

@@ -29,8 +29,8 @@ const wakeMilliseconds = 5_000;
 export async function startJobs(): Promise<() => Promise<void>> {
 	const boss = await openBoss(config().databaseUrl, true);
 	const queue = queueOf(boss);
-	const pool = createPool({ threads: availableParallelism() });
-	const shop: Workshop = { db: database(), files: fileStore(), queue, pool };
+	const pool = createPool({ threads: availableParallelism(), warm: 1 });
+	const shop: Workshop = { db: database(), files: fileStore(), queue, pool, checks: pool };
 	const shutdown = new AbortController();
 	const atWork = new Set<Promise<void>>();
 	for (const name of Object.keys(handlers) as JobName[]) {

@@ -8,5 +8,6 @@ export const inlinePool = (): Pool => ({
 		const task = tasks[name] as (message: { input: TaskInput<N> }) => unknown;
 		return (await task({ input })) as TaskOutput<N>;
 	},
+	warm: () => undefined,
 	close: async () => undefined,
 });

@@ -91,13 +91,20 @@ async function giveBackOrUp(
 	claim: { id: string; claim: string },
 	error: unknown,
 ): Promise<void> {
-	log.error({ intake: intake.id, attempt: intake.attempts, error: String(error) }, 'reading failed');
+	log.error(
+		{ intake: intake.id, attempt: intake.attempts, error: String(error) },
+		'reading failed',
+	);
 	if (isOutOfMemory(error)) {
 		const message = 'Reading the file took more memory than one reader may use.';
 		return void (await failIntake(shop, claim, message));
 	}
 	if (intake.attempts >= mostAttempts) {
-		return void (await failIntake(shop, claim, 'The file could not be read because of a fault here.'));
+		return void (await failIntake(
+			shop,
+			claim,
+			'The file could not be read because of a fault here.',
+		));
 	}
 	await handBackIntake(shop, claim, false);
 	throw error;

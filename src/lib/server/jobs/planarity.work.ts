@@ -30,7 +30,8 @@ function inWords(
 	parts: readonly number[],
 ): string {
 	const scattered = regions.filter((region) => parts[region] > 1).map((region) => names[region]);
-	const start = 'The borders cannot all be drawn in a plane without crossing, so that four inks may not do';
+	const start =
+		'The borders cannot all be drawn in a plane without crossing, so that four inks may not do';
 	if (scattered.length === 0) return `${start}.`;
 	const named = scattered.slice(0, 4).join(', ');
 	const more = scattered.length > 4 ? ` and ${scattered.length - 4} more` : '';

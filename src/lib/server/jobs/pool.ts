@@ -16,6 +16,8 @@ export interface Pool {
 		input: TaskInput<N>,
 		options?: RunOptions,
 	): Promise<TaskOutput<N>>;
+	/** has threads ready before they are needed, as many as `PoolOptions.warm` says */
+	warm(): void;
 	close(): Promise<void>;
 }
 
@@ -32,6 +34,8 @@ export class PoolBusy extends Error {
 
 export interface PoolOptions {
 	threads?: number;
+	/** threads that are kept ready */
+	warm?: number;
 	/** tasks that may wait for a thread */
 	queue?: number;
 	/** heap of a thread; typed arrays lie outside it */
@@ -41,7 +45,7 @@ export interface PoolOptions {
 export function createPool(options: PoolOptions = {}): Pool {
 	const piscina = new Piscina({
 		filename: entry(),
-		minThreads: 0,
+		minThreads: options.warm ?? 0,
 		maxThreads: options.threads ?? Math.max(1, availableParallelism() - 1),
 		maxQueue: options.queue ?? 200,
 		idleTimeout: 60_000,
@@ -49,6 +53,8 @@ export function createPool(options: PoolOptions = {}): Pool {
 	});
 	return {
 		run: (name, input, how) => run(piscina, name, input, how),
+		// the threads that are kept ready start with the pool
+		warm: () => undefined,
 		close: () => piscina.destroy(),
 	};
 }

@@ -5,3 +5,4 @@ export { readFile } from './read.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
 export { checkColouringJson } from './checks/check-colouring.work.ts';
 export { checkPaletteJson } from './checks/check-palette.work.ts';
+export { sealEdition } from './seal.work.ts';

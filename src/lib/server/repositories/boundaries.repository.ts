@@ -173,16 +173,13 @@ export async function readAttribute(
 	return JSON.parse(rows[0]?.values ?? '[]');
 }
 
-/** The attribute table, in region order. */
-export async function readAttributes(
-	db: Db,
-	id: string,
-): Promise<Record<string, string | number | boolean | null>[]> {
+/** The attribute table in region order, as the text of one JSON array. */
+export async function readAttributesText(db: Db, id: string): Promise<string> {
 	const { rows } = await sql<{ values: string | null }>`
 		select json_agg(attributes order by ordinal)::text as values
 		from regions where boundary_set_id = ${id}
 	`.execute(db);
-	return JSON.parse(rows[0]?.values ?? '[]');
+	return rows[0]?.values ?? '[]';
 }
 
 export const readFindings = (db: Db, id: string) =>

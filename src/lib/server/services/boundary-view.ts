@@ -1,4 +1,8 @@
-import { borderKinds, type BorderKind, type BorderList } from '../../engines/borders/border-list.ts';
+import {
+	borderKinds,
+	type BorderKind,
+	type BorderList,
+} from '../../engines/borders/border-list.ts';
 import type { Db } from '../database/connection.ts';
 import {
 	findBoundarySet,

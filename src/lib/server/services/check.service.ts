@@ -13,19 +13,19 @@ const until = (asker: AbortSignal): AbortSignal =>
 
 /** Checks that store nothing. Each runs in a thread, and ends when the asker goes away. */
 export const checkColouring = (
-	{ pool }: Pick<Workshop, 'pool'>,
+	{ checks }: Pick<Workshop, 'checks'>,
 	body: Uint8Array,
 	asker: AbortSignal,
-): Promise<Answer> => pool.run('checkColouringJson', body, { signal: until(asker) });
+): Promise<Answer> => checks.run('checkColouringJson', body, { signal: until(asker) });
 
 export const checkPalette = (
-	{ pool }: Pick<Workshop, 'pool'>,
+	{ checks }: Pick<Workshop, 'checks'>,
 	body: Uint8Array,
 	asker: AbortSignal,
-): Promise<Answer> => pool.run('checkPaletteJson', body, { signal: until(asker) });
+): Promise<Answer> => checks.run('checkPaletteJson', body, { signal: until(asker) });
 
 export async function checkBoundaries(
-	{ pool, files }: Pick<Workshop, 'pool' | 'files'>,
+	{ checks, files }: Pick<Workshop, 'checks' | 'files'>,
 	request: Request,
 ): Promise<Answer> {
 	const form = await receiveForm(request, files, maxUpload());
@@ -33,7 +33,7 @@ export async function checkBoundaries(
 		const options = readingFields.safeParse(form.fields);
 		if (!options.success) throw unfit(options.error.issues);
 		const input = { path: form.file.path, fileName: form.fileName, options: options.data };
-		return await pool.run('checkBoundariesFile', input, { signal: until(request.signal) });
+		return await checks.run('checkBoundariesFile', input, { signal: until(request.signal) });
 	} finally {
 		await form.file.discard();
 	}

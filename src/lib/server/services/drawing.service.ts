@@ -34,15 +34,32 @@ export async function draftSvg(
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
 	const last = (await nextEditionNumber(shop.db, sheet.id)) - 1;
 	const issue = draftInWords(last, draft.revision, draft.saved_at);
+	const tag = `${sheet.id}-${draft.revision}-${last}-${reader}`;
 	return {
-		tag: `${sheet.id}-${draft.revision}-${last}-${reader}`,
+		tag,
 		fileName: `${fileStem(sheet.name)}-draft-${draft.revision}.svg`,
-		async paint(signal) {
-			const document = documentOf(draft);
-			const input = await paintInput(shop.db, view, document, draft.inks, reader, issue);
-			return (await shop.pool.run('paintSheet', input, { signal })).gzip;
-		},
+		paint: (signal) =>
+			kept(tag, async () => {
+				const document = documentOf(draft);
+				const input = await paintInput(shop.db, view, document, draft.inks, reader, issue);
+				return (await shop.pool.run('paintSheet', input, { signal })).gzip;
+			}),
 	};
+}
+
+/** The files painted last, by tag: the page and its download ask for the same one. */
+const painted = new Map<string, Uint8Array>();
+const mostPainted = 12;
+
+async function kept(tag: string, paint: () => Promise<Uint8Array>): Promise<Uint8Array> {
+	const bytes = painted.get(tag) ?? (await paint());
+	painted.delete(tag);
+	painted.set(tag, bytes);
+	for (const oldest of painted.keys()) {
+		if (painted.size <= mostPainted) break;
+		painted.delete(oldest);
+	}
+	return bytes;
 }
 
 /** Everything the drawing of a draft depends on. */

@@ -1,14 +1,13 @@
 import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
-import { digestOf, editionContent, type EditionContent } from '../../engines/editions/index.ts';
 import type { DeskEdition } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Received } from '../files/index.ts';
 import type { SheetFile } from '../jobs/paint.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import { readAttributes, readGeometry } from '../repositories/boundaries.repository.ts';
+import { readAttributesText, readGeometry } from '../repositories/boundaries.repository.ts';
 import {
 	findEditionFile,
 	insertEdition,
@@ -46,7 +45,10 @@ export async function issueEdition(
 			const sheet = await holdSheet(trx, member.team.id, number);
 			if (!sheet) throw new NotFound('sheet');
 			if (sheet.revision !== revision) {
-				throw new Conflict('stale', 'The draft has been saved again since; look at it before you issue.');
+				throw new Conflict(
+					'stale',
+					'The draft has been saved again since; look at it before you issue.',
+				);
 			}
 			return issue(shop, trx, member, sheet, note, received);
 		});
@@ -75,8 +77,7 @@ async function issue(
 	const draft = await draftOf(trx, sheet.id, sheet.revision);
 	const view = await boundaryView(trx, sheet.boundary_set_id);
 	const inks = await checkedInks(shop, view, draft);
-	const content = await contentOf(trx, view, draft, inks);
-	const digest = await digestOf(content);
+	const { digest, stored } = await seal(shop, trx, view, draft, inks);
 	const number = await nextEditionNumber(trx, sheet.id);
 	const issuedAt = new Date();
 	const words = `Edition ${number}, ${dayInWords(issuedAt)}`;
@@ -84,8 +85,6 @@ async function issue(
 	const files = await shop.pool.run('renderFiles', input);
 	const stem = `${fileStem(sheet.name)}-edition-${number}`;
 	const kept = await keepFiles(shop, trx, files, stem, received);
-	const stored = JSON.stringify(content);
-	if ((await digestOf(JSON.parse(stored))) !== digest) throw new CheckFailed('the digest does not hold');
 	await insertEdition(
 		trx,
 		{
@@ -106,11 +105,7 @@ async function issue(
 }
 
 /** The draft's colouring, looked over by the checker once more. */
-async function checkedInks(
-	shop: Workshop,
-	view: BoundaryView,
-	draft: DraftRow,
-): Promise<number[]> {
+async function checkedInks(shop: Workshop, view: BoundaryView, draft: DraftRow): Promise<number[]> {
 	const { inks, inks_used: inksUsed, lower_bound: lowerBound } = draft;
 	if (!inks || inksUsed === null || lowerBound === null) {
 		throw new Conflict('not-coloured', 'Only a coloured draft can be issued.');
@@ -132,13 +127,14 @@ async function checkedInks(
 	return inks;
 }
 
-async function contentOf(
+async function seal(
+	shop: Workshop,
 	trx: Trx,
 	view: BoundaryView,
 	draft: DraftRow,
 	colouring: number[],
-): Promise<EditionContent> {
-	const outcome = editionContent({
+): Promise<{ digest: string; stored: string }> {
+	const sealed = await shop.pool.run('sealEdition', {
 		boundariesDigest: await boundariesDigest(trx, view),
 		keys: view.keys,
 		draft: documentOf(draft),
@@ -146,8 +142,11 @@ async function contentOf(
 		lowerBound: draft.lower_bound ?? 0,
 		proof: proofByKey(view, draft.proof as unknown as Proof),
 	});
-	if (outcome.status === 'complete') return outcome.content;
-	throw new Conflict(outcome.reason, 'Only a draft in which every region is coloured can be issued.');
+	if (sealed.status === 'complete') return sealed;
+	throw new Conflict(
+		sealed.reason,
+		'Only a draft in which every region is coloured can be issued.',
+	);
 }
 
 const proofByKey = ({ keys }: BoundaryView, proof: Proof) => ({
@@ -160,7 +159,7 @@ async function boundariesDigest(trx: Trx, { set }: BoundaryView): Promise<string
 	const geometry = await readGeometry(trx, set.id);
 	if (!geometry) throw new NotFound('boundary set');
 	const hash = createHash('sha256').update(geometry);
-	return hash.update(JSON.stringify(await readAttributes(trx, set.id))).digest('hex');
+	return hash.update(await readAttributesText(trx, set.id)).digest('hex');
 }
 
 async function keepFiles(

@@ -36,7 +36,8 @@ export async function acceptIntake(
 			boundarySetId,
 			createdBy: intake.created_by,
 		});
-		const colouring = outcome.colouring && (await insertColouring(trx, sheet.id, outcome.colouring));
+		const colouring =
+			outcome.colouring && (await insertColouring(trx, sheet.id, outcome.colouring));
 		await storeFirstDraft(trx, sheet.id, read.draft, colouring, outcome.explanation, intake);
 		await moveIntake(trx, intake.id, ['reading'], {
 			state: 'done',

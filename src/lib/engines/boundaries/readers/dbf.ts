@@ -1,21 +1,28 @@
+import { strToU8 } from 'fflate';
+import { openDbf as openRows } from 'shapefile';
 import type { Cell } from '../attribute-table.ts';
 import { Refusal } from '../refusal.ts';
-import { textDecoder } from './windows-1252.ts';
+import { mendWindows1252, textDecoder } from './windows-1252.ts';
+
+const nameBytes = 11;
+/** the kind of a column of text */
+const textKind = 'C'.charCodeAt(0);
 
 interface Field {
 	name: Uint8Array;
 	type: string;
+	/** offset in the header */
+	at: number;
 	from: number;
 	to: number;
 }
 
 /** A dBASE table as bytes: what its header says, checked against its length. */
 export interface DbfTable {
+	bytes: Uint8Array;
 	languageByte: number;
 	fields: Field[];
 	records: number;
-	/** bytes of one record, deletion mark included */
-	record(i: number): Uint8Array;
 	/** names and texts, by which the encoding is told */
 	texts(): Generator<Uint8Array>;
 }
@@ -27,47 +34,78 @@ export function openDbf(bytes: Uint8Array): DbfTable {
 	const start = view.getUint16(8, true);
 	const width = view.getUint16(10, true);
 	if (start + records * width > bytes.length) throw cutOff(bytes.length, start + records * width);
+	if (width === 0) throw new Refusal('file-truncated', 'The rows of the .dbf file have no width.');
 	const fields = fieldsOf(bytes, start, width);
-	const record = (i: number) => bytes.subarray(start + i * width, start + (i + 1) * width);
 	function* texts() {
 		for (const field of fields) yield field.name;
-		for (let i = 0; i < records; i++) {
-			for (const field of fields) {
-				if (field.type === 'C') yield record(i).subarray(field.from, field.to);
-			}
+		const columns = fields.filter((field) => field.type === 'C');
+		for (let at = start; at < start + records * width; at += width) {
+			for (const field of columns) yield bytes.subarray(at + field.from, at + field.to);
 		}
 	}
-	return { languageByte: bytes[29], fields, records, record, texts };
+	const used = bytes.subarray(0, start + records * width);
+	return { bytes: used, languageByte: bytes[29], fields, records, texts };
 }
 
 function fieldsOf(bytes: Uint8Array, end: number, width: number): Field[] {
 	const fields: Field[] = [];
 	let from = 1;
-	for (let at = 32; at + 32 <= end && bytes[at] !== 0x0d; at += 32) {
-		const name = bytes.subarray(at, at + 11);
+	let at = 32;
+	for (; at + 32 <= end && bytes[at] !== 0x0d; at += 32) {
+		const name = bytes.subarray(at, at + nameBytes);
 		const stop = name.indexOf(0);
 		const to = from + bytes[at + 16];
 		if (to > width)
 			throw new Refusal('file-truncated', 'The columns of the .dbf file do not fit its rows.');
-		const type = String.fromCharCode(bytes[at + 11]);
-		fields.push({ name: stop < 0 ? name : name.subarray(0, stop), type, from, to });
+		const type = String.fromCharCode(bytes[at + nameBytes]);
+		const used = stop < 0 ? name : name.subarray(0, stop);
+		fields.push({ name: used, type, at, from, to });
 		from = to;
 	}
+	if (at >= end || bytes[at] !== 0x0d)
+		throw new Refusal('file-truncated', 'The list of columns of the .dbf file has no end.');
 	return fields;
 }
 
-/** The rows as named values: numbers where they are exact, else their text; empty is null. */
-export function* dbfRows(table: DbfTable, encoding: string): Generator<Record<string, Cell>> {
+/**
+ * The rows as named values, by the `shapefile` package: numbers where they are exact, else their text;
+ * empty is null.
+ */
+export async function* dbfRows(
+	table: DbfTable,
+	encoding: string,
+): AsyncGenerator<Record<string, Cell>> {
+	const source = await openRows(asNumberedTexts(table), { encoding });
+	const mend = encoding === 'windows-1252' ? mendWindows1252 : (text: string) => text;
 	const decoder = textDecoder(encoding);
 	const names = table.fields.map((field) => decoder.decode(field.name));
-	for (let i = 0; i < table.records; i++) {
-		const record = table.record(i);
+	for (let rows = 0; rows < table.records; rows++) {
+		const { done, value } = await source.read();
+		if (done || !value) {
+			const message = `The .dbf file announces ${table.records} rows but ends after ${rows}.`;
+			throw new Refusal('file-truncated', message);
+		}
 		const row: Record<string, Cell> = {};
-		table.fields.forEach((field, f) => {
-			row[names[f]] = cellOf(decoder.decode(record.subarray(field.from, field.to)), field.type);
+		table.fields.forEach(({ type }, f) => {
+			const raw: unknown = value[`c${f}`];
+			row[names[f]] = typeof raw === 'string' ? cellOf(mend(raw), type) : null;
 		});
 		yield row;
 	}
+}
+
+/**
+ * The table with columns called c0, c1, ... that are all text: the package would round long numbers, shift
+ * days by the local time, stop at kinds of column it does not know, and lose columns of the same name.
+ */
+function asNumberedTexts({ bytes, fields }: DbfTable): Uint8Array {
+	const copy = bytes.slice();
+	fields.forEach(({ at }, f) => {
+		copy.fill(0, at, at + nameBytes);
+		copy.set(strToU8(`c${f}`), at);
+		copy[at + nameBytes] = textKind;
+	});
+	return copy;
 }
 
 function cellOf(raw: string, type: string): Cell {

@@ -2,15 +2,16 @@
 const upper = '€\u0081‚ƒ„…†‡ˆ‰Š‹Œ\u008dŽ\u008f\u0090‘’“”•–—˜™š›œ\u009džŸ';
 
 /**
- * A decoder of the platform that also holds for windows-1252: Node 20 decodes that one as ISO 8859-1,
- * so that œ and š become control characters.
+ * Text that was decoded as windows-1252, mended where the decoder took it for ISO 8859-1, as Node 20's
+ * does, so that œ and š came out as control characters. Text decoded right is unchanged.
  * Source: WHATWG Encoding Standard, index windows-1252.
  */
+export const mendWindows1252 = (text: string): string =>
+	text.replace(/[\u0080-\u009f]/g, (c) => upper[c.charCodeAt(0) - 0x80]);
+
+/** A decoder of the platform that also holds for windows-1252. */
 export function textDecoder(encoding: string): { decode(bytes: Uint8Array): string } {
 	const decoder = new TextDecoder(encoding);
 	if (decoder.encoding !== 'windows-1252') return decoder;
-	return {
-		decode: (bytes) =>
-			decoder.decode(bytes).replace(/[\u0080-\u009f]/g, (c) => upper[c.charCodeAt(0) - 0x80]),
-	};
+	return { decode: (bytes) => mendWindows1252(decoder.decode(bytes)) };
 }

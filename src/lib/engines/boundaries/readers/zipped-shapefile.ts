@@ -4,7 +4,8 @@ import { RawLayer } from '../raw-layer.ts';
 import { Refusal } from '../refusal.ts';
 import { dbfRows, openDbf } from './dbf.ts';
 import { readGeoJson } from './geojson.ts';
-import { isPolygonShp, readShp } from './shp.ts';
+import { isPolygonShp } from './shp-check.ts';
+import { readShp } from './shp.ts';
 import { textEncoding } from './text-encoding.ts';
 import { wholeFile } from './whole.ts';
 import { ZipArchive } from './zip.ts';
@@ -49,7 +50,11 @@ function chooseLayer(archive: ZipArchive, shapes: ZipEntry[], layer?: string): Z
 	);
 }
 
-function readShapefile(archive: ZipArchive, shp: ZipEntry, limits: Limits): RawLayer {
+async function readShapefile(
+	archive: ZipArchive,
+	shp: ZipEntry,
+	limits: Limits,
+): Promise<RawLayer> {
 	const beside = (ending: string) => archive.find(shp.name.replace(/\.shp$/i, ending));
 	const text = (ending: string) => {
 		const entry = beside(ending);
@@ -60,14 +65,14 @@ function readShapefile(archive: ZipArchive, shp: ZipEntry, limits: Limits): RawL
 	layer.format = 'Shapefile';
 	layer.layer = layerName(shp);
 	layer.crs = text('.prj');
-	readShp(bytes, layer);
+	await readShp(bytes, layer);
 	const dbf = beside('.dbf');
-	if (dbf) readTable(archive.unpack(dbf), text('.cpg'), layer);
+	if (dbf) await readTable(archive.unpack(dbf), text('.cpg'), layer);
 	else for (let i = 0; i < layer.regions; i++) layer.table.add(null, null);
 	return layer;
 }
 
-function readTable(bytes: Uint8Array, cpg: string | null, layer: RawLayer): void {
+async function readTable(bytes: Uint8Array, cpg: string | null, layer: RawLayer): Promise<void> {
 	const table = openDbf(bytes);
 	if (table.records !== layer.regions) {
 		const message = `The .shp file has ${layer.regions} records but the .dbf file has ${table.records}.`;
@@ -76,7 +81,7 @@ function readTable(bytes: Uint8Array, cpg: string | null, layer: RawLayer): void
 	const { encoding, findings } = textEncoding(cpg, table.languageByte, table.texts);
 	layer.encoding = encoding === 'utf-8' ? 'UTF-8' : encoding;
 	layer.findings.push(...findings);
-	for (const row of dbfRows(table, encoding)) layer.table.add(null, row);
+	for await (const row of dbfRows(table, encoding)) layer.table.add(null, row);
 }
 
 const layerName = (entry: ZipEntry) => entry.name.replace(/^.*\//, '').replace(/\.shp$/i, '');

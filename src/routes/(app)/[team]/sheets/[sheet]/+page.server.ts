@@ -9,8 +9,11 @@ import type { Actions, PageServerLoad } from './$types';
 /** A sheet opens at its colours; its address alone is what people pass on. */
 export const load = (({ locals, params }) => {
 	memberFor(locals, 'sheet.read');
-	redirect(307, `/${params.team}/sheets/${params.sheet}/colours`);
+	redirect(303, coloursOf(params));
 }) satisfies PageServerLoad;
+
+const coloursOf = ({ team, sheet }: { team: string; sheet: string }) =>
+	`/${team}/sheets/${sheet}/colours`;
 
 const newName = z.object({ name: z.string().trim().min(1, 'Give the sheet a name.').max(200) });
 
@@ -21,7 +24,9 @@ export const actions = {
 		if (form.failure) return form.failure;
 		const { name } = form.data;
 		const number = Number(params.sheet);
-		return (await attempt(() => nameSheet(workshop(), member, number, name))).failure;
+		const named = await attempt(() => nameSheet(workshop(), member, number, name));
+		if (named.failure) return named.failure;
+		redirect(303, coloursOf(params));
 	},
 	delete: async ({ locals, params }) => {
 		const member = memberFor(locals, 'sheet.delete');
