@@ -27,7 +27,7 @@ describe('problemOf', () => {
 		const numbers = numberRegions(keys);
 		for (const previous of [null, Int32Array.of(0, 1, 0, 1)])
 			expect(problemOf(draft, keys, borders, numbers, previous)).toEqual(
-				serverProblem({ keys, borders, ordinal: numbers }, draft, previous),
+				serverProblem({ keys, borders }, draft, previous),
 			);
 	});
 });

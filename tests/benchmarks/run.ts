@@ -3,7 +3,7 @@ interface Benchmark {
 	run(): AsyncIterable<object> | Promise<object[]>;
 }
 
-const names = ['boundaries', 'colouring'];
+const names = ['boundaries', 'colouring', 'many-regions'];
 
 const wanted = process.argv.slice(2);
 const unknown = wanted.filter((name) => !names.includes(name));

@@ -8,6 +8,7 @@ import {
 } from '../../src/lib/server/access/member.ts';
 import { actions, allows, may, roles, type Action } from '../../src/lib/server/access/roles.ts';
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
+import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
 import {
@@ -115,6 +116,10 @@ const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
 	retryIntake: ['boundaries.upload', (member) => retryIntake(shop, member, id)],
 	saveDraft: ['sheet.read', (member) => saveDraft(shop, member, 99, sent)],
 	saveLayout: ['layout.edit', (member) => saveLayout(shop, member, 99, {} as Layout)],
+	sheetBordersAnswer: [
+		'sheet.read',
+		(member) => sheetBordersAnswer(shop, member, 99, new AbortController().signal),
+	],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
 	sheetList: ['sheet.read', (member) => sheetList(shop, member)],

@@ -37,7 +37,8 @@ function stretches(coverage: Coverage): [Stretch[], Stretch[]] {
 	for (let arc = 0; arc < arcLeft.length; arc++) {
 		const sides = [arcLeft[arc], arcRight[arc]].filter((region) => region >= 0);
 		for (let i = arcStarts[arc]; i < arcStarts[arc + 1]; i++) {
-			const [x, y] = [p[2 * i], p[2 * i + 1]];
+			const x = p[2 * i];
+			const y = p[2 * i + 1];
 			if (Math.abs(Math.abs(x) - 180) > near) continue;
 			const list = x < 0 ? west : east;
 			for (const region of sides) list.push({ region, south: y, north: y });

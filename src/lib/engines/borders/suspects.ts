@@ -52,27 +52,22 @@ function pairUp(these: number[], those: number[], coverage: Coverage, found: Sus
 }
 
 function findCrossings(coverage: Coverage, blocks: SegmentBlocks, found: Suspects): void {
-	const { arcLeft, arcRight, arcStarts, arcPoints: p } = coverage;
+	const { arcLeft, arcRight, arcPoints: p } = coverage;
 	const crossed = new Set<number>();
-	for (let arc = 0; arc < arcLeft.length; arc++) {
-		if (arcLeft[arc] >= 0 && arcRight[arc] >= 0) continue;
-		for (let i = arcStarts[arc]; i + 1 < arcStarts[arc + 1]; i++) {
-			const [x1, y1, x2, y2] = [p[2 * i], p[2 * i + 1], p[2 * i + 2], p[2 * i + 3]];
-			const box = [Math.min(x1, x2), Math.min(y1, y2), Math.max(x1, x2), Math.max(y1, y2)] as const;
-			blocks.search(...box, (other, j) => {
-				const shares = crossing(p, i, p, j);
-				if (!shares) return;
-				const mine = [arcLeft[arc], arcRight[arc]];
-				const theirs = [arcLeft[other], arcRight[other]];
-				pairUp(mine, theirs, coverage, found);
-				const own = mine.find((region) => region >= 0 && theirs.includes(region));
-				if (own === undefined || crossed.has(own)) return;
-				crossed.add(own);
-				const at: [number, number] = [x1 + shares[0] * (x2 - x1), y1 + shares[0] * (y2 - y1)];
-				found.crossings.push({ region: own, at });
-			});
-		}
-	}
+	const isUnmatched = (arc: number) => arcLeft[arc] < 0 || arcRight[arc] < 0;
+	blocks.eachPair(isUnmatched, (arc, i, other, j) => {
+		const shares = crossing(p, i, p, j);
+		if (!shares) return;
+		const mine = [arcLeft[arc], arcRight[arc]];
+		const theirs = [arcLeft[other], arcRight[other]];
+		pairUp(mine, theirs, coverage, found);
+		const own = mine.find((region) => region >= 0 && theirs.includes(region));
+		if (own === undefined || crossed.has(own)) return;
+		crossed.add(own);
+		const x = p[2 * i] + shares[0] * (p[2 * i + 2] - p[2 * i]);
+		const y = p[2 * i + 1] + shares[0] * (p[2 * i + 3] - p[2 * i + 1]);
+		found.crossings.push({ region: own, at: [x, y] });
+	});
 }
 
 /** Goes round a place from line to line: what is left of one must be right of the next. */

@@ -1,6 +1,6 @@
-import Flatbush from 'flatbush';
 import { metresPerDegree } from '../geometry/ellipsoid.ts';
 import { nearestOnSegment } from '../geometry/near.ts';
+import { SegmentRuns } from './segment-runs.ts';
 import type { Segments } from './segments.ts';
 
 /** A vertex close to a segment that it is not an end of. */
@@ -31,33 +31,45 @@ export function unmatchedSegments(segments: Segments): Uint32Array {
 	return list.subarray(0, n);
 }
 
-/** Calls `found` for every end of an unmatched segment that lies within `tolerance` metres of another one. */
+/**
+ * Calls `found` for every end of an unmatched segment that lies within `tolerance` metres of another one.
+ * Segments are looked up in runs, which mostly follow an outline, so that few boxes have to be searched. With
+ * `changed`, only segments with an end among these vertices are measured.
+ */
 export function eachNearMiss(
 	segments: Segments,
 	positions: Float64Array,
 	tolerance: number,
 	found: (miss: NearMiss) => void,
+	changed: Uint8Array | null = null,
 ): void {
 	const unmatched = unmatchedSegments(segments);
 	if (unmatched.length < 2) return;
-	const index = indexOf(unmatched, segments, positions);
 	const { low, high } = segments;
-	for (const p of endsOf(unmatched, segments)) {
-		const px = positions[2 * p];
-		const py = positions[2 * p + 1];
-		const { east, north } = metresPerDegree(py);
-		const x = tolerance / east;
-		const y = tolerance / north;
-		index.search(px - x, py - y, px + x, py + y, (item) => {
-			const segment = unmatched[item];
-			const u = low[segment];
-			const v = high[segment];
-			if (u !== p && v !== p) {
-				const miss = missOf(p, segment, u, v, positions, tolerance);
-				if (miss) found(miss);
+	const runs = new SegmentRuns(unmatched, segments, positions, changed);
+	const seen = new Uint8Array(positions.length / 2);
+	let p = 0;
+	const measure = (segment: number) => {
+		const u = low[segment];
+		const v = high[segment];
+		if (u === p || v === p || (changed && !changed[u] && !changed[v])) return;
+		const miss = missOf(p, segment, u, v, positions, tolerance);
+		if (miss) found(miss);
+	};
+	for (const [from, to] of runs.runs()) {
+		const { east, north } = metresPerDegree(runs.mostNorth(from));
+		const dx = tolerance / east;
+		const dy = (tolerance / north) * 1.01;
+		const near = runs.near(from, dx, dy);
+		if (near.length === 0) continue;
+		for (let i = 2 * from; i < 2 * to; i++) {
+			p = (i & 1 ? high : low)[unmatched[i >> 1]];
+			if (seen[p]) continue;
+			seen[p] = 1;
+			for (const run of near) {
+				runs.around(run, positions[2 * p], positions[2 * p + 1], dx, dy, measure);
 			}
-			return false;
-		});
+		}
 	}
 }
 
@@ -83,31 +95,4 @@ function missOf(
 	const toV = nearestOnSegment(px, py, vx, vy, vx, vy).metres;
 	const nearer = toU <= toV ? u : v;
 	return { point, segment, metres, end: nearer, endMetres: Math.min(toU, toV), share };
-}
-
-function indexOf(list: Uint32Array, segments: Segments, positions: Float64Array): Flatbush {
-	const index = new Flatbush(list.length);
-	for (const s of list) {
-		const u = 2 * segments.low[s];
-		const v = 2 * segments.high[s];
-		const x1 = positions[u];
-		const y1 = positions[u + 1];
-		const x2 = positions[v];
-		const y2 = positions[v + 1];
-		index.add(Math.min(x1, x2), Math.min(y1, y2), Math.max(x1, x2), Math.max(y1, y2));
-	}
-	index.finish();
-	return index;
-}
-
-function endsOf(list: Uint32Array, segments: Segments): Uint32Array {
-	const ends = new Uint32Array(2 * list.length);
-	list.forEach((s, i) => {
-		ends[2 * i] = segments.low[s];
-		ends[2 * i + 1] = segments.high[s];
-	});
-	ends.sort();
-	let n = 0;
-	for (let i = 0; i < ends.length; i++) if (i === 0 || ends[i] !== ends[i - 1]) ends[n++] = ends[i];
-	return ends.subarray(0, n);
 }

@@ -27,16 +27,27 @@ const mostRounds = 6;
  */
 export function nodeOutlines(given: Outlines): Noded {
 	let outlines = given;
+	let changed: Uint8Array | null = null;
 	const joined: Joined = { regions: new Set(), places: 0, at: null };
 	for (let round = 0; ; round++) {
 		const segments = indexSegments(outlines);
 		if (round === mostRounds) return { outlines, segments, joined };
 		const misses: NearMiss[] = [];
-		eachNearMiss(segments, outlines.positions, noiseMetres, (miss) => misses.push(miss));
+		const keep = (miss: NearMiss) => misses.push(miss);
+		eachNearMiss(segments, outlines.positions, noiseMetres, keep, changed);
 		if (misses.length === 0) return { outlines, segments, joined };
 		for (const miss of misses) remember(joined, miss, segments, outlines.positions);
-		outlines = rewriteOutlines(outlines, rewriteFor(misses, segments, outlines));
+		const rewrite = rewriteFor(misses, segments, outlines);
+		changed = changedBy(misses, rewrite);
+		outlines = rewriteOutlines(outlines, rewrite);
 	}
+}
+
+/** Vertices that new segments end at: those put into others, and those that stand for others. */
+function changedBy(misses: NearMiss[], { standsFor }: Rewrite): Uint8Array {
+	const changed = new Uint8Array(standsFor.length);
+	for (const { point, end } of misses) changed[standsFor[point]] = changed[standsFor[end]] = 1;
+	return changed;
 }
 
 export function remember(

@@ -1,7 +1,5 @@
 import type { DeskEdition, DeskSheet, IntakeStatus } from '../../schemas/desk.ts';
-import { borderRows } from '../jobs/checks/check-boundaries.work.ts';
 import { colouringByKey, explanationByKey, proofByKey } from '../jobs/checks/keyed-result.ts';
-import { sheetBorders } from '../services/draft-problem.ts';
 
 /** A team's sheets as programs see them: regions by key. */
 
@@ -30,11 +28,6 @@ export const sheetAnswer = (sheet: DeskSheet) => ({
 	})),
 	editions: sheet.editions,
 });
-
-export function bordersAnswer({ regions: { key: keys }, borders, draft }: DeskSheet) {
-	const ordinal = new Map(keys.map((key, region) => [key, region]));
-	return { borders: borderRows(keys, sheetBorders({ keys, borders, ordinal }, draft)) };
-}
 
 export function colouringAnswer({ regions: { key: keys }, colouring, revision, draft }: DeskSheet) {
 	if (!colouring) throw new Error('a stored draft has neither colouring nor explanation');

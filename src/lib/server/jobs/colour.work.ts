@@ -5,7 +5,18 @@ import {
 	type ColouringProblem,
 	type ColouringResult,
 } from '../../engines/colouring/index.ts';
+import type { Draft } from '../../engines/editions/draft.ts';
+import type { BorderList } from '../../engines/borders/index.ts';
+import { problemOf } from '../services/draft-problem.ts';
+import { Unfit } from '../services/outcomes.ts';
 import type { Task } from './task-port.ts';
+
+/** A draft and what it stands on; making the problem of it is work for the thread as well. */
+export interface DraftInput {
+	keys: string[];
+	borders: BorderList;
+	draft: Draft;
+}
 
 export interface CheckedColouring {
 	result: ColouringResult;
@@ -13,17 +24,38 @@ export interface CheckedColouring {
 	faults: string[];
 }
 
-/** Colours a region graph and has the checker look at the result. */
-export async function colourGraph({ input }: Task<ColouringProblem>): Promise<CheckedColouring> {
-	const result = await colour(input);
-	return { result, faults: await faultsIn(input, result) };
+/** A draft that names what is not there cannot be coloured; told as data, because errors lose their kind on the way. */
+export interface UnfitDraft {
+	code: string;
+	message: string;
+	details?: Record<string, unknown>;
+}
+
+/** Colours a draft, near to the colouring before, and has the checker look at the result. */
+export async function colourDraft({
+	input,
+}: Task<DraftInput & { previous: number[] | null }>): Promise<
+	CheckedColouring | { unfit: UnfitDraft }
+> {
+	try {
+		return await colourAndCheck(problemOf(input, input.draft, input.previous));
+	} catch (problem) {
+		if (!(problem instanceof Unfit)) throw problem;
+		const { code, message, details } = problem;
+		return { unfit: { code, message, details } };
+	}
 }
 
 /** Has the checker look at a colouring that is stored. */
 export const recheck = ({
-	input,
-}: Task<{ problem: ColouringProblem; result: ColouringResult }>): Promise<string[]> =>
-	faultsIn(input.problem, input.result);
+	input: { result, ...input },
+}: Task<DraftInput & { result: ColouringResult }>): Promise<string[]> =>
+	faultsIn(problemOf(input, input.draft), result);
+
+export async function colourAndCheck(problem: ColouringProblem): Promise<CheckedColouring> {
+	const result = await colour(problem);
+	return { result, faults: await faultsIn(problem, result) };
+}
 
 export const faultsIn = async (
 	problem: ColouringProblem,

@@ -1,24 +1,23 @@
 import { gzipSync } from 'node:zlib';
 import { decodeCoverage } from '../../engines/boundaries/index.ts';
-import type { BorderList } from '../../engines/borders/index.ts';
+import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts';
+import type { Draft } from '../../engines/editions/draft.ts';
 import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
-import type { Ink, Reader } from '../../engines/palettes/index.ts';
-import { drawSheet, sheetTable, type SheetLayout } from '../../engines/sheet/index.ts';
+import type { Reader } from '../../engines/palettes/index.ts';
+import { drawSheet, sheetTable } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
 import type { Task } from './task-port.ts';
 
 export interface PaintInput {
 	/** the coverage as stored */
 	geometry: Uint8Array;
-	/** those that bind on the sheet */
+	/** as found; those that bind are picked by the draft's rules */
 	borders: BorderList;
+	draft: Draft;
 	groups: (string | null)[];
 	/** ink of each region; null while nothing is coloured */
 	colouring: number[] | null;
-	inks: Ink[];
-	layout: SheetLayout;
 	reader: Reader;
-	locked: number[];
 	/** what is issued and when, in words */
 	issue: string;
 }
@@ -26,9 +25,11 @@ export interface PaintInput {
 /** A region whose ink the palette lacks is drawn as not coloured. */
 function draw(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
-	const locked = new Uint8Array(coverage.keys.length);
-	for (const region of input.locked) locked[region] = 1;
-	const { borders, groups, inks, layout, reader, issue } = input;
+	const { draft, groups, reader, issue } = input;
+	const { layout } = draft;
+	const { inks } = draft.palette;
+	const borders = bordersForSheet(coverage.keys, input.borders, draft);
+	const locked = Uint8Array.from(coverage.keys, (key) => (Object.hasOwn(draft.locks, key) ? 1 : 0));
 	const colouring =
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
 	const drawing = drawSheet({

@@ -12,7 +12,7 @@ import type { SourceNote } from '../../schemas/desk.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
 import { problemOf } from '../services/draft-problem.ts';
 import { firstDraft } from '../services/first-draft.ts';
-import { colourGraph, type CheckedColouring } from './colour.work.ts';
+import { colourAndCheck, type CheckedColouring } from './colour.work.ts';
 import { fileSource } from './file-source.ts';
 import { paletteFor } from '../services/house-palette.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
@@ -82,11 +82,10 @@ async function prepare(
 
 /** The first draft: fewest inks, in the shortest house palette that has as many. */
 async function colourFirst(title: string, coverage: Coverage, borders: BorderList) {
-	const ordinal = new Map(coverage.keys.map((key, number) => [key, number]));
-	const ground = { keys: coverage.keys, borders, ordinal };
+	const ground = { keys: coverage.keys, borders };
 	const portrait = isTall(coverage.arcPoints);
 	const plain = firstDraft({ title, palette: paletteFor(0), portrait });
-	const colouring = await colourGraph({ input: problemOf(ground, plain) });
+	const colouring = await colourAndCheck(problemOf(ground, plain));
 	const { result } = colouring;
 	const inks = result.status === 'coloured' ? result.inksUsed : 0;
 	return { draft: firstDraft({ title, palette: paletteFor(inks), portrait }), colouring };

@@ -1,7 +1,8 @@
 /** Everything that runs in a thread, by name: called through a `Pool`, in the web process and the worker. */
-export { colourGraph, recheck } from './colour.work.ts';
+export { colourDraft, recheck } from './colour.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
 export { readFile } from './read.work.ts';
+export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
 export { checkColouringJson } from './checks/check-colouring.work.ts';
 export { checkPaletteJson } from './checks/check-palette.work.ts';

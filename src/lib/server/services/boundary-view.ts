@@ -22,8 +22,6 @@ export interface BoundaryView {
 	/** -1 for none */
 	enclaveOf: number[];
 	borders: BorderList;
-	/** number of the region with this key */
-	ordinal: ReadonlyMap<string, number>;
 }
 
 /** Regions of all the views kept at once; about 200 bytes each. */
@@ -66,7 +64,6 @@ function viewOf(set: BoundarySetNote, columns: StoredColumns): BoundaryView {
 		areasKm2: columns.areaKm2,
 		enclaveOf: columns.enclaveOf,
 		borders: bordersOfColumns(columns),
-		ordinal: new Map(columns.key.map((key, ordinal) => [key, ordinal])),
 	};
 }
 

@@ -1,8 +1,11 @@
 import { readingFields } from '../../schemas/upload.ts';
+import { requireAccess, type Member } from '../access/member.ts';
 import type { Answer } from '../api/answer.ts';
 import { unfit } from '../api/read-json.ts';
 import { receiveForm } from '../files/multipart.ts';
 import type { Workshop } from '../jobs/workshop.ts';
+import { boundaryView } from './boundary-view.ts';
+import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { maxUpload } from './intake.service.ts';
 
 /** A check that takes longer is stopped. Budgets are in steps; this only guards the machine. */
@@ -37,4 +40,18 @@ export async function checkBoundaries(
 	} finally {
 		await form.file.discard();
 	}
+}
+
+/** The borders that bind on a sheet, written out for programs. */
+export async function sheetBordersAnswer(
+	shop: Pick<Workshop, 'db' | 'checks'>,
+	member: Member,
+	number: number,
+	asker: AbortSignal,
+): Promise<Answer> {
+	requireAccess(member, 'sheet.read');
+	const sheet = await sheetOf(shop.db, member, number);
+	const draft = documentOf(await draftOf(shop.db, sheet.id, sheet.revision));
+	const { keys, borders } = await boundaryView(shop.db, sheet.boundary_set_id);
+	return shop.checks.run('sheetBordersJson', { keys, borders, draft }, { signal: until(asker) });
 }

@@ -7,7 +7,6 @@ import { Unfit } from './outcomes.ts';
 export interface DraftGround {
 	keys: string[];
 	borders: BorderList;
-	ordinal: ReadonlyMap<string, number>;
 }
 
 /**
@@ -38,13 +37,12 @@ export function problemOf(
 	return problem;
 }
 
-/** The borders that bind on this sheet: as found, without those struck out, with those added by hand. */
-export function sheetBorders(ground: DraftGround, draft: Draft): BorderList {
-	numbering(ground, draft);
-	return bordersForSheet(ground.keys, ground.borders, draft);
-}
+/** The borders that bind on a sheet: as found, without those struck out, with those added by hand. */
+export const sheetBorders = ({ keys, borders }: DraftGround, draft: Draft): BorderList =>
+	bordersForSheet(keys, borders, draft);
 
-function numbering({ ordinal }: DraftGround, draft: Draft): (key: string) => number {
+function numbering({ keys }: DraftGround, draft: Draft): (key: string) => number {
+	const ordinal = new Map(keys.map((key, number) => [key, number]));
 	const unknown = keysIn(draft).filter((key) => !ordinal.has(key));
 	if (unknown.length > 0) {
 		throw new Unfit('unknown-region', `the sheet has no region "${unknown[0]}"`, {

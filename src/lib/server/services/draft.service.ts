@@ -18,7 +18,6 @@ import {
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { changedParts, changesColouring, rightsFor, signLocks } from './draft-rights.ts';
-import { problemOf } from './draft-problem.ts';
 import {
 	checkedOutcome,
 	deskColouring,
@@ -26,7 +25,7 @@ import {
 	type Names,
 	type Outcome,
 } from './outcome-of-colouring.ts';
-import { NotFound } from './outcomes.ts';
+import { NotFound, Unfit } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
 export type SaveResult =
@@ -90,8 +89,11 @@ export async function colourDraft(
 	draft: Draft,
 	previous: number[] | null,
 ): Promise<Outcome> {
-	const problem = problemOf(view, draft, previous);
-	return checkedOutcome(await shop.pool.run('colourGraph', problem));
+	const { keys, borders } = view;
+	const coloured = await shop.pool.run('colourDraft', { keys, borders, draft, previous });
+	if (!('unfit' in coloured)) return checkedOutcome(coloured);
+	const { code, message, details } = coloured.unfit;
+	throw new Unfit(code, message, details);
 }
 
 interface Change {

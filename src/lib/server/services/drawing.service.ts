@@ -9,7 +9,6 @@ import { nextEditionNumber } from '../repositories/editions.repository.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { dayInWords } from './day-in-words.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
-import { sheetBorders } from './draft-problem.ts';
 import { NotFound } from './outcomes.ts';
 import { groupsOf } from './sheet.service.ts';
 
@@ -75,14 +74,10 @@ export async function paintInput(
 	if (!geometry) throw new NotFound('boundary set');
 	return {
 		geometry,
-		borders: sheetBorders(view, draft),
+		borders: view.borders,
+		draft,
 		groups: await groupsOf(db, view, draft.layout.groupColumn),
-		colouring,
-		inks: draft.palette.inks,
-		layout: draft.layout,
-		reader,
-		locked: Object.keys(draft.locks).flatMap((key) => view.ordinal.get(key) ?? []),
-		issue,
+		...{ colouring, reader, issue },
 	};
 }
 

@@ -18,7 +18,6 @@ import { holdSheet, type DraftRow, type SheetRecord } from '../repositories/shee
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { dayInWords } from './day-in-words.ts';
-import { problemOf } from './draft-problem.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
@@ -116,13 +115,14 @@ async function checkedInks(shop: Workshop, view: BoundaryView, draft: DraftRow):
 		const lacks = `The colouring uses ${inksUsed} inks and the palette has ${has}.`;
 		throw new Conflict('palette-too-short', lacks);
 	}
+	const { keys, borders } = view;
 	const result = {
 		status: 'coloured',
 		colouring: Int32Array.from(inks),
 		proof: draft.proof as unknown as Proof,
 		...{ inksUsed, lowerBound },
 	} as const;
-	const faults = await shop.pool.run('recheck', { problem: problemOf(view, document), result });
+	const faults = await shop.pool.run('recheck', { keys, borders, draft: document, result });
 	if (faults.length > 0) throw new CheckFailed(faults.join(' '));
 	return inks;
 }
