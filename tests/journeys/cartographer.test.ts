@@ -123,7 +123,7 @@ describe('a cartographer', () => {
 				},
 				{ timeout: 60_000, interval: 1000 },
 			)
-			.toContain('Squares without script');
+			.toContain('The sheet is ready');
 		await plain.context.close();
 	});
 
@@ -138,7 +138,9 @@ describe('a cartographer', () => {
 		['no zip', textFile('regions.zip', 'PK not really'), /zip/i],
 	])('is told what is wrong with a file that is %s, and where', async (_what, file, says) => {
 		await chooseAndSend(page, file, 'Refused, journey');
-		await expect.poll(() => page.getByRole('main').innerText(), { timeout: 60_000 }).toMatch(says);
+		await page.waitForURL(/\/intakes\//);
+		await page.getByRole('heading', { name: 'The file was refused' }).waitFor({ timeout: 60_000 });
+		expect(await page.getByRole('main').innerText()).toMatch(says);
 		expect(page.url()).not.toMatch(/sheets\/\d/);
 		await picture(page, `refused-${file.name}`);
 		await expectAccessible(page);
