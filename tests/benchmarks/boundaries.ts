@@ -33,6 +33,7 @@ export async function* run(): AsyncGenerator<object> {
 		['us-atlas states', usAtlas('states')],
 		['us-atlas counties', usAtlas('counties')],
 		['world-atlas countries 1:50m', worldAtlas('50m')],
+		['world-atlas countries 1:10m', worldAtlas('10m')],
 	];
 	for (const [file, areas] of files) {
 		const bytes = bytesOf(areas);

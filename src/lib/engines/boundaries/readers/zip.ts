@@ -8,7 +8,7 @@ const helping = 16 * 1024;
 
 /**
  * A zip archive whose files are unpacked on demand. Refused before anything is unpacked when the
- * declared sizes add up to too much or an archive lies inside; and while unpacking as soon as a file
+ * declared sizes add up to too much, one is out of all proportion or an archive lies inside; and while unpacking as soon as a file
  * grows past what its directory declared.
  */
 export class ZipArchive {
@@ -24,6 +24,8 @@ export class ZipArchive {
 			const message = `The archive would unpack to ${declared} bytes; at most ${limits.unpackedBytes} are taken.`;
 			throw new Refusal('too-large-unpacked', message);
 		}
+		const blown = this.entries.find(isBlownUp);
+		if (blown) throw blownUp(blown);
 		const nested = this.entries.find((entry) => /\.(zip|gz|7z|rar|tar)$/i.test(entry.name));
 		if (nested) {
 			const message = `The archive holds another archive ("${nested.name}"); unpack it first.`;
@@ -91,6 +93,18 @@ export class ZipArchive {
 		if (over && !headOnly) throw lies(entry);
 		return out.subarray(0, length);
 	}
+}
+
+/** Boundaries pack to a half or a fifth, tables of blanks to a hundredth; from here on it is no such file. */
+const mostRatio = 200;
+const ratioFromBytes = 64 * 1024 ** 2;
+
+const isBlownUp = ({ declaredBytes, packedBytes }: ZipEntry) =>
+	declaredBytes > ratioFromBytes && declaredBytes > mostRatio * packedBytes;
+
+function blownUp({ name, declaredBytes, packedBytes }: ZipEntry): Refusal {
+	const message = `"${name}" would unpack from ${packedBytes} to ${declaredBytes} bytes, more than ${mostRatio} times as much; no boundary file does.`;
+	return new Refusal('too-large-unpacked', message);
 }
 
 function lies(entry: ZipEntry): Refusal {
