@@ -31,7 +31,6 @@ export function gzipped(
 export const attachment = (fileName: string): string =>
 	`attachment; filename="${fileName.replace(/[^\w.-]/g, '_')}"`;
 
-
 /** A drawn sheet may style itself and carry its letters; nothing else, wherever it is opened. */
 export const svgPolicy = "default-src 'none'; style-src 'unsafe-inline'; font-src data:; sandbox";
 

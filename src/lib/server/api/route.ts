@@ -2,7 +2,7 @@ import type { RequestEvent, RequestHandler } from '@sveltejs/kit';
 import type { Operation } from '../../schemas/api/operations.ts';
 import { Forbidden } from '../access/member.ts';
 import { UploadFault } from '../files/multipart.ts';
-import { PoolBusy } from '../jobs/pool.ts';
+import { PoolBusy, wasStopped } from '../jobs/pool.ts';
 import { log } from '../log.ts';
 import { limits, use } from '../services/limits.service.ts';
 import { Conflict, NotFound, Refused, TooMany, Unfit } from '../services/outcomes.ts';
@@ -82,7 +82,7 @@ function faultOf(problem: unknown, requestId: string): ApiFault {
 	if (problem instanceof PoolBusy) {
 		return new ApiFault(503, 'busy', problem.message, undefined, { 'retry-after': '5' });
 	}
-	if (problem instanceof Error && problem.name === 'TimeoutError') {
+	if (wasStopped(problem)) {
 		return new ApiFault(503, 'took-too-long', 'the computation was stopped; ask for less effort');
 	}
 	log.error({ request: requestId, error: inFull(problem) }, 'an API request failed');

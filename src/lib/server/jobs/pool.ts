@@ -32,6 +32,10 @@ export class PoolBusy extends Error {
 	}
 }
 
+/** Whether a task was stopped by its signal: whoever asked went away, or it took too long. */
+export const wasStopped = (problem: unknown): boolean =>
+	problem instanceof Error && problem.name === 'AbortError';
+
 export interface PoolOptions {
 	threads?: number;
 	/** threads that are kept ready */

@@ -17,10 +17,9 @@ export const actions = {
 		if (form.failure) return form.failure;
 		const { revision, note } = form.data;
 		const number = Number(params.sheet);
-		const issued = await attempt(
-			() => issueEdition(workshop(), member, number, revision, note),
-			{ note },
-		);
+		const issued = await attempt(() => issueEdition(workshop(), member, number, revision, note), {
+			note,
+		});
 		return issued.failure ?? { issued: issued.data.number };
 	},
 } satisfies Actions;

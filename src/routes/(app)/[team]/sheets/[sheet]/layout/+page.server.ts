@@ -19,7 +19,9 @@ export const actions = {
 			saveLayout(workshop(), member, Number(params.sheet), read.data),
 		);
 		if (result.status === 'stale') {
-			return fail(409, { message: 'Somebody else saved meanwhile; nothing was changed. Try again.' });
+			return fail(409, {
+				message: 'Somebody else saved meanwhile; nothing was changed. Try again.',
+			});
 		}
 		return { message: '' };
 	},

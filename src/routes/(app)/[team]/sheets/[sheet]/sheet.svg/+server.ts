@@ -9,7 +9,10 @@ import type { RequestHandler } from './$types';
 
 /** The current draft as a file; `?reader=` as one kind of reader sees it, `?download` to be kept. */
 export const GET = (async ({ locals, params, request, url }) => {
-	const member = memberFor(locals, url.searchParams.has('download') ? 'files.download' : 'sheet.read');
+	const member = memberFor(
+		locals,
+		url.searchParams.has('download') ? 'files.download' : 'sheet.read',
+	);
 	const reader = (url.searchParams.get('reader') ?? 'typical') as Reader;
 	if (!readers.includes(reader)) error(400, `A reader is one of ${readers.join(', ')}.`);
 	const svg = await forPage(() => draftSvg(workshop(), member, Number(params.sheet), reader));
