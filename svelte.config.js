@@ -16,10 +16,7 @@ export default {
 				'script-src': ['self'],
 				'style-src': ['self'],
 				// The one style attribute there is: the framework's own live region, which it hides from sight.
-				'style-src-attr': [
-					'unsafe-hashes',
-					'sha256-S8qMpvofolR8Mpjy4kQvEm7m1q8clzU4dfDH0AmvZjo=',
-				],
+				'style-src-attr': ['unsafe-hashes', 'sha256-S8qMpvofolR8Mpjy4kQvEm7m1q8clzU4dfDH0AmvZjo='],
 				'img-src': ['self', 'data:', 'blob:'],
 				'font-src': ['self'],
 				'connect-src': ['self'],

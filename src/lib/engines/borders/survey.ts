@@ -7,7 +7,7 @@ import { overlapOf, type Overlap } from './overlap.ts';
 import { PairTally } from './pair-tally.ts';
 import { addSeamLines } from './seam.ts';
 import { suspects, type Suspects } from './suspects.ts';
-import { addTouches, meetings } from './touches.ts';
+import { addTouches, crowdedPlace, meetings } from './touches.ts';
 import { addAcrossWater } from './across-water.ts';
 
 export interface BordersOptions {
@@ -22,6 +22,8 @@ export interface Survey {
 	overlaps: Overlap[];
 	/** one place for each region whose own outline crosses itself */
 	crossings: Suspects['crossings'];
+	/** a place where so many regions meet that their point touches are left out, or null */
+	crowded: [number, number] | null;
 }
 
 /** The borders of a coverage with the overlaps and crossings that were found on the way. */
@@ -30,6 +32,8 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	addLines(coverage, tally);
 	const blocks = new SegmentBlocks(coverage);
 	const places = meetings(coverage);
+	const crowded = crowdedPlace(places);
+	if (crowded) return { borders: tally.list(), overlaps: [], crossings: [], crowded };
 	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
 	for (const { a, b, metres, at } of overlaps) tally.add(a, b, 0, metres, at[0], at[1]);
@@ -37,7 +41,7 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	addTouches(coverage, places, tally);
 	for (const [a, b, at] of atSeam) if (!tally.has(a, b)) tally.add(a, b, 1, 0, ...at);
 	if (options.acrossWaterKm) addAcrossWater(coverage, blocks, options.acrossWaterKm, tally);
-	return { borders: tally.list(), overlaps, crossings: found.crossings };
+	return { borders: tally.list(), overlaps, crossings: found.crossings, crowded };
 }
 
 function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): Overlap[] {

@@ -1,11 +1,20 @@
 import type { Coverage } from '../geometry/coverage.ts';
 import type { PairTally } from './pair-tally.ts';
 
+/** More regions than this around one place are no map; listing their pairs would never end. */
+export const mostAroundAPlace = 1000;
+
+/** The first place where more regions meet than can be listed in pairs, or null. */
+export function crowdedPlace(places: Meeting[]): [number, number] | null {
+	const crowded = places.find(({ arcs }) => arcs.length > mostAroundAPlace);
+	return crowded ? [crowded.x, crowded.y] : null;
+}
+
 /** Point touches: regions around a place where four or more arcs end and that share no line anywhere. */
 export function addTouches(coverage: Coverage, places: Meeting[], tally: PairTally): void {
 	const { arcLeft, arcRight } = coverage;
 	for (const { x, y, arcs } of places) {
-		if (arcs.length < 4) continue;
+		if (arcs.length < 4 || arcs.length > mostAroundAPlace) continue;
 		const around = new Set<number>();
 		for (const arc of arcs) around.add(arcLeft[arc]).add(arcRight[arc]);
 		around.delete(-1);

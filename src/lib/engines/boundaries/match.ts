@@ -1,4 +1,5 @@
 import { surveyOf, type Survey } from '../borders/survey.ts';
+import { mostAroundAPlace } from '../borders/touches.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { buildCoverage } from './build-coverage.ts';
 import type { Finding } from './finding.ts';
@@ -7,6 +8,7 @@ import { joinWithin } from './join-within.ts';
 import { gainedAndLost, joinedFinding, toleranceFinding } from './match-findings.ts';
 import type { Noded } from './node-outlines.ts';
 import { noiseMetres } from './options.ts';
+import { Refusal } from './refusal.ts';
 import { settleParallel } from './settle-parallel.ts';
 
 export interface Matched {
@@ -59,9 +61,13 @@ function cut(noded: Noded, keys: string[], names: string[], options: Options) {
 	const { outlines, segments } = noded;
 	const { coverage, arcs } = buildCoverage(outlines, segments, keys, names);
 	const survey = surveyOf(coverage, options);
+	if (survey.crowded) throw new Refusal('bad-coordinate', crowdMessage(survey.crowded));
 	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
 	return { coverage, survey, holes };
 }
+
+const crowdMessage = ([lon, lat]: [number, number]) =>
+	`More than ${mostAroundAPlace / 2} outlines meet at longitude ${lon.toFixed(5)}, latitude ${lat.toFixed(5)}, which no map of regions does.`;
 
 /** Regions (or features) that have no segment with themselves on one side only. */
 export function withoutSegments({ segments }: Noded, regions: number): number[] {

@@ -135,6 +135,22 @@ describe('what is refused, with the place named', () => {
 		expect(refused.message).toMatch(said);
 	});
 
+	it('thousands of outlines that meet in one place, with the place', async () => {
+		const at = (step: number) => [Math.cos(step / 1000), Math.sin(step / 1000)];
+		const triangles = Array.from({ length: 3000 }, (_, i) => ({
+			type: 'Feature',
+			properties: {},
+			geometry: {
+				type: 'Polygon',
+				coordinates: [[[0, 0], at(2 * i), at(2 * i + 1), [0, 0]]],
+			},
+		}));
+		const fan = { type: 'FeatureCollection', features: triangles };
+		const refused = await refusal(text(JSON.stringify(fan)));
+		expect(refused.code).toBe('bad-coordinate');
+		expect(refused.message).toMatch(/longitude 0\.00000, latitude 0\.00000/);
+	});
+
 	it('a file cut off anywhere, with the byte', async () => {
 		const whole = JSON.stringify(two);
 		for (let end = 1; end < whole.length; end += 13) {

@@ -38,7 +38,9 @@ describe('sentences', () => {
 		const result = await colour({ ...map, inks: 4, locks });
 		if (result.status !== 'impossible') throw new Error('not impossible');
 		const told = explanationSentence(result.explanation, nameOf, (ink) => `ink ${ink}`);
-		expect(told).toMatch(/^Elnes and Arvik cannot both keep their locks, whatever the number of inks/);
+		expect(told).toMatch(
+			/^Elnes and Arvik cannot both keep their locks, whatever the number of inks/,
+		);
 		expect(told).toMatch(/Dropping the lock of (Elnes|Arvik) makes it possible; nothing cheaper/);
 	});
 });
