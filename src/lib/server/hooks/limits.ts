@@ -8,14 +8,20 @@ const MEGABYTE = 1024 * 1024;
 const counted = /^\/(\(app\)\/\[team\]\/upload$|api\/v1\/)/;
 const draft = '/(app)/[team]/sheets/[sheet]/draft';
 
-/** Refuses bodies that are larger than anything this route takes, before a byte of them is read. */
-export const handleBodySize: Handle = ({ event, resolve }) => {
+/** Up to this much is let run past unread, so that the one who sends it gets to hear the answer. */
+const letPass = 16 * MEGABYTE;
+
+/** Refuses bodies that are larger than anything this route takes; nothing of them is kept. */
+export const handleBodySize: Handle = async ({ event, resolve }) => {
 	const { request } = event;
 	if (!request.body || bodyLength(request) <= largestBody(event)) return resolve(event);
+	const said = 'This is more than can be sent here at once.';
+	if (bodyLength(request) <= letPass) {
+		await request.body.pipeTo(new WritableStream());
+		return plainAnswer(event, 413, said);
+	}
 	// The rest of the body is still on its way: this connection cannot carry another request.
-	return plainAnswer(event, 413, 'This is more than can be sent here at once.', {
-		connection: 'close',
-	});
+	return plainAnswer(event, 413, said, { connection: 'close' });
 };
 
 /** A body of unknown length counts as endless, except where it is counted while it is read. */
