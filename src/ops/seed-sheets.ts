@@ -1,4 +1,3 @@
-import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import type { Member } from '../lib/server/access/member.ts';
 import { database } from '../lib/server/database/connection.ts';
@@ -8,11 +7,10 @@ import { runIntake } from '../lib/server/jobs/intake.job.ts';
 import type { Workshop } from '../lib/server/jobs/workshop.ts';
 import { saveDraft } from '../lib/server/services/draft.service.ts';
 import { issueEdition } from '../lib/server/services/edition.service.ts';
-import { beginIntake, intakeStatus } from '../lib/server/services/intake.service.ts';
+import { beginSampleIntake, intakeStatus } from '../lib/server/services/intake.service.ts';
 import { deskSheet, sheetList } from '../lib/server/services/sheet.service.ts';
 import { root } from './files.mjs';
 
-const fileName = 'tavaroe.geojson';
 /** Districts whose ink the invented office keeps from sheet to sheet: two coasts and the enclave city. */
 const keptDistricts = ['0101', '0711', '1006'];
 
@@ -37,13 +35,7 @@ function seedingWorkshop(): Workshop {
 }
 
 async function takeIn(shop: Workshop, member: Member): Promise<number> {
-	const form = new FormData();
-	form.set('sheetName', 'Districts of Tavaröe');
-	form.set('keyField', 'code');
-	form.set('nameField', 'name');
-	form.set('file', new Blob([readFileSync(path.join(root, 'sample-data', fileName))]), fileName);
-	const request = new Request('http://localhost/', { method: 'POST', body: form });
-	const { id } = await beginIntake(shop, member, request);
+	const { id } = await beginSampleIntake(shop, member, path.join(root, 'sample-data'));
 	await runIntake(shop, id, new AbortController().signal);
 	const { sheet, state, refusal } = await intakeStatus(shop, member, id);
 	if (sheet === null)

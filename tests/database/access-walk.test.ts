@@ -19,6 +19,7 @@ import {
 } from '../../src/lib/server/services/edition.service.ts';
 import {
 	beginIntake,
+	beginSampleIntake,
 	cancelIntake,
 	intakeStatus,
 	listIntakes,
@@ -85,6 +86,10 @@ const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
 		(member) => addPalette(shop, member, { name: randomUUID(), inks: [] }),
 	],
 	beginIntake: ['boundaries.upload', (member) => beginIntake(shop, member, empty())],
+	beginSampleIntake: [
+		'boundaries.upload',
+		(member) => beginSampleIntake(shop, member, 'no such folder'),
+	],
 	cancelIntake: ['boundaries.upload', (member) => cancelIntake(shop, member, id)],
 	changeRoles: ['members.manage', (member) => changeRoles(member, id, ['designer'])],
 	changeTeamName: ['team.manage', (member) => changeTeamName(member, 'Walked')],

@@ -1,8 +1,15 @@
 import { readFileSync } from 'node:fs';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { decodeCoverage } from '../../src/lib/engines/boundaries/index.ts';
-import type { Member } from '../../src/lib/server/access/member.ts';
-import { cancelIntake, retryIntake } from '../../src/lib/server/services/intake.service.ts';
+import { Forbidden, type Member } from '../../src/lib/server/access/member.ts';
+import { runIntake } from '../../src/lib/server/jobs/intake.job.ts';
+import {
+	beginSampleIntake,
+	cancelIntake,
+	intakeStatus,
+	listIntakes,
+	retryIntake,
+} from '../../src/lib/server/services/intake.service.ts';
 import { NotFound } from '../../src/lib/server/services/outcomes.ts';
 import {
 	acceptFinding,
@@ -106,5 +113,36 @@ describe('from an uploaded file to a coloured sheet', () => {
 		const { id } = await ingest(shop, member, 'done.geojson', sample('tavaroe.geojson'));
 		await expect(cancelIntake(shop, member, id)).rejects.toThrow('not being read');
 		await expect(retryIntake(shop, member, id)).rejects.toThrow('only an upload that failed');
+	});
+});
+
+describe('the sample at hand', () => {
+	it('goes the way of every upload and becomes a coloured sheet', async () => {
+		const first = await createMember(shop.db, 'newcomers', 'cartographer');
+		const { id } = await beginSampleIntake(shop, first);
+		expect(shop.asked).toContain(id);
+		expect(await intakeStatus(shop, first, id)).toMatchObject({
+			state: 'waiting',
+			fileName: 'tavaroe.geojson',
+			fileBytes: sample('tavaroe.geojson').length,
+		});
+		await runIntake(shop, id, new AbortController().signal);
+		// what sample-data/README.md says the generator put in
+		expect(await sheetList(shop, first)).toMatchObject([
+			{ number: 1, name: 'Districts of Tavaröe', regionCount: 180, inksUsed: 4 },
+		]);
+	});
+
+	it('is not given to those who may not upload', async () => {
+		const analyst = await createMember(shop.db, 'newcomers', 'analyst');
+		await expect(beginSampleIntake(shop, analyst)).rejects.toBeInstanceOf(Forbidden);
+	});
+
+	it('says so where the installation comes without the file, and leaves nothing behind', async () => {
+		const other = await createMember(shop.db, 'without-sample', 'cartographer');
+		const before = await shop.stored();
+		await expect(beginSampleIntake(shop, other, shop.data)).rejects.toThrow('tavaroe.geojson');
+		expect(await shop.stored()).toEqual(before);
+		expect(await listIntakes(shop, other)).toEqual([]);
 	});
 });

@@ -40,4 +40,5 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/tokens', 'action withdraw', 'tokens.manage'],
 	['/upload', 'load', 'sheet.read'],
 	['/upload', 'action upload', 'boundaries.upload'],
+	['/upload', 'action sample', 'boundaries.upload'],
 ];

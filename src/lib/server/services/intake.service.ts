@@ -2,6 +2,7 @@ import { requireAccess, type Member } from '../access/member.ts';
 import type { IntakeStatus } from '../../schemas/desk.ts';
 import { uploadFields } from '../../schemas/upload.ts';
 import { receiveForm, type ReceivedForm } from '../files/multipart.ts';
+import { sampleForm } from '../files/sample.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { lockDigest } from '../repositories/files.repository.ts';
 import {
@@ -32,11 +33,35 @@ export async function beginIntake(
 	member: Member,
 	request: Request,
 ): Promise<{ id: string }> {
+	return takeIn(shop, member, () => receiveForm(request, shop.files, maxUpload()));
+}
+
+/** Takes in the sample republic the way an uploaded file is; `folder` is where its file lies. */
+export async function beginSampleIntake(
+	shop: Workshop,
+	member: Member,
+	folder?: string,
+): Promise<{ id: string }> {
+	return takeIn(shop, member, async () => {
+		const form = await sampleForm(shop.files, folder);
+		if (!form) throw new Unfit('sample-missing', sampleMissing);
+		return form;
+	});
+}
+
+const sampleMissing =
+	'The sample file is missing from this installation: sample-data/tavaroe.geojson. Upload a file of your own, or tell whoever runs the server.';
+
+async function takeIn(
+	shop: Workshop,
+	member: Member,
+	receive: () => Promise<ReceivedForm>,
+): Promise<{ id: string }> {
 	requireAccess(member, 'boundaries.upload');
 	if ((await countOpenIntakes(shop.db, member.team.id)) >= mostOpen) {
 		throw new Conflict('too-many-open', `${mostOpen} uploads are being read already`);
 	}
-	const form = await receiveForm(request, shop.files, maxUpload());
+	const form = await receive();
 	try {
 		return { id: await enter(shop, member, form) };
 	} finally {

@@ -4,7 +4,12 @@ import { UploadFault } from '$lib/server/files/multipart';
 import { attempt } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
-import { beginIntake, listIntakes, maxUpload } from '$lib/server/services/intake.service';
+import {
+	beginIntake,
+	beginSampleIntake,
+	listIntakes,
+	maxUpload,
+} from '$lib/server/services/intake.service';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load = (async ({ locals }) => {
@@ -23,6 +28,13 @@ export const actions = {
 			const { status, message } = begun.data.fault;
 			return fail(status, { message, errors: {}, values: {} });
 		}
+		redirect(303, `/${params.team}/intakes/${begun.data.id}`);
+	},
+	/** Asked for by the page of sheets as well. */
+	sample: async ({ locals, params }) => {
+		const member = memberFor(locals, 'boundaries.upload');
+		const begun = await attempt(() => beginSampleIntake(workshop(), member));
+		if (begun.failure) return begun.failure;
 		redirect(303, `/${params.team}/intakes/${begun.data.id}`);
 	},
 } satisfies Actions;
