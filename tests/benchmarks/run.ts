@@ -3,7 +3,10 @@ interface Benchmark {
 	run(): AsyncIterable<object> | Promise<object[]>;
 }
 
-const names = ['boundaries', 'colouring', 'many-regions'];
+const alone = ['boundaries', 'colouring', 'locks', 'many-regions'];
+/** run only when named, because a product must be running */
+const withProduct = ['lock-toggle'];
+const names = [...alone, ...withProduct];
 
 const wanted = process.argv.slice(2);
 const unknown = wanted.filter((name) => !names.includes(name));
@@ -12,7 +15,7 @@ if (unknown.length) {
 	process.exit(2);
 }
 
-for (const name of wanted.length ? wanted : names) {
+for (const name of wanted.length ? wanted : alone) {
 	const benchmark = (await import(`./${name}.ts`)) as Benchmark;
 	for await (const record of await benchmark.run()) console.log(JSON.stringify(record));
 }
