@@ -1,15 +1,31 @@
 import { colour } from '$lib/engines/colouring';
+import { mendPalette } from '$lib/engines/palettes/mend';
 import type { ColourReply, ColourRequest } from '$lib/state/colourer';
+import type { MendQuestion, MendReply } from '$lib/state/mending.svelte';
 
-/** In: one colouring problem a message. Out: the engine's result, or how it failed, under the same id. */
-self.onmessage = async ({ data: { id, problem } }: MessageEvent<ColourRequest>) => {
+/**
+ * In: one colouring problem, or one palette to be mended, a message. Out: the engine's result, or how it
+ * failed; a colouring's under the id it was asked for.
+ */
+self.onmessage = async ({ data }: MessageEvent<ColourRequest | MendQuestion>) =>
+	self.postMessage('mend' in data ? mended(data) : await coloured(data));
+
+async function coloured({ id, problem }: ColourRequest): Promise<ColourReply> {
 	const started = performance.now();
-	let reply: ColourReply;
 	try {
 		const result = await colour(problem);
-		reply = { id, result, milliseconds: performance.now() - started };
+		return { id, result, milliseconds: performance.now() - started };
 	} catch (error) {
-		reply = { id, failed: error instanceof Error ? error.message : String(error) };
+		return { id, failed: messageOf(error) };
 	}
-	self.postMessage(reply);
-};
+}
+
+function mended({ mend }: MendQuestion): MendReply {
+	try {
+		return { result: mendPalette(mend) };
+	} catch (error) {
+		return { failed: messageOf(error) };
+	}
+}
+
+const messageOf = (error: unknown) => (error instanceof Error ? error.message : String(error));

@@ -7,8 +7,12 @@ export interface ColourRequest {
 export type ColourReply =
 	{ id: number; result: ColouringResult; milliseconds: number } | { id: number; failed: string };
 
-/** A run that is still going when it is overtaken gets this long to end by itself. */
+/** A run that is still going when it is overtaken gets this long to end by itself, in milliseconds. */
 const patience = 250;
+/** A rehearsal gets longer: a worker started anew would take as long. */
+const rehearsalPatience = 1000;
+/** Number of every rehearsal; questions count from 1. */
+const rehearsal = 0;
 
 /**
  * Asks the colouring engine in a worker of its own. Only the newest question is of interest: one that
@@ -17,8 +21,9 @@ const patience = 250;
 export class Colourer {
 	#worker: Worker | null = null;
 	#id = 0;
-	#running = 0;
+	#running: ColourRequest | null = null;
 	#waiting: ColourRequest | null = null;
+	#rehearsals: ColouringProblem[] = [];
 	#overtaken: ReturnType<typeof setTimeout> | undefined;
 
 	constructor(
@@ -31,14 +36,31 @@ export class Colourer {
 		this.#worker ??= this.#start();
 	}
 
+	/**
+	 * Has problems solved whose answers nobody wants: the first runs of the engine are many times slower
+	 * than the later ones. A question goes before the rehearsals that are left and does away with them.
+	 */
+	rehearse(problems: readonly ColouringProblem[]) {
+		this.#rehearsals = [...problems];
+		this.#rehearseNext();
+	}
+
 	ask(problem: ColouringProblem): number {
 		const request = { id: ++this.#id, problem };
+		this.#rehearsals = [];
 		if (!this.#running) this.#send(request);
 		else {
 			this.#waiting = request;
-			this.#overtaken ??= setTimeout(() => this.#restart(), patience);
+			this.#overtake(this.#running);
 		}
 		return request.id;
+	}
+
+	/** No answer is wanted any more; a worker that is quick to end stays for the next question. */
+	forget() {
+		++this.#id;
+		this.#waiting = null;
+		if (this.#running && this.#running.id !== rehearsal) this.#overtake(this.#running);
 	}
 
 	/** Ends what runs and what waits. */
@@ -46,9 +68,15 @@ export class Colourer {
 		clearTimeout(this.#overtaken);
 		this.#overtaken = undefined;
 		this.#waiting = null;
-		this.#running = 0;
+		this.#rehearsals = [];
+		this.#running = null;
 		this.#worker?.terminate();
 		this.#worker = null;
+	}
+
+	#overtake({ id }: ColourRequest) {
+		const wait = id === rehearsal ? rehearsalPatience : patience;
+		this.#overtaken ??= setTimeout(() => this.#restart(), wait);
 	}
 
 	#restart() {
@@ -59,7 +87,7 @@ export class Colourer {
 
 	#send(request: ColourRequest) {
 		this.#worker ??= this.#start();
-		this.#running = request.id;
+		this.#running = request;
 		this.#worker.postMessage(request);
 	}
 
@@ -67,7 +95,7 @@ export class Colourer {
 		const worker = this.makeWorker();
 		worker.onmessage = ({ data }: MessageEvent<ColourReply>) => this.#settle(data);
 		worker.onerror = (event) => {
-			const id = this.#running;
+			const id = this.#running?.id ?? rehearsal;
 			this.#worker?.terminate();
 			this.#worker = null;
 			this.#settle({ id, failed: event.message });
@@ -78,10 +106,16 @@ export class Colourer {
 	#settle(reply: ColourReply) {
 		clearTimeout(this.#overtaken);
 		this.#overtaken = undefined;
-		this.#running = 0;
+		this.#running = null;
 		const next = this.#waiting;
 		this.#waiting = null;
 		if (next) this.#send(next);
-		else if (reply.id === this.#id) this.answered(reply);
+		else if (reply.id !== rehearsal && reply.id === this.#id) this.answered(reply);
+		this.#rehearseNext();
+	}
+
+	#rehearseNext() {
+		const problem = this.#running ? undefined : this.#rehearsals.shift();
+		if (problem) this.#send({ id: rehearsal, problem });
 	}
 }

@@ -10,6 +10,7 @@ import { inkUse } from './ink-use';
 import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { colouringParts, problemOf } from './problem-of-draft';
+import { rehearsals } from './rehearsals';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
@@ -122,6 +123,15 @@ export class Desk {
 		};
 	}
 
+	/** Once the sheet can be worked on: has the engine run, so that the first lock is answered at once. */
+	rehearse() {
+		if (!this.may('colours.edit')) return;
+		const { borders, regions } = this.sheet;
+		const { document } = this.draft;
+		const problem = problemOf(document, regions.key, borders, this.numbers, this.#savedInks);
+		this.#colourer?.rehearse(rehearsals(problem, this.inks));
+	}
+
 	/** The page was loaded again: after a finding was accepted, an edition issued. */
 	refresh(sheet: DeskSheet) {
 		this.sheet = sheet;
@@ -153,7 +163,7 @@ export class Desk {
 		const unchanged = parts.every((part, index) => part === this.#asked[index]);
 		this.#asked = parts;
 		if (known) {
-			this.#colourer?.stop();
+			this.#colourer?.forget();
 			this.working = false;
 			this.answer = known.answer;
 			this.inks = known.inks;
