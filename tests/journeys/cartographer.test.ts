@@ -101,7 +101,7 @@ describe('a cartographer', () => {
 		await picture(page, 'counties');
 		const file = parseSvg(await download(page, counties));
 		expect(file.filter(({ attributes }) => attributes['data-key'] !== undefined)).toHaveLength(
-			3142,
+			3141,
 		);
 		await uploadSheet(page, countriesGeoJson(), 'Countries, journey');
 		/** world-atlas 110m: 177 countries, 313 pairs with a line (topojson-client neighbors) */
