@@ -150,13 +150,22 @@ export class DraftState {
 	/** Saves at once what is waiting: on leaving, on coming back online, on asking again. */
 	async saveNow() {
 		clearTimeout(this.#timer);
-		if (this.#running || this.stale || !this.dirty) return;
+		if (this.#running || this.stale) return;
+		if (!this.dirty) return this.#nothingToSave();
 		this.#running = true;
 		this.saving = 'saving';
 		const sent = this.document;
 		const answer = await this.#start.save(this.#revision, sent);
 		this.#running = false;
 		await this.#settle(answer, sent);
+	}
+
+	/** The server has what is shown: just saved, or a change was taken back before it was sent. */
+	async #nothingToSave() {
+		this.saving = 'saved';
+		await this.#start.keeper?.forget(this.#start.sheetId).catch(() => {
+			this.kept = false;
+		});
 	}
 
 	/** The server's page data changed under an untouched draft. */
@@ -238,9 +247,6 @@ export class DraftState {
 			this.#keep(this.document);
 			return this.#schedule(quiet);
 		}
-		this.saving = 'saved';
-		await this.#start.keeper?.forget(this.#start.sheetId).catch(() => {
-			this.kept = false;
-		});
+		await this.#nothingToSave();
 	}
 }

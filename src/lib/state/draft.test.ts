@@ -82,6 +82,17 @@ describe('DraftState', () => {
 		expect(draft.redoLabel).toBeNull();
 	});
 
+	it('has nothing to save, and keeps nothing, once a change is taken back before it was sent', async () => {
+		const { draft, sent, keeper } = open([]);
+		draft.change('lock a', lock(['a'], 1));
+		expect(draft.saving).toBe('waiting');
+		draft.undo();
+		await vi.advanceTimersByTimeAsync(5_000);
+		expect(draft.saving).toBe('saved');
+		expect(sent).toEqual([]);
+		expect(keeper.held).toBeNull();
+	});
+
 	it('makes one step of a run of typing', () => {
 		const { draft } = open([]);
 		for (const title of ['A', 'Ab', 'Abc'])
