@@ -12,6 +12,10 @@ const arrows: Record<string, Direction> = {
 	ArrowDown: 'down',
 };
 
+/** Buttons and links over the sheet answer to Enter themselves. */
+const isControl = (target: EventTarget | null) =>
+	target instanceof Element && target.closest('button, a') !== null;
+
 /** The sheet by keyboard: arrows walk from region to region, and what is reached is read out. */
 export class SheetWalk {
 	/** for the live region: what the last key came to */
@@ -35,6 +39,7 @@ export class SheetWalk {
 
 	keydown = (event: KeyboardEvent) => {
 		if (event.ctrlKey || event.metaKey || event.altKey) return;
+		if (event.key === 'Enter' && isControl(event.target)) return;
 		const direction = arrows[event.key];
 		if (!direction && !this.#others[event.key]) return;
 		event.preventDefault();
