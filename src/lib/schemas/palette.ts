@@ -31,10 +31,10 @@ function readInk(entry: string): Ink | string {
 	const words = entry.split(/\s+/);
 	const places = valuePlaces(words.map((word) => word.replace(/^["'(]+|["'):]+$/g, '')));
 	if (places.length > 1)
-		return `“${entry}” holds two values: write one ink a line, its value with #.`;
+		return `“${entry}” has two values: write one ink a line, its value with #.`;
 	const [place] = places;
 	const hex = place === undefined ? null : readHex(words[place].replace(/["'():]/g, ''));
-	if (!hex) return `“${entry}” is no colour: write # and six hex digits, then the name.`;
+	if (!hex) return `“${entry}” is not a colour: write # and six hex digits, then the name.`;
 	const name = words.filter((_, other) => other !== place).join(' ');
 	return { name: name.replace(/^["']+|["':]+$/g, '').slice(0, 80), hex };
 }

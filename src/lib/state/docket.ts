@@ -41,7 +41,7 @@ export const docket = (state: DocketState): DocketStage[] => [
 		mark: state.working ? null : state.palette.mark,
 		words: [
 			state.working
-				? { text: 'Waits for the colouring' }
+				? { text: 'Waiting for the colouring' }
 				: { text: state.palette.sentence, to: '#verdict' },
 		],
 	},
@@ -73,10 +73,10 @@ function boundaries({ sheet, draft }: DocketState): Said {
 			{ text: `${within}.` },
 			open.length
 				? {
-						text: `${counted(open.length, 'finding')} open${worst === 'error' ? '' : ', none an error'}`,
+						text: `${counted(open.length, 'finding')} open${worst === 'error' ? '' : ', no errors'}`,
 						to: '#findings',
 					}
-				: { text: 'No finding open' },
+				: { text: 'No findings open' },
 		],
 	};
 }
@@ -88,7 +88,7 @@ function borders({ sheet, draft, standing }: DocketState): Said {
 	const struck = standing.filter((one) => one === 'struck').length;
 	const parts = [
 		`${count(of('line'))} by line`,
-		points ? `${count(points)} by point${draft.pointTouches ? '' : ', not counted'}` : '',
+		points ? `${count(points)} by point${draft.pointTouches ? '' : ' (not counted)'}` : '',
 		of('water') ? `${count(of('water'))} across water` : '',
 		struck ? `${count(struck)} struck out` : '',
 		draft.added.length ? `${count(draft.added.length)} added by hand` : '',
@@ -97,7 +97,7 @@ function borders({ sheet, draft, standing }: DocketState): Said {
 		{ text: parts.filter(Boolean).join(', '), to: '#borders' },
 		{ text: '.' },
 	];
-	if (!sheet.boundarySet.planar) words.push({ text: 'Not planar', to: '#planar' });
+	if (!sheet.boundarySet.planar) words.push({ text: 'Four inks not guaranteed', to: '#planar' });
 	return { mark: 'clear', words };
 }
 
@@ -108,9 +108,7 @@ function colours({ answer, draft, working }: DocketState): Said {
 	if (!answer) return { mark: null, words: [{ text: 'Not coloured yet.' }, held] };
 	if (answer.status === 'impossible') {
 		const { locks: colliding } = answer.explanation;
-		const what = colliding.length
-			? `${counted(colliding.length, 'lock')} collide`
-			: 'The rules collide';
+		const what = colliding.length ? collision(colliding.length) : 'The rules collide';
 		return { mark: 'error', words: [{ text: what, to: '#because' }, { text: '.' }, held] };
 	}
 	if (answer.status === 'undecided')
@@ -127,6 +125,9 @@ function colours({ answer, draft, working }: DocketState): Said {
 	};
 }
 
+const collision = (locks: number) =>
+	locks === 1 ? '1 lock cannot be kept' : `${count(locks)} locks collide`;
+
 function layout({ draft: { layout: sheet }, drawn }: DocketState): Said {
 	const paper =
 		typeof sheet.paper === 'string'
@@ -136,8 +137,8 @@ function layout({ draft: { layout: sheet }, drawn }: DocketState): Said {
 	if (drawn && sheet.labels)
 		words.push(
 			drawn.unplaced
-				? { text: `${counted(drawn.unplaced, 'label')} not placed`, to: '#labels' }
-				: { text: 'Every label placed' },
+				? { text: `${counted(drawn.unplaced, 'name')} not placed`, to: '#labels' }
+				: { text: 'Every name placed' },
 		);
 	return { mark: drawn ? 'clear' : null, words };
 }

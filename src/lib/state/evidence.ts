@@ -62,13 +62,13 @@ function proofWords({ kind, regions }: Proof, nameOf: (region: number) => string
 	if (kind === 'odd-wheel') return `A ring of ${many - 1} regions round ${nameOf(regions[0])}`;
 	if (kind === 'odd-cycle') return `A ring of ${many} regions`;
 	if (kind === 'clique') return `${many} regions that all border each other`;
-	return `The ${many} regions that force it`;
+	return `The ${many} regions that make it necessary`;
 }
 
 export function collisionEvidence({ locks, regions }: Explanation): Evidence {
 	const locked = new Set(locks);
 	return evidence({
-		words: 'Solid outline: locks that collide. Broken outline: the regions between them.',
+		words: 'Solid outline: the locks that collide. Dashed outline: the regions between them.',
 		strong: locks,
 		light: regions.filter((region) => !locked.has(region)),
 	});

@@ -14,14 +14,17 @@ export class Mending {
 	working = $state(false);
 	/** the search ended without an answer: what it said */
 	failure = $state('');
+	readonly #makeWorker: () => Worker;
 	#worker: Worker | null = null;
 
-	constructor(private makeWorker: () => Worker) {}
+	constructor(makeWorker: () => Worker) {
+		this.#makeWorker = makeWorker;
+	}
 
 	ask(request: MendRequest) {
 		this.drop();
 		this.working = true;
-		const worker = (this.#worker = this.makeWorker());
+		const worker = (this.#worker = this.#makeWorker());
 		worker.onmessage = ({ data }: MessageEvent<MendReply>) => this.#settle(data);
 		worker.onerror = ({ message }) => this.#settle({ failed: message });
 		worker.postMessage({ mend: request } satisfies MendQuestion);

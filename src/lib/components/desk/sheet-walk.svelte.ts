@@ -1,0 +1,94 @@
+import type { Desk } from '$lib/state/desk.svelte';
+import { neighboursOf } from '$lib/state/region-links';
+import type { Viewport } from '$lib/state/viewport.svelte';
+import { nearestRegion, step, type Direction } from '$lib/state/walk';
+import { counted } from '../format';
+import type { SheetSurface } from './sheet-surface';
+
+const arrows: Record<string, Direction> = {
+	ArrowLeft: 'left',
+	ArrowRight: 'right',
+	ArrowUp: 'up',
+	ArrowDown: 'down',
+};
+
+/** Buttons and links over the sheet answer to Enter themselves. */
+const isControl = (target: EventTarget | null) =>
+	target instanceof Element && target.closest('button, a') !== null;
+
+/** The sheet by keyboard: arrows walk from region to region, and what is reached is read out. */
+export class SheetWalk {
+	/** for the live region: what the last key came to */
+	spoken = $state('');
+	readonly #desk: Desk;
+	readonly #surface: () => SheetSurface | null;
+	readonly #others: Record<string, () => void>;
+
+	constructor(desk: Desk, view: Viewport, surface: () => SheetSurface | null) {
+		this.#desk = desk;
+		this.#surface = surface;
+		this.#others = {
+			'+': () => view.zoom(1.5),
+			'=': () => view.zoom(1.5),
+			'-': () => view.zoom(1 / 1.5),
+			'0': () => view.fit(),
+			Enter: () => this.#open(),
+			Escape: () => this.#clear(),
+		};
+	}
+
+	keydown = (event: KeyboardEvent) => {
+		if (event.ctrlKey || event.metaKey || event.altKey) return;
+		if (event.key === 'Enter' && isControl(event.target)) return;
+		const direction = arrows[event.key];
+		if (!direction && !this.#others[event.key]) return;
+		event.preventDefault();
+		if (direction) this.#walk(direction);
+		else this.#others[event.key]();
+	};
+
+	#walk(direction: Direction) {
+		const { drawn, selected } = this.#desk;
+		if (!drawn) return;
+		const { anchors, drawing } = drawn;
+		const to =
+			selected === null
+				? nearestRegion(anchors, drawing.widthMm * 50, drawing.heightMm * 50)
+				: step(selected, direction, anchors, this.#beside(selected));
+		if (to < 0) {
+			this.spoken = 'No region farther that way.';
+			return;
+		}
+		this.#desk.select(to);
+		this.#surface()?.setStop(to, true);
+		this.spoken = this.#told(to);
+	}
+
+	#beside(region: number): number[] {
+		const { sheet, links } = this.#desk;
+		return neighboursOf(region, sheet.borders, links).map((one) => one.region);
+	}
+
+	#told(region: number): string {
+		const desk = this.#desk;
+		const ink = desk.draft.document.palette.inks[desk.inks[region]]?.name ?? 'no ink';
+		const beside = this.#beside(region);
+		const names = beside.slice(0, 8).map((other) => desk.nameOf(other));
+		const listed = names.length ? `: ${names.join(', ')}` : '';
+		return `${desk.nameOf(region)}, ${ink}, ${counted(beside.length, 'neighbour')}${listed}`;
+	}
+
+	#open() {
+		const { selected } = this.#desk;
+		if (selected === null) return;
+		this.#desk.panel = 'region';
+		this.spoken = `${this.#desk.nameOf(selected)} is open beside the sheet.`;
+	}
+
+	#clear() {
+		this.#desk.evidence = null;
+		this.#desk.select(null);
+		this.#surface()?.setStop(null, true);
+		this.spoken = 'Nothing selected.';
+	}
+}
