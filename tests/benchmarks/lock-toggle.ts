@@ -12,7 +12,7 @@ export async function* run(): AsyncGenerator<object> {
 	try {
 		const { page } = await openPage(browser);
 		page.setDefaultTimeout(120_000);
-		await signInAs(page, 'several');
+		await signInAs(page, 'cartographer');
 		await enterTeam(page);
 		await uploadSheet(page, countiesGeoJson(), 'Counties, bench');
 		await drawn(page);

@@ -1,8 +1,8 @@
+import assert from 'node:assert/strict';
 import { mkdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { createRequire } from 'node:module';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
-import { expect } from 'vitest';
 
 /** Debian's browser, driven without a sandbox when root and without a word to the outside. */
 const launchOptions = {
@@ -94,7 +94,7 @@ export async function expectAccessible(page: Page): Promise<void> {
 				.map((node) => `${node.target.join(' ')} (${node.failureSummary ?? ''})`)
 				.join('; ')}`,
 	);
-	expect(told, page.url()).toEqual([]);
+	assert.deepEqual(told, [], page.url());
 }
 
 /** Keeps a picture for the README and for whoever wants to look; not compared with anything. */
