@@ -143,6 +143,25 @@ describe('each role of a team', () => {
 		expect(complaints).toEqual([]);
 	});
 
+	it('a new team opens empty, with the sample at hand', async () => {
+		await signInAs(page, 'admin');
+		await page.goto('/teams/new');
+		await expectAccessible(page);
+		await page.getByRole('textbox').first().fill(`Harbour Board ${Date.now()}`);
+		await page.getByRole('main').getByRole('button').first().click();
+		await page.waitForURL(/\/sheets$/);
+		await expectAccessible(page);
+		await picture(page, 'empty-team');
+		await page.setViewportSize(phone);
+		await picture(page, 'phone-empty-team');
+		await page.setViewportSize({ width: 1280, height: 800 });
+		await page.getByRole('button', { name: /sample/i }).click();
+		await page.waitForURL(/\/sheets\/\d+/, { timeout: 120_000 });
+		await drawn(page);
+		expect(await page.locator('main svg [data-key]').count()).toBe(180);
+		expect(complaints).toEqual([]);
+	});
+
 	it('whoever is not signed in is asked to sign in and sees no team', async () => {
 		const { users } = demo();
 		expect(users.length).toBeGreaterThan(5);
