@@ -128,7 +128,6 @@ describe('a cartographer', () => {
 	});
 
 	it.each([
-		['empty', textFile('empty.geojson', ''), /empty/i],
 		[
 			'cut off',
 			textFile('cut.geojson', '{"type":"FeatureCollection","features":[{"type":"Fea'),
@@ -144,6 +143,17 @@ describe('a cartographer', () => {
 		expect(page.url()).not.toMatch(/sheets\/\d/);
 		await picture(page, `refused-${file.name}`);
 		await expectAccessible(page);
+	});
+
+	it('is told at once that a file is empty', async () => {
+		await chooseAndSend(page, textFile('nothing.geojson', ''), 'Refused, journey');
+		await page
+			.getByRole('main')
+			.getByText(/the file is empty/i)
+			.waitFor();
+		await picture(page, 'refused-empty');
+		await expectAccessible(page);
+		complaints = complaints.filter((told) => !told.includes('422'));
 	});
 
 	it('meets a hostile name as text only', async () => {
