@@ -11,7 +11,7 @@ export async function* run(): AsyncGenerator<object> {
 	const browser = await startBrowser();
 	try {
 		const { page } = await openPage(browser);
-		page.setDefaultTimeout(120_000);
+		page.setDefaultTimeout(30_000);
 		await signInAs(page, 'cartographer');
 		await enterTeam(page);
 		await uploadSheet(page, countiesGeoJson(), 'Counties, bench');
@@ -33,12 +33,14 @@ export async function* run(): AsyncGenerator<object> {
 }
 
 /** Places on the paper, in shares of its width and height, that lie on seven different counties. */
-const spots = [0.3, 0.35, 0.4, 0.45, 0.5, 0.55, 0.6].map((x) => [x, 0.5] as const);
+const spots = [0.6, 0.63, 0.66, 0.69, 0.72, 0.75, 0.78].map((x) => [x, 0.58] as const);
 
 /** Selects the region there, presses another ink than it has, and waits within the page for a fill to change. */
 async function toggle(page: Page, [x, y]: readonly [number, number]): Promise<number> {
 	const box = await page.locator('main svg:has([data-key])').boundingBox();
 	if (!box) throw new Error('no sheet is drawn');
+	// two presses in quick succession are another gesture
+	await page.waitForTimeout(1000);
 	await page.mouse.click(box.x + x * box.width, box.y + y * box.height);
 	await page.getByRole('group', { name: /^Lock .* to an ink/ }).waitFor({ state: 'attached' });
 	return page.evaluate(timeToFill);
@@ -48,9 +50,10 @@ function timeToFill(): Promise<number> {
 	const choices = [
 		...document.querySelectorAll<HTMLButtonElement>('[role=group][aria-label^="Lock "] button'),
 	];
-	const swatch = (element: Element | null) => element?.querySelector('rect')?.getAttribute('fill');
-	const present = swatch(document.querySelector('aside dl'));
-	const other = choices.find((button) => swatch(button) !== present);
+	const present = document.querySelector('aside dl rect')?.getAttribute('fill');
+	const other = choices.find(
+		(button) => button.querySelector('rect')?.getAttribute('fill') !== present,
+	);
 	const sheet = document.querySelector('main svg:has([data-key])');
 	if (!other || !sheet) throw new Error('nothing to press');
 	return new Promise((resolve) => {

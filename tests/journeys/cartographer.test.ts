@@ -193,6 +193,24 @@ describe('a cartographer', () => {
 			.toContain('Nothing selected');
 	});
 
+	it('finds a region under every press on the map, on border lines as well', async () => {
+		await page.goto(`${team}/sheets`);
+		await page.getByRole('link', { name: 'Counties, journey' }).first().click();
+		await drawn(page);
+		const under = await page.locator('main svg:has([data-key])').evaluate((sheet) => {
+			const box = sheet.getBoundingClientRect();
+			const found = [];
+			for (let x = 0.6; x < 0.78; x += 0.01)
+				found.push(
+					document
+						.elementFromPoint(box.left + x * box.width, box.top + 0.58 * box.height)
+						?.hasAttribute('data-key') ?? false,
+				);
+			return found;
+		});
+		expect(under).not.toContain(false);
+	});
+
 	it('reads the sheet on a phone', async () => {
 		await page.setViewportSize(phone);
 		await page.goto(`${team}/sheets`);
