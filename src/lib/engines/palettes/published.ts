@@ -6,6 +6,7 @@ interface Origin {
 	licence: string;
 }
 
+// that these three state no licence is from memory
 const okabeIto: Origin = {
 	source: 'Okabe and Ito 2008, Color Universal Design',
 	licence: 'None stated; the values were published for anyone to use',
