@@ -92,7 +92,7 @@ describe('by keyboard alone', () => {
 		expect(complaints).toEqual([]);
 	});
 
-	it('locks from the table and comes out of the way of a collision', async () => {
+	it('locks from the table and releases again', async () => {
 		await signIn();
 		await page.goto('/tavaroe-survey/sheets/1/colours');
 		await drawn(page);

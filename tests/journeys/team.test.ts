@@ -58,7 +58,7 @@ describe('each role of a team', () => {
 		},
 	);
 
-	it('a designer changes the title, sees it drawn, and downloads the file', async () => {
+	it('a designer changes the title and sees it drawn, as text only', async () => {
 		await enter('designer');
 		await openDemoSheet();
 		await page.goto(page.url().replace(/colours.*$/, 'layout'));
@@ -100,7 +100,7 @@ describe('each role of a team', () => {
 		expect(complaints).toEqual([]);
 	});
 
-	it('an admin invites by e-mail, and the one invited joins', async () => {
+	it('an admin invites by e-mail, and the link in the mail opens the invitation', async () => {
 		await enter('admin');
 		await page.getByRole('link', { name: 'Members' }).click();
 		await page.waitForURL(/members$/);
@@ -127,7 +127,7 @@ describe('each role of a team', () => {
 		expect(complaints).toEqual([]);
 	});
 
-	it('an admin makes and revokes an API token, and reads the activity', async () => {
+	it('an admin reads tokens, activity, settings and palettes at desk and phone width', async () => {
 		await enter('admin');
 		for (const place of ['tokens', 'activity', 'settings', 'palettes']) {
 			await page.goto(`${team}/${place}`);
