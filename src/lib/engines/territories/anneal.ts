@@ -1,6 +1,6 @@
-import { Dice, rises } from './dice.ts';
 import { BlockMover } from './block-mover.ts';
-import { PieceTest } from './search-contiguity.ts';
+import { canLeave, type ContiguityScratch } from './contiguity.ts';
+import { Dice, rises } from './dice.ts';
 import { Penalty } from './search-penalty.ts';
 import type { SearchState } from './search-state.ts';
 
@@ -45,7 +45,7 @@ export class Annealer {
 	private readonly state: SearchState;
 	private readonly settings: AnnealSettings;
 	private readonly dice: Dice;
-	private readonly pieces: PieceTest;
+	private readonly scratch: ContiguityScratch;
 	private readonly penalty: Penalty;
 	private readonly blocks: BlockMover;
 	/** 1 for territories that take part */
@@ -58,13 +58,13 @@ export class Annealer {
 	private second = -1;
 	private secondTo = -1;
 
-	constructor(state: SearchState, settings: AnnealSettings, pieces: PieceTest) {
+	constructor(state: SearchState, settings: AnnealSettings, scratch: ContiguityScratch) {
 		this.state = state;
 		this.settings = settings;
 		this.dice = new Dice(settings.seed);
-		this.pieces = pieces;
+		this.scratch = scratch;
 		this.penalty = new Penalty(state);
-		this.blocks = new BlockMover(state, pieces);
+		this.blocks = new BlockMover(state);
 		this.active = new Uint8Array(state.terms.prepared.territories);
 		for (const t of settings.territories) this.active[t] = 1;
 		const units: number[] = [];
@@ -257,7 +257,7 @@ export class Annealer {
 			this.moveChange(unit, from, to) +
 			this.settings.cutWeight * state.cutChange(unit, from, to);
 		if (change > 0 && change > this.limit()) return;
-		if (!this.pieces.mayLeave(state.assignment, unit, from)) return;
+		if (!this.leavesWhole(unit)) return;
 		state.move(unit, to);
 		penalty.refresh(from);
 		penalty.refresh(to);
@@ -291,9 +291,9 @@ export class Annealer {
 		change += this.moveChange(first, from, middle) + this.moveChange(second, middle, secondTo);
 		change += this.settings.cutWeight * this.chainCuts(first, from, middle);
 		if (change > 0 && change > this.limit()) return;
-		if (!this.pieces.mayLeave(state.assignment, first, from)) return;
+		if (!this.leavesWhole(first)) return;
 		state.move(first, middle);
-		if (!this.touches(second, secondTo) || !this.leavesWhole(second, middle)) {
+		if (!this.touches(second, secondTo) || !this.leavesWhole(second)) {
 			state.move(first, from);
 			return;
 		}
@@ -303,8 +303,10 @@ export class Annealer {
 		if (!swap) penalty.refresh(secondTo);
 	}
 
-	private leavesWhole(unit: number, territory: number): boolean {
-		return this.pieces.mayLeave(this.state.assignment, unit, territory);
+	private leavesWhole(unit: number): boolean {
+		const { assignment, sizes, terms } = this.state;
+		if (sizes[assignment[unit]] < 2) return false;
+		return canLeave(terms.prepared.graph, assignment, unit, this.scratch);
 	}
 
 	private touches(unit: number, territory: number): boolean {

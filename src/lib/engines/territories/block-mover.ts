@@ -1,14 +1,11 @@
-import type { PieceTest } from './search-contiguity.ts';
 import type { SearchState } from './search-state.ts';
 
 /** Moves of units that must stay together: slower than single ones, and seldom asked for. */
 export class BlockMover {
 	private readonly state: SearchState;
-	private readonly pieces: PieceTest;
 
-	constructor(state: SearchState, pieces: PieceTest) {
+	constructor(state: SearchState) {
 		this.state = state;
-		this.pieces = pieces;
 	}
 
 	/** Whether the block may go to `to` as one, with both territories in one piece after it. */
@@ -24,7 +21,7 @@ export class BlockMover {
 	}
 
 	private leavesWhole(block: number): boolean {
-		const { state, pieces } = this;
+		const { state } = this;
 		const units = state.terms.prepared.blocks[block];
 		const from = state.assignment[units[0]];
 		const left = state.sizes[from] - units.length;
@@ -33,14 +30,26 @@ export class BlockMover {
 		let start = 0;
 		while (this.isIn(block, members[from][start])) start++;
 		const stays = (unit: number) => state.assignment[unit] === from && !this.isIn(block, unit);
-		return pieces.joined(members[from][start], left, stays);
+		return this.joined(members[from][start], left, stays);
 	}
 
 	private comesWhole(block: number, to: number): boolean {
-		const { state, pieces } = this;
+		const { state } = this;
 		const units = state.terms.prepared.blocks[block];
 		const has = (unit: number) => state.assignment[unit] === to || this.isIn(block, unit);
-		return pieces.joined(units[0], state.sizes[to] + units.length, has);
+		return this.joined(units[0], state.sizes[to] + units.length, has);
+	}
+
+	/** Whether the `count` units that `has` holds for are joined; `start` is one of them. */
+	private joined(start: number, count: number, has: (unit: number) => boolean): boolean {
+		const { offsets, targets } = this.state.terms.prepared.graph;
+		const met = new Set([start]);
+		for (const unit of met) {
+			for (let i = offsets[unit]; i < offsets[unit + 1]; i++) {
+				if (has(targets[i])) met.add(targets[i]);
+			}
+		}
+		return met.size === count;
 	}
 
 	private isIn(block: number, unit: number): boolean {
