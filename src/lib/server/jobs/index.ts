@@ -7,7 +7,7 @@ import { log } from '../log.ts';
 import { runIntake, wakeSilentIntakes } from './intake.job.ts';
 import { createPool } from './pool.ts';
 import { jobNames, openBoss, queueOf, type JobData, type JobName } from './queue.ts';
-import { runRebalance } from './rebalance.job.ts';
+import { runRebalance, wakeSilentRebalances } from './rebalance.job.ts';
 import type { Workshop } from './workshop.ts';
 
 type Handler<N extends JobName> = (
@@ -66,6 +66,6 @@ async function takeJobs<N extends JobName>(
 }
 
 const wake = (shop: Workshop) =>
-	wakeSilentIntakes(shop).catch((error: unknown) =>
-		log.warn({ error: String(error) }, 'could not look for uploads left lying'),
+	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop)]).catch((error: unknown) =>
+		log.warn({ error: String(error) }, 'could not look for work left lying'),
 	);
