@@ -36,7 +36,7 @@ export const tableLimits: TableLimits = {
 	rows: 1_000_000,
 	columns: 500,
 	cells: 20_000_000,
-	unpackedBytes: 1024 * MiB,
+	unpackedBytes: 512 * MiB,
 	rowCharacters: 4 * MiB,
 };
 

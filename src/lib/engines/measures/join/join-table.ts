@@ -4,8 +4,9 @@ import { notesOnJoin } from './join-notes.ts';
 import { findRegion, indexRegions, labelOf } from './region-index.ts';
 import { Suggestions } from './suggestions.ts';
 
-/** So many different unknown texts get suggestions; a table with more is joined by the wrong column. */
-const mostSuggestedFor = 1000;
+/** Unknown texts get suggestions until so many steps are spent; a table with more of them than that, a few
+ * hundred among 33,000 regions, is joined by the wrong column. */
+const mostSteps = 50_000_000;
 
 /**
  * Joins the rows of a table to regions by one column.
@@ -86,7 +87,7 @@ function suggest(unmatched: Unmatched[], regions: Regions, by: 'key' | 'name'): 
 	const byText = new Map<string, Unmatched['suggestions']>();
 	for (const row of unknown) {
 		if (!byText.has(row.text)) {
-			if (byText.size >= mostSuggestedFor) continue;
+			if (suggestions.steps > mostSteps) continue;
 			byText.set(row.text, suggestions.for(row.text));
 		}
 		row.suggestions = byText.get(row.text) ?? [];

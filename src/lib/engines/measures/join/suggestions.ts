@@ -1,4 +1,4 @@
-import { editDistance } from './edit-distance.ts';
+import { editDistance, longestMeasured } from './edit-distance.ts';
 import { fold } from './fold.ts';
 import type { Regions, Suggestion } from './join.ts';
 
@@ -28,6 +28,8 @@ export class Suggestions {
 	private labels: string[];
 	private byPair = new Map<string, number[]>();
 	private shared: Uint16Array;
+	/** work done so far: regions counted, and table cells of distances */
+	steps = 0;
 
 	constructor(regions: Regions, by: 'key' | 'name') {
 		this.labels = (by === 'key' ? regions.keys : regions.names).map(fold);
@@ -43,11 +45,12 @@ export class Suggestions {
 
 	for(text: string): Suggestion[] {
 		// longer texts are no names; this bounds the work
-		const folded = fold(text).slice(0, 100);
+		const folded = fold(text).slice(0, longestMeasured);
 		if (!folded) return [];
 		const most = mostDistance(folded);
 		const found: Suggestion[] = [];
 		for (const region of this.candidates(folded, most)) {
+			this.steps += folded.length * this.labels[region].length;
 			const distance = editDistance(folded, this.labels[region], most);
 			if (distance <= most) found.push({ region, distance });
 		}
@@ -59,7 +62,9 @@ export class Suggestions {
 		const own = pairs(text);
 		const touched: number[] = [];
 		for (const pair of own) {
-			for (const region of this.byPair.get(pair) ?? []) {
+			const holders = this.byPair.get(pair) ?? [];
+			this.steps += holders.length;
+			for (const region of holders) {
 				if (this.shared[region]++ === 0) touched.push(region);
 			}
 		}
