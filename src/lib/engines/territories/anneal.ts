@@ -14,6 +14,8 @@ export interface AnnealSettings {
 	/** penalty for a mean unit outside tolerance, at the start and at the end */
 	loose: number;
 	strict: number;
+	/** penalty at the end for being outside tolerance at all, however little */
+	step: number;
 	/** weight of the quadratic term at the start and at the end */
 	spread: number;
 	spreadEnd: number;
@@ -96,12 +98,13 @@ export class Annealer {
 	}
 
 	private cool(share: number): void {
-		const { hot, cold, loose, strict, spread, spreadEnd, territories } = this.settings;
+		const { hot, cold, loose, strict, step, spread, spreadEnd, territories } = this.settings;
 		this.temperature = hot * (cold / hot) ** share;
 		const fade = Math.max(0, 1 - share / 0.7);
 		this.state.sumLoads();
 		this.penalty.weigh(
 			loose * (strict / loose) ** share,
+			step * share ** 2,
 			spreadEnd + (spread - spreadEnd) * fade,
 			territories,
 		);
