@@ -74,6 +74,8 @@ export interface ColumnNote {
 	/** first texts in it */
 	examples: string[];
 	notes: string[];
+	/** how it would be taken if nobody says otherwise */
+	proposal: ColumnChoice;
 }
 
 /** What a column comes to, before and after joining. */

@@ -8,6 +8,7 @@ import type {
 } from '../../schemas/measure-review.ts';
 import { joinKept, type JoinInput } from './measure-join.ts';
 import { outcomeOf, type Standing } from './measure-outcome.ts';
+import { choiceFor } from './measure-proposal.ts';
 import { regionName, sentenceOf } from './measure-words.ts';
 import type { Task } from './task-port.ts';
 
@@ -65,6 +66,7 @@ function columnNote(typed: TypedColumn): ColumnNote {
 		negativeRows: negativeRows.slice(0, 5),
 		examples: examples.map(cellText),
 		notes: notes.map(({ message }) => message),
+		proposal: choiceFor(typed),
 	};
 }
 
