@@ -2,7 +2,7 @@ import { getContext, setContext } from 'svelte';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Reader } from '$lib/engines/palettes/palette';
-import type { DeskColouring, DeskSheet } from '$lib/schemas/desk';
+import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import { Colourer, type ColourReply } from './colourer';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
@@ -10,6 +10,7 @@ import { inkUse } from './ink-use';
 import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { colouringParts, problemOf } from './problem-of-draft';
+import { rebase } from './rebase';
 import { rehearsals } from './rehearsals';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
@@ -22,8 +23,8 @@ export interface DeskStart {
 	address: string;
 	/** name that goes with a lock */
 	userName: string | null;
-	save: SaveDraft;
-	keeper: Keeper | null;
+	save: SaveDraft<Draft, DraftSaved>;
+	keeper: Keeper<Draft> | null;
 	/** says what was found, in one sentence; the engine's own words */
 	sentence: (result: ColouringResult, sheet: DeskSheet, draft: Draft) => string;
 }
@@ -31,7 +32,7 @@ export interface DeskStart {
 /** Everything on the desk of one sheet: what the server gave, the draft on top of it, what is selected. */
 export class Desk {
 	sheet: DeskSheet = $state.raw()!;
-	readonly draft: DraftState;
+	readonly draft: DraftState<Draft, DraftSaved>;
 	readonly address: string;
 	readonly userName: string | null;
 
@@ -100,12 +101,13 @@ export class Desk {
 		this.#asked = colouringParts(start.sheet.draft);
 		this.#remember(start.sheet.draft);
 		this.draft = new DraftState({
-			sheetId: start.sheet.id,
+			place: start.sheet.id,
 			revision: start.sheet.revision,
 			document: start.sheet.draft,
 			savedAt: start.sheet.savedAt,
 			save: start.save,
 			keeper: start.keeper,
+			rebase,
 			onchange: (document) => this.#recolour(document),
 			onsaved: ({ colouring }) => this.#adoptSaved(colouring),
 		});
