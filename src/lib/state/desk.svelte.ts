@@ -46,6 +46,9 @@ export class Desk {
 	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
 	view: 'sheet' | 'table' = $state('sheet');
+	/** figures looked at beside the regions in their table */
+	figures: { name: string; unit: string; values: readonly (number | string | null)[] } | null =
+		$state.raw(null);
 
 	/** what is known about the draft as it stands */
 	answer: DeskColouring | null = $state.raw(null);
