@@ -35,14 +35,67 @@ export interface DeskTerritories {
 	savedBy: string | null;
 	savedAt: string | null;
 	draft: TerritoryDraft;
-	/** ink number of each territory, by key */
+	/** ink number of each territory, by key; none while `inkNote` says why not */
 	inks: Record<string, number>;
+	/** why the territories have no inks: 'The territories need 5 inks and the palette has 4.' */
+	inkNote: string | null;
 	measures: DeskMeasure[];
 	textColumns: DeskTextColumn[];
 	/** what figures need of every region; see `UnitGeometry` of the territories engine */
 	geometry: { at: number[]; outlineMetres: number[] };
 	proposals: ProposalNote[];
 	handovers: HandoverNote[];
+}
+
+/** `POST territories/draft`: 200 */
+export interface TerritoriesSaved {
+	revision: number;
+	savedAt: string;
+	document: TerritoryDraft;
+	inks: Record<string, number>;
+	inkNote: string | null;
+	/** territories whose ink differs from the revision before, by key */
+	changedInks: string[];
+}
+
+/** `POST territories/draft`: 409, somebody else saved first; nothing was overwritten */
+export interface TerritoriesStale {
+	revision: number;
+	savedBy: string | null;
+	savedAt: string | null;
+	/** what they saved */
+	document: TerritoryDraft;
+	inks: Record<string, number>;
+}
+
+/** Territories made from a column or from scratch, before they are saved. */
+export interface TerritoriesPreview {
+	document: TerritoryDraft;
+	/** regions of each territory, in the order of the list */
+	regions: number[];
+	/** regions for which the column has no word */
+	without: number;
+}
+
+/** `GET territories/proposals/status`: those at work, and those that ended in the last minutes. */
+export interface ProposalProgress {
+	number: number;
+	state: ProposalNote['state'];
+	step: string;
+	share: number;
+}
+
+/** `POST territories/proposals/[proposal]/plan`: 200 */
+export interface PlanSaved {
+	revision: number;
+	assignment: number[];
+	note: ProposalNote;
+}
+
+/** `POST territories/proposals/[proposal]/plan`: 409, somebody else edited it first */
+export interface PlanStale {
+	revision: number;
+	assignment: number[];
 }
 
 /** One proposal in the list and in the comparison. */
@@ -85,8 +138,12 @@ export interface ProposalOutcome {
 	largest: Record<string, number>;
 	mean: Record<string, number>;
 	outside: number;
-	/** inside the rules still, after edits by hand: faults of the checker in words */
+	/** moves nobody chose: a leaver's regions, regions without a territory, torn-off parts */
+	compulsory: number;
+	/** rules that it breaks after edits by hand, in words: such a plan cannot be adopted */
 	faults: string[];
+	/** tolerances that it misses, in words: such a plan is adopted only on an explicit yes */
+	misses: string[];
 	/** with status impossible */
 	reason: Impossible['reason'] | null;
 	relief: (Relief & { sentence: string })[];

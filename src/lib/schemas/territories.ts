@@ -50,3 +50,27 @@ export const saveTerritories = z.strictObject({
 	document: territoryDraft,
 });
 export type SaveTerritories = z.infer<typeof saveTerritories>;
+
+/** Body of `POST territories/proposals/[proposal]/plan`: some regions moved, or the whole plan. */
+export const savePlan = z.union([
+	z.strictObject({
+		revision: z.int().min(0),
+		/** region key -> territory key */
+		moves: z.record(key, z.string().min(1).max(80)),
+	}),
+	z.strictObject({
+		revision: z.int().min(0),
+		/** index into the proposal's `territoryKeys` for every region */
+		assignment: z.array(z.int().min(0).max(2_000)).max(1_000_000),
+	}),
+]);
+export type SavePlan = z.infer<typeof savePlan>;
+
+/** What a proposal is asked for by. */
+export const beginProposal = z.strictObject({
+	name: z.string().trim().min(1, 'Give the proposal a name.').max(120),
+	/** of the territories that were looked at; absent: as they stand */
+	revision: z.int().min(1).optional(),
+	wishes,
+});
+export type BeginProposal = z.infer<typeof beginProposal>;

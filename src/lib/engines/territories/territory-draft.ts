@@ -60,3 +60,15 @@ export const firstWishes: Wishes = {
 	seed: 1,
 	effort: 'normal',
 };
+
+/** A sheet before anybody saved territories for it. */
+export const noTerritories: TerritoryDraft = {
+	territories: [],
+	assignment: {},
+	locks: {},
+	together: [],
+	apart: [],
+	waterLinks: [],
+	handLinks: [],
+	wishes: firstWishes,
+};
