@@ -52,9 +52,19 @@ export class Board {
 		const joined = this.members[territory < 0 ? k : territory];
 		joined.splice(placeIn(joined, unit), 0, unit);
 		this.assignment[unit] = territory;
-		const touched = [from, territory].filter((t) => t >= 0);
+		const touched = this.touchedBy(unit, from, territory);
 		for (const t of touched) this.known[t] = null;
 		return touched;
+	}
+
+	/** Both territories; those next to a unit too when it had or has none, which cuts no borders. */
+	private touchedBy(unit: number, from: number, to: number): number[] {
+		if (from >= 0 && to >= 0) return [from, to];
+		const { offsets, targets } = this.context.problem.graph;
+		const around = targets.subarray(offsets[unit], offsets[unit + 1]);
+		const touched = new Set([from, to, ...Array.from(around, (v) => this.assignment[v])]);
+		touched.delete(-1);
+		return [...touched];
 	}
 
 	/** Figures of one territory; worked out only if it was touched since. */

@@ -25,9 +25,7 @@ export function territoryFigures(
 		keptUnits: kept.length,
 		gainedUnits: gained.length,
 		lostUnits: lost.length,
-		measures: problem.measures.map((_, m) =>
-			measureFigures(context, m, t, { units, gained, lost }),
-		),
+		measures: problem.measures.map((_, m) => measureFigures(context, m, t, changes)),
 		gainedCost: gained.reduce((sum, u) => sum + (problem.cost ? problem.cost[u] : 1), 0),
 		cutBorders: cutOf(context, t, units, assignment),
 		torn: (base >= 0 && !closing && !isHome) || !isWhole(context, t, units, assignment),
