@@ -91,7 +91,7 @@ export async function joinAgain(
 		const entered = await insertMeasureTable(trx, {
 			...copy,
 			state: 'open',
-			options: storedOptions({ ...optionsOf(row), existing: 'replace' }),
+			options: storedOptions(optionsOf(row)),
 			source: JSON.stringify(row.source),
 		});
 		return entered.number;
