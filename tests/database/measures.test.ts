@@ -58,12 +58,12 @@ describe('a table with errors', () => {
 		expect(source).toMatchObject({ format: 'xlsx', sheet: 'Figures', headingRow: 1 });
 		expect(join).toMatchObject({ choice: { column: 0, by: 'name' }, joined: 5, open: 2 });
 		expect(join.counts).toMatchObject({ exact: 4, folded: 1 });
-		expect(join.list.rows.map(({ fileRow, text, offers }) => [fileRow, text, offers[0]?.key])).toEqual(
-			[
-				[3, 'Belmoor', '02'],
-				[8, 'Total', undefined],
-			],
-		);
+		expect(
+			join.list.rows.map(({ fileRow, text, offers }) => [fileRow, text, offers[0]?.key]),
+		).toEqual([
+			[3, 'Belmoor', '02'],
+			[8, 'Total', undefined],
+		]);
 		expect(join.doubled).toMatchObject({ all: 1, regions: [{ key: '03', rows: [4, 5] }] });
 		expect(join.missing.regions.map(({ key }) => key)).toEqual(['02', '06']);
 		const accounts = outcome.find(({ choice }) => choice.name === 'Accounts');
@@ -108,7 +108,13 @@ describe('a table with errors', () => {
 		await takeTable(shop, analyst, sheet, table, true);
 		const { measures, textColumns } = await deskMeasures(shop, analyst, sheet);
 		expect(measures).toMatchObject([
-			{ name: 'Accounts', values: [10, 20, 35, -4, 50, null], missing: 1, total: 111, stale: false },
+			{
+				name: 'Accounts',
+				values: [10, 20, 35, -4, 50, null],
+				missing: 1,
+				total: 111,
+				stale: false,
+			},
 			{ name: 'Hours', unit: 'h', values: [1.5, 2.5, 1, 4, 5, null], confidential: true },
 		]);
 		expect(textColumns).toMatchObject([

@@ -1,5 +1,6 @@
 import { Readable } from 'node:stream';
 import type { MeasureSent } from '../../schemas/api/measures.ts';
+import type { TableReading } from '../../schemas/measure-forms.ts';
 import type { DeskMeasure } from '../../schemas/desk-territories.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Received } from '../files/index.ts';
@@ -10,7 +11,7 @@ import { sheetOf } from './draft.service.ts';
 import { optionsOf } from './measure-options.ts';
 import { takeTable } from './measure-taking.service.ts';
 import { dropTable } from './measure-upkeep.service.ts';
-import { enterTable, readBytes } from './measure-upload.service.ts';
+import { enterTable, readBytes } from './measure-entry.ts';
 import { deskMeasures } from './measures.service.ts';
 import { Conflict, NotFound, Unfit } from './outcomes.ts';
 
@@ -147,9 +148,8 @@ async function enterFed(
 	number: number,
 	{ name, sent, file }: { name: string; sent: MeasureSent; file: Received },
 ): Promise<number> {
-	const reading = {
-		...{ delimiter: ',', encoding: 'utf-8', decimal: '.', headingRow: 1, headingRows: 1 },
-	} as const;
+	const text = { delimiter: ',', encoding: 'utf-8', decimal: '.' } as const;
+	const reading: TableReading = { ...text, headingRow: 1, headingRows: 1 };
 	try {
 		const read = await readBytes(shop, file.path, 'sent.csv', reading);
 		const rules = { doubled: 'refuse', empty: 'missing', notNumber: 'refuse' } as const;
