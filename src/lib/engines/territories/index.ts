@@ -22,3 +22,5 @@ export { relieve } from './relieve.ts';
 export { checkPlan } from './check-plan.ts';
 export { ruleFaults } from './check-rules.ts';
 export { checkWitness } from './check-witness.ts';
+export { rebalance } from './rebalance.ts';
+export { planOf } from './plan-of.ts';
