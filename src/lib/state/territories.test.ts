@@ -82,6 +82,7 @@ function given(changes: Partial<DeskTerritories['draft']> = {}): DeskTerritories
 			},
 		],
 		textColumns: [],
+		inkNote: null,
 		geometry: { at: [], outlineMetres: [] },
 		proposals: [],
 		handovers: [],
