@@ -48,6 +48,9 @@ export class Desk {
 	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
 	view: 'sheet' | 'table' | 'territories' = $state('sheet');
+	/** figures looked at beside the regions in their table */
+	figures: { name: string; unit: string; values: readonly (number | string | null)[] } | null =
+		$state.raw(null);
 
 	/** what the stage of territories works on, once it was opened or looked up */
 	territories: TerritoryDesk | null = $state.raw(null);
