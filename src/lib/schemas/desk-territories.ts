@@ -192,6 +192,8 @@ export interface MeasureTableNote {
 	confidential: boolean;
 	createdAt: string;
 	createdBy: string | null;
+	takenAt: string | null;
+	takenBy: string | null;
 	measures: { id: string; name: string; unit: string; kind: 'number' | 'text' }[];
 	stale: boolean;
 }

@@ -16,6 +16,7 @@ import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
+import type { TerritoryDesk } from './territories.svelte';
 
 export interface DeskStart {
 	sheet: DeskSheet;
@@ -45,7 +46,15 @@ export class Desk {
 	/** whether every border that some reader could miss stands out on the sheet */
 	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
-	view: 'sheet' | 'table' = $state('sheet');
+	view: 'sheet' | 'table' | 'territories' = $state('sheet');
+	/** figures looked at beside the regions in their table */
+	figures: { name: string; unit: string; values: readonly (number | string | null)[] } | null =
+		$state.raw(null);
+
+	/** what the stage of territories works on, once it was opened or looked up */
+	territories: TerritoryDesk | null = $state.raw(null);
+	/** whether the sheet is coloured by territory */
+	byTerritory = $state(false);
 
 	/** what is known about the draft as it stands */
 	answer: DeskColouring | null = $state.raw(null);
@@ -73,8 +82,12 @@ export class Desk {
 			this.drawn?.sizesMm ?? null,
 		),
 	);
+	/** what is planned on the sheet now, when it is territories */
+	planning = $derived(this.byTerritory ? this.territories : null);
+	/** what the sheet paints: the ink of every region, or of its territory */
+	paints = $derived(this.planning?.regionInks ?? this.inks);
 	uses = $derived.by(() =>
-		inkUse(this.inks, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),
+		inkUse(this.paints, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),
 	);
 
 	#start: DeskStart;
@@ -108,6 +121,11 @@ export class Desk {
 			onchange: (document) => this.#recolour(document),
 			onsaved: ({ colouring }) => this.#adoptSaved(colouring),
 		});
+	}
+
+	/** the draft that undo, redo and saving speak of */
+	get inHand(): DraftState<Draft, DraftSaved> | TerritoryDesk['draft'] {
+		return this.planning?.draft ?? this.draft;
 	}
 
 	may(action: DeskSheet['rights'][number]): boolean {

@@ -26,6 +26,7 @@ export type ProgramOutcome =
 			bound: number;
 			/** of each row, for a program without whole columns, else null */
 			prices: Float64Array | null;
+			spent: Spent;
 	  }
 	/** `ray`: weights on the rows that prove it (see provesInfeasible), where the solver gave them */
 	| { status: 'infeasible'; ray: Float64Array | null }
@@ -38,11 +39,19 @@ export type ProgramOutcome =
 			/** no point costs less; -Infinity where nothing is known */
 			bound: number;
 			prices: Float64Array | null;
+			spent: Spent;
 	  };
+
+/** What the run took of its budgets. */
+export interface Spent {
+	nodes: number;
+	iterations: number;
+}
 
 const TOLERANCE = 1e-6;
 /** seconds; the solver refuses Infinity */
 const FOREVER = 1e9;
+const nothing = { values: null, objective: null, prices: null };
 let loading: Promise<Highs> | null = null;
 
 /**
@@ -59,6 +68,7 @@ export async function solveProgram(
 	limits: ProgramLimits = {},
 ): Promise<ProgramOutcome> {
 	mustBeSound(program);
+	if (program.columns === 0) return withoutColumns(program);
 	loading ??= import('highs').then(({ default: load }) => load());
 	const highs = await loading;
 	try {
@@ -67,8 +77,23 @@ export async function solveProgram(
 		// Out of memory ends the whole instance: the next call loads a fresh one.
 		if (!(error instanceof WebAssembly.RuntimeError)) throw error;
 		loading = null;
-		return { status: 'limit', values: null, objective: null, bound: -Infinity, prices: null };
+		return { status: 'limit', ...nothing, bound: -Infinity, spent: { nodes: 0, iterations: 0 } };
 	}
+}
+
+function withoutColumns({ rowLower, rowUpper }: Program): ProgramOutcome {
+	if (rowLower.some((low, row) => low > 0 || rowUpper[row] < 0)) {
+		return { status: 'infeasible', ray: null };
+	}
+	const spent = { nodes: 0, iterations: 0 };
+	return {
+		status: 'optimal',
+		values: new Float64Array(),
+		objective: 0,
+		bound: 0,
+		prices: null,
+		spent,
+	};
 }
 
 function solveWith(highs: Highs, model: Model, program: Program, limits: ProgramLimits) {
@@ -146,16 +171,26 @@ function outcomeOf(
 		return { status: 'infeasible', ray: ray ? Float64Array.from(ray.values) : null };
 	}
 	if (status === modelStatus.unbounded) return { status: 'unbounded' };
+	const spent = spentBy(model);
 	const found = Number(model.info.get('primal_solution_status')) === solutionStatus.feasible;
+	// asked for earlier, the solver throws
+	if (!found)
+		return { status: 'limit', ...nothing, bound: mixed ? mixedBound(model) : -Infinity, spent };
 	const solution = model.getSolution();
 	const values = found ? rounded(program, solution.colValue) : null;
 	const objective = values && costOf(program, values);
 	const prices = mixed || solution.rowDual.length !== program.rows ? null : solution.rowDual;
 	const bound = mixed ? mixedBound(model) : prices ? boundFromPrices(program, prices) : -Infinity;
 	if (status === modelStatus.optimal && values && objective !== null) {
-		return { status: 'optimal', values, objective, bound, prices };
+		return { status: 'optimal', values, objective, bound, prices, spent };
 	}
-	return { status: 'limit', values, objective, bound, prices };
+	return { status: 'limit', values, objective, bound, prices, spent };
+}
+
+function spentBy(model: Model): Spent {
+	const nodes = Number(model.info.get('mip_node_count'));
+	const simplex = Number(model.info.get('simplex_iteration_count'));
+	return { nodes: Math.max(0, nodes), iterations: Math.max(0, simplex) };
 }
 
 function mixedBound(model: Model): number {

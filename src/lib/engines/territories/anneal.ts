@@ -1,11 +1,12 @@
 import { BlockMover } from './block-mover.ts';
 import { canLeave, type ContiguityScratch } from './contiguity.ts';
 import { Dice, rises } from './dice.ts';
+import { wishEnergy, type Wishes } from './search-energy.ts';
 import { Penalty } from './search-penalty.ts';
 import type { SearchState } from './search-state.ts';
 
 /** How an annealing goes; weights are in moves of mean cost. */
-export interface AnnealSettings {
+export interface AnnealSettings extends Wishes {
 	proposals: number;
 	seed: number;
 	/** temperature at the start and at the end */
@@ -14,12 +15,10 @@ export interface AnnealSettings {
 	/** penalty for a mean unit outside tolerance, at the start and at the end */
 	loose: number;
 	strict: number;
-	/** weight of the quadratic term at the start and at the end */
+	/** penalty at the end for being outside tolerance at all, however little */
+	step: number;
+	/** weight of the quadratic term at the start; it fades to `spreadEnd` */
 	spread: number;
-	spreadEnd: number;
-	/** weight of a cut border, and of a move of mean cost */
-	cutWeight: number;
-	moveWeight: number;
 	/** share of proposals that are chains of two steps, of 65,536 */
 	chains: number;
 	/** territories that take part; all others stay as they are */
@@ -96,12 +95,13 @@ export class Annealer {
 	}
 
 	private cool(share: number): void {
-		const { hot, cold, loose, strict, spread, spreadEnd, territories } = this.settings;
+		const { hot, cold, loose, strict, step, spread, spreadEnd, territories } = this.settings;
 		this.temperature = hot * (cold / hot) ** share;
 		const fade = Math.max(0, 1 - share / 0.7);
 		this.state.sumLoads();
 		this.penalty.weigh(
 			loose * (strict / loose) ** share,
+			step * share ** 2,
 			spreadEnd + (spread - spreadEnd) * fade,
 			territories,
 		);
@@ -118,22 +118,8 @@ export class Annealer {
 		return count;
 	}
 
-	private energy(): number {
-		const { moveWeight, cutWeight, spreadEnd, territories } = this.settings;
-		let spread = 0;
-		if (spreadEnd > 0) {
-			const { prepared, curve } = this.state.terms;
-			for (const t of territories) {
-				for (let at = t; at < curve.length; at += prepared.territories) {
-					spread += (this.state.loads[at] - prepared.targets[at]) ** 2 * curve[at];
-				}
-			}
-		}
-		return moveWeight * this.state.cost + cutWeight * this.state.cuts + spreadEnd * spread;
-	}
-
 	private keepBest(): void {
-		const energy = this.energy();
+		const energy = wishEnergy(this.state, this.settings, this.settings.territories);
 		if (energy >= this.bestEnergy - 1e-9 || !this.isSound()) return;
 		this.bestEnergy = energy;
 		for (let i = 0; i < this.units.length; i++) {

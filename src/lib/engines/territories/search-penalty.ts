@@ -2,12 +2,14 @@ import type { SearchState } from './search-state.ts';
 import type { SearchTerms } from './search-terms.ts';
 
 /**
- * What a territory's loads cost the search, in moves: `excess` for each mean unit outside tolerance and
+ * What a territory's loads cost the search, in moves: `excess` for each mean unit outside tolerance,
+ * `step` for being outside at all, and
  * `spread` times the squared distance from the target over the width of the band. The second, which
  * fades, lets a surplus travel through territories that are within tolerance.
  */
 export class Penalty {
 	excess = 0;
+	step = 0;
 	spread = 0;
 	/** penalty of each territory at its loads of now */
 	readonly now: Float64Array;
@@ -21,8 +23,9 @@ export class Penalty {
 	}
 
 	/** Sets both weights and reckons every territory in `territories` afresh. */
-	weigh(excess: number, spread: number, territories: Int32Array): void {
+	weigh(excess: number, step: number, spread: number, territories: Int32Array): void {
 		this.excess = excess;
+		this.step = step;
 		this.spread = spread;
 		for (const t of territories) this.now[t] = this.at(t, -1, -1);
 	}
@@ -43,7 +46,8 @@ export class Penalty {
 			if (lost >= 0) load -= loads[m * units + lost];
 			const off = load - targets[at];
 			const over = load > greatest[at] ? load - greatest[at] : load < least[at] ? least[at] - load : 0;
-			sum += this.excess * over * perUnit[m] + this.spread * off * off * curve[at];
+			if (over > 0) sum += this.step + this.excess * over * perUnit[m];
+			sum += this.spread * off * off * curve[at];
 		}
 		return sum;
 	}

@@ -7,3 +7,9 @@ export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
 export { checkColouringJson } from './checks/check-colouring.work.ts';
 export { checkPaletteJson } from './checks/check-palette.work.ts';
 export { sealEdition } from './seal.work.ts';
+export {
+	nearestRegions,
+	readMeasureTable,
+	reviewMeasureTable,
+	takeMeasureTable,
+} from './measures.work.ts';

@@ -1,6 +1,11 @@
 import type { DeskMeasure, DeskTextColumn } from '../../schemas/desk-territories.ts';
+import type { Standing } from '../jobs/measure-outcome.ts';
 import type { Db } from '../database/connection.ts';
-import { readMeasures, type MeasureRow } from '../repositories/measures.repository.ts';
+import {
+	readMeasures,
+	type MeasureRow,
+	type MeasureTableRow,
+} from '../repositories/measures.repository.ts';
 
 export interface MeasureColumns {
 	measures: DeskMeasure[];
@@ -41,3 +46,12 @@ function measure(row: MeasureRow, values: (number | null)[], present?: string): 
 		stale: row.boundary_set_id !== present,
 	};
 }
+
+/** What a table would be held against when it is taken over: what is joined to the same boundaries. */
+export const standingOf = (rows: MeasureRow[], table: MeasureTableRow): Standing[] =>
+	rows.map((row) => ({
+		...{ id: row.id, name: row.name, unit: row.unit, kind: row.kind },
+		confidential: row.confidential,
+		comparable: row.boundary_set_id === table.boundary_set_id,
+		...{ values: row.values, texts: row.texts },
+	}));
