@@ -1,5 +1,6 @@
 /** Everything that runs in a thread, by name: called through a `Pool`, in the web process and the worker. */
 export { colourDraft, recheck } from './colour.work.ts';
+export { inkTerritories } from './ink-territories.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
 export { readFile } from './read.work.ts';
 export { sheetBordersJson } from './checks/sheet-borders.work.ts';
