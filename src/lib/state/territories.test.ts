@@ -85,6 +85,7 @@ function given(changes: Partial<DeskTerritories['draft']> = {}): DeskTerritories
 			},
 		],
 		textColumns: [],
+		inkNote: null,
 		geometry: { at: [], outlineMetres: [] },
 		proposals: [],
 		handovers: [],

@@ -9,6 +9,8 @@ import type { Row } from '../database/schema.ts';
 const working = { intakes: 'reading', proposals: 'running' } as const;
 export type ClaimTable = keyof typeof working;
 
+type ClaimedRow<T extends ClaimTable> = Row<T> & { claim: string | null; attempts: number };
+
 /** A row as the one who works on it holds it. */
 export type Claim = { id: string; claim: string };
 
@@ -20,8 +22,8 @@ export async function claimRow<T extends ClaimTable>(
 	db: Db,
 	table: T,
 	id: string,
-): Promise<Row<T> | undefined> {
-	const { rows } = await sql<Row<T>>`
+): Promise<ClaimedRow<T> | undefined> {
+	const { rows } = await sql<ClaimedRow<T>>`
 		update ${sql.table(table)}
 		set state = ${working[table]}, claim = gen_random_uuid(), attempts = attempts + 1,
 			heard_at = now(), updated_at = now()

@@ -124,8 +124,8 @@ export interface ProposalChange {
 }
 
 /**
- * Changes a proposal that is in one of these states; whoever worked on it loses the claim. Answers false
- * when it was in none of them.
+ * Changes a proposal that is in one of these states; with another state whoever worked on it loses the
+ * claim. Answers false when it was in none of them.
  */
 export async function changeProposal(
 	trx: Db,
@@ -139,7 +139,7 @@ export async function changeProposal(
 			...plain,
 			...(request === undefined ? {} : { request }),
 			...(result === undefined ? {} : { result }),
-			claim: null,
+			...(plain.state ? { claim: null } : {}),
 			updated_at: sql`now()`,
 		})
 		.where('id', '=', id)
