@@ -19,7 +19,7 @@ import {
 	confirmHandover,
 	withdrawHandover,
 } from '../../src/lib/server/services/handover-work.service.ts';
-import { NotFound, Refused } from '../../src/lib/server/services/outcomes.ts';
+import { NotFound } from '../../src/lib/server/services/outcomes.ts';
 import { join, newTeam, openHouse } from '../support/house.ts';
 import { adopt, evenedOut, firm, plannedSheet, saveTerritories } from '../support/planned-sheet.ts';
 import { createWorkshop, type TestWorkshop } from '../support/workshop.ts';

@@ -22,18 +22,20 @@ import { Conflict, NotFound, Refused } from './outcomes.ts';
 import { territoryState, type TerritoryState } from './territory-state.ts';
 
 type Reading = Pick<Workshop, 'db'>;
+type SheetName = { number: number; name: string };
 
 /** The lists of a sheet, the newest first, and the proposals from which one can be made. */
 export async function handoverList(
 	shop: Reading,
 	member: Member,
 	number: number,
-): Promise<{ lists: HandoverNote[]; sources: HandoverSource[] }> {
+): Promise<{ sheet: SheetName; lists: HandoverNote[]; sources: HandoverSource[] }> {
 	requireAccess(member, 'measures.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	const now = await territoryState(shop.db, sheet);
 	const sources = await adoptedProposals(shop.db, sheet.id);
 	return {
+		sheet: { number: sheet.number, name: sheet.name },
 		lists: await handoverNotes(shop.db, now),
 		sources: sources.map(({ number: of, name, listed }) => ({
 			...{ number: of, name },

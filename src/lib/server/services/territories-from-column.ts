@@ -33,7 +33,10 @@ export function fromColumn(
 	if (used.length === 0) throw new Unfit('empty-column', 'The column has no word in it.');
 	if (used.length > most) {
 		const count = used.length.toLocaleString('en-GB');
-		throw new Unfit('too-many-territories', `The column names ${count} territories; 2,000 can be kept.`);
+		throw new Unfit(
+			'too-many-territories',
+			`The column names ${count} territories; 2,000 can be kept.`,
+		);
 	}
 	const document = { ...draft, assignment, territories: listed(draft, used, assignment) };
 	return {
