@@ -1,6 +1,6 @@
 import { checkColouring, colour, type ColouringProblem } from '../../engines/colouring/index.ts';
 import { buildGraph } from '../../engines/graph/index.ts';
-import { territoryGraph } from '../../engines/territories/index.ts';
+import { territoryGraph } from '../../engines/territories/territory-graph.ts';
 import type { Task } from './task-port.ts';
 
 export interface InkTerritoriesInput {

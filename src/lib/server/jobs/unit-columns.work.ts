@@ -1,5 +1,5 @@
 import { decodeCoverage } from '../../engines/boundaries/index.ts';
-import { unitGeometry } from '../../engines/territories/index.ts';
+import { unitGeometry } from '../../engines/territories/coverage-geometry.ts';
 import type { Task } from './task-port.ts';
 
 /** Where the regions of a stored coverage lie and how long their outlines are, as plain lists. */
