@@ -2,6 +2,8 @@ import { svelte } from '@sveltejs/vite-plugin-svelte';
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
+const alias = { $lib: fileURLToPath(new URL('src/lib', import.meta.url)) };
+
 /**
  * Four suites, each started on its own by `npm test`. Engines and published values need nothing;
  * database and faults need DATABASE_URL; journeys need a running product (MERESTONE_URL).
@@ -12,6 +14,7 @@ export default defineConfig({
 			{
 				// compiles the state classes, which are written in runes
 				plugins: [svelte()],
+				resolve: { alias },
 				test: {
 					name: 'engines',
 					include: [
@@ -23,7 +26,7 @@ export default defineConfig({
 				},
 			},
 			{
-				resolve: { alias: { $lib: fileURLToPath(new URL('src/lib', import.meta.url)) } },
+				resolve: { alias },
 				test: {
 					name: 'database',
 					include: ['tests/database/**/*.test.ts', 'tests/faults/**/*.test.ts'],

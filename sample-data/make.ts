@@ -1,4 +1,9 @@
 import { writeFileSync } from 'node:fs';
+import { exportTableCsv } from '../src/lib/engines/exports/data-table.ts';
+import { exportWorkbook } from '../src/lib/engines/exports/workbook.ts';
+import { asReceived } from './as-received.ts';
+import { distributor } from './distributor.ts';
+import { distributorTables } from './distributor-tables.ts';
 import { geojsonText } from './geojson.ts';
 import { shapeRepublic } from './republic.ts';
 import { secondSupplier } from './second-supplier.ts';
@@ -14,3 +19,12 @@ const districts = survey(shapeRepublic(seed), seed);
 writeFileSync(here('tavaroe.geojson'), geojsonText(districts, 'Districts of Tavaröe'));
 writeFileSync(here('tavaroe-survey-grid.zip'), shapefileZip(districts, 'tavaroe'));
 writeFileSync(here('tavaroe-second-supplier.geojson'), secondSupplier(districts, seed));
+
+const firm = distributor(districts, seed);
+const { outlets, territories, ferries } = distributorTables(firm);
+const workbook = await exportWorkbook([outlets, territories, ferries]);
+writeFileSync(here('quellorn-outlets.csv'), exportTableCsv(outlets));
+writeFileSync(here('quellorn-territories.csv'), exportTableCsv(territories));
+writeFileSync(here('quellorn-ferries.csv'), exportTableCsv(ferries));
+writeFileSync(here('quellorn-outlets.xlsx'), workbook);
+writeFileSync(here('quellorn-as-received.xlsx'), await asReceived(firm, seed));

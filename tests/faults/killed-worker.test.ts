@@ -5,10 +5,7 @@ import type { Member } from '../../src/lib/server/access/member.ts';
 import { openBoss, queueOf } from '../../src/lib/server/jobs/queue.ts';
 import { runIntake } from '../../src/lib/server/jobs/intake.job.ts';
 import { acceptIntake } from '../../src/lib/server/services/intake-end.service.ts';
-import {
-	claimIntake,
-	releaseSilent,
-} from '../../src/lib/server/repositories/intakes.repository.ts';
+import { claimRow, releaseSilent } from '../../src/lib/server/repositories/claims.repository.ts';
 import {
 	beginIntake,
 	cancelIntake,
@@ -79,13 +76,13 @@ describe('a worker that is killed in the middle of a file', () => {
 describe('what is read twice counts once', () => {
 	it('a reader that was taken for dead can store nothing any more', async () => {
 		const id = await upload(bytesOf(conterminousStates()));
-		const late = await claimIntake(shop.db, id);
+		const late = await claimRow(shop.db, 'intakes', id);
 		await shop.db
 			.updateTable('intakes')
 			.set({ heard_at: new Date(Date.now() - 60_000) })
 			.where('id', '=', id)
 			.execute();
-		expect(await releaseSilent(shop.db, 15)).toEqual([id]);
+		expect(await releaseSilent(shop.db, 'intakes', 15)).toEqual([id]);
 		await runIntake(shop, id, new AbortController().signal);
 		const before = await sheetList(shop, member);
 		const file = await shop.files.local(late?.file_digest ?? '');

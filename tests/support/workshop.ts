@@ -33,7 +33,7 @@ export async function createWorkshop(): Promise<TestWorkshop> {
 		...{ url: database.url, db: database.db, data, pool, checks: pool, asked },
 		files: folderStore(folder),
 		queue: {
-			send: async (_trx, _name, { intakeId }) => void asked.push(intakeId),
+			send: async (_trx, _name, data) => void asked.push(Object.values<string>(data)[0]),
 			stop: async () => undefined,
 		},
 		async stored() {

@@ -46,3 +46,10 @@ export const date = (value: Date | string): string => day.format(new Date(value)
 /** "14:06" in the reader's own zone; call it in the browser only */
 export const clock = (value: Date | string): string =>
 	new Date(value).toLocaleTimeString('en-GB', { hour: '2-digit', minute: '2-digit' });
+
+const hundredth = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 2 });
+const digits = new Intl.NumberFormat('en-GB', { maximumSignificantDigits: 3 });
+
+/** A figure as it was measured, its unit behind it: "12,480", "3.75 h", "0.0125 FTE". */
+export const figure = (value: number, unit = ''): string =>
+	`${(Math.abs(value) < 1 ? digits : hundredth).format(value)}${unit && ` ${unit}`}`;

@@ -1,8 +1,9 @@
 import { getContext, setContext } from 'svelte';
+import { bordersForSheet } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Reader } from '$lib/engines/palettes/palette';
-import type { DeskColouring, DeskSheet } from '$lib/schemas/desk';
+import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import { Colourer, type ColourReply } from './colourer';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
@@ -10,11 +11,13 @@ import { inkUse } from './ink-use';
 import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { colouringParts, problemOf } from './problem-of-draft';
+import { rebase } from './rebase';
 import { rehearsals } from './rehearsals';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
+import type { TerritoryDesk } from './territories.svelte';
 
 export interface DeskStart {
 	sheet: DeskSheet;
@@ -22,8 +25,8 @@ export interface DeskStart {
 	address: string;
 	/** name that goes with a lock */
 	userName: string | null;
-	save: SaveDraft;
-	keeper: Keeper | null;
+	save: SaveDraft<Draft, DraftSaved>;
+	keeper: Keeper<Draft> | null;
 	/** says what was found, in one sentence; the engine's own words */
 	sentence: (result: ColouringResult, sheet: DeskSheet, draft: Draft) => string;
 }
@@ -31,7 +34,7 @@ export interface DeskStart {
 /** Everything on the desk of one sheet: what the server gave, the draft on top of it, what is selected. */
 export class Desk {
 	sheet: DeskSheet = $state.raw()!;
-	readonly draft: DraftState;
+	readonly draft: DraftState<Draft, DraftSaved>;
 	readonly address: string;
 	readonly userName: string | null;
 
@@ -44,7 +47,15 @@ export class Desk {
 	/** whether every border that some reader could miss stands out on the sheet */
 	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
-	view: 'sheet' | 'table' = $state('sheet');
+	view: 'sheet' | 'table' | 'territories' = $state('sheet');
+	/** figures looked at beside the regions in their table */
+	figures: { name: string; unit: string; values: readonly (number | string | null)[] } | null =
+		$state.raw(null);
+
+	/** what the stage of territories works on, once it was opened or looked up */
+	territories: TerritoryDesk | null = $state.raw(null);
+	/** whether the sheet is coloured by territory */
+	byTerritory = $state(false);
 
 	/** what is known about the draft as it stands */
 	answer: DeskColouring | null = $state.raw(null);
@@ -59,6 +70,12 @@ export class Desk {
 
 	numbers = $derived(numberRegions(this.sheet.regions.key));
 	standing = $derived.by(() => standings(this.sheet.borders, this.draft.document, this.numbers));
+	/** the borders that ask for two inks, those added by hand among them */
+	countedBorders = $derived.by(() => {
+		const { regions, borders } = this.sheet;
+		const { pointTouches, struck, added } = this.draft.document;
+		return bordersForSheet(regions.key, borders, { pointTouches, struck, added });
+	});
 	links = $derived(linkRegions(this.sheet.regions.key.length, this.sheet.borders));
 	neighbours = $derived(
 		this.selected === null ? [] : neighboursOf(this.selected, this.sheet.borders, this.links),
@@ -72,8 +89,12 @@ export class Desk {
 			this.drawn?.sizesMm ?? null,
 		),
 	);
+	/** what is planned on the sheet now, when it is territories */
+	planning = $derived(this.byTerritory ? this.territories : null);
+	/** what the sheet paints: the ink of every region, or of its territory */
+	paints = $derived(this.planning?.regionInks ?? this.inks);
 	uses = $derived.by(() =>
-		inkUse(this.inks, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),
+		inkUse(this.paints, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),
 	);
 
 	#start: DeskStart;
@@ -97,15 +118,21 @@ export class Desk {
 		this.#asked = colouringParts(start.sheet.draft);
 		this.#remember(start.sheet.draft);
 		this.draft = new DraftState({
-			sheetId: start.sheet.id,
+			place: start.sheet.id,
 			revision: start.sheet.revision,
 			document: start.sheet.draft,
 			savedAt: start.sheet.savedAt,
 			save: start.save,
 			keeper: start.keeper,
+			rebase,
 			onchange: (document) => this.#recolour(document),
 			onsaved: ({ colouring }) => this.#adoptSaved(colouring),
 		});
+	}
+
+	/** the draft that undo, redo and saving speak of */
+	get inHand(): DraftState<Draft, DraftSaved> | TerritoryDesk['draft'] {
+		return this.planning?.draft ?? this.draft;
 	}
 
 	may(action: DeskSheet['rights'][number]): boolean {

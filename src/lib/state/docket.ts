@@ -11,7 +11,7 @@ export interface DocketWords {
 	to?: string;
 }
 export interface DocketStage {
-	id: 'boundaries' | 'borders' | 'colours' | 'palette' | 'layout' | 'editions';
+	id: 'boundaries' | 'borders' | 'colours' | 'palette' | 'layout' | 'measures' | 'editions';
 	title: string;
 	mark: MarkKind | null;
 	words: DocketWords[];
@@ -46,6 +46,7 @@ export const docket = (state: DocketState): DocketStage[] => [
 		],
 	},
 	{ id: 'layout', title: 'Layout', ...layout(state) },
+	...measures(state.sheet),
 	{ id: 'editions', title: 'Editions', ...editions(state) },
 ];
 
@@ -141,6 +142,18 @@ function layout({ draft: { layout: sheet }, drawn }: DocketState): Said {
 				: { text: 'Every name placed' },
 		);
 	return { mark: drawn ? 'clear' : null, words };
+}
+
+function measures({ measures: held }: DeskSheet): DocketStage[] {
+	if (!held) return [];
+	const { count: measured, missing, stale } = held;
+	const words: DocketWords[] = measured
+		? [{ text: counted(measured, 'measure'), to: '#measures' }, { text: '.' }]
+		: [{ text: 'None joined yet' }];
+	if (stale) words.push({ text: 'Joined to earlier boundaries', to: '#tables' });
+	else if (missing) words.push({ text: `${counted(missing, 'value')} missing`, to: '#measures' });
+	const mark = stale ? 'error' : missing ? 'warning' : measured ? 'clear' : null;
+	return [{ id: 'measures', title: 'Measures', mark, words }];
 }
 
 function editions({ sheet, changedSinceEdition }: DocketState): Said {

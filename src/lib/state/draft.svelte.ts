@@ -1,30 +1,30 @@
-import type { Draft } from '$lib/engines/editions/draft';
-import type { DraftSaved, DraftStale } from '$lib/schemas/desk';
 import type { Keeper, KeptDraft } from './kept-drafts';
-import { rebase } from './rebase';
-import type { SaveAnswer, SaveDraft } from './save-draft';
+import type { SaveAnswer, SaveDraft, Saved, Stale } from './save-draft';
 
 export type Saving =
 	'saved' | 'waiting' | 'saving' | 'offline' | 'stale' | 'signed-out' | 'refused';
 
-interface Step {
+interface Step<Doc> {
 	/** what the change did, for "Undo: lock Verton" */
 	label: string;
-	before: Draft;
-	after: Draft;
+	before: Doc;
+	after: Doc;
 }
 
-export interface DraftStart {
-	sheetId: string;
+export interface DraftStart<Doc, Answer extends Saved<Doc>> {
+	/** under which name the browser keeps what the server does not have */
+	place: string;
 	revision: number;
-	document: Draft;
+	document: Doc;
 	savedAt: string;
-	save: SaveDraft;
-	keeper: Keeper | null;
+	save: SaveDraft<Doc, Answer>;
+	keeper: Keeper<Doc> | null;
+	/** puts mine on top of theirs; `both` names what each had changed differently */
+	rebase: (base: Doc, mine: Doc, theirs: Doc) => { draft: Doc; both: string[] };
 	/** told after each save, with what the server computed */
-	onsaved?: (saved: DraftSaved) => void;
+	onsaved?: (saved: Answer) => void;
 	/** told after each change of the document, by whatever way */
-	onchange?: (document: Draft) => void;
+	onchange?: (document: Doc) => void;
 }
 
 const quiet = 700;
@@ -32,31 +32,31 @@ const retries = [2_000, 5_000, 15_000, 30_000];
 const mostSteps = 200;
 
 /**
- * The draft being worked on: one document, a line of steps back and forward, saved by itself a moment
+ * A draft being worked on: one document of any kind, a line of steps back and forward, saved by itself a moment
  * after each change, kept in this browser until the server has it. Never overwrites what somebody
  * else saved: it stops, says who and when, and asks.
  */
-export class DraftState {
-	document: Draft = $state.raw()!;
+export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
+	document: Doc = $state.raw()!;
 	savedAt: string = $state()!;
 	saving: Saving = $state('saved');
-	stale: DraftStale | null = $state.raw(null);
+	stale: Stale<Doc> | null = $state.raw(null);
 	refusal: string = $state('');
 	/** whether the browser could keep the work that the server does not have */
 	kept: boolean = $state(true);
 	/** when what is shown was restored from this browser: since when it had been kept */
 	restoredFrom: string | null = $state(null);
-	past: Step[] = $state.raw([]);
-	future: Step[] = $state.raw([]);
+	past: Step<Doc>[] = $state.raw([]);
+	future: Step<Doc>[] = $state.raw([]);
 
-	#start: DraftStart;
+	#start: DraftStart<Doc, Answer>;
 	#revision: number;
-	#base: Draft;
+	#base: Doc;
 	#timer: ReturnType<typeof setTimeout> | undefined;
 	#failures = 0;
 	#running = false;
 
-	constructor(start: DraftStart) {
+	constructor(start: DraftStart<Doc, Answer>) {
 		this.#start = start;
 		this.#revision = start.revision;
 		this.#base = start.document;
@@ -82,7 +82,7 @@ export class DraftState {
 	}
 
 	/** One step that can be undone. Steps of the same `run` (typing in a field) become one. */
-	change(label: string, make: (draft: Draft) => Draft, run = false) {
+	change(label: string, make: (draft: Doc) => Doc, run = false) {
 		const before = this.document;
 		const after = make(before);
 		if (after === before) return;
@@ -120,7 +120,7 @@ export class DraftState {
 		this.future = [];
 		this.document = stale.document;
 		this.saving = 'saved';
-		await this.#start.keeper?.forget(this.#start.sheetId);
+		await this.#start.keeper?.forget(this.#start.place);
 		this.#start.onchange?.(stale.document);
 	}
 
@@ -128,7 +128,7 @@ export class DraftState {
 	putMineOnTop(): string[] {
 		const { stale } = this;
 		if (!stale) return [];
-		const { draft, both } = rebase(this.#base, this.document, stale.document);
+		const { draft, both } = this.#start.rebase(this.#base, this.document, stale.document);
 		const mine = this.document;
 		this.#adopt(stale);
 		this.past = [...this.past, { label: 'putting both together', before: mine, after: draft }];
@@ -138,7 +138,7 @@ export class DraftState {
 
 	/** Picks up work that was kept in this browser and never reached the server. */
 	async restore() {
-		const kept = await this.#start.keeper?.read(this.#start.sheetId).catch(() => null);
+		const kept = await this.#start.keeper?.read(this.#start.place).catch(() => null);
 		if (!kept || this.dirty) return;
 		this.restoredFrom = kept.keptAt;
 		if (kept.revision === this.#revision) {
@@ -163,13 +163,13 @@ export class DraftState {
 	/** The server has what is shown: just saved, or a change was taken back before it was sent. */
 	async #nothingToSave() {
 		this.saving = 'saved';
-		await this.#start.keeper?.forget(this.#start.sheetId).catch(() => {
+		await this.#start.keeper?.forget(this.#start.place).catch(() => {
 			this.kept = false;
 		});
 	}
 
 	/** The server's page data changed under an untouched draft. */
-	refresh(revision: number, document: Draft, savedAt: string) {
+	refresh(revision: number, document: Doc, savedAt: string) {
 		if (this.dirty || revision <= this.#revision) return;
 		this.#revision = revision;
 		this.#base = document;
@@ -182,14 +182,14 @@ export class DraftState {
 		clearTimeout(this.#timer);
 	}
 
-	#adopt({ revision, document, savedAt }: DraftStale) {
+	#adopt({ revision, document, savedAt }: Stale<Doc>) {
 		this.#revision = revision;
 		this.#base = document;
-		this.savedAt = savedAt;
+		this.savedAt = savedAt ?? this.savedAt;
 		this.stale = null;
 	}
 
-	#restoreStale(kept: KeptDraft) {
+	#restoreStale(kept: KeptDraft<Doc>) {
 		const now = { revision: this.#revision, savedBy: null, savedAt: this.savedAt };
 		this.stale = { ...now, document: this.#base };
 		this.#base = kept.base;
@@ -198,16 +198,16 @@ export class DraftState {
 		this.#start.onchange?.(kept.document);
 	}
 
-	#show(document: Draft) {
+	#show(document: Doc) {
 		this.document = document;
 		this.#start.onchange?.(document);
 		this.#keep(document);
 		if (this.saving !== 'stale' || !this.stale) this.#schedule(quiet);
 	}
 
-	#keep(document: Draft) {
-		const { keeper, sheetId } = this.#start;
-		keeper?.keep(sheetId, { revision: this.#revision, base: this.#base, document }).then(
+	#keep(document: Doc) {
+		const { keeper, place } = this.#start;
+		keeper?.keep(place, { revision: this.#revision, base: this.#base, document }).then(
 			() => (this.kept = true),
 			() => (this.kept = false),
 		);
@@ -219,7 +219,7 @@ export class DraftState {
 		this.#timer = setTimeout(() => void this.saveNow(), wait);
 	}
 
-	async #settle(answer: SaveAnswer, sent: Draft) {
+	async #settle(answer: SaveAnswer<Doc, Answer>, sent: Doc) {
 		if (answer.kind === 'saved') return this.#settleSaved(answer.saved, sent);
 		if (answer.kind === 'stale') {
 			this.stale = answer.stale;
@@ -234,11 +234,12 @@ export class DraftState {
 		}
 	}
 
-	async #settleSaved(saved: DraftSaved, sent: Draft) {
+	async #settleSaved(saved: Answer, sent: Doc) {
 		this.#failures = 0;
 		this.#revision = saved.revision;
-		this.#base = saved.document;
-		if (this.document === sent) this.document = saved.document;
+		const stored = saved.document ?? sent;
+		this.#base = stored;
+		if (this.document === sent) this.document = stored;
 		this.savedAt = saved.savedAt;
 		this.restoredFrom = null;
 		this.#start.onsaved?.(saved);

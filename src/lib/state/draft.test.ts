@@ -1,14 +1,19 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { Draft } from '$lib/engines/editions/draft';
+import type { DraftSaved } from '$lib/schemas/desk';
 import { blankDraft } from '../../../tests/support/blank-draft';
 import { DraftState } from './draft.svelte';
 import { lock } from './draft-edits';
 import type { Keeper, KeptDraft } from './kept-drafts';
+import { rebase } from './rebase';
 import type { SaveAnswer } from './save-draft';
 
+type Answer = SaveAnswer<Draft, DraftSaved>;
 const base = blankDraft();
 
-function keeperOf(kept: KeptDraft | null = null): Keeper & { held: KeptDraft | null } {
+function keeperOf(
+	kept: KeptDraft<Draft> | null = null,
+): Keeper<Draft> & { held: KeptDraft<Draft> | null } {
 	return {
 		held: kept,
 		async keep(_, draft) {
@@ -23,14 +28,15 @@ function keeperOf(kept: KeptDraft | null = null): Keeper & { held: KeptDraft | n
 	};
 }
 
-function open(answers: SaveAnswer[], keeper = keeperOf()) {
+function open(answers: Answer[], keeper = keeperOf()) {
 	const sent: { revision: number; document: Draft }[] = [];
 	const draft = new DraftState({
-		sheetId: 's',
+		place: 's',
 		revision: 3,
 		document: base,
 		savedAt: '2026-12-01T09:00:00Z',
 		keeper,
+		rebase,
 		save: async (revision, document) => {
 			sent.push({ revision, document });
 			return answers.shift() ?? savedAs(revision + 1, document);
@@ -39,7 +45,7 @@ function open(answers: SaveAnswer[], keeper = keeperOf()) {
 	return { draft, sent, keeper };
 }
 
-const savedAs = (revision: number, document: Draft): SaveAnswer => ({
+const savedAs = (revision: number, document: Draft): Answer => ({
 	kind: 'saved',
 	saved: {
 		revision,
@@ -49,7 +55,7 @@ const savedAs = (revision: number, document: Draft): SaveAnswer => ({
 	},
 });
 const theirs = blankDraft({ locks: { d: { ink: 1, cost: 1 } } });
-const stale: SaveAnswer = {
+const stale: Answer = {
 	kind: 'stale',
 	stale: { revision: 9, savedBy: 'Ilse', savedAt: '2026-12-01T10:30:00Z', document: theirs },
 };

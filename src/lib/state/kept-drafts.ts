@@ -1,23 +1,22 @@
-import type { Draft } from '$lib/engines/editions/draft';
-
 /**
  * Work that the server does not have yet, kept in this browser (IndexedDB) from the moment of the
  * change until the server has confirmed it: a lost connection, an ended sign-in, a closed page or a
  * crashed browser loses nothing.
  */
-export interface KeptDraft {
+export interface KeptDraft<Doc> {
 	/** the revision this work began from, and what stood in it */
 	revision: number;
-	base: Draft;
-	document: Draft;
+	base: Doc;
+	document: Doc;
 	/** ISO 8601 */
 	keptAt: string;
 }
 
-export interface Keeper {
-	keep(sheetId: string, draft: Omit<KeptDraft, 'keptAt'>): Promise<void>;
-	read(sheetId: string): Promise<KeptDraft | null>;
-	forget(sheetId: string): Promise<void>;
+/** `place`: which draft it is; one sheet may have several. */
+export interface Keeper<Doc> {
+	keep(place: string, draft: Omit<KeptDraft<Doc>, 'keptAt'>): Promise<void>;
+	read(place: string): Promise<KeptDraft<Doc> | null>;
+	forget(place: string): Promise<void>;
 }
 
 const shelf = 'drafts';
@@ -46,14 +45,14 @@ async function use<T>(
 	}
 }
 
-export const browserKeeper: Keeper = {
-	keep: (sheetId, draft) => {
-		const kept: KeptDraft = { ...draft, keptAt: new Date().toISOString() };
-		return use('readwrite', (store) => store.put(kept, sheetId)).then(() => {});
+export const browserKeeper = <Doc>(): Keeper<Doc> => ({
+	keep: (place, draft) => {
+		const kept: KeptDraft<Doc> = { ...draft, keptAt: new Date().toISOString() };
+		return use('readwrite', (store) => store.put(kept, place)).then(() => {});
 	},
-	read: (sheetId) =>
-		use<KeptDraft | undefined>('readonly', (store) => store.get(sheetId)).then(
+	read: (place) =>
+		use<KeptDraft<Doc> | undefined>('readonly', (store) => store.get(place)).then(
 			(kept) => kept ?? null,
 		),
-	forget: (sheetId) => use('readwrite', (store) => store.delete(sheetId)),
-};
+	forget: (place) => use('readwrite', (store) => store.delete(place)),
+});

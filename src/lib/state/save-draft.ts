@@ -1,19 +1,39 @@
-import type { Draft } from '$lib/engines/editions/draft';
-import type { DraftSaved, DraftStale } from '$lib/schemas/desk';
+/** What a save that was taken answers at least; `document` where the server changed what was sent. */
+export interface Saved<Doc> {
+	revision: number;
+	/** ISO 8601 */
+	savedAt: string;
+	document?: Doc;
+}
+
+/** Somebody else saved first; nothing was overwritten. */
+export interface Stale<Doc> {
+	revision: number;
+	savedBy: string | null;
+	savedAt: string | null;
+	/** what they saved */
+	document: Doc;
+}
 
 /** How the server answered a save, or that it could not be reached. */
-export type SaveAnswer =
-	| { kind: 'saved'; saved: DraftSaved }
-	| { kind: 'stale'; stale: DraftStale }
+export type SaveAnswer<Doc, Answer extends Saved<Doc>> =
+	| { kind: 'saved'; saved: Answer }
+	| { kind: 'stale'; stale: Stale<Doc> }
 	| { kind: 'signed-out' }
 	| { kind: 'refused'; message: string }
 	| { kind: 'unreachable' };
 
-export type SaveDraft = (revision: number, document: Draft) => Promise<SaveAnswer>;
+export type SaveDraft<Doc, Answer extends Saved<Doc>> = (
+	revision: number,
+	document: Doc,
+) => Promise<SaveAnswer<Doc, Answer>>;
 
 /** Saves by `POST {address}`; never throws: every way it can end is an answer. */
 export const saveTo =
-	(address: string, fetcher: typeof fetch = fetch): SaveDraft =>
+	<Doc, Answer extends Saved<Doc>>(
+		address: string,
+		fetcher: typeof fetch = fetch,
+	): SaveDraft<Doc, Answer> =>
 	async (revision, document) => {
 		let response: Response;
 		try {
@@ -33,10 +53,12 @@ export const saveTo =
 		return readAnswer(response);
 	};
 
-async function readAnswer(response: Response): Promise<SaveAnswer> {
+async function readAnswer<Doc, Answer extends Saved<Doc>>(
+	response: Response,
+): Promise<SaveAnswer<Doc, Answer>> {
 	const body: unknown = await response.json().catch(() => null);
-	if (response.ok) return { kind: 'saved', saved: body as DraftSaved };
-	if (response.status === 409) return { kind: 'stale', stale: body as DraftStale };
+	if (response.ok) return { kind: 'saved', saved: body as Answer };
+	if (response.status === 409) return { kind: 'stale', stale: body as Stale<Doc> };
 	return { kind: 'refused', message: sentenceIn(body) };
 }
 

@@ -3,3 +3,5 @@ export { exportSvg, type FaceFiles } from './svg.ts';
 export { exportGeoJson } from './geojson.ts';
 export { csvField, exportCsv } from './csv.ts';
 export { subsetFont } from './subset-font.ts';
+export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';
+export { exportWorkbook } from './workbook.ts';

@@ -38,3 +38,5 @@ export type {
 } from './figures-of.ts';
 export { Board } from './board.ts';
 export { hardTolerance } from './whole-figures.ts';
+export { rebalance } from './rebalance.ts';
+export { planOf } from './plan-of.ts';

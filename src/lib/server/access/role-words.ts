@@ -4,8 +4,8 @@ import type { Role } from './roles.ts';
 export const roleWords: Record<Role, string> = {
 	cartographer: 'Uploads and mends boundaries, decides borders, lays out the sheet',
 	analyst: 'Joins measures, picks palettes, locks inks, asks for colourings',
-	planner: 'Assigns regions to territories and compares proposals',
+	planner: 'Joins measures, assigns regions to territories, compares proposals, hands over moves',
 	designer: 'Works on palettes and layout, takes the issued files',
-	approver: 'Reads what changed and issues editions',
+	approver: 'Reads what changed, issues editions, approves handover lists',
 	admin: 'Looks after members, tokens and the activity log',
 };

@@ -26,6 +26,11 @@ export const actions = [
 	'sheet.delete',
 	'edition.issue',
 	'files.download',
+	'measures.read',
+	'measures.edit',
+	'territories.edit',
+	'handover.edit',
+	'handover.approve',
 ] as const;
 export type Action = (typeof actions)[number];
 
@@ -48,6 +53,12 @@ export const may: Record<Action, readonly Role[]> = {
 	'sheet.delete': ['cartographer', 'admin'],
 	'edition.issue': ['approver'],
 	'files.download': everyone,
+	// figures may be personal or confidential, and a designer's work needs none of them
+	'measures.read': ['cartographer', 'analyst', 'planner', 'approver', 'admin'],
+	'measures.edit': ['analyst', 'planner'],
+	'territories.edit': ['planner'],
+	'handover.edit': ['planner'],
+	'handover.approve': ['approver'],
 };
 
 /** Whether any of these roles may do this. */

@@ -5,7 +5,7 @@ import { plainAnswer } from './answer.ts';
 
 const MEGABYTE = 1024 * 1024;
 /** They read their body as it comes and count it themselves; a file goes straight to the disk. */
-const counted = /^\/(\(app\)\/\[team\]\/upload$|api\/v1\/)/;
+const counted = /^\/(\(app\)\/\[team\]\/(upload|sheets\/\[sheet\]\/measures)$|api\/v1\/)/;
 const draft = '/(app)/[team]/sheets/[sheet]/draft';
 
 /** Up to this much is let run past unread, so that the one who sends it gets to hear the answer. */

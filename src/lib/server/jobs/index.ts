@@ -6,7 +6,8 @@ import { fileStore } from '../files/index.ts';
 import { log } from '../log.ts';
 import { runIntake, wakeSilentIntakes } from './intake.job.ts';
 import { createPool } from './pool.ts';
-import { openBoss, queueOf, type JobData, type JobName } from './queue.ts';
+import { jobNames, openBoss, queueOf, type JobData, type JobName } from './queue.ts';
+import { runRebalance, wakeSilentRebalances } from './rebalance.job.ts';
 import type { Workshop } from './workshop.ts';
 
 type Handler<N extends JobName> = (
@@ -18,6 +19,7 @@ type Handler<N extends JobName> = (
 /** Who does each job; every name has one. */
 export const handlers: { [N in JobName]: Handler<N> } = {
 	intake: (shop, { intakeId }, shutdown) => runIntake(shop, intakeId, shutdown),
+	rebalance: (shop, { proposalId }, shutdown) => runRebalance(shop, proposalId, shutdown),
 };
 
 const wakeMilliseconds = 5_000;
@@ -33,13 +35,13 @@ export async function startJobs(): Promise<() => Promise<void>> {
 	const shop: Workshop = { db: database(), files: fileStore(), queue, pool, checks: pool };
 	const shutdown = new AbortController();
 	const atWork = new Set<Promise<void>>();
-	for (const name of Object.keys(handlers) as JobName[]) {
-		await takeJobs(boss, name, (data) => {
+	const take = <N extends JobName>(name: N) =>
+		takeJobs(boss, name, (data) => {
 			const work = handlers[name](shop, data, shutdown.signal);
 			atWork.add(work);
 			return work.finally(() => atWork.delete(work));
 		});
-	}
+	for (const name of jobNames) await take(name);
 	await shop.files.tidy();
 	const timer = setInterval(() => void wake(shop), wakeMilliseconds);
 	return async () => {
@@ -64,6 +66,6 @@ async function takeJobs<N extends JobName>(
 }
 
 const wake = (shop: Workshop) =>
-	wakeSilentIntakes(shop).catch((error: unknown) =>
-		log.warn({ error: String(error) }, 'could not look for uploads left lying'),
+	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop)]).catch((error: unknown) =>
+		log.warn({ error: String(error) }, 'could not look for work left lying'),
 	);

@@ -3,12 +3,13 @@ import { CompiledQuery } from 'kysely';
 import type { Db } from '../database/connection.ts';
 import { log } from '../log.ts';
 
-/** The jobs there are. Each has a handler in `handlers.ts`; a test holds the two together. */
-export const jobNames = ['intake'] as const;
+/** The jobs there are. Each has a handler in `index.ts`. */
+export const jobNames = ['intake', 'rebalance'] as const;
 export type JobName = (typeof jobNames)[number];
 
 export interface JobData {
 	intake: { intakeId: string };
+	rebalance: { proposalId: string };
 }
 
 export interface Queue {

@@ -1,9 +1,19 @@
 /** Everything that runs in a thread, by name: called through a `Pool`, in the web process and the worker. */
 export { colourDraft, recheck } from './colour.work.ts';
+export { inkTerritories } from './ink-territories.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
+export { judgePlan, rebalancePlan } from './rebalance.work.ts';
 export { readFile } from './read.work.ts';
 export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
 export { checkColouringJson } from './checks/check-colouring.work.ts';
 export { checkPaletteJson } from './checks/check-palette.work.ts';
 export { sealEdition } from './seal.work.ts';
+export {
+	nearestRegions,
+	readMeasureTable,
+	reviewMeasureTable,
+	takeMeasureTable,
+} from './measures.work.ts';
+export { scratchPlan } from './scratch.work.ts';
+export { unitColumns } from './unit-columns.work.ts';

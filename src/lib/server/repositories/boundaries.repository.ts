@@ -209,13 +209,17 @@ export async function acceptFinding(
 	return numUpdatedRows > 0n;
 }
 
-/** Removes a set that no sheet uses any more; false when one still does. */
+/** Removes a set that no sheet, no table and no proposal uses any more; false when one still does. */
 export async function deleteUnusedBoundarySet(trx: Db, id: string): Promise<boolean> {
 	const { numDeletedRows } = await trx
 		.deleteFrom('boundary_sets')
 		.where('id', '=', id)
-		.where(({ not, exists, selectFrom }) =>
-			not(exists(selectFrom('sheets').select('id').where('boundary_set_id', '=', id))),
+		.where(({ and, not, exists, selectFrom }) =>
+			and(
+				(['sheets', 'measure_tables', 'proposals'] as const).map((table) =>
+					not(exists(selectFrom(table).select('id').where('boundary_set_id', '=', id))),
+				),
+			),
 		)
 		.executeTakeFirst();
 	return numDeletedRows > 0n;

@@ -43,53 +43,6 @@ export async function countOpenIntakes(db: Db, teamId: string): Promise<number> 
 	return Number(open);
 }
 
-/**
- * Takes an intake up for reading, if it waits. The answer carries a fresh claim; every later write names it, so that of two readers
- * only the last one counts.
- */
-export const claimIntake = (db: Db, id: string) =>
-	db
-		.updateTable('intakes')
-		.set({
-			state: 'reading',
-			claim: sql`gen_random_uuid()`,
-			attempts: sql`attempts + 1`,
-			heard_at: sql`now()`,
-			updated_at: sql`now()`,
-		})
-		.where('id', '=', id)
-		.where('state', '=', 'waiting')
-		.returningAll()
-		.executeTakeFirst();
-
-/** A sign of life with the progress so far; false when the claim is no longer good (cancelled, taken over). */
-export async function heardOf(
-	db: Db,
-	id: string,
-	claim: string,
-	progress: { step: string; share: number },
-): Promise<boolean> {
-	const { numUpdatedRows } = await db
-		.updateTable('intakes')
-		.set({ ...progress, heard_at: sql`now()`, updated_at: sql`now()` })
-		.where('id', '=', id)
-		.where('claim', '=', claim)
-		.where('state', '=', 'reading')
-		.executeTakeFirst();
-	return numUpdatedRows > 0n;
-}
-
-/** Locks the row of an intake that this claim still holds, until the transaction ends. */
-export const holdClaim = (trx: Db, id: string, claim: string) =>
-	trx
-		.selectFrom('intakes')
-		.selectAll()
-		.where('id', '=', id)
-		.where('claim', '=', claim)
-		.where('state', '=', 'reading')
-		.forUpdate()
-		.executeTakeFirst();
-
 export interface IntakeEnd {
 	state: IntakeState;
 	step: string;
@@ -122,25 +75,3 @@ export async function moveIntake(
 		.executeTakeFirst();
 	return numUpdatedRows > 0n;
 }
-
-/**
- * Lets go of every intake that nobody has spoken for in so long, waiting or being read, and answers which:
- * each is handed to one caller only, and comes up again after as long a silence.
- */
-export async function releaseSilent(db: Db, silentSeconds: number): Promise<string[]> {
-	const rows = await db
-		.updateTable('intakes')
-		.set({ state: 'waiting', claim: null, heard_at: sql`now()` })
-		.where('state', 'in', ['waiting', 'reading'])
-		.where(
-			sql<Date>`coalesce(heard_at, created_at)`,
-			'<',
-			sql<Date>`now() - make_interval(secs => ${silentSeconds})`,
-		)
-		.returning('id')
-		.execute();
-	return rows.map(({ id }) => id);
-}
-
-/** An intake as the one who reads it holds it. */
-export type IntakeClaim = { id: string; claim: string };

@@ -41,6 +41,9 @@ export const holdSheet = (trx: Db, teamId: string, number: number) =>
 		.forUpdate()
 		.executeTakeFirst();
 
+export const findSheetById = (db: Db, id: string) =>
+	db.selectFrom('sheets').selectAll().where('id', '=', id).executeTakeFirst();
+
 export const listSheets = (db: Db, teamId: string) =>
 	db
 		.selectFrom('sheets')

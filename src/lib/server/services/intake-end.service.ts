@@ -1,10 +1,12 @@
 import type { Draft } from '../../engines/editions/draft.ts';
 import type { Trx } from '../database/connection.ts';
+import type { Row } from '../database/schema.ts';
 import type { FileStore } from '../files/index.ts';
 import type { ReadOutcome } from '../jobs/read.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { insertBoundarySet } from '../repositories/boundaries.repository.ts';
-import { holdClaim, moveIntake, type IntakeClaim } from '../repositories/intakes.repository.ts';
+import { holdClaim, type Claim } from '../repositories/claims.repository.ts';
+import { moveIntake } from '../repositories/intakes.repository.ts';
 import { insertColouring, insertDraft, insertSheet } from '../repositories/sheets.repository.ts';
 import { record, type Actor } from './activity.service.ts';
 import { checkedOutcome } from './outcome-of-colouring.ts';
@@ -22,12 +24,12 @@ export type RefusalNote = Pick<Refused, 'code' | 'message' | 'findings'>;
  */
 export async function acceptIntake(
 	shop: Pick<Workshop, 'db'>,
-	claim: IntakeClaim,
+	claim: Claim,
 	read: Accepted,
 ): Promise<boolean> {
 	const outcome = checkedOutcome(read.colouring);
 	return shop.db.transaction().execute(async (trx) => {
-		const intake = await holdClaim(trx, claim.id, claim.claim);
+		const intake = await holdClaim(trx, 'intakes', claim);
 		if (!intake?.file_digest) return false;
 		const boundarySetId = await storeBoundaries(trx, intake, read);
 		const sheet = await insertSheet(trx, {
@@ -52,7 +54,7 @@ export async function acceptIntake(
 	});
 }
 
-type Intake = NonNullable<Awaited<ReturnType<typeof holdClaim>>>;
+type Intake = Row<'intakes'>;
 
 /** What a job does is written down under the one who asked for it. */
 const actorOf = (intake: Intake): Actor => ({
@@ -100,11 +102,11 @@ const storeFirstDraft = (
 /** Notes why a file was refused and forgets its bytes; false when the claim no longer holds. */
 export const refuseIntake = (
 	shop: Pick<Workshop, 'db' | 'files'>,
-	claim: IntakeClaim,
+	claim: Claim,
 	refusal: RefusalNote,
 ): Promise<boolean> =>
 	shop.db.transaction().execute(async (trx) => {
-		const intake = await holdClaim(trx, claim.id, claim.claim);
+		const intake = await holdClaim(trx, 'intakes', claim);
 		if (!intake) return false;
 		await moveIntake(trx, intake.id, ['reading'], {
 			state: 'refused',
@@ -127,11 +129,11 @@ const forget = async (trx: Trx, files: FileStore, digest: string | null): Promis
 /** Gives up on an intake in sight of everybody; its file stays, so that it can be read again on demand. */
 export const failIntake = (
 	shop: Pick<Workshop, 'db'>,
-	claim: IntakeClaim,
+	claim: Claim,
 	message: string,
 ): Promise<boolean> =>
 	shop.db.transaction().execute(async (trx) => {
-		const intake = await holdClaim(trx, claim.id, claim.claim);
+		const intake = await holdClaim(trx, 'intakes', claim);
 		if (!intake) return false;
 		const refusal: RefusalNote = { code: 'reading-failed', message, findings: [] };
 		return moveIntake(trx, intake.id, ['reading'], {
@@ -139,22 +141,5 @@ export const failIntake = (
 			step: '',
 			share: 0,
 			refusal: JSON.stringify(refusal),
-		});
-	});
-
-/** Hands an intake back for another to take up, without counting this attempt when `uncounted`. */
-export const handBackIntake = (
-	shop: Pick<Workshop, 'db'>,
-	claim: IntakeClaim,
-	uncounted: boolean,
-): Promise<boolean> =>
-	shop.db.transaction().execute(async (trx) => {
-		const intake = await holdClaim(trx, claim.id, claim.claim);
-		if (!intake) return false;
-		return moveIntake(trx, intake.id, ['reading'], {
-			state: 'waiting',
-			step: '',
-			share: 0,
-			attempts: intake.attempts - (uncounted ? 1 : 0),
 		});
 	});

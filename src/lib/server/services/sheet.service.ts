@@ -17,6 +17,7 @@ import {
 	readGeometry,
 } from '../repositories/boundaries.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
+import { measureFiles } from '../repositories/measures.repository.ts';
 import {
 	deleteSheet,
 	holdSheet,
@@ -26,6 +27,7 @@ import {
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { documentOf, draftOf, inksBefore, namesIn, sheetOf } from './draft.service.ts';
+import { measureSummary } from './measures.service.ts';
 import { deskColouring } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
@@ -79,6 +81,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		borders: view.borders,
 		findings: await findingsOf(db, view.set.id),
 		editions: await editionsOf(db, sheet.id),
+		measures: mayDo(member, 'measures.read') ? await measureSummary(db, sheet) : null,
 		rights: rightsOf(member),
 	};
 }
@@ -204,11 +207,13 @@ export async function removeSheet(
 			throw new Conflict('issued', 'A sheet with issued editions cannot be deleted.');
 		}
 		const { set } = await boundaryView(trx, sheet.boundary_set_id);
+		const tables = await measureFiles(trx, sheet.id);
 		await deleteSheet(trx, sheet.id);
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'sheet.deleted', subject, { sheet: number, name: sheet.name });
 		if (await deleteUnusedBoundarySet(trx, set.id)) {
 			await dropUnused(trx, shop.files, set.file_digest);
 		}
+		for (const digest of tables) await dropUnused(trx, shop.files, digest);
 	});
 }

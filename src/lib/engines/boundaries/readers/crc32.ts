@@ -4,9 +4,9 @@ const table = Uint32Array.from({ length: 256 }, (_, n) => {
 	return c;
 });
 
-/** The checksum of ISO 3309 that archives carry for each file. */
-export function crc32(bytes: Uint8Array): number {
-	let c = 0xffffffff;
+/** The checksum of ISO 3309 that archives carry for each file; goes on from that of the bytes before. */
+export function crc32(bytes: Uint8Array, before = 0): number {
+	let c = before ^ 0xffffffff;
 	for (let i = 0; i < bytes.length; i++) c = table[(c ^ bytes[i]) & 255] ^ (c >>> 8);
 	return (c ^ 0xffffffff) >>> 0;
 }
