@@ -168,12 +168,14 @@ function layout({ draft: { layout: sheet }, drawn }: DocketState): Said {
 
 function measures({ measures: held }: DeskSheet): DocketStage[] {
 	if (!held) return [];
-	const { count: measured, missing, stale } = held;
+	const { count: measured, missing, stale, open } = held;
 	const words: DocketWords[] = measured
 		? [{ text: counted(measured, 'measure'), to: '#measures' }, { text: '.' }]
-		: [{ text: 'None joined yet' }];
+		: [{ text: open ? 'None joined yet.' : 'None joined yet' }];
 	if (stale) words.push({ text: 'Joined to earlier boundaries', to: '#tables' });
 	else if (missing) words.push({ text: `${counted(missing, 'value')} missing`, to: '#measures' });
+	if (open && words.length > 2) words.push({ text: '.' });
+	if (open) words.push({ text: `${counted(open, 'table')} under review`, to: '#tables' });
 	const mark = stale ? 'error' : missing ? 'warning' : measured ? 'clear' : null;
 	return [{ id: 'measures', title: 'Measures', mark, words }];
 }
