@@ -41,6 +41,23 @@ import {
 	removePalette,
 	teamPalettes,
 } from '../../src/lib/server/services/palette.service.ts';
+import { feedMeasure, measureByName } from '../../src/lib/server/services/measure-feed.service.ts';
+import {
+	chooseColumns,
+	chooseJoin,
+	decideRows,
+	readTableReview,
+	sweepRows,
+} from '../../src/lib/server/services/measure-review.service.ts';
+import { takeTable } from '../../src/lib/server/services/measure-taking.service.ts';
+import {
+	dropMeasure,
+	dropTable,
+	joinAgain,
+	rereadTable,
+} from '../../src/lib/server/services/measure-upkeep.service.ts';
+import { uploadTable } from '../../src/lib/server/services/measure-upload.service.ts';
+import { deskMeasures, measureTables } from '../../src/lib/server/services/measures.service.ts';
 import {
 	acceptFinding,
 	deskSheet,
@@ -76,6 +93,7 @@ const id = randomUUID();
 const empty = () => new Request('http://localhost/', { method: 'POST', body: new FormData() });
 const sent = { revision: 1 } as Parameters<typeof saveDraft>[3];
 type Layout = Parameters<typeof saveLayout>[3];
+const figures = { unit: '', values: { a: 1 }, mode: 'replace', confidential: true } as const;
 const token = { name: 'Walk', scopes: [], days: 1 };
 
 /** Every service that acts for a member, what it needs, and a call that touches nothing that exists. */
@@ -93,6 +111,27 @@ const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
 	cancelIntake: ['boundaries.upload', (member) => cancelIntake(shop, member, id)],
 	changeRoles: ['members.manage', (member) => changeRoles(member, id, ['designer'])],
 	changeTeamName: ['team.manage', (member) => changeTeamName(member, 'Walked')],
+	chooseColumns: [
+		'measures.edit',
+		(member) => chooseColumns(shop, member, 99, 1, { columns: [], existing: 'replace' }),
+	],
+	chooseJoin: [
+		'measures.edit',
+		(member) => chooseJoin(shop, member, 99, 1, { column: 0, by: 'key' }),
+	],
+	decideRows: ['measures.edit', (member) => decideRows(shop, member, 99, 1, [])],
+	deskMeasures: ['measures.read', (member) => deskMeasures(shop, member, 99)],
+	dropMeasure: ['measures.edit', (member) => dropMeasure(shop, member, 99, 1, id)],
+	dropTable: ['measures.edit', (member) => dropTable(shop, member, 99, 1)],
+	feedMeasure: ['measures.edit', (member) => feedMeasure(shop, member, 99, 'Walk', figures)],
+	joinAgain: ['measures.edit', (member) => joinAgain(shop, member, 99, 1)],
+	measureByName: ['measures.read', (member) => measureByName(shop, member, 99, 'Walk')],
+	measureTables: ['measures.read', (member) => measureTables(shop, member, 99)],
+	readTableReview: ['measures.read', (member) => readTableReview(shop, member, 99, 1)],
+	rereadTable: ['measures.edit', (member) => rereadTable(shop, member, 99, 1, {})],
+	sweepRows: ['measures.edit', (member) => sweepRows(shop, member, 99, 1, { what: 'take-first' })],
+	takeTable: ['measures.edit', (member) => takeTable(shop, member, 99, 1, true)],
+	uploadTable: ['measures.edit', (member) => uploadTable(shop, member, 99, empty())],
 	createToken: ['tokens.manage', (member) => createToken(member, token)],
 	deskSheet: ['sheet.read', (member) => deskSheet(shop, member, 99)],
 	draftSvg: ['sheet.read', (member) => draftSvg(shop, member, 99, 'typical')],

@@ -34,8 +34,8 @@ export function gridGraph(width: number, height = width): RegionGraph {
 	for (let y = 0; y < height; y++) {
 		for (let x = 0; x < width; x++) {
 			const cell = y * width + x;
-			if (x + 1 < width) a.push(cell), b.push(cell + 1);
-			if (y + 1 < height) a.push(cell), b.push(cell + width);
+			if (x + 1 < width) (a.push(cell), b.push(cell + 1));
+			if (y + 1 < height) (a.push(cell), b.push(cell + width));
 		}
 	}
 	return buildGraph(width * height, a, b);

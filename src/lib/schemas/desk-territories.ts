@@ -27,6 +27,8 @@ export interface DeskTextColumn {
 	name: string;
 	table: string;
 	texts: (string | null)[];
+	/** joined to an earlier boundary set than the sheet's */
+	stale: boolean;
 }
 
 export interface DeskTerritories {

@@ -14,6 +14,8 @@ export interface TableOptions {
 	columns: ColumnChoice[] | null;
 	/** what happens where the sheet has a measure of the same name */
 	existing: 'replace' | 'add';
+	/** sent by a program, which sends it again: its file goes once another takes its place */
+	fed?: boolean;
 }
 
 /** How one column is taken over. */

@@ -6,16 +6,16 @@ import { wishes, type BeginProposal } from './territories.ts';
 const revision = z.coerce.number().int().min(0);
 
 /** A column that names the territory of every region: `measure:<id>` or `attribute:<name>`. */
-const column = z
+export const columnSource = z
 	.string()
 	.regex(/^(measure|attribute):./, 'Choose a column.')
 	.transform((text) => {
 		const at = text.indexOf(':');
 		return { kind: text.slice(0, at) as 'measure' | 'attribute', name: text.slice(at + 1) };
 	});
-export type ColumnSource = z.output<typeof column>;
+export type ColumnSource = z.output<typeof columnSource>;
 
-export const fromColumnForm = z.object({ revision, source: column });
+export const fromColumnForm = z.object({ revision, source: columnSource });
 export type FromColumn = z.output<typeof fromColumnForm>;
 
 export const fromScratchForm = z.object({
@@ -88,17 +88,17 @@ function tolerancesIn(
 	return tolerances;
 }
 
-const number = z.coerce.number().int().positive();
+const proposal = z.coerce.number().int().positive();
 
-/** Forms about one proposal of the list. */
-export const proposalForm = z.object({ proposal: number });
-export const renameForm = z.object({
-	proposal: number,
+/** Forms of a proposal's own page, and the same of the list, where the proposal is a field. */
+export const openedNameForm = z.object({
 	name: z.string().trim().min(1, 'Give the proposal a name.').max(120),
 });
-/** `outside`: ticked when tolerances that are missed are accepted. */
-export const adoptForm = z.object({
-	proposal: number,
+/** `outside`: `yes` when tolerances that are missed are accepted. */
+export const openedAdoptForm = z.object({
 	revision: z.coerce.number().int().min(0),
 	outside: z.literal('yes').optional(),
 });
+export const proposalForm = z.object({ proposal });
+export const renameForm = openedNameForm.extend({ proposal });
+export const adoptForm = openedAdoptForm.extend({ proposal });

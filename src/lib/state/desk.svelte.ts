@@ -1,4 +1,5 @@
 import { getContext, setContext } from 'svelte';
+import { bordersForSheet } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Reader } from '$lib/engines/palettes/palette';
@@ -69,6 +70,12 @@ export class Desk {
 
 	numbers = $derived(numberRegions(this.sheet.regions.key));
 	standing = $derived.by(() => standings(this.sheet.borders, this.draft.document, this.numbers));
+	/** the borders that ask for two inks, those added by hand among them */
+	countedBorders = $derived.by(() => {
+		const { regions, borders } = this.sheet;
+		const { pointTouches, struck, added } = this.draft.document;
+		return bordersForSheet(regions.key, borders, { pointTouches, struck, added });
+	});
 	links = $derived(linkRegions(this.sheet.regions.key.length, this.sheet.borders));
 	neighbours = $derived(
 		this.selected === null ? [] : neighboursOf(this.selected, this.sheet.borders, this.links),

@@ -185,7 +185,7 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 	#adopt({ revision, document, savedAt }: Stale<Doc>) {
 		this.#revision = revision;
 		this.#base = document;
-		this.savedAt = savedAt;
+		this.savedAt = savedAt ?? this.savedAt;
 		this.stale = null;
 	}
 

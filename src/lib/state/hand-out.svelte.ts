@@ -1,6 +1,6 @@
 import { counted } from '$lib/components/format';
 import type { TerritoryDesk } from './territories.svelte';
-import { give } from './territory-edits';
+import { dropClosedBases, give } from './territory-edits';
 import { amount, deviationWords } from './territory-words';
 
 /** What a press on a region gives it to: a territory's key, 'none' to take it away, null: it gives nothing. */
@@ -69,26 +69,56 @@ export class HandOut {
 		this.picked = new Set();
 	}
 
-	/** Hands regions to a territory ('none': to none), as one step. */
+	/**
+	 * Hands regions to a territory ('none': to none), as one step. A base stays where it is, unless its
+	 * territory closes; a territory that had no regions takes its base along.
+	 */
 	give(regions: readonly number[], hand: string) {
 		const territories = this.#territories;
 		if (!territories.mayEdit) return;
 		const key = hand === none ? null : hand;
 		const to = key === null ? -1 : (territories.numbers.get(key) ?? -1);
-		const moving = regions.filter((region) => territories.assignment[region] !== to);
+		const wanted = this.#withBase(regions, to).filter((r) => territories.assignment[r] !== to);
+		const staying = wanted.filter((region) => this.#rootOf(region, key));
+		const moving = wanted.filter((region) => !staying.includes(region));
 		if (!moving.length) {
-			this.said = `${this.#named(regions)} already with ${this.nameOf(hand)}.`;
+			this.said = wanted.length
+				? this.#stays(staying, key)
+				: `${this.#named(regions)} already with ${this.nameOf(hand)}.`;
 			return;
 		}
 		const from = new Set(moving.map((region) => territories.assignment[region]));
-		const label = `give ${this.#named(moving)} to ${this.nameOf(hand)}`;
-		const { proposal, draft, desk } = territories;
+		this.#put(moving, key, `give ${this.#named(moving)} to ${this.nameOf(hand)}`);
+		this.said = [this.#told(moving, to, from), this.#stays(staying, key)].join(' ').trim();
+	}
+
+	#put(moving: readonly number[], key: string | null, label: string) {
+		const { proposal, draft, desk } = this.#territories;
+		const keys = moving.map((region) => desk.sheet.regions.key[region]);
 		if (proposal) proposal.give?.(moving, key, label);
-		else {
-			const keys = moving.map((region) => desk.sheet.regions.key[region]);
-			draft.change(label, give(keys, key));
-		}
-		this.said = this.#told(moving, to, from);
+		else draft.change(label, (draft) => dropClosedBases(keys)(give(keys, key)(draft)));
+	}
+
+	/** the territory, other than `key`, that has its base in this region and keeps it */
+	#rootOf(region: number, key: string | null) {
+		const { desk, entries } = this.#territories;
+		const own = desk.sheet.regions.key[region];
+		return entries.find((one) => one.base === own && one.key !== key && !one.closing);
+	}
+
+	#withBase(regions: readonly number[], to: number): readonly number[] {
+		const { counts, shares } = this.#territories;
+		const base = shares[to]?.base ?? -1;
+		return base >= 0 && counts.regions[to] === 0 && !regions.includes(base)
+			? [...regions, base]
+			: regions;
+	}
+
+	#stays(regions: readonly number[], key: string | null): string {
+		const { desk } = this.#territories;
+		return regions
+			.map((r) => `${desk.nameOf(r)} stays: it is the base of ${this.#rootOf(r, key)?.name}.`)
+			.join(' ');
 	}
 
 	#named(regions: readonly number[]): string {
@@ -122,20 +152,15 @@ export class HandOut {
 		return `${entries[t].name}: ${amount(load[t], figure.unit)}, ${deviationWords(deviation[t])}.`;
 	}
 
-	/** rules that the gesture goes against; it is done all the same */
+	/** locks that the gesture goes against; it is done all the same */
 	#warned(moved: readonly number[], to: number): string[] {
 		const { desk, document, entries } = this.#territories;
 		const key = entries[to]?.key ?? null;
 		return moved.flatMap((region) => {
-			const own = desk.sheet.regions.key[region];
-			const lock = document.locks[own];
-			const words = [];
-			if (lock && lock.territory !== key)
-				words.push(`${desk.nameOf(region)} is locked to ${this.nameOf(lock.territory)}.`);
-			for (const entry of entries)
-				if (entry.base === own && entry.key !== key)
-					words.push(`${desk.nameOf(region)} is the base of ${entry.name}.`);
-			return words;
+			const lock = document.locks[desk.sheet.regions.key[region]];
+			return lock && lock.territory !== key
+				? [`${desk.nameOf(region)} is locked to ${this.nameOf(lock.territory)}.`]
+				: [];
 		});
 	}
 }

@@ -10,7 +10,7 @@ export interface Saved<Doc> {
 export interface Stale<Doc> {
 	revision: number;
 	savedBy: string | null;
-	savedAt: string;
+	savedAt: string | null;
 	/** what they saved */
 	document: Doc;
 }

@@ -1,10 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { blankDraft } from '../../../tests/support/blank-draft';
+import { draftFaults } from '$lib/engines/territories/draft-faults';
 import type { DeskSheet } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
 import { Desk } from './desk.svelte';
 import { TerritoryDesk } from './territories.svelte';
-import { noTerritories } from './territory-edits';
+import { noTerritories } from '$lib/engines/territories/territory-draft';
 import { none } from './hand-out.svelte';
 
 /** Six regions in a row, a to f, with a gap of water between e and f. */
@@ -54,6 +55,7 @@ const sheet: DeskSheet = {
 	},
 	findings: [],
 	editions: [],
+	measures: null,
 	rights: ['measures.read', 'territories.edit'],
 };
 
@@ -75,6 +77,7 @@ function given(changes: Partial<DeskTerritories['draft']> = {}): DeskTerritories
 			...changes,
 		},
 		inks: { n: 0, s: 1 },
+		inkNote: null,
 		measures: [
 			{
 				...{ id: visits, name: 'Visits', unit: 'visits', table: 't', confidential: false },
@@ -82,6 +85,7 @@ function given(changes: Partial<DeskTerritories['draft']> = {}): DeskTerritories
 			},
 		],
 		textColumns: [],
+		inkNote: null,
 		geometry: { at: [], outlineMetres: [] },
 		proposals: [],
 		handovers: [],
@@ -102,11 +106,14 @@ function open(changes: Partial<DeskTerritories['draft']> = {}, rights = sheet.ri
 		given: given(changes),
 		desk,
 		keeper: null,
-		save: async (revision) => {
+		save: async (revision, document) => {
 			sent.push(revision);
 			return {
 				kind: 'saved',
-				saved: { revision: revision + 1, savedAt: '2026-12-01T10:00:00Z', inks: { n: 0, s: 1 } },
+				saved: {
+					...{ revision: revision + 1, savedAt: '2026-12-01T10:00:00Z', document },
+					...{ inks: { n: 0, s: 1 }, inkNote: null, changedInks: [] },
+				},
 			};
 		},
 	});
@@ -180,14 +187,30 @@ describe('giving by hand', () => {
 		expect(hand.said).toContain('North is torn into 2 parts.');
 	});
 
-	it('tells of a lock and of a base that it goes against', () => {
-		const { hand } = open({
+	it('tells of a lock that it goes against, and leaves a base where it is', () => {
+		const { hand, territories } = open({
 			territories: [{ ...territory('n', 'North'), base: 'a' }, territory('s', 'South')],
 			locks: { b: { territory: 'n', reason: 'contract' } },
 		});
 		hand.give([0, 1], 's');
-		expect(hand.said).toContain('A is the base of North.');
+		expect([...territories.assignment]).toEqual([0, 1, 0, 1, 1, -1]);
+		expect(hand.said).toContain('A stays: it is the base of North.');
 		expect(hand.said).toContain('B is locked to North.');
+	});
+
+	it('takes the base along to a territory without regions, and from one that closes', () => {
+		const { hand, territories } = open({
+			territories: [
+				{ ...territory('n', 'North'), base: 'a', closing: true },
+				{ ...territory('s', 'South'), base: 'f' },
+			],
+			assignment: { a: 'n', b: 'n', c: 'n' },
+		});
+		hand.give([0, 4], 's');
+		expect([...territories.assignment]).toEqual([1, 0, 0, -1, 1, 1]);
+		expect(territories.entries[0].base).toBeNull();
+		const ground = { keys, borders: sheet.borders };
+		expect(draftFaults(ground, territories.document)).toEqual([]);
 	});
 
 	it('takes regions away, and says so when nothing changes', () => {

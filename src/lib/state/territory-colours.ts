@@ -1,11 +1,9 @@
-import type { BorderList } from '$lib/engines/borders/border-list';
-import type { ColouringProblem } from '$lib/engines/colouring/problem';
-import type { Standing } from './rules-in-force';
+import { borderKinds, type BorderList } from '../engines/borders/border-list.ts';
+import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
 
-/** The borders between territories: one entry a pair, with the metres they share. */
+/** The borders between territories: one entry a pair, a < b, with the metres they share. */
 export function territoryBorders(
 	borders: BorderList,
-	standing: readonly Standing[],
 	assignment: Int32Array,
 	territories: number,
 ): BorderList {
@@ -13,7 +11,7 @@ export function territoryBorders(
 	for (let border = 0; border < borders.a.length; border++) {
 		const one = assignment[borders.a[border]];
 		const other = assignment[borders.b[border]];
-		if (one === other || one < 0 || other < 0 || standing[border] !== 'counts') continue;
+		if (one === other || one < 0 || other < 0) continue;
 		const pair = Math.min(one, other) * territories + Math.max(one, other);
 		metres.set(pair, (metres.get(pair) ?? 0) + borders.metres[border]);
 	}
@@ -21,31 +19,44 @@ export function territoryBorders(
 	return {
 		a: Uint32Array.from(pairs, (pair) => Math.floor(pair / territories)),
 		b: Uint32Array.from(pairs, (pair) => pair % territories),
-		kind: new Uint8Array(pairs.length),
+		kind: new Uint8Array(pairs.length).fill(borderKinds.indexOf('line')),
 		metres: Float64Array.from(pairs, (pair) => metres.get(pair) ?? 0),
 		at: new Float64Array(2 * pairs.length),
 	};
 }
 
-/** What the colouring engine is asked: neighbouring territories differ, and as few as can be change. */
-export const territoryColouring = (
-	territories: number,
-	borders: BorderList,
-	previous: Int32Array,
-): ColouringProblem => ({
+/** First question to the colouring engine, the same as the server's: the least number of inks that does. */
+export const fewestInks = (territories: number, { a, b }: BorderList): ColouringProblem => ({
 	regions: territories,
-	borders,
+	borders: { a: [...a], b: [...b] },
 	inks: 'fewest',
-	previous,
-	goal: 'fewest-changes',
-	seed: 1,
+	seed: 0,
 });
+
+/**
+ * Second question: in as many inks, or as many as the territories had before where that is more, the
+ * fewest territories change theirs. A text where the palette's `most` inks do not do.
+ */
+export function fewestChanges(
+	plain: ColouringProblem,
+	fewest: ColouringResult,
+	previous: Int32Array,
+	most: number,
+): ColouringProblem | string {
+	if (fewest.status !== 'coloured')
+		return `The palette’s ${most} inks do not tell the territories apart.`;
+	if (fewest.inksUsed > most)
+		return `The territories need ${fewest.inksUsed} inks and the palette has ${most}.`;
+	const kept = previous.map((ink) => (ink < most ? ink : -1));
+	const inks = Math.max(fewest.inksUsed, ...kept.map((ink) => ink + 1));
+	return { ...plain, inks, previous: kept, goal: 'fewest-changes' };
+}
 
 /** Ink of each territory by number, -1 for none yet. */
 export const inksByNumber = (
 	keys: readonly string[],
 	inks: Readonly<Record<string, number>>,
-): Int32Array => Int32Array.from(keys, (key) => inks[key] ?? -1);
+): Int32Array => Int32Array.from(keys, (key) => (Object.hasOwn(inks, key) ? inks[key] : -1));
 
 /** The same colouring question needs no second answer. */
 export const sameBorders = (one: BorderList | null, other: BorderList): boolean =>

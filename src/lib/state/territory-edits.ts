@@ -1,22 +1,7 @@
-import {
-	firstWishes,
-	type TerritoryDraft,
-	type TerritoryEntry,
-} from '$lib/engines/territories/territory-draft';
+import type { TerritoryDraft, TerritoryEntry } from '$lib/engines/territories/territory-draft';
 
 /** What people do to the territories of a sheet, each a new draft; the old one is never touched. */
 type Edit = (draft: TerritoryDraft) => TerritoryDraft;
-
-export const noTerritories: TerritoryDraft = {
-	territories: [],
-	assignment: {},
-	locks: {},
-	together: [],
-	apart: [],
-	waterLinks: [],
-	handLinks: [],
-	wishes: firstWishes,
-};
 
 /** Hands regions to a territory, or (null) to none. */
 export const give =
@@ -28,6 +13,18 @@ export const give =
 			else assignment[region] = territory;
 		}
 		return { ...draft, assignment };
+	};
+
+/** A territory that closes has no base any more once that region was handed out. */
+export const dropClosedBases =
+	(regions: readonly string[]): Edit =>
+	(draft) => {
+		const gone = new Set(regions);
+		const loses = ({ base, closing, key }: TerritoryEntry) =>
+			closing && base !== null && gone.has(base) && draft.assignment[base] !== key;
+		if (!draft.territories.some(loses)) return draft;
+		const territories = draft.territories.map((one) => (loses(one) ? { ...one, base: null } : one));
+		return { ...draft, territories };
 	};
 
 export const addTerritory =

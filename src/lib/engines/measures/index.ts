@@ -20,3 +20,6 @@ export { takeValues } from './values/take-values.ts';
 export { takeTexts, type TakenTexts } from './values/take-texts.ts';
 export type { TakeRefused, TakenValues, TakeRules } from './values/rules.ts';
 export { changesBetween, type ValueChange, type ValueChanges } from './values/changes.ts';
+export { suggestRegions } from './join/suggestions.ts';
+export { checkJoin } from './check/check-join.ts';
+export { checkTaken } from './check/check-taken.ts';

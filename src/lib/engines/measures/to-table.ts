@@ -1,6 +1,7 @@
 import type { Grid } from './grid.ts';
 import { findHeading } from './heading/find-heading.ts';
 import { headingNames } from './heading/heading-names.ts';
+import { counted, note } from './note.ts';
 import type { ReadOptions } from './options.ts';
 import { TableRefusal } from './refusal.ts';
 import type { Cell, RawTable, TableNote } from './table.ts';
@@ -26,6 +27,7 @@ export function toTable(
 		...grid.rows.slice(heading.first, firstData).map((r) => r.length),
 	);
 	if (heading.rows) notes.push(...notesOnLongRows(grid, firstData, headingWidth));
+	notes.push(...notesOnTallCells(grid, grid.fileRows[firstData]));
 	return {
 		table: {
 			sheet,
@@ -59,3 +61,12 @@ function toColumns(rows: Cell[][], from: number, columns: number): Cell[][] {
 
 const isPercent = ({ percentCells, numberCells }: Grid, column: number): boolean =>
 	(percentCells[column] ?? 0) * 2 > (numberCells[column] ?? 0);
+
+/** Tells cells of a workbook that are merged over several rows of data, since all but one are empty. */
+function notesOnTallCells({ merges }: Grid, firstRow: number): TableNote[] {
+	const tall = merges.filter(({ top, bottom }) => bottom > top && bottom + 1 > firstRow);
+	if (!tall.length) return [];
+	const row = Math.min(...tall.map(({ top }) => top + 1));
+	const message = `${counted(tall.length, 'merged cell reaches', 'merged cells reach')} over several rows, the first from row ${row} on; only the top row of each has the text.`;
+	return [note('warning', 'rows-merged', message, { row })];
+}

@@ -30,6 +30,8 @@ export interface AnnealSettings extends Wishes {
 
 /** Proposals between two looks at temperature, weights and the best so far. */
 const ROUND = 2048;
+/** What a pair not kept apart costs, in moves. */
+const CONFLICT = 1000;
 
 /**
  * Simulated annealing over border units. A proposal moves one unit to a bordering territory, or passes
@@ -139,7 +141,8 @@ export class Annealer {
 	}
 
 	private propose(chain: boolean): void {
-		const { outsideCount, outside } = this.state;
+		const { outsideCount, outside, terms } = this.state;
+		if (terms.apartPairs.length > 0 && this.dice.chance(3000)) return this.part();
 		if (outsideCount > 0 && this.dice.chance(45000)) {
 			const t = outside[this.dice.below(outsideCount)];
 			if (!this.active[t]) return;
@@ -149,6 +152,15 @@ export class Annealer {
 		}
 		const unit = this.units[this.dice.below(this.units.length)];
 		this.consider(unit, this.foreign(unit), chain);
+	}
+
+	/** One of a pair to be kept apart goes to a neighbour, if they are together. */
+	private part(): void {
+		const { assignment, terms } = this.state;
+		const at = this.dice.below(terms.apartPairs.length);
+		const unit = terms.apartPairs[at];
+		if (!this.meets(unit, assignment[unit])) return;
+		this.consider(unit, this.foreign(unit), false);
 	}
 
 	/** A member of `t` goes to a neighbour. */
@@ -228,7 +240,7 @@ export class Annealer {
 		let change = 0;
 		if (from === today) change = moveWeight * cost[unit];
 		else if (to === today) change = -moveWeight * cost[unit];
-		if (apart[unit] && this.meets(unit, from)) change -= 1000;
+		if (apart[unit] && this.meets(unit, from)) change -= CONFLICT;
 		return change;
 	}
 
@@ -324,6 +336,7 @@ export class Annealer {
 		if (!blocks.mayGo(block, to)) return;
 		const before = penalty.now[from] + penalty.now[to];
 		const { cost, cuts } = state;
+		const conflicts = state.conflicts();
 		blocks.move(block, to);
 		penalty.refresh(from);
 		penalty.refresh(to);
@@ -333,7 +346,8 @@ export class Annealer {
 			penalty.now[to] -
 			before +
 			moveWeight * (state.cost - cost) +
-			cutWeight * (state.cuts - cuts);
+			cutWeight * (state.cuts - cuts) +
+			CONFLICT * (state.conflicts() - conflicts);
 		if (change <= 0 || change <= this.limit()) return;
 		blocks.move(block, from);
 		penalty.refresh(from);

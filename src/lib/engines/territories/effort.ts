@@ -17,9 +17,9 @@ export function budgetOf({ problem, units, territories }: Prepared): Budget {
 	const starts = { quick: 1, normal: 3, thorough: 6 }[problem.effort];
 	return {
 		starts,
-		proposals: Math.round(Math.min(4_000_000, Math.max(100_000, 1500 * units)) * Math.sqrt(share)),
+		proposals: Math.round(Math.min(4_000_000, Math.max(20_000, 1500 * units)) * Math.sqrt(share)),
 		regions: Math.round(territories * share),
 		lastRegions: Math.round(4 * territories * share),
-		regionProposals: 40_000,
+		regionProposals: Math.min(40_000, Math.max(4000, 150 * units)),
 	};
 }

@@ -38,7 +38,7 @@ function mainPiece(prepared: Prepared, pieces: number[][], root: number): number
 }
 
 /** Units of the pool next to `region` from which `main` can be reached without it: the border needed. */
-function borderOf(prepared: Prepared, pool: Set<number>, region: number[], main: number[]) {
+export function borderOf(prepared: Prepared, pool: Set<number>, region: number[], main: number[]) {
 	const { offsets, targets } = prepared.graph;
 	const inside = new Set(region);
 	const rim = new Set<number>();
@@ -67,7 +67,7 @@ function borderOf(prepared: Prepared, pool: Set<number>, region: number[], main:
 }
 
 /** What `border` shuts in with `region`. */
-function enclosed(prepared: Prepared, pool: Set<number>, border: Set<number>, region: number[]) {
+export function enclosed(prepared: Prepared, pool: Set<number>, border: Set<number>, region: number[]) {
 	const { offsets, targets } = prepared.graph;
 	const seen = new Set(region);
 	const queue = [...region];
@@ -82,6 +82,10 @@ function enclosed(prepared: Prepared, pool: Set<number>, border: Set<number>, re
 	return queue;
 }
 
+/** Whether no plan can have the territory among the units shut in alone: it is rooted, or they are too light. */
+export const needsBorder = (prepared: Prepared, choices: Choices, t: number, shut: number[]) =>
+	choices.root[t] >= 0 || !fillable(prepared, t, shut);
+
 function cutBetween(
 	prepared: Prepared,
 	choices: Choices,
@@ -93,7 +97,7 @@ function cutBetween(
 	const pool = new Set(choices.pool[t]);
 	const border = borderOf(prepared, pool, piece, main);
 	const shut = enclosed(prepared, pool, border, piece);
-	const rooted = choices.root[t] >= 0 || !fillable(prepared, t, shut);
+	const rooted = needsBorder(prepared, choices, t, shut);
 	for (const unit of rooted ? shut.slice(0, MOST) : piece) {
 		addCut(prepared, program, t, unit, border, rooted ? -1 : main[0]);
 	}
@@ -127,7 +131,7 @@ function cutElsewhere(
 }
 
 /** x(unit) <= sum of x(border), or x(unit) + x(anchor) <= 1 + sum of x(border). */
-function addCut(
+export function addCut(
 	prepared: Prepared,
 	{ builder, column }: PlanProgram,
 	t: number,

@@ -1,6 +1,7 @@
 import { solveProgram } from '../solver/program.ts';
 import { choicesOf, type Choices, type DeadEnd, type MayEnd } from './exact-choices.ts';
 import { addBroken } from './exact-cuts.ts';
+import { addBrokenFractions } from './exact-fractions.ts';
 import { moveCost, planProgram, type PlanObjective, type PlanProgram } from './exact-program.ts';
 import type { Prepared } from './prepare.ts';
 
@@ -47,7 +48,9 @@ export async function solveExact(
 	const program = planProgram(prepared, choices, judged, objective);
 	const given = objective.least === 'moves' ? givenCost(prepared, choices, program) : 0;
 	let { nodes, iterations } = limits;
-	let bound = -Infinity;
+	let bound = await tighten(prepared, choices, program, limits);
+	if (bound === Infinity) return { status: 'infeasible', deadEnd: null };
+	bound += given;
 	for (let round = 0; round < limits.rounds && nodes >= 0 && iterations > 0; round++) {
 		if (limits.cancelled?.()) break;
 		const { cancelled } = limits;
@@ -55,6 +58,7 @@ export async function solveExact(
 		if (outcome.status === 'infeasible') return { status: 'infeasible', deadEnd: null };
 		if (outcome.status === 'unbounded') throw new Error('a plan cannot cost endlessly little');
 		bound = Math.max(bound, outcome.bound + given);
+		if ((globalThis as any).LOG) console.log(round, outcome.status, outcome.bound + given, 'rows', program.builder.rows, 'cols', program.builder.columns, outcome.spent, Date.now());
 		nodes -= outcome.spent.nodes;
 		iterations -= outcome.spent.iterations;
 		if (!outcome.values) break;
@@ -66,6 +70,29 @@ export async function solveExact(
 		if (broken === 0) return { status: 'limit', bound, assignment };
 	}
 	return { status: 'limit', bound, assignment: null };
+}
+
+/** rounds of the program without whole numbers, which are cheap */
+const FRACTION_ROUNDS = 40;
+
+/** Adds rows on contiguity by the program without whole numbers; its bound, Infinity when nothing fits. */
+async function tighten(
+	prepared: Prepared,
+	choices: Choices,
+	program: PlanProgram,
+	{ cancelled }: ExactLimits,
+): Promise<number> {
+	let bound = -Infinity;
+	for (let round = 0; round < FRACTION_ROUNDS && !cancelled?.(); round++) {
+		const whole = program.builder.build();
+		const outcome = await solveProgram({ ...whole, integer: whole.integer.map(() => 0) });
+		if (outcome.status === 'infeasible') return Infinity;
+		if (outcome.status !== 'optimal') break;
+		bound = Math.max(bound, outcome.bound);
+		if ((globalThis as any).LOG) console.log('lp', round, outcome.objective, program.builder.rows);
+		if (addBrokenFractions(prepared, choices, program, outcome.values) === 0) break;
+	}
+	return bound;
 }
 
 function givenCost(prepared: Prepared, choices: Choices, { column }: PlanProgram): number {

@@ -57,7 +57,12 @@ function noteEdges(terms: SearchTerms, assignment: Int32Array, unit: number, edg
 	}
 }
 
-function noteFree(terms: SearchTerms, assignment: Int32Array, unit: number, edge: Set<number>): void {
+function noteFree(
+	terms: SearchTerms,
+	assignment: Int32Array,
+	unit: number,
+	edge: Set<number>,
+): void {
 	const { offsets, targets } = terms.prepared.graph;
 	const t = assignment[unit];
 	for (let i = offsets[unit]; i < offsets[unit + 1]; i++) {
@@ -77,8 +82,7 @@ function blockMayEnter(
 ): boolean {
 	const { block, blocks } = terms.prepared;
 	return blocks[block[unit]].every(
-		(u) =>
-			mayEnter(terms, u, t) && !terms.apart[u]?.some((other) => assignment[other] === t),
+		(u) => mayEnter(terms, u, t) && !terms.apart[u]?.some((other) => assignment[other] === t),
 	);
 }
 

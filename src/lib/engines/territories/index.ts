@@ -22,3 +22,21 @@ export { relieve } from './relieve.ts';
 export { checkPlan } from './check-plan.ts';
 export { ruleFaults } from './check-rules.ts';
 export { checkWitness } from './check-witness.ts';
+export { planFrom } from './plan-from.ts';
+export { cutBorders, territoryGraph, type TerritoryPairs } from './territory-graph.ts';
+export { unitGeometry } from './coverage-geometry.ts';
+export { geometryFrom, type GeometryParts, type UnitGeometry } from './unit-geometry.ts';
+export { figures } from './figures.ts';
+export type {
+	MeasureFigures,
+	MeasureSummary,
+	PlanFigures,
+	Shape,
+	TerritoryFigures,
+	Travel,
+	UnitShare,
+} from './figures-of.ts';
+export { Board } from './board.ts';
+export { hardTolerance } from './whole-figures.ts';
+export { rebalance } from './rebalance.ts';
+export { planOf } from './plan-of.ts';

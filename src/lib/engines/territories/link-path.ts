@@ -18,7 +18,8 @@ export function linkPath(
 	most = Infinity,
 ): boolean {
 	const { prepared } = terms;
-	const goals = territory >= 0 ? [territory] : Array.from({ length: prepared.territories }, (_, t) => t);
+	const goals =
+		territory >= 0 ? [territory] : Array.from({ length: prepared.territories }, (_, t) => t);
 	let best: { path: number[]; cost: number; goal: number } | null = null;
 	for (const goal of goals) {
 		if (territory < 0 && !part.every((unit) => mayEnter(terms, unit, goal))) continue;
@@ -86,7 +87,7 @@ function pathTo(
 	isPart: Set<number>,
 ): number[] {
 	const path: number[] = [];
-	for (let unit = end; unit >= 0 && !isPart.has(unit); ) {
+	for (let unit = end; unit >= 0 && !isPart.has(unit);) {
 		path.push(unit);
 		unit = (reached.get(unit) as { from: number }).from;
 	}

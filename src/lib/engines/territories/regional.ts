@@ -55,7 +55,7 @@ function around(state: SearchState, centre: number, count: number, dice: Dice): 
 	const chosen = [centre];
 	const edge: number[] = [];
 	const seen = new Set([centre]);
-	for (let t = centre; ; ) {
+	for (let t = centre; ;) {
 		for (const next of neighbours(state, t)) {
 			if (seen.has(next) || !state.terms.prepared.open[next]) continue;
 			seen.add(next);

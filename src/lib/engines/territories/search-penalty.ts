@@ -45,7 +45,8 @@ export class Penalty {
 			if (gained >= 0) load += loads[m * units + gained];
 			if (lost >= 0) load -= loads[m * units + lost];
 			const off = load - targets[at];
-			const over = load > greatest[at] ? load - greatest[at] : load < least[at] ? least[at] - load : 0;
+			const over =
+				load > greatest[at] ? load - greatest[at] : load < least[at] ? least[at] - load : 0;
 			if (over > 0) sum += this.step + this.excess * over * perUnit[m];
 			sum += this.spread * off * off * curve[at];
 		}

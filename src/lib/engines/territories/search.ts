@@ -12,8 +12,10 @@ import { startingAssignment } from './start.ts';
 
 export interface Found {
 	assignment: Int32Array;
-	/** within every tolerance, and every pair apart */
+	/** within every tolerance */
 	sound: boolean;
+	/** pairs to be kept apart that are not */
+	conflicts: number;
 }
 
 /** Temperature scales of the portfolio: one alone failed on tight cases. */
@@ -21,8 +23,8 @@ const scales = [1, 0.5, 2, 0.7, 1.4, 1];
 
 /**
  * Searches for a plan: the compulsory phase, then a portfolio of annealings over the whole and over
- * regions, then units are given back. Every rule but tolerance and `apart` holds in what is found, and
- * these too where `sound`. The same problem gives the same answer, unless it is cancelled.
+ * regions, then units are given back. Every rule but tolerance and `apart` holds in what is found;
+ * whether these do is told. The same problem gives the same answer, unless it is cancelled.
  *
  * @returns null when no contiguous assignment that keeps the rules on units was found to start from
  */
@@ -67,8 +69,8 @@ class SearchRun {
 		}
 		this.regions(best, this.budget.lastRegions, starts, 0.7, 0.3);
 		if (this.wishes.spreadEnd === 0) giveBack(best, this.scratch);
-		const sound = best.outsideCount === 0 && best.conflicts() === 0;
-		return { assignment: best.assignment, sound };
+		const conflicts = best.conflicts();
+		return { assignment: best.assignment, sound: best.outsideCount === 0, conflicts };
 	}
 
 	private energyOf(state: SearchState): number {

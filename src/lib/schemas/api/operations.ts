@@ -5,6 +5,7 @@ import { readingFields, uploadFields } from '../upload.ts';
 import { boundariesResponse } from './check-boundaries.ts';
 import { colouringRequest, colouringResponse } from './check-colouring.ts';
 import { paletteRequest, paletteResponse } from './check-palette.ts';
+import * as measures from './measures.ts';
 import * as sheets from './sheets.ts';
 
 /** One route of the API: what it takes and gives. The API's description is made from this list. */
@@ -78,6 +79,25 @@ export const operations = {
 		...{ method: 'PUT', path: `${sheet}/rules`, scope: 'sheets:write', status: 200 },
 		summary: 'Save decisions as the next revision; 409 when somebody else saved first.',
 		...{ json: saveDraft, answer: sheets.rulesSaved, refusals: [409, 413, 415, 422] },
+	},
+	listMeasures: {
+		...{ method: 'GET', path: `${sheet}/measures`, scope: 'territories:read', status: 200 },
+		...{ summary: 'The figures joined to a sheet’s regions.', answer: measures.measureList },
+	},
+	readMeasure: {
+		method: 'GET',
+		path: `${sheet}/measures/{measure}`,
+		...{ scope: 'territories:read', status: 200 },
+		summary: 'One measure by its name, with its value for each region.',
+		answer: measures.measureDetail,
+	},
+	saveMeasure: {
+		method: 'PUT',
+		path: `${sheet}/measures/{measure}`,
+		...{ scope: 'territories:write', status: 200 },
+		summary: 'Send a measure by its name: new, in place of what is there, or on top of it.',
+		json: measures.measureSent,
+		...{ answer: measures.measureKept, refusals: [409, 413, 415, 422, 503] },
 	},
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },

@@ -328,6 +328,14 @@ export interface HandoverTable {
 	effective_on: string;
 	state: 'open' | 'approved' | 'withdrawn';
 	data_digest: string;
+	/** what `data_digest` is over, kept apart so that it can be told what changed */
+	data_parts: JSONColumnType<Record<string, unknown>, string | undefined, string>;
+	/** the measures whose figures the moves carry */
+	measures: JSONColumnType<
+		{ name: string; unit: string; confidential: boolean }[],
+		string | undefined,
+		string
+	>;
 	/** SHA-256 of the list as approved */
 	digest: string | null;
 	note: Generated<string>;
@@ -362,10 +370,29 @@ export interface HandoverLetterTable {
 	email: string;
 	token_hash: Buffer;
 	with_figures: Generated<boolean>;
-	sent_at: Moment;
+	/** null while it is on its way, or when it could not be sent */
+	sent_at: OptionalMoment;
 	expires_at: Moment;
 	answered_at: OptionalMoment;
 	revoked_at: OptionalMoment;
+	created_at: Moment;
+	created_by: string | null;
+	/** why it could not be sent */
+	failure: string | null;
+	/** the press of the button that asked for it: the same press sends no second letter */
+	press: Generated<string>;
+}
+export interface HandoverAnswerTable {
+	id: Generated<number>;
+	handover_id: string;
+	ordinal: number;
+	/** whose letter it came by; null for a planner */
+	territory_key: string | null;
+	answer: Exclude<MoveState, 'approved'>;
+	word: Generated<string>;
+	/** address of the letter, or the planner's name */
+	author: string;
+	at: Moment;
 }
 
 export interface Database {
@@ -399,6 +426,7 @@ export interface Database {
 	handovers: HandoverTable;
 	handover_moves: HandoverMoveTable;
 	handover_letters: HandoverLetterTable;
+	handover_answers: HandoverAnswerTable;
 }
 
 export type Row<T extends keyof Database> = Selectable<Database[T]>;

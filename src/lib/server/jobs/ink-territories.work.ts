@@ -1,4 +1,6 @@
 import { checkColouring, colour, type ColouringProblem } from '../../engines/colouring/index.ts';
+import { buildGraph } from '../../engines/graph/index.ts';
+import { territoryGraph } from '../../engines/territories/territory-graph.ts';
 import type { Task } from './task-port.ts';
 
 export interface InkTerritoriesInput {
@@ -26,10 +28,11 @@ export type InkedTerritories =
 export async function inkTerritories({
 	input,
 }: Task<InkTerritoriesInput>): Promise<InkedTerritories> {
-	const { territories, previous, most } = input;
+	const { borders, assignment, territories, previous, most } = input;
+	const regions = buildGraph(assignment.length, borders.a, borders.b);
 	const plain: ColouringProblem = {
 		regions: territories,
-		borders: territoryBorders(input),
+		borders: territoryGraph(regions, assignment, territories),
 		inks: 'fewest',
 		seed: 0,
 	};
@@ -47,19 +50,4 @@ export async function inkTerritories({
 	}
 	const faults = checkColouring(problem, result);
 	return { status: 'inked', inks: Array.from(result.colouring), faults };
-}
-
-/** Pairs of territories with a border between them, each once. */
-function territoryBorders({ borders, assignment, territories }: InkTerritoriesInput) {
-	const pairs = new Set<number>();
-	for (let i = 0; i < borders.a.length; i++) {
-		const [one, two] = [assignment[borders.a[i]], assignment[borders.b[i]]];
-		if (one < 0 || two < 0 || one === two) continue;
-		pairs.add(Math.min(one, two) * territories + Math.max(one, two));
-	}
-	const list = [...pairs].sort((x, y) => x - y);
-	return {
-		a: list.map((pair) => Math.floor(pair / territories)),
-		b: list.map((pair) => pair % territories),
-	};
 }

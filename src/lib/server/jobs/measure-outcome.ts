@@ -3,6 +3,8 @@ import {
 	takeValues,
 	type Join,
 	type RawTable,
+	type TableNote,
+	type TakenValues,
 	type TypedColumn,
 } from '../../engines/measures/index.ts';
 import { Sum } from '../../engines/measures/values/sum.ts';
@@ -29,8 +31,8 @@ export interface OutcomeInput {
 /** A column as it would be stored. */
 export interface TakenColumn {
 	outcome: ColumnOutcome;
-	/** by region, before anything is added to it; null where the column cannot be taken */
-	values: Float64Array | null;
+	/** before anything is added to it; null for words and where the column cannot be taken */
+	taken: TakenValues | null;
 	texts: (string | null)[] | null;
 	/** as it is to be stored: with `add`, on top of what is there */
 	stored: Float64Array | null;
@@ -60,7 +62,8 @@ function takeNumbers(
 	const values = taken.status === 'taken' ? taken.values : null;
 	const against = changeOf(choice, values, null, input);
 	return {
-		...{ values, texts: null, stored: against.stored },
+		taken: taken.status === 'taken' ? taken : null,
+		...{ texts: null, stored: against.stored },
 		outcome: {
 			choice,
 			refusals: [...told.refusals, ...against.refusals],
@@ -83,7 +86,7 @@ function takeWords(
 	const texts = taken.status === 'taken' ? taken.values : null;
 	const against = changeOf(choice, null, texts, input);
 	return {
-		...{ values: null, texts, stored: null },
+		...{ taken: null, texts, stored: null },
 		outcome: {
 			choice,
 			refusals: [...told.refusals, ...against.refusals],
@@ -95,12 +98,17 @@ function takeWords(
 	};
 }
 
-function wordsOf(notes: Parameters<typeof sentenceOf>[0][], regions: Names) {
-	const refused = notes.filter(({ severity }) => severity === 'error');
-	const told = notes.filter(({ severity }) => severity !== 'error');
+/** Errors are why a column is refused; it is named where they are shown, so its heading is left out here. */
+function wordsOf(notes: TableNote[], regions: Names) {
+	const say = (note: TableNote) => {
+		const said = sentenceOf(note, regions);
+		const heading = `"${note.column}": `;
+		const bare = said.startsWith(heading) ? said.slice(heading.length) : said;
+		return bare.charAt(0).toUpperCase() + bare.slice(1);
+	};
 	return {
-		refusals: refused.map((note) => sentenceOf(note, regions)),
-		notes: told.map((note) => sentenceOf(note, regions)),
+		refusals: notes.filter(({ severity }) => severity === 'error').map(say),
+		notes: notes.filter(({ severity }) => severity !== 'error').map(say),
 	};
 }
 

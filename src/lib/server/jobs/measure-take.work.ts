@@ -34,7 +34,7 @@ export function takeMeasureTable({ input }: Task<TakeInput>): TakeOutcome {
 		columns: taken.map(ready),
 		joined: exact + folded + zeros + byHand,
 		open: join.unmatched.length,
-		faults: faultsInTaking({ table, typed, join }, input, taken),
+		faults: faultsInTaking({ table, typed, join }, input.regions, taken),
 	};
 }
 

@@ -49,9 +49,12 @@ export type RebalanceOutcome =
 export type CheckedRebalance = { outcome: RebalanceOutcome } | { faults: string[] };
 
 /** Works out a plan and has the checker, which shares no code with the engine, look at it. */
-export function rebalancePlan({ input, port }: Task<RebalanceInput>): CheckedRebalance {
+export async function rebalancePlan({
+	input,
+	port,
+}: Task<RebalanceInput>): Promise<CheckedRebalance> {
 	const problem = problemOfDraft(input.ground, input.draft, input.wishes);
-	const result = rebalance(problem, { progress: teller(port) });
+	const result = await rebalance(problem, { progress: teller(port) });
 	const faults = faultsOf(problem, result);
 	return faults.length > 0 ? { faults } : { outcome: outcomeOf(problem, result) };
 }
@@ -74,12 +77,13 @@ function outcomeOf(problem: TerritoryProblem, result: RebalanceResult): Rebalanc
 	return { status, plan: best && madePlan(problem, best), lowerBound, message };
 }
 
-/** Figures and faults of a plan that somebody changed by hand. */
+/** Figures and faults of a plan that somebody changed by hand, or why the problem itself has none. */
 export function judgePlan({
 	input: { ground, draft, wishes, assignment },
-}: Task<RebalanceInput & { assignment: Int32Array }>): MadePlan {
+}: Task<RebalanceInput & { assignment: Int32Array }>): { plan: MadePlan } | Impossible {
 	const problem = problemOfDraft(ground, draft, wishes);
-	return madePlan(problem, planOf(problem, assignment));
+	const plan = planOf(problem, assignment);
+	return 'status' in plan ? plan : { plan: madePlan(problem, plan) };
 }
 
 function madePlan(problem: TerritoryProblem, plan: Plan): MadePlan {

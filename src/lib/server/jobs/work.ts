@@ -2,6 +2,7 @@
 export { colourDraft, recheck } from './colour.work.ts';
 export { inkTerritories } from './ink-territories.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
+export { judgePlan, rebalancePlan } from './rebalance.work.ts';
 export { readFile } from './read.work.ts';
 export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
@@ -14,3 +15,4 @@ export {
 	reviewMeasureTable,
 	takeMeasureTable,
 } from './measures.work.ts';
+export { unitColumns } from './unit-columns.work.ts';

@@ -168,9 +168,10 @@ export async function deleteMeasuresOfTable(trx: Db, tableId: string): Promise<v
 /** Ids of the measures that the wishes of the current territory draft name. */
 export async function measuresInWishes(db: Db, sheetId: string): Promise<Set<string>> {
 	const { rows } = await sql<{ wishes: { tolerances?: object; cost?: string } | null }>`
-		select document -> 'wishes' as wishes from territory_drafts
-		join sheets on sheets.id = sheet_id and sheets.territory_revision = revision
-		where sheet_id = ${sheetId}
+		select document -> 'wishes' as wishes from sheets
+		join territory_drafts drafts on drafts.sheet_id = sheets.id
+			and drafts.revision = sheets.territory_revision
+		where sheets.id = ${sheetId}
 	`.execute(db);
 	const wishes = rows[0]?.wishes;
 	return new Set([...Object.keys(wishes?.tolerances ?? {}), wishes?.cost ?? '']);

@@ -17,6 +17,7 @@ export const limits = {
 	mailsToPerson: { name: 'mails-to', uses: 6, seconds: 3600 },
 	mailsFromTeam: { name: 'mails-from', uses: 200, seconds: 86_400 },
 	teamsByPerson: { name: 'teams', uses: 20, seconds: 86_400 },
+	linksByAddress: { name: 'links-address', uses: 240, seconds: 900 },
 	writesByAddress: { name: 'writes-address', uses: 300, seconds: 60 },
 	writesByPerson: { name: 'writes-person', uses: 300, seconds: 60 },
 	callsByToken: { name: 'calls', uses: 600, seconds: 60 },

@@ -18,7 +18,7 @@ import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
 import { firstOptions, keptDigest, optionsOf, storedOptions } from './measure-options.ts';
 import { holdTable, isStale, requireOpen, tableOf } from './measure-table.ts';
-import { readBytes } from './measure-upload.service.ts';
+import { readBytes } from './measure-entry.ts';
 import { Conflict, NotFound, Refused } from './outcomes.ts';
 import { dropUnused } from './stored-files.ts';
 
@@ -91,7 +91,7 @@ export async function joinAgain(
 		const entered = await insertMeasureTable(trx, {
 			...copy,
 			state: 'open',
-			options: storedOptions({ ...optionsOf(row), existing: 'replace' }),
+			options: storedOptions(optionsOf(row)),
 			source: JSON.stringify(row.source),
 		});
 		return entered.number;

@@ -27,8 +27,10 @@ export async function measuresOf(db: Db, sheetId: string): Promise<MeasureColumn
 		measures: rows.flatMap((row) =>
 			row.values ? measure(row, row.values, sheet?.boundary_set_id) : [],
 		),
-		textColumns: rows.flatMap(({ id, name, table_name: table, texts }) =>
-			texts ? { id, name, table, texts } : [],
+		textColumns: rows.flatMap(({ id, name, table_name: table, texts, boundary_set_id }) =>
+			texts
+				? { id, name, table, texts, stale: boundary_set_id !== sheet?.boundary_set_id }
+				: [],
 		),
 	};
 }

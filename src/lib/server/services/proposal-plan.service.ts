@@ -14,6 +14,7 @@ import { digestOfParts } from './proposal-data.ts';
 import { recordProposal, withProposal } from './proposal-keep.service.ts';
 import { noteOf, presentParts, requestOf, resultOf, staleness } from './proposal-notes.ts';
 import { planResult, type StoredRequest } from './proposal-result.ts';
+import { inWords } from './proposal-words.ts';
 import { proposalOf } from './proposals.service.ts';
 import { inksFor } from './territory-inks.ts';
 import {
@@ -62,16 +63,23 @@ export function requirePresent({ row, state }: OpenPlan): void {
 	if (stale) throw new Conflict('data-changed', `${stale} Check the proposal against them first.`);
 }
 
-/** Figures and faults of a plan, worked out in a thread. */
-export const judged = (
+/**
+ * Figures and faults of a plan, worked out in a thread.
+ * @throws Unfit when there are none, because a figure is missing
+ */
+export async function judged(
 	shop: Pick<Workshop, 'pool'>,
-	{ row, state: { ground }, asked }: OpenPlan,
+	{ row, state, asked }: OpenPlan,
 	assignment: number[],
-): Promise<MadePlan> =>
-	shop.pool.run('judgePlan', {
-		...{ ground, draft: asked, wishes: requestOf(row).wishes },
+): Promise<MadePlan> {
+	const { wishes } = requestOf(row);
+	const found = await shop.pool.run('judgePlan', {
+		...{ ground: state.ground, draft: asked, wishes },
 		assignment: Int32Array.from(assignment),
 	});
+	if ('plan' in found) return found.plan;
+	throw new Unfit(found.reason, inWords(found.message, planNames(state, asked, wishes)));
+}
 
 /**
  * Saves edits by hand. A plan that breaks rules is kept and says so; it cannot be adopted. When somebody

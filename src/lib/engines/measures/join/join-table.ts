@@ -6,7 +6,7 @@ import { Suggestions } from './suggestions.ts';
 
 /** Unknown texts get suggestions until so many steps are spent; a table with more of them than that, a few
  * hundred among 33,000 regions, is joined by the wrong column. */
-const mostSteps = 50_000_000;
+const mostSteps = 20_000_000;
 
 /**
  * Joins the rows of a table to regions by one column.

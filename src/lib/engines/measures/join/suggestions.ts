@@ -32,7 +32,9 @@ export class Suggestions {
 	steps = 0;
 
 	constructor(regions: Regions, by: 'key' | 'name') {
-		this.labels = (by === 'key' ? regions.keys : regions.names).map(fold);
+		this.labels = (by === 'key' ? regions.keys : regions.names).map((label) =>
+			fold(label).slice(0, longestMeasured),
+		);
 		this.shared = new Uint16Array(this.labels.length);
 		this.labels.forEach((label, region) => {
 			for (const pair of pairs(label)) {
@@ -76,3 +78,7 @@ export class Suggestions {
 		return enough;
 	}
 }
+
+/** Suggestions for one text, as for the unmatched rows of a join; for texts beyond those it had steps for. */
+export const suggestRegions = (text: string, regions: Regions, by: 'key' | 'name'): Suggestion[] =>
+	new Suggestions(regions, by).for(text);

@@ -24,8 +24,8 @@ export function findDialect(sample: string, told?: string): Dialect {
 }
 
 function findNewline(sample: string): Pick<Dialect, 'newline' | 'mixedNewlines'> {
-	// line ends within quotes are text
-	const bare = sample.replace(/"[^"]*"/g, '');
+	// line ends within quotes are text, and the sample may end in a quote or amid a line end
+	const bare = sample.replace(/"[^"]*("|$)/g, '').replace(/\r$/, '');
 	const count = (pattern: RegExp) => bare.match(pattern)?.length ?? 0;
 	const kinds = [
 		{ newline: '\r\n' as const, count: count(/\r\n/g) },

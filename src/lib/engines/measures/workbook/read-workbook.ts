@@ -114,7 +114,7 @@ function looksLikeTable(grid: Grid): boolean {
 }
 
 function notesOn(
-	{ grid, unsaved, name }: OneSheet & { name: string },
+	{ unsaved, name }: OneSheet & { name: string },
 	sheets: TableSource['sheets'],
 ): TableNote[] {
 	const notes: TableNote[] = [];
@@ -125,13 +125,6 @@ function notesOn(
 	if (unsaved.length) {
 		const message = `${counted(unsaved.length, 'formula was', 'formulas were')} saved without a value and read as empty: row ${listed(unsaved)}. Open and save the workbook in a spreadsheet program.`;
 		notes.push(note('warning', 'formula-unsaved', message, { row: unsaved[0] }));
-	}
-	const tall = grid.merges.filter(({ top, bottom }) => bottom > top);
-	const inData = tall.filter(({ bottom }) => bottom >= (grid.fileRows[2] ?? 0));
-	if (inData.length) {
-		const row = inData[0].top + 1;
-		const message = `${counted(inData.length, 'merged cell reaches', 'merged cells reach')} over several rows, the first from row ${row}; only the top row of each has the text.`;
-		notes.push(note('warning', 'rows-merged', message, { row }));
 	}
 	return notes;
 }
