@@ -6,7 +6,8 @@ export interface Column<Row> {
 	label: string;
 	value: (row: Row) => string | number | null;
 	text?: (row: Row) => string;
-	cell?: Snippet<[Row]>;
+	/** given the row and the column's id */
+	cell?: Snippet<[Row, string]>;
 	numeric?: boolean;
 	/** false where an order would mean nothing */
 	sortable?: boolean;

@@ -1,7 +1,7 @@
 import { counted } from '$lib/components/format';
 import type { TerritoryDesk } from './territories.svelte';
 import { dropClosedBases, give } from './territory-edits';
-import { amount, deviationWords } from './territory-words';
+import { amount, deviationWords, piecesOf } from './territory-words';
 
 /** What a press on a region gives it to: a territory's key, 'none' to take it away, null: it gives nothing. */
 export type InHand = string | null;
@@ -135,9 +135,10 @@ export class HandOut {
 		const loads = touched.slice(0, 3).map((t) => this.#standing(t));
 		const tears = torn
 			.filter(({ territory }) => touched.includes(territory))
-			.map(({ territory, parts }) => {
-				const { name } = entries[territory];
-				return `${name} is torn into ${counted(parts.filter((part) => part.length).length, 'part')}.`;
+			.map(({ territory }) => {
+				const pieces = piecesOf(torn, territory);
+				const how = pieces > 1 ? `torn into ${counted(pieces, 'part')}` : 'cut off from its base';
+				return `${entries[territory].name} is ${how}.`;
 			});
 		const given = `${this.#named(moved)} given to ${entries[to]?.name ?? 'no territory'}${by}.`;
 		return [given, ...tears, ...loads, ...this.#warned(moved, to)].join(' ');

@@ -182,6 +182,11 @@ export class TerritoryDesk {
 	of(region: number): TerritoryEntry | null {
 		return this.entries[this.assignment[region]] ?? null;
 	}
+	/** Looks at one territory; the territory's panel opens beside the sheet. */
+	look(key: string | null) {
+		this.chosen = key;
+		this.desk.panel = 'stage';
+	}
 	get mayEdit(): boolean {
 		return this.desk.may('territories.edit') && (!this.proposal || this.proposal.give !== null);
 	}

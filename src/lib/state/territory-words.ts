@@ -1,4 +1,6 @@
 import { count, counted } from '$lib/components/format';
+import type { Torn } from '$lib/engines/territories';
+import type { TerritoryEntry } from '$lib/engines/territories/territory-draft';
 import type { Figure, Loads } from './territory-figures';
 
 /** What the desk says of territories, in the words of those who plan them. */
@@ -56,4 +58,31 @@ export function roomSentence(
 	if (values.length && territories / values.length > tight * tolerance)
 		return { room: 'hard', words: `${asked} with ${units} is hard: ${heavy}.` };
 	return { room: 'wide', words: `${asked} with ${units} leaves room: ${heavy}.` };
+}
+
+/** Load over target with 100 for the target itself: "104.2"; nothing without a target. */
+export const indexWords = (load: number, target: number): string =>
+	target > 0 ? percent.format((100 * load) / target) : '';
+
+/** How many pieces a territory is in; 1 unless it is torn. */
+export const piecesOf = (torn: readonly Torn[], territory: number): number =>
+	torn.find((one) => one.territory === territory)?.parts.filter(({ length }) => length > 0)
+		.length ?? 1;
+
+/** "frozen, in 2 parts": what stands out about a territory beside its load. */
+export function stateWords(
+	{ frozen, vacant, closing }: TerritoryEntry,
+	torn: readonly Torn[],
+	territory: number,
+): string {
+	const isTorn = torn.some((one) => one.territory === territory);
+	const pieces = piecesOf(torn, territory);
+	return [
+		isTorn ? (pieces > 1 ? `torn into ${pieces} parts` : 'cut off from its base') : '',
+		frozen ? 'frozen' : '',
+		vacant ? 'vacant' : '',
+		closing ? 'closing' : '',
+	]
+		.filter(Boolean)
+		.join(', ');
 }

@@ -56,21 +56,19 @@ export class SheetSurface {
 		};
 	}
 
-	/** Shows the same sheet in other colours: fills that differ, then lettering and legend. */
-	paint(drawing: Drawing, locked: (region: number) => boolean) {
-		for (const fill of drawing.fills) {
-			const element = this.#regions[fill.region];
-			const held = locked(fill.region);
-			const words = wordsOf(fill, drawing, held);
-			if (!element || element.getAttribute('aria-label') === words) {
-				if (element?.getAttribute('fill') !== fill.hex) element?.setAttribute('fill', fill.hex);
-				continue;
-			}
-			element.setAttribute('fill', fill.hex);
-			element.setAttribute('aria-label', words);
-			element.querySelector('title')?.replaceChildren(words);
-		}
+	/** Shows the same sheet in other colours: fills and words that differ, then lettering and legend. */
+	paint(drawing: Drawing, words: (fill: RegionFill) => string) {
+		for (const fill of drawing.fills) this.tint(fill.region, fill.hex, words(fill));
 		this.#letter(drawing);
+	}
+
+	/** Gives one region a fill and its words. */
+	tint(region: number, hex: string, words: string) {
+		const element = this.#regions[region];
+		if (element?.getAttribute('fill') !== hex) element?.setAttribute('fill', hex);
+		if (!element || element.getAttribute('aria-label') === words) return;
+		element.setAttribute('aria-label', words);
+		element.querySelector('title')?.replaceChildren(words);
 	}
 
 	/** Fades every region for which `stays` is false; null fades none. */
@@ -114,7 +112,12 @@ function parse(text: string): SVGSVGElement {
 	return root as unknown as SVGSVGElement;
 }
 
-function wordsOf({ name, key, ink }: RegionFill, { inks }: Drawing, locked: boolean): string {
+/** A region in words while the sheet is coloured by region. */
+export function inkWords(
+	{ name, key, ink }: RegionFill,
+	{ inks }: Drawing,
+	locked: boolean,
+): string {
 	if (ink < 0) return `${name || key}, no ink yet`;
 	return `${name || key}, ink ${ink + 1} ${inks[ink]?.name ?? ''}${locked ? ', locked' : ''}`;
 }

@@ -1,4 +1,5 @@
 import type { Desk } from '$lib/state/desk.svelte';
+import { regionWords } from '$lib/state/region-words';
 import { neighboursOf } from '$lib/state/region-links';
 import type { Viewport } from '$lib/state/viewport.svelte';
 import { nearestRegion, step, type Direction } from '$lib/state/walk';
@@ -34,12 +35,13 @@ export class SheetWalk {
 			'0': () => view.fit(),
 			Enter: () => this.#open(),
 			Escape: () => this.#clear(),
+			' ': () => this.#toggle(),
 		};
 	}
 
 	keydown = (event: KeyboardEvent) => {
 		if (event.ctrlKey || event.metaKey || event.altKey) return;
-		if (event.key === 'Enter' && isControl(event.target)) return;
+		if ((event.key === 'Enter' || event.key === ' ') && isControl(event.target)) return;
 		const direction = arrows[event.key];
 		if (!direction && !this.#others[event.key]) return;
 		event.preventDefault();
@@ -71,21 +73,32 @@ export class SheetWalk {
 
 	#told(region: number): string {
 		const desk = this.#desk;
+		const plan = desk.planning;
 		const ink = desk.draft.document.palette.inks[desk.inks[region]]?.name ?? 'no ink';
+		const itself = plan ? regionWords(plan, region) : `${desk.nameOf(region)}, ${ink}`;
 		const beside = this.#beside(region);
 		const names = beside.slice(0, 8).map((other) => desk.nameOf(other));
 		const listed = names.length ? `: ${names.join(', ')}` : '';
-		return `${desk.nameOf(region)}, ${ink}, ${counted(beside.length, 'neighbour')}${listed}`;
+		return `${itself}, ${counted(beside.length, 'neighbour')}${listed}`;
 	}
 
 	#open() {
 		const { selected } = this.#desk;
 		if (selected === null) return;
+		const plan = this.#desk.planning;
+		if (plan?.mayEdit && plan.hand.inHand !== null)
+			return plan.hand.give([selected], plan.hand.inHand);
 		this.#desk.panel = 'region';
 		this.spoken = `${this.#desk.nameOf(selected)} is open beside the sheet.`;
 	}
 
+	#toggle() {
+		const { selected, planning } = this.#desk;
+		if (planning?.mayEdit && selected !== null) planning.hand.toggle(selected);
+	}
+
 	#clear() {
+		this.#desk.planning?.hand.clear();
 		this.#desk.evidence = null;
 		this.#desk.select(null);
 		this.#surface()?.setStop(null, true);
