@@ -1,4 +1,4 @@
-import { getContext, setContext } from 'svelte';
+import { getContext, setContext, type Snippet } from 'svelte';
 import { bordersForSheet } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
@@ -47,7 +47,9 @@ export class Desk {
 	/** whether every border that some reader could miss stands out on the sheet */
 	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
-	view: 'sheet' | 'table' | 'territories' = $state('sheet');
+	view: 'sheet' | 'table' | 'territories' | 'further' = $state('sheet');
+	/** a table that the stage lays in the middle, beside those that are always there */
+	further: { label: string; content: Snippet } | null = $state.raw(null);
 	/** figures looked at beside the regions in their table */
 	figures: { name: string; unit: string; values: readonly (number | string | null)[] } | null =
 		$state.raw(null);
