@@ -133,8 +133,11 @@ export class Desk {
 	}
 
 	/** the draft that undo, redo and saving speak of */
-	get inHand(): DraftState<Draft, DraftSaved> | TerritoryDesk['draft'] {
-		return this.planning?.draft ?? this.draft;
+	get inHand():
+		| DraftState<Draft, DraftSaved>
+		| TerritoryDesk['draft']
+		| NonNullable<TerritoryDesk['proposal']>['draft'] {
+		return this.planning?.proposal?.draft ?? this.planning?.draft ?? this.draft;
 	}
 
 	may(action: DeskSheet['rights'][number]): boolean {

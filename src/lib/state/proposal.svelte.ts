@@ -19,6 +19,8 @@ export class ProposalDesk {
 	/** as the server last judged it */
 	note: ProposalNote = $state.raw()!;
 	inks: Readonly<Record<string, number>> = $state.raw()!;
+	/** territories that would change ink, by key */
+	changedInks: readonly string[] = $state.raw()!;
 	readonly draft: DraftState<PlanOfRegions, PlanAnswer>;
 	readonly territories: TerritoryDesk;
 
@@ -45,6 +47,7 @@ export class ProposalDesk {
 		this.given = given;
 		this.note = given;
 		this.inks = given.inks;
+		this.changedInks = given.changedInks;
 		const { desk } = territories;
 		this.draft = new DraftState({
 			place: `${desk.sheet.id} proposal ${given.number}`,
@@ -54,9 +57,10 @@ export class ProposalDesk {
 			save,
 			keeper,
 			rebase: rebasePlan((region) => desk.nameOf(region)),
-			onsaved: ({ note, inks }) => {
+			onsaved: ({ note, inks, changedInks }) => {
 				this.note = note;
 				this.inks = inks;
+				this.changedInks = changedInks;
 			},
 		});
 	}
@@ -74,6 +78,7 @@ export class ProposalDesk {
 			assignment: this.assignment,
 			inks: this.inks,
 			before: this.before,
+			draft: this.draft,
 			give: this.mayEdit ? (regions, key, label) => this.#give(regions, key, label) : null,
 		};
 	}
@@ -84,6 +89,7 @@ export class ProposalDesk {
 		if (this.draft.dirty || given.revision < this.draft.revision) return;
 		this.note = given;
 		this.inks = given.inks;
+		this.changedInks = given.changedInks;
 		if (given.assignment) this.draft.refresh(given.revision, given.assignment, given.createdAt);
 	}
 

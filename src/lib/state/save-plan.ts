@@ -7,7 +7,8 @@ export type PlanOfRegions = readonly number[];
 /** What the server answers when a plan was saved, in the terms of a draft. */
 export interface PlanAnswer extends Saved<PlanOfRegions> {
 	note: PlanSaved['note'];
-	inks: Record<string, number>;
+	inks: PlanSaved['inks'];
+	changedInks: PlanSaved['changedInks'];
 }
 
 /** Saves edits by hand by `POST {address}`; somebody else's plan comes back when they were first. */
@@ -21,8 +22,8 @@ export const savePlanTo =
 		);
 		const savedAt = new Date().toISOString();
 		if (answer.kind === 'saved') {
-			const { revision: next, note, inks } = answer.saved;
-			return { kind: 'saved', saved: { revision: next, savedAt, note, inks } };
+			const { revision: next, note, inks, changedInks } = answer.saved;
+			return { kind: 'saved', saved: { revision: next, savedAt, note, inks, changedInks } };
 		}
 		if (answer.kind === 'stale') {
 			const { revision: theirs, assignment } = answer.stale;

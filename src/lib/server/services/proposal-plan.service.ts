@@ -16,7 +16,7 @@ import { noteOf, presentParts, requestOf, resultOf, staleness } from './proposal
 import { planResult, type StoredRequest } from './proposal-result.ts';
 import { inWords } from './proposal-words.ts';
 import { proposalOf } from './proposals.service.ts';
-import { inksFor } from './territory-inks.ts';
+import { changedInks, inksFor } from './territory-inks.ts';
 import {
 	territoriesIn,
 	territoryDraftOf,
@@ -217,7 +217,12 @@ async function storePlan(
 			},
 			() => null,
 		);
-		return { status: 'saved', saved: { revision: change.revision, assignment, note } };
+		const { inks } = inked;
+		const recoloured = { inks, changedInks: changedInks(state.row?.inks ?? {}, inks) };
+		return {
+			status: 'saved',
+			saved: { revision: change.revision, assignment, note, ...recoloured },
+		};
 	});
 }
 
