@@ -18,6 +18,19 @@ import {
 	sheetEditions,
 } from '../../src/lib/server/services/edition.service.ts';
 import {
+	createHandover,
+	handoverList,
+	readHandover,
+} from '../../src/lib/server/services/handover.service.ts';
+import { endLetter, sendLetters } from '../../src/lib/server/services/handover-letters.service.ts';
+import {
+	approveHandover,
+	changeMoveState,
+	changeReason,
+	confirmHandover,
+	withdrawHandover,
+} from '../../src/lib/server/services/handover-work.service.ts';
+import {
 	beginIntake,
 	beginSampleIntake,
 	cancelIntake,
@@ -133,6 +146,29 @@ const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
 	takeTable: ['measures.edit', (member) => takeTable(shop, member, 99, 1, true)],
 	uploadTable: ['measures.edit', (member) => uploadTable(shop, member, 99, empty())],
 	createToken: ['tokens.manage', (member) => createToken(member, token)],
+	approveHandover: [
+		'handover.approve',
+		(member) => approveHandover(shop, member, 99, 1, 'f'.repeat(64)),
+	],
+	changeMoveState: [
+		'handover.edit',
+		(member) => changeMoveState(shop, member, 99, 1, { move: 1, state: 'accepted', word: '' }),
+	],
+	changeReason: [
+		'handover.edit',
+		(member) => changeReason(shop, member, 99, 1, { move: 1, reason: 'Walked' }),
+	],
+	confirmHandover: ['handover.edit', (member) => confirmHandover(shop, member, 99, 1)],
+	createHandover: [
+		'handover.edit',
+		(member) =>
+			createHandover(shop, member, 99, { proposal: 1, effectiveOn: '2099-01-01', note: '' }),
+	],
+	endLetter: ['handover.edit', (member) => endLetter(shop, member, 99, 1, 'T01')],
+	handoverList: ['measures.read', (member) => handoverList(shop, member, 99)],
+	readHandover: ['measures.read', (member) => readHandover(shop, member, 99, 1)],
+	sendLetters: ['handover.edit', (member) => sendLetters(shop, member, 99, 1, { press: id })],
+	withdrawHandover: ['handover.edit', (member) => withdrawHandover(shop, member, 99, 1)],
 	deskSheet: ['sheet.read', (member) => deskSheet(shop, member, 99)],
 	draftSvg: ['sheet.read', (member) => draftSvg(shop, member, 99, 'typical')],
 	editionFile: ['files.download', (member) => editionFile(shop, member, 99, 1, 'sheet.svg')],

@@ -3,7 +3,9 @@ import { sql } from 'kysely';
 import Papa from 'papaparse';
 import readXlsxFile from 'read-excel-file/node';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { operations } from '../../src/lib/schemas/api/operations.ts';
 import { Forbidden, type Member } from '../../src/lib/server/access/member.ts';
+import { handoverAnswer } from '../../src/lib/server/api/handover-answer.ts';
 import {
 	createHandover,
 	handoverList,
@@ -19,7 +21,7 @@ import {
 	confirmHandover,
 	withdrawHandover,
 } from '../../src/lib/server/services/handover-work.service.ts';
-import { NotFound, Refused } from '../../src/lib/server/services/outcomes.ts';
+import { NotFound } from '../../src/lib/server/services/outcomes.ts';
 import { join, newTeam, openHouse } from '../support/house.ts';
 import { adopt, evenedOut, firm, plannedSheet, saveTerritories } from '../support/planned-sheet.ts';
 import { createWorkshop, type TestWorkshop } from '../support/workshop.ts';
@@ -473,6 +475,19 @@ describe('the link in a letter', () => {
 		const { gainer } = await sentList();
 		const rows = await house.db.selectFrom('handover_letters').selectAll().execute();
 		expect(JSON.stringify(rows)).not.toContain(secretOf(gainer));
+	});
+});
+
+describe('lists over the API', () => {
+	it('answer what the API’s description says, without letters or addresses', async () => {
+		const list = await newList();
+		const { lists } = await handoverList(shop, planner, 1);
+		expect(operations.listHandovers.answer.parse({ handovers: lists }).handovers).toHaveLength(
+			lists.length,
+		);
+		const answer = operations.readHandover.answer.parse(handoverAnswer(await read(list)));
+		expect(answer.moves).toHaveLength((await read(list)).moves.length);
+		expect(JSON.stringify(answer)).not.toContain('quellorn.example');
 	});
 });
 

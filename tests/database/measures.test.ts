@@ -137,3 +137,336 @@ describe('a table with errors', () => {
 		});
 	});
 });
+
+/** Uploads a plain table, takes it over with the columns proposed, and answers its number. */
+async function take(rows: (string | number)[][], existing: 'replace' | 'add' = 'replace') {
+	const table = await upload(shop, analyst, sheet, 'plain.csv', csv(rows));
+	const { outcome } = await reviewOf(table);
+	const columns = outcome.map(({ choice }) => choice);
+	await chooseColumns(shop, analyst, sheet, table, { columns, existing });
+	const taken = await takeTable(shop, analyst, sheet, table, true);
+	return { table, taken };
+}
+const measure = async (name: string) => {
+	const found = (await deskMeasures(shop, analyst, sheet)).measures.find(
+		(one) => one.name === name,
+	);
+	if (!found) throw new Error(`no measure ${name}`);
+	return found;
+};
+const measureCount = async () => {
+	const { measures, textColumns } = await deskMeasures(shop, analyst, sheet);
+	return measures.length + textColumns.length;
+};
+const stateOf = async (number: number) =>
+	(await measureTables(shop, analyst, sheet)).find((one) => one.number === number)?.state;
+
+describe('a later table', () => {
+	const first = [
+		['Key', 'Visits'],
+		['01', 10],
+		['02', 20],
+		['03', 30],
+		['04', 40],
+	];
+	let before: { table: number; id: string };
+
+	it('shows what it changes before it is taken over', async () => {
+		const { table } = await take(first);
+		before = { table, id: (await measure('Visits')).id };
+		const later = await upload(
+			shop,
+			analyst,
+			sheet,
+			'later.csv',
+			csv([
+				['Key', 'Visits'],
+				['01', 10],
+				['02', 25],
+				['03', 18],
+				['06', 60],
+			]),
+		);
+		const { outcome } = await reviewOf(later);
+		// by hand: 02 and 03 change (most 03, by 12), 06 is new, 04 goes; 100 before, 113 after
+		expect(outcome[0].change).toMatchObject({
+			...{ mode: 'replace', changed: 2, added: 1, removed: 1, before: 100, after: 113 },
+			largest: { region: { key: '03', name: 'Corran' }, before: 30, after: 18 },
+		});
+		await takeTable(shop, analyst, sheet, later, true);
+		expect(await measure('Visits')).toMatchObject({
+			...{ id: before.id, values: [10, 25, 18, null, null, 60], total: 113 },
+		});
+		const { changes } = await readTableReview(shop, analyst, sheet, later);
+		expect(changes.sentences?.[0]).toContain('Largest change: Corran, 30 to 18');
+	});
+
+	it('takes the place of the one before, of which nothing is left', async () => {
+		expect(await stateOf(before.table)).toBe('replaced');
+	});
+
+	it('can be added to what is there, with the same unit only', async () => {
+		const { table, taken } = await take(
+			[
+				['Key', 'Visits'],
+				['01', 1],
+				['04', 4],
+			],
+			'add',
+		);
+		expect(taken.measures).toEqual([before.id]);
+		expect((await measure('Visits')).values).toEqual([11, 25, 18, 4, null, 60]);
+		expect(await stateOf(table)).toBe('taken');
+		await expect(
+			take(
+				[
+					['Key', 'Visits [h]'],
+					['01', 1],
+					['02', 3],
+				],
+				'add',
+			),
+		).rejects.toMatchObject({ code: 'not-taken', message: /only the same unit/ });
+	});
+
+	it('keeps its own name when it holds words where numbers are', async () => {
+		const table = await upload(
+			shop,
+			analyst,
+			sheet,
+			'words.csv',
+			csv([
+				['Key', 'Visits'],
+				['01', 'few'],
+				['02', 'many'],
+			]),
+		);
+		const { columns } = await reviewOf(table);
+		const choice = { columns: [columns[1].proposal], existing: 'replace' as const };
+		await chooseColumns(shop, analyst, sheet, table, choice);
+		await expect(takeTable(shop, analyst, sheet, table, true)).rejects.toMatchObject({
+			message: /a column of numbers called so already/,
+		});
+	});
+});
+
+describe('many rows at once', () => {
+	it('are given the nearest region, or left out, and taken back', async () => {
+		const names = ['Ashbi', 'Belmoor', 'Coran', 'Dunwik', 'Zzz'];
+		const rows = [['Name', 'Stops'], ...names.map((name, at) => [name, at + 1])];
+		// enough right names for the column to be found by itself
+		const right = ['Ashby', 'Bellmoor', 'Corran', 'Dunwick', 'Fairlea'].map((name) => [name, 0]);
+		const table = await upload(shop, analyst, sheet, 'many.csv', csv([...rows, ...right]));
+		expect((await reviewOf(table)).join.open).toBe(5);
+		await sweepRows(shop, analyst, sheet, table, { what: 'take-first' });
+		const { join } = await reviewOf(table);
+		expect(join).toMatchObject({ open: 1, counts: { 'by-hand': 4 } });
+		expect(join.decided.rows.map(({ region }) => region?.name)).toEqual([
+			...['Ashby', 'Bellmoor', 'Corran', 'Dunwick'],
+		]);
+		await sweepRows(shop, analyst, sheet, table, { what: 'leave-out-rest' });
+		expect((await reviewOf(table)).join).toMatchObject({ open: 0, leftOut: 1 });
+		await sweepRows(shop, analyst, sheet, table, { what: 'take-back-all' });
+		expect((await reviewOf(table)).join).toMatchObject({ open: 5, leftOut: 0 });
+		const page = await reviewOf(table, { page: 1, find: 'dunw' });
+		expect(page.join.list).toMatchObject({ found: 1, rows: [{ text: 'Dunwik' }] });
+	});
+
+	it('can be read another way from the kept file', async () => {
+		const text = 'Code;Turnover;Note\n01;1.234,5;a\n02;2.000,5;b\n03;3,25;c';
+		const table = await upload(shop, analyst, sheet, 'comma.csv', text);
+		const turnover = async () =>
+			(await reviewOf(table)).outcome.find(({ choice }) => choice.name === 'Turnover');
+		// 1234.5 + 2000.5 + 3.25
+		expect((await turnover())?.sums?.file).toBe(3238.25);
+		await rereadTable(shop, analyst, sheet, table, { delimiter: ';', decimal: '.' });
+		expect((await turnover())?.sums?.file).not.toBe(3238.25);
+		await rereadTable(shop, analyst, sheet, table, { decimal: ',' });
+		expect((await turnover())?.sums?.file).toBe(3238.25);
+		const beyond = rereadTable(shop, analyst, sheet, table, { headingRow: 900 });
+		await expect(beyond).rejects.toMatchObject({ code: 'no-such-row' });
+		expect((await turnover())?.sums?.file).toBe(3238.25);
+		await dropTable(shop, analyst, sheet, table);
+	});
+});
+
+describe('what is dropped', () => {
+	it('is not what the wishes for territories use', async () => {
+		const { id } = await measure('Visits');
+		const { id: sheetId } = await deskSheet(shop, analyst, sheet);
+		const wishes = { tolerances: { [id]: 0.1 }, cost: 'units' };
+		await shop.db
+			.insertInto('territory_drafts')
+			.values({ sheet_id: sheetId, revision: 1, document: JSON.stringify({ wishes }) })
+			.execute();
+		await shop.db.updateTable('sheets').set({ territory_revision: 1 }).execute();
+		const table = (await measureTables(shop, analyst, sheet)).find(({ measures }) =>
+			measures.some((one) => one.id === id),
+		);
+		const number = table?.number ?? 0;
+		await expect(dropMeasure(shop, analyst, sheet, number, id)).rejects.toThrow(/wishes/);
+		await expect(dropTable(shop, analyst, sheet, number)).rejects.toThrow(/use Visits/);
+		await shop.db.updateTable('sheets').set({ territory_revision: 0 }).execute();
+	});
+
+	it('goes with its figures and its file, and says so in the log', async () => {
+		const rows = [
+			['Key', 'Passing'],
+			['01', 123456],
+			['02', 2],
+		];
+		const stored = await shop.stored();
+		const { table } = await take(rows);
+		expect((await shop.stored()).length).toBe(stored.length + 2);
+		await dropTable(shop, analyst, sheet, table);
+		expect((await shop.stored()).sort()).toEqual(stored.sort());
+		await expect(measure('Passing')).rejects.toThrow('no measure');
+		await expect(readTableReview(shop, analyst, sheet, table)).rejects.toThrow(NotFound);
+		expect(await log('measures.table-dropped')).toContainEqual(
+			expect.objectContaining({ detail: expect.objectContaining({ measures: ['Passing'] }) }),
+		);
+	});
+
+	it('may be one measure of several', async () => {
+		const { table } = await take([
+			['Key', 'One', 'Two'],
+			['01', 1, 2],
+			['02', 3, 4],
+		]);
+		await dropMeasure(shop, analyst, sheet, table, (await measure('One')).id);
+		expect(await stateOf(table)).toBe('taken');
+		await dropMeasure(shop, analyst, sheet, table, (await measure('Two')).id);
+		expect(await stateOf(table)).toBe('replaced');
+	});
+});
+
+describe('boundaries replaced meanwhile', () => {
+	it('are told everywhere, and nothing is taken over before it is joined again', async () => {
+		const open = await upload(
+			shop,
+			analyst,
+			sheet,
+			'open.csv',
+			csv([
+				['Key', 'Late'],
+				['01', 1],
+				['03', 3],
+				['9', 9],
+			]),
+		);
+		await decideRows(shop, analyst, sheet, open, [{ row: 2, region: '05' }]);
+		// the same sheet on other boundaries: 05 is gone, the order is another, 07 is new
+		const cartographer = await createMember(shop.db, 'figures', 'cartographer', 'admin');
+		const other = await squaresSheet(shop, cartographer, [
+			...(
+				[
+					['07', 'Gorse'],
+					['03', 'Corran'],
+					['02', 'Bellmoor'],
+					['01', 'Ashby'],
+				] as const
+			).map(([key, name]): [string, string] => [key, name]),
+		]);
+		const moved = await deskSheet(shop, cartographer, other);
+		await shop.db
+			.updateTable('sheets')
+			.set({ boundary_set_id: moved.boundarySet.id })
+			.where('number', '=', sheet)
+			.execute();
+
+		const tables = await measureTables(shop, analyst, sheet);
+		expect(tables.every(({ stale }) => stale)).toBe(true);
+		expect((await measure('Visits')).stale).toBe(true);
+		const told = (await deskSheet(shop, analyst, sheet)).measures;
+		expect(told?.stale).toBe(await measureCount());
+		await expect(takeTable(shop, analyst, sheet, open, true)).rejects.toMatchObject({
+			code: 'stale',
+		});
+
+		expect(await joinAgain(shop, analyst, sheet, open)).toBe(open);
+		const { join } = await reviewOf(open);
+		// the row decided for 05 is open again, because there is no such region any more
+		expect(join).toMatchObject({ joined: 2, open: 1 });
+		await sweepRows(shop, analyst, sheet, open, { what: 'leave-out-rest' });
+		await takeTable(shop, analyst, sheet, open, true);
+		expect(await measure('Late')).toMatchObject({ values: [null, 3, null, 1], stale: false });
+	});
+
+	it('a table taken over before stays until it is joined again and taken over in its place', async () => {
+		const { id } = await measure('Visits');
+		const old = (await measureTables(shop, analyst, sheet)).find(({ measures }) =>
+			measures.some((one) => one.id === id),
+		);
+		const again = await joinAgain(shop, analyst, sheet, old?.number ?? 0);
+		expect(again).not.toBe(old?.number);
+		// it had been added to what is there, which cannot be done across boundaries
+		const { outcome } = await reviewOf(again);
+		expect(outcome[0].refusals.join(' ')).toMatch(/earlier boundaries/);
+		const columns = outcome.map(({ choice }) => choice);
+		await chooseColumns(shop, analyst, sheet, again, { columns, existing: 'replace' });
+		await sweepRows(shop, analyst, sheet, again, { what: 'leave-out-rest' });
+		await takeTable(shop, analyst, sheet, again, true);
+		expect(await measure('Visits')).toMatchObject({ id, values: [null, null, null, 1] });
+		expect(await stateOf(old?.number ?? 0)).toBe('replaced');
+	});
+});
+
+describe('rights', () => {
+	it.each(roles)('of a %s', async (role) => {
+		const member = await createMember(shop.db, 'figures', role, 'designer');
+		const seen = await deskSheet(shop, member, sheet);
+		expect(seen.measures === null).toBe(!allows([role], 'measures.read'));
+		const read = deskMeasures(shop, member, sheet);
+		if (allows([role], 'measures.read')) await read;
+		else await expect(read).rejects.toThrow(Forbidden);
+		const sent = upload(
+			shop,
+			member,
+			sheet,
+			'own.csv',
+			csv([
+				['Key', 'Own'],
+				['01', 1],
+				['02', 2],
+			]),
+		);
+		if (allows([role], 'measures.edit')) await sent;
+		else await expect(sent).rejects.toThrow(Forbidden);
+	});
+
+	it('end at the team: another team’s sheet is not there', async () => {
+		const stranger = await createMember(shop.db, 'elsewhere', 'analyst', 'planner');
+		await expect(deskMeasures(shop, stranger, sheet)).rejects.toThrow(NotFound);
+		await expect(measureTables(shop, stranger, sheet)).rejects.toThrow(NotFound);
+		await expect(readTableReview(shop, stranger, sheet, 1)).rejects.toThrow(NotFound);
+		await expect(takeTable(shop, stranger, sheet, 1, true)).rejects.toThrow(NotFound);
+		await expect(dropTable(shop, stranger, sheet, 1)).rejects.toThrow(NotFound);
+		await expect(upload(shop, stranger, sheet, 'x.csv', 'Key,A\n01,1\n02,2')).rejects.toThrow(
+			NotFound,
+		);
+	});
+});
+
+describe('a sheet that is deleted', () => {
+	it('takes its tables and their files along', async () => {
+		const admin = await createMember(shop.db, 'gone', 'cartographer', 'analyst', 'admin');
+		const number = await squaresSheet(shop, admin, [
+			['a', 'Ayre'],
+			['b', 'Brae'],
+		]);
+		const stored = await shop.stored();
+		await upload(
+			shop,
+			admin,
+			number,
+			'gone.csv',
+			csv([
+				['Key', 'N'],
+				['a', 71],
+				['b', 72],
+			]),
+		);
+		await removeSheet(shop, admin, number);
+		expect((await shop.stored()).sort()).toEqual(stored.sort());
+	});
+});

@@ -47,6 +47,7 @@ export interface HandoverLetter {
 }
 
 export interface Handover extends Omit<HandoverNote, 'moves'> {
+	sheet: { number: number; name: string };
 	note: string;
 	measures: { name: string; unit: string; confidential: boolean }[];
 	moves: HandoverMove[];

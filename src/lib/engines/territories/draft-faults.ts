@@ -28,8 +28,8 @@ export function draftFaults(
 ): DraftFault[] {
 	return [
 		...unknownRegions(ground.keys, draft),
-		...unknownTerritories(draft),
 		...doubledTerritories(draft.territories),
+		...unknownTerritories(draft),
 		...doubledBases(draft.territories),
 		...basesElsewhere(draft),
 		...selfPairs(draft),

@@ -67,7 +67,12 @@ export function borderOf(prepared: Prepared, pool: Set<number>, region: number[]
 }
 
 /** What `border` shuts in with `region`. */
-export function enclosed(prepared: Prepared, pool: Set<number>, border: Set<number>, region: number[]) {
+export function enclosed(
+	prepared: Prepared,
+	pool: Set<number>,
+	border: Set<number>,
+	region: number[],
+) {
 	const { offsets, targets } = prepared.graph;
 	const seen = new Set(region);
 	const queue = [...region];

@@ -43,7 +43,8 @@ export function addBrokenFractions(
 				const anchor = rooted ? -1 : main.reduce((a, b) => (part(b) > part(a) ? b : a));
 				for (const unit of piece) {
 					const key = `${unit}:${anchor}:${[...border].sort().join()}`;
-					if (part(unit) + (rooted ? 0 : part(anchor)) < across + LEAST_GAIN || known.has(key)) continue;
+					if (part(unit) + (rooted ? 0 : part(anchor)) < across + LEAST_GAIN || known.has(key))
+						continue;
 					known.add(key);
 					addCut(prepared, program, t, unit, border, anchor);
 				}

@@ -58,7 +58,17 @@ export async function solveExact(
 		if (outcome.status === 'infeasible') return { status: 'infeasible', deadEnd: null };
 		if (outcome.status === 'unbounded') throw new Error('a plan cannot cost endlessly little');
 		bound = Math.max(bound, outcome.bound + given);
-		if ((globalThis as any).LOG) console.log(round, outcome.status, outcome.bound + given, 'rows', program.builder.rows, 'cols', program.builder.columns, outcome.spent, Date.now());
+			console.log(
+				round,
+				outcome.status,
+				outcome.bound + given,
+				'rows',
+				program.builder.rows,
+				'cols',
+				program.builder.columns,
+				outcome.spent,
+				Date.now(),
+			);
 		nodes -= outcome.spent.nodes;
 		iterations -= outcome.spent.iterations;
 		if (!outcome.values) break;
@@ -89,7 +99,6 @@ async function tighten(
 		if (outcome.status === 'infeasible') return Infinity;
 		if (outcome.status !== 'optimal') break;
 		bound = Math.max(bound, outcome.bound);
-		if ((globalThis as any).LOG) console.log('lp', round, outcome.objective, program.builder.rows);
 		if (addBrokenFractions(prepared, choices, program, outcome.values) === 0) break;
 	}
 	return bound;

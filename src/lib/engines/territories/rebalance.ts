@@ -26,7 +26,7 @@ export async function rebalance(
 	watch.progress?.('Checking the rules', 0);
 	const obstacle = preCheck(prepared);
 	if (obstacle) return obstacle;
-	const found = search(prepared, stage(watch, 0.02, 0.75));
+	const found = await search(prepared, stage(watch, 0.02, 0.75));
 	const plan = found && planFrom(prepared, found.assignment);
 	const lowerBound = 0;
 	if (found?.sound && found.conflicts === 0 && plan) return proposed(prepared, plan, lowerBound);

@@ -1,5 +1,6 @@
 import { Annealer, type AnnealSettings } from './anneal.ts';
 import { contiguityScratch, type ContiguityScratch } from './contiguity.ts';
+import { carrySurplus } from './drift.ts';
 import { budgetOf, type Budget } from './effort.ts';
 import { giveBack } from './give-back.ts';
 import type { Prepared } from './prepare.ts';
@@ -28,7 +29,7 @@ const scales = [1, 0.5, 2, 0.7, 1.4, 1];
  *
  * @returns null when no contiguous assignment that keeps the rules on units was found to start from
  */
-export function search(prepared: Prepared, watch: Watch = {}): Found | null {
+export async function search(prepared: Prepared, watch: Watch = {}): Promise<Found | null> {
 	const terms = searchTerms(prepared);
 	const start = startingAssignment(terms);
 	if (!start) return null;
@@ -56,12 +57,12 @@ class SearchRun {
 		this.all = Int32Array.from(prepared.open.keys()).filter((t) => prepared.open[t] === 1);
 	}
 
-	whole(): Found {
+	async whole(): Promise<Found> {
 		let best = new SearchState(this.terms, this.start);
 		let energy = this.energyOf(best);
 		const { starts } = this.budget;
 		for (let i = 0; i < starts && !this.watch.cancelled?.(); i++) {
-			const state = this.once(i, 0.7 / starts, (0.7 * i) / starts);
+			const state = await this.once(i, 0.7 / starts, (0.7 * i) / starts);
 			const found = this.energyOf(state);
 			if (found >= energy) continue;
 			best = state;
@@ -77,19 +78,19 @@ class SearchRun {
 		return fullEnergy(state, this.wishes, this.all);
 	}
 
-	private once(i: number, share: number, from: number): SearchState {
+	private async once(turn: number, share: number, from: number): Promise<SearchState> {
 		const state = new SearchState(this.terms, this.start);
-		const scale = scales[i % scales.length];
-		new Annealer(
-			state,
-			{
-				...this.settings(i, this.budget.proposals),
-				hot: 0.8 * scale,
-				progress: (part) => this.tell('Searching', from + part * share * 0.6),
-			},
-			this.scratch,
-		).run();
-		this.regions(state, this.budget.regions, i, from + share * 0.6, share * 0.4);
+		const { cutWeight } = this.wishes;
+		const byStreams = this.budget.large || turn % 3 === 1;
+		if (byStreams) await carrySurplus(state, this.scratch, cutWeight, this.watch.cancelled);
+		const settings = this.settings(turn, this.budget.proposals);
+		const scale = scales[turn % scales.length];
+		const progress = (part: number) => this.tell('Searching', from + part * share * 0.6);
+		const temper = byStreams
+			? { hot: 0.15 * scale, loose: 5, spread: this.wishes.spreadEnd }
+			: { hot: settings.hot * scale };
+		new Annealer(state, { ...settings, ...temper, progress }, this.scratch).run();
+		this.regions(state, this.budget.regions, turn, from + share * 0.6, share * 0.4);
 		return state;
 	}
 

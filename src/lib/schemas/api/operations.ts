@@ -5,6 +5,7 @@ import { readingFields, uploadFields } from '../upload.ts';
 import { boundariesResponse } from './check-boundaries.ts';
 import { colouringRequest, colouringResponse } from './check-colouring.ts';
 import { paletteRequest, paletteResponse } from './check-palette.ts';
+import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
 import * as sheets from './sheets.ts';
 
@@ -98,6 +99,17 @@ export const operations = {
 		summary: 'Send a measure by its name: new, in place of what is there, or on top of it.',
 		json: measures.measureSent,
 		...{ answer: measures.measureKept, refusals: [409, 413, 415, 422, 503] },
+	},
+	listHandovers: {
+		...{ method: 'GET', path: `${sheet}/handovers`, scope: 'territories:read', status: 200 },
+		...{ summary: 'Handover lists, the newest first.', answer: handovers.handoverList },
+	},
+	readHandover: {
+		method: 'GET',
+		path: `${sheet}/handovers/{handover}`,
+		...{ scope: 'territories:read', status: 200 },
+		summary: 'One handover list with its moves.',
+		answer: handovers.handoverDetail,
 	},
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },

@@ -1,6 +1,18 @@
 /** First words of addresses that belong to the product and so cannot be a team's. */
 export const reservedWords: ReadonlySet<string> = new Set([
-	...['account', 'admin', 'api', 'app', 'auth', 'booth', 'demo', 'docs', 'health', 'help'],
+	...[
+		'account',
+		'admin',
+		'api',
+		'app',
+		'auth',
+		'booth',
+		'demo',
+		'docs',
+		'handover',
+		'health',
+		'help',
+	],
 	...['invitation', 'mail', 'merestone', 'metrics', 'new', 'settings', 'shared', 'sheets'],
 	...['sign-in', 'sign-out', 'sign-up', 'static', 'support', 'team', 'teams', 'terms', 'privacy'],
 ]);

@@ -15,4 +15,5 @@ export {
 	reviewMeasureTable,
 	takeMeasureTable,
 } from './measures.work.ts';
+export { scratchPlan } from './scratch.work.ts';
 export { unitColumns } from './unit-columns.work.ts';

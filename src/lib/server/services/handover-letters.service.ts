@@ -15,7 +15,7 @@ import {
 } from '../repositories/handover-letters.repository.ts';
 import type { HandoverRow } from '../repositories/handovers.repository.ts';
 import { letterMail } from './handover-letter-text.ts';
-import { recordHandover, withOpenHandover } from './handover.service.ts';
+import { recordHandover, withOpenHandover } from './handover-held.ts';
 import { handoverView, worksStill } from './handover-view.ts';
 import { limits, use } from './limits.service.ts';
 import { NotFound, Refused, TooMany } from './outcomes.ts';

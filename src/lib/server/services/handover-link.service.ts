@@ -108,6 +108,15 @@ export async function answerLetter(
 	});
 }
 
+/** Accepts whatever they have not answered yet. @returns how many that were */
+export async function acceptRest(shop: Reading, secret: string, address: string): Promise<number> {
+	const page = await readLetter(shop, secret, address);
+	if (!page) throw new NotFound('letter');
+	const open = page.moves.filter(({ answer }) => answer === null);
+	const answers = open.map(({ ordinal }) => ({ ordinal, answer: 'accepted' as const, word: '' }));
+	return answerLetter(shop, secret, address, answers);
+}
+
 async function take(
 	trx: Trx,
 	letter: LetterRow,

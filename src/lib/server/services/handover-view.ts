@@ -67,6 +67,7 @@ export async function handoverView(
 	const adrift = new Set(row.state === 'open' ? contradicted(moves, now.document) : []);
 	return {
 		...noteOf(row, now, counts),
+		sheet: { number: now.sheet.number, name: now.sheet.name },
 		note: row.note,
 		measures: row.measures,
 		moves: moves.map((move) => moveView(move, adrift.has(move.ordinal))),

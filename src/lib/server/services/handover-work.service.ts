@@ -11,7 +11,7 @@ import {
 import { handoverDigest } from './handover-content.ts';
 import { keptData, partsNow, staleSentence } from './handover-data.ts';
 import { contradicted } from './handover-moves.ts';
-import { recordHandover, withOpenHandover } from './handover.service.ts';
+import { recordHandover, withOpenHandover } from './handover-held.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { nameOfMember } from './people.ts';
 import type { DataParts } from './proposal-data.ts';

@@ -2,38 +2,35 @@ import type { Wishes } from '../../engines/territories/territory-draft.ts';
 import type { HandoverNote } from '../../schemas/desk-territories.ts';
 import type { CreateHandover, Handover, HandoverSource } from '../../schemas/handover.ts';
 import { requireAccess, type Member } from '../access/member.ts';
-import type { Db, Trx } from '../database/connection.ts';
+import type { Trx } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import {
-	adoptedProposals,
-	findHandover,
-	holdHandover,
-	insertHandover,
-	type HandoverRow,
-} from '../repositories/handovers.repository.ts';
+import { adoptedProposals, insertHandover } from '../repositories/handovers.repository.ts';
 import { findProposal, type ProposalRow } from '../repositories/proposals.repository.ts';
 import { holdSheet } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
 import { keptData, measureIds, partsNow } from './handover-data.ts';
 import { contradicted, movesOf, type NewMove } from './handover-moves.ts';
+import { handoverOf, isNumber } from './handover-held.ts';
 import { handoverNotes, handoverView } from './handover-view.ts';
 import { Conflict, NotFound, Refused } from './outcomes.ts';
 import { territoryState, type TerritoryState } from './territory-state.ts';
 
 type Reading = Pick<Workshop, 'db'>;
+type SheetName = { number: number; name: string };
 
 /** The lists of a sheet, the newest first, and the proposals from which one can be made. */
 export async function handoverList(
 	shop: Reading,
 	member: Member,
 	number: number,
-): Promise<{ lists: HandoverNote[]; sources: HandoverSource[] }> {
+): Promise<{ sheet: SheetName; lists: HandoverNote[]; sources: HandoverSource[] }> {
 	requireAccess(member, 'measures.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	const now = await territoryState(shop.db, sheet);
 	const sources = await adoptedProposals(shop.db, sheet.id);
 	return {
+		sheet: { number: sheet.number, name: sheet.name },
 		lists: await handoverNotes(shop.db, now),
 		sources: sources.map(({ number: of, name, listed }) => ({
 			...{ number: of, name },
@@ -54,15 +51,6 @@ export async function readHandover(
 	const row = await handoverOf(shop.db, sheet.id, handover);
 	return handoverView(shop.db, row, await territoryState(shop.db, sheet));
 }
-
-/** A list of this sheet, or `NotFound`. */
-export async function handoverOf(db: Db, sheetId: string, number: number): Promise<HandoverRow> {
-	const row = isNumber(number) ? await findHandover(db, sheetId, number) : undefined;
-	if (!row) throw new NotFound('handover list');
-	return row;
-}
-
-const isNumber = (value: number) => Number.isSafeInteger(value) && value > 0 && value < 2 ** 31;
 
 /**
  * Makes the next list of a sheet: every move of a proposal that was adopted, as the territories stand now.
@@ -146,40 +134,3 @@ const shownMeasures = ({ columns }: TerritoryState) =>
 	columns.measures
 		.filter(({ stale }) => !stale)
 		.map(({ name, unit, confidential }) => ({ name, unit, confidential }));
-
-/** Holds a sheet and one of its lists, which must be open, while `work` changes it. */
-export const withOpenHandover = <T>(
-	shop: Reading,
-	member: Member,
-	number: number,
-	handover: number,
-	work: (trx: Trx, row: HandoverRow, now: TerritoryState) => Promise<T>,
-): Promise<T> =>
-	shop.db.transaction().execute(async (trx) => {
-		const sheet = await holdSheet(trx, member.team.id, isNumber(number) ? number : 0);
-		if (!sheet) throw new NotFound('sheet');
-		const { id } = await handoverOf(trx, sheet.id, handover);
-		await holdHandover(trx, id);
-		const row = await handoverOf(trx, sheet.id, handover);
-		if (row.state !== 'open') {
-			const said = row.state === 'approved' ? 'approved, so nothing in it changes' : 'withdrawn';
-			throw new Conflict('closed', `This list is ${said}.`);
-		}
-		return work(trx, row, await territoryState(trx, sheet));
-	});
-
-/** Writes down what was done with a list. */
-export const recordHandover = (
-	trx: Trx,
-	member: Member,
-	verb: string,
-	{ row, now }: { row: HandoverRow; now: TerritoryState },
-	detail: Record<string, unknown> = {},
-): Promise<void> =>
-	record(
-		trx,
-		member,
-		`handover.${verb}`,
-		{ kind: 'handover', id: row.id },
-		{ sheet: now.sheet.number, number: row.number, ...detail },
-	);

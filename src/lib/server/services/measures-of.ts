@@ -28,9 +28,7 @@ export async function measuresOf(db: Db, sheetId: string): Promise<MeasureColumn
 			row.values ? measure(row, row.values, sheet?.boundary_set_id) : [],
 		),
 		textColumns: rows.flatMap(({ id, name, table_name: table, texts, boundary_set_id }) =>
-			texts
-				? { id, name, table, texts, stale: boundary_set_id !== sheet?.boundary_set_id }
-				: [],
+			texts ? { id, name, table, texts, stale: boundary_set_id !== sheet?.boundary_set_id } : [],
 		),
 	};
 }

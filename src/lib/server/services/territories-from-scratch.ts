@@ -27,7 +27,7 @@ export async function scratchDraft(
 		...{ ground, draft: document, territories, seed },
 		values: column?.values ?? null,
 	});
-	if ('message' in found) throw new Unfit(found.code, found.message);
+	if (found.status === 'refused') throw new Unfit(found.code, found.message);
 	const { assignment, heaviest } = found;
 	const [keys, names] = [new Set(document.territories.map(({ key }) => key)), new Set<string>()];
 	const entries = heaviest.map((region) => newEntry(freshName(view.names[region], names), keys));

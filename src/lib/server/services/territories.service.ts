@@ -16,6 +16,7 @@ import {
 } from '../repositories/territories.repository.ts';
 import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
+import { handoverNotes } from './handover-view.ts';
 import { NotFound, Unfit } from './outcomes.ts';
 import { personName } from './people.ts';
 import { proposalNotes } from './proposal-notes.ts';
@@ -51,7 +52,7 @@ export async function deskTerritories(
 		...columns,
 		geometry: await unitColumns(shop, sheet.boundary_set_id),
 		proposals: await proposalNotes(shop.db, state),
-		handovers: [],
+		handovers: await handoverNotes(shop.db, state),
 	};
 }
 

@@ -1,8 +1,7 @@
-/**
- * Signs between groups of digits: space, no-break space, thin space, narrow no-break space, apostrophes.
- * Source: CLDR, `<group>` of the locales fr, de-CH, pl and others; ISO 31-0, 3.3.1 (a small space).
- */
-const groupSigns = " \u00a0\u2009\u202f'\u2019";
+/** Space, no-break space, thin space, narrow no-break space: ISO 31-0, 3.3.1, wants a small space. */
+const spaces = ' \u00a0\u2009\u202f';
+/** Signs between groups of digits. Source: CLDR, `<group>` of the locales fr, de-CH, pl and others. */
+const groupSigns = `${spaces}'\u2019`;
 
 /** Groups of three, or of two before the last three (CLDR pattern `#,##,##0.###`), all by one sign. */
 const patterns = { '.': numberPattern('.', ','), ',': numberPattern(',', '.') };
@@ -12,7 +11,10 @@ function numberPattern(decimal: '.' | ',', other: string): RegExp {
 	const grouped = `\\d{1,3}(?:(${sign})\\d{3}(?:\\2\\d{3})*|(${sign})\\d{2}(?:\\3\\d{2})*\\3\\d{3})`;
 	const whole = `(${grouped}|\\d+)`;
 	const point = `\\${decimal}`;
-	return new RegExp(`^(?:${whole}(?:${point}(\\d*))?|${point}(\\d+))(?:[eE]([-+]?\\d+))?$`);
+	// only spaces group the digits after the decimal sign
+	const parts = `\\d{3}(?:[${spaces}]\\d{3})*[${spaces}]\\d{1,3}`;
+	const after = `(?:${point}(${parts}|\\d*))?`;
+	return new RegExp(`^(?:${whole}${after}|${point}(${parts}|\\d+))(?:[eE]([-+]?\\d+))?$`);
 }
 
 const minus = /^[-\u2212\u2013]\s*/;
@@ -22,7 +24,7 @@ const percent = /\s*%$/;
 
 export interface ParsedNumber {
 	value: number;
-	/** it carried a percent sign, and `value` is the share: 12 % is 0.12 (ISO 80000-1, 6.5.5: % is 0.01) */
+	/** it carried a percent sign, and `value` is the share: 12 % is 0.12 (% is 0.01: SI Brochure, 9th edition, 5.4.7) */
 	percent: boolean;
 }
 
@@ -47,9 +49,10 @@ export function parseNumber(text: string, decimal: '.' | ','): ParsedNumber | nu
 	const match = patterns[decimal].exec(rest);
 	if (!match) return null;
 	const whole = (match[1] ?? '').replace(/\D/g, '') || '0';
+	const fraction = (match[4] ?? match[5] ?? '').replace(/\D/g, '');
 	const exponent = Number(match[6] ?? 0) - (isPercent ? 2 : 0);
 	// by way of the exponent, so that 12.3 % is the number nearest to 0.123
-	const value = Number(`${whole}.${match[4] ?? match[5] ?? ''}e${exponent}`.replace('.e', 'e'));
+	const value = Number(`${whole}.${fraction || '0'}e${exponent}`);
 	if (!Number.isFinite(value)) return null;
 	return { value: negative && value !== 0 ? -value : value, percent: isPercent };
 }

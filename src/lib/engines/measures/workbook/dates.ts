@@ -1,8 +1,8 @@
 import type { NumberStyle } from './styles.ts';
 
 const secondsADay = 86_400;
-/** 31 December 9999, the last day a workbook can show */
-const lastSerial = 2_958_465;
+/** 31 December 9999, the last day of either calendar */
+const lastDay = { from1900: 2_958_465, from1904: 2_957_003 };
 
 const two = (n: number): string => String(n).padStart(2, '0');
 const clock = (seconds: number): string =>
@@ -15,8 +15,9 @@ const clock = (seconds: number): string =>
  * belongs to stays a number.
  */
 export function dateText(serial: number, style: NumberStyle, from1904: boolean): string | number {
-	if (!(serial >= 0 && serial <= lastSerial)) return serial;
-	const seconds = Math.round(serial * secondsADay);
+	const last = from1904 ? lastDay.from1904 : lastDay.from1900;
+	if (!(serial >= 0 && serial < last + 1)) return serial;
+	const seconds = Math.min(Math.round(serial * secondsADay), (last + 1) * secondsADay - 1);
 	if (style === 'duration' || (style === 'time' && serial < 1)) return clock(seconds);
 	const day = Math.floor(seconds / secondsADay);
 	const within = seconds % secondsADay;

@@ -10,6 +10,17 @@ const sentences: Record<string, string> = {
 	'member.left': 'left the team',
 	'token.made': 'made an API token',
 	'token.withdrawn': 'withdrew an API token',
+	'handover.made': 'made a handover list',
+	'handover.reason-changed': 'changed the reason of a move',
+	'handover.move-proposed': 'put a move back to proposed',
+	'handover.move-accepted': 'marked a move as accepted',
+	'handover.move-disputed': 'marked a move as disputed',
+	'handover.confirmed': 'confirmed a handover list after a change',
+	'handover.withdrawn': 'withdrew a handover list',
+	'handover.approved': 'approved a handover list',
+	'handover.letters-sent': 'sent letters with a handover list',
+	'handover.letter-ended': 'ended the link of a letter',
+	'handover.answered': 'took answers that came by a letter',
 };
 
 export const actionWords = (action: string): string =>
