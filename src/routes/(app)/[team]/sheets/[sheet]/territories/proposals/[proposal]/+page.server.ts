@@ -19,7 +19,8 @@ const numbers = (params: { sheet: string; proposal: string }) =>
 	[Number(params.sheet), Number(params.proposal)] as const;
 
 /** `DeskProposal` as `proposal`, `DeskTerritories` as `territories`. */
-export const load = (async ({ locals, params }) => {
+export const load = (async ({ locals, params, depends }) => {
+	depends('merestone:territories');
 	const member = memberFor(locals, 'measures.read');
 	const [sheet, proposal] = numbers(params);
 	return {
