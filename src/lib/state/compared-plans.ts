@@ -1,4 +1,9 @@
-import { figures, type Measure, type TerritoryProblem, type UnitGeometry } from '$lib/engines/territories';
+import {
+	figures,
+	type Measure,
+	type TerritoryProblem,
+	type UnitGeometry,
+} from '$lib/engines/territories';
 import { problemOfDraft, type TerritoryGround } from '$lib/engines/territories/problem-of-draft';
 import type { TerritoryDraft, Wishes } from '$lib/engines/territories/territory-draft';
 import type { DeskProposal } from '$lib/schemas/desk-territories';
@@ -22,7 +27,9 @@ export function comparePlans(
 	proposals: readonly DeskProposal[],
 ): Comparison {
 	const asked = proposals.map(({ wishes }) => wishes);
-	const wished = new Set([draft.wishes, ...asked].flatMap(({ tolerances }) => Object.keys(tolerances)));
+	const wished = new Set(
+		[draft.wishes, ...asked].flatMap(({ tolerances }) => Object.keys(tolerances)),
+	);
 	const named = ground.measures.filter(({ id }) => wished.has(id));
 	const measures = named.length ? named : ground.measures.slice(0, 1);
 	const problemFor = (wishes: Wishes): TerritoryProblem => ({

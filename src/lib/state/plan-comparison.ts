@@ -67,11 +67,7 @@ export function comparisonRows(
 				({ figures }) => Math.abs(figures.measures[m].largest.deviation),
 				(deviation) => (Number.isNaN(deviation) ? 'no target' : percentage(deviation)),
 			),
-			row(
-				`${measure.name}: mean deviation`,
-				({ figures }) => figures.measures[m].mean,
-				percentage,
-			),
+			row(`${measure.name}: mean deviation`, ({ figures }) => figures.measures[m].mean, percentage),
 			row(
 				`${measure.name}: moved`,
 				({ figures }) => figures.measures[m].movedShare,

@@ -65,9 +65,7 @@ export async function postJson<Taken, Theirs>(
 	return readAnswer(response);
 }
 
-async function readAnswer<Taken, Theirs>(
-	response: Response,
-): Promise<PostAnswer<Taken, Theirs>> {
+async function readAnswer<Taken, Theirs>(response: Response): Promise<PostAnswer<Taken, Theirs>> {
 	const body: unknown = await response.json().catch(() => null);
 	if (response.ok) return { kind: 'saved', saved: body as Taken };
 	if (response.status === 409 && !(body && typeof body === 'object' && 'message' in body))
