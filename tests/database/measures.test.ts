@@ -121,7 +121,7 @@ describe('a table with errors', () => {
 			{ name: 'Rep', texts: ['Mara', 'Mara', 'Tove', 'Tove', 'Ivo', null] },
 		]);
 		expect((await deskSheet(shop, analyst, sheet)).measures).toEqual({
-			...{ count: 2, missing: 2, stale: 0 },
+			...{ count: 2, missing: 2, stale: 0, open: 0 },
 		});
 		expect(await measureTables(shop, analyst, sheet)).toMatchObject([
 			{ number: table, state: 'taken', matched: 6, rows: 7, takenBy: 'analyst of figures' },

@@ -28,8 +28,8 @@ export interface DeskSheet {
 	findings: DeskFinding[];
 	/** newest first */
 	editions: DeskEdition[];
-	/** figures joined to the regions, in a few words; null for whoever may not see them */
-	measures: { count: number; missing: number; stale: number } | null;
+	/** figures joined to the regions, and tables under review; null for whoever may not see them */
+	measures: { count: number; missing: number; stale: number; open: number } | null;
 	/** what the one who looks may do here */
 	rights: Action[];
 }

@@ -53,6 +53,8 @@ export class TerritoryDesk {
 	proposal: PlanOnShow | null = $state.raw(null);
 	/** the one territory looked at, by key */
 	chosen: string | null = $state(null);
+	/** what a form that was sent does to the territories, for the word Undo */
+	made: string | undefined;
 	/** measures in the tables beside those with a tolerance, by id */
 	measuresPicked: readonly string[] = $state.raw([]);
 
@@ -170,11 +172,15 @@ export class TerritoryDesk {
 		};
 	}
 
-	/** The page was loaded again, after measures were joined or somebody else saved. */
+	/**
+	 * The page was loaded again: after measures were joined, somebody else saved, or a form made the
+	 * territories anew, which `made` names.
+	 */
 	refresh(given: DeskTerritories) {
 		const newer = given.revision > this.draft.revision && !this.draft.dirty;
 		this.given = given;
-		this.draft.refresh(given.revision, given.draft, given.savedAt ?? this.draft.savedAt);
+		this.draft.refresh(given.revision, given.draft, given.savedAt ?? this.draft.savedAt, this.made);
+		this.made = undefined;
 		if (newer) this.inksToday.adopt(given.inks, given.inkNote, true);
 	}
 

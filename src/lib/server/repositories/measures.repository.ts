@@ -43,6 +43,16 @@ export const listMeasureTables = (db: Db, sheetId: string) =>
 		.orderBy('measure_tables.number', 'desc')
 		.execute();
 
+export async function countOpenTables(db: Db, sheetId: string): Promise<number> {
+	const { open } = await db
+		.selectFrom('measure_tables')
+		.select(({ fn }) => fn.countAll<number>().as('open'))
+		.where('sheet_id', '=', sheetId)
+		.where('state', '=', 'open')
+		.executeTakeFirstOrThrow();
+	return Number(open);
+}
+
 export type MeasureTableChange = Partial<
 	Pick<
 		NewRow<'measure_tables'>,

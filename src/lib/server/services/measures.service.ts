@@ -4,6 +4,7 @@ import { requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import {
+	countOpenTables,
 	listMeasures,
 	listMeasureTables,
 	type MeasureTableRow,
@@ -74,5 +75,6 @@ export async function measureSummary(db: Db, sheet: SheetRecord): Promise<DeskSh
 		count: figures.length,
 		missing: figures.reduce((sum, { missing }) => sum + missing, 0),
 		stale: measures.filter((one) => one.boundary_set_id !== sheet.boundary_set_id).length,
+		open: await countOpenTables(db, sheet.id),
 	};
 }
