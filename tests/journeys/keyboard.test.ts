@@ -2,16 +2,7 @@ import type { Browser, BrowserContext, Locator, Page } from 'playwright-core';
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { demo, openPage, startBrowser } from '../support/browser.ts';
 import { docket, drawn, saved } from '../support/desk.ts';
-
-/** Presses Tab until the focus stands on the target, as somebody without a pointer does. */
-async function tabTo(page: Page, target: Locator, key = 'Tab'): Promise<void> {
-	await target.first().waitFor();
-	for (let presses = 0; presses < 150; presses++) {
-		if (await target.first().evaluate((element) => element === document.activeElement)) return;
-		await page.keyboard.press(key);
-	}
-	throw new Error(`150 presses of ${key} did not reach ${String(target)}`);
-}
+import { tabTo } from '../support/keys.ts';
 
 describe('by keyboard alone', () => {
 	let browser: Browser;

@@ -85,7 +85,6 @@ function given(changes: Partial<DeskTerritories['draft']> = {}): DeskTerritories
 			},
 		],
 		textColumns: [],
-		inkNote: null,
 		geometry: { at: [], outlineMetres: [] },
 		proposals: [],
 		handovers: [],
