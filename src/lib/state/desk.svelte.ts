@@ -265,3 +265,10 @@ function deskColouring(result: ColouringResult, sentence: string): DeskColouring
 const place = Symbol('desk');
 export const setDesk = (desk: Desk): Desk => setContext(place, desk);
 export const getDesk = (): Desk => getContext<Desk>(place);
+
+/** For the places of the territories' stage, which stand only where the territories have been opened. */
+export function getPlan(): TerritoryDesk {
+	const { territories } = getDesk();
+	if (!territories) throw new Error('the territories have not been opened');
+	return territories;
+}

@@ -2,21 +2,12 @@ import { fromColumnForm, fromScratchForm } from '$lib/schemas/territory-forms';
 import { memberFor } from '$lib/server/access/guard';
 import { attempt, readForm } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
-import { forPage } from '$lib/server/page';
 import {
 	assignFromColumn,
 	assignFromScratch,
 } from '$lib/server/services/territories-start.service';
-import { deskTerritories } from '$lib/server/services/territories.service';
 import { savedOrStale } from '$lib/server/stale';
-import type { Actions, PageServerLoad } from './$types';
-
-/** `DeskTerritories` as `territories`. */
-export const load = (async ({ locals, params }) => {
-	const member = memberFor(locals, 'measures.read');
-	const number = Number(params.sheet);
-	return { territories: await forPage(() => deskTerritories(workshop(), member, number)) };
-}) satisfies PageServerLoad;
+import type { Actions } from './$types';
 
 /**
  * Fields of each form: see `schemas/territory-forms.ts`. Both answer `FormProblem` on failure, else the

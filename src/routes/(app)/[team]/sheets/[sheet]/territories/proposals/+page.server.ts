@@ -18,10 +18,9 @@ import {
 	renameProposal,
 } from '$lib/server/services/proposal-keep.service';
 import { beginProposal, openProposal } from '$lib/server/services/proposals.service';
-import { deskTerritories } from '$lib/server/services/territories.service';
 import type { Actions, PageServerLoad } from './$types';
 
-/** `DeskTerritories` as `territories`; the proposals named by `?with=1&with=3` as `compared`. */
+/** The proposals named by `?with=1&with=3`, as `compared`. */
 export const load = (async ({ locals, params, url, depends }) => {
 	const member = memberFor(locals, 'measures.read');
 	depends('merestone:territories');
@@ -29,7 +28,6 @@ export const load = (async ({ locals, params, url, depends }) => {
 	const wanted = comparedNumbers.safeParse(url.searchParams.getAll('with'));
 	if (!wanted.success) error(400, 'Compare at most six proposals, by their numbers.');
 	return {
-		territories: await forPage(() => deskTerritories(workshop(), member, number)),
 		compared: await forPage(() =>
 			Promise.all(wanted.data.map((one) => openProposal(workshop(), member, number, one))),
 		),
