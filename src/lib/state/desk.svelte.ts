@@ -143,7 +143,7 @@ export class Desk {
 	get inHand():
 		| DraftState<Draft, DraftSaved>
 		| TerritoryDesk['draft']
-		| NonNullable<TerritoryDesk['proposal']>['draft'] {
+		| NonNullable<PlanOnShow['draft']> {
 		return this.planning?.proposal?.draft ?? this.planning?.draft ?? this.draft;
 	}
 

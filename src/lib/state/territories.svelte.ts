@@ -30,8 +30,8 @@ export interface PlanOnShow {
 	before: Int32Array | null;
 	/** null where it can only be looked at */
 	give: ((regions: readonly number[], territory: string | null, label: string) => void) | null;
-	/** what undo, redo and saving speak of while it is shown */
-	draft: DraftState<PlanOfRegions, PlanAnswer>;
+	/** what undo, redo and saving speak of while it is shown; null: the territories' own */
+	draft: DraftState<PlanOfRegions, PlanAnswer> | null;
 }
 
 export interface TerritoryStart {
