@@ -18,7 +18,7 @@ import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
-import { TerritoryDesk, type TerritoryStart } from './territories.svelte';
+import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
 	sheet: DeskSheet;
