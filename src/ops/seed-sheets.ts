@@ -28,7 +28,7 @@ export async function seedDemoSheets(member: Member): Promise<void> {
 }
 
 /** Jobs are done here and now, so nothing is asked of a worker, and nobody is held up. */
-function seedingWorkshop(): Workshop {
+export function seedingWorkshop(): Workshop {
 	const pool = inlinePool();
 	const queue = { send: async () => undefined, stop: async () => undefined };
 	return { db: database(), files: fileStore(), queue, pool, checks: pool };

@@ -11,6 +11,12 @@ import { distributor } from '../../sample-data/distributor.ts';
 import { distributorTables } from '../../sample-data/distributor-tables.ts';
 import { shapeRepublic } from '../../sample-data/republic.ts';
 import { survey } from '../../sample-data/survey.ts';
+import { buildGraph } from '../../src/lib/engines/graph/build-graph.ts';
+import {
+	checkPlan,
+	rebalance,
+	type TerritoryProblem,
+} from '../../src/lib/engines/territories/index.ts';
 import { exportTableCsv } from '../../src/lib/engines/exports/data-table.ts';
 import { exportWorkbook } from '../../src/lib/engines/exports/workbook.ts';
 
@@ -114,7 +120,7 @@ describe('the sample distributor today', () => {
 			.filter((share) => Math.abs(share) > 0.1);
 		expect(out).toHaveLength(2);
 		expect(Math.sign(out[0]) * Math.sign(out[1])).toBe(-1);
-		expect(Math.max(...out.map(Math.abs))).toBeLessThan(0.2);
+		expect(Math.max(...out.map(Math.abs))).toBeLessThan(0.3);
 	});
 
 	it('has every base in its own territory', () => {
@@ -135,6 +141,37 @@ it('can be evened out to 10 %: one division is known', () => {
 		expect(pieces(membersOf(fair, territory))).toBe(1);
 		expect(fair[codes.indexOf(base)]).toBe(territory);
 		expect(Math.abs(deviation(fair, territory))).toBeLessThan(0.1);
+	}
+});
+
+it('is evened out to 10 % by the product, as the checker of plans agrees', async () => {
+	const keys = territories.map(({ territory }) => territory);
+	const pairs = joined.flatMap((list, a) => list.flatMap((b) => (a < b ? [[a, b]] : [])));
+	const hours = rows.map((row) => Number(row['visits (hours a year)']));
+	const problem: TerritoryProblem = {
+		graph: buildGraph(
+			180,
+			pairs.map(([a]) => a),
+			pairs.map(([, b]) => b),
+		),
+		measures: [{ name: 'visits', values: Float64Array.from(hours), tolerance: 0.1 }],
+		today: Int32Array.from(today, (key) => keys.indexOf(key)),
+		territories: territories.map((one) => ({
+			base: codes.indexOf(one.base),
+			capacity: capacityOf(one),
+			frozen: false,
+			closing: one.note.startsWith('closes'),
+		})),
+		...{ goal: 'fewest-moves', reach: null, seed: 1, effort: 'quick' },
+	};
+	const result = await rebalance(problem);
+	if (result.status !== 'proposed') throw new Error(result.message);
+	expect(checkPlan(problem, result)).toEqual([]);
+	const owner = Array.from(result.assignment, (territory) => keys[territory]);
+	for (const { territory, base } of staying) {
+		expect(pieces(membersOf(owner, territory))).toBe(1);
+		expect(owner[codes.indexOf(base)]).toBe(territory);
+		expect(Math.abs(deviation(owner, territory))).toBeLessThanOrEqual(0.1);
 	}
 });
 

@@ -103,7 +103,6 @@ describe('numbers as people write them', () => {
 			});
 			const text = amount.format(-1234.5);
 			const value = parseNumber(text, locales[locale])?.value;
-			// without fractions in some locales, so compare with what was written
 			expect([locale, text, value]).toEqual([locale, text, -1234.5]);
 		}
 	});
@@ -175,7 +174,7 @@ describe('dates of workbooks', () => {
 		expect(dateText(2957004, 'date', true)).toBe(2957004);
 	});
 
-	/** The same, 18.3.1.73 (spans) and common practice: a sheet's last column is XFD, the 16,384th. */
+	/** Common practice, no source: a sheet's last column is XFD, the 16,384th. */
 	it('columns by their letters', () => {
 		expect(['A1', 'Z9', 'AA10', 'XFD1048576', 'XFE1', '12'].map(columnOf)).toEqual([
 			0, 25, 26, 16383, -1, -1,

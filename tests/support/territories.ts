@@ -1,5 +1,6 @@
 import { buildGraph, type RegionGraph } from '../../src/lib/engines/graph/index.ts';
 import { randomFrom } from '../../src/lib/engines/solver/random.ts';
+import { rebalance } from '../../src/lib/engines/territories/rebalance.ts';
 import type { Territory, TerritoryProblem } from '../../src/lib/engines/territories/problem.ts';
 import { bytesOf, usAtlas } from './atlas.ts';
 import { accepted } from './read-boundaries.ts';
@@ -27,7 +28,7 @@ export async function countyGraph(): Promise<{ graph: RegionGraph; names: string
 	return { graph: buildGraph(coverage.keys.length, a, b), names: [...coverage.keys] };
 }
 
-/** A square of cells joined by their sides, with every third cell also joined across a corner. */
+/** A rectangle of cells joined by their sides. */
 export function gridGraph(width: number, height = width): RegionGraph {
 	const a: number[] = [];
 	const b: number[] = [];
@@ -139,4 +140,27 @@ export function plainProblem(
 		seed: 1,
 		effort: 'normal',
 	};
+}
+
+/**
+ * Territories that are even in `load` within 5 %, compact, in one piece, each with its base locked: a
+ * today for benchmarks, before the load changes.
+ */
+export async function evenTerritories(
+	graph: RegionGraph,
+	load: Float64Array,
+	count: number,
+	seed: number,
+): Promise<{ today: Int32Array; bases: number[] }> {
+	const { today, bases } = grownTerritories(graph, load, count, seed);
+	const problem = plainProblem(graph, load, today, bases, 0.05);
+	const even = await rebalance({
+		...problem,
+		goal: 'least-deviation',
+		effort: 'quick',
+		compactness: 1,
+		seed,
+	});
+	if (even.status !== 'proposed') throw new Error(`seed ${seed} grows no even territories`);
+	return { today: even.assignment, bases };
 }

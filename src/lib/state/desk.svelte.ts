@@ -4,6 +4,7 @@ import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
+import type { DeskTerritories } from '$lib/schemas/desk-territories';
 import { Colourer, type ColourReply } from './colourer';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
@@ -17,7 +18,7 @@ import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
-import type { TerritoryDesk } from './territories.svelte';
+import { TerritoryDesk, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
 	sheet: DeskSheet;
@@ -128,6 +129,12 @@ export class Desk {
 			onchange: (document) => this.#recolour(document),
 			onsaved: ({ colouring }) => this.#adoptSaved(colouring),
 		});
+	}
+
+	/** What the server gave of the territories: the first time it is opened, later it is brought up to date. */
+	openTerritories(given: DeskTerritories, start: Omit<TerritoryStart, 'given' | 'desk'>) {
+		if (this.territories) this.territories.refresh(given);
+		else this.territories = new TerritoryDesk({ ...start, given, desk: this });
 	}
 
 	/** the draft that undo, redo and saving speak of */

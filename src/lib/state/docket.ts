@@ -11,10 +11,29 @@ export interface DocketWords {
 	to?: string;
 }
 export interface DocketStage {
-	id: 'boundaries' | 'borders' | 'colours' | 'palette' | 'layout' | 'measures' | 'editions';
+	id:
+		| 'boundaries'
+		| 'borders'
+		| 'colours'
+		| 'palette'
+		| 'layout'
+		| 'measures'
+		| 'territories'
+		| 'editions';
 	title: string;
 	mark: MarkKind | null;
 	words: DocketWords[];
+}
+
+/** What the docket says of the territories. */
+export interface TerritoryState {
+	territories: number;
+	torn: number;
+	outside: number;
+	/** the tolerance that all measures share, in words */
+	tolerance: string;
+	/** regions in no territory */
+	without: number;
 }
 
 export interface DocketState {
@@ -26,6 +45,8 @@ export interface DocketState {
 	palette: { mark: MarkKind | null; sentence: string };
 	/** names of the projection drawn, and how many labels had to be listed; null until it is drawn */
 	drawn: { projection: string; unplaced: number } | null;
+	/** what the territories come to; null until it is known */
+	territories: TerritoryState | null;
 	/** whether the draft was saved after the last edition was issued */
 	changedSinceEdition: boolean;
 }
@@ -47,6 +68,7 @@ export const docket = (state: DocketState): DocketStage[] => [
 	},
 	{ id: 'layout', title: 'Layout', ...layout(state) },
 	...measures(state.sheet),
+	...territories(state),
 	{ id: 'editions', title: 'Editions', ...editions(state) },
 ];
 
@@ -169,4 +191,23 @@ function editions({ sheet, changedSinceEdition }: DocketState): Said {
 			...(changedSinceEdition ? [{ text: 'The draft has changed since' }] : []),
 		],
 	};
+}
+
+function territories({ sheet, territories: known }: DocketState): DocketStage[] {
+	if (!sheet.rights.includes('measures.read')) return [];
+	const stage = { id: 'territories', title: 'Territories' } as const;
+	if (!known) return [{ ...stage, mark: null, words: [] }];
+	if (!known.territories) return [{ ...stage, mark: null, words: [{ text: 'None yet' }] }];
+	const { torn, outside, without } = known;
+	const wrong: DocketWords[] = [
+		...(torn ? [{ text: `${count(torn)} torn`, to: '#torn' }] : []),
+		...(outside ? [{ text: `${count(outside)} outside ${known.tolerance}`, to: '#list' }] : []),
+		...(without ? [{ text: `${counted(without, 'region')} in none`, to: '#without' }] : []),
+	];
+	const words = [
+		{ text: counted(known.territories, 'territory', 'territories'), to: '#list' },
+		...wrong.flatMap((part) => [{ text: ', ' }, part]),
+	];
+	const mark = torn || outside ? 'error' : without ? 'warning' : 'clear';
+	return [{ ...stage, mark, words }];
 }

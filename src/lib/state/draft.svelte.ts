@@ -168,9 +168,13 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 		});
 	}
 
-	/** The server's page data changed under an untouched draft. */
-	refresh(revision: number, document: Doc, savedAt: string) {
+	/** The server's page data changed under an untouched draft; with a label, by a step that can be undone. */
+	refresh(revision: number, document: Doc, savedAt: string, label?: string) {
 		if (this.dirty || revision <= this.#revision) return;
+		if (label) {
+			this.past = [...this.past, { label, before: this.document, after: document }];
+			this.future = [];
+		}
 		this.#revision = revision;
 		this.#base = document;
 		this.document = document;

@@ -50,6 +50,10 @@ export class TerritoryDesk {
 	proposal: PlanOnShow | null = $state.raw(null);
 	/** the one territory looked at, by key */
 	chosen: string | null = $state(null);
+	/** counts how often a territory was opened, for the margin to scroll there */
+	opened = $state(0);
+	/** what a form that was sent does to the territories, for the word Undo */
+	made: string | undefined;
 	/** measures in the tables beside those with a tolerance, by id */
 	measuresPicked: readonly string[] = $state.raw([]);
 
@@ -151,7 +155,10 @@ export class TerritoryDesk {
 			save,
 			keeper,
 			rebase: rebaseTerritories,
-			onchange: () => this.#colourSoon(),
+			onchange: () => {
+				this.hand.heard();
+				this.#colourSoon();
+			},
 			onsaved: ({ inks, inkNote }) => this.inksToday.adopt(inks, inkNote, !this.draft.dirty),
 		});
 		this.hand = new HandOut(this);
@@ -167,11 +174,15 @@ export class TerritoryDesk {
 		};
 	}
 
-	/** The page was loaded again, after measures were joined or somebody else saved. */
+	/**
+	 * The page was loaded again: after measures were joined, somebody else saved, or a form made the
+	 * territories anew, which `made` names.
+	 */
 	refresh(given: DeskTerritories) {
 		const newer = given.revision > this.draft.revision && !this.draft.dirty;
 		this.given = given;
-		this.draft.refresh(given.revision, given.draft, given.savedAt ?? this.draft.savedAt);
+		this.draft.refresh(given.revision, given.draft, given.savedAt ?? this.draft.savedAt, this.made);
+		this.made = undefined;
 		if (newer) this.inksToday.adopt(given.inks, given.inkNote, true);
 	}
 
@@ -182,10 +193,11 @@ export class TerritoryDesk {
 	of(region: number): TerritoryEntry | null {
 		return this.entries[this.assignment[region]] ?? null;
 	}
-	/** Looks at one territory; the territory's panel opens beside the sheet. */
-	look(key: string | null) {
+	/** Looks at one territory; `open` brings what is decided about it into view beside the sheet. */
+	look(key: string | null, open = false) {
 		this.chosen = key;
 		this.desk.panel = 'stage';
+		if (open) this.opened++;
 	}
 	get mayEdit(): boolean {
 		return this.desk.may('territories.edit') && (!this.proposal || this.proposal.give !== null);

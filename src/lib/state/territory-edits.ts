@@ -66,6 +66,15 @@ export const changeTerritory =
 		),
 	});
 
+/** Puts the base of a territory into a region, which comes along where the territory has regions. */
+export const setBase =
+	(key: string, region: string | null): Edit =>
+	(draft) => {
+		const based = changeTerritory(key, { base: region })(draft);
+		const holds = Object.values(draft.assignment).includes(key);
+		return region !== null && holds ? give([region], key)(based) : based;
+	};
+
 /** Takes a territory off the list; its regions are left with none and its locks go with it. */
 export const removeTerritory =
 	(key: string): Edit =>

@@ -1,6 +1,8 @@
 import { count, counted } from '$lib/components/format';
 import type { Torn } from '$lib/engines/territories';
 import type { TerritoryEntry } from '$lib/engines/territories/territory-draft';
+import type { TerritoryState } from './docket';
+import type { TerritoryDesk } from './territories.svelte';
 import type { Figure, Loads } from './territory-figures';
 
 /** What the desk says of territories, in the words of those who plan them. */
@@ -60,6 +62,10 @@ export function roomSentence(
 	return { room: 'wide', words: `${asked} with ${units} leaves room: ${heavy}.` };
 }
 
+/** "Driving, hours"; a measure that is called like its unit is named once. */
+export const measureLabel = (name: string, unit: string): string =>
+	!unit || unit.toLocaleLowerCase() === name.toLocaleLowerCase() ? name : `${name}, ${unit}`;
+
 /** Load over target with 100 for the target itself: "104.2"; nothing without a target. */
 export const indexWords = (load: number, target: number): string =>
 	target > 0 ? percent.format((100 * load) / target) : '';
@@ -85,4 +91,18 @@ export function stateWords(
 	]
 		.filter(Boolean)
 		.join(', ');
+}
+
+/** What the docket says of the territories as they stand. */
+export function territoryState(plan: TerritoryDesk): TerritoryState {
+	const { entries, torn, outside, counts, figures } = plan;
+	const tolerances = new Set(figures.flatMap(({ tolerance }) => tolerance ?? []));
+	const [one] = tolerances;
+	return {
+		territories: entries.length,
+		torn: torn.length,
+		outside: outside.length,
+		tolerance: tolerances.size === 1 ? toleranceWords(one) : 'a tolerance',
+		without: counts.without,
+	};
 }

@@ -37,7 +37,7 @@ export const tableLimits: TableLimits = {
 	columns: 500,
 	cells: 20_000_000,
 	unpackedBytes: 512 * MiB,
-	rowCharacters: 4 * MiB,
+	rowCharacters: MiB,
 };
 
 /** How far the reading is, 0 to 1. */

@@ -208,6 +208,12 @@ describe('what is no table', () => {
 		expect(await refusal(`${'a,'.repeat(500)}a\n${'1,'.repeat(500)}1\n`)).toBe('too-many-columns');
 	});
 
+	it('is refused before hostile quotation marks keep the parser busy', async () => {
+		const marks = `Key,Name\n1,"${'a"'.repeat(300_000)}`;
+		expect(await refusal(`${marks}${' '.repeat(300_000)}\n`)).toBe('blanks-too-many');
+		expect(await refusal(`${marks}${`b"${' '.repeat(1500)}`.repeat(100)}\n`)).toBe('quotes-broken');
+	});
+
 	it('names an option that cannot be', async () => {
 		expect(await refusal('a,b\n1,2\n', { delimiter: 'ab' })).toBe('bad-option');
 	});

@@ -174,6 +174,14 @@ describe('what is no workbook that can be read', () => {
 				part('<worksheet><sheetData><row><c t="s"><v>7</v></c></row></sheetData></worksheet>'),
 			],
 			['workbook-damaged', part(`${'<a>'.repeat(200)}${'</a>'.repeat(200)}`)],
+			[
+				'workbook-damaged',
+				part(`<worksheet><sheetData>${' '.repeat(16_000_000)}</sheetData></worksheet>`),
+			],
+			[
+				'workbook-damaged',
+				part(`<worksheet><sheetData><row>${'<c/>'.repeat(20_000)}</row></sheetData></worksheet>`),
+			],
 			['binary-workbook', zip({ 'xl/workbook.bin': 'x' })],
 			['open-document', zip({ 'META-INF/manifest.xml': 'x', 'content.xml': 'x' })],
 			['not-a-workbook', zip({ 'figures.csv': 'Key,Visits\n1,2\n' })],

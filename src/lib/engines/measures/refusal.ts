@@ -8,6 +8,8 @@ export type TableRefusalCode =
 	| 'too-many-cells'
 	| 'too-large-unpacked'
 	| 'row-too-long'
+	| 'quotes-broken'
+	| 'blanks-too-many'
 	| 'old-workbook'
 	| 'encrypted'
 	| 'binary-workbook'

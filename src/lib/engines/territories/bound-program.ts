@@ -32,9 +32,13 @@ interface Draft {
  * moves; a unit gained at depth 2 or more needs another one gained at the depth below, and a gained
  * neighbour; from deeper than `most` only load travels, over whole territories of today within the reach
  * rule, and opens a chain of gained units. Left out: that territories stay in one piece otherwise, blocks,
- * pairs apart. Costs of moves that are certain are not in it (see boundTerms).
+ * pairs apart. `loadRows` names the territory of each row on loads. Costs of moves that are certain are not in it (see boundTerms).
  */
-export function boundProgram(prepared: Prepared, terms: BoundTerms, most: number): Program {
+export function boundProgram(
+	prepared: Prepared,
+	terms: BoundTerms,
+	most: number,
+): { program: Program; loadRows: Map<number, number> } {
 	const { units, territories, bound } = prepared;
 	const today = unitsToday(prepared);
 	const draft: Draft = {
@@ -54,9 +58,9 @@ export function boundProgram(prepared: Prepared, terms: BoundTerms, most: number
 	gainedColumns(draft);
 	deepColumns(draft);
 	unitRows(draft);
-	loadRows(draft);
+	const rows = loadRows(draft);
 	for (let t = 0; t < territories; t++) chainRows(draft, t);
-	return draft.builder.build();
+	return { program: draft.builder.build(), loadRows: rows };
 }
 
 function meanTarget({ targets, territories, stays }: Prepared, m: number): number {
@@ -135,7 +139,9 @@ function unitRows({ prepared, terms, builder, leaving }: Draft): void {
 
 const WIDER = 1e-7;
 
-function loadRows(draft: Draft): void {
+/** Rows on the load of each territory; answers which row is whose. */
+function loadRows(draft: Draft): Map<number, number> {
+	const rows = new Map<number, number>();
 	const { prepared, builder, gained, leaving, incoming, scale, today } = draft;
 	const { territories, bound, loads, units, least, greatest, targets, stays } = prepared;
 	for (let t = 0; t < territories; t++) {
@@ -163,9 +169,10 @@ function loadRows(draft: Draft): void {
 			}
 			const low = least[m * territories + t] / target - held - WIDER;
 			const high = greatest[m * territories + t] / target - held + WIDER;
-			builder.row(low, high, columns, signs);
+			rows.set(builder.row(low, high, columns, signs), t);
 		});
 	}
+	return rows;
 }
 
 function chainRows(draft: Draft, t: number): void {

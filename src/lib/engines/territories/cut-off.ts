@@ -87,7 +87,7 @@ function candidates(problem: TerritoryProblem, { fault, piece }: Found): Relief[
 		}
 	}
 	const pins = pinsOf(problem);
-	const own = pins.filter(({ unit }) => fault.witness.units.includes(unit));
+	const own = fault.witness.units.flatMap((u) => pins.filter(({ unit }) => unit === u));
 	const walls = pins.filter((pin) => pin.territory !== territory && around.has(pin.unit));
 	return [...own, ...walls].flatMap(pinReliefs);
 }

@@ -18,7 +18,7 @@ export function addBroken(
 	for (const t of program.active) {
 		const held = unitsIn(assignment, choices.pool[t], t);
 		const pieces = piecesOf(prepared, held);
-		const main = mainPiece(prepared, pieces, choices.root[t]);
+		const main = mainPiece(pieces, choices.root[t]);
 		for (const piece of pieces) {
 			if (piece === main) continue;
 			cutBetween(prepared, choices, program, t, piece, main);
@@ -32,7 +32,7 @@ export function addBroken(
 const unitsIn = (assignment: Int32Array, pool: number[], t: number) =>
 	pool.filter((unit) => assignment[unit] === t);
 
-function mainPiece(prepared: Prepared, pieces: number[][], root: number): number[] {
+function mainPiece(pieces: number[][], root: number): number[] {
 	if (root >= 0) return pieces.find((piece) => piece.includes(root)) ?? pieces[0];
 	return pieces.reduce((a, b) => (b.length > a.length ? b : a));
 }

@@ -58,17 +58,6 @@ export async function solveExact(
 		if (outcome.status === 'infeasible') return { status: 'infeasible', deadEnd: null };
 		if (outcome.status === 'unbounded') throw new Error('a plan cannot cost endlessly little');
 		bound = Math.max(bound, outcome.bound + given);
-			console.log(
-				round,
-				outcome.status,
-				outcome.bound + given,
-				'rows',
-				program.builder.rows,
-				'cols',
-				program.builder.columns,
-				outcome.spent,
-				Date.now(),
-			);
 		nodes -= outcome.spent.nodes;
 		iterations -= outcome.spent.iterations;
 		if (!outcome.values) break;

@@ -40,3 +40,4 @@ export { Board } from './board.ts';
 export { hardTolerance } from './whole-figures.ts';
 export { rebalance } from './rebalance.ts';
 export { planOf } from './plan-of.ts';
+export { fromScratch, type ScratchProblem } from './from-scratch.ts';

@@ -38,7 +38,7 @@ export async function lowerBound(
 		return best.value >= incumbentCost - 1e-9;
 	};
 	if (raise(best.value, best.how) || watch.cancelled?.()) return best;
-	const program = boundProgram(prepared, terms, prepared.units > 10_000 ? 2 : 3);
+	const { program } = boundProgram(prepared, terms, prepared.units > 10_000 ? 2 : 3);
 	const { iterations, columns } = budgets[prepared.problem.effort];
 	const { cancelled } = watch;
 	watch.progress?.('bound', 0.3);

@@ -1,4 +1,5 @@
-import { planFrom } from './plan-of.ts';
+import { lowerBound } from './lower-bound.ts';
+import { planFrom } from './plan-from.ts';
 import { preCheck } from './pre-check.ts';
 import type { Prepared } from './prepare.ts';
 import { prepare } from './prepared.ts';
@@ -26,12 +27,11 @@ export async function rebalance(
 	watch.progress?.('Checking the rules', 0);
 	const obstacle = preCheck(prepared);
 	if (obstacle) return obstacle;
-	const found = await search(prepared, stage(watch, 0.02, 0.75));
-	const plan = found && planFrom(prepared, found.assignment);
-	const lowerBound = 0;
-	if (found?.sound && found.conflicts === 0 && plan) return proposed(prepared, plan, lowerBound);
-	const keeps = found?.conflicts === 0 ? plan : null;
-	return undecided(prepared, keeps, lowerBound, watch);
+	const found = await search(prepared, stage(watch, 0.02, 0.7));
+	const plan = found && found.conflicts === 0 ? planFrom(prepared, found.assignment) : null;
+	const rest = stage(watch, 0.72, 0.28);
+	if (plan && found?.sound) return proposed(prepared, plan, rest);
+	return undecided(prepared, plan, rest);
 }
 
 /** The part of the whole from `from` on that takes `share` of it. */
@@ -42,22 +42,23 @@ function stage(watch: Watch, from: number, share: number): Watch {
 	};
 }
 
-function proposed(prepared: Prepared, plan: Plan, bound: number): RebalanceResult {
-	const lowerBound = Math.min(bound, plan.cost);
-	const proved =
-		prepared.problem.goal === 'fewest-moves' && lowerBound >= plan.cost - 1e-9 * (1 + plan.cost);
-	return { status: 'proposed', ...plan, lowerBound, proved };
+async function proposed(prepared: Prepared, plan: Plan, watch: Watch): Promise<RebalanceResult> {
+	const { value } = await lowerBound(prepared, { incumbentCost: plan.cost, watch });
+	const bound = Math.min(value, plan.cost);
+	const meets = bound >= plan.cost - 1e-9 * (1 + plan.cost);
+	const proved = meets && prepared.problem.goal === 'fewest-moves';
+	return { status: 'proposed', ...plan, lowerBound: bound, proved };
 }
 
-function undecided(
+async function undecided(
 	prepared: Prepared,
 	best: Plan | null,
-	lowerBound: number,
 	watch: Watch,
-): RebalanceResult {
+): Promise<RebalanceResult> {
+	const { value } = await lowerBound(prepared, { watch });
 	const stopped = watch.cancelled?.() ? 'The run was stopped. ' : '';
 	const message = best
 		? shortfall(prepared, best)
 		: 'No assignment in one piece that keeps the rules was found; whether there is one is open.';
-	return { status: 'undecided', best, lowerBound, message: stopped + message };
+	return { status: 'undecided', best, lowerBound: value, message: stopped + message };
 }

@@ -1,4 +1,5 @@
-import { Annealer, type AnnealSettings } from './anneal.ts';
+import type { AnnealSettings } from './anneal-settings.ts';
+import { Annealer } from './anneal.ts';
 import { contiguityScratch, type ContiguityScratch } from './contiguity.ts';
 import { carrySurplus } from './drift.ts';
 import { budgetOf, type Budget } from './effort.ts';
@@ -27,11 +28,16 @@ const scales = [1, 0.5, 2, 0.7, 1.4, 1];
  * regions, then units are given back. Every rule but tolerance and `apart` holds in what is found;
  * whether these do is told. The same problem gives the same answer, unless it is cancelled.
  *
+ * @param from an assignment to start from, in one piece and true to the rules on units; else one is made
  * @returns null when no contiguous assignment that keeps the rules on units was found to start from
  */
-export async function search(prepared: Prepared, watch: Watch = {}): Promise<Found | null> {
+export async function search(
+	prepared: Prepared,
+	watch: Watch = {},
+	from: Int32Array | null = null,
+): Promise<Found | null> {
 	const terms = searchTerms(prepared);
-	const start = startingAssignment(terms);
+	const start = from ?? startingAssignment(terms);
 	if (!start) return null;
 	const run = new SearchRun(terms, start, watch);
 	return run.whole();

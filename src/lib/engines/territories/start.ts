@@ -2,6 +2,7 @@ import { handOut } from './hand-out.ts';
 import { linkPath } from './link-path.ts';
 import { partsOf } from './parts-of.ts';
 import type { SearchTerms } from './search-terms.ts';
+import { seedEmpty } from './seed-empty.ts';
 
 /** Rounds of linking and handing out before the compulsory phase gives up. */
 const ROUNDS = 12;
@@ -17,6 +18,7 @@ const ROUNDS = 12;
 export function startingAssignment(terms: SearchTerms): Int32Array | null {
 	const { prepared } = terms;
 	const assignment = wished(terms);
+	seedEmpty(terms, assignment);
 	/** units laid down as links: nothing gives them away again */
 	const links = new Uint8Array(prepared.units);
 	for (let round = 0; round < ROUNDS; round++) {

@@ -5,9 +5,11 @@ import { readingFields, uploadFields } from '../upload.ts';
 import { boundariesResponse } from './check-boundaries.ts';
 import { colouringRequest, colouringResponse } from './check-colouring.ts';
 import { paletteRequest, paletteResponse } from './check-palette.ts';
+import { territoriesRequest, territoriesResponse } from './check-territories.ts';
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
 import * as sheets from './sheets.ts';
+import { territoryOperations } from './territory-operations.ts';
 
 /** One route of the API: what it takes and gives. The API's description is made from this list. */
 export interface Operation {
@@ -43,6 +45,11 @@ export const operations = {
 		...{ method: 'POST', path: '/check/palette', scope: 'palette:check', status: 200 },
 		summary: 'Check a palette for every reader, and mend it.',
 		...{ json: paletteRequest, answer: paletteResponse, refusals: [413, 415, 503] },
+	},
+	checkTerritories: {
+		...{ method: 'POST', path: '/check/territories', scope: 'territories:check', status: 200 },
+		summary: 'Even out territories with few moves and a bound, or tell why it cannot be done.',
+		...{ json: territoriesRequest, answer: territoriesResponse, refusals: [413, 415, 503] },
 	},
 	listSheets: {
 		...{ method: 'GET', path: '/sheets', scope: 'sheets:read', status: 200 },
@@ -111,6 +118,7 @@ export const operations = {
 		summary: 'One handover list with its moves.',
 		answer: handovers.handoverDetail,
 	},
+	...territoryOperations,
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
 		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },

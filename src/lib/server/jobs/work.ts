@@ -8,6 +8,7 @@ export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
 export { checkColouringJson } from './checks/check-colouring.work.ts';
 export { checkPaletteJson } from './checks/check-palette.work.ts';
+export { checkTerritoriesJson } from './checks/check-territories.work.ts';
 export { sealEdition } from './seal.work.ts';
 export {
 	nearestRegions,

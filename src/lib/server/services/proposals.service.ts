@@ -21,9 +21,9 @@ import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
 import { Conflict, NotFound, Unfit } from './outcomes.ts';
 import { digestOfParts } from './proposal-data.ts';
-import { noteOf, presentParts, proposalNotes, staleness } from './proposal-notes.ts';
-import type { StoredRequest } from './proposal-result.ts';
-import { requireSound } from './territories.service.ts';
+import { noteOf, presentParts, proposalNotes, resultOf, staleness } from './proposal-notes.ts';
+import type { StoredRequest, StoredResult } from './proposal-result.ts';
+import { requireSound } from './territories-store.ts';
 import { changedInks } from './territory-inks.ts';
 import { territoriesIn, territoryDraftOf, territoryState } from './territory-state.ts';
 
@@ -103,19 +103,28 @@ export async function proposalProgress(
  * A proposal opened. Where the boundaries have been replaced since, its plan is in the order of regions
  * that are not there any more, so it is told and not shown.
  */
-export async function openProposal(
+export const openProposal = async (
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
 	number: number,
 	proposal: number,
-): Promise<DeskProposal> {
+): Promise<DeskProposal> => (await readProposal(shop, member, number, proposal)).opened;
+
+/** The same with what stands behind it. */
+export async function readProposal(
+	shop: Pick<Workshop, 'db'>,
+	member: Member,
+	number: number,
+	proposal: number,
+): Promise<{ opened: DeskProposal; result: StoredResult | null; keys: string[] }> {
 	requireAccess(member, 'measures.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	const row = await proposalOf(shop.db, sheet, proposal);
 	const state = await territoryState(shop.db, sheet);
 	const isPresent = row.boundary_set_id === sheet.boundary_set_id;
 	const asked = territoriesIn(await territoryDraftOf(shop.db, sheet.id, row.territory_revision));
-	return {
+	const result = resultOf(row);
+	const opened = {
 		...noteOf(row, staleness(state)),
 		territoryKeys: row.territory_keys,
 		assignment: isPresent ? row.assignment : null,
@@ -124,6 +133,8 @@ export async function openProposal(
 		inks: row.inks,
 		changedInks: changedInks(state.row?.inks ?? {}, row.inks),
 	};
+	const whole = isPresent && result?.status !== 'failed' ? result : null;
+	return { opened, result: whole, keys: state.view.keys };
 }
 
 /** A proposal of this sheet, or `NotFound`. */

@@ -44,7 +44,7 @@ export function joinTable(
 	suggest(unmatched, regions, choice.by);
 	const { doubled, missing } = tally(region, regions.keys.length);
 	const join: Omit<Join, 'notes'> = {
-		choice,
+		choice: { column: choice.column, by: choice.by },
 		regions: regions.keys.length,
 		region,
 		how,

@@ -55,6 +55,11 @@ describe('a number as people write it', () => {
 		}
 	});
 
+	it('is no text of any length', () => {
+		expect(value(`${'1'.repeat(1_000_000)}x`)).toBeNull();
+		expect(value(`${' '.repeat(1_000_000)}1`)).toBeNull();
+	});
+
 	it('is what the platform reads in what the platform writes', () => {
 		const finite = fc.double({ noNaN: true, noDefaultInfinity: true });
 		fc.assert(

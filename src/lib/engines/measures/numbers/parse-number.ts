@@ -17,6 +17,12 @@ function numberPattern(decimal: '.' | ',', other: string): RegExp {
 	return new RegExp(`^(?:${whole}${after}|${point}(${parts}|\\d+))(?:[eE]([-+]?\\d+))?$`);
 }
 
+/** Nobody writes longer numbers, and patterns take long over long texts. */
+const longest = 100;
+/** Most cells are decided by these two, which saves the longer way: sign, digits, decimals; or no digits at all. */
+const plain = { '.': /^-?\d+(?:\.\d+)?$/, ',': /^-?\d+(?:,\d+)?$/ };
+const maybe = /^[^a-z]*\d[^a-z]*(?:e[-+]?\d+[^a-z]*)?$/i;
+
 const minus = /^[-\u2212\u2013]\s*/;
 const trailingMinus = /\s*[-\u2212]$/;
 const currency = /^\p{Sc}\s*|\s*\p{Sc}$/gu;
@@ -33,6 +39,12 @@ export interface ParsedNumber {
  * a currency sign, a percent sign, an exponent. Null for anything else; never an infinite number.
  */
 export function parseNumber(text: string, decimal: '.' | ','): ParsedNumber | null {
+	if (text.length > longest) return null;
+	if (plain[decimal].test(text)) {
+		const value = Number(decimal === ',' ? text.replace(',', '.') : text);
+		return Number.isFinite(value) ? { value: value === 0 ? 0 : value, percent: false } : null;
+	}
+	if (!maybe.test(text)) return null;
 	let rest = text.trim();
 	let negative = false;
 	const bracketed = /^\((.*)\)$/.exec(rest);

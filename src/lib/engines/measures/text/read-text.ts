@@ -5,9 +5,12 @@ import { TableRefusal } from '../refusal.ts';
 import type { TableNote } from '../table.ts';
 import { findDialect, type Dialect } from './dialect.ts';
 import { decodedPieces, findEncoding } from './encoding.ts';
+import { refuseLongBlanks } from './long-blanks.ts';
 import { notesOnRows, type RowTally } from './row-notes.ts';
 
 const sampleCharacters = 256 * 1024;
+/** More text after closing quotation marks than this is no slip of the pen. */
+const mostStrayQuotes = 10_000;
 
 export interface ReadText {
 	grid: Grid;
@@ -85,7 +88,12 @@ class Reading {
 
 	private parse(text: string, more: boolean): { rest: string } {
 		const even = this.dialect.mixedNewlines ? text.replace(/\r\n?/g, '\n') : text;
+		refuseLongBlanks(even, this.dialect.newline);
 		const parsed = this.parser.parse(even, 0, more) as Papa.ParseResult<string[]>;
+		if (parsed.errors.length > mostStrayQuotes) {
+			const message = `Text follows closing quotation marks in too many places, from row ${this.fileRow + (parsed.errors[0].row ?? 0) + 1} on.`;
+			throw new TableRefusal('quotes-broken', message);
+		}
 		for (const { code, row = 0 } of parsed.errors) {
 			if (code === 'MissingQuotes') this.tally.openQuote = this.fileRow + row + 1;
 			if (code === 'InvalidQuotes')

@@ -1,7 +1,7 @@
 import type { Merge } from '../grid.ts';
 
 /** The last column of a sheet is XFD. */
-const mostColumns = 16_384;
+export const mostColumns = 16_384;
 
 /** The column of an address such as "AB12" (A1 notation), from 0; -1 where it is none. */
 export function columnOf(address: string): number {

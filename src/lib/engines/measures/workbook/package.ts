@@ -6,7 +6,8 @@ import type { TableLimits } from '../options.ts';
 import { TableRefusal } from '../refusal.ts';
 import { damaged } from './damaged.ts';
 
-const helpingBytes = 64 * 1024;
+/** packed; unpacks to at most a thousand times as much */
+const helpingBytes = 4 * 1024;
 /** Sheets pack to a tenth or a twentieth; from so many times their packed size on it is no table. */
 const mostRatio = 250;
 const ratioFromBytes = 64 * 1024 ** 2;

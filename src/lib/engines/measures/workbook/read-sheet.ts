@@ -1,7 +1,7 @@
 import type { Merge } from '../grid.ts';
 import { textCell } from '../grid.ts';
 import type { Cell } from '../table.ts';
-import { columnOf, mergeOf } from './addresses.ts';
+import { columnOf, mergeOf, mostColumns } from './addresses.ts';
 import { damaged } from './damaged.ts';
 import { dateText } from './dates.ts';
 import type { WorkbookPackage } from './package.ts';
@@ -93,7 +93,8 @@ class SheetReading {
 
 	private openCell(attributes: Attributes): void {
 		this.column = attributes.r === undefined ? this.column + 1 : columnOf(attributes.r);
-		if (this.column < 0) throw damaged(`"${attributes.r}" is no cell (in "${this.part}")`);
+		if (this.column < 0 || this.column >= mostColumns)
+			throw damaged(`"${attributes.r ?? 'the next one'}" is no cell (in "${this.part}")`);
 		[this.attributes, this.value, this.hasFormula] = [attributes, null, false];
 	}
 

@@ -4,6 +4,8 @@ import type { WorkbookPackage } from './package.ts';
 
 /** Parts of workbooks nest a few elements deep. */
 const mostDepth = 100;
+/** A cell holds at most 32,767 characters; a tag or text far beyond that would only fill the memory. */
+const mostBytesWithoutTag = 4 * 1024 ** 2;
 
 export type Attributes = Record<string, string>;
 
@@ -22,6 +24,7 @@ const bare = (name: string): string => name.slice(name.indexOf(':') + 1);
 export function parsePart(pack: WorkbookPackage, name: string, handlers: XmlHandlers): void {
 	const parser = new SaxesParser({ position: false });
 	let depth = 0;
+	let sinceTag = 0;
 	parser.on('error', (error) => {
 		throw damaged(`"${name}" is not well-formed (${error.message})`);
 	});
@@ -29,10 +32,12 @@ export function parsePart(pack: WorkbookPackage, name: string, handlers: XmlHand
 		throw damaged(`"${name}" has a document type, which no workbook has`);
 	});
 	parser.on('opentag', (tag) => {
+		sinceTag = 0;
 		if (++depth > mostDepth) throw damaged(`"${name}" is nested too deeply`);
 		handlers.open(bare(tag.name), tag.attributes as Attributes);
 	});
 	parser.on('closetag', (tag) => {
+		sinceTag = 0;
 		depth--;
 		handlers.close?.(bare(tag.name));
 	});
@@ -42,7 +47,9 @@ export function parsePart(pack: WorkbookPackage, name: string, handlers: XmlHand
 	let decoder: TextDecoder | null = null;
 	for (const piece of pack.unpack(name)) {
 		decoder ??= decoderFor(piece);
+		sinceTag += piece.length;
 		parser.write(decoder.decode(piece, { stream: true }));
+		if (sinceTag > mostBytesWithoutTag) throw damaged(`"${name}" goes on without a tag`);
 		handlers.read?.(piece.length);
 	}
 	parser.write(decoder?.decode() ?? '').close();

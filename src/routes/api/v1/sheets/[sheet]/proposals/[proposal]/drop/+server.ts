@@ -1,0 +1,12 @@
+import { operations } from '$lib/schemas/api/operations';
+import { apiRoute, jsonResponse, notAllowed } from '$lib/server/api/route';
+import { workshop } from '$lib/server/jobs/workshop';
+import { dropProposal } from '$lib/server/services/proposal-keep.service';
+
+export const POST = apiRoute(operations.dropProposal, async (member, { params }) => {
+	const [sheet, proposal] = [Number(params.sheet), Number(params.proposal)];
+	await dropProposal(workshop(), member, sheet, proposal);
+	return jsonResponse(JSON.stringify({ number: proposal, state: 'dropped' }));
+});
+
+export const fallback = notAllowed('POST');
