@@ -50,6 +50,8 @@ export class TerritoryDesk {
 	proposal: PlanOnShow | null = $state.raw(null);
 	/** the one territory looked at, by key */
 	chosen: string | null = $state(null);
+	/** counts how often a territory was opened, for the margin to scroll there */
+	opened = $state(0);
 	/** what a form that was sent does to the territories, for the word Undo */
 	made: string | undefined;
 	/** measures in the tables beside those with a tolerance, by id */
@@ -153,7 +155,10 @@ export class TerritoryDesk {
 			save,
 			keeper,
 			rebase: rebaseTerritories,
-			onchange: () => this.#colourSoon(),
+			onchange: () => {
+				this.hand.heard();
+				this.#colourSoon();
+			},
 			onsaved: ({ inks, inkNote }) => this.inksToday.adopt(inks, inkNote, !this.draft.dirty),
 		});
 		this.hand = new HandOut(this);
@@ -188,10 +193,11 @@ export class TerritoryDesk {
 	of(region: number): TerritoryEntry | null {
 		return this.entries[this.assignment[region]] ?? null;
 	}
-	/** Looks at one territory; the territory's panel opens beside the sheet. */
-	look(key: string | null) {
+	/** Looks at one territory; `open` brings what is decided about it into view beside the sheet. */
+	look(key: string | null, open = false) {
 		this.chosen = key;
 		this.desk.panel = 'stage';
+		if (open) this.opened++;
 	}
 	get mayEdit(): boolean {
 		return this.desk.may('territories.edit') && (!this.proposal || this.proposal.give !== null);

@@ -1,4 +1,5 @@
-import { Annealer, type AnnealSettings } from './anneal.ts';
+import type { AnnealSettings } from './anneal-settings.ts';
+import { Annealer } from './anneal.ts';
 import { contiguityScratch, type ContiguityScratch } from './contiguity.ts';
 import { carrySurplus } from './drift.ts';
 import { budgetOf, type Budget } from './effort.ts';
