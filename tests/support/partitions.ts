@@ -96,8 +96,9 @@ export function equalParts(
 		while (rest.length > 0) {
 			const cell = rest.pop()!;
 			part[cell] = parts;
-			if (size + 1 === n) next(parts + 1);
-			else {
+			if (size + 1 === n) {
+				if (restFits(part, near, n)) next(parts + 1);
+			} else {
 				const fresh = near[cell].filter((other) => part[other] < 0 && !seen.has(other));
 				grow([...rest, ...fresh], size + 1, new Set([...seen, ...fresh]), parts);
 			}
@@ -106,4 +107,23 @@ export function equalParts(
 	};
 	next(0);
 	return { count, fewestCuts };
+}
+
+/** Whether every piece of free cells has a whole number of parts in it. */
+function restFits(part: Int8Array, near: number[][], n: number): boolean {
+	const seen = new Uint8Array(part.length);
+	for (let start = 0; start < part.length; start++) {
+		if (part[start] >= 0 || seen[start]) continue;
+		const piece = [start];
+		seen[start] = 1;
+		for (const cell of piece) {
+			for (const other of near[cell]) {
+				if (part[other] >= 0 || seen[other]) continue;
+				seen[other] = 1;
+				piece.push(other);
+			}
+		}
+		if (piece.length % n !== 0) return false;
+	}
+	return true;
 }

@@ -8,6 +8,7 @@ import { preCheck } from './pre-check.ts';
 import type { Prepared } from './prepare.ts';
 import { prepare } from './prepared.ts';
 import { proveOrImprove } from './prove.ts';
+import { reassign } from './reassign.ts';
 import { relieve } from './relieve.ts';
 
 const limits = { rounds: 100, nodes: 100_000, iterations: 1_000_000 };
@@ -66,6 +67,25 @@ describe('proveOrImprove', () => {
 			expect(answer.lowerBound, `seed ${seed}`).toBeLessThanOrEqual(tried.cost + 1e-9);
 			if (answer.proved) expect(answer.cost).toBeCloseTo(tried.cost, 6);
 		}
+	});
+});
+
+describe('reassign', () => {
+	it('deals two territories out anew, the others left alone, never dearer', async () => {
+		let bettered = 0;
+		for (const { seed, instance, prepared, tried } of instances(600, 630)) {
+			const { worst } = tried;
+			if (!worst) continue;
+			const chosen = [worst[0], worst.find((t) => t !== worst[0]) ?? worst[0]];
+			const dealt = await reassign(prepared, worst, chosen, { sound: true });
+			if (!dealt) continue;
+			bettered++;
+			expect(ruleFaults(instance.problem, dealt), `seed ${seed}`).toEqual([]);
+			expect(costOf(prepared, dealt)).toBeLessThan(costOf(prepared, worst));
+			const others = dealt.every((t, unit) => chosen.includes(worst[unit]) || t === worst[unit]);
+			expect(others, `seed ${seed}`).toBe(true);
+		}
+		expect(bettered).toBeGreaterThan(3);
 	});
 });
 
