@@ -290,6 +290,8 @@ describe('letters', () => {
 		expect(house.mailbox.mails.flatMap(({ to }) => to).sort()).toEqual(
 			reached.map(({ email }) => email).sort(),
 		);
+		// its territory is gone from the list by now, and the leaver is told nonetheless
+		expect(mailsTo('T13')).toHaveLength(1);
 		for (const { key } of reached) {
 			const [{ text }] = mailsTo(key);
 			for (const { region, from, to } of moves) {

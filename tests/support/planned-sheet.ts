@@ -100,7 +100,9 @@ export async function adopt(
 	return number;
 }
 
+/** As adopting leaves it: a territory that closes is gone from the list. */
 export const evenedOut = (today: TerritoryDraft): TerritoryDraft => ({
 	...today,
+	territories: today.territories.filter(({ closing }) => !closing),
 	assignment: Object.fromEntries(firm.rows.map(({ code }, at) => [code, firm.fair[at]])),
 });

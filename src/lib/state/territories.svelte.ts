@@ -10,6 +10,7 @@ import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { rebaseTerritories } from './rebase-territories';
 import type { SaveDraft } from './save-draft';
+import type { PlanAnswer, PlanOfRegions } from './save-plan';
 import { inksByNumber, territoryBorders } from './territory-colours';
 import { countRegions, figureOf, isOutside, loadsOf } from './territory-figures';
 import { TerritoryInks } from './territory-inks.svelte';
@@ -30,6 +31,8 @@ export interface PlanOnShow {
 	before: Int32Array | null;
 	/** null where it can only be looked at */
 	give: ((regions: readonly number[], territory: string | null, label: string) => void) | null;
+	/** what undo, redo and saving speak of while it is shown; null: the territories' own */
+	draft: DraftState<PlanOfRegions, PlanAnswer> | null;
 }
 
 export interface TerritoryStart {

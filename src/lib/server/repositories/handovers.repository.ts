@@ -41,6 +41,7 @@ const withNames = (db: Db) =>
 		.select([
 			'proposals.number as proposal_number',
 			'proposals.name as proposal_name',
+			'proposals.territory_revision as before_revision',
 			'maker.name as by_name',
 			'maker.email as by_email',
 			'approver.name as approver_name',

@@ -1,3 +1,4 @@
+import type { TerritoryEntry } from '../../engines/territories/territory-draft.ts';
 import type { HandoverNote } from '../../schemas/desk-territories.ts';
 import type {
 	Handover,
@@ -19,7 +20,7 @@ import { handoverDigest } from './handover-content.ts';
 import { staleSentence } from './handover-data.ts';
 import { contradicted } from './handover-moves.ts';
 import { personName } from './people.ts';
-import type { TerritoryState } from './territory-state.ts';
+import { territoriesIn, territoryDraftOf, type TerritoryState } from './territory-state.ts';
 
 /** Handover lists as pages and the API are given them. */
 
@@ -71,7 +72,7 @@ export async function handoverView(
 		note: row.note,
 		measures: row.measures,
 		moves: moves.map((move) => moveView(move, adrift.has(move.ordinal))),
-		territories: concerned(moves, now, letters),
+		territories: concerned(moves, await contacts(db, row, now), letters),
 		digest: row.digest,
 		intact: row.digest === null ? null : row.digest === seen,
 		seen,
@@ -92,17 +93,27 @@ const moveView = (move: Row<'handover_moves'>, adrift: boolean): HandoverMove =>
 	contradicted: adrift,
 });
 
+/** Who is reached where, by territory: as they stand now, and as they were for one that has closed since. */
+async function contacts(
+	db: Db,
+	{ before_revision }: HandoverRow,
+	{ sheet, document }: TerritoryState,
+): Promise<Map<string, TerritoryEntry>> {
+	const before = territoriesIn(await territoryDraftOf(db, sheet.id, before_revision));
+	return new Map([...before.territories, ...document.territories].map((one) => [one.key, one]));
+}
+
 /** The territories that gain or lose, by name, with the letter that counts for each. */
-export function concerned(
+function concerned(
 	moves: readonly Row<'handover_moves'>[],
-	{ document }: Pick<TerritoryState, 'document'>,
+	entries: ReadonlyMap<string, TerritoryEntry>,
 	letters: readonly Row<'handover_letters'>[],
 ): HandoverTerritory[] {
 	const found = new Map<string, HandoverTerritory>();
 	const entry = (key: string, name: string): HandoverTerritory => {
 		const known = found.get(key);
 		if (known) return known;
-		const { person = '', email = '' } = document.territories.find((one) => one.key === key) ?? {};
+		const { person = '', email = '' } = entries.get(key) ?? {};
 		const letter = letters.find(({ territory_key }) => territory_key === key);
 		const made = { key, name, person, email, gains: 0, losses: 0, balance: {} };
 		found.set(key, { ...made, letter: letter ? letterView(letter) : null });
