@@ -38,7 +38,7 @@ export async function fromScratch(
 	scratch: ScratchProblem,
 	watch: Watch = {},
 ): Promise<RebalanceResult> {
-	const prepared = prepare(problemOf(scratch));
+	const prepared = prepare(problemOfScratch(scratch));
 	if ('status' in prepared) return prepared;
 	const obstacle = preCheck(prepared);
 	if (obstacle) return obstacle;
@@ -55,7 +55,8 @@ export async function fromScratch(
 	return { status: 'undecided', best: plan, lowerBound: 0, message };
 }
 
-function problemOf(scratch: ScratchProblem): TerritoryProblem {
+/** The same as a problem: nothing is assigned today. For checkers. */
+export function problemOfScratch(scratch: ScratchProblem): TerritoryProblem {
 	const { graph, measures, count, bases, capacities, compactness = 1, seed, effort } = scratch;
 	return {
 		graph,
