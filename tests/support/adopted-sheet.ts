@@ -29,9 +29,9 @@ export async function adoptedSheet(page: Page): Promise<string> {
 	});
 	expect(saved.ok(), await saved.text()).toBe(true);
 	const asked = { name: 'Within 10 %', revision: '1', effort: 'quick' };
-	await submit(page, `${address}?/begin`, { ...asked, [`tolerance.${measure}`]: '10' });
+	await submit(page, `${address}/proposals?/begin`, { ...asked, [`tolerance.${measure}`]: '10' });
 	await workedOut(page, address);
-	await submit(page, `${address}?/adopt`, { proposal: '1', revision: '0' });
+	await submit(page, `${address}/proposals?/adopt`, { proposal: '1', revision: '0' });
 	return address;
 }
 

@@ -4,8 +4,6 @@
  */
 export interface SmallProblem {
 	units: number;
-	/** joined pairs */
-	pairs: [number, number][];
 	/** one list of sets a territory: what it may hold */
 	sets: number[][];
 }
@@ -67,9 +65,12 @@ export function gridPairs(rows: number, columns: number): [number, number][] {
 /**
  * How many ways there are to part an n by n grid (rook neighbours) into n connected parts of n cells,
  * and the fewest cut borders among them. The lowest free cell names the next part, so that no partition
- * is counted twice. Cells beyond 31 need two words, hence n up to 5 by bits and 6 by lists.
+ * is counted twice. `visit` sees each: the part of every cell, parts numbered by their lowest cell.
  */
-export function equalParts(n: number): { count: number; fewestCuts: number } {
+export function equalParts(
+	n: number,
+	visit: (part: Int8Array) => void = () => {},
+): { count: number; fewestCuts: number } {
 	const pairs = gridPairs(n, n);
 	const near: number[][] = Array.from({ length: n * n }, () => []);
 	for (const [a, b] of pairs) {
@@ -83,6 +84,7 @@ export function equalParts(n: number): { count: number; fewestCuts: number } {
 		const first = part.indexOf(-1);
 		if (first < 0) {
 			count++;
+			visit(part);
 			fewestCuts = Math.min(fewestCuts, pairs.filter(([a, b]) => part[a] !== part[b]).length);
 			return;
 		}
@@ -94,8 +96,9 @@ export function equalParts(n: number): { count: number; fewestCuts: number } {
 		while (rest.length > 0) {
 			const cell = rest.pop()!;
 			part[cell] = parts;
-			if (size + 1 === n) next(parts + 1);
-			else {
+			if (size + 1 === n) {
+				if (restFits(part, near, n)) next(parts + 1);
+			} else {
 				const fresh = near[cell].filter((other) => part[other] < 0 && !seen.has(other));
 				grow([...rest, ...fresh], size + 1, new Set([...seen, ...fresh]), parts);
 			}
@@ -104,4 +107,23 @@ export function equalParts(n: number): { count: number; fewestCuts: number } {
 	};
 	next(0);
 	return { count, fewestCuts };
+}
+
+/** Whether every piece of free cells has a whole number of parts in it. */
+function restFits(part: Int8Array, near: number[][], n: number): boolean {
+	const seen = new Uint8Array(part.length);
+	for (let start = 0; start < part.length; start++) {
+		if (part[start] >= 0 || seen[start]) continue;
+		const piece = [start];
+		seen[start] = 1;
+		for (const cell of piece) {
+			for (const other of near[cell]) {
+				if (part[other] >= 0 || seen[other]) continue;
+				seen[other] = 1;
+				piece.push(other);
+			}
+		}
+		if (piece.length % n !== 0) return false;
+	}
+	return true;
 }

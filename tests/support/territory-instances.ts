@@ -107,6 +107,8 @@ export interface Tried {
 	/** Infinity when there is no plan */
 	cost: number;
 	best: Int32Array | null;
+	/** a dearest plan */
+	worst: Int32Array | null;
 }
 
 /** Tries every plan; the rules are read from the problem itself. `steps` is the reach between territories. */
@@ -119,7 +121,8 @@ export function tryAll(
 	const units = today.length;
 	const sets = holdable({ problem, pairs }, steps, tolerances);
 	const staying = territories.flatMap(({ closing }, t) => (closing ? [] : [t]));
-	const tried: Tried = { plans: 0, cost: Infinity, best: null };
+	const tried: Tried = { plans: 0, cost: Infinity, best: null, worst: null };
+	let dearest = -1;
 	for (const held of plansOf({ units, sets: staying.map((t) => sets[t]) })) {
 		tried.plans++;
 		const assignment = new Int32Array(units);
@@ -131,6 +134,7 @@ export function tryAll(
 			if (assignment[u] !== today[u]) cost += problem.cost ? problem.cost[u] : 1;
 		}
 		if (cost < tried.cost) Object.assign(tried, { cost, best: assignment });
+		if (cost > dearest) [dearest, tried.worst] = [cost, assignment];
 	}
 	return tried;
 }

@@ -1,6 +1,6 @@
 import { fail, type ActionFailure } from '@sveltejs/kit';
 import type { FormProblem } from './forms.ts';
-import type { SaveTerritoriesResult } from './services/territories.service.ts';
+import type { SaveTerritoriesResult } from './services/territories-store.ts';
 
 type Attempted =
 	| { data: SaveTerritoriesResult; failure?: never }

@@ -1,6 +1,6 @@
+import type { Torn } from '$lib/engines/territories';
 import { counted } from '$lib/components/format';
 import type { TerritoryDesk } from './territories.svelte';
-import { dropClosedBases, give } from './territory-edits';
 import { amount, deviationWords, piecesOf } from './territory-words';
 
 /** What a press on a region gives it to: a territory's key, 'none' to take it away, null: it gives nothing. */
@@ -24,6 +24,11 @@ export class HandOut {
 
 	constructor(territories: TerritoryDesk) {
 		this.#territories = territories;
+	}
+
+	/** The territories changed by whatever way: what was said of an earlier gesture no longer holds. */
+	heard() {
+		this.said = '';
 	}
 
 	/** "Give to North" */
@@ -88,15 +93,9 @@ export class HandOut {
 			return;
 		}
 		const from = new Set(moving.map((region) => territories.assignment[region]));
-		this.#put(moving, key, `give ${this.#named(moving)} to ${this.nameOf(hand)}`);
-		this.said = [this.#told(moving, to, from), this.#stays(staying, key)].join(' ').trim();
-	}
-
-	#put(moving: readonly number[], key: string | null, label: string) {
-		const { proposal, draft, desk } = this.#territories;
-		const keys = moving.map((region) => desk.sheet.regions.key[region]);
-		if (proposal) proposal.give?.(moving, key, label);
-		else draft.change(label, (draft) => dropClosedBases(keys)(give(keys, key)(draft)));
+		const { torn } = territories;
+		territories.give(moving, key, `give ${this.#named(moving)} to ${this.nameOf(hand)}`);
+		this.said = [this.#told(moving, to, from, torn), this.#stays(staying, key)].join(' ').trim();
 	}
 
 	/** the territory, other than `key`, that has its base in this region and keeps it */
@@ -127,7 +126,12 @@ export class HandOut {
 			: counted(regions.length, 'region');
 	}
 
-	#told(moved: readonly number[], to: number, from: ReadonlySet<number>): string {
+	#told(
+		moved: readonly number[],
+		to: number,
+		from: ReadonlySet<number>,
+		before: readonly Torn[],
+	): string {
 		const { entries, torn } = this.#territories;
 		const givers = [...from].filter((t) => t >= 0);
 		const by = givers.length === 1 ? `, from ${entries[givers[0]].name}` : '';
@@ -135,10 +139,10 @@ export class HandOut {
 		const loads = touched.slice(0, 3).map((t) => this.#standing(t));
 		const tears = torn
 			.filter(({ territory }) => touched.includes(territory))
-			.map(({ territory }) => {
-				const pieces = piecesOf(torn, territory);
-				const how = pieces > 1 ? `torn into ${counted(pieces, 'part')}` : 'cut off from its base';
-				return `${entries[territory].name} is ${how}.`;
+			.filter(({ territory }) => piecesOf(torn, territory) > piecesOf(before, territory))
+			.map(({ territory, parts }) => {
+				const off = parts.slice(1).map((part) => this.#named(part));
+				return `${entries[territory].name} is torn: cut off ${off.join(', ')}.`;
 			});
 		const given = `${this.#named(moved)} given to ${entries[to]?.name ?? 'no territory'}${by}.`;
 		return [given, ...tears, ...loads, ...this.#warned(moved, to)].join(' ');

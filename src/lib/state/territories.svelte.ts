@@ -1,14 +1,16 @@
 import { tornParts } from '$lib/engines/territories';
-import { joinedGraph, todayOf } from '$lib/engines/territories/problem-of-draft';
+import { joinedGraph } from '$lib/engines/territories/problem-of-draft';
 import type { TerritoryDraft, TerritoryEntry } from '$lib/engines/territories/territory-draft';
 import type { DeskTerritories, TerritoriesSaved } from '$lib/schemas/desk-territories';
 import type { Desk } from './desk.svelte';
 import { DraftState } from './draft.svelte';
 import { HandOut } from './hand-out.svelte';
+import { HandedAhead } from './handed-ahead.svelte';
 import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { rebaseTerritories } from './rebase-territories';
 import type { SaveDraft } from './save-draft';
+import type { PlanAnswer, PlanOfRegions } from './save-plan';
 import { inksByNumber, territoryBorders } from './territory-colours';
 import { countRegions, figureOf, isOutside, loadsOf } from './territory-figures';
 import { TerritoryInks } from './territory-inks.svelte';
@@ -29,6 +31,8 @@ export interface PlanOnShow {
 	before: Int32Array | null;
 	/** null where it can only be looked at */
 	give: ((regions: readonly number[], territory: string | null, label: string) => void) | null;
+	/** what undo, redo and saving speak of while it is shown; null: the territories' own */
+	draft: DraftState<PlanOfRegions, PlanAnswer> | null;
 }
 
 export interface TerritoryStart {
@@ -50,6 +54,8 @@ export class TerritoryDesk {
 	proposal: PlanOnShow | null = $state.raw(null);
 	/** the one territory looked at, by key */
 	chosen: string | null = $state(null);
+	/** counts how often a territory was opened, for the margin to scroll there */
+	opened = $state(0);
 	/** what a form that was sent does to the territories, for the word Undo */
 	made: string | undefined;
 	/** measures in the tables beside those with a tolerance, by id */
@@ -59,11 +65,9 @@ export class TerritoryDesk {
 	entries = $derived(this.document.territories);
 	numbers = $derived(numberTerritories(this.entries));
 	#handedOut = $derived(this.document.assignment);
-	today = $derived.by(() =>
-		todayOf(this.desk.sheet.regions.key, {
-			territories: this.entries,
-			assignment: this.#handedOut,
-		}),
+	#ahead: HandedAhead;
+	today = $derived.by(
+		() => this.#ahead.assignment ?? this.#ahead.numbered(this.#handedOut, this.entries),
 	);
 	assignment = $derived(this.proposal?.assignment ?? this.today);
 	inks = $derived.by(() =>
@@ -145,6 +149,9 @@ export class TerritoryDesk {
 		this.desk = desk;
 		this.given = given;
 		this.inksToday = new TerritoryInks(given.inks, given.inkNote);
+		this.#ahead = new HandedAhead(desk.sheet.regions.key, (label, edit) =>
+			this.draft.change(label, edit),
+		);
 		this.draft = new DraftState({
 			place: `${desk.sheet.id} territories`,
 			revision: given.revision,
@@ -153,7 +160,11 @@ export class TerritoryDesk {
 			save,
 			keeper,
 			rebase: rebaseTerritories,
-			onchange: () => this.#colourSoon(),
+			onbefore: () => this.#ahead.settle(),
+			onchange: () => {
+				this.hand.heard();
+				this.#colourSoon();
+			},
 			onsaved: ({ inks, inkNote }) => this.inksToday.adopt(inks, inkNote, !this.draft.dirty),
 		});
 		this.hand = new HandOut(this);
@@ -181,6 +192,14 @@ export class TerritoryDesk {
 		if (newer) this.inksToday.adopt(given.inks, given.inkNote, true);
 	}
 
+	/** Hands regions to a territory, or to none; a proposal on show takes them in place of today. */
+	give(regions: readonly number[], territory: string | null, label: string) {
+		const { proposal, numbers, today, entries } = this;
+		const to = numbers.get(territory ?? '') ?? -1;
+		if (proposal) proposal.give?.(regions, territory, label);
+		else this.#ahead.give({ regions, territory, to, label }, today, entries);
+	}
+
 	entry(key: string | null): TerritoryEntry | null {
 		return this.entries[this.numbers.get(key ?? '') ?? -1] ?? null;
 	}
@@ -188,10 +207,11 @@ export class TerritoryDesk {
 	of(region: number): TerritoryEntry | null {
 		return this.entries[this.assignment[region]] ?? null;
 	}
-	/** Looks at one territory; the territory's panel opens beside the sheet. */
-	look(key: string | null) {
+	/** Looks at one territory; `open` brings what is decided about it into view beside the sheet. */
+	look(key: string | null, open = false) {
 		this.chosen = key;
 		this.desk.panel = 'stage';
+		if (open) this.opened++;
 	}
 	get mayEdit(): boolean {
 		return this.desk.may('territories.edit') && (!this.proposal || this.proposal.give !== null);

@@ -183,7 +183,9 @@ describe('giving by hand', () => {
 			{ territory: 0, parts: [[2], [0]] },
 			{ territory: 1, parts: [[3, 4], [1]] },
 		]);
-		expect(hand.said).toContain('North is torn into 2 parts.');
+		expect(hand.said).toContain('North is torn: cut off A.');
+		territories.draft.undo();
+		expect(hand.said).toBe('');
 	});
 
 	it('tells of a lock that it goes against, and leaves a base where it is', () => {
@@ -261,6 +263,7 @@ describe('the sheet', () => {
 			assignment: Int32Array.of(0, 0, 1, 1, 1, 1),
 			inks: { n: 1, s: 0 },
 			before: today,
+			draft: null,
 			give: (regions) => moved.push(...regions),
 		};
 		expect([...territories.regionInks]).toEqual([1, 1, 0, 0, 0, 0]);

@@ -62,6 +62,10 @@ export function roomSentence(
 	return { room: 'wide', words: `${asked} with ${units} leaves room: ${heavy}.` };
 }
 
+/** "Driving, hours"; a measure that is called like its unit is named once. */
+export const measureLabel = (name: string, unit: string): string =>
+	!unit || unit.toLocaleLowerCase() === name.toLocaleLowerCase() ? name : `${name}, ${unit}`;
+
 /** Load over target with 100 for the target itself: "104.2"; nothing without a target. */
 export const indexWords = (load: number, target: number): string =>
 	target > 0 ? percent.format((100 * load) / target) : '';

@@ -3,7 +3,7 @@ import type { PlanFigures, TerritoryFigures, UnitShare } from './figures-of.ts';
 import type { TerritoryProblem } from './problem.ts';
 import { territoryFigures } from './territory-figures.ts';
 import type { UnitGeometry } from './unit-geometry.ts';
-import { largestUnits, wholeFigures } from './whole-figures.ts';
+import { largestUnits, newTally, tallyUp, wholeFigures, type Tally } from './whole-figures.ts';
 
 /**
  * An assignment with live figures. A move touches two territories; their figures are worked out anew from
@@ -15,6 +15,7 @@ export class Board {
 	private readonly context: FigureContext;
 	private readonly members: number[][];
 	private readonly known: (TerritoryFigures | null)[];
+	private readonly tally: Tally;
 	private readonly heaviest: (UnitShare | null)[];
 
 	/**
@@ -33,6 +34,7 @@ export class Board {
 		this.context = figureContext(problem, geometry);
 		this.members = membersOf(assignment, k);
 		this.known = Array.from({ length: k }, () => null);
+		this.tally = newTally(problem.measures.length, k);
 		this.heaviest = largestUnits(this.context);
 	}
 
@@ -70,7 +72,12 @@ export class Board {
 	/** Figures of one territory; worked out only if it was touched since. */
 	territory(t: number): TerritoryFigures {
 		const { context, members, assignment } = this;
-		return (this.known[t] ??= territoryFigures(context, t, members[t], assignment));
+		const known = this.known[t];
+		if (known) return known;
+		const made = territoryFigures(context, t, members[t], assignment);
+		tallyUp(this.tally, t, made);
+		this.known[t] = made;
+		return made;
 	}
 
 	/** Units of one territory, ascending; of those without one for -1. */
@@ -80,11 +87,11 @@ export class Board {
 
 	/** Every figure of the plan; the territories not touched since are the same objects as before. */
 	figures(): PlanFigures {
-		const territories = this.known.map((_, t) => this.territory(t));
-		const without = this.unitsOf(-1);
-		const { today } = this.context.problem;
-		const dropped = without.filter((u) => today[u] >= 0);
-		return wholeFigures(this.context, territories, dropped, without.length, this.heaviest);
+		const territories = this.known.map((known, t) => known ?? this.territory(t));
+		return {
+			territories,
+			...wholeFigures(this.context, this.tally, this.unitsOf(-1), this.heaviest),
+		};
 	}
 }
 

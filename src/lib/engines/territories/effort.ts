@@ -11,6 +11,8 @@ export interface Budget {
 	regions: number;
 	lastRegions: number;
 	regionProposals: number;
+	/** further tries where territories are outside tolerance to the last */
+	rescues: number;
 }
 
 const LARGE = 8000;
@@ -19,10 +21,11 @@ const LARGE = 8000;
 export function budgetOf({ problem, units, territories }: Prepared): Budget {
 	const share = { quick: 0.25, normal: 1, thorough: 4 }[problem.effort];
 	const large = units > LARGE;
-	const starts = large ? 1 : { quick: 1, normal: 3, thorough: 6 }[problem.effort];
+	const starts = large ? 1 : { quick: 2, normal: 3, thorough: 6 }[problem.effort];
 	const most = large ? 8_000_000 : 4_000_000;
 	return {
 		large,
+		rescues: 4 * starts,
 		starts,
 		proposals: Math.round(Math.min(most, Math.max(20_000, 1500 * units)) * Math.sqrt(share)),
 		regions: large ? 0 : Math.round(territories * share),

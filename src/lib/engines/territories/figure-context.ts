@@ -7,6 +7,8 @@ import type { UnitGeometry } from './unit-geometry.ts';
 export interface FigureContext {
 	problem: TerritoryProblem;
 	geometry: UnitGeometry | null;
+	/** number of territories that do not close */
+	staying: number;
 	/** total of each measure */
 	totals: number[];
 	/** target of each measure and territory, NaN for those that close */
@@ -39,6 +41,7 @@ export function figureContext(
 	return {
 		problem,
 		geometry,
+		staying: territories.filter(({ closing }) => !closing).length,
 		totals,
 		fullTargets,
 		targets: fullTargets.map((full) =>

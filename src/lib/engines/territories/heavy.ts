@@ -25,8 +25,10 @@ export function tooHeavy(prepared: Prepared): Impossible | null {
 
 function find(prepared: Prepared): Impossible | null {
 	const { blocks, fixed, stays, territories, open } = prepared;
+	const allowed = allowedEverywhere(prepared);
 	for (const units of blocks) {
-		if (fixed[units[0]] >= 0 || isLight(prepared, units)) continue;
+		const isLight = allowed.every((most, row) => loadOf(prepared, row, units) <= most);
+		if (isLight || fixed[units[0]] >= 0) continue;
 		const where: number[] = [];
 		for (let t = 0; t < territories; t++) if (blockMayEndIn(prepared, units[0], t)) where.push(t);
 		const fault = where.length > 0 && heavyIn(prepared, units, where);
@@ -44,12 +46,14 @@ function find(prepared: Prepared): Impossible | null {
 const loadOf = ({ loads, units: count }: Prepared, row: number, units: number[]) =>
 	units.reduce((sum, u) => sum + loads[row * count + u], 0);
 
-/** A quick yes for nearly all: within what the smallest territory that stays allows. */
-function isLight(prepared: Prepared, units: number[]): boolean {
-	const { bound, stays, greatest, territories } = prepared;
-	return bound.every((_, row) => {
-		const load = loadOf(prepared, row, units);
-		return stays.every((yes, t) => !yes || load <= greatest[row * territories + t]);
+/** The least that any territory which stays allows, by measure: a quick yes for nearly all units. */
+function allowedEverywhere({ bound, stays, greatest, territories }: Prepared): number[] {
+	return bound.map((_, row) => {
+		let least = Infinity;
+		for (let t = 0; t < territories; t++) {
+			if (stays[t]) least = Math.min(least, greatest[row * territories + t]);
+		}
+		return least;
 	});
 }
 

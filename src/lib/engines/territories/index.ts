@@ -41,3 +41,7 @@ export { hardTolerance } from './whole-figures.ts';
 export { rebalance } from './rebalance.ts';
 export { planOf } from './plan-of.ts';
 export { fromScratch, type ScratchProblem } from './from-scratch.ts';
+export { lowerBound, type LowerBound } from './lower-bound.ts';
+export { noPlan } from './no-plan.ts';
+export { proveOrImprove, type KnownPlan, type ProvedPlan } from './prove.ts';
+export { reassign } from './reassign.ts';

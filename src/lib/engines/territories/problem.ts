@@ -23,7 +23,11 @@ export interface TerritoryProblem {
 	goal: 'fewest-moves' | 'least-deviation';
 	/** weight of cut borders against moves, 0 (none) to 1; absent: 0.15 */
 	compactness?: number;
-	/** a unit may only go to territories whose area today lies within so many steps; null: no such rule */
+	/**
+	 * a unit may only go to territories whose area today, its base included, lies within so many steps, 0 to
+	 * 254; null: no such rule. Binds neither units without a territory today nor units that are locked,
+	 * frozen, a base, or tied together with one of these.
+	 */
 	reach: number | null;
 	/** whole number from 0 to 2^32 - 1 */
 	seed: number;

@@ -1,4 +1,5 @@
-import { Annealer, type AnnealSettings } from './anneal.ts';
+import type { AnnealSettings } from './anneal-settings.ts';
+import { Annealer } from './anneal.ts';
 import type { ContiguityScratch } from './contiguity.ts';
 import { Dice } from './dice.ts';
 import { fullEnergy } from './search-energy.ts';

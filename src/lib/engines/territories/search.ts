@@ -1,4 +1,5 @@
-import { Annealer, type AnnealSettings } from './anneal.ts';
+import type { AnnealSettings } from './anneal-settings.ts';
+import { Annealer } from './anneal.ts';
 import { contiguityScratch, type ContiguityScratch } from './contiguity.ts';
 import { carrySurplus } from './drift.ts';
 import { budgetOf, type Budget } from './effort.ts';
@@ -67,34 +68,59 @@ class SearchRun {
 		let energy = this.energyOf(best);
 		const { starts } = this.budget;
 		for (let i = 0; i < starts && !this.watch.cancelled?.(); i++) {
-			const state = await this.once(i, 0.7 / starts, (0.7 * i) / starts);
+			const evenFirst = i > 0 && best.outsideCount > 0;
+			const state = await this.once(i, evenFirst, 0.7 / starts, (0.7 * i) / starts);
 			const found = this.energyOf(state);
 			if (found >= energy) continue;
 			best = state;
 			energy = found;
 		}
-		this.regions(best, this.budget.lastRegions, starts, 0.7, 0.3);
+		this.regions(best, this.budget.lastRegions, starts, 0.7, 0.25);
+		best = await this.rescue(best);
 		if (this.wishes.spreadEnd === 0) giveBack(best, this.scratch);
 		const conflicts = best.conflicts();
 		return { assignment: best.assignment, sound: best.outsideCount === 0, conflicts };
+	}
+
+	/** Where territories are still outside, carries what is left over in streams and mends around it. */
+	private async rescue(best: SearchState): Promise<SearchState> {
+		const { rescues, starts, regions } = this.budget;
+		for (let i = 0; i < rescues && best.outsideCount > 0 && !this.watch.cancelled?.(); i++) {
+			const state = new SearchState(this.terms, best.assignment);
+			await carrySurplus(state, this.scratch, this.wishes.cutWeight, this.watch.cancelled);
+			const share = 0.05 / rescues;
+			this.regions(state, Math.max(20, regions >> 2), starts + 1 + i, 0.95 + i * share, share);
+			if (this.energyOf(state) < this.energyOf(best)) best = state;
+		}
+		return best;
 	}
 
 	private energyOf(state: SearchState): number {
 		return fullEnergy(state, this.wishes, this.all);
 	}
 
-	private async once(turn: number, share: number, from: number): Promise<SearchState> {
+	/** One start of the portfolio; `evenFirst` reaches tolerance at any cost before it saves moves. */
+	private async once(
+		turn: number,
+		evenFirst: boolean,
+		share: number,
+		from: number,
+	): Promise<SearchState> {
 		const state = new SearchState(this.terms, this.start);
-		const { cutWeight } = this.wishes;
-		const byStreams = this.budget.large || turn % 3 === 1;
-		if (byStreams) await carrySurplus(state, this.scratch, cutWeight, this.watch.cancelled);
-		const settings = this.settings(turn, this.budget.proposals);
 		const scale = scales[turn % scales.length];
 		const progress = (part: number) => this.tell('Searching', from + part * share * 0.6);
-		const temper = byStreams
-			? { hot: 0.15 * scale, loose: 5, spread: this.wishes.spreadEnd }
-			: { hot: settings.hot * scale };
-		new Annealer(state, { ...settings, ...temper, progress }, this.scratch).run();
+		const anneal = (temper: Partial<AnnealSettings>) =>
+			new Annealer(
+				state,
+				{ ...this.settings(turn, this.budget.proposals), ...temper, progress },
+				this.scratch,
+			).run();
+		const byStreams = this.budget.large || turn % 3 === 1;
+		const { cutWeight, spreadEnd, moveWeight } = this.wishes;
+		if (byStreams) await carrySurplus(state, this.scratch, cutWeight, this.watch.cancelled);
+		if (evenFirst) anneal({ moveWeight: 0.1 * moveWeight, spread: 1 });
+		const warm = { hot: 0.15 * scale, loose: 5, spread: spreadEnd };
+		anneal(byStreams || evenFirst ? warm : { hot: 0.8 * scale });
 		this.regions(state, this.budget.regions, turn, from + share * 0.6, share * 0.4);
 		return state;
 	}

@@ -81,6 +81,7 @@ function perimeterOf(
 	return Math.max(0, metres) / 1000;
 }
 
+/** Room for one territory's corners, written before it is read at every call. */
 let flat = new Float64Array(1024);
 
 /** Radius of the smallest circle around the hulls of units, on an equal-area plane around their middle. */

@@ -13,12 +13,16 @@ export function unreached(prepared: Prepared): Impossible | null {
 	const floating = Array.from(open.keys()).filter((t) => open[t] && anchored[t].length === 0);
 	if (floating.length > 0 && !steps) return null;
 	const reached = new Uint8Array(units);
-	if (steps) reachEach(prepared, anchored, reached);
-	else reachAll(prepared, anchored, reached);
+	const lostOne = () => fixed.findIndex((t, u) => t < 0 && !reached[u]);
+	if (steps) {
+		reachEach(prepared, anchored, reached, true);
+		if (lostOne() < 0) return null;
+		reachEach(prepared, anchored, reached, false);
+	} else reachAll(prepared, anchored, reached);
 	for (const t of floating) {
 		for (let u = 0; u < units; u++) if (blockMayEndIn(prepared, u, t)) reached[u] = 1;
 	}
-	const lost = fixed.findIndex((t, u) => t < 0 && !reached[u]);
+	const lost = lostOne();
 	if (lost < 0) return null;
 	const where = Array.from(open.keys()).filter((t) => blockMayEndIn(prepared, lost, t));
 	const roots = where.map((t) => anchored[t][0]);
@@ -50,15 +54,24 @@ function reachAll(
 	}
 }
 
-function reachEach(prepared: Prepared, anchored: number[][], reached: Uint8Array): void {
+/** With a reach rule a walk for each territory; `own`: only through its own units of today, a quick try. */
+function reachEach(
+	prepared: Prepared,
+	anchored: number[][],
+	reached: Uint8Array,
+	own: boolean,
+): void {
 	const { offsets, targets } = prepared.graph;
+	const { today } = prepared.problem;
 	anchored.forEach((units, t) => {
 		if (!prepared.open[t] || units.length === 0) return;
 		const piece = new Set([units[0]]);
 		for (const v of piece) {
 			reached[v] = 1;
 			for (let i = offsets[v]; i < offsets[v + 1]; i++) {
-				if (!piece.has(targets[i]) && blockMayEndIn(prepared, targets[i], t)) piece.add(targets[i]);
+				const w = targets[i];
+				if (piece.has(w) || (own && today[w] !== t)) continue;
+				if (blockMayEndIn(prepared, w, t)) piece.add(w);
 			}
 		}
 	});

@@ -1,73 +1,115 @@
 import type { FigureContext } from './figure-context.ts';
 import type { MeasureSummary, PlanFigures, TerritoryFigures, UnitShare } from './figures-of.ts';
 import { largestOf } from './territory-figures.ts';
-import { counted } from './words.ts';
+import { counted as countedWords } from './words.ts';
 
-/** Figures over the whole plan, from those of its territories. Time grows with territories alone. */
+/** What sums and extremes over the plan need of each territory, in flat arrays: fast to walk. */
+export interface Tally {
+	/** `m * territories + t` */
+	deviation: Float64Array;
+	gained: Float64Array;
+	outside: Uint8Array;
+	/** by territory */
+	gainedUnits: Uint32Array;
+	gainedCost: Float64Array;
+	cut: Uint32Array;
+	torn: Uint8Array;
+}
+
+export function newTally(measures: number, k: number): Tally {
+	return {
+		deviation: new Float64Array(measures * k),
+		gained: new Float64Array(measures * k),
+		outside: new Uint8Array(measures * k),
+		gainedUnits: new Uint32Array(k),
+		gainedCost: new Float64Array(k),
+		cut: new Uint32Array(k),
+		torn: new Uint8Array(k),
+	};
+}
+
+/** Notes the figures of one territory. */
+export function tallyUp(tally: Tally, t: number, of: TerritoryFigures): void {
+	of.measures.forEach(({ deviation, gained, outside }, m) => {
+		const at = m * tally.cut.length + t;
+		tally.deviation[at] = deviation;
+		tally.gained[at] = gained;
+		tally.outside[at] = outside ? 1 : 0;
+	});
+	tally.gainedUnits[t] = of.gainedUnits;
+	tally.gainedCost[t] = of.gainedCost;
+	tally.cut[t] = of.cutBorders;
+	tally.torn[t] = of.torn ? 1 : 0;
+}
+
+/** Figures over the whole plan. Time grows with territories alone. `without`: units without territory. */
 export function wholeFigures(
 	context: FigureContext,
-	territories: TerritoryFigures[],
-	/** units without a territory that have one today */
-	dropped: readonly number[],
-	unassigned: number,
+	tally: Tally,
+	without: readonly number[],
 	largestUnits: (UnitShare | null)[],
-): PlanFigures {
+): Omit<PlanFigures, 'territories'> {
 	const { problem } = context;
-	const staying = problem.territories.filter(({ closing }) => !closing).length;
+	const dropped = without.filter((u) => problem.today[u] >= 0);
 	const units = problem.graph.count;
-	const movedUnits = territories.reduce((sum, t) => sum + t.gainedUnits, dropped.length);
-	const droppedCost = dropped.reduce((sum, u) => sum + (problem.cost ? problem.cost[u] : 1), 0);
-	const perTerritory = units / staying;
+	const movedUnits = sum(tally.gainedUnits) + dropped.length;
+	const droppedCost = dropped.reduce((all, u) => all + (problem.cost ? problem.cost[u] : 1), 0);
+	const unitsPerTerritory = units / context.staying;
 	return {
-		territories,
-		measures: problem.measures.map((_, m) =>
-			summary(context, m, territories, dropped, largestUnits[m], perTerritory),
-		),
-		unitsPerTerritory: perTerritory,
+		measures: problem.measures.map((_, m) => {
+			const { name, tolerance } = problem.measures[m];
+			const largestUnit = largestUnits[m];
+			const hard =
+				tolerance === null ? null : hardTolerance(name, tolerance, unitsPerTerritory, largestUnit);
+			return { ...summary(context, m, tally, dropped), largestUnit, hard };
+		}),
+		unitsPerTerritory,
 		movedUnits,
 		movedShare: units > 0 ? movedUnits / units : 0,
-		movedCost: territories.reduce((sum, t) => sum + t.gainedCost, droppedCost),
-		unassigned,
-		cutBorders: {
-			before: context.cutToday,
-			after: territories.reduce((sum, t) => sum + t.cutBorders, 0) / 2,
-		},
-		torn: territories.flatMap(({ torn }, t) => (torn ? [t] : [])),
+		movedCost: sum(tally.gainedCost) + droppedCost,
+		unassigned: without.length,
+		cutBorders: { before: context.cutToday, after: sum(tally.cut) / 2 },
+		torn: marked(tally.torn),
 	};
+}
+
+function sum(values: Float64Array | Uint32Array): number {
+	let total = 0;
+	for (let i = 0; i < values.length; i++) total += values[i];
+	return total;
+}
+
+function marked(marks: Uint8Array): number[] {
+	const places: number[] = [];
+	for (let t = 0; t < marks.length; t++) if (marks[t]) places.push(t);
+	return places;
 }
 
 function summary(
 	{ problem, totals }: FigureContext,
 	m: number,
-	territories: TerritoryFigures[],
+	tally: Tally,
 	dropped: readonly number[],
-	largestUnit: UnitShare | null,
-	perTerritory: number,
-): MeasureSummary {
-	const { values, name, tolerance } = problem.measures[m];
-	const largest = { territory: -1, deviation: NaN };
-	const outside: number[] = [];
-	let [sum, measured, moved] = [0, 0, 0];
-	territories.forEach(({ measures }, t) => {
-		const { deviation, gained, outside: isOutside } = measures[m];
-		moved += gained;
-		if (isOutside) outside.push(t);
-		if (Number.isNaN(deviation)) return;
-		sum += Math.abs(deviation);
-		measured++;
-		if (largest.territory < 0 || Math.abs(deviation) > Math.abs(largest.deviation)) {
-			Object.assign(largest, { territory: t, deviation });
-		}
-	});
-	for (const u of dropped) moved += values[u];
+): Omit<MeasureSummary, 'largestUnit' | 'hard'> {
+	const k = tally.cut.length;
+	const deviation = tally.deviation.subarray(m * k, m * k + k);
+	const { values } = problem.measures[m];
+	let [sizes, counted, territory] = [0, 0, -1];
+	for (let t = 0; t < k; t++) {
+		const size = Math.abs(deviation[t]);
+		if (Number.isNaN(size)) continue;
+		sizes += size;
+		counted++;
+		if (territory < 0 || size > Math.abs(deviation[territory])) territory = t;
+	}
+	const moved =
+		sum(tally.gained.subarray(m * k, m * k + k)) + dropped.reduce((all, u) => all + values[u], 0);
 	return {
-		largest,
-		mean: measured > 0 ? sum / measured : NaN,
-		outside,
+		largest: { territory, deviation: territory < 0 ? NaN : deviation[territory] },
+		mean: counted > 0 ? sizes / counted : NaN,
+		outside: marked(tally.outside.subarray(m * k, m * k + k)),
 		moved,
 		movedShare: totals[m] > 0 ? moved / totals[m] : 0,
-		largestUnit,
-		hard: tolerance === null ? null : hardTolerance(name, tolerance, perTerritory, largestUnit),
 	};
 }
 
@@ -91,7 +133,7 @@ export function hardTolerance(
 	const few = tolerance * perTerritory < 2;
 	const heavy = largest !== null && largest.share > tolerance;
 	if (!few && !heavy) return null;
-	const mean = counted(Math.round(10 * perTerritory) / 10, 'unit', 'units');
+	const mean = countedWords(Math.round(10 * perTerritory) / 10, 'unit', 'units');
 	const size = few ? [`a territory has ${mean} on average, each ${percent(1 / perTerritory)}`] : [];
 	const most = heavy ? [`#${largest.unit} alone is ${percent(largest.share)}`] : [];
 	return `A tolerance of ${percent(tolerance)} for ${name} is hard to meet: ${[...size, ...most].join(', and ')} of a target.`;

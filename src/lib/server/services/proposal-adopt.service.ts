@@ -5,15 +5,9 @@ import { changeProposal } from '../repositories/proposals.repository.ts';
 import { insertTerritoryDraft } from '../repositories/territories.repository.ts';
 import { Conflict } from './outcomes.ts';
 import { assignmentByKey, planNames } from './plan-names.ts';
-import { recordProposal, withProposal } from './proposal-keep.service.ts';
+import { recordProposal, withProposal } from './proposal-held.ts';
 import { requestOf } from './proposal-notes.ts';
-import {
-	judged,
-	openPlan,
-	openStates,
-	requirePresent,
-	type OpenPlan,
-} from './proposal-plan.service.ts';
+import { judged, openPlan, openStates, requirePresent, type OpenPlan } from './proposal-open.ts';
 import { inWords } from './proposal-words.ts';
 import { inksFor } from './territory-inks.ts';
 

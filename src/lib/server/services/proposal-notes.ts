@@ -27,11 +27,17 @@ export async function proposalNotes(db: Db, state: TerritoryState): Promise<Prop
 	return (await listProposals(db, state.sheet.id)).map((row) => noteOf(row, stale));
 }
 
-export function noteOf(
+export const noteOf = (
 	row: ProposalNoteRow,
 	stale: (row: Pick<ProposalRecord, 'state' | 'request'>) => string | null,
+): ProposalNote => noteFrom(row, requestOf(row).wishes, resultOf(row), stale(row));
+
+export function noteFrom(
+	row: Omit<ProposalNoteRow, 'request' | 'result'>,
+	wishes: Wishes,
+	result: StoredResult | StoredFailure | null,
+	stale: string | null,
 ): ProposalNote {
-	const result = resultOf(row);
 	return {
 		number: row.number,
 		name: row.name,
@@ -40,9 +46,9 @@ export function noteOf(
 		share: row.share,
 		createdAt: row.created_at.toISOString(),
 		createdBy: personName(row),
-		wishes: requestOf(row).wishes,
+		wishes,
 		revision: row.revision,
-		stale: stale(row),
+		stale,
 		sentence: sentenceOf(row, result),
 		outcome: result?.outcome ?? null,
 	};

@@ -1,85 +1,21 @@
 import { numbersOf } from '../../engines/territories/problem-of-draft.ts';
-import type { TerritoryDraft } from '../../engines/territories/territory-draft.ts';
 import { wishFaults } from '../../engines/territories/wish-faults.ts';
 import type { PlanSaved, PlanStale } from '../../schemas/desk-territories.ts';
 import type { SavePlan } from '../../schemas/territories.ts';
 import { requireAccess, type Member } from '../access/member.ts';
-import type { MadePlan } from '../jobs/rebalance.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import { changeProposal, type ProposalRow } from '../repositories/proposals.repository.ts';
-import { sheetOf } from './draft.service.ts';
+import { changeProposal } from '../repositories/proposals.repository.ts';
 import { Conflict, Unfit } from './outcomes.ts';
 import { assignmentByKey, planNames } from './plan-names.ts';
 import { digestOfParts } from './proposal-data.ts';
-import { recordProposal, withProposal } from './proposal-keep.service.ts';
-import { noteOf, presentParts, requestOf, resultOf, staleness } from './proposal-notes.ts';
+import { recordProposal, withProposal } from './proposal-held.ts';
+import { noteFrom, presentParts, requestOf, resultOf } from './proposal-notes.ts';
+import { judged, openPlan, openStates, requirePresent, type OpenPlan } from './proposal-open.ts';
 import { planResult, type StoredRequest } from './proposal-result.ts';
-import { inWords } from './proposal-words.ts';
-import { proposalOf } from './proposals.service.ts';
-import { inksFor } from './territory-inks.ts';
-import {
-	territoriesIn,
-	territoryDraftOf,
-	territoryState,
-	type TerritoryState,
-} from './territory-state.ts';
+import { changedInks, inksFor } from './territory-inks.ts';
 
 export type SavePlanResult =
 	{ status: 'saved'; saved: PlanSaved } | { status: 'stale'; stale: PlanStale };
-
-/** A plan with the draft it was made for, on the data as they are now. */
-export interface OpenPlan {
-	row: ProposalRow & { assignment: number[] };
-	state: TerritoryState;
-	/** the territories that were asked about */
-	asked: TerritoryDraft;
-}
-
-/** States in which a plan may be changed, looked over again or adopted. */
-export const openStates = ['kept', 'undecided'] as const;
-
-/** Reads a proposal that has a plan which is neither adopted nor dropped. */
-export async function openPlan(
-	shop: Pick<Workshop, 'db'>,
-	member: Member,
-	number: number,
-	proposal: number,
-): Promise<OpenPlan> {
-	const sheet = await sheetOf(shop.db, member, number);
-	const row = await proposalOf(shop.db, sheet, proposal);
-	const { assignment } = row;
-	if (!assignment || !openStates.some((state) => state === row.state)) {
-		const why = row.state === 'adopted' ? 'It was adopted already.' : 'There is no plan in it.';
-		throw new Conflict('no-open-plan', why);
-	}
-	const state = await territoryState(shop.db, sheet);
-	const asked = territoriesIn(await territoryDraftOf(shop.db, sheet.id, row.territory_revision));
-	return { row: { ...row, assignment }, state, asked };
-}
-
-/** @throws Conflict when the data of a plan have changed since */
-export function requirePresent({ row, state }: OpenPlan): void {
-	const stale = staleness(state)(row);
-	if (stale) throw new Conflict('data-changed', `${stale} Check the proposal against them first.`);
-}
-
-/**
- * Figures and faults of a plan, worked out in a thread.
- * @throws Unfit when there are none, because a figure is missing
- */
-export async function judged(
-	shop: Pick<Workshop, 'pool'>,
-	{ row, state, asked }: OpenPlan,
-	assignment: number[],
-): Promise<MadePlan> {
-	const { wishes } = requestOf(row);
-	const found = await shop.pool.run('judgePlan', {
-		...{ ground: state.ground, draft: asked, wishes },
-		assignment: Int32Array.from(assignment),
-	});
-	if ('plan' in found) return found.plan;
-	throw new Unfit(found.reason, inWords(found.message, planNames(state, asked, wishes)));
-}
 
 /**
  * Saves edits by hand. A plan that breaks rules is kept and says so; it cannot be adopted. When somebody
@@ -207,17 +143,13 @@ async function storePlan(
 		} as const;
 		await changeProposal(trx, row.id, openStates, change);
 		await recordProposal(trx, member, verb, held, { revision: change.revision });
-		const note = noteOf(
-			{
-				...row,
-				...change,
-				request: { wishes, parts } as never,
-				result: result as never,
-				inks: inked.inks,
-			},
-			() => null,
-		);
-		return { status: 'saved', saved: { revision: change.revision, assignment, note } };
+		const { inks } = inked;
+		const note = noteFrom({ ...row, ...change, inks }, wishes, result, null);
+		const saved = { revision: change.revision, assignment, note, inks };
+		return {
+			status: 'saved',
+			saved: { ...saved, changedInks: changedInks(state.row?.inks ?? {}, inks) },
+		};
 	});
 }
 

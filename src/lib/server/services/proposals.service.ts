@@ -23,7 +23,7 @@ import { Conflict, NotFound, Unfit } from './outcomes.ts';
 import { digestOfParts } from './proposal-data.ts';
 import { noteOf, presentParts, proposalNotes, resultOf, staleness } from './proposal-notes.ts';
 import type { StoredRequest, StoredResult } from './proposal-result.ts';
-import { requireSound } from './territories.service.ts';
+import { requireSound } from './territories-store.ts';
 import { changedInks } from './territory-inks.ts';
 import { territoriesIn, territoryDraftOf, territoryState } from './territory-state.ts';
 

@@ -7,7 +7,7 @@ import { sheetOf } from './draft.service.ts';
 import { Conflict, NotFound, Unfit } from './outcomes.ts';
 import { fromColumn } from './territories-from-column.ts';
 import { scratchDraft } from './territories-from-scratch.ts';
-import { storeTerritories, type SaveTerritoriesResult } from './territories.service.ts';
+import { storeTerritories, type SaveTerritoriesResult } from './territories-store.ts';
 import { territoryState, type TerritoryState } from './territory-state.ts';
 
 /** First territories of a sheet: as a column names them, or cut out evenly by the engine. */
