@@ -49,6 +49,7 @@ describe('the planner', () => {
 		// codes are not wanted, outlets and potential neither; the words of the last column are
 		for (const at of [0, 2, 4]) await page.locator(`input[name="take-${at}"]`).uncheck();
 		await page.locator('input[name="take-5"]').check();
+		await page.getByText('How Round, Territory is taken').click();
 		await page.locator('input[name="name-3"]').fill('Visits');
 		await page.locator('input[name="name-5"]').fill('Round');
 		await page.locator('select[name="doubled-3"]').selectOption('the first counts');
@@ -57,7 +58,7 @@ describe('the planner', () => {
 		await press(page, 'Show what comes of it');
 		await press(page, 'Take over 2 columns');
 		await page.waitForURL(/\/measures$/);
-		await expect.poll(() => docket(page, 'Measures').innerText()).toContain('7 missing');
+		await expect.poll(() => docket(page, 'Measures').innerText()).toMatch(/7 values missing/);
 	});
 
 	it('adds the figures that were missing from a second workbook', async () => {
@@ -218,7 +219,7 @@ describe('the planner without a pointer', () => {
 		await enter(page.getByRole('link', { name: /^Proposals/ }));
 		await page.waitForURL(/proposals$/);
 		await enter(button('Even the territories out'));
-		await told(page, /^Moved \d+/);
+		await page.getByText(/^Moved \d+/).first().waitFor({ timeout: patience });
 		await enter(page.getByRole('link', { name: 'Proposal 1', exact: true }));
 		await page.waitForURL(/proposals\/1$/);
 
