@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { firstWishes, noTerritories } from '../../src/lib/engines/territories/territory-draft.ts';
 import {
 	Forbidden,
 	mayDo,
@@ -30,6 +31,33 @@ import {
 	confirmHandover,
 	withdrawHandover,
 } from '../../src/lib/server/services/handover-work.service.ts';
+import { adoptProposal } from '../../src/lib/server/services/proposal-adopt.service.ts';
+import {
+	cancelProposal,
+	dropProposal,
+	duplicateProposal,
+	renameProposal,
+} from '../../src/lib/server/services/proposal-keep.service.ts';
+import {
+	editProposal,
+	recheckProposal,
+} from '../../src/lib/server/services/proposal-plan.service.ts';
+import {
+	beginProposal,
+	listOfProposals,
+	openProposal,
+	proposalProgress,
+	readProposal,
+} from '../../src/lib/server/services/proposals.service.ts';
+import {
+	assignFromColumn,
+	assignFromScratch,
+	previewFromColumn,
+} from '../../src/lib/server/services/territories-start.service.ts';
+import {
+	deskTerritories,
+	saveTerritories,
+} from '../../src/lib/server/services/territories.service.ts';
 import {
 	beginIntake,
 	beginSampleIntake,
@@ -109,8 +137,43 @@ type Layout = Parameters<typeof saveLayout>[3];
 const figures = { unit: '', values: { a: 1 }, mode: 'replace', confidential: true } as const;
 const token = { name: 'Walk', scopes: [], days: 1 };
 
+const source = { kind: 'attribute', name: 'x' } as const;
+const edit = { revision: 0, moves: {} };
+const scratch = { revision: 0, territories: 2, measure: null, seed: 1 };
+const asked = { name: 'Walk', wishes: firstWishes };
+const drawn = { revision: 0, document: noTerritories };
+const yes = { revision: 0, outside: true };
+const edits = 'territories.edit';
+const reads = 'measures.read';
+
+type Walk = Record<string, [Action, (member: Member) => Promise<unknown>]>;
+
+const walkOfTerritories: Walk = {
+	adoptProposal: [edits, (member) => adoptProposal(shop, member, 99, 1, yes)],
+	assignFromColumn: [
+		edits,
+		(member) => assignFromColumn(shop, member, 99, { revision: 0, source }),
+	],
+	assignFromScratch: [edits, (member) => assignFromScratch(shop, member, 99, scratch)],
+	beginProposal: [edits, (member) => beginProposal(shop, member, 99, asked)],
+	cancelProposal: [edits, (member) => cancelProposal(shop, member, 99, 1)],
+	deskTerritories: [reads, (member) => deskTerritories(shop, member, 99)],
+	dropProposal: [edits, (member) => dropProposal(shop, member, 99, 1)],
+	duplicateProposal: [edits, (member) => duplicateProposal(shop, member, 99, 1)],
+	editProposal: [edits, (member) => editProposal(shop, member, 99, 1, edit)],
+	listOfProposals: [reads, (member) => listOfProposals(shop, member, 99)],
+	openProposal: [reads, (member) => openProposal(shop, member, 99, 1)],
+	previewFromColumn: [edits, (member) => previewFromColumn(shop, member, 99, source)],
+	proposalProgress: [reads, (member) => proposalProgress(shop, member, 99)],
+	readProposal: [reads, (member) => readProposal(shop, member, 99, 1)],
+	recheckProposal: [edits, (member) => recheckProposal(shop, member, 99, 1)],
+	renameProposal: [edits, (member) => renameProposal(shop, member, 99, 1, 'Walked')],
+	saveTerritories: [edits, (member) => saveTerritories(shop, member, 99, drawn)],
+};
+
 /** Every service that acts for a member, what it needs, and a call that touches nothing that exists. */
-const walk: Record<string, [Action, (member: Member) => Promise<unknown>]> = {
+const walk: Walk = {
+	...walkOfTerritories,
 	acceptFinding: ['findings.accept', (member) => acceptFinding(shop, member, 99, 1)],
 	addPalette: [
 		'palette.edit',

@@ -115,7 +115,10 @@ describe('who may call', () => {
 });
 
 describe('every route', () => {
-	const values: Record<string, string> = { sheet: '999', edition: '1', file: 'x', intake: 'x' };
+	const values: Record<string, string> = {
+		...{ sheet: '999', edition: '1', file: 'x', intake: 'x' },
+		...{ measure: 'x', handover: '1', proposal: '1' },
+	};
 	const paths = [...new Set(Object.values(operations).map(({ path }) => path))];
 
 	it.each(paths)('%s refuses another method in the one shape', async (path) => {
@@ -127,7 +130,9 @@ describe('every route', () => {
 		errorBody.parse(await response.json());
 	});
 
-	it.each(paths.filter((path) => path.includes('{')))('%s knows no other thing', async (path) => {
+	const readable = Object.values(operations).filter(({ method }) => method === 'GET');
+	const things = readable.map(({ path }) => path).filter((path) => path.includes('{'));
+	it.each(things)('%s knows no other thing', async (path) => {
 		const at = path.replace(/\{(\w+)\}/g, (_, name) => values[name]);
 		expect(await fault(get(at))).toMatchObject({ status: 404, code: 'not-found' });
 	});

@@ -19,6 +19,7 @@ const values: Record<string, string> = {
 	'[intake]': '00000000-0000-4000-8000-000000000000',
 	'[revision]': '1',
 	'[number]': '1',
+	'[proposal]': '1',
 	'[table]': '1',
 	'[file]': 'sheet.svg',
 };

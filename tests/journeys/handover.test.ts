@@ -164,7 +164,7 @@ describe('handing over', () => {
 		expect(await approve.isDisabled()).toBe(true);
 		expect(await approver.getByRole('link', { name: /^Change / }).count()).toBe(0);
 		await expectAccessible(approver);
-		await planner.goto(`${list}?state=disputed`);
+		await planner.goto(`${list}?state=disputed`, { waitUntil: 'networkidle' });
 		await say(planner, 'my best customer');
 		await planner.getByRole('link', { name: /^Change / }).press('Enter');
 		await planner.getByLabel(/^State, as/).selectOption('accepted');

@@ -12,30 +12,46 @@ import { firm, territoriesToday } from './planned-sheet.ts';
  * @returns address of its territories
  */
 export async function adoptedSheet(page: Page): Promise<string> {
-	const number = await upload();
+	const number = await sampleSheet('Districts to hand over');
+	await joinHours(number);
+	const address = await sheetPlannedToday(page, number);
+	const measure = await measureId(page, address);
+	const asked = { name: 'Within 10 %', revision: '1', effort: 'quick' };
+	await submit(page, `${address}/proposals?/begin`, { ...asked, [`tolerance.${measure}`]: '10' });
+	await workedOut(page, address);
+	await submit(page, `${address}/proposals?/adopt`, { proposal: '1', revision: '0' });
+	return address;
+}
+
+/** The distributor's hours, over the API. */
+export async function joinHours(number: number): Promise<void> {
 	const values = Object.fromEntries(firm.rows.map(({ code, hours }) => [code, hours]));
 	await api(`/sheets/${number}/measures/visits`, {
 		method: 'PUT',
 		headers: { 'content-type': 'application/json' },
 		body: JSON.stringify({ unit: 'hours a year', values }),
 	});
+}
+
+/**
+ * The distributor's territories as they are today on a sheet that has one measure, with a tolerance of 10 %.
+ * @param revision of the territories that are there, 0 for none
+ * @returns address of its territories
+ */
+export async function sheetPlannedToday(page: Page, number: number, revision = 0): Promise<string> {
 	const address = `${team}/sheets/${number}/territories`;
 	const measure = await measureId(page, address);
 	const today = territoriesToday();
 	const wishes = { ...today.wishes, tolerances: { [measure]: 0.1 } };
 	const saved = await page.request.post(`${address}/draft`, {
 		headers: { origin: demo().url },
-		data: { revision: 0, document: { ...today, wishes } },
+		data: { revision, document: { ...today, wishes } },
 	});
 	expect(saved.ok(), await saved.text()).toBe(true);
-	const asked = { name: 'Within 10 %', revision: '1', effort: 'quick' };
-	await submit(page, `${address}?/begin`, { ...asked, [`tolerance.${measure}`]: '10' });
-	await workedOut(page, address);
-	await submit(page, `${address}?/adopt`, { proposal: '1', revision: '0' });
 	return address;
 }
 
-async function api(path: string, init: RequestInit = {}): Promise<Record<string, unknown>> {
+export async function api(path: string, init: RequestInit = {}): Promise<Record<string, unknown>> {
 	const { url, token } = demo();
 	const headers = { ...init.headers, authorization: `Bearer ${token}` };
 	const response = await fetch(`${url}/api/v1${path}`, { ...init, headers });
@@ -44,11 +60,11 @@ async function api(path: string, init: RequestInit = {}): Promise<Record<string,
 	return JSON.parse(text);
 }
 
-/** Uploads the sample and waits until it is a sheet. */
-async function upload(): Promise<number> {
+/** Uploads the sample and waits until it is a sheet of this name. */
+export async function sampleSheet(sheetName: string): Promise<number> {
 	const form = new FormData();
 	for (const [name, value] of Object.entries({
-		sheetName: 'Districts to hand over',
+		sheetName,
 		keyField: 'code',
 		nameField: 'name',
 	})) {

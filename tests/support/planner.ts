@@ -2,6 +2,7 @@ import type { TerritoryDraft, Wishes } from '../../src/lib/engines/territories/t
 import { firstWishes, noTerritories } from '../../src/lib/engines/territories/territory-draft.ts';
 import type { Member } from '../../src/lib/server/access/member.ts';
 import type { Db } from '../../src/lib/server/database/connection.ts';
+import type { Workshop } from '../../src/lib/server/jobs/workshop.ts';
 import { newEntry } from '../../src/lib/server/services/territories-from-column.ts';
 import { saveTerritories } from '../../src/lib/server/services/territories.service.ts';
 import { createMember, ingest, type TestWorkshop } from './workshop.ts';
@@ -50,11 +51,26 @@ export interface Plain {
 export async function plainOf(
 	shop: TestWorkshop,
 	slug: string,
-	size: { rows: number; columns: number },
+	size: Size,
 	values?: (number | null)[],
 ): Promise<Plain> {
 	const cartographer = await createMember(shop.db, slug, 'cartographer');
 	const planner = await createMember(shop.db, slug, 'planner');
+	return plainFor(shop, { cartographer, planner }, size, values);
+}
+
+interface Size {
+	rows: number;
+	columns: number;
+}
+
+/** The same for people who are there already. */
+export async function plainFor(
+	shop: Workshop,
+	{ cartographer, planner }: { cartographer: Member; planner: Member },
+	size: Size,
+	values?: (number | null)[],
+): Promise<Plain> {
 	const bytes = fieldsGeoJson(size.rows, size.columns);
 	const fields = { keyField: 'code', nameField: 'name' };
 	const { sheet } = await ingest(shop, cartographer, 'fields.geojson', bytes, fields);
@@ -129,7 +145,7 @@ export function territoriesOf(
 
 /** Saves territories on top of whatever there is. */
 export async function saveOver(
-	shop: TestWorkshop,
+	shop: Workshop,
 	{ planner, sheet, sheetId }: Plain,
 	document: TerritoryDraft,
 ) {

@@ -92,6 +92,9 @@ export interface PlanSaved {
 	revision: number;
 	assignment: number[];
 	note: ProposalNote;
+	/** ink number of each territory by key, and those that differ from the sheet's now */
+	inks: Record<string, number>;
+	changedInks: string[];
 }
 
 /** `POST territories/proposals/[proposal]/plan`: 409, somebody else edited it first */

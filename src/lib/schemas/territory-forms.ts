@@ -102,3 +102,9 @@ export const openedAdoptForm = z.object({
 export const proposalForm = z.object({ proposal });
 export const renameForm = openedNameForm.extend({ proposal });
 export const adoptForm = openedAdoptForm.extend({ proposal });
+
+/** Numbers of the proposals that stand side by side. */
+export const comparedNumbers = z
+	.array(z.coerce.number().int().positive())
+	.max(6)
+	.transform((numbers) => [...new Set(numbers)]);

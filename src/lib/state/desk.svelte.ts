@@ -1,4 +1,4 @@
-import { getContext, setContext } from 'svelte';
+import { getContext, setContext, type Snippet } from 'svelte';
 import { bordersForSheet } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
@@ -18,7 +18,7 @@ import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions, standings } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
-import { TerritoryDesk, type TerritoryStart } from './territories.svelte';
+import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
 	sheet: DeskSheet;
@@ -48,7 +48,9 @@ export class Desk {
 	/** whether every border that some reader could miss stands out on the sheet */
 	showWeak = $state(false);
 	panel: 'stage' | 'region' = $state('stage');
-	view: 'sheet' | 'table' | 'territories' = $state('sheet');
+	view: 'sheet' | 'table' | 'territories' | 'further' = $state('sheet');
+	/** a table that the stage lays in the middle, beside those that are always there */
+	further: { label: string; content: Snippet } | null = $state.raw(null);
 	/** figures looked at beside the regions in their table */
 	figures: { name: string; unit: string; values: readonly (number | string | null)[] } | null =
 		$state.raw(null);
@@ -138,8 +140,11 @@ export class Desk {
 	}
 
 	/** the draft that undo, redo and saving speak of */
-	get inHand(): DraftState<Draft, DraftSaved> | TerritoryDesk['draft'] {
-		return this.planning?.draft ?? this.draft;
+	get inHand():
+		| DraftState<Draft, DraftSaved>
+		| TerritoryDesk['draft']
+		| NonNullable<PlanOnShow['draft']> {
+		return this.planning?.proposal?.draft ?? this.planning?.draft ?? this.draft;
 	}
 
 	may(action: DeskSheet['rights'][number]): boolean {
@@ -260,3 +265,10 @@ function deskColouring(result: ColouringResult, sentence: string): DeskColouring
 const place = Symbol('desk');
 export const setDesk = (desk: Desk): Desk => setContext(place, desk);
 export const getDesk = (): Desk => getContext<Desk>(place);
+
+/** For the places of the territories' stage, which stand only where the territories have been opened. */
+export function getPlan(): TerritoryDesk {
+	const { territories } = getDesk();
+	if (!territories) throw new Error('the territories have not been opened');
+	return territories;
+}

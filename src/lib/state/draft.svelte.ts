@@ -21,6 +21,8 @@ export interface DraftStart<Doc, Answer extends Saved<Doc>> {
 	keeper: Keeper<Doc> | null;
 	/** puts mine on top of theirs; `both` names what each had changed differently */
 	rebase: (base: Doc, mine: Doc, theirs: Doc) => { draft: Doc; both: string[] };
+	/** told before the document is changed, taken back or sent: whatever waits to be put into it goes in now */
+	onbefore?: () => void;
 	/** told after each save, with what the server computed */
 	onsaved?: (saved: Answer) => void;
 	/** told after each change of the document, by whatever way */
@@ -83,6 +85,7 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 
 	/** One step that can be undone. Steps of the same `run` (typing in a field) become one. */
 	change(label: string, make: (draft: Doc) => Doc, run = false) {
+		this.#start.onbefore?.();
 		const before = this.document;
 		const after = make(before);
 		if (after === before) return;
@@ -96,6 +99,7 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 	}
 
 	undo() {
+		this.#start.onbefore?.();
 		const step = this.past.at(-1);
 		if (!step) return;
 		this.past = this.past.slice(0, -1);
@@ -104,6 +108,7 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 	}
 
 	redo() {
+		this.#start.onbefore?.();
 		const step = this.future.at(-1);
 		if (!step) return;
 		this.future = this.future.slice(0, -1);
@@ -149,6 +154,7 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 
 	/** Saves at once what is waiting: on leaving, on coming back online, on asking again. */
 	async saveNow() {
+		this.#start.onbefore?.();
 		clearTimeout(this.#timer);
 		if (this.#running || this.stale) return;
 		if (!this.dirty) return this.#nothingToSave();

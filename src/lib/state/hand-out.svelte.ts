@@ -1,7 +1,6 @@
 import type { Torn } from '$lib/engines/territories';
 import { counted } from '$lib/components/format';
 import type { TerritoryDesk } from './territories.svelte';
-import { dropClosedBases, give } from './territory-edits';
 import { amount, deviationWords, piecesOf } from './territory-words';
 
 /** What a press on a region gives it to: a territory's key, 'none' to take it away, null: it gives nothing. */
@@ -95,15 +94,8 @@ export class HandOut {
 		}
 		const from = new Set(moving.map((region) => territories.assignment[region]));
 		const { torn } = territories;
-		this.#put(moving, key, `give ${this.#named(moving)} to ${this.nameOf(hand)}`);
+		territories.give(moving, key, `give ${this.#named(moving)} to ${this.nameOf(hand)}`);
 		this.said = [this.#told(moving, to, from, torn), this.#stays(staying, key)].join(' ').trim();
-	}
-
-	#put(moving: readonly number[], key: string | null, label: string) {
-		const { proposal, draft, desk } = this.#territories;
-		const keys = moving.map((region) => desk.sheet.regions.key[region]);
-		if (proposal) proposal.give?.(moving, key, label);
-		else draft.change(label, (draft) => dropClosedBases(keys)(give(keys, key)(draft)));
 	}
 
 	/** the territory, other than `key`, that has its base in this region and keeps it */

@@ -28,37 +28,48 @@ export type SaveDraft<Doc, Answer extends Saved<Doc>> = (
 	document: Doc,
 ) => Promise<SaveAnswer<Doc, Answer>>;
 
-/** Saves by `POST {address}`; never throws: every way it can end is an answer. */
+/** How a body that was sent was answered; every way it can end is an answer. */
+export type PostAnswer<Taken, Theirs> =
+	| { kind: 'saved'; saved: Taken }
+	| { kind: 'stale'; stale: Theirs }
+	| Exclude<SaveAnswer<never, Saved<never>>, { kind: 'saved' } | { kind: 'stale' }>;
+
+/** Saves by `POST {address}`; never throws. */
 export const saveTo =
 	<Doc, Answer extends Saved<Doc>>(
 		address: string,
 		fetcher: typeof fetch = fetch,
 	): SaveDraft<Doc, Answer> =>
-	async (revision, document) => {
-		let response: Response;
-		try {
-			response = await fetcher(address, {
-				method: 'POST',
-				headers: { 'content-type': 'application/json', accept: 'application/json' },
-				body: JSON.stringify({ revision, document }),
-				redirect: 'manual',
-			});
-		} catch {
-			return { kind: 'unreachable' };
-		}
-		// a guard that leads to the sign-in page means the same as 401
-		if (response.status === 401 || response.type === 'opaqueredirect')
-			return { kind: 'signed-out' };
-		if (response.status >= 500 || response.status === 429) return { kind: 'unreachable' };
-		return readAnswer(response);
-	};
+	(revision, document) =>
+		postJson<Answer, Stale<Doc>>(address, { revision, document }, fetcher);
 
-async function readAnswer<Doc, Answer extends Saved<Doc>>(
-	response: Response,
-): Promise<SaveAnswer<Doc, Answer>> {
+export async function postJson<Taken, Theirs>(
+	address: string,
+	body: unknown,
+	fetcher: typeof fetch = fetch,
+): Promise<PostAnswer<Taken, Theirs>> {
+	let response: Response;
+	try {
+		response = await fetcher(address, {
+			method: 'POST',
+			headers: { 'content-type': 'application/json', accept: 'application/json' },
+			body: JSON.stringify(body),
+			redirect: 'manual',
+		});
+	} catch {
+		return { kind: 'unreachable' };
+	}
+	// a guard that leads to the sign-in page means the same as 401
+	if (response.status === 401 || response.type === 'opaqueredirect') return { kind: 'signed-out' };
+	if (response.status >= 500 || response.status === 429) return { kind: 'unreachable' };
+	return readAnswer(response);
+}
+
+async function readAnswer<Taken, Theirs>(response: Response): Promise<PostAnswer<Taken, Theirs>> {
 	const body: unknown = await response.json().catch(() => null);
-	if (response.ok) return { kind: 'saved', saved: body as Answer };
-	if (response.status === 409) return { kind: 'stale', stale: body as Stale<Doc> };
+	if (response.ok) return { kind: 'saved', saved: body as Taken };
+	if (response.status === 409 && !(body && typeof body === 'object' && 'message' in body))
+		return { kind: 'stale', stale: body as Theirs };
 	return { kind: 'refused', message: sentenceIn(body) };
 }
 

@@ -1,14 +1,16 @@
 import { tornParts } from '$lib/engines/territories';
-import { joinedGraph, todayOf } from '$lib/engines/territories/problem-of-draft';
+import { joinedGraph } from '$lib/engines/territories/problem-of-draft';
 import type { TerritoryDraft, TerritoryEntry } from '$lib/engines/territories/territory-draft';
 import type { DeskTerritories, TerritoriesSaved } from '$lib/schemas/desk-territories';
 import type { Desk } from './desk.svelte';
 import { DraftState } from './draft.svelte';
 import { HandOut } from './hand-out.svelte';
+import { HandedAhead } from './handed-ahead.svelte';
 import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { rebaseTerritories } from './rebase-territories';
 import type { SaveDraft } from './save-draft';
+import type { PlanAnswer, PlanOfRegions } from './save-plan';
 import { inksByNumber, territoryBorders } from './territory-colours';
 import { countRegions, figureOf, isOutside, loadsOf } from './territory-figures';
 import { TerritoryInks } from './territory-inks.svelte';
@@ -29,6 +31,8 @@ export interface PlanOnShow {
 	before: Int32Array | null;
 	/** null where it can only be looked at */
 	give: ((regions: readonly number[], territory: string | null, label: string) => void) | null;
+	/** what undo, redo and saving speak of while it is shown; null: the territories' own */
+	draft: DraftState<PlanOfRegions, PlanAnswer> | null;
 }
 
 export interface TerritoryStart {
@@ -61,11 +65,9 @@ export class TerritoryDesk {
 	entries = $derived(this.document.territories);
 	numbers = $derived(numberTerritories(this.entries));
 	#handedOut = $derived(this.document.assignment);
-	today = $derived.by(() =>
-		todayOf(this.desk.sheet.regions.key, {
-			territories: this.entries,
-			assignment: this.#handedOut,
-		}),
+	#ahead: HandedAhead;
+	today = $derived.by(
+		() => this.#ahead.assignment ?? this.#ahead.numbered(this.#handedOut, this.entries),
 	);
 	assignment = $derived(this.proposal?.assignment ?? this.today);
 	inks = $derived.by(() =>
@@ -147,6 +149,9 @@ export class TerritoryDesk {
 		this.desk = desk;
 		this.given = given;
 		this.inksToday = new TerritoryInks(given.inks, given.inkNote);
+		this.#ahead = new HandedAhead(desk.sheet.regions.key, (label, edit) =>
+			this.draft.change(label, edit),
+		);
 		this.draft = new DraftState({
 			place: `${desk.sheet.id} territories`,
 			revision: given.revision,
@@ -155,6 +160,7 @@ export class TerritoryDesk {
 			save,
 			keeper,
 			rebase: rebaseTerritories,
+			onbefore: () => this.#ahead.settle(),
 			onchange: () => {
 				this.hand.heard();
 				this.#colourSoon();
@@ -184,6 +190,14 @@ export class TerritoryDesk {
 		this.draft.refresh(given.revision, given.draft, given.savedAt ?? this.draft.savedAt, this.made);
 		this.made = undefined;
 		if (newer) this.inksToday.adopt(given.inks, given.inkNote, true);
+	}
+
+	/** Hands regions to a territory, or to none; a proposal on show takes them in place of today. */
+	give(regions: readonly number[], territory: string | null, label: string) {
+		const { proposal, numbers, today, entries } = this;
+		const to = numbers.get(territory ?? '') ?? -1;
+		if (proposal) proposal.give?.(regions, territory, label);
+		else this.#ahead.give({ regions, territory, to, label }, today, entries);
 	}
 
 	entry(key: string | null): TerritoryEntry | null {

@@ -263,6 +263,7 @@ describe('the sheet', () => {
 			assignment: Int32Array.of(0, 0, 1, 1, 1, 1),
 			inks: { n: 1, s: 0 },
 			before: today,
+			draft: null,
 			give: (regions) => moved.push(...regions),
 		};
 		expect([...territories.regionInks]).toEqual([1, 1, 0, 0, 0, 0]);

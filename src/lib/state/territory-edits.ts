@@ -152,3 +152,11 @@ export const setTolerance =
 		const tolerances = tolerance === null ? others : { ...others, [measure]: tolerance };
 		return { ...draft, wishes: { ...draft.wishes, tolerances } };
 	};
+
+/** Changes what a rebalance is asked for. */
+export const setWishes =
+	(changes: Partial<TerritoryDraft['wishes']>) =>
+	(draft: TerritoryDraft): TerritoryDraft => ({
+		...draft,
+		wishes: { ...draft.wishes, ...changes },
+	});

@@ -25,7 +25,7 @@ export const measureSent = z.strictObject({
 		.enum(['replace', 'add'])
 		.default('replace')
 		.describe('what happens to the figures of a measure that is there'),
-	confidential: z.boolean().default(true).describe('left out of shared links'),
+	confidential: z.boolean().default(true).describe('may be personal or confidential'),
 });
 export type MeasureSent = z.infer<typeof measureSent>;
 

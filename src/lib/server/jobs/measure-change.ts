@@ -106,7 +106,7 @@ function unlike(old: Float64Array, stored: Float64Array): MeasureChange {
 	const [before, after] = [sum(old), sum(stored)];
 	return {
 		...{ ...none, mode: 'replace', before, after },
-		sentence: `What is there is joined to earlier boundaries, so regions cannot be compared one by one. In all ${figure(before)} before, ${figure(after)} after.`,
+		sentence: `Joined to earlier boundaries, so regions cannot be compared one by one. In all ${figure(before)} before, ${figure(after)} after.`,
 	};
 }
 

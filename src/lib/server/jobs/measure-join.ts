@@ -31,11 +31,22 @@ export interface JoinedTable {
 /** Columns typed and rows joined, as far as it has been decided. */
 export function joinKept({ kept, source, options, regions }: JoinInput): JoinedTable {
 	const table = unpackTable(kept);
-	const typed = typeColumns(table, source);
+	const typed = typedColumns(table, source.decimal);
 	const choice = options.join ?? guessJoin(table, typed, regions);
 	const guessed = options.join === null;
 	if (!choice) return { table, typed, join: null, guessed };
 	return { table, typed, join: joinRows(table, choice, regions, options), guessed };
+}
+
+/** The columns of the table at hand, so that a step of the review does not look at every cell again. */
+const known = new WeakMap<RawTable, { decimal: '.' | ','; typed: TypedColumn[] }>();
+
+function typedColumns(table: RawTable, decimal: '.' | ','): TypedColumn[] {
+	const before = known.get(table);
+	if (before?.decimal === decimal) return before.typed;
+	const typed = typeColumns(table, { decimal });
+	known.set(table, { decimal, typed });
+	return typed;
 }
 
 function joinRows(

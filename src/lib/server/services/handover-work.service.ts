@@ -48,7 +48,8 @@ export async function changeMoveState(
 	requireAccess(member, 'handover.edit');
 	await withOpenHandover(shop, member, number, handover, async (trx, row, now) => {
 		const by = await nameOfMember(trx, member);
-		const change = { state, word, changed_by: by };
+		// a move that is open again has no one who answered it
+		const change = { state, word, changed_by: state === 'proposed' ? '' : by };
 		if (!(await changeMove(trx, row.id, move, change))) throw new NotFound('move');
 		await insertAnswer(trx, {
 			...{ handover_id: row.id, ordinal: move, territory_key: null },

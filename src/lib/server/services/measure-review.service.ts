@@ -77,9 +77,14 @@ async function review(
 			shop.pool.run('reviewMeasureTable', { ...input, page, find, standing }, { signal }),
 		),
 	);
-	const source = row.source as unknown as StoredSource;
-	return { source: { ...source, notes: source.notes.map(({ message }) => message) }, ...shown };
+	return { source: sourceNote(row.source as unknown as StoredSource), ...shown };
 }
+
+const sourceNote = (source: StoredSource): TableReview['source'] => ({
+	...{ format: source.format, delimiter: source.delimiter, encoding: source.encoding },
+	...{ decimal: source.decimal, sheets: source.sheets, sheet: source.sheet },
+	...{ headingRow: source.headingRow, notes: source.notes.map(({ message }) => message) },
+});
 
 /** Changes what has been decided about a table under review. */
 async function decide(

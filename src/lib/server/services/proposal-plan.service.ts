@@ -12,7 +12,7 @@ import { recordProposal, withProposal } from './proposal-held.ts';
 import { noteFrom, presentParts, requestOf, resultOf } from './proposal-notes.ts';
 import { judged, openPlan, openStates, requirePresent, type OpenPlan } from './proposal-open.ts';
 import { planResult, type StoredRequest } from './proposal-result.ts';
-import { inksFor } from './territory-inks.ts';
+import { changedInks, inksFor } from './territory-inks.ts';
 
 export type SavePlanResult =
 	{ status: 'saved'; saved: PlanSaved } | { status: 'stale'; stale: PlanStale };
@@ -143,8 +143,13 @@ async function storePlan(
 		} as const;
 		await changeProposal(trx, row.id, openStates, change);
 		await recordProposal(trx, member, verb, held, { revision: change.revision });
-		const note = noteFrom({ ...row, ...change, inks: inked.inks }, wishes, result, null);
-		return { status: 'saved', saved: { revision: change.revision, assignment, note } };
+		const { inks } = inked;
+		const note = noteFrom({ ...row, ...change, inks }, wishes, result, null);
+		const saved = { revision: change.revision, assignment, note, inks };
+		return {
+			status: 'saved',
+			saved: { ...saved, changedInks: changedInks(state.row?.inks ?? {}, inks) },
+		};
 	});
 }
 

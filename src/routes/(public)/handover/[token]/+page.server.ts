@@ -8,7 +8,8 @@ import type { PageServerLoad } from './$types';
 
 /** A letter's page: whoever has the link reads and answers their own moves, and sees nothing else. */
 export const load = (async ({ params, getClientAddress, setHeaders }) => {
-	setHeaders({ 'cache-control': 'no-store', 'referrer-policy': 'no-referrer' });
+	// the address is a secret, so no other site hears it; `no-referrer` would leave forms without an origin
+	setHeaders({ 'cache-control': 'no-store', 'referrer-policy': 'same-origin' });
 	const letter = await forPage(() => readLetter(workshop(), params.token, getClientAddress()));
 	if (!letter) {
 		error(

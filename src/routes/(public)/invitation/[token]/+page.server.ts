@@ -14,7 +14,7 @@ export const load = (async ({ params, locals, setHeaders }) => {
 	const invitation = await readInvitation(params.token);
 	if (!invitation)
 		error(404, 'This invitation has been used, withdrawn or is too old. Ask for a new one.');
-	setHeaders({ 'cache-control': 'no-store', 'referrer-policy': 'no-referrer' });
+	setHeaders({ 'cache-control': 'no-store', 'referrer-policy': 'same-origin' });
 	const fits = locals.user?.email === invitation.email;
 	return { invitation, fits, passwordLength: PASSWORD_LENGTH };
 }) satisfies PageServerLoad;

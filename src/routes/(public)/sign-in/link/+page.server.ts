@@ -12,6 +12,6 @@ const parts = z.object({
 export const load = (({ url, setHeaders }) => {
 	const read = parts.safeParse(Object.fromEntries(url.searchParams));
 	if (!read.success) redirect(303, '/sign-in?error=Verification');
-	setHeaders({ 'cache-control': 'no-store', 'referrer-policy': 'no-referrer' });
+	setHeaders({ 'cache-control': 'no-store', 'referrer-policy': 'same-origin' });
 	return { parts: read.data };
 }) satisfies PageServerLoad;

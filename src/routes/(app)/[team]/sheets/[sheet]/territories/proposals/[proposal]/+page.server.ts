@@ -12,19 +12,18 @@ import {
 } from '$lib/server/services/proposal-keep.service';
 import { recheckProposal } from '$lib/server/services/proposal-plan.service';
 import { openProposal } from '$lib/server/services/proposals.service';
-import { deskTerritories } from '$lib/server/services/territories.service';
 import type { Actions, PageServerLoad } from './$types';
 
 const numbers = (params: { sheet: string; proposal: string }) =>
 	[Number(params.sheet), Number(params.proposal)] as const;
 
-/** `DeskProposal` as `proposal`, `DeskTerritories` as `territories`. */
-export const load = (async ({ locals, params }) => {
+/** `DeskProposal` as `proposal`. */
+export const load = (async ({ locals, params, depends }) => {
+	depends('merestone:territories');
 	const member = memberFor(locals, 'measures.read');
 	const [sheet, proposal] = numbers(params);
 	return {
 		proposal: await forPage(() => openProposal(workshop(), member, sheet, proposal)),
-		territories: await forPage(() => deskTerritories(workshop(), member, sheet)),
 	};
 }) satisfies PageServerLoad;
 
