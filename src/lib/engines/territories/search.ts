@@ -51,6 +51,8 @@ class SearchRun {
 	private readonly wishes: Wishes;
 	private readonly scratch: ContiguityScratch;
 	private readonly all: Int32Array;
+	/** the share last told, which never falls */
+	private told = 0;
 
 	constructor(terms: SearchTerms, start: Int32Array, watch: Watch) {
 		const { prepared } = terms;
@@ -161,7 +163,8 @@ class SearchRun {
 	}
 
 	private tell(step: string, share: number): void {
-		this.watch.progress?.(step, share);
+		this.told = Math.max(this.told, share);
+		this.watch.progress?.(step, this.told);
 	}
 }
 
