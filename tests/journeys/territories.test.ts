@@ -41,7 +41,7 @@ function fields(): ChosenFile {
 const visits: ChosenFile = {
 	name: 'visits.csv',
 	mimeType: 'text/csv',
-	buffer: Buffer.from(['field,Visits', ...names.map((name) => `${name},10`)].join('\n')),
+	buffer: Buffer.from(['field,Visits [visits]', ...names.map((name) => `${name},10`)].join('\n')),
 };
 
 async function makeSheet(browser: Browser): Promise<string> {
