@@ -35,8 +35,12 @@ export function gridGraph(width: number, height = width): RegionGraph {
 	for (let y = 0; y < height; y++) {
 		for (let x = 0; x < width; x++) {
 			const cell = y * width + x;
-			if (x + 1 < width) (a.push(cell), b.push(cell + 1));
-			if (y + 1 < height) (a.push(cell), b.push(cell + width));
+			const east = x + 1 < width ? [cell + 1] : [];
+			const south = y + 1 < height ? [cell + width] : [];
+			for (const other of [...east, ...south]) {
+				a.push(cell);
+				b.push(other);
+			}
 		}
 	}
 	return buildGraph(width * height, a, b);

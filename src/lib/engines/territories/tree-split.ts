@@ -23,25 +23,45 @@ export function treeSplit(
 ): [number[], number[]] | null {
 	const total = units.reduce((sum, unit) => sum + load[unit], 0);
 	const place = new Map(units.map((unit, i) => [unit, i]));
-	let best: { tree: Tree; at: number; isFirst: boolean; off: number } | null = null;
-	for (let i = 0; i < TREES; i++) {
+	let best: Cut | null = null;
+	for (let i = 0; i < TREES && !(best && best.off < 0.002 * total); i++) {
 		const tree = randomTree(graph, units, place, dice);
-		const { loads, counts } = below(tree, units, load);
-		for (let at = 1; at < units.length; at++) {
-			const rest = units.length - counts[at];
-			for (const isFirst of [true, false]) {
-				const [first, second] = isFirst ? [counts[at], rest] : [rest, counts[at]];
-				if (first < least[0] || second < least[1]) continue;
-				const held = isFirst ? loads[at] : total - loads[at];
-				const off = Math.abs(held - share * total);
-				if (!best || off < best.off) best = { tree, at, isFirst, off };
-			}
-		}
-		if (best && best.off < 0.002 * total) break;
+		const cut = bestCut(tree, below(tree, units, load), share * total, least);
+		if (cut && cut.off < (best?.off ?? Infinity)) best = cut;
 	}
 	if (!best) return null;
 	const [cut, rest] = parts(best.tree, units, best.at);
 	return best.isFirst ? [cut, rest] : [rest, cut];
+}
+
+/** An edge of a tree to cut: the one above place `at`. */
+interface Cut {
+	tree: Tree;
+	at: number;
+	/** whether what is below becomes the first part */
+	isFirst: boolean;
+	/** distance of the first part's load from what it should be */
+	off: number;
+}
+
+function bestCut(
+	tree: Tree,
+	{ loads, counts }: { loads: Float64Array; counts: Int32Array },
+	wanted: number,
+	least: readonly [number, number],
+): Cut | null {
+	let best: Cut | null = null;
+	const total = loads[0];
+	for (let at = 1; at < counts.length; at++) {
+		const rest = counts.length - counts[at];
+		for (const isFirst of [true, false]) {
+			const [first, second] = isFirst ? [counts[at], rest] : [rest, counts[at]];
+			if (first < least[0] || second < least[1]) continue;
+			const off = Math.abs((isFirst ? loads[at] : total - loads[at]) - wanted);
+			if (!best || off < best.off) best = { tree, at, isFirst, off };
+		}
+	}
+	return best;
 }
 
 /** A spanning tree; `order` walks it from the root (place 0 of the order) so that parents come first. */
