@@ -28,7 +28,7 @@ describe('handing over', () => {
 		await signInAs(planner, 'planner');
 		territories = await adoptedSheet(planner);
 		list = `${territories}/handovers/1`;
-	});
+	}, 300_000);
 	afterAll(() => browser.close());
 
 	const say = (page: Page, words: string | RegExp) =>

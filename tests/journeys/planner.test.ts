@@ -67,7 +67,7 @@ describe('the planner', () => {
 		const rows = firm.rows.filter(({ code }) => !(code in known));
 		expect(rows).toHaveLength(7);
 		const bytes = await xlsx({
-			Late: [['code', 'Visits'], ...rows.map(({ code, hours }) => [code, hours])],
+			Late: [['code', 'Visits (hours a year)'], ...rows.map(({ code, hours }) => [code, hours])],
 		});
 		const late = { name: 'late.xlsx', mimeType: xlsxType, buffer: Buffer.from(bytes) };
 		await page.locator('input[type=file]').setInputFiles(late);
@@ -219,7 +219,10 @@ describe('the planner without a pointer', () => {
 		await enter(page.getByRole('link', { name: /^Proposals/ }));
 		await page.waitForURL(/proposals$/);
 		await enter(button('Even the territories out'));
-		await page.getByText(/^Moved \d+/).first().waitFor({ timeout: patience });
+		await page
+			.getByText(/^Moved \d+/)
+			.first()
+			.waitFor({ timeout: patience });
 		await enter(page.getByRole('link', { name: 'Proposal 1', exact: true }));
 		await page.waitForURL(/proposals\/1$/);
 

@@ -28,7 +28,7 @@ export async function createDatabase(): Promise<TestDatabase> {
 		db,
 		async drop() {
 			await db.destroy();
-			await onServer(server, `drop database ${name} with (force)`);
+			await removeDatabase(server, name);
 		},
 	};
 }
@@ -41,6 +41,19 @@ async function migrate(db: Db): Promise<void> {
 	const provider = { getMigrations: async () => Object.fromEntries(await Promise.all(entries)) };
 	const { error } = await new Migrator({ db, provider }).migrateToLatest();
 	if (error) throw error;
+}
+
+/** Forcing may not end the server's own housekeeping in it, which is done in a moment. */
+async function removeDatabase(server: string, name: string): Promise<void> {
+	const drop = () => onServer(server, `drop database if exists ${name} with (force)`);
+	for (let tries = 1; ; tries++) {
+		try {
+			return await drop();
+		} catch (problem) {
+			if (tries === 5) throw problem;
+			await new Promise((resume) => setTimeout(resume, 1_000 * tries));
+		}
+	}
 }
 
 async function onServer(url: string, statement: string): Promise<void> {

@@ -207,6 +207,7 @@ function territories({ sheet, territories: known }: DocketState): DocketStage[] 
 	const words = [
 		{ text: counted(known.territories, 'territory', 'territories'), to: '#list' },
 		...wrong.flatMap((part) => [{ text: ', ' }, part]),
+		{ text: '.' },
 	];
 	const mark = torn || outside ? 'error' : without ? 'warning' : 'clear';
 	return [{ ...stage, mark, words }];

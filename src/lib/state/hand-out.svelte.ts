@@ -1,6 +1,7 @@
 import type { Torn } from '$lib/engines/territories';
 import { counted } from '$lib/components/format';
 import type { TerritoryDesk } from './territories.svelte';
+import { setOf } from './set-of';
 import { amount, deviationWords, piecesOf } from './territory-words';
 
 /** What a press on a region gives it to: a territory's key, 'none' to take it away, null: it gives nothing. */
@@ -16,7 +17,7 @@ export class HandOut {
 	/** whether a drag on the sheet draws a line round regions instead of moving the sheet */
 	lasso = $state(false);
 	/** numbers of the regions selected */
-	picked: ReadonlySet<number> = $state.raw(new Set());
+	picked: ReadonlySet<number> = $state.raw(setOf<number>([]));
 	/** what the last gesture came to, for the live region and the line under the sheet */
 	said = $state('');
 
@@ -41,10 +42,10 @@ export class HandOut {
 	}
 
 	toggle(region: number) {
-		const next = new Set(this.picked);
 		const { desk } = this.#territories;
-		const gone = next.delete(region);
-		if (!gone) next.add(region);
+		const gone = this.picked.has(region);
+		const others = [...this.picked].filter((one) => one !== region);
+		const next = setOf(gone ? others : [...others, region]);
 		this.picked = next;
 		const what = gone ? 'no longer selected' : 'selected';
 		this.said = `${desk.nameOf(region)} ${what}, ${counted(next.size, 'region')} in all.`;
@@ -53,7 +54,7 @@ export class HandOut {
 	/** Adds regions to those selected. */
 	pick(regions: Iterable<number>) {
 		const before = this.picked.size;
-		this.picked = new Set([...this.picked, ...regions]);
+		this.picked = setOf([...this.picked, ...regions]);
 		const { size } = this.picked;
 		this.said =
 			size === before
@@ -63,7 +64,7 @@ export class HandOut {
 
 	clear() {
 		if (this.picked.size) this.said = 'Nothing selected.';
-		this.picked = new Set();
+		this.picked = setOf([]);
 	}
 
 	/** Hands the selected regions to the territory in the hand. */
@@ -71,7 +72,7 @@ export class HandOut {
 		const { inHand } = this;
 		if (inHand === null || !this.picked.size) return;
 		this.give([...this.picked], inHand);
-		this.picked = new Set();
+		this.picked = setOf([]);
 	}
 
 	/**
@@ -92,7 +93,7 @@ export class HandOut {
 				: `${this.#named(regions)} already with ${this.nameOf(hand)}.`;
 			return;
 		}
-		const from = new Set(moving.map((region) => territories.assignment[region]));
+		const from = setOf(moving.map((region) => territories.assignment[region]));
 		const { torn } = territories;
 		territories.give(moving, key, `give ${this.#named(moving)} to ${this.nameOf(hand)}`);
 		this.said = [this.#told(moving, to, from, torn), this.#stays(staying, key)].join(' ').trim();

@@ -10,6 +10,7 @@ import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
 import { rebaseTerritories } from './rebase-territories';
 import type { SaveDraft } from './save-draft';
+import { setOf } from './set-of';
 import type { PlanAnswer, PlanOfRegions } from './save-plan';
 import { inksByNumber, territoryBorders } from './territory-colours';
 import { countRegions, figureOf, isOutside, loadsOf } from './territory-figures';
@@ -95,7 +96,7 @@ export class TerritoryDesk {
 	measures = $derived(this.given.measures.filter(({ stale }) => !stale));
 	figures = $derived.by(() => {
 		const tolerances = this.#tolerances;
-		const ids = new Set([...Object.keys(tolerances), ...this.measuresPicked]);
+		const ids = setOf([...Object.keys(tolerances), ...this.measuresPicked]);
 		const picked = this.measures.filter(({ id }) => ids.has(id));
 		const shown = picked.length ? picked : this.measures.slice(0, 1);
 		return shown.map((measure) => figureOf(measure, tolerances[measure.id]));

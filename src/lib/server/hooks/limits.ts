@@ -6,7 +6,9 @@ import { plainAnswer } from './answer.ts';
 const MEGABYTE = 1024 * 1024;
 /** They read their body as it comes and count it themselves; a file goes straight to the disk. */
 const counted = /^\/(\(app\)\/\[team\]\/(upload|sheets\/\[sheet\]\/measures)$|api\/v1\/)/;
-const draft = '/(app)/[team]/sheets/[sheet]/draft';
+/** whole documents: a line for each region of a large sheet */
+const documents =
+	/^\/\(app\)\/\[team\]\/sheets\/\[sheet\]\/(draft|territories\/draft|territories\/proposals\/\[proposal\]\/plan)$/;
 
 /** Up to this much is let run past unread, so that the one who sends it gets to hear the answer. */
 const letPass = 16 * MEGABYTE;
@@ -30,7 +32,7 @@ const bodyLength = (request: Request): number =>
 
 function largestBody({ route }: RequestEvent): number {
 	if (counted.test(route.id ?? '')) return Infinity;
-	return route.id === draft ? 32 * MEGABYTE : MEGABYTE;
+	return documents.test(route.id ?? '') ? 32 * MEGABYTE : MEGABYTE;
 }
 
 /**
