@@ -41,14 +41,14 @@ export async function lowerBound(
 	const { program } = boundProgram(prepared, terms, prepared.units > 10_000 ? 2 : 3);
 	const { iterations, columns } = budgets[prepared.problem.effort];
 	const { cancelled } = watch;
-	watch.progress?.('bound', 0.3);
+	watch.progress?.('Finding the fewest moves any plan needs', 0.3);
 	const relaxed = { ...program, integer: new Uint8Array(program.columns) };
 	const priced = await solveProgram(relaxed, { cancelled, iterations: 2_000_000 });
 	if (priced.status !== 'optimal' && priced.status !== 'limit') return best;
 	const total = (bound: number) => lifted(bound + terms.certainCost, terms.step);
 	if (raise(total(priced.bound), 'prices') || program.columns > columns) return best;
 	if (watch.cancelled?.()) return best;
-	watch.progress?.('bound', 0.6);
+	watch.progress?.('Finding the fewest moves any plan needs', 0.6);
 	const whole = await solveProgram(program, { cancelled, iterations, nodes: 10_000 });
 	if (whole.status === 'optimal' || whole.status === 'limit') {
 		raise(total(whole.bound), 'an integer program');
