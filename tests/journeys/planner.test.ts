@@ -190,7 +190,7 @@ describe('the planner', () => {
 		await page.waitForURL(/proposals\/1$/);
 		await press(page, 'Adopt this proposal');
 		await told(page, 'It was adopted');
-		expect(await docket(page, 'Territories').innerText()).toContain('13 territories');
+		await expect.poll(() => docket(page, 'Territories').innerText()).toContain('13 territories');
 		await page.getByRole('link', { name: 'Hand the moves over' }).click();
 		await page.getByLabel('Effective date').fill('2099-01-01');
 		await press(page, 'Make the list');

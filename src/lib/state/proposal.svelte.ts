@@ -13,8 +13,12 @@ export interface ProposalStart {
 	keeper: Keeper<PlanOfRegions> | null;
 }
 
-/** A proposal open on the desk: its plan with undo, saved by itself, and what the server says of it. */
-export class ProposalDesk {
+/**
+ * A proposal open on the desk: its plan with undo, saved by itself, and what the server says of it. The
+ * sheet shows it as it stands: adopting it takes territories off today's list, and their numbers here
+ * must never be older than that list.
+ */
+export class ProposalDesk implements PlanOnShow {
 	given: DeskProposal = $state.raw()!;
 	/** as the server last judged it */
 	note: ProposalNote = $state.raw()!;
@@ -71,16 +75,13 @@ export class ProposalDesk {
 		return open && !this.note.stale && this.territories.desk.may('territories.edit');
 	}
 
-	/** What the sheet shows of it. */
-	get onShow(): PlanOnShow {
-		return {
-			name: this.note.name,
-			assignment: this.assignment,
-			inks: this.inks,
-			before: this.before,
-			draft: this.draft,
-			give: this.mayEdit ? (regions, key, label) => this.#give(regions, key, label) : null,
-		};
+	get name(): string {
+		return this.note.name;
+	}
+
+	/** null while it can only be looked at */
+	get give(): PlanOnShow['give'] {
+		return this.mayEdit ? (regions, key, label) => this.#give(regions, key, label) : null;
 	}
 
 	/** The page was loaded again: it was adopted, named, checked against newer figures. */
