@@ -141,9 +141,7 @@ export class Desk {
 
 	/** the draft that undo, redo and saving speak of */
 	get inHand():
-		| DraftState<Draft, DraftSaved>
-		| TerritoryDesk['draft']
-		| NonNullable<PlanOnShow['draft']> {
+		DraftState<Draft, DraftSaved> | TerritoryDesk['draft'] | NonNullable<PlanOnShow['draft']> {
 		return this.planning?.proposal?.draft ?? this.planning?.draft ?? this.draft;
 	}
 
