@@ -51,8 +51,11 @@ describe.each(roles)('as %s', (role) => {
 	});
 
 	it.each(ways)('%s %s', async (path, entry, action) => {
-		const { status } = await knock(visitor, path, entry);
-		if (allows([role], action)) expect([401, 403, 500]).not.toContain(status);
+		const may = allows([role], action);
+		// of a page on a sheet that is not there, its layout says so first
+		const place = !may && entry === 'load' ? path.replace('[sheet]', '1') : path;
+		const { status } = await knock(visitor, place, entry);
+		if (may) expect([401, 403, 500]).not.toContain(status);
 		else expect(status).toBe(403);
 	});
 });
