@@ -1,3 +1,5 @@
+import type { MendOffer } from './mends/mend.ts';
+
 /**
  * Something noted about a boundary file, with its place where there is one.
  * `code` is stable and machine-readable (see the API description); `message` is a plain sentence.
@@ -10,4 +12,6 @@ export interface Finding {
 	regions: string[];
 	/** longitude and latitude in degrees, or null */
 	at: [number, number] | null;
+	/** ways to mend it; absent where there is none */
+	offers?: MendOffer[];
 }

@@ -4,6 +4,8 @@ export type { BoundariesResult, SourceNote } from './result.ts';
 export type { BoundaryOptions, ByteSource, Limits, Watch } from './options.ts';
 export type { RefusalCode } from './refusal.ts';
 export type { Finding } from './finding.ts';
+export type { Mend, MendOffer } from './mends/mend.ts';
+export type { Choice, Found, FoundLayer, Question, Sketch } from './question.ts';
 export type { Coverage } from './coverage.ts';
 export { coverageFaults } from './faults.ts';
 export { encodeCoverage, decodeCoverage } from './codec.ts';

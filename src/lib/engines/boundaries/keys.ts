@@ -14,6 +14,9 @@ export interface Naming {
 	/** first feature of each region */
 	featureOf: number[];
 	findings: Finding[];
+	/** the column the keys are from, `id` for the features' own, null for record numbers */
+	keyField: string | null;
+	nameField: string | null;
 }
 
 /**
@@ -26,8 +29,8 @@ export function nameRegions(
 	kept: boolean[],
 	options: BoundaryOptions,
 ): Naming {
-	const wanted = featureKeys(table, kept, options.keyField);
-	const names = featureNames(table, options.nameField);
+	const { wanted, keyField } = featureKeys(table, kept, options.keyField);
+	const { names, nameField } = featureNames(table, options.nameField);
 	const naming: Naming = {
 		wanted,
 		keys: [],
@@ -35,6 +38,8 @@ export function nameRegions(
 		regionOf: new Int32Array(kept.length).fill(-1),
 		featureOf: [],
 		findings: [],
+		keyField,
+		nameField,
 	};
 	const known = new Map<string, number>();
 	const doubles = new Set<string>();
@@ -60,17 +65,26 @@ export function nameRegions(
 	return naming;
 }
 
-function featureKeys(table: AttributeTable, kept: boolean[], keyField?: string): string[] {
-	if (keyField !== undefined && keyField !== 'id') return columnKeys(table, kept, keyField);
-	if (keyField === 'id' && table.columns.includes('id') && !hasIds(table, kept)) {
-		return columnKeys(table, kept, 'id');
+function featureKeys(table: AttributeTable, kept: boolean[], asked?: string): Wanted {
+	if (asked !== undefined && asked !== 'id') {
+		return { wanted: columnKeys(table, kept, asked), keyField: asked };
 	}
-	if (keyField === 'id' || hasIds(table, kept)) {
-		return table.ids.map((id, f) => keyText(id) ?? absent(kept, f, 'id'));
+	if (asked === 'id' && table.columns.includes('id') && !hasIds(table, kept)) {
+		return { wanted: columnKeys(table, kept, 'id'), keyField: 'id' };
+	}
+	if (asked === 'id' || hasIds(table, kept)) {
+		const wanted = table.ids.map((id, f) => keyText(id) ?? absent(kept, f, 'id'));
+		return { wanted, keyField: 'id' };
 	}
 	const column = table.columns.findIndex((_, c) => isUnique(table, kept, c));
-	if (column < 0) return table.rows.map((_, f) => String(f + 1));
-	return table.rows.map((row) => keyText(row[column] ?? null) ?? '');
+	if (column < 0) return { wanted: table.rows.map((_, f) => String(f + 1)), keyField: null };
+	const wanted = table.rows.map((row) => keyText(row[column] ?? null) ?? '');
+	return { wanted, keyField: table.columns[column] };
+}
+
+interface Wanted {
+	wanted: string[];
+	keyField: string | null;
 }
 
 const hasIds = (table: AttributeTable, kept: boolean[]) =>
@@ -103,14 +117,15 @@ function isUnique(table: AttributeTable, kept: boolean[], column: number): boole
 	return true;
 }
 
-function featureNames(table: AttributeTable, nameField?: string): (string | null)[] {
-	const wanted = nameField ?? table.columns.find((c) => /^(name|naam|nom|nombre|navn)$/i.test(c));
+function featureNames(table: AttributeTable, asked?: string) {
+	const wanted = asked ?? table.columns.find((c) => /^(name|naam|nom|nombre|navn)$/i.test(c));
 	const column = wanted === undefined ? -1 : table.columns.indexOf(wanted);
-	if (nameField !== undefined && column < 0) {
-		const message = `There is no column "${nameField}". The columns are: ${table.columns.join(', ')}.`;
+	if (asked !== undefined && column < 0) {
+		const message = `There is no column "${asked}". The columns are: ${table.columns.join(', ')}.`;
 		throw new Refusal('duplicate-keys', message);
 	}
-	return table.rows.map((row) => keyText(row[column] ?? null));
+	const names = table.rows.map((row) => keyText(row[column] ?? null));
+	return { names, nameField: column < 0 ? null : table.columns[column] };
 }
 
 /** A key as text: numbers as plain decimals, never with an exponent; empty text is no key. */

@@ -1,3 +1,5 @@
+import type { Mend } from './mends/mend.ts';
+
 /** Bytes to read, from a file on disk, a browser's file or memory. */
 export interface ByteSource {
 	name: string;
@@ -22,6 +24,8 @@ export interface BoundaryOptions {
 	/** pairs across water (or any gap) up to this width are borders; none unless given */
 	acrossWaterKm?: number;
 	duplicateKeys?: 'refuse' | 'merge' | 'rename';
+	/** replayed in this order once the regions are named */
+	mends?: Mend[];
 	limits?: Partial<Limits>;
 }
 

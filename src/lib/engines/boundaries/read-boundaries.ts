@@ -12,6 +12,7 @@ import type { RawLayer } from './raw-layer.ts';
 import { Cancelled, Refusal } from './refusal.ts';
 import { reproject } from './reproject.ts';
 import type { BoundariesResult } from './result.ts';
+import { foundIn } from './found.ts';
 import { readLayer } from './readers/index.ts';
 import { crossingFinding, ringFindings } from './ring-findings.ts';
 import { surveyFindings } from './survey-findings.ts';
@@ -36,8 +37,8 @@ export async function readBoundaries(
 	} catch (error) {
 		if (error instanceof Cancelled) return { status: 'cancelled' };
 		if (!(error instanceof Refusal)) throw error;
-		const { code, message, findings } = error;
-		return { status: 'refused', code, message, findings };
+		const { code, message, findings, question } = error;
+		return { status: 'refused', code, message, findings, question };
 	}
 }
 
@@ -75,5 +76,6 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 			features: layer.regions,
 			toleranceMetres: options.toleranceMetres ?? noiseMetres,
 		},
+		found: foundIn(layer, crs, naming),
 	};
 }

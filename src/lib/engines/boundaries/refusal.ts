@@ -1,4 +1,5 @@
 import type { Finding } from './finding.ts';
+import type { Question } from './question.ts';
 
 /** Codes by which a file is refused; see the API description. */
 export type RefusalCode =
@@ -23,6 +24,8 @@ export class Refusal extends Error {
 		readonly code: RefusalCode,
 		message: string,
 		readonly findings: Finding[] = [],
+		/** when an answer would let the file be read */
+		readonly question: Question | null = null,
 	) {
 		super(message);
 	}

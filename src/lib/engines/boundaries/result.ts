@@ -2,6 +2,7 @@ import type { BorderList } from '../borders/border-list.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import type { Cell } from './attribute-table.ts';
 import type { Finding } from './finding.ts';
+import type { Found, Question } from './question.ts';
 import type { RefusalCode } from './refusal.ts';
 
 export interface SourceNote {
@@ -23,6 +24,15 @@ export type BoundariesResult =
 			attributes: { columns: string[]; rows: Cell[][] };
 			findings: Finding[];
 			source: SourceNote;
+			/** what was recognised, with the other layers and columns that could have been taken */
+			found: Found;
 	  }
-	| { status: 'refused'; code: RefusalCode; message: string; findings: Finding[] }
+	| {
+			status: 'refused';
+			code: RefusalCode;
+			message: string;
+			findings: Finding[];
+			/** when an answer would let the file be read */
+			question: Question | null;
+	  }
 	| { status: 'cancelled' };
