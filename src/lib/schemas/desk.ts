@@ -1,5 +1,7 @@
 import type { BorderList } from '../engines/borders/border-list.ts';
 import type { Finding } from '../engines/boundaries/finding.ts';
+import type { Mend } from '../engines/boundaries/mends/mend.ts';
+import type { Found, Question } from '../engines/boundaries/question.ts';
 import type { Explanation, Proof } from '../engines/colouring/problem.ts';
 import type { Draft } from '../engines/editions/draft.ts';
 import type { Action } from '../server/access/roles.ts';
@@ -44,6 +46,12 @@ export interface DeskBoundarySet {
 	planarWitness: PlanarWitness | null;
 	source: SourceNote;
 	columns: string[];
+	/** what was recognised in the file; null for sets read before it was kept */
+	found: Found | null;
+	/** the mends that were replayed when it was read */
+	mends: Mend[];
+	/** how far across water the gaps have been measured, in kilometres */
+	gapsKm: number;
 }
 
 /** Regions that no plane drawing can join as their borders do: `paths` run from hub to hub. */
@@ -144,7 +152,7 @@ export interface IntakeStatus {
 	fileName: string;
 	fileBytes: number;
 	sheetName: string;
-	state: 'waiting' | 'reading' | 'done' | 'refused' | 'cancelled' | 'failed';
+	state: 'waiting' | 'reading' | 'asking' | 'done' | 'refused' | 'cancelled' | 'failed';
 	/** what is being done, in words */
 	step: string;
 	/** 0 to 1 */
@@ -156,4 +164,18 @@ export interface IntakeStatus {
 	refusal: { code: string; message: string; findings: Finding[] } | null;
 	/** number of the sheet, when done */
 	sheet: number | null;
+	/** what the reader cannot know, while the state is `asking` */
+	question: Question | null;
+	/** earlier answers that were taken for this file too */
+	remembered: RememberedAnswer[];
+}
+
+/** What a member of the team answered about a file that looked the same. */
+export interface RememberedAnswer {
+	about: 'layer' | 'crs' | 'axes' | 'keys' | 'columns';
+	/** what was answered, in words: `EPSG:25832`, `layer districts` */
+	words: string;
+	fileName: string;
+	answeredBy: string | null;
+	answeredAt: string;
 }

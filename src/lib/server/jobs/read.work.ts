@@ -5,6 +5,8 @@ import {
 	type BoundaryOptions,
 	type Coverage,
 	type Finding,
+	type Found,
+	type Question,
 } from '../../engines/boundaries/index.ts';
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
@@ -27,7 +29,13 @@ export interface ReadInput {
 }
 
 export type ReadOutcome =
-	| { status: 'refused'; code: string; message: string; findings: Finding[] }
+	| {
+			status: 'refused';
+			code: string;
+			message: string;
+			findings: Finding[];
+			question: Question | null;
+	  }
 	| {
 			status: 'accepted';
 			columns: BoundaryColumns;
@@ -35,6 +43,7 @@ export type ReadOutcome =
 			geometry: Uint8Array;
 			attributeColumns: string[];
 			source: SourceNote;
+			found: Found;
 			planar: boolean;
 			planarWitness: PlanarityNote['witness'];
 			draft: Draft;
@@ -58,7 +67,7 @@ type Accepted = Extract<BoundariesResult, { status: 'accepted' }>;
 
 async function prepare(
 	input: ReadInput,
-	{ coverage, borders, attributes, findings, source }: Accepted,
+	{ coverage, borders, attributes, findings, source, found }: Accepted,
 	tell: (step: string, share: number) => void,
 ): Promise<ReadOutcome> {
 	tell('Judging whether the map is planar', 0.86);
@@ -73,6 +82,7 @@ async function prepare(
 		geometry: encodeCoverage(coverage),
 		attributeColumns: attributes.columns,
 		source,
+		found,
 		planar,
 		planarWitness: witness,
 		draft,

@@ -1,4 +1,5 @@
 import { sql } from 'kysely';
+import type { MendOffer } from '../../engines/boundaries/index.ts';
 import type { Db } from '../database/connection.ts';
 import type { NewRow, Row } from '../database/schema.ts';
 
@@ -28,6 +29,7 @@ export interface BoundaryColumns {
 		message: string;
 		regions: string[];
 		at: [number, number] | null;
+		offers?: MendOffer[];
 	}[];
 }
 
@@ -84,8 +86,9 @@ async function insertFindings(
 	id: string,
 	findings: BoundaryColumns['findings'],
 ): Promise<void> {
-	const rows = findings.map(({ at, ...finding }) => ({
+	const rows = findings.map(({ at, offers, ...finding }) => ({
 		...finding,
+		offers: offers ? JSON.stringify(offers) : null,
 		boundary_set_id: id,
 		lon: at?.[0] ?? null,
 		lat: at?.[1] ?? null,
@@ -106,6 +109,9 @@ const noteColumns = [
 	'region_count',
 	'planar',
 	'planar_witness',
+	'found',
+	'options',
+	'gaps_km',
 	'created_by',
 	'created_at',
 ] as const;

@@ -76,6 +76,8 @@ const storeBoundaries = (trx: Trx, intake: Intake, read: Accepted): Promise<stri
 			region_count: read.columns.regions.key.length,
 			geometry: Buffer.from(read.geometry),
 			planar: read.planar,
+			found: JSON.stringify(read.found),
+			options: JSON.stringify(intake.options),
 			planar_witness: read.planarWitness && JSON.stringify(read.planarWitness),
 			created_by: intake.created_by,
 		},

@@ -172,4 +172,6 @@ const statusOf = (row: IntakeRow): IntakeStatus => ({
 	createdBy: personName(row),
 	refusal: row.refusal as IntakeStatus['refusal'],
 	sheet: row.sheet_number,
+	question: row.question as unknown as IntakeStatus['question'],
+	remembered: (row.remembered ?? []) as unknown as IntakeStatus['remembered'],
 });

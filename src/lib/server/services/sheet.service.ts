@@ -97,6 +97,9 @@ const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
 	planarWitness: set.planar_witness as DeskSheet['boundarySet']['planarWitness'],
 	source: set.source as unknown as SourceNote,
 	columns: set.columns,
+	found: set.found as unknown as DeskSheet['boundarySet']['found'],
+	mends: (set.options.mends ?? []) as DeskSheet['boundarySet']['mends'],
+	gapsKm: set.gaps_km,
 });
 
 /** The level above of every region, by the column that names it. */
@@ -118,6 +121,7 @@ async function findingsOf(db: Db, boundarySetId: string): Promise<DeskFinding[]>
 		message: row.message,
 		regions: row.regions,
 		at: row.lon === null || row.lat === null ? null : [row.lon, row.lat],
+		...(row.offers && { offers: row.offers as DeskFinding['offers'] }),
 		acceptedBy: personName({ by_name: row.accepted_name, by_email: row.accepted_email }),
 		acceptedAt: row.accepted_at?.toISOString() ?? null,
 	}));
