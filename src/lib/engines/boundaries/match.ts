@@ -15,6 +15,8 @@ export interface Matched {
 	coverage: Coverage;
 	survey: Survey;
 	holes: Hole[];
+	/** the outlines it was cut from */
+	noded: Noded;
 	findings: Finding[];
 }
 
@@ -41,11 +43,11 @@ export function matchOutlines(
 	const tolerance = options.toleranceMetres ?? noiseMetres;
 	const findings = joinedFinding(noded.joined, keys);
 	const first = cut(noded, keys, names, options);
-	if (tolerance <= noiseMetres) return { ...first, holes: first.holes(), findings };
+	if (tolerance <= noiseMetres) return { ...first, holes: first.holes(), noded, findings };
 
 	noded.joined = { regions: new Set(), places: 0, at: null };
 	const joined = joinWithin(noded, tolerance, keys);
-	if (joined === noded) return { ...first, holes: first.holes(), findings };
+	if (joined === noded) return { ...first, holes: first.holes(), noded, findings };
 	settleParallel(joined.segments);
 	const vanished = withoutSegments(joined, keys.length);
 	if (vanished.length) return { vanished };
@@ -54,7 +56,18 @@ export function matchOutlines(
 		...toleranceFinding(joined.joined, keys, tolerance),
 		...gainedAndLost(first.survey.borders, after.survey.borders, keys, tolerance),
 	);
-	return { ...after, holes: after.holes(), findings };
+	return { ...after, holes: after.holes(), noded: joined, findings };
+}
+
+/** Noded outlines -> coverage, borders and holes, with nothing more joined. */
+export function matchNoded(
+	noded: Noded,
+	keys: string[],
+	names: string[],
+	options: Options,
+): Matched {
+	const after = cut(noded, keys, names, options);
+	return { ...after, holes: after.holes(), noded, findings: [] };
 }
 
 function cut(noded: Noded, keys: string[], names: string[], options: Options) {
@@ -81,3 +94,7 @@ export function withoutSegments({ segments }: Noded, regions: number): number[] 
 	}
 	return [...has.keys()].filter((r) => !has[r]);
 }
+
+/** The region of a segment that has one on one side only. */
+export const regionOfSegment = ({ left, right }: Noded['segments'], s: number) =>
+	Math.max(left[s], right[s]);

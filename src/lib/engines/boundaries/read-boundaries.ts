@@ -1,6 +1,7 @@
-import { holeFindings } from './hole-findings.ts';
+import { faultFindings } from './fault-findings.ts';
 import { placeLongitudes } from './longitudes.ts';
 import { matchLayer } from './match-layer.ts';
+import { mendLayer } from './mends/mend-layer.ts';
 import {
 	defaultLimits,
 	noiseMetres,
@@ -15,7 +16,6 @@ import type { BoundariesResult } from './result.ts';
 import { foundIn } from './found.ts';
 import { readLayer } from './readers/index.ts';
 import { crossingFinding, ringFindings } from './ring-findings.ts';
-import { surveyFindings } from './survey-findings.ts';
 
 /**
  * Reads a boundary file into a coverage, its borders, the attribute table and what there was to note.
@@ -33,7 +33,7 @@ export async function readBoundaries(
 	try {
 		const limits = { ...defaultLimits, ...options.limits };
 		const layer = await readLayer(source, { ...options, limits }, watch);
-		return assemble(layer, options, watch);
+		return await assemble(layer, options, watch);
 	} catch (error) {
 		if (error instanceof Cancelled) return { status: 'cancelled' };
 		if (!(error instanceof Refusal)) throw error;
@@ -42,7 +42,11 @@ export async function readBoundaries(
 	}
 }
 
-function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): BoundariesResult {
+async function assemble(
+	layer: RawLayer,
+	options: BoundaryOptions,
+	watch: Watch,
+): Promise<BoundariesResult> {
 	const stage = (message: string, share: number) => {
 		if (watch.cancelled?.()) throw new Cancelled();
 		watch.progress?.(message, share);
@@ -51,8 +55,11 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 	const crs = reproject(layer, options);
 	const { west, crossing } = placeLongitudes(layer);
 	stage('Matching the outlines', 0.6);
-	const { naming, repairs, matched, findings } = matchLayer(layer, west, options, stage);
+	const read = matchLayer(layer, west, options, stage);
+	const mended = options.mends?.length ? await mendLayer(read, options, stage) : null;
+	const { naming, matched } = mended ?? read;
 	const { coverage, survey } = matched;
+	const toleranceMetres = options.toleranceMetres ?? noiseMetres;
 	return {
 		status: 'accepted',
 		coverage,
@@ -61,12 +68,12 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 		findings: [
 			...layer.findings,
 			...naming.findings,
-			...findings,
+			...read.findings,
 			...crossingFinding(crossing, naming),
-			...ringFindings(repairs, naming, layer.format),
-			...matched.findings,
-			...surveyFindings(survey, coverage.keys),
-			...holeFindings(matched.holes, coverage.keys),
+			...ringFindings(read.repairs, naming, layer.format),
+			...read.matched.findings,
+			...(mended?.findings ?? []),
+			...faultFindings(matched, toleranceMetres),
 		],
 		source: {
 			format: layer.format,
@@ -74,7 +81,7 @@ function assemble(layer: RawLayer, options: BoundaryOptions, watch: Watch): Boun
 			crs,
 			encoding: layer.encoding,
 			features: layer.regions,
-			toleranceMetres: options.toleranceMetres ?? noiseMetres,
+			toleranceMetres,
 		},
 		found: foundIn(layer, crs, naming),
 	};

@@ -5,6 +5,7 @@ import type {
 	SheetRow,
 	SourceNote,
 } from '../../schemas/desk.ts';
+import type { BoundaryOptions } from '../../engines/boundaries/index.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
@@ -89,6 +90,14 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 export const rightsOf = (member: Member): Action[] =>
 	actions.filter((action) => mayDo(member, action));
 
+/** How a set was read: what was said about the file, and its mends apart. */
+function recipeOf({
+	options,
+}: BoundaryView['set']): Pick<DeskSheet['boundarySet'], 'options' | 'mends'> {
+	const { mends = [], limits: _, ...fields } = options as BoundaryOptions;
+	return { options: fields, mends };
+}
+
 const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
 	id: set.id,
 	fileName: set.file_name,
@@ -98,7 +107,7 @@ const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
 	source: set.source as unknown as SourceNote,
 	columns: set.columns,
 	found: set.found as unknown as DeskSheet['boundarySet']['found'],
-	mends: (set.options.mends ?? []) as DeskSheet['boundarySet']['mends'],
+	...recipeOf(set),
 	gapsKm: set.gaps_km,
 });
 
