@@ -40,22 +40,26 @@ export function settle(step: Step<'settle'>, bench: Bench): Outcome {
 
 /** Cuts outlines that cross themselves into parts that do not. */
 export function untangle({ key }: Step<'untangle'>, bench: Bench): Outcome {
-	const { draft, clip } = bench;
+	const { draft } = bench;
 	const region = draft.region(key);
 	if (region === null) return never(`there is no region ${key} any more`);
 	const found = draft.matched.survey.crossings.find((one) => one.region === region);
 	if (!found) return { why: `the outline of ${key} does not cross itself`, later: true };
-	const before = draft.parts(region);
-	const spent = spend(bench, pointsIn(before));
-	if (spent) return never(spent);
-	if (crossesTooOften(before, mostCrossings)) return never(tangled);
-	const parts = clip.untangled(before);
-	if (parts === null) return never('the outlines could not be cut');
+	const parts = unite(draft.parts(region), bench);
+	if (typeof parts === 'string') return never(parts);
 	if (parts.length === 0) return never(`nothing would be left of ${key}`);
 	draft.redraw(region, parts);
 	draft.shrunk.add(region);
 	const done = `Cut the outline of ${key} where it crossed itself: ${countOf(parts)}, ${areaText(partsKm2(parts))} in all.`;
 	return { done, at: found.at, regions: [key] };
+}
+
+/** Parts that neither cross themselves nor lie on each other, or why there are none. */
+export function unite(parts: Part[], bench: Bench): Part[] | string {
+	const spent = spend(bench, pointsIn(parts));
+	if (spent) return spent;
+	if (crossesTooOften(parts, mostCrossings)) return tangled;
+	return bench.clip.untangled(parts) ?? 'the outlines could not be cut';
 }
 
 const tangled = `outlines that cross in more than ${mostCrossings} places are not cut`;
