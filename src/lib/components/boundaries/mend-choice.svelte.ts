@@ -38,7 +38,9 @@ export class MendChoice {
 			const offer = this.#offer(finding);
 			return offer ? [JSON.stringify(offer.mend)] : [];
 		});
-		return [...new Set(texts)].map((text) => JSON.parse(text) as Mend);
+		return texts
+			.filter((text, at) => texts.indexOf(text) === at)
+			.map((text) => JSON.parse(text) as Mend);
 	}
 
 	#offer(finding: DeskFinding): MendOffer | null {

@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import type { DeskFinding } from '$lib/schemas/desk';
-import { joinMetres } from './finding-words';
 import { kindsOfMend, MendChoice } from './mend-choice.svelte';
 
 const sliver = (id: number, into: string): DeskFinding => ({
@@ -34,16 +33,5 @@ describe('ticking mends', () => {
 		const choice = new MendChoice();
 		choice.chooseUsual(twice);
 		expect(choice.mends(twice)).toHaveLength(1);
-	});
-});
-
-describe('the tolerance that a finding speaks of', () => {
-	it.each([
-		['unmatched-borders', 'Borders up to 6.4 m apart lie along each other.', 7],
-		['unmatched-borders', 'Borders up to 25 cm apart lie along each other.', 0.3],
-		['overlap', 'Regions up to 6 m apart overlap.', null],
-		['unmatched-borders', 'Borders lie along each other.', null],
-	])('%s: %s', (code, message, metres) => {
-		expect(joinMetres({ code, message })).toBe(metres);
 	});
 });
