@@ -81,6 +81,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			file_bytes bigint not null,
 			file_digest text,
 			options jsonb not null default '{}',
+			-- what it does, in one sentence
+			words text not null,
 			step text not null default '',
 			share double precision not null default 0,
 			attempts integer not null default 0,

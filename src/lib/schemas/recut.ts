@@ -88,6 +88,8 @@ export interface RecutGroup {
 	by: 'key' | 'area' | 'hand';
 	/** why somebody should look at it; null when it is sure */
 	doubt: string | null;
+	/** what happened, in plain sentences */
+	words: string;
 }
 
 export interface RecutRegion {
@@ -108,6 +110,7 @@ export interface PairChange {
 }
 
 export interface CarriedRow {
+	stage: 'draft' | 'territories' | 'measures';
 	/** a lock, a forbidden ink, a base, a measure ... */
 	what: string;
 	/** the old regions that it named, and the new ones that have it now */

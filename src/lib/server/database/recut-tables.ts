@@ -68,6 +68,7 @@ export interface RecutTable {
 	file_bytes: Whole;
 	file_digest: string | null;
 	options: JSONColumnType<Record<string, unknown>, string | undefined, string>;
+	words: string;
 	step: Generated<string>;
 	share: Generated<number>;
 	attempts: Generated<number>;

@@ -48,6 +48,7 @@ const noteColumns = [
 	'recuts.file_bytes',
 	'recuts.file_digest',
 	'recuts.options',
+	'recuts.words',
 	'recuts.step',
 	'recuts.share',
 	'recuts.created_at',
@@ -124,6 +125,7 @@ type Change = Partial<
 		| 'to_set'
 		| 'file_digest'
 		| 'options'
+		| 'words'
 		| 'attempts'
 		| 'decisions'
 		| 'applied_by'

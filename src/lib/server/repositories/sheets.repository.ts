@@ -194,3 +194,12 @@ export const findDraft = (db: Db, sheetId: string, revision: number) =>
 		.executeTakeFirst();
 export type DraftRow = NonNullable<Awaited<ReturnType<typeof findDraft>>>;
 export type SheetRecord = Row<'sheets'>;
+
+/** Gives a sheet other boundaries. The caller holds the sheet, and adds a draft about them. */
+export async function giveBoundaries(trx: Db, id: string, setId: string): Promise<void> {
+	await trx
+		.updateTable('sheets')
+		.set({ boundary_set_id: setId, updated_at: sql`now()` })
+		.where('id', '=', id)
+		.execute();
+}

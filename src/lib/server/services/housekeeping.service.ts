@@ -3,7 +3,8 @@ import { fileStore, type FileStore } from '../files/index.ts';
 import { log } from '../log.ts';
 import { removeOldUses } from '../repositories/limits.repository.ts';
 import { removeExpired } from '../repositories/sessions.repository.ts';
-import { endUnanswered } from './intake-answer.service.ts';
+import { daysToAnswer, endUnanswered } from './intake-answer.service.ts';
+import { endUnansweredRecuts } from './recut-work.service.ts';
 
 const EVERY_MINUTES = 15;
 
@@ -12,6 +13,7 @@ export async function tidy(db: Db = database(), files: FileStore = fileStore()):
 	await removeExpired(db);
 	await removeOldUses(db);
 	await endUnanswered(db, files);
+	await endUnansweredRecuts(db, files, daysToAnswer);
 }
 
 /** Tidies now and then. @returns ends it */

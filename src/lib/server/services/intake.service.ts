@@ -98,7 +98,7 @@ async function enter(shop: Workshop, member: Member, form: ReceivedForm): Promis
 const nameOfFile = (fileName: string) =>
 	fileName.replace(/(\.(geo|topo)?json|\.zip|\.shp)+$/i, '').replace(/[_]+/g, ' ') || fileName;
 
-const unfitFields = (issues: readonly { path: PropertyKey[]; message: string }[]) =>
+export const unfitFields = (issues: readonly { path: PropertyKey[]; message: string }[]) =>
 	new Unfit('malformed', 'some fields of the form were not understood', {
 		issues: issues.map(({ path, message }) => ({ field: path.join('.'), message })),
 	});

@@ -66,13 +66,16 @@ export interface MatchLinks {
 
 /** Where the lines are drawn. No published rule says where: the figures are our choice. */
 export interface Thresholds {
-	/** from this share of either region's area in common, the new one goes on from the old one */
+	/**
+	 * from this share of either region's area in common, the new one goes on from the old one; and so it
+	 * does with the same key
+	 */
 	half: number;
 	/** from this share of both areas in common, a match is sure */
 	sure: number;
-	/** less than this share of both areas is a border drawn a little otherwise, and is not listed */
+	/** what is less than this share of both areas is a border drawn a little otherwise, and not listed */
 	mention: number;
-	/** area that may differ, as a share, where an outline counts as not changed: a corner more on a line */
+	/** share of the area that may differ where an outline counts as not changed, as by one more corner on a line */
 	unchanged: number;
 }
 
