@@ -25,7 +25,7 @@ export function outlinesOf(
 ): { outlines: Outlines; repairs: RingRepairs } {
 	const points = layer.points.items;
 	const total = layer.points.length / 2;
-	const table = new VertexTable(west, Math.ceil(total * 0.6));
+	const table = new VertexTable(west, Math.ceil(total * 0.6), typicalStep(points, total));
 	const ringVertices = new Uint32Array(total);
 	const ringStarts: number[] = [];
 	const ringRegion: number[] = [];
@@ -85,6 +85,17 @@ export function* eachRing(layer: RawLayer) {
 			}
 		}
 	}
+}
+
+/** The middle one of the distances between points that follow each other, from a thousand of them. */
+function typicalStep(points: Float64Array, total: number): number {
+	const steps: number[] = [];
+	for (let i = 1; i < total; i += 1 + Math.floor(total / 1000)) {
+		const east = Math.abs(points[2 * i] - points[2 * i - 2]);
+		steps.push(Math.max(east, Math.abs(points[2 * i + 1] - points[2 * i - 1])));
+	}
+	steps.sort((a, b) => a - b);
+	return steps[steps.length >> 1] ?? 0;
 }
 
 function isClosed(points: Float64Array, from: number, to: number): boolean {
