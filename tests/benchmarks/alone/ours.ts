@@ -1,4 +1,7 @@
-import { readBoundaries, type BoundariesResult } from '../../../src/lib/engines/boundaries/index.ts';
+import {
+	readBoundaries,
+	type BoundariesResult,
+} from '../../../src/lib/engines/boundaries/index.ts';
 import { fileSource } from '../../../src/lib/server/jobs/file-source.ts';
 import { fractalNeighbours, type FractalLand } from '../../support/fractal-land.ts';
 import { peakMegabytes } from './peak.ts';

@@ -21,11 +21,14 @@ export class RawLayer {
 	layer: string | null = null;
 	findings: Finding[] = [];
 
+	private mostNumbers: number;
+
 	constructor(
 		private limits: Limits,
 		expectedPoints = 1024,
 	) {
 		this.points = new GrowingFloats(2 * expectedPoints);
+		this.mostNumbers = 2 * limits.points;
 	}
 
 	get regions(): number {
@@ -48,7 +51,7 @@ export class RawLayer {
 	}
 	point(x: number, y: number): void {
 		this.points.push2(x, y);
-		if (this.points.length > 2 * this.limits.points) {
+		if (this.points.length > this.mostNumbers) {
 			throw new Refusal(
 				'too-large-unpacked',
 				`The file has more than ${this.limits.points} points, which is the most this reader takes.`,

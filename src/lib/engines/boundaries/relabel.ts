@@ -17,6 +17,9 @@ export function relabel(noded: Noded, regionOf: Int32Array, regions: number): No
 
 function ringsOfRegions(outlines: Outlines, regionOf: Int32Array, regions: number): Outlines {
 	const { ringVertices, ringStarts, ringRegion } = outlines;
+	if (ringRegion.every((feature) => regionOf[feature] >= 0)) {
+		return { ...outlines, regions, ringRegion: ringRegion.map((feature) => regionOf[feature]) };
+	}
 	const vertices = new Uint32Array(ringVertices.length);
 	const starts = new Uint32Array(ringStarts.length);
 	const owners = new Uint32Array(ringRegion.length);

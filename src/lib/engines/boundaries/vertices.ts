@@ -54,11 +54,7 @@ export class VertexTable {
 		if (k > 0 && positions[k - 2] === lon && positions[k - 1] === lat) {
 			return (this.previous = previous - 1);
 		}
-		if (
-			previous + 1 < this.count &&
-			positions[k + 2] === lon &&
-			positions[k + 3] === lat
-		) {
+		if (previous + 1 < this.count && positions[k + 2] === lon && positions[k + 3] === lat) {
 			return (this.previous = previous + 1);
 		}
 		return (this.previous = this.hashed(lon, lat));
