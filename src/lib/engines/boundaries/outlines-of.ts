@@ -16,12 +16,11 @@ export interface RingRepairs {
 /**
  * Takes the rings over: closes them, drops repeated vertices, leaves out those without area, and turns
  * them so that their region is on the left (outer rings anticlockwise, holes clockwise).
- * Each feature is taken for a region of its own; those not in `kept` are left out.
+ * Each feature is taken for a region of its own. The layer's points are not needed afterwards.
  */
 export function outlinesOf(
 	layer: RawLayer,
 	west: number,
-	kept: boolean[],
 ): { outlines: Outlines; repairs: RingRepairs } {
 	const points = layer.points.items;
 	const total = layer.points.length / 2;
@@ -37,7 +36,6 @@ export function outlinesOf(
 	};
 	let used = 0;
 	for (const ring of eachRing(layer)) {
-		if (!kept[ring.feature]) continue;
 		if (!isClosed(points, ring.from, ring.to)) repairs.closed.add(ring.feature);
 		const start = used;
 		for (let i = ring.from; i < ring.to; i++) {

@@ -58,6 +58,10 @@ export class RawLayer {
 			);
 		}
 	}
+	/** Lets go of the points once outlines have been made of them: in a large file they fill most memory. */
+	releasePoints(): void {
+		this.points = new GrowingFloats(0);
+	}
 	/** A place to come back to when a feature has to be read again from its start. */
 	mark(): number[] {
 		return [
