@@ -6,6 +6,7 @@ import type { Finding } from './finding.ts';
 import { holesBetween, type Hole } from './holes.ts';
 import { joinWithin } from './join-within.ts';
 import { gainedAndLost, joinedFinding, toleranceFinding } from './match-findings.ts';
+import { looseHoles } from './loose-holes.ts';
 import type { Noded } from './node-outlines.ts';
 import { noiseMetres } from './options.ts';
 import { Refusal } from './refusal.ts';
@@ -75,6 +76,8 @@ function cut(noded: Noded, keys: string[], names: string[], options: Options) {
 	const { coverage, arcs } = buildCoverage(outlines, segments, keys, names);
 	const survey = surveyOf(coverage, options);
 	if (survey.crowded) throw new Refusal('bad-coordinate', crowdMessage(survey.crowded));
+	const crossed = new Set(survey.crossings.map(({ region }) => region));
+	survey.crossings.push(...looseHoles(coverage).filter(({ region }) => !crossed.has(region)));
 	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
 	return { coverage, survey, holes };
 }

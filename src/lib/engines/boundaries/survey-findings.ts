@@ -74,7 +74,7 @@ function overlapOffers({ a, b, km2 }: Overlap, { keys, areasKm2 }: Coverage): Me
 		const [keep, lost] = [keys[kept], keys[kept === a ? b : a]];
 		const left = areasKm2[kept === a ? b : a] - km2;
 		if (km2 >= whole * areasKm2[kept === a ? b : a]) {
-			const words = `Leave out ${lost}, which lies in ${keep}.`;
+			const words = `Leave out ${lost}; ${keep} covers all of its ${areaText(km2)}.`;
 			return { mend: { kind: 'drop', key: lost }, words, usual: false };
 		}
 		return {

@@ -1,4 +1,4 @@
-import { fromGeos, toGeos, type Geos } from './geos-areas.ts';
+import { fromGeos, toGeos, withList, type Geos } from './geos-areas.ts';
 import type { Part } from './parts.ts';
 
 /** Differences and repairs of areas; null where the library gives up. */
@@ -42,11 +42,9 @@ function sound(geos: Geos, parts: Part[]): number {
 		return mended;
 	});
 	if (valid.length === 1 || valid.includes(0)) return valid.includes(0) ? 0 : valid[0];
-	const { Module } = geos;
-	const list = Module._malloc(4 * valid.length);
-	valid.forEach((area, i) => Module.setValue(list + 4 * i, 'i32', area));
-	const collection = geos.GEOSGeom_createCollection(collectionType, list, valid.length);
-	Module._free(list);
+	const collection = withList(geos, valid, (list) =>
+		geos.GEOSGeom_createCollection(collectionType, list, valid.length),
+	);
 	const united = geos.GEOSUnaryUnion(collection);
 	geos.GEOSGeom_destroy(collection);
 	return united;

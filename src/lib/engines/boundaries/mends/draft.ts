@@ -39,10 +39,9 @@ export class Draft {
 		this.redrawn.set(region, parts);
 	}
 
-	/** Leaves a region out, or makes it part of another. */
+	/** Leaves a region out, or says that it is part of another, which is drawn by the caller. */
 	remove(region: number, into: number | null): void {
 		if (into === null) this.shrunk.add(region);
-		else this.redraw(into, [...this.parts(into), ...this.parts(region)]);
 		this.redrawn.delete(region);
 		this.became.set(region, into ?? -1);
 	}

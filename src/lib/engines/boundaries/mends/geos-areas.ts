@@ -2,22 +2,29 @@ import { turned, type Part } from './parts.ts';
 
 export type Geos = Awaited<ReturnType<typeof import('geos-wasm').default>>;
 
+/** Runs `work` with a list of areas laid into the library's memory. */
+export function withList<T>(geos: Geos, areas: number[], work: (list: number) => T): T {
+	const list = geos.Module._malloc(4 * Math.max(1, areas.length));
+	geos.Module.HEAPU32.set(areas, list / 4);
+	const answer = work(list);
+	geos.Module._free(list);
+	return answer;
+}
+
 /** A part as a polygon of the library, to be destroyed by whoever asked for it. */
 export function toGeos(geos: Geos, [outer, ...holes]: Part): number {
-	const list = geos.Module._malloc(4 * Math.max(1, holes.length));
-	holes.forEach((hole, i) => geos.Module.setValue(list + 4 * i, 'i32', ringOf(geos, hole)));
-	const polygon = geos.GEOSGeom_createPolygon(ringOf(geos, outer), list, holes.length);
-	geos.Module._free(list);
-	return polygon;
+	const inner = holes.map((hole) => ringOf(geos, hole));
+	return withList(geos, inner, (list) =>
+		geos.GEOSGeom_createPolygon(ringOf(geos, outer), list, inner.length),
+	);
 }
 
 function ringOf(geos: Geos, ring: Float64Array): number {
 	const { Module } = geos;
 	const count = ring.length / 2 + 1;
 	const buffer = Module._malloc(16 * count);
-	for (let i = 0; i < 2 * count; i++) {
-		Module.setValue(buffer + 8 * i, 'double', ring[i % ring.length]);
-	}
+	Module.HEAPF64.set(ring, buffer / 8);
+	Module.HEAPF64.set(ring.subarray(0, 2), buffer / 8 + ring.length);
 	const sequence = geos.GEOSCoordSeq_copyFromBuffer(buffer, count, 0, 0);
 	Module._free(buffer);
 	return geos.GEOSGeom_createLinearRing(sequence);
@@ -50,8 +57,7 @@ function pointsOf(geos: Geos, ring: number): Float64Array {
 	const count = geos.GEOSGeomGetNumPoints(ring);
 	const buffer = Module._malloc(16 * count);
 	geos.GEOSCoordSeq_copyToBuffer(geos.GEOSGeom_getCoordSeq(ring), buffer, 0, 0);
-	const points = new Float64Array(2 * count - 2);
-	for (let i = 0; i < points.length; i++) points[i] = Module.getValue(buffer + 8 * i, 'double');
+	const points = Module.HEAPF64.slice(buffer / 8, buffer / 8 + 2 * count - 2);
 	Module._free(buffer);
 	return points;
 }
