@@ -59,7 +59,6 @@ async function assemble(
 	const mended = options.mends?.length ? await mendLayer(read, options, stage) : null;
 	const { naming, matched } = mended ?? read;
 	const { coverage, survey } = matched;
-	const toleranceMetres = options.toleranceMetres ?? noiseMetres;
 	return {
 		status: 'accepted',
 		coverage,
@@ -73,7 +72,7 @@ async function assemble(
 			...ringFindings(read.repairs, naming, layer.format),
 			...read.matched.findings,
 			...(mended?.findings ?? []),
-			...faultFindings(matched, toleranceMetres),
+			...faultFindings(matched, options),
 		],
 		source: {
 			format: layer.format,
@@ -81,7 +80,7 @@ async function assemble(
 			crs,
 			encoding: layer.encoding,
 			features: layer.regions,
-			toleranceMetres,
+			toleranceMetres: options.toleranceMetres ?? noiseMetres,
 		},
 		found: foundIn(layer, crs, naming),
 	};
