@@ -37,6 +37,7 @@ const sheet: DeskSheet = {
 		found: null,
 		mends: [],
 		gapsKm: 0,
+		levels: [],
 	},
 	draft: blankDraft(),
 	colouring: null,

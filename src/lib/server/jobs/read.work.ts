@@ -17,6 +17,7 @@ import { firstDraft } from '../services/first-draft.ts';
 import { colourAndCheck, type CheckedColouring } from './colour.work.ts';
 import { fileSource } from './file-source.ts';
 import { paletteFor } from '../services/house-palette.ts';
+import { packedLevels, type PackedLevel } from './display-levels.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import { teller, type Task } from './task-port.ts';
 
@@ -41,6 +42,8 @@ export type ReadOutcome =
 			columns: BoundaryColumns;
 			/** the coverage, encoded as it is stored and sent to browsers */
 			geometry: Uint8Array;
+			/** thinned for the screen, coarsest first */
+			levels: PackedLevel[];
 			attributeColumns: string[];
 			source: SourceNote;
 			found: Found;
@@ -75,11 +78,14 @@ async function prepare(
 	const { planar, witness } = planarityOf(regions.name, regions.parts, borders);
 	tell('Colouring', 0.9);
 	const { draft, colouring } = await colourFirst(input.title, coverage, borders);
+	tell('Thinning borders for the screen', 0.93);
+	const levels = packedLevels(coverage);
 	tell('Packing', 0.97);
 	return {
 		status: 'accepted',
 		columns: { regions, borders: borderColumns(borders), findings },
 		geometry: encodeCoverage(coverage),
+		levels,
 		attributeColumns: attributes.columns,
 		source,
 		found,

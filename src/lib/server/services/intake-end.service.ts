@@ -5,6 +5,7 @@ import type { FileStore } from '../files/index.ts';
 import type { ReadOutcome } from '../jobs/read.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { insertBoundarySet } from '../repositories/boundaries.repository.ts';
+import { insertLevels } from '../repositories/display-levels.repository.ts';
 import { holdClaim, type Claim } from '../repositories/claims.repository.ts';
 import { moveIntake } from '../repositories/intakes.repository.ts';
 import { insertColouring, insertDraft, insertSheet } from '../repositories/sheets.repository.ts';
@@ -32,6 +33,7 @@ export async function acceptIntake(
 		const intake = await holdClaim(trx, 'intakes', claim);
 		if (!intake?.file_digest) return false;
 		const boundarySetId = await storeBoundaries(trx, intake, read);
+		await insertLevels(trx, boundarySetId, read.levels);
 		const sheet = await insertSheet(trx, {
 			teamId: intake.team_id,
 			name: intake.sheet_name,
