@@ -2,10 +2,12 @@ import { getContext, setContext, type Snippet } from 'svelte';
 import { bordersForSheet } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
+import type { Area } from '$lib/engines/sheet';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
 import { Colourer, type ColourReply } from './colourer';
+import type { FinerGround } from './desk-drawing';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
 import { inkUse } from './ink-use';
@@ -68,6 +70,12 @@ export class Desk {
 	/** the engine ended without an answer: what it said */
 	failure = $state('');
 	drawn: DrawnSheet | null = $state.raw(null);
+	/** finer lines for the part of the sheet that is looked at, on a canvas */
+	finer: FinerGround | null = $state.raw(null);
+	/** asks for them: an area of the paper, and pixels to a hundredth of a millimetre */
+	refine: ((area: Area, pixelsPerUnit: number) => void) | null = null;
+	/** how large each region shows, mm; null until it has been measured */
+	sizesMm: Float64Array | null = $state.raw(null);
 	/** why the sheet could not be drawn here; '' while all is well */
 	drawFailure = $state('');
 
@@ -89,7 +97,7 @@ export class Desk {
 			this.inks,
 			this.sheet.borders,
 			this.standing,
-			this.drawn?.sizesMm ?? null,
+			this.sizesMm,
 		),
 	);
 	/** what is planned on the sheet now, when it is territories */
