@@ -1,7 +1,7 @@
 import { isHeld, notModified } from './bytes.ts';
 import { forPage } from './page.ts';
 
-/** A stored coverage, tagged by its boundary set: that never changes, though the address may outlive it. */
+/** A stored coverage, tagged by its boundary set and level: they never change, though the address may outlive it. */
 export async function coverageResponse(
 	request: Request,
 	geometry: { tag: string; read(): Promise<Buffer> },

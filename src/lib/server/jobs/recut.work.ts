@@ -53,6 +53,6 @@ export async function readRecutFile({ input, port }: Task<RecutInput>): Promise<
 	tell('Carrying decisions over', 0.92);
 	const fresh = { borders: result.borders, columns: result.attributes.columns };
 	const { report } = carryOver(matching, input.standing, fresh);
-	tell('Packing', 0.95);
+	tell('Thinning borders for the screen and packing', 0.94);
 	return { status: 'accepted', ...groundOf(result, reading), matching, change, report };
 }
