@@ -46,7 +46,7 @@ async function read(
 	try {
 		const { file_name: fileName, options } = recut;
 		const input = { path: file.path, fileName, options, answers, before, standing };
-		return await shop.pool.run('readRecut', input, { signal, progress });
+		return await shop.pool.run('readRecutFile', input, { signal, progress });
 	} finally {
 		await file.release();
 	}

@@ -1,7 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import { dirtyMaps } from '../../../../../tests/support/dirty-maps.ts';
 import { allValid, unionAndSum } from '../../../../../tests/support/geos.ts';
-import { acceptedFeatures, box, pairsOf } from '../../../../../tests/support/read-boundaries.ts';
+import {
+	acceptedFeatures,
+	box,
+	pairsOf,
+	region,
+} from '../../../../../tests/support/read-boundaries.ts';
 import { coverageFaults, coverageToGeoJson, type Finding, type Mend } from '../index.ts';
 
 const about = (findings: Finding[], code: string) => findings.filter((one) => one.code === code);
@@ -122,5 +127,26 @@ describe('steps in a row', () => {
 		expect(places(read.findings, 'gap')).toEqual([]);
 		const twice = await acceptedFeatures(gone, { mends: [mend, { ...mend, into: 'n' } as Mend] });
 		expect(about(twice.findings, 'mend-not-applied')).toHaveLength(1);
+	});
+});
+
+describe('outlines that are too much to cut', () => {
+	it('are left as they are, and that is told', async () => {
+		// 200 corners in no order: about 0.23 crossings a pair of edges, so some 4,500
+		let x = 7;
+		const next = () => (x = (x * 16807) % 2147483647) / 2147483647;
+		const knot = region(
+			'knot',
+			Array.from({ length: 200 }, () => [next(), next()]),
+		);
+		const map = [knot, box('e', 0.9, 0, 2, 1)];
+		const mends: Mend[] = [
+			{ kind: 'untangle', key: 'knot' },
+			{ kind: 'settle', a: 'knot', b: 'e', keep: 'e' },
+		];
+		const { findings } = await acceptedFeatures(map, { mends });
+		const told = about(findings, 'mend-not-applied').map(({ message }) => message);
+		expect(told).toHaveLength(2);
+		for (const message of told) expect(message).toMatch(/cross in more than 1000 places/);
 	});
 });

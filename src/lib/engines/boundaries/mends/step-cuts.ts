@@ -2,7 +2,14 @@ import { areaText } from '../area-text.ts';
 import type { Mend } from './mend.ts';
 import { boxesMeet, partsKm2, pointsIn, type Part } from './parts.ts';
 import { crossesTooOften } from './self-crossings.ts';
-import { mostCorners, mostCrossings, never, type Bench, type Outcome } from './step.ts';
+import {
+	mostCorners,
+	mostCrossings,
+	mostOwnCrossings,
+	never,
+	type Bench,
+	type Outcome,
+} from './step.ts';
 
 type Step<Kind extends Mend['kind']> = Extract<Mend, { kind: Kind }>;
 
@@ -26,7 +33,8 @@ export function settle(step: Step<'settle'>, bench: Bench): Outcome {
 	if (touched.length === 0) return never(`${step.a} and ${step.b} do not overlap`);
 	const spent = spend(bench, pointsIn(touched) + pointsIn(taken));
 	if (spent) return never(spent);
-	if (crossesTooOften([...touched, ...taken], mostCrossings)) return never(tangled);
+	const knotted = knotOf(touched) ?? knotOf(taken) ?? knotOf([...touched, ...taken], mostCrossings);
+	if (knotted) return never(knotted);
 	const left = clip.difference(touched, taken);
 	if (left === null) return never('the outlines could not be cut');
 	const rest = [...mine.filter((part) => !touched.includes(part)), ...left];
@@ -58,11 +66,16 @@ export function untangle({ key }: Step<'untangle'>, bench: Bench): Outcome {
 export function unite(parts: Part[], bench: Bench): Part[] | string {
 	const spent = spend(bench, pointsIn(parts));
 	if (spent) return spent;
-	if (crossesTooOften(parts, mostCrossings)) return tangled;
+	const knotted = knotOf(parts);
+	if (knotted) return knotted;
 	return bench.clip.untangled(parts) ?? 'the outlines could not be cut';
 }
 
-const tangled = `outlines that cross in more than ${mostCrossings} places are not cut`;
+/** Why outlines are not cut, when they cross too often. */
+function knotOf(parts: Part[], most = mostOwnCrossings): string | null {
+	if (!crossesTooOften(parts, most)) return null;
+	return `outlines that cross in more than ${most} places are not cut`;
+}
 
 const countOf = (parts: Part[]) => (parts.length === 1 ? 'one part' : `${parts.length} parts`);
 

@@ -30,7 +30,9 @@ export const never = (why: string): Refused => ({ why, later: false });
 
 /** Corners of two outlines, or of one that crosses itself, beyond which no step cuts. */
 export const mostCorners = 100_000;
-/** Places where an outline crosses itself beyond which it is not cut. */
+/** Places where an outline crosses itself beyond which it is not made valid: that takes a millisecond each. */
+export const mostOwnCrossings = 1000;
+/** Places where two outlines cross beyond which one is not cut from the other. */
 export const mostCrossings = 20_000;
 /** Corners that all steps together may cut. */
 export const mostCornersInAll = 4_000_000;
