@@ -54,7 +54,7 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	const added = carryHandBorders(ground, draft.added, 'added', null);
 	const rules = { pointTouches: draft.pointTouches, struck: struck.list, added: added.list };
 	const mustDiffer = fresh.borders
-		? pairTest(bordersForSheet(match.after.keys, fresh.borders, rules), regions)
+		? pairTest(bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules }), regions)
 		: null;
 	const forbidden = carryForbidden(ground, draft);
 	const locks = carryLocks(ground, draft, forbidden.list, mustDiffer);

@@ -10,6 +10,7 @@ import {
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
+import { packedLevels, type PackedLevel } from './display-levels.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import type { KnownAnswer } from './read-answered.ts';
 
@@ -29,6 +30,8 @@ export interface ReadGround {
 	columns: BoundaryColumns;
 	/** the coverage, encoded as it is stored and sent to browsers */
 	geometry: Uint8Array;
+	/** thinned for the screen, coarsest first */
+	levels: PackedLevel[];
 	attributeColumns: string[];
 	source: SourceNote;
 	found: Found;
@@ -52,6 +55,7 @@ export function groundOf(
 	return {
 		columns: { regions, borders: borderColumns(borders), findings },
 		geometry: encodeCoverage(coverage),
+		levels: packedLevels(coverage),
 		attributeColumns: attributes.columns,
 		...{ source, found, options, taken, planar },
 		planarWitness: witness,

@@ -23,7 +23,8 @@ export async function carryBy(
 	decisions: RecutDecision[],
 ): Promise<{ carried: Carried; draft: DraftRow; measures: MeasureRow[]; view: BoundaryView }> {
 	const matching = await readMatching(shop.db, row.id);
-	if (!matching || !row.to_set) throw new Conflict('not-ready', 'It has not been read and compared.');
+	if (!matching || !row.to_set)
+		throw new Conflict('not-ready', 'It has not been read and compared.');
 	const { standing, draft, measures } = await standingRows(shop.db, sheet);
 	const before = await boundaryView(shop.db, sheet.boundary_set_id);
 	const view = await boundaryView(shop.db, row.to_set);
@@ -61,7 +62,12 @@ export async function planApply(
 ): Promise<ApplyPlan> {
 	const decisions = row.decisions as unknown as RecutDecision[];
 	const { carried, measures, view } = await carryBy(shop, sheet, row, decisions);
-	const outcome = await colourDraft(shop, view, carried.draft, carried.previous && [...carried.previous]);
+	const outcome = await colourDraft(
+		shop,
+		view,
+		carried.draft,
+		carried.previous && [...carried.previous],
+	);
 	const inks = await territoryInks(shop, sheet, view, carried);
 	return { sheet, row, carried, measures, outcome, inks };
 }
@@ -70,12 +76,11 @@ async function territoryInks(
 	shop: Workshop,
 	sheet: SheetRecord,
 	view: BoundaryView,
-	{ territories, draft, measures }: Carried,
+	{ territories, draft }: Carried,
 ): Promise<Record<string, number>> {
 	if (!territories) return {};
 	const { keys, borders } = view;
-	const figures = measures.flatMap(({ id, name, values }) => (values ? { id, name, values } : []));
-	const [fault] = draftFaults({ keys, borders, measures: figures }, territories);
+	const [fault] = draftFaults({ keys, borders }, territories);
 	if (fault) {
 		throw new Unfit('unfit-territories', `The territories cannot follow: ${fault.message}`);
 	}
