@@ -55,7 +55,7 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	const { pointTouches, leastMetres, waterKm } = draft;
 	const rules = { pointTouches, leastMetres, waterKm, struck: struck.list, added: added.list };
 	const mustDiffer = fresh.borders
-		? pairTest(bordersForSheet(match.after.keys, fresh.borders, rules), regions)
+		? pairTest(bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules }), regions)
 		: null;
 	const forbidden = carryForbidden(ground, draft);
 	const locks = carryLocks(ground, draft, forbidden.list, mustDiffer);
