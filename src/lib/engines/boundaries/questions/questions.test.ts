@@ -8,7 +8,6 @@ import {
 	box,
 	collection,
 	refusal,
-	region,
 } from '../../../../../tests/support/read-boundaries.ts';
 import { epsgDefinition } from '../epsg.ts';
 import { knownSystems } from '../epsg-systems.ts';

@@ -41,7 +41,7 @@ function layoutOf(text: string, encoding: string, isAll: boolean): CsvLayout | n
 	const newline = text.includes('\n') || !text.includes('\r') ? '\n' : '\r';
 	const readings = delimiters.map((delimiter) => {
 		const form = { encoding, delimiter, newline } as const;
-		return { form, rows: parseRows(text, form, isAll).rows.slice(0, mostRows + 1) };
+		return { form, rows: parseRows(text, form, isAll, mostRows).rows };
 	});
 	if (!isAll && readings.every(({ rows }) => rows.length < 2)) return 'too short';
 	for (const isWhole of [true, false]) {

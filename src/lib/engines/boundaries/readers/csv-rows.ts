@@ -5,7 +5,7 @@ import { decoded } from './decoded.ts';
 
 const usualCharacters = 1024 * 1024;
 /** of one row */
-const mostCharacters = 128 * usualCharacters;
+const mostCharacters = 64 * usualCharacters;
 
 export interface CsvForm {
 	encoding: string;
@@ -45,13 +45,15 @@ function soundRows(text: string, form: CsvForm, isAll: boolean) {
 	throw new Refusal(isOpen ? 'file-truncated' : 'file-damaged', message);
 }
 
-/** The whole rows of a piece of text, how many characters they took, and what is wrong with them. */
+/** The whole rows of a piece of text, how many characters they took, and what is wrong with them; `most` rows,
+ * all unless given. */
 export function parseRows(
 	text: string,
 	{ delimiter, newline }: Omit<CsvForm, 'encoding'>,
 	isAll: boolean,
+	most = 0,
 ): { rows: string[][]; used: number; error: Papa.ParseError | undefined } {
-	const parser = new Papa.Parser({ delimiter, newline });
+	const parser = new Papa.Parser({ delimiter, newline, preview: most });
 	const { data, errors, meta } = parser.parse(text, 0, !isAll) as Papa.ParseResult<string[]>;
 	for (const row of data) {
 		const last = row.length - 1;
