@@ -29,11 +29,14 @@ export class RawLayer {
 	strayLines = 0;
 	findings: Finding[] = [];
 
+	private mostNumbers: number;
+
 	constructor(
 		private limits: Limits,
 		expectedPoints = 1024,
 	) {
 		this.points = new GrowingFloats(2 * expectedPoints);
+		this.mostNumbers = 2 * limits.points;
 	}
 
 	get regions(): number {
@@ -56,7 +59,7 @@ export class RawLayer {
 	}
 	point(x: number, y: number): void {
 		this.points.push2(x, y);
-		if (this.points.length > 2 * this.limits.points) {
+		if (this.points.length > this.mostNumbers) {
 			throw new Refusal(
 				'too-large-unpacked',
 				`The file has more than ${this.limits.points} points, which is the most this reader takes.`,
@@ -67,6 +70,10 @@ export class RawLayer {
 	stray(kind: string): void {
 		if (/point/i.test(kind)) this.strayPoints++;
 		else this.strayLines++;
+	}
+	/** Lets go of the points once outlines have been made of them: in a large file they fill most memory. */
+	releasePoints(): void {
+		this.points = new GrowingFloats(0);
 	}
 	/** A place to come back to when a feature has to be read again from its start. */
 	mark(): number[] {

@@ -1,6 +1,7 @@
-import { holeFindings } from './hole-findings.ts';
+import { faultFindings } from './fault-findings.ts';
 import { placeLongitudes } from './longitudes.ts';
 import { matchLayer } from './match-layer.ts';
+import { mendLayer } from './mends/mend-layer.ts';
 import {
 	defaultLimits,
 	noiseMetres,
@@ -20,7 +21,6 @@ import { withSketches } from './questions/sketch-layers.ts';
 import { readLayer } from './readers/index.ts';
 import { crossingFinding, ringFindings } from './ring-findings.ts';
 import { sketchOf } from './sketch.ts';
-import { surveyFindings } from './survey-findings.ts';
 
 /**
  * Reads a boundary file into a coverage, its borders, the attribute table and what there was to note.
@@ -40,7 +40,7 @@ export async function readBoundaries(
 		const layer = await readOrAsk(source, options, watch);
 		const asked = { layer, sketch: sketchOf(layer), fileName: source.name, options };
 		try {
-			return assemble(layer, asked.sketch, options, watch);
+			return await assemble(layer, asked.sketch, options, watch);
 		} catch (error) {
 			throw error instanceof Refusal ? withQuestion(error, asked) : error;
 		}
@@ -61,12 +61,12 @@ async function readOrAsk(source: ByteSource, options: BoundaryOptions, watch: Wa
 	}
 }
 
-function assemble(
+async function assemble(
 	layer: RawLayer,
 	sketch: Sketch | null,
 	options: BoundaryOptions,
 	watch: Watch,
-): BoundariesResult {
+): Promise<BoundariesResult> {
 	const stage = (message: string, share: number) => {
 		if (watch.cancelled?.()) throw new Cancelled();
 		watch.progress?.(message, share);
@@ -76,8 +76,11 @@ function assemble(
 	if (layer.axesVary) layer.findings.push(...axesNote(sketch?.box ?? null, crs, options));
 	const { west, crossing } = placeLongitudes(layer);
 	stage('Matching the outlines', 0.6);
-	const { naming, repairs, matched, findings } = matchLayer(layer, west, options, stage);
+	const read = matchLayer(layer, west, options, stage);
+	const mended = options.mends?.length ? await mendLayer(read, options, stage) : null;
+	const { naming, matched } = mended ?? read;
 	const { coverage, survey } = matched;
+	const toleranceMetres = options.toleranceMetres ?? noiseMetres;
 	return {
 		status: 'accepted',
 		coverage,
@@ -86,12 +89,12 @@ function assemble(
 		findings: [
 			...layer.findings,
 			...naming.findings,
-			...findings,
+			...read.findings,
 			...crossingFinding(crossing, naming),
-			...ringFindings(repairs, naming, layer.format),
-			...matched.findings,
-			...surveyFindings(survey, coverage.keys),
-			...holeFindings(matched.holes, coverage.keys),
+			...ringFindings(read.repairs, naming, layer.format),
+			...read.matched.findings,
+			...(mended?.findings ?? []),
+			...faultFindings(matched, toleranceMetres),
 		],
 		source: {
 			format: layer.format,
@@ -99,7 +102,7 @@ function assemble(
 			crs,
 			encoding: layer.encoding,
 			features: layer.regions,
-			toleranceMetres: options.toleranceMetres ?? noiseMetres,
+			toleranceMetres,
 		},
 		found: foundIn(layer, crs, naming, sketch),
 	};

@@ -87,19 +87,14 @@ function readPart(json: JsonBytes, layer: RawLayer): void {
 
 function readRing(json: JsonBytes, layer: RawLayer): void {
 	json.take(byte.open);
-	if (json.peek() === byte.close) {
-		json.at++;
-		return;
-	}
+	if (json.takes(byte.close)) return;
 	do {
-		if (json.peek() !== byte.open) throw notPosition(json);
-		json.at++;
+		if (!json.takes(byte.open)) throw notPosition(json);
 		const x = json.number();
-		if (json.peek() !== byte.comma) throw notPosition(json);
-		json.at++;
+		if (!json.takes(byte.comma)) throw notPosition(json);
 		layer.point(x, json.number());
-		while (json.another(byte.close)) json.number();
-	} while (json.another(byte.close));
+		if (!json.takes(byte.close)) while (json.another(byte.close)) json.number();
+	} while (json.takes(byte.comma) || json.another(byte.close));
 }
 
 /** A JSON list, `item` called at the start of each entry. */
