@@ -2,8 +2,9 @@ import { sweptKm2 } from '../geometry/areas.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { doubleArea } from '../geometry/rings.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
-import { traceRings, type ArcRing } from './arc-rings.ts';
+import { traceRings } from './arc-rings.ts';
 import type { Arcs } from './arcs.ts';
+import { pointsOf } from './traced-ring.ts';
 
 /** Nobody's land enclosed by two or more regions. */
 export interface Hole {
@@ -23,12 +24,7 @@ const inside = 1e-9;
  * with nobody on the left, that come round anticlockwise. With `overlapping`, what another region covers
  * is none.
  */
-export function holesBetween(
-	coverage: Coverage,
-	arcs: Arcs,
-	positions: Float64Array,
-	overlapping: boolean,
-): Hole[] {
+export function holesBetween(coverage: Coverage, arcs: Arcs, overlapping: boolean): Hole[] {
 	const halves: number[] = [];
 	for (let a = 0; a < arcs.left.length; a++) {
 		if (arcs.left[a] < 0) halves.push(a);
@@ -36,10 +32,10 @@ export function holesBetween(
 	}
 	const blocks = overlapping ? new SegmentBlocks(coverage) : null;
 	const holes: Hole[] = [];
-	for (const ring of traceRings(Int32Array.from(halves), arcs, positions)) {
+	for (const ring of traceRings(Int32Array.from(halves), arcs)) {
 		const regions = new Set(ring.map((half) => ownerOf(arcs, half)));
 		if (regions.size < 2) continue;
-		const points = pointsOf(ring, arcs, positions);
+		const points = closed(pointsOf(ring, arcs));
 		if (doubleArea(points, 0, points.length / 2 - 1) <= 0) continue;
 		const place = besideLongest(points);
 		if (blocks && blocks.regionsAt(...place).length > 0) continue;
@@ -55,19 +51,12 @@ const numberOf = (half: number) => (half >= 0 ? half : ~half);
 
 const ownerOf = (arcs: Arcs, half: number) => (half >= 0 ? arcs.right[half] : arcs.left[~half]);
 
-/** Closed: the first point stands at the end again. */
-function pointsOf(ring: ArcRing, arcs: Arcs, positions: Float64Array): Float64Array {
-	const points: number[] = [];
-	for (const half of ring) {
-		const a = numberOf(half);
-		const [first, last] = [arcs.starts[a], arcs.starts[a + 1] - 1];
-		for (let k = 0; k < last - first; k++) {
-			const v = arcs.vertices[half >= 0 ? first + k : last - k];
-			points.push(positions[2 * v], positions[2 * v + 1]);
-		}
-	}
-	points.push(points[0], points[1]);
-	return Float64Array.from(points);
+/** With the first point again at the end. */
+function closed(points: Float64Array): Float64Array {
+	const all = new Float64Array(points.length + 2);
+	all.set(points);
+	all.set(points.subarray(0, 2), points.length);
+	return all;
 }
 
 /** Just left of the middle of the longest edge. */

@@ -62,7 +62,7 @@ function cut(noded: Noded, keys: string[], names: string[], options: Options) {
 	const { coverage, arcs } = buildCoverage(outlines, segments, keys, names);
 	const survey = surveyOf(coverage, options);
 	if (survey.crowded) throw new Refusal('bad-coordinate', crowdMessage(survey.crowded));
-	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
+	const holes = () => holesBetween(coverage, arcs, survey.overlaps.length > 0);
 	return { coverage, survey, holes };
 }
 
