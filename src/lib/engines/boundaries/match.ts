@@ -78,7 +78,7 @@ function cut(noded: Noded, keys: string[], names: string[], options: Options) {
 	if (survey.crowded) throw new Refusal('bad-coordinate', crowdMessage(survey.crowded));
 	const crossed = new Set(survey.crossings.map(({ region }) => region));
 	survey.crossings.push(...looseHoles(coverage).filter(({ region }) => !crossed.has(region)));
-	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
+	const holes = () => holesBetween(coverage, arcs, survey.overlaps.length > 0);
 	return { coverage, survey, holes };
 }
 

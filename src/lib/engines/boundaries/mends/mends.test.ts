@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { dirtyMaps } from '../../../../../tests/support/dirty-maps.ts';
-import { allValid, unionAndSum } from '../../../../../tests/support/geos.ts';
+import { allValid, unionAndSum } from '../../../../../tests/support/geos-areas.ts';
 import {
 	acceptedFeatures,
 	box,
