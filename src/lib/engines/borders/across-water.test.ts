@@ -17,8 +17,7 @@ const inverse = (x1: number, y1: number, x2: number, y2: number) =>
 
 /** Least distance from a point to a straight segment, by a fine walk and then a search by thirds. */
 function toSegment(p: number[], u: number[], v: number[]): number {
-	const at = (t: number) =>
-		inverse(p[0], p[1], u[0] + t * (v[0] - u[0]), u[1] + t * (v[1] - u[1]));
+	const at = (t: number) => inverse(p[0], p[1], u[0] + t * (v[0] - u[0]), u[1] + t * (v[1] - u[1]));
 	const steps = 64;
 	let best = 0;
 	for (let i = 0; i <= steps; i++) if (at(i / steps) < at(best / steps)) best = i;

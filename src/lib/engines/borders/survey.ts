@@ -22,6 +22,8 @@ export interface Survey {
 	overlaps: Overlap[];
 	/** one place for each region whose own outline crosses itself */
 	crossings: Suspects['crossings'];
+	/** regions whose own parts may lie on each other */
+	doubtful: Suspects['doubtful'];
 	/** a place where so many regions meet that their point touches are left out, or null */
 	crowded: [number, number] | null;
 	/** all pairs across water up to this width are there; null when none were asked for */
@@ -36,7 +38,8 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const places = meetings(coverage);
 	const crowded = crowdedPlace(places);
 	if (crowded) {
-		return { borders: tally.list(), overlaps: [], crossings: [], crowded, waterKm: null };
+		const nothing = { overlaps: [], crossings: [], doubtful: new Set<number>(), waterKm: null };
+		return { borders: tally.list(), crowded, ...nothing };
 	}
 	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
@@ -47,7 +50,8 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const waterKm = options.acrossWaterKm
 		? addAcrossWater(coverage, blocks, options.acrossWaterKm, tally)
 		: null;
-	return { borders: tally.list(), overlaps, crossings: found.crossings, crowded, waterKm };
+	const { crossings, doubtful } = found;
+	return { borders: tally.list(), overlaps, crossings, doubtful, crowded, waterKm };
 }
 
 function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): Overlap[] {

@@ -30,24 +30,33 @@ export function surveyFindings(survey: Survey, coverage: Coverage): Finding[] {
 				overlapOffers(overlap, coverage),
 			),
 		),
-		...toldEach(survey.crossings, ({ region, at }) => {
-			const [key, size] = [keys[region], areaText(Math.abs(areasKm2[region]))];
-			return {
-				code: 'self-crossing',
-				severity: 'warning',
-				message: `The outline of ${key} crosses itself, so that its area of ${size} is uncertain.`,
-				regions: [key],
-				at,
-				offers: [
-					{
-						mend: { kind: 'untangle', key },
-						words: `Cut the outline of ${key} where it crosses itself, and count its ${size} again.`,
-						usual: true,
-					},
-				],
-			};
-		}),
+		...toldEach(
+			survey.crossings.filter(({ doubled }) => !doubled),
+			({ region, at }) => tangled(coverage, region, at, 'self-crossing'),
+		),
+		...toldEach(
+			survey.crossings.filter(({ doubled }) => doubled),
+			({ region, at }) => tangled(coverage, region, at, 'parts-overlap'),
+		),
 	];
+}
+
+function tangled(
+	{ keys, areasKm2 }: Coverage,
+	region: number,
+	at: Finding['at'],
+	code: 'self-crossing' | 'parts-overlap',
+): Finding {
+	const [key, size] = [keys[region], areaText(Math.abs(areasKm2[region]))];
+	const isCrossing = code === 'self-crossing';
+	const message = isCrossing
+		? `The outline of ${key} crosses itself, so that its area of ${size} is uncertain.`
+		: `Parts of ${key} lie on each other, so that its area of ${size} counts land twice.`;
+	const words = isCrossing
+		? `Cut the outline of ${key} where it crosses itself, and count its ${size} again.`
+		: `Make one of the parts of ${key} that lie on each other, and count its ${size} again.`;
+	const offers: MendOffer[] = [{ mend: { kind: 'untangle', key }, words, usual: true }];
+	return { code, severity: 'warning', message, regions: [key], at, offers };
 }
 
 /** The second of two in the file goes, unless the other is asked for. */
