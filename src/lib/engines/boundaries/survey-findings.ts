@@ -73,12 +73,13 @@ const whole = 0.999;
 
 /**
  * The smaller region keeps what both cover, since the larger loses less by it; a region covered whole by
- * another may also be left out.
+ * another may also be left out. Of two that are nearly the same the first in the file stays.
  */
 function overlapOffers({ a, b, km2 }: Overlap, { keys, areasKm2 }: Coverage): MendOffer[] {
 	const isFirstSmaller =
 		areasKm2[a] < areasKm2[b] || (areasKm2[a] === areasKm2[b] && keys[a] < keys[b]);
-	const order = isFirstSmaller ? [a, b] : [b, a];
+	const isNearlyBoth = km2 >= whole * Math.max(areasKm2[a], areasKm2[b]);
+	const order = isFirstSmaller || isNearlyBoth ? [a, b] : [b, a];
 	const offers = order.map((kept): MendOffer => {
 		const [keep, lost] = [keys[kept], keys[kept === a ? b : a]];
 		const left = areasKm2[kept === a ? b : a] - km2;
