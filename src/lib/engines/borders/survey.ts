@@ -1,4 +1,6 @@
 import type { Coverage } from '../geometry/coverage.ts';
+import { ringPoints } from '../geometry/coverage-rings.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import type { BorderList } from './border-list.ts';
 import { addLines } from './lines.ts';
@@ -68,13 +70,15 @@ function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): 
 
 /** What two regions with the same outline have in common: everything. */
 function wholeOf(coverage: Coverage, a: number, b: number): Overlap {
-	const { regionParts, partRings, ringStarts, ringArcs, arcStarts, arcPoints } = coverage;
-	const half = ringArcs[ringStarts[partRings[regionParts[a]]]];
-	const corner = 2 * arcStarts[half >= 0 ? half : ~half];
+	const first = coverage.regionParts[a];
+	const rings: Float64Array[] = [];
+	for (let ring = coverage.partRings[first]; ring < coverage.partRings[first + 1]; ring++) {
+		rings.push(ringPoints(coverage, ring));
+	}
 	return {
 		...{ a, b, same: true },
 		km2: coverage.areasKm2[a],
 		metres: outlineMetres(coverage, a) / 2,
-		at: [arcPoints[corner], arcPoints[corner + 1]],
+		at: insidePlace(rings),
 	};
 }

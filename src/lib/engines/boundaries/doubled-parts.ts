@@ -1,7 +1,7 @@
 import type { SelfCrossing } from '../borders/suspects.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { ringsOfPart } from './coverage-parts.ts';
-import { insidePlace } from './inside-place.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { isInPart } from './mends/parts.ts';
 import type { Segments } from './segments.ts';
 

@@ -8,7 +8,7 @@ import { toldEach } from './told-each.ts';
 
 /** A finding for each overlap, pair with the same outline and outline that crosses itself, worst first. */
 export function surveyFindings(survey: Survey, coverage: Coverage): Finding[] {
-	const { keys, areasKm2 } = coverage;
+	const { keys } = coverage;
 	const overlaps = [...survey.overlaps].sort((p, q) => q.km2 - p.km2);
 	const told = (code: string, overlap: Overlap, said: string, offers: MendOffer[]): Finding => {
 		const both = [keys[overlap.a], keys[overlap.b]];
