@@ -31,7 +31,14 @@ export function addAcrossWater(
 		if ([0, 360, -360].some((turn) => isCrossed(gap, turn, coverage, blocks))) continue;
 		const x = (gap.from[0] + gap.to[0]) / 2;
 		const y = (gap.from[1] + gap.to[1]) / 2;
-		tally.add(gap.a, gap.b, kindCode('water'), gap.metres, Math.abs(x) > 180 ? x - 360 * Math.sign(x) : x, y);
+		tally.add(
+			gap.a,
+			gap.b,
+			kindCode('water'),
+			gap.metres,
+			Math.abs(x) > 180 ? x - 360 * Math.sign(x) : x,
+			y,
+		);
 	}
 	return within / 1000;
 }
