@@ -7,7 +7,8 @@ type Area = Feature<Polygon | MultiPolygon>;
 
 const quiet = { errorHandler: () => undefined, noticeHandler: () => undefined };
 
-const partsOf = (geometry: Polygon | MultiPolygon): Polygon[] =>
+/** The parts of an area, each a polygon. */
+export const partsOf = (geometry: Polygon | MultiPolygon): Polygon[] =>
 	geometry.type === 'Polygon'
 		? [geometry]
 		: geometry.coordinates.map((coordinates) => ({ type: 'Polygon', coordinates }));

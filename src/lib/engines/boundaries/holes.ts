@@ -5,7 +5,7 @@ import { doubleArea, sideOfRing } from '../geometry/rings.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import { traceRings, type ArcRing } from './arc-rings.ts';
 import type { Arcs } from './arcs.ts';
-import { insidePlace } from './inside-place.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { ringKm2 } from './ring-area.ts';
 import { pointsOf } from './traced-ring.ts';
 

@@ -12,4 +12,5 @@ export { encodeCoverage, decodeCoverage } from './codec.ts';
 export { displayLevels, type DisplayLevel } from './levels.ts';
 export { simplifyCoverage } from './simplify.ts';
 export { coverageToGeoJson } from './to-geojson.ts';
+export { piecesOf, type Piece } from './pieces.ts';
 export { sourceOf } from './byte-source.ts';
