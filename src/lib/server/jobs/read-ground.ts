@@ -1,5 +1,6 @@
 import {
 	encodeCoverage,
+	piecesOf,
 	type BoundariesResult,
 	type BoundaryOptions,
 	type Coverage,
@@ -10,6 +11,7 @@ import {
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
+import type { PieceColumns } from '../repositories/pieces.repository.ts';
 import { packedLevels, type PackedLevel } from './display-levels.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import type { KnownAnswer } from './read-answered.ts';
@@ -32,6 +34,7 @@ export interface ReadGround {
 	geometry: Uint8Array;
 	/** thinned for the screen, coarsest first */
 	levels: PackedLevel[];
+	pieces: PieceColumns;
 	attributeColumns: string[];
 	source: SourceNote;
 	found: Found;
@@ -56,6 +59,7 @@ export function groundOf(
 		columns: { regions, borders: borderColumns(borders), findings },
 		geometry: encodeCoverage(coverage),
 		levels: packedLevels(coverage),
+		pieces: pieceColumns(coverage),
 		attributeColumns: attributes.columns,
 		...{ source, found, options, taken, planar },
 		planarWitness: witness,
@@ -85,6 +89,19 @@ const attributesJson = (
 		'\\u0000',
 		'',
 	);
+
+function pieceColumns(coverage: Coverage): PieceColumns {
+	const pieces = piecesOf(coverage);
+	return {
+		region: pieces.map(({ region }) => region),
+		part: pieces.map(({ part }) => part),
+		kind: pieces.map(({ kind }) => kind),
+		areaKm2: pieces.map(({ areaKm2 }) => areaKm2),
+		lon: pieces.map(({ at }) => at[0]),
+		lat: pieces.map(({ at }) => at[1]),
+		within: pieces.map(({ within }) => within),
+	};
+}
 
 function borderColumns({ a, b, kind, metres, at }: BorderList): BoundaryColumns['borders'] {
 	return {
