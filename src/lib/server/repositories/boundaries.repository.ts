@@ -89,6 +89,7 @@ async function insertFindings(
 ): Promise<void> {
 	const rows = findings.map(({ at, offers, toleranceMetres, ...finding }) => ({
 		...finding,
+		tolerance_metres: toleranceMetres ?? null,
 		offers: offers ? JSON.stringify(offers) : null,
 		tolerance_metres: toleranceMetres ?? null,
 		boundary_set_id: id,
