@@ -30,6 +30,7 @@ export interface BoundaryColumns {
 		regions: string[];
 		at: [number, number] | null;
 		offers?: MendOffer[];
+		toleranceMetres?: number;
 	}[];
 }
 
@@ -86,9 +87,11 @@ async function insertFindings(
 	id: string,
 	findings: BoundaryColumns['findings'],
 ): Promise<void> {
-	const rows = findings.map(({ at, offers, ...finding }) => ({
+	const rows = findings.map(({ at, offers, toleranceMetres, ...finding }) => ({
 		...finding,
+		tolerance_metres: toleranceMetres ?? null,
 		offers: offers ? JSON.stringify(offers) : null,
+		tolerance_metres: toleranceMetres ?? null,
 		boundary_set_id: id,
 		lon: at?.[0] ?? null,
 		lat: at?.[1] ?? null,
@@ -223,7 +226,9 @@ export async function deleteUnusedBoundarySet(trx: Db, id: string): Promise<bool
 		.where(({ and, not, exists, selectFrom }) =>
 			and([
 				...(['sheets', 'measure_tables', 'proposals', 'drafts'] as const).map((table) =>
-					not(exists(selectFrom(table).select('boundary_set_id').where('boundary_set_id', '=', id))),
+					not(
+						exists(selectFrom(table).select('boundary_set_id').where('boundary_set_id', '=', id)),
+					),
 				),
 				...(['from_set', 'to_set'] as const).map((column) =>
 					not(exists(selectFrom('recuts').select('id').where(column, '=', id))),

@@ -133,6 +133,7 @@ async function findingsOf(db: Db, boundarySetId: string): Promise<DeskFinding[]>
 		regions: row.regions,
 		at: row.lon === null || row.lat === null ? null : [row.lon, row.lat],
 		...(row.offers && { offers: row.offers as DeskFinding['offers'] }),
+		...(row.tolerance_metres !== null && { toleranceMetres: row.tolerance_metres }),
 		acceptedBy: personName({ by_name: row.accepted_name, by_email: row.accepted_email }),
 		acceptedAt: row.accepted_at?.toISOString() ?? null,
 	}));

@@ -5,6 +5,7 @@ import { memberFor } from '$lib/server/access/guard';
 import { attempt, readForm } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
+import { maxUpload } from '$lib/server/services/intake.service';
 import { addMends, beginReading, takeBackMend } from '$lib/server/services/recut-begin.service';
 import { sheetRecuts } from '$lib/server/services/recuts.service';
 import { acceptFinding } from '$lib/server/services/sheet.service';
@@ -12,7 +13,8 @@ import type { Actions, PageServerLoad } from './$types';
 
 export const load = (async ({ locals, params }) => {
 	const member = memberFor(locals, 'sheet.read');
-	return { recuts: await forPage(() => sheetRecuts(workshop(), member, Number(params.sheet))) };
+	const recuts = await forPage(() => sheetRecuts(workshop(), member, Number(params.sheet)));
+	return { recuts, maxBytes: maxUpload() };
 }) satisfies PageServerLoad;
 
 const whichFinding = z.object({ finding: z.coerce.number().int().positive() });
