@@ -38,25 +38,25 @@ const drop = { kind: 'drop', key: 'x' } as const;
 const upload = 'boundaries.upload';
 const mend = 'boundaries.mend';
 
-/** The services of questions and re-cuts with the right that each needs, on a sheet that is not there. */
-export const walkOfRecuts = (shop: () => Workshop): Walk => ({
-	addMends: [mend, (member) => addMends(shop(), member, 99, [drop])],
+/** The services of questions and re-cuts with the right that each needs, on a sheet that is not there unless one is named. */
+export const walkOfRecuts = (shop: () => Workshop, sheet = 99): Walk => ({
+	addMends: [mend, (member) => addMends(shop(), member, sheet, [drop])],
 	answerIntake: [upload, (member) => answerIntake(shop(), member, randomUUID(), answer)],
-	answerRecut: [upload, (member) => answerRecut(shop(), member, 99, 1, answer)],
-	applyRecut: [mend, (member) => applyRecut(shop(), member, 99, 1)],
-	beginFileRecut: [upload, (member) => beginFileRecut(shop(), member, 99, form())],
-	beginReading: [mend, (member) => beginReading(shop(), member, 99, { mends: 'keep' })],
-	cancelRecut: [upload, (member) => cancelRecut(shop(), member, 99, 1)],
-	decideRecut: [mend, (member) => decideRecut(shop(), member, 99, 1, [])],
-	dropRecut: [upload, (member) => dropRecut(shop(), member, 99, 1)],
+	answerRecut: [upload, (member) => answerRecut(shop(), member, sheet, 1, answer)],
+	applyRecut: [mend, (member) => applyRecut(shop(), member, sheet, 1)],
+	beginFileRecut: [upload, (member) => beginFileRecut(shop(), member, sheet, form())],
+	beginReading: [mend, (member) => beginReading(shop(), member, sheet, { mends: 'keep' })],
+	cancelRecut: [upload, (member) => cancelRecut(shop(), member, sheet, 1)],
+	decideRecut: [mend, (member) => decideRecut(shop(), member, sheet, 1, [])],
+	dropRecut: [upload, (member) => dropRecut(shop(), member, sheet, 1)],
 	forgetAnswer: [upload, (member) => forgetAnswer(shop(), member, 'crs', 'x')],
-	putBackRecut: [mend, (member) => putBackRecut(shop(), member, 99, 1, true)],
-	readRecut: ['sheet.read', (member) => readRecut(shop(), member, 99, 1)],
-	readRecutPage: ['sheet.read', (member) => readRecutPage(shop(), member, 99, 1)],
-	recutGeometry: ['sheet.read', (member) => recutGeometry(shop(), member, 99, 1, 'after')],
-	recutStatus: ['sheet.read', (member) => recutStatus(shop(), member, 99, 1)],
+	putBackRecut: [mend, (member) => putBackRecut(shop(), member, sheet, 1, true)],
+	readRecut: ['sheet.read', (member) => readRecut(shop(), member, sheet, 1)],
+	readRecutPage: ['sheet.read', (member) => readRecutPage(shop(), member, sheet, 1)],
+	recutGeometry: ['sheet.read', (member) => recutGeometry(shop(), member, sheet, 1, 'after')],
+	recutStatus: ['sheet.read', (member) => recutStatus(shop(), member, sheet, 1)],
 	rememberedAnswers: ['sheet.read', (member) => rememberedAnswers(shop(), member)],
-	retryRecut: [upload, (member) => retryRecut(shop(), member, 99, 1)],
-	sheetRecuts: ['sheet.read', (member) => sheetRecuts(shop(), member, 99)],
-	takeBackMend: [mend, (member) => takeBackMend(shop(), member, 99, drop)],
+	retryRecut: [upload, (member) => retryRecut(shop(), member, sheet, 1)],
+	sheetRecuts: ['sheet.read', (member) => sheetRecuts(shop(), member, sheet)],
+	takeBackMend: [mend, (member) => takeBackMend(shop(), member, sheet, drop)],
 });

@@ -49,6 +49,7 @@ const borders: Record<BorderKind, string> = {
 	point: 'by point',
 	water: 'across water',
 	hand: 'by hand',
+	gap: 'across a gap',
 };
 
 export function sideWords(side: PairChange['before']): string {

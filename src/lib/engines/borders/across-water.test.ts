@@ -17,8 +17,7 @@ const inverse = (x1: number, y1: number, x2: number, y2: number) =>
 
 /** Least distance from a point to a straight segment, by a fine walk and then a search by thirds. */
 function toSegment(p: number[], u: number[], v: number[]): number {
-	const at = (t: number) =>
-		inverse(p[0], p[1], u[0] + t * (v[0] - u[0]), u[1] + t * (v[1] - u[1]));
+	const at = (t: number) => inverse(p[0], p[1], u[0] + t * (v[0] - u[0]), u[1] + t * (v[1] - u[1]));
 	const steps = 64;
 	let best = 0;
 	for (let i = 0; i <= steps; i++) if (at(i / steps) < at(best / steps)) best = i;
@@ -49,9 +48,9 @@ function bruteGap(one: number[][], two: number[][]): number {
 
 const keyed = (coverage: Coverage, gaps: ReturnType<typeof gapsWithin>) =>
 	Object.fromEntries(
-		Array.from(gaps.borders.a, (a, i) => [
-			[coverage.keys[a], coverage.keys[gaps.borders.b[i]]].sort().join('-'),
-			gaps.borders.metres[i],
+		Array.from(gaps.a, (a, i) => [
+			[coverage.keys[a], coverage.keys[gaps.b[i]]].sort().join('-'),
+			gaps.metres[i],
 		]),
 	);
 
@@ -104,7 +103,7 @@ describe('gaps between coasts', () => {
 		expect(Object.keys(keyed(coverage, all))).toEqual(['b-c']);
 		const short = gapsWithin(coverage, 5, borders, 1);
 		expect(short.withinKm).toBeLessThan(1.1);
-		expect(short.borders.a).toHaveLength(0);
+		expect(short.a).toHaveLength(0);
 	});
 	it('the Strait of Dover is some 33 km wide', async () => {
 		// 18 nautical miles from South Foreland to Cap Gris-Nez (from memory); the map is Natural Earth's

@@ -13,7 +13,7 @@ export type { Overlap } from './overlap.ts';
 export { bordersForSheet, standingsForSheet, type SheetBorderRules } from './for-sheet.ts';
 export { standingNames, standingUnder, type CountingRule, type Standing } from './standing.ts';
 export { withGaps, type Gaps } from './with-gaps.ts';
-export { gapsWithin, type Gaps as GapsFound } from './across-water.ts';
+export { gapsWithin, type WaterGaps } from './gaps-within.ts';
 export {
 	compareBorders,
 	type BorderChanges,

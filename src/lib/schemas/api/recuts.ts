@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { borderKinds } from '../../engines/borders/border-list.ts';
 import { finding, moment, regionKey } from './common.ts';
 import { question, remembered } from './sheets.ts';
 
@@ -44,7 +45,7 @@ const group = z.strictObject({
 });
 
 const side = z
-	.strictObject({ kind: z.enum(['line', 'point', 'water', 'hand']), metres: z.number() })
+	.strictObject({ kind: z.enum(borderKinds), metres: z.number() })
 	.nullable();
 const pairs = z.array(z.strictObject({ a: regionKey, b: regionKey, before: side, after: side }));
 

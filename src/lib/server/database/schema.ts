@@ -156,7 +156,7 @@ export interface FindingTable {
 	accepted_at: OptionalMoment;
 	/** ways to mend it */
 	offers: JSONColumnType<unknown[]> | null;
-	/** would join the borders it is about */
+	/** the tolerance in metres that would join the borders it is about */
 	tolerance_metres: number | null;
 }
 export type IntakeState =
