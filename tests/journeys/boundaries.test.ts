@@ -214,7 +214,7 @@ describe('boundaries as they come', () => {
 		expect(await beside().innerText()).toContain('12 mends in force');
 	}
 
-	it('are answered, mended, replaced and put back by keyboard alone', async () => {
+	it('are answered, mended, applied and put back by keyboard alone', async () => {
 		const press = async (target: Parameters<typeof tabTo>[1], key = 'Enter') => {
 			await tabTo(page, target, 'Tab', 400);
 			await page.keyboard.press(key);
