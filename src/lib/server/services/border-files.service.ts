@@ -32,7 +32,7 @@ export async function borderFile(
 	format: BorderFormat,
 	asker: AbortSignal,
 ): Promise<BorderFile> {
-	requireAccess(member, 'files.download');
+	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	const rules = documentOf(await draftOf(shop.db, sheet.id, sheet.revision));
 	const { keys, names, borders } = await boundaryView(shop.db, sheet.boundary_set_id);

@@ -7,7 +7,7 @@ import type { RequestHandler } from './$types';
 
 /** The borders that count as a graph in the DIMACS .col form. */
 export const GET = (async ({ locals, params, request }) => {
-	const member = memberFor(locals, 'files.download');
+	const member = memberFor(locals, 'sheet.read');
 	const number = Number(params.sheet);
 	return fileResponse(
 		await forPage(() => borderFile(workshop(), member, number, 'col', request.signal)),

@@ -7,7 +7,7 @@ import type { RequestHandler } from './$types';
 
 /** Every pair of the sheet as CSV, whether it counts or not. */
 export const GET = (async ({ locals, params, request }) => {
-	const member = memberFor(locals, 'files.download');
+	const member = memberFor(locals, 'sheet.read');
 	const number = Number(params.sheet);
 	return fileResponse(
 		await forPage(() => borderFile(workshop(), member, number, 'csv', request.signal)),
