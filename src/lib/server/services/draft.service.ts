@@ -176,6 +176,7 @@ const staleNote = (draft: DraftRow): DraftStale => ({
 	savedBy: personName(draft),
 	savedAt: draft.saved_at.toISOString(),
 	document: documentOf(draft),
+	boundarySetId: draft.boundary_set_id,
 });
 
 /** An earlier or the current draft, whole. */
@@ -188,7 +189,7 @@ export async function readDraft(
 	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	const draft = await draftOf(shop.db, sheet.id, revision);
-	const view = await boundaryView(shop.db, sheet.boundary_set_id);
+	const view = await boundaryView(shop.db, draft.boundary_set_id);
 	return {
 		...staleNote(draft),
 		document: draftDocument.parse(documentOf(draft)),
