@@ -18,4 +18,12 @@ export {
 	type SheetBorderRow,
 } from './sheet-rows.ts';
 export { standingNames, standingUnder, type CountingRule, type Standing } from './standing.ts';
-export { withGaps, type Gaps } from './with-gaps.ts';
+export { withGaps, type GapList } from './with-gaps.ts';
+export { gapsWithin, type Gaps } from './across-water.ts';
+export {
+	compareBorders,
+	type BorderChanges,
+	type KeyedBorders,
+	type PairChange,
+	type PairEntry,
+} from './compare-borders.ts';

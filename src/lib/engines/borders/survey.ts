@@ -24,6 +24,8 @@ export interface Survey {
 	crossings: Suspects['crossings'];
 	/** a place where so many regions meet that their point touches are left out, or null */
 	crowded: [number, number] | null;
+	/** all pairs across water up to this width are there; null when none were asked for */
+	waterKm: number | null;
 }
 
 /** The borders of a coverage with the overlaps and crossings that were found on the way. */
@@ -33,15 +35,19 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const blocks = new SegmentBlocks(coverage);
 	const places = meetings(coverage);
 	const crowded = crowdedPlace(places);
-	if (crowded) return { borders: tally.list(), overlaps: [], crossings: [], crowded };
+	if (crowded) {
+		return { borders: tally.list(), overlaps: [], crossings: [], crowded, waterKm: null };
+	}
 	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
 	for (const { a, b, metres, at } of overlaps) tally.add(a, b, 0, metres, at[0], at[1]);
 	const atSeam = addSeamLines(coverage, tally);
 	addTouches(coverage, places, tally);
 	for (const [a, b, at] of atSeam) if (!tally.has(a, b)) tally.add(a, b, 1, 0, ...at);
-	if (options.acrossWaterKm) addAcrossWater(coverage, blocks, options.acrossWaterKm, tally);
-	return { borders: tally.list(), overlaps, crossings: found.crossings, crowded };
+	const waterKm = options.acrossWaterKm
+		? addAcrossWater(coverage, blocks, options.acrossWaterKm, tally)
+		: null;
+	return { borders: tally.list(), overlaps, crossings: found.crossings, crowded, waterKm };
 }
 
 function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): Overlap[] {

@@ -11,4 +11,5 @@ export { coverageFaults } from './faults.ts';
 export { encodeCoverage, decodeCoverage } from './codec.ts';
 export { simplifyCoverage } from './simplify.ts';
 export { coverageToGeoJson } from './to-geojson.ts';
+export { piecesOf, type Piece } from './pieces.ts';
 export { sourceOf } from './byte-source.ts';

@@ -80,7 +80,6 @@ async function assemble(
 	const mended = options.mends?.length ? await mendLayer(read, options, stage) : null;
 	const { naming, matched } = mended ?? read;
 	const { coverage, survey } = matched;
-	const toleranceMetres = options.toleranceMetres ?? noiseMetres;
 	return {
 		status: 'accepted',
 		coverage,
@@ -94,7 +93,7 @@ async function assemble(
 			...ringFindings(read.repairs, naming, layer.format),
 			...read.matched.findings,
 			...(mended?.findings ?? []),
-			...faultFindings(matched, toleranceMetres),
+			...faultFindings(matched, options),
 		],
 		source: {
 			format: layer.format,
@@ -102,7 +101,7 @@ async function assemble(
 			crs,
 			encoding: layer.encoding,
 			features: layer.regions,
-			toleranceMetres,
+			toleranceMetres: options.toleranceMetres ?? noiseMetres,
 		},
 		found: foundIn(layer, crs, naming, sketch),
 	};

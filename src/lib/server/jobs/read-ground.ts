@@ -9,7 +9,9 @@ import {
 } from '../../engines/boundaries/index.ts';
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
+import type { PieceColumns } from '../../schemas/pieces.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
+import { pieceColumns } from './pieces.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import type { KnownAnswer } from './read-answered.ts';
 
@@ -36,6 +38,7 @@ export interface ReadGround {
 	options: BoundaryOptions;
 	/** earlier answers that were taken */
 	taken: KnownAnswer[];
+	pieces: PieceColumns;
 	planar: boolean;
 	planarWitness: PlanarityNote['witness'];
 }
@@ -55,6 +58,7 @@ export function groundOf(
 		attributeColumns: attributes.columns,
 		...{ source, found, options, taken, planar },
 		planarWitness: witness,
+		pieces: pieceColumns(coverage),
 	};
 }
 

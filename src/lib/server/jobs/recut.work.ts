@@ -1,4 +1,8 @@
-import { decodeCoverage, type BoundaryOptions, type Finding } from '../../engines/boundaries/index.ts';
+import {
+	decodeCoverage,
+	type BoundaryOptions,
+	type Finding,
+} from '../../engines/boundaries/index.ts';
 import { matchRegions, type RegionMatch } from '../../engines/boundaries/recut/index.ts';
 import type { BorderList } from '../../engines/borders/index.ts';
 import type { CarriedRow, RecutChange } from '../../schemas/recut.ts';

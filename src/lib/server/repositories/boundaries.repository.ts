@@ -223,7 +223,9 @@ export async function deleteUnusedBoundarySet(trx: Db, id: string): Promise<bool
 		.where(({ and, not, exists, selectFrom }) =>
 			and([
 				...(['sheets', 'measure_tables', 'proposals', 'drafts'] as const).map((table) =>
-					not(exists(selectFrom(table).select('boundary_set_id').where('boundary_set_id', '=', id))),
+					not(
+						exists(selectFrom(table).select('boundary_set_id').where('boundary_set_id', '=', id)),
+					),
 				),
 				...(['from_set', 'to_set'] as const).map((column) =>
 					not(exists(selectFrom('recuts').select('id').where(column, '=', id))),

@@ -1,6 +1,7 @@
 import type { Trx } from '../database/connection.ts';
 import type { ReadGround } from '../jobs/read-ground.ts';
 import { insertBoundarySet } from '../repositories/boundaries.repository.ts';
+import { insertPieces } from '../repositories/pieces.repository.ts';
 
 /** The file that a boundary set was read from, and for whom. */
 export interface StoredFile {
@@ -12,8 +13,12 @@ export interface StoredFile {
 }
 
 /** Stores an accepted reading whole, for an upload or a re-cut. */
-export const storeBoundarySet = (trx: Trx, file: StoredFile, read: ReadGround): Promise<string> =>
-	insertBoundarySet(
+export async function storeBoundarySet(
+	trx: Trx,
+	file: StoredFile,
+	read: ReadGround,
+): Promise<string> {
+	const id = await insertBoundarySet(
 		trx,
 		{
 			team_id: file.teamId,
@@ -33,3 +38,6 @@ export const storeBoundarySet = (trx: Trx, file: StoredFile, read: ReadGround): 
 		},
 		read.columns,
 	);
+	await insertPieces(trx, id, read.pieces);
+	return id;
+}

@@ -46,7 +46,10 @@ export async function applyRecut(
 }
 
 const savedMeanwhile = () =>
-	new Conflict('saved-meanwhile', 'Somebody else saved the sheet meanwhile; nothing was applied. Look, then try again.');
+	new Conflict(
+		'saved-meanwhile',
+		'Somebody else saved the sheet meanwhile; nothing was applied. Look, then try again.',
+	);
 
 /** Writes the plan, unless what it was worked out from has changed: then it answers null. */
 async function store(
@@ -98,7 +101,8 @@ async function storeDraft(
 	{ carried, outcome }: ApplyPlan,
 ): Promise<number> {
 	const revision = sheet.revision + 1;
-	const colouringId = outcome.colouring && (await insertColouring(trx, sheet.id, outcome.colouring));
+	const colouringId =
+		outcome.colouring && (await insertColouring(trx, sheet.id, outcome.colouring));
 	await insertDraft(trx, {
 		...{ sheetId: sheet.id, revision, document: carried.draft, colouringId },
 		...{ explanation: outcome.explanation, savedBy: member.userId },

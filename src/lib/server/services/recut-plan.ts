@@ -23,14 +23,15 @@ export async function carryBy(
 	decisions: RecutDecision[],
 ): Promise<{ carried: Carried; draft: DraftRow; measures: MeasureRow[]; view: BoundaryView }> {
 	const matching = await readMatching(shop.db, row.id);
-	if (!matching || !row.to_set) throw new Conflict('not-ready', 'It has not been read and compared.');
+	if (!matching || !row.to_set)
+		throw new Conflict('not-ready', 'It has not been read and compared.');
 	const { standing, draft, measures } = await standingRows(shop.db, sheet);
 	const before = await boundaryView(shop.db, sheet.boundary_set_id);
 	const view = await boundaryView(shop.db, row.to_set);
 	const outcome = await shop.pool.run('carryRecut', {
 		...{ matching: matching as unknown as RegionMatch, decisions, standing },
-		before: before.borders,
-		fresh: { borders: view.borders, columns: view.set.columns },
+		before: before.asRead,
+		fresh: { borders: view.asRead, columns: view.set.columns },
 	});
 	if (outcome.status === 'refused') {
 		throw new Unfit('unfit-decisions', outcome.reasons.slice(0, 5).join(' '), {
@@ -61,7 +62,12 @@ export async function planApply(
 ): Promise<ApplyPlan> {
 	const decisions = row.decisions as unknown as RecutDecision[];
 	const { carried, measures, view } = await carryBy(shop, sheet, row, decisions);
-	const outcome = await colourDraft(shop, view, carried.draft, carried.previous && [...carried.previous]);
+	const outcome = await colourDraft(
+		shop,
+		view,
+		carried.draft,
+		carried.previous && [...carried.previous],
+	);
 	const inks = await territoryInks(shop, sheet, view, carried);
 	return { sheet, row, carried, measures, outcome, inks };
 }
