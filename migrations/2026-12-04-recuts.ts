@@ -61,6 +61,12 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			primary key (boundary_set_id, level)
 		);
 
+		-- the regions that a draft and its colouring are about, for sheets that were given other boundaries
+		alter table drafts add column boundary_set_id uuid references boundary_sets;
+		update drafts set boundary_set_id = sheets.boundary_set_id from sheets where sheets.id = drafts.sheet_id;
+		alter table drafts alter column boundary_set_id set not null;
+		create index on drafts (boundary_set_id);
+
 		create table recuts (
 			id uuid primary key default gen_random_uuid(),
 			team_id uuid not null references teams on delete cascade,
@@ -75,6 +81,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			file_bytes bigint not null,
 			file_digest text,
 			options jsonb not null default '{}',
+			-- what it does, in one sentence
+			words text not null,
 			step text not null default '',
 			share double precision not null default 0,
 			attempts integer not null default 0,
@@ -101,6 +109,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			put_back_at timestamptz,
 			unique (sheet_id, number)
 		);
+		create index intakes_asking on intakes (updated_at) where state = 'asking';
+		create index recuts_asking on recuts (updated_at) where state = 'asking';
 		create index on recuts (file_digest);
 		create index on recuts (from_set);
 		create index on recuts (to_set);

@@ -5,6 +5,7 @@ import type { Found, Question } from '../engines/boundaries/question.ts';
 import type { Explanation, Proof } from '../engines/colouring/problem.ts';
 import type { Draft } from '../engines/editions/draft.ts';
 import type { Action } from '../server/access/roles.ts';
+import type { ReadingFields } from './upload.ts';
 
 /**
  * What a sheet's pages are given by the server. Regions and inks are numbered from 0 in the order of
@@ -50,6 +51,8 @@ export interface DeskBoundarySet {
 	found: Found | null;
 	/** the mends that were replayed when it was read */
 	mends: Mend[];
+	/** how it was read otherwise; what is absent was decided from the file */
+	options: ReadingFields;
 	/** how far across water the gaps have been measured, in kilometres */
 	gapsKm: number;
 	/** geometry thinned for the screen, coarsest first; none where the full geometry is small or older */
@@ -141,6 +144,8 @@ export interface DraftStale {
 	savedAt: string;
 	/** what they saved */
 	document: Draft;
+	/** the regions that it is about: others than before when the boundaries were replaced */
+	boundarySetId: string;
 }
 
 /** `GET sheets`, one row of the list */
@@ -180,12 +185,20 @@ export interface IntakeStatus {
 	remembered: RememberedAnswer[];
 }
 
+export type AnswerAbout = 'layer' | 'crs' | 'axes' | 'keys' | 'columns';
+
 /** What a member of the team answered about a file that looked the same. */
 export interface RememberedAnswer {
-	about: 'layer' | 'crs' | 'axes' | 'keys' | 'columns';
+	about: AnswerAbout;
 	/** what was answered, in words: `EPSG:25832`, `layer districts` */
 	words: string;
 	fileName: string;
 	answeredBy: string | null;
 	answeredAt: string;
+}
+
+/** An answer in the team's list, where it can be forgotten. */
+export interface RememberedRow extends RememberedAnswer {
+	/** names it together with `about` */
+	likeness: string;
 }

@@ -49,20 +49,35 @@ export interface RecutPage extends RecutRow {
 	hindrance: string | null;
 	/** null until it was read */
 	change: RecutChange | null;
+	/** what people decided about the matching */
+	decisions: RecutDecision[];
 	/** what followed and what did not: foreseen while it is ready, as it came once it is applied */
 	report: CarriedRow[];
+	/** what was done since it was applied and would be taken away by putting it back, in sentences */
+	loses: string[];
 }
 
 export interface RecutChange {
 	regions: { before: number; after: number };
 	/** how many regions before went which way */
 	counts: Record<RecutOutcome, number>;
-	/** all but plainly kept regions, doubtful ones first */
+	/** all but plainly kept regions, doubtful ones first; at most `mostListed` */
 	groups: RecutGroup[];
-	pairs: { gained: PairChange[]; lost: PairChange[]; changed: PairChange[] };
-	/** findings that are no longer there, and those that are new */
-	findings: { gone: Finding[]; come: Finding[] };
+	groupsLeftOut: number;
+	/** at most `mostListed` each; `counts` are whole */
+	pairs: {
+		gained: PairChange[];
+		lost: PairChange[];
+		changed: PairChange[];
+		counts: { gained: number; lost: number; changed: number };
+	};
+	/** findings that are no longer there, and those that are new; at most `mostFindings` each */
+	findings: { gone: Finding[]; come: Finding[]; counts: { gone: number; come: number } };
 }
+
+/** Longer lists are cut, and it is said how long they are. */
+export const mostListed = 2_000;
+export const mostFindings = 500;
 
 export type RecutOutcome = 'kept' | 'renamed' | 'split' | 'merged' | 'redrawn' | 'new' | 'gone';
 
@@ -73,6 +88,8 @@ export interface RecutGroup {
 	by: 'key' | 'area' | 'hand';
 	/** why somebody should look at it; null when it is sure */
 	doubt: string | null;
+	/** what happened, in plain sentences */
+	words: string;
 }
 
 export interface RecutRegion {
@@ -93,15 +110,26 @@ export interface PairChange {
 }
 
 export interface CarriedRow {
+	stage: 'draft' | 'territories' | 'measures';
+	/** a lock, a forbidden ink, a base, a measure ... */
 	what: string;
+	/** the old regions that it named, and the new ones that have it now */
 	keys: string[];
-	outcome: 'followed' | 'copied' | 'dropped' | 'changed';
+	now: string[];
+	/**
+	 * `doubled`: it said the same as another that stands; `settled`: several disagreed and the one with more
+	 * area was taken; `changed`: its figures were carried over
+	 */
+	outcome: 'followed' | 'copied' | 'doubled' | 'dropped' | 'settled' | 'changed';
 	/** one sentence */
 	words: string;
 }
 
-/** What somebody decides about the matching: an old region continues as these new ones (none: it is gone). */
+/**
+ * What somebody decides about the matching: an old region continues as these new ones (none: it is gone), or,
+ * where `before` is null, these new ones stand for no old one.
+ */
 export interface RecutDecision {
-	before: string;
+	before: string | null;
 	after: string[];
 }

@@ -36,6 +36,7 @@ const sheet: DeskSheet = {
 		columns: [],
 		found: null,
 		mends: [],
+		options: {},
 		gapsKm: 0,
 		levels: [],
 	},

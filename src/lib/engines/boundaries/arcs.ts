@@ -1,5 +1,6 @@
 import { GrowingInts } from '../geometry/growing.ts';
 import type { Outlines } from './outlines.ts';
+import { isKept, SegmentEnds } from './segment-ends.ts';
 import type { Segments } from './segments.ts';
 
 /** Segments chained into arcs between places where three or more meet; closed where none do. */
@@ -12,14 +13,11 @@ export interface Arcs {
 	right: Int32Array;
 }
 
-/** A segment with the same region on both sides is inside it (two parts that touch, or a spike): left out. */
-const isKept = (s: Segments, i: number) => s.left[i] !== s.right[i];
-
 export function chainArcs(outlines: Outlines, segments: Segments): Arcs {
-	const ends = segmentEnds(outlines.vertices, segments);
-	const chain = new ArcChain(segments, ends);
+	const ends = new SegmentEnds(outlines.vertices, segments);
+	const chain = new ArcChain(segments, ends, outlines.ringStarts.length);
 	for (let v = 0; v < outlines.vertices; v++) {
-		if (isNode(v, ends, segments)) chain.fromNode(v);
+		if (ends.isNode(v)) chain.fromNode(v);
 	}
 	for (let i = 0; i < segments.count; i++) {
 		if (isKept(segments, i)) chain.closedFrom(i, outlines.positions);
@@ -27,49 +25,9 @@ export function chainArcs(outlines: Outlines, segments: Segments): Arcs {
 	return chain.arcs();
 }
 
-interface SegmentEnds {
-	/** vertices + 1: first entry of each vertex in `list` */
-	offsets: Uint32Array;
-	list: Uint32Array;
-}
-
-function segmentEnds(vertices: number, segments: Segments): SegmentEnds {
-	const offsets = new Uint32Array(vertices + 1);
-	const { low, high } = segments;
-	for (let i = 0; i < segments.count; i++) {
-		if (!isKept(segments, i)) continue;
-		offsets[low[i] + 1]++;
-		offsets[high[i] + 1]++;
-	}
-	for (let v = 0; v < vertices; v++) offsets[v + 1] += offsets[v];
-	const list = new Uint32Array(offsets[vertices]);
-	const fill = offsets.slice(0, vertices);
-	for (let i = 0; i < segments.count; i++) {
-		if (!isKept(segments, i)) continue;
-		list[fill[low[i]]++] = i;
-		list[fill[high[i]]++] = i;
-	}
-	return { offsets, list };
-}
-
-/** Where an arc must end: not exactly two segments, or two that do not divide the same pair. */
-function isNode(v: number, ends: SegmentEnds, segments: Segments): boolean {
-	const first = ends.offsets[v];
-	const degree = ends.offsets[v + 1] - first;
-	if (degree !== 2) return degree > 0;
-	const a = ends.list[first];
-	const b = ends.list[first + 1];
-	const arriving = segments.high[a] === v;
-	const leaving = segments.low[b] === v;
-	const same = arriving === leaving;
-	return same
-		? segments.left[a] !== segments.left[b] || segments.right[a] !== segments.right[b]
-		: segments.left[a] !== segments.right[b] || segments.right[a] !== segments.left[b];
-}
-
 class ArcChain {
 	private used: Uint8Array;
-	private vertices = new GrowingInts();
+	private vertices: GrowingInts;
 	private starts = new GrowingInts();
 	private left = new GrowingInts();
 	private right = new GrowingInts();
@@ -77,14 +35,17 @@ class ArcChain {
 	constructor(
 		private segments: Segments,
 		private ends: SegmentEnds,
+		rings: number,
 	) {
 		this.used = new Uint8Array(segments.count);
+		this.vertices = new GrowingInts(segments.count + 4 * rings);
 	}
 
 	fromNode(node: number): void {
-		for (let k = this.ends.offsets[node]; k < this.ends.offsets[node + 1]; k++) {
-			const segment = this.ends.list[k];
-			if (!this.used[segment]) this.walk(node, segment);
+		const { ends, used } = this;
+		for (let k = 0; k < ends.degree(node); k++) {
+			const segment = ends.at(node, k);
+			if (!used[segment]) this.walk(node, segment);
 		}
 	}
 
@@ -92,7 +53,7 @@ class ArcChain {
 	closedFrom(segment: number, positions: Float64Array): void {
 		if (this.used[segment]) return;
 		const first = this.leastVertex(segment, positions);
-		this.walk(first, this.ends.list[this.ends.offsets[first]]);
+		this.walk(first, this.ends.at(first, 0));
 	}
 
 	arcs(): Arcs {
@@ -118,9 +79,8 @@ class ArcChain {
 			used[s] = 1;
 			v = segments.low[s] === v ? segments.high[s] : segments.low[s];
 			vertices.push(v);
-			if (v === from || isNode(v, ends, segments)) return;
-			const k = ends.offsets[v];
-			s = ends.list[k] === s ? ends.list[k + 1] : ends.list[k];
+			if (v === from || ends.isNode(v)) return;
+			s = ends.other(v, s);
 		}
 	}
 
@@ -133,8 +93,7 @@ class ArcChain {
 		do {
 			v = segments.low[s] === v ? segments.high[s] : segments.low[s];
 			if (isBefore(positions, v, least)) least = v;
-			const k = ends.offsets[v];
-			s = ends.list[k] === s ? ends.list[k + 1] : ends.list[k];
+			s = ends.other(v, s);
 		} while (v !== start);
 		return least;
 	}

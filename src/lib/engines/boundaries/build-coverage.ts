@@ -2,13 +2,13 @@ import { sweptKm2 } from '../geometry/areas.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { lineMetres } from '../geometry/ellipsoid.ts';
 import { GrowingInts } from '../geometry/growing.ts';
-import { doubleArea } from '../geometry/rings.ts';
-import { arcsByRegion, traceRings, type ArcRing } from './arc-rings.ts';
+import { arcsByRegion, traceRings } from './arc-rings.ts';
 import { chainArcs, type Arcs } from './arcs.ts';
 import { enclaves } from './enclaves.ts';
 import type { Outlines } from './outlines.ts';
-import { groupParts, type TracedRing } from './parts.ts';
+import { groupParts } from './parts.ts';
 import type { Segments } from './segments.ts';
+import { TracedRing } from './traced-ring.ts';
 
 /** Cuts noded outlines into shared arcs and puts the regions together from them again; both are answered. */
 export function buildCoverage(
@@ -62,9 +62,9 @@ function assembleRings(arcs: Arcs, outlines: Outlines) {
 	for (let r = 0; r < regions; r++) {
 		regionParts.push(partRings.length);
 		const halves = byRegion.list.subarray(byRegion.offsets[r], byRegion.offsets[r + 1]);
-		const traced = traceRings(halves, arcs, positions).map((ring) =>
-			traced1(ring, arcs, positions),
-		);
+		const traced = traceRings(halves, arcs, positions).map((ring) => {
+			return new TracedRing(ring, arcs, positions);
+		});
 		for (const part of groupParts(traced)) {
 			partRings.push(ringStarts.length);
 			for (const ring of part) {
@@ -82,29 +82,6 @@ function assembleRings(arcs: Arcs, outlines: Outlines) {
 		partRings: Uint32Array.from(partRings.taken()),
 		regionParts: Uint32Array.from(regionParts.taken()),
 	};
-}
-
-function traced1(ring: ArcRing, arcs: Arcs, positions: Float64Array): TracedRing {
-	let length = 0;
-	for (const half of ring) length += arcLength(arcs, half) - 1;
-	const points = new Float64Array(2 * length);
-	let at = 0;
-	for (const half of ring) {
-		const a = half >= 0 ? half : ~half;
-		const first = arcs.starts[a];
-		const last = arcs.starts[a + 1] - 1;
-		for (let k = 0; k < last - first; k++) {
-			const v = arcs.vertices[half >= 0 ? first + k : last - k];
-			points[at++] = positions[2 * v];
-			points[at++] = positions[2 * v + 1];
-		}
-	}
-	return { arcs: ring, points, doubleArea: doubleArea(points, 0, length) };
-}
-
-function arcLength(arcs: Arcs, half: number): number {
-	const a = half >= 0 ? half : ~half;
-	return arcs.starts[a + 1] - arcs.starts[a];
 }
 
 /** One pass over the arcs: what lies between an arc and the equator is added on its left, taken on its right. */

@@ -7,7 +7,7 @@ import type { BoundaryOptions } from './options.ts';
 import { outlinesOf, type RingRepairs } from './outlines-of.ts';
 import type { RawLayer } from './raw-layer.ts';
 import { Refusal } from './refusal.ts';
-import { relabel } from './relabel.ts';
+import { relabel, ringsOf } from './relabel.ts';
 import { settleParallel } from './settle-parallel.ts';
 
 export interface MatchedLayer {
@@ -30,9 +30,10 @@ export function matchLayer(
 	stage: (message: string, share: number) => void,
 ): MatchedLayer {
 	const kept: boolean[] = new Array(layer.regions).fill(true);
+	const { outlines, repairs } = outlinesOf(layer, west);
+	layer.releasePoints();
 	for (;;) {
-		const { outlines, repairs } = outlinesOf(layer, west, kept);
-		const noded = nodeOutlines(outlines);
+		const noded = nodeOutlines(ringsOf(outlines, kept));
 		const tongues = tonguesOf(settleParallel(noded.segments), noded);
 		for (const f of withoutSegments(noded, layer.regions)) kept[f] = false;
 		const naming = nameRegions(layer.table, kept, options);

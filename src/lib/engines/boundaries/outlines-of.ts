@@ -16,16 +16,15 @@ export interface RingRepairs {
 /**
  * Takes the rings over: closes them, drops repeated vertices, leaves out those without area, and turns
  * them so that their region is on the left (outer rings anticlockwise, holes clockwise).
- * Each feature is taken for a region of its own; those not in `kept` are left out.
+ * Each feature is taken for a region of its own. The layer's points are not needed afterwards.
  */
 export function outlinesOf(
 	layer: RawLayer,
 	west: number,
-	kept: boolean[],
 ): { outlines: Outlines; repairs: RingRepairs } {
 	const points = layer.points.items;
 	const total = layer.points.length / 2;
-	const table = new VertexTable(west, Math.ceil(total * 0.6));
+	const table = new VertexTable(west, Math.ceil(total * 0.6), typicalStep(points, total));
 	const ringVertices = new Uint32Array(total);
 	const ringStarts: number[] = [];
 	const ringRegion: number[] = [];
@@ -37,7 +36,6 @@ export function outlinesOf(
 	};
 	let used = 0;
 	for (const ring of eachRing(layer)) {
-		if (!kept[ring.feature]) continue;
 		if (!isClosed(points, ring.from, ring.to)) repairs.closed.add(ring.feature);
 		const start = used;
 		for (let i = ring.from; i < ring.to; i++) {
@@ -85,6 +83,17 @@ export function* eachRing(layer: RawLayer) {
 			}
 		}
 	}
+}
+
+/** The middle one of the distances between points that follow each other, from a thousand of them. */
+function typicalStep(points: Float64Array, total: number): number {
+	const steps: number[] = [];
+	for (let i = 1; i < total; i += 1 + Math.floor(total / 1000)) {
+		const east = Math.abs(points[2 * i] - points[2 * i - 2]);
+		steps.push(Math.max(east, Math.abs(points[2 * i + 1] - points[2 * i - 1])));
+	}
+	steps.sort((a, b) => a - b);
+	return steps[steps.length >> 1] ?? 0;
 }
 
 function isClosed(points: Float64Array, from: number, to: number): boolean {

@@ -1,15 +1,9 @@
 import { sideOfRing } from '../geometry/rings.ts';
-
-/** A traced ring with its points: outer when its area is positive. */
-export interface TracedRing {
-	arcs: number[];
-	/** interleaved, first point not repeated */
-	points: Float64Array;
-	doubleArea: number;
-}
+import type { TracedRing } from './traced-ring.ts';
 
 /** Groups the rings of a region into parts: each outer ring, largest first, followed by its holes. */
 export function groupParts(rings: TracedRing[]): TracedRing[][] {
+	if (rings.length === 1 && rings[0].doubleArea > 0) return [rings];
 	const outers = rings.filter((ring) => ring.doubleArea > 0);
 	outers.sort((a, b) => b.doubleArea - a.doubleArea);
 	const parts = outers.map((outer) => [outer]);

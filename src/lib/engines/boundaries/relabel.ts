@@ -16,25 +16,33 @@ export function relabel(noded: Noded, regionOf: Int32Array, regions: number): No
 }
 
 function ringsOfRegions(outlines: Outlines, regionOf: Int32Array, regions: number): Outlines {
+	const { ringRegion, ...rest } = ringsOf(
+		outlines,
+		Array.from(regionOf, (region) => region >= 0),
+	);
+	return { ...rest, regions, ringRegion: ringRegion.map((feature) => regionOf[feature]) };
+}
+
+/** The outlines of the features that are kept; the same arrays when all are. */
+export function ringsOf(outlines: Outlines, kept: boolean[]): Outlines {
 	const { ringVertices, ringStarts, ringRegion } = outlines;
+	if (ringRegion.every((feature) => kept[feature])) return outlines;
 	const vertices = new Uint32Array(ringVertices.length);
 	const starts = new Uint32Array(ringStarts.length);
 	const owners = new Uint32Array(ringRegion.length);
 	let used = 0;
 	let rings = 0;
 	for (let ring = 0; ring < ringRegion.length; ring++) {
-		const region = regionOf[ringRegion[ring]];
-		if (region < 0) continue;
+		if (!kept[ringRegion[ring]]) continue;
 		const run = ringVertices.subarray(ringStarts[ring], ringStarts[ring + 1]);
 		vertices.set(run, used);
 		starts[rings] = used;
-		owners[rings++] = region;
+		owners[rings++] = ringRegion[ring];
 		used += run.length;
 	}
 	starts[rings] = used;
 	return {
 		...outlines,
-		regions,
 		ringVertices: vertices.subarray(0, used),
 		ringStarts: starts.subarray(0, rings + 1),
 		ringRegion: owners.subarray(0, rings),

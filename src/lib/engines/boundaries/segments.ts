@@ -2,8 +2,9 @@ import type { Outlines } from './outlines.ts';
 
 /**
  * Undirected segments between vertices, each once, with the region on either side. A segment is found
- * through the chain of its lower vertex, so no second hash is needed. Two regions on the same side of
- * one segment overlap: the second gets a parallel segment of its own.
+ * through the chain of its lower vertex, so no second hash is needed; mostly not even that, since a border
+ * walked again meets its segments in the order of their numbers. Two regions on the same side of one
+ * segment overlap: the second gets a parallel segment of its own.
  */
 export interface Segments {
 	count: number;
@@ -41,6 +42,7 @@ class SegmentIndex {
 	private left: Int32Array;
 	private right: Int32Array;
 	private count = 0;
+	private previous = 0;
 	private twins: number[] = [];
 
 	constructor(vertices: number, most: number) {
@@ -57,16 +59,20 @@ class SegmentIndex {
 		const low = forward ? from : to;
 		const high = forward ? to : from;
 		const side = forward ? this.left : this.right;
+		const { previous } = this;
+		if (this.joins(previous - 1, low, high, side, region)) return;
+		if (this.joins(previous + 1, low, high, side, region)) return;
 		let twin = false;
 		for (let s = this.head[low]; s >= 0; s = this.next[s]) {
 			if (this.high[s] !== high) continue;
 			if (side[s] < 0) {
 				side[s] = region;
+				this.previous = s;
 				return;
 			}
 			twin = true;
 		}
-		const s = this.count++;
+		const s = (this.previous = this.count++);
 		if (twin) this.twins.push(s);
 		this.low[s] = low;
 		this.high[s] = high;
@@ -74,6 +80,15 @@ class SegmentIndex {
 		this.right[s] = forward ? -1 : region;
 		this.next[s] = this.head[low];
 		this.head[low] = s;
+	}
+
+	/** Takes a side of a segment when it is the one between these vertices and the side is free. */
+	private joins(s: number, low: number, high: number, side: Int32Array, region: number): boolean {
+		if (s < 0 || s >= this.count) return false;
+		if (this.low[s] !== low || this.high[s] !== high || side[s] >= 0) return false;
+		side[s] = region;
+		this.previous = s;
+		return true;
 	}
 
 	segments(): Segments {

@@ -64,6 +64,11 @@ export const operations = {
 		...{ method: 'GET', path: '/intakes/{intake}', scope: 'sheets:read', status: 200 },
 		...{ summary: 'How far an uploaded file is.', answer: sheets.intake },
 	},
+	answerIntake: {
+		...{ method: 'POST', path: '/intakes/{intake}/answer', scope: 'sheets:write', status: 202 },
+		summary: 'Answer what the file does not say; it is read on with the answer.',
+		...{ json: sheets.answer, answer: sheets.intake, refusals: [409, 413, 415, 422] },
+	},
 	readSheet: {
 		...{ method: 'GET', path: sheet, scope: 'sheets:read', status: 200 },
 		...{ summary: 'A sheet: its regions, findings and editions.', answer: sheets.sheetDetail },

@@ -3,9 +3,10 @@ import type { Moment, OptionalMoment, Whole } from './columns.ts';
 
 /** Row types of what belongs to a boundary set beside regions and borders, and of re-cuts. */
 
+export type AnswerAbout = 'layer' | 'crs' | 'axes' | 'keys' | 'columns';
 export interface ReadingAnswerTable {
 	team_id: string;
-	about: 'layer' | 'crs' | 'axes' | 'keys' | 'columns';
+	about: AnswerAbout;
 	/** of the question, or of what was found in the file */
 	likeness: string;
 	options: JSONColumnType<Record<string, unknown>>;
@@ -67,13 +68,14 @@ export interface RecutTable {
 	file_bytes: Whole;
 	file_digest: string | null;
 	options: JSONColumnType<Record<string, unknown>, string | undefined, string>;
+	words: string;
 	step: Generated<string>;
 	share: Generated<number>;
 	attempts: Generated<number>;
 	claim: string | null;
 	heard_at: OptionalMoment;
 	question: JSONColumnType<Record<string, unknown>> | null;
-	remembered: JSONColumnType<Record<string, unknown>> | null;
+	remembered: JSONColumnType<unknown[]> | null;
 	refusal: JSONColumnType<Record<string, unknown>> | null;
 	comparison: JSONColumnType<Record<string, unknown>> | null;
 	matching: JSONColumnType<Record<string, unknown>> | null;

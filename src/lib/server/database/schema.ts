@@ -182,8 +182,8 @@ export interface IntakeTable {
 	sheet_id: string | null;
 	/** what the reader cannot know, while it asks */
 	question: JSONColumnType<Record<string, unknown>> | null;
-	/** an earlier answer that was taken for this file too */
-	remembered: JSONColumnType<Record<string, unknown>> | null;
+	/** earlier answers that were taken for this file too */
+	remembered: JSONColumnType<unknown[]> | null;
 }
 export interface PaletteTable {
 	id: Generated<string>;
@@ -218,6 +218,8 @@ export interface ColouringTable {
 export interface DraftTable {
 	sheet_id: string;
 	revision: number;
+	/** the regions it is about: an earlier draft may be of earlier boundaries */
+	boundary_set_id: string;
 	document: JSONColumnType<Record<string, unknown>>;
 	colouring_id: string | null;
 	explanation: JSONColumnType<Record<string, unknown>> | null;

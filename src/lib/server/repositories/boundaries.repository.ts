@@ -215,17 +215,20 @@ export async function acceptFinding(
 	return numUpdatedRows > 0n;
 }
 
-/** Removes a set that no sheet, no table and no proposal uses any more; false when one still does. */
+/** Removes a set that no sheet, draft, table, proposal or re-cut uses any more; false when one still does. */
 export async function deleteUnusedBoundarySet(trx: Db, id: string): Promise<boolean> {
 	const { numDeletedRows } = await trx
 		.deleteFrom('boundary_sets')
 		.where('id', '=', id)
 		.where(({ and, not, exists, selectFrom }) =>
-			and(
-				(['sheets', 'measure_tables', 'proposals'] as const).map((table) =>
-					not(exists(selectFrom(table).select('id').where('boundary_set_id', '=', id))),
+			and([
+				...(['sheets', 'measure_tables', 'proposals', 'drafts'] as const).map((table) =>
+					not(exists(selectFrom(table).select('boundary_set_id').where('boundary_set_id', '=', id))),
 				),
-			),
+				...(['from_set', 'to_set'] as const).map((column) =>
+					not(exists(selectFrom('recuts').select('id').where(column, '=', id))),
+				),
+			]),
 		)
 		.executeTakeFirst();
 	return numDeletedRows > 0n;

@@ -5,13 +5,13 @@ import type {
 	SheetRow,
 	SourceNote,
 } from '../../schemas/desk.ts';
+import type { BoundaryOptions } from '../../engines/boundaries/index.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import {
 	acceptFinding as markAccepted,
-	deleteUnusedBoundarySet,
 	readAttribute,
 	readFindings,
 	readGeometry,
@@ -19,6 +19,7 @@ import {
 import { listLevels, readLevel } from '../repositories/display-levels.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
 import { measureFiles } from '../repositories/measures.repository.ts';
+import { holdRecutsOf } from '../repositories/recuts.repository.ts';
 import {
 	deleteSheet,
 	holdSheet,
@@ -32,6 +33,7 @@ import { measureSummary } from './measures.service.ts';
 import { deskColouring } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
+import { removeSet } from './recut-held.ts';
 import { dropUnused } from './stored-files.ts';
 
 type Reading = Pick<Workshop, 'db'>;
@@ -90,6 +92,14 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 export const rightsOf = (member: Member): Action[] =>
 	actions.filter((action) => mayDo(member, action));
 
+/** How a set was read: what was said about the file, and its mends apart. */
+function recipeOf({
+	options,
+}: BoundaryView['set']): Pick<DeskSheet['boundarySet'], 'options' | 'mends'> {
+	const { mends = [], limits: _, ...fields } = options as BoundaryOptions;
+	return { options: fields, mends };
+}
+
 const boundarySetNote = ({ set }: BoundaryView): Omit<DeskSheet['boundarySet'], 'levels'> => ({
 	id: set.id,
 	fileName: set.file_name,
@@ -99,7 +109,7 @@ const boundarySetNote = ({ set }: BoundaryView): Omit<DeskSheet['boundarySet'], 
 	source: set.source as unknown as SourceNote,
 	columns: set.columns,
 	found: set.found as unknown as DeskSheet['boundarySet']['found'],
-	mends: (set.options.mends ?? []) as DeskSheet['boundarySet']['mends'],
+	...recipeOf(set),
 	gapsKm: set.gaps_km,
 });
 
@@ -203,7 +213,7 @@ export async function nameSheet(
 	});
 }
 
-/** Deletes a sheet that was never issued; editions are kept for good. */
+/** Deletes a sheet that was never issued, with its re-cuts; editions are kept for good. */
 export async function removeSheet(
 	shop: Pick<Workshop, 'db' | 'files'>,
 	member: Member,
@@ -216,14 +226,15 @@ export async function removeSheet(
 		if ((await listEditions(trx, sheet.id)).length > 0) {
 			throw new Conflict('issued', 'A sheet with issued editions cannot be deleted.');
 		}
-		const { set } = await boundaryView(trx, sheet.boundary_set_id);
+		const recuts = await holdRecutsOf(trx, sheet.id);
 		const tables = await measureFiles(trx, sheet.id);
 		await deleteSheet(trx, sheet.id);
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'sheet.deleted', subject, { sheet: number, name: sheet.name });
-		if (await deleteUnusedBoundarySet(trx, set.id)) {
-			await dropUnused(trx, shop.files, set.file_digest);
+		const digests = new Set([...tables, ...recuts.digests]);
+		for (const set of new Set([sheet.boundary_set_id, ...recuts.sets])) {
+			for (const digest of await removeSet(trx, set)) digests.add(digest);
 		}
-		for (const digest of tables) await dropUnused(trx, shop.files, digest);
+		for (const digest of [...digests].sort()) await dropUnused(trx, shop.files, digest);
 	});
 }

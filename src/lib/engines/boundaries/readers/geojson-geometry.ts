@@ -26,7 +26,7 @@ export function readGeometry(json: JsonBytes, layer: RawLayer, level = 0): void 
 			readGeometryMember(json, layer, name, members, level);
 		} while (json.another(byte.closeObject));
 	}
-	checkGeometry(json, members);
+	checkGeometry(json, members, layer);
 }
 
 export function readGeometryMember(
@@ -42,13 +42,14 @@ export function readGeometryMember(
 	else json.skip();
 }
 
-/** The type and the nesting of the coordinates must agree. */
-export function checkGeometry(json: JsonBytes, members: GeometryMembers): void {
+/** The type and the nesting of the coordinates must agree. Points and lines are counted. */
+export function checkGeometry(json: JsonBytes, members: GeometryMembers, layer: RawLayer): void {
 	const wanted = members.type === 'Polygon' ? 3 : members.type === 'MultiPolygon' ? 4 : 0;
 	if (members.depth >= 3 && members.depth !== wanted && !isLines(members)) {
 		const message = `its coordinates do not fit the type "${members.type ?? 'missing'}"`;
 		throw notGeoJson(json, message);
 	}
+	if (members.depth > 0 && wanted === 0) layer.stray(members.type ?? 'Point');
 }
 
 const isLines = (members: GeometryMembers) =>
@@ -86,19 +87,14 @@ function readPart(json: JsonBytes, layer: RawLayer): void {
 
 function readRing(json: JsonBytes, layer: RawLayer): void {
 	json.take(byte.open);
-	if (json.peek() === byte.close) {
-		json.at++;
-		return;
-	}
+	if (json.takes(byte.close)) return;
 	do {
-		if (json.peek() !== byte.open) throw notPosition(json);
-		json.at++;
+		if (!json.takes(byte.open)) throw notPosition(json);
 		const x = json.number();
-		if (json.peek() !== byte.comma) throw notPosition(json);
-		json.at++;
+		if (!json.takes(byte.comma)) throw notPosition(json);
 		layer.point(x, json.number());
-		while (json.another(byte.close)) json.number();
-	} while (json.another(byte.close));
+		if (!json.takes(byte.close)) while (json.another(byte.close)) json.number();
+	} while (json.takes(byte.comma) || json.another(byte.close));
 }
 
 /** A JSON list, `item` called at the start of each entry. */

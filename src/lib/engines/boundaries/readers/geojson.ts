@@ -16,6 +16,12 @@ import { Window } from './window.ts';
 export class IsTopology extends Error {}
 
 const recordSeparator = 30;
+/**
+ * Memory is asked for ahead, for as many points as the file holds when each takes this many bytes, and
+ * for no more than so many points: the system hands it out only as it is used.
+ */
+const usualPointBytes = 20;
+const mostAhead = 30_000_000;
 const topologyMembers = new Set(['arcs', 'objects', 'transform']);
 
 /**
@@ -28,7 +34,7 @@ export async function readGeoJson(
 	limits: Limits,
 	watch: Watch,
 ): Promise<RawLayer> {
-	const layer = new RawLayer(limits, Math.min(Math.ceil(source.size / 32), 4_000_000));
+	const layer = new RawLayer(limits, Math.min(Math.ceil(source.size / usualPointBytes), mostAhead));
 	layer.format = 'GeoJSON';
 	layer.crsByFormat = 'EPSG:4326';
 	const json = new JsonBytes(limits.nesting);
@@ -188,7 +194,7 @@ class RootReader {
 		const { type } = this.members;
 		if (this.lone && this.sawFeatures) throw notGeoJson(this.json, 'a feature holds features');
 		if (this.lone) {
-			if (type !== 'Feature') checkGeometry(this.json, this.members);
+			if (type !== 'Feature') checkGeometry(this.json, this.members, this.layer);
 			this.layer.table.add(this.lone.id, this.lone.properties);
 			this.json.feature = 0;
 		} else if (!this.sawFeatures) {
@@ -213,8 +219,5 @@ function legacyCrs(value: unknown): string | null {
 function startsWrong(json: JsonBytes): Refusal {
 	const start = json.bytes[json.at];
 	if (start === byte.open) return notGeoJson(json, 'it begins with a list');
-	return new Refusal(
-		'unsupported-format',
-		'The file is neither GeoJSON, TopoJSON nor a zipped shapefile.',
-	);
+	return new Refusal('unsupported-format', 'The file is neither GeoJSON nor TopoJSON.');
 }

@@ -64,34 +64,46 @@ export class JsonBytes {
 		return c === byte.comma;
 	}
 
-	/** Exactly the nearest double to the decimal written, as `Number` would give. */
+	/** Takes the next byte that is not white space if it is this one. */
+	takes(wanted: number): boolean {
+		if (this.bytes[this.at] !== wanted && this.peek() !== wanted) return false;
+		this.at++;
+		return true;
+	}
+
+	/**
+	 * Exactly the nearest double to the decimal written, as `Number` would give: a whole number below 2^53
+	 * divided by a power of ten that is itself exact is rounded once.
+	 */
 	number(): number {
-		const start = (this.peek(), this.at);
 		const bytes = this.bytes;
+		if (!(bytes[this.at] > 32)) this.peek();
+		const start = this.at;
 		let at = start;
-		const negative = bytes[at] === 45;
-		if (negative) at++;
-		let mantissa = 0;
-		let digits = 0;
-		let scale = 0;
 		let c = bytes[at];
-		for (; c >= 48 && c <= 57; c = bytes[++at]) {
-			mantissa = mantissa * 10 + (c - 48);
-			digits++;
-		}
+		const negative = c === 45;
+		if (negative) c = bytes[++at];
+		const first = at;
+		let whole = 0;
+		for (; c >= 48 && c <= 57; c = bytes[++at]) whole = whole * 10 + (c - 48);
+		let digits = at - first;
+		let fraction = 0;
+		let scale = 0;
 		if (c === 46) {
-			const first = at + 1;
-			for (c = bytes[++at]; c >= 48 && c <= 57; c = bytes[++at])
-				mantissa = mantissa * 10 + (c - 48);
-			scale = at - first;
+			const point = ++at;
+			for (c = bytes[at]; c >= 48 && c <= 57; c = bytes[++at]) fraction = fraction * 10 + (c - 48);
+			scale = at - point;
 			if (scale === 0 && at < bytes.length) digits = 0;
 		}
 		if (at >= bytes.length) this.ended();
 		if (digits === 0) throw this.badNumber();
 		this.at = at;
-		if (mantissa < 9007199254740992 && scale < 23 && c !== 101 && c !== 69) {
-			const value = mantissa / powers[scale];
-			return negative ? -value : value;
+		if (scale < 23 && c !== 101 && c !== 69) {
+			const mantissa = whole * powers[scale] + fraction;
+			if (mantissa < 9007199254740992) {
+				const value = mantissa / powers[scale];
+				return negative ? -value : value;
+			}
 		}
 		return this.longNumber(start);
 	}

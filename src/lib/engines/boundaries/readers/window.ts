@@ -2,17 +2,18 @@ import { Refusal } from '../refusal.ts';
 import type { ByteSource } from '../options.ts';
 import type { JsonBytes } from './json-bytes.ts';
 
-const usualBytes = 4 * 1024 * 1024;
+const usualBytes = 1024 * 1024;
 
 /**
  * Slides the reader's window along a file: what was not used is kept, and what follows is added.
  * When nothing at all was used the next helping is as large as the window, so that a feature of any
- * size is started again only a few times.
+ * size is started again only a few times. The window's memory is used again for every helping.
  */
 export class Window {
 	done = false;
 	private chunks: AsyncIterator<Uint8Array>;
 	private readBytes = 0;
+	private memory = new Uint8Array(2 * usualBytes);
 
 	constructor(
 		private source: ByteSource,
@@ -30,22 +31,33 @@ export class Window {
 		}
 		const kept = json.bytes.subarray(json.at);
 		const helping = Math.max(usualBytes, kept.length);
-		const pieces: Uint8Array[] = [kept];
-		let added = 0;
-		while (added < helping && !json.last) {
+		this.reserve(kept.length + helping);
+		this.memory.set(kept);
+		let length = kept.length;
+		while (length < kept.length + helping && !json.last) {
 			const { value, done } = await this.chunks.next();
 			if (done) json.last = true;
 			else {
-				pieces.push(value);
-				added += value.length;
+				this.reserve(length + value.length, length);
+				this.memory.set(value, length);
+				length += value.length;
 			}
 		}
+		const added = length - kept.length;
 		json.base += json.at;
 		json.at = 0;
-		json.bytes = joined(pieces, kept.length + added);
+		json.bytes = this.memory.subarray(0, length);
 		if (this.readBytes === 0) this.checkStart();
 		this.readBytes += added;
 		return true;
+	}
+
+	/** Makes room for so many bytes; the first `held` are kept. */
+	private reserve(bytes: number, held = 0): void {
+		if (bytes <= this.memory.length) return;
+		const larger = new Uint8Array(Math.ceil(bytes * 1.5));
+		larger.set(this.memory.subarray(0, held));
+		this.memory = larger;
 	}
 
 	share(): number {
@@ -62,16 +74,4 @@ export class Window {
 			throw new Refusal('not-json', 'The file is in UTF-16; GeoJSON is written in UTF-8.');
 		}
 	}
-}
-
-function joined(pieces: Uint8Array[], length: number): Uint8Array {
-	const filled = pieces.filter((piece) => piece.length > 0);
-	if (filled.length === 1) return filled[0];
-	const all = new Uint8Array(length);
-	let at = 0;
-	for (const piece of pieces) {
-		all.set(piece, at);
-		at += piece.length;
-	}
-	return all;
 }

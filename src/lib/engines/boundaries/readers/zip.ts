@@ -26,7 +26,7 @@ export class ZipArchive {
 		}
 		const blown = this.entries.find(isBlownUp);
 		if (blown) throw blownUp(blown);
-		const nested = this.entries.find((entry) => /\.(zip|gz|7z|rar|tar)$/i.test(entry.name));
+		const nested = this.entries.find((entry) => /\.(zip|kmz|gz|7z|rar|tar)$/i.test(entry.name));
 		if (nested) {
 			const message = `The archive holds another archive ("${nested.name}"); unpack it first.`;
 			throw new Refusal('unsupported-format', message);
