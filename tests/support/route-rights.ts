@@ -27,6 +27,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]', 'action rename', 'layout.edit'],
 	['/sheets/[sheet]', 'action delete', 'sheet.delete'],
 	['/sheets/[sheet]/boundaries', 'action accept', 'findings.accept'],
+	['/sheets/[sheet]/columns', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/draft', 'POST', 'sheet.read'],
 	['/sheets/[sheet]/drafts/[revision]', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/editions', 'action issue', 'edition.issue'],
