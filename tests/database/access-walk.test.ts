@@ -99,6 +99,7 @@ import {
 } from '../../src/lib/server/services/measure-upkeep.service.ts';
 import { uploadTable } from '../../src/lib/server/services/measure-upload.service.ts';
 import { deskMeasures, measureTables } from '../../src/lib/server/services/measures.service.ts';
+import { sheetColumns, sheetForPage } from '../../src/lib/server/services/sheet-columns.service.ts';
 import {
 	acceptFinding,
 	deskSheet,
@@ -235,6 +236,8 @@ const walk: Walk = {
 	sendLetters: ['handover.edit', (member) => sendLetters(shop, member, 99, 1, { press: id })],
 	withdrawHandover: ['handover.edit', (member) => withdrawHandover(shop, member, 99, 1)],
 	deskSheet: ['sheet.read', (member) => deskSheet(shop, member, 99)],
+	sheetColumns: ['sheet.read', (member) => sheetColumns(shop, member, 99)],
+	sheetForPage: ['sheet.read', (member) => sheetForPage(shop, member, 99)],
 	draftSvg: ['sheet.read', (member) => draftSvg(shop, member, 99, 'typical')],
 	editionFile: ['files.download', (member) => editionFile(shop, member, 99, 1, 'sheet.svg')],
 	intakeStatus: ['sheet.read', (member) => intakeStatus(shop, member, id)],
