@@ -80,7 +80,7 @@ function cut(noded: Noded, keys: string[], names: string[], options: Options) {
 	const crossed = new Set(survey.crossings.map(({ region }) => region));
 	const others = [...looseHoles(coverage), ...doubledParts(coverage, segments, survey.doubtful)];
 	survey.crossings.push(...others.filter(({ region }) => !crossed.has(region)));
-	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
+	const holes = () => holesBetween(coverage, arcs, survey.overlaps.length > 0);
 	return { coverage, survey, holes };
 }
 

@@ -1,7 +1,7 @@
 import { booleanPointInPolygon } from '@turf/turf';
 import { describe, expect, it } from 'vitest';
 import { dirtyMaps } from '../../../../../tests/support/dirty-maps.ts';
-import { allValid, partsOf, unionAndSum } from '../../../../../tests/support/geos.ts';
+import { allValid, partsOf, unionAndSum } from '../../../../../tests/support/geos-areas.ts';
 import {
 	acceptedFeatures,
 	box,

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { unionAndSum } from '../../../../../tests/support/geos.ts';
+import { unionAndSum } from '../../../../../tests/support/geos-areas.ts';
 import { acceptedFeatures, pairsOf } from '../../../../../tests/support/read-boundaries.ts';
 import { defects, featuresOf, shakenLand } from '../../../../../tests/support/spoilt-land.ts';
 import { coverageFaults, coverageToGeoJson } from '../index.ts';
