@@ -56,11 +56,16 @@ export async function mendLayer(
 		} else findings.push(notApplied(mend, outcome.why));
 	}
 	if (bench.draft.isChanged) rematch();
-	const known = new Set(naming.keys);
-	for (const finding of findings) {
-		finding.regions = finding.regions.filter((key) => known.has(key));
-	}
-	return { naming, matched, findings };
+	return { naming, matched, findings: aboutKnown(findings, naming.keys) };
+}
+
+/** The findings with only those regions that are still there once the map is mended. */
+export function aboutKnown(findings: Finding[], keys: string[]): Finding[] {
+	const known = new Set(keys);
+	return findings.map((finding) => ({
+		...finding,
+		regions: finding.regions.filter((key) => known.has(key)),
+	}));
 }
 
 const benchFor = (matched: Matched, clip: Clip, corners: number): Bench => ({

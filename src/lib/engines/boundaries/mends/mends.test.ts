@@ -116,6 +116,9 @@ describe('steps in a row', () => {
 		const three = [box('a', 0, 0, 1, 1), box('b', 1, 0, 2, 1), box('c', 2, 0, 3, 1)];
 		const { read } = await mended(three, [{ kind: 'merge', key: 'b', into: 'a' }]);
 		expect(read.coverage.keys).toEqual(['a', 'c']);
+		const known = new Set(read.coverage.keys);
+		const spoken = read.findings.flatMap(({ regions }) => regions);
+		expect(spoken.every((key) => known.has(key))).toBe(true);
 		expect(read.attributes.rows).toHaveLength(2);
 		expect(pairsOf(read)).toEqual(['a-c line']);
 		expect(read.coverage.partRings).toHaveLength(3); // two parts and the end
