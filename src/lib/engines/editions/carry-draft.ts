@@ -52,7 +52,8 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	const hasBorder = fresh.borders ? pairTest(fresh.borders, regions) : null;
 	const struck = carryHandBorders(ground, draft.struck, 'struck', hasBorder);
 	const added = carryHandBorders(ground, draft.added, 'added', null);
-	const rules = { pointTouches: draft.pointTouches, struck: struck.list, added: added.list };
+	const { pointTouches, leastMetres, waterKm } = draft;
+	const rules = { pointTouches, leastMetres, waterKm, struck: struck.list, added: added.list };
 	const mustDiffer = fresh.borders
 		? pairTest(bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules }), regions)
 		: null;

@@ -8,6 +8,7 @@ import { paletteRequest, paletteResponse } from './check-palette.ts';
 import { territoriesRequest, territoriesResponse } from './check-territories.ts';
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
+import { recutOperations } from './recut-operations.ts';
 import * as sheets from './sheets.ts';
 import { territoryOperations } from './territory-operations.ts';
 
@@ -77,6 +78,13 @@ export const operations = {
 		...{ method: 'GET', path: `${sheet}/borders`, scope: 'sheets:read', status: 200 },
 		...{ summary: 'The borders that bind on a sheet.', answer: sheets.sheetBorders },
 	},
+	readBorderFile: {
+		...{ method: 'GET', path: `${sheet}/borders/{file}`, scope: 'sheets:read', status: 200 },
+		summary:
+			'borders.csv: every pair with its standing and reasons; borders.col: the pairs that count, in the DIMACS form.',
+		answer: ['text/csv', 'text/plain'],
+		refusals: [503],
+	},
 	readColouring: {
 		...{ method: 'GET', path: `${sheet}/colouring`, scope: 'sheets:read', status: 200 },
 		...{
@@ -124,6 +132,7 @@ export const operations = {
 		answer: handovers.handoverDetail,
 	},
 	...territoryOperations,
+	...recutOperations,
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
 		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },

@@ -9,8 +9,10 @@ import {
 } from '../../engines/boundaries/index.ts';
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
+import type { PieceColumns } from '../../schemas/pieces.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
 import { packedLevels, type PackedLevel } from './display-levels.work.ts';
+import { pieceColumns } from './pieces.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import type { KnownAnswer } from './read-answered.ts';
 
@@ -32,6 +34,7 @@ export interface ReadGround {
 	geometry: Uint8Array;
 	/** thinned for the screen, coarsest first */
 	levels: PackedLevel[];
+	pieces: PieceColumns;
 	attributeColumns: string[];
 	source: SourceNote;
 	found: Found;
@@ -56,6 +59,7 @@ export function groundOf(
 		columns: { regions, borders: borderColumns(borders), findings },
 		geometry: encodeCoverage(coverage),
 		levels: packedLevels(coverage),
+		pieces: pieceColumns(coverage),
 		attributeColumns: attributes.columns,
 		...{ source, found, options, taken, planar },
 		planarWitness: witness,

@@ -1,4 +1,8 @@
-import { decodeCoverage, type BoundaryOptions, type Finding } from '../../engines/boundaries/index.ts';
+import {
+	decodeCoverage,
+	type BoundaryOptions,
+	type Finding,
+} from '../../engines/boundaries/index.ts';
 import { matchRegions, type RegionMatch } from '../../engines/boundaries/recut/index.ts';
 import type { BorderList } from '../../engines/borders/index.ts';
 import type { CarriedRow, RecutChange } from '../../schemas/recut.ts';
@@ -32,7 +36,7 @@ export type RecutOutcome =
 	  } & ReadGround);
 
 /** Reads boundaries and compares them with those that stand; nothing is coloured before they are applied. */
-export async function readRecut({ input, port }: Task<RecutInput>): Promise<RecutOutcome> {
+export async function readRecutFile({ input, port }: Task<RecutInput>): Promise<RecutOutcome> {
 	const tell = teller(port);
 	tell('Reading', 0);
 	const source = fileSource(input.path, input.fileName);
@@ -49,6 +53,6 @@ export async function readRecut({ input, port }: Task<RecutInput>): Promise<Recu
 	tell('Carrying decisions over', 0.92);
 	const fresh = { borders: result.borders, columns: result.attributes.columns };
 	const { report } = carryOver(matching, input.standing, fresh);
-	tell('Packing', 0.95);
+	tell('Thinning borders for the screen and packing', 0.94);
 	return { status: 'accepted', ...groundOf(result, reading), matching, change, report };
 }

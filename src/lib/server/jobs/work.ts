@@ -1,10 +1,13 @@
 /** Everything that runs in a thread, by name: called through a `Pool`, in the web process and the worker. */
+export { writeBorders } from './border-files.work.ts';
 export { colourDraft, recheck } from './colour.work.ts';
+export { findPieces } from './pieces.work.ts';
+export { measureGaps } from './gaps.work.ts';
 export { inkTerritories } from './ink-territories.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
 export { judgePlan, rebalancePlan } from './rebalance.work.ts';
 export { readFile } from './read.work.ts';
-export { readRecut } from './recut.work.ts';
+export { readRecutFile } from './recut.work.ts';
 export { carryRecut } from './recut-carry.work.ts';
 export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';

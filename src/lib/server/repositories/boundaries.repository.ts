@@ -89,8 +89,8 @@ async function insertFindings(
 ): Promise<void> {
 	const rows = findings.map(({ at, offers, toleranceMetres, ...finding }) => ({
 		...finding,
-		offers: offers ? JSON.stringify(offers) : null,
 		tolerance_metres: toleranceMetres ?? null,
+		offers: offers ? JSON.stringify(offers) : null,
 		boundary_set_id: id,
 		lon: at?.[0] ?? null,
 		lat: at?.[1] ?? null,

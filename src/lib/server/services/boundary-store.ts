@@ -2,6 +2,7 @@ import type { Trx } from '../database/connection.ts';
 import type { ReadGround } from '../jobs/read-ground.ts';
 import { insertBoundarySet } from '../repositories/boundaries.repository.ts';
 import { insertLevels } from '../repositories/display-levels.repository.ts';
+import { insertPieces } from '../repositories/pieces.repository.ts';
 
 /** The file that a boundary set was read from, and for whom. */
 export interface StoredFile {
@@ -19,6 +20,7 @@ export async function storeBoundarySet(
 	read: ReadGround,
 ): Promise<string> {
 	const id = await insertBoundarySet(trx, noteOf(file, read), read.columns);
+	await insertPieces(trx, id, read.pieces);
 	await insertLevels(trx, id, read.levels);
 	return id;
 }

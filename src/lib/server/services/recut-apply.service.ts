@@ -2,6 +2,7 @@ import { isDeepStrictEqual } from 'node:util';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
+import { findBoundarySet } from '../repositories/boundaries.repository.ts';
 import { moveTables, writeFigures } from '../repositories/recut-figures.repository.ts';
 import { changeRecut } from '../repositories/recuts.repository.ts';
 import { giveBoundaries, insertColouring, insertDraft } from '../repositories/sheets.repository.ts';
@@ -9,6 +10,7 @@ import { insertTerritoryDraft } from '../repositories/territories.repository.ts'
 import { sheetOf } from './draft.service.ts';
 import { Conflict } from './outcomes.ts';
 import { figuresDigest, figuresOf, type Before } from './recut-before.ts';
+import { rememberColumns } from './reading-answers.service.ts';
 import { recordRecut, withRecut, type Held } from './recut-held.ts';
 import { planApply, type ApplyPlan } from './recut-plan.ts';
 import { presentMeasures } from './recut-standing.ts';
@@ -46,7 +48,10 @@ export async function applyRecut(
 }
 
 const savedMeanwhile = () =>
-	new Conflict('saved-meanwhile', 'Somebody else saved the sheet meanwhile; nothing was applied. Look, then try again.');
+	new Conflict(
+		'saved-meanwhile',
+		'Somebody else saved the sheet meanwhile; nothing was applied. Look, then try again.',
+	);
 
 /** Writes the plan, unless what it was worked out from has changed: then it answers null. */
 async function store(
@@ -74,9 +79,20 @@ async function store(
 		before: JSON.stringify(before),
 		report: JSON.stringify(plan.carried.report),
 	});
+	await rememberChoice(trx, member, held);
 	const detail = { regions: plan.carried.change.regions.after, revision: before.wrote.draft };
 	await recordRecut(trx, member, 'applied', sheet.number, row, detail);
 	return { revision: before.wrote.draft };
+}
+
+/** Columns that were tried and dropped are nothing to remember; those of the boundaries that stand are. */
+async function rememberChoice(trx: Trx, member: Member, { row }: Held): Promise<void> {
+	const taken = (row.remembered ?? []) as { about: string }[];
+	const set = row.to_set ? await findBoundarySet(trx, row.to_set) : undefined;
+	if (row.kind === 'mends' || taken.some(({ about }) => about === 'columns')) return;
+	const given = { teamId: member.team.id, userId: member.userId, fileName: row.file_name };
+	const likeness = String(set?.found?.likeness ?? '');
+	await rememberColumns(trx, { ...given, likeness }, row.options);
 }
 
 async function isStillSo(trx: Trx, { sheet, row }: Held, plan: ApplyPlan): Promise<boolean> {
@@ -98,7 +114,8 @@ async function storeDraft(
 	{ carried, outcome }: ApplyPlan,
 ): Promise<number> {
 	const revision = sheet.revision + 1;
-	const colouringId = outcome.colouring && (await insertColouring(trx, sheet.id, outcome.colouring));
+	const colouringId =
+		outcome.colouring && (await insertColouring(trx, sheet.id, outcome.colouring));
 	await insertDraft(trx, {
 		...{ sheetId: sheet.id, revision, document: carried.draft, colouringId },
 		...{ explanation: outcome.explanation, savedBy: member.userId },

@@ -1,6 +1,6 @@
 import { error } from '@sveltejs/kit';
 import { memberFor } from '$lib/server/access/guard';
-import { isHeld, notModified } from '$lib/server/bytes';
+import { coverageResponse } from '$lib/server/coverage-response';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
 import { displayLevel } from '$lib/schemas/display-level';
@@ -18,16 +18,5 @@ export const GET = (async ({ locals, params, request, url }) => {
 	const geometry = await forPage(() =>
 		sheetGeometry(workshop(), member, Number(params.sheet), level.data),
 	);
-	// the address outlives the boundary set, so the browser asks, and is mostly told that it has it
-	const headers = { 'cache-control': 'private, no-cache' };
-	if (isHeld(request, geometry.tag)) return notModified(geometry.tag, headers);
-	const bytes = await forPage(() => geometry.read());
-	return new Response(bytes as Uint8Array<ArrayBuffer>, {
-		headers: {
-			...headers,
-			etag: `"${geometry.tag}"`,
-			'content-type': 'application/octet-stream',
-			'content-length': String(bytes.byteLength),
-		},
-	});
+	return coverageResponse(request, geometry);
 }) satisfies RequestHandler;
