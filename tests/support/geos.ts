@@ -77,6 +77,22 @@ export class Geos {
 		return km2;
 	}
 
+	/** Common area in square units of the coordinates and the length around it. */
+	commonInPlane(a: number, b: number): { area: number; outline: number } {
+		let [area, outline] = [0, 0];
+		for (const ring of this.lists(this.geos.GEOSIntersection(a, b))) {
+			if (ring.length < 4) continue;
+			let turned = 0;
+			for (let i = 1; i < ring.length; i++) {
+				const [x1, y1, x2, y2] = [...ring[i - 1], ...ring[i]];
+				turned += (x1 - ring[0][0]) * (y2 - ring[0][1]) - (x2 - ring[0][0]) * (y1 - ring[0][1]);
+				outline += Math.hypot(x2 - x1, y2 - y1);
+			}
+			area += Math.abs(turned) / 2;
+		}
+		return { area, outline };
+	}
+
 	/** The lists of points in a geometry's well-known text. */
 	private lists(geometry: number): number[][][] {
 		const { geos } = this;
