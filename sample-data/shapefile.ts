@@ -5,13 +5,24 @@ import { gridText, toGrid, type District } from './survey.ts';
 
 const polygonType = 5;
 
+/** A reference system: how to get there, and what the .prj says of it (null: there is none). */
+interface System {
+	project: (position: Point) => Point;
+	system: string | null;
+}
+const surveyGrid: System = { project: toGrid, system: gridText };
+
 /**
- * The districts as a zipped shapefile on the survey's grid; text in windows-1252, said by the table's
- * language byte. Source: ESRI Shapefile Technical Description, July 1998.
+ * The districts as a zipped shapefile, on the survey's grid unless told otherwise; text in windows-1252,
+ * said by the table's language byte. Source: ESRI Shapefile Technical Description, July 1998.
  */
-export function shapefileZip(districts: readonly District[], name: string): Uint8Array {
-	const records = districts.map(({ polygons }) => polygonRecord(polygons));
-	const bounds = box(districts.flatMap(({ polygons }) => polygons.flat(2).map(toGrid)));
+export function shapefileZip(
+	districts: readonly District[],
+	name: string,
+	{ project, system }: System = surveyGrid,
+): Uint8Array {
+	const records = districts.map(({ polygons }) => polygonRecord(polygons, project));
+	const bounds = box(districts.flatMap(({ polygons }) => polygons.flat(2).map(project)));
 	const mainLength = 100 + records.reduce((sum, record) => sum + 8 + record.length, 0);
 	const main = header(mainLength, bounds);
 	const index = header(100 + 8 * records.length, bounds);
@@ -21,7 +32,7 @@ export function shapefileZip(districts: readonly District[], name: string): Uint
 			[`${name}.shp`]: shp,
 			[`${name}.shx`]: shx,
 			[`${name}.dbf`]: table(districts),
-			[`${name}.prj`]: new TextEncoder().encode(gridText),
+			...(system && { [`${name}.prj`]: new TextEncoder().encode(system) }),
 		},
 		{ level: 9, mtime: '2026-01-01T00:00:00' },
 	);
@@ -55,8 +66,8 @@ function header(length: number, bounds: number[]): Uint8Array {
 }
 
 /** Shapefiles turn outer rings clockwise and holes anticlockwise: each ring is written backwards. */
-function polygonRecord(polygons: Point[][][]): Uint8Array {
-	const rings = polygons.flat().map((ring) => [...ring].reverse().map(toGrid));
+function polygonRecord(polygons: Point[][][], project: System['project']): Uint8Array {
+	const rings = polygons.flat().map((ring) => [...ring].reverse().map(project));
 	const points = rings.flat();
 	const view = new DataView(new ArrayBuffer(44 + 4 * rings.length + 16 * points.length));
 	view.setInt32(0, polygonType, true);

@@ -10,8 +10,8 @@ describe('problemOf', () => {
 		const borders = {
 			a: Uint32Array.of(0, 0, 1, 2),
 			b: Uint32Array.of(1, 2, 2, 3),
-			kind: Uint8Array.of(0, 1, 0, 0),
-			metres: Float64Array.of(5, 0, 7, 9),
+			kind: Uint8Array.of(0, 1, 0, 4),
+			metres: Float64Array.of(5, 0, 7, 900),
 			at: new Float64Array(8),
 		};
 		const draft = blankDraft({
@@ -20,6 +20,8 @@ describe('problemOf', () => {
 			alike: [['a', 'd']],
 			apart: [['b', 'd']],
 			pointTouches: true,
+			leastMetres: 6,
+			waterKm: 1,
 			struck: [{ a: 'b', b: 'c', reason: 'a lake' }],
 			added: [{ a: 'a', b: 'd', reason: 'a ferry' }],
 			seed: 7,

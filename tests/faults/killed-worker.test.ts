@@ -87,7 +87,7 @@ describe('what is read twice counts once', () => {
 		const before = await sheetList(shop, member);
 		const file = await shop.files.local(late?.file_digest ?? '');
 		const outcome = await shop.pool.run('readFile', {
-			...{ path: file.path, fileName: 'late.geojson', options: {}, title: 'Late' },
+			...{ path: file.path, fileName: 'late.geojson', options: {}, answers: [], title: 'Late' },
 		});
 		if (outcome.status !== 'accepted') throw new Error('the file is good');
 		const claim = { id, claim: late?.claim ?? '' };

@@ -16,6 +16,8 @@ export const blankDraft = (changes: Partial<Draft> = {}): Draft => ({
 	alike: [],
 	apart: [],
 	pointTouches: false,
+	leastMetres: 0,
+	waterKm: null,
 	struck: [],
 	added: [],
 	seed: 0,

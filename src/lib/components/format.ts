@@ -4,6 +4,7 @@ const tenth = new Intl.NumberFormat('en-GB', {
 	minimumFractionDigits: 1,
 	maximumFractionDigits: 1,
 });
+const digits = new Intl.NumberFormat('en-GB', { maximumSignificantDigits: 2 });
 const day = new Intl.DateTimeFormat('en-GB', {
 	day: 'numeric',
 	month: 'long',
@@ -24,7 +25,7 @@ export const share = (value: number): string =>
 
 /** metres, in the unit a reader would choose */
 export const length = (metres: number): string =>
-	metres < 1000 ? `${whole.format(metres)} m` : `${kilometres(metres)} km`;
+	metres < 1000 ? `${(metres < 10 ? digits : whole).format(metres)} m` : `${kilometres(metres)} km`;
 
 /** metres as a bare figure in kilometres: one decimal below 1,000 km */
 export const kilometres = (metres: number): string =>
@@ -47,9 +48,9 @@ export const date = (value: Date | string): string => day.format(new Date(value)
 export const clock = (value: Date | string): string =>
 	new Date(value).toLocaleTimeString('en-GB', { hour: '2-digit', minute: '2-digit' });
 
+const threeDigits = new Intl.NumberFormat('en-GB', { maximumSignificantDigits: 3 });
 const hundredth = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 2 });
-const digits = new Intl.NumberFormat('en-GB', { maximumSignificantDigits: 3 });
 
 /** A figure as it was measured, its unit behind it: "12,480", "3.75 h", "0.0125 FTE". */
 export const figure = (value: number, unit = ''): string =>
-	`${(Math.abs(value) < 1 ? digits : hundredth).format(value)}${unit && ` ${unit}`}`;
+	`${(Math.abs(value) < 1 ? threeDigits : hundredth).format(value)}${unit && ` ${unit}`}`;

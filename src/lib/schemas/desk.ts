@@ -1,8 +1,11 @@
 import type { BorderList } from '../engines/borders/border-list.ts';
 import type { Finding } from '../engines/boundaries/finding.ts';
+import type { Mend } from '../engines/boundaries/mends/mend.ts';
+import type { Found, Question } from '../engines/boundaries/question.ts';
 import type { Explanation, Proof } from '../engines/colouring/problem.ts';
 import type { Draft } from '../engines/editions/draft.ts';
 import type { Action } from '../server/access/roles.ts';
+import type { ReadingFields } from './upload.ts';
 
 /**
  * What a sheet's pages are given by the server. Regions and inks are numbered from 0 in the order of
@@ -44,6 +47,24 @@ export interface DeskBoundarySet {
 	planarWitness: PlanarWitness | null;
 	source: SourceNote;
 	columns: string[];
+	/** what was recognised in the file; null for sets read before it was kept */
+	found: Found | null;
+	/** the mends that were replayed when it was read */
+	mends: Mend[];
+	/** how it was read otherwise; what is absent was decided from the file */
+	options: ReadingFields;
+	/** how far across water the gaps have been measured, in kilometres */
+	gapsKm: number;
+	/** geometry thinned for the screen, coarsest first; none where the full geometry is small or older */
+	levels: DisplayLevelNote[];
+}
+
+/** `GET sheets/[sheet]/geometry?level=n`; 1 is the coarsest. */
+export interface DisplayLevelNote {
+	level: number;
+	/** detail smaller than a square with sides as long as this is left out */
+	toleranceMetres: number;
+	points: number;
 }
 
 /** Regions that no plane drawing can join as their borders do: `paths` run from hub to hub. */
@@ -123,6 +144,8 @@ export interface DraftStale {
 	savedAt: string;
 	/** what they saved */
 	document: Draft;
+	/** the regions that it is about: others than before when the boundaries were replaced */
+	boundarySetId: string;
 }
 
 /** `GET sheets`, one row of the list */
@@ -144,7 +167,7 @@ export interface IntakeStatus {
 	fileName: string;
 	fileBytes: number;
 	sheetName: string;
-	state: 'waiting' | 'reading' | 'done' | 'refused' | 'cancelled' | 'failed';
+	state: 'waiting' | 'reading' | 'asking' | 'done' | 'refused' | 'cancelled' | 'failed';
 	/** what is being done, in words */
 	step: string;
 	/** 0 to 1 */
@@ -156,4 +179,26 @@ export interface IntakeStatus {
 	refusal: { code: string; message: string; findings: Finding[] } | null;
 	/** number of the sheet, when done */
 	sheet: number | null;
+	/** what the reader cannot know, while the state is `asking` */
+	question: Question | null;
+	/** earlier answers that were taken for this file too */
+	remembered: RememberedAnswer[];
+}
+
+export type AnswerAbout = 'layer' | 'crs' | 'axes' | 'keys' | 'columns';
+
+/** What a member of the team answered about a file that looked the same. */
+export interface RememberedAnswer {
+	about: AnswerAbout;
+	/** what was answered, in words: `EPSG:25832`, `layer districts` */
+	words: string;
+	fileName: string;
+	answeredBy: string | null;
+	answeredAt: string;
+}
+
+/** An answer in the team's list, where it can be forgotten. */
+export interface RememberedRow extends RememberedAnswer {
+	/** names it together with `about` */
+	likeness: string;
 }

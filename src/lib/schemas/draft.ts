@@ -7,6 +7,9 @@ import { papers } from '../engines/sheet/layout.ts';
 /** Widest map that a plan of 100,000 regions can ask for. */
 const mostRules = 100_000;
 
+/** Furthest across water that a sheet can ask about; the earth is 20,004 km from pole to pole. */
+export const mostWaterKm = 200;
+
 const key = z.string().min(1).max(400);
 const inkNumber = z.int().min(0).max(255);
 const reason = z.string().max(1_000);
@@ -59,6 +62,8 @@ export const draftDocument = z.strictObject({
 	alike: z.array(z.tuple([key, key])).max(mostRules),
 	apart: z.array(z.tuple([key, key])).max(mostRules),
 	pointTouches: z.boolean(),
+	leastMetres: z.number().min(0).max(1_000_000).default(0),
+	waterKm: z.number().min(0).max(mostWaterKm).nullable().default(null),
 	struck: z.array(handBorder).max(mostRules),
 	added: z.array(handBorder).max(mostRules),
 	seed: z.int().min(0).max(0xffffffff),

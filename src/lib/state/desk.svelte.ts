@@ -1,13 +1,21 @@
 import { getContext, setContext, type Snippet } from 'svelte';
-import { bordersForSheet } from '$lib/engines/borders';
+import {
+	bordersForSheet,
+	kindCode,
+	standingsForSheet,
+	type SheetBorderRules,
+} from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
+import type { Area } from '$lib/engines/sheet';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
 import { Colourer, type ColourReply } from './colourer';
+import type { FinerGround } from './desk-drawing';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
+import { Flatness } from './flatness.svelte';
 import { inkUse } from './ink-use';
 import type { Keeper } from './kept-drafts';
 import { judgePalette } from './palette-judgement';
@@ -15,7 +23,7 @@ import { colouringParts, problemOf } from './problem-of-draft';
 import { rebase } from './rebase';
 import { rehearsals } from './rehearsals';
 import { linkRegions, neighboursOf } from './region-links';
-import { numberRegions, standings } from './rules-in-force';
+import { numberRegions } from './rules-in-force';
 import type { SaveDraft } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
 import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
@@ -31,6 +39,8 @@ export interface DeskStart {
 	/** says what was found, in one sentence; the engine's own words */
 	sentence: (result: ColouringResult, sheet: DeskSheet, draft: Draft) => string;
 }
+
+const gap = kindCode('gap');
 
 /** Everything on the desk of one sheet: what the server gave, the draft on top of it, what is selected. */
 export class Desk {
@@ -67,19 +77,47 @@ export class Desk {
 	working = $state(false);
 	/** the engine ended without an answer: what it said */
 	failure = $state('');
+	/** whether the borders that count can be drawn in a plane */
+	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
+	/** finer lines for the part of the sheet that is looked at, on a canvas */
+	finer: FinerGround | null = $state.raw(null);
+	/** asks for them: an area of the paper, and pixels to a hundredth of a millimetre */
+	refine: ((area: Area, pixelsPerUnit: number) => void) | null = null;
+	/** how large each region shows, mm; null until it has been measured */
+	sizesMm: Float64Array | null = $state.raw(null);
 	/** why the sheet could not be drawn here; '' while all is well */
 	drawFailure = $state('');
 
 	numbers = $derived(numberRegions(this.sheet.regions.key));
-	standing = $derived.by(() => standings(this.sheet.borders, this.draft.document, this.numbers));
+	/** the rule for borders, part by part: a lock changes the document and none of these */
+	#pointTouches = $derived.by(() => this.draft.document.pointTouches);
+	#leastMetres = $derived.by(() => this.draft.document.leastMetres);
+	#waterKm = $derived.by(() => this.draft.document.waterKm);
+	#struck = $derived.by(() => this.draft.document.struck);
+	#added = $derived.by(() => this.draft.document.added);
+	borderRules: SheetBorderRules = $derived({
+		pointTouches: this.#pointTouches,
+		leastMetres: this.#leastMetres,
+		waterKm: this.#waterKm,
+		struck: this.#struck,
+		added: this.#added,
+	});
+	standing = $derived.by(() =>
+		standingsForSheet(this.sheet.regions.key, this.sheet.borders, this.borderRules),
+	);
 	/** the borders that ask for two inks, those added by hand among them */
 	countedBorders = $derived.by(() => {
 		const { regions, borders } = this.sheet;
-		const { pointTouches, struck, added } = this.draft.document;
-		return bordersForSheet(regions.key, borders, { pointTouches, struck, added });
+		return bordersForSheet(regions.key, borders, this.borderRules);
 	});
-	links = $derived(linkRegions(this.sheet.regions.key.length, this.sheet.borders));
+	/** who lies next to whom; a gap that was only measured joins nobody until it counts */
+	links = $derived.by(() => {
+		const { regions, borders } = this.sheet;
+		const joins = (border: number) =>
+			borders.kind[border] !== gap || this.standing[border] === 'counts';
+		return linkRegions(regions.key.length, borders, joins);
+	});
 	neighbours = $derived(
 		this.selected === null ? [] : neighboursOf(this.selected, this.sheet.borders, this.links),
 	);
@@ -89,7 +127,7 @@ export class Desk {
 			this.inks,
 			this.sheet.borders,
 			this.standing,
-			this.drawn?.sizesMm ?? null,
+			this.sizesMm,
 		),
 	);
 	/** what is planned on the sheet now, when it is territories */
@@ -113,6 +151,7 @@ export class Desk {
 		this.#start = start;
 		this.sheet = start.sheet;
 		this.address = start.address;
+		this.flatness = new Flatness(start.sheet.boundarySet.planar);
 		this.userName = start.userName;
 		this.answer = start.sheet.colouring;
 		this.#savedInks = start.sheet.lastInks && Int32Array.from(start.sheet.lastInks);
@@ -183,9 +222,8 @@ export class Desk {
 		else if (open) this.panel = 'region';
 	}
 
-	nameOf(region: number): string {
-		return this.sheet.regions.name[region] || this.sheet.regions.key[region];
-	}
+	nameOf = (region: number): string =>
+		this.sheet.regions.name[region] || this.sheet.regions.key[region];
 
 	/** Stops a colouring that takes long; what is on the sheet stays. */
 	stopWorking() {

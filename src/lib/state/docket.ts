@@ -1,9 +1,9 @@
-import { borderKinds } from '$lib/engines/borders/border-list';
+import { isAcross, kindCode } from '$lib/engines/borders/border-list';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { DeskColouring, DeskFinding, DeskSheet } from '$lib/schemas/desk';
 import type { MarkKind } from '$lib/components/Mark.svelte';
 import { count, counted, date } from '$lib/components/format';
-import type { Standing } from './rules-in-force';
+import type { Standing } from '$lib/engines/borders/standing';
 
 /** A run of the words of a stage; with `to` it leads to the place its number speaks of. */
 export interface DocketWords {
@@ -40,6 +40,8 @@ export interface DocketState {
 	sheet: DeskSheet;
 	draft: Draft;
 	standing: readonly Standing[];
+	/** about the graph of the borders that count */
+	planar: boolean;
 	answer: DeskColouring | null;
 	working: boolean;
 	palette: { mark: MarkKind | null; sentence: string };
@@ -104,15 +106,22 @@ function boundaries({ sheet, draft }: DocketState): Said {
 	};
 }
 
-function borders({ sheet, draft, standing }: DocketState): Said {
-	const of = (kind: (typeof borderKinds)[number]) =>
-		sheet.borders.kind.reduce((sum, code) => sum + Number(borderKinds[code] === kind), 0);
-	const points = of('point');
-	const struck = standing.filter((one) => one === 'struck').length;
+function borders({ sheet, draft, standing, planar }: DocketState): Said {
+	const { kind } = sheet.borders;
+	const of = (found: (code: number) => boolean) =>
+		kind.reduce((sum, code) => sum + Number(found(code)), 0);
+	const are = (one: Standing) => standing.reduce((sum, each) => sum + Number(each === one), 0);
+	const points = of((code) => code === kindCode('point'));
+	const [short, struck] = [are('too-short'), are('struck')];
+	const across = standing.reduce(
+		(sum, one, border) => sum + Number(one === 'counts' && isAcross(kind[border])),
+		0,
+	);
 	const parts = [
-		`${count(of('line'))} by line`,
+		`${count(of((code) => code === kindCode('line')))} by line`,
+		short ? `${count(short)} of them too short to count` : '',
 		points ? `${count(points)} by point${draft.pointTouches ? '' : ' (not counted)'}` : '',
-		of('water') ? `${count(of('water'))} across water` : '',
+		across ? `${count(across)} across water` : '',
 		struck ? `${count(struck)} struck out` : '',
 		draft.added.length ? `${count(draft.added.length)} added by hand` : '',
 	];
@@ -120,7 +129,7 @@ function borders({ sheet, draft, standing }: DocketState): Said {
 		{ text: parts.filter(Boolean).join(', '), to: '#borders' },
 		{ text: '.' },
 	];
-	if (!sheet.boundarySet.planar) words.push({ text: 'Four inks not guaranteed', to: '#planar' });
+	if (!planar) words.push({ text: 'Four inks not guaranteed', to: '#planar' });
 	return { mark: 'clear', words };
 }
 

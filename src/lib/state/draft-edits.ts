@@ -73,6 +73,14 @@ export const countPointTouches =
 	(pointTouches: boolean) =>
 	(draft: Draft): Draft => ({ ...draft, pointTouches });
 
+export const countLinesFrom =
+	(leastMetres: number) =>
+	(draft: Draft): Draft => ({ ...draft, leastMetres });
+
+export const countWaterUpTo =
+	(waterKm: number | null) =>
+	(draft: Draft): Draft => ({ ...draft, waterKm });
+
 type Pair = { a: string; b: string };
 const samePair = (one: Pair, other: Pair) =>
 	(one.a === other.a && one.b === other.b) || (one.a === other.b && one.b === other.a);

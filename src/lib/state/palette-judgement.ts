@@ -3,7 +3,7 @@ import type { Ink, PaletteVerdict, Reader, WeakBorder } from '$lib/engines/palet
 import type { BorderList } from '$lib/engines/borders/border-list';
 import type { MarkKind } from '$lib/components/Mark.svelte';
 import { touchingInks } from './ink-use';
-import type { Standing } from './rules-in-force';
+import type { Standing } from '$lib/engines/borders/standing';
 
 export interface PaletteJudgement {
 	mark: MarkKind | null;

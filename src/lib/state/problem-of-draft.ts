@@ -11,6 +11,8 @@ export const colouringParts = (draft: Draft): readonly unknown[] => [
 	draft.alike,
 	draft.apart,
 	draft.pointTouches,
+	draft.leastMetres,
+	draft.waterKm,
 	draft.struck,
 	draft.added,
 	draft.seed,

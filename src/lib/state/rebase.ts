@@ -23,6 +23,13 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 				mine.pointTouches,
 				theirs.pointTouches,
 			),
+			leastMetres: pick(
+				'shortest line that counts',
+				base.leastMetres,
+				mine.leastMetres,
+				theirs.leastMetres,
+			),
+			waterKm: pick('gap that counts', base.waterKm, mine.waterKm, theirs.waterKm),
 			struck: members(base.struck, mine.struck, theirs.struck),
 			added: members(base.added, mine.added, theirs.added),
 			seed: pick('seed', base.seed, mine.seed, theirs.seed),

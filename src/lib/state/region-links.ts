@@ -6,17 +6,26 @@ export interface RegionLinks {
 	borders: Uint32Array;
 }
 
-/** In: borders between regions 0..count-1. Out: each border twice, under either region, in list order. */
-export function linkRegions(count: number, { a, b }: Pick<BorderList, 'a' | 'b'>): RegionLinks {
+/**
+ * In: borders between regions 0..count-1, and which of them join. Out: each of those twice, under either
+ * region, in list order.
+ */
+export function linkRegions(
+	count: number,
+	{ a, b }: Pick<BorderList, 'a' | 'b'>,
+	joins: (border: number) => boolean = () => true,
+): RegionLinks {
 	const starts = new Uint32Array(count + 1);
 	for (let border = 0; border < a.length; border++) {
+		if (!joins(border)) continue;
 		starts[a[border] + 1]++;
 		starts[b[border] + 1]++;
 	}
 	for (let region = 0; region < count; region++) starts[region + 1] += starts[region];
 	const next = starts.slice(0, count);
-	const borders = new Uint32Array(2 * a.length);
+	const borders = new Uint32Array(starts[count]);
 	for (let border = 0; border < a.length; border++) {
+		if (!joins(border)) continue;
 		borders[next[a[border]]++] = border;
 		borders[next[b[border]]++] = border;
 	}

@@ -1,15 +1,8 @@
-import type { BorderList } from '$lib/engines/borders/border-list';
-import { borderKinds } from '../engines/borders/border-list.ts';
-import type { Draft } from '$lib/engines/editions/draft';
-
 /** Region numbers by key. */
 export type RegionNumbers = ReadonlyMap<string, number>;
 
 export const numberRegions = (keys: readonly string[]): RegionNumbers =>
 	new Map(keys.map((key, number) => [key, number]));
-
-const line = borderKinds.indexOf('line');
-const point = borderKinds.indexOf('point');
 
 /** Number of a pair of regions, the same in either order. */
 export const pairNumber = (a: number, b: number): number =>
@@ -28,22 +21,3 @@ export function pairsNamed(
 	}
 	return named;
 }
-
-/** Why a border of the sheet does or does not ask for two inks. */
-export type Standing = 'counts' | 'point-not-counted' | 'struck';
-
-/** For each border whether it counts under the draft's rules. */
-export function standings(
-	borders: BorderList,
-	draft: Pick<Draft, 'pointTouches' | 'struck'>,
-	numbers: RegionNumbers,
-): Standing[] {
-	const struck = pairsNamed(draft.struck, numbers);
-	return Array.from(borders.a, (a, border) => {
-		if (struck.has(pairNumber(a, borders.b[border]))) return 'struck';
-		return borders.kind[border] === point && !draft.pointTouches ? 'point-not-counted' : 'counts';
-	});
-}
-
-export const isLine = (borders: BorderList, border: number): boolean =>
-	borders.kind[border] === line;

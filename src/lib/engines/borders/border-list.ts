@@ -1,6 +1,16 @@
-/** How two regions meet; the number is the code in `BorderList.kind`. */
-export const borderKinds = ['line', 'point', 'water', 'hand'] as const;
+/**
+ * How two regions meet; the number is the code in `BorderList.kind`. `water` is a pair across water that
+ * was asked for when the file was read, `gap` one that was measured later and counts only where a
+ * sheet's rule says how wide.
+ */
+export const borderKinds = ['line', 'point', 'water', 'hand', 'gap'] as const;
 export type BorderKind = (typeof borderKinds)[number];
+
+export const kindCode = (kind: BorderKind): number => borderKinds.indexOf(kind);
+
+/** Whether a code of `BorderList.kind` is a pair with water, or open land, between. */
+export const isAcross = (code: number): boolean =>
+	code === kindCode('water') || code === kindCode('gap');
 
 /**
  * Who touches whom: one entry a pair, `a < b` by region number, sorted by a then b.

@@ -13,6 +13,9 @@ export interface Crs {
 /** Systems in degrees that differ from WGS 84 by under about a metre, which no boundary file resolves. */
 const asWgs84 = new Set(['WGS84', 'NAD83', 'ETRS89', 'none', '']);
 
+/** More than any definition has; what is longer was made to keep a parser busy. */
+const mostLetters = 16 * 1024;
+
 /**
  * A system from `EPSG:n`, an OGC name or URN, WKT (as in a .prj file) or a PROJ string.
  * Refuses with `crs-missing` what cannot be understood, since guessing would move the map.
@@ -24,7 +27,7 @@ export function crsOf(text: string): Crs {
 	}
 	const definition = code === null ? text : epsgDefinition(code);
 	const name = code === null ? shortName(text) : `EPSG:${code}`;
-	const projection = definition === null ? null : projectionOf(definition);
+	const projection = definition === null ? null : projectionOf(definition.slice(0, mostLetters));
 	if (!projection || definition === null) {
 		const message = `The coordinate system "${name}" is not known here. Give it as WKT or as a PROJ string.`;
 		throw new Refusal('crs-missing', message);

@@ -25,6 +25,11 @@ export function enclaves(cut: Cut): Int32Array {
 	return enclaveOf;
 }
 
+/** For each part the region of the smallest hole it lies in, or -1; a region's own holes do not count. */
+export function surroundedBy(cut: Cut): Int32Array {
+	return surroundings(cut, holesOf(cut));
+}
+
 interface Hole {
 	region: number;
 	points: Float64Array;

@@ -14,4 +14,6 @@ export interface Finding {
 	at: [number, number] | null;
 	/** ways to mend it; absent where there is none */
 	offers?: MendOffer[];
+	/** the tolerance in metres that would join the borders it is about */
+	toleranceMetres?: number;
 }

@@ -1,14 +1,18 @@
 import { areaText } from './area-text.ts';
 import type { Finding } from './finding.ts';
 import type { Hole } from './holes.ts';
+import { lengthText } from './length-text.ts';
+import type { MendOffer } from './mends/mend.ts';
+import { toldEach } from './told-each.ts';
+import { listed } from './words.ts';
 
 /** Narrower than this on average, in metres, a hole is a sliver: borders that were drawn twice. */
-const sliverMetres = 50;
+export const sliverMetres = 50;
 /** Above either of these a hole is taken for a lake or other land that is left out on purpose. */
 const gapMetres = 1000;
 const gapKm2 = 10;
-/** so many of a kind are told one by one */
-const most = 200;
+/** regions that a hole is offered to */
+const mostOffers = 6;
 
 /** A finding for each sliver and each small gap between regions, largest first. */
 export function holeFindings(holes: Hole[], keys: string[]): Finding[] {
@@ -16,41 +20,33 @@ export function holeFindings(holes: Hole[], keys: string[]): Finding[] {
 	const gaps = holes.filter(
 		(hole) => hole.meanMetres >= sliverMetres && hole.meanMetres < gapMetres && hole.km2 < gapKm2,
 	);
-	const between = (hole: Hole) => {
-		const names = hole.regions.map((region) => keys[region]);
-		return `${names.slice(0, -1).join(', ')} and ${names[names.length - 1]}`;
-	};
+	const between = (hole: Hole) => listed(hole.regions.map((region) => keys[region]));
+	const told = (code: string, severity: Finding['severity'], hole: Hole, message: string) => ({
+		...{ code, severity, message, at: hole.at },
+		regions: hole.regions.map((region) => keys[region]),
+		offers: fillOffers(hole, keys),
+	});
 	return [
-		...told('sliver', 'warning', slivers, keys, (hole) => {
+		...toldEach(slivers, (hole) => {
 			const width = `${hole.meanMetres.toPrecision(2)} m wide on average, under ${sliverMetres} m`;
-			return `A sliver of ${areaText(hole.km2)} between ${between(hole)} belongs to nobody (${width}).`;
+			const message = `A sliver of ${areaText(hole.km2)} between ${between(hole)} belongs to nobody (${width}).`;
+			return told('sliver', 'warning', hole, message);
 		}),
-		...told('gap', 'note', gaps, keys, (hole) => {
+		...toldEach(gaps, (hole) => {
 			const limits = `a hole under ${gapKm2} km² and ${gapMetres} m wide on average`;
-			return `A gap of ${areaText(hole.km2)} between ${between(hole)} belongs to nobody (${limits}); it may be water.`;
+			const message = `A gap of ${areaText(hole.km2)} between ${between(hole)} belongs to nobody (${limits}); it may be water.`;
+			return told('gap', 'note', hole, message);
 		}),
 	];
 }
 
-function told(
-	code: string,
-	severity: Finding['severity'],
-	holes: Hole[],
-	keys: string[],
-	message: (hole: Hole) => string,
-): Finding[] {
-	const finding = (said: string, all: Hole[]): Finding => {
-		const regions = new Set(all.flatMap((hole) => hole.regions));
-		return {
-			code,
-			severity,
-			message: said,
-			regions: [...regions].map((region) => keys[region]),
-			at: all[0].at,
-		};
-	};
-	const findings = holes.slice(0, most).map((hole) => finding(message(hole), [hole]));
-	const rest = holes.slice(most);
-	if (rest.length) findings.push(finding(`There are ${rest.length} smaller ones like this.`, rest));
-	return findings;
+/** To each region around, the one with the longest line of it first and as the usual one. */
+function fillOffers(hole: Hole, keys: string[]): MendOffer[] {
+	const order = hole.regions.map((region, i) => ({ key: keys[region], metres: hole.shares[i] }));
+	order.sort((p, q) => q.metres - p.metres || (p.key < q.key ? -1 : 1));
+	return order.slice(0, mostOffers).map(({ key, metres }, i) => ({
+		mend: { kind: 'fill', at: hole.at, into: key },
+		words: `Give the ${areaText(hole.km2)} to ${key}, which shares ${lengthText(metres)} of its ${lengthText(hole.metres)} outline.`,
+		usual: i === 0,
+	}));
 }

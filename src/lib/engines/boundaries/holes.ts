@@ -1,23 +1,31 @@
-import { sweptKm2 } from '../geometry/areas.ts';
+import Flatbush from 'flatbush';
 import type { Coverage } from '../geometry/coverage.ts';
-import { doubleArea } from '../geometry/rings.ts';
+import { boxOf } from '../geometry/coverage-rings.ts';
+import { doubleArea, sideOfRing } from '../geometry/rings.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
-import { traceRings } from './arc-rings.ts';
+import { traceRings, type ArcRing } from './arc-rings.ts';
 import type { Arcs } from './arcs.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
+import { ringKm2 } from './ring-area.ts';
 import { pointsOf } from './traced-ring.ts';
 
 /** Nobody's land enclosed by two or more regions. */
 export interface Hole {
 	/** regions around it */
 	regions: number[];
+	/** metres of its outline along each of them */
+	shares: number[];
+	/** metres of its whole outline, that of land inside it too */
+	metres: number;
 	km2: number;
 	/** twice the area by the length of its outline */
 	meanMetres: number;
 	at: [number, number];
+	/** its outline, anticlockwise, then that of land inside it, clockwise; first points not repeated */
+	rings: Float64Array[];
+	/** whose line each edge of the outline is, from its first point on */
+	owners: Int32Array;
 }
-
-/** How far inside a hole it is looked up, in degrees: a tenth of a millimetre. */
-const inside = 1e-9;
 
 /**
  * The holes of a coverage that lie between regions, largest first: arcs with nobody on one side, walked
@@ -25,50 +33,93 @@ const inside = 1e-9;
  * is none.
  */
 export function holesBetween(coverage: Coverage, arcs: Arcs, overlapping: boolean): Hole[] {
+	const blocks = overlapping ? new SegmentBlocks(coverage) : null;
+	const holes: Hole[] = [];
+	for (const { ring, points, islands } of facesOfNobody(arcs)) {
+		const regions = [...new Set(ring.map((half) => ownerOf(arcs, half)))].sort((a, b) => a - b);
+		if (regions.length < 2) continue;
+		const inner = islands.map((island) => pointsOf(island, arcs));
+		const place = insidePlace([points, ...inner]);
+		if (blocks && blocks.regionsAt(...place).length > 0) continue;
+		const shares = regions.map((region) =>
+			metresOf(coverage, [ring], (half) => ownerOf(arcs, half) === region),
+		);
+		const km2 = [points, ...inner].reduce((sum, line) => sum + ringKm2(line), 0);
+		const metres = metresOf(coverage, [ring, ...islands]);
+		holes.push({
+			...{ regions, shares, metres, km2 },
+			meanMetres: (2e6 * km2) / metres,
+			at: place,
+			rings: [points, ...inner],
+			owners: ownersOfEdges(ring, arcs),
+		});
+	}
+	return holes.sort((a, b) => b.km2 - a.km2);
+}
+
+interface Face {
+	ring: ArcRing;
+	points: Float64Array;
+	/** rings of land inside that touches nothing around */
+	islands: ArcRing[];
+}
+
+/** Every enclosed face with nobody in it, with the outlines of the land that lies free inside. */
+function facesOfNobody(arcs: Arcs): Face[] {
 	const halves: number[] = [];
 	for (let a = 0; a < arcs.left.length; a++) {
 		if (arcs.left[a] < 0) halves.push(a);
 		else if (arcs.right[a] < 0) halves.push(~a);
 	}
-	const blocks = overlapping ? new SegmentBlocks(coverage) : null;
-	const holes: Hole[] = [];
+	const faces: Face[] = [];
+	const outsides: { ring: ArcRing; box: [number, number, number, number] }[] = [];
 	for (const ring of traceRings(Int32Array.from(halves), arcs)) {
-		const regions = new Set(ring.map((half) => ownerOf(arcs, half)));
-		if (regions.size < 2) continue;
-		const points = closed(pointsOf(ring, arcs));
-		if (doubleArea(points, 0, points.length / 2 - 1) <= 0) continue;
-		const place = besideLongest(points);
-		if (blocks && blocks.regionsAt(...place).length > 0) continue;
-		const km2 = sweptKm2(points, 0, points.length / 2 - 1);
-		const metres = ring.reduce((sum, half) => sum + coverage.arcMetres[numberOf(half)], 0);
-		const sorted = [...regions].sort((a, b) => a - b);
-		holes.push({ regions: sorted, km2, meanMetres: (2e6 * km2) / metres, at: place });
+		const points = pointsOf(ring, arcs);
+		const turn = doubleArea(points, 0, points.length / 2);
+		if (turn > 0) faces.push({ ring, points, islands: [] });
+		else if (turn < 0) outsides.push({ ring, box: boxOf(points) });
 	}
-	return holes.sort((a, b) => b.km2 - a.km2);
+	if (faces.length === 0) return faces;
+	const sizes = faces.map(({ points }) => doubleArea(points, 0, points.length / 2));
+	const index = new Flatbush(faces.length);
+	for (const { points } of faces) index.add(...boxOf(points));
+	index.finish();
+	for (const { ring, box } of outsides) {
+		const around = index.search(...box, (_, x0, y0, x1, y1) => {
+			return x0 <= box[0] && y0 <= box[1] && x1 >= box[2] && y1 >= box[3];
+		});
+		if (around.length === 0) continue;
+		const points = pointsOf(ring, arcs);
+		const holders = around.filter((face) => surrounds(faces[face].points, points));
+		holders.sort((p, q) => sizes[p] - sizes[q]);
+		if (holders.length) faces[holders[0]].islands.push(ring);
+	}
+	return faces;
+}
+
+/** Decided by the first point that is not on the outer line itself. */
+function surrounds(outer: Float64Array, points: Float64Array): boolean {
+	for (let i = 0; i < points.length; i += 2) {
+		const side = sideOfRing(outer, 0, outer.length / 2, points[i], points[i + 1]);
+		if (side !== 0) return side > 0;
+	}
+	return false;
 }
 
 const numberOf = (half: number) => (half >= 0 ? half : ~half);
 
 const ownerOf = (arcs: Arcs, half: number) => (half >= 0 ? arcs.right[half] : arcs.left[~half]);
 
-/** With the first point again at the end. */
-function closed(points: Float64Array): Float64Array {
-	const all = new Float64Array(points.length + 2);
-	all.set(points);
-	all.set(points.subarray(0, 2), points.length);
-	return all;
+function metresOf(coverage: Coverage, rings: ArcRing[], counts = (_half: number) => true): number {
+	const halves = rings.flat().filter(counts);
+	return halves.reduce((sum, half) => sum + coverage.arcMetres[numberOf(half)], 0);
 }
 
-/** Just left of the middle of the longest edge. */
-function besideLongest(points: Float64Array): [number, number] {
-	let [best, longest] = [0, -1];
-	for (let i = 0; i + 3 < points.length; i += 2) {
-		const length = Math.hypot(points[i + 2] - points[i], points[i + 3] - points[i + 1]);
-		if (length > longest) [best, longest] = [i, length];
+function ownersOfEdges(ring: ArcRing, arcs: Arcs): Int32Array {
+	const owners: number[] = [];
+	for (const half of ring) {
+		const edges = arcs.starts[numberOf(half) + 1] - arcs.starts[numberOf(half)] - 1;
+		for (let k = 0; k < edges; k++) owners.push(ownerOf(arcs, half));
 	}
-	const [x1, y1, x2, y2] = points.subarray(best, best + 4);
-	return [
-		(x1 + x2) / 2 - ((y2 - y1) / longest) * inside,
-		(y1 + y2) / 2 + ((x2 - x1) / longest) * inside,
-	];
+	return Int32Array.from(owners);
 }

@@ -65,6 +65,27 @@ export function nameRegions(
 	return naming;
 }
 
+/**
+ * The naming once regions have become others: `outcome` gives the region each one is now part of, -1
+ * where it is left out. Also answers the new number of every old one.
+ */
+export function renumber(
+	naming: Naming,
+	outcome: Int32Array,
+): { renamed: Naming; numbers: Int32Array } {
+	const kept = [...naming.keys.keys()].filter((r) => outcome[r] === r);
+	const places = new Map(kept.map((r, place) => [r, place]));
+	const numbers = outcome.map((r) => places.get(r) ?? -1);
+	const renamed: Naming = {
+		...naming,
+		keys: kept.map((r) => naming.keys[r]),
+		names: kept.map((r) => naming.names[r]),
+		regionOf: naming.regionOf.map((r) => (r < 0 ? -1 : numbers[r])),
+		featureOf: kept.map((r) => naming.featureOf[r]),
+	};
+	return { renamed, numbers };
+}
+
 function featureKeys(table: AttributeTable, kept: boolean[], asked?: string): Wanted {
 	if (asked !== undefined && asked !== 'id') {
 		return { wanted: columnKeys(table, kept, asked), keyField: asked };

@@ -2,6 +2,7 @@ import { GrowingFloats, GrowingInts } from '../geometry/growing.ts';
 import { Refusal } from './refusal.ts';
 import { AttributeTable } from './attribute-table.ts';
 import type { Finding } from './finding.ts';
+import type { FoundLayer } from './question.ts';
 import type { Limits } from './options.ts';
 
 /** Regions as a file holds them: points as written, rings of parts of regions, each started in turn. */
@@ -19,6 +20,13 @@ export class RawLayer {
 	encoding = 'UTF-8';
 	format = '';
 	layer: string | null = null;
+	/** all layers of the file, the one that was read among them; empty where the format has none */
+	layers: FoundLayer[] = [];
+	/** whether the format is known for files that have latitude first, so that both orders occur */
+	axesVary = false;
+	/** geometries that are points and lines, which make no region */
+	strayPoints = 0;
+	strayLines = 0;
 	findings: Finding[] = [];
 
 	private mostNumbers: number;
@@ -58,6 +66,11 @@ export class RawLayer {
 			);
 		}
 	}
+	/** Notes a geometry without area, by the name of its kind. */
+	stray(kind: string): void {
+		if (/point/i.test(kind)) this.strayPoints++;
+		else this.strayLines++;
+	}
 	/** Lets go of the points once outlines have been made of them: in a large file they fill most memory. */
 	releasePoints(): void {
 		this.points = new GrowingFloats(0);
@@ -69,11 +82,14 @@ export class RawLayer {
 			this.ringStarts.length,
 			this.partRings.length,
 			this.regionParts.length,
+			this.strayPoints,
+			this.strayLines,
 		];
 	}
 	backTo(mark: number[]): void {
 		[this.points.length, this.ringStarts.length, this.partRings.length, this.regionParts.length] =
 			mark;
+		[this.strayPoints, this.strayLines] = mark.slice(4);
 	}
 	pointsBefore(ring: number): number {
 		return ring < this.ringStarts.length ? this.ringStarts.items[ring] : this.points.length / 2;

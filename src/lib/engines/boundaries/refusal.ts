@@ -8,6 +8,7 @@ export type RefusalCode =
 	| 'file-truncated'
 	| 'not-json'
 	| 'not-geojson'
+	| 'file-damaged'
 	| 'empty-file'
 	| 'bad-coordinate'
 	| 'too-large-unpacked'

@@ -1,4 +1,5 @@
 import { canonicalJson } from './canonical-json.ts';
+import { wholeDraft } from './draft.ts';
 import type { EditionContent } from './edition-content.ts';
 
 /** What is compared: an edition, or a draft with the colouring it has now. */
@@ -54,11 +55,14 @@ function regionChanges(before: Comparable, after: Comparable): InkChange[] {
 
 /** Who set a lock and when is no part of the rule. */
 function rulesOf({ draft }: Comparable) {
-	const { inks, locks, forbidden, alike, apart, pointTouches, struck, added } = draft;
+	const { inks, locks, forbidden, alike, apart, struck, added } = draft;
+	const { pointTouches, leastMetres, waterKm } = wholeDraft(draft);
 	const bare = Object.entries(locks).map(([key, { ink, cost }]) => [`lock ${key}`, { ink, cost }]);
 	return {
 		inks,
 		pointTouches,
+		'shortest line that counts (m)': leastMetres,
+		'widest gap that counts (km)': waterKm,
 		...Object.fromEntries(bare),
 		...listed('forbidden', forbidden),
 		...listed('alike', alike),

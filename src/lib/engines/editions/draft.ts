@@ -15,6 +15,10 @@ export interface Draft {
 	apart: [string, string][];
 	/** whether regions that meet in a point only must differ */
 	pointTouches: boolean;
+	/** a shared line shorter than this does not count, in metres; 0: every line does */
+	leastMetres: number;
+	/** pairs across water count up to this gap, in kilometres; 0: none; null: as the file was read */
+	waterKm: number | null;
 	/** borders struck out by hand, with the reason */
 	struck: { a: string; b: string; reason: string }[];
 	/** borders added by hand, with the reason */
@@ -22,3 +26,11 @@ export interface Draft {
 	seed: number;
 	layout: SheetLayout;
 }
+
+/** What a document says that was written before these were asked. */
+const unasked = { leastMetres: 0, waterKm: null };
+
+/** A stored document as a draft of today: what it does not say yet is as it was before it could be said. */
+export const wholeDraft = (
+	document: Omit<Draft, keyof typeof unasked> & Partial<Pick<Draft, keyof typeof unasked>>,
+): Draft => ({ ...unasked, ...document });

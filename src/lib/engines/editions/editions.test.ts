@@ -21,6 +21,8 @@ const draft: Draft = {
 	alike: [['a', 'c']],
 	apart: [],
 	pointTouches: false,
+	leastMetres: 0,
+	waterKm: null,
 	struck: [],
 	added: [{ a: 'a', b: 'c', reason: 'ferry' }],
 	seed: 0,

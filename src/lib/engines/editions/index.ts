@@ -15,3 +15,5 @@ export {
 	type InkChange,
 } from './differences.ts';
 export type { Draft } from './draft.ts';
+export { carryDraft, type CarriedDraft, type NewGround } from './carry-draft.ts';
+export { carryInks } from './carry-inks.ts';

@@ -23,3 +23,4 @@ export { changesBetween, type ValueChange, type ValueChanges } from './values/ch
 export { suggestRegions } from './join/suggestions.ts';
 export { checkJoin } from './check/check-join.ts';
 export { checkTaken } from './check/check-taken.ts';
+export { carryNumbers, carryTexts, type CarriedValues } from './carry-measures.ts';

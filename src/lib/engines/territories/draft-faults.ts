@@ -1,4 +1,4 @@
-import { borderKinds } from '../borders/border-list.ts';
+import { isAcross } from '../borders/border-list.ts';
 import { numbersOf, type TerritoryGround } from './problem-of-draft.ts';
 import type { TerritoryDraft, TerritoryEntry } from './territory-draft.ts';
 
@@ -100,10 +100,9 @@ function missingWater(
 ): DraftFault[] {
 	if (waterLinks.length === 0) return [];
 	const unit = numbersOf(keys);
-	const water = borderKinds.indexOf('water');
 	const known = new Set<number>();
 	borders.kind.forEach((kind, i) => {
-		if (kind === water) known.add(borders.a[i] * keys.length + borders.b[i]);
+		if (isAcross(kind)) known.add(borders.a[i] * keys.length + borders.b[i]);
 	});
 	const missing = waterLinks.filter(([one, two]) => {
 		const [a, b] = [unit(one), unit(two)].sort((x, y) => x - y);

@@ -45,3 +45,4 @@ export { lowerBound, type LowerBound } from './lower-bound.ts';
 export { noPlan } from './no-plan.ts';
 export { proveOrImprove, type KnownPlan, type ProvedPlan } from './prove.ts';
 export { reassign } from './reassign.ts';
+export { carryTerritories, type CarriedTerritories } from './carry-territories.ts';

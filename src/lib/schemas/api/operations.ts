@@ -8,6 +8,7 @@ import { paletteRequest, paletteResponse } from './check-palette.ts';
 import { territoriesRequest, territoriesResponse } from './check-territories.ts';
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
+import { recutOperations } from './recut-operations.ts';
 import * as sheets from './sheets.ts';
 import { territoryOperations } from './territory-operations.ts';
 
@@ -64,6 +65,11 @@ export const operations = {
 		...{ method: 'GET', path: '/intakes/{intake}', scope: 'sheets:read', status: 200 },
 		...{ summary: 'How far an uploaded file is.', answer: sheets.intake },
 	},
+	answerIntake: {
+		...{ method: 'POST', path: '/intakes/{intake}/answer', scope: 'sheets:write', status: 202 },
+		summary: 'Answer what the file does not say; it is read on with the answer.',
+		...{ json: sheets.answer, answer: sheets.intake, refusals: [409, 413, 415, 422] },
+	},
 	readSheet: {
 		...{ method: 'GET', path: sheet, scope: 'sheets:read', status: 200 },
 		...{ summary: 'A sheet: its regions, findings and editions.', answer: sheets.sheetDetail },
@@ -119,6 +125,7 @@ export const operations = {
 		answer: handovers.handoverDetail,
 	},
 	...territoryOperations,
+	...recutOperations,
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
 		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },

@@ -73,15 +73,38 @@ export const sheetRules = z.strictObject({ revision: z.int(), document: draftDoc
 
 export const rulesSaved = z.strictObject({ revision: z.int(), savedAt: moment });
 
+const about = z.enum(['layer', 'crs', 'axes', 'keys', 'columns']);
+export const question = z.strictObject({
+	about,
+	message: z.string(),
+	free: z.boolean().describe('whether an answer that is no choice can be given as typed'),
+	choices: z.array(z.strictObject({ value: z.string(), words: z.string() })),
+});
+export const remembered = z
+	.strictObject({ about, words: z.string(), fileName: z.string() })
+	.describe('an answer given for an earlier file that was taken for this one too');
+export const answer = z.strictObject({
+	choice: z.string().max(2_000).default('').describe('value of one of the choices'),
+	typed: z
+		.string()
+		.max(2_000)
+		.default('')
+		.describe('where the question is free: a system, a column'),
+	keyField: z.string().max(400).default(''),
+	nameField: z.string().max(400).default(''),
+});
+
 export const intake = z.strictObject({
 	id: z.uuid(),
 	fileName: z.string(),
 	fileBytes: z.int(),
-	state: z.enum(['waiting', 'reading', 'done', 'refused', 'cancelled', 'failed']),
+	state: z.enum(['waiting', 'reading', 'asking', 'done', 'refused', 'cancelled', 'failed']),
 	step: z.string(),
 	share: z.number().min(0).max(1),
 	refusal: z
 		.strictObject({ code: z.string(), message: z.string(), findings: z.array(finding) })
 		.nullable(),
+	question: question.nullable().describe('what the file does not say, while the state is asking'),
+	remembered: z.array(remembered),
 	sheet: z.int().nullable().describe('number of the sheet, once it is done'),
 });

@@ -17,6 +17,7 @@ export const actions = [
 	'tokens.manage',
 	'activity.read',
 	'boundaries.upload',
+	'boundaries.mend',
 	'findings.accept',
 	'sheet.read',
 	'borders.edit',
@@ -44,6 +45,9 @@ export const may: Record<Action, readonly Role[]> = {
 	'tokens.manage': ['admin'],
 	'activity.read': ['admin', 'approver'],
 	'boundaries.upload': ['cartographer', 'admin'],
+	// changes what a sheet stands on, and with it locks, territories and figures of others: whoever may bring a
+	// file may propose new boundaries, but only a cartographer mends, confirms and puts back
+	'boundaries.mend': ['cartographer'],
 	'findings.accept': ['cartographer'],
 	'sheet.read': everyone,
 	'borders.edit': ['cartographer'],

@@ -34,7 +34,8 @@ const actionsOfScope: Record<Scope, readonly Action[]> = {
 	'territories:check': [],
 	'sheets:read': ['team.read', 'sheet.read'],
 	'sheets:write': [
-		...(['team.read', 'sheet.read', 'boundaries.upload', 'findings.accept'] as const),
+		...(['team.read', 'sheet.read', 'boundaries.upload', 'boundaries.mend'] as const),
+		'findings.accept',
 		...(['borders.edit', 'colours.edit', 'palette.edit', 'layout.edit'] as const),
 	],
 	'editions:read': ['team.read', 'sheet.read', 'files.download'],

@@ -1,7 +1,19 @@
+import type { Finding, Question } from '../../engines/boundaries/index.ts';
 import type { DeskEdition, DeskSheet, IntakeStatus } from '../../schemas/desk.ts';
 import { colouringByKey, explanationByKey, proofByKey } from '../jobs/checks/keyed-result.ts';
 
 /** A team's sheets as programs see them: regions by key. */
+
+/** A finding without the mends that it offers. */
+export const bare = ({ code, severity, message, regions, at }: Finding) => ({
+	...{ code, severity, message, regions, at },
+});
+
+/** What is asked, without the drawings that people choose by. */
+export const questionAnswer = ({ about, message, choices, free }: Question) => ({
+	...{ about, message, free },
+	choices: choices.map(({ value, words }) => ({ value, words })),
+});
 
 export const sheetAnswer = (sheet: DeskSheet) => ({
 	number: sheet.number,
@@ -67,6 +79,8 @@ export const intakeAnswer = (intake: IntakeStatus) => ({
 	state: intake.state,
 	step: intake.step,
 	share: intake.share,
-	refusal: intake.refusal,
+	refusal: intake.refusal && { ...intake.refusal, findings: intake.refusal.findings.map(bare) },
+	question: intake.question && questionAnswer(intake.question),
+	remembered: intake.remembered.map(({ about, words, fileName }) => ({ about, words, fileName })),
 	sheet: intake.sheet,
 });

@@ -1,7 +1,9 @@
 import type { Generated, Insertable, JSONColumnType, Selectable } from 'kysely';
 import type { Moment, OptionalMoment, Whole } from './columns.ts';
+import type * as recuts from './recut-tables.ts';
 import type * as territories from './territory-tables.ts';
 
+export type * from './recut-tables.ts';
 export type * from './territory-tables.ts';
 
 /** Row types, one interface a table, kept beside `migrations/`. */
@@ -113,6 +115,12 @@ export interface BoundarySetTable {
 	geometry: Buffer;
 	planar: boolean;
 	planar_witness: JSONColumnType<Record<string, unknown>> | null;
+	/** what the reader recognised in the file */
+	found: JSONColumnType<Record<string, unknown>> | null;
+	/** how it was read, mends included, so that it can be read so again */
+	options: JSONColumnType<Record<string, unknown>, string | undefined, string>;
+	/** how far across water the gaps have been measured */
+	gaps_km: Generated<number>;
 	created_by: string | null;
 	created_at: Moment;
 }
@@ -146,8 +154,13 @@ export interface FindingTable {
 	lat: number | null;
 	accepted_by: string | null;
 	accepted_at: OptionalMoment;
+	/** ways to mend it */
+	offers: JSONColumnType<unknown[]> | null;
+	/** the tolerance in metres that would join the borders it is about */
+	tolerance_metres: number | null;
 }
-export type IntakeState = 'waiting' | 'reading' | 'done' | 'refused' | 'cancelled' | 'failed';
+export type IntakeState =
+	'waiting' | 'reading' | 'asking' | 'done' | 'refused' | 'cancelled' | 'failed';
 export interface IntakeTable {
 	id: Generated<string>;
 	team_id: string;
@@ -169,6 +182,10 @@ export interface IntakeTable {
 	heard_at: OptionalMoment;
 	boundary_set_id: string | null;
 	sheet_id: string | null;
+	/** what the reader cannot know, while it asks */
+	question: JSONColumnType<Record<string, unknown>> | null;
+	/** earlier answers that were taken for this file too */
+	remembered: JSONColumnType<unknown[]> | null;
 }
 export interface PaletteTable {
 	id: Generated<string>;
@@ -203,6 +220,8 @@ export interface ColouringTable {
 export interface DraftTable {
 	sheet_id: string;
 	revision: number;
+	/** the regions it is about: an earlier draft may be of earlier boundaries */
+	boundary_set_id: string;
 	document: JSONColumnType<Record<string, unknown>>;
 	colouring_id: string | null;
 	explanation: JSONColumnType<Record<string, unknown>> | null;
@@ -261,6 +280,11 @@ export interface Database {
 	handover_moves: territories.HandoverMoveTable;
 	handover_letters: territories.HandoverLetterTable;
 	handover_answers: territories.HandoverAnswerTable;
+	reading_answers: recuts.ReadingAnswerTable;
+	gaps: recuts.GapTable;
+	pieces: recuts.PieceTable;
+	display_levels: recuts.DisplayLevelTable;
+	recuts: recuts.RecutTable;
 }
 
 export type Row<T extends keyof Database> = Selectable<Database[T]>;

@@ -8,6 +8,7 @@ import { runIntake, wakeSilentIntakes } from './intake.job.ts';
 import { createPool } from './pool.ts';
 import { jobNames, openBoss, queueOf, type JobData, type JobName } from './queue.ts';
 import { runRebalance, wakeSilentRebalances } from './rebalance.job.ts';
+import { runRecut, wakeSilentRecuts } from './recut.job.ts';
 import type { Workshop } from './workshop.ts';
 
 type Handler<N extends JobName> = (
@@ -20,6 +21,7 @@ type Handler<N extends JobName> = (
 export const handlers: { [N in JobName]: Handler<N> } = {
 	intake: (shop, { intakeId }, shutdown) => runIntake(shop, intakeId, shutdown),
 	rebalance: (shop, { proposalId }, shutdown) => runRebalance(shop, proposalId, shutdown),
+	recut: (shop, { recutId }, shutdown) => runRecut(shop, recutId, shutdown),
 };
 
 const wakeMilliseconds = 5_000;
@@ -66,6 +68,6 @@ async function takeJobs<N extends JobName>(
 }
 
 const wake = (shop: Workshop) =>
-	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop)]).catch((error: unknown) =>
+	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop), wakeSilentRecuts(shop)]).catch((error: unknown) =>
 		log.warn({ error: String(error) }, 'could not look for work left lying'),
 	);

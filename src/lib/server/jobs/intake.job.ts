@@ -1,5 +1,11 @@
 import type { Row } from '../database/schema.ts';
-import { acceptIntake, failIntake, refuseIntake } from '../services/intake-end.service.ts';
+import {
+	acceptIntake,
+	askIntake,
+	failIntake,
+	refuseIntake,
+} from '../services/intake-end.service.ts';
+import { knownAnswers } from '../services/reading-answers.service.ts';
 import { runClaimed, wakeSilent, type ClaimedJob } from './claimed-job.ts';
 import type { ReadOutcome } from './read.work.ts';
 import type { Progress } from './tasks.ts';
@@ -16,14 +22,12 @@ export const wakeSilentIntakes = (shop: Workshop) =>
 const intakeJob = (shop: Workshop): ClaimedJob<'intakes', ReadOutcome> => ({
 	table: 'intakes',
 	work: (intake, signal, progress) => read(shop, intake, signal, progress),
-	settle: (claim, outcome) =>
-		outcome.status === 'accepted'
-			? acceptIntake(shop, claim, outcome)
-			: refuseIntake(shop, claim, {
-					code: outcome.code,
-					message: outcome.message,
-					findings: outcome.findings,
-				}),
+	settle: (claim, outcome) => {
+		if (outcome.status === 'accepted') return acceptIntake(shop, claim, outcome);
+		return outcome.question
+			? askIntake(shop, claim, outcome.question, outcome.taken)
+			: refuseIntake(shop, claim, outcome);
+	},
 	fail: (claim, message) => failIntake(shop, claim, message),
 	words: {
 		firstStep: 'Reading',
@@ -45,6 +49,7 @@ async function read(
 			path: file.path,
 			fileName: intake.file_name,
 			options: intake.options,
+			answers: await knownAnswers(shop.db, intake.team_id),
 			title: intake.sheet_name,
 		};
 		return await shop.pool.run('readFile', input, { signal, progress });

@@ -1,5 +1,4 @@
-import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
-import { buildGraph, checkKuratowski, planarity } from '../../engines/graph/index.ts';
+import { borderKinds, crossedBorders, type BorderList } from '../../engines/borders/index.ts';
 import type { PlanarWitness } from '../../schemas/desk.ts';
 
 export type PlanarityNote = { planar: boolean; witness: PlanarWitness | null };
@@ -13,14 +12,10 @@ export function planarityOf(
 	borders: BorderList,
 ): PlanarityNote {
 	const ends = (column: Uint32Array) => column.filter((_, i) => borders.kind[i] === line);
-	const graph = buildGraph(names.length, ends(borders.a), ends(borders.b));
-	const found = planarity(graph);
-	if (found.planar) return { planar: true, witness: null };
-	const faults = checkKuratowski(graph, found.witness);
-	if (faults.length > 0) throw new Error(`the witness does not hold: ${faults.join(' ')}`);
-	const regions = [...new Set(found.witness.paths.flat())];
-	const sentence = inWords(regions, names, parts);
-	return { planar: false, witness: { ...found.witness, regions, sentence } };
+	const crossed = crossedBorders(names.length, { a: ends(borders.a), b: ends(borders.b) });
+	if (!crossed) return { planar: true, witness: null };
+	const sentence = inWords(crossed.regions, names, parts);
+	return { planar: false, witness: { ...crossed, sentence } };
 }
 
 /** Told by the regions that lie in several places, which is what makes real maps cross. */

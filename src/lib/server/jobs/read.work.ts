@@ -1,83 +1,43 @@
-import {
-	encodeCoverage,
-	readBoundaries,
-	type BoundariesResult,
-	type BoundaryOptions,
-	type Coverage,
-	type Finding,
-} from '../../engines/boundaries/index.ts';
-import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
+import type { BoundaryOptions, Coverage } from '../../engines/boundaries/index.ts';
+import type { BorderList } from '../../engines/borders/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
-import type { SourceNote } from '../../schemas/desk.ts';
-import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
 import { problemOf } from '../services/draft-problem.ts';
 import { firstDraft } from '../services/first-draft.ts';
+import { paletteFor } from '../services/house-palette.ts';
 import { colourAndCheck, type CheckedColouring } from './colour.work.ts';
 import { fileSource } from './file-source.ts';
-import { paletteFor } from '../services/house-palette.ts';
-import { planarityOf, type PlanarityNote } from './planarity.work.ts';
+import { readAnswered, type KnownAnswer } from './read-answered.ts';
+import { groundOf, type ReadGround, type RefusedReading } from './read-ground.ts';
 import { teller, type Task } from './task-port.ts';
 
 export interface ReadInput {
 	path: string;
 	fileName: string;
 	options: BoundaryOptions;
+	/** what the team answered about earlier files */
+	answers: KnownAnswer[];
 	/** of the sheet that is to be */
 	title: string;
 }
 
 export type ReadOutcome =
-	| { status: 'refused'; code: string; message: string; findings: Finding[] }
-	| {
-			status: 'accepted';
-			columns: BoundaryColumns;
-			/** the coverage, encoded as it is stored and sent to browsers */
-			geometry: Uint8Array;
-			attributeColumns: string[];
-			source: SourceNote;
-			planar: boolean;
-			planarWitness: PlanarityNote['witness'];
-			draft: Draft;
-			colouring: CheckedColouring;
-	  };
+	RefusedReading | ({ status: 'accepted'; draft: Draft; colouring: CheckedColouring } & ReadGround);
 
 /** From a file's bytes to everything that is stored about it: read, judged planar or not, coloured. */
 export async function readFile({ input, port }: Task<ReadInput>): Promise<ReadOutcome> {
 	const tell = teller(port);
 	tell('Reading', 0);
-	const result = await readBoundaries(fileSource(input.path, input.fileName), input.options, {
-		// reading is most of the work; colouring and packing follow
-		progress: (step, share) => tell(step, 0.85 * share),
-	});
-	if (result.status === 'cancelled') throw new Error('reading ended without being asked to');
-	if (result.status === 'refused') return result;
-	return prepare(input, result, tell);
-}
-
-type Accepted = Extract<BoundariesResult, { status: 'accepted' }>;
-
-async function prepare(
-	input: ReadInput,
-	{ coverage, borders, attributes, findings, source }: Accepted,
-	tell: (step: string, share: number) => void,
-): Promise<ReadOutcome> {
-	tell('Judging whether the map is planar', 0.86);
-	const regions = regionColumns(coverage, attributes);
-	const { planar, witness } = planarityOf(regions.name, regions.parts, borders);
-	tell('Colouring', 0.9);
-	const { draft, colouring } = await colourFirst(input.title, coverage, borders);
-	tell('Packing', 0.97);
-	return {
-		status: 'accepted',
-		columns: { regions, borders: borderColumns(borders), findings },
-		geometry: encodeCoverage(coverage),
-		attributeColumns: attributes.columns,
-		source,
-		planar,
-		planarWitness: witness,
-		draft,
-		colouring,
-	};
+	const source = fileSource(input.path, input.fileName);
+	// reading is most of the work; colouring and packing follow
+	const reading = await readAnswered(source, input.options, input.answers, (step, share) =>
+		tell(step, 0.85 * share),
+	);
+	const { result, taken } = reading;
+	if (result.status === 'refused') return { ...result, taken };
+	tell('Colouring', 0.87);
+	const { draft, colouring } = await colourFirst(input.title, result.coverage, result.borders);
+	tell('Thinning borders for the screen and packing', 0.93);
+	return { status: 'accepted', ...groundOf(result, reading), draft, colouring };
 }
 
 /** The first draft: fewest inks, in the shortest house palette that has as many. */
@@ -102,36 +62,4 @@ function isTall(points: Float64Array): boolean {
 	}
 	const shrink = Math.cos((((south + north) / 2) * Math.PI) / 180);
 	return north - south > (east - west) * shrink;
-}
-
-function regionColumns(
-	coverage: Coverage,
-	{ columns, rows }: Accepted['attributes'],
-): BoundaryColumns['regions'] {
-	return {
-		key: coverage.keys,
-		name: coverage.names,
-		parts: coverage.keys.map((_, i) => coverage.regionParts[i + 1] - coverage.regionParts[i]),
-		areaKm2: Array.from(coverage.areasKm2),
-		enclaveOf: Array.from(coverage.enclaveOf),
-		attributes: rows.map((row) => attributesJson(columns, row)),
-	};
-}
-
-/** PostgreSQL's text cannot hold the character zero; nothing readable is lost without it. */
-const attributesJson = (columns: string[], row: Accepted['attributes']['rows'][number]): string =>
-	JSON.stringify(Object.fromEntries(columns.map((name, c) => [name, row[c]]))).replaceAll(
-		'\\u0000',
-		'',
-	);
-
-function borderColumns({ a, b, kind, metres, at }: BorderList): BoundaryColumns['borders'] {
-	return {
-		a: Array.from(a),
-		b: Array.from(b),
-		kind: Array.from(kind, (code) => borderKinds[code]),
-		metres: Array.from(metres),
-		lon: Array.from(a, (_, i) => at[2 * i]),
-		lat: Array.from(a, (_, i) => at[2 * i + 1]),
-	};
 }

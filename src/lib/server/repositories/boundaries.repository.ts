@@ -1,4 +1,5 @@
 import { sql } from 'kysely';
+import type { MendOffer } from '../../engines/boundaries/index.ts';
 import type { Db } from '../database/connection.ts';
 import type { NewRow, Row } from '../database/schema.ts';
 
@@ -28,6 +29,8 @@ export interface BoundaryColumns {
 		message: string;
 		regions: string[];
 		at: [number, number] | null;
+		offers?: MendOffer[];
+		toleranceMetres?: number;
 	}[];
 }
 
@@ -84,8 +87,10 @@ async function insertFindings(
 	id: string,
 	findings: BoundaryColumns['findings'],
 ): Promise<void> {
-	const rows = findings.map(({ at, ...finding }) => ({
+	const rows = findings.map(({ at, offers, toleranceMetres, ...finding }) => ({
 		...finding,
+		offers: offers ? JSON.stringify(offers) : null,
+		tolerance_metres: toleranceMetres ?? null,
 		boundary_set_id: id,
 		lon: at?.[0] ?? null,
 		lat: at?.[1] ?? null,
@@ -106,6 +111,9 @@ const noteColumns = [
 	'region_count',
 	'planar',
 	'planar_witness',
+	'found',
+	'options',
+	'gaps_km',
 	'created_by',
 	'created_at',
 ] as const;
@@ -209,17 +217,22 @@ export async function acceptFinding(
 	return numUpdatedRows > 0n;
 }
 
-/** Removes a set that no sheet, no table and no proposal uses any more; false when one still does. */
+/** Removes a set that no sheet, draft, table, proposal or re-cut uses any more; false when one still does. */
 export async function deleteUnusedBoundarySet(trx: Db, id: string): Promise<boolean> {
 	const { numDeletedRows } = await trx
 		.deleteFrom('boundary_sets')
 		.where('id', '=', id)
 		.where(({ and, not, exists, selectFrom }) =>
-			and(
-				(['sheets', 'measure_tables', 'proposals'] as const).map((table) =>
-					not(exists(selectFrom(table).select('id').where('boundary_set_id', '=', id))),
+			and([
+				...(['sheets', 'measure_tables', 'proposals', 'drafts'] as const).map((table) =>
+					not(
+						exists(selectFrom(table).select('boundary_set_id').where('boundary_set_id', '=', id)),
+					),
 				),
-			),
+				...(['from_set', 'to_set'] as const).map((column) =>
+					not(exists(selectFrom('recuts').select('id').where(column, '=', id))),
+				),
+			]),
 		)
 		.executeTakeFirst();
 	return numDeletedRows > 0n;

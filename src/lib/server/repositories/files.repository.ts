@@ -14,6 +14,7 @@ export async function digestIsUsed(db: Db, digest: string): Promise<boolean> {
 	const { rows } = await sql<{ used: boolean }>`
 		select exists (select from boundary_sets where file_digest = ${digest})
 			or exists (select from intakes where file_digest = ${digest})
+			or exists (select from recuts where file_digest = ${digest})
 			or exists (select from edition_files where digest = ${digest})
 			or exists (select from measure_tables where state <> 'dropped'
 				and (file_digest = ${digest} or source ->> 'kept' = ${digest})) as used

@@ -38,7 +38,7 @@ export async function countOpenIntakes(db: Db, teamId: string): Promise<number> 
 		.selectFrom('intakes')
 		.select(({ fn }) => fn.countAll<number>().as('open'))
 		.where('team_id', '=', teamId)
-		.where('state', 'in', ['waiting', 'reading'])
+		.where('state', 'in', ['waiting', 'reading', 'asking'])
 		.executeTakeFirstOrThrow();
 	return Number(open);
 }
@@ -52,6 +52,9 @@ export interface IntakeEnd {
 	boundary_set_id?: string;
 	attempts?: number;
 	sheet_id?: string;
+	options?: string;
+	question?: string | null;
+	remembered?: string | null;
 }
 
 /** Moves an intake on; `from` are the states it may be in. Answers false when it was in none of them. */
@@ -61,12 +64,14 @@ export async function moveIntake(
 	from: IntakeState[],
 	end: IntakeEnd,
 ): Promise<boolean> {
-	const { refusal, ...plain } = end;
+	const { refusal, question, remembered, ...plain } = end;
 	const { numUpdatedRows } = await trx
 		.updateTable('intakes')
 		.set({
 			...plain,
 			...(refusal === undefined ? {} : { refusal }),
+			...(question === undefined ? {} : { question }),
+			...(remembered === undefined ? {} : { remembered }),
 			claim: null,
 			updated_at: sql`now()`,
 		})
@@ -75,3 +80,12 @@ export async function moveIntake(
 		.executeTakeFirst();
 	return numUpdatedRows > 0n;
 }
+
+/** Intakes that wait for an answer since before so many days. */
+export const unanswered = (db: Db, days: number) =>
+	db
+		.selectFrom('intakes')
+		.selectAll()
+		.where('state', '=', 'asking')
+		.where('updated_at', '<', sql<Date>`now() - make_interval(days => ${days})`)
+		.execute();

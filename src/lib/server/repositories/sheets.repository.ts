@@ -119,12 +119,21 @@ export async function insertColouring(
 	return id;
 }
 
-/** Inks of the colouring stored last, whichever draft it was for. */
+/** Inks of the colouring of the present regions that was stored last, whichever draft it was for. */
 export const latestInks = async (db: Db, sheetId: string): Promise<number[] | null> => {
 	const row = await db
 		.selectFrom('colourings')
 		.select('inks')
 		.where('sheet_id', '=', sheetId)
+		.where(({ exists, selectFrom }) =>
+			exists(
+				selectFrom('drafts')
+					.innerJoin('sheets', 'sheets.id', 'drafts.sheet_id')
+					.select('drafts.revision')
+					.whereRef('drafts.colouring_id', '=', 'colourings.id')
+					.whereRef('drafts.boundary_set_id', '=', 'sheets.boundary_set_id'),
+			),
+		)
 		.orderBy('created_at', 'desc')
 		.limit(1)
 		.executeTakeFirst();
@@ -141,18 +150,21 @@ export interface NewDraft {
 	savedBy: string | null;
 }
 
-/** Adds a revision and makes it the sheet's current draft. The caller holds the sheet. */
+/** Adds a revision about the sheet's present regions and makes it its current draft. The caller holds the sheet. */
 export async function insertDraft(trx: Db, draft: NewDraft): Promise<Date> {
 	const { saved_at } = await trx
 		.insertInto('drafts')
-		.values({
+		.values(({ selectFrom }) => ({
 			sheet_id: draft.sheetId,
+			boundary_set_id: selectFrom('sheets')
+				.where('id', '=', draft.sheetId)
+				.select('boundary_set_id'),
 			revision: draft.revision,
 			document: JSON.stringify(draft.document),
 			colouring_id: draft.colouringId,
 			explanation: draft.explanation === null ? null : JSON.stringify(draft.explanation),
 			saved_by: draft.savedBy,
-		})
+		}))
 		.returning('saved_at')
 		.executeTakeFirstOrThrow();
 	await trx
@@ -182,3 +194,12 @@ export const findDraft = (db: Db, sheetId: string, revision: number) =>
 		.executeTakeFirst();
 export type DraftRow = NonNullable<Awaited<ReturnType<typeof findDraft>>>;
 export type SheetRecord = Row<'sheets'>;
+
+/** Gives a sheet other boundaries. The caller holds the sheet, and adds a draft about them. */
+export async function giveBoundaries(trx: Db, id: string, setId: string): Promise<void> {
+	await trx
+		.updateTable('sheets')
+		.set({ boundary_set_id: setId, updated_at: sql`now()` })
+		.where('id', '=', id)
+		.execute();
+}

@@ -1,5 +1,5 @@
 import { isDeepStrictEqual } from 'node:util';
-import type { Draft } from '../../engines/editions/draft.ts';
+import { wholeDraft, type Draft } from '../../engines/editions/draft.ts';
 import { draftDocument, type SaveDraft } from '../../schemas/draft.ts';
 import type { DeskColouring, DraftSaved, DraftStale } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
@@ -48,7 +48,7 @@ export async function draftOf(db: Db, sheetId: string, revision: number): Promis
 
 /** The document of a stored draft; what is stored was checked when it was saved. */
 export const documentOf = (draft: Pick<DraftRow, 'document'>): Draft =>
-	draft.document as unknown as Draft;
+	wholeDraft(draft.document as unknown as Draft);
 
 /**
  * Saves a draft as the next revision, coloured and checked here whatever the sender showed. A draft whose
@@ -176,6 +176,7 @@ const staleNote = (draft: DraftRow): DraftStale => ({
 	savedBy: personName(draft),
 	savedAt: draft.saved_at.toISOString(),
 	document: documentOf(draft),
+	boundarySetId: draft.boundary_set_id,
 });
 
 /** An earlier or the current draft, whole. */
@@ -188,7 +189,7 @@ export async function readDraft(
 	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	const draft = await draftOf(shop.db, sheet.id, revision);
-	const view = await boundaryView(shop.db, sheet.boundary_set_id);
+	const view = await boundaryView(shop.db, draft.boundary_set_id);
 	return {
 		...staleNote(draft),
 		document: draftDocument.parse(documentOf(draft)),

@@ -15,6 +15,8 @@ export function firstDraft(given: {
 		alike: [],
 		apart: [],
 		pointTouches: false,
+		leastMetres: 0,
+		waterKm: null,
 		struck: [],
 		added: [],
 		seed: 0,

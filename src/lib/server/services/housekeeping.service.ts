@@ -1,14 +1,19 @@
-import { database } from '../database/connection.ts';
+import { database, type Db } from '../database/connection.ts';
+import { fileStore, type FileStore } from '../files/index.ts';
 import { log } from '../log.ts';
 import { removeOldUses } from '../repositories/limits.repository.ts';
 import { removeExpired } from '../repositories/sessions.repository.ts';
+import { daysToAnswer, endUnanswered } from './intake-answer.service.ts';
+import { endUnansweredRecuts } from './recut-work.service.ts';
 
 const EVERY_MINUTES = 15;
 
-/** Removes what has run out: sessions, mailed links, counts of uses. */
-export async function tidy(): Promise<void> {
-	await removeExpired(database());
-	await removeOldUses(database());
+/** Removes what has run out: sessions, mailed links, counts of uses, files that nobody answers for. */
+export async function tidy(db: Db = database(), files: FileStore = fileStore()): Promise<void> {
+	await removeExpired(db);
+	await removeOldUses(db);
+	await endUnanswered(db, files);
+	await endUnansweredRecuts(db, files, daysToAnswer);
 }
 
 /** Tidies now and then. @returns ends it */

@@ -1,22 +1,25 @@
+import type { Question } from '../../engines/boundaries/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Row } from '../database/schema.ts';
 import type { FileStore } from '../files/index.ts';
+import type { KnownAnswer } from '../jobs/read-answered.ts';
+import type { RefusedReading } from '../jobs/read-ground.ts';
 import type { ReadOutcome } from '../jobs/read.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import { insertBoundarySet } from '../repositories/boundaries.repository.ts';
 import { holdClaim, type Claim } from '../repositories/claims.repository.ts';
 import { moveIntake } from '../repositories/intakes.repository.ts';
 import { insertColouring, insertDraft, insertSheet } from '../repositories/sheets.repository.ts';
 import { record, type Actor } from './activity.service.ts';
+import { storeBoundarySet } from './boundary-store.ts';
 import { checkedOutcome } from './outcome-of-colouring.ts';
+import { rememberColumns, rememberedNote } from './reading-answers.service.ts';
 import { dropUnused } from './stored-files.ts';
 
 type Accepted = Extract<ReadOutcome, { status: 'accepted' }>;
-type Refused = Extract<ReadOutcome, { status: 'refused' }>;
 
 /** Why an intake ended without a sheet, as its page shows it. */
-export type RefusalNote = Pick<Refused, 'code' | 'message' | 'findings'>;
+export type RefusalNote = Pick<RefusedReading, 'code' | 'message' | 'findings'>;
 
 /**
  * Stores an accepted file whole: boundary set, regions, borders, findings, sheet and first coloured draft,
@@ -47,7 +50,13 @@ export async function acceptIntake(
 			share: 1,
 			boundary_set_id: boundarySetId,
 			sheet_id: sheet.id,
+			remembered: notesOf(read.taken),
 		});
+		await rememberColumns(
+			trx,
+			{ ...givenBy(intake), likeness: read.found.likeness },
+			intake.options,
+		);
 		const detail = { sheet: sheet.number, regions: read.columns.regions.key.length };
 		await record(trx, actorOf(intake), 'sheet.created', { kind: 'sheet', id: sheet.id }, detail);
 		return true;
@@ -63,23 +72,25 @@ const actorOf = (intake: Intake): Actor => ({
 	tokenId: null,
 });
 
+const notesOf = (taken: KnownAnswer[]): string => JSON.stringify(taken.map(rememberedNote));
+
+const givenBy = (intake: Intake) => ({
+	teamId: intake.team_id,
+	userId: intake.created_by,
+	fileName: intake.file_name,
+});
+
 const storeBoundaries = (trx: Trx, intake: Intake, read: Accepted): Promise<string> =>
-	insertBoundarySet(
+	storeBoundarySet(
 		trx,
 		{
-			team_id: intake.team_id,
-			file_name: intake.file_name,
-			file_digest: intake.file_digest as string,
-			file_bytes: intake.file_bytes,
-			source: JSON.stringify(read.source),
-			columns: read.attributeColumns,
-			region_count: read.columns.regions.key.length,
-			geometry: Buffer.from(read.geometry),
-			planar: read.planar,
-			planar_witness: read.planarWitness && JSON.stringify(read.planarWitness),
-			created_by: intake.created_by,
+			teamId: intake.team_id,
+			createdBy: intake.created_by,
+			name: intake.file_name,
+			bytes: intake.file_bytes,
+			digest: intake.file_digest as string,
 		},
-		read.columns,
+		read,
 	);
 
 const storeFirstDraft = (
@@ -99,11 +110,28 @@ const storeFirstDraft = (
 		savedBy: intake.created_by,
 	});
 
+/** Keeps the file and asks what it does not say; false when the claim no longer holds. */
+export const askIntake = (
+	shop: Pick<Workshop, 'db'>,
+	claim: Claim,
+	question: Question,
+	taken: KnownAnswer[],
+): Promise<boolean> =>
+	shop.db.transaction().execute(async (trx) => {
+		const intake = await holdClaim(trx, 'intakes', claim);
+		if (!intake) return false;
+		return moveIntake(trx, intake.id, ['reading'], {
+			...{ state: 'asking', step: '', share: 0, attempts: 0 },
+			question: JSON.stringify(question),
+			remembered: notesOf(taken),
+		});
+	});
+
 /** Notes why a file was refused and forgets its bytes; false when the claim no longer holds. */
 export const refuseIntake = (
 	shop: Pick<Workshop, 'db' | 'files'>,
 	claim: Claim,
-	refusal: RefusalNote,
+	{ code, message, findings }: RefusalNote,
 ): Promise<boolean> =>
 	shop.db.transaction().execute(async (trx) => {
 		const intake = await holdClaim(trx, 'intakes', claim);
@@ -112,10 +140,10 @@ export const refuseIntake = (
 			state: 'refused',
 			step: '',
 			share: 0,
-			refusal: JSON.stringify(refusal),
+			refusal: JSON.stringify({ code, message, findings } satisfies RefusalNote),
 			file_digest: null,
 		});
-		const detail = { code: refusal.code };
+		const detail = { code };
 		const subject = { kind: 'intake', id: intake.id };
 		await record(trx, actorOf(intake), 'boundaries.refused', subject, detail);
 		await forget(trx, shop.files, intake.file_digest);

@@ -3,6 +3,7 @@ import type { IntakeStatus } from '../../schemas/desk.ts';
 import { uploadFields } from '../../schemas/upload.ts';
 import { receiveForm, type ReceivedForm } from '../files/multipart.ts';
 import { sampleForm } from '../files/sample.ts';
+import type { IntakeState } from '../database/schema.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { lockDigest } from '../repositories/files.repository.ts';
 import {
@@ -59,7 +60,7 @@ async function takeIn(
 ): Promise<{ id: string }> {
 	requireAccess(member, 'boundaries.upload');
 	if ((await countOpenIntakes(shop.db, member.team.id)) >= mostOpen) {
-		throw new Conflict('too-many-open', `${mostOpen} uploads are being read already`);
+		throw new Conflict('too-many-open', `${mostOpen} uploads wait or are being read already`);
 	}
 	const form = await receive();
 	try {
@@ -97,7 +98,7 @@ async function enter(shop: Workshop, member: Member, form: ReceivedForm): Promis
 const nameOfFile = (fileName: string) =>
 	fileName.replace(/(\.(geo|topo)?json|\.zip|\.shp)+$/i, '').replace(/[_]+/g, ' ') || fileName;
 
-const unfitFields = (issues: readonly { path: PropertyKey[]; message: string }[]) =>
+export const unfitFields = (issues: readonly { path: PropertyKey[]; message: string }[]) =>
 	new Unfit('malformed', 'some fields of the form were not understood', {
 		issues: issues.map(({ path, message }) => ({ field: path.join('.'), message })),
 	});
@@ -111,22 +112,24 @@ export async function intakeStatus(
 	return statusOf(await intakeOf(shop, member, id));
 }
 
+/** The latest uploads; what they ask is told by themselves, since it may be long. */
 export async function listIntakes(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
 ): Promise<IntakeStatus[]> {
 	requireAccess(member, 'sheet.read');
 	const rows = await recentIntakes(shop.db, member.team.id, 50);
-	return rows.map(statusOf);
+	return rows.map((row) => ({ ...statusOf(row), question: null }));
 }
 
-/** Stops an intake that waits, is being read or has failed, and forgets its file. */
+/** Stops an intake that waits, is being read, asks or has failed, and forgets its file. */
 export async function cancelIntake(shop: Workshop, member: Member, id: string): Promise<void> {
 	requireAccess(member, 'boundaries.upload');
 	const intake = await intakeOf(shop, member, id);
 	await shop.db.transaction().execute(async (trx) => {
 		const end = { state: 'cancelled', step: '', share: 0, file_digest: null } as const;
-		const moved = await moveIntake(trx, intake.id, ['waiting', 'reading', 'failed'], end);
+		const open: IntakeState[] = ['waiting', 'reading', 'asking', 'failed'];
+		const moved = await moveIntake(trx, intake.id, open, { ...end, question: null });
 		if (!moved) throw new Conflict('not-open', 'it is not being read any more');
 		await record(trx, member, 'boundaries.cancelled', { kind: 'intake', id: intake.id });
 		if (intake.file_digest) await dropUnused(trx, shop.files, intake.file_digest);
@@ -149,7 +152,8 @@ export async function retryIntake(shop: Workshop, member: Member, id: string): P
 
 const uuid = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/;
 
-async function intakeOf(
+/** An upload of this team, or `NotFound`. */
+export async function intakeOf(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
 	id: string,
@@ -172,4 +176,6 @@ const statusOf = (row: IntakeRow): IntakeStatus => ({
 	createdBy: personName(row),
 	refusal: row.refusal as IntakeStatus['refusal'],
 	sheet: row.sheet_number,
+	question: row.question as unknown as IntakeStatus['question'],
+	remembered: (row.remembered ?? []) as unknown as IntakeStatus['remembered'],
 });

@@ -5,19 +5,21 @@ import type {
 	SheetRow,
 	SourceNote,
 } from '../../schemas/desk.ts';
+import type { BoundaryOptions } from '../../engines/boundaries/index.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import {
 	acceptFinding as markAccepted,
-	deleteUnusedBoundarySet,
 	readAttribute,
 	readFindings,
 	readGeometry,
 } from '../repositories/boundaries.repository.ts';
+import { listLevels, readLevel } from '../repositories/display-levels.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
 import { measureFiles } from '../repositories/measures.repository.ts';
+import { holdRecutsOf } from '../repositories/recuts.repository.ts';
 import {
 	deleteSheet,
 	holdSheet,
@@ -31,6 +33,7 @@ import { measureSummary } from './measures.service.ts';
 import { deskColouring } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
+import { removeSet } from './recut-held.ts';
 import { dropUnused } from './stored-files.ts';
 
 type Reading = Pick<Workshop, 'db'>;
@@ -66,7 +69,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		revision: draft.revision,
 		savedBy: personName(draft),
 		savedAt: draft.saved_at.toISOString(),
-		boundarySet: boundarySetNote(view),
+		boundarySet: { ...boundarySetNote(view), levels: await listLevels(db, view.set.id) },
 		draft: document,
 		colouring: deskColouring(namesIn(view, document), draft),
 		lastInks: await inksBefore(db, sheet.id, draft),
@@ -89,7 +92,15 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 export const rightsOf = (member: Member): Action[] =>
 	actions.filter((action) => mayDo(member, action));
 
-const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
+/** How a set was read: what was said about the file, and its mends apart. */
+function recipeOf({
+	options,
+}: BoundaryView['set']): Pick<DeskSheet['boundarySet'], 'options' | 'mends'> {
+	const { mends = [], limits: _, ...fields } = options as BoundaryOptions;
+	return { options: fields, mends };
+}
+
+const boundarySetNote = ({ set }: BoundaryView): Omit<DeskSheet['boundarySet'], 'levels'> => ({
 	id: set.id,
 	fileName: set.file_name,
 	regionCount: set.region_count,
@@ -97,6 +108,9 @@ const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
 	planarWitness: set.planar_witness as DeskSheet['boundarySet']['planarWitness'],
 	source: set.source as unknown as SourceNote,
 	columns: set.columns,
+	found: set.found as unknown as DeskSheet['boundarySet']['found'],
+	...recipeOf(set),
+	gapsKm: set.gaps_km,
 });
 
 /** The level above of every region, by the column that names it. */
@@ -118,6 +132,8 @@ async function findingsOf(db: Db, boundarySetId: string): Promise<DeskFinding[]>
 		message: row.message,
 		regions: row.regions,
 		at: row.lon === null || row.lat === null ? null : [row.lon, row.lat],
+		...(row.offers && { offers: row.offers as DeskFinding['offers'] }),
+		...(row.tolerance_metres !== null && { toleranceMetres: row.tolerance_metres }),
 		acceptedBy: personName({ by_name: row.accepted_name, by_email: row.accepted_email }),
 		acceptedAt: row.accepted_at?.toISOString() ?? null,
 	}));
@@ -138,20 +154,25 @@ export async function editionsOf(db: Db, sheetId: string): Promise<DeskEdition[]
 	}));
 }
 
-/** The coverage as stored, with the boundary set's id as its tag: it never changes. */
+/**
+ * The coverage as stored, whole or at one level of display, under a tag made of the boundary set's id and
+ * the level: it never changes.
+ */
 export async function sheetGeometry(
 	shop: Reading,
 	member: Member,
 	number: number,
+	level: number | null = null,
 ): Promise<{ tag: string; read(): Promise<Buffer> }> {
 	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
-	const tag = sheet.boundary_set_id;
+	const set = sheet.boundary_set_id;
 	return {
-		tag,
+		tag: level === null ? set : `${set}-${level}`,
 		async read() {
-			const bytes = await readGeometry(shop.db, tag);
-			if (!bytes) throw new NotFound('boundary set');
+			const bytes =
+				level === null ? await readGeometry(shop.db, set) : await readLevel(shop.db, set, level);
+			if (!bytes) throw new NotFound(level === null ? 'boundary set' : 'level of display');
 			return bytes;
 		},
 	};
@@ -193,7 +214,7 @@ export async function nameSheet(
 	});
 }
 
-/** Deletes a sheet that was never issued; editions are kept for good. */
+/** Deletes a sheet that was never issued, with its re-cuts; editions are kept for good. */
 export async function removeSheet(
 	shop: Pick<Workshop, 'db' | 'files'>,
 	member: Member,
@@ -206,14 +227,15 @@ export async function removeSheet(
 		if ((await listEditions(trx, sheet.id)).length > 0) {
 			throw new Conflict('issued', 'A sheet with issued editions cannot be deleted.');
 		}
-		const { set } = await boundaryView(trx, sheet.boundary_set_id);
+		const recuts = await holdRecutsOf(trx, sheet.id);
 		const tables = await measureFiles(trx, sheet.id);
 		await deleteSheet(trx, sheet.id);
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'sheet.deleted', subject, { sheet: number, name: sheet.name });
-		if (await deleteUnusedBoundarySet(trx, set.id)) {
-			await dropUnused(trx, shop.files, set.file_digest);
+		const digests = new Set([...tables, ...recuts.digests]);
+		for (const set of new Set([sheet.boundary_set_id, ...recuts.sets])) {
+			for (const digest of await removeSet(trx, set)) digests.add(digest);
 		}
-		for (const digest of tables) await dropUnused(trx, shop.files, digest);
+		for (const digest of [...digests].sort()) await dropUnused(trx, shop.files, digest);
 	});
 }

@@ -10,7 +10,7 @@ import {
 	type TerritoryDraftRow,
 } from '../repositories/territories.repository.ts';
 import { record } from './activity.service.ts';
-import { NotFound, Unfit } from './outcomes.ts';
+import { Conflict, NotFound, Unfit } from './outcomes.ts';
 import { personName } from './people.ts';
 import { inkNoteOf, inksFor, type TerritoryInks } from './territory-inks.ts';
 import { territoriesIn, territoryDraftOf, type TerritoryState } from './territory-state.ts';
@@ -36,6 +36,7 @@ export async function storeTerritories(
 	return shop.db.transaction().execute(async (trx) => {
 		const held = await holdSheet(trx, member.team.id, sheet.number);
 		if (!held) throw new NotFound('sheet');
+		if (held.boundary_set_id !== sheet.boundary_set_id) throw otherBoundaries();
 		if (held.territory_revision !== sheet.territory_revision) {
 			const saved = await territoryDraftOf(trx, sheet.id, held.territory_revision);
 			return staleTerritories(held.territory_revision, saved);
@@ -56,6 +57,10 @@ export async function storeTerritories(
 		return saved(revision, savedAt, document, inked);
 	});
 }
+
+/** First territories begin at revision 0 on whichever boundaries, so the revision alone does not tell. */
+const otherBoundaries = () =>
+	new Conflict('stale', 'The sheet was given other boundaries meanwhile. Load the page again.');
 
 /** @throws Unfit for a draft that contradicts its ground or itself */
 export function requireSound({ ground }: TerritoryState, document: TerritoryDraft): void {

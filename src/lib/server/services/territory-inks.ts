@@ -1,3 +1,4 @@
+import type { Draft } from '../../engines/editions/draft.ts';
 import { numbersOf, todayOf } from '../../engines/territories/problem-of-draft.ts';
 import type { TerritoryDraft } from '../../engines/territories/territory-draft.ts';
 import type { Workshop } from '../jobs/workshop.ts';
@@ -25,9 +26,20 @@ export async function inksFor(
 	view: BoundaryView,
 	document: Assigned,
 ): Promise<TerritoryInks> {
-	const before = (await latestTerritoryInks(shop.db, sheet.id)) ?? {};
 	if (document.territories.length === 0) return { inks: {}, note: null, changed: [] };
 	const drawn = documentOf(await draftOf(shop.db, sheet.id, sheet.revision));
+	return inksOn(shop, sheet.id, { view, drawn }, document);
+}
+
+/** The same over boundaries and a draft that are about to be the sheet's. */
+export async function inksOn(
+	shop: Pick<Workshop, 'db' | 'pool'>,
+	sheetId: string,
+	{ view, drawn }: { view: BoundaryView; drawn: Draft },
+	document: Assigned,
+): Promise<TerritoryInks> {
+	const before = (await latestTerritoryInks(shop.db, sheetId)) ?? {};
+	if (document.territories.length === 0) return { inks: {}, note: null, changed: [] };
 	const { a, b } = sheetBorders(view, drawn);
 	const keys = document.territories.map(({ key }) => key);
 	const most = drawn.palette.inks.length;

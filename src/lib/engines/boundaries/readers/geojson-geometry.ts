@@ -26,7 +26,7 @@ export function readGeometry(json: JsonBytes, layer: RawLayer, level = 0): void 
 			readGeometryMember(json, layer, name, members, level);
 		} while (json.another(byte.closeObject));
 	}
-	checkGeometry(json, members);
+	checkGeometry(json, members, layer);
 }
 
 export function readGeometryMember(
@@ -42,13 +42,14 @@ export function readGeometryMember(
 	else json.skip();
 }
 
-/** The type and the nesting of the coordinates must agree. */
-export function checkGeometry(json: JsonBytes, members: GeometryMembers): void {
+/** The type and the nesting of the coordinates must agree. Points and lines are counted. */
+export function checkGeometry(json: JsonBytes, members: GeometryMembers, layer: RawLayer): void {
 	const wanted = members.type === 'Polygon' ? 3 : members.type === 'MultiPolygon' ? 4 : 0;
 	if (members.depth >= 3 && members.depth !== wanted && !isLines(members)) {
 		const message = `its coordinates do not fit the type "${members.type ?? 'missing'}"`;
 		throw notGeoJson(json, message);
 	}
+	if (members.depth > 0 && wanted === 0) layer.stray(members.type ?? 'Point');
 }
 
 const isLines = (members: GeometryMembers) =>

@@ -194,7 +194,7 @@ class RootReader {
 		const { type } = this.members;
 		if (this.lone && this.sawFeatures) throw notGeoJson(this.json, 'a feature holds features');
 		if (this.lone) {
-			if (type !== 'Feature') checkGeometry(this.json, this.members);
+			if (type !== 'Feature') checkGeometry(this.json, this.members, this.layer);
 			this.layer.table.add(this.lone.id, this.lone.properties);
 			this.json.feature = 0;
 		} else if (!this.sawFeatures) {
@@ -219,8 +219,5 @@ function legacyCrs(value: unknown): string | null {
 function startsWrong(json: JsonBytes): Refusal {
 	const start = json.bytes[json.at];
 	if (start === byte.open) return notGeoJson(json, 'it begins with a list');
-	return new Refusal(
-		'unsupported-format',
-		'The file is neither GeoJSON, TopoJSON nor a zipped shapefile.',
-	);
+	return new Refusal('unsupported-format', 'The file is neither GeoJSON nor TopoJSON.');
 }

@@ -1,30 +1,43 @@
 import type { Topology } from 'topojson-specification';
+import type { Limits } from '../options.ts';
 import { Refusal } from '../refusal.ts';
+import { arcEnds, type ArcEnds } from './topojson-arcs.ts';
 
 /**
- * Refuses a topology that the reading library would run out of: arcs that are no lists of numbers, and
- * arc indices that point nowhere.
+ * Refuses a topology that the reading library would run out of or go astray in: arcs that are no lists
+ * of finite numbers, arc indices that point nowhere, rings whose arcs do not meet, and arcs used so often
+ * that their points written out would be more than `limits.points`.
  */
-export function checkTopology(topology: Topology): void {
+export function checkTopology(topology: Topology, limits: Limits): void {
 	const { arcs, objects, transform } = topology;
 	if (topology.type !== 'Topology' || !Array.isArray(arcs) || !isObject(objects)) {
 		throw new Refusal('not-geojson', 'The TopoJSON file lacks its arcs or its objects.');
 	}
-	if (transform !== undefined && ![transform?.scale, transform?.translate].every(isPair)) {
-		throw new Refusal(
-			'bad-coordinate',
-			'The transform of the TopoJSON file is not made of numbers.',
-		);
+	if (transform !== undefined) checkTransform(transform);
+	const ends = arcEnds(topology);
+	const walk = { ends, points: 0, most: limits.points };
+	for (const [name, object] of Object.entries(objects)) {
+		walk.points = 0;
+		checkObject(object, name, walk);
 	}
-	arcs.forEach((arc, i) => {
-		if (!Array.isArray(arc) || arc.length < 2 || !arc.every(isPair)) {
-			throw new Refusal('bad-arc', `Arc ${i} is not a list of at least two positions.`);
-		}
-	});
-	for (const [name, object] of Object.entries(objects)) checkObject(object, name, arcs.length);
 }
 
-function checkObject(object: unknown, name: string, arcs: number, level = 0): void {
+interface Walk {
+	ends: ArcEnds;
+	/** of the layer so far, arcs written out */
+	points: number;
+	most: number;
+}
+
+function checkTransform(transform: { scale?: unknown; translate?: unknown } | null): void {
+	const { scale, translate } = transform ?? {};
+	if (!isPair(scale) || !isPair(translate) || scale[0] === 0 || scale[1] === 0) {
+		const message = 'The transform of the TopoJSON file is not made of numbers other than zero.';
+		throw new Refusal('bad-coordinate', message);
+	}
+}
+
+function checkObject(object: unknown, name: string, walk: Walk, level = 0): void {
 	if (level > 8 || !isObject(object)) {
 		throw new Refusal('not-geojson', `Layer "${name}" holds something that is no geometry.`);
 	}
@@ -32,30 +45,48 @@ function checkObject(object: unknown, name: string, arcs: number, level = 0): vo
 	if (type === 'GeometryCollection') {
 		if (!Array.isArray(geometries))
 			throw new Refusal('not-geojson', `Layer "${name}" has no geometries.`);
-		geometries.forEach((inner) => checkObject(inner, name, arcs, level + 1));
+		geometries.forEach((inner) => checkObject(inner, name, walk, level + 1));
 		return;
 	}
 	const depth = type === 'Polygon' ? 2 : type === 'MultiPolygon' ? 3 : 0;
-	if (depth) checkArcs(object.arcs, depth, name, arcs, object.id);
+	const id = object.id === undefined ? 'A feature' : `Feature "${String(object.id)}"`;
+	if (depth) checkArcs(object.arcs, depth, `${id} in layer "${name}"`, walk);
 }
 
-function checkArcs(list: unknown, depth: number, name: string, arcs: number, id: unknown): void {
+function checkArcs(list: unknown, depth: number, place: string, walk: Walk): void {
 	if (!Array.isArray(list)) {
-		throw new Refusal('bad-arc', `The arcs of ${idText(id)} in layer "${name}" are not lists.`);
+		throw new Refusal('bad-arc', `The arcs of ${place} are not lists.`);
 	}
-	for (const entry of list) {
-		if (depth > 1) checkArcs(entry, depth - 1, name, arcs, id);
-		else if (!Number.isInteger(entry) || entry >= arcs || ~entry >= arcs) {
-			const message = `${idText(id)} in layer "${name}" names arc ${String(entry)}; there are ${arcs}.`;
+	if (depth === 1) return checkRing(list, place, walk);
+	for (const entry of list) checkArcs(entry, depth - 1, place, walk);
+}
+
+function checkRing(ring: unknown[], place: string, walk: Walk): void {
+	const { ends } = walk;
+	ring.forEach((entry) => {
+		const arc = entry as number;
+		if (!Number.isInteger(arc) || arc >= ends.count || ~arc >= ends.count) {
+			const message = `${place} names arc ${String(entry)}; there are ${ends.count}.`;
 			throw new Refusal('bad-arc', message);
 		}
-	}
+		walk.points += ends.points[arc < 0 ? ~arc : arc];
+		if (walk.points > walk.most) {
+			const message = `The arcs written out are more than ${walk.most} points, which is the most this reader takes.`;
+			throw new Refusal('too-large-unpacked', message);
+		}
+	});
+	const arcs = ring as number[];
+	arcs.forEach((arc, i) => {
+		const next = arcs[(i + 1) % arcs.length];
+		if (!ends.meet(arc, next)) {
+			const message = `In ${place} arc ${next} does not begin where arc ${arc} ends.`;
+			throw new Refusal('bad-arc', message);
+		}
+	});
 }
-
-const idText = (id: unknown) => (id === undefined ? 'A feature' : `Feature "${String(id)}"`);
 
 const isObject = (value: unknown): value is Record<string, unknown> =>
 	typeof value === 'object' && value !== null && !Array.isArray(value);
 
-const isPair = (value: unknown): boolean =>
+const isPair = (value: unknown): value is [number, number] =>
 	Array.isArray(value) && Number.isFinite(value[0]) && Number.isFinite(value[1]);

@@ -2,10 +2,10 @@ import type { GeometryObject as Geometry, Properties, Topology } from 'topojson-
 import { feature } from 'topojson-client';
 import type { BoundaryOptions, ByteSource, Limits } from '../options.ts';
 import { RawLayer } from '../raw-layer.ts';
-import { Refusal } from '../refusal.ts';
+import type { FoundLayer } from '../question.ts';
+import { chooseLayer } from './choose-layer.ts';
 import { JsonBytes } from './json-bytes.ts';
 import { checkTopology } from './topojson-check.ts';
-import { layerNeeded } from './zipped-shapefile.ts';
 import { wholeFile } from './whole.ts';
 
 type GeometryObject = Geometry<Properties>;
@@ -21,11 +21,13 @@ export async function readTopoJson(
 	json.last = true;
 	if (bytes[0] === 0xef) json.at = 3;
 	const topology = json.value() as Topology;
-	checkTopology(topology);
-	const name = chooseObject(topology, options.layer);
+	checkTopology(topology, options.limits);
+	const layers = layersOf(topology);
+	const { name } = chooseLayer('TopoJSON', layers, options.layer);
 	const layer = new RawLayer(options.limits);
 	layer.format = 'TopoJSON';
 	layer.layer = name;
+	layer.layers = layers;
 	layer.crsByFormat = 'EPSG:4326';
 	layer.encoding = json.encoding;
 	for (const geometry of geometriesOf(topology.objects[name]))
@@ -33,16 +35,17 @@ export async function readTopoJson(
 	return layer;
 }
 
-function chooseObject(topology: Topology, layer?: string): string {
-	const names = Object.keys(topology.objects);
-	const areas = names.filter((name) => geometriesOf(topology.objects[name]).some(isArea));
-	if (layer !== undefined) {
-		if (names.includes(layer)) return layer;
-		throw layerNeeded(`There is no layer "${layer}".`, areas);
-	}
-	if (areas.length === 0) throw new Refusal('no-areas', 'The file holds no areas.');
-	if (areas.length > 1) throw layerNeeded('The file holds several layers.', areas);
-	return areas[0];
+/** Objects of the topology as layers. */
+function layersOf(topology: Topology): FoundLayer[] {
+	return Object.entries(topology.objects).map(([name, object]) => {
+		const geometries = geometriesOf(object);
+		return {
+			name,
+			features: geometries.length,
+			areas: geometries.some((geometry) => [...unfolded(geometry)].some(isArea)),
+			crs: null,
+		};
+	});
 }
 
 function geometriesOf(object: GeometryObject): GeometryObject[] {
@@ -54,13 +57,23 @@ const isArea = (geometry: GeometryObject) => /Polygon$/.test(String(geometry.typ
 function addGeometry(topology: Topology, geometry: GeometryObject, layer: RawLayer): void {
 	layer.startRegion();
 	layer.table.add(geometry.id ?? null, geometry.properties ?? null);
-	for (const area of geometriesOf(geometry).filter(isArea)) {
+	for (const area of unfolded(geometry)) {
+		if (!isArea(area)) {
+			if (area.type) layer.stray(area.type);
+			continue;
+		}
 		const written = feature(topology, area) as GeoJSON.Feature;
 		if (written.geometry.type === 'Polygon') addPart(written.geometry.coordinates, layer);
 		if (written.geometry.type === 'MultiPolygon') {
 			for (const part of written.geometry.coordinates) addPart(part, layer);
 		}
 	}
+}
+
+/** The geometries of a collection and of those within it. */
+function* unfolded(geometry: GeometryObject): Generator<GeometryObject> {
+	if (geometry.type !== 'GeometryCollection') yield geometry;
+	else for (const inner of geometry.geometries) yield* unfolded(inner);
 }
 
 function addPart(rings: GeoJSON.Position[][], layer: RawLayer): void {

@@ -1,73 +1,40 @@
-import { sourceOf } from '../byte-source.ts';
-import type { BoundaryOptions, ByteSource, Limits, Watch } from '../options.ts';
+import type { FoundLayer } from '../question.ts';
+import type { Limits } from '../options.ts';
 import { RawLayer } from '../raw-layer.ts';
 import { Refusal } from '../refusal.ts';
 import { dbfRows, openDbf } from './dbf.ts';
-import { readGeoJson } from './geojson.ts';
 import { isPolygonShp } from './shp-check.ts';
 import { readShp } from './shp.ts';
 import { textEncoding } from './text-encoding.ts';
-import { wholeFile } from './whole.ts';
-import { ZipArchive } from './zip.ts';
+import type { ZipArchive } from './zip.ts';
 import type { ZipEntry } from './zip-directory.ts';
 
-type Options = BoundaryOptions & { limits: Limits };
-
-/** A zip with one shapefile, or with several and the layer named; or with a single GeoJSON file. */
-export async function readZip(
-	source: ByteSource,
-	options: Options,
-	watch: Watch,
-): Promise<RawLayer> {
-	const archive = new ZipArchive(
-		await wholeFile(source, options.limits.wholeBytes),
-		options.limits,
-	);
-	const shapes = archive.entries.filter((entry) => /\.shp$/i.test(entry.name));
-	if (shapes.length === 0) {
-		const json = archive.entries.filter((entry) => /\.(geo)?json$/i.test(entry.name));
-		if (json.length !== 1) throw noShapefile(archive);
-		return readGeoJson(sourceOf(json[0].name, archive.unpack(json[0])), options.limits, watch);
-	}
-	const chosen = chooseLayer(archive, shapes, options.layer);
-	watch.progress?.(`Unpacking ${chosen.name}`, 0.1);
-	return readShapefile(archive, chosen, options.limits);
+/** What an archive's .shp file is called and declares, read from the first bytes of its parts. */
+export function shapefileLayer(archive: ZipArchive, shp: ZipEntry, name: string): FoundLayer {
+	const dbf = beside(archive, shp, '.dbf');
+	const head = dbf ? archive.head(dbf, 8) : null;
+	const features = head?.length === 8 ? new DataView(head.slice().buffer).getUint32(4, true) : null;
+	return {
+		name,
+		features,
+		areas: isPolygonShp(archive.head(shp, 100)),
+		crs: textBeside(archive, shp, '.prj'),
+	};
 }
 
-function chooseLayer(archive: ZipArchive, shapes: ZipEntry[], layer?: string): ZipEntry {
-	const names = shapes.map(layerName);
-	if (layer !== undefined) {
-		const chosen = shapes.find((entry) => layerName(entry) === layer || entry.name === layer);
-		if (chosen) return chosen;
-		throw layerNeeded(`There is no layer "${layer}".`, names);
-	}
-	if (shapes.length === 1) return shapes[0];
-	const areas = shapes.filter((entry) => isPolygonShp(archive.head(entry, 100)));
-	if (areas.length === 1) return areas[0];
-	throw layerNeeded(
-		'The archive holds several layers.',
-		(areas.length ? areas : shapes).map(layerName),
-	);
-}
-
-async function readShapefile(
+/** One shapefile of an archive: outlines, table and coordinate system. */
+export async function readShapefile(
 	archive: ZipArchive,
 	shp: ZipEntry,
 	limits: Limits,
 ): Promise<RawLayer> {
-	const beside = (ending: string) => archive.find(shp.name.replace(/\.shp$/i, ending));
-	const text = (ending: string) => {
-		const entry = beside(ending);
-		return entry ? new TextDecoder().decode(archive.unpack(entry)).trim() : null;
-	};
 	const bytes = archive.unpack(shp);
 	const layer = new RawLayer(limits, Math.ceil(bytes.length / 16));
-	layer.format = 'Shapefile';
-	layer.layer = layerName(shp);
-	layer.crs = text('.prj');
+	layer.crs = textBeside(archive, shp, '.prj');
 	await readShp(bytes, layer);
-	const dbf = beside('.dbf');
-	if (dbf) await readTable(archive.unpack(dbf), text('.cpg'), layer);
+	const dbf = beside(archive, shp, '.dbf');
+	const cpg = textBeside(archive, shp, '.cpg');
+	if (dbf) await readTable(archive.unpack(dbf), cpg, layer);
 	else for (let i = 0; i < layer.regions; i++) layer.table.add(null, null);
 	return layer;
 }
@@ -84,14 +51,18 @@ async function readTable(bytes: Uint8Array, cpg: string | null, layer: RawLayer)
 	for await (const row of dbfRows(table, encoding)) layer.table.add(null, row);
 }
 
-const layerName = (entry: ZipEntry) => entry.name.replace(/^.*\//, '').replace(/\.shp$/i, '');
+const beside = (archive: ZipArchive, shp: ZipEntry, ending: string) =>
+	archive.find(shp.name.replace(/\.shp$/i, ending));
 
-export function layerNeeded(said: string, names: string[]): Refusal {
-	return new Refusal('layer-needed', `${said} Choose one of: ${names.join(', ')}.`);
-}
+/** More than any definition of a system or name of an encoding has. */
+const mostTextBytes = 64 * 1024;
 
-function noShapefile(archive: ZipArchive): Refusal {
-	const names = archive.entries.slice(0, 5).map((entry) => entry.name);
-	const message = `The archive holds no shapefile (.shp) but: ${names.join(', ') || 'nothing'}.`;
-	return new Refusal('unsupported-format', message);
+function textBeside(archive: ZipArchive, shp: ZipEntry, ending: string): string | null {
+	const entry = beside(archive, shp, ending);
+	if (!entry) return null;
+	if (entry.declaredBytes > mostTextBytes) {
+		const message = `"${entry.name}" has ${entry.declaredBytes} bytes, more than such a file can have.`;
+		throw new Refusal('too-large-unpacked', message);
+	}
+	return new TextDecoder().decode(archive.unpack(entry)).trim();
 }

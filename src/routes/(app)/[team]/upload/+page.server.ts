@@ -1,7 +1,8 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { forgetForm } from '$lib/schemas/recut-forms';
 import { memberFor } from '$lib/server/access/guard';
 import { UploadFault } from '$lib/server/files/multipart';
-import { attempt } from '$lib/server/forms';
+import { attempt, readForm } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
 import {
@@ -10,12 +11,14 @@ import {
 	listIntakes,
 	maxUpload,
 } from '$lib/server/services/intake.service';
+import { forgetAnswer, rememberedAnswers } from '$lib/server/services/reading-answers.service';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load = (async ({ locals }) => {
 	const member = memberFor(locals, 'sheet.read');
 	const intakes = await forPage(() => listIntakes(workshop(), member));
-	return { intakes, maxBytes: maxUpload() };
+	const remembered = await forPage(() => rememberedAnswers(workshop(), member));
+	return { intakes, remembered, maxBytes: maxUpload() };
 }) satisfies PageServerLoad;
 
 export const actions = {
@@ -29,6 +32,14 @@ export const actions = {
 			return fail(status, { message, errors: {}, values: {} });
 		}
 		redirect(303, `/${params.team}/intakes/${begun.data.id}`);
+	},
+	/** Forgets how the team answered for files that look alike. */
+	forget: async ({ locals, request }) => {
+		const member = memberFor(locals, 'boundaries.upload');
+		const form = await readForm(request, forgetForm);
+		if (form.failure) return form.failure;
+		const { about, likeness } = form.data;
+		return (await attempt(() => forgetAnswer(workshop(), member, about, likeness))).failure;
 	},
 	/** Asked for by the page of sheets as well. */
 	sample: async ({ locals, params }) => {

@@ -1,0 +1,292 @@
+/** Code of the EPSG register, its name, its area of use (west, south, east, north), and its PROJ string. */
+export type KnownSystem = readonly [
+	code: number,
+	name: string,
+	area: readonly [number, number, number, number],
+	definition: string,
+];
+
+/**
+ * Projected systems that boundary files are often delivered in, besides the UTM zones. Names, areas of use
+ * and parameters as in the EPSG register (taken from npm `epsg-index` 2, a copy of it; where that names a
+ * grid of shifts, the seven parameters of EPSG 1314 and 1777 stand instead, from memory: some 3 m).
+ */
+export const knownSystems: KnownSystem[] = [
+	[
+		2039,
+		'Israel 1993 / Israeli TM Grid',
+		[34.17, 29.45, 35.69, 33.28],
+		'+proj=tmerc +lat_0=31.7343936111111 +lon_0=35.2045169444444 +k=1.0000067 +x_0=219529.584 +y_0=626907.39 +ellps=GRS80 +towgs84=23.772,17.49,17.859,0.3132,1.85274,-1.67299,-5.4262 +units=m',
+	],
+	[
+		2056,
+		'CH1903+ / LV95',
+		[5.96, 45.82, 10.49, 47.81],
+		'+proj=somerc +lat_0=46.9524055555556 +lon_0=7.43958333333333 +k_0=1 +x_0=2600000 +y_0=1200000 +ellps=bessel +towgs84=674.374,15.056,405.346 +units=m',
+	],
+	[
+		2100,
+		'GGRS87 / Greek Grid',
+		[19.57, 34.88, 28.3, 41.75],
+		'+proj=tmerc +lat_0=0 +lon_0=24 +k=0.9996 +x_0=500000 +y_0=0 +ellps=GRS80 +towgs84=-199.87,74.79,246.62 +units=m',
+	],
+	[
+		2154,
+		'RGF93 v1 / Lambert-93',
+		[-9.86, 41.15, 10.38, 51.56],
+		'+proj=lcc +lat_0=46.5 +lon_0=3 +lat_1=49 +lat_2=44 +x_0=700000 +y_0=6600000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		2157,
+		'IRENET95 / Irish Transverse Mercator',
+		[-10.56, 51.39, -5.34, 55.43],
+		'+proj=tmerc +lat_0=53.5 +lon_0=-8 +k=0.99982 +x_0=600000 +y_0=750000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		2180,
+		'ETRF2000-PL / CS92',
+		[14.14, 49, 24.15, 55.93],
+		'+proj=tmerc +lat_0=0 +lon_0=19 +k=0.9993 +x_0=500000 +y_0=-5300000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		2193,
+		'NZGD2000 / New Zealand Transverse Mercator 2000',
+		[166.37, -47.33, 178.63, -34.1],
+		'+proj=tmerc +lat_0=0 +lon_0=173 +k=0.9996 +x_0=1600000 +y_0=10000000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		2326,
+		'Hong Kong 1980 Grid System',
+		[113.76, 22.13, 114.51, 22.58],
+		'+proj=tmerc +lat_0=22.3121333333333 +lon_0=114.178555555556 +k=1 +x_0=836694.05 +y_0=819069.8 +ellps=intl +towgs84=-162.619,-276.959,-161.764,-0.067753,2.243648,1.158828,-1.094246 +units=m',
+	],
+	[
+		3005,
+		'NAD83 / BC Albers',
+		[-139.04, 48.25, -114.08, 60.01],
+		'+proj=aea +lat_0=45 +lon_0=-126 +lat_1=50 +lat_2=58.5 +x_0=1000000 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3006,
+		'SWEREF99 TM',
+		[10.03, 54.96, 24.17, 69.07],
+		'+proj=utm +zone=33 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3034,
+		'ETRS89-extended / LCC Europe',
+		[-35.58, 24.6, 44.83, 84.73],
+		'+proj=lcc +lat_0=52 +lon_0=10 +lat_1=35 +lat_2=65 +x_0=4000000 +y_0=2800000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3035,
+		'ETRS89-extended / LAEA Europe',
+		[-35.58, 24.6, 44.83, 84.73],
+		'+proj=laea +lat_0=52 +lon_0=10 +x_0=4321000 +y_0=3210000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3059,
+		'LKS92 / Latvia TM',
+		[19.06, 55.67, 28.24, 58.09],
+		'+proj=tmerc +lat_0=0 +lon_0=24 +k=0.9996 +x_0=500000 +y_0=-6000000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3067,
+		'ETRS89 / TM35FIN(E,N)',
+		[19.08, 58.84, 31.59, 70.09],
+		'+proj=utm +zone=35 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3301,
+		'Estonian Coordinate System of 1997',
+		[20.37, 57.52, 28.2, 60],
+		'+proj=lcc +lat_0=57.5175539305556 +lon_0=24 +lat_1=59.3333333333333 +lat_2=58 +x_0=500000 +y_0=6375000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3346,
+		'LKS94 / Lithuania TM',
+		[19.02, 53.89, 26.82, 56.45],
+		'+proj=tmerc +lat_0=0 +lon_0=24 +k=0.9998 +x_0=500000 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3347,
+		'NAD83 / Statistics Canada Lambert',
+		[-141.01, 38.21, -40.73, 86.46],
+		'+proj=lcc +lat_0=63.390675 +lon_0=-91.8666666666667 +lat_1=49 +lat_2=77 +x_0=6200000 +y_0=3000000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3395,
+		'WGS 84 / World Mercator',
+		[-180, -80, 180, 84],
+		'+proj=merc +lon_0=0 +k=1 +x_0=0 +y_0=0 +datum=WGS84 +units=m',
+	],
+	[
+		3414,
+		'SVY21 / Singapore TM',
+		[103.59, 1.13, 104.07, 1.47],
+		'+proj=tmerc +lat_0=1.36666666666667 +lon_0=103.833333333333 +k=1 +x_0=28001.642 +y_0=38744.572 +ellps=WGS84 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3577,
+		'GDA94 / Australian Albers',
+		[112.85, -43.7, 153.69, -9.86],
+		'+proj=aea +lat_0=0 +lon_0=132 +lat_1=-18 +lat_2=-36 +x_0=0 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3763,
+		'ETRS89 / Portugal TM06',
+		[-9.56, 36.95, -6.19, 42.16],
+		'+proj=tmerc +lat_0=39.6682583333333 +lon_0=-8.13310833333333 +k=1 +x_0=0 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3765,
+		'HTRS96 / Croatia TM',
+		[13.43, 42.34, 19.43, 46.54],
+		'+proj=tmerc +lat_0=0 +lon_0=16.5 +k=0.9999 +x_0=500000 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3794,
+		'Slovenia 1996 / Slovene National Grid',
+		[13.38, 45.42, 16.61, 46.88],
+		'+proj=tmerc +lat_0=0 +lon_0=15 +k=0.9999 +x_0=500000 +y_0=-5000000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		3812,
+		'ETRS89 / Belgian Lambert 2008',
+		[2.5, 49.5, 6.4, 51.51],
+		'+proj=lcc +lat_0=50.797815 +lon_0=4.35921583333333 +lat_1=49.8333333333333 +lat_2=51.1666666666667 +x_0=649328 +y_0=665262 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[3857, 'WGS 84 / Pseudo-Mercator', [-180, -85.06, 180, 85.06], 'EPSG:3857'],
+	[
+		3978,
+		'NAD83 / Canada Atlas Lambert',
+		[-141.01, 38.21, -40.73, 86.46],
+		'+proj=lcc +lat_0=49 +lon_0=-95 +lat_1=49 +lat_2=77 +x_0=0 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		5070,
+		'NAD83 / Conus Albers',
+		[-124.79, 24.41, -66.91, 49.38],
+		'+proj=aea +lat_0=23 +lon_0=-96 +lat_1=29.5 +lat_2=45.5 +x_0=0 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		5179,
+		'Korea 2000 / Unified CS',
+		[122.71, 28.6, 134.28, 40.27],
+		'+proj=tmerc +lat_0=38 +lon_0=127.5 +k=0.9996 +x_0=1000000 +y_0=2000000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		5186,
+		'Korea 2000 / Central Belt 2010',
+		[126, 33.14, 128, 38.33],
+		'+proj=tmerc +lat_0=38 +lon_0=127 +k=1 +x_0=200000 +y_0=600000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		5514,
+		'S-JTSK / Krovak East North',
+		[12.09, 47.73, 22.56, 51.06],
+		'+proj=krovak +lat_0=49.5 +lon_0=24.8333333333333 +alpha=30.2881397527778 +k=0.9999 +x_0=0 +y_0=0 +ellps=bessel +towgs84=589,76,480 +units=m',
+	],
+	[
+		5880,
+		'SIRGAS 2000 / Brazil Polyconic',
+		[-74.01, -35.71, -25.28, 7.04],
+		'+proj=poly +lat_0=0 +lon_0=-54 +x_0=5000000 +y_0=10000000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		6933,
+		'WGS 84 / NSIDC EASE-Grid 2.0 Global',
+		[-180, -86, 180, 86],
+		'+proj=cea +lat_ts=30 +lon_0=0 +x_0=0 +y_0=0 +datum=WGS84 +units=m',
+	],
+	[
+		3826,
+		'TWD97 / TM2 zone 121',
+		[119.99, 20.41, 122.06, 26.72],
+		'+proj=tmerc +lat_0=0 +lon_0=121 +k=0.9999 +x_0=250000 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		21781,
+		'CH1903 / LV03',
+		[5.96, 45.82, 10.49, 47.81],
+		'+proj=somerc +lat_0=46.9524055555556 +lon_0=7.43958333333333 +k_0=1 +x_0=600000 +y_0=200000 +ellps=bessel +towgs84=674.374,15.056,405.346 +units=m',
+	],
+	[
+		23700,
+		'HD72 / EOV',
+		[16.11, 45.74, 22.9, 48.58],
+		'+proj=somerc +lat_0=47.1443937222222 +lon_0=19.0485717777778 +k_0=0.99993 +x_0=650000 +y_0=200000 +ellps=GRS67 +towgs84=52.17,-71.82,-14.9 +units=m',
+	],
+	[
+		26986,
+		'NAD83 / Massachusetts Mainland',
+		[-73.5, 41.46, -69.86, 42.89],
+		'+proj=lcc +lat_0=41 +lon_0=-71.5 +lat_1=42.6833333333333 +lat_2=41.7166666666667 +x_0=200000 +y_0=750000 +ellps=GRS80 +towgs84=0,0,0 +units=m',
+	],
+	[
+		27700,
+		'OSGB36 / British National Grid',
+		[-9, 49.75, 2.01, 61.01],
+		'+proj=tmerc +lat_0=49 +lon_0=-2 +k=0.9996012717 +x_0=400000 +y_0=-100000 +ellps=airy +towgs84=446.448,-125.157,542.06,0.15,0.247,0.842,-20.489 +units=m',
+	],
+	[
+		28992,
+		'Amersfoort / RD New',
+		[3.2, 50.75, 7.22, 53.7],
+		'+proj=sterea +lat_0=52.1561605555556 +lon_0=5.38763888888889 +k=0.9999079 +x_0=155000 +y_0=463000 +ellps=bessel +towgs84=565.4171,50.3319,465.5524,1.9342,-1.6677,9.1019,4.0725 +units=m',
+	],
+	[
+		29903,
+		'TM75 / Irish Grid',
+		[-10.56, 51.39, -5.34, 55.43],
+		'+proj=tmerc +lat_0=53.5 +lon_0=-8 +k=1.000035 +x_0=200000 +y_0=250000 +a=6377340.189 +rf=299.3249646 +towgs84=482.5,-130.6,564.6,-1.042,-0.214,-0.631,8.15 +units=m',
+	],
+	[
+		31287,
+		'MGI / Austria Lambert',
+		[9.53, 46.4, 17.17, 49.02],
+		'+proj=lcc +lat_0=47.5 +lon_0=13.3333333333333 +lat_1=49 +lat_2=46 +x_0=400000 +y_0=400000 +ellps=bessel +towgs84=577.326,90.129,463.919,5.137,1.474,5.297,2.4232 +units=m',
+	],
+	[
+		31370,
+		'BD72 / Belgian Lambert 72',
+		[2.5, 49.5, 6.4, 51.51],
+		'+proj=lcc +lat_0=90 +lon_0=4.36748666666667 +lat_1=51.1666672333333 +lat_2=49.8333339 +x_0=150000.013 +y_0=5400088.438 +ellps=intl +towgs84=-106.8686,52.2978,-103.7239,-0.3366,0.457,-1.8422,-1.2747 +units=m',
+	],
+	[
+		31467,
+		'DHDN / 3-degree Gauss-Kruger zone 3',
+		[7.5, 47.27, 10.51, 55.09],
+		'+proj=tmerc +lat_0=0 +lon_0=9 +k=1 +x_0=3500000 +y_0=0 +ellps=bessel +towgs84=598.1,73.7,418.2,0.202,0.045,-2.455,6.7 +units=m',
+	],
+	[
+		31468,
+		'DHDN / 3-degree Gauss-Kruger zone 4',
+		[10.5, 47.39, 13.51, 54.59],
+		'+proj=tmerc +lat_0=0 +lon_0=12 +k=1 +x_0=4500000 +y_0=0 +ellps=bessel +towgs84=598.1,73.7,418.2,0.202,0.045,-2.455,6.7 +units=m',
+	],
+	[
+		2263,
+		'NAD83 / New York Long Island (ftUS)',
+		[-74.26, 40.47, -71.8, 41.3],
+		'+proj=lcc +lat_0=40.1666666666667 +lon_0=-74 +lat_1=41.0333333333333 +lat_2=40.6666666666667 +x_0=300000 +y_0=0 +ellps=GRS80 +towgs84=0,0,0 +units=us-ft',
+	],
+	[
+		2229,
+		'NAD83 / California zone 5 (ftUS)',
+		[-121.42, 32.76, -114.12, 35.81],
+		'+proj=lcc +lat_0=33.5 +lon_0=-118 +lat_1=35.4666666666667 +lat_2=34.0333333333333 +x_0=2000000.0001016 +y_0=500000.0001016 +ellps=GRS80 +towgs84=0,0,0 +units=us-ft',
+	],
+	[
+		3031,
+		'WGS 84 / Antarctic Polar Stereographic',
+		[-180, -90, 180, -60],
+		'+proj=stere +lat_0=-90 +lat_ts=-71 +lon_0=0 +x_0=0 +y_0=0 +datum=WGS84 +units=m',
+	],
+	[
+		3413,
+		'WGS 84 / NSIDC Sea Ice Polar Stereographic North',
+		[-180, 60, 180, 90],
+		'+proj=stere +lat_0=90 +lat_ts=70 +lon_0=-45 +x_0=0 +y_0=0 +datum=WGS84 +units=m',
+	],
+];
