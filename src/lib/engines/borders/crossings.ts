@@ -1,6 +1,6 @@
 import type { Coverage } from '../geometry/coverage.ts';
 import { crossing } from '../geometry/crossing.ts';
-import type { SegmentBlocks } from '../geometry/segment-blocks.ts';
+import { isApart, type SegmentBlocks } from '../geometry/segment-blocks.ts';
 
 /** Up to so many points, shared lines are looked up everywhere too, and not only along themselves. */
 const mostEverywhere = 400_000;
@@ -37,17 +37,14 @@ function lookAlong(
 	look: (arc: number, i: number, other: number, j: number) => void,
 ): void {
 	const last = arcStarts[arc + 1] - 1;
-	for (let i = arcStarts[arc]; i < last; i++) {
+	for (let i = arcStarts[arc]; i + 2 < last; i++) {
 		const end = Math.min(last, i + ahead + 1);
-		for (let j = i + 2; j < end; j++) if (boxesMeet(p, 2 * i, 2 * j)) look(arc, i, arc, j);
+		const west = Math.min(p[2 * i], p[2 * i + 2]);
+		const east = Math.max(p[2 * i], p[2 * i + 2]);
+		const south = Math.min(p[2 * i + 1], p[2 * i + 3]);
+		const north = Math.max(p[2 * i + 1], p[2 * i + 3]);
+		for (let j = i + 2; j < end; j++) {
+			if (!isApart(p, j, west, south, east, north)) look(arc, i, arc, j);
+		}
 	}
-}
-
-/** Whether two segments, by the places of their first points, have boxes that meet. */
-function boxesMeet(p: Float64Array, i: number, j: number): boolean {
-	const isApart = (axis: number) => {
-		const [a, b, c, d] = [p[i + axis], p[i + 2 + axis], p[j + axis], p[j + 2 + axis]];
-		return (a < c && a < d && b < c && b < d) || (a > c && a > d && b > c && b > d);
-	};
-	return !isApart(0) && !isApart(1);
 }
