@@ -91,7 +91,6 @@ async function insertFindings(
 		...finding,
 		tolerance_metres: toleranceMetres ?? null,
 		offers: offers ? JSON.stringify(offers) : null,
-		tolerance_metres: toleranceMetres ?? null,
 		boundary_set_id: id,
 		lon: at?.[0] ?? null,
 		lat: at?.[1] ?? null,
