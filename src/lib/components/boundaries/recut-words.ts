@@ -48,6 +48,7 @@ const borders: Record<BorderKind, string> = {
 	line: 'by line',
 	point: 'by point',
 	water: 'across water',
+	gap: 'across water',
 	hand: 'by hand',
 	gap: 'across a gap',
 };

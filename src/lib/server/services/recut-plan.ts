@@ -30,8 +30,8 @@ export async function carryBy(
 	const view = await boundaryView(shop.db, row.to_set);
 	const outcome = await shop.pool.run('carryRecut', {
 		...{ matching: matching as unknown as RegionMatch, decisions, standing },
-		before: before.borders,
-		fresh: { borders: view.borders, columns: view.set.columns },
+		before: before.asRead,
+		fresh: { borders: view.asRead, columns: view.set.columns },
 	});
 	if (outcome.status === 'refused') {
 		throw new Unfit('unfit-decisions', outcome.reasons.slice(0, 5).join(' '), {
