@@ -50,7 +50,6 @@ const borders: Record<BorderKind, string> = {
 	water: 'across water',
 	gap: 'across water',
 	hand: 'by hand',
-	gap: 'across a gap',
 };
 
 export function sideWords(side: PairChange['before']): string {

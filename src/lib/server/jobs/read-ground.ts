@@ -42,7 +42,6 @@ export interface ReadGround {
 	options: BoundaryOptions;
 	/** earlier answers that were taken */
 	taken: KnownAnswer[];
-	pieces: PieceColumns;
 	planar: boolean;
 	planarWitness: PlanarityNote['witness'];
 }
@@ -64,7 +63,6 @@ export function groundOf(
 		attributeColumns: attributes.columns,
 		...{ source, found, options, taken, planar },
 		planarWitness: witness,
-		pieces: pieceColumns(coverage),
 	};
 }
 
