@@ -117,7 +117,7 @@ describe('who may call', () => {
 describe('every route', () => {
 	const values: Record<string, string> = {
 		...{ sheet: '999', edition: '1', file: 'x', intake: 'x' },
-		...{ measure: 'x', handover: '1', proposal: '1' },
+		...{ measure: 'x', handover: '1', proposal: '1', recut: '1' },
 	};
 	const paths = [...new Set(Object.values(operations).map(({ path }) => path))];
 
