@@ -1,5 +1,6 @@
 import {
 	boxOf,
+	closer,
 	drawSide,
 	frameOf,
 	join,
@@ -9,7 +10,7 @@ import {
 	type Side,
 } from '$lib/components/boundaries/side-drawing';
 import { decodeCoverage } from '$lib/engines/boundaries/codec';
-import type { DrawReply, DrawRequest, TwoSides } from '$lib/state/recut-drawer';
+import type { DrawReply, DrawRequest, Sight } from '$lib/state/recut-drawer';
 
 /** Draws two versions of the boundaries into one frame, off the page's thread. */
 let sides: { before: Side; after: Side; whole: Box } | null = null;
@@ -32,7 +33,7 @@ async function loadBoth(before: string, after: string): Promise<DrawReply> {
 /** how much air stands round what is looked at, as a share of it */
 const [airRoundAll, airRoundSome] = [0.04, 0.5];
 
-function draw(focus: TwoSides | null, at: [number, number] | null, marked: TwoSides): DrawReply {
+function draw({ focus, at, marked, steps }: Sight): DrawReply {
 	if (!sides) return { told: 'failed', message: 'the geometry is not there yet' };
 	const { before, after, whole } = sides;
 	const boxes = focus
@@ -40,7 +41,7 @@ function draw(focus: TwoSides | null, at: [number, number] | null, marked: TwoSi
 		: [];
 	const box: Box = boxes.length ? [...boxes[0]] : whole;
 	for (const one of boxes) join(box, one);
-	const frame = frameOf(box, boxes.length ? airRoundSome : airRoundAll);
+	const frame = closer(frameOf(box, boxes.length ? airRoundSome : airRoundAll), at, steps);
 	return {
 		told: 'drawn',
 		drawn: {
@@ -59,6 +60,6 @@ self.onmessage = async ({ data }: MessageEvent<DrawRequest>) => {
 					told: 'failed',
 					message: error instanceof Error ? error.message : String(error),
 				}))
-			: draw(data.focus, data.at, data.marked);
+			: draw(data);
 	self.postMessage(reply);
 };

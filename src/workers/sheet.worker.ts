@@ -1,14 +1,33 @@
 import { decodeCoverage } from '$lib/engines/boundaries/codec';
 import type { Coverage } from '$lib/engines/boundaries/coverage';
-import { drawSheet, paintSvg, regionSizesMm } from '$lib/engines/sheet';
+import {
+	drawPlaced,
+	groundOf,
+	paintSvg,
+	refineGround,
+	regionSizesMm,
+	type Ground,
+	type Placement,
+} from '$lib/engines/sheet';
+import type { DrawReply, DrawRequest, Drawn, RefineRequest } from '$lib/state/drawer';
 import { anchorsOf, placesOn, sharedArcs } from '$lib/state/sheet-places';
-import type { DrawReply, DrawRequest } from '$lib/state/drawer';
 
 /**
- * Draws sheets off the page's thread. The first message brings the address of the geometry, which is
- * fetched and unpacked once; each message brings what is to be drawn on it.
+ * Draws sheets off the page's thread. Geometry is fetched and unpacked when it is first asked for; what
+ * was drawn last is kept, so that finer lines can be laid into it.
  */
-let coverage: Promise<Coverage> | null = null;
+const fetched = new Map<string, Promise<Coverage>>();
+let last: { ground: Ground; placement: Placement } | null = null;
+
+/** The level that is drawn and one finer level are kept. */
+function coverageAt(address: string, drawn: string): Promise<Coverage> {
+	for (const other of fetched.keys())
+		if (other !== address && other !== drawn) fetched.delete(other);
+	const known = fetched.get(address) ?? fetchCoverage(address);
+	fetched.set(address, known);
+	return known;
+}
+let drawnFrom = '';
 
 async function fetchCoverage(address: string): Promise<Coverage> {
 	const response = await fetch(address);
@@ -16,26 +35,52 @@ async function fetchCoverage(address: string): Promise<Coverage> {
 	return decodeCoverage(new Uint8Array(await response.arrayBuffer()));
 }
 
-async function draw(request: DrawRequest): Promise<DrawReply> {
-	coverage ??= fetchCoverage(request.geometry);
-	const ground = await coverage;
-	const drawing = drawSheet({ coverage: ground, ...request.input });
-	return {
-		id: request.id,
-		drawing,
-		svg: paintSvg(drawing, { fills: 'attribute', idPrefix: 'sheet-' }),
+async function draw({ id, geometry, onCanvas, input, places }: DrawRequest): Promise<Drawn> {
+	drawnFrom = geometry;
+	const coverage = await coverageAt(geometry, geometry);
+	const { drawing, placement } = drawPlaced({ coverage, ...input });
+	const ground = onCanvas ? groundOf(drawing) : null;
+	last = ground && { ground, placement };
+	const found = {
 		anchors: anchorsOf(drawing),
-		sizesMm: regionSizesMm(ground, request.input.layout),
-		borderArcs: sharedArcs(ground, request.input.borders),
-		places: placesOn(drawing, ground, request.places),
+		borderArcs: sharedArcs(coverage, input.borders),
+		places: placesOn(drawing, coverage, places),
+	};
+	const bare = { ...drawing, fills: drawing.fills.map((fill) => ({ ...fill, rings: [] })) };
+	return {
+		id,
+		drawing: ground ? bare : drawing,
+		svg: ground ? '' : paintSvg(drawing, { fills: 'attribute', idPrefix: 'sheet-' }),
+		ground,
+		sizesMm: ground ? null : regionSizesMm(coverage, input.layout),
+		unitsPerMetre: placement.fit.scale / earthMetres,
+		...found,
 	};
 }
+/** mean radius of the earth, by which plane lengths are measured before they are fitted to the paper */
+const earthMetres = 6_371_008.8;
 
-self.onmessage = async ({ data }: MessageEvent<DrawRequest>) => {
+async function refine({ id, finer, area }: RefineRequest): Promise<DrawReply> {
+	if (!last) throw new Error('nothing is drawn that could be made finer');
+	const { ground, placement } = last;
+	const coverage = await coverageAt(finer, drawnFrom);
+	return { id, area, finer, refined: refineGround(ground, coverage, placement, area) };
+}
+
+async function answer(request: DrawRequest | RefineRequest): Promise<void> {
+	if ('finer' in request) return self.postMessage(await refine(request));
+	self.postMessage(await draw(request));
+	if (!request.onCanvas) return;
+	const coverage = await coverageAt(request.geometry, request.geometry);
+	const sizesMm = regionSizesMm(coverage, request.input.layout);
+	self.postMessage({ id: request.id, sizesMm } satisfies DrawReply);
+}
+
+self.onmessage = async ({ data }: MessageEvent<DrawRequest | RefineRequest>) => {
 	try {
-		self.postMessage(await draw(data));
+		await answer(data);
 	} catch (error) {
-		coverage = null;
+		fetched.clear();
 		const failed = error instanceof Error ? error.message : String(error);
 		self.postMessage({ id: data.id, failed } satisfies DrawReply);
 	}

@@ -117,6 +117,7 @@ import {
 	withdrawToken,
 } from '../../src/lib/server/services/tokens.service.ts';
 import { join, newTeam, openHouse } from '../support/house.ts';
+import { walkOfRecuts } from '../support/recut-walk.ts';
 import { servicesForMembers } from '../support/member-services.ts';
 import { createWorkshop, type TestWorkshop } from '../support/workshop.ts';
 
@@ -176,6 +177,7 @@ const walkOfTerritories: Walk = {
 
 /** Every service that acts for a member, what it needs, and a call that touches nothing that exists. */
 const walk: Walk = {
+	...walkOfRecuts(() => shop),
 	...walkOfTerritories,
 	acceptFinding: ['findings.accept', (member) => acceptFinding(shop, member, 99, 1)],
 	addPalette: [
@@ -280,7 +282,7 @@ const walk: Walk = {
 	withdrawToken: ['tokens.manage', (member) => withdrawToken(member, id)],
 };
 /** They only look up, for services that have asked already, or tell what a member may do. */
-const lookUps = ['rightsOf', 'sheetOf'];
+const lookUps = ['intakeOf', 'rightsOf', 'sheetOf'];
 
 const isForbidden = (work: Promise<unknown>): Promise<boolean> =>
 	work.then(

@@ -33,7 +33,7 @@ it.each(Object.entries(hostileFiles))(
 	'%s is refused within 300 MB',
 	async (name, [make, code]) => {
 		const file = join(folder, name.replaceAll(/\W/g, '-'));
-		writeFileSync(file, make());
+		writeFileSync(file, await make());
 		const read = await readAlone(file);
 		expect(read).toMatchObject({ status: 'refused', code });
 		expect(read.peakMegabytes).toBeGreaterThan(20);

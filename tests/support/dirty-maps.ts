@@ -149,6 +149,18 @@ export const dirtyMaps: Record<string, { code: string; map: Map_ }> = {
 		code: 'self-crossing',
 		map: [multi('m', [square(0, 0, 1, 1)], [square(0.5, 0.5, 2, 2)]), box('e', 2, 0.5, 3, 2)],
 	},
+	'a part inside another part of its region': {
+		code: 'parts-overlap',
+		map: [multi('m', [square(0, 0, 1, 1)], [square(0.2, 0.2, 0.5, 0.4)]), box('e', 1, 0, 2, 1)],
+	},
+	'a part along the edge of another part of its region': {
+		code: 'parts-overlap',
+		map: [multi('m', [square(0, 0, 1, 1)], [square(0.5, 0.2, 1, 0.4)]), box('e', 1, 0, 2, 1)],
+	},
+	'a part written twice': {
+		code: 'parts-overlap',
+		map: [multi('m', [square(0, 0, 1, 1)], [square(0, 0, 1, 1)]), box('e', 1, 0, 2, 1)],
+	},
 	'a crumb beside another region': {
 		code: 'stray-part',
 		map: [

@@ -1,4 +1,5 @@
 import { zipSync } from 'fflate';
+import { hostileFormats } from './hostile-formats.ts';
 import { box, region } from './read-boundaries.ts';
 import { shapefileMembers } from './shapefile.ts';
 
@@ -53,7 +54,10 @@ function sieve(): Uint8Array {
 }
 
 /** Files made to break a reader: how each is made, and the code it must be refused with. */
-export const hostileFiles: Record<string, [make: () => Uint8Array, code: string]> = {
+export const hostileFiles: Record<
+	string,
+	[make: () => Uint8Array | Promise<Uint8Array>, code: string]
+> = {
 	'a zip that unpacks to far more than a boundary file': [
 		() => withDeclaredSize(bomb(), 4_000_000_000),
 		'too-large-unpacked',
@@ -92,4 +96,5 @@ export const hostileFiles: Record<string, [make: () => Uint8Array, code: string]
 		() => Uint8Array.of(0x89, 0x50, 0x4e, 0x47, 13, 10, 26, 10),
 		'unsupported-format',
 	],
+	...hostileFormats,
 };

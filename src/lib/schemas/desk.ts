@@ -55,6 +55,16 @@ export interface DeskBoundarySet {
 	options: ReadingFields;
 	/** how far across water the gaps have been measured, in kilometres */
 	gapsKm: number;
+	/** geometry thinned for the screen, coarsest first; none where the full geometry is small or older */
+	levels: DisplayLevelNote[];
+}
+
+/** `GET sheets/[sheet]/geometry?level=n`; 1 is the coarsest. */
+export interface DisplayLevelNote {
+	level: number;
+	/** detail smaller than a square with sides as long as this is left out */
+	toleranceMetres: number;
+	points: number;
 }
 
 /** Regions that no plane drawing can join as their borders do: `paths` run from hub to hub. */

@@ -7,10 +7,12 @@ import {
 } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
+import type { Area } from '$lib/engines/sheet';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
 import { Colourer, type ColourReply } from './colourer';
+import type { FinerGround } from './desk-drawing';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
 import { Flatness } from './flatness.svelte';
@@ -78,6 +80,12 @@ export class Desk {
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
+	/** finer lines for the part of the sheet that is looked at, on a canvas */
+	finer: FinerGround | null = $state.raw(null);
+	/** asks for them: an area of the paper, and pixels to a hundredth of a millimetre */
+	refine: ((area: Area, pixelsPerUnit: number) => void) | null = null;
+	/** how large each region shows, mm; null until it has been measured */
+	sizesMm: Float64Array | null = $state.raw(null);
 	/** why the sheet could not be drawn here; '' while all is well */
 	drawFailure = $state('');
 
@@ -119,7 +127,7 @@ export class Desk {
 			this.inks,
 			this.sheet.borders,
 			this.standing,
-			this.drawn?.sizesMm ?? null,
+			this.sizesMm,
 		),
 	);
 	/** what is planned on the sheet now, when it is territories */

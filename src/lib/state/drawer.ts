@@ -1,11 +1,12 @@
-import type { Drawing } from '$lib/engines/sheet/drawing';
-import type { SheetInput } from '$lib/engines/sheet';
+import type { Area, Drawing, Ground, SheetInput } from '$lib/engines/sheet';
 import type { BorderArcs } from './sheet-places';
 
 export interface DrawRequest {
 	id: number;
-	/** address of the coverage's bytes */
+	/** address of the bytes of the coverage, or of one of its levels */
 	geometry: string;
+	/** whether a canvas will show it: then there is no SVG, and the fills' rings travel as one ground */
+	onCanvas: boolean;
 	input: Omit<SheetInput, 'coverage'>;
 	/** degrees, interleaved: places to be found on the sheet */
 	places: Float64Array;
@@ -13,20 +14,45 @@ export interface DrawRequest {
 export interface Drawn {
 	id: number;
 	drawing: Drawing;
+	/** '' for a canvas */
 	svg: string;
+	ground: Ground | null;
+	/** hundredths of a millimetre to a metre at the middle of the sheet */
+	unitsPerMetre: number;
 	anchors: Float64Array;
-	sizesMm: Float64Array;
+	/** how large each region shows, mm; for a canvas it is measured once the sheet stands */
+	sizesMm: Float64Array | null;
 	borderArcs: BorderArcs;
 	places: Float64Array;
 }
-export type DrawReply = Drawn | { id: number; failed: string };
+/** Follows a drawing without sizes, which take a placing of their own. */
+export interface Sized {
+	id: number;
+	sizesMm: Float64Array;
+}
+export interface RefineRequest {
+	id: number;
+	/** address of the finer level */
+	finer: string;
+	area: Area;
+}
+export interface Refined {
+	id: number;
+	area: Area;
+	finer: string;
+	refined: Ground;
+}
+export type DrawReply = Drawn | Sized | Refined | { id: number; failed: string };
 
-/** Asks for drawings in a worker; what was asked last is what counts. */
+type Request = DrawRequest | RefineRequest;
+
+/** Asks for drawings in a worker; what was asked last is what counts, a drawing before finer lines. */
 export class Drawer {
 	#worker: Worker | null = null;
 	#id = 0;
 	#busy = false;
-	#next: DrawRequest | null = null;
+	#draw: DrawRequest | null = null;
+	#refine: RefineRequest | null = null;
 
 	constructor(
 		private makeWorker: () => Worker,
@@ -34,19 +60,33 @@ export class Drawer {
 	) {}
 
 	ask(request: Omit<DrawRequest, 'id'>) {
-		const numbered = { ...request, id: ++this.#id };
-		if (this.#busy) this.#next = numbered;
-		else this.#send(numbered);
+		this.#draw = { ...request, id: ++this.#id };
+		this.#refine = null;
+		this.#next();
+	}
+
+	/** Finer lines for the drawing that was asked for last. */
+	refine(request: Omit<RefineRequest, 'id'>) {
+		this.#refine = { ...request, id: this.#id };
+		this.#next();
 	}
 
 	stop() {
 		this.#worker?.terminate();
 		this.#worker = null;
 		this.#busy = false;
-		this.#next = null;
+		this.#draw = this.#refine = null;
 	}
 
-	#send(request: DrawRequest) {
+	#next() {
+		const request: Request | null = this.#draw ?? this.#refine;
+		if (this.#busy || !request) return;
+		if (request === this.#draw) this.#draw = null;
+		else this.#refine = null;
+		this.#send(request);
+	}
+
+	#send(request: Request) {
 		if (!this.#worker) {
 			this.#worker = this.makeWorker();
 			this.#worker.onmessage = ({ data }: MessageEvent<DrawReply>) => this.#settle(data);
@@ -60,10 +100,9 @@ export class Drawer {
 	}
 
 	#settle(reply: DrawReply) {
+		if ('sizesMm' in reply && !('drawing' in reply)) return this.answered(reply);
 		this.#busy = false;
-		const next = this.#next;
-		this.#next = null;
-		if (next) this.#send(next);
-		if (reply.id === this.#id || !('failed' in reply)) this.answered(reply);
+		this.#next();
+		if (reply.id === this.#id || 'drawing' in reply) this.answered(reply);
 	}
 }

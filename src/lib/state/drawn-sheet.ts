@@ -1,15 +1,19 @@
-import type { Drawing } from '$lib/engines/sheet/drawing';
+import type { Drawing, Ground } from '$lib/engines/sheet';
 import type { Drawn } from './drawer';
 import { arcsPath } from './sheet-places';
 
 /** What the page needs to know of a drawn sheet beside the SVG itself; hundredths of a millimetre. */
 export interface DrawnSheet {
 	drawing: Drawing;
+	/** '' where a canvas shows it */
 	svg: string;
+	/** the geometry that a canvas paints; null for an SVG */
+	ground: Ground | null;
+	unitsPerMetre: number;
 	/** x, y of a place inside the largest part of each region, interleaved */
 	anchors: Float64Array;
-	/** how large each region shows, mm */
-	sizesMm: Float64Array;
+	/** arcs along a border; none where it is a point or a gap */
+	borderArcs: (border: number) => Uint32Array;
 	/** path of the line along a border; '' where it is a point or a gap */
 	borderPath: (border: number) => string;
 	/** where a finding's place lies on the sheet */
@@ -18,19 +22,17 @@ export interface DrawnSheet {
 	projection: string;
 }
 
-export const drawnSheet = ({
+export function drawnSheet({
 	drawing,
-	svg,
-	anchors,
-	sizesMm,
 	borderArcs: { starts, arcs },
-	places,
-}: Drawn): DrawnSheet => ({
-	drawing,
-	svg,
-	anchors,
-	sizesMm,
-	places,
-	borderPath: (border) => arcsPath(drawing, arcs.subarray(starts[border], starts[border + 1])),
-	projection: drawing.notes.projection.split(',')[0],
-});
+	...rest
+}: Omit<Drawn, 'id' | 'sizesMm'>): DrawnSheet {
+	const borderArcs = (border: number) => arcs.subarray(starts[border], starts[border + 1]);
+	return {
+		...rest,
+		drawing,
+		borderArcs,
+		borderPath: (border) => arcsPath(drawing, borderArcs(border)),
+		projection: drawing.notes.projection.split(',')[0],
+	};
+}

@@ -6,9 +6,19 @@ export interface TwoSides {
 	after: readonly string[];
 }
 
+/** What is to be seen: the whole, or what is looked at, and how near. */
+export interface Sight {
+	focus: TwoSides | null;
+	/** the middle of a closer look; that of the regions where it is null */
+	at: [number, number] | null;
+	/** regions that change */
+	marked: TwoSides;
+	/** each halves the frame twice */
+	steps: number;
+}
+
 export type DrawRequest =
-	| { ask: 'load'; before: string; after: string }
-	| { ask: 'draw'; focus: TwoSides | null; at: [number, number] | null; marked: TwoSides };
+	{ ask: 'load'; before: string; after: string } | ({ ask: 'draw' } & Sight);
 
 export interface LoadedSides {
 	before: { keys: string[]; names: string[] };
@@ -42,8 +52,8 @@ export class RecutDrawer {
 		this.#post({ ask: 'load', ...addresses });
 	}
 
-	draw(focus: TwoSides | null, at: [number, number] | null, marked: TwoSides) {
-		this.#post({ ask: 'draw', focus, at, marked });
+	draw(sight: Sight) {
+		this.#post({ ask: 'draw', ...sight });
 	}
 
 	stop() {

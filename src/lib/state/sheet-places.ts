@@ -70,7 +70,10 @@ export function sharedArcs(coverage: Coverage, borders: BorderList): BorderArcs 
 }
 
 /** Path data of some arcs of a drawing, each a line of its own. */
-export function arcsPath({ arcPoints, arcStarts }: Drawing, arcs: Iterable<number>): string {
+export function arcsPath(
+	{ arcPoints, arcStarts }: Pick<Drawing, 'arcPoints' | 'arcStarts'>,
+	arcs: Iterable<number>,
+): string {
 	let path = '';
 	for (const arc of arcs) {
 		for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++)

@@ -38,6 +38,7 @@ const sheet: DeskSheet = {
 		mends: [],
 		options: {},
 		gapsKm: 0,
+		levels: [],
 	},
 	draft: blankDraft(),
 	colouring: null,

@@ -50,6 +50,7 @@ const borders: Record<BorderKind, string> = {
 	water: 'across water',
 	gap: 'across water',
 	hand: 'by hand',
+	gap: 'across a gap',
 };
 
 export function sideWords(side: PairChange['before']): string {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { readBoundaries, sourceOf } from '$lib/engines/boundaries';
-import { boxOf, drawSide, frameOf, placeIn, sideOf } from './side-drawing';
+import { boxOf, closer, drawSide, frameOf, placeIn, sideOf, widthMetres } from './side-drawing';
 
 const square = (key: string, west: number) => ({
 	type: 'Feature',
@@ -46,6 +46,15 @@ describe('drawing one side of a change', () => {
 		expect(Math.max(...numbers)).toBeLessThanOrEqual(frame.width);
 		// the east square lies in the right half of the frame
 		expect(placeIn(frame, [11, 0.5])).toEqual({ x: 500, y: frame.height / 2 });
+	});
+
+	it('steps closer round a place', async () => {
+		const side = await twoSquares();
+		const frame = frameOf(side.box, 0);
+		expect(widthMetres(frame)).toBeCloseTo(2 * 111_195 * Math.cos(Math.PI / 360), 0);
+		const near = closer(frame, [11, 0.5], 2);
+		expect(widthMetres(near)).toBeCloseTo(widthMetres(frame) / 16, 0);
+		expect(placeIn(near, [11, 0.5])).toEqual({ x: 500, y: frame.height / 2 });
 	});
 
 	it('leaves out what lies outside a frame drawn closer', async () => {

@@ -87,6 +87,19 @@ export function frameOf(inner: Box, air: number): Frame {
 	return { box, width, height: Math.round(width * shape) };
 }
 
+/** The same frame round its middle, or round a place, a quarter as wide for each step. */
+export function closer(frame: Frame, at: [number, number] | null, steps: number): Frame {
+	if (!steps) return frame;
+	const [west, south, east, north] = frame.box;
+	const [x, y] = at ?? [(west + east) / 2, (south + north) / 2];
+	const [dx, dy] = [(east - west) / 2 / 4 ** steps, (north - south) / 2 / 4 ** steps];
+	return { ...frame, box: [x - dx, y - dy, x + dx, y + dy] };
+}
+
+/** How wide a frame is on the ground at its middle, on a sphere of the mean radius. */
+export const widthMetres = ({ box: [west, south, east, north] }: Frame): number =>
+	(east - west) * narrowing([west, south, east, north]) * 111_195;
+
 const narrowing = ([, south, , north]: Box) =>
 	Math.max(0.05, Math.cos((Math.max(-85, Math.min(85, (south + north) / 2)) * Math.PI) / 180));
 

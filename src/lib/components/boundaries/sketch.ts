@@ -37,12 +37,12 @@ function ringPath(line: number[], x: (v: number) => number, y: (v: number) => nu
 	return steps.length > 1 ? `M${steps.join('L')}Z` : '';
 }
 
-const fine = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 5 });
+const fine = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 3 });
 const whole = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 0 });
 
 /** The two corners of a box in words: small numbers with their decimals, large ones whole. */
 export function cornerWords([west, south, east, north]: Sketch['box']): string {
 	const small = [west, south, east, north].every((value) => Math.abs(value) <= 1000);
-	const text = (value: number) => (small ? fine : whole).format(value);
+	const text = (value: number) => (small ? fine : whole).format(value).replace('-', '−');
 	return `Lower left ${text(west)}; ${text(south)}. Upper right ${text(east)}; ${text(north)}.`;
 }

@@ -1,5 +1,6 @@
 import { expect, it } from 'vitest';
-import { regionsInside, type Place } from './lasso';
+import { regionsInside } from './lasso';
+import type { Place } from './surface';
 
 /** A paper of 200 by 100 mm shown at 2 pixels a millimetre, its corner 10 pixels into the frame. */
 const view = { x: 10, y: 10, scale: 1, paperWidth: 400, paperHeight: 200 };

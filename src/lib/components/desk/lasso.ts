@@ -1,7 +1,6 @@
 import { booleanPointInPolygon } from '@turf/turf';
 import type { Viewport } from '$lib/state/viewport.svelte';
-
-export type Place = [x: number, y: number];
+import type { Place } from './surface';
 
 /** a line shorter than this many pixels is a press */
 const clickSlack = 5;
@@ -11,7 +10,7 @@ export interface LassoHost {
 	draws: (event: PointerEvent) => boolean;
 	/** pixels of the frame; [] once it has ended */
 	online: (line: Place[]) => void;
-	onpress: (target: EventTarget | null) => void;
+	onpress: (target: EventTarget | null, at: Place) => void;
 	onclose: (line: Place[]) => void;
 }
 
@@ -50,7 +49,7 @@ export const lasso = (host: LassoHost) => (frame: HTMLElement) => {
 		host.online([]);
 		if (event.type !== 'pointerup') return;
 		if (lengthOf(drawn) > clickSlack) return host.onclose(drawn);
-		host.onpress(document.elementFromPoint(event.clientX, event.clientY));
+		host.onpress(document.elementFromPoint(event.clientX, event.clientY), place(event));
 	}
 
 	const first = { capture: true };

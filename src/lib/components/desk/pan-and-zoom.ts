@@ -1,14 +1,16 @@
 import type { Viewport } from '$lib/state/viewport.svelte';
+import type { Place } from './surface';
 
 /** a press that moves less than this many pixels is a click */
 const clickSlack = 5;
 
 /**
  * Wheel, drag and pinch on the sheet's frame. A press that does not move is handed to `onpress` with
- * what lay under it. One finger scrolls the page until the sheet is zoomed in.
+ * what lay under it and where. One finger scrolls the page until the sheet is zoomed in.
  */
 export const panAndZoom =
-	(view: Viewport, onpress: (target: EventTarget | null) => void) => (frame: HTMLElement) => {
+	(view: Viewport, onpress: (target: EventTarget | null, at: Place) => void) =>
+	(frame: HTMLElement) => {
 		const fingers = new Map<number, { x: number; y: number }>();
 		let moved = 0;
 
@@ -56,7 +58,9 @@ export const panAndZoom =
 
 		function up(event: PointerEvent) {
 			if (!fingers.delete(event.pointerId) || fingers.size) return;
-			if (event.type === 'pointerup' && moved <= clickSlack) onpress(event.target);
+			if (event.type !== 'pointerup' || moved > clickSlack) return;
+			const { x, y } = place(event);
+			onpress(event.target, [x, y]);
 		}
 
 		frame.addEventListener('wheel', wheel, { passive: false });

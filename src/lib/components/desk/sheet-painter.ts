@@ -2,10 +2,10 @@ import { asSeenBy } from '$lib/engines/colour';
 import type { Ink, Reader } from '$lib/engines/palettes/palette';
 import { recolour, uncoloured } from '$lib/engines/sheet';
 import type { Drawing, RegionFill } from '$lib/engines/sheet/drawing';
-import type { SheetSurface } from './sheet-surface';
+import type { Surface } from './surface';
 
 export interface Painting {
-	surface: SheetSurface;
+	surface: Surface;
 	drawing: Drawing;
 	palette: readonly Ink[];
 	reader: Reader;

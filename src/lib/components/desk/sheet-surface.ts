@@ -1,25 +1,24 @@
-import { paintSvg } from '$lib/engines/sheet';
 import type { Drawing, RegionFill } from '$lib/engines/sheet/drawing';
+import type { DrawnSheet } from '$lib/state/drawn-sheet';
 import type { RegionNumbers } from '$lib/state/rules-in-force';
-
-/** Put before the ids of the sheet's elements, which share the page with others. */
-export const idPrefix = 'sheet-';
+import { parseSvg, setLettering } from './lettering';
+import type { Surface } from './surface';
 
 /** The inline SVG of a sheet: finds regions in it and changes it in place, without a redraw. */
-export class SheetSurface {
+export class SheetSurface implements Surface {
 	readonly svg: SVGSVGElement;
 	readonly viewBox: string;
 	readonly #regions: (SVGElement | undefined)[] = [];
 	#stop: SVGElement;
 	#lettering = '';
 
-	/** `text` is an SVG document made by the sheet's painter; it is parsed as XML, never as markup. */
+	/** The drawn SVG is a document made by the sheet's painter; it is parsed as XML, never as markup. */
 	constructor(
 		host: HTMLElement,
-		text: string,
+		private drawn: Pick<DrawnSheet, 'svg' | 'borderPath'>,
 		private numbers: RegionNumbers,
 	) {
-		this.svg = document.importNode(parse(text), true);
+		this.svg = document.importNode(parseSvg(drawn.svg), true);
 		this.viewBox = this.svg.getAttribute('viewBox') ?? '0 0 1 1';
 		this.svg.removeAttribute('width');
 		this.svg.removeAttribute('height');
@@ -32,7 +31,6 @@ export class SheetSurface {
 		host.replaceChildren(this.svg);
 	}
 
-	/** The region under an event, or -1. */
 	regionAt(target: EventTarget | null): number {
 		const element = target instanceof Element ? target.closest('[data-key]') : null;
 		return this.numbers.get(element?.getAttribute('data-key') ?? '') ?? -1;
@@ -42,7 +40,10 @@ export class SheetSurface {
 		return this.#regions[region]?.getAttribute('d') ?? '';
 	}
 
-	/** Box of a region as shares of the paper. */
+	borderPath(border: number): string {
+		return this.drawn.borderPath(border);
+	}
+
 	boxOf(region: number) {
 		const element = this.#regions[region];
 		if (!(element instanceof SVGGraphicsElement)) return null;
@@ -56,13 +57,11 @@ export class SheetSurface {
 		};
 	}
 
-	/** Shows the same sheet in other colours: fills and words that differ, then lettering and legend. */
 	paint(drawing: Drawing, words: (fill: RegionFill) => string) {
 		for (const fill of drawing.fills) this.tint(fill.region, fill.hex, words(fill));
-		this.#letter(drawing);
+		this.#lettering = setLettering(this.svg, drawing, this.#lettering);
 	}
 
-	/** Gives one region a fill and its words. */
 	tint(region: number, hex: string, words: string) {
 		const element = this.#regions[region];
 		if (element?.getAttribute('fill') !== hex) element?.setAttribute('fill', hex);
@@ -71,14 +70,12 @@ export class SheetSurface {
 		element.querySelector('title')?.replaceChildren(words);
 	}
 
-	/** Fades every region for which `stays` is false; null fades none. */
 	fade(stays: ((region: number) => boolean) | null) {
 		this.#regions.forEach((element, region) =>
 			element?.classList.toggle('faded', stays !== null && !stays(region)),
 		);
 	}
 
-	/** The one stop of the Tab key on the sheet: a region, or the sheet as a whole. */
 	setStop(region: number | null, focus: boolean) {
 		const next = region === null ? this.svg : (this.#regions[region] ?? this.svg);
 		if (next !== this.#stop) {
@@ -88,28 +85,6 @@ export class SheetSurface {
 		}
 		if (focus) next.focus({ preventScroll: true });
 	}
-
-	/** labels take the ink that reads on their fill, the legend lists the inks in use */
-	#letter(drawing: Drawing) {
-		const lettering = paintSvg(
-			{ ...drawing, fills: [], lines: [] },
-			{ fills: 'attribute', idPrefix },
-		);
-		if (lettering === this.#lettering) return;
-		this.#lettering = lettering;
-		const fresh = parse(lettering);
-		for (const name of ['labels', 'collar']) {
-			const now = this.svg.querySelector(`#${idPrefix}${name}`);
-			const next = fresh.querySelector(`#${idPrefix}${name}`);
-			if (now && next) now.replaceWith(document.importNode(next, true));
-		}
-	}
-}
-
-function parse(text: string): SVGSVGElement {
-	const root = new DOMParser().parseFromString(text, 'image/svg+xml').documentElement;
-	if (root.localName !== 'svg') throw new Error('the sheet could not be read as SVG');
-	return root as unknown as SVGSVGElement;
 }
 
 /** A region in words while the sheet is coloured by region. */

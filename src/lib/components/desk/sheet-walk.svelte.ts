@@ -4,7 +4,7 @@ import { neighboursOf } from '$lib/state/region-links';
 import type { Viewport } from '$lib/state/viewport.svelte';
 import { nearestRegion, step, type Direction } from '$lib/state/walk';
 import { counted } from '../format';
-import type { SheetSurface } from './sheet-surface';
+import type { Surface } from './surface';
 
 const arrows: Record<string, Direction> = {
 	ArrowLeft: 'left',
@@ -22,10 +22,10 @@ export class SheetWalk {
 	/** for the live region: what the last key came to */
 	spoken = $state('');
 	readonly #desk: Desk;
-	readonly #surface: () => SheetSurface | null;
+	readonly #surface: () => Surface | null;
 	readonly #others: Record<string, () => void>;
 
-	constructor(desk: Desk, view: Viewport, surface: () => SheetSurface | null) {
+	constructor(desk: Desk, view: Viewport, surface: () => Surface | null) {
 		this.#desk = desk;
 		this.#surface = surface;
 		this.#others = {

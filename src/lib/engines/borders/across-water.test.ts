@@ -48,9 +48,9 @@ function bruteGap(one: number[][], two: number[][]): number {
 
 const keyed = (coverage: Coverage, gaps: ReturnType<typeof gapsWithin>) =>
 	Object.fromEntries(
-		Array.from(gaps.borders.a, (a, i) => [
-			[coverage.keys[a], coverage.keys[gaps.borders.b[i]]].sort().join('-'),
-			gaps.borders.metres[i],
+		Array.from(gaps.a, (a, i) => [
+			[coverage.keys[a], coverage.keys[gaps.b[i]]].sort().join('-'),
+			gaps.metres[i],
 		]),
 	);
 
@@ -103,7 +103,7 @@ describe('gaps between coasts', () => {
 		expect(Object.keys(keyed(coverage, all))).toEqual(['b-c']);
 		const short = gapsWithin(coverage, 5, borders, 1);
 		expect(short.withinKm).toBeLessThan(1.1);
-		expect(short.borders.a).toHaveLength(0);
+		expect(short.a).toHaveLength(0);
 	});
 	it('the Strait of Dover is some 33 km wide', async () => {
 		// 18 nautical miles from South Foreland to Cap Gris-Nez (from memory); the map is Natural Earth's

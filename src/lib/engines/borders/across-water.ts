@@ -1,9 +1,9 @@
 import { crossing } from '../geometry/crossing.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { nearestOnSegment } from '../geometry/near.ts';
-import { SegmentBlocks } from '../geometry/segment-blocks.ts';
-import type { BorderList } from './border-list.ts';
-import { PairTally } from './pair-tally.ts';
+import type { SegmentBlocks } from '../geometry/segment-blocks.ts';
+import { kindCode } from './border-list.ts';
+import type { PairTally } from './pair-tally.ts';
 import { gapsUpTo, type Gap } from './water-gaps.ts';
 
 /** Nearer than this to a corner is touching it, in metres. */
@@ -12,62 +12,33 @@ const touching = 0.02;
 /** Looks at pairs of coast runs; some ten seconds' work. */
 export const mostGapSteps = 200_000_000;
 
-export interface Gaps {
-	/** pairs across water only: kind `water`, the width of the gap as metres, its middle as the place */
-	borders: BorderList;
-	/** all gaps up to this width are found; less than was asked for when the work ran out */
-	withinKm: number;
-}
-
 /**
- * Pairs without a line or a point whose nearest places lie within `km` and whose shortest connection
- * crosses no third region. Input: a coverage and its borders (those across water or by hand are passed
- * over); km up to 500. Widths are geodesic (Karney 2013), to a millionth. The nearest places of two
- * outlines always include a corner of one of them, so corners of coasts are measured against segments.
+ * Adds to a tally the pairs it does not have whose nearest places lie within `km` and whose shortest
+ * connection crosses no third region; answers up to which width all are found. Widths are geodesic (Karney
+ * 2013), to a millionth. The nearest places of two outlines always include a corner of one of them, so
+ * corners of coasts are measured against segments.
  */
-export function gapsWithin(
-	coverage: Coverage,
-	km: number,
-	touch: BorderList,
-	steps = mostGapSteps,
-): Gaps {
-	const known = new PairTally(coverage.keys.length);
-	touch.a.forEach((a, i) => {
-		if (touch.kind[i] < water) known.add(a, touch.b[i], touch.kind[i], 0, 0, 0);
-	});
-	const tally = new PairTally(coverage.keys.length);
-	const blocks = new SegmentBlocks(coverage);
-	const withinKm = addGaps(coverage, blocks, km, steps, known, tally);
-	return { borders: tally.list(), withinKm };
-}
-
-/** Adds the same to a tally that holds the lines and points; answers up to which width all are found. */
 export function addAcrossWater(
 	coverage: Coverage,
 	blocks: SegmentBlocks,
 	km: number,
 	tally: PairTally,
+	steps = mostGapSteps,
 ): number {
-	return addGaps(coverage, blocks, km, mostGapSteps, tally, tally);
-}
-
-const water = 2;
-
-function addGaps(
-	coverage: Coverage,
-	blocks: SegmentBlocks,
-	km: number,
-	steps: number,
-	known: PairTally,
-	tally: PairTally,
-): number {
-	const isKnown = (a: number, b: number) => known.has(a, b);
+	const isKnown = (a: number, b: number) => tally.has(a, b);
 	const { gaps, within } = gapsUpTo(coverage, km * 1000, isKnown, steps);
 	for (const gap of gaps) {
 		if ([0, 360, -360].some((turn) => isCrossed(gap, turn, coverage, blocks))) continue;
 		const x = (gap.from[0] + gap.to[0]) / 2;
 		const y = (gap.from[1] + gap.to[1]) / 2;
-		tally.add(gap.a, gap.b, water, gap.metres, Math.abs(x) > 180 ? x - 360 * Math.sign(x) : x, y);
+		tally.add(
+			gap.a,
+			gap.b,
+			kindCode('water'),
+			gap.metres,
+			Math.abs(x) > 180 ? x - 360 * Math.sign(x) : x,
+			y,
+		);
 	}
 	return within / 1000;
 }

@@ -19,7 +19,7 @@ export {
 } from './sheet-rows.ts';
 export { standingNames, standingUnder, type CountingRule, type Standing } from './standing.ts';
 export { withGaps, type GapList } from './with-gaps.ts';
-export { gapsWithin, type Gaps } from './across-water.ts';
+export { gapsWithin, type WaterGaps } from './gaps-within.ts';
 export {
 	compareBorders,
 	type BorderChanges,

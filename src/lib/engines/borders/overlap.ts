@@ -13,6 +13,7 @@ export interface Overlap {
 	km2: number;
 	/** half the outline of the common area */
 	metres: number;
+	/** inside what they have in common */
 	at: [number, number];
 	/** their outlines are the same, corner for corner */
 	same: boolean;
@@ -172,5 +173,9 @@ function addPiece(piece: Float64Array, side: number, sum: Sum): void {
 	sum.metres += metres;
 	if (metres <= sum.longest) return;
 	sum.longest = metres;
-	sum.at = [(piece[0] + piece[2]) / 2, (piece[1] + piece[3]) / 2];
+	const reach = (side * aside) / Math.hypot(piece[2] - piece[0], piece[3] - piece[1]);
+	sum.at = [
+		(piece[0] + piece[2]) / 2 - (piece[3] - piece[1]) * reach,
+		(piece[1] + piece[3]) / 2 + (piece[2] - piece[0]) * reach,
+	];
 }

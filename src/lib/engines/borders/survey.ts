@@ -1,4 +1,6 @@
 import type { Coverage } from '../geometry/coverage.ts';
+import { ringPoints } from '../geometry/coverage-rings.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import type { BorderList } from './border-list.ts';
 import { addLines } from './lines.ts';
@@ -22,6 +24,8 @@ export interface Survey {
 	overlaps: Overlap[];
 	/** one place for each region whose own outline crosses itself */
 	crossings: Suspects['crossings'];
+	/** regions whose own parts may lie on each other */
+	doubtful: Suspects['doubtful'];
 	/** a place where so many regions meet that their point touches are left out, or null */
 	crowded: [number, number] | null;
 	/** all pairs across water up to this width are there; null when none were asked for */
@@ -36,7 +40,8 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const places = meetings(coverage);
 	const crowded = crowdedPlace(places);
 	if (crowded) {
-		return { borders: tally.list(), overlaps: [], crossings: [], crowded, waterKm: null };
+		const nothing = { overlaps: [], crossings: [], doubtful: new Set<number>(), waterKm: null };
+		return { borders: tally.list(), crowded, ...nothing };
 	}
 	const found = suspects(coverage, blocks, places);
 	const overlaps = overlapsAmong(coverage, found, options.toleranceMetres ?? 0.02);
@@ -47,7 +52,8 @@ export function surveyOf(coverage: Coverage, options: BordersOptions = {}): Surv
 	const waterKm = options.acrossWaterKm
 		? addAcrossWater(coverage, blocks, options.acrossWaterKm, tally)
 		: null;
-	return { borders: tally.list(), overlaps, crossings: found.crossings, crowded, waterKm };
+	const { crossings, doubtful } = found;
+	return { borders: tally.list(), overlaps, crossings, doubtful, crowded, waterKm };
 }
 
 function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): Overlap[] {
@@ -64,13 +70,15 @@ function overlapsAmong(coverage: Coverage, found: Suspects, tolerance: number): 
 
 /** What two regions with the same outline have in common: everything. */
 function wholeOf(coverage: Coverage, a: number, b: number): Overlap {
-	const { regionParts, partRings, ringStarts, ringArcs, arcStarts, arcPoints } = coverage;
-	const half = ringArcs[ringStarts[partRings[regionParts[a]]]];
-	const corner = 2 * arcStarts[half >= 0 ? half : ~half];
+	const first = coverage.regionParts[a];
+	const rings: Float64Array[] = [];
+	for (let ring = coverage.partRings[first]; ring < coverage.partRings[first + 1]; ring++) {
+		rings.push(ringPoints(coverage, ring));
+	}
 	return {
 		...{ a, b, same: true },
 		km2: coverage.areasKm2[a],
 		metres: outlineMetres(coverage, a) / 2,
-		at: [arcPoints[corner], arcPoints[corner + 1]],
+		at: insidePlace(rings),
 	};
 }

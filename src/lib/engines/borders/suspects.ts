@@ -7,7 +7,16 @@ import type { Meeting } from './touches.ts';
 /** Pairs that may overlap, and places where a region's own outline crosses itself. */
 export interface Suspects {
 	pairs: Map<number, [number, number]>;
-	crossings: { region: number; at: [number, number] }[];
+	/** regions whose own parts may lie on each other */
+	doubtful: Set<number>;
+	crossings: SelfCrossing[];
+}
+
+/** A place where a region's own outline crosses itself, or where its parts lie on each other. */
+export interface SelfCrossing {
+	region: number;
+	at: [number, number];
+	doubled?: boolean;
 }
 
 /**
@@ -17,7 +26,7 @@ export interface Suspects {
  * are looked up too, since a large region laid over many covers some it does not touch.
  */
 export function suspects(coverage: Coverage, blocks: SegmentBlocks, places: Meeting[]): Suspects {
-	const found: Suspects = { pairs: new Map(), crossings: [] };
+	const found: Suspects = { pairs: new Map(), doubtful: new Set(), crossings: [] };
 	findCrossings(coverage, blocks, found);
 	for (const place of places) {
 		if (place.arcs.length > 2 && disagrees(coverage, place)) {
@@ -38,7 +47,12 @@ function lookUp(
 	blocks: SegmentBlocks,
 	found: Suspects,
 ): void {
-	for (const [x, y, region] of places) pairUp([region], blocks.regionsAt(x, y), coverage, found);
+	for (const [x, y, region] of places) {
+		const regions = blocks.regionsAt(x, y);
+		pairUp([region], regions, coverage, found);
+		// covered an even number of times: the parts of the region may lie on each other there
+		if (!regions.includes(region)) found.doubtful.add(region);
+	}
 }
 
 function pairUp(these: number[], those: number[], coverage: Coverage, found: Suspects): void {

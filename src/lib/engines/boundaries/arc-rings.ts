@@ -29,8 +29,9 @@ export function arcsByRegion(
  * first clockwise from where it came, which keeps to one face; a walk that comes back to a vertex of its
  * own is cut there, so every ring is simple and rings may touch in points only.
  */
-export function traceRings(halves: Int32Array, arcs: Arcs, positions: Float64Array): ArcRing[] {
-	const walker = new RingWalker(halves, arcs, positions);
+export function traceRings(halves: Int32Array, arcs: Arcs): ArcRing[] {
+	if (halves.length === 1) return closes(arcs, halves[0]) ? [[halves[0]]] : [];
+	const walker = new RingWalker(halves, arcs);
 	const rings: ArcRing[] = [];
 	for (let i = 0; i < halves.length; i++) walker.from(i, rings);
 	return rings;
@@ -43,7 +44,6 @@ class RingWalker {
 	constructor(
 		private halves: Int32Array,
 		private arcs: Arcs,
-		private positions: Float64Array,
 	) {
 		this.used = new Uint8Array(halves.length);
 		for (let i = 0; i < halves.length; i++) {
@@ -80,11 +80,11 @@ class RingWalker {
 	private nextAt(v: number, from: number): number {
 		const free = (this.leaving.get(v) ?? []).filter((i) => !this.used[i]);
 		if (free.length < 2) return free[0] ?? -1;
-		const back = this.angle(v, this.vertexBeforeEnd(from));
+		const back = this.angleOf(~from);
 		let best = -1;
 		let bestTurn = Infinity;
 		for (const i of free) {
-			let turn = back - this.angle(v, this.vertexAfterStart(this.halves[i]));
+			let turn = back - this.angleOf(this.halves[i]);
 			if (turn <= 0) turn += 2 * Math.PI;
 			if (turn < bestTurn) {
 				bestTurn = turn;
@@ -95,21 +95,22 @@ class RingWalker {
 	}
 
 	private startOf(half: number): number {
-		const { vertices, starts } = this.arcs;
-		return half >= 0 ? vertices[starts[half]] : vertices[starts[~half + 1] - 1];
+		const { ends } = this.arcs;
+		return half >= 0 ? ends[2 * half] : ends[2 * ~half + 1];
 	}
 	private endOf(half: number): number {
 		return this.startOf(~half);
 	}
-	private vertexAfterStart(half: number): number {
-		const { vertices, starts } = this.arcs;
-		return half >= 0 ? vertices[starts[half] + 1] : vertices[starts[~half + 1] - 2];
+	/** The direction in which a half leaves its start. */
+	private angleOf(half: number): number {
+		const { points: p, starts } = this.arcs;
+		const from = half >= 0 ? 2 * starts[half] : 2 * starts[~half + 1] - 2;
+		const to = half >= 0 ? from + 2 : from - 2;
+		return Math.atan2(p[to + 1] - p[from + 1], p[to] - p[from]);
 	}
-	private vertexBeforeEnd(half: number): number {
-		return this.vertexAfterStart(~half);
-	}
-	private angle(from: number, to: number): number {
-		const p = this.positions;
-		return Math.atan2(p[2 * to + 1] - p[2 * from + 1], p[2 * to] - p[2 * from]);
-	}
+}
+
+function closes({ ends }: Arcs, half: number): boolean {
+	const arc = half >= 0 ? half : ~half;
+	return ends[2 * arc] === ends[2 * arc + 1];
 }

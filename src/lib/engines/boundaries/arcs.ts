@@ -1,33 +1,37 @@
-import { GrowingInts } from '../geometry/growing.ts';
+import { GrowingFloats, GrowingInts } from '../geometry/growing.ts';
 import type { Outlines } from './outlines.ts';
 import { isKept, SegmentEnds } from './segment-ends.ts';
 import type { Segments } from './segments.ts';
 
 /** Segments chained into arcs between places where three or more meet; closed where none do. */
 export interface Arcs {
-	/** vertex numbers of all arcs in turn; a closed arc ends with its first vertex */
-	vertices: Int32Array;
-	/** arcs + 1 */
+	/** positions of all arcs in turn, interleaved; a closed arc ends where it began */
+	points: Float64Array;
+	/** arcs + 1: first point of each */
 	starts: Int32Array;
+	/** vertex number of the first and last point of each, interleaved */
+	ends: Int32Array;
 	left: Int32Array;
 	right: Int32Array;
 }
 
 export function chainArcs(outlines: Outlines, segments: Segments): Arcs {
 	const ends = new SegmentEnds(outlines.vertices, segments);
-	const chain = new ArcChain(segments, ends, outlines.ringStarts.length);
+	const chain = new ArcChain(segments, ends, outlines);
 	for (let v = 0; v < outlines.vertices; v++) {
 		if (ends.isNode(v)) chain.fromNode(v);
 	}
 	for (let i = 0; i < segments.count; i++) {
-		if (isKept(segments, i)) chain.closedFrom(i, outlines.positions);
+		if (isKept(segments, i)) chain.closedFrom(i);
 	}
 	return chain.arcs();
 }
 
 class ArcChain {
 	private used: Uint8Array;
-	private vertices: GrowingInts;
+	private positions: Float64Array;
+	private points: GrowingFloats;
+	private firstAndLast = new GrowingInts();
 	private starts = new GrowingInts();
 	private left = new GrowingInts();
 	private right = new GrowingInts();
@@ -35,10 +39,11 @@ class ArcChain {
 	constructor(
 		private segments: Segments,
 		private ends: SegmentEnds,
-		rings: number,
+		outlines: Outlines,
 	) {
 		this.used = new Uint8Array(segments.count);
-		this.vertices = new GrowingInts(segments.count + 4 * rings);
+		this.positions = outlines.positions;
+		this.points = new GrowingFloats(2 * segments.count + 8 * outlines.ringStarts.length);
 	}
 
 	fromNode(node: number): void {
@@ -50,16 +55,17 @@ class ArcChain {
 	}
 
 	/** A ring without nodes, started at its least vertex so that the file's starting point is nothing. */
-	closedFrom(segment: number, positions: Float64Array): void {
+	closedFrom(segment: number): void {
 		if (this.used[segment]) return;
-		const first = this.leastVertex(segment, positions);
+		const first = this.leastVertex(segment);
 		this.walk(first, this.ends.at(first, 0));
 	}
 
 	arcs(): Arcs {
-		this.starts.push(this.vertices.length);
+		this.starts.push(this.points.length / 2);
 		return {
-			vertices: this.vertices.taken(),
+			points: this.points.trimmed(),
+			ends: this.firstAndLast.taken(),
 			starts: this.starts.taken(),
 			left: this.left.taken(),
 			right: this.right.taken(),
@@ -67,25 +73,31 @@ class ArcChain {
 	}
 
 	private walk(from: number, first: number): void {
-		const { segments, ends, used, vertices } = this;
+		const { segments, ends, used } = this;
 		const forward = segments.low[first] === from;
 		this.left.push(forward ? segments.left[first] : segments.right[first]);
 		this.right.push(forward ? segments.right[first] : segments.left[first]);
-		this.starts.push(vertices.length);
-		vertices.push(from);
+		this.starts.push(this.points.length / 2);
+		this.put(from);
 		let v = from;
 		let s = first;
 		for (;;) {
 			used[s] = 1;
 			v = segments.low[s] === v ? segments.high[s] : segments.low[s];
-			vertices.push(v);
-			if (v === from || ends.isNode(v)) return;
+			this.put(v);
+			if (v === from || ends.isNode(v)) break;
 			s = ends.other(v, s);
 		}
+		this.firstAndLast.push(from);
+		this.firstAndLast.push(v);
 	}
 
-	private leastVertex(segment: number, positions: Float64Array): number {
-		const { segments, ends } = this;
+	private put(v: number): void {
+		this.points.push2(this.positions[2 * v], this.positions[2 * v + 1]);
+	}
+
+	private leastVertex(segment: number): number {
+		const { segments, ends, positions } = this;
 		const start = segments.low[segment];
 		let least = start;
 		let v = start;

@@ -18,9 +18,9 @@ export function buildCoverage(
 	names: string[],
 ): { coverage: Coverage; arcs: Arcs } {
 	const arcs = chainArcs(outlines, segments);
-	const arcPoints = pointsOf(arcs, outlines.positions);
+	const arcPoints = arcs.points;
 	const arcStarts = Uint32Array.from(arcs.starts);
-	const rings = assembleRings(arcs, outlines);
+	const rings = assembleRings(arcs, outlines.regions);
 	const cut = {
 		keys,
 		names,
@@ -34,16 +34,6 @@ export function buildCoverage(
 	return { coverage: { ...cut, areasKm2: areasOf(cut), enclaveOf: enclaves(cut) }, arcs };
 }
 
-function pointsOf(arcs: Arcs, positions: Float64Array): Float64Array {
-	const points = new Float64Array(2 * arcs.vertices.length);
-	for (let i = 0; i < arcs.vertices.length; i++) {
-		const v = arcs.vertices[i];
-		points[2 * i] = positions[2 * v];
-		points[2 * i + 1] = positions[2 * v + 1];
-	}
-	return points;
-}
-
 function metresOf(points: Float64Array, starts: Uint32Array): Float64Array {
 	const metres = new Float64Array(starts.length - 1);
 	for (let a = 0; a < metres.length; a++) {
@@ -52,8 +42,7 @@ function metresOf(points: Float64Array, starts: Uint32Array): Float64Array {
 	return metres;
 }
 
-function assembleRings(arcs: Arcs, outlines: Outlines) {
-	const { regions, positions } = outlines;
+function assembleRings(arcs: Arcs, regions: number) {
 	const byRegion = arcsByRegion(arcs, regions);
 	const ringArcs = new GrowingInts();
 	const ringStarts = new GrowingInts();
@@ -62,9 +51,7 @@ function assembleRings(arcs: Arcs, outlines: Outlines) {
 	for (let r = 0; r < regions; r++) {
 		regionParts.push(partRings.length);
 		const halves = byRegion.list.subarray(byRegion.offsets[r], byRegion.offsets[r + 1]);
-		const traced = traceRings(halves, arcs, positions).map((ring) => {
-			return new TracedRing(ring, arcs, positions);
-		});
+		const traced = traceRings(halves, arcs).map((ring) => new TracedRing(ring, arcs));
 		for (const part of groupParts(traced)) {
 			partRings.push(ringStarts.length);
 			for (const ring of part) {

@@ -5,8 +5,9 @@ import { doubleArea, sideOfRing } from '../geometry/rings.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import { traceRings, type ArcRing } from './arc-rings.ts';
 import type { Arcs } from './arcs.ts';
-import { insidePlace } from './inside-place.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { ringKm2 } from './ring-area.ts';
+import { pointsOf } from './traced-ring.ts';
 
 /** Nobody's land enclosed by two or more regions. */
 export interface Hole {
@@ -31,18 +32,13 @@ export interface Hole {
  * with nobody on the left, that come round anticlockwise. With `overlapping`, what another region covers
  * is none.
  */
-export function holesBetween(
-	coverage: Coverage,
-	arcs: Arcs,
-	positions: Float64Array,
-	overlapping: boolean,
-): Hole[] {
+export function holesBetween(coverage: Coverage, arcs: Arcs, overlapping: boolean): Hole[] {
 	const blocks = overlapping ? new SegmentBlocks(coverage) : null;
 	const holes: Hole[] = [];
-	for (const { ring, points, islands } of facesOfNobody(arcs, positions)) {
+	for (const { ring, points, islands } of facesOfNobody(arcs)) {
 		const regions = [...new Set(ring.map((half) => ownerOf(arcs, half)))].sort((a, b) => a - b);
 		if (regions.length < 2) continue;
-		const inner = islands.map((island) => pointsOf(island, arcs, positions));
+		const inner = islands.map((island) => pointsOf(island, arcs));
 		const place = insidePlace([points, ...inner]);
 		if (blocks && blocks.regionsAt(...place).length > 0) continue;
 		const shares = regions.map((region) =>
@@ -69,7 +65,7 @@ interface Face {
 }
 
 /** Every enclosed face with nobody in it, with the outlines of the land that lies free inside. */
-function facesOfNobody(arcs: Arcs, positions: Float64Array): Face[] {
+function facesOfNobody(arcs: Arcs): Face[] {
 	const halves: number[] = [];
 	for (let a = 0; a < arcs.left.length; a++) {
 		if (arcs.left[a] < 0) halves.push(a);
@@ -77,8 +73,8 @@ function facesOfNobody(arcs: Arcs, positions: Float64Array): Face[] {
 	}
 	const faces: Face[] = [];
 	const outsides: { ring: ArcRing; box: [number, number, number, number] }[] = [];
-	for (const ring of traceRings(Int32Array.from(halves), arcs, positions)) {
-		const points = pointsOf(ring, arcs, positions);
+	for (const ring of traceRings(Int32Array.from(halves), arcs)) {
+		const points = pointsOf(ring, arcs);
 		const turn = doubleArea(points, 0, points.length / 2);
 		if (turn > 0) faces.push({ ring, points, islands: [] });
 		else if (turn < 0) outsides.push({ ring, box: boxOf(points) });
@@ -93,7 +89,7 @@ function facesOfNobody(arcs: Arcs, positions: Float64Array): Face[] {
 			return x0 <= box[0] && y0 <= box[1] && x1 >= box[2] && y1 >= box[3];
 		});
 		if (around.length === 0) continue;
-		const points = pointsOf(ring, arcs, positions);
+		const points = pointsOf(ring, arcs);
 		const holders = around.filter((face) => surrounds(faces[face].points, points));
 		holders.sort((p, q) => sizes[p] - sizes[q]);
 		if (holders.length) faces[holders[0]].islands.push(ring);
@@ -126,18 +122,4 @@ function ownersOfEdges(ring: ArcRing, arcs: Arcs): Int32Array {
 		for (let k = 0; k < edges; k++) owners.push(ownerOf(arcs, half));
 	}
 	return Int32Array.from(owners);
-}
-
-/** The first point is not repeated at the end. */
-function pointsOf(ring: ArcRing, arcs: Arcs, positions: Float64Array): Float64Array {
-	const points: number[] = [];
-	for (const half of ring) {
-		const a = numberOf(half);
-		const [first, last] = [arcs.starts[a], arcs.starts[a + 1] - 1];
-		for (let k = 0; k < last - first; k++) {
-			const v = arcs.vertices[half >= 0 ? first + k : last - k];
-			points.push(positions[2 * v], positions[2 * v + 1]);
-		}
-	}
-	return Float64Array.from(points);
 }

@@ -9,6 +9,7 @@ export type { Choice, Found, FoundLayer, Question, Sketch } from './question.ts'
 export type { Coverage } from './coverage.ts';
 export { coverageFaults } from './faults.ts';
 export { encodeCoverage, decodeCoverage } from './codec.ts';
+export { displayLevels, type DisplayLevel } from './levels.ts';
 export { simplifyCoverage } from './simplify.ts';
 export { coverageToGeoJson } from './to-geojson.ts';
 export { piecesOf, type Piece } from './pieces.ts';

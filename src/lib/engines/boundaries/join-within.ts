@@ -1,8 +1,9 @@
+import { Inserts } from './inserts.ts';
 import { eachNearMiss, unmatchedSegments, type NearMiss } from './near-misses.ts';
 import { noiseMetres } from './options.ts';
 import { nodeOutlines, remember, type Joined, type Noded } from './node-outlines.ts';
 import type { Outlines } from './outlines.ts';
-import { rewriteOutlines, segmentCode, type Rewrite } from './rewrite-outlines.ts';
+import { rewriteOutlines, type Rewrite } from './rewrite-outlines.ts';
 import type { Segments } from './segments.ts';
 
 /**
@@ -38,7 +39,7 @@ function joinOnce(noded: Noded, tolerance: number, rank: Int32Array): Noded {
 	const positions = outlines.positions.slice();
 	const moved: Outlines = { ...outlines, positions };
 	const rewrite = rewriteFor({ nearest, segments, owners, rank, positions, outlines, joined });
-	if (rewrite.inserts.size === 0 && rewrite.standsFor.every((w, v) => w === v)) return noded;
+	if (rewrite.inserts.count === 0 && rewrite.standsFor.every((w, v) => w === v)) return noded;
 	return { ...nodeOutlines(rewriteOutlines(moved, rewrite)), joined };
 }
 
@@ -54,8 +55,8 @@ interface Work {
 
 function rewriteFor(work: Work): Rewrite {
 	const { nearest, segments, owners, rank, positions, outlines, joined } = work;
-	const standsFor = Int32Array.from({ length: outlines.vertices }, (_, v) => v);
-	const inserts: Rewrite['inserts'] = new Map();
+	const standsFor = new Int32Array(outlines.vertices).map((_, v) => v);
+	const inserts = new Inserts(outlines.vertices);
 	for (const [point, miss] of nearest) {
 		const isAlong = miss.share > 0 && miss.share < 1 && miss.endMetres > noiseMetres;
 		const yields = rankOf(owners.get(point), rank) > rank[regionOf(segments, miss.segment)];
@@ -66,10 +67,7 @@ function rewriteFor(work: Work): Rewrite {
 			continue;
 		}
 		if (yields) moveOnto(point, miss, segments, outlines.positions, positions);
-		const code = segmentCode(segments.low[miss.segment], segments.high[miss.segment]);
-		const along = inserts.get(code);
-		if (along) along.push({ share: miss.share, vertex: point });
-		else inserts.set(code, [{ share: miss.share, vertex: point }]);
+		inserts.add(segments.low[miss.segment], segments.high[miss.segment], miss.share, point);
 	}
 	flatten(standsFor);
 	return { inserts, standsFor };

@@ -2,6 +2,7 @@ import { surveyOf, type Survey } from '../borders/survey.ts';
 import { mostAroundAPlace } from '../borders/touches.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { buildCoverage } from './build-coverage.ts';
+import { doubledParts } from './doubled-parts.ts';
 import type { Finding } from './finding.ts';
 import { holesBetween, type Hole } from './holes.ts';
 import { joinWithin } from './join-within.ts';
@@ -77,8 +78,9 @@ function cut(noded: Noded, keys: string[], names: string[], options: Options) {
 	const survey = surveyOf(coverage, options);
 	if (survey.crowded) throw new Refusal('bad-coordinate', crowdMessage(survey.crowded));
 	const crossed = new Set(survey.crossings.map(({ region }) => region));
-	survey.crossings.push(...looseHoles(coverage).filter(({ region }) => !crossed.has(region)));
-	const holes = () => holesBetween(coverage, arcs, outlines.positions, survey.overlaps.length > 0);
+	const others = [...looseHoles(coverage), ...doubledParts(coverage, segments, survey.doubtful)];
+	survey.crossings.push(...others.filter(({ region }) => !crossed.has(region)));
+	const holes = () => holesBetween(coverage, arcs, survey.overlaps.length > 0);
 	return { coverage, survey, holes };
 }
 

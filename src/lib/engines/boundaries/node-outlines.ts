@@ -1,7 +1,8 @@
+import { Inserts } from './inserts.ts';
 import { eachNearMiss, type NearMiss } from './near-misses.ts';
 import { noiseMetres } from './options.ts';
 import type { Outlines } from './outlines.ts';
-import { rewriteOutlines, segmentCode, type Rewrite } from './rewrite-outlines.ts';
+import { rewriteOutlines, type Rewrite } from './rewrite-outlines.ts';
 import { indexSegments, type Segments } from './segments.ts';
 
 /** What was joined: regions by number, and a place to look at. */
@@ -63,16 +64,11 @@ export function remember(
 }
 
 function rewriteFor(misses: NearMiss[], segments: Segments, outlines: Outlines): Rewrite {
-	const standsFor = Int32Array.from({ length: outlines.vertices }, (_, v) => v);
-	const inserts: Rewrite['inserts'] = new Map();
+	const standsFor = new Int32Array(outlines.vertices).map((_, v) => v);
+	const inserts = new Inserts(outlines.vertices);
 	for (const { point, segment, end, endMetres, share } of misses) {
 		if (endMetres <= noiseMetres) join(standsFor, point, end, outlines.positions);
-		else {
-			const code = segmentCode(segments.low[segment], segments.high[segment]);
-			const along = inserts.get(code);
-			if (along) along.push({ share, vertex: point });
-			else inserts.set(code, [{ share, vertex: point }]);
-		}
+		else inserts.add(segments.low[segment], segments.high[segment], share, point);
 	}
 	for (let v = 0; v < standsFor.length; v++) standsFor[v] = find(standsFor, v);
 	return { inserts, standsFor };

@@ -2,7 +2,7 @@ import { meetings } from '../borders/touches.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { ringsOfPart } from './coverage-parts.ts';
 import { surroundedBy } from './enclaves.ts';
-import { insidePlace } from './inside-place.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { ringKm2 } from './ring-area.ts';
 
 /** One part of a region that does not simply lie among its neighbours in one piece. */

@@ -35,6 +35,7 @@ export function indexSegments(outlines: Outlines): Segments {
 }
 
 class SegmentIndex {
+	/** first segment of each vertex and next of each segment, counted from 1; 0 for none */
 	private head: Int32Array;
 	private next: Int32Array;
 	private low: Uint32Array;
@@ -46,7 +47,7 @@ class SegmentIndex {
 	private twins: number[] = [];
 
 	constructor(vertices: number, most: number) {
-		this.head = new Int32Array(vertices).fill(-1);
+		this.head = new Int32Array(vertices);
 		this.next = new Int32Array(most);
 		this.low = new Uint32Array(most);
 		this.high = new Uint32Array(most);
@@ -63,7 +64,7 @@ class SegmentIndex {
 		if (this.joins(previous - 1, low, high, side, region)) return;
 		if (this.joins(previous + 1, low, high, side, region)) return;
 		let twin = false;
-		for (let s = this.head[low]; s >= 0; s = this.next[s]) {
+		for (let s = this.head[low] - 1; s >= 0; s = this.next[s] - 1) {
 			if (this.high[s] !== high) continue;
 			if (side[s] < 0) {
 				side[s] = region;
@@ -79,7 +80,7 @@ class SegmentIndex {
 		this.left[s] = forward ? region : -1;
 		this.right[s] = forward ? -1 : region;
 		this.next[s] = this.head[low];
-		this.head[low] = s;
+		this.head[low] = s + 1;
 	}
 
 	/** Takes a side of a segment when it is the one between these vertices and the side is free. */

@@ -1,25 +1,77 @@
-import { ringPoints } from '../geometry/coverage-rings.ts';
-import { doubleArea } from '../geometry/rings.ts';
-import { thinLine } from '../geometry/thin-line.ts';
+import { LineWeights } from '../geometry/line-weights.ts';
 import type { Coverage } from './coverage.ts';
+import { crossedArcs, turnedArcs } from './tangles.ts';
+
+/** An arc that crosses or turns over is thinned to a quarter of its tolerance, this often; then not at all. */
+const quarters = 3;
+/** Rounds in which crossings are looked for; what is left after them is counted. */
+const rounds = 12;
+
+export interface Simplified {
+	coverage: Coverage;
+	/** pairs of lines that cross in the picture and were not mended; those of the full geometry among them */
+	crossings: number;
+}
 
 /**
- * A coverage with fewer points for display: each arc thinned once, so borders stay shared and regions
- * keep their neighbours. `metres`: detail smaller than a triangle of this many metres squared goes.
- * Guarantees: the invariants of a coverage hold; a ring that would turn over or close up keeps its full
- * arcs; closed arcs keep two inner points. Areas, lengths and enclaves stay those of the full geometry.
- * Not guaranteed: that thinned arcs never cross.
+ * How much each arc point matters, in metres (see `LineWeights`). Ends weigh Infinity, and so do the two
+ * inner points that a closed arc keeps and the one that an arc keeps where two arcs make a ring.
  */
-export function simplifyCoverage(coverage: Coverage, metres: number): Coverage {
-	if (!(metres > 0)) return coverage;
-	const full = new Uint8Array(coverage.arcLeft.length);
+export function arcWeights(coverage: Coverage): Float32Array {
+	const { arcPoints, arcStarts } = coverage;
+	const weights = new Float32Array(arcPoints.length / 2);
+	const lines = new LineWeights(arcPoints);
 	const least = leastInner(coverage);
-	for (;;) {
-		const thinned = withArcs(coverage, (arc, from, to) =>
-			full[arc] ? null : thinLine(coverage.arcPoints, from, to, metres, least[arc]),
-		);
-		if (restoreTurned(thinned, full) === 0) return thinned;
+	for (let arc = 0; arc + 1 < arcStarts.length; arc++)
+		lines.weigh(arcStarts[arc], arcStarts[arc + 1] - 1, least[arc], weights);
+	return weights;
+}
+
+/**
+ * A coverage with fewer points for display: each arc thinned once, so borders stay shared, every part of
+ * every region stays and regions keep their neighbours. `metres`: detail smaller than a triangle of this
+ * many metres squared goes. Junctions stay where they are. `weights`: of `arcWeights`, made once where
+ * several levels are wanted.
+ *
+ * Guarantees: the invariants of a coverage hold; arcs of a ring that would turn over or close up, and arcs
+ * that would cross, are thinned less until they do not, and crossings left over are counted. Areas, lengths
+ * and enclaves stay those of the full geometry. Not guaranteed: that an island is not covered whole by a
+ * coast that was straightened over it.
+ */
+export function simplifyCoverage(
+	coverage: Coverage,
+	metres: number,
+	weights = arcWeights(coverage),
+): Simplified {
+	const tolerance = new Float32Array(coverage.arcLeft.length).fill(metres);
+	let changed: Uint8Array | null = null;
+	let crossings = 0;
+	for (let round = 0; ; round++) {
+		const thinned = withPoints(coverage, weights, tolerance);
+		const crossed = round < rounds ? crossedArcs(thinned, changed) : [];
+		const last = round === rounds - 1;
+		crossings += crossed.filter(([a, b]) => last || tolerance[a] + tolerance[b] === 0).length;
+		const tangled = new Set([...turnedArcs(thinned), ...(last ? [] : crossed.flat())]);
+		changed = new Uint8Array(tolerance.length);
+		if (!refine(tangled, tolerance, changed, metres)) return { coverage: thinned, crossings };
 	}
+}
+
+/** Asks for more points on some arcs; false when all of them have every point already. */
+function refine(
+	arcs: Iterable<number>,
+	tolerance: Float32Array,
+	changed: Uint8Array,
+	metres: number,
+): boolean {
+	let any = false;
+	for (const arc of arcs) {
+		if (tolerance[arc] === 0) continue;
+		tolerance[arc] = tolerance[arc] > metres / 4 ** quarters ? tolerance[arc] / 4 : 0;
+		changed[arc] = 1;
+		any = true;
+	}
+	return any;
 }
 
 /** Inner points each arc must keep: two when it closes by itself, one when two arcs make a ring. */
@@ -37,46 +89,34 @@ function leastInner(coverage: Coverage): Uint8Array {
 	return least;
 }
 
-function withArcs(
-	coverage: Coverage,
-	keep: (arc: number, from: number, to: number) => number[] | null,
-): Coverage {
+/**
+ * The coverage with the points that weigh no less than the tolerance of their arc. Inner points stand on a
+ * grid far finer than the tolerance, which halves the bytes; ends, and arcs with all their points, do not.
+ */
+function withPoints(coverage: Coverage, weights: Float32Array, tolerance: Float32Array): Coverage {
 	const { arcPoints, arcStarts } = coverage;
-	const points = new Float64Array(arcPoints.length);
 	const starts = new Uint32Array(arcStarts.length);
-	let used = 0;
+	let kept = 0;
 	for (let arc = 0; arc + 1 < arcStarts.length; arc++) {
-		starts[arc] = used / 2;
-		const [from, to] = [arcStarts[arc], arcStarts[arc + 1] - 1];
-		const kept = keep(arc, from, to);
-		if (kept) {
-			for (const i of kept) {
-				points[used++] = arcPoints[2 * i];
-				points[used++] = arcPoints[2 * i + 1];
-			}
-		} else {
-			points.set(arcPoints.subarray(2 * from, 2 * to + 2), used);
-			used += 2 * (to - from + 1);
+		starts[arc] = kept;
+		for (let i = arcStarts[arc]; i < arcStarts[arc + 1]; i++)
+			if (weights[i] >= tolerance[arc]) kept++;
+	}
+	starts[starts.length - 1] = kept;
+	const points = new Float64Array(2 * kept);
+	let at = 0;
+	for (let arc = 0; arc + 1 < arcStarts.length; arc++) {
+		const grid = gridFor(tolerance[arc]);
+		for (let i = arcStarts[arc]; i < arcStarts[arc + 1]; i++) {
+			if (weights[i] < tolerance[arc]) continue;
+			const whole = grid && weights[i] < Infinity;
+			points[at++] = whole ? Math.round(arcPoints[2 * i] * grid) / grid : arcPoints[2 * i];
+			points[at++] = whole ? Math.round(arcPoints[2 * i + 1] * grid) / grid : arcPoints[2 * i + 1];
 		}
 	}
-	starts[starts.length - 1] = used / 2;
-	return { ...coverage, arcPoints: points.slice(0, used), arcStarts: starts };
+	return { ...coverage, arcPoints: points, arcStarts: starts };
 }
 
-/** Marks the arcs of rings that no longer turn the right way; answers how many were not marked before. */
-function restoreTurned(thinned: Coverage, full: Uint8Array): number {
-	let restored = 0;
-	for (let part = 0; part + 1 < thinned.partRings.length; part++) {
-		for (let ring = thinned.partRings[part]; ring < thinned.partRings[part + 1]; ring++) {
-			const points = ringPoints(thinned, ring);
-			const area = doubleArea(points, 0, points.length / 2);
-			if (ring === thinned.partRings[part] ? area > 0 : area < 0) continue;
-			for (let i = thinned.ringStarts[ring]; i < thinned.ringStarts[ring + 1]; i++) {
-				const arc = thinned.ringArcs[i] >= 0 ? thinned.ringArcs[i] : ~thinned.ringArcs[i];
-				restored += 1 - full[arc];
-				full[arc] = 1;
-			}
-		}
-	}
-	return restored;
-}
+/** Steps to a degree, a power of two, of which about a hundred make the tolerance; 0 for no grid. */
+const gridFor = (metres: number): number =>
+	metres > 0 ? 2 ** Math.ceil(Math.log2((111_320 * 100) / metres)) : 0;

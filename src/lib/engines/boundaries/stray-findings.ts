@@ -2,7 +2,7 @@ import type { Coverage } from '../geometry/coverage.ts';
 import { areaText } from './area-text.ts';
 import { metresAlong, ringsOfPart } from './coverage-parts.ts';
 import type { Finding } from './finding.ts';
-import { insidePlace } from './inside-place.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { lengthText } from './length-text.ts';
 import type { MendOffer } from './mends/mend.ts';
 import { ringKm2 } from './ring-area.ts';

@@ -8,7 +8,7 @@ import { toldEach } from './told-each.ts';
 
 /** A finding for each overlap, pair with the same outline and outline that crosses itself, worst first. */
 export function surveyFindings(survey: Survey, coverage: Coverage): Finding[] {
-	const { keys, areasKm2 } = coverage;
+	const { keys } = coverage;
 	const overlaps = [...survey.overlaps].sort((p, q) => q.km2 - p.km2);
 	const told = (code: string, overlap: Overlap, said: string, offers: MendOffer[]): Finding => {
 		const both = [keys[overlap.a], keys[overlap.b]];
@@ -30,24 +30,33 @@ export function surveyFindings(survey: Survey, coverage: Coverage): Finding[] {
 				overlapOffers(overlap, coverage),
 			),
 		),
-		...toldEach(survey.crossings, ({ region, at }) => {
-			const [key, size] = [keys[region], areaText(Math.abs(areasKm2[region]))];
-			return {
-				code: 'self-crossing',
-				severity: 'warning',
-				message: `The outline of ${key} crosses itself, so that its area of ${size} is uncertain.`,
-				regions: [key],
-				at,
-				offers: [
-					{
-						mend: { kind: 'untangle', key },
-						words: `Cut the outline of ${key} where it crosses itself, and count its ${size} again.`,
-						usual: true,
-					},
-				],
-			};
-		}),
+		...toldEach(
+			survey.crossings.filter(({ doubled }) => !doubled),
+			({ region, at }) => tangled(coverage, region, at, 'self-crossing'),
+		),
+		...toldEach(
+			survey.crossings.filter(({ doubled }) => doubled),
+			({ region, at }) => tangled(coverage, region, at, 'parts-overlap'),
+		),
 	];
+}
+
+function tangled(
+	{ keys, areasKm2 }: Coverage,
+	region: number,
+	at: Finding['at'],
+	code: 'self-crossing' | 'parts-overlap',
+): Finding {
+	const [key, size] = [keys[region], areaText(Math.abs(areasKm2[region]))];
+	const isCrossing = code === 'self-crossing';
+	const message = isCrossing
+		? `The outline of ${key} crosses itself, so that its area of ${size} is uncertain.`
+		: `Parts of ${key} lie on each other, so that its area of ${size} counts land twice.`;
+	const words = isCrossing
+		? `Cut the outline of ${key} where it crosses itself, and count its ${size} again.`
+		: `Make one of the parts of ${key} that lie on each other, and count its ${size} again.`;
+	const offers: MendOffer[] = [{ mend: { kind: 'untangle', key }, words, usual: true }];
+	return { code, severity: 'warning', message, regions: [key], at, offers };
 }
 
 /** The second of two in the file goes, unless the other is asked for. */
@@ -64,12 +73,13 @@ const whole = 0.999;
 
 /**
  * The smaller region keeps what both cover, since the larger loses less by it; a region covered whole by
- * another may also be left out.
+ * another may also be left out. Of two that are nearly the same the first in the file stays.
  */
 function overlapOffers({ a, b, km2 }: Overlap, { keys, areasKm2 }: Coverage): MendOffer[] {
 	const isFirstSmaller =
 		areasKm2[a] < areasKm2[b] || (areasKm2[a] === areasKm2[b] && keys[a] < keys[b]);
-	const order = isFirstSmaller ? [a, b] : [b, a];
+	const isNearlyBoth = km2 >= whole * Math.max(areasKm2[a], areasKm2[b]);
+	const order = isFirstSmaller || isNearlyBoth ? [a, b] : [b, a];
 	const offers = order.map((kept): MendOffer => {
 		const [keep, lost] = [keys[kept], keys[kept === a ? b : a]];
 		const left = areasKm2[kept === a ? b : a] - km2;

@@ -10,29 +10,30 @@ export class TracedRing {
 	constructor(
 		readonly arcs: ArcRing,
 		private from: Arcs,
-		private positions: Float64Array,
 	) {
-		this.doubleArea = doubleAreaOf(arcs, from, positions);
+		this.doubleArea = doubleAreaOf(arcs, from);
 	}
 
 	/** Interleaved, the first point not repeated. */
 	get points(): Float64Array {
-		return (this.laidOut ??= pointsOf(this.arcs, this.from, this.positions));
+		return (this.laidOut ??= pointsOf(this.arcs, this.from));
 	}
 }
 
 /** As `doubleArea` of the points, without laying them out. */
-function doubleAreaOf(ring: ArcRing, arcs: Arcs, p: Float64Array): number {
-	const start = 2 * vertexOf(arcs, ring[0], 0);
+function doubleAreaOf(ring: ArcRing, arcs: Arcs): number {
+	const { points: p } = arcs;
+	const start = 2 * placeOf(arcs, ring[0]);
 	const x0 = p[start];
 	const y0 = p[start + 1];
 	let [x, y, sum] = [0, 0, 0];
 	for (const half of ring) {
-		const steps = stepsOf(arcs, half);
-		const first = placeOf(arcs, half);
-		for (let k = 1; k <= steps; k++) {
-			const v = 2 * arcs.vertices[half >= 0 ? first + k : first - k];
-			const [nextX, nextY] = [p[v] - x0, p[v + 1] - y0];
+		const step = half >= 0 ? 2 : -2;
+		let at = 2 * placeOf(arcs, half);
+		for (let left = stepsOf(arcs, half); left > 0; left--) {
+			at += step;
+			const nextX = p[at] - x0;
+			const nextY = p[at + 1] - y0;
 			sum += x * nextY - nextX * y;
 			x = nextX;
 			y = nextY;
@@ -41,16 +42,18 @@ function doubleAreaOf(ring: ArcRing, arcs: Arcs, p: Float64Array): number {
 	return sum;
 }
 
-function pointsOf(ring: ArcRing, arcs: Arcs, positions: Float64Array): Float64Array {
+/** Points of a ring of arcs, interleaved, the first not repeated. */
+export function pointsOf(ring: ArcRing, arcs: Arcs): Float64Array {
 	let length = 0;
 	for (const half of ring) length += stepsOf(arcs, half);
 	const points = new Float64Array(2 * length);
-	let at = 0;
+	let to = 0;
 	for (const half of ring) {
-		for (let k = 0; k < stepsOf(arcs, half); k++) {
-			const v = vertexOf(arcs, half, k);
-			points[at++] = positions[2 * v];
-			points[at++] = positions[2 * v + 1];
+		const step = half >= 0 ? 2 : -2;
+		let at = 2 * placeOf(arcs, half);
+		for (let left = stepsOf(arcs, half); left > 0; left--, at += step) {
+			points[to++] = arcs.points[at];
+			points[to++] = arcs.points[at + 1];
 		}
 	}
 	return points;
@@ -61,9 +64,6 @@ function stepsOf({ starts }: Arcs, half: number): number {
 	return starts[a + 1] - starts[a] - 1;
 }
 
-/** Where in `arcs.vertices` the walk along a half begins. */
+/** The point at which the walk along a half begins. */
 const placeOf = ({ starts }: Arcs, half: number) =>
 	half >= 0 ? starts[half] : starts[~half + 1] - 1;
-
-const vertexOf = (arcs: Arcs, half: number, k: number) =>
-	arcs.vertices[half >= 0 ? placeOf(arcs, half) + k : placeOf(arcs, half) - k];

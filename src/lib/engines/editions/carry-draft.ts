@@ -53,10 +53,9 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	const struck = carryHandBorders(ground, draft.struck, 'struck', hasBorder);
 	const added = carryHandBorders(ground, draft.added, 'added', null);
 	const { pointTouches, leastMetres, waterKm } = draft;
-	const hand = { struck: struck.list, added: added.list };
-	const rules = { pointTouches, leastMetres, waterKm, ...hand };
+	const rules = { pointTouches, leastMetres, waterKm, struck: struck.list, added: added.list };
 	const mustDiffer = fresh.borders
-		? pairTest(bordersForSheet(match.after.keys, fresh.borders, rules), regions)
+		? pairTest(bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules }), regions)
 		: null;
 	const forbidden = carryForbidden(ground, draft);
 	const locks = carryLocks(ground, draft, forbidden.list, mustDiffer);

@@ -14,6 +14,10 @@ export class GrowingFloats {
 		this.items[this.length++] = x;
 		this.items[this.length++] = y;
 	}
+	/** As taken, copied when much memory would be left over behind it. */
+	trimmed(): Float64Array {
+		return this.length < 0.95 * this.items.length ? this.taken().slice() : this.taken();
+	}
 	taken(): Float64Array {
 		return this.items.subarray(0, this.length);
 	}

@@ -15,7 +15,7 @@ import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
-import { placeOnPaper } from './place-on-paper.ts';
+import { placeOnPaper, type Placement } from './place-on-paper.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { cleanText } from './type/clean-text.ts';
@@ -62,7 +62,10 @@ export function inksInUse(fills: { ink: number }[]): number[] {
  * labels overlap, all text stands on the paper, and the caution is whole. Throws RangeError for an
  * impossible paper size or a colouring that names an ink the palette has not.
  */
-export function drawSheet(input: SheetInput): Drawing {
+export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawing;
+
+/** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
+export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
 	const { coverage, layout, reader, colouring, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
 	const inks = input.inks.map((ink) => ({ ...ink, shown: see(ink.hex, reader) }));
@@ -109,7 +112,7 @@ export function drawSheet(input: SheetInput): Drawing {
 		notes: { projection: placed.chosen.sentence, scale: measured.sentence },
 		legend,
 	};
-	return { ...drawing, description: describe(drawing) };
+	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
 
 function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][]): RegionFill[] {

@@ -1,5 +1,5 @@
 /** From a coverage and a colouring to one drawn sheet, and from the drawing to SVG. */
-export { drawSheet, inksInUse, uncoloured, type SheetInput } from './draw-sheet.ts';
+export { drawPlaced, drawSheet, inksInUse, uncoloured, type SheetInput } from './draw-sheet.ts';
 export { recolour } from './recolour.ts';
 export { regionSizesMm } from './sizes.ts';
 export { sheetTable, type SheetRow } from './table.ts';
@@ -8,6 +8,25 @@ export { type EmbeddedFace } from './svg/style-block.ts';
 export { elementId } from './svg/element-id.ts';
 export { chooseProjection } from './plane/choose-projection.ts';
 export { extentOf, type Extent } from './plane/extent.ts';
+export { type Placement } from './place-on-paper.ts';
+export {
+	boxOfRegion,
+	groundOf,
+	meets,
+	regionPath,
+	type Area,
+	type Ground,
+} from './canvas/ground.ts';
+export {
+	paintArea,
+	traceRegion,
+	type Colours,
+	type Outline,
+	type Pen,
+	type Picture,
+} from './canvas/paint-area.ts';
+export { refineGround } from './canvas/refine.ts';
+export { regionAt } from './canvas/region-at.ts';
 export { type ChosenProjection } from './plane/projections.ts';
 export { paperLimits, paperSize } from './paper.ts';
 export { caution, papers, type SheetLayout } from './layout.ts';

@@ -10,9 +10,15 @@ import { projectArcs } from './plane/project-arcs.ts';
 import type { ChosenProjection } from './plane/projections.ts';
 import { quantise, type SheetArcs } from './plane/quantise.ts';
 
-export interface OnPaper {
+/** How places on the ground come to places on the paper. */
+export interface Placement {
 	chosen: ChosenProjection;
 	fit: Fit;
+	/** radii of the sphere by which a line may be off at its middle */
+	slack: number;
+}
+
+export interface OnPaper extends Placement {
 	arcs: SheetArcs;
 	sides: ArcSides;
 	rings: Int32Array[][];
@@ -31,8 +37,9 @@ export function placeOnPaper(
 	const chosen = chooseProjection(extent, layout);
 	const reach = Math.max(extent.north - extent.south, extent.east - extent.west) * (Math.PI / 180);
 	const ready = drawable(coverage, extent.crossed);
-	const plane = projectArcs(ready, chosen.projection, Math.min(reach, 2) * slackShare);
+	const slack = Math.min(reach, 2) * slackShare;
+	const plane = projectArcs(ready, chosen.projection, slack);
 	const fit = fitInto(plane, boxFor(chosen.sentence));
 	const arcs = quantise(plane, fit);
-	return { chosen, fit, arcs, sides: ready, rings: drawnRings(ready.rings, arcs) };
+	return { chosen, fit, slack, arcs, sides: ready, rings: drawnRings(ready.rings, arcs) };
 }

@@ -8,6 +8,7 @@ import { paletteRequest, paletteResponse } from './check-palette.ts';
 import { territoriesRequest, territoriesResponse } from './check-territories.ts';
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
+import { recutOperations } from './recut-operations.ts';
 import * as sheets from './sheets.ts';
 import { territoryOperations } from './territory-operations.ts';
 
@@ -131,6 +132,7 @@ export const operations = {
 		answer: handovers.handoverDetail,
 	},
 	...territoryOperations,
+	...recutOperations,
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
 		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },

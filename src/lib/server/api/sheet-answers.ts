@@ -4,7 +4,8 @@ import { colouringByKey, explanationByKey, proofByKey } from '../jobs/checks/key
 
 /** A team's sheets as programs see them: regions by key. */
 
-const bare = ({ code, severity, message, regions, at }: Finding) => ({
+/** A finding without the mends that it offers. */
+export const bare = ({ code, severity, message, regions, at }: Finding) => ({
 	...{ code, severity, message, regions, at },
 });
 

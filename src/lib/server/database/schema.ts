@@ -156,6 +156,8 @@ export interface FindingTable {
 	accepted_at: OptionalMoment;
 	/** ways to mend it */
 	offers: JSONColumnType<unknown[]> | null;
+	/** the tolerance in metres that would join the borders it is about */
+	tolerance_metres: number | null;
 }
 export type IntakeState =
 	'waiting' | 'reading' | 'asking' | 'done' | 'refused' | 'cancelled' | 'failed';

@@ -81,7 +81,8 @@ async function giveBackOrUp<T extends ClaimTable, Outcome>(
 	if (attempt >= mostAttempts || error instanceof Hopeless) {
 		return void (await job.fail(claim, job.words.fault));
 	}
-	await handBack(shop.db, job.table, claim, false);
+	// nobody's row any more: it was cancelled, and what it needed was taken away with it
+	if (!(await handBack(shop.db, job.table, claim, false))) return;
 	throw error;
 }
 

@@ -20,7 +20,7 @@ export interface GapsOutput {
 /** Measures the gaps between regions that do not touch, up to so many kilometres. */
 export function measureGaps({ input: { geometry, borders, km } }: Task<GapsInput>): GapsOutput {
 	const found = gapsWithin(decodeCoverage(geometry), km, borders);
-	const { a, b, metres, at } = found.borders;
+	const { a, b, metres, at } = found;
 	return {
 		gaps: {
 			...{ a: [...a], b: [...b], metres: [...metres] },

@@ -80,8 +80,12 @@ function nextAnswer(reading: AnsweredReading, answers: KnownAnswer[]): KnownAnsw
 }
 
 /** Whether it would change what was said for this file. */
-const overrides = (answer: object, options: object): boolean =>
-	Object.keys(answer).some((name) => (options as Record<string, unknown>)[name] !== undefined);
+const overrides = (answer: object, options: object): boolean => {
+	const said = options as Record<string, unknown>;
+	return Object.entries(answer).some(
+		([name, value]) => said[name] !== undefined && said[name] !== value,
+	);
+};
 
 /** The columns are there, and others than were taken anyway. */
 function fits({ likeness, options }: KnownAnswer, found: Found): boolean {

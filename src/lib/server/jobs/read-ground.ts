@@ -11,6 +11,7 @@ import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
 import type { PieceColumns } from '../../schemas/pieces.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
+import { packedLevels, type PackedLevel } from './display-levels.work.ts';
 import { pieceColumns } from './pieces.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import type { KnownAnswer } from './read-answered.ts';
@@ -31,6 +32,9 @@ export interface ReadGround {
 	columns: BoundaryColumns;
 	/** the coverage, encoded as it is stored and sent to browsers */
 	geometry: Uint8Array;
+	/** thinned for the screen, coarsest first */
+	levels: PackedLevel[];
+	pieces: PieceColumns;
 	attributeColumns: string[];
 	source: SourceNote;
 	found: Found;
@@ -38,7 +42,6 @@ export interface ReadGround {
 	options: BoundaryOptions;
 	/** earlier answers that were taken */
 	taken: KnownAnswer[];
-	pieces: PieceColumns;
 	planar: boolean;
 	planarWitness: PlanarityNote['witness'];
 }
@@ -55,10 +58,11 @@ export function groundOf(
 	return {
 		columns: { regions, borders: borderColumns(borders), findings },
 		geometry: encodeCoverage(coverage),
+		levels: packedLevels(coverage),
+		pieces: pieceColumns(coverage),
 		attributeColumns: attributes.columns,
 		...{ source, found, options, taken, planar },
 		planarWitness: witness,
-		pieces: pieceColumns(coverage),
 	};
 }
 

@@ -36,7 +36,7 @@ export async function readFile({ input, port }: Task<ReadInput>): Promise<ReadOu
 	if (result.status === 'refused') return { ...result, taken };
 	tell('Colouring', 0.87);
 	const { draft, colouring } = await colourFirst(input.title, result.coverage, result.borders);
-	tell('Packing', 0.95);
+	tell('Thinning borders for the screen and packing', 0.93);
 	return { status: 'accepted', ...groundOf(result, reading), draft, colouring };
 }
 

@@ -33,6 +33,15 @@ const recutJob = (shop: Workshop): ClaimedJob<'recuts', RecutOutcome> => ({
 	},
 });
 
+/**
+ * The keys of the sheet's own file stay what they are, or what somebody says: what is remembered of others
+ * must not change them by the way.
+ */
+async function answersFor(shop: Workshop, { team_id, kind }: Row<'recuts'>) {
+	const known = await knownAnswers(shop.db, team_id);
+	return kind === 'file' ? known : known.filter(({ about }) => about !== 'columns');
+}
+
 async function read(
 	shop: Workshop,
 	recut: Row<'recuts'>,
@@ -41,12 +50,12 @@ async function read(
 ): Promise<RecutOutcome> {
 	const before = await standingSide(shop.db, recut.from_set);
 	const standing = await standingOn(shop.db, recut.sheet_id);
-	const answers = await knownAnswers(shop.db, recut.team_id);
+	const answers = await answersFor(shop, recut);
 	const file = await shop.files.local(recut.file_digest ?? '');
 	try {
 		const { file_name: fileName, options } = recut;
 		const input = { path: file.path, fileName, options, answers, before, standing };
-		return await shop.pool.run('readRecut', input, { signal, progress });
+		return await shop.pool.run('readRecutFile', input, { signal, progress });
 	} finally {
 		await file.release();
 	}

@@ -36,7 +36,7 @@ export type RecutOutcome =
 	  } & ReadGround);
 
 /** Reads boundaries and compares them with those that stand; nothing is coloured before they are applied. */
-export async function readRecut({ input, port }: Task<RecutInput>): Promise<RecutOutcome> {
+export async function readRecutFile({ input, port }: Task<RecutInput>): Promise<RecutOutcome> {
 	const tell = teller(port);
 	tell('Reading', 0);
 	const source = fileSource(input.path, input.fileName);
@@ -53,6 +53,6 @@ export async function readRecut({ input, port }: Task<RecutInput>): Promise<Recu
 	tell('Carrying decisions over', 0.92);
 	const fresh = { borders: result.borders, columns: result.attributes.columns };
 	const { report } = carryOver(matching, input.standing, fresh);
-	tell('Packing', 0.95);
+	tell('Thinning borders for the screen and packing', 0.94);
 	return { status: 'accepted', ...groundOf(result, reading), matching, change, report };
 }

@@ -30,6 +30,7 @@ export interface BoundaryColumns {
 		regions: string[];
 		at: [number, number] | null;
 		offers?: MendOffer[];
+		toleranceMetres?: number;
 	}[];
 }
 
@@ -86,8 +87,9 @@ async function insertFindings(
 	id: string,
 	findings: BoundaryColumns['findings'],
 ): Promise<void> {
-	const rows = findings.map(({ at, offers, ...finding }) => ({
+	const rows = findings.map(({ at, offers, toleranceMetres, ...finding }) => ({
 		...finding,
+		tolerance_metres: toleranceMetres ?? null,
 		offers: offers ? JSON.stringify(offers) : null,
 		boundary_set_id: id,
 		lon: at?.[0] ?? null,

@@ -112,13 +112,14 @@ export async function intakeStatus(
 	return statusOf(await intakeOf(shop, member, id));
 }
 
+/** The latest uploads; what they ask is told by themselves, since it may be long. */
 export async function listIntakes(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
 ): Promise<IntakeStatus[]> {
 	requireAccess(member, 'sheet.read');
 	const rows = await recentIntakes(shop.db, member.team.id, 50);
-	return rows.map(statusOf);
+	return rows.map((row) => ({ ...statusOf(row), question: null }));
 }
 
 /** Stops an intake that waits, is being read, asks or has failed, and forgets its file. */

@@ -2,6 +2,7 @@ import { isDeepStrictEqual } from 'node:util';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
+import { findBoundarySet } from '../repositories/boundaries.repository.ts';
 import { moveTables, writeFigures } from '../repositories/recut-figures.repository.ts';
 import { changeRecut } from '../repositories/recuts.repository.ts';
 import { giveBoundaries, insertColouring, insertDraft } from '../repositories/sheets.repository.ts';
@@ -9,6 +10,7 @@ import { insertTerritoryDraft } from '../repositories/territories.repository.ts'
 import { sheetOf } from './draft.service.ts';
 import { Conflict } from './outcomes.ts';
 import { figuresDigest, figuresOf, type Before } from './recut-before.ts';
+import { rememberColumns } from './reading-answers.service.ts';
 import { recordRecut, withRecut, type Held } from './recut-held.ts';
 import { planApply, type ApplyPlan } from './recut-plan.ts';
 import { presentMeasures } from './recut-standing.ts';
@@ -77,9 +79,20 @@ async function store(
 		before: JSON.stringify(before),
 		report: JSON.stringify(plan.carried.report),
 	});
+	await rememberChoice(trx, member, held);
 	const detail = { regions: plan.carried.change.regions.after, revision: before.wrote.draft };
 	await recordRecut(trx, member, 'applied', sheet.number, row, detail);
 	return { revision: before.wrote.draft };
+}
+
+/** Columns that were tried and dropped are nothing to remember; those of the boundaries that stand are. */
+async function rememberChoice(trx: Trx, member: Member, { row }: Held): Promise<void> {
+	const taken = (row.remembered ?? []) as { about: string }[];
+	const set = row.to_set ? await findBoundarySet(trx, row.to_set) : undefined;
+	if (row.kind === 'mends' || taken.some(({ about }) => about === 'columns')) return;
+	const given = { teamId: member.team.id, userId: member.userId, fileName: row.file_name };
+	const likeness = String(set?.found?.likeness ?? '');
+	await rememberColumns(trx, { ...given, likeness }, row.options);
 }
 
 async function isStillSo(trx: Trx, { sheet, row }: Held, plan: ApplyPlan): Promise<boolean> {

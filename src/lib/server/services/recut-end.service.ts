@@ -10,7 +10,7 @@ import { findSheetById } from '../repositories/sheets.repository.ts';
 import type { Actor } from './activity.service.ts';
 import { storeBoundarySet } from './boundary-store.ts';
 import type { RefusalNote } from './intake-end.service.ts';
-import { rememberColumns, rememberedNote } from './reading-answers.service.ts';
+import { rememberedNote } from './reading-answers.service.ts';
 import { recordRecut } from './recut-held.ts';
 import { dropUnused } from './stored-files.ts';
 
@@ -41,8 +41,6 @@ export async function readyRecut(
 			decisions: '[]',
 			report: JSON.stringify(read.report),
 		});
-		const given = { teamId: row.team_id, userId: row.created_by, fileName: row.file_name };
-		await rememberColumns(trx, { ...given, likeness: read.found.likeness }, row.options);
 	});
 }
 

@@ -76,12 +76,11 @@ async function territoryInks(
 	shop: Workshop,
 	sheet: SheetRecord,
 	view: BoundaryView,
-	{ territories, draft, measures }: Carried,
+	{ territories, draft }: Carried,
 ): Promise<Record<string, number>> {
 	if (!territories) return {};
 	const { keys, borders } = view;
-	const figures = measures.flatMap(({ id, name, values }) => (values ? { id, name, values } : []));
-	const [fault] = draftFaults({ keys, borders, measures: figures }, territories);
+	const [fault] = draftFaults({ keys, borders }, territories);
 	if (fault) {
 		throw new Unfit('unfit-territories', `The territories cannot follow: ${fault.message}`);
 	}

@@ -8,6 +8,7 @@ import type {
 	RecutRow,
 } from '../../schemas/recut.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
+import type { Action } from '../access/roles.ts';
 import type { Db } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { findBoundarySet, readGeometry } from '../repositories/boundaries.repository.ts';
@@ -18,6 +19,7 @@ import { NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
 import { beforeOf } from './recut-before.ts';
 import { losses } from './recut-losses.ts';
+import { rightsOf } from './sheet.service.ts';
 import { hindranceOf, isStale, recutNoteOf, recutOf } from './recut-state.ts';
 
 type Reading = Pick<Workshop, 'db'>;
@@ -43,6 +45,22 @@ export async function recutStatus(
 	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
 	return noteOf(await recutNoteOf(shop.db, sheet, recut));
+}
+
+/** The same with what its page says of the sheet. */
+export async function readRecutPage(
+	shop: Reading,
+	member: Member,
+	number: number,
+	recut: number,
+): Promise<{
+	recut: RecutPage;
+	sheet: Pick<SheetRecord, 'number' | 'name' | 'revision'>;
+	rights: Action[];
+}> {
+	const opened = await readRecut(shop, member, number, recut);
+	const { name, revision } = await sheetOf(shop.db, member, number);
+	return { recut: opened, sheet: { number, name, revision }, rights: rightsOf(member) };
 }
 
 /** A re-cut with everything that it would change, or has changed. */

@@ -16,6 +16,7 @@ import {
 	readFindings,
 	readGeometry,
 } from '../repositories/boundaries.repository.ts';
+import { listLevels, readLevel } from '../repositories/display-levels.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
 import { measureFiles } from '../repositories/measures.repository.ts';
 import { holdRecutsOf } from '../repositories/recuts.repository.ts';
@@ -68,7 +69,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		revision: draft.revision,
 		savedBy: personName(draft),
 		savedAt: draft.saved_at.toISOString(),
-		boundarySet: boundarySetNote(view),
+		boundarySet: { ...boundarySetNote(view), levels: await listLevels(db, view.set.id) },
 		draft: document,
 		colouring: deskColouring(namesIn(view, document), draft),
 		lastInks: await inksBefore(db, sheet.id, draft),
@@ -99,7 +100,7 @@ function recipeOf({
 	return { options: fields, mends };
 }
 
-const boundarySetNote = ({ set }: BoundaryView): DeskSheet['boundarySet'] => ({
+const boundarySetNote = ({ set }: BoundaryView): Omit<DeskSheet['boundarySet'], 'levels'> => ({
 	id: set.id,
 	fileName: set.file_name,
 	regionCount: set.region_count,
@@ -132,6 +133,7 @@ async function findingsOf(db: Db, boundarySetId: string): Promise<DeskFinding[]>
 		regions: row.regions,
 		at: row.lon === null || row.lat === null ? null : [row.lon, row.lat],
 		...(row.offers && { offers: row.offers as DeskFinding['offers'] }),
+		...(row.tolerance_metres !== null && { toleranceMetres: row.tolerance_metres }),
 		acceptedBy: personName({ by_name: row.accepted_name, by_email: row.accepted_email }),
 		acceptedAt: row.accepted_at?.toISOString() ?? null,
 	}));
@@ -152,20 +154,25 @@ export async function editionsOf(db: Db, sheetId: string): Promise<DeskEdition[]
 	}));
 }
 
-/** The coverage as stored, with the boundary set's id as its tag: it never changes. */
+/**
+ * The coverage as stored, whole or at one level of display, under a tag made of the boundary set's id and
+ * the level: it never changes.
+ */
 export async function sheetGeometry(
 	shop: Reading,
 	member: Member,
 	number: number,
+	level: number | null = null,
 ): Promise<{ tag: string; read(): Promise<Buffer> }> {
 	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
-	const tag = sheet.boundary_set_id;
+	const set = sheet.boundary_set_id;
 	return {
-		tag,
+		tag: level === null ? set : `${set}-${level}`,
 		async read() {
-			const bytes = await readGeometry(shop.db, tag);
-			if (!bytes) throw new NotFound('boundary set');
+			const bytes =
+				level === null ? await readGeometry(shop.db, set) : await readLevel(shop.db, set, level);
+			if (!bytes) throw new NotFound(level === null ? 'boundary set' : 'level of display');
 			return bytes;
 		},
 	};

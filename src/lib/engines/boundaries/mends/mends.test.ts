@@ -1,6 +1,7 @@
+import { booleanPointInPolygon } from '@turf/turf';
 import { describe, expect, it } from 'vitest';
 import { dirtyMaps } from '../../../../../tests/support/dirty-maps.ts';
-import { allValid, unionAndSum } from '../../../../../tests/support/geos.ts';
+import { allValid, partsOf, unionAndSum } from '../../../../../tests/support/geos-areas.ts';
 import {
 	acceptedFeatures,
 	box,
@@ -21,7 +22,10 @@ async function mended(map: Parameters<typeof acceptedFeatures>[0], mends: Mend[]
 	return { read, features: coverageToGeoJson(read.coverage).features };
 }
 
-const faults = ['sliver', 'gap', 'overlap', 'duplicate-region', 'self-crossing', 'stray-part'];
+const faults = [
+	...['sliver', 'gap', 'overlap', 'duplicate-region'],
+	...['self-crossing', 'parts-overlap', 'stray-part'],
+];
 
 describe.each(Object.entries(dirtyMaps))('%s', (_, { code, map }) => {
 	it('is found, with one usual mend', async () => {
@@ -32,6 +36,17 @@ describe.each(Object.entries(dirtyMaps))('%s', (_, { code, map }) => {
 		expect(finding.offers?.filter(({ usual }) => usual)).toHaveLength(1);
 		expect(findings.filter((one) => faults.includes(one.code))).toHaveLength(1);
 		for (const { words } of finding.offers ?? []) expect(words).toMatch(/\d.* (k?m²).*\.$/);
+	});
+
+	it('has its place inside the fault', async () => {
+		const [{ at }] = about((await acceptedFeatures(map)).findings, code);
+		// looked up by turf's point in polygon, part by part
+		const covered = map
+			.flatMap(({ geometry }) => partsOf(geometry))
+			.filter((part) => booleanPointInPolygon(at as [number, number], part));
+		const times: Record<string, number> = { sliver: 0, gap: 0, 'stray-part': 1 };
+		if (code === 'self-crossing') expect(covered.length).toBeGreaterThan(0);
+		else expect(covered).toHaveLength(times[code] ?? 2);
 	});
 
 	it('is gone after any mend that is offered, and nothing else is there instead', async () => {

@@ -24,7 +24,7 @@ const usualZones = [25832, 25833, 25831, 25830, 26917, 26918, 26915, 26911];
 /**
  * Systems that would lay a box of metres into their own area of use: those whose code stands in one of
  * the `hints` (the file's or layer's name) first, then grids by how small their area is, then usual UTM
- * zones. At most eight. Without exactness: nine positions of the box are looked at.
+ * zones, then systems of continents and the world; northing first only where no local one fits. At most eight. Without exactness: nine positions of the box are looked at.
  */
 export function likelySystems(box: Box, hints: string[]): LikelySystem[] {
 	const hinted = hints.flatMap((hint) => hint.match(/\d{4,5}/g) ?? []).map(Number);
@@ -32,10 +32,16 @@ export function likelySystems(box: Box, hints: string[]): LikelySystem[] {
 	const codes = [...new Set([...hinted, ...grids, ...usualZones])];
 	const known = codes.filter((code) => epsgDefinition(code) !== null);
 	const asWritten = known.flatMap((code) => likely(code, box, false) ?? []);
-	const turned = asWritten.length ? [] : known.flatMap((code) => likely(code, box, true) ?? []);
-	return [...asWritten, ...turned].slice(0, mostSystems);
+	// nearly any numbers have a place on a continent or the whole world
+	const isLocal = ({ code }: LikelySystem) => width(areaOf(code)) < broad;
+	const locals = asWritten.filter(isLocal);
+	const turned = locals.length ? [] : known.flatMap((code) => likely(code, box, true) ?? []);
+	const world = asWritten.filter((system) => !isLocal(system));
+	return [...locals, ...turned.filter(isLocal), ...world].slice(0, mostSystems);
 }
 
+/** square degrees: more than a country has, less than a continent */
+const broad = 2500;
 const width = ([west, south, east, north]: readonly number[]) => (east - west) * (north - south);
 
 function likely(code: number, box: Box, swapped: boolean): LikelySystem | null {

@@ -1,4 +1,3 @@
-import { Refusal } from '../refusal.ts';
 import type { ByteSource } from '../options.ts';
 import { parseRows, type CsvForm } from './csv-rows.ts';
 import { decoded } from './decoded.ts';
@@ -21,7 +20,7 @@ const mostRows = 50;
 
 /**
  * Finds out from the first rows how a table is written: its delimiter and geometry column are those by
- * which a column holds well-known text in every row. Null where no column does.
+ * which a column holds well-known text in most rows. Null where no column does.
  */
 export async function csvLayout(source: ByteSource, encoding: string): Promise<CsvLayout | null> {
 	let text = '';
@@ -42,7 +41,7 @@ function layoutOf(text: string, encoding: string, isAll: boolean): CsvLayout | n
 	const newline = text.includes('\n') || !text.includes('\r') ? '\n' : '\r';
 	const readings = delimiters.map((delimiter) => {
 		const form = { encoding, delimiter, newline } as const;
-		return { form, rows: someRows(text, form, isAll) };
+		return { form, rows: parseRows(text, form, isAll, mostRows).rows };
 	});
 	if (!isAll && readings.every(({ rows }) => rows.length < 2)) return 'too short';
 	for (const isWhole of [true, false]) {
@@ -53,16 +52,6 @@ function layoutOf(text: string, encoding: string, isAll: boolean): CsvLayout | n
 	return null;
 }
 
-function someRows(text: string, form: CsvForm, isAll: boolean): string[][] {
-	try {
-		return parseRows(text, form, isAll).rows.slice(0, mostRows + 1);
-	} catch (error) {
-		// by the wrong delimiter quotation marks stand in the midst of values
-		if (error instanceof Refusal) return parseRows(text, form, false).rows.slice(0, mostRows + 1);
-		throw error;
-	}
-}
-
 /** `isWhole`: the well-known text must also end as such, which it does not by the wrong delimiter. */
 function layoutIn(rows: string[][], form: CsvForm, isWhole: boolean): CsvLayout | null {
 	if (rows.length === 0) return null;
@@ -70,7 +59,8 @@ function layoutIn(rows: string[][], form: CsvForm, isWhole: boolean): CsvLayout 
 	const values = rows.slice(header ? 1 : 0);
 	const isGeometry = (c: number) => {
 		const filled = values.map((row) => (row[c] ?? '').trim()).filter((value) => value !== '');
-		return filled.length > 0 && filled.every((v) => looksLikeWkt(v) && (!isWhole || isClosed(v)));
+		const shapes = filled.filter((v) => looksLikeWkt(v) && (!isWhole || isClosed(v)));
+		return shapes.length > filled.length / 2;
 	};
 	const geometry = [...rows[0].keys()].filter(isGeometry);
 	if (geometry.length === 0) return null;

@@ -5,7 +5,7 @@ import { decoded } from './decoded.ts';
 
 const usualCharacters = 1024 * 1024;
 /** of one row */
-const mostCharacters = 128 * usualCharacters;
+const mostCharacters = 64 * usualCharacters;
 
 export interface CsvForm {
 	encoding: string;
@@ -23,7 +23,7 @@ export async function* csvRows(source: ByteSource, form: CsvForm): AsyncGenerato
 	for await (const piece of decoded(source, form.encoding)) {
 		text += piece;
 		if (text.length < helping) continue;
-		const { rows, used } = parseRows(text, form, false);
+		const { rows, used } = soundRows(text, form, false);
 		text = text.slice(used);
 		helping = Math.max(usualCharacters, 2 * text.length);
 		if (text.length > mostCharacters) {
@@ -32,28 +32,33 @@ export async function* csvRows(source: ByteSource, form: CsvForm): AsyncGenerato
 		}
 		yield rows;
 	}
-	yield parseRows(text, form, true).rows;
+	yield soundRows(text, form, true).rows;
 }
 
-/** The whole rows of a piece of text, and how many characters they took. */
+function soundRows(text: string, form: CsvForm, isAll: boolean) {
+	const { rows, used, error } = parseRows(text, form, isAll);
+	if (!error) return { rows, used };
+	const isOpen = error.code === 'MissingQuotes';
+	const message = isOpen
+		? 'The table ends inside a quoted value; it is cut off.'
+		: `A quoted value of the table goes on after its quotation mark, near "${text.substr(error.index ?? 0, 20)}".`;
+	throw new Refusal(isOpen ? 'file-truncated' : 'file-damaged', message);
+}
+
+/** The whole rows of a piece of text, how many characters they took, and what is wrong with them; `most` rows,
+ * all unless given. */
 export function parseRows(
 	text: string,
 	{ delimiter, newline }: Omit<CsvForm, 'encoding'>,
 	isAll: boolean,
-): { rows: string[][]; used: number } {
-	const parser = new Papa.Parser({ delimiter, newline });
+	most = 0,
+): { rows: string[][]; used: number; error: Papa.ParseError | undefined } {
+	const parser = new Papa.Parser({ delimiter, newline, preview: most });
 	const { data, errors, meta } = parser.parse(text, 0, !isAll) as Papa.ParseResult<string[]>;
-	const [error] = errors;
-	if (error) {
-		const isOpen = error.code === 'MissingQuotes';
-		const message = isOpen
-			? 'The table ends inside a quoted value; it is cut off.'
-			: `A quoted value of the table goes on after its quotation mark, near "${text.substr(error.index ?? 0, 20)}".`;
-		throw new Refusal(isOpen ? 'file-truncated' : 'file-damaged', message);
-	}
 	for (const row of data) {
 		const last = row.length - 1;
 		if (row[last].endsWith('\r')) row[last] = row[last].slice(0, -1);
 	}
-	return { rows: data.filter((row) => row.length > 1 || row[0] !== ''), used: meta.cursor };
+	const rows = data.filter((row) => row.length > 1 || row[0] !== '');
+	return { rows, used: meta.cursor, error: errors[0] };
 }

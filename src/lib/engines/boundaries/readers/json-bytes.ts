@@ -238,6 +238,7 @@ function isWordByte(c: number): boolean {
 	);
 }
 
-const longWholeNumbers = /"(?:[^"\\]|\\.)*"|-?\d{16,}(?![\d.eE])/g;
+/** Texts, so that numbers within them are passed over, and long numbers that no point goes before. */
+const longWholeNumbers = /"(?:[^"\\]|\\.)*"|(?<![\d.])-?\d{16,}(?![\d.eE])/g;
 const quoteIfLong = (found: string) =>
 	found[0] === '"' || Number.isSafeInteger(Number(found)) ? found : `"${found}"`;

@@ -45,8 +45,17 @@ export async function readKml(
 	return layer;
 }
 
+const mostAttributes = 100;
+
 function parserInto(features: KmlFeatures): SaxesParser {
 	const parser = new SaxesParser();
+	let attributes = 0;
+	parser.on('opentagstart', () => (attributes = 0));
+	parser.on('attribute', () => {
+		if (++attributes <= mostAttributes) return;
+		const message = `An element has more than ${mostAttributes} attributes (${features.place()}).`;
+		throw new Refusal('file-damaged', message);
+	});
 	parser.on('opentag', ({ name, attributes }) => features.open(local(name), attributes));
 	parser.on('closetag', ({ name }) => features.close(local(name)));
 	parser.on('text', (text) => features.text(text));

@@ -4,7 +4,7 @@ import { Refusal } from '../refusal.ts';
 import { crc32 } from './crc32.ts';
 import { damaged, zipDirectory, type ZipEntry } from './zip-directory.ts';
 
-const helping = 16 * 1024;
+const mostHelping = 16 * 1024;
 
 /**
  * A zip archive whose files are unpacked on demand. Refused before anything is unpacked when the
@@ -80,6 +80,8 @@ export class ZipArchive {
 			out.set(chunk.subarray(0, Math.max(0, most - length)), Math.min(length, most));
 			length = Math.min(most, length + chunk.length);
 		});
+		// what packs best unpacks to a thousand times its size, and a helping is unpacked at once
+		const helping = Math.min(mostHelping, Math.max(64, Math.ceil(most / 16)));
 		try {
 			for (let at = 0; at < packed.length && !over; at += helping) {
 				inflate.push(packed.subarray(at, at + helping), at + helping >= packed.length);

@@ -1,6 +1,7 @@
 /** New boundaries for an old sheet: which region goes on as which, and what people said about it. */
 export { matchRegions } from './match-regions.ts';
 export { decide } from './decide.ts';
+export { checkMatch } from './check-match.ts';
 export { thresholds } from './region-match.ts';
 export type {
 	MatchGroup,

@@ -40,33 +40,33 @@ function outlineNames(coverage: Coverage): string[] {
 
 /** Two sums over the segments of a line; both ways along a segment give the same. */
 function sumSegments(points: Float64Array, first: number, last: number, sum: Int32Array): void {
-	const before = new Int32Array(2);
-	const here = new Int32Array(2);
-	sum.fill(0);
+	let [one, other] = [0, 0];
+	let [oneBefore, otherBefore] = [0, 0];
 	for (let i = first; i <= last; i++) {
-		codesOf(points[2 * i], points[2 * i + 1], here);
-		for (let k = 0; k < 2; k++) {
-			const [a, b] = [before[k], here[k]];
-			if (i > first) sum[k] += mixed((a + b) ^ Math.imul(a | 1, b | 1));
-			before[k] = b;
+		const x = Math.round(points[2 * i] * 1e8);
+		const east = x - turn * Math.floor(x / turn);
+		const north = Math.round(points[2 * i + 1] * 1e8) + 90e8;
+		const [eastHigh, northHigh] = [Math.floor(east / low), Math.floor(north / low)];
+		const lows = ((east - eastHigh * low) << 16) ^ (north - northHigh * low);
+		const highs = Math.imul(eastHigh, 0x9e3779b1) + Math.imul(northHigh, 0x85ebca77);
+		const oneHere = mixed(mixed(lows) + highs);
+		const otherHere = mixed(mixed(lows ^ 0x5bd1e995) ^ Math.imul(highs, 0x27d4eb2f));
+		if (i > first) {
+			one = (one + ofSegment(oneBefore, oneHere)) | 0;
+			other = (other + ofSegment(otherBefore, otherHere)) | 0;
 		}
+		oneBefore = oneHere;
+		otherBefore = otherHere;
 	}
+	sum[0] = one;
+	sum[1] = other;
 }
 
+/** Points are taken on a grid of a millimetre, whole turns of longitude left out, each as two codes. */
 const turn = 360e8;
 const low = 65536;
 
-/** Two codes of a point on a grid of a millimetre, whole turns of longitude left out. */
-function codesOf(lon: number, lat: number, codes: Int32Array): void {
-	const x = Math.round(lon * 1e8);
-	const east = x - turn * Math.floor(x / turn);
-	const north = Math.round(lat * 1e8) + 90e8;
-	const [eastHigh, northHigh] = [Math.floor(east / low), Math.floor(north / low)];
-	const lows = ((east - eastHigh * low) << 16) ^ (north - northHigh * low);
-	const highs = Math.imul(eastHigh, 0x9e3779b1) + Math.imul(northHigh, 0x85ebca77);
-	codes[0] = mixed(mixed(lows) + highs);
-	codes[1] = mixed(mixed(lows ^ 0x5bd1e995) ^ Math.imul(highs, 0x27d4eb2f));
-}
+const ofSegment = (a: number, b: number) => mixed((a + b) ^ Math.imul(a | 1, b | 1));
 
 /** Spreads 32 bits; the finalizer of MurmurHash3 (Appleby, public domain). */
 function mixed(value: number): number {

@@ -48,17 +48,21 @@ function coastalOf({ sides, names }: LabelInput): Uint8Array {
 	return coastal;
 }
 
-function groundOf(input: LabelInput): LabelGround {
-	const { arcs, rings, names, areas, box, scale } = input;
+/** 1 for regions where some name might stand: inside, or, on a coast, beside them. */
+function hopefulOf({ arcs, rings, scale }: LabelInput, coastal: Uint8Array): Uint8Array {
+	return Uint8Array.from(rings, (list, region) =>
+		coastal[region] || smallerSide(arcs, list) >= smallest * scale ? 1 : 0,
+	);
+}
+
+function groundOf(input: LabelInput, coastal: Uint8Array, hopeful: Uint8Array): LabelGround {
+	const { arcs, rings, names, areas, box } = input;
 	const raster = rasterise(arcs, rings, box);
-	const coastal = coastalOf(input);
-	// no pole is sought where no name could stand anyway
-	const hopeless = (list: Int32Array[], region: number) =>
-		!coastal[region] && smallerSide(arcs, list) < smallest * scale;
 	return {
 		raster,
 		room: headroom(raster),
-		poles: rings.map((list, region) => (hopeless(list, region) ? null : poleOf(arcs, list))),
+		// no pole is sought where no name could stand anyway
+		poles: rings.map((list, region) => (hopeful[region] ? poleOf(arcs, list) : null)),
 		ways: names.map((name) =>
 			name ? linesOfName(name, (text) => textWidth(labelFace, 1000, text)) : [],
 		),
@@ -68,22 +72,35 @@ function groundOf(input: LabelInput): LabelGround {
 }
 
 export function labelSheet(input: LabelInput): Labelled {
-	const { names, groups, scale } = input;
-	const ground = groundOf(input);
+	const { names, groups } = input;
+	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
+	const asked = grouped ? enough : enoughAlone;
+	const coastal = coastalOf(input);
+	const hopeful = hopefulOf(input, coastal);
+	// a sheet of specks: not even looked at, for too few of its names could stand
+	const possible = hopeful.reduce((sum, one) => sum + one, 0) / Math.max(1, names.length);
+	const named = possible >= asked && nameRegions(input, groundOf(input, coastal, hopeful), asked);
+	if (named) return named;
+	const unplaced = names.map((_, region) => region);
+	if (!grouped) return { texts: [], leaders: [], unplaced };
+	const scaled = groupSizes.map((size) => Math.round(size * input.scale));
+	return { texts: labelGroups(input, scaled), leaders: [], unplaced };
+}
+
+/** Names at the largest size that costs few of them; null where fewer than are asked for find room. */
+function nameRegions(
+	{ names, scale }: LabelInput,
+	ground: LabelGround,
+	asked: number,
+): Labelled | null {
 	// a name at the end of a leader counts half: better smaller and in its place
 	const share = ({ unplaced, leaders }: Labelled) =>
 		1 - (unplaced.length + leaders.length / 2) / Math.max(1, names.length);
 	const least = labelRegions(ground, Math.round(smallest * scale));
-	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
-	if (share(least) >= (grouped ? enough : enoughAlone)) {
-		for (const size of sizes) {
-			const found = labelRegions(ground, Math.round(size * scale));
-			if (share(found) >= share(least) - worth) return found;
-		}
-		return least;
+	if (share(least) < asked) return null;
+	for (const size of sizes) {
+		const found = labelRegions(ground, Math.round(size * scale));
+		if (share(found) >= share(least) - worth) return found;
 	}
-	const unplaced = names.map((_, region) => region);
-	if (!grouped) return { texts: [], leaders: [], unplaced };
-	const scaled = groupSizes.map((size) => Math.round(size * scale));
-	return { texts: labelGroups(input, scaled), leaders: [], unplaced };
+	return least;
 }

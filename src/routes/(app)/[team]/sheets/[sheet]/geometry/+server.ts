@@ -1,24 +1,22 @@
+import { error } from '@sveltejs/kit';
 import { memberFor } from '$lib/server/access/guard';
-import { isHeld, notModified } from '$lib/server/bytes';
+import { coverageResponse } from '$lib/server/coverage-response';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
+import { displayLevel } from '$lib/schemas/display-level';
 import { sheetGeometry } from '$lib/server/services/sheet.service';
 import type { RequestHandler } from './$types';
 
-/** The coverage in the encoding of the boundaries engine; its tag is the boundary set, which never changes. */
-export const GET = (async ({ locals, params, request }) => {
+/**
+ * The coverage in the encoding of the boundaries engine, whole or with `?level=n` thinned for the screen;
+ * its tag is made of the boundary set and the level, which never change.
+ */
+export const GET = (async ({ locals, params, request, url }) => {
 	const member = memberFor(locals, 'sheet.read');
-	const geometry = await forPage(() => sheetGeometry(workshop(), member, Number(params.sheet)));
-	// the address outlives the boundary set, so the browser asks, and is mostly told that it has it
-	const headers = { 'cache-control': 'private, no-cache' };
-	if (isHeld(request, geometry.tag)) return notModified(geometry.tag, headers);
-	const bytes = await forPage(() => geometry.read());
-	return new Response(bytes as Uint8Array<ArrayBuffer>, {
-		headers: {
-			...headers,
-			etag: `"${geometry.tag}"`,
-			'content-type': 'application/octet-stream',
-			'content-length': String(bytes.byteLength),
-		},
-	});
+	const level = displayLevel.safeParse(url.searchParams.get('level'));
+	if (!level.success) error(400, 'A level of display is a whole number from 1.');
+	const geometry = await forPage(() =>
+		sheetGeometry(workshop(), member, Number(params.sheet), level.data),
+	);
+	return coverageResponse(request, geometry);
 }) satisfies RequestHandler;
