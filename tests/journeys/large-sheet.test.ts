@@ -8,6 +8,7 @@ import { colourAt, painted, uploadLand } from '../support/large-sheet.ts';
 /** Cells are numbered from the south-west, row by row, 71 to a row. */
 const land = { regions: 5_000, inner: 12, seed: 7 };
 const columns = 71;
+const patience = { timeout: 20_000 };
 
 describe('a sheet of 5,000 regions', () => {
 	let browser: Browser;
@@ -16,7 +17,7 @@ describe('a sheet of 5,000 regions', () => {
 
 	beforeAll(async () => {
 		browser = await startBrowser();
-		const sheet = await uploadLand(land, 'Five thousand, journey', 60);
+		const sheet = await uploadLand(land, 'Five thousand, journey', 180);
 		({ page, complaints } = await openPage(browser));
 		page.setDefaultTimeout(60_000);
 		await signInAs(page, 'cartographer');
@@ -31,7 +32,7 @@ describe('a sheet of 5,000 regions', () => {
 		if (!box) throw new Error('nothing is selected');
 		return [box.x + box.width / 2, box.y + box.height / 2];
 	};
-	const selected = () => page.locator('aside h2').first().innerText();
+	const selected = () => page.locator('aside h2', { hasText: /^Cell/ }).innerText();
 	const told = () => page.locator('main [aria-live]').last().innerText();
 	const cell = (name: string) => Number(/\d+/.exec(name)?.[0]);
 	const ink = () => page.locator('aside dl rect').getAttribute('fill');
@@ -95,18 +96,18 @@ describe('a sheet of 5,000 regions', () => {
 			.getByRole('button')
 			.filter({ hasNot: page.locator(`rect[fill="${before}"]`) });
 		await other.first().click();
-		await expect.poll(ink).not.toBe(before);
-		await expect.poll(() => colourAt(page, x, y)).toBe(await ink());
+		await expect.poll(ink, patience).not.toBe(before);
+		await expect.poll(() => colourAt(page, x, y), patience).toBe(await ink());
 		await docket(page, 'Colours').getByText('1 lock').waitFor();
 		await saved(page);
 		await painted(page);
 		const typical = await colourAt(page, x, y);
 		await page.getByRole('button', { name: 'grey print' }).click();
-		await expect.poll(() => colourAt(page, x, y)).not.toBe(typical);
+		await expect.poll(() => colourAt(page, x, y), patience).not.toBe(typical);
 		await painted(page);
 		expect(await colourAt(page, x, y)).toMatch(/^#(..)\1\1$/);
 		await page.getByRole('button', { name: 'typical' }).click();
-		await expect.poll(() => colourAt(page, x, y)).toBe(typical);
+		await expect.poll(() => colourAt(page, x, y), patience).toBe(typical);
 		await expectAccessible(page);
 		expect(complaints).toEqual([]);
 	});
