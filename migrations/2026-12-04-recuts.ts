@@ -26,7 +26,6 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 		);
 
 		alter table findings add column offers jsonb;
-		alter table findings add column tolerance_metres double precision;
 		alter table boundary_sets add column found jsonb;
 		alter table boundary_sets add column options jsonb not null default '{}';
 		alter table boundary_sets add column gaps_km double precision not null default 0;

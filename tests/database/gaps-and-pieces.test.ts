@@ -45,13 +45,13 @@ const strait = JSON.stringify({
 		feature('far', square(3.6, 0)),
 	],
 });
-/**
- * One degree along the parallel of 1 degree, where the squares lie nearest: a cos(1) / sqrt(1 - e2 sin2(1))
- * for each radian, by the axes of WGS 84.
- */
-const [latitude, e2] = [Math.PI / 180, 0.00669437999014];
-const degreeKm =
-	((6378.137 * Math.cos(latitude)) / Math.sqrt(1 - e2 * Math.sin(latitude) ** 2)) * latitude;
+/** Kilometres along a parallel: a cos(lat) / sqrt(1 - e2 sin2(lat)) a radian, by the axes of WGS 84. */
+function along(degrees: number, latitude: number): string {
+	const [turn, sine] = [(degrees * Math.PI) / 180, Math.sin((latitude * Math.PI) / 180)];
+	const radius =
+		(6378.137 * Math.sqrt(1 - sine ** 2)) / Math.sqrt(1 - 0.00669437999014 * sine ** 2);
+	return (radius * turn).toFixed(2);
+}
 
 const desk = () => deskSheet(shop, member, 1);
 const across = async () => {
@@ -73,13 +73,13 @@ describe('gaps across water', () => {
 		expect(await across()).toEqual([]);
 		const first = await measureSheetGaps(shop, member, 1, 20);
 		expect(first).toEqual({ withinKm: 20, pairs: 1, cut: false });
-		expect(await across()).toEqual([`east-mid ${(0.1 * degreeKm).toFixed(2)}`]);
+		expect(await across()).toEqual([`east-mid ${along(0.1, 1)}`]);
 		const second = await measureSheetGaps(shop, member, 1, 60);
 		expect(second).toMatchObject({ withinKm: 60, cut: false });
 		expect((await across()).sort()).toEqual([
-			`east-far ${(0.5 * degreeKm).toFixed(2)}`,
-			`east-mid ${(0.1 * degreeKm).toFixed(2)}`,
-			`far-west ${(0.4 * degreeKm).toFixed(2)}`,
+			`east-far ${along(0.5, 1)}`,
+			`east-mid ${along(0.1, 1)}`,
+			`far-west ${along(0.4, 0.2)}`,
 		]);
 		expect((await desk()).boundarySet.gapsKm).toBe(60);
 	});

@@ -46,6 +46,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/borders', 'action gaps', 'borders.edit'],
 	['/sheets/[sheet]/borders.col', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/borders.csv', 'GET', 'sheet.read'],
+	['/sheets/[sheet]/columns', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/draft', 'POST', 'sheet.read'],
 	['/sheets/[sheet]/drafts/[revision]', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/editions', 'action issue', 'edition.issue'],

@@ -41,8 +41,9 @@ export class BorderLedger {
 	});
 	/** what is decided about: the rows ticked, or the one that is shown */
 	inHand = $derived.by(() => {
-		const names = this.ticked.size ? this.ticked : new Set(this.chosen ? [this.chosen] : []);
-		return names.size ? this.rows.filter((row) => names.has(rowName(row))) : [];
+		const { ticked, chosen } = this;
+		if (ticked.size) return this.rows.filter((row) => ticked.has(rowName(row)));
+		return chosen === null ? [] : this.rows.filter((row) => rowName(row) === chosen);
 	});
 
 	constructor(readonly desk: Desk) {}

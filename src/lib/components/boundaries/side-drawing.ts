@@ -71,8 +71,8 @@ export function boxOf({ numbers, boxes }: Side, keys: readonly string[]): Box | 
 }
 
 const width = 1000;
-/** of the frame, as height for width */
-const [flattest, tallest] = [0.5, 1.1];
+/** of the frame, as height for width: two beside each other leave room for a table below */
+const shape = 0.56;
 
 /** A frame round a box, both sides alike: narrowed as the middle parallel asks, with some air. */
 export function frameOf(inner: Box, air: number): Frame {
@@ -80,7 +80,6 @@ export function frameOf(inner: Box, air: number): Frame {
 	const narrow = narrowing(inner);
 	const across = Math.max((east - west) * narrow, 1e-5) * (1 + air);
 	const up = Math.max(north - south, 1e-5) * (1 + air);
-	const shape = Math.min(tallest, Math.max(flattest, up / across));
 	const half = Math.max(across / 2, up / 2 / shape);
 	const [x, y] = [(west + east) / 2, (south + north) / 2];
 	const box: Box = [x - half / narrow, y - half * shape, x + half / narrow, y + half * shape];
