@@ -47,7 +47,7 @@ describe('boundaries as they come', () => {
 	/** What the team answered about this file is forgotten, so that it is asked about again. */
 	async function forgetAll() {
 		await page.goto(`${team}/upload`);
-		const forget = page.getByRole('button', { name: /^Forget: .*tavaroe-as-received/ });
+		const forget = page.getByRole('button', { name: /^Forget\b.*tavaroe-as-received/ });
 		while (await forget.count()) {
 			const left = await forget.count();
 			await forget.first().click();
