@@ -67,19 +67,15 @@ async function moved(page: Page) {
 	return { frames: sorted.length, median: at(0.5), ninety: at(0.9), longest: at(1) };
 }
 
-function framesFor(milliseconds: number): Promise<number[]> {
-	return new Promise((resolve) => {
-		const lengths: number[] = [];
-		const start = performance.now();
-		let last = start;
-		const next = (now: number) => {
-			lengths.push(now - last);
-			last = now;
-			if (now - start > milliseconds) resolve(lengths.slice(1));
-			else requestAnimationFrame(next);
-		};
-		requestAnimationFrame(next);
-	});
+async function framesFor(milliseconds: number): Promise<number[]> {
+	const lengths: number[] = [];
+	const start = performance.now();
+	for (let last = start; last - start < milliseconds;) {
+		const now = await new Promise<number>(requestAnimationFrame);
+		lengths.push(now - last);
+		last = now;
+	}
+	return lengths.slice(1);
 }
 
 /** Eight turns of the wheel, then until the new tiles and the finer lines are there. */
