@@ -49,16 +49,17 @@ export function sheetBorderRows(
 	};
 	const [struck, added] = [named(rules.struck), named(rules.added)];
 	const standing = standingsForSheet(keys, borders, rules);
+	const untouched = struck.size + added.size === 0;
 	const rows = Array.from(borders.a, (a, border): SheetBorderRow => {
 		const b = borders.b[border];
-		const [out, put] = [struck.get(code(a, b)), added.get(code(a, b))];
 		const [kind, metres] = [borders.kind[border], borders.metres[border]];
+		const row = { a, b, border, kind, metres, standing: standing[border], hand: null };
+		if (untouched) return row;
+		const [out, put] = [struck.get(code(a, b)), added.get(code(a, b))];
 		added.delete(code(a, b));
-		const row = { a, b, border, kind, metres };
-		if (put && standing[border] !== 'counts')
+		if (put && row.standing !== 'counts')
 			return { ...row, standing: 'counts', hand: handOf('added', put) };
-		const hand = standing[border] === 'struck' && out ? handOf('struck', out) : null;
-		return { ...row, standing: standing[border], hand };
+		return out && row.standing === 'struck' ? { ...row, hand: handOf('struck', out) } : row;
 	});
 	for (const [pair, put] of added) {
 		const [a, b] = [Math.floor(pair / keys.length), pair % keys.length];
