@@ -234,7 +234,8 @@ describe('boundaries as they come', () => {
 
 		await toBoundaries(page, sheet);
 		await press(page.getByText(/ways to mend it: 0203 and 9999/));
-		await tabTo(page, page.locator('[type=radio]:checked').first());
+		const ways = page.getByRole('group', { name: /^Mend: 0203 and 9999/ });
+		await tabTo(page, ways.getByRole('radio').first());
 		await page.keyboard.press('ArrowDown');
 		await press(page.getByRole('button', { name: 'Preview these mends (1)' }));
 		await compared(page);
