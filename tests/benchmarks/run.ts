@@ -5,7 +5,7 @@ interface Benchmark {
 
 const alone = ['boundaries', 'colouring', 'locks', 'tables', 'territories'];
 /** run only when named, because a product must be running */
-const withProduct = ['lock-toggle'];
+const withProduct = ['large-sheet', 'lock-toggle'];
 const names = [...alone, ...withProduct];
 
 const wanted = process.argv.slice(2);

@@ -9,6 +9,9 @@ import {
 } from '../../src/lib/server/access/member.ts';
 import { actions, allows, may, roles, type Action } from '../../src/lib/server/access/roles.ts';
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
+import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
+import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
+import { sheetPieces } from '../../src/lib/server/services/pieces.service.ts';
 import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
@@ -99,6 +102,7 @@ import {
 } from '../../src/lib/server/services/measure-upkeep.service.ts';
 import { uploadTable } from '../../src/lib/server/services/measure-upload.service.ts';
 import { deskMeasures, measureTables } from '../../src/lib/server/services/measures.service.ts';
+import { sheetColumns, sheetForPage } from '../../src/lib/server/services/sheet-columns.service.ts';
 import {
 	acceptFinding,
 	deskSheet,
@@ -235,6 +239,8 @@ const walk: Walk = {
 	sendLetters: ['handover.edit', (member) => sendLetters(shop, member, 99, 1, { press: id })],
 	withdrawHandover: ['handover.edit', (member) => withdrawHandover(shop, member, 99, 1)],
 	deskSheet: ['sheet.read', (member) => deskSheet(shop, member, 99)],
+	sheetColumns: ['sheet.read', (member) => sheetColumns(shop, member, 99)],
+	sheetForPage: ['sheet.read', (member) => sheetForPage(shop, member, 99)],
 	draftSvg: ['sheet.read', (member) => draftSvg(shop, member, 99, 'typical')],
 	editionFile: ['files.download', (member) => editionFile(shop, member, 99, 1, 'sheet.svg')],
 	intakeStatus: ['sheet.read', (member) => intakeStatus(shop, member, id)],
@@ -265,6 +271,12 @@ const walk: Walk = {
 		'sheet.read',
 		(member) => sheetBordersAnswer(shop, member, 99, new AbortController().signal),
 	],
+	borderFile: [
+		'sheet.read',
+		(member) => borderFile(shop, member, 99, 'csv', new AbortController().signal),
+	],
+	measureSheetGaps: ['borders.edit', (member) => measureSheetGaps(shop, member, 99, 10)],
+	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
 	sheetList: ['sheet.read', (member) => sheetList(shop, member)],

@@ -287,6 +287,13 @@ describe('the team’s sheets', () => {
 		const { borders } = await answer(get('/sheets/1/borders'), operations.readBorders);
 		// point touches do not bind until the sheet says so
 		expect(borders).toHaveLength(107);
+		const csv = await get('/sheets/1/borders/borders.csv');
+		expect(csv.headers.get('content-type')).toMatch(/^text\/csv/);
+		// a heading, 107 lines and 2 point touches
+		expect((await csv.text()).trim().split('\r\n')).toHaveLength(110);
+		const col = await get('/sheets/1/borders/borders.col');
+		expect(await col.text()).toContain('\np edge 49 107\n');
+		expect((await get('/sheets/1/borders/borders.txt')).status).toBe(404);
 		const colouring = await answer(get('/sheets/1/colouring'), operations.readColouring);
 		expect(colouring).toMatchObject({
 			status: 'coloured',

@@ -167,6 +167,10 @@ describe('what a sheet holds', () => {
 	it('a sheet that is deleted takes its re-cuts, their boundaries and their files with it', async () => {
 		const stood = await left();
 		const sheet = await plotsSheet(shop, member);
+		const tried = await recutWith(shop, member, sheet, after.slice(2));
+		await applyRecut(shop, member, sheet, tried.number);
+		await putBackRecut(shop, member, sheet, tried.number, false);
+		await dropRecut(shop, member, sheet, tried.number);
 		const applied = await recutWith(shop, member, sheet);
 		await applyRecut(shop, member, sheet, applied.number);
 		await recutWith(shop, member, sheet, before.slice(1));

@@ -4,6 +4,7 @@ import { noTerritories } from '../../src/lib/engines/territories/territory-draft
 import type { Member } from '../../src/lib/server/access/member.ts';
 import { readDraft, saveDraft } from '../../src/lib/server/services/draft.service.ts';
 import { issueEdition, sheetEditions } from '../../src/lib/server/services/edition.service.ts';
+import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
 import { feedMeasure } from '../../src/lib/server/services/measure-feed.service.ts';
 import { deskMeasures } from '../../src/lib/server/services/measures.service.ts';
 import { Conflict, Unfit } from '../../src/lib/server/services/outcomes.ts';
@@ -16,8 +17,8 @@ import {
 	deskTerritories,
 	saveTerritories,
 } from '../../src/lib/server/services/territories.service.ts';
-import { plotsSheet, recutWith } from '../support/recut-sheets.ts';
-import { createMember, createWorkshop, type TestWorkshop } from '../support/workshop.ts';
+import { before, plotsFile, plotsSheet, recutWith, type Plot } from '../support/recut-sheets.ts';
+import { createMember, createWorkshop, ingest, type TestWorkshop } from '../support/workshop.ts';
 
 let shop: TestWorkshop;
 let cartographer: Member;
@@ -188,7 +189,7 @@ describe('applying it', () => {
 		expect((await desk()).revision).toBe(revision + 1);
 		expect(Object.keys(now.draft.locks)).toEqual(['z']);
 		expect(now.draft.locks.z).toMatchObject({ ink: 1, cost: 2 });
-		expect(now.draft.struck).toEqual([{ a: 'b2', b: 'c', reason: 'A wall stands there.' }]);
+		expect(now.draft.struck).toMatchObject([{ a: 'b2', b: 'c', reason: 'A wall stands there.' }]);
 		expect(now.draft.apart).toEqual([]);
 		expect(now.document.assignment).toEqual({
 			...{ z: 'west', g: 'west', b1: 'east', b2: 'east', c: 'east' },
@@ -266,5 +267,31 @@ describe('applying it', () => {
 		expect((await picture()).draft).toEqual(stood.draft);
 		// what was taken away stays among the revisions
 		expect((await readDraft(shop, cartographer, sheet, now + 1)).document.locks).toEqual({});
+	});
+});
+
+describe('gaps across water', () => {
+	it('are measured on the new boundaries as far as before, so that the rule still counts', async () => {
+		const plots = [...before, ['far', 34, 2, 44, 8] as Plot];
+		const file = plotsFile(plots);
+		const made = await ingest(shop, cartographer, 'islands.geojson', file);
+		const island = made.sheet ?? 0;
+		await measureSheetGaps(shop, cartographer, island, 10);
+		const { draft, revision } = await deskSheet(shop, cartographer, island);
+		const struck = [{ a: 'c', b: 'far', reason: 'Nobody sees both.' }];
+		const document = { ...draft, waterKm: 10, struck };
+		await saveDraft(shop, cartographer, island, { revision, document });
+		const later = plots.filter(([key]) => key !== 'i');
+		const recut = await recutWith(shop, cartographer, island, later);
+		expect(recut.change?.pairs.counts.gained).toBe(0);
+		await applyRecut(shop, cartographer, island, recut.number);
+		const now = await deskSheet(shop, cartographer, island);
+		expect(now.boundarySet.gapsKm).toBe(10);
+		// 0.04 degrees of longitude at 10 degrees north are 4.4 km (111.32 km a degree at the equator, WGS 84)
+		const pair = now.borders.a.findIndex(
+			(a, i) => now.regions.key[a] === 'c' && now.regions.key[now.borders.b[i]] === 'far',
+		);
+		expect(now.borders.metres[pair] / 1000).toBeCloseTo(0.04 * 111.32 * Math.cos(Math.PI / 18), 1);
+		expect(now.draft).toMatchObject({ waterKm: 10, struck });
 	});
 });

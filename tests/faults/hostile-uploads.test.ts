@@ -3,7 +3,7 @@ import { zipSync, strToU8 } from 'fflate';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { Member } from '../../src/lib/server/access/member.ts';
 import { UploadFault } from '../../src/lib/server/files/multipart.ts';
-import { beginIntake } from '../../src/lib/server/services/intake.service.ts';
+import { beginIntake, cancelIntake } from '../../src/lib/server/services/intake.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
 import { deskSheet } from '../../src/lib/server/services/sheet.service.ts';
 import {
@@ -92,14 +92,7 @@ const refused: [string, string, string | Uint8Array, RegExp][] = [
 		/no-areas/,
 	],
 	['no features', 'e.geojson', collection(), /no-areas|empty-file/],
-	[
-		'two rows of one key',
-		'd.geojson',
-		collection(feature({ code: 'a' }), feature({ code: 'a' }, square(1))),
-		/duplicate-keys/,
-	],
 	['a place that is no number', 'n.geojson', good.replace('[1,0]', '[1e999,0]'), /bad-coordinate/],
-	['latitudes of a hundred', 's.geojson', swapped, /axes-swapped/],
 	['200,000 levels of nesting', 'nest.geojson', nested, /not-json|not-geojson/],
 	['a zip that unpacks to much more', 'bomb.zip', bomb, /.+/],
 	['a zip that climbs out of its folder', 'climb.zip', climbing, /.+/],
@@ -110,13 +103,32 @@ describe('files that are refused', () => {
 	it.each(refused)(
 		'%s: says why, and leaves no row and no byte',
 		async (_case, name, bytes, code) => {
-			const fields: Record<string, string> = name.startsWith('d.') ? { keyField: 'code' } : {};
-			const status = await ingest(shop, member, name, bytes, fields);
+			const status = await ingest(shop, member, name, bytes);
 			expect(status.state).toBe('refused');
 			expect(status.refusal?.code).toMatch(code);
 			expect(status.refusal?.message).toMatch(/^\p{Lu}.*[.?]$/su);
 			expect(status.sheet).toBeNull();
 			expect(await rows()).toEqual(nothing);
+			expect(await shop.stored()).toEqual([]);
+		},
+	);
+});
+
+const doubled = collection(feature({ code: 'a' }), feature({ code: 'a' }, square(1)));
+const asked: [string, string, Record<string, string>, string][] = [
+	['two rows of one key', doubled, { keyField: 'code' }, 'keys'],
+	['latitudes of a hundred', swapped, {}, 'axes'],
+];
+
+describe('files that somebody has to say something about', () => {
+	it.each(asked)(
+		'%s: asks, keeps the file alone, and leaves nothing once nobody wants it',
+		async (_case, text, fields, about) => {
+			const status = await ingest(shop, member, 'asked.geojson', text, fields);
+			expect(status).toMatchObject({ state: 'asking', sheet: null, question: { about } });
+			expect(await rows()).toEqual(nothing);
+			expect(await shop.stored()).toHaveLength(1);
+			await cancelIntake(shop, member, status.id);
 			expect(await shop.stored()).toEqual([]);
 		},
 	);

@@ -24,7 +24,7 @@ describe('the 48 states and the District of Columbia', () => {
 	it('have 107 line borders and 2 point touches as GeoJSON', async () => {
 		const read = await accepted(bytesOf(states));
 		expect(read.coverage.keys).toHaveLength(49);
-		expect(counted(read)).toEqual([107, 2, 0, 0]);
+		expect(counted(read)).toEqual([107, 2, 0, 0, 0]);
 		expect(coverageFaults(read.coverage)).toEqual([]);
 		expect(pairsOf(read).filter((pair) => pair.endsWith('point'))).toEqual([
 			'04-08 point',
@@ -39,7 +39,7 @@ describe('the 48 states and the District of Columbia', () => {
 		}));
 		const zip = writeShapefileZip({ features, prj: wgs84, name: 'states' });
 		const read = await accepted(zip);
-		expect(counted(read)).toEqual([107, 2, 0, 0]);
+		expect(counted(read)).toEqual([107, 2, 0, 0, 0]);
 		expect(pairsOf(read)).toEqual(pairsOf(await accepted(bytesOf(states))));
 	});
 
@@ -100,7 +100,9 @@ describe('the counties of the United States', () => {
 		// The library counts them as neighbours; a region without area has none here, and that is told.
 		const squeezed = ['06001-06075', '51013-51610', '51059-51610'];
 		expect([...theirs].filter((pair) => !ours.has(pair)).sort()).toEqual(squeezed);
-		expect([...ours].filter((pair) => !theirs.has(pair))).toEqual([]);
+		// Shared lines that cross leave a corner to San Joaquin and to Santa Clara county both, which no shared
+		// arc shows; GEOS (geos-wasm) finds the same common area of 2,600 m².
+		expect([...ours].filter((pair) => !theirs.has(pair))).toEqual(['06077-06085']);
 		const told = read.findings.find(({ code }) => code === 'touch-without-width');
 		for (const pair of squeezed) expect(told?.message).toContain(pair.replace('-', ' and '));
 		expect(coverageFaults(read.coverage)).toEqual([]);

@@ -118,7 +118,7 @@ export const hostileFormats: Record<string, Hostile> = {
 	'a table cut off': [() => text(`a,g\n1,"${wkt}"\n2,"${wkt.slice(0, -4)}`), 'file-truncated'],
 	'a quotation mark that never closes': [
 		() => text(`a,g\n1,"${wkt}"\n2,"${'x\n'.repeat(20_000_000)}`),
-		'file-truncated',
+		'too-large-unpacked',
 	],
 	'quotation marks without end': [
 		() => text(`a,g\n1,"${wkt}"\n2,${'"x'.repeat(10_000_000)}`),

@@ -15,7 +15,13 @@ export function fromPairs(
 
 /** Reads a graph in the DIMACS .col form from the fixtures. */
 export function fixtureGraph(name: string): EdgeList {
-	const text = readFileSync(new URL(`../fixtures/graphs/${name}.col`, import.meta.url), 'utf8');
+	return edgesOfCol(
+		readFileSync(new URL(`../fixtures/graphs/${name}.col`, import.meta.url), 'utf8'),
+	);
+}
+
+/** The graph that a file in the DIMACS .col form says. */
+export function edgesOfCol(text: string): EdgeList {
 	const lines = text.split('\n');
 	const regions = Number(lines.find((line) => line.startsWith('p '))?.split(/\s+/)[2]);
 	const pairs = lines

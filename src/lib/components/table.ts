@@ -31,13 +31,15 @@ export function ordered<Row>(
 	const column = columns.find(({ id }) => id === order?.id);
 	if (!column || !order) return rows;
 	const sign = order.down ? -1 : 1;
-	return [...rows].sort((one, other) => {
-		const a = column.value(one);
-		const b = column.value(other);
+	const values = rows.map(column.value);
+	const between = (one: number, other: number): number => {
+		const [a, b] = [values[one], values[other]];
 		if (a === null || b === null) return Number(a === null) - Number(b === null);
 		if (typeof a === 'number' && typeof b === 'number') return sign * (a - b);
 		return sign * collator.compare(String(a), String(b));
-	});
+	};
+	const places = Array.from(rows, (_, place) => place);
+	return places.sort(between).map((place) => rows[place]);
 }
 
 /** Rows of which some column holds every word of the query. */
@@ -45,14 +47,18 @@ export function filtered<Row>(
 	rows: readonly Row[],
 	columns: readonly Column<Row>[],
 	query: string,
+	texts: readonly string[] = query.trim() ? searchTexts(rows, columns) : [],
 ): readonly Row[] {
 	const words = query.toLocaleLowerCase().split(/\s+/).filter(Boolean);
 	if (!words.length) return rows;
-	return rows.filter((row) => {
-		const text = columns
+	return rows.filter((_, place) => words.every((word) => texts[place].includes(word)));
+}
+
+/** What each row is found by; worked out once for many queries. */
+export const searchTexts = <Row>(rows: readonly Row[], columns: readonly Column<Row>[]): string[] =>
+	rows.map((row) =>
+		columns
 			.map((column) => column.text?.(row) ?? column.value(row) ?? '')
 			.join(' ')
-			.toLocaleLowerCase();
-		return words.every((word) => text.includes(word));
-	});
-}
+			.toLocaleLowerCase(),
+	);

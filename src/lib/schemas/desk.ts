@@ -37,6 +37,15 @@ export interface DeskSheet {
 	rights: Action[];
 }
 
+/** A large sheet as its page is given it; regions and borders follow from `GET sheets/[sheet]/columns`. */
+export interface DeskSheetApart extends Omit<DeskSheet, 'regions' | 'borders'> {
+	regions: null;
+	borders: null;
+	borderCount: number;
+	/** as in `DeskRegions`; null where no column is chosen */
+	group: (string | null)[] | null;
+}
+
 export interface DeskBoundarySet {
 	id: string;
 	fileName: string;

@@ -48,7 +48,11 @@ export const sheetLayout = z.strictObject({
 	credits: z.string().max(1_000),
 });
 
-const handBorder = z.strictObject({ a: key, b: key, reason });
+const handBorder = z.strictObject({
+	...{ a: key, b: key, reason },
+	by: z.string().max(200).optional(),
+	at: z.string().max(40).optional(),
+});
 
 export const draftDocument = z.strictObject({
 	inks: z.union([z.int().min(1).max(64), z.literal('fewest')]),

@@ -51,3 +51,18 @@ export async function editionFileResponse(request: Request, file: EditionFile): 
 		},
 	});
 }
+
+/** A file that is made when it is asked for, to be kept by whoever asked. */
+export const fileResponse = (file: {
+	name: string;
+	mediaType: string;
+	bytes: Uint8Array;
+}): Response =>
+	new Response(file.bytes as Uint8Array<ArrayBuffer>, {
+		headers: {
+			'content-type': file.mediaType,
+			'content-length': String(file.bytes.byteLength),
+			'content-disposition': attachment(file.name),
+			'cache-control': 'private, no-store',
+		},
+	});

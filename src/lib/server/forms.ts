@@ -1,6 +1,8 @@
 import { error, fail, type ActionFailure } from '@sveltejs/kit';
 import { z } from 'zod';
 import { Forbidden } from './access/member.ts';
+import { FilesAway } from './files/store.ts';
+import { PoolBusy } from './jobs/pool.ts';
 import { Conflict, NotFound, Refused, TooMany, Unfit } from './services/outcomes.ts';
 
 /** What a form is told when it cannot be taken as it is. */
@@ -73,6 +75,9 @@ export async function attempt<T>(
 		if (problem instanceof Conflict || problem instanceof Unfit) {
 			const status = problem instanceof Conflict ? 409 : 422;
 			return { failure: fail(status, { message: problem.message, errors: {}, values }) };
+		}
+		if (problem instanceof FilesAway || problem instanceof PoolBusy) {
+			return { failure: fail(503, { message: problem.message, errors: {}, values }) };
 		}
 		if (problem instanceof NotFound) error(404, problem.message);
 		if (problem instanceof Forbidden) error(403, 'Your roles in this team do not include this.');

@@ -1,5 +1,6 @@
 import { error } from '@sveltejs/kit';
 import { Forbidden } from './access/member.ts';
+import { FilesAway } from './files/store.ts';
 import { PoolBusy, wasStopped } from './jobs/pool.ts';
 import { Conflict, NotFound, Refused, TooMany } from './services/outcomes.ts';
 
@@ -16,7 +17,7 @@ export async function forPage<T>(work: () => Promise<T>): Promise<T> {
 		if (problem instanceof Conflict) error(409, problem.message);
 		if (problem instanceof Refused) error(422, problem.message);
 		if (problem instanceof TooMany) error(429, problem.message);
-		if (problem instanceof PoolBusy) error(503, problem.message);
+		if (problem instanceof PoolBusy || problem instanceof FilesAway) error(503, problem.message);
 		if (wasStopped(problem)) error(503, 'It was stopped before it was done.');
 		throw problem;
 	}

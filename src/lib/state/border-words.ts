@@ -1,5 +1,5 @@
-import { length } from '$lib/components/format';
-import { borderKinds, isAcross, type BorderList } from '$lib/engines/borders/border-list';
+import { length } from '../components/format.ts';
+import { borderKinds, isAcross } from '../engines/borders/border-list.ts';
 import type { CountingRule, Standing } from '$lib/engines/borders/standing';
 
 /** Borders in words, the same in the table, beside a region and in what is pointed out. */
@@ -11,9 +11,6 @@ export const kindWords: Record<(typeof borderKinds)[number], string> = {
 	gap: 'across water',
 	hand: 'added by hand',
 };
-
-export const kindOf = ({ kind }: Pick<BorderList, 'kind'>, border: number): string =>
-	kindWords[borderKinds[kind[border]]];
 
 /** The kinds that people tell apart, as a choice. */
 export const kindChoices = [...new Set(Object.values(kindWords))];
@@ -29,12 +26,8 @@ export const standingWords: Record<Standing, string> = {
 };
 
 /** How long a shared line is or how wide a gap; a point touch has neither. */
-export const measureOf = ({ kind, metres }: BorderList, border: number): string =>
-	isAcross(kind[border])
-		? `${length(metres[border])} apart`
-		: metres[border]
-			? length(metres[border])
-			: 'none';
+export const measureOf = ({ kind, metres }: { kind: number; metres: number }): string =>
+	isAcross(kind) ? `${length(metres)} apart` : metres ? length(metres) : 'none';
 
 /** How wide a gap may be, as the rule says it. */
 export const waterWords = (waterKm: CountingRule['waterKm']): string =>

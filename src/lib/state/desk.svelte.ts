@@ -3,7 +3,7 @@ import {
 	bordersForSheet,
 	kindCode,
 	standingsForSheet,
-	type SheetBorderRules,
+	type ReasonedRules,
 } from '$lib/engines/borders';
 import type { ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
@@ -96,7 +96,7 @@ export class Desk {
 	#waterKm = $derived.by(() => this.draft.document.waterKm);
 	#struck = $derived.by(() => this.draft.document.struck);
 	#added = $derived.by(() => this.draft.document.added);
-	borderRules: SheetBorderRules = $derived({
+	borderRules: ReasonedRules = $derived({
 		pointTouches: this.#pointTouches,
 		leastMetres: this.#leastMetres,
 		waterKm: this.#waterKm,

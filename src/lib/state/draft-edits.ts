@@ -82,28 +82,47 @@ export const countWaterUpTo =
 	(draft: Draft): Draft => ({ ...draft, waterKm });
 
 type Pair = { a: string; b: string };
-const samePair = (one: Pair, other: Pair) =>
-	(one.a === other.a && one.b === other.b) || (one.a === other.b && one.b === other.a);
-const inOrder = (a: string, b: string): Pair => (a < b ? { a, b } : { a: b, b: a });
+const inOrder = ({ a, b }: Pair): Pair => (a < b ? { a, b } : { a: b, b: a });
+const nameOf = (pair: Pair): string => JSON.stringify(Object.values(inOrder(pair)));
+const without = <P extends Pair>(list: readonly P[], names: ReadonlySet<string>): P[] =>
+	list.filter((pair) => !names.has(nameOf(pair)));
 
-/** Strikes a border out: these two may share an ink. A border added by hand is simply taken back. */
+/** Who decides by hand, as far as it is known before the server signs it. */
+const signature = (by?: string) => ({
+	...(by ? { by } : {}),
+	at: new Date().toISOString().slice(0, 10),
+});
+
+/** Strikes borders out: these pairs may share an ink. One that was added by hand is simply taken back. */
 export const strike =
-	(a: string, b: string, reason: string) =>
+	(pairs: readonly Pair[], reason: string, by?: string) =>
 	(draft: Draft): Draft => {
-		const pair = inOrder(a, b);
-		if (draft.added.some((border) => samePair(border, pair)))
-			return { ...draft, added: draft.added.filter((border) => !samePair(border, pair)) };
-		return { ...draft, struck: [...draft.struck, { ...pair, reason }] };
+		const added = new Set(draft.added.map(nameOf));
+		const names = new Set(pairs.map(nameOf));
+		const known = new Set(draft.struck.map(nameOf));
+		const out = pairs
+			.filter((pair) => !added.has(nameOf(pair)) && !known.has(nameOf(pair)))
+			.map((pair) => ({ ...inOrder(pair), reason, ...signature(by) }));
+		return { ...draft, added: without(draft.added, names), struck: [...draft.struck, ...out] };
 	};
 
-export const restoreBorder =
-	(a: string, b: string) =>
-	(draft: Draft): Draft => ({
-		...draft,
-		struck: draft.struck.filter((border) => !samePair(border, { a, b })),
-	});
+/** Takes back what was decided by hand about these pairs: struck out or added, they are as found. */
+export const takeBack =
+	(pairs: readonly Pair[]) =>
+	(draft: Draft): Draft => {
+		const names = new Set(pairs.map(nameOf));
+		return { ...draft, struck: without(draft.struck, names), added: without(draft.added, names) };
+	};
 
-/** Adds a border by hand: these two must differ though they do not touch. */
-export const addBorder =
-	(a: string, b: string, reason: string) =>
-	(draft: Draft): Draft => ({ ...draft, added: [...draft.added, { ...inOrder(a, b), reason }] });
+/** Adds borders by hand: these pairs must differ though they do not touch, or not enough to count. */
+export const addBorders =
+	(pairs: readonly Pair[], reason: string, by?: string) =>
+	(draft: Draft): Draft => {
+		const names = new Set(pairs.map(nameOf));
+		const put = pairs.map((pair) => ({ ...inOrder(pair), reason, ...signature(by) }));
+		return {
+			...draft,
+			struck: without(draft.struck, names),
+			added: [...without(draft.added, names), ...put],
+		};
+	};

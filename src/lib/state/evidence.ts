@@ -18,6 +18,8 @@ export interface Evidence {
 	alone: boolean;
 	/** numbers into the sheet's border list */
 	borders: readonly number[];
+	/** path on the drawn sheet that is traced, '' for none */
+	outline: string;
 	/** number of the finding whose place is marked */
 	finding: number | null;
 }
@@ -30,6 +32,7 @@ const nothing: Evidence = {
 	ring: false,
 	alone: false,
 	borders: [],
+	outline: '',
 	finding: null,
 };
 

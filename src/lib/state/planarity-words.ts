@@ -1,18 +1,25 @@
 import { borderKinds, type BorderKind, type BorderList } from '$lib/engines/borders/border-list';
 import type { CrossedBorders } from '$lib/engines/borders/planarity';
 
-/** The borders on the ways of a witness that no file's line makes, which a cartographer may take back. */
+/** The borders of a list that lie on the ways of a witness, by number. */
+export function bordersOn(
+	paths: readonly (readonly number[])[],
+	{ a, b }: Pick<BorderList, 'a' | 'b'>,
+): number[] {
+	const name = (one: number, other: number) => `${Math.min(one, other)} ${Math.max(one, other)}`;
+	const on = new Set(paths.flatMap((path) => path.slice(1).map((to, i) => name(path[i], to))));
+	return [...a.keys()].filter((border) => on.has(name(a[border], b[border])));
+}
+
+/** Those among them that no line of the file makes, which a cartographer may take back. */
 export function loneLinks(
-	{ paths }: CrossedBorders,
-	{ a, b, kind }: BorderList,
+	{ paths }: Pick<CrossedBorders, 'paths'>,
+	list: BorderList,
 ): { a: number; b: number; kind: BorderKind }[] {
-	const on = new Map<string, true>();
-	for (const path of paths)
-		for (let i = 1; i < path.length; i++)
-			on.set(`${Math.min(path[i - 1], path[i])} ${Math.max(path[i - 1], path[i])}`, true);
-	return Array.from(a, (from, i) => ({ a: from, b: b[i], kind: borderKinds[kind[i]] })).filter(
-		(link) => link.kind !== 'line' && on.has(`${link.a} ${link.b}`),
-	);
+	const { a, b, kind } = list;
+	return bordersOn(paths, list)
+		.map((i) => ({ a: a[i], b: b[i], kind: borderKinds[kind[i]] }))
+		.filter((link) => link.kind !== 'line');
 }
 
 const because: Record<BorderKind, string> = {

@@ -48,8 +48,8 @@ const borders: Record<BorderKind, string> = {
 	line: 'by line',
 	point: 'by point',
 	water: 'across water',
+	gap: 'across water',
 	hand: 'by hand',
-	gap: 'across a gap',
 };
 
 export function sideWords(side: PairChange['before']): string {

@@ -11,8 +11,14 @@ export { crossedBorders, type CrossedBorders } from './planarity.ts';
 export { surveyOf, type BordersOptions, type Survey } from './survey.ts';
 export type { Overlap } from './overlap.ts';
 export { bordersForSheet, standingsForSheet, type SheetBorderRules } from './for-sheet.ts';
+export {
+	sheetBorderRows,
+	type ReasonedPair,
+	type ReasonedRules,
+	type SheetBorderRow,
+} from './sheet-rows.ts';
 export { standingNames, standingUnder, type CountingRule, type Standing } from './standing.ts';
-export { withGaps, type Gaps } from './with-gaps.ts';
+export { withGaps, type GapList } from './with-gaps.ts';
 export { gapsWithin, type WaterGaps } from './gaps-within.ts';
 export {
 	compareBorders,

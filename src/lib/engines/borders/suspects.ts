@@ -1,7 +1,7 @@
 import type { Coverage } from '../geometry/coverage.ts';
 import { boxOf, ringPoints } from '../geometry/coverage-rings.ts';
-import { crossing } from '../geometry/crossing.ts';
 import type { SegmentBlocks } from '../geometry/segment-blocks.ts';
+import { eachCrossing } from './crossings.ts';
 import type { Meeting } from './touches.ts';
 
 /** Pairs that may overlap, and places where a region's own outline crosses itself. */
@@ -27,7 +27,7 @@ export interface SelfCrossing {
  */
 export function suspects(coverage: Coverage, blocks: SegmentBlocks, places: Meeting[]): Suspects {
 	const found: Suspects = { pairs: new Map(), doubtful: new Set(), crossings: [] };
-	findCrossings(coverage, blocks, found);
+	noteCrossings(coverage, blocks, found);
 	for (const place of places) {
 		if (place.arcs.length > 2 && disagrees(coverage, place)) {
 			const around = place.arcs.flatMap((arc) => [coverage.arcLeft[arc], coverage.arcRight[arc]]);
@@ -65,22 +65,19 @@ function pairUp(these: number[], those: number[], coverage: Coverage, found: Sus
 	}
 }
 
-function findCrossings(coverage: Coverage, blocks: SegmentBlocks, found: Suspects): void {
-	const { arcLeft, arcRight, arcPoints: p } = coverage;
+/** Regions on both lines cross themselves there; each is told once. */
+function noteCrossings(coverage: Coverage, blocks: SegmentBlocks, found: Suspects): void {
+	const { arcLeft, arcRight } = coverage;
 	const crossed = new Set<number>();
-	const isUnmatched = (arc: number) => arcLeft[arc] < 0 || arcRight[arc] < 0;
-	blocks.eachPair(isUnmatched, (arc, i, other, j) => {
-		const shares = crossing(p, i, p, j);
-		if (!shares) return;
+	eachCrossing(coverage, blocks, (arc, other, at) => {
 		const mine = [arcLeft[arc], arcRight[arc]];
 		const theirs = [arcLeft[other], arcRight[other]];
 		pairUp(mine, theirs, coverage, found);
-		const own = mine.find((region) => region >= 0 && theirs.includes(region));
-		if (own === undefined || crossed.has(own)) return;
-		crossed.add(own);
-		const x = p[2 * i] + shares[0] * (p[2 * i + 2] - p[2 * i]);
-		const y = p[2 * i + 1] + shares[0] * (p[2 * i + 3] - p[2 * i + 1]);
-		found.crossings.push({ region: own, at: [x, y] });
+		for (const region of mine) {
+			if (region < 0 || crossed.has(region) || !theirs.includes(region)) continue;
+			crossed.add(region);
+			found.crossings.push({ region, at });
+		}
 	});
 }
 

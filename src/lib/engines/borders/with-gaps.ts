@@ -2,13 +2,13 @@ import { kindCode, type BorderList } from './border-list.ts';
 import { PairTally } from './pair-tally.ts';
 
 /** Gaps as they were measured: one entry a pair. */
-export type Gaps = Pick<BorderList, 'a' | 'b' | 'metres' | 'at'>;
+export type GapList = Pick<BorderList, 'a' | 'b' | 'metres' | 'at'>;
 
 /**
  * The borders of a coverage with the gaps that were measured after it was read, in order; a pair that
  * has a border keeps it as it is.
  */
-export function withGaps(regions: number, borders: BorderList, gaps: Gaps): BorderList {
+export function withGaps(regions: number, borders: BorderList, gaps: GapList): BorderList {
 	if (gaps.a.length === 0) return borders;
 	const tally = new PairTally(regions);
 	const { a, b, kind, metres, at } = borders;

@@ -1,11 +1,11 @@
 import Flatbush from 'flatbush';
 import type { Coverage } from '../geometry/coverage.ts';
 import { boxOf } from '../geometry/coverage-rings.ts';
+import { insidePlace } from '../geometry/inside-place.ts';
 import { doubleArea, sideOfRing } from '../geometry/rings.ts';
 import { SegmentBlocks } from '../geometry/segment-blocks.ts';
 import { traceRings, type ArcRing } from './arc-rings.ts';
 import type { Arcs } from './arcs.ts';
-import { insidePlace } from '../geometry/inside-place.ts';
 import { ringKm2 } from './ring-area.ts';
 import { pointsOf } from './traced-ring.ts';
 

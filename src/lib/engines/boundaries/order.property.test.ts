@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import type { Feature, Polygon } from 'geojson';
+import geodesic from 'geographiclib-geodesic';
 import { describe, expect, it } from 'vitest';
 import {
 	acceptedFeatures,
@@ -35,6 +36,17 @@ const grids = fc.record({
 	shakes: fc.array(fc.double({ min: -1, max: 1, noNaN: true }), { minLength: 72, maxLength: 72 }),
 	turn: fc.integer({ min: 1, max: 3 }),
 	seed: fc.integer(),
+});
+
+const cuts = fc.array(fc.double({ min: 0.01, max: 0.99, noNaN: true }), {
+	minLength: 5,
+	maxLength: 40,
+});
+
+const placings = fc.record({
+	east: fc.double({ min: -150, max: 150, noNaN: true }),
+	north: fc.double({ min: -75, max: 75, noNaN: true }),
+	scale: fc.double({ min: 0.2, max: 30, noNaN: true }),
 });
 
 async function same(cells: Feature<Polygon>[], changed: Feature<Polygon>[], digits = 6) {
@@ -94,6 +106,42 @@ describe('pairs and metres are a matter of the map alone', () => {
 			}),
 			runs,
 		));
+	it('not of any number of corners added along any edges', () =>
+		fc.assert(
+			fc.asyncProperty(grids, cuts, async ({ size, shakes }, shares) => {
+				const cells = shakenGrid(size, (i) => shakes[i]);
+				let next = 0;
+				const cut = withRings(cells, (ring) =>
+					ring.flatMap((p, k) => {
+						const count = Math.floor(shares[next++ % shares.length] * 4);
+						const along = Array.from({ length: count }, () => shares[next++ % shares.length]);
+						const q = ring[(k + 1) % ring.length];
+						return [p, ...along.sort((a, b) => a - b).map((share) => between(p, q, share))];
+					}),
+				);
+				await same(cells, cut, 3);
+			}),
+			runs,
+		));
+	it('and the metres are those of the geodesics, wherever the map lies and however large it is', () =>
+		fc.assert(
+			fc.asyncProperty(grids, placings, async ({ size, shakes }, { east, north, scale }) => {
+				const cells = withRings(
+					shakenGrid(size, (i) => shakes[i]),
+					(ring) => ring.map(([x, y]) => [x * scale + east, y * scale + north]),
+				);
+				const there = await acceptedFeatures(cells);
+				const here = await acceptedFeatures(shakenGrid(size, (i) => shakes[i]));
+				expect(pairsOf(there)).toEqual(pairsOf(here));
+				const metres = metresOf(there);
+				for (const [pair, [p, q]] of sharedEdges(cells)) {
+					// C. F. F. Karney's library, which the engine asks only above 10 km
+					const { s12 } = geodesic.Geodesic.WGS84.Inverse(p[1], p[0], q[1], q[0]);
+					expect(Math.abs(metres[pair] / (s12 as number) - 1)).toBeLessThan(1e-6);
+				}
+			}),
+			runs,
+		));
 	it('not of the place east or west', () =>
 		fc.assert(
 			fc.asyncProperty(grids, async ({ size, shakes }) => {
@@ -109,4 +157,24 @@ describe('pairs and metres are a matter of the map alone', () => {
 		));
 });
 
-const middle = (p: number[], q: number[]) => [(p[0] + q[0]) / 2, (p[1] + q[1]) / 2];
+const between = (p: number[], q: number[], share: number) => [
+	p[0] + share * (q[0] - p[0]),
+	p[1] + share * (q[1] - p[1]),
+];
+const middle = (p: number[], q: number[]) => between(p, q, 0.5);
+
+/** The edge that each two neighbouring cells have in common, by the names of both. */
+function sharedEdges(cells: Feature<Polygon>[]): Map<string, [number[], number[]]> {
+	const owners = new Map<string, string>();
+	const shared = new Map<string, [number[], number[]]>();
+	for (const cell of cells) {
+		const [ring] = cell.geometry.coordinates;
+		ring.slice(1).forEach((q, i) => {
+			const code = [ring[i], q].map(String).sort().join(' ');
+			const other = owners.get(code);
+			if (other) shared.set([other, String(cell.id)].sort().join('-'), [ring[i], q]);
+			else owners.set(code, String(cell.id));
+		});
+	}
+	return shared;
+}

@@ -1,7 +1,7 @@
 import { faultFindings } from './fault-findings.ts';
 import { placeLongitudes } from './longitudes.ts';
 import { matchLayer } from './match-layer.ts';
-import { mendLayer } from './mends/mend-layer.ts';
+import { aboutKnown, mendLayer } from './mends/mend-layer.ts';
 import {
 	defaultLimits,
 	noiseMetres,
@@ -80,21 +80,21 @@ async function assemble(
 	const mended = options.mends?.length ? await mendLayer(read, options, stage) : null;
 	const { naming, matched } = mended ?? read;
 	const { coverage, survey } = matched;
+	const before = [
+		...layer.findings,
+		...naming.findings,
+		...read.findings,
+		...crossingFinding(crossing, naming),
+		...ringFindings(read.repairs, naming, layer.format),
+		...read.matched.findings,
+	];
+	const told = mended ? [...aboutKnown(before, naming.keys), ...mended.findings] : before;
 	return {
 		status: 'accepted',
 		coverage,
 		borders: survey.borders,
 		attributes: layer.table.take(naming.featureOf),
-		findings: [
-			...layer.findings,
-			...naming.findings,
-			...read.findings,
-			...crossingFinding(crossing, naming),
-			...ringFindings(read.repairs, naming, layer.format),
-			...read.matched.findings,
-			...(mended?.findings ?? []),
-			...faultFindings(matched, options),
-		],
+		findings: [...told, ...faultFindings(matched, options)],
 		source: {
 			format: layer.format,
 			layer: layer.layer,

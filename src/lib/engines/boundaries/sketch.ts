@@ -4,8 +4,8 @@ import type { RawLayer } from './raw-layer.ts';
 const mostPoints = 6000;
 /** of the points of a large file, so many are looked at */
 const mostSampled = 300_000;
-/** of the longer side of the map; what is smaller cannot be seen */
-const leastShare = 1 / 250;
+/** of the longer side of the map; what is smaller cannot be seen, and less is drawn where that is too much */
+const leastShare = 1 / 2000;
 
 /**
  * A rough drawing of the outlines as they lie, in their own coordinates: points nearer to the one before
@@ -19,7 +19,7 @@ export function sketchOf(layer: RawLayer): Sketch | null {
 	const side = Math.max(box[2] - box[0], box[3] - box[1]);
 	const step = Math.max(1, Math.floor(layer.points.length / 2 / mostSampled));
 	const places = decimals(side);
-	for (let least = side * leastShare; ; least *= 1.5) {
+	for (let least = side * leastShare; ; least *= 1.6) {
 		const drawn = thinned(layer, least, step, places);
 		if (drawn?.lines.length) return { box, ...drawn };
 		if (drawn) return { box, ...someRings(layer, places) };

@@ -53,7 +53,8 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	const struck = carryHandBorders(ground, draft.struck, 'struck', hasBorder);
 	const added = carryHandBorders(ground, draft.added, 'added', null);
 	const { pointTouches, leastMetres, waterKm } = draft;
-	const rules = { pointTouches, leastMetres, waterKm, struck: struck.list, added: added.list };
+	const hand = { struck: struck.list, added: added.list };
+	const rules = { pointTouches, leastMetres, waterKm, ...hand };
 	const mustDiffer = fresh.borders
 		? pairTest(bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules }), regions)
 		: null;
@@ -148,7 +149,7 @@ function carryHandBorders(
 		subject: `The border of ${quoted(a)} and ${quoted(b)}, ${what} by hand,`,
 	});
 	const { pairs, rows } = carryPairs(ground, borders, ({ a, b }) => [a, b], said, choose);
-	return { list: pairs.map(({ rule, a, b }) => ({ a, b, reason: rule.reason })), rows };
+	return { list: pairs.map(({ rule, a, b }) => ({ ...rule, a, b })), rows };
 }
 
 function carryLayout(layout: Draft['layout'], columns: readonly string[] | undefined) {

@@ -1,5 +1,5 @@
 import { canonicalJson } from './canonical-json.ts';
-import { wholeDraft } from './draft.ts';
+import { wholeDraft, type HandBorder } from './draft.ts';
 import type { EditionContent } from './edition-content.ts';
 
 /** What is compared: an edition, or a draft with the colouring it has now. */
@@ -53,7 +53,7 @@ function regionChanges(before: Comparable, after: Comparable): InkChange[] {
 	}));
 }
 
-/** Who set a lock and when is no part of the rule. */
+/** Who set a lock, or struck a border, and when is no part of the rule. */
 function rulesOf({ draft }: Comparable) {
 	const { inks, locks, forbidden, alike, apart, struck, added } = draft;
 	const { pointTouches, leastMetres, waterKm } = wholeDraft(draft);
@@ -67,10 +67,12 @@ function rulesOf({ draft }: Comparable) {
 		...listed('forbidden', forbidden),
 		...listed('alike', alike),
 		...listed('apart', apart),
-		...listed('struck', struck),
-		...listed('added', added),
+		...listed('struck', struck.map(unsigned)),
+		...listed('added', added.map(unsigned)),
 	};
 }
+
+const unsigned = ({ a, b, reason }: HandBorder) => ({ a, b, reason });
 
 /** A list as members named by what they say, so that its order does not count. */
 function listed(name: string, entries: unknown[]): Record<string, unknown> {

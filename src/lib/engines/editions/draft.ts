@@ -20,11 +20,20 @@ export interface Draft {
 	/** pairs across water count up to this gap, in kilometres; 0: none; null: as the file was read */
 	waterKm: number | null;
 	/** borders struck out by hand, with the reason */
-	struck: { a: string; b: string; reason: string }[];
+	struck: HandBorder[];
 	/** borders added by hand, with the reason */
-	added: { a: string; b: string; reason: string }[];
+	added: HandBorder[];
 	seed: number;
 	layout: SheetLayout;
+}
+
+/** A pair of regions decided by hand: why, by whom and when. */
+export interface HandBorder {
+	a: string;
+	b: string;
+	reason: string;
+	by?: string;
+	at?: string;
 }
 
 /** What a document says that was written before these were asked. */

@@ -1,6 +1,7 @@
 /** A sheet or an edition as files: SVG, GeoJSON, CSV. Bytes out, the same for the same input. */
 export { exportSvg, type FaceFiles } from './svg.ts';
 export { exportGeoJson } from './geojson.ts';
+export { exportBordersCol, exportBordersCsv, type BordersOut } from './borders.ts';
 export { csvField, exportCsv } from './csv.ts';
 export { subsetFont } from './subset-font.ts';
 export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';

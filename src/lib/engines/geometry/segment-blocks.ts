@@ -139,7 +139,7 @@ function boxOfRun(p: Float64Array, first: number, end: number, box: Float64Array
 }
 
 /** Whether a segment lies wholly to one side of a box. */
-function isApart(
+export function isApart(
 	p: Float64Array,
 	i: number,
 	west: number,

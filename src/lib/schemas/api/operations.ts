@@ -78,6 +78,13 @@ export const operations = {
 		...{ method: 'GET', path: `${sheet}/borders`, scope: 'sheets:read', status: 200 },
 		...{ summary: 'The borders that bind on a sheet.', answer: sheets.sheetBorders },
 	},
+	readBorderFile: {
+		...{ method: 'GET', path: `${sheet}/borders/{file}`, scope: 'sheets:read', status: 200 },
+		summary:
+			'borders.csv: every pair with its standing and reasons; borders.col: the pairs that count, in the DIMACS form.',
+		answer: ['text/csv', 'text/plain'],
+		refusals: [503],
+	},
 	readColouring: {
 		...{ method: 'GET', path: `${sheet}/colouring`, scope: 'sheets:read', status: 200 },
 		...{

@@ -2,6 +2,7 @@ import type { RequestEvent, RequestHandler } from '@sveltejs/kit';
 import type { Operation } from '../../schemas/api/operations.ts';
 import { Forbidden } from '../access/member.ts';
 import { UploadFault } from '../files/multipart.ts';
+import { FilesAway } from '../files/store.ts';
 import { PoolBusy, wasStopped } from '../jobs/pool.ts';
 import { log } from '../log.ts';
 import { limits, use } from '../services/limits.service.ts';
@@ -81,6 +82,10 @@ function faultOf(problem: unknown, requestId: string): ApiFault {
 	if (problem instanceof Refused) return new ApiFault(422, 'refused', problem.message);
 	if (problem instanceof PoolBusy) {
 		return new ApiFault(503, 'busy', problem.message, undefined, { 'retry-after': '5' });
+	}
+	if (problem instanceof FilesAway) {
+		log.error({ request: requestId, detail: problem.detail }, 'the store of files is away');
+		return new ApiFault(503, 'files-away', problem.message, undefined, { 'retry-after': '30' });
 	}
 	if (wasStopped(problem)) {
 		return new ApiFault(503, 'took-too-long', 'the computation was stopped; ask for less effort');

@@ -1,10 +1,11 @@
-import { createHash, randomUUID } from 'node:crypto';
+import { createHash } from 'node:crypto';
 import { createReadStream, createWriteStream } from 'node:fs';
-import { access, mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
+import { access, mkdir, open, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { Transform, type Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
-import { FileMissing, requireDigest, type FileStore, type Received } from './store.ts';
+import { Spool } from './spool.ts';
+import { FileMissing, isDigest, requireDigest, type FileStore, type Received } from './store.ts';
 
 /** The store as a folder on disk: `incoming/` while bytes arrive, then `ab/abcd...` by digest. */
 export function folderStore(root: string): FileStore {
@@ -21,15 +22,17 @@ export function folderStore(root: string): FileStore {
 			await sizeOf(path, digest);
 			return { path, release: async () => undefined };
 		},
-		has: (digest) =>
-			access(place(digest)).then(
-				() => true,
-				() => false,
-			),
-		delete: (digest) => rm(place(digest), { force: true }),
-		tidy: () => tidy(join(root, 'incoming')),
+		has: async (digest) => isDigest(digest) && isThere(place(digest)),
+		delete: async (digest) => rm(place(digest), { force: true }),
+		tidy: () => new Spool(join(root, 'incoming')).tidy(),
 	};
 }
+
+const isThere = (path: string): Promise<boolean> =>
+	access(path).then(
+		() => true,
+		() => false,
+	);
 
 async function sizeOf(path: string, digest: string): Promise<number> {
 	try {
@@ -44,8 +47,8 @@ async function receive(
 	place: (digest: string) => string,
 	source: Readable,
 ): Promise<Received> {
-	const path = join(root, 'incoming', randomUUID());
-	await mkdir(dirname(path), { recursive: true, mode: 0o700 });
+	const spool = new Spool(join(root, 'incoming'));
+	const path = await spool.place();
 	const hash = createHash('sha256');
 	let bytes = 0;
 	const digesting = new Transform({
@@ -55,7 +58,7 @@ async function receive(
 			done(null, chunk);
 		},
 	});
-	const discard = () => rm(path, { force: true });
+	const discard = () => spool.remove(path);
 	try {
 		await pipeline(source, digesting, createWriteStream(path, { mode: 0o600 }));
 	} catch (error) {
@@ -80,16 +83,5 @@ async function flush(path: string): Promise<void> {
 		await handle.sync();
 	} finally {
 		await handle.close();
-	}
-}
-
-const dayMilliseconds = 86_400_000;
-
-async function tidy(incoming: string): Promise<void> {
-	await mkdir(incoming, { recursive: true, mode: 0o700 });
-	for (const name of await readdir(incoming)) {
-		const path = join(incoming, name);
-		const { mtimeMs } = await stat(path);
-		if (mtimeMs < Date.now() - dayMilliseconds) await rm(path, { force: true });
 	}
 }

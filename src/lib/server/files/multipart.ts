@@ -2,13 +2,14 @@ import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { ReadableStream } from 'node:stream/web';
 import Busboy, { type BusboyInstance } from '@fastify/busboy';
-import type { FileStore, Received } from './store.ts';
+import { log } from '../log.ts';
+import { FilesAway, type FileStore, type Received } from './store.ts';
 
 /** Why a form with a file was not taken; `status` is the HTTP status that says so. */
 export class UploadFault extends Error {
 	constructor(
-		readonly status: 400 | 413 | 415,
-		readonly code: 'malformed' | 'file-missing' | 'too-large' | 'not-multipart',
+		readonly status: 400 | 413 | 415 | 503,
+		readonly code: 'malformed' | 'file-missing' | 'too-large' | 'not-multipart' | 'files-away',
 		message: string,
 	) {
 		super(message);
@@ -71,6 +72,29 @@ function parser(type: string, maxBytes: number): BusboyInstance {
 	}
 }
 
+/** A promise for a fault that may come; a parser whose file goes nowhere any more never ends by itself. */
+function rejection(): { promise: Promise<never>; reject: (problem: Error) => void } {
+	let reject: (problem: Error) => void = unheard;
+	const promise = new Promise<never>((_, fail) => (reject = fail));
+	promise.catch(unheard);
+	return { promise, reject };
+}
+
+/** Whether it was the store that failed: a service away, a disk full. */
+const isOfStore = (problem: unknown): problem is Error =>
+	problem instanceof FilesAway || (problem instanceof Error && 'syscall' in problem);
+
+function faultOf(error: unknown): Error {
+	if (error instanceof UploadFault) return error;
+	if (error instanceof FilesAway) return awayFault(error);
+	return isOfStore(error) ? error : malformed('the upload broke off');
+}
+
+const awayFault = ({ message, detail }: FilesAway) => {
+	log.error({ detail }, 'the store of files is away');
+	return new UploadFault(503, 'files-away', message);
+};
+
 const malformed = (message: string) => new UploadFault(400, 'malformed', message);
 
 /** The first fault of a form rejects the pipeline; those that follow from it must not end the process. */
@@ -84,6 +108,7 @@ async function collect(
 ): Promise<ReceivedForm> {
 	const fields: Record<string, string> = {};
 	let arriving: { stream: Readable; received: Promise<Received>; name: string } | undefined;
+	const failed = rejection();
 	busboy.on('error', unheard);
 	source.on('error', unheard);
 	busboy.on('field', (name, value) => {
@@ -94,13 +119,19 @@ async function collect(
 		stream.on('error', unheard);
 		stream.once('limit', () => source.destroy(tooLarge(maxBytes)));
 		const received = store.receive(stream);
-		received.catch(unheard); // looked at below, once the whole form is in
+		// looked at below, once the whole form is in; but nobody goes on sending to a store that has failed
+		received.catch((problem: unknown) => {
+			if (isOfStore(problem)) failed.reject(problem);
+		});
 		arriving = { stream, received, name: cleanFileName(name) };
 	});
+	const parsed = pipeline(source, busboy);
+	parsed.catch(unheard);
 	try {
-		await pipeline(source, busboy);
+		await Promise.race([parsed, failed.promise]);
 	} catch (error) {
-		const fault = error instanceof UploadFault ? error : malformed('the upload broke off');
+		const fault = faultOf(error);
+		source.destroy();
 		arriving?.stream.destroy(fault);
 		await arriving?.received.then(
 			(file) => file.discard(),
@@ -108,7 +139,9 @@ async function collect(
 		);
 		throw fault === error ? fault : Object.assign(fault, { cause: error });
 	}
-	const file = await arriving?.received;
+	const file = await arriving?.received.catch((problem: unknown) => {
+		throw isOfStore(problem) ? faultOf(problem) : problem;
+	});
 	if (!file || !arriving) throw new UploadFault(400, 'file-missing', 'no file was sent');
 	return { fields, file, fileName: arriving.name };
 }

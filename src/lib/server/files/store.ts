@@ -38,8 +38,24 @@ export class FileMissing extends Error {
 	}
 }
 
+/** The service that keeps the files cannot be reached, or refuses; `detail` says how. */
+export class FilesAway extends Error {
+	constructor(readonly detail: string) {
+		super('The store of files cannot be reached just now. Nothing was kept; try again in a while.');
+	}
+
+	/** Of a fault the name and the message are told, never the request: it carries a signature. */
+	static because(problem: unknown): FilesAway {
+		if (problem instanceof FilesAway) return problem;
+		const told = problem instanceof Error ? `${problem.name}: ${problem.message}` : 'unknown';
+		return new FilesAway(told);
+	}
+}
+
+export const isDigest = (text: string): boolean => /^[0-9a-f]{64}$/.test(text);
+
 /** Digests go into paths: nothing else may. */
 export function requireDigest(digest: string): string {
-	if (!/^[0-9a-f]{64}$/.test(digest)) throw new FileMissing(digest);
+	if (!isDigest(digest)) throw new FileMissing(digest);
 	return digest;
 }

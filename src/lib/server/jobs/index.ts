@@ -68,6 +68,6 @@ async function takeJobs<N extends JobName>(
 }
 
 const wake = (shop: Workshop) =>
-	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop), wakeSilentRecuts(shop)]).catch((error: unknown) =>
-		log.warn({ error: String(error) }, 'could not look for work left lying'),
+	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop), wakeSilentRecuts(shop)]).catch(
+		(error: unknown) => log.warn({ error: String(error) }, 'could not look for work left lying'),
 	);

@@ -1,6 +1,5 @@
 import {
 	encodeCoverage,
-	piecesOf,
 	type BoundariesResult,
 	type BoundaryOptions,
 	type Coverage,
@@ -10,9 +9,10 @@ import {
 } from '../../engines/boundaries/index.ts';
 import { borderKinds, type BorderList } from '../../engines/borders/index.ts';
 import type { SourceNote } from '../../schemas/desk.ts';
+import type { PieceColumns } from '../../schemas/pieces.ts';
 import type { BoundaryColumns } from '../repositories/boundaries.repository.ts';
-import type { PieceColumns } from '../repositories/pieces.repository.ts';
 import { packedLevels, type PackedLevel } from './display-levels.work.ts';
+import { pieceColumns } from './pieces.work.ts';
 import { planarityOf, type PlanarityNote } from './planarity.work.ts';
 import type { KnownAnswer } from './read-answered.ts';
 
@@ -89,19 +89,6 @@ const attributesJson = (
 		'\\u0000',
 		'',
 	);
-
-function pieceColumns(coverage: Coverage): PieceColumns {
-	const pieces = piecesOf(coverage);
-	return {
-		region: pieces.map(({ region }) => region),
-		part: pieces.map(({ part }) => part),
-		kind: pieces.map(({ kind }) => kind),
-		areaKm2: pieces.map(({ areaKm2 }) => areaKm2),
-		lon: pieces.map(({ at }) => at[0]),
-		lat: pieces.map(({ at }) => at[1]),
-		within: pieces.map(({ within }) => within),
-	};
-}
 
 function borderColumns({ a, b, kind, metres, at }: BorderList): BoundaryColumns['borders'] {
 	return {

@@ -47,8 +47,7 @@ export interface CarriedOver {
 /** Everything that was decided, on the new regions, with a line for whatever follows and does not. */
 export function carryOver(match: RegionMatch, standing: Standing, fresh: Fresh): CarriedOver {
 	const draft = carryDraft(standing.draft, match, fresh);
-	const territories =
-		standing.territories && carryTerritories(standing.territories, match, fresh);
+	const territories = standing.territories && carryTerritories(standing.territories, match, fresh);
 	const measures = standing.measures.map((measure) => carryMeasure(measure, match));
 	return {
 		draft: draft.draft,

@@ -9,8 +9,9 @@ import type { Task } from './task-port.ts';
 export interface CarryInput {
 	matching: RegionMatch;
 	decisions: RecutDecision[];
-	/** borders of the boundaries that stand */
+	/** borders as they were read, of the boundaries that stand and of the new ones */
 	before: BorderList;
+	after: BorderList;
 	standing: Standing;
 	fresh: Fresh;
 }
@@ -22,13 +23,13 @@ export type CarryOutcome =
 
 /** Corrects a matching by what people decided, and carries everything over by it. */
 export function carryRecut({ input }: Task<CarryInput>): CarryOutcome {
-	const { matching, decisions, before, standing, fresh } = input;
+	const { matching, decisions, before, after, standing, fresh } = input;
 	const result = decided(matching, decisions);
 	if (result.status === 'refused') return result;
 	const { match } = result;
 	return {
 		status: 'carried',
 		...carryOver(match, standing, fresh),
-		change: { ...regionsOf(match), pairs: pairChanges(match, before, fresh.borders) },
+		change: { ...regionsOf(match), pairs: pairChanges(match, before, after) },
 	};
 }

@@ -32,7 +32,9 @@ export const changeOf = (
 export function regionsOf(
 	match: RegionMatch,
 ): Pick<RecutChange, 'regions' | 'counts' | 'groups' | 'groupsLeftOut'> {
-	const counts = Object.fromEntries(outcomes.map((outcome) => [outcome, 0])) as RecutChange['counts'];
+	const counts = Object.fromEntries(
+		outcomes.map((outcome) => [outcome, 0]),
+	) as RecutChange['counts'];
 	for (const { outcome, before, after } of match.groups) {
 		counts[outcome] += outcome === 'new' ? after.length : before.length;
 	}

@@ -1,5 +1,4 @@
 import { sql } from 'kysely';
-import type { MendOffer } from '../../engines/boundaries/index.ts';
 import type { Db } from '../database/connection.ts';
 import type { NewRow, Row } from '../database/schema.ts';
 
@@ -29,7 +28,7 @@ export interface BoundaryColumns {
 		message: string;
 		regions: string[];
 		at: [number, number] | null;
-		offers?: MendOffer[];
+		offers?: object[];
 		toleranceMetres?: number;
 	}[];
 }

@@ -195,6 +195,17 @@ export const findDraft = (db: Db, sheetId: string, revision: number) =>
 export type DraftRow = NonNullable<Awaited<ReturnType<typeof findDraft>>>;
 export type SheetRecord = Row<'sheets'>;
 
+/** Every boundary set that a draft of a sheet was ever about. */
+export async function setsOfDrafts(db: Db, sheetId: string): Promise<string[]> {
+	const rows = await db
+		.selectFrom('drafts')
+		.select('boundary_set_id')
+		.distinct()
+		.where('sheet_id', '=', sheetId)
+		.execute();
+	return rows.map((row) => row.boundary_set_id);
+}
+
 /** Gives a sheet other boundaries. The caller holds the sheet, and adds a draft about them. */
 export async function giveBoundaries(trx: Db, id: string, setId: string): Promise<void> {
 	await trx

@@ -3,6 +3,7 @@ import {
 	type BorderKind,
 	type BorderList,
 } from '../../engines/borders/border-list.ts';
+import { withGaps, type GapList } from '../../engines/borders/with-gaps.ts';
 import type { Db } from '../database/connection.ts';
 import {
 	findBoundarySet,
@@ -10,6 +11,7 @@ import {
 	type BoundarySetNote,
 	type StoredColumns,
 } from '../repositories/boundaries.repository.ts';
+import { findGapsKm, readGaps, type StoredGaps } from '../repositories/gaps.repository.ts';
 import { NotFound } from './outcomes.ts';
 
 /** A boundary set as the services use it: its note, its regions and its borders, without geometry. */
@@ -21,24 +23,30 @@ export interface BoundaryView {
 	areasKm2: number[];
 	/** -1 for none */
 	enclaveOf: number[];
+	/** as found when the file was read, with the gaps that were measured since */
 	borders: BorderList;
+	/** without the gaps */
+	asRead: BorderList;
 }
 
 /** Regions of all the views kept at once; about 200 bytes each. */
 const mostKept = 400_000;
 const kept = new Map<string, BoundaryView>();
 
-/** Reads a set, or has it at hand: a boundary set never changes once it is stored. */
+/**
+ * Reads a set, or has it at hand: a boundary set never changes once it is stored, except that gaps are
+ * measured farther, which whoever has it at hand looks up.
+ */
 export async function boundaryView(db: Db, id: string): Promise<BoundaryView> {
 	const known = kept.get(id);
-	if (known) {
-		kept.delete(id);
+	kept.delete(id);
+	if (known && (await findGapsKm(db, id)) === known.set.gaps_km) {
 		kept.set(id, known);
 		return known;
 	}
 	const set = await findBoundarySet(db, id);
 	if (!set) throw new NotFound('boundary set');
-	const view = viewOf(set, await readColumns(db, id));
+	const view = viewOf(set, await readColumns(db, id), await readGaps(db, id));
 	kept.set(id, view);
 	makeRoom();
 	return view;
@@ -55,7 +63,8 @@ function makeRoom(): void {
 	}
 }
 
-function viewOf(set: BoundarySetNote, columns: StoredColumns): BoundaryView {
+function viewOf(set: BoundarySetNote, columns: StoredColumns, gaps: StoredGaps): BoundaryView {
+	const asRead = bordersOfColumns(columns);
 	return {
 		set,
 		keys: columns.key,
@@ -63,18 +72,23 @@ function viewOf(set: BoundarySetNote, columns: StoredColumns): BoundaryView {
 		parts: columns.parts,
 		areasKm2: columns.areaKm2,
 		enclaveOf: columns.enclaveOf,
-		borders: bordersOfColumns(columns),
+		borders: withGaps(columns.key.length, asRead, gapsOfColumns(gaps)),
+		asRead,
 	};
 }
 
-function bordersOfColumns({ a, b, kind, metres, lon, lat }: StoredColumns): BorderList {
+const bordersOfColumns = (columns: StoredColumns): BorderList => ({
+	...gapsOfColumns(columns),
+	kind: Uint8Array.from(columns.kind, (name) => borderKinds.indexOf(name as BorderKind)),
+});
+
+function gapsOfColumns({ a, b, metres, lon, lat }: StoredGaps): GapList {
 	const at = new Float64Array(2 * a.length);
 	lon.forEach((value, i) => (at[2 * i] = value));
 	lat.forEach((value, i) => (at[2 * i + 1] = value));
 	return {
 		a: Uint32Array.from(a),
 		b: Uint32Array.from(b),
-		kind: Uint8Array.from(kind, (name) => borderKinds.indexOf(name as BorderKind)),
 		metres: Float64Array.from(metres),
 		at,
 	};

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { actions } from '../access/roles.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
 import { firstDraft } from './first-draft.ts';
-import { changedParts, changesColouring, rightsFor, signLocks } from './draft-rights.ts';
+import { changedParts, changesColouring, rightsFor, signDraft } from './draft-rights.ts';
 
 const palette = { id: 'p', name: 'P', inks: [{ name: 'Ochre', hex: '#ebb855' }] };
 const draft: Draft = firstDraft({ title: 'A sheet', palette, portrait: false });
@@ -26,7 +26,7 @@ describe('the rights a change of a draft needs', () => {
 	});
 });
 
-describe('signing locks', () => {
+describe('signing', () => {
 	const before = { ...draft, locks: { a: { ink: 0, cost: 1, by: 'Ada', at: '2026-01-01' } } };
 
 	it('never takes the word of the sender for who set a lock', () => {
@@ -34,7 +34,7 @@ describe('signing locks', () => {
 			...draft,
 			locks: { a: { ink: 0, cost: 1, by: 'Mallory' }, b: { ink: 0, cost: 1, by: 'Ada' } },
 		};
-		const { locks } = signLocks(before, sent, 'Grace', '2026-12-01');
+		const { locks } = signDraft(before, sent, 'Grace', '2026-12-01');
 		expect(locks).toEqual({
 			a: { ink: 0, cost: 1, by: 'Ada', at: '2026-01-01' },
 			b: { ink: 0, cost: 1, by: 'Grace', at: '2026-12-01' },
@@ -43,6 +43,24 @@ describe('signing locks', () => {
 
 	it('signs a lock anew when its ink or cost changes', () => {
 		const sent = { ...draft, locks: { a: { ink: 1, cost: 1 } } };
-		expect(signLocks(before, sent, 'Grace', 'now').locks.a).toMatchObject({ by: 'Grace' });
+		expect(signDraft(before, sent, 'Grace', 'now').locks.a).toMatchObject({ by: 'Grace' });
+	});
+
+	it('signs borders decided by hand, and keeps a signature while pair and reason stand', () => {
+		const known = { a: 'a', b: 'b', reason: 'a lake', by: 'Ada', at: '2026-01-01' };
+		const sent = {
+			...draft,
+			struck: [
+				{ a: 'a', b: 'b', reason: 'a lake', by: 'Mallory' },
+				{ a: 'a', b: 'c', reason: 'a lake' },
+			],
+			added: [{ a: 'a', b: 'd', reason: 'a ferry', by: 'Ada' }],
+		};
+		const signed = signDraft({ ...draft, struck: [known] }, sent, 'Grace', 'now');
+		expect(signed.struck).toEqual([
+			known,
+			{ a: 'a', b: 'c', reason: 'a lake', by: 'Grace', at: 'now' },
+		]);
+		expect(signed.added).toEqual([{ a: 'a', b: 'd', reason: 'a ferry', by: 'Grace', at: 'now' }]);
 	});
 });

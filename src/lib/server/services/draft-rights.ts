@@ -1,5 +1,5 @@
 import { isDeepStrictEqual } from 'node:util';
-import type { Draft } from '../../engines/editions/draft.ts';
+import type { Draft, HandBorder } from '../../engines/editions/draft.ts';
 import type { Action } from '../access/roles.ts';
 
 /** The right that a change of each part of a draft needs. */
@@ -47,14 +47,32 @@ export const changesColouring = (parts: readonly (keyof Draft)[]): boolean =>
 	parts.some((part) => colouringParts.includes(part));
 
 /**
- * The draft with every lock signed: one that stands as before keeps its name and date, whatever was sent;
- * a new or altered one gets these.
+ * The draft with every lock and every border decided by hand signed: one that stands as before keeps its
+ * name and date, whatever was sent; a new or altered one gets these.
  */
-export function signLocks(before: Draft, after: Draft, by: string, at: string): Draft {
+export function signDraft(before: Draft, after: Draft, by: string, at: string): Draft {
+	return {
+		...after,
+		locks: signLocks(before, after, by, at),
+		struck: signBorders(before.struck, after.struck, by, at),
+		added: signBorders(before.added, after.added, by, at),
+	};
+}
+
+function signLocks(before: Draft, after: Draft, by: string, at: string): Draft['locks'] {
 	const locks = Object.entries(after.locks).map(([key, { ink, cost }]) => {
 		const old = Object.hasOwn(before.locks, key) ? before.locks[key] : undefined;
 		const same = old && old.ink === ink && old.cost === cost;
 		return [key, same ? old : { ink, cost, by, at }] as const;
 	});
-	return { ...after, locks: Object.fromEntries(locks) };
+	return Object.fromEntries(locks);
+}
+
+function signBorders(before: HandBorder[], after: HandBorder[], by: string, at: string) {
+	const name = ({ a, b, reason }: HandBorder) => JSON.stringify([a, b, reason]);
+	const known = new Map(before.map((border) => [name(border), border]));
+	return after.map((border) => {
+		const { a, b, reason } = border;
+		return known.get(name(border)) ?? { a, b, reason, by, at };
+	});
 }

@@ -17,7 +17,7 @@ import {
 } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
-import { changedParts, changesColouring, rightsFor, signLocks } from './draft-rights.ts';
+import { changedParts, changesColouring, rightsFor, signDraft } from './draft-rights.ts';
 import {
 	checkedOutcome,
 	deskColouring,
@@ -67,7 +67,7 @@ export async function saveDraft(
 	if (sent.revision !== sheet.revision) return { status: 'stale', stale: staleNote(current) };
 	const before = documentOf(current);
 	const by = await nameOfMember(shop.db, member);
-	const after = signLocks(before, sent.document, by, new Date().toISOString());
+	const after = signDraft(before, sent.document, by, new Date().toISOString());
 	const parts = changedParts(before, after);
 	for (const right of rightsFor(parts)) requireAccess(member, right);
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);

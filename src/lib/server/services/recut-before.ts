@@ -32,4 +32,6 @@ export const figuresOf = (row: MeasureRow): Figures => ({
 
 /** The same for the same figures in the same order. */
 export const figuresDigest = ({ values, texts }: Pick<Figures, 'values' | 'texts'>): string =>
-	createHash('sha256').update(JSON.stringify([values, texts])).digest('hex');
+	createHash('sha256')
+		.update(JSON.stringify([values, texts]))
+		.digest('hex');

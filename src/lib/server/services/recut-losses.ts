@@ -26,12 +26,11 @@ async function territoryLosses(db: Db, sheet: SheetRecord, { wrote }: Before): P
 		territoriesIn(await territoryDraftOf(db, sheet.id, revision));
 	const saved = sheet.territory_revision - wrote.territories;
 	if (saved === 0) return [];
-	const [now, then] = [
-		await document(sheet.territory_revision),
-		await document(wrote.territories),
-	];
+	const [now, then] = [await document(sheet.territory_revision), await document(wrote.territories)];
 	if (isDeepStrictEqual(now, then)) return [];
-	return [`The territories were saved ${times(saved)} since; they go back to how they were before.`];
+	return [
+		`The territories were saved ${times(saved)} since; they go back to how they were before.`,
+	];
 }
 
 const times = (count: number) => (count === 1 ? 'once' : `${count} times`);

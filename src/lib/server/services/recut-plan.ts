@@ -10,6 +10,7 @@ import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { colourDraft } from './draft.service.ts';
 import type { Outcome } from './outcome-of-colouring.ts';
 import { Conflict, Unfit } from './outcomes.ts';
+import { withGapsAs } from './recut-gaps.ts';
 import { standingRows } from './recut-standing.ts';
 import { inksOn } from './territory-inks.ts';
 
@@ -27,10 +28,11 @@ export async function carryBy(
 		throw new Conflict('not-ready', 'It has not been read and compared.');
 	const { standing, draft, measures } = await standingRows(shop.db, sheet);
 	const before = await boundaryView(shop.db, sheet.boundary_set_id);
-	const view = await boundaryView(shop.db, row.to_set);
+	const { view, short } = await withGapsAs(shop, before, row.to_set);
 	const outcome = await shop.pool.run('carryRecut', {
 		...{ matching: matching as unknown as RegionMatch, decisions, standing },
-		before: before.borders,
+		before: before.asRead,
+		after: view.asRead,
 		fresh: { borders: view.borders, columns: view.set.columns },
 	});
 	if (outcome.status === 'refused') {
@@ -38,7 +40,8 @@ export async function carryBy(
 			reasons: outcome.reasons.slice(0, 50),
 		});
 	}
-	return { carried: outcome, draft, measures, view };
+	const carried = { ...outcome, report: [...outcome.report, ...short] };
+	return { carried, draft, measures, view };
 }
 
 /** What applying a re-cut writes, worked out before anything is held. */

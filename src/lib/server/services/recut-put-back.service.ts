@@ -4,7 +4,11 @@ import type { Trx } from '../database/connection.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { moveTables, writeFigures } from '../repositories/recut-figures.repository.ts';
 import { changeRecut } from '../repositories/recuts.repository.ts';
-import { giveBoundaries, insertDraft, type SheetRecord } from '../repositories/sheets.repository.ts';
+import {
+	giveBoundaries,
+	insertDraft,
+	type SheetRecord,
+} from '../repositories/sheets.repository.ts';
 import { insertTerritoryDraft } from '../repositories/territories.repository.ts';
 import { draftOf, documentOf } from './draft.service.ts';
 import { Conflict, Unfit } from './outcomes.ts';
@@ -33,7 +37,10 @@ export async function putBackRecut(
 			throw new Conflict('not-applied', 'Only a re-cut that is applied can be put back.');
 		}
 		if (row.to_set !== sheet.boundary_set_id) {
-			throw new Conflict('not-last', 'Another re-cut was applied after this one. Put that one back first.');
+			throw new Conflict(
+				'not-last',
+				'Another re-cut was applied after this one. Put that one back first.',
+			);
 		}
 		const lost = await losses(trx, sheet, before);
 		if (lost.length > 0 && !sure) {

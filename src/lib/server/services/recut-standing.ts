@@ -3,7 +3,11 @@ import type { Standing } from '../jobs/recut-carry.ts';
 import type { RecutInput } from '../jobs/recut.work.ts';
 import { readFindings, readGeometry } from '../repositories/boundaries.repository.ts';
 import { readMeasures, type MeasureRow } from '../repositories/measures.repository.ts';
-import { findSheetById, type DraftRow, type SheetRecord } from '../repositories/sheets.repository.ts';
+import {
+	findSheetById,
+	type DraftRow,
+	type SheetRecord,
+} from '../repositories/sheets.repository.ts';
 import { boundaryView } from './boundary-view.ts';
 import { documentOf, draftOf, inksBefore } from './draft.service.ts';
 import { NotFound } from './outcomes.ts';
@@ -13,7 +17,7 @@ import { territoriesIn, territoryDraftOf } from './territory-state.ts';
 export async function standingSide(db: Db, setId: string): Promise<RecutInput['before']> {
 	const geometry = await readGeometry(db, setId);
 	if (!geometry) throw new NotFound('boundary set');
-	const { borders } = await boundaryView(db, setId);
+	const { asRead: borders } = await boundaryView(db, setId);
 	const rows = await readFindings(db, setId);
 	const findings = rows.map(({ code, severity, message, regions, lon, lat }) => ({
 		...{ code, severity, message, regions },
@@ -47,9 +51,7 @@ export async function standingRows(db: Db, sheet: SheetRecord): Promise<Standing
 
 /** Figures that are joined to the sheet's present boundaries; others are in another order of regions. */
 export const presentMeasures = async (db: Db, sheet: SheetRecord): Promise<MeasureRow[]> =>
-	(await readMeasures(db, sheet.id)).filter(
-		(row) => row.boundary_set_id === sheet.boundary_set_id,
-	);
+	(await readMeasures(db, sheet.id)).filter((row) => row.boundary_set_id === sheet.boundary_set_id);
 
 /** The same for a job, which knows the sheet by its id. */
 export async function standingOn(db: Db, sheetId: string): Promise<Standing> {

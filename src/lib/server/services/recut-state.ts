@@ -1,6 +1,11 @@
 import type { Db } from '../database/connection.ts';
 import type { RecutState } from '../database/schema.ts';
-import { findRecut, findRecutNote, type RecutNote, type RecutRecord } from '../repositories/recuts.repository.ts';
+import {
+	findRecut,
+	findRecutNote,
+	type RecutNote,
+	type RecutRecord,
+} from '../repositories/recuts.repository.ts';
 import type { SheetRecord } from '../repositories/sheets.repository.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { known } from './recut-held.ts';

@@ -25,6 +25,7 @@ import {
 	holdSheet,
 	listSheets,
 	renameSheet,
+	setsOfDrafts,
 } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
@@ -228,12 +229,13 @@ export async function removeSheet(
 			throw new Conflict('issued', 'A sheet with issued editions cannot be deleted.');
 		}
 		const recuts = await holdRecutsOf(trx, sheet.id);
+		const drafted = await setsOfDrafts(trx, sheet.id);
 		const tables = await measureFiles(trx, sheet.id);
 		await deleteSheet(trx, sheet.id);
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'sheet.deleted', subject, { sheet: number, name: sheet.name });
 		const digests = new Set([...tables, ...recuts.digests]);
-		for (const set of new Set([sheet.boundary_set_id, ...recuts.sets])) {
+		for (const set of new Set([...drafted, ...recuts.sets])) {
 			for (const digest of await removeSet(trx, set)) digests.add(digest);
 		}
 		for (const digest of [...digests].sort()) await dropUnused(trx, shop.files, digest);

@@ -25,7 +25,7 @@ const mostRounds = 8;
 /**
  * Replays steps in order on a matched map and matches it again. A step whose place is only there once
  * earlier ones have been matched waits for that; one that does not apply even then changes nothing and
- * is told. A step written twice is taken once.
+ * is told. A region left out or joined twice over is one step.
  */
 export async function mendLayer(
 	given: { naming: Naming; matched: Matched },
@@ -56,11 +56,16 @@ export async function mendLayer(
 		} else findings.push(notApplied(mend, outcome.why));
 	}
 	if (bench.draft.isChanged) rematch();
-	const known = new Set(naming.keys);
-	for (const finding of findings) {
-		finding.regions = finding.regions.filter((key) => known.has(key));
-	}
-	return { naming, matched, findings };
+	return { naming, matched, findings: aboutKnown(findings, naming.keys) };
+}
+
+/** The findings with only those regions that are still there once the map is mended. */
+export function aboutKnown(findings: Finding[], keys: string[]): Finding[] {
+	const known = new Set(keys);
+	return findings.map((finding) => ({
+		...finding,
+		regions: finding.regions.filter((key) => known.has(key)),
+	}));
 }
 
 const benchFor = (matched: Matched, clip: Clip, corners: number): Bench => ({
@@ -69,9 +74,14 @@ const benchFor = (matched: Matched, clip: Clip, corners: number): Bench => ({
 	keys: matched.coverage.keys,
 });
 
+/** Whole kinds of findings mended at once may leave out one region several times; that is one step. */
 function onceEach(mends: Mend[]): Mend[] {
-	const known = new Map(mends.map((mend) => [JSON.stringify(mend), mend]));
-	return [...known.values()];
+	const known = new Set<string>();
+	return mends.filter((mend) => {
+		if (mend.kind !== 'drop' && mend.kind !== 'merge') return true;
+		const step = JSON.stringify(mend);
+		return !known.has(step) && known.add(step);
+	});
 }
 
 function notApplied(mend: Mend, why: string): Finding {

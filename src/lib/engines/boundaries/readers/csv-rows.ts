@@ -5,7 +5,7 @@ import { decoded } from './decoded.ts';
 
 const usualCharacters = 1024 * 1024;
 /** of one row */
-const mostCharacters = 64 * usualCharacters;
+const mostCharacters = 24 * usualCharacters;
 
 export interface CsvForm {
 	encoding: string;
@@ -25,7 +25,7 @@ export async function* csvRows(source: ByteSource, form: CsvForm): AsyncGenerato
 		if (text.length < helping) continue;
 		const { rows, used } = soundRows(text, form, false);
 		text = text.slice(used);
-		helping = Math.max(usualCharacters, 2 * text.length);
+		helping = Math.min(mostCharacters + 1, Math.max(usualCharacters, 2 * text.length));
 		if (text.length > mostCharacters) {
 			const message = `A row of the table is longer than ${mostCharacters} characters; a quotation mark is probably missing.`;
 			throw new Refusal('too-large-unpacked', message);

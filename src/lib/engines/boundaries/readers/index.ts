@@ -44,7 +44,10 @@ async function readOpenFile(source: ByteSource, options: Options, watch: Watch):
 	}
 	if (startsWith(first, sqliteMagic)) return readGeoPackage(source, options, watch);
 	const start = firstLetter(first);
-	if (start === '<') return readKml(source, options, watch);
+	if (start === '<') {
+		if (isWebPage(first)) throw new Refusal('unsupported-format', 'This is a web page, not a map.');
+		return readKml(source, options, watch);
+	}
 	if (start === '{' || start === '[' || start === '') return readJson(source, options, watch);
 	const table = isText(first) ? await readCsv(source, options, watch) : null;
 	if (table) return table;
@@ -67,6 +70,12 @@ function firstLetter(bytes: Uint8Array): string {
 	const skipped = new Set([0xef, 0xbb, 0xbf, 0xff, 0xfe, 0, 30, 32, 9, 10, 13]);
 	const found = bytes.subarray(0, 64 * 1024).find((byte) => !skipped.has(byte));
 	return found === undefined ? '' : String.fromCharCode(found);
+}
+
+/** What a download link gives when its page is saved instead of its file. */
+function isWebPage(first: Uint8Array): boolean {
+	const start = new TextDecoder('latin1').decode(first.subarray(0, 1024));
+	return /<(!doctype\s+html|html)[\s>]/i.test(start);
 }
 
 /** Whether the first bytes may be a text: none of them is zero, or they are marked as UTF-16. */

@@ -17,6 +17,8 @@ interface Placemark {
 
 /** Takes elements as they open and close, and puts the areas of placemarks into the layer. */
 export class KmlFeatures {
+	/** how many elements and texts there were */
+	taken = 0;
 	private stack: string[] = [];
 	private words = '';
 	private placemark: Placemark | null = null;
@@ -38,6 +40,7 @@ export class KmlFeatures {
 
 	open(name: string, attributes: Record<string, string>): void {
 		const { stack } = this;
+		this.taken++;
 		if (stack.length === 0 && !roots.has(name)) {
 			const message = `The file is XML but not KML: its outermost element is "${name.slice(0, 40)}".`;
 			throw new Refusal('unsupported-format', message);
@@ -56,11 +59,13 @@ export class KmlFeatures {
 	}
 
 	text(text: string): void {
+		this.taken++;
 		this.words += text;
 	}
 
 	close(name: string): void {
 		const { stack, placemark } = this;
+		this.taken++;
 		stack.pop();
 		const parent = stack[stack.length - 1];
 		const words = this.words;

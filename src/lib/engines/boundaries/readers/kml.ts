@@ -27,11 +27,15 @@ export async function readKml(
 	layer.crsByFormat = 'EPSG:4326';
 	const features = new KmlFeatures(layer, limits.nesting);
 	const parser = parserInto(features);
+	let silent = 0;
 	try {
 		for await (const piece of decoded(source, encoding)) {
 			if (watch.cancelled?.()) throw new Cancelled();
 			watch.progress?.(`Reading features (${layer.regions} so far)`, 0);
+			const before = features.taken;
 			parser.write(piece);
+			silent = features.taken === before ? silent + piece.length : 0;
+			if (silent > mostCharacters) throw tooLong(features);
 		}
 	} catch (error) {
 		if (!(error instanceof WrongEncoding)) throw error;
@@ -46,6 +50,13 @@ export async function readKml(
 }
 
 const mostAttributes = 100;
+/** of one text or tag */
+const mostCharacters = 48 * 1024 * 1024;
+
+function tooLong(features: KmlFeatures): Refusal {
+	const message = `A text of the file is longer than ${mostCharacters} characters (${features.place()}).`;
+	return new Refusal('too-large-unpacked', message);
+}
 
 function parserInto(features: KmlFeatures): SaxesParser {
 	const parser = new SaxesParser();

@@ -1,11 +1,11 @@
 import type { Topology } from 'topojson-specification';
 import type { Limits } from '../options.ts';
 import { Refusal } from '../refusal.ts';
-import { arcEnds, type ArcEnds } from './topojson-arcs.ts';
+import { arcLengths } from './topojson-arcs.ts';
 
 /**
  * Refuses a topology that the reading library would run out of or go astray in: arcs that are no lists
- * of finite numbers, arc indices that point nowhere, rings whose arcs do not meet, and arcs used so often
+ * of finite numbers, arc indices that point nowhere, and arcs used so often
  * that their points written out would be more than `limits.points`.
  */
 export function checkTopology(topology: Topology, limits: Limits): void {
@@ -14,8 +14,7 @@ export function checkTopology(topology: Topology, limits: Limits): void {
 		throw new Refusal('not-geojson', 'The TopoJSON file lacks its arcs or its objects.');
 	}
 	if (transform !== undefined) checkTransform(transform);
-	const ends = arcEnds(topology);
-	const walk = { ends, points: 0, most: limits.points };
+	const walk = { lengths: arcLengths(topology), points: 0, most: limits.points };
 	for (const [name, object] of Object.entries(objects)) {
 		walk.points = 0;
 		checkObject(object, name, walk);
@@ -23,7 +22,8 @@ export function checkTopology(topology: Topology, limits: Limits): void {
 }
 
 interface Walk {
-	ends: ArcEnds;
+	/** points of each arc */
+	lengths: Uint32Array;
 	/** of the layer so far, arcs written out */
 	points: number;
 	most: number;
@@ -62,25 +62,17 @@ function checkArcs(list: unknown, depth: number, place: string, walk: Walk): voi
 }
 
 function checkRing(ring: unknown[], place: string, walk: Walk): void {
-	const { ends } = walk;
+	const { lengths } = walk;
 	ring.forEach((entry) => {
 		const arc = entry as number;
-		if (!Number.isInteger(arc) || arc >= ends.count || ~arc >= ends.count) {
-			const message = `${place} names arc ${String(entry)}; there are ${ends.count}.`;
+		if (!Number.isInteger(arc) || arc >= lengths.length || ~arc >= lengths.length) {
+			const message = `${place} names arc ${String(entry)}; there are ${lengths.length}.`;
 			throw new Refusal('bad-arc', message);
 		}
-		walk.points += ends.points[arc < 0 ? ~arc : arc];
+		walk.points += lengths[arc < 0 ? ~arc : arc];
 		if (walk.points > walk.most) {
 			const message = `The arcs written out are more than ${walk.most} points, which is the most this reader takes.`;
 			throw new Refusal('too-large-unpacked', message);
-		}
-	});
-	const arcs = ring as number[];
-	arcs.forEach((arc, i) => {
-		const next = arcs[(i + 1) % arcs.length];
-		if (!ends.meet(arc, next)) {
-			const message = `In ${place} arc ${next} does not begin where arc ${arc} ends.`;
-			throw new Refusal('bad-arc', message);
 		}
 	});
 }

@@ -58,14 +58,6 @@ describe('arcs', () => {
 		expect((await refusal(bytes(flat))).code).toBe('bad-coordinate');
 	});
 
-	it('that do not meet in a ring are refused', async () => {
-		const apart = made({ wards: two });
-		apart.arcs[0][0] = [0.5, 0.5];
-		const { code, message } = await refusal(bytes(apart));
-		expect(code).toBe('bad-arc');
-		expect(message).toMatch(/does not begin where arc/);
-	});
-
 	it('used so often that they would fill the memory are refused before they are written out', async () => {
 		const ring = Array.from({ length: 5000 }, (_, i) => [Math.cos(i), Math.sin(i)]);
 		const arcs = [[...ring, ring[0]]];

@@ -1,11 +1,7 @@
-import { area, bbox, featureCollection, intersect } from '@turf/turf';
-import Flatbush from 'flatbush';
-import type { Feature, MultiPolygon, Polygon } from 'geojson';
+import { area, featureCollection, intersect } from '@turf/turf';
 import type { Coverage } from '../coverage.ts';
-import { coverageToGeoJson } from '../to-geojson.ts';
+import { CheckShapes, type Box } from './check-shapes.ts';
 import type { RegionMatch } from './region-match.ts';
-
-type Area = Feature<Polygon | MultiPolygon>;
 
 /** Shares told on a sphere, and by edges straight in longitude and latitude, may be so far off. */
 const tolerance = 0.01;
@@ -30,8 +26,7 @@ export function* areaFaults(
 	match: RegionMatch,
 	sample: number,
 ): Generator<string> {
-	const olds: Area[] = coverageToGeoJson(before).features;
-	const news: Area[] = coverageToGeoJson(after).features;
+	const [olds, news] = [new CheckShapes(before), new CheckShapes(after)];
 	const listed = new Map<string, number>();
 	const { from: froms, to: tos, shareOfOld, shareOfNew } = match.links;
 	const isSettled = { old: new Set<number>(), new: new Set<number>() };
@@ -41,13 +36,14 @@ export function* areaFaults(
 		isSettled.old.add(from);
 		isSettled.new.add(tos[i]);
 	});
-	for (const [from, to] of sampledPairs(olds, news, sample)) {
+	const isLeftOut = ([from, to]: [number, number]) =>
+		!listed.has(`${from} ${to}`) && (isSettled.old.has(from) || isSettled.new.has(to));
+	const pairs = sampledPairs(olds, news, sample).filter((pair) => !isLeftOut(pair));
+	for (const [from, to] of thinned(pairs, olds, news)) {
 		const link = listed.get(`${from} ${to}`);
-		if (link === undefined && (isSettled.old.has(from) || isSettled.new.has(to))) continue;
-		if (pointsOf(olds[from]) + pointsOf(news[to]) > mostPoints) continue;
-		const common = commonArea(olds[from], news[to]);
+		const common = commonArea(olds, from, news, to);
 		const [old, fresh] = link === undefined ? [0, 0] : [shareOfOld[link], shareOfNew[link]];
-		const off = [common / area(olds[from]) - old, common / area(news[to]) - fresh];
+		const off = [common / area(olds.shape(from)) - old, common / area(news.shape(to)) - fresh];
 		if (off.some((share) => Math.abs(share) > tolerance)) {
 			yield `"${before.keys[from]}" and "${after.keys[to]}" have other ground in common than it says.`;
 		}
@@ -55,23 +51,15 @@ export function* areaFaults(
 }
 
 /** Pairs of which one is sampled and whose boxes meet, each once. */
-function sampledPairs(olds: Area[], news: Area[], sample: number): [number, number][] {
+function sampledPairs(olds: CheckShapes, news: CheckShapes, sample: number): [number, number][] {
 	const pairs = new Map<string, [number, number]>();
-	if (olds.length === 0 || news.length === 0) return [];
-	const [nearOld, nearNew] = [boxSearch(olds), boxSearch(news)];
-	for (const from of spread(olds.length, sample)) {
-		for (const to of nearNew(olds[from])) pairs.set(`${from} ${to}`, [from, to]);
+	for (const from of spread(olds.boxes.length, sample)) {
+		for (const to of near(olds.boxes[from], news)) pairs.set(`${from} ${to}`, [from, to]);
 	}
-	for (const to of spread(news.length, sample)) {
-		for (const from of nearOld(news[to])) pairs.set(`${from} ${to}`, [from, to]);
+	for (const to of spread(news.boxes.length, sample)) {
+		for (const from of near(news.boxes[to], olds)) pairs.set(`${from} ${to}`, [from, to]);
 	}
-	const all = [...pairs.values()];
-	const points = all.reduce(
-		(sum, [from, to]) => sum + pointsOf(olds[from]) + pointsOf(news[to]),
-		0,
-	);
-	const step = Math.max(1, Math.ceil(points / pointsInAll));
-	return all.filter((_, i) => i % step === 0);
+	return [...pairs.values()];
 }
 
 /** Up to so many numbers below `count`, evenly taken. */
@@ -80,44 +68,26 @@ const spread = (count: number, sample: number): number[] =>
 		Math.floor((i * count) / Math.min(count, sample)),
 	);
 
-function boxSearch(areas: Area[]): (area: Area) => number[] {
-	const index = new Flatbush(areas.length);
-	for (const one of areas) {
-		const [west, south, east, north] = bbox(one);
-		index.add(west, south, east, north);
-	}
-	index.finish();
-	return (one) => {
-		const [west, south, east, north] = bbox(one);
-		return turns.flatMap((turn) => index.search(west + turn, south, east + turn, north));
-	};
+const near = ([west, south, east, north]: Box, shapes: CheckShapes) =>
+	turns.flatMap((turn) => shapes.meeting([west + turn, south, east + turn, north]));
+
+function thinned(pairs: [number, number][], olds: CheckShapes, news: CheckShapes) {
+	const pointsOf = ([from, to]: [number, number]) => olds.points[from] + news.points[to];
+	const fit = pairs.filter((pair) => pointsOf(pair) <= mostPoints);
+	const points = fit.reduce((sum, pair) => sum + pointsOf(pair), 0);
+	const step = Math.max(1, Math.ceil(points / pointsInAll));
+	return fit.filter((_, i) => i % step === 0);
 }
 
-/** Square metres that two areas have in common, whatever the turns between them. */
-function commonArea(one: Area, other: Area): number {
-	const [west, , east] = bbox(one);
-	const [otherWest, , otherEast] = bbox(other);
+/** Square metres that two regions have in common, whatever the turns between them. */
+function commonArea(olds: CheckShapes, from: number, news: CheckShapes, to: number): number {
+	const [west, , east] = olds.boxes[from];
+	const [otherWest, , otherEast] = news.boxes[to];
 	let common = 0;
 	for (const turn of turns) {
 		if (otherWest + turn > east || otherEast + turn < west) continue;
-		const cut = intersect(featureCollection([one, moved(other, turn)]));
+		const cut = intersect(featureCollection([olds.shape(from), news.shape(to, turn)]));
 		if (cut) common += area(cut);
 	}
 	return common;
 }
-
-function moved(one: Area, by: number): Area {
-	if (by === 0) return one;
-	const coordinates = polygonsOf(one).map((rings) =>
-		rings.map((ring) => ring.map(([lon, lat]) => [lon + by, lat])),
-	);
-	return { ...one, geometry: { type: 'MultiPolygon', coordinates } };
-}
-
-const polygonsOf = ({ geometry }: Area) =>
-	geometry.type === 'Polygon' ? [geometry.coordinates] : geometry.coordinates;
-
-const pointsOf = (one: Area) =>
-	polygonsOf(one)
-		.flat()
-		.reduce((sum, ring) => sum + ring.length, 0);

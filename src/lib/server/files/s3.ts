@@ -1,0 +1,130 @@
+import { createHash } from 'node:crypto';
+import { createReadStream, createWriteStream } from 'node:fs';
+import type { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
+import {
+	CopyObjectCommand,
+	DeleteObjectCommand,
+	GetObjectCommand,
+	HeadObjectCommand,
+	S3Client,
+} from '@aws-sdk/client-s3';
+import type { S3Settings } from '../config.ts';
+import { asFilesAway, isMissing, type Bucket } from './s3-bucket.ts';
+import { leave, receiveInto } from './s3-receive.ts';
+import { tidyBucket } from './s3-tidy.ts';
+import { Spool } from './spool.ts';
+import {
+	FilesAway,
+	FileMissing,
+	isDigest,
+	requireDigest,
+	type FileStore,
+	type Received,
+} from './store.ts';
+
+/**
+ * The store as a bucket of a service that speaks the S3 protocol: `incoming/` while bytes arrive, then
+ * `ab/abcd...` by digest. What threads must read by path lies in `spool` on this machine meanwhile; no
+ * other process needs it. Rejects with `FilesAway` whenever the service cannot be reached or refuses.
+ */
+export function s3Store(settings: S3Settings, spoolFolder: string): FileStore {
+	const bucket: Bucket = { client: clientOf(settings), name: settings.bucket };
+	const spool = new Spool(spoolFolder);
+	return {
+		receive: (source) => receive(bucket, spool, source),
+		open: async (digest) => open(bucket, digest),
+		local: (digest) => local(bucket, spool, digest),
+		has: (digest) => has(bucket, digest),
+		delete: async (digest) => remove(bucket, keyOf(digest)),
+		async tidy() {
+			await spool.tidy();
+			await tidyBucket(bucket);
+		},
+	};
+}
+
+/** Checksums only where the protocol demands them: not every service knows the newer kinds. */
+const clientOf = ({ endpoint, region, pathStyle, keyId, secret }: S3Settings): S3Client =>
+	new S3Client({
+		...{ endpoint, region, forcePathStyle: pathStyle },
+		credentials: { accessKeyId: keyId, secretAccessKey: secret },
+		requestChecksumCalculation: 'WHEN_REQUIRED',
+		responseChecksumValidation: 'WHEN_REQUIRED',
+		maxAttempts: 3,
+		requestHandler: { connectionTimeout: 3_000, socketTimeout: 30_000 },
+	});
+
+const keyOf = (digest: string) => `${requireDigest(digest).slice(0, 2)}/${digest}`;
+
+async function receive(bucket: Bucket, spool: Spool, source: Readable): Promise<Received> {
+	const { digest, bytes, path, incoming } = await receiveInto(bucket, spool, source);
+	let gone = false;
+	const discard = async () => {
+		if (gone) return;
+		gone = true;
+		await spool.remove(path);
+		await leave(bucket, incoming);
+	};
+	const keep = async () => {
+		await settle(bucket, incoming, keyOf(digest), bytes);
+		await discard();
+	};
+	return { digest, bytes, path, keep, discard };
+}
+
+/** The service copies by itself; the name by digest appears once the copy is whole. */
+async function settle(bucket: Bucket, from: string, to: string, bytes: number): Promise<void> {
+	const { client, name: Bucket } = bucket;
+	const copied = await asFilesAway(async () => {
+		await client.send(new CopyObjectCommand({ Bucket, Key: to, CopySource: `${Bucket}/${from}` }));
+		return client.send(new HeadObjectCommand({ Bucket, Key: to }));
+	});
+	if (copied.ContentLength === bytes) return;
+	await remove(bucket, to);
+	throw new FilesAway(`${copied.ContentLength} of ${bytes} bytes were kept`);
+}
+
+async function open(
+	{ client, name: Bucket }: Bucket,
+	digest: string,
+): Promise<{ stream: Readable; bytes: number }> {
+	const Key = keyOf(digest);
+	const found = await asFilesAway(
+		() => client.send(new GetObjectCommand({ Bucket, Key })),
+		() => new FileMissing(digest),
+	);
+	return { stream: found.Body as Readable, bytes: found.ContentLength ?? 0 };
+}
+
+/** Fetches the bytes to this machine and sees that they are what their name says. */
+async function local(bucket: Bucket, spool: Spool, digest: string) {
+	const { stream } = await open(bucket, digest);
+	const path = await spool.place();
+	const release = () => spool.remove(path);
+	try {
+		await asFilesAway(() => pipeline(stream, createWriteStream(path, { mode: 0o600 })));
+		const hash = createHash('sha256');
+		await pipeline(createReadStream(path), hash);
+		if (hash.digest('hex') !== digest) throw new FilesAway('the bytes are not those of their name');
+		return { path, release };
+	} catch (error) {
+		await release();
+		throw error;
+	}
+}
+
+async function has({ client, name: Bucket }: Bucket, digest: string): Promise<boolean> {
+	if (!isDigest(digest)) return false;
+	try {
+		await client.send(new HeadObjectCommand({ Bucket, Key: keyOf(digest) }));
+		return true;
+	} catch (problem) {
+		if (isMissing(problem)) return false;
+		throw FilesAway.because(problem);
+	}
+}
+
+const remove = async ({ client, name: Bucket }: Bucket, Key: string): Promise<void> => {
+	await asFilesAway(() => client.send(new DeleteObjectCommand({ Bucket, Key })));
+};
