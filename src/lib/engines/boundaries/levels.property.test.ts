@@ -108,10 +108,7 @@ describe('levels of display', () => {
 
 function boxOf({ arcPoints }: Coverage): number[] {
 	const [lons, lats] = [0, 1].map((odd) => arcPoints.filter((_, i) => i % 2 === odd));
-	const ends = (list: Float64Array) =>
-		list.reduce(([least, most], one) => [Math.min(least, one), Math.max(most, one)], [
-			Infinity,
-			-Infinity,
-		] as [number, number]);
-	return [...ends(lons), ...ends(lats)];
+	const least = (list: Float64Array) => list.reduce((a, b) => Math.min(a, b), Infinity);
+	const most = (list: Float64Array) => list.reduce((a, b) => Math.max(a, b), -Infinity);
+	return [lons, lats].flatMap((list) => [least(list), most(list)]);
 }
