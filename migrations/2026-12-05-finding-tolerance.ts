@@ -5,5 +5,7 @@ import { sql, type Kysely } from 'kysely';
  * desk can offer to preview it. Frozen once landed: changes come as new migrations.
  */
 export async function up(db: Kysely<unknown>): Promise<void> {
-	await sql`alter table findings add column if not exists tolerance_metres double precision`.execute(db);
+	await sql`alter table findings add column if not exists tolerance_metres double precision`.execute(
+		db,
+	);
 }

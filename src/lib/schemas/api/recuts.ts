@@ -44,9 +44,7 @@ const group = z.strictObject({
 	after: z.array(region),
 });
 
-const side = z
-	.strictObject({ kind: z.enum(borderKinds), metres: z.number() })
-	.nullable();
+const side = z.strictObject({ kind: z.enum(borderKinds), metres: z.number() }).nullable();
 const pairs = z.array(z.strictObject({ a: regionKey, b: regionKey, before: side, after: side }));
 
 export const recutDetail = recutNote.extend({
