@@ -10,7 +10,7 @@ import {
 	startBrowser,
 } from '../support/browser.ts';
 import { statesGeoJson } from '../support/uploads.ts';
-import { docket, enterTeam, saved, uploadSheet } from '../support/desk.ts';
+import { docket, drawn, enterTeam, saved, uploadSheet } from '../support/desk.ts';
 import { edgesOfCol } from '../support/named-graphs.ts';
 
 describe('the stage of borders', () => {
@@ -53,7 +53,7 @@ describe('the stage of borders', () => {
 		await aside().getByLabel('Shortest shared line that counts').fill('20000');
 		await page.keyboard.press('Enter');
 		await expect.poll(borders).toContain('of them too short to count');
-		await page.keyboard.press('Control+z');
+		await page.getByRole('button', { name: 'Undo' }).click();
 		await expect.poll(borders).not.toContain('too short');
 
 		await aside().getByLabel('Measure gaps up to').fill('100');
@@ -122,6 +122,7 @@ describe('the stage of borders', () => {
 	it('lists the pieces when they are asked for, and traces the one that is chosen', async () => {
 		const sheet = await uploadSheet(page, statesGeoJson(), 'Pieces, journey');
 		await page.goto(`${sheet}/borders`);
+		await drawn(page);
 		await page.locator('#pieces summary').click();
 		await expect.poll(() => page.locator('#pieces').innerText()).toMatch(/\d+ pieces/);
 		await page.locator('#pieces [data-row]').first().click();
