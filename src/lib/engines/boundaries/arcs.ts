@@ -1,4 +1,5 @@
 import { GrowingFloats, GrowingInts } from '../geometry/growing.ts';
+import { Room } from '../geometry/room.ts';
 import type { Outlines } from './outlines.ts';
 import { isKept, SegmentEnds } from './segment-ends.ts';
 import type { Segments } from './segments.ts';
@@ -15,8 +16,8 @@ export interface Arcs {
 	right: Int32Array;
 }
 
-export function chainArcs(outlines: Outlines, segments: Segments): Arcs {
-	const ends = new SegmentEnds(outlines.vertices, segments);
+export function chainArcs(outlines: Outlines, segments: Segments, room = new Room()): Arcs {
+	const ends = new SegmentEnds(outlines.vertices, segments, room);
 	const chain = new ArcChain(segments, ends, outlines);
 	for (let v = 0; v < outlines.vertices; v++) {
 		if (ends.isNode(v)) chain.fromNode(v);
@@ -24,6 +25,7 @@ export function chainArcs(outlines: Outlines, segments: Segments): Arcs {
 	for (let i = 0; i < segments.count; i++) {
 		if (isKept(segments, i)) chain.closedFrom(i);
 	}
+	ends.giveBack(room);
 	return chain.arcs();
 }
 

@@ -1,3 +1,4 @@
+import type { Room } from '../geometry/room.ts';
 import type { Segments } from './segments.ts';
 
 /** A segment with the same region on both sides is inside it (two parts that touch, or a spike): left out. */
@@ -19,9 +20,10 @@ export class SegmentEnds {
 	constructor(
 		vertices: number,
 		private segments: Segments,
+		room: Room,
 	) {
-		this.first = new Int32Array(vertices);
-		this.link = new Int32Array(vertices);
+		this.first = room.ints(vertices);
+		this.link = room.zeros(vertices);
 		this.degrees = new Uint8Array(vertices);
 		const { low, high, count } = segments;
 		for (let i = 0; i < count; i++) {
@@ -29,6 +31,12 @@ export class SegmentEnds {
 			this.add(low[i], i);
 			this.add(high[i], i);
 		}
+	}
+
+	/** Nothing may be asked any more. */
+	giveBack(room: Room): void {
+		room.give(this.first);
+		room.give(this.link);
 	}
 
 	degree(v: number): number {
