@@ -15,6 +15,8 @@ export class SegmentEnds {
 	private link: Int32Array;
 	/** how many end here; `many` for that or more */
 	private degrees: Uint8Array;
+	/** 1 where an arc must end */
+	private nodes: Uint8Array;
 	private crowds = new Map<number, number[]>();
 
 	constructor(
@@ -31,6 +33,9 @@ export class SegmentEnds {
 			this.add(low[i], i);
 			this.add(high[i], i);
 		}
+		// asked for twice at most places, where one byte is nearer at hand than both segments
+		this.nodes = new Uint8Array(vertices);
+		for (let v = 0; v < vertices; v++) if (this.endsArcs(v)) this.nodes[v] = 1;
 	}
 
 	/** Nothing may be asked any more. */
@@ -56,6 +61,10 @@ export class SegmentEnds {
 
 	/** Where an arc must end: not exactly two segments, or two that do not divide the same pair. */
 	isNode(v: number): boolean {
+		return this.nodes[v] === 1;
+	}
+
+	private endsArcs(v: number): boolean {
 		const degree = this.degrees[v];
 		if (degree !== 2) return degree > 0;
 		const { left, right, low, high } = this.segments;
