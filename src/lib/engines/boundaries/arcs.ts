@@ -18,7 +18,7 @@ export interface Arcs {
 
 export function chainArcs(outlines: Outlines, segments: Segments, room = new Room()): Arcs {
 	const ends = new SegmentEnds(outlines.vertices, segments, room);
-	const chain = new ArcChain(segments, ends, outlines);
+	const chain = new ArcChain(segments, ends, outlines, room);
 	for (let v = 0; v < outlines.vertices; v++) {
 		if (ends.isNode(v)) chain.fromNode(v);
 	}
@@ -42,8 +42,9 @@ class ArcChain {
 		private segments: Segments,
 		private ends: SegmentEnds,
 		outlines: Outlines,
+		room: Room,
 	) {
-		this.used = new Uint8Array(segments.count);
+		this.used = room.zeroBytes(segments.count);
 		this.positions = outlines.positions;
 		this.points = new GrowingFloats(2 * segments.count + 8 * outlines.ringStarts.length);
 	}

@@ -26,7 +26,7 @@ export class SegmentEnds {
 	) {
 		this.first = room.ints(vertices);
 		this.link = room.zeros(vertices);
-		this.degrees = new Uint8Array(vertices);
+		this.degrees = room.zeroBytes(vertices);
 		const { low, high, count } = segments;
 		for (let i = 0; i < count; i++) {
 			if (!isKept(segments, i)) continue;
@@ -34,14 +34,13 @@ export class SegmentEnds {
 			this.add(high[i], i);
 		}
 		// asked for twice at most places, where one byte is nearer at hand than both segments
-		this.nodes = new Uint8Array(vertices);
+		this.nodes = room.zeroBytes(vertices);
 		for (let v = 0; v < vertices; v++) if (this.endsArcs(v)) this.nodes[v] = 1;
 	}
 
 	/** Nothing may be asked any more. */
 	giveBack(room: Room): void {
-		room.give(this.first);
-		room.give(this.link);
+		for (const array of [this.first, this.link, this.degrees, this.nodes]) room.give(array);
 	}
 
 	degree(v: number): number {

@@ -25,6 +25,12 @@ export class Room {
 		return new Int32Array(piece.buffer, piece.byteOffset, length);
 	}
 
+	/** So many zeros, a byte each. */
+	zeroBytes(length: number): Uint8Array {
+		const { buffer, byteOffset } = this.zeros(Math.ceil(length / 4));
+		return new Uint8Array(buffer, byteOffset, length);
+	}
+
 	/** As many zeros. */
 	zeros(length: number): Int32Array {
 		return this.ints(length).fill(0);
