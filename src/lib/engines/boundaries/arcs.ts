@@ -1,4 +1,5 @@
 import { GrowingFloats, GrowingInts } from '../geometry/growing.ts';
+import { Room } from '../geometry/room.ts';
 import type { Outlines } from './outlines.ts';
 import { isKept, SegmentEnds } from './segment-ends.ts';
 import type { Segments } from './segments.ts';
@@ -15,15 +16,16 @@ export interface Arcs {
 	right: Int32Array;
 }
 
-export function chainArcs(outlines: Outlines, segments: Segments): Arcs {
-	const ends = new SegmentEnds(outlines.vertices, segments);
-	const chain = new ArcChain(segments, ends, outlines);
+export function chainArcs(outlines: Outlines, segments: Segments, room = new Room()): Arcs {
+	const ends = new SegmentEnds(outlines.vertices, segments, room);
+	const chain = new ArcChain(segments, ends, outlines, room);
 	for (let v = 0; v < outlines.vertices; v++) {
 		if (ends.isNode(v)) chain.fromNode(v);
 	}
 	for (let i = 0; i < segments.count; i++) {
 		if (isKept(segments, i)) chain.closedFrom(i);
 	}
+	ends.giveBack(room);
 	return chain.arcs();
 }
 
@@ -40,8 +42,9 @@ class ArcChain {
 		private segments: Segments,
 		private ends: SegmentEnds,
 		outlines: Outlines,
+		room: Room,
 	) {
-		this.used = new Uint8Array(segments.count);
+		this.used = room.zeroBytes(segments.count);
 		this.positions = outlines.positions;
 		this.points = new GrowingFloats(2 * segments.count + 8 * outlines.ringStarts.length);
 	}

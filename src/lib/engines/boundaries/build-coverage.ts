@@ -2,6 +2,7 @@ import { sweptKm2 } from '../geometry/areas.ts';
 import type { Coverage } from '../geometry/coverage.ts';
 import { lineMetres } from '../geometry/ellipsoid.ts';
 import { GrowingInts } from '../geometry/growing.ts';
+import type { Room } from '../geometry/room.ts';
 import { arcsByRegion, traceRings } from './arc-rings.ts';
 import { chainArcs, type Arcs } from './arcs.ts';
 import { enclaves } from './enclaves.ts';
@@ -12,12 +13,11 @@ import { TracedRing } from './traced-ring.ts';
 
 /** Cuts noded outlines into shared arcs and puts the regions together from them again; both are answered. */
 export function buildCoverage(
-	outlines: Outlines,
-	segments: Segments,
+	{ outlines, segments, room }: { outlines: Outlines; segments: Segments; room?: Room },
 	keys: string[],
 	names: string[],
 ): { coverage: Coverage; arcs: Arcs } {
-	const arcs = chainArcs(outlines, segments);
+	const arcs = chainArcs(outlines, segments, room);
 	const arcPoints = arcs.points;
 	const arcStarts = Uint32Array.from(arcs.starts);
 	const rings = assembleRings(arcs, outlines.regions);

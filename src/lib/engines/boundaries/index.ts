@@ -1,7 +1,7 @@
 /** File bytes -> clean shared-arc coverage, its borders, and findings. */
 export { readBoundaries } from './read-boundaries.ts';
 export type { BoundariesResult, SourceNote } from './result.ts';
-export type { BoundaryOptions, ByteSource, Limits, Watch } from './options.ts';
+export type { BoundaryOptions, ByteReader, ByteSource, Limits, Watch } from './options.ts';
 export type { RefusalCode } from './refusal.ts';
 export type { Finding } from './finding.ts';
 export type { Mend, MendOffer } from './mends/mend.ts';

@@ -2,7 +2,7 @@ import type { Finding } from './finding.ts';
 import { nameRegions, type Naming } from './keys.ts';
 import { matchOutlines, withoutSegments, type Matched } from './match.ts';
 import { spikeFinding, spikesOf, tongueFinding, tonguesOf } from './no-width.ts';
-import { nodeOutlines } from './node-outlines.ts';
+import { giveBack, nodeOutlines } from './node-outlines.ts';
 import type { BoundaryOptions } from './options.ts';
 import { outlinesOf, type RingRepairs } from './outlines-of.ts';
 import type { RawLayer } from './raw-layer.ts';
@@ -30,10 +30,10 @@ export function matchLayer(
 	stage: (message: string, share: number) => void,
 ): MatchedLayer {
 	const kept: boolean[] = new Array(layer.regions).fill(true);
-	const { outlines, repairs } = outlinesOf(layer, west);
+	const { outlines, repairs, room } = outlinesOf(layer, west);
 	layer.releasePoints();
 	for (;;) {
-		const noded = nodeOutlines(ringsOf(outlines, kept));
+		const noded = nodeOutlines(ringsOf(outlines, kept), room);
 		const tongues = tonguesOf(settleParallel(noded.segments), noded);
 		for (const f of withoutSegments(noded, layer.regions)) kept[f] = false;
 		const naming = nameRegions(layer.table, kept, options);
@@ -49,6 +49,7 @@ export function matchLayer(
 			const findings = [...leftOutFinding(kept, naming), ...spikes, ...touches];
 			return { naming, repairs, matched, findings };
 		}
+		giveBack(labelled.segments, room);
 		const gone = new Set(matched.vanished);
 		regionOf.forEach((region, f) => {
 			if (gone.has(region)) kept[f] = false;

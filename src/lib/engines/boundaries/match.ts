@@ -73,8 +73,8 @@ export function matchNoded(
 }
 
 function cut(noded: Noded, keys: string[], names: string[], options: Options) {
-	const { outlines, segments } = noded;
-	const { coverage, arcs } = buildCoverage(outlines, segments, keys, names);
+	const { outlines, segments, room } = noded;
+	const { coverage, arcs } = buildCoverage({ outlines, segments, room }, keys, names);
 	const survey = surveyOf(coverage, options);
 	if (survey.crowded) throw new Refusal('bad-coordinate', crowdMessage(survey.crowded));
 	const crossed = new Set(survey.crossings.map(({ region }) => region));

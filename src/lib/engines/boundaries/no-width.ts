@@ -67,6 +67,7 @@ export function tonguesOf(squeezed: Squeezed[], { segments, outlines }: Noded): 
 
 /** Features that touch only along such a line; a feature squeezed to a line altogether is named too. */
 export function tongueFinding(tongues: Tongue[], naming: Naming, borders: BorderList): Finding[] {
+	if (tongues.length === 0) return [];
 	const kinds = new Map(Array.from(borders.a, (a, i) => [`${a} ${borders.b[i]}`, borders.kind[i]]));
 	const regions = new Set<number>();
 	const named: string[] = [];

@@ -1,3 +1,4 @@
+import { Room } from '../geometry/room.ts';
 import { Inserts } from './inserts.ts';
 import { eachNearMiss, type NearMiss } from './near-misses.ts';
 import { noiseMetres } from './options.ts';
@@ -16,6 +17,8 @@ export interface Noded {
 	outlines: Outlines;
 	segments: Segments;
 	joined: Joined;
+	/** memory for who works on these */
+	room: Room;
 }
 
 const mostRounds = 6;
@@ -26,22 +29,28 @@ const mostRounds = 6;
  * position stays, so the result does not depend on the order of features. Rounds are repeated until
  * nothing is left to join, since splitting a segment can bring new ends together.
  */
-export function nodeOutlines(given: Outlines): Noded {
+export function nodeOutlines(given: Outlines, room = new Room()): Noded {
 	let outlines = given;
 	let changed: Uint8Array | null = null;
 	const joined: Joined = { regions: new Set(), places: 0, at: null };
 	for (let round = 0; ; round++) {
-		const segments = indexSegments(outlines);
-		if (round === mostRounds) return { outlines, segments, joined };
+		const segments = indexSegments(outlines, room);
+		if (round === mostRounds) return { outlines, segments, joined, room };
 		const misses: NearMiss[] = [];
 		const keep = (miss: NearMiss) => misses.push(miss);
 		eachNearMiss(segments, outlines.positions, noiseMetres, keep, changed);
-		if (misses.length === 0) return { outlines, segments, joined };
+		if (misses.length === 0) return { outlines, segments, joined, room };
 		for (const miss of misses) remember(joined, miss, segments, outlines.positions);
 		const rewrite = rewriteFor(misses, segments, outlines);
 		changed = changedBy(misses, rewrite);
 		outlines = rewriteOutlines(outlines, rewrite);
+		giveBack(segments, room);
 	}
+}
+
+/** Of segments that are to be found anew. */
+export function giveBack({ low, high, left, right }: Segments, room: Room): void {
+	for (const array of [low, high, left, right]) room.give(array);
 }
 
 /** Vertices that new segments end at: those put into others, and those that stand for others. */

@@ -1,5 +1,12 @@
 import type { Mend } from './mends/mend.ts';
 
+/** Bytes in turn, written into the memory given. */
+export interface ByteReader {
+	/** how many were written, from its start; none only at the end */
+	read(memory: Uint8Array): Promise<number>;
+	close(): Promise<void>;
+}
+
 /** Bytes to read, from a file on disk, a browser's file or memory. */
 export interface ByteSource {
 	name: string;
@@ -7,6 +14,8 @@ export interface ByteSource {
 	size: number;
 	/** may be called again, and then starts from the first byte again */
 	chunks(): AsyncIterable<Uint8Array>;
+	/** the same bytes for who brings memory for them; new memory for each chunk takes longer than reading it */
+	reader?(): ByteReader;
 }
 
 export interface BoundaryOptions {

@@ -1,4 +1,4 @@
-import { doubleArea } from '../geometry/rings.ts';
+import { Room } from '../geometry/room.ts';
 import type { Outlines } from './outlines.ts';
 import type { RawLayer } from './raw-layer.ts';
 import { VertexTable } from './vertices.ts';
@@ -16,15 +16,16 @@ export interface RingRepairs {
 /**
  * Takes the rings over: closes them, drops repeated vertices, leaves out those without area, and turns
  * them so that their region is on the left (outer rings anticlockwise, holes clockwise).
- * Each feature is taken for a region of its own. The layer's points are not needed afterwards.
+ * Each feature is taken for a region of its own. The layer's points are gone afterwards: the vertices'
+ * positions are written over them, and what is left of their memory is answered as room.
  */
 export function outlinesOf(
 	layer: RawLayer,
 	west: number,
-): { outlines: Outlines; repairs: RingRepairs } {
+): { outlines: Outlines; repairs: RingRepairs; room: Room } {
 	const points = layer.points.items;
 	const total = layer.points.length / 2;
-	const table = new VertexTable(west, Math.ceil(total * 0.6), typicalStep(points, total));
+	const table = new VertexTable(west, Math.ceil(total * 0.6), typicalStep(points, total), points);
 	const ringVertices = new Uint32Array(total);
 	const ringStarts: number[] = [];
 	const ringRegion: number[] = [];
@@ -38,11 +39,18 @@ export function outlinesOf(
 	for (const ring of eachRing(layer)) {
 		if (!isClosed(points, ring.from, ring.to)) repairs.closed.add(ring.feature);
 		const start = used;
+		const x0 = points[2 * ring.from];
+		const y0 = points[2 * ring.from + 1];
+		let [x, y, area, before] = [0, 0, 0, -1];
 		for (let i = ring.from; i < ring.to; i++) {
-			const v = table.at(points[2 * i], points[2 * i + 1]);
-			if (used === start || ringVertices[used - 1] !== v) ringVertices[used++] = v;
-			else if (!repairs.doubled.has(ring.feature))
-				repairs.doubled.set(ring.feature, [points[2 * i], points[2 * i + 1]]);
+			const lon = points[2 * i];
+			const lat = points[2 * i + 1];
+			area += x * (lat - y0) - (lon - x0) * y;
+			x = lon - x0;
+			y = lat - y0;
+			const v = table.at(lon, lat);
+			if (v !== before) ringVertices[used++] = before = v;
+			else if (!repairs.doubled.has(ring.feature)) repairs.doubled.set(ring.feature, [lon, lat]);
 		}
 		while (used > start + 1 && ringVertices[used - 1] === ringVertices[start]) used--;
 		if (used - start < 3) {
@@ -52,7 +60,6 @@ export function outlinesOf(
 				continue;
 			}
 		}
-		const area = doubleArea(points, ring.from, ring.to);
 		if (area > 0 === ring.isHole) {
 			ringVertices.subarray(start, used).reverse();
 			repairs.turned.add(ring.feature);
@@ -61,6 +68,9 @@ export function outlinesOf(
 		ringRegion.push(ring.feature);
 	}
 	ringStarts.push(used);
+	const room = new Room();
+	room.give(points.subarray(2 * table.count));
+	room.give(table.memory());
 	const outlines = {
 		positions: table.positions.subarray(0, 2 * table.count),
 		vertices: table.count,
@@ -69,7 +79,7 @@ export function outlinesOf(
 		ringRegion: Uint32Array.from(ringRegion),
 		regions: layer.regions,
 	};
-	return { outlines, repairs };
+	return { outlines, repairs, room };
 }
 
 /** Every ring of a layer with its feature; the first of a part is its outer ring. */

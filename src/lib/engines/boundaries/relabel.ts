@@ -3,7 +3,7 @@ import type { Outlines } from './outlines.ts';
 
 /** Features are matched before they are named; here they become regions, and those without one go. */
 export function relabel(noded: Noded, regionOf: Int32Array, regions: number): Noded {
-	const { outlines, segments, joined } = noded;
+	const { outlines, segments, joined, room } = noded;
 	for (const side of [segments.left, segments.right]) {
 		for (let s = 0; s < segments.count; s++) if (side[s] >= 0) side[s] = regionOf[side[s]];
 	}
@@ -12,6 +12,7 @@ export function relabel(noded: Noded, regionOf: Int32Array, regions: number): No
 		outlines: ringsOfRegions(outlines, regionOf, regions),
 		segments,
 		joined: { ...joined, regions: named },
+		room,
 	};
 }
 

@@ -1,3 +1,4 @@
+import type { Room } from '../geometry/room.ts';
 import type { Segments } from './segments.ts';
 
 /** A segment with the same region on both sides is inside it (two parts that touch, or a spike): left out. */
@@ -14,21 +15,32 @@ export class SegmentEnds {
 	private link: Int32Array;
 	/** how many end here; `many` for that or more */
 	private degrees: Uint8Array;
+	/** 1 where an arc must end */
+	private nodes: Uint8Array;
 	private crowds = new Map<number, number[]>();
 
 	constructor(
 		vertices: number,
 		private segments: Segments,
+		room: Room,
 	) {
-		this.first = new Int32Array(vertices);
-		this.link = new Int32Array(vertices);
-		this.degrees = new Uint8Array(vertices);
+		this.first = room.ints(vertices);
+		this.link = room.zeros(vertices);
+		this.degrees = room.zeroBytes(vertices);
 		const { low, high, count } = segments;
 		for (let i = 0; i < count; i++) {
 			if (!isKept(segments, i)) continue;
 			this.add(low[i], i);
 			this.add(high[i], i);
 		}
+		// asked for twice at most places, where one byte is nearer at hand than both segments
+		this.nodes = room.zeroBytes(vertices);
+		for (let v = 0; v < vertices; v++) if (this.endsArcs(v)) this.nodes[v] = 1;
+	}
+
+	/** Nothing may be asked any more. */
+	giveBack(room: Room): void {
+		for (const array of [this.first, this.link, this.degrees, this.nodes]) room.give(array);
 	}
 
 	degree(v: number): number {
@@ -48,6 +60,10 @@ export class SegmentEnds {
 
 	/** Where an arc must end: not exactly two segments, or two that do not divide the same pair. */
 	isNode(v: number): boolean {
+		return this.nodes[v] === 1;
+	}
+
+	private endsArcs(v: number): boolean {
 		const degree = this.degrees[v];
 		if (degree !== 2) return degree > 0;
 		const { left, right, low, high } = this.segments;

@@ -1,3 +1,4 @@
+import { Room } from '../geometry/room.ts';
 import type { Outlines } from './outlines.ts';
 
 /**
@@ -9,8 +10,8 @@ import type { Outlines } from './outlines.ts';
 export interface Segments {
 	count: number;
 	/** lower and higher vertex number */
-	low: Uint32Array;
-	high: Uint32Array;
+	low: Int32Array;
+	high: Int32Array;
 	/** region on the left and right of the walk from low to high, -1 for none */
 	left: Int32Array;
 	right: Int32Array;
@@ -20,9 +21,9 @@ export interface Segments {
 }
 
 /** Indexes every edge of every ring; rings are walked with their region on the left. */
-export function indexSegments(outlines: Outlines): Segments {
-	const index = new SegmentIndex(outlines.vertices, outlines.ringVertices.length);
-	const { ringVertices, ringStarts, ringRegion } = outlines;
+export function indexSegments(outlines: Outlines, room = new Room()): Segments {
+	const { ringVertices, ringStarts, ringRegion, vertices } = outlines;
+	const index = new SegmentIndex(vertices, ringRegion.length, ringVertices.length, room);
 	for (let ring = 0; ring < ringRegion.length; ring++) {
 		const end = ringStarts[ring + 1];
 		let from = ringVertices[end - 1];
@@ -38,21 +39,31 @@ class SegmentIndex {
 	/** first segment of each vertex and next of each segment, counted from 1; 0 for none */
 	private head: Int32Array;
 	private next: Int32Array;
-	private low: Uint32Array;
-	private high: Uint32Array;
+	private low: Int32Array;
+	private high: Int32Array;
 	private left: Int32Array;
 	private right: Int32Array;
 	private count = 0;
 	private previous = 0;
 	private twins: number[] = [];
 
-	constructor(vertices: number, most: number) {
-		this.head = new Int32Array(vertices);
-		this.next = new Int32Array(most);
-		this.low = new Uint32Array(most);
-		this.high = new Uint32Array(most);
-		this.left = new Int32Array(most);
-		this.right = new Int32Array(most);
+	/**
+	 * Where borders are drawn alike twice, there are about as many segments as vertices and rings (Euler's
+	 * formula); arrays for as many as the rings have are asked for only when these are full.
+	 */
+	constructor(
+		vertices: number,
+		rings: number,
+		private most: number,
+		private room: Room,
+	) {
+		const usual = Math.min(most, vertices + rings + 1024);
+		this.low = room.ints(usual);
+		this.high = room.ints(usual);
+		this.left = room.ints(usual);
+		this.right = room.ints(usual);
+		this.next = room.ints(usual);
+		this.head = room.zeros(vertices);
 	}
 
 	add(from: number, to: number, region: number): void {
@@ -73,6 +84,7 @@ class SegmentIndex {
 			}
 			twin = true;
 		}
+		if (this.count === this.low.length) this.grow();
 		const s = (this.previous = this.count++);
 		if (twin) this.twins.push(s);
 		this.low[s] = low;
@@ -92,8 +104,24 @@ class SegmentIndex {
 		return true;
 	}
 
+	private grow(): void {
+		const larger = (array: Int32Array) => {
+			const next = new Int32Array(this.most);
+			next.set(array);
+			this.room.give(array);
+			return next;
+		};
+		this.low = larger(this.low);
+		this.high = larger(this.high);
+		this.left = larger(this.left);
+		this.right = larger(this.right);
+		this.next = larger(this.next);
+	}
+
 	segments(): Segments {
 		const { count, twins } = this;
+		this.room.give(this.next);
+		this.room.give(this.head);
 		return {
 			count,
 			parallel: twins.length,

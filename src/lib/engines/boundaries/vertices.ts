@@ -34,14 +34,17 @@ export class VertexTable {
 	 * `west`: the least longitude that will be asked for; longitudes span at most 429 degrees.
 	 * `expected`: how many vertices there will be, about; at most 67 million can be told apart.
 	 * `step`: how far apart two vertices of an outline mostly are, in degrees; only speed depends on it.
+	 * `memory`: where the positions are to stand, if given: that of the points that are asked for in turn
+	 * will do, since no more vertices are known at any time than points were asked for.
 	 */
 	constructor(
 		private west: number,
 		expected: number,
 		step: number,
+		memory?: Float64Array,
 	) {
 		const capacity = Math.max(1024, expected);
-		this.positions = new Float64Array(2 * capacity);
+		this.positions = memory ?? new Float64Array(2 * capacity);
 		this.slots = new Int32Array(2 ** Math.ceil(Math.log2(capacity * 1.25)));
 		const cells = Math.max(1, step * gridPerDegree * stepsInTile);
 		this.tile = Math.min(31, Math.round(Math.log2(cells)));
@@ -93,6 +96,11 @@ export class VertexTable {
 		return v;
 	}
 
+	/** The memory of the hash, once no more vertices will be asked for. */
+	memory(): Int32Array {
+		return this.slots;
+	}
+
 	private isAt(v: number, x: number, y: number): boolean {
 		return this.column(this.positions[2 * v]) === x && row(this.positions[2 * v + 1]) === y;
 	}
@@ -119,7 +127,10 @@ export class VertexTable {
 		const { positions, count } = this;
 		if (count > numberMask / 2) throw new RangeError('too many vertices for one table');
 		this.slots = new Int32Array(this.slots.length * 2);
-		this.positions = new Float64Array(4 * count + 128);
+		if (2 * count === positions.length) {
+			this.positions = new Float64Array(4 * count + 128);
+			this.positions.set(positions);
+		}
 		this.count = 0;
 		for (let v = 0; v < count; v++) this.hashed(positions[2 * v], positions[2 * v + 1]);
 	}

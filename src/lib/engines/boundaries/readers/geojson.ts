@@ -40,10 +40,14 @@ export async function readGeoJson(
 	const json = new JsonBytes(limits.nesting);
 	const reader = new RootReader(json, layer);
 	const window = new Window(source, json);
-	while (await window.more()) {
-		if (watch.cancelled?.()) throw new Cancelled();
-		watch.progress?.(`Reading features (${layer.regions} so far)`, window.share());
-		while (step(reader, window));
+	try {
+		while (await window.more()) {
+			if (watch.cancelled?.()) throw new Cancelled();
+			watch.progress?.(`Reading features (${layer.regions} so far)`, window.share());
+			while (step(reader, window));
+		}
+	} finally {
+		await window.close();
 	}
 	layer.encoding = json.encoding;
 	return layer;

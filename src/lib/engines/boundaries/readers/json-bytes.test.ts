@@ -2,9 +2,12 @@ import fc from 'fast-check';
 import { expect, it } from 'vitest';
 import { JsonBytes } from './json-bytes.ts';
 
-function numberIn(text: string): number {
+function numberIn(text: string, room = 1): number {
 	const json = new JsonBytes(64);
-	json.bytes = new TextEncoder().encode(text);
+	const bytes = new TextEncoder().encode(text);
+	const memory = new Uint8Array(bytes.length + room);
+	memory.set(bytes);
+	json.hold(memory, bytes.length);
 	json.last = true;
 	return json.number();
 }
@@ -25,6 +28,7 @@ it('reads any decimal as the nearest double', () =>
 				const point = fraction === null ? '' : `.${fraction}`;
 				const text = sign + whole + point + (exponent === null ? '' : `e${exponent}`);
 				expect(numberIn(text + after)).toBe(Number(text));
+				expect(numberIn(text + after, 0)).toBe(Number(text));
 			},
 		),
 		{ numRuns: 3000 },

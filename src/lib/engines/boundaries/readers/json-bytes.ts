@@ -22,6 +22,8 @@ const utf8 = new TextDecoder('utf-8', { fatal: true });
 /** Reads JSON values (RFC 8259) out of a window of bytes that slides along a file. */
 export class JsonBytes {
 	bytes: Uint8Array = new Uint8Array(0);
+	/** the same with a zero behind it, so that a walk along digits ends without asking where the bytes do */
+	private padded = this.bytes;
 	at = 0;
 	/** file offset of the window's first byte */
 	base = 0;
@@ -33,6 +35,14 @@ export class JsonBytes {
 	encoding = 'UTF-8';
 
 	constructor(private nesting: number) {}
+
+	/** Takes the first `length` bytes of a memory for its window; the byte after them is lost, if there is one. */
+	hold(memory: Uint8Array, length: number): void {
+		this.bytes = this.padded = memory.subarray(0, length);
+		if (memory.length === length) return;
+		memory[length] = 0;
+		this.padded = memory.subarray(0, length + 1);
+	}
 
 	/** The next byte that is not white space, not taken. */
 	peek(): number {
@@ -66,7 +76,7 @@ export class JsonBytes {
 
 	/** Takes the next byte that is not white space if it is this one. */
 	takes(wanted: number): boolean {
-		if (this.bytes[this.at] !== wanted && this.peek() !== wanted) return false;
+		if (this.padded[this.at] !== wanted && this.peek() !== wanted) return false;
 		this.at++;
 		return true;
 	}
@@ -76,7 +86,8 @@ export class JsonBytes {
 	 * divided by a power of ten that is itself exact is rounded once.
 	 */
 	number(): number {
-		const bytes = this.bytes;
+		const bytes = this.padded;
+		const end = this.bytes.length;
 		if (!(bytes[this.at] > 32)) this.peek();
 		const start = this.at;
 		let at = start;
@@ -93,9 +104,9 @@ export class JsonBytes {
 			const point = ++at;
 			for (c = bytes[at]; c >= 48 && c <= 57; c = bytes[++at]) fraction = fraction * 10 + (c - 48);
 			scale = at - point;
-			if (scale === 0 && at < bytes.length) digits = 0;
+			if (scale === 0 && at < end) digits = 0;
 		}
-		if (at >= bytes.length) this.ended();
+		if (at >= end) this.ended();
 		if (digits === 0) throw this.badNumber();
 		this.at = at;
 		if (scale < 23 && c !== 101 && c !== 69) {

@@ -17,7 +17,7 @@ export async function readTopoJson(
 ): Promise<RawLayer> {
 	const bytes = await wholeFile(source, Math.min(options.limits.wholeBytes, 2 ** 29 - 24));
 	const json = new JsonBytes(options.limits.nesting);
-	json.bytes = bytes;
+	json.hold(bytes, bytes.length);
 	json.last = true;
 	if (bytes[0] === 0xef) json.at = 3;
 	const topology = json.value() as Topology;

@@ -1,8 +1,30 @@
 import { Refusal } from '../refusal.ts';
-import type { ByteSource } from '../options.ts';
+import type { ByteReader, ByteSource } from '../options.ts';
 import type { JsonBytes } from './json-bytes.ts';
 
 const usualBytes = 1024 * 1024;
+
+/** Reads chunks into a memory; what does not fit of one is kept for the next time. */
+function readerOf(source: AsyncIterable<Uint8Array>): ByteReader {
+	const chunks = source[Symbol.asyncIterator]();
+	let rest: Uint8Array = new Uint8Array(0);
+	return {
+		async read(memory) {
+			while (rest.length === 0) {
+				const { value, done } = await chunks.next();
+				if (done) return 0;
+				rest = value;
+			}
+			const taken = rest.subarray(0, memory.length);
+			memory.set(taken);
+			rest = rest.subarray(taken.length);
+			return taken.length;
+		},
+		async close() {
+			await chunks.return?.();
+		},
+	};
+}
 
 /**
  * Slides the reader's window along a file: what was not used is kept, and what follows is added.
@@ -11,7 +33,7 @@ const usualBytes = 1024 * 1024;
  */
 export class Window {
 	done = false;
-	private chunks: AsyncIterator<Uint8Array>;
+	private input: ByteReader;
 	private readBytes = 0;
 	private memory = new Uint8Array(2 * usualBytes);
 
@@ -19,45 +41,36 @@ export class Window {
 		private source: ByteSource,
 		private json: JsonBytes,
 	) {
-		this.chunks = source.chunks()[Symbol.asyncIterator]();
+		this.input = source.reader?.() ?? readerOf(source.chunks());
 	}
 
 	/** True when there is something to read; false when the reader is done. */
 	async more(): Promise<boolean> {
 		const { json } = this;
-		if (this.done) {
-			await this.chunks.return?.();
-			return false;
-		}
+		if (this.done) return false;
 		const kept = json.bytes.subarray(json.at);
-		const helping = Math.max(usualBytes, kept.length);
-		this.reserve(kept.length + helping);
+		const wanted = kept.length + Math.max(usualBytes, kept.length);
+		// one byte more, for the end mark that the reader sets
+		if (wanted >= this.memory.length) this.memory = new Uint8Array(Math.ceil(wanted * 1.5));
 		this.memory.set(kept);
 		let length = kept.length;
-		while (length < kept.length + helping && !json.last) {
-			const { value, done } = await this.chunks.next();
-			if (done) json.last = true;
-			else {
-				this.reserve(length + value.length, length);
-				this.memory.set(value, length);
-				length += value.length;
-			}
+		while (length < wanted && !json.last) {
+			const added = await this.input.read(this.memory.subarray(length, wanted));
+			if (added === 0) json.last = true;
+			length += added;
 		}
 		const added = length - kept.length;
 		json.base += json.at;
 		json.at = 0;
-		json.bytes = this.memory.subarray(0, length);
+		json.hold(this.memory, length);
 		if (this.readBytes === 0) this.checkStart();
 		this.readBytes += added;
 		return true;
 	}
 
-	/** Makes room for so many bytes; the first `held` are kept. */
-	private reserve(bytes: number, held = 0): void {
-		if (bytes <= this.memory.length) return;
-		const larger = new Uint8Array(Math.ceil(bytes * 1.5));
-		larger.set(this.memory.subarray(0, held));
-		this.memory = larger;
+	/** Lets go of the source, whether or not all of it was read. */
+	async close(): Promise<void> {
+		await this.input.close();
 	}
 
 	share(): number {
