@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import type { Draft } from '../engines/editions/draft.ts';
+import { goalKinds } from '../engines/colouring/goal-wish.ts';
+import { mostDifferent, type Draft } from '../engines/editions/draft.ts';
 import { papers } from '../engines/sheet/layout.ts';
 
 /** The shape and limits of a draft as it arrives from outside; `Draft` says what each part means. */
@@ -12,6 +13,10 @@ export const mostWaterKm = 200;
 
 const key = z.string().min(1).max(400);
 const inkNumber = z.int().min(0).max(255);
+const sheetNumber = z
+	.int()
+	.min(1)
+	.max(2 ** 31 - 1);
 const reason = z.string().max(1_000);
 
 export const ink = z.strictObject({
@@ -22,6 +27,31 @@ export const ink = z.strictObject({
 const lock = z.strictObject({
 	ink: inkNumber,
 	cost: z.number().positive().max(1e9),
+	by: z.string().max(200).optional(),
+	at: z.string().max(40).optional(),
+	tie: sheetNumber.optional(),
+});
+
+const groupRule = z
+	.strictObject({
+		kind: z.enum(['alike', 'different']),
+		name: z.string().min(1).max(200),
+		keys: z.array(key).min(2).max(mostRules),
+	})
+	.refine(({ kind, keys }) => kind === 'alike' || keys.length <= mostDifferent, {
+		message: `at most ${mostDifferent} regions can all be kept different`,
+	});
+
+const goalWish = z.strictObject({
+	kind: z.enum(goalKinds),
+	give: z.number().min(0).max(1),
+});
+
+const edgeTie = z.strictObject({
+	sheet: sheetNumber,
+	name: z.string().max(400),
+	edition: z.int().min(1).nullable(),
+	revision: z.int().min(0),
 	by: z.string().max(200).optional(),
 	at: z.string().max(40).optional(),
 });
@@ -62,9 +92,15 @@ export const draftDocument = z.strictObject({
 		inks: z.array(ink).min(1).max(64),
 	}),
 	locks: z.record(key, lock),
-	forbidden: z.array(z.strictObject({ key, ink: inkNumber })).max(mostRules),
+	forbidden: z
+		.array(z.strictObject({ key, ink: inkNumber, tie: sheetNumber.optional() }))
+		.max(mostRules),
 	alike: z.array(z.tuple([key, key])).max(mostRules),
 	apart: z.array(z.tuple([key, key])).max(mostRules),
+	groups: z.array(groupRule).max(10_000).default([]),
+	reserved: z.array(inkNumber).max(64).default([]),
+	goals: z.array(goalWish).max(goalKinds.length).default([]),
+	ties: z.array(edgeTie).max(100).default([]),
 	pointTouches: z.boolean(),
 	leastMetres: z.number().min(0).max(1_000_000).default(0),
 	waterKm: z.number().min(0).max(mostWaterKm).nullable().default(null),
@@ -78,5 +114,10 @@ export const draftDocument = z.strictObject({
 export const saveDraft = z.strictObject({
 	revision: z.int().min(0),
 	document: draftDocument,
+	/**
+	 * ink of each region as the sender shows it, where it was arranged towards goals or brought back by undo;
+	 * taken over if it keeps every rule with no more inks than are needed, else the draft is coloured afresh
+	 */
+	inks: z.array(inkNumber).max(2_000_000).optional(),
 });
 export type SaveDraft = z.infer<typeof saveDraft>;

@@ -10,6 +10,8 @@ export const colouringParts = (draft: Draft): readonly unknown[] => [
 	draft.forbidden,
 	draft.alike,
 	draft.apart,
+	draft.groups,
+	draft.reserved,
 	draft.pointTouches,
 	draft.leastMetres,
 	draft.waterKm,

@@ -17,6 +17,10 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 			forbidden: members(base.forbidden, mine.forbidden, theirs.forbidden),
 			alike: members(base.alike, mine.alike, theirs.alike),
 			apart: members(base.apart, mine.apart, theirs.apart),
+			groups: members(base.groups, mine.groups, theirs.groups),
+			reserved: members(base.reserved, mine.reserved, theirs.reserved),
+			goals: pick('goals', base.goals, mine.goals, theirs.goals),
+			ties: members(base.ties, mine.ties, theirs.ties),
 			pointTouches: pick(
 				'point touches',
 				base.pointTouches,

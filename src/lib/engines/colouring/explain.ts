@@ -108,7 +108,7 @@ class Explaining {
 		const rules = blamedRules(this.problem, this.of, among, this.purse());
 		const named = rules.flatMap((rule) => {
 			if (rule.kind === 'inks') return [];
-			return rule.kind === 'forbidden' ? [rule.region] : [rule.a, rule.b];
+			return 'region' in rule ? [rule.region] : [rule.a, rule.b];
 		});
 		return {
 			locks: [],

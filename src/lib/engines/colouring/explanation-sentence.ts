@@ -50,6 +50,8 @@ function oneRule(rule: Rule, nameOf: Name, inkName: Name): string {
 			return `keep ${nameOf(rule.a)} and ${nameOf(rule.b)} apart`;
 		case 'forbidden':
 			return `${inkName(rule.ink)} forbidden for ${nameOf(rule.region)}`;
+		case 'reserved':
+			return `${inkName(rule.ink)} reserved, and ${nameOf(rule.region)} not locked to it`;
 		case 'inks':
 			return `only ${counted(rule.inks, 'ink')}`;
 	}

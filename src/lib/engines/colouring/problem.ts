@@ -14,6 +14,8 @@ export interface ColouringProblem {
 	lockCosts?: Float64Array;
 	/** [region, ink] pairs that may not be */
 	forbidden?: readonly (readonly [number, number])[];
+	/** inks that a region has only when it, or a region kept alike with it, is locked to them */
+	reserved?: readonly number[];
 	alike?: readonly (readonly [number, number])[];
 	apart?: readonly (readonly [number, number])[];
 	/** an earlier colouring, -1 where a region had none */
@@ -48,7 +50,7 @@ export interface Proof {
 
 export type Rule =
 	| { kind: 'border' | 'alike' | 'apart'; a: number; b: number }
-	| { kind: 'forbidden'; region: number; ink: number }
+	| { kind: 'forbidden' | 'reserved'; region: number; ink: number }
 	| { kind: 'inks'; inks: number };
 
 export interface Release {

@@ -1,3 +1,4 @@
+import type { GoalWish } from '../colouring/goal-wish.ts';
 import type { Ink } from '../palettes/palette.ts';
 import type { SheetLayout } from '../sheet/layout.ts';
 
@@ -9,10 +10,18 @@ export interface Draft {
 	inks: number | 'fewest';
 	palette: { id: string; name: string; inks: Ink[] };
 	/** region key -> pinned ink (number from 0), what dropping it costs, and who set it when */
-	locks: Record<string, { ink: number; cost: number; by?: string; at?: string }>;
-	forbidden: { key: string; ink: number }[];
+	locks: Record<string, Lock>;
+	forbidden: ForbiddenInk[];
 	alike: [string, string][];
 	apart: [string, string][];
+	/** rules for many regions at once */
+	groups: GroupRule[];
+	/** inks (from 0) that no region gets unless it is locked to them */
+	reserved: number[];
+	/** what to aim for among the colourings that keep every rule, the most important first */
+	goals: GoalWish[];
+	/** adjoining sheets whose inks bind regions along this sheet's edge */
+	ties: EdgeTie[];
 	/** whether regions that meet in a point only must differ */
 	pointTouches: boolean;
 	/** a shared line shorter than this does not count, in metres; 0: every line does */
@@ -27,6 +36,50 @@ export interface Draft {
 	layout: SheetLayout;
 }
 
+export interface Lock {
+	ink: number;
+	/** what dropping it costs: its weight */
+	cost: number;
+	by?: string;
+	at?: string;
+	/** number of the adjoining sheet that asks for it; absent when somebody set it */
+	tie?: number;
+}
+
+export interface ForbiddenInk {
+	key: string;
+	ink: number;
+	/** number of the adjoining sheet whose region across the edge has this ink */
+	tie?: number;
+}
+
+/** All regions named alike, or every one different from every other; listed in full, not by column. */
+export interface GroupRule {
+	kind: 'alike' | 'different';
+	/** "Province Nord": unique among the groups of a draft with the same kind */
+	name: string;
+	/** two or more; `different` at most `mostDifferent` */
+	keys: string[];
+}
+
+/** More could not be told apart on paper, and each would need an ink of its own. */
+export const mostDifferent = 64;
+
+/**
+ * That regions along the edge follow an adjoining sheet of the team as it was then. What follows from it
+ * stands among the locks and forbidden inks, marked with the number of that sheet.
+ */
+export interface EdgeTie {
+	/** number of the adjoining sheet */
+	sheet: number;
+	name: string;
+	/** the edition whose inks are followed, or null for the draft's revision */
+	edition: number | null;
+	revision: number;
+	by?: string;
+	at?: string;
+}
+
 /** A pair of regions decided by hand: why, by whom and when. */
 export interface HandBorder {
 	a: string;
@@ -37,9 +90,17 @@ export interface HandBorder {
 }
 
 /** What a document says that was written before these were asked. */
-const unasked = { leastMetres: 0, waterKm: null };
+const unasked = (): Pick<Draft, Unasked> => ({
+	leastMetres: 0,
+	waterKm: null,
+	groups: [],
+	reserved: [],
+	goals: [],
+	ties: [],
+});
+type Unasked = 'leastMetres' | 'waterKm' | 'groups' | 'reserved' | 'goals' | 'ties';
 
 /** A stored document as a draft of today: what it does not say yet is as it was before it could be said. */
 export const wholeDraft = (
-	document: Omit<Draft, keyof typeof unasked> & Partial<Pick<Draft, keyof typeof unasked>>,
-): Draft => ({ ...unasked, ...document });
+	document: Omit<Draft, Unasked> & Partial<Pick<Draft, Unasked>>,
+): Draft => ({ ...unasked(), ...document });

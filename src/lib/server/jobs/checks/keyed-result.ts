@@ -35,6 +35,6 @@ const named = (keys: Keys, regions: readonly number[]) => regions.map((region) =
 
 function ruleByKey(keys: Keys, rule: Rule) {
 	if (rule.kind === 'inks') return rule;
-	if (rule.kind === 'forbidden') return { ...rule, region: keys[rule.region] };
+	if ('region' in rule) return { ...rule, region: keys[rule.region] };
 	return { kind: rule.kind, a: keys[rule.a], b: keys[rule.b] };
 }
