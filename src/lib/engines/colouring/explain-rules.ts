@@ -110,7 +110,7 @@ class RuleClauses {
 		if (rule.kind === 'inks') return;
 		const off = -this.sat.newVariable();
 		this.switches.push(-off);
-		if (rule.kind === 'forbidden' || rule.kind === 'reserved') {
+		if ('region' in rule) {
 			this.sat.addClause([off, -this.has(rule.region, rule.ink)]);
 			return;
 		}
