@@ -7,6 +7,7 @@ import { explain } from './explain.ts';
 import { problemFaults } from './faults.ts';
 import { fewestInks, type FewestOutcome } from './fewest.ts';
 import { towardsGoal } from './goal.ts';
+import { mendedPrevious } from './mended-previous.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
@@ -63,7 +64,9 @@ function search(
 	const exact = (inks: number) => exactColouring(prepared, inks, settings);
 	const lowest = Math.max(bound.inks, prepared.inksLocked);
 	if (problem.inks === 'fewest') {
-		return fewestInks(lowest, lowest + problem.regions, quick, exact) ?? 'undecided';
+		const atHand = (fewerThan: number) => mendedPrevious(problem, prepared, settings, fewerThan);
+		const tries = { quick, exact, atHand, told: problem.bounds };
+		return fewestInks(lowest, lowest + problem.regions, tries) ?? 'undecided';
 	}
 	const { inks } = problem;
 	if (inks < lowest) return 'impossible';
