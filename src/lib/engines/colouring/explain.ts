@@ -60,7 +60,7 @@ class Explaining {
 		}
 		const { clashes, ...found } = await cheapestRelease(this.of, this.whole, this.purse(), {
 			unmet,
-			rows: EFFORT[this.problem.effort ?? 'normal'].rows,
+			rows: this.effort().rows,
 			seed: this.seed,
 		});
 		const release: Release = {
@@ -80,8 +80,14 @@ class Explaining {
 	}
 
 	private purse(): Purse {
-		const { each, all } = EFFORT[this.problem.effort ?? 'normal'];
+		const { each, all } = this.effort();
 		return new Purse(all, each, this.problem.cancelled);
+	}
+
+	private effort() {
+		const { effort = 'normal', effortTimes = 1 } = this.problem;
+		const { each, all, rows } = EFFORT[effort];
+		return { each: each * effortTimes, all: all * effortTimes, rows: rows * effortTimes };
 	}
 
 	private ask(demands: Iterable<number>, purse: Purse) {
