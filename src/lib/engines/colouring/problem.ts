@@ -32,6 +32,8 @@ export interface ColouringProblem {
 	/** asked between steps; true ends the run with the best so far */
 	cancelled?: () => boolean;
 	progress?: (message: string, share: number) => void;
+	/** told of every better release of colliding locks and every better bound, while it is worked out */
+	releaseFound?: (soFar: Release) => void;
 }
 
 export type ProofKind =
