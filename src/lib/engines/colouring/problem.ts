@@ -39,6 +39,8 @@ export interface ColouringProblem {
 	/** told whenever more is known: no fewer than so many inks do; so many do, or null while none is found */
 	bounds?: (atLeast: number, enough: number | null) => void;
 	progress?: (message: string, share: number) => void;
+	/** told of every better release of colliding locks and every better bound, while it is worked out */
+	releaseFound?: (soFar: Release) => void;
 }
 
 export type ProofKind =
