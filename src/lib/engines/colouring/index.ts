@@ -14,3 +14,5 @@ export { checkExplanation } from './explain-check.ts';
 export { explanationSentence } from './explanation-sentence.ts';
 export { problemFaults } from './faults.ts';
 export { proofSentence } from './proof-sentence.ts';
+export { collisionProof, proofFile, proofText, type ProofFile } from './proofs/index.ts';
+export { checkProofFile, checkProofText, type ProofChecked } from './proofs/check/index.ts';
