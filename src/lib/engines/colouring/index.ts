@@ -14,5 +14,13 @@ export { checkExplanation } from './explain-check.ts';
 export { explanationSentence } from './explanation-sentence.ts';
 export { problemFaults } from './faults.ts';
 export { proofSentence } from './proof-sentence.ts';
-export { collisionProof, proofFile, proofText, type ProofFile } from './proofs/index.ts';
+export {
+	collisionProof,
+	openProof,
+	proofFile,
+	proofText,
+	type OpenProof,
+	type ProofFile,
+	type RegionNames,
+} from './proofs/index.ts';
 export { checkProofFile, checkProofText, type ProofChecked } from './proofs/check/index.ts';

@@ -29,7 +29,7 @@ export function pairsApart({ borders, apart }: ColouringProblem, regions: readon
 
 /** The clauses of a part, numbered as a proof file says. */
 export function partClauses(part: Part): number[][] {
-	const { problem, regions, inks, locks } = part;
+	const { problem, regions, inks } = part;
 	const place = new Map(regions.map((region, i) => [region, i]));
 	const variable = (i: number, c: number) => i * inks.length + c + 1;
 	const each = inks.map((_, c) => c);
