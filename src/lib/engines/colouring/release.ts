@@ -22,8 +22,9 @@ const QUICK_CHOICES = 3;
 const NODES = 100;
 
 /**
- * The cheapest demands to drop so that the rest can be met, where dropping every demand is known to
- * work. `rows` are the sets that may be handed to the integer program, counted at each choice.
+ * The cheapest demands to drop so that the rest can be met, where dropping `unmet` is known to work: an
+ * assignment leaves just them unmet. What is dropped is always such a list, so that a reserved ink that
+ * went with a lock is not had without it. `rows` are the sets that may be handed to the integer program, counted at each choice.
  *
  * Method: implicit hitting sets (Chandrasekaran et al. 2013; Davies and Bacchus 2011). A cheapest
  * choice that meets every clash known is dropped; if the rest still clashes, the new clash is shrunk and
@@ -34,9 +35,9 @@ export async function cheapestRelease(
 	of: Case,
 	whole: Whole,
 	purse: Purse,
-	{ rows, seed }: { rows: number; seed: number },
+	{ rows, seed, unmet }: { rows: number; seed: number; unmet: number[] },
 ): Promise<CheapestRelease> {
-	const search = new ReleaseSearch(of, whole, purse, seed);
+	const search = new ReleaseSearch(of, whole, purse, seed, unmet);
 	while (search.rows < rows && !search.closed && !purse.empty) {
 		if (!(await search.round())) break;
 	}
@@ -58,10 +59,11 @@ class ReleaseSearch {
 		private whole: Whole,
 		private purse: Purse,
 		private seed: number,
+		unmet: number[],
 	) {
 		this.clashes = whole.immediate.map((demands) => ({ demands, vertices: [] }));
 		this.costs = Float64Array.from(of.demands, (demand) => demand.cost);
-		this.best = of.demands.map((_, d) => d);
+		this.best = unmet;
 		this.bestCost = this.costOf(this.best);
 	}
 
