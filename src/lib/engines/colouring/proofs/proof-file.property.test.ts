@@ -18,6 +18,7 @@ const map = fc.integer({ min: 3, max: 7 }).chain((regions) => {
 		apart: pairs(2),
 		alike: pairs(2),
 		forbidden: fc.array(fc.tuple(region, fc.nat(3)), { maxLength: 4 }),
+		reserved: fc.array(fc.nat(4), { maxLength: 2 }),
 		locks: fc.array(fc.integer({ min: -6, max: 3 }), { minLength: regions, maxLength: regions }),
 		inks: fc.oneof(fc.constant('fewest' as const), fc.integer({ min: 1, max: 4 })),
 	});
