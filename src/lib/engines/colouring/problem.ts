@@ -54,6 +54,8 @@ export type ProofKind =
 export interface Proof {
 	kind: ProofKind;
 	regions: number[];
+	/** the pairs among `regions` that a refutation needs; all of them when absent */
+	borders?: [number, number][];
 	refutation?: { inks: number; format: 'drup'; clauses: string };
 }
 
