@@ -111,7 +111,7 @@ describe('rules as a table', () => {
 					expect(replaceRules(blankDraft(), found.parts)).toEqual(draft);
 				}
 			}),
-			{ numRuns: 300 },
+			{ numRuns: 150 },
 		);
 	});
 

@@ -1,6 +1,8 @@
 import { csvField } from '../measures/text/csv-field.ts';
 import type { SheetRow } from '../sheet/index.ts';
 
+export { csvField };
+
 const columns = ['key', 'name', 'group', 'ink number', 'ink', 'hex', 'area km2'];
 
 /**
