@@ -10,7 +10,9 @@ import {
 import { actions, allows, may, roles, type Action } from '../../src/lib/server/access/roles.ts';
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
 import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
+import { columnOfSheet } from '../../src/lib/server/services/column-values.service.ts';
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
+import { replaceRulesByFile, rulesFile } from '../../src/lib/server/services/rules-csv.service.ts';
 import { sheetPieces } from '../../src/lib/server/services/pieces.service.ts';
 import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
@@ -276,6 +278,13 @@ const walk: Walk = {
 		(member) => borderFile(shop, member, 99, 'csv', new AbortController().signal),
 	],
 	measureSheetGaps: ['borders.edit', (member) => measureSheetGaps(shop, member, 99, 10)],
+	columnOfSheet: ['sheet.read', (member) => columnOfSheet(shop, member, 99, 'name')],
+	rulesFile: ['sheet.read', (member) => rulesFile(shop, member, 99, new AbortController().signal)],
+	replaceRulesByFile: [
+		'colours.edit',
+		(member) =>
+			replaceRulesByFile(shop, member, 99, new Uint8Array(), new AbortController().signal),
+	],
 	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
