@@ -279,7 +279,7 @@ const walk: Walk = {
 	sheetProof: [
 		'sheet.read',
 		(member) => {
-			const asked = { revision: null, format: 'json' } as const;
+			const asked = { format: 'json' } as const;
 			return sheetProof(shop, member, 99, asked, new AbortController().signal);
 		},
 	],

@@ -4,8 +4,9 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { checkProofText } from '../../src/lib/engines/colouring/index.ts';
 import { Forbidden, type Member } from '../../src/lib/server/access/member.ts';
 import { saveDraft } from '../../src/lib/server/services/draft.service.ts';
+import { issueEdition } from '../../src/lib/server/services/edition.service.ts';
 import { Conflict, NotFound } from '../../src/lib/server/services/outcomes.ts';
-import { revisionAsked, sheetProof } from '../../src/lib/server/services/proof.service.ts';
+import { proofAsked, sheetProof } from '../../src/lib/server/services/proof.service.ts';
 import { deskSheet } from '../../src/lib/server/services/sheet.service.ts';
 import { createMember, createWorkshop, ingest, type TestWorkshop } from '../support/workshop.ts';
 
@@ -20,9 +21,9 @@ beforeAll(async () => {
 afterAll(() => shop.close());
 
 const desk = () => deskSheet(shop, maker, 1);
-const proof = (format: 'json' | 'zip', revision: number | null = null, sheet = 1) =>
+const proof = (format: 'json' | 'zip', revision?: number, sheet = 1) =>
 	sheetProof(shop, maker, sheet, { revision, format }, new AbortController().signal);
-const checked = async (revision: number | null = null) => {
+const checked = async (revision?: number) => {
 	const { bytes } = await proof('json', revision);
 	return checkProofText(new TextDecoder().decode(bytes));
 };
@@ -60,12 +61,26 @@ describe('the proof of a sheet', () => {
 		expect((await checked(revision)).claims[1]).toContain('3 inks or fewer');
 	});
 
+	it('of an edition is that of the draft it was issued from', async () => {
+		const approver = await createMember(shop.db, 'proofs', 'approver');
+		const { draft, revision } = await desk();
+		await saveDraft(shop, maker, 1, { revision, document: { ...draft, locks: {} } });
+		await issueEdition(shop, approver, 1, revision + 1, '');
+		const { draft: later } = await desk();
+		const document = { ...later, inks: 5 };
+		await saveDraft(shop, maker, 1, { revision: revision + 1, document });
+		const of = (edition: number) =>
+			sheetProof(shop, maker, 1, { edition, format: 'json' }, new AbortController().signal);
+		expect((await of(1)).name).toContain(`revision-${revision + 1}-`);
+		await expect(of(2)).rejects.toBeInstanceOf(NotFound);
+	});
+
 	it('is for members who may read the sheet, and only where there is one', async () => {
 		await expect(proof('json', 99)).rejects.toBeInstanceOf(NotFound);
 		await expect(proof('json', NaN)).rejects.toBeInstanceOf(NotFound);
-		await expect(proof('json', null, 2)).rejects.toBeInstanceOf(NotFound);
+		await expect(proof('json', undefined, 2)).rejects.toBeInstanceOf(NotFound);
 		const nobody = { ...maker, roles: [] };
-		const asked = { revision: null, format: 'json' } as const;
+		const asked = { format: 'json' } as const;
 		await expect(
 			sheetProof(shop, nobody, 1, asked, new AbortController().signal),
 		).rejects.toBeInstanceOf(Forbidden);
@@ -83,10 +98,12 @@ describe('the proof of a sheet', () => {
 	});
 });
 
-it('reads the revision of an address, and refuses what is none', () => {
+it('reads the revision of an address, and finds none where it is no number', () => {
 	const asked = (query: string) =>
-		revisionAsked(new URL(`https://maps.example/proof.json${query}`));
-	expect([asked(''), asked('?revision=7'), asked('?revision=-1'), asked('?revision=x')]).toEqual([
-		...[null, 7, NaN, NaN],
-	]);
+		proofAsked(new URL(`https://maps.example/proof.json${query}`), 'json');
+	expect(asked('')).toEqual({ format: 'json' });
+	expect(asked('?revision=7')).toEqual({ format: 'json', revision: 7 });
+	expect(asked('?edition=2')).toEqual({ format: 'json', edition: 2 });
+	expect(asked('?revision=-1').revision).toBeNaN();
+	expect(asked('?edition=x').edition).toBeNaN();
 });

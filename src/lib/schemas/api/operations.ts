@@ -101,7 +101,7 @@ export const operations = {
 	readProof: {
 		...{ method: 'GET', path: `${sheet}/proof`, scope: 'sheets:read', status: 200 },
 		summary:
-			'The proof file of the draft’s colouring, or of its collision; ?revision= of an earlier draft.',
+			'The proof file of the draft’s colouring, or of its collision; ?revision= of an earlier draft, ?edition= of an edition.',
 		...{ answer: proofRequest, refusals: [409, 503] },
 	},
 	readRules: {

@@ -1,12 +1,14 @@
 import type { ColouringResult, Proof } from '../../engines/colouring/index.ts';
 import { requireAccess, type Member } from '../access/member.ts';
+import type { Db } from '../database/connection.ts';
 import type { ProofFormat } from '../jobs/proof.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import type { DraftRow } from '../repositories/sheets.repository.ts';
+import { listEditions } from '../repositories/editions.repository.ts';
+import type { DraftRow, SheetRecord } from '../repositories/sheets.repository.ts';
 import { boundaryView } from './boundary-view.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem } from './drawing.service.ts';
-import { Conflict } from './outcomes.ts';
+import { Conflict, NotFound } from './outcomes.ts';
 
 const mediaTypes: Record<ProofFormat, string> = {
 	json: 'application/json; charset=utf-8',
@@ -25,29 +27,44 @@ export interface ProofBytes {
 	bytes: Uint8Array;
 }
 
+/** Of which state of a sheet, and in which form; without `revision` and `edition` the draft as it is now. */
+export interface ProofAsked {
+	revision?: number;
+	edition?: number;
+	format: ProofFormat;
+}
+
 /**
  * The proof of a draft's colouring, or of the collision where it has none: as a proof file, or in the
- * open forms as a zip. `revision` null is the draft as it is now; an edition's is that of its draft.
+ * open forms as a zip. An edition's is that of the draft it was issued from.
  */
 export async function sheetProof(
 	shop: Pick<Workshop, 'db' | 'pool'>,
 	member: Member,
 	number: number,
-	{ revision, format }: { revision: number | null; format: ProofFormat },
+	asked: ProofAsked,
 	asker: AbortSignal,
 ): Promise<ProofBytes> {
 	requireAccess(member, 'sheet.read');
 	const sheet = await sheetOf(shop.db, member, number);
-	const row = await draftOf(shop.db, sheet.id, revision ?? sheet.revision);
+	const row = await draftOf(shop.db, sheet.id, await revisionOf(shop.db, sheet, asked));
 	const result = storedResult(row);
 	if (!result) throw new Conflict('nothing-shown', whyMissing['nothing-shown']);
 	const { keys, names, borders } = await boundaryView(shop.db, row.boundary_set_id);
+	const { format } = asked;
 	const draft = documentOf(row);
 	const input = { title: sheet.name, keys, names, borders, draft, result, format };
 	const written = await shop.pool.run('writeProof', input, { signal: asker });
 	if ('missing' in written) throw new Conflict(written.missing, whyMissing[written.missing]);
 	const name = `${fileStem(sheet.name)}-revision-${row.revision}-proof.${format}`;
 	return { name, mediaType: mediaTypes[format], bytes: written.bytes };
+}
+
+async function revisionOf(db: Db, sheet: SheetRecord, { revision, edition }: ProofAsked) {
+	if (edition === undefined) return revision ?? sheet.revision;
+	const issued = (await listEditions(db, sheet.id)).find(({ number }) => number === edition);
+	if (!issued) throw new NotFound('edition');
+	return issued.revision;
 }
 
 function storedResult(row: DraftRow): ColouringResult | null {
@@ -60,8 +77,12 @@ function storedResult(row: DraftRow): ColouringResult | null {
 	return explanation as unknown as ColouringResult | null;
 }
 
-/** The revision an address asks for; null for the draft as it is now, NaN for what is none. */
-export const revisionAsked = (url: URL): number | null => {
-	const asked = url.searchParams.get('revision');
-	return asked === null ? null : /^\d{1,10}$/.test(asked) ? Number(asked) : NaN;
-};
+/** What an address asks for by `?revision=` or `?edition=`; a number that is none stays NaN and is not found. */
+export function proofAsked({ searchParams }: URL, format: ProofFormat): ProofAsked {
+	const number = (name: string) => {
+		const asked = searchParams.get(name);
+		if (asked === null) return {};
+		return { [name]: /^\d{1,10}$/.test(asked) ? Number(asked) : NaN };
+	};
+	return { ...number('revision'), ...number('edition'), format };
+}
