@@ -32,8 +32,8 @@ export function certify(
 		return small ?? byRules(problem, prepared, inks - 1) ?? none;
 	}
 	if (graph.count * inks > effortOf(problem).solverSize) return none;
-	const { effort, seed, cancelled } = problem;
-	const refuted = refute(graph, inks - 1, { effort, seed, cancelled });
+	const { effort, effortTimes, seed, cancelled } = problem;
+	const refuted = refute(graph, inks - 1, { effort, effortTimes, seed, cancelled });
 	if (!refuted) return none;
 	const refutation = { inks: inks - 1, format: 'drup' as const, clauses: refuted.clauses };
 	const borders = refuted.borders?.map(([a, b]): [number, number] => [regionOf[a], regionOf[b]]);

@@ -9,6 +9,7 @@ import { problemFaults } from './faults.ts';
 import { fewestInks, type FewestOutcome } from './fewest.ts';
 import { towardsGoal } from './goal.ts';
 import { leastInks } from './least-inks.ts';
+import { mendedPrevious } from './mended-previous.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
@@ -65,7 +66,9 @@ function search(
 	const exact = (inks: number) => exactColouring(prepared, inks, settings);
 	if (problem.inks === 'fewest') {
 		const highest = lowest + problem.regions + inksBanned(prepared.bans);
-		return fewestInks(lowest, highest, quick, exact) ?? 'undecided';
+		const atHand = (fewerThan: number) => mendedPrevious(problem, prepared, settings, fewerThan);
+		const tries = { quick, exact, atHand, told: problem.bounds };
+		return fewestInks(lowest, highest, tries) ?? 'undecided';
 	}
 	const { inks } = problem;
 	if (inks < lowest) return 'impossible';

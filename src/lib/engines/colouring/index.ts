@@ -12,6 +12,14 @@ export { checkColouring } from './check-colouring.ts';
 export { colour } from './colour.ts';
 export { checkExplanation } from './explain-check.ts';
 export { explanationSentence } from './explanation-sentence.ts';
+export {
+	gainOf,
+	openQuestion,
+	type Gain,
+	type OpenQuestion,
+	type Standing,
+} from './open-question.ts';
+export { checkBound, proveBound } from './prove-bound.ts';
 export { problemFaults } from './faults.ts';
 export { proofSentence } from './proof-sentence.ts';
 export {
