@@ -10,6 +10,8 @@ export class Viewport {
 	paperHeight = $state(0);
 
 	static readonly most = 40;
+	/** larger than this the sheet is shown only when somebody zooms */
+	static readonly mostByItself = 10;
 
 	/** Lays the paper (millimetres) into the frame with room for the crop marks around it. */
 	frame(width: number, height: number, widthMm: number, heightMm: number) {
@@ -58,6 +60,17 @@ export class Viewport {
 		);
 	}
 
+	/** Fills the middle of the frame with a box (shares of the paper), what lies around it in sight. */
+	show({ left, top, right, bottom }: Record<'left' | 'top' | 'right' | 'bottom', number>) {
+		const across = Math.max((right - left) * this.paperWidth, 1);
+		const down = Math.max((bottom - top) * this.paperHeight, 1);
+		const scale = Math.min((shownShare * this.width) / across, (shownShare * this.height) / down);
+		this.scale = Math.min(Viewport.mostByItself, Math.max(1, scale));
+		this.x = this.width / 2 - ((left + right) / 2) * this.paperWidth * this.scale;
+		this.y = this.height / 2 - ((top + bottom) / 2) * this.paperHeight * this.scale;
+		this.#hold();
+	}
+
 	/** some of the paper always stays in view */
 	#hold() {
 		const across = this.paperWidth * this.scale;
@@ -67,6 +80,9 @@ export class Viewport {
 		if (this.scale === 1) this.fit();
 	}
 }
+
+/** how much of the frame's width and height a box fills that is shown */
+const shownShare = 0.6;
 
 function nudge(from: number, to: number, least: number, most: number): number {
 	if (to - from > most - least) return (least + most) / 2 - (from + to) / 2;
