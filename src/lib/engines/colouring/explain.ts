@@ -22,7 +22,9 @@ const EFFORT = {
  * empty, `rules` alone cannot be kept, and without any single one they can. Dropping the locks of
  * `release` makes the problem feasible; no release costs less than its `lowerBound`, and `proved` says
  * that it is attained. The collision needs no other regions than `regions`. `inksThatWouldDo` is the
- * smallest number of inks that the effort sufficed to tell. Steps are solver conflicts, by `effort`.
+ * smallest number of inks that the effort sufficed to tell. `locks` collide whichever of the other locks
+ * stand; a region that is locked to a reserved ink may have it in all of this even where its lock is not
+ * held, but after the `release` it is coloured without. Steps are solver conflicts, by `effort`.
  *
  * Null when the problem is feasible, or the effort did not suffice to tell that it is not.
  * @throws RangeError when the problem is not well formed: ask `problemFaults` first
@@ -51,13 +53,15 @@ class Explaining {
 		const withoutLocks = this.ask([], this.purse());
 		if (withoutLocks === 'unsat') return this.withRules(this.refutedPart());
 		if (withoutLocks === 'unknown') return null;
+		const unmet = [...this.of.demands.keys()].filter((d) => !this.whole.meets(d));
 		const { immediate } = this.whole;
 		if (immediate.length === 0 && this.ask(this.of.demands.keys(), this.purse()) !== 'unsat') {
 			return null;
 		}
 		const { releaseFound } = this.problem;
 		const { clashes, ...found } = await cheapestRelease(this.of, this.whole, this.purse(), {
-			rows: EFFORT[this.problem.effort ?? 'normal'].rows,
+			unmet,
+			rows: this.effort().rows,
 			seed: this.seed,
 			found: releaseFound && ((soFar) => releaseFound(this.released({ ...soFar, proved: false }))),
 		});
@@ -77,8 +81,14 @@ class Explaining {
 	}
 
 	private purse(): Purse {
-		const { each, all } = EFFORT[this.problem.effort ?? 'normal'];
+		const { each, all } = this.effort();
 		return new Purse(all, each, this.problem.cancelled);
+	}
+
+	private effort() {
+		const { effort = 'normal', effortTimes = 1 } = this.problem;
+		const { each, all, rows } = EFFORT[effort];
+		return { each: each * effortTimes, all: all * effortTimes, rows: rows * effortTimes };
 	}
 
 	private ask(demands: Iterable<number>, purse: Purse) {

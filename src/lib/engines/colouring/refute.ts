@@ -6,9 +6,11 @@ import { peel } from './refute-peel.ts';
 
 export interface RefuteOptions {
 	effort?: 'quick' | 'normal' | 'thorough';
+	/** so many times the conflicts of this effort, from 1 */
+	effortTimes?: number;
 	seed?: number;
-	/** asked between steps; true ends the search without an answer */
-	cancelled?: () => boolean;
+	/** asked between steps, with the conflicts of the question at hand; true ends the search without an answer */
+	cancelled?: (conflicts?: number) => boolean;
 }
 
 export interface Refuted {
@@ -62,7 +64,7 @@ class Refutation {
 		private inks: number,
 		private options: RefuteOptions,
 	) {
-		this.effort = EFFORT[options.effort ?? 'normal'];
+		this.effort = EFFORT[options.effort ?? 'normal'] * (options.effortTimes ?? 1);
 	}
 
 	/** Vertices among those given that cannot be coloured; null when they can or the effort is spent. */

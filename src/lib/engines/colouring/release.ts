@@ -22,8 +22,10 @@ const QUICK_CHOICES = 3;
 const NODES = [1, 100];
 
 /**
- * The cheapest demands to drop so that the rest can be met, where dropping every demand is known to
- * work. `rows` are the sets that may be handed to the integer program, counted at each choice.
+ * The cheapest demands to drop so that the rest can be met, where dropping `unmet` is known to work: an
+ * assignment leaves just them unmet. What is dropped is always such a list, so that a reserved ink that
+ * went with a lock is not had without it. `rows` are the sets that may be handed to the integer program,
+ * counted at each choice.
  *
  * Method: implicit hitting sets (Chandrasekaran et al. 2013; Davies and Bacchus 2011). A cheapest
  * choice that meets every clash known is dropped; if the rest still clashes, the new clash is shrunk and
@@ -34,9 +36,9 @@ export async function cheapestRelease(
 	of: Case,
 	whole: Whole,
 	purse: Purse,
-	{ rows, seed, found }: ReleaseOptions,
+	{ rows, ...options }: ReleaseOptions,
 ): Promise<CheapestRelease> {
-	const search = new ReleaseSearch(of, whole, purse, { seed, found });
+	const search = new ReleaseSearch(of, whole, purse, options);
 	while (search.rows < rows && !search.closed && !purse.empty) {
 		if (!(await search.round())) break;
 	}
@@ -49,6 +51,7 @@ export type ReleaseSoFar = Pick<CheapestRelease, 'demands' | 'cost' | 'lowerBoun
 interface ReleaseOptions {
 	rows: number;
 	seed: number;
+	unmet: number[];
 	/** told whenever the best release or the bound is better than before */
 	found?: (soFar: ReleaseSoFar) => void;
 }
@@ -68,11 +71,11 @@ class ReleaseSearch {
 		private of: Case,
 		private whole: Whole,
 		private purse: Purse,
-		private options: Pick<ReleaseOptions, 'seed' | 'found'>,
+		private options: Omit<ReleaseOptions, 'rows'>,
 	) {
 		this.clashes = whole.immediate.map((demands) => ({ demands, vertices: [] }));
 		this.costs = Float64Array.from(of.demands, (demand) => demand.cost);
-		this.best = of.demands.map((_, d) => d);
+		this.best = options.unmet;
 		this.bestCost = this.costOf(this.best);
 	}
 
@@ -176,7 +179,7 @@ class ReleaseSearch {
 		}
 		const cost = this.costOf(unmet);
 		if (cost >= this.bestCost) return;
-		this.best = unmet;
+		this.best = options.unmet;
 		this.bestCost = cost;
 		this.tell();
 	}

@@ -9,6 +9,7 @@ import type { Draft } from '../../engines/editions/draft.ts';
 import type { BorderList } from '../../engines/borders/index.ts';
 import { problemOf } from '../services/draft-problem.ts';
 import { Unfit } from '../services/outcomes.ts';
+import { takeOver } from './take-over.ts';
 import type { Task } from './task-port.ts';
 
 /** A draft and what it stands on; making the problem of it is work for the thread as well. */
@@ -31,20 +32,32 @@ export interface UnfitDraft {
 	details?: Record<string, unknown>;
 }
 
-/** Colours a draft, near to the colouring before, and has the checker look at the result. */
+/**
+ * Colours a draft, near to the colouring before, and has the checker look at the result. The inks that its
+ * sender shows are taken over if they hold.
+ */
 export async function colourDraft({
-	input,
-}: Task<DraftInput & { previous: number[] | null }>): Promise<
-	CheckedColouring | { unfit: UnfitDraft }
+	input: { shown, ...input },
+}: Task<DraftInput & { previous: number[] | null; shown?: number[] }>): Promise<
+	(CheckedColouring & { arranged: boolean }) | { unfit: UnfitDraft }
 > {
 	try {
-		return await colourAndCheck(problemOf(input, input.draft, input.previous));
+		const problem = problemOf(input, input.draft, input.previous);
+		const checked = await colourAndCheck(problem);
+		const taken = shown && checked.faults.length === 0 && takeOver(problem, checked.result, shown);
+		return taken ? { result: taken, faults: [], arranged: true } : { ...checked, arranged: false };
 	} catch (problem) {
 		if (!(problem instanceof Unfit)) throw problem;
 		const { code, message, details } = problem;
 		return { unfit: { code, message, details } };
 	}
 }
+
+/** What is known of a draft with the inks that its sender shows; null if they do not hold. */
+export const arrangeDraft = async ({
+	input: { result, shown, ...input },
+}: Task<DraftInput & { result: ColouringResult; shown: number[] }>) =>
+	takeOver(problemOf(input, input.draft), result, shown);
 
 /** Has the checker look at a colouring that is stored. */
 export const recheck = ({

@@ -1,6 +1,6 @@
 /** Everything that runs in a thread, by name: called through a `Pool`, in the web process and the worker. */
 export { writeBorders } from './border-files.work.ts';
-export { colourDraft, recheck } from './colour.work.ts';
+export { arrangeDraft, colourDraft, recheck } from './colour.work.ts';
 export { findPieces } from './pieces.work.ts';
 export { measureGaps } from './gaps.work.ts';
 export { inkTerritories } from './ink-territories.work.ts';

@@ -10,6 +10,7 @@ const sentences: Record<string, string> = {
 	'member.left': 'left the team',
 	'token.made': 'made an API token',
 	'token.withdrawn': 'withdrew an API token',
+	'draft.arranged': 'arranged the inks of a sheet',
 	'measures.uploaded': 'uploaded a table of figures',
 	'measures.read-again': 'had a table of figures read another way',
 	'measures.reviewed': 'decided about a table of figures',
