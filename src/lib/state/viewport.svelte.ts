@@ -18,12 +18,28 @@ export class Viewport {
 		const room = Math.min(40, width / 12);
 		const fit = Math.min((width - 2 * room) / widthMm, (height - 2 * room) / heightMm);
 		const wasFitted = this.scale === 1;
+		const { centre } = this;
 		this.width = width;
 		this.height = height;
 		this.paperWidth = Math.max(1, fit * widthMm);
 		this.paperHeight = Math.max(1, fit * heightMm);
 		if (wasFitted) this.fit();
-		else this.#hold();
+		else this.stand(centre, this.scale);
+	}
+
+	/** What lies in the middle of the frame, as shares of the paper. */
+	get centre(): Point {
+		const across = this.paperWidth * this.scale || 1;
+		const down = this.paperHeight * this.scale || 1;
+		return { x: (this.width / 2 - this.x) / across, y: (this.height / 2 - this.y) / down };
+	}
+
+	/** Puts a point of the paper into the middle of the frame. */
+	stand({ x, y }: Point, scale: number) {
+		this.scale = scale;
+		this.x = this.width / 2 - x * this.paperWidth * scale;
+		this.y = this.height / 2 - y * this.paperHeight * scale;
+		this.#hold();
 	}
 
 	fit() {
@@ -65,10 +81,8 @@ export class Viewport {
 		const across = Math.max((right - left) * this.paperWidth, 1);
 		const down = Math.max((bottom - top) * this.paperHeight, 1);
 		const scale = Math.min((shownShare * this.width) / across, (shownShare * this.height) / down);
-		this.scale = Math.min(Viewport.mostByItself, Math.max(1, scale));
-		this.x = this.width / 2 - ((left + right) / 2) * this.paperWidth * this.scale;
-		this.y = this.height / 2 - ((top + bottom) / 2) * this.paperHeight * this.scale;
-		this.#hold();
+		const middle = { x: (left + right) / 2, y: (top + bottom) / 2 };
+		this.stand(middle, Math.min(Viewport.mostByItself, Math.max(1, scale)));
 	}
 
 	/** some of the paper always stays in view */
@@ -80,6 +94,8 @@ export class Viewport {
 		if (this.scale === 1) this.fit();
 	}
 }
+
+type Point = Record<'x' | 'y', number>;
 
 /** how much of the frame's width and height a box fills that is shown */
 const shownShare = 0.6;

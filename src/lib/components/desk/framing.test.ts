@@ -53,6 +53,18 @@ describe('what a collision does to the view', () => {
 		expect(stand(view)).toEqual(moved);
 	});
 
+	it('goes back although the frame has become another size meanwhile', () => {
+		const { view, framing } = sheet();
+		view.zoom(2, 100, 100);
+		const { centre } = view;
+		framing.follow(collision(), boxOf);
+		view.frame(500, 500, 400, 300);
+		framing.follow(null, boxOf);
+		expect(view.scale).toBe(2);
+		expect(view.centre.x).toBeCloseTo(centre.x, 6);
+		expect(view.centre.y).toBeCloseTo(centre.y, 6);
+	});
+
 	it('does not move for regions that are not on the sheet', () => {
 		const { view, framing } = sheet();
 		const before = stand(view);

@@ -2,8 +2,9 @@ import type { Area } from '$lib/engines/sheet';
 import type { Evidence } from '$lib/state/evidence';
 import type { Viewport } from '$lib/state/viewport.svelte';
 
-type View = Pick<Viewport, 'x' | 'y' | 'scale' | 'show'>;
-type Stand = Record<'x' | 'y' | 'scale', number>;
+type View = Pick<Viewport, 'centre' | 'scale' | 'show' | 'stand'>;
+/** where the sheet stands, whatever the size of the frame */
+type Stand = Pick<Viewport, 'centre' | 'scale'>;
 
 /**
  * Brings into view what asks for it, once, and goes back to where the sheet stood before as soon as
@@ -28,18 +29,19 @@ export class Framing {
 	}
 
 	#goBack() {
-		if (this.#before && this.#untouched()) Object.assign(this.view, this.#before);
+		if (this.#before && this.#untouched()) this.view.stand(this.#before.centre, this.#before.scale);
 		this.#framed = this.#before = this.#after = null;
 	}
 
 	#untouched(): boolean {
-		const now = standOf(this.view);
-		const then = this.#after;
-		return then !== null && now.x === then.x && now.y === then.y && now.scale === then.scale;
+		const [now, then] = [this.view, this.#after];
+		if (!then) return false;
+		const moved = Math.hypot(now.centre.x - then.centre.x, now.centre.y - then.centre.y);
+		return now.scale === then.scale && moved < 1e-6;
 	}
 }
 
-const standOf = ({ x, y, scale }: Stand): Stand => ({ x, y, scale });
+const standOf = ({ centre, scale }: Stand): Stand => ({ centre, scale });
 
 function boxOfAll(regions: readonly number[], boxOf: (region: number) => Area | null): Area | null {
 	let all: Area | null = null;

@@ -36,9 +36,9 @@ describe('the ways out of a collision', () => {
 		const ways = list({});
 		expect(ways.map(({ gives, weight }) => [gives, weight])).toEqual([
 			['Release Ost', 2],
-			['Release West alone', 3],
+			['Release West', 3],
 		]);
-		expect(ways[0].note).toBe('Nothing lighter would do.');
+		expect(ways[0].note).toBe('Nothing cheaper would do.');
 		const draft = blankDraft({ locks: locked([2, 3]) });
 		expect(Object.keys(ways[0].change(draft).locks)).toEqual(['b']);
 		expect(Object.keys(ways[1].change(draft).locks)).toEqual(['a']);
@@ -48,7 +48,7 @@ describe('the ways out of a collision', () => {
 	it('say how far the cheapest release is known', () => {
 		const open = { locks: [0, 1], cost: 5, proved: false, lowerBound: 4 };
 		const [release, one, other] = list({ release: open });
-		expect(release.note).toBe('Weighs 5; at least 4 has to go, by what was worked out so far.');
+		expect(release.note).toBe('Costs 5; at least 4 has to go, by what was worked out so far.');
 		for (const way of [one, other])
 			expect(way.hopeless).toBe('Not enough: locks of weight 4 at least have to go.');
 	});

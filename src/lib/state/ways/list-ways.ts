@@ -9,6 +9,8 @@ import { releaseNote, weightWords, type Way } from './way';
 /** More single locks or rules than these are not offered: nobody compares so many. */
 const most = 8;
 const namesShown = 4;
+/** as many as a palette may have */
+const mostInks = 64;
 
 /**
  * The ways out of a collision, side by side: the cheapest release, more inks, each rule that has a part in
@@ -59,7 +61,7 @@ function moreInks({ inksThatWouldDo: inks }: Explanation): Way[] {
 			note: 'Every lock and rule stays.',
 			label: `use ${counted(inks, 'ink')}`,
 			change: useInks(inks),
-			hopeless: '',
+			hopeless: inks > mostInks ? `A sheet has ${mostInks} inks at most.` : '',
 		},
 	];
 }
@@ -91,10 +93,10 @@ function rules(explanation: Explanation, draft: Draft, ground: SourceGround): Wa
 
 function singleLocks(explanation: Explanation, draft: Draft, ground: SourceGround): Way[] {
 	const { locks, release: found } = explanation;
-	const alone = found?.locks.length === 1 ? found.locks[0] : -1;
+	const alone = found?.locks.length === 1;
 	const least = found?.lowerBound ?? 0;
 	return locks
-		.filter((region) => region !== alone)
+		.filter((region) => !alone || region !== found.locks[0])
 		.slice(0, most)
 		.map((region) => {
 			const key = ground.keys[region];
@@ -104,7 +106,7 @@ function singleLocks(explanation: Explanation, draft: Draft, ground: SourceGroun
 			return {
 				id: `lock ${key}`,
 				kind: 'lock',
-				gives: `Release ${name} alone`,
+				gives: `Release ${name}${alone ? '' : ' alone'}`,
 				weight,
 				note: source?.kind === 'tie' ? `${source.words}.` : '',
 				label: `release ${name}`,

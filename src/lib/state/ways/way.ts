@@ -43,8 +43,8 @@ export interface WayRow {
 
 /** What the cheapest release weighs, as far as it is known. */
 export function releaseNote({ cost, lowerBound, proved }: Release): string {
-	if (proved) return 'Nothing lighter would do.';
-	const known = `Weighs ${weightWords(cost)}`;
+	if (proved) return 'Nothing cheaper would do.';
+	const known = `Costs ${weightWords(cost)}`;
 	if (lowerBound <= 0) return `${known}; less may be enough.`;
 	return `${known}; at least ${weightWords(lowerBound)} has to go, by what was worked out so far.`;
 }
