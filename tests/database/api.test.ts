@@ -213,8 +213,32 @@ describe('POST /check/colouring', () => {
 		expect(found).toMatchObject({ colouring: { constructor: 0, toString: 1 } });
 	});
 
+	it('keeps groups alike or different, and reserved inks from regions without their lock', async () => {
+		const regions = ['a', 'b', 'c', 'd', 'e'];
+		const found = await colour({
+			...{ regions, borders: [['a', 'b']], inks: 'fewest', reserved: [0], locks: { e: 0 } },
+			groups: [
+				{ kind: 'alike', name: 'North', keys: ['a', 'c'] },
+				{ kind: 'different', keys: ['b', 'c', 'd', 'e'] },
+			],
+		});
+		if (found.status !== 'coloured') throw new Error(found.status);
+		const { a, b, c, d, e } = found.colouring;
+		expect([a, e, new Set([b, c, d, e]).size]).toEqual([c, 0, 4]);
+		expect(found).toMatchObject({ inksUsed: 4, lowerBound: 4 });
+		const none = await colour({ ...ring(2), inks: 2, reserved: [1] });
+		if (none.status !== 'impossible') throw new Error(none.status);
+		expect(none.explanation.rules).toContainEqual({ kind: 'reserved', region: 'r0', ink: 1 });
+	});
+
 	it.each([
 		['no JSON', '{"regions":', 'malformed'],
+		[
+			'a group with a stranger',
+			{ ...ring(3), groups: [{ kind: 'alike', keys: ['r0', 'x'] }] },
+			'malformed',
+		],
+		['a group of one', { ...ring(3), groups: [{ kind: 'different', keys: ['r0'] }] }, 'malformed'],
 		['a field not known', { ...ring(3), color: 1 }, 'unknown-field'],
 		['a border of nobody', { ...ring(3), borders: [['r0', 'x']] }, 'malformed'],
 		['a border with itself', { ...ring(3), borders: [['r0', 'r0']] }, 'malformed'],

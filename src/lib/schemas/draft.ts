@@ -1,6 +1,11 @@
 import { z } from 'zod';
 import { goalKinds } from '../engines/colouring/goal-wish.ts';
-import { mostDifferent, type Draft } from '../engines/editions/draft.ts';
+import {
+	differentPairs,
+	mostDifferent,
+	mostDifferentPairs,
+	type Draft,
+} from '../engines/editions/draft.ts';
 import { papers } from '../engines/sheet/layout.ts';
 
 /** The shape and limits of a draft as it arrives from outside; `Draft` says what each part means. */
@@ -97,7 +102,13 @@ export const draftDocument = z.strictObject({
 		.max(mostRules),
 	alike: z.array(z.tuple([key, key])).max(mostRules),
 	apart: z.array(z.tuple([key, key])).max(mostRules),
-	groups: z.array(groupRule).max(10_000).default([]),
+	groups: z
+		.array(groupRule)
+		.max(10_000)
+		.refine((groups) => differentPairs(groups) <= mostDifferentPairs, {
+			message: `groups in which all differ come to more than ${mostDifferentPairs} pairs`,
+		})
+		.default([]),
 	reserved: z.array(inkNumber).max(64).default([]),
 	goals: z.array(goalWish).max(goalKinds.length).default([]),
 	ties: z.array(edgeTie).max(100).default([]),

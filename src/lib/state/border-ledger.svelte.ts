@@ -27,7 +27,7 @@ export class BorderLedger {
 
 	rows = $derived.by(() => {
 		const { regions, borders } = this.desk.sheet;
-		return sheetBorderRows(regions.key, borders, this.desk.borderRules);
+		return sheetBorderRows(regions.key, borders, this.desk.borderRules.now);
 	});
 	asked = $derived.by(() => {
 		const question = { ...this.question };

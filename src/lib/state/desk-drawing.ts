@@ -35,7 +35,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 	});
 	return {
 		draw() {
-			const { layout, palette } = desk.draft.document;
+			const { layout, palette } = desk.shown;
 			const { regions, borders, findings, editions, boundarySet } = desk.sheet;
 			const inks = palette.inks;
 			drawer.ask({

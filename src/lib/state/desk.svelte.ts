@@ -1,30 +1,26 @@
 import { getContext, setContext, type Snippet } from 'svelte';
-import {
-	bordersForSheet,
-	kindCode,
-	standingsForSheet,
-	type ReasonedRules,
-} from '$lib/engines/borders';
-import type { ColouringResult } from '$lib/engines/colouring/problem';
+import { bordersForSheet, kindCode, standingsForSheet } from '$lib/engines/borders';
+import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Area } from '$lib/engines/sheet';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
-import { Colourer, type ColourReply } from './colourer';
+import { BorderRules } from './border-rules.svelte';
+import { ColouringOnDesk } from './colouring-on-desk.svelte';
 import type { FinerGround } from './desk-drawing';
 import { DraftState } from './draft.svelte';
 import type { Evidence } from './evidence';
 import { Flatness } from './flatness.svelte';
 import { inkUse } from './ink-use';
-import type { Keeper } from './kept-drafts';
+import { keeperWithInks, type Keeper } from './kept-drafts';
+import { OnTrial } from './on-trial.svelte';
 import { judgePalette } from './palette-judgement';
-import { colouringParts, problemOf } from './problem-of-draft';
+import { problemOf } from './problem-of-draft';
 import { rebase } from './rebase';
-import { rehearsals } from './rehearsals';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions } from './rules-in-force';
-import type { SaveDraft } from './save-draft';
+import type { SaveWithInks } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
 import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
@@ -34,7 +30,8 @@ export interface DeskStart {
 	address: string;
 	/** name that goes with a lock */
 	userName: string | null;
-	save: SaveDraft<Draft, DraftSaved>;
+	/** sends the colouring with it where the server would find another */
+	save: SaveWithInks;
 	keeper: Keeper<Draft> | null;
 	/** says what was found, in one sentence; the engine's own words */
 	sentence: (result: ColouringResult, sheet: DeskSheet, draft: Draft) => string;
@@ -70,13 +67,12 @@ export class Desk {
 	/** whether the sheet is coloured by territory */
 	byTerritory = $state(false);
 
-	/** what is known about the draft as it stands */
-	answer: DeskColouring | null = $state.raw(null);
-	/** the last colouring that kept every rule; -1 where there is none */
-	inks: Int32Array = $state.raw()!;
-	working = $state(false);
-	/** the engine ended without an answer: what it said */
-	failure = $state('');
+	readonly colouring: ColouringOnDesk;
+	/** another document and its colouring, shown for a while */
+	readonly trial = new OnTrial((label, document, answer, inks) => {
+		this.colouring.know(document, answer, inks);
+		this.draft.change(label, () => document);
+	});
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
@@ -90,26 +86,14 @@ export class Desk {
 	drawFailure = $state('');
 
 	numbers = $derived(numberRegions(this.sheet.regions.key));
-	/** the rule for borders, part by part: a lock changes the document and none of these */
-	#pointTouches = $derived.by(() => this.draft.document.pointTouches);
-	#leastMetres = $derived.by(() => this.draft.document.leastMetres);
-	#waterKm = $derived.by(() => this.draft.document.waterKm);
-	#struck = $derived.by(() => this.draft.document.struck);
-	#added = $derived.by(() => this.draft.document.added);
-	borderRules: ReasonedRules = $derived({
-		pointTouches: this.#pointTouches,
-		leastMetres: this.#leastMetres,
-		waterKm: this.#waterKm,
-		struck: this.#struck,
-		added: this.#added,
-	});
+	readonly borderRules = new BorderRules(() => this.draft.document);
 	standing = $derived.by(() =>
-		standingsForSheet(this.sheet.regions.key, this.sheet.borders, this.borderRules),
+		standingsForSheet(this.sheet.regions.key, this.sheet.borders, this.borderRules.now),
 	);
 	/** the borders that ask for two inks, those added by hand among them */
 	countedBorders = $derived.by(() => {
 		const { regions, borders } = this.sheet;
-		return bordersForSheet(regions.key, borders, this.borderRules);
+		return bordersForSheet(regions.key, borders, this.borderRules.now);
 	});
 	/** who lies next to whom; a gap that was only measured joins nobody until it counts */
 	links = $derived.by(() => {
@@ -121,9 +105,13 @@ export class Desk {
 	neighbours = $derived(
 		this.selected === null ? [] : neighboursOf(this.selected, this.sheet.borders, this.links),
 	);
+	/** the document that the sheet shows: what is on trial, or the draft */
+	shown: Draft = $derived.by(() => this.trial.now?.document ?? this.draft.document);
+	/** its colouring: the last one that kept every rule; -1 where there is none */
+	inks: Int32Array = $derived.by(() => this.trial.now?.inks ?? this.colouring.inks);
 	palette = $derived.by(() =>
 		judgePalette(
-			this.draft.document.palette.inks,
+			this.shown.palette.inks,
 			this.inks,
 			this.sheet.borders,
 			this.standing,
@@ -135,41 +123,56 @@ export class Desk {
 	/** what the sheet paints: the ink of every region, or of its territory */
 	paints = $derived(this.planning?.regionInks ?? this.inks);
 	uses = $derived.by(() =>
-		inkUse(this.paints, this.sheet.regions.areaKm2, this.draft.document.palette.inks.length),
+		inkUse(this.paints, this.sheet.regions.areaKm2, this.shown.palette.inks.length),
 	);
 
-	#start: DeskStart;
-	#colourer: Colourer | null = null;
-	#asked: readonly unknown[];
-	#askedFor: Draft;
-	/** the last colouring the server has stored: what it stays near to, and so must we */
-	#savedInks: Int32Array | null;
-	/** the colouring that belongs to a document, so that undo shows it again at once */
-	#known = new WeakMap<Draft, { answer: DeskColouring | null; inks: Int32Array }>();
-
 	constructor(start: DeskStart) {
-		this.#start = start;
-		this.sheet = start.sheet;
+		const { sheet } = start;
+		this.sheet = sheet;
 		this.address = start.address;
-		this.flatness = new Flatness(start.sheet.boundarySet.planar);
+		this.flatness = new Flatness(sheet.boundarySet.planar);
 		this.userName = start.userName;
-		this.answer = start.sheet.colouring;
-		this.#savedInks = start.sheet.lastInks && Int32Array.from(start.sheet.lastInks);
-		this.inks = this.#savedInks ?? new Int32Array(start.sheet.regions.key.length).fill(-1);
-		this.#askedFor = start.sheet.draft;
-		this.#asked = colouringParts(start.sheet.draft);
-		this.#remember(start.sheet.draft);
+		this.colouring = new ColouringOnDesk({
+			document: sheet.draft,
+			answer: sheet.colouring,
+			lastInks: sheet.lastInks,
+			regions: sheet.regions.key.length,
+			problem: (document, previous) => this.problemOf(document, previous),
+			afresh: ({ seed }) => seed !== this.draft.base.seed,
+			sentence: (result, document) => start.sentence(result, this.sheet, document),
+			onsettled: () => this.draft.keepNow(),
+		});
 		this.draft = new DraftState({
-			place: start.sheet.id,
-			revision: start.sheet.revision,
-			document: start.sheet.draft,
-			savedAt: start.sheet.savedAt,
-			save: start.save,
-			keeper: start.keeper,
+			place: sheet.id,
+			revision: sheet.revision,
+			document: sheet.draft,
+			savedAt: sheet.savedAt,
+			save: (revision, document) => start.save(revision, document, this.colouring.toSave(document)),
+			keeper: start.keeper && keeperWithInks(start.keeper, this.colouring),
 			rebase,
-			onchange: (document) => this.#recolour(document),
+			onchange: (document) => {
+				this.trial.drop();
+				if (this.colouring.follow(document)) this.evidence = null;
+			},
 			onsaved: ({ colouring }) => this.#adoptSaved(colouring),
 		});
+	}
+
+	/** What is asked of the colouring engine for a draft of this sheet, staying near to `previous`. */
+	problemOf(document: Draft, previous: Int32Array | null): ColouringProblem {
+		const { borders, regions } = this.sheet;
+		return problemOf(document, regions.key, borders, this.numbers, previous);
+	}
+
+	/** what is known about the draft as it stands */
+	get answer(): DeskColouring | null {
+		return this.colouring.answer;
+	}
+	get working(): boolean {
+		return this.colouring.working;
+	}
+	get failure(): string {
+		return this.colouring.failure;
 	}
 
 	/** What the server gave of the territories: the first time it is opened, later it is brought up to date. */
@@ -190,22 +193,16 @@ export class Desk {
 
 	/** In the browser: the worker that answers each change. */
 	work(makeWorker: () => Worker): () => void {
-		this.#colourer = new Colourer(makeWorker, (reply) => this.#settle(reply));
-		this.#colourer.warm();
+		const rest = this.colouring.work(makeWorker);
 		return () => {
-			this.#colourer?.stop();
-			this.#colourer = null;
+			rest();
 			this.draft.stop();
 		};
 	}
 
 	/** Once the sheet can be worked on: has the engine run, so that the first lock is answered at once. */
 	rehearse() {
-		if (!this.may('colours.edit')) return;
-		const { borders, regions } = this.sheet;
-		const { document } = this.draft;
-		const problem = problemOf(document, regions.key, borders, this.numbers, this.#savedInks);
-		this.#colourer?.rehearse(rehearsals(problem, this.inks));
+		if (this.may('colours.edit')) this.colouring.rehearse(this.draft.document);
 	}
 
 	/** The page was loaded again: after a finding was accepted, an edition issued. */
@@ -227,75 +224,12 @@ export class Desk {
 
 	/** Stops a colouring that takes long; what is on the sheet stays. */
 	stopWorking() {
-		this.#colourer?.stop();
-		this.working = false;
-		this.failure = 'Stopped. The sheet shows the last colouring that kept every rule.';
-	}
-
-	#recolour(document: Draft) {
-		const known = this.#known.get(document);
-		const parts = colouringParts(document);
-		const unchanged = parts.every((part, index) => part === this.#asked[index]);
-		this.#asked = parts;
-		if (known) {
-			this.#colourer?.forget();
-			this.working = false;
-			this.answer = known.answer;
-			this.inks = known.inks;
-			this.evidence = null;
-		} else if (unchanged) {
-			if (!this.working) this.#remember(document);
-			else this.#askedFor = document;
-		} else this.#ask(document);
-	}
-
-	#ask(document: Draft) {
-		this.#askedFor = document;
-		this.working = this.#colourer !== null;
-		this.failure = '';
-		this.evidence = null;
-		const { borders, regions } = this.sheet;
-		// another seed asks for another arrangement, so nothing is held to the colouring before
-		const from = document.seed === this.draft.base.seed ? this.#savedInks : null;
-		this.#colourer?.ask(problemOf(document, regions.key, borders, this.numbers, from));
-	}
-
-	#settle(reply: ColourReply) {
-		this.working = false;
-		if ('failed' in reply) {
-			this.failure = `The colouring ended without an answer (${reply.failed}).`;
-			return;
-		}
-		const sentence = this.#start.sentence(reply.result, this.sheet, this.#askedFor);
-		this.#adopt(deskColouring(reply.result, sentence), this.#askedFor);
+		this.colouring.stop();
 	}
 
 	#adoptSaved(answer: DeskColouring | null) {
-		if (answer?.status === 'coloured') this.#savedInks = Int32Array.from(answer.inks);
-		if (!this.draft.dirty) this.#adopt(answer, this.draft.document);
+		this.colouring.adoptSaved(answer, this.draft.document, this.draft.dirty);
 	}
-
-	#adopt(answer: DeskColouring | null, document: Draft) {
-		if (!answer) return;
-		this.answer = answer;
-		if (answer.status === 'coloured') this.#showInks(Int32Array.from(answer.inks));
-		this.#remember(document);
-	}
-
-	#showInks(inks: Int32Array) {
-		const same = inks.length === this.inks.length && inks.every((ink, i) => ink === this.inks[i]);
-		if (!same) this.inks = inks;
-	}
-
-	#remember(document: Draft) {
-		this.#known.set(document, { answer: this.answer, inks: this.inks });
-	}
-}
-
-function deskColouring(result: ColouringResult, sentence: string): DeskColouring {
-	if (result.status !== 'coloured') return { ...result, sentence };
-	const { inksUsed, lowerBound, proof, colouring } = result;
-	return { status: 'coloured', inks: [...colouring], inksUsed, lowerBound, proof, sentence };
 }
 
 const place = Symbol('desk');

@@ -188,6 +188,11 @@ export class DraftState<Doc, Answer extends Saved<Doc> = Saved<Doc>> {
 		this.#start.onchange?.(document);
 	}
 
+	/** What belongs to the document has changed: keeps it in this browser again while the server lacks it. */
+	keepNow() {
+		if (this.dirty) this.#keep(this.document);
+	}
+
 	stop() {
 		clearTimeout(this.#timer);
 	}

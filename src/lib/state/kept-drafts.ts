@@ -1,3 +1,6 @@
+import type { Draft } from '$lib/engines/editions/draft';
+import type { DeskColouring } from '$lib/schemas/desk';
+
 /**
  * Work that the server does not have yet, kept in this browser (IndexedDB) from the moment of the
  * change until the server has confirmed it: a lost connection, an ended sign-in, a closed page or a
@@ -8,6 +11,8 @@ export interface KeptDraft<Doc> {
 	revision: number;
 	base: Doc;
 	document: Doc;
+	/** the colouring shown with it, where the server would find another by itself */
+	colouring?: DeskColouring;
 	/** ISO 8601 */
 	keptAt: string;
 }
@@ -55,4 +60,24 @@ export const browserKeeper = <Doc>(): Keeper<Doc> => ({
 			(kept) => kept ?? null,
 		),
 	forget: (place) => use('readwrite', (store) => store.delete(place)),
+});
+
+/** Whoever knows which colouring is shown with a document. */
+interface Colourings {
+	toKeep(document: Draft): DeskColouring | undefined;
+	know(document: Draft, answer: DeskColouring, inks: Int32Array): void;
+}
+
+/** Keeps the colouring with a sheet's draft, and shows it again when the draft is read. */
+export const keeperWithInks = (keeper: Keeper<Draft>, colourings: Colourings): Keeper<Draft> => ({
+	...keeper,
+	keep: (place, draft) =>
+		keeper.keep(place, { ...draft, colouring: colourings.toKeep(draft.document) }),
+	async read(place) {
+		const kept = await keeper.read(place);
+		const { document, colouring } = kept ?? {};
+		if (document && colouring?.status === 'coloured')
+			colourings.know(document, colouring, Int32Array.from(colouring.inks));
+		return kept;
+	},
 });

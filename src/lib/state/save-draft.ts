@@ -1,3 +1,6 @@
+import type { Draft } from '$lib/engines/editions/draft';
+import type { DraftSaved } from '$lib/schemas/desk';
+
 /** What a save that was taken answers at least; `document` where the server changed what was sent. */
 export interface Saved<Doc> {
 	revision: number;
@@ -28,6 +31,13 @@ export type SaveDraft<Doc, Answer extends Saved<Doc>> = (
 	document: Doc,
 ) => Promise<SaveAnswer<Doc, Answer>>;
 
+/** Saves a sheet's draft, with the colouring shown where the server would find another by itself. */
+export type SaveWithInks = (
+	revision: number,
+	document: Draft,
+	inks?: readonly number[],
+) => Promise<SaveAnswer<Draft, DraftSaved>>;
+
 /** How a body that was sent was answered; every way it can end is an answer. */
 export type PostAnswer<Taken, Theirs> =
 	| { kind: 'saved'; saved: Taken }
@@ -42,6 +52,12 @@ export const saveTo =
 	): SaveDraft<Doc, Answer> =>
 	(revision, document) =>
 		postJson<Answer, Stale<Doc>>(address, { revision, document }, fetcher);
+
+/** The same for a sheet's draft; never throws. */
+export const saveSheetTo =
+	(address: string, fetcher: typeof fetch = fetch): SaveWithInks =>
+	(revision, document, inks) =>
+		postJson<DraftSaved, Stale<Draft>>(address, { revision, document, inks }, fetcher);
 
 export async function postJson<Taken, Theirs>(
 	address: string,

@@ -1,4 +1,5 @@
 import { checkDrup } from '../solver/drup.ts';
+import { holdersOfReserved } from './check-reserved.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
 type Coloured = Extract<ColouringResult, { status: 'coloured' }>;
@@ -20,6 +21,7 @@ export function checkRefutation(
 	for (const first of numbered.values()) clauses.push(range(inks).map((c) => first + c));
 	for (const c of range(inks)) clauses.push(...clausesOfInk(problem, numbered, c));
 	clauses.push(...clausesOfLocks(problem, numbered, inks));
+	clauses.push(...clausesOfReserved(problem, numbered, inks));
 	const { valid, reason } = checkDrup(clauses, refutation.clauses);
 	return valid ? [] : [`The refutation fails: ${reason}.`];
 }
@@ -59,6 +61,16 @@ function clausesOfLocks({ locks }: ColouringProblem, numbered: Map<number, numbe
 		const lock = (locks as Int32Array)[region];
 		if (lock < 0) continue;
 		for (const c of range(inks)) if (c !== lock) clauses.push([-(first + c)]);
+	}
+	return clauses;
+}
+
+function clausesOfReserved(problem: ColouringProblem, numbered: Map<number, number>, inks: number) {
+	const clauses: number[][] = [];
+	for (const [ink, holders] of holdersOfReserved(problem)) {
+		if (ink >= inks) continue;
+		for (const [region, first] of numbered)
+			if (!holders.has(region)) clauses.push([-(first + ink)]);
 	}
 	return clauses;
 }

@@ -23,3 +23,13 @@ export {
 export { checkBound, proveBound } from './prove-bound.ts';
 export { problemFaults } from './faults.ts';
 export { proofSentence } from './proof-sentence.ts';
+export {
+	collisionProof,
+	openProof,
+	proofFile,
+	proofText,
+	type OpenProof,
+	type ProofFile,
+	type RegionNames,
+} from './proofs/index.ts';
+export { checkProofFile, checkProofText, type ProofChecked } from './proofs/check/index.ts';

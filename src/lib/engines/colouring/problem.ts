@@ -39,6 +39,8 @@ export interface ColouringProblem {
 	/** told whenever more is known: no fewer than so many inks do; so many do, or null while none is found */
 	bounds?: (atLeast: number, enough: number | null) => void;
 	progress?: (message: string, share: number) => void;
+	/** told of every better release of colliding locks and every better bound, while it is worked out */
+	releaseFound?: (soFar: Release) => void;
 }
 
 export type ProofKind =
@@ -52,6 +54,8 @@ export type ProofKind =
 export interface Proof {
 	kind: ProofKind;
 	regions: number[];
+	/** the pairs among `regions` that a refutation needs; all of them when absent */
+	borders?: [number, number][];
 	refutation?: { inks: number; format: 'drup'; clauses: string };
 }
 

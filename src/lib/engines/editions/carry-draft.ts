@@ -14,8 +14,9 @@ import {
 	type PairTest,
 	type RegionMatch,
 } from '../boundaries/recut/index.ts';
-import { carryLocks, inkName } from './carry-locks.ts';
+import { carryLocks } from './carry-locks.ts';
 import type { Draft } from './draft.ts';
+import { inkName } from './ink-name.ts';
 
 /** What else is known of the new boundaries. */
 export interface NewGround {
