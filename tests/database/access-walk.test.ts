@@ -12,6 +12,12 @@ import { readActivity } from '../../src/lib/server/services/activity.service.ts'
 import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
 import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
+import {
+	beginSearch,
+	readSearch,
+	sheetSearches,
+	stopSearch,
+} from '../../src/lib/server/services/searches.service.ts';
 import { sheetPieces } from '../../src/lib/server/services/pieces.service.ts';
 import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
@@ -285,6 +291,10 @@ const walk: Walk = {
 	],
 	measureSheetGaps: ['borders.edit', (member) => measureSheetGaps(shop, member, 99, 10)],
 	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],
+	beginSearch: ['colours.edit', (member) => beginSearch(shop, member, 99, { times: 1 })],
+	stopSearch: ['colours.edit', (member) => stopSearch(shop, member, 99, 1)],
+	sheetSearches: ['sheet.read', (member) => sheetSearches(shop, member, 99)],
+	readSearch: ['sheet.read', (member) => readSearch(shop, member, 99, 1)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
 	sheetList: ['sheet.read', (member) => sheetList(shop, member)],

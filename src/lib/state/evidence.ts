@@ -24,6 +24,10 @@ export interface Evidence {
 	outline: string;
 	/** number of the finding whose place is marked */
 	finding: number | null;
+	/** what is written on regions */
+	tags: readonly { region: number; text: string }[];
+	/** whether the sheet is moved so that all of it is seen well */
+	framed: boolean;
 }
 
 const nothing: Evidence = {
@@ -36,6 +40,8 @@ const nothing: Evidence = {
 	borders: [],
 	outline: '',
 	finding: null,
+	tags: [],
+	framed: false,
 };
 
 export const evidence = (parts: Partial<Evidence>): Evidence => ({ ...nothing, ...parts });
@@ -83,11 +89,38 @@ function proofWords({ kind, regions, borders }: Proof, nameOf: (region: number) 
 	return `The ${many} regions that make it necessary${lines}`;
 }
 
-export function collisionEvidence({ locks, regions }: Explanation): Evidence {
+/** The locks that collide, each with its ink, and the regions between them, brought into view. */
+export function collisionEvidence(
+	{ locks, regions }: Explanation,
+	tagOf: (region: number) => string,
+): Evidence {
 	const locked = new Set(locks);
+	const between = regions.filter((region) => !locked.has(region));
 	return evidence({
-		words: 'Solid outline: the locks that collide. Dashed outline: the regions between them.',
+		words: collisionWords(locks.length, between.length),
 		strong: locks,
-		light: regions.filter((region) => !locked.has(region)),
+		light: between,
+		tags: locks.slice(0, mostTags).map((region) => ({ region, text: tagOf(region) })),
+		framed: true,
 	});
+}
+
+/** More names than these would hide what they name. */
+const mostTags = 12;
+
+function collisionWords(locks: number, between: number): string {
+	if (locks === 0) return 'Dashed outline: the regions whose rules collide.';
+	const solid = `Solid outline: the ${locks === 1 ? 'lock' : 'locks'} in the way.`;
+	return between === 0 ? solid : `${solid} Dashed outline: the regions between.`;
+}
+
+/** Regions that would have another ink; more than these are counted only. */
+const mostOutlined = 400;
+
+export function changeEvidence(regions: readonly number[]): Evidence {
+	const many = regions.length;
+	if (many === 0) return evidence({ words: 'No region changes ink.' });
+	const said = many === 1 ? 'the region that changes ink' : `the ${many} regions that change ink`;
+	if (many > mostOutlined) return evidence({ words: `${many} regions change ink.` });
+	return evidence({ words: `Dashed outline: ${said}.`, light: regions });
 }

@@ -10,6 +10,7 @@ import { territoriesRequest, territoriesResponse } from './check-territories.ts'
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
 import { recutOperations } from './recut-operations.ts';
+import { searchOperations } from './search-operations.ts';
 import * as sheets from './sheets.ts';
 import { territoryOperations } from './territory-operations.ts';
 
@@ -145,6 +146,7 @@ export const operations = {
 	},
 	...territoryOperations,
 	...recutOperations,
+	...searchOperations,
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
 		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },

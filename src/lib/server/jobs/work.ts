@@ -9,6 +9,7 @@ export { paintSheet, renderFiles } from './paint.work.ts';
 export { judgePlan, rebalancePlan } from './rebalance.work.ts';
 export { readFile } from './read.work.ts';
 export { readRecutFile } from './recut.work.ts';
+export { searchLonger } from './search.work.ts';
 export { carryRecut } from './recut-carry.work.ts';
 export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
