@@ -1,13 +1,13 @@
 import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
 import { cpuUsage } from 'node:process';
-import loadHighs from 'highs';
 import { neighbors } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import { checkExplanation } from '../../src/lib/engines/colouring/explain-check.ts';
 import { explain } from '../../src/lib/engines/colouring/explain.ts';
 import type { ColouringProblem } from '../../src/lib/engines/colouring/problem.ts';
 import { Random } from '../../src/lib/engines/colouring/random.ts';
+import { plainRelease } from '../support/plain-release.ts';
 import { scatteredMap } from '../support/planar.ts';
 
 const INKS = 4;
@@ -33,8 +33,8 @@ export async function* run(): AsyncGenerator<Record<string, unknown>> {
 		const problem = withLocks(scatteredMap(regions, 3), Math.round(regions / 4), 2);
 		const record = await measure('scattered', problem);
 		const start = processorTime();
-		const plainRelease = await plainProgram(problem);
-		yield { ...record, plainRelease, plainMilliseconds: processorTime() - start };
+		const plain = await plainRelease(problem);
+		yield { ...record, plainRelease: plain, plainMilliseconds: processorTime() - start };
 	}
 }
 
@@ -81,28 +81,4 @@ function withLocks(map: PlainMap, count: number, seed: number): ColouringProblem
 		left--;
 	}
 	return { ...map, inks: INKS, locks };
-}
-
-/** The fewest locked regions without their ink; one variable for each region and ink. */
-async function plainProgram({ regions, borders, locks }: ColouringProblem): Promise<number | null> {
-	const inks = Array.from({ length: INKS }, (_, ink) => ink);
-	const names = Array.from({ length: regions }, (_, r) => inks.map((ink) => `x${r}_${ink}`));
-	const held = Array.from(locks ?? [], (ink, r) => (ink >= 0 ? names[r][ink] : null));
-	const wanted = held.filter((name) => name !== null);
-	const rows = names.map((some) => ` ${some.join(' + ')} = 1`);
-	for (let i = 0; i < borders.a.length; i++) {
-		for (const ink of inks) {
-			rows.push(` ${names[borders.a[i]][ink]} + ${names[borders.b[i]][ink]} <= 1`);
-		}
-	}
-	const text = ['Maximize', ` ${wanted.join('\n + ')}`, 'Subject To', ...rows, 'Binary'];
-	const highs = await loadHighs();
-	const result = highs.solve(
-		[...text, ...names.flat().map((name) => ` ${name}`), 'End'].join('\n'),
-		{
-			output_flag: false,
-			time_limit: 60,
-		},
-	);
-	return result.Status === 'Optimal' ? Math.round(wanted.length - result.ObjectiveValue) : null;
 }

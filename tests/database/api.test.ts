@@ -213,8 +213,32 @@ describe('POST /check/colouring', () => {
 		expect(found).toMatchObject({ colouring: { constructor: 0, toString: 1 } });
 	});
 
+	it('keeps groups alike or different, and reserved inks from regions without their lock', async () => {
+		const regions = ['a', 'b', 'c', 'd', 'e'];
+		const found = await colour({
+			...{ regions, borders: [['a', 'b']], inks: 'fewest', reserved: [0], locks: { e: 0 } },
+			groups: [
+				{ kind: 'alike', name: 'North', keys: ['a', 'c'] },
+				{ kind: 'different', keys: ['b', 'c', 'd', 'e'] },
+			],
+		});
+		if (found.status !== 'coloured') throw new Error(found.status);
+		const { a, b, c, d, e } = found.colouring;
+		expect([a, e, new Set([b, c, d, e]).size]).toEqual([c, 0, 4]);
+		expect(found).toMatchObject({ inksUsed: 4, lowerBound: 4 });
+		const none = await colour({ ...ring(2), inks: 2, reserved: [1] });
+		if (none.status !== 'impossible') throw new Error(none.status);
+		expect(none.explanation.rules).toContainEqual({ kind: 'reserved', region: 'r0', ink: 1 });
+	});
+
 	it.each([
 		['no JSON', '{"regions":', 'malformed'],
+		[
+			'a group with a stranger',
+			{ ...ring(3), groups: [{ kind: 'alike', keys: ['r0', 'x'] }] },
+			'malformed',
+		],
+		['a group of one', { ...ring(3), groups: [{ kind: 'different', keys: ['r0'] }] }, 'malformed'],
 		['a field not known', { ...ring(3), color: 1 }, 'unknown-field'],
 		['a border of nobody', { ...ring(3), borders: [['r0', 'x']] }, 'malformed'],
 		['a border with itself', { ...ring(3), borders: [['r0', 'r0']] }, 'malformed'],
@@ -235,6 +259,37 @@ describe('POST /check/colouring', () => {
 		expect(await fault(callApi('/check/colouring', init))).toMatchObject({ status: 415 });
 		const much = `"${'x'.repeat(33 * 1024 * 1024)}"`;
 		expect(await fault(sendJson('/check/colouring', much))).toMatchObject({ status: 413 });
+	});
+});
+
+describe('POST /check/proof', () => {
+	const check = (body: unknown) => answer(sendJson('/check/proof', body), operations.checkProof);
+	const ring = {
+		form: 'merestone proof 1',
+		regions: [{ key: 'a' }, { key: 'b' }, { key: 'c' }],
+		borders: [
+			[0, 1],
+			[1, 2],
+			[0, 2],
+		],
+		rules: { locks: [], forbidden: [], alike: [], apart: [], reserved: [] },
+		claims: [{ claim: 'inks do not', inks: 2, evidence: { kind: 'odd ring', regions: [0, 1, 2] } }],
+	};
+
+	it('shows what holds and says what does not', async () => {
+		expect(await check(ring)).toMatchObject({ valid: true, faults: [] });
+		const open = await check({ ...ring, borders: ring.borders.slice(1) });
+		expect(open).toMatchObject({ valid: false, claims: [] });
+		expect(open.faults[0]).toContain('do not border');
+	});
+
+	it('answers hostile files with a fault, and bodies that are no JSON with 400', async () => {
+		for (const body of [[], 7, null, { form: 'merestone proof 2' }, { ...ring, more: 1 }]) {
+			expect(await check(body)).toMatchObject({ valid: false, claims: [] });
+		}
+		const sly = await check(JSON.stringify(ring).replace('{', '{"__proto__":{"claims":[]},'));
+		expect(sly.valid).toBe(false);
+		expect(await fault(sendJson('/check/proof', '{"form":'))).toMatchObject({ status: 400 });
 	});
 });
 
@@ -294,6 +349,10 @@ describe('the team’s sheets', () => {
 		const col = await get('/sheets/1/borders/borders.col');
 		expect(await col.text()).toContain('\np edge 49 107\n');
 		expect((await get('/sheets/1/borders/borders.txt')).status).toBe(404);
+		const proof = await (await get('/sheets/1/proof')).json();
+		const checked = await answer(sendJson('/check/proof', proof), operations.checkProof);
+		expect(checked).toMatchObject({ valid: true, faults: [], gaveUp: false });
+		expect(checked.claims).toHaveLength(2);
 		const colouring = await answer(get('/sheets/1/colouring'), operations.readColouring);
 		expect(colouring).toMatchObject({
 			status: 'coloured',

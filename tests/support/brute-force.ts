@@ -1,7 +1,14 @@
 import type { ColouringProblem } from '../../src/lib/engines/colouring/problem.ts';
 
-/** Whether the rules can be kept with so many inks, by trying everything; for a dozen regions. */
-export function feasible(problem: ColouringProblem, inks: number): boolean {
+/**
+ * Whether the rules can be kept with so many inks, by trying everything; for a dozen regions. Reserved
+ * inks are for those who are locked to them, by `opening` where those are not the locks to keep.
+ */
+export function feasible(
+	problem: ColouringProblem,
+	inks: number,
+	opening: ColouringProblem['locks'] = problem.locks,
+): boolean {
 	const { regions, borders } = problem;
 	const colouring = new Int32Array(regions).fill(-1);
 	const differ: number[][] = Array.from({ length: regions }, () => []);
@@ -12,7 +19,9 @@ export function feasible(problem: ColouringProblem, inks: number): boolean {
 	for (let i = 0; i < borders.a.length; i++) put(differ, borders.a[i], borders.b[i]);
 	for (const [a, b] of problem.apart ?? []) put(differ, a, b);
 	for (const [a, b] of problem.alike ?? []) put(same, a, b);
+	const kept = keptBack(problem, opening);
 	const fits = (r: number, ink: number) =>
+		!kept(r, ink) &&
 		!((problem.locks?.[r] ?? -1) >= 0 && problem.locks?.[r] !== ink) &&
 		!problem.forbidden?.some(([region, bad]) => region === r && bad === ink) &&
 		differ[r].every((other) => colouring[other] !== ink) &&
@@ -27,6 +36,20 @@ export function feasible(problem: ColouringProblem, inks: number): boolean {
 		return false;
 	};
 	return extend(0);
+}
+
+/** Whether an ink is reserved, and no region that the first is alike with by any chain is locked to it. */
+function keptBack(
+	{ regions, reserved, alike }: ColouringProblem,
+	locks: ColouringProblem['locks'],
+) {
+	const group = Array.from({ length: regions }, (_, r) => r);
+	for (let round = 0; round < regions; round++) {
+		for (const [a, b] of alike ?? []) group[a] = group[b] = Math.min(group[a], group[b]);
+	}
+	return (r: number, ink: number) =>
+		(reserved?.includes(ink) ?? false) &&
+		!group.some((same, other) => same === group[r] && locks?.[other] === ink);
 }
 
 /** The smallest number of inks up to `most` that keeps the rules, or null. */

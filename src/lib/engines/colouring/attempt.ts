@@ -43,7 +43,7 @@ export function chainBudget(graph: RegionGraph, effort: Effort): number {
 }
 
 /** The first ball holds twelve inked regions, as measured to do nearly always. */
-function ballOptions({ effort, cancelled }: AttemptSettings) {
+export function ballOptions({ effort, cancelled }: AttemptSettings) {
 	const { ballConflicts, ballSize } = effort;
 	return { first: 12, most: ballSize, conflicts: ballConflicts, cancelled };
 }

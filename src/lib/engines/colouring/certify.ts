@@ -28,14 +28,17 @@ export function certify(
 	const none: Proof = { kind: 'not-proved', regions: [] };
 	if (problem.cancelled?.()) return none;
 	if (grouped || prepared.fixed || prepared.bans) {
-		return byRules(problem, prepared, inks - 1) ?? none;
+		const small = byStructure(problem, prepared, bound, inks - 1);
+		return small ?? byRules(problem, prepared, inks - 1) ?? none;
 	}
 	if (graph.count * inks > effortOf(problem).solverSize) return none;
-	const { effort, seed, cancelled } = problem;
-	const refuted = refute(graph, inks - 1, { effort, seed, cancelled });
+	const { effort, effortTimes, seed, cancelled } = problem;
+	const refuted = refute(graph, inks - 1, { effort, effortTimes, seed, cancelled });
 	if (!refuted) return none;
 	const refutation = { inks: inks - 1, format: 'drup' as const, clauses: refuted.clauses };
-	return { kind: 'refutation', regions: named(refuted.regions), refutation };
+	const borders = refuted.borders?.map(([a, b]): [number, number] => [regionOf[a], regionOf[b]]);
+	const regions = named(refuted.regions);
+	return { kind: 'refutation', regions, ...(borders && { borders }), refutation };
 }
 
 /** The bound of the borders alone: with regions kept alike, its proof names real borders. */
@@ -47,6 +50,24 @@ function ungroupedBound(problem: ColouringProblem): Bound {
 		enough: Infinity,
 		steps: effortOf(problem).boundSteps,
 	});
+}
+
+/** Conflicts on the few regions of a clique, a ring or a wheel. */
+const smallConflicts = 1_000;
+
+/** The regions that show the bound of the borders may need more inks when some are not theirs to have. */
+function byStructure(
+	problem: ColouringProblem,
+	{ vertexOf }: Prepared,
+	{ proof }: Bound,
+	inks: number,
+): Proof | null {
+	const shown = new Set(proof.regions);
+	const regions: number[] = [];
+	for (let r = 0; r < problem.regions; r++) if (shown.has(vertexOf[r])) regions.push(r);
+	if (regions.length === 0 || regions.length * inks > effortOf(problem).solverSize) return null;
+	const { cancelled } = problem;
+	return ruleRefutation(problem, regions, inks, { conflicts: smallConflicts, cancelled });
 }
 
 /** Looks only at regions that may fail: those that cannot be set aside, and the locked ones. */

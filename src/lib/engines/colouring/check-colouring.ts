@@ -1,4 +1,5 @@
 import { checkProof } from './check-proof.ts';
+import { holdersOfReserved } from './check-reserved.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
 /**
@@ -63,6 +64,16 @@ function regionErrors(problem: ColouringProblem, colouring: Int32Array): string[
 	for (const [region, ink] of forbidden ?? []) {
 		if (colouring[region] === ink) errors.push(`Region ${region} has its forbidden ink ${ink}.`);
 	}
+	return [...errors, ...reservedErrors(problem, colouring)];
+}
+
+function reservedErrors(problem: ColouringProblem, colouring: Int32Array): string[] {
+	const holders = holdersOfReserved(problem);
+	const errors: string[] = [];
+	colouring.forEach((ink, region) => {
+		if (holders.get(ink)?.has(region) !== false) return;
+		errors.push(`Region ${region} has the reserved ink ${ink}, but no lock gives it.`);
+	});
 	return errors;
 }
 

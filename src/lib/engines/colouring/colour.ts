@@ -3,10 +3,13 @@ import { exactColouring, quickColouring, type AttemptSettings } from './attempt.
 import { structuralBound, type Bound } from './bounds.ts';
 import { certify } from './certify.ts';
 import { effortOf } from './effort.ts';
+import { inksBanned } from './bans.ts';
 import { explain } from './explain.ts';
 import { problemFaults } from './faults.ts';
 import { fewestInks, type FewestOutcome } from './fewest.ts';
 import { towardsGoal } from './goal.ts';
+import { leastInks } from './least-inks.ts';
+import { mendedPrevious } from './mended-previous.ts';
 import { byRegion, prepare, type Prepared } from './prepare.ts';
 import type { ColouringProblem, ColouringResult } from './problem.ts';
 
@@ -23,8 +26,8 @@ export async function colour(problem: ColouringProblem): Promise<ColouringResult
 	const prepared = prepare(problem);
 	if (prepared.clash) return impossible(problem, 0);
 	const { bound, settings } = measured(problem, prepared);
-	const outcome = search(problem, prepared, bound, settings);
-	const least = Math.max(bound.inks, prepared.inksLocked);
+	const least = leastInks(prepared, bound);
+	const outcome = search(problem, prepared, least, settings);
 	if (outcome === 'impossible') return impossible(problem, least);
 	if (outcome === 'undecided') return undecided(problem, least);
 	return coloured(problem, prepared, bound, outcome);
@@ -56,14 +59,16 @@ function measured(problem: ColouringProblem, { graph }: Prepared) {
 function search(
 	problem: ColouringProblem,
 	prepared: Prepared,
-	bound: Bound,
+	lowest: number,
 	settings: AttemptSettings,
 ): FewestOutcome | 'impossible' | 'undecided' {
 	const quick = (inks: number) => quickColouring(prepared, inks, settings);
 	const exact = (inks: number) => exactColouring(prepared, inks, settings);
-	const lowest = Math.max(bound.inks, prepared.inksLocked);
 	if (problem.inks === 'fewest') {
-		return fewestInks(lowest, lowest + problem.regions, quick, exact) ?? 'undecided';
+		const highest = lowest + problem.regions + inksBanned(prepared.bans);
+		const atHand = (fewerThan: number) => mendedPrevious(problem, prepared, settings, fewerThan);
+		const tries = { quick, exact, atHand, told: problem.bounds };
+		return fewestInks(lowest, highest, tries) ?? 'undecided';
 	}
 	const { inks } = problem;
 	if (inks < lowest) return 'impossible';

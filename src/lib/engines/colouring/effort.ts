@@ -56,6 +56,18 @@ const efforts: Record<NonNullable<ColouringProblem['effort']>, Effort> = {
 	},
 };
 
-export function effortOf(problem: ColouringProblem): Effort {
-	return efforts[problem.effort ?? 'normal'];
+/** With a factor, the steps of what may run out of them grow; sizes that limit memory stay. */
+export function effortOf({ effort = 'normal', effortTimes = 1 }: ColouringProblem): Effort {
+	const once = efforts[effort];
+	return {
+		...once,
+		chainSteps: once.chainSteps * effortTimes,
+		chainStepsEach: once.chainStepsEach * effortTimes,
+		boundSteps: once.boundSteps * effortTimes,
+		wholeConflicts: once.wholeConflicts * effortTimes,
+	};
 }
+
+/** Solver conflicts that one question about the whole map may take. */
+export const mostConflicts = (problem: ColouringProblem): number =>
+	effortOf(problem).wholeConflicts;

@@ -1,5 +1,5 @@
 import type { RegionGraph } from '../graph/region-graph.ts';
-import { banned, type Bans } from './bans.ts';
+import { banned, bannedInks, inksBanned, type Bans } from './bans.ts';
 import { prepare } from './prepare.ts';
 import type { ColouringProblem } from './problem.ts';
 
@@ -55,9 +55,8 @@ function readDemands(problem: ColouringProblem, vertexOf: Uint32Array): Demand[]
 
 /** So many inks that free vertices can always be coloured last: more would not help either. */
 export function enoughInks(graph: RegionGraph, demands: Demand[], bans: Bans | null): number {
-	let named = 0;
+	let named = inksBanned(bans);
 	for (const { ink } of demands) named = Math.max(named, ink + 1);
-	for (const ink of bans?.inks ?? []) named = Math.max(named, ink + 1);
 	let degree = 0;
 	for (let v = 0; v < graph.count; v++) {
 		degree = Math.max(degree, graph.offsets[v + 1] - graph.offsets[v]);
@@ -65,13 +64,14 @@ export function enoughInks(graph: RegionGraph, demands: Demand[], bans: Bans | n
 	return named + degree + 1;
 }
 
-/** How many of the inks a vertex may have. */
+/**
+ * How many of the inks a vertex may have, whatever becomes of its locks: a reserved ink that it is locked
+ * to does not count, as it goes with the lock.
+ */
 export function choices({ bans, inks }: Case, vertex: number): number {
 	if (bans === null) return inks;
-	const bad = new Set(bans.inks.subarray(bans.offsets[vertex], bans.offsets[vertex + 1]));
-	let count = inks;
-	for (const ink of bad) if (ink < inks) count--;
-	return count;
+	const opened = bans.reserved?.opened(vertex, inks) ?? 0;
+	return inks - bannedInks(bans, vertex, inks).size - opened;
 }
 
 /** Whether a demand asks what no colouring of its vertex alone could give. */

@@ -1,4 +1,5 @@
 import { Sat } from '../solver/sat.ts';
+import { holdersOfReserved } from './check-reserved.ts';
 import type { ColouringProblem } from './problem.ts';
 
 const CONFLICTS = 200_000;
@@ -6,18 +7,24 @@ const CONFLICTS = 200_000;
 /**
  * A problem as plain clauses, one variable for each region and ink, locks as assumptions. Inks that no
  * lock or rule names are alike: of these no more are written down than suffice to colour every region
- * of whatever degree, so that 'fewest' (any number of inks) and large numbers stay small.
+ * of whatever degree, so that 'fewest' (any number of inks) and large numbers stay small. Who is locked
+ * to a reserved ink may have it whether or not that lock is assumed. `heeds` leaves regions out of what
+ * reserved inks ask.
  */
 export class PlainQuestion {
 	private readonly sat = new Sat();
 	private readonly place = new Map<number, number>();
 	private readonly inks: number;
 
-	constructor(private problem: ColouringProblem) {
+	constructor(
+		private problem: ColouringProblem,
+		private readonly heeds: (region: number) => boolean = () => true,
+	) {
 		const limit = problem.inks === 'fewest' ? Infinity : problem.inks;
 		const named = new Set<number>();
 		for (const ink of problem.locks ?? []) if (ink >= 0 && ink < limit) named.add(ink);
 		for (const [, ink] of problem.forbidden ?? []) if (ink < limit) named.add(ink);
+		for (const ink of problem.reserved ?? []) if (ink < limit) named.add(ink);
 		for (const ink of named) this.place.set(ink, this.place.size);
 		this.inks = named.size + Math.min(limit - named.size, unnamedInksEnough(problem));
 		for (let i = 0; i < problem.regions * this.inks; i++) this.sat.newVariable();
@@ -60,6 +67,17 @@ export class PlainQuestion {
 		for (const [region, ink] of forbidden ?? []) {
 			const place = this.place.get(ink);
 			if (place !== undefined) this.sat.addClause([-this.has(region, place)]);
+		}
+		this.writeReserved();
+	}
+
+	private writeReserved(): void {
+		for (const [ink, holders] of holdersOfReserved(this.problem)) {
+			const place = this.place.get(ink);
+			if (place === undefined) continue;
+			for (let r = 0; r < this.problem.regions; r++) {
+				if (!holders.has(r) && this.heeds(r)) this.sat.addClause([-this.has(r, place)]);
+			}
 		}
 	}
 

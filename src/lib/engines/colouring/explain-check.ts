@@ -1,4 +1,5 @@
 import { PlainQuestion } from './explain-check-clauses.ts';
+import { holdersOfReserved } from './check-reserved.ts';
 import type { ColouringProblem, Explanation, Rule } from './problem.ts';
 
 /**
@@ -18,7 +19,7 @@ export async function checkExplanation(
 		...lockErrors(ask, explanation),
 		...(explanation.locks.length === 0 ? ruleErrors(problem, explanation.rules) : []),
 		...regionErrors(problem, explanation),
-		...releaseErrors(problem, ask, explanation),
+		...releaseErrors(problem, explanation),
 		...inkErrors(problem, explanation),
 	];
 }
@@ -81,10 +82,23 @@ function onlyRules(problem: ColouringProblem, rules: Rule[]): ColouringProblem {
 		inks: rules.some((rule) => rule.kind === 'inks') ? problem.inks : 'fewest',
 		alike: own(problem.alike, pairs('alike')),
 		apart: own(problem.apart, pairs('apart')),
-		forbidden: forbidden.filter(([region, ink]) =>
-			problem.forbidden?.some((pair) => pair[0] === region && pair[1] === ink),
-		),
+		forbidden: [
+			...forbidden.filter(([region, ink]) =>
+				problem.forbidden?.some((pair) => pair[0] === region && pair[1] === ink),
+			),
+			...reservedFrom(problem, rules),
+		],
 	};
+}
+
+/** What the rules named say of reserved inks, as far as it is so. */
+function reservedFrom(problem: ColouringProblem, rules: Rule[]): [number, number][] {
+	const holders = holdersOfReserved(problem);
+	return rules.flatMap((rule): [number, number][] =>
+		rule.kind === 'reserved' && holders.get(rule.ink)?.has(rule.region) === false
+			? [[rule.region, rule.ink]]
+			: [],
+	);
 }
 
 function regionErrors(problem: ColouringProblem, { locks, regions }: Explanation): string[] {
@@ -93,30 +107,34 @@ function regionErrors(problem: ColouringProblem, { locks, regions }: Explanation
 	const inside = (pair: readonly [number, number]) => shown.has(pair[0]) && shown.has(pair[1]);
 	const borders = Array.from(problem.borders.a, (a, i) => [a, problem.borders.b[i]] as const);
 	const within = borders.filter(inside);
-	const part = new PlainQuestion({
-		...problem,
-		borders: { a: within.map((pair) => pair[0]), b: within.map((pair) => pair[1]) },
-		alike: problem.alike?.filter(inside),
-		apart: problem.apart?.filter(inside),
-		forbidden: problem.forbidden?.filter(([region]) => shown.has(region)),
-	});
+	const part = new PlainQuestion(
+		{
+			...problem,
+			borders: { a: within.map((pair) => pair[0]), b: within.map((pair) => pair[1]) },
+			alike: problem.alike?.filter(inside),
+			apart: problem.apart?.filter(inside),
+			forbidden: problem.forbidden?.filter(([region]) => shown.has(region)),
+		},
+		(region) => shown.has(region),
+	);
 	return part.feasible(locks) === true ? ['The regions shown do not carry the collision.'] : [];
 }
 
 function releaseErrors(
 	problem: ColouringProblem,
-	ask: PlainQuestion,
-	{ release, locks }: Explanation,
+	{ release, locks: blamed }: Explanation,
 ): string[] {
-	if (!release) return locks.length === 0 ? [] : ['Locks are to blame, but no release is given.'];
-	if (locks.length === 0) return ['A release is given, but the rules alone fail.'];
+	if (!release) return blamed.length === 0 ? [] : ['Locks are to blame, but no release is given.'];
+	if (blamed.length === 0) return ['A release is given, but the rules alone fail.'];
 	const errors: string[] = [];
 	const dropped = new Set(release.locks);
 	const held: number[] = [];
 	problem.locks?.forEach((ink, r) => {
 		if (ink >= 0 && !dropped.has(r)) held.push(r);
 	});
-	if (ask.feasible(held) === false) errors.push('The release does not help.');
+	const locks = problem.locks?.map((ink, r) => (dropped.has(r) ? -1 : ink));
+	const rest = new PlainQuestion({ ...problem, locks });
+	if (rest.feasible(held) === false) errors.push('The release does not help.');
 	const cost = release.locks.reduce((sum, lock) => sum + (problem.lockCosts?.[lock] ?? 1), 0);
 	const slack = 1e-6 * Math.max(1, cost);
 	if (Math.abs(cost - release.cost) > slack) errors.push(`The release costs ${cost}.`);

@@ -5,7 +5,7 @@ export class Purse {
 	constructor(
 		private left: number,
 		private readonly each: number,
-		readonly cancelled?: () => boolean,
+		readonly cancelled?: (conflicts?: number) => boolean,
 	) {}
 
 	get empty(): boolean {

@@ -2,6 +2,7 @@ import { Sat } from '../solver/sat.ts';
 import type { Case } from './explain-case.ts';
 import type { Purse } from './explain-purse.ts';
 import type { ColouringProblem, Rule } from './problem.ts';
+import { reservedByRegion } from './reserved.ts';
 
 /**
  * An irreducible set of rules that no colouring can keep, locks aside, among those of the regions
@@ -68,7 +69,18 @@ function rulesAmong(problem: ColouringProblem, inks: number, regions: Set<number
 		if (!regions.has(region) || ink >= inks) continue;
 		rules.set(`forbidden ${region} ${ink}`, { kind: 'forbidden', region, ink });
 	}
-	return [...rules.values()];
+	return [...rules.values(), ...reservedAmong(problem, inks, regions)];
+}
+
+function reservedAmong(problem: ColouringProblem, inks: number, regions: Set<number>): Rule[] {
+	const reserved = reservedByRegion(problem);
+	if (!reserved) return [];
+	const inUse = reserved.inks.filter((ink) => ink < inks);
+	return [...regions].flatMap((region) =>
+		inUse
+			.filter((ink) => reserved.keptFrom(region, ink))
+			.map((ink): Rule => ({ kind: 'reserved', region, ink })),
+	);
 }
 
 /** Regions that each need an ink, and rules that hold when their switch is assumed. */

@@ -6,7 +6,7 @@ import { barePart, shrink, type Clash } from './explain-shrink.ts';
 import { Whole } from './explain-whole.ts';
 import { problemFaults } from './faults.ts';
 import type { ColouringProblem, Explanation, Release } from './problem.ts';
-import { cheapestRelease } from './release.ts';
+import { cheapestRelease, type ReleaseSoFar } from './release.ts';
 
 /** Conflicts for one question and for each of the tasks in all; sets for the integer program. */
 const EFFORT = {
@@ -22,7 +22,9 @@ const EFFORT = {
  * empty, `rules` alone cannot be kept, and without any single one they can. Dropping the locks of
  * `release` makes the problem feasible; no release costs less than its `lowerBound`, and `proved` says
  * that it is attained. The collision needs no other regions than `regions`. `inksThatWouldDo` is the
- * smallest number of inks that the effort sufficed to tell. Steps are solver conflicts, by `effort`.
+ * smallest number of inks that the effort sufficed to tell. `locks` collide whichever of the other locks
+ * stand; a region that is locked to a reserved ink may have it in all of this even where its lock is not
+ * held, but after the `release` it is coloured without. Steps are solver conflicts, by `effort`.
  *
  * Null when the problem is feasible, or the effort did not suffice to tell that it is not.
  * @throws RangeError when the problem is not well formed: ask `problemFaults` first
@@ -51,33 +53,42 @@ class Explaining {
 		const withoutLocks = this.ask([], this.purse());
 		if (withoutLocks === 'unsat') return this.withRules(this.refutedPart());
 		if (withoutLocks === 'unknown') return null;
+		const unmet = [...this.of.demands.keys()].filter((d) => !this.whole.meets(d));
 		const { immediate } = this.whole;
 		if (immediate.length === 0 && this.ask(this.of.demands.keys(), this.purse()) !== 'unsat') {
 			return null;
 		}
+		const { releaseFound } = this.problem;
 		const { clashes, ...found } = await cheapestRelease(this.of, this.whole, this.purse(), {
-			rows: EFFORT[this.problem.effort ?? 'normal'].rows,
+			unmet,
+			rows: this.effort().rows,
 			seed: this.seed,
+			found: releaseFound && ((soFar) => releaseFound(this.released({ ...soFar, proved: false }))),
 		});
-		const release: Release = {
-			locks: found.demands.flatMap((d) => this.of.demands[d].regions).sort((a, b) => a - b),
-			cost: found.cost,
-			proved: found.proved,
-			lowerBound: found.lowerBound,
-		};
 		const clash = this.irreducible(immediate.length > 0 ? immediate[0] : clashes[0].demands);
 		return {
 			locks: clash.demands.map((d) => this.of.demands[d].regions[0]).sort((a, b) => a - b),
 			rules: [],
 			regions: this.regionsOf(barePart(this.of, clash, this.purse(), this.seed)),
-			release,
+			release: this.released(found),
 			inksThatWouldDo: inksThatWouldDo(this.of, this.purse(), this.seed),
 		};
 	}
 
+	private released({ demands, ...rest }: ReleaseSoFar & { proved: boolean }): Release {
+		const locks = demands.flatMap((d) => this.of.demands[d].regions).sort((a, b) => a - b);
+		return { locks, ...rest };
+	}
+
 	private purse(): Purse {
-		const { each, all } = EFFORT[this.problem.effort ?? 'normal'];
+		const { each, all } = this.effort();
 		return new Purse(all, each, this.problem.cancelled);
+	}
+
+	private effort() {
+		const { effort = 'normal', effortTimes = 1 } = this.problem;
+		const { each, all, rows } = EFFORT[effort];
+		return { each: each * effortTimes, all: all * effortTimes, rows: rows * effortTimes };
 	}
 
 	private ask(demands: Iterable<number>, purse: Purse) {

@@ -19,7 +19,8 @@ export function problemFaults(problem: ColouringProblem): string[] {
 
 const isCount = (value: number) => Number.isInteger(value) && value >= 0 && value < 2 ** 31;
 
-function inkFaults({ inks, regions, locks, previous, forbidden }: ColouringProblem): string[] {
+function inkFaults(problem: ColouringProblem): string[] {
+	const { inks, regions, locks, previous, forbidden, reserved } = problem;
 	const faults: string[] = [];
 	if (inks !== 'fewest' && !(Number.isInteger(inks) && inks >= 1 && inks <= mostInks)) {
 		faults.push(`The number of inks must be 'fewest' or a whole number from 1 to ${mostInks}.`);
@@ -38,6 +39,8 @@ function inkFaults({ inks, regions, locks, previous, forbidden }: ColouringProbl
 		([region, ink]) => !(isCount(region) && region < regions && isCount(ink) && ink < mostInks),
 	);
 	if (bad) faults.push(`'forbidden' names region ${bad[0]} and ink ${bad[1]}, which do not exist.`);
+	const stray = reserved?.find((ink) => !(isCount(ink) && ink < mostInks));
+	if (stray !== undefined) faults.push(`'reserved' names ink ${stray}, which does not exist.`);
 	return faults;
 }
 

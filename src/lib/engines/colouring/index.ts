@@ -11,6 +11,25 @@ export type {
 export { checkColouring } from './check-colouring.ts';
 export { colour } from './colour.ts';
 export { checkExplanation } from './explain-check.ts';
+export { mostConflicts } from './effort.ts';
 export { explanationSentence } from './explanation-sentence.ts';
+export {
+	gainOf,
+	openQuestion,
+	type Gain,
+	type OpenQuestion,
+	type Standing,
+} from './open-question.ts';
+export { checkBound, proveBound } from './prove-bound.ts';
 export { problemFaults } from './faults.ts';
 export { proofSentence } from './proof-sentence.ts';
+export {
+	collisionProof,
+	openProof,
+	proofFile,
+	proofText,
+	type OpenProof,
+	type ProofFile,
+	type RegionNames,
+} from './proofs/index.ts';
+export { checkProofFile, checkProofText, type ProofChecked } from './proofs/check/index.ts';

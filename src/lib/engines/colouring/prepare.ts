@@ -5,6 +5,7 @@ import { renumber } from '../graph/renumber.ts';
 import { alikeGroups } from './alike-groups.ts';
 import { banned, bansOf, type Bans } from './bans.ts';
 import type { ColouringProblem } from './problem.ts';
+import { reservedInks } from './reserved.ts';
 
 /**
  * The problem as the colourers see it: every keep-alike group one vertex, keep-apart pairs edges, and
@@ -33,12 +34,13 @@ export function prepare(problem: ColouringProblem): Prepared {
 	const { graph, vertexOf, regionOf, inner } = contracted(problem, groups);
 	const { fixed, torn } = fixedInks(problem, vertexOf, graph.count);
 	const pairs = (problem.forbidden ?? []).map(([r, ink]) => [vertexOf[r], ink] as const);
+	const reserved = reservedInks(problem, graph.count, vertexOf);
 	const prepared = {
 		graph,
 		vertexOf,
 		regionOf,
 		fixed,
-		bans: bansOf(graph.count, pairs),
+		bans: bansOf(graph.count, pairs, reserved),
 		grouped: graph.count < problem.regions,
 		inksLocked: fixed ? fixed.reduce((most, ink) => Math.max(most, ink + 1), 0) : 0,
 		clash: inner || torn,

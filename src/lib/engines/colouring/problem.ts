@@ -29,9 +29,18 @@ export interface ColouringProblem {
 	inkDistances?: readonly (readonly number[])[];
 	seed?: number;
 	effort?: 'quick' | 'normal' | 'thorough';
-	/** asked between steps; true ends the run with the best so far */
-	cancelled?: () => boolean;
+	/** so many times the steps of this effort, from 1 */
+	effortTimes?: number;
+	/**
+	 * asked between steps, while a question is put to the solver with the conflicts it has taken so far;
+	 * true ends the run with the best so far
+	 */
+	cancelled?: (conflicts?: number) => boolean;
+	/** told whenever more is known: no fewer than so many inks do; so many do, or null while none is found */
+	bounds?: (atLeast: number, enough: number | null) => void;
 	progress?: (message: string, share: number) => void;
+	/** told of every better release of colliding locks and every better bound, while it is worked out */
+	releaseFound?: (soFar: Release) => void;
 }
 
 export type ProofKind =
@@ -45,6 +54,8 @@ export type ProofKind =
 export interface Proof {
 	kind: ProofKind;
 	regions: number[];
+	/** the pairs among `regions` that a refutation needs; all of them when absent */
+	borders?: [number, number][];
 	refutation?: { inks: number; format: 'drup'; clauses: string };
 }
 

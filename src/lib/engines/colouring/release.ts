@@ -18,12 +18,14 @@ export interface CheapestRelease {
 const ROUNDING = 1e-9;
 /** choices by rule of thumb tried after each exact one */
 const QUICK_CHOICES = 3;
-/** of the integer program for each choice */
-const NODES = 100;
+/** of the integer program for a choice: few while new clashes still come, then so many */
+const NODES = [1, 100];
 
 /**
- * The cheapest demands to drop so that the rest can be met, where dropping every demand is known to
- * work. `rows` are the sets that may be handed to the integer program, counted at each choice.
+ * The cheapest demands to drop so that the rest can be met, where dropping `unmet` is known to work: an
+ * assignment leaves just them unmet. What is dropped is always such a list, so that a reserved ink that
+ * went with a lock is not had without it. `rows` are the sets that may be handed to the integer program,
+ * counted at each choice.
  *
  * Method: implicit hitting sets (Chandrasekaran et al. 2013; Davies and Bacchus 2011). A cheapest
  * choice that meets every clash known is dropped; if the rest still clashes, the new clash is shrunk and
@@ -34,14 +36,24 @@ export async function cheapestRelease(
 	of: Case,
 	whole: Whole,
 	purse: Purse,
-	{ rows, seed }: { rows: number; seed: number },
+	{ rows, ...options }: ReleaseOptions,
 ): Promise<CheapestRelease> {
-	const search = new ReleaseSearch(of, whole, purse, seed);
+	const search = new ReleaseSearch(of, whole, purse, options);
 	while (search.rows < rows && !search.closed && !purse.empty) {
 		if (!(await search.round())) break;
 	}
 	if (!search.closed) search.improve();
 	return search.result();
+}
+
+export type ReleaseSoFar = Pick<CheapestRelease, 'demands' | 'cost' | 'lowerBound'>;
+
+interface ReleaseOptions {
+	rows: number;
+	seed: number;
+	unmet: number[];
+	/** told whenever the best release or the bound is better than before */
+	found?: (soFar: ReleaseSoFar) => void;
 }
 
 class ReleaseSearch {
@@ -52,16 +64,18 @@ class ReleaseSearch {
 	private lowerBound = 0;
 	private readonly clashes: Clash[];
 	private readonly costs: Float64Array;
+	/** which of `NODES` the next choice gets */
+	private depth = 0;
 
 	constructor(
 		private of: Case,
 		private whole: Whole,
 		private purse: Purse,
-		private seed: number,
+		private options: Omit<ReleaseOptions, 'rows'>,
 	) {
 		this.clashes = whole.immediate.map((demands) => ({ demands, vertices: [] }));
 		this.costs = Float64Array.from(of.demands, (demand) => demand.cost);
-		this.best = of.demands.map((_, d) => d);
+		this.best = options.unmet;
 		this.bestCost = this.costOf(this.best);
 	}
 
@@ -71,8 +85,9 @@ class ReleaseSearch {
 
 	/** One exact choice and the clashes it leaves; false when nothing more can be learnt. */
 	async round(): Promise<boolean> {
-		const choice = await minimumHittingSet(this.sets(), this.costs, { nodes: NODES });
-		this.lowerBound = Math.max(this.lowerBound, choice.lowerBound);
+		const nodes = NODES[this.depth];
+		const choice = await minimumHittingSet(this.sets(), this.costs, { nodes });
+		this.raise(choice.lowerBound);
 		this.rows += choice.rows;
 		const before = this.clashes.length;
 		if (this.closed) return false;
@@ -80,7 +95,21 @@ class ReleaseSearch {
 		for (let i = 0; i < QUICK_CHOICES && !this.closed; i++) {
 			if (!this.gather(greedyHittingSet(this.sets(), this.costs), false)) break;
 		}
-		return this.clashes.length > before;
+		if (this.clashes.length > before) return true;
+		if (choice.proved || this.depth + 1 === NODES.length) return false;
+		this.depth++;
+		return true;
+	}
+
+	private raise(lowerBound: number): void {
+		if (lowerBound <= this.lowerBound) return;
+		this.lowerBound = lowerBound;
+		this.tell();
+	}
+
+	private tell(): void {
+		const { best: demands, bestCost: cost, lowerBound } = this;
+		this.options.found?.({ demands, cost, lowerBound: Math.min(lowerBound, cost) });
 	}
 
 	private sets(): number[][] {
@@ -101,7 +130,7 @@ class ReleaseSearch {
 			if (answer === 'sat') this.offer(held);
 			if (answer !== 'unsat') break;
 			const failed = this.whole.failedDemands();
-			const clash = shrink(this.of, failed, this.purse, this.seed);
+			const clash = shrink(this.of, failed, this.purse, this.options.seed);
 			this.clashes.push(clash ?? { demands: failed, vertices: [] });
 			const { demands } = this.clashes[this.clashes.length - 1];
 			for (const d of apart ? demands : [this.worthiest(demands)]) held.delete(d);
@@ -152,6 +181,7 @@ class ReleaseSearch {
 		if (cost >= this.bestCost) return;
 		this.best = unmet;
 		this.bestCost = cost;
+		this.tell();
 	}
 
 	private costOf(demands: number[]): number {

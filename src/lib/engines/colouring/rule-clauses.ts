@@ -1,9 +1,10 @@
 import type { ColouringProblem } from './problem.ts';
+import { reservedByRegion } from './reserved.ts';
 
 /**
  * The clauses of a problem on some of its regions: the variable of the i-th of `regions` (from 1) and
  * ink c is (i - 1) * inks + c + 1. `needs[i]` says that it has an ink; `rules` holds the borders, keep
- * apart and keep alike among them, and their locks and forbidden inks.
+ * apart and keep alike among them, and their locks, forbidden and reserved inks.
  */
 export function ruleClauses(
 	problem: ColouringProblem,
@@ -39,6 +40,13 @@ export function ruleClauses(
 	for (const [region, ink] of forbidden ?? []) {
 		const i = place.get(region);
 		if (i !== undefined && ink < inks) rules.push([-variable(i, ink)]);
+	}
+	const reserved = reservedByRegion(problem);
+	for (const ink of reserved?.inks ?? []) {
+		if (ink >= inks) continue;
+		for (const [region, i] of place) {
+			if (reserved?.keptFrom(region, ink)) rules.push([-variable(i, ink)]);
+		}
 	}
 	for (const [region, i] of locks ? place : []) {
 		const locked = (locks as Int32Array)[region];

@@ -17,6 +17,7 @@ const ruled = fc.integer({ min: 3, max: 8 }).chain((regions) => {
 			borders: pairs(16),
 			apart: pairs(2),
 			alike: pairs(2),
+			reserved: fc.oneof(fc.constant([]), fc.array(fc.nat(5), { maxLength: 3 })),
 			forbidden: fc.array(fc.tuple(region, fc.nat(4)), { maxLength: 6 }),
 			locks: fc.array(fc.integer({ min: -6, max: 4 }), {
 				minLength: regions,
@@ -52,11 +53,12 @@ describe('colouring under rules against trying everything', () => {
 					expect([result.status, least]).toEqual(['impossible', null]);
 				}
 				if (result.status === 'coloured') {
+					if (problem.reserved?.length) seen.add('with reserved inks');
 					expect(result.lowerBound).toBeLessThanOrEqual(least as number);
 				}
 			}),
 			{ numRuns: 400 },
 		);
-		expect([...seen].sort()).toEqual(['coloured', 'impossible']);
+		expect([...seen].sort()).toEqual(['coloured', 'impossible', 'with reserved inks']);
 	});
 });

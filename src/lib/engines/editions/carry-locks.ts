@@ -7,6 +7,7 @@ import {
 	type Pin,
 } from '../boundaries/recut/index.ts';
 import type { Draft } from './draft.ts';
+import { inkName } from './ink-name.ts';
 
 type Locks = Draft['locks'];
 
@@ -37,7 +38,3 @@ export function carryLocks(
 
 const subjectOf = ({ key, value }: Pin<Locks[string]>, draft: Draft) =>
 	`The lock of ${quoted(key)} on ${inkName(draft, value.ink)}`;
-
-/** Name of an ink in a sentence. */
-export const inkName = ({ palette }: Draft, ink: number) =>
-	palette.inks[ink]?.name || `ink ${ink + 1}`;

@@ -65,6 +65,17 @@ export interface GroupRule {
 /** More could not be told apart on paper, and each would need an ink of its own. */
 export const mostDifferent = 64;
 
+/** Pairs that the groups of a draft in which all differ may come to together. */
+export const mostDifferentPairs = 500_000;
+
+/** How many pairs the groups in which all differ come to. */
+export const differentPairs = (groups: readonly Pick<GroupRule, 'kind' | 'keys'>[]): number =>
+	groups.reduce(
+		(sum, { kind, keys }) =>
+			kind === 'different' ? sum + (keys.length * (keys.length - 1)) / 2 : sum,
+		0,
+	);
+
 /**
  * That regions along the edge follow an adjoining sheet of the team as it was then. What follows from it
  * stands among the locks and forbidden inks, marked with the number of that sheet.

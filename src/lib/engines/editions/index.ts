@@ -16,4 +16,6 @@ export {
 } from './differences.ts';
 export type { Draft } from './draft.ts';
 export { carryDraft, type CarriedDraft, type NewGround } from './carry-draft.ts';
+export { colouringProblem, strangersIn, type RuleGround } from './colouring-problem.ts';
+export { lockSource, ruleSources, type RuleSource, type SourceGround } from './rule-sources.ts';
 export { carryInks } from './carry-inks.ts';

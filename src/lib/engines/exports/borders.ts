@@ -9,6 +9,7 @@ import {
 	type Standing,
 } from '../borders/index.ts';
 import { exportTableCsv } from './data-table.ts';
+import { plainLine } from './plain-line.ts';
 
 export interface BordersOut {
 	/** name of the sheet */
@@ -73,18 +74,11 @@ export function exportBordersCsv({ keys, names, borders, rules }: BordersOut): U
 export function exportBordersCol({ title, keys, names, borders, rules }: BordersOut): Uint8Array {
 	const { a, b } = bordersForSheet(keys, borders, rules);
 	const lines = [
-		`c Borders that count on the sheet ${plain(title)}`,
+		`c Borders that count on the sheet ${plainLine(title)}`,
 		'c region number, key, name',
-		...keys.map((key, region) => `c ${region + 1} ${plain(key)} ${plain(names[region])}`),
+		...keys.map((key, region) => `c ${region + 1} ${plainLine(key)} ${plainLine(names[region])}`),
 		`p edge ${keys.length} ${a.length}`,
 		...Array.from(a, (from, border) => `e ${from + 1} ${b[border] + 1}`),
 	];
 	return new TextEncoder().encode(lines.map((line) => `${line}\n`).join(''));
 }
-
-/** A JSON string of one line, line ends of every script written as escapes. */
-const plain = (name: string): string =>
-	JSON.stringify(name).replace(
-		/[\u007f-\u009f\u2028\u2029]/g,
-		(sign) => `\\u${sign.charCodeAt(0).toString(16).padStart(4, '0')}`,
-	);

@@ -6,3 +6,4 @@ export { csvField, exportCsv } from './csv.ts';
 export { subsetFont } from './subset-font.ts';
 export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';
 export { exportWorkbook } from './workbook.ts';
+export { exportProofZip } from './proof-files.ts';

@@ -1,4 +1,4 @@
-import { unzipSync, zipSync } from 'fflate';
+import { strToU8, unzipSync, zipSync } from 'fflate';
 
 /** Written into every entry in place of the time of writing. */
 const fixedTime = '2026-01-01T00:00:00';
@@ -9,4 +9,10 @@ const fixedTime = '2026-01-01T00:00:00';
  */
 export function repeatableZip(bytes: Uint8Array): Uint8Array {
 	return zipSync(unzipSync(bytes), { level: 9, mtime: fixedTime });
+}
+
+/** Texts by file name as one zip, in that order; the same bytes on any day. */
+export function zipOf(files: Record<string, string>): Uint8Array {
+	const entries = Object.entries(files).map(([name, text]) => [name, strToU8(text)]);
+	return zipSync(Object.fromEntries(entries), { level: 9, mtime: fixedTime });
 }

@@ -13,16 +13,27 @@ export class Replay {
 	private gone = new Set<number[]>();
 	private order: number[] = [];
 	private done = 0;
+	private looked = 0;
 
-	constructor(variables: number) {
+	/** `steps`: literals looked at before propagation stops for good, with `spent` set. */
+	constructor(
+		variables: number,
+		private readonly steps = Infinity,
+	) {
 		this.middle = variables;
 		this.values = new Int8Array(2 * variables + 1);
 		this.watching = Array.from({ length: 2 * variables + 1 }, () => []);
 	}
 
+	/** Whether the steps ran out: what was told since then is not to be relied on. */
+	get spent(): boolean {
+		return this.looked > this.steps;
+	}
+
 	/** Is the clause a consequence by unit propagation? Leaves everything as it was. */
 	follows(clause: readonly number[]): boolean {
 		const before = this.order.length;
+		this.looked += clause.length;
 		const clash = !clause.every((literal) => this.assume(-literal)) || !this.propagate();
 		for (let i = before; i < this.order.length; i++) {
 			this.values[this.middle + this.order[i]] = 0;
@@ -35,8 +46,10 @@ export class Replay {
 
 	/** Adds a clause and what it forces. */
 	add(given: readonly number[]): void {
-		const clause = [...new Set(given)];
-		if (clause.some((literal) => clause.includes(-literal))) return;
+		const literals = new Set(given);
+		const clause = [...literals];
+		this.looked += clause.length;
+		if (clause.some((literal) => literals.has(-literal))) return;
 		const name = nameOf(clause);
 		const twins = this.byText.get(name);
 		if (twins) twins.push(clause);
@@ -82,9 +95,9 @@ export class Replay {
 		return true;
 	}
 
-	/** False when a clause has become false. */
+	/** False when a clause has become false; no more is told once the steps are spent. */
 	private propagate(): boolean {
-		while (this.done < this.order.length) {
+		while (this.done < this.order.length && !this.spent) {
 			if (!this.look(-this.order[this.done++])) return false;
 		}
 		return true;
@@ -95,6 +108,7 @@ export class Replay {
 		const list = this.watching[this.middle + lost];
 		let kept = 0;
 		let clash = false;
+		this.looked += list.length;
 		for (const clause of list) {
 			if (!clash && this.gone.has(clause)) continue;
 			if (!clash && this.moveWatch(clause, lost)) continue;
@@ -114,6 +128,7 @@ export class Replay {
 		if (this.value(clause[0]) > 0) return false;
 		for (let place = 2; place < clause.length; place++) {
 			const other = clause[place];
+			this.looked++;
 			if (this.value(other) < 0) continue;
 			clause[1] = other;
 			clause[place] = lost;
@@ -124,4 +139,4 @@ export class Replay {
 	}
 }
 
-const nameOf = (clause: readonly number[]) => [...clause].sort((a, b) => a - b).join(' ');
+const nameOf = (clause: readonly number[]) => Int32Array.from(clause).sort().join(' ');

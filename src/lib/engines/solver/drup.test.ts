@@ -62,3 +62,35 @@ describe('checkDrup', () => {
 		).toBe(true);
 	});
 });
+
+describe('checkDrup within limits', () => {
+	const proof = '1 2 0\n1 0\n2 0\n0\n';
+
+	it('gives up rather than telling, when steps or room run out', () => {
+		for (const limits of [{ steps: 3 }, { steps: 30 }, { literals: 2 }]) {
+			const { valid, gaveUp } = checkDrup(clauses, proof, limits);
+			expect(valid).toBe(false);
+			expect(gaveUp).toBe(true);
+		}
+		expect(checkDrup(clauses, proof, { steps: 1000, literals: 100, variables: 4 })).toEqual({
+			valid: true,
+		});
+	});
+
+	it('makes no tables for variables that the clauses do not have', () => {
+		expect(checkDrup(clauses, '268435456 0\n', { variables: 4 }).reason).toBe(
+			'line 1 is not a clause',
+		);
+	});
+
+	it('takes whole numbers in plain form only, as other tools do', () => {
+		for (const line of ['1e0 0', '0x1 0', '+1 0', '1.0 0', '- 1 0', '1 -0']) {
+			expect(checkDrup(clauses, line).reason).toBe('line 1 is not a clause');
+		}
+	});
+
+	it('is done in time with a clause of 200,000 literals', () => {
+		const long = Array.from({ length: 200_000 }, (_, i) => i + 1).join(' ');
+		expect(checkDrup([[1]], `${long} 0\n`, { variables: 200_000 }).valid).toBe(false);
+	});
+});

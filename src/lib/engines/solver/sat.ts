@@ -13,8 +13,8 @@ import { Watches } from './watches.ts';
 export interface Budget {
 	/** most conflicts in this call; without end when absent */
 	conflicts?: number;
-	/** asked every thousand steps or so; true ends the call with 'unknown' */
-	cancelled?: () => boolean;
+	/** asked every thousand steps or so, with the conflicts of this call; true ends it with 'unknown' */
+	cancelled?: (conflicts: number) => boolean;
 }
 
 export type Answer = 'sat' | 'unsat' | 'unknown';
@@ -157,10 +157,13 @@ export class Sat {
 	}
 
 	private search(assumed: number[], budget: Budget): Answer {
-		const last = this.conflicts + (budget.conflicts ?? Infinity);
+		const first = this.conflicts;
+		const last = first + (budget.conflicts ?? Infinity);
 		let steps = 0;
 		for (;;) {
-			if (++steps % ASK_EVERY === 0 && budget.cancelled?.()) return 'unknown';
+			if (++steps % ASK_EVERY === 0 && budget.cancelled?.(this.conflicts - first)) {
+				return 'unknown';
+			}
 			const conflict = this.propagate();
 			if (conflict >= 0) {
 				if (this.trail.level === 0) {

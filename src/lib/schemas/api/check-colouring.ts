@@ -1,8 +1,22 @@
 import { z } from 'zod';
+import { differentPairs } from '../../engines/editions/draft.ts';
 import { inkNumber, pair, regionKey, stats } from './common.ts';
 
 const most = 1_000_000;
 const pairs = z.array(pair).max(5 * most);
+
+const groups = z
+	.array(
+		z.strictObject({
+			kind: z.enum(['alike', 'different']),
+			name: z.string().max(200).default('').describe('for the sender; nothing depends on it'),
+			keys: z.array(regionKey).min(2).max(most),
+		}),
+	)
+	.max(most)
+	.refine((list) => differentPairs(list) <= 5 * most, {
+		message: `groups in which all differ come to more than ${5 * most} pairs`,
+	});
 
 export const colouringRequest = z.strictObject({
 	regions: z.array(regionKey).max(most).describe('every region once'),
@@ -12,6 +26,14 @@ export const colouringRequest = z.strictObject({
 	forbidden: z.record(regionKey, z.array(inkNumber)).default({}),
 	alike: pairs.default([]),
 	apart: pairs.default([]),
+	groups: groups
+		.default([])
+		.describe('rules for many regions at once: all alike, or every one different from every other'),
+	reserved: z
+		.array(inkNumber)
+		.max(1_000)
+		.default([])
+		.describe('inks that a region has only when it, or one kept alike with it, is locked to them'),
 	lockCosts: z.record(regionKey, z.number().positive()).default({}),
 	previous: z.record(regionKey, inkNumber).optional(),
 	goal: z.enum(['any', 'fewest-changes', 'even', 'distinct']).default('any'),
@@ -44,7 +66,7 @@ export const proof = z.strictObject({
 
 export const rule = z.union([
 	z.strictObject({ kind: z.enum(['border', 'alike', 'apart']), a: regionKey, b: regionKey }),
-	z.strictObject({ kind: z.literal('forbidden'), region: regionKey, ink: inkNumber }),
+	z.strictObject({ kind: z.enum(['forbidden', 'reserved']), region: regionKey, ink: inkNumber }),
 	z.strictObject({ kind: z.literal('inks'), inks: z.int() }),
 ]);
 

@@ -63,4 +63,23 @@ describe('signing', () => {
 		]);
 		expect(signed.added).toEqual([{ a: 'a', b: 'd', reason: 'a ferry', by: 'Grace', at: 'now' }]);
 	});
+
+	it('signs ties, keeps their locks marked, and signs anew what another edition asks', () => {
+		const tie = { sheet: 7, name: 'North', edition: 2, revision: 9 };
+		const lock = { ink: 0, cost: 1, tie: 7 };
+		const sent = { ...draft, ties: [{ ...tie, by: 'Mallory' }], locks: { a: lock } };
+		const signed = signDraft(draft, sent, 'Ada', 'then');
+		expect(signed.ties).toEqual([{ ...tie, by: 'Ada', at: 'then' }]);
+		expect(signed.locks.a).toEqual({ ...lock, by: 'Ada', at: 'then' });
+		expect(signDraft(signed, { ...signed }, 'Grace', 'now')).toEqual(signed);
+		const refreshed = {
+			...signed,
+			ties: [{ ...tie, edition: 3 }],
+			locks: { a: { ink: 0, cost: 1 } },
+		};
+		expect(signDraft(signed, refreshed, 'Grace', 'now')).toMatchObject({
+			ties: [{ edition: 3, by: 'Grace', at: 'now' }],
+			locks: { a: { ink: 0, cost: 1, by: 'Grace', at: 'now' } },
+		});
+	});
 });

@@ -16,16 +16,17 @@ import {
 	type SheetRecord,
 } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
+import { arrangedDraft, colourDraftAs, type DraftColouring } from './draft-colouring.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { changedParts, changesColouring, rightsFor, signDraft } from './draft-rights.ts';
 import {
-	checkedOutcome,
 	deskColouring,
 	deskOutcome,
+	storedResult,
 	type Names,
 	type Outcome,
 } from './outcome-of-colouring.ts';
-import { NotFound, Unfit } from './outcomes.ts';
+import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
 export type SaveResult =
@@ -52,8 +53,9 @@ export const documentOf = (draft: Pick<DraftRow, 'document'>): Draft =>
 
 /**
  * Saves a draft as the next revision, coloured and checked here whatever the sender showed. A draft whose
- * locks collide is saved too, with the explanation in place of a colouring. When somebody else saved first
- * nothing is written and the answer tells what they saved. Each part that changed needs its own right.
+ * locks collide is saved too, with the explanation in place of a colouring. Inks that the sender shows are
+ * taken over if they hold, also where nothing else changed. When somebody else saved first nothing is
+ * written and the answer tells what they saved. Each part that changed needs its own right.
  */
 export async function saveDraft(
 	shop: Workshop,
@@ -70,45 +72,48 @@ export async function saveDraft(
 	const after = signDraft(before, sent.document, by, new Date().toISOString());
 	const parts = changedParts(before, after);
 	for (const right of rightsFor(parts)) requireAccess(member, right);
+	const shown = sent.inks;
+	const other = shown !== undefined && !isDeepStrictEqual(shown, current.inks);
+	if (other) requireAccess(member, 'colours.edit');
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
-	if (parts.length === 0) return { status: 'saved', saved: savedNote(view, current) };
+	const colouring = changesColouring(parts)
+		? await colouredAfresh(shop, { sheet, view, current, after, parts, shown })
+		: other
+			? await arrangedDraft(shop, { view, current, after, shown })
+			: null;
+	if (parts.length === 0 && !colouring) {
+		return { status: 'saved', saved: savedNote(view, current) };
+	}
+	return store(shop, member, { sheet, view, current, after, colouring, parts });
+}
+
+async function colouredAfresh(
+	shop: Workshop,
+	{ sheet, view, current, after, parts, shown }: Omit<Change, 'colouring'> & { shown?: number[] },
+): Promise<DraftColouring> {
 	// another seed asks for another arrangement, so nothing is held to the colouring before
-	const from = parts.includes('seed') ? null : await inksBefore(shop.db, sheet.id, current);
-	const outcome = changesColouring(parts) ? await colourDraft(shop, view, after, from) : null;
-	return store(shop, member, { sheet, view, current, after, outcome, parts });
+	const previous = parts.includes('seed') ? null : await inksBefore(shop.db, sheet.id, current);
+	return colourDraftAs(shop, view, after, { previous, shown, earlier: storedResult(current) });
 }
 
 /** The colouring of a draft or, where its rules collide, the one that stood before them. */
 export const inksBefore = async (db: Db, sheetId: string, draft: DraftRow) =>
 	draft.inks ?? (await latestInks(db, sheetId));
 
-/** Colours a draft in a thread, as near as can be to the colouring before, and has the result checked. */
-export async function colourDraft(
-	shop: Pick<Workshop, 'pool'>,
-	view: BoundaryView,
-	draft: Draft,
-	previous: number[] | null,
-): Promise<Outcome> {
-	const { keys, borders } = view;
-	const coloured = await shop.pool.run('colourDraft', { keys, borders, draft, previous });
-	if (!('unfit' in coloured)) return checkedOutcome(coloured);
-	const { code, message, details } = coloured.unfit;
-	throw new Unfit(code, message, details);
-}
-
 interface Change {
 	sheet: SheetRecord;
 	view: BoundaryView;
 	current: DraftRow;
 	after: Draft;
-	/** null: the colouring stays as it is */
-	outcome: Outcome | null;
+	/** null: it stays as it is */
+	colouring: DraftColouring | null;
 	parts: (keyof Draft)[];
 }
 
 const store = (shop: Workshop, member: Member, change: Change): Promise<SaveResult> =>
 	shop.db.transaction().execute(async (trx) => {
-		const { current, after, outcome, view, parts } = change;
+		const { current, after, view, parts } = change;
+		const { outcome = null, arranged = false } = change.colouring ?? {};
 		const sheet = await holdSheet(trx, member.team.id, change.sheet.number);
 		if (!sheet) throw new NotFound('sheet');
 		if (sheet.revision !== current.revision) {
@@ -124,7 +129,14 @@ const store = (shop: Workshop, member: Member, change: Change): Promise<SaveResu
 			savedBy: member.userId,
 		});
 		const subject = { kind: 'sheet', id: sheet.id };
-		await record(trx, member, 'draft.saved', subject, { sheet: sheet.number, revision, parts });
+		const verb = parts.length > 0 ? 'saved' : 'arranged';
+		const detail = {
+			sheet: sheet.number,
+			revision,
+			...(parts.length > 0 && { parts }),
+			...(arranged && { arranged }),
+		};
+		await record(trx, member, `draft.${verb}`, subject, detail);
 		const colouring = outcome
 			? deskOutcome(namesIn(view, after), outcome)
 			: standingColouring(view, current);

@@ -47,6 +47,18 @@ export function deskColouring(
 	return explanation && uncoloured(names, explanation as unknown as StoredExplanation);
 }
 
+/** What is stored of a draft's colouring, as the engine answered it; null if nothing is. */
+export function storedResult(
+	stored: Pick<DraftRow, 'inks' | 'inks_used' | 'lower_bound' | 'proof' | 'explanation'>,
+): ColouringResult | null {
+	const { inks, inks_used: inksUsed, lower_bound: lowerBound, explanation } = stored;
+	if (!inks || inksUsed === null || lowerBound === null) {
+		return explanation as unknown as StoredExplanation | null;
+	}
+	const proof = stored.proof as unknown as Proof;
+	return { status: 'coloured', colouring: Int32Array.from(inks), inksUsed, lowerBound, proof };
+}
+
 /** The same for an outcome that is about to be stored. */
 export const deskOutcome = (names: Names, { colouring, explanation }: Outcome): DeskColouring =>
 	colouring

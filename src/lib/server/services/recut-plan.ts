@@ -7,7 +7,7 @@ import type { MeasureRow } from '../repositories/measures.repository.ts';
 import { readMatching, type RecutRecord } from '../repositories/recuts.repository.ts';
 import type { DraftRow, SheetRecord } from '../repositories/sheets.repository.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
-import { colourDraft } from './draft.service.ts';
+import { colourDraft } from './draft-colouring.ts';
 import type { Outcome } from './outcome-of-colouring.ts';
 import { Conflict, Unfit } from './outcomes.ts';
 import { withGapsAs } from './recut-gaps.ts';

@@ -1,11 +1,13 @@
 import type { ColouringProblem } from '../../../engines/colouring/index.ts';
 import { problemFaults } from '../../../engines/colouring/index.ts';
+import { groupPairs } from '../../../engines/editions/group-pairs.ts';
 import type { ColouringRequest } from '../../../schemas/api/check-colouring.ts';
 import { ApiFault } from '../../api/fault.ts';
 
 /** The problem of a request, regions by number in the order given. Names what does not fit. */
 export function problemOfRequest(request: ColouringRequest): ColouringProblem {
-	const number = numbering(request.regions);
+	const numbers = numbered(request.regions);
+	const number = lookUp(numbers);
 	const pairs = (name: 'borders' | 'alike' | 'apart') =>
 		request[name].map(([a, b], place) => {
 			const at = `${name}.${place}`;
@@ -13,6 +15,10 @@ export function problemOfRequest(request: ColouringRequest): ColouringProblem {
 			return [number(a, at), number(b, at)] as const;
 		});
 	const borders = pairs('borders');
+	request.groups.forEach(({ keys }, group) =>
+		keys.forEach((key, place) => number(key, `groups.${group}.keys.${place}`)),
+	);
+	const groups = groupPairs(request.groups, numbers);
 	const column = <T extends Int32Array | Float64Array>(
 		name: 'locks' | 'lockCosts' | 'previous' | 'areas',
 		values: T,
@@ -35,8 +41,9 @@ export function problemOfRequest(request: ColouringRequest): ColouringProblem {
 		forbidden: Object.entries(request.forbidden).flatMap(([key, inks]) =>
 			inks.map((ink) => [number(key, `forbidden.${key}`), ink] as const),
 		),
-		alike: pairs('alike'),
-		apart: pairs('apart'),
+		reserved: request.reserved,
+		alike: [...pairs('alike'), ...groups.alike],
+		apart: [...pairs('apart'), ...groups.apart],
 		goal: request.goal,
 		seed: request.seed,
 		effort: request.effort,
@@ -50,18 +57,22 @@ export function problemOfRequest(request: ColouringRequest): ColouringProblem {
 	throw new ApiFault(400, 'malformed', faults[0], { issues: faults.slice(0, 20) });
 }
 
-function numbering(regions: readonly string[]): (key: string, at: string) => number {
+function numbered(regions: readonly string[]): Map<string, number> {
 	const numbers = new Map<string, number>();
 	regions.forEach((key, place) => {
 		if (numbers.has(key)) throw malformed(`regions.${place}`, `"${key}" is there twice`);
 		numbers.set(key, place);
 	});
-	return (key, at) => {
+	return numbers;
+}
+
+const lookUp =
+	(numbers: ReadonlyMap<string, number>) =>
+	(key: string, at: string): number => {
 		const found = numbers.get(key);
 		if (found === undefined) throw malformed(at, `there is no region "${key}"`);
 		return found;
 	};
-}
 
 const malformed = (path: string, message: string) =>
 	new ApiFault(400, 'malformed', `${path}: ${message}`, { issues: [{ path, message }] });
