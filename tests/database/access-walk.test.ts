@@ -24,6 +24,7 @@ import { sheetPieces } from '../../src/lib/server/services/pieces.service.ts';
 import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
+import { editionInks, revisionInks } from '../../src/lib/server/services/earlier-inks.service.ts';
 import {
 	editionFile,
 	issueEdition,
@@ -266,6 +267,8 @@ const walk: Walk = {
 		(member) => readActivity(member, { kind: null, userId: null }, 1),
 	],
 	readDraft: ['sheet.read', (member) => readDraft(shop, member, 99, 1)],
+	editionInks: ['sheet.read', (member) => editionInks(shop, member, 99, 1)],
+	revisionInks: ['sheet.read', (member) => revisionInks(shop, member, 99, 1)],
 	readEdition: ['sheet.read', (member) => readEdition(shop, member, 99, 1)],
 	readInvitations: ['members.manage', (member) => readInvitations(member)],
 	readMembers: ['team.read', (member) => readMembers(member)],

@@ -142,6 +142,11 @@ export interface DeskEdition {
 	files: { name: string; mediaType: string; bytes: number }[];
 }
 
+/** `GET sheets/[sheet]/editions/[number]/inks` and `drafts/[revision]/inks`: ink of each region by key */
+export interface EarlierInks {
+	inks: Record<string, number>;
+}
+
 /** `POST sheets/[sheet]/draft`: 200 */
 export interface DraftSaved {
 	revision: number;
