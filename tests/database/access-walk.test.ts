@@ -11,6 +11,13 @@ import { actions, allows, may, roles, type Action } from '../../src/lib/server/a
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
 import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
+import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
+import {
+	beginSearch,
+	readSearch,
+	sheetSearches,
+	stopSearch,
+} from '../../src/lib/server/services/searches.service.ts';
 import { sheetPieces } from '../../src/lib/server/services/pieces.service.ts';
 import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
@@ -275,8 +282,19 @@ const walk: Walk = {
 		'sheet.read',
 		(member) => borderFile(shop, member, 99, 'csv', new AbortController().signal),
 	],
+	sheetProof: [
+		'sheet.read',
+		(member) => {
+			const asked = { format: 'json' } as const;
+			return sheetProof(shop, member, 99, asked, new AbortController().signal);
+		},
+	],
 	measureSheetGaps: ['borders.edit', (member) => measureSheetGaps(shop, member, 99, 10)],
 	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],
+	beginSearch: ['colours.edit', (member) => beginSearch(shop, member, 99, { times: 1 })],
+	stopSearch: ['colours.edit', (member) => stopSearch(shop, member, 99, 1)],
+	sheetSearches: ['sheet.read', (member) => sheetSearches(shop, member, 99)],
+	readSearch: ['sheet.read', (member) => readSearch(shop, member, 99, 1)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
 	sheetList: ['sheet.read', (member) => sheetList(shop, member)],

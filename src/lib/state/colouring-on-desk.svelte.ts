@@ -42,6 +42,8 @@ export class ColouringOnDesk {
 	soFar: Release | null = $state.raw(null);
 	/** the engine ended without an answer: what it said */
 	failure = $state('');
+	/** how long the engine took for its last answer here, in milliseconds; null before the first */
+	took: number | null = $state(null);
 
 	#start: ColouringStart;
 	#colourer: Colourer | null = null;
@@ -159,6 +161,7 @@ export class ColouringOnDesk {
 			this.failure = `The colouring ended without an answer (${reply.failed}).`;
 			return;
 		}
+		this.took = reply.milliseconds;
 		const sentence = this.#start.sentence(reply.result, this.#askedFor);
 		this.#adopt(deskColouring(reply.result, sentence), this.#askedFor);
 		this.#start.onsettled();

@@ -1,4 +1,6 @@
+import type { BorderList } from '$lib/engines/borders/border-list';
 import type { Explanation, Proof } from '$lib/engines/colouring/problem';
+import { bordersOn } from './planarity-words';
 
 /**
  * What is pointed out on the sheet beside the selection: the regions of a proof, locks that collide,
@@ -61,7 +63,11 @@ export const evidenceWord: Record<Proof['kind'], string | null> = {
 	'not-proved': null,
 };
 
-export function proofEvidence(proof: Proof, nameOf: (region: number) => string): Evidence {
+export function proofEvidence(
+	proof: Proof,
+	nameOf: (region: number) => string,
+	list: Pick<BorderList, 'a' | 'b'>,
+): Evidence {
 	const wheel = proof.kind === 'odd-wheel';
 	return evidence({
 		words: proofWords(proof, nameOf),
@@ -69,15 +75,24 @@ export function proofEvidence(proof: Proof, nameOf: (region: number) => string):
 		strong: wheel ? proof.regions.slice(1) : proof.regions,
 		ring: wheel || proof.kind === 'odd-cycle',
 		alone: true,
+		borders: proof.kind === 'refutation' ? bordersOn(neededPairs(proof, list), list) : [],
 	});
 }
 
-function proofWords({ kind, regions }: Proof, nameOf: (region: number) => string): string {
+/** The borders a refuted part needs; where it needs all of its own, those. */
+function neededPairs({ regions, borders }: Proof, { a, b }: Pick<BorderList, 'a' | 'b'>) {
+	if (borders) return borders;
+	const inside = new Set(regions);
+	return Array.from(a, (p, i) => [p, b[i]]).filter(([p, q]) => inside.has(p) && inside.has(q));
+}
+
+function proofWords({ kind, regions, borders }: Proof, nameOf: (region: number) => string): string {
 	const many = regions.length;
 	if (kind === 'odd-wheel') return `A ring of ${many - 1} regions round ${nameOf(regions[0])}`;
 	if (kind === 'odd-cycle') return `A ring of ${many} regions`;
 	if (kind === 'clique') return `${many} regions that all border each other`;
-	return `The ${many} regions that make it necessary`;
+	const lines = borders ? `, and the ${borders.length} borders among them that it takes` : '';
+	return `The ${many} regions that make it necessary${lines}`;
 }
 
 /** The locks that collide, each with its ink, and the regions between them, brought into view. */

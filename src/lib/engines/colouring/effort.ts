@@ -67,3 +67,7 @@ export function effortOf({ effort = 'normal', effortTimes = 1 }: ColouringProble
 		wholeConflicts: once.wholeConflicts * effortTimes,
 	};
 }
+
+/** Solver conflicts that one question about the whole map may take. */
+export const mostConflicts = (problem: ColouringProblem): number =>
+	effortOf(problem).wholeConflicts;

@@ -11,6 +11,7 @@ export type {
 export { checkColouring } from './check-colouring.ts';
 export { colour } from './colour.ts';
 export { checkExplanation } from './explain-check.ts';
+export { mostConflicts } from './effort.ts';
 export { explanationSentence } from './explanation-sentence.ts';
 export {
 	gainOf,

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { mycielski as oneMore, type EdgeList } from '../../../../tests/support/named-graphs.ts';
 import { colour } from './colour.ts';
 import { effortOf } from './effort.ts';
 import { fewestInks } from './fewest.ts';
@@ -7,22 +8,11 @@ import { prepare } from './prepare.ts';
 import { checkColouring } from './check-colouring.ts';
 import type { ColouringProblem } from './problem.ts';
 
-/** Mycielski's graph with so many inks needed (Mycielski 1955), without triangles. */
+/** Mycielski's graph that needs so many inks (Mycielski 1955), without triangles. */
 function mycielski(inks: number): ColouringProblem {
-	let regions = 2;
-	let pairs: [number, number][] = [[0, 1]];
-	for (let i = 2; i < inks; i++) {
-		const n = regions;
-		const doubled = pairs.flatMap(([x, y]) => [[x, n + y] as const, [y, n + x] as const]);
-		const apex = Array.from({ length: n }, (_, v) => [n + v, 2 * n] as const);
-		pairs = [...pairs, ...doubled, ...apex].map(([x, y]) => [x, y]);
-		regions = 2 * n + 1;
-	}
-	return {
-		regions,
-		borders: { a: pairs.map(([a]) => a), b: pairs.map(([, b]) => b) },
-		inks: 'fewest',
-	};
+	let graph: EdgeList = { regions: 2, borders: { a: [0], b: [1] } };
+	for (let n = 2; n < inks; n++) graph = oneMore(graph);
+	return { ...graph, inks: 'fewest' };
 }
 
 const settingsFor = (problem: ColouringProblem) => ({

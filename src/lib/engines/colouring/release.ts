@@ -179,7 +179,7 @@ class ReleaseSearch {
 		}
 		const cost = this.costOf(unmet);
 		if (cost >= this.bestCost) return;
-		this.best = options.unmet;
+		this.best = unmet;
 		this.bestCost = cost;
 		this.tell();
 	}

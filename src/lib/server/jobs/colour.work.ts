@@ -9,6 +9,7 @@ import type { Draft } from '../../engines/editions/draft.ts';
 import type { BorderList } from '../../engines/borders/index.ts';
 import { problemOf } from '../services/draft-problem.ts';
 import { Unfit } from '../services/outcomes.ts';
+import { keepProof } from './keep-proof.ts';
 import { takeOver } from './take-over.ts';
 import type { Task } from './task-port.ts';
 
@@ -32,20 +33,28 @@ export interface UnfitDraft {
 	details?: Record<string, unknown>;
 }
 
-/**
- * Colours a draft, near to the colouring before, and has the checker look at the result. The inks that its
- * sender shows are taken over if they hold.
- */
+export interface ColourDraftInput extends DraftInput {
+	/** inks to stay near to */
+	previous: number[] | null;
+	/** inks that the draft's sender shows: taken over if they hold */
+	shown?: number[];
+	/** what the draft before was coloured with: its proof is kept while it holds */
+	earlier?: ColouringResult | null;
+}
+
+/** Colours a draft, near to the colouring before, and has the checker look at the result. */
 export async function colourDraft({
-	input: { shown, ...input },
-}: Task<DraftInput & { previous: number[] | null; shown?: number[] }>): Promise<
+	input: { previous, shown, earlier = null, ...input },
+}: Task<ColourDraftInput>): Promise<
 	(CheckedColouring & { arranged: boolean }) | { unfit: UnfitDraft }
 > {
 	try {
-		const problem = problemOf(input, input.draft, input.previous);
-		const checked = await colourAndCheck(problem);
-		const taken = shown && checked.faults.length === 0 && takeOver(problem, checked.result, shown);
-		return taken ? { result: taken, faults: [], arranged: true } : { ...checked, arranged: false };
+		const problem = problemOf(input, input.draft, previous);
+		const { result, faults } = await colourAndCheck(problem);
+		if (faults.length > 0) return { result, faults, arranged: false };
+		const found = keepProof(problem, result, earlier);
+		const taken = shown && takeOver(problem, found, shown);
+		return { result: taken ?? found, faults, arranged: Boolean(taken) };
 	} catch (problem) {
 		if (!(problem instanceof Unfit)) throw problem;
 		const { code, message, details } = problem;

@@ -8,6 +8,7 @@ import { runIntake, wakeSilentIntakes } from './intake.job.ts';
 import { createPool } from './pool.ts';
 import { jobNames, openBoss, queueOf, type JobData, type JobName } from './queue.ts';
 import { runRebalance, wakeSilentRebalances } from './rebalance.job.ts';
+import { runSearch, wakeSilentSearches } from './search.job.ts';
 import { runRecut, wakeSilentRecuts } from './recut.job.ts';
 import type { Workshop } from './workshop.ts';
 
@@ -22,6 +23,7 @@ export const handlers: { [N in JobName]: Handler<N> } = {
 	intake: (shop, { intakeId }, shutdown) => runIntake(shop, intakeId, shutdown),
 	rebalance: (shop, { proposalId }, shutdown) => runRebalance(shop, proposalId, shutdown),
 	recut: (shop, { recutId }, shutdown) => runRecut(shop, recutId, shutdown),
+	search: (shop, { searchId }, shutdown) => runSearch(shop, searchId, shutdown),
 };
 
 const wakeMilliseconds = 5_000;
@@ -34,7 +36,8 @@ export async function startJobs(): Promise<() => Promise<void>> {
 	const boss = await openBoss(config().databaseUrl, true);
 	const queue = queueOf(boss);
 	const pool = createPool({ threads: availableParallelism(), warm: 1 });
-	const shop: Workshop = { db: database(), files: fileStore(), queue, pool, checks: pool };
+	const checks = createPool({ threads: loopsFor('search') });
+	const shop: Workshop = { db: database(), files: fileStore(), queue, pool, checks };
 	const shutdown = new AbortController();
 	const atWork = new Set<Promise<void>>();
 	const take = <N extends JobName>(name: N) =>
@@ -51,9 +54,13 @@ export async function startJobs(): Promise<() => Promise<void>> {
 		shutdown.abort();
 		await Promise.allSettled(atWork);
 		await boss.stop({ graceful: false });
-		await pool.close();
+		await Promise.all([pool.close(), checks.close()]);
 	};
 }
+
+/** Searches may take hours, so they leave cores to what people wait for, as far as there are any. */
+const loopsFor = (name: JobName): number =>
+	name === 'search' ? Math.max(1, Math.floor(availableParallelism() / 2)) : availableParallelism();
 
 /** One loop a core: each takes a job, finishes it, and looks for the next. */
 async function takeJobs<N extends JobName>(
@@ -62,12 +69,15 @@ async function takeJobs<N extends JobName>(
 	work: (data: JobData[N]) => Promise<void>,
 ): Promise<void> {
 	const options = { pollingIntervalSeconds: 0.5, batchSize: 1 };
-	for (let loop = 0; loop < availableParallelism(); loop++) {
+	for (let loop = 0; loop < loopsFor(name); loop++) {
 		await boss.work<JobData[N]>(name, options, async ([job]) => work(job.data));
 	}
 }
 
 const wake = (shop: Workshop) =>
-	Promise.all([wakeSilentIntakes(shop), wakeSilentRebalances(shop), wakeSilentRecuts(shop)]).catch(
-		(error: unknown) => log.warn({ error: String(error) }, 'could not look for work left lying'),
+	Promise.all([
+		...[wakeSilentIntakes(shop), wakeSilentRebalances(shop)],
+		...[wakeSilentRecuts(shop), wakeSilentSearches(shop)],
+	]).catch((error: unknown) =>
+		log.warn({ error: String(error) }, 'could not look for work left lying'),
 	);

@@ -4,13 +4,14 @@ import type { Db } from '../database/connection.ts';
 import { log } from '../log.ts';
 
 /** The jobs there are. Each has a handler in `index.ts`. */
-export const jobNames = ['intake', 'rebalance', 'recut'] as const;
+export const jobNames = ['intake', 'rebalance', 'recut', 'search'] as const;
 export type JobName = (typeof jobNames)[number];
 
 export interface JobData {
 	intake: { intakeId: string };
 	rebalance: { proposalId: string };
 	recut: { recutId: string };
+	search: { searchId: string };
 }
 
 export interface Queue {

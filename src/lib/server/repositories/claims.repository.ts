@@ -6,7 +6,9 @@ import type { Row } from '../database/schema.ts';
  * Rows that a worker takes up, speaks for while it works, and lets go of. Each has the columns `state`,
  * `step`, `share`, `attempts`, `claim` and `heard_at`, and waits in the state `waiting`.
  */
-const working = { intakes: 'reading', proposals: 'running', recuts: 'reading' } as const;
+const working = {
+	...{ intakes: 'reading', recuts: 'reading', proposals: 'running', searches: 'running' },
+} as const;
 export type ClaimTable = keyof typeof working;
 
 type ClaimedRow<T extends ClaimTable> = Row<T> & { claim: string | null; attempts: number };

@@ -1,5 +1,6 @@
 import type { ColouringResult } from '../../engines/colouring/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
+import type { ColourDraftInput } from '../jobs/colour.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import type { DraftRow } from '../repositories/sheets.repository.ts';
 import type { BoundaryView } from './boundary-view.ts';
@@ -13,23 +14,25 @@ export interface DraftColouring {
 	arranged: boolean;
 }
 
+/** What a colouring goes by beside the draft itself. */
+type Beside = Omit<ColourDraftInput, 'keys' | 'borders' | 'draft'>;
+
 /** Colours a draft in a thread, as near as can be to the colouring before, and has the result checked. */
 export const colourDraft = async (
 	shop: Pick<Workshop, 'pool'>,
 	view: BoundaryView,
 	draft: Draft,
 	previous: number[] | null,
-): Promise<Outcome> => (await colourDraftAs(shop, view, draft, previous)).outcome;
+): Promise<Outcome> => (await colourDraftAs(shop, view, draft, { previous })).outcome;
 
 /** The same, with the inks that its sender shows wherever they hold. */
 export async function colourDraftAs(
 	shop: Pick<Workshop, 'pool'>,
 	{ keys, borders }: BoundaryView,
 	draft: Draft,
-	previous: number[] | null,
-	shown?: number[],
+	beside: Beside,
 ): Promise<DraftColouring> {
-	const coloured = await shop.pool.run('colourDraft', { keys, borders, draft, previous, shown });
+	const coloured = await shop.pool.run('colourDraft', { keys, borders, draft, ...beside });
 	if (!('unfit' in coloured)) {
 		return { outcome: checkedOutcome(coloured), arranged: coloured.arranged };
 	}

@@ -24,7 +24,7 @@ const rightFor: Record<keyof Draft, Action> = {
 };
 
 /** Parts the colouring depends on; the others change only how it looks. */
-const colouringParts: readonly (keyof Draft)[] = [
+export const colouringParts: readonly (keyof Draft)[] = [
 	'inks',
 	'locks',
 	'forbidden',

@@ -19,7 +19,13 @@ import { record } from './activity.service.ts';
 import { arrangedDraft, colourDraftAs, type DraftColouring } from './draft-colouring.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { changedParts, changesColouring, rightsFor, signDraft } from './draft-rights.ts';
-import { deskColouring, deskOutcome, type Names, type Outcome } from './outcome-of-colouring.ts';
+import {
+	deskColouring,
+	deskOutcome,
+	storedResult,
+	type Names,
+	type Outcome,
+} from './outcome-of-colouring.ts';
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
 
@@ -86,8 +92,8 @@ async function colouredAfresh(
 	{ sheet, view, current, after, parts, shown }: Omit<Change, 'colouring'> & { shown?: number[] },
 ): Promise<DraftColouring> {
 	// another seed asks for another arrangement, so nothing is held to the colouring before
-	const from = parts.includes('seed') ? null : await inksBefore(shop.db, sheet.id, current);
-	return colourDraftAs(shop, view, after, from, shown);
+	const previous = parts.includes('seed') ? null : await inksBefore(shop.db, sheet.id, current);
+	return colourDraftAs(shop, view, after, { previous, shown, earlier: storedResult(current) });
 }
 
 /** The colouring of a draft or, where its rules collide, the one that stood before them. */
