@@ -11,6 +11,7 @@ import { actions, allows, may, roles, type Action } from '../../src/lib/server/a
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
 import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
+import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
 import {
 	beginSearch,
 	readSearch,
@@ -280,6 +281,13 @@ const walk: Walk = {
 	borderFile: [
 		'sheet.read',
 		(member) => borderFile(shop, member, 99, 'csv', new AbortController().signal),
+	],
+	sheetProof: [
+		'sheet.read',
+		(member) => {
+			const asked = { format: 'json' } as const;
+			return sheetProof(shop, member, 99, asked, new AbortController().signal);
+		},
 	],
 	measureSheetGaps: ['borders.edit', (member) => measureSheetGaps(shop, member, 99, 10)],
 	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],

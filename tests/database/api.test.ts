@@ -262,6 +262,37 @@ describe('POST /check/colouring', () => {
 	});
 });
 
+describe('POST /check/proof', () => {
+	const check = (body: unknown) => answer(sendJson('/check/proof', body), operations.checkProof);
+	const ring = {
+		form: 'merestone proof 1',
+		regions: [{ key: 'a' }, { key: 'b' }, { key: 'c' }],
+		borders: [
+			[0, 1],
+			[1, 2],
+			[0, 2],
+		],
+		rules: { locks: [], forbidden: [], alike: [], apart: [], reserved: [] },
+		claims: [{ claim: 'inks do not', inks: 2, evidence: { kind: 'odd ring', regions: [0, 1, 2] } }],
+	};
+
+	it('shows what holds and says what does not', async () => {
+		expect(await check(ring)).toMatchObject({ valid: true, faults: [] });
+		const open = await check({ ...ring, borders: ring.borders.slice(1) });
+		expect(open).toMatchObject({ valid: false, claims: [] });
+		expect(open.faults[0]).toContain('do not border');
+	});
+
+	it('answers hostile files with a fault, and bodies that are no JSON with 400', async () => {
+		for (const body of [[], 7, null, { form: 'merestone proof 2' }, { ...ring, more: 1 }]) {
+			expect(await check(body)).toMatchObject({ valid: false, claims: [] });
+		}
+		const sly = await check(JSON.stringify(ring).replace('{', '{"__proto__":{"claims":[]},'));
+		expect(sly.valid).toBe(false);
+		expect(await fault(sendJson('/check/proof', '{"form":'))).toMatchObject({ status: 400 });
+	});
+});
+
 describe('POST /check/palette', () => {
 	it('judges every touching pair for every reader, and mends', async () => {
 		const found = await answer(
@@ -318,6 +349,10 @@ describe('the team’s sheets', () => {
 		const col = await get('/sheets/1/borders/borders.col');
 		expect(await col.text()).toContain('\np edge 49 107\n');
 		expect((await get('/sheets/1/borders/borders.txt')).status).toBe(404);
+		const proof = await (await get('/sheets/1/proof')).json();
+		const checked = await answer(sendJson('/check/proof', proof), operations.checkProof);
+		expect(checked).toMatchObject({ valid: true, faults: [], gaveUp: false });
+		expect(checked.claims).toHaveLength(2);
 		const colouring = await answer(get('/sheets/1/colouring'), operations.readColouring);
 		expect(colouring).toMatchObject({
 			status: 'coloured',

@@ -59,9 +59,8 @@ function expectRefuted(graph: RegionGraph, inks: number): { regions: number[]; c
 	const result = refute(graph, inks);
 	if (!result) throw new Error('not refuted');
 	const refutation = { inks, format: 'drup' as const, clauses: result.clauses };
-	expect(
-		checkRefutation(graph, { kind: 'refutation', regions: result.regions, refutation }),
-	).toEqual([]);
+	const { regions, borders } = result;
+	expect(checkRefutation(graph, { kind: 'refutation', regions, borders, refutation })).toEqual([]);
 	return result;
 }
 

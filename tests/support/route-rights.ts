@@ -70,6 +70,8 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/measures/[table]', 'action dropMeasure', 'measures.edit'],
 	['/sheets/[sheet]/palette', 'load', 'sheet.read'],
 	['/sheets/[sheet]/pieces', 'GET', 'sheet.read'],
+	['/sheets/[sheet]/proof.json', 'GET', 'sheet.read'],
+	['/sheets/[sheet]/proof.zip', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/searches', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/sheet.svg', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/territories', 'load', 'measures.read'],

@@ -6,18 +6,19 @@ import {
 	mostDifferentPairs,
 	type Draft,
 } from '../engines/editions/draft.ts';
+import { ruleLimits } from '../engines/editions/rule-limits.ts';
 import { papers } from '../engines/sheet/layout.ts';
 
 /** The shape and limits of a draft as it arrives from outside; `Draft` says what each part means. */
 
 /** Widest map that a plan of 100,000 regions can ask for. */
-const mostRules = 100_000;
+const mostRules = ruleLimits.rules;
 
 /** Furthest across water that a sheet can ask about; the earth is 20,004 km from pole to pole. */
 export const mostWaterKm = 200;
 
 const key = z.string().min(1).max(400);
-const inkNumber = z.int().min(0).max(255);
+const inkNumber = z.int().min(0).max(ruleLimits.ink);
 const sheetNumber = z
 	.int()
 	.min(1)
@@ -31,7 +32,7 @@ export const ink = z.strictObject({
 
 const lock = z.strictObject({
 	ink: inkNumber,
-	cost: z.number().positive().max(1e9),
+	cost: z.number().positive().max(ruleLimits.weight),
 	by: z.string().max(200).optional(),
 	at: z.string().max(40).optional(),
 	tie: sheetNumber.optional(),
@@ -40,7 +41,7 @@ const lock = z.strictObject({
 const groupRule = z
 	.strictObject({
 		kind: z.enum(['alike', 'different']),
-		name: z.string().min(1).max(200),
+		name: z.string().min(1).max(ruleLimits.groupName),
 		keys: z.array(key).min(2).max(mostRules),
 	})
 	.refine(({ kind, keys }) => kind === 'alike' || keys.length <= mostDifferent, {
@@ -104,12 +105,12 @@ export const draftDocument = z.strictObject({
 	apart: z.array(z.tuple([key, key])).max(mostRules),
 	groups: z
 		.array(groupRule)
-		.max(10_000)
+		.max(ruleLimits.groups)
 		.refine((groups) => differentPairs(groups) <= mostDifferentPairs, {
 			message: `groups in which all differ come to more than ${mostDifferentPairs} pairs`,
 		})
 		.default([]),
-	reserved: z.array(inkNumber).max(64).default([]),
+	reserved: z.array(inkNumber).max(ruleLimits.reserved).default([]),
 	goals: z.array(goalWish).max(goalKinds.length).default([]),
 	ties: z.array(edgeTie).max(100).default([]),
 	pointTouches: z.boolean(),

@@ -1,4 +1,4 @@
-import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
+import type { ColouringProblem, ColouringResult, Release } from '$lib/engines/colouring/problem';
 
 export interface ColourRequest {
 	id: number;
@@ -6,6 +6,11 @@ export interface ColourRequest {
 }
 export type ColourReply =
 	{ id: number; result: ColouringResult; milliseconds: number } | { id: number; failed: string };
+/** Before the reply, while the cheapest release of colliding locks is worked out. */
+export interface ReleaseNews {
+	id: number;
+	soFar: Release;
+}
 
 /** A run that is still going when it is overtaken gets this long to end by itself, in milliseconds. */
 const patience = 250;
@@ -29,6 +34,7 @@ export class Colourer {
 	constructor(
 		private makeWorker: () => Worker,
 		private answered: (reply: ColourReply) => void,
+		private heard: (soFar: Release) => void = () => {},
 	) {}
 
 	/** Starts the worker before it is needed, so that the first answer does not wait for it. */
@@ -93,7 +99,8 @@ export class Colourer {
 
 	#start(): Worker {
 		const worker = this.makeWorker();
-		worker.onmessage = ({ data }: MessageEvent<ColourReply>) => this.#settle(data);
+		worker.onmessage = ({ data }: MessageEvent<ColourReply | ReleaseNews>) =>
+			'soFar' in data ? this.#hear(data) : this.#settle(data);
 		worker.onerror = (event) => {
 			const id = this.#running?.id ?? rehearsal;
 			this.#worker?.terminate();
@@ -101,6 +108,10 @@ export class Colourer {
 			this.#settle({ id, failed: event.message });
 		};
 		return worker;
+	}
+
+	#hear({ id, soFar }: ReleaseNews) {
+		if (id !== rehearsal && id === this.#id) this.heard(soFar);
 	}
 
 	#settle(reply: ColourReply) {

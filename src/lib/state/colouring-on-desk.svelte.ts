@@ -1,4 +1,4 @@
-import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
+import type { ColouringProblem, ColouringResult, Release } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { DeskColouring } from '$lib/schemas/desk';
 import { Colourer, type ColourReply } from './colourer';
@@ -38,6 +38,8 @@ export class ColouringOnDesk {
 	/** the last colouring that kept every rule; -1 where there is none */
 	inks: Int32Array = $state.raw()!;
 	working = $state(false);
+	/** while it works: the cheapest release of colliding locks found so far, and its bound */
+	soFar: Release | null = $state.raw(null);
 	/** the engine ended without an answer: what it said */
 	failure = $state('');
 	/** how long the engine took for its last answer here, in milliseconds; null before the first */
@@ -70,7 +72,11 @@ export class ColouringOnDesk {
 
 	/** In the browser: the worker that answers each change. */
 	work(makeWorker: () => Worker): () => void {
-		this.#colourer = new Colourer(makeWorker, (reply) => this.#settle(reply));
+		this.#colourer = new Colourer(
+			makeWorker,
+			(reply) => this.#settle(reply),
+			(soFar) => (this.soFar = soFar),
+		);
 		this.#colourer.warm();
 		return () => {
 			this.#colourer?.stop();
@@ -141,6 +147,7 @@ export class ColouringOnDesk {
 	#ask(document: Draft) {
 		this.#askedFor = document;
 		this.working = this.#colourer !== null;
+		this.soFar = null;
 		this.failure = '';
 		const afresh = this.#start.afresh(document);
 		if (afresh) this.#own = false;

@@ -9,9 +9,22 @@ export const lock =
 	(draft: Draft): Draft => {
 		const at = new Date().toISOString().slice(0, 10);
 		const locks = { ...draft.locks };
-		for (const key of keys) locks[key] = { ink, cost: 1, ...(by ? { by } : {}), at };
+		for (const key of keys) {
+			const cost = draft.locks[key]?.cost ?? 1;
+			locks[key] = { ink, cost, ...(by ? { by } : {}), at };
+		}
 		return { ...draft, locks };
 	};
+
+/** What dropping a lock costs, against other locks: above 0, at most `mostWeight`. */
+export const weigh =
+	(key: string, cost: number) =>
+	(draft: Draft): Draft => {
+		const pinned = draft.locks[key];
+		if (!pinned || pinned.cost === cost || !(cost > 0) || cost > mostWeight) return draft;
+		return { ...draft, locks: { ...draft.locks, [key]: { ...pinned, cost } } };
+	};
+export const mostWeight = 1e9;
 
 export const release =
 	(keys: readonly string[]) =>

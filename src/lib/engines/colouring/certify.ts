@@ -36,7 +36,9 @@ export function certify(
 	const refuted = refute(graph, inks - 1, { effort, effortTimes, seed, cancelled });
 	if (!refuted) return none;
 	const refutation = { inks: inks - 1, format: 'drup' as const, clauses: refuted.clauses };
-	return { kind: 'refutation', regions: named(refuted.regions), refutation };
+	const borders = refuted.borders?.map(([a, b]): [number, number] => [regionOf[a], regionOf[b]]);
+	const regions = named(refuted.regions);
+	return { kind: 'refutation', regions, ...(borders && { borders }), refutation };
 }
 
 /** The bound of the borders alone: with regions kept alike, its proof names real borders. */

@@ -1,6 +1,6 @@
 import { checkDrup } from '../solver/drup.ts';
 import { holdersOfReserved } from './check-reserved.ts';
-import type { ColouringProblem, ColouringResult } from './problem.ts';
+import type { ColouringProblem, ColouringResult, Proof } from './problem.ts';
 
 type Coloured = Extract<ColouringResult, { status: 'coloured' }>;
 
@@ -16,10 +16,12 @@ export function checkRefutation(
 	if (!refutation) return ['The refutation has no clauses.'];
 	const { inks } = refutation;
 	if (inks !== inksUsed - 1) return [`The refutation is about ${inks} inks, not ${inksUsed - 1}.`];
+	const pairs = pairsToDiffer(problem, proof);
+	if (!pairs) return ['The refutation leans on a border that is not there.'];
 	const numbered = new Map(regions.map((region, i) => [region, i * inks + 1]));
 	const clauses: number[][] = [];
 	for (const first of numbered.values()) clauses.push(range(inks).map((c) => first + c));
-	for (const c of range(inks)) clauses.push(...clausesOfInk(problem, numbered, c));
+	for (const c of range(inks)) clauses.push(...clausesOfInk(problem, pairs, numbered, c));
 	clauses.push(...clausesOfLocks(problem, numbered, inks));
 	clauses.push(...clausesOfReserved(problem, numbered, inks));
 	const { valid, reason } = checkDrup(clauses, refutation.clauses);
@@ -28,19 +30,32 @@ export function checkRefutation(
 
 const range = (n: number) => [...Array(n).keys()];
 
+/** The borders the proof names, or all where it names none; null when one of them is no border. */
+function pairsToDiffer(problem: ColouringProblem, { borders, regions }: Proof) {
+	const { a, b } = problem.borders;
+	const inside = new Set(regions);
+	const real = [...Array.from(a, (p, i) => [p, b[i]] as const), ...(problem.apart ?? [])].filter(
+		([p, q]) => inside.has(p) && inside.has(q),
+	);
+	if (!borders) return real;
+	const name = (p: number, q: number) => `${Math.min(p, q)} ${Math.max(p, q)}`;
+	const names = new Set(real.map(([p, q]) => name(p, q)));
+	return borders.every(([p, q]) => names.has(name(p, q))) ? borders : null;
+}
+
 /** Everything that is said about one ink. */
-function clausesOfInk(problem: ColouringProblem, numbered: Map<number, number>, c: number) {
+function clausesOfInk(
+	problem: ColouringProblem,
+	pairs: readonly (readonly [number, number])[],
+	numbered: Map<number, number>,
+	c: number,
+) {
 	const clauses: number[][] = [];
 	const both = (p: number, q: number) => {
 		const [x, y] = [numbered.get(p), numbered.get(q)];
 		return x === undefined || y === undefined ? null : ([x + c, y + c] as const);
 	};
-	const { a, b } = problem.borders;
-	for (let i = 0; i < a.length; i++) {
-		const pair = both(a[i], b[i]);
-		if (pair) clauses.push([-pair[0], -pair[1]]);
-	}
-	for (const [p, q] of problem.apart ?? []) {
+	for (const [p, q] of pairs) {
 		const pair = both(p, q);
 		if (pair) clauses.push([-pair[0], -pair[1]]);
 	}

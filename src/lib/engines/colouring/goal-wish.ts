@@ -1,3 +1,5 @@
+import type { Reader } from '../colour/reader.ts';
+
 /**
  * What a colouring is wanted to be, besides keeping every rule. `even-…`: inks carry equal shares of the
  * regions or of their area; `distinct`: neighbours look as different as can be, the weakest pairs of inks
@@ -19,4 +21,8 @@ export interface GoalWish {
 	kind: GoalKind;
 	/** share of what this goal has gained since the start that later ones may give away again, 0 to 1 */
 	give: number;
+	/** whose eyes count for `distinct`; all when absent */
+	readers?: Reader[];
+	/** what `fewest-changes` is measured against; the last saved colouring when absent */
+	against?: { edition: number } | { revision: number };
 }

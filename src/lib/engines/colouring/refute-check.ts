@@ -15,23 +15,27 @@ export function checkRefutation(graph: RegionGraph, proof: Proof): string[] {
 	if (!regions.every(known)) return ['The proof names a region that does not exist.'];
 	if (!Number.isInteger(refutation.inks) || refutation.inks < 0)
 		return ['No number of inks is given.'];
-	const { valid, reason } = checkDrup(
-		plainClauses(graph, regions, refutation.inks),
-		refutation.clauses,
-	);
+	const clauses = plainClauses(graph, proof, refutation.inks);
+	if (!clauses) return ['The proof names a border that does not exist.'];
+	const { valid, reason } = checkDrup(clauses, refutation.clauses);
 	return valid ? [] : [`The refutation does not hold: ${reason}.`];
 }
 
-function plainClauses(graph: RegionGraph, regions: number[], inks: number): number[][] {
+/** Null when the proof leans on a border that the graph does not have. */
+function plainClauses(graph: RegionGraph, { regions, borders }: Proof, inks: number) {
 	const place = new Map(regions.map((region, index) => [region, index]));
+	const wanted = borders && new Set(borders.flatMap(([a, b]) => [`${a} ${b}`, `${b} ${a}`]));
 	const clauses: number[][] = [];
+	let found = 0;
 	regions.forEach((region, i) => {
 		clauses.push(Array.from({ length: inks }, (_, ink) => i * inks + ink + 1));
 		for (let e = graph.offsets[region]; e < graph.offsets[region + 1]; e++) {
 			const j = place.get(graph.targets[e]);
 			if (j === undefined || j <= i) continue;
+			if (wanted && !wanted.has(`${region} ${graph.targets[e]}`)) continue;
+			found++;
 			for (let ink = 1; ink <= inks; ink++) clauses.push([-(i * inks + ink), -(j * inks + ink)]);
 		}
 	});
-	return clauses;
+	return wanted && 2 * found !== wanted.size ? null : clauses;
 }

@@ -1,5 +1,8 @@
-import { inducedSubgraph } from '../graph/subgraph.ts';
+import { buildGraph } from '../graph/build-graph.ts';
 import type { RegionGraph } from '../graph/region-graph.ts';
+import { inducedSubgraph } from '../graph/subgraph.ts';
+import type { Sat } from '../solver/sat.ts';
+import { neededBorders, type VertexPair } from './refute-borders.ts';
 import { greedyClique } from './refute-clique.ts';
 import { ColouringClauses } from './refute-encoding.ts';
 import { peel } from './refute-peel.ts';
@@ -16,6 +19,8 @@ export interface RefuteOptions {
 export interface Refuted {
 	/** vertices of the part, in the order of the proof's variables */
 	regions: number[];
+	/** the borders among them that are needed; all when absent */
+	borders?: VertexPair[];
 	clauses: string;
 }
 
@@ -32,11 +37,13 @@ const WIDE = 300;
  * Out: the vertices of a small part that cannot, and a DRUP refutation of exactly these clauses: with
  * the variable of the i-th of `regions` (from 1) and ink c being (i - 1) * inks + c + 1, each has one
  * of the inks, and two that border do not share one. No ink is fixed beforehand in that proof. Null
- * when the graph can be coloured or the effort did not suffice to tell. No region of the part can be
- * spared, unless the effort ran out on the way or a larger part has a much shorter proof.
+ * when the graph can be coloured or the effort did not suffice to tell. No region of the part and none of
+ * its borders can be spared, unless the effort ran out on the way or a larger part has a much shorter
+ * proof: the part is then critical (Dirac 1952).
  *
  * Method: vertices with fewer neighbours than inks are peeled; failed cores over vertices with one
- * clique coloured beforehand (any colouring can be renamed to agree); then each vertex left out in turn.
+ * clique coloured beforehand (any colouring can be renamed to agree); then each vertex left out in turn,
+ * and each border.
  */
 export function refute(
 	graph: RegionGraph,
@@ -95,6 +102,8 @@ class Refutation {
 	 * before the parts between: what is left out of a part can be what makes its proof short.
 	 */
 	publish(whole: number[], part: number[], spared: number[]): Refuted | null {
+		const critical = this.critical(spared);
+		if (critical) return critical;
 		const soon = this.plainProof(spared, Math.min(SOON, this.effort));
 		if (soon !== null) return { regions: spared, clauses: soon };
 		for (const regions of [whole, part, spared]) {
@@ -103,6 +112,23 @@ class Refutation {
 			if (clauses !== null) return { regions, clauses };
 		}
 		return null;
+	}
+
+	/** The part without the borders that can be spared; null when none can or no proof of it comes soon. */
+	private critical(vertices: number[]): Refuted | null {
+		if (vertices.length > WIDE) return null;
+		const part = inducedSubgraph(this.graph, vertices);
+		this.spent = 0;
+		const needed = neededBorders(part, this.inks, greedyClique(part, this.inks), (sat, assumed) =>
+			this.spend(sat, assumed, Math.min(SOON, this.effort / 3 - this.spent)),
+		);
+		if (!needed || 2 * needed.length === part.targets.length) return null;
+		const ends = (side: 0 | 1) => needed.map((pair) => pair[side]);
+		const bare = buildGraph(part.count, ends(0), ends(1));
+		const clauses = new ColouringClauses(bare, this.inks, { seed: this.options.seed, proof: true });
+		if (this.ask(clauses, [], Math.min(SOON, this.effort)) !== 'unsat') return null;
+		const borders = needed.map(([a, b]): VertexPair => [vertices[a], vertices[b]]);
+		return { regions: vertices, borders, clauses: clauses.sat.proofText() };
 	}
 
 	/** The refutation text of the part, or null when the conflicts do not suffice. */
@@ -126,6 +152,11 @@ class Refutation {
 	}
 
 	private ask({ sat }: ColouringClauses, assumptions: number[], conflicts: number) {
+		return this.spend(sat, assumptions, conflicts);
+	}
+
+	private spend(sat: Sat, assumptions: number[], conflicts: number) {
+		if (conflicts <= 0) return 'unknown';
 		const before = sat.conflicts;
 		const answer = sat.solve(assumptions, { conflicts, cancelled: this.options.cancelled });
 		this.spent += sat.conflicts - before;

@@ -133,6 +133,36 @@ describe('bans and pairs', () => {
 	});
 });
 
+describe('groups', () => {
+	const group = (kind: 'alike' | 'different', ...keys: string[]) => ({ kind, name: 'North', keys });
+	it('that are alike take in every piece that need not differ', () => {
+		const touching = carried({ groups: [group('alike', 'a', 'c', 'd')] });
+		expect(touching.draft.groups[0].keys).toHaveLength(3);
+		expect(words(touching)[0]).toMatch(
+			/: "c2?" is left out \(must differ from the others now\)\.$/,
+		);
+		const { draft, rows } = carried({ groups: [group('alike', 'a', 'c', 'd')] }, {});
+		expect(draft.groups).toEqual([group('alike', 'a', 'c', 'c2', 'D')]);
+		expect(rows).toMatchObject([{ what: 'group', outcome: 'copied', now: ['a', 'c', 'c2', 'D'] }]);
+	});
+	it('that all differ take one piece of a region, and one of regions that are one now', () => {
+		const { draft, rows } = carried({ groups: [group('different', 'a', 'c', 'd', 'e', 'f')] });
+		expect(draft.groups).toHaveLength(1);
+		expect(draft.groups[0].keys).toHaveLength(4);
+		expect(rows[0].words).toMatch(
+			/^That all of "North" are different follows to "a", "c2?", "D" and "ef": "c2?" is left out \(count with a larger piece\); regions of it have become one\.$/,
+		);
+	});
+	it('are dropped with fewer than two regions', () => {
+		const result = carried({ groups: [group('different', 'b', 'a'), group('alike', 'e', 'f')] });
+		expect(result.draft.groups).toEqual([]);
+		expect(words(result)).toEqual([
+			'That all of "North" are different is dropped: "b" is gone.',
+			'That all of "North" are kept alike is dropped: regions of it have become one.',
+		]);
+	});
+});
+
 describe('borders struck out and added', () => {
 	const hand = (a: string, b: string) => ({ a, b, reason: 'a ridge' });
 	it('follow with their reason where the pair has a border', () => {

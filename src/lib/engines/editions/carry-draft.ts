@@ -14,6 +14,7 @@ import {
 	type PairTest,
 	type RegionMatch,
 } from '../boundaries/recut/index.ts';
+import { carryGroups } from './carry-groups.ts';
 import { carryLocks } from './carry-locks.ts';
 import type { Draft } from './draft.ts';
 import { inkName } from './ink-name.ts';
@@ -44,7 +45,8 @@ export interface CarriedDraft {
  * and keep-alike too, but to no piece that touches a larger one with the same. Merged: locks as
  * `carryPins` says; bans of every part; what was between two regions that are one now is dropped, and
  * keep-alike where keep-apart stands. Struck borders follow where there is a border, added ones where
- * there are two regions. A layout by a column that is missing is no longer by that column.
+ * there are two regions. Groups follow as `carryGroups` says. Reserved inks, goals and ties name no
+ * region and stay; a lock or ban that a tie asked for keeps its mark. A layout by a column that is missing is no longer by that column.
  * Over the same boundaries a draft without doubled rules comes back as it was. Never throws.
  */
 export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = {}): CarriedDraft {
@@ -56,9 +58,10 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	const { pointTouches, leastMetres, waterKm } = draft;
 	const hand = { struck: struck.list, added: added.list };
 	const rules = { pointTouches, leastMetres, waterKm, ...hand };
-	const mustDiffer = fresh.borders
-		? pairTest(bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules }), regions)
+	const counted = fresh.borders
+		? bordersForSheet(match.after.keys, fresh.borders, { ...draft, ...rules })
 		: null;
+	const mustDiffer = counted ? pairTest(counted, regions) : null;
 	const forbidden = carryForbidden(ground, draft);
 	const locks = carryLocks(ground, draft, forbidden.list, mustDiffer);
 	const apart = carryRules(ground, draft.apart, 'apart', everyPair);
@@ -68,6 +71,7 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 		'alike',
 		alikePairs(ground, apart.list, mustDiffer),
 	);
+	const groups = carryGroups(ground, draft.groups, counted, apart.list);
 	const layout = carryLayout(draft.layout, fresh.columns);
 	return {
 		draft: {
@@ -77,22 +81,27 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 			forbidden: forbidden.list,
 			alike: alike.list,
 			apart: apart.list,
+			groups: groups.list,
 			layout: layout.layout,
 		},
-		rows: [locks, forbidden, alike, apart, struck, added, layout].flatMap(({ rows }) => rows),
+		rows: [locks, forbidden, alike, apart, groups, struck, added, layout].flatMap(
+			({ rows }) => rows,
+		),
 	};
 }
 
 function carryForbidden(ground: CarryGround, draft: Draft) {
 	const seen = new Set<string>();
 	const list: Draft['forbidden'] = [];
-	const rows = draft.forbidden.map(({ key, ink }) => {
+	const rows = draft.forbidden.map(({ key, ink, ...mark }) => {
 		const subject = `That ${quoted(key)} may not be ${inkName(draft, ink)}`;
 		const carrying = { what: 'forbidden', keys: [key], subject };
 		const now = ground.heirsOf(key).map(ground.key);
 		if (now.length === 0) return carriedRow(carrying, 'dropped', [], 'the region is gone');
-		const isNew = now.filter((heir) => seen.size < seen.add(`${ink} ${heir}`).size);
-		for (const heir of isNew) list.push({ key: heir, ink });
+		const isNew = now.filter(
+			(heir) => seen.size < seen.add(`${ink} ${mark.tie ?? ''} ${heir}`).size,
+		);
+		for (const heir of isNew) list.push({ key: heir, ink, ...mark });
 		const outcome = isNew.length === 0 ? 'doubled' : now.length > 1 ? 'copied' : 'followed';
 		return carriedRow(carrying, outcome, now);
 	});

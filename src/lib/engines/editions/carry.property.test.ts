@@ -30,15 +30,41 @@ const struck = fc
 	.map((list) => list.map((i) => ({ a: pairOf(i)[0], b: pairOf(i)[1], reason: `ridge ${i}` })));
 const added = pairs(7).map((list) => list.map(([a, b]) => ({ a, b, reason: 'a bridge' })));
 
+const groups = fc.uniqueArray(
+	fc.record({
+		kind: fc.constantFrom('alike' as const, 'different' as const),
+		name: fc.constantFrom('North', 'South', '__proto__'),
+		keys: fc.uniqueArray(fc.constantFrom(...keys), { minLength: 2 }),
+	}),
+	{ maxLength: 3, selector: ({ kind, name }) => `${kind} ${name}` },
+);
+
+/** Every other lock and ban is one that an adjoining sheet asks for. */
+const mark = (i: number) => (i % 2 ? { tie: 4 } : {});
+
 const draft: fc.Arbitrary<Draft> = fc
-	.record({ locked: numbers, banned: numbers, alike: pairs(2), apart: pairs(5), struck, added })
+	.record({
+		groups,
+		locked: numbers,
+		banned: numbers,
+		reserved: fc.uniqueArray(fc.nat(5), { maxLength: 2 }),
+		ties: fc.constantFrom([], [{ sheet: 4, name: 'Next', edition: null, revision: 2 }]),
+		goals: fc.constantFrom([], [{ kind: 'even-area' as const, give: 0.25 }]),
+		alike: pairs(2),
+		apart: pairs(5),
+		struck,
+		added,
+	})
 	.map(({ locked, banned, ...rest }) =>
 		blankDraft({
 			...rest,
 			locks: Object.fromEntries(
-				locked.map((i) => [keys[i], { ink: i % 2, cost: 1 + i, by: 'Ann', at: 'noon' }]),
+				locked.map((i) => [
+					keys[i],
+					{ ink: i % 2, cost: 1 + i, by: 'Ann', at: 'noon', ...mark(i) },
+				]),
 			),
-			forbidden: banned.map((i) => ({ key: keys[i], ink: i % 3 })),
+			forbidden: banned.map((i) => ({ key: keys[i], ink: i % 3, ...mark(i) })),
 		}),
 	);
 
@@ -144,10 +170,23 @@ it('names regions of the new land only, tells of every rule, and leaves no fault
 				...Object.keys(carried.locks),
 				...carried.forbidden.map(({ key }) => key),
 				...[carried.alike, carried.apart].flat(2),
+				...carried.groups.flatMap((group) => group.keys),
 				...[carried.struck, carried.added].flat().flatMap(({ a, b }) => [a, b]),
 			];
 			expect(named.filter((key) => !known.has(key))).toEqual([]);
-			const rules = [sheet.forbidden, sheet.alike, sheet.apart, sheet.struck, sheet.added].flat();
+			for (const { kind, keys: members } of carried.groups) {
+				expect(members.length).toBeGreaterThan(1);
+				expect(new Set(members).size).toBe(members.length);
+				expect(kind === 'alike' || members.length <= keys.length).toBe(true);
+			}
+			const rules = [
+				sheet.groups,
+				sheet.forbidden,
+				sheet.alike,
+				sheet.apart,
+				sheet.struck,
+				sheet.added,
+			].flat();
 			expect(rows.length).toBeGreaterThanOrEqual(rules.length + Object.keys(sheet.locks).length);
 			const ground = { keys: later.coverage.keys, borders: later.borders };
 			const own = carryTerritories(areas, match, { borders: later.borders });

@@ -1,6 +1,6 @@
 import { canonicalJson } from './canonical-json.ts';
-import { wholeDraft, type HandBorder } from './draft.ts';
 import type { EditionContent } from './edition-content.ts';
+import { rulesCompared } from './rules-compared.ts';
 
 /** What is compared: an edition, or a draft with the colouring it has now. */
 export type Comparable = Pick<EditionContent, 'draft' | 'colouring'> & {
@@ -27,7 +27,7 @@ export interface Differences {
 	regions: InkChange[];
 	/** by ink number from 0: `ink 0`, and the palette's name */
 	palette: Change[];
-	/** locks, forbidden inks, pairs kept alike or apart, borders struck out or added, number of inks */
+	/** locks, forbidden and reserved inks, pairs and groups, borders decided by hand, goals, ties, inks */
 	rules: Change[];
 	layout: Change[];
 	same: boolean;
@@ -53,32 +53,6 @@ function regionChanges(before: Comparable, after: Comparable): InkChange[] {
 	}));
 }
 
-/** Who set a lock, or struck a border, and when is no part of the rule. */
-function rulesOf({ draft }: Comparable) {
-	const { inks, locks, forbidden, alike, apart, struck, added } = draft;
-	const { pointTouches, leastMetres, waterKm } = wholeDraft(draft);
-	const bare = Object.entries(locks).map(([key, { ink, cost }]) => [`lock ${key}`, { ink, cost }]);
-	return {
-		inks,
-		pointTouches,
-		'shortest line that counts (m)': leastMetres,
-		'widest gap that counts (km)': waterKm,
-		...Object.fromEntries(bare),
-		...listed('forbidden', forbidden),
-		...listed('alike', alike),
-		...listed('apart', apart),
-		...listed('struck', struck.map(unsigned)),
-		...listed('added', added.map(unsigned)),
-	};
-}
-
-const unsigned = ({ a, b, reason }: HandBorder) => ({ a, b, reason });
-
-/** A list as members named by what they say, so that its order does not count. */
-function listed(name: string, entries: unknown[]): Record<string, unknown> {
-	return Object.fromEntries(entries.map((entry) => [`${name} ${canonicalJson(entry)}`, entry]));
-}
-
 function paletteOf({ draft }: Comparable) {
 	const inks = draft.palette.inks.map((ink, number) => [`ink ${number}`, ink]);
 	return { name: draft.palette.name, ...Object.fromEntries(inks) };
@@ -93,7 +67,7 @@ export function differences(before: Comparable, after: Comparable): Differences 
 		boundariesChanged: before.boundaries.digest !== after.boundaries.digest,
 		regions: regionChanges(before, after),
 		palette: changed(paletteOf(before), paletteOf(after)),
-		rules: changed(rulesOf(before), rulesOf(after)),
+		rules: changed(rulesCompared(before.draft), rulesCompared(after.draft)),
 		layout: changed(before.draft.layout, after.draft.layout),
 	};
 	const { boundariesChanged, regions, palette, rules, layout } = found;

@@ -12,8 +12,9 @@ const isPair = (a: string, b: string, p: string, q: string) =>
 export const dropLock =
 	(key: string): DropRule =>
 	(draft) => {
-		const { [key]: gone, ...locks } = draft.locks;
-		return gone ? { ...draft, locks } : draft;
+		if (!Object.hasOwn(draft.locks, key)) return draft;
+		const kept = Object.entries(draft.locks).filter(([other]) => other !== key);
+		return { ...draft, locks: Object.fromEntries(kept) };
 	};
 
 /** Only the entry with this tie; `undefined`: that which somebody set. */

@@ -154,4 +154,34 @@ describe('differences', () => {
 		expect(found.rules.map(({ what }) => what)).toEqual(['apart ["a","b"]', 'lock b']);
 		expect(found.layout).toEqual([{ what: 'title', before: layout.title, after: 'Another' }]);
 	});
+
+	it('says groups, reserved inks, goals and ties in words, in whatever order they stand', () => {
+		const north = { kind: 'alike' as const, name: 'North', keys: ['a', 'b'] };
+		const ruled = {
+			...draft,
+			groups: [north],
+			reserved: [1, 2],
+			goals: [{ kind: 'even-area' as const, give: 0.125 }],
+			ties: [{ sheet: 4, name: 'Next door', edition: 2, revision: 9 }],
+		};
+		const found = differences(content(), content({ draft: ruled }));
+		expect(found.rules.map(({ what, after }) => [what, after])).toEqual([
+			['all of “North” kept alike', ['a', 'b']],
+			['goals', ['even use by area, of which later goals may take 12.5 %']],
+			['ink 1 reserved', true],
+			['ink 2 reserved', true],
+			['tie to sheet 4', '“Next door”, edition 2, revision 9'],
+		]);
+		const turned = { ...ruled, groups: [{ ...north, keys: ['b', 'a'] }], reserved: [2, 1] };
+		expect(differences(content({ draft: ruled }), content({ draft: turned })).same).toBe(true);
+	});
+
+	it('finds nothing new in an edition from before such rules could be said', () => {
+		const old = content();
+		const { groups, reserved, goals, ties, ...unasked } = old.draft;
+		expect([groups, reserved, goals, ties].flat()).toEqual([]);
+		const stored = { ...old, draft: unasked as typeof old.draft };
+		expect(differences(stored, content()).same).toBe(true);
+		expect(differences(content(), stored).same).toBe(true);
+	});
 });

@@ -73,7 +73,7 @@ export function ruleSources(draft: Draft, ground: SourceGround, rule: Rule): Rul
 /** The lock of a region, set by hand or asked for by an adjoining sheet; none where there is none. */
 export function lockSource(draft: Draft, ground: SourceGround, region: number): RuleSource | null {
 	const key = ground.keys[region];
-	const lock = draft.locks[key];
+	const lock = Object.hasOwn(draft.locks, key) ? draft.locks[key] : null;
 	if (!lock) return null;
 	const said = `${called(ground, region)} is locked to ${inkName(draft, lock.ink)}`;
 	const words = `${said}${tieWords(draft, lock.tie)}`;

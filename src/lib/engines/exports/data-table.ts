@@ -1,4 +1,4 @@
-import { csvField } from './csv.ts';
+import { csvField } from '../measures/text/csv-field.ts';
 
 /** A table on its way out: typed columns, then rows with one cell a column. */
 export interface DataTable {

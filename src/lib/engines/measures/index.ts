@@ -3,6 +3,8 @@ export { readTable, type ReadResult } from './read-table.ts';
 export { tableLimits, type Progress, type ReadOptions, type TableLimits } from './options.ts';
 export type { TableRefusalCode } from './refusal.ts';
 export type { Cell, RawTable, TableNote, TableSource } from './table.ts';
+export { csvField } from './text/csv-field.ts';
+export { readCsvRows, type CsvRows } from './text/csv-rows.ts';
 export { typeColumn, typeColumns } from './columns/type-columns.ts';
 export { cellState, type NotNumber, type TypedColumn } from './columns/typed-column.ts';
 export { guessJoin } from './join/guess-join.ts';

@@ -5,6 +5,7 @@ import { readingFields, uploadFields } from '../upload.ts';
 import { boundariesResponse } from './check-boundaries.ts';
 import { colouringRequest, colouringResponse } from './check-colouring.ts';
 import { paletteRequest, paletteResponse } from './check-palette.ts';
+import { proofRequest, proofResponse } from './check-proof.ts';
 import { territoriesRequest, territoriesResponse } from './check-territories.ts';
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
@@ -47,6 +48,11 @@ export const operations = {
 		...{ method: 'POST', path: '/check/palette', scope: 'palette:check', status: 200 },
 		summary: 'Check a palette for every reader, and mend it.',
 		...{ json: paletteRequest, answer: paletteResponse, refusals: [413, 415, 503] },
+	},
+	checkProof: {
+		...{ method: 'POST', path: '/check/proof', scope: 'colouring:check', status: 200 },
+		summary: 'Check a proof file by the file alone: what it shows, and what it does not.',
+		...{ json: proofRequest, answer: proofResponse, refusals: [413, 415, 503] },
 	},
 	checkTerritories: {
 		...{ method: 'POST', path: '/check/territories', scope: 'territories:check', status: 200 },
@@ -92,6 +98,12 @@ export const operations = {
 			summary: 'The colouring of the draft, or why there is none.',
 			answer: sheets.sheetColouring,
 		},
+	},
+	readProof: {
+		...{ method: 'GET', path: `${sheet}/proof`, scope: 'sheets:read', status: 200 },
+		summary:
+			'The proof file of the draft’s colouring, or of its collision; ?revision= of an earlier draft, ?edition= of an edition.',
+		...{ answer: proofRequest, refusals: [409, 503] },
 	},
 	readRules: {
 		...{ method: 'GET', path: `${sheet}/rules`, scope: 'sheets:read', status: 200 },

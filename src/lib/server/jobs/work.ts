@@ -2,6 +2,7 @@
 export { writeBorders } from './border-files.work.ts';
 export { arrangeDraft, colourDraft, recheck } from './colour.work.ts';
 export { findPieces } from './pieces.work.ts';
+export { writeProof } from './proof.work.ts';
 export { measureGaps } from './gaps.work.ts';
 export { inkTerritories } from './ink-territories.work.ts';
 export { paintSheet, renderFiles } from './paint.work.ts';
@@ -13,6 +14,7 @@ export { carryRecut } from './recut-carry.work.ts';
 export { sheetBordersJson } from './checks/sheet-borders.work.ts';
 export { checkBoundariesFile } from './checks/check-boundaries.work.ts';
 export { checkColouringJson } from './checks/check-colouring.work.ts';
+export { checkProofJson } from './checks/check-proof.work.ts';
 export { checkPaletteJson } from './checks/check-palette.work.ts';
 export { checkTerritoriesJson } from './checks/check-territories.work.ts';
 export { sealEdition } from './seal.work.ts';

@@ -27,6 +27,12 @@ export const checkPalette = (
 	asker: AbortSignal,
 ): Promise<Answer> => checks.run('checkPaletteJson', body, { signal: until(asker) });
 
+export const checkProof = (
+	{ checks }: Pick<Workshop, 'checks'>,
+	body: Uint8Array,
+	asker: AbortSignal,
+): Promise<Answer> => checks.run('checkProofJson', body, { signal: until(asker) });
+
 export const checkTerritories = (
 	{ checks }: Pick<Workshop, 'checks'>,
 	body: Uint8Array,

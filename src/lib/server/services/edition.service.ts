@@ -152,6 +152,7 @@ async function seal(
 const proofByKey = ({ keys }: BoundaryView, proof: Proof) => ({
 	...proof,
 	regions: proof.regions.map((region) => keys[region]),
+	...(proof.borders ? { borders: proof.borders.map(([a, b]) => [keys[a], keys[b]]) } : {}),
 });
 
 /** Over the coverage and the attributes as they are stored. */
