@@ -14,6 +14,7 @@ import { columnOfSheet } from '../../src/lib/server/services/column-values.servi
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
 import { replaceRulesByFile, rulesFile } from '../../src/lib/server/services/rules-csv.service.ts';
 import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
+import { sheetTies, tieGround } from '../../src/lib/server/services/ties.service.ts';
 import {
 	beginSearch,
 	readSearch,
@@ -305,6 +306,8 @@ const walk: Walk = {
 	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],
 	beginSearch: ['colours.edit', (member) => beginSearch(shop, member, 99, { times: 1 })],
 	stopSearch: ['colours.edit', (member) => stopSearch(shop, member, 99, 1)],
+	sheetTies: ['sheet.read', (member) => sheetTies(shop, member, 99)],
+	tieGround: ['sheet.read', (member) => tieGround(shop, member, 99, { sheet: 98, within: 1 })],
 	sheetSearches: ['sheet.read', (member) => sheetSearches(shop, member, 99)],
 	readSearch: ['sheet.read', (member) => readSearch(shop, member, 99, 1)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
