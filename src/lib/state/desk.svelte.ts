@@ -70,9 +70,11 @@ export class Desk {
 
 	readonly colouring: ColouringOnDesk;
 	/** another document and its colouring, shown for a while */
-	readonly trial = new OnTrial((label, document, answer, inks) => {
-		this.colouring.know(document, answer, inks);
-		this.draft.change(label, () => document);
+	readonly trial = new OnTrial(({ label, document, answer, inks, arranges }) => {
+		// an arrangement of the same document is a document of its own, with other inks remembered for it
+		const kept = { ...(arranges ? this.draft.document : document) };
+		this.colouring.know(kept, answer, inks);
+		this.draft.change(label, () => kept);
 	});
 	/** what the hand holds while rules are made */
 	readonly rules = new RuleHand(this);

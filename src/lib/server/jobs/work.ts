@@ -26,4 +26,5 @@ export {
 	takeMeasureTable,
 } from './measures.work.ts';
 export { scratchPlan } from './scratch.work.ts';
+export { findEdge } from './tie-ground.work.ts';
 export { unitColumns } from './unit-columns.work.ts';
