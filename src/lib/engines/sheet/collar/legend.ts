@@ -35,10 +35,11 @@ export function legendColumns(inks: DrawnInk[], size: number, width: number) {
 }
 
 /**
- * The legend: a box for every ink in use, with its number, and its name beside it. In: `used` in
- * ascending order. Out: rects and texts of layer `legend`; names too long for a column are shortened.
+ * The legend: a box for every ink in use, with its number, and its name beside it. In: `inUse` in
+ * ascending order; those beyond the palette have no colour yet and no box. Out: rects and texts of layer `legend`; names too long for a column are shortened.
  */
-export function drawLegend(place: LegendPlace, inks: DrawnInk[], used: number[]) {
+export function drawLegend(place: LegendPlace, inks: DrawnInk[], inUse: number[]) {
+	const used = inUse.filter((ink) => ink < inks.length);
 	const { size, columns, step } = place;
 	const rows = Math.ceil(used.length / columns);
 	const rects: DrawnRect[] = [];

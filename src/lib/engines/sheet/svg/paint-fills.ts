@@ -8,7 +8,7 @@ import type { SvgOptions } from './paint-svg.ts';
 export function fillWords({ name, key, ink, locked }: RegionFill, drawing: Drawing): string {
 	const which = name || key;
 	if (ink < 0) return `${which}, no ink yet`;
-	const inkName = drawing.inks[ink].name;
+	const inkName = drawing.inks[ink]?.name ?? 'not in the palette';
 	return `${which}, ink ${ink + 1}${inkName ? ` ${inkName}` : ''}${locked ? ', locked' : ''}`;
 }
 
