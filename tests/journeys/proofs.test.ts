@@ -23,16 +23,19 @@ describe('a proof that is handed on', () => {
 		await signInAs(page, 'analyst');
 		await page.getByRole('link', { name: 'Tavaröe Survey Office' }).click();
 		await page.getByRole('link', { name: 'Districts of Tavaröe', exact: true }).click();
-		await page.goto(`${page.url().replace(/\/[a-z]*$/, '')}/colours`);
-		const waiting = page.waitForEvent('download');
-		await page.getByRole('link', { name: 'Proof file', exact: true }).click();
-		const path = await (await waiting).path();
+		await page.waitForURL(/\/sheets\/\d+/);
+		await page.goto(page.url().replace(/(\/sheets\/\d+).*/, '$1/colours'));
+		const [download] = await Promise.all([
+			page.waitForEvent('download'),
+			page.getByRole('link', { name: 'Proof file', exact: true }).click(),
+		]);
+		const path = await download.path();
 		expect(complaints).toEqual([]);
 
 		const stranger = await openPage(browser, { viewport: phone });
 		await stranger.page.goto('/check-proof');
 		await expectAccessible(stranger.page);
-		await stranger.page.getByLabel('Proof file').setInputFiles(path);
+		await stranger.page.locator('input[type=file]').setInputFiles(path);
 		await stranger.page.getByText('Everything this file claims is shown').waitFor();
 		await expectAccessible(stranger.page);
 		const shown = await stranger.page.getByRole('listitem').allInnerTexts();
@@ -45,7 +48,7 @@ describe('a proof that is handed on', () => {
 		const [[a, b]] = file.borders;
 		file.claims[0].colouring[a] = file.claims[0].colouring[b];
 		await writeFile(spoilt, JSON.stringify(file));
-		await stranger.page.getByLabel('Proof file').setInputFiles(spoilt);
+		await stranger.page.locator('input[type=file]').setInputFiles(spoilt);
 		await stranger.page.getByText('does not show what it claims').waitFor();
 		await stranger.page.getByText('border and have the same ink').waitFor();
 		expect(stranger.complaints).toEqual([]);
@@ -56,7 +59,9 @@ describe('a proof that is handed on', () => {
 		await page.goto('/check-proof');
 		await page.getByText('Paste its text instead').click();
 		await page.getByLabel('Text of the file').fill('{"form":"merestone proof 1","regions":[]}');
-		await page.getByRole('button', { name: 'Check this text' }).press('Enter');
+		// a button that is not enabled yet would not be pressed by a person either
+		const button = page.getByRole('button', { name: 'Check this text', disabled: false });
+		await button.press('Enter');
 		await page.getByText('This is no proof file').waitFor();
 		await page.getByText('lacks the field').waitFor();
 		await expectAccessible(page);
