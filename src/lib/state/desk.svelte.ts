@@ -22,6 +22,7 @@ import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions } from './rules-in-force';
 import type { SaveWithInks } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
+import { RuleHand } from './rule-hand.svelte';
 import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
@@ -75,6 +76,8 @@ export class Desk {
 		this.colouring.know(kept, answer, inks);
 		this.draft.change(label, () => kept);
 	});
+	/** what the hand holds while rules are made */
+	readonly rules = new RuleHand(this);
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
