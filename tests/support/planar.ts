@@ -103,7 +103,7 @@ export function delaunayMap(regions: number, seed: number): PlanarMap {
 	const width = Math.ceil(Math.sqrt(regions));
 	const height = Math.ceil(regions / width);
 	const { mesh, x, y } = scatteredMesh(width, height, new Random(seed));
-	for (let flipped = true; flipped; ) {
+	for (let flipped = true; flipped;) {
 		flipped = false;
 		for (let e = 0; e < mesh.size; e++) if (flipIfCircled(mesh, x, y, e)) flipped = true;
 	}

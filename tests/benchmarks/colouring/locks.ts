@@ -1,4 +1,3 @@
-import { cpuUsage } from 'node:process';
 import { checkExplanation } from '../../../src/lib/engines/colouring/explain-check.ts';
 import { explain } from '../../../src/lib/engines/colouring/explain.ts';
 import type { ColouringProblem } from '../../../src/lib/engines/colouring/problem.ts';
@@ -6,7 +5,7 @@ import { Random } from '../../../src/lib/engines/colouring/random.ts';
 import { plainRelease } from '../../support/plain-release.ts';
 import { scatteredMap } from '../../support/planar.ts';
 import { countyMap } from './county-map.ts';
-import { record, type ColouringRecord } from './record.ts';
+import { processorTime, record, type ColouringRecord } from './record.ts';
 
 const INKS = 4;
 
@@ -62,8 +61,6 @@ async function measure(map: string, problem: ColouringProblem): Promise<Colourin
 		met: (release?.proved ?? true) && faults.length === 0,
 	};
 }
-
-const processorTime = () => Math.round(cpuUsage().user / 1000);
 
 type PlainMap = Pick<ColouringProblem, 'regions' | 'borders'>;
 type Wish = { locks: number; proper?: boolean; weighed?: boolean };

@@ -1,3 +1,5 @@
+import { cpuUsage } from 'node:process';
+
 export interface ColouringRecord {
 	name: string;
 	regions: number;
@@ -26,3 +28,6 @@ export async function median(runs: number, work: () => unknown): Promise<number>
 	times.sort((a, b) => a - b);
 	return Math.round(times[runs >> 1] * 100) / 100;
 }
+
+/** Milliseconds that this process has had a processor for, which other work does not lengthen. */
+export const processorTime = (): number => Math.round(cpuUsage().user / 1000);
