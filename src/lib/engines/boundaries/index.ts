@@ -14,3 +14,9 @@ export { simplifyCoverage } from './simplify.ts';
 export { coverageToGeoJson } from './to-geojson.ts';
 export { piecesOf, type Piece } from './pieces.ts';
 export { sourceOf } from './byte-source.ts';
+export {
+	edgeNeighbours,
+	type EdgeNeighbours,
+	type EdgeOptions,
+	type EdgeResult,
+} from './edge-neighbours.ts';

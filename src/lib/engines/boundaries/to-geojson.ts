@@ -21,7 +21,8 @@ export function coverageToGeoJson(
 	};
 }
 
-function geometryOf(coverage: Coverage, region: number): Polygon | MultiPolygon {
+/** One region of a coverage as a GeoJSON geometry. */
+export function geometryOf(coverage: Coverage, region: number): Polygon | MultiPolygon {
 	const parts: Position[][][] = [];
 	for (let p = coverage.regionParts[region]; p < coverage.regionParts[region + 1]; p++) {
 		const rings: Position[][] = [];

@@ -19,3 +19,11 @@ export { carryDraft, type CarriedDraft, type NewGround } from './carry-draft.ts'
 export { colouringProblem, strangersIn, type RuleGround } from './colouring-problem.ts';
 export { lockSource, ruleSources, type RuleSource, type SourceGround } from './rule-sources.ts';
 export { carryInks } from './carry-inks.ts';
+export {
+	inkMap,
+	tieRules,
+	withoutTie,
+	withTie,
+	type TieGround,
+	type TieRules,
+} from './edge-ties.ts';
