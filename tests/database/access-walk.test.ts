@@ -10,7 +10,9 @@ import {
 import { actions, allows, may, roles, type Action } from '../../src/lib/server/access/roles.ts';
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
 import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
+import { columnOfSheet } from '../../src/lib/server/services/column-values.service.ts';
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
+import { replaceRulesByFile, rulesFile } from '../../src/lib/server/services/rules-csv.service.ts';
 import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
 import { sheetTies, tieGround } from '../../src/lib/server/services/ties.service.ts';
 import {
@@ -23,6 +25,7 @@ import { sheetPieces } from '../../src/lib/server/services/pieces.service.ts';
 import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.ts';
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
+import { editionInks, revisionInks } from '../../src/lib/server/services/earlier-inks.service.ts';
 import {
 	editionFile,
 	issueEdition,
@@ -265,6 +268,8 @@ const walk: Walk = {
 		(member) => readActivity(member, { kind: null, userId: null }, 1),
 	],
 	readDraft: ['sheet.read', (member) => readDraft(shop, member, 99, 1)],
+	editionInks: ['sheet.read', (member) => editionInks(shop, member, 99, 1)],
+	revisionInks: ['sheet.read', (member) => revisionInks(shop, member, 99, 1)],
 	readEdition: ['sheet.read', (member) => readEdition(shop, member, 99, 1)],
 	readInvitations: ['members.manage', (member) => readInvitations(member)],
 	readMembers: ['team.read', (member) => readMembers(member)],
@@ -291,6 +296,13 @@ const walk: Walk = {
 		},
 	],
 	measureSheetGaps: ['borders.edit', (member) => measureSheetGaps(shop, member, 99, 10)],
+	columnOfSheet: ['sheet.read', (member) => columnOfSheet(shop, member, 99, 'name')],
+	rulesFile: ['sheet.read', (member) => rulesFile(shop, member, 99, new AbortController().signal)],
+	replaceRulesByFile: [
+		'colours.edit',
+		(member) =>
+			replaceRulesByFile(shop, member, 99, new Uint8Array(), new AbortController().signal),
+	],
 	sheetPieces: ['sheet.read', (member) => sheetPieces(shop, member, 99)],
 	beginSearch: ['colours.edit', (member) => beginSearch(shop, member, 99, { times: 1 })],
 	stopSearch: ['colours.edit', (member) => stopSearch(shop, member, 99, 1)],

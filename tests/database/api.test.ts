@@ -383,6 +383,25 @@ describe('the team’s sheets', () => {
 		});
 	});
 
+	it('have rules that go out and come in as a table', async () => {
+		const table = await get('/sheets/1/rules.csv');
+		expect(table.headers.get('content-type')).toMatch(/^text\/csv/);
+		const text = await table.text();
+		expect(text.split('\r\n')[1]).toMatch(/^lock,32,/);
+		const put = (body: string, type = 'text/csv') =>
+			callApi('/sheets/1/rules.csv', {
+				...{ method: 'PUT', body },
+				headers: { ...bearer(), 'content-type': type },
+			});
+		const saved = await answer(put(text), operations.saveRulesTable);
+		expect(saved.revision).toBe(2);
+		expect(await fault(put('rule,region,ink\nlock,x,1'))).toMatchObject({
+			...{ status: 422, code: 'unfit-rules' },
+			details: { faults: [{ row: 2, words: 'there is no region “x”' }] },
+		});
+		expect(await fault(put(text, 'text/plain'))).toMatchObject({ status: 415 });
+	});
+
 	it('have editions whose files are those that were issued', async () => {
 		await issueEdition(workshop(), approver, 1, 2, 'By hand');
 		const { editions } = await answer(get('/sheets/1/editions'), operations.listEditions);

@@ -85,7 +85,7 @@ describe('from an uploaded file to a coloured sheet', () => {
 			expect(sheet.colouring).toMatchObject({ status: 'coloured', inksUsed: 4 });
 		}
 		expect([...two.regions.name].sort()).toEqual([...one.regions.name].sort());
-		expect(one.boundarySet.planarWitness?.sentence).toContain('parts in several places');
+		expect(one.boundarySet.planarWitness?.sentence).toContain('were a region of its own');
 	});
 
 	it('names the sheet, and lets findings be accepted once', async () => {

@@ -83,6 +83,11 @@ export interface PlanarWitness {
 	paths: number[][];
 	/** every region on it */
 	regions: number[];
+	/**
+	 * What would have to go for the borders to be planar, nothing of it to spare: regions of which each part
+	 * would be one of its own, and pairs that share no line. Null when not worked out; absent in older sets.
+	 */
+	split?: { regions: number[]; pairs: [number, number][] } | null;
 	sentence: string;
 }
 
@@ -135,6 +140,11 @@ export interface DeskEdition {
 	digest: string;
 	note: string;
 	files: { name: string; mediaType: string; bytes: number }[];
+}
+
+/** `GET sheets/[sheet]/editions/[number]/inks` and `drafts/[revision]/inks`: ink of each region by key */
+export interface EarlierInks {
+	inks: Record<string, number>;
 }
 
 /** `POST sheets/[sheet]/draft`: 200 */

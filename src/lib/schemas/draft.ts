@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { readers } from '../engines/colour/reader.ts';
 import { goalKinds } from '../engines/colouring/goal-wish.ts';
 import {
 	differentPairs,
@@ -51,6 +52,23 @@ const groupRule = z
 const goalWish = z.strictObject({
 	kind: z.enum(goalKinds),
 	give: z.number().min(0).max(1),
+	readers: z.array(z.enum(readers)).min(1).max(readers.length).optional(),
+	against: z
+		.union([
+			z.strictObject({
+				edition: z
+					.int()
+					.min(1)
+					.max(2 ** 31 - 1),
+			}),
+			z.strictObject({
+				revision: z
+					.int()
+					.min(1)
+					.max(2 ** 31 - 1),
+			}),
+		])
+		.optional(),
 });
 
 const edgeTie = z.strictObject({

@@ -22,6 +22,7 @@ import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions } from './rules-in-force';
 import type { SaveWithInks } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
+import { RuleHand } from './rule-hand.svelte';
 import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
@@ -69,10 +70,14 @@ export class Desk {
 
 	readonly colouring: ColouringOnDesk;
 	/** another document and its colouring, shown for a while */
-	readonly trial = new OnTrial((label, document, answer, inks) => {
-		this.colouring.know(document, answer, inks);
-		this.draft.change(label, () => document);
+	readonly trial = new OnTrial(({ label, document, answer, inks, arranges }) => {
+		// an arrangement of the same document is a document of its own, with other inks remembered for it
+		const kept = { ...(arranges ? this.draft.document : document) };
+		this.colouring.know(kept, answer, inks);
+		this.draft.change(label, () => kept);
 	});
+	/** what the hand holds while rules are made */
+	readonly rules = new RuleHand(this);
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);

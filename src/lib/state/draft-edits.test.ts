@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { inkDistances } from '$lib/engines/palettes';
 import { blankDraft } from '../../../tests/support/blank-draft';
-import { lock, weigh } from './draft-edits';
+import { lock, useInks, weigh } from './draft-edits';
 
 describe('the weight of a lock', () => {
 	const draft = lock(['a'], 0)(blankDraft());
@@ -16,5 +17,20 @@ describe('the weight of a lock', () => {
 	it('is left as it was for a region without a lock and for a weight that is none', () => {
 		for (const cost of [0, -1, NaN, Infinity, 2e9]) expect(weigh('a', cost)(draft)).toBe(draft);
 		expect(weigh('b', 2)(draft)).toBe(draft);
+	});
+});
+
+describe('more inks than the palette has', () => {
+	it('are added as greys that can be told from each other and from all there are', () => {
+		for (const hex of ['#e4eaee', '#808080', '#111111']) {
+			const { palette } = blankDraft();
+			const inks = [...palette.inks, { name: 'Three', hex }];
+			const grown = useInks(5)(blankDraft({ palette: { ...palette, inks } })).palette.inks;
+			expect(grown.slice(0, 3)).toEqual(inks);
+			const distances = inkDistances(grown.map((ink) => ink.hex));
+			for (const added of [3, 4])
+				for (const other of [0, 1, 2, 3].filter((ink) => ink !== added))
+					expect(distances[added][other]).toBeGreaterThan(10);
+		}
 	});
 });

@@ -1,4 +1,5 @@
 import type { Draft } from '$lib/engines/editions/draft';
+import { inkDistances } from '$lib/engines/palettes/ink-distances';
 import type { Ink, Palette } from '$lib/engines/palettes/palette';
 import type { SheetLayout } from '$lib/engines/sheet/layout';
 
@@ -49,12 +50,19 @@ export const useInks =
 /** light to dark, so that added inks differ at least in lightness */
 const spareGreys = ['#f2f2f2', '#8a8a8a', '#c4c4c4', '#5c5c5c', '#dddddd', '#a6a6a6'];
 
+/** Each added ink is the grey furthest from all there are, for whoever tells it least from one of them. */
 function grown(inks: readonly Ink[], to: number): Ink[] {
-	const added = Array.from({ length: to - inks.length }, (_, index) => ({
-		name: `Added ${index + 1}`,
-		hex: spareGreys[index % spareGreys.length],
-	}));
-	return [...inks, ...added];
+	const all = [...inks];
+	for (let index = 1; all.length < to; index++)
+		all.push({ name: `Added ${index}`, hex: furthestGrey(all.map(({ hex }) => hex)) });
+	return all;
+}
+
+function furthestGrey(hexes: readonly string[]): string {
+	const distances = inkDistances([...spareGreys, ...hexes]);
+	const nearest = (grey: number) => Math.min(...distances[grey].slice(spareGreys.length));
+	const numbers = spareGreys.map((_, grey) => grey);
+	return spareGreys[numbers.reduce((best, grey) => (nearest(grey) > nearest(best) ? grey : best))];
 }
 
 export const usePalette =

@@ -24,10 +24,16 @@ export interface Evidence {
 	outline: string;
 	/** number of the finding whose place is marked */
 	finding: number | null;
-	/** what is written on regions */
-	tags: readonly { region: number; text: string }[];
+	/** what is written on regions; the name is left out where there is little room */
+	tags: readonly Tag[];
 	/** whether the sheet is moved so that all of it is seen well */
 	framed: boolean;
+}
+
+export interface Tag {
+	region: number;
+	name: string;
+	text: string;
 }
 
 const nothing: Evidence = {
@@ -92,7 +98,7 @@ function proofWords({ kind, regions, borders }: Proof, nameOf: (region: number) 
 /** The locks that collide, each with its ink, and the regions between them, brought into view. */
 export function collisionEvidence(
 	{ locks, regions }: Explanation,
-	tagOf: (region: number) => string,
+	tagOf: (region: number) => Omit<Tag, 'region'>,
 ): Evidence {
 	const locked = new Set(locks);
 	const between = regions.filter((region) => !locked.has(region));
@@ -100,7 +106,7 @@ export function collisionEvidence(
 		words: collisionWords(locks.length, between.length),
 		strong: locks,
 		light: between,
-		tags: locks.slice(0, mostTags).map((region) => ({ region, text: tagOf(region) })),
+		tags: locks.slice(0, mostTags).map((region) => ({ region, ...tagOf(region) })),
 		framed: true,
 	});
 }

@@ -8,10 +8,15 @@ export interface Trial {
 	document: Draft;
 	inks: Int32Array;
 	answer: DeskColouring;
+	/**
+	 * only the inks are others, and they go on changing by themselves: it does not take the keyboard, and
+	 * is kept with the draft as it stands then
+	 */
+	arranges?: boolean;
 }
 
 /** How a trial becomes a step of the draft. */
-type Take = (label: string, document: Draft, answer: DeskColouring, inks: Int32Array) => void;
+type Take = (trial: Trial) => void;
 
 /**
  * What is on trial: the sheet shows it in place of the draft until it is kept, as one step that can be
@@ -19,6 +24,8 @@ type Take = (label: string, document: Draft, answer: DeskColouring, inks: Int32A
  */
 export class OnTrial {
 	now: Trial | null = $state.raw(null);
+	/** how often it was dropped, or the draft changed */
+	drops = $state(0);
 
 	constructor(private readonly take: Take) {}
 
@@ -31,11 +38,11 @@ export class OnTrial {
 		const trial = this.now;
 		if (!trial) return;
 		this.now = null;
-		// an arrangement of the same document is a document of its own, with other inks remembered for it
-		this.take(trial.label, { ...trial.document }, trial.answer, trial.inks);
+		this.take(trial);
 	}
 
 	drop() {
 		this.now = null;
+		this.drops++;
 	}
 }

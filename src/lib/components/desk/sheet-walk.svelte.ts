@@ -85,7 +85,8 @@ export class SheetWalk {
 	#open() {
 		const { selected } = this.#desk;
 		if (selected === null) return;
-		const plan = this.#desk.planning;
+		const { planning: plan, rules } = this.#desk;
+		if (rules.pairing) return rules.complete(selected);
 		if (plan?.mayEdit && plan.hand.inHand !== null)
 			return plan.hand.give([selected], plan.hand.inHand);
 		this.#desk.panel = 'region';
@@ -98,6 +99,8 @@ export class SheetWalk {
 	}
 
 	#clear() {
+		// the bar over the sheet ends a pair that was begun
+		if (this.#desk.rules.pairing) return;
 		this.#desk.planning?.hand.clear();
 		this.#desk.evidence = null;
 		this.#desk.select(null);

@@ -7,6 +7,7 @@ export {
 	type BorderList,
 } from './border-list.ts';
 export { bordersOf } from './borders-of.ts';
+export { partedBorders } from './parts.ts';
 export { crossedBorders, type CrossedBorders } from './planarity.ts';
 export { surveyOf, type BordersOptions, type Survey } from './survey.ts';
 export type { Overlap } from './overlap.ts';

@@ -78,19 +78,20 @@ function distinctFigure(
 	colouring: ArrayLike<number>,
 	inks: number,
 ): GoalFigure {
-	const along = new Map<string, number>();
+	const along = new Float64Array(inks * inks);
 	let metres = 0;
 	let weighted = 0;
 	for (let i = 0; i < borders.a.length; i++) {
-		const pair = [colouring[borders.a[i]], colouring[borders.b[i]]].sort((c, d) => c - d);
+		const c = Math.min(colouring[borders.a[i]], colouring[borders.b[i]]);
+		const d = Math.max(colouring[borders.a[i]], colouring[borders.b[i]]);
 		const length = lengths ? lengths[i] : 1;
-		along.set(pair.join(), (along.get(pair.join()) ?? 0) + length);
+		along[c * inks + d] += length;
 		metres += length;
-		weighted += length * (inkDistances[pair[0]]?.[pair[1]] ?? 0);
+		weighted += length * (inkDistances[c]?.[d] ?? 0);
 	}
 	const pairs = pairsOf(inks).map(([a, b]) => {
 		const distance = inkDistances[a]?.[b] ?? 0;
-		return { a, b, distance, metres: along.get(`${a},${b}`) ?? 0 };
+		return { a, b, distance, metres: along[a * inks + b] };
 	});
 	pairs.sort((one, other) => one.distance - other.distance);
 	const distances = [...new Set(pairs.map(({ distance }) => distance))];

@@ -34,6 +34,8 @@ export interface PhaseSettings {
 export class Phase {
 	tries = 0;
 	private weighed = 0;
+	/** tries gone when the last sample was taken */
+	private cool = 0;
 	private readonly changes: Float64Array;
 
 	constructor(
@@ -71,6 +73,7 @@ export class Phase {
 	private sample(after: ArrayLike<number>): void {
 		if (this.weighed >= samples || after[this.goal] === this.aims[this.goal].value) return;
 		this.weighed++;
+		this.cool = this.tries;
 		for (let j = 0; j <= this.goal; j++) {
 			this.changes[j] += Math.abs(after[j] - this.aims[j].value);
 		}
@@ -79,7 +82,7 @@ export class Phase {
 	private heat(j: number): number {
 		const { length, warmth, descending } = this.settings;
 		const { descends, scales } = this.aims[j];
-		const gone = this.tries / (length * (1 - descent));
+		const gone = (this.tries - this.cool) / (length * (1 - descent) - this.cool);
 		if ((descends && descending === 'cold') || this.weighed < samples || gone >= 1) return 0;
 		const range = coldest * 64 ** (1 - scales);
 		const full =

@@ -7,6 +7,7 @@ import {
 	type DropRule,
 } from './drop-rule.ts';
 import type { Draft, ForbiddenInk, GroupRule, Lock } from './draft.ts';
+import type { RuleParts } from './rule-parts.ts';
 
 export const ruleKinds = [
 	'lock',
@@ -48,7 +49,22 @@ const idOf = (...parts: unknown[]) => JSON.stringify(parts);
  * inks, each kind in the order of the draft. A rule that stands there twice is listed once. Borders
  * decided by hand are another list. Linear time.
  */
-export function ruleList(draft: Draft): RuleEntry[] {
+export const ruleList = (draft: Draft): RuleEntry[] => entriesOf(draft);
+
+/** Those of the list that name one region, without making the others. Linear time. */
+export function rulesAbout(draft: Draft, key: string): RuleEntry[] {
+	const names = (keys: readonly string[]) => keys.includes(key);
+	return entriesOf({
+		locks: Object.hasOwn(draft.locks, key) ? { [key]: draft.locks[key] } : {},
+		forbidden: draft.forbidden.filter((rule) => rule.key === key),
+		alike: draft.alike.filter(names),
+		apart: draft.apart.filter(names),
+		groups: draft.groups.filter(({ keys }) => names(keys)),
+		reserved: [],
+	});
+}
+
+function entriesOf(draft: RuleParts): RuleEntry[] {
 	const entries = [
 		...Object.entries(draft.locks).map(lockEntry),
 		...draft.forbidden.map(forbiddenEntry),

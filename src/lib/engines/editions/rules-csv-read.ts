@@ -1,4 +1,4 @@
-import { readCsvRows } from '../measures/index.ts';
+import { readCsvRows } from '../measures/text/csv-rows.ts';
 import { RuleGathering } from './rule-gathering.ts';
 import {
 	CellReader,

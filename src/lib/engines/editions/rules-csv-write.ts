@@ -1,4 +1,4 @@
-import { csvField } from '../measures/index.ts';
+import { csvField } from '../measures/text/csv-field.ts';
 import type { Draft } from './draft.ts';
 import { ruleList, type RuleEntry } from './rule-list.ts';
 

@@ -1,5 +1,4 @@
 import { unzipSync, strFromU8 } from 'fflate';
-import Logic from 'logic-solver';
 import { describe, expect, it } from 'vitest';
 import {
 	complete,
@@ -9,6 +8,7 @@ import {
 	fromPairs,
 	mycielski,
 } from '../../../../tests/support/named-graphs.ts';
+import { satisfiable } from '../../../../tests/support/reference-solver.ts';
 import { colour, proofFile, type ColouringProblem } from '../colouring/index.ts';
 import { exportProofZip } from './proof-files.ts';
 
@@ -36,14 +36,6 @@ function readCnf(text: string): { variables: number; clauses: number[][] } {
 	expect(clauses.pop()).toEqual([]);
 	expect(clauses).toHaveLength(Number(count));
 	return { variables: Number(variables), clauses };
-}
-
-/** Whether a reference solver (logic-solver 2.0.1, which wraps MiniSat) finds the clauses satisfiable. */
-function satisfiable(clauses: number[][]): boolean {
-	const solver = new Logic.Solver();
-	const term = (literal: number) => (literal > 0 ? `v${literal}` : `-v${-literal}`);
-	for (const clause of clauses) solver.require(Logic.or(...clause.map(term)));
-	return solver.solve() !== null;
 }
 
 /** Follows a DRUP proof line by line with the plainest unit propagation there is. */

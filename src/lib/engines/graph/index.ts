@@ -9,4 +9,5 @@ export { isPlanar } from './left-right-test.ts';
 export { planarity, type Planarity } from './planarity.ts';
 export { renumber } from './renumber.ts';
 export { smallestLastOrder } from './smallest-last.ts';
+export { splittingSet, type PartedGraph, type Splitting } from './splitting-set.ts';
 export { inducedSubgraph } from './subgraph.ts';

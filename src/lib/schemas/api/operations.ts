@@ -22,6 +22,8 @@ export interface Operation {
 	scope: Scope;
 	summary: string;
 	json?: z.ZodType;
+	/** media type of a body that is a text */
+	text?: string;
 	/** fields that come before the file */
 	form?: z.ZodType;
 	status: 200 | 202;
@@ -113,6 +115,19 @@ export const operations = {
 		...{ method: 'PUT', path: `${sheet}/rules`, scope: 'sheets:write', status: 200 },
 		summary: 'Save decisions as the next revision; 409 when somebody else saved first.',
 		...{ json: saveDraft, answer: sheets.rulesSaved, refusals: [409, 413, 415, 422] },
+	},
+	readRulesTable: {
+		...{ method: 'GET', path: `${sheet}/rules.csv`, scope: 'sheets:read', status: 200 },
+		summary:
+			'The rules about inks as CSV, a line a rule: locks, forbidden and reserved inks, pairs and groups alike or apart.',
+		...{ answer: ['text/csv'], refusals: [503] },
+	},
+	saveRulesTable: {
+		...{ method: 'PUT', path: `${sheet}/rules.csv`, scope: 'sheets:write', status: 200 },
+		summary:
+			'Send such a table in place of the rules there; refused whole, with the rows, when any row makes no rule.',
+		text: 'text/csv',
+		...{ answer: sheets.rulesSaved, refusals: [409, 413, 415, 422, 503] },
 	},
 	listMeasures: {
 		...{ method: 'GET', path: `${sheet}/measures`, scope: 'territories:read', status: 200 },

@@ -56,7 +56,8 @@ const parameter = (name: string): Json => ({
 		: { type: 'string' },
 });
 
-function requestBody({ json, form }: Operation): Json | null {
+function requestBody({ json, form, text }: Operation): Json | null {
+	if (text) return { required: true, content: { [text]: { schema: { type: 'string' } } } };
 	if (json) {
 		return { required: true, content: { 'application/json': { schema: schemaOf(json, 'input') } } };
 	}

@@ -1,27 +1,10 @@
 import type { z } from 'zod';
+import { bodyBytes } from './body-bytes.ts';
 import { ApiFault } from './fault.ts';
 
-/** Largest JSON body, in bytes. */
-export const mostJson = 32 * 1024 * 1024;
-
 /** The bytes of a JSON body; 415 for another type, 413 for too many, as soon as that shows. */
-export async function jsonBytes(request: Request): Promise<Uint8Array> {
-	const type = request.headers.get('content-type') ?? '';
-	if (!/^application\/json\s*(;|$)/i.test(type)) {
-		throw new ApiFault(415, 'unsupported-type', 'send the body as application/json');
-	}
-	if (Number(request.headers.get('content-length') ?? 0) > mostJson) throw tooLarge();
-	const chunks: Uint8Array[] = [];
-	let bytes = 0;
-	for await (const chunk of request.body ?? []) {
-		bytes += chunk.length;
-		if (bytes > mostJson) throw tooLarge();
-		chunks.push(chunk);
-	}
-	return Buffer.concat(chunks);
-}
-
-const tooLarge = () => new ApiFault(413, 'too-large', 'a JSON body may have 32 MB');
+export const jsonBytes = (request: Request): Promise<Uint8Array> =>
+	bodyBytes(request, 'application/json');
 
 /** A body by its schema; whatever does not fit is named by its path. */
 export function parseJson<S extends z.ZodType>(bytes: Uint8Array, schema: S): z.output<S> {

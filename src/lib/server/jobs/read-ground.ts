@@ -54,7 +54,7 @@ export function groundOf(
 	{ options, taken }: Pick<ReadGround, 'options' | 'taken'>,
 ): ReadGround {
 	const regions = regionColumns(coverage, attributes);
-	const { planar, witness } = planarityOf(regions.name, regions.parts, borders);
+	const { planar, witness } = planarityOf(coverage, borders);
 	return {
 		columns: { regions, borders: borderColumns(borders), findings },
 		geometry: encodeCoverage(coverage),

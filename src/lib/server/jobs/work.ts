@@ -1,5 +1,6 @@
 /** Everything that runs in a thread, by name: called through a `Pool`, in the web process and the worker. */
 export { writeBorders } from './border-files.work.ts';
+export { readRulesTable, writeRules } from './rules-csv.work.ts';
 export { arrangeDraft, colourDraft, recheck } from './colour.work.ts';
 export { findPieces } from './pieces.work.ts';
 export { writeProof } from './proof.work.ts';

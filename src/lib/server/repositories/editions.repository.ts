@@ -1,3 +1,4 @@
+import { sql } from 'kysely';
 import type { Db } from '../database/connection.ts';
 import type { NewRow } from '../database/schema.ts';
 
@@ -44,6 +45,21 @@ const withIssuer = (db: Db) =>
 
 export const listEditions = (db: Db, sheetId: string) =>
 	withIssuer(db).where('sheet_id', '=', sheetId).orderBy('number', 'desc').execute();
+
+/** Ink of each region by key; undefined where there is no such edition. */
+export async function readEditionColouring(
+	db: Db,
+	sheetId: string,
+	number: number,
+): Promise<Record<string, number> | undefined> {
+	const row = await db
+		.selectFrom('editions')
+		.select(sql<Record<string, number>>`content -> 'colouring'`.as('colouring'))
+		.where('sheet_id', '=', sheetId)
+		.where('number', '=', number)
+		.executeTakeFirst();
+	return row?.colouring;
+}
 
 export const listEditionFiles = (db: Db, sheetId: string) =>
 	db

@@ -12,7 +12,8 @@ export function collisionOnSheet(
 	const { locks, palette } = draft.document;
 	return collisionEvidence(explanation, (region) => {
 		const ink = locks[sheet.regions.key[region]]?.ink ?? 0;
-		return `${nameOf(region)}: ${ink + 1} ${palette.inks[ink]?.name ?? ''}`.trimEnd();
+		const text = `${ink + 1} ${palette.inks[ink]?.name ?? ''}`.trimEnd();
+		return { name: nameOf(region), text };
 	});
 }
 
