@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { bordersForSheet } from '../../src/lib/engines/borders/index.ts';
-import type { ColouringResult } from '../../src/lib/engines/colouring/index.ts';
+import type { ColouringResult, Proof } from '../../src/lib/engines/colouring/index.ts';
 import { Forbidden } from '../../src/lib/server/access/member.ts';
 import { runSearch } from '../../src/lib/server/jobs/search.job.ts';
 import { saveDraft } from '../../src/lib/server/services/draft.service.ts';
@@ -35,7 +35,7 @@ async function searched(made: MycielskiSheet, meanwhile?: () => Promise<unknown>
 	return readSearch(shop, made.analyst, made.sheet, number);
 }
 
-const open = { kind: 'not-proved', regions: [] } as const;
+const open: Proof = { kind: 'not-proved', regions: [] };
 
 /** As if the first try had found so many inks and no proof. */
 const withInks = (inks: number) => (known: Coloured) => ({

@@ -35,7 +35,7 @@ export class CellReader {
 	private readonly byName = new Map<string, string | null>();
 	private readonly inks = new Map<string, number | null>();
 
-	constructor(private ground: RulesCsvGround) {
+	constructor(ground: RulesCsvGround) {
 		this.isKey = new Set(ground.keys);
 		ground.names.forEach((name, i) => {
 			if (name !== '') this.byName.set(name, this.byName.has(name) ? null : ground.keys[i]);

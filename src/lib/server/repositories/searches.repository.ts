@@ -1,6 +1,7 @@
 import { sql } from 'kysely';
 import type { Db } from '../database/connection.ts';
-import type { NewRow, Row, SearchState } from '../database/schema.ts';
+import type { SearchState } from '../../schemas/search.ts';
+import type { NewRow, Row } from '../database/schema.ts';
 import type { Claim } from './claims.repository.ts';
 
 const open = ['waiting', 'running'] as const;
