@@ -38,3 +38,6 @@ export {
 	notJson,
 	type ProofChecked,
 } from './proofs/check/index.ts';
+export { goalFigures, type GoalFigure } from './goal-figures.ts';
+export { goalKinds, type GoalKind, type GoalWish } from './goal-wish.ts';
+export { Improver, type AimFigure, type ImproveSettings } from './improve.ts';
