@@ -2,7 +2,7 @@ import { colour } from '../../src/lib/engines/colouring/colour.ts';
 import type { ColouringProblem } from '../../src/lib/engines/colouring/problem.ts';
 import { Random } from '../../src/lib/engines/colouring/random.ts';
 import { buildGraph, isPlanar } from '../../src/lib/engines/graph/index.ts';
-import type { EdgeList } from './named-graphs.ts';
+import type { AnyMap } from './adversary.ts';
 
 /**
  * A map, a colouring of it with four inks, and so many of its borders redrawn: where two regions met, the two
@@ -10,7 +10,7 @@ import type { EdgeList } from './named-graphs.ts';
  * changes as can be.
  */
 export async function redrawnMap(
-	map: EdgeList,
+	map: AnyMap,
 	clashes: number,
 	seed: number,
 ): Promise<ColouringProblem> {
@@ -30,7 +30,7 @@ export async function redrawnMap(
 	return { regions: map.regions, borders, inks: 4, previous, goal: 'fewest-changes' };
 }
 
-const planar = ({ regions, borders }: EdgeList) =>
+const planar = ({ regions, borders }: AnyMap) =>
 	isPlanar(buildGraph(regions, borders.a, borders.b));
 
 function join(beside: Set<number>[], u: number, v: number): void {
