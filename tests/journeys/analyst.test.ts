@@ -82,6 +82,7 @@ describe('an analyst', () => {
 		await page
 			.locator('#because')
 			.getByRole('button', { name: /^Release/ })
+			.first()
 			.click();
 		await expect
 			.poll(() => page.locator('#because').innerText(), { timeout: 30_000 })

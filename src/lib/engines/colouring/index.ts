@@ -32,4 +32,9 @@ export {
 	type ProofFile,
 	type RegionNames,
 } from './proofs/index.ts';
-export { checkProofFile, checkProofText, type ProofChecked } from './proofs/check/index.ts';
+export {
+	checkProofFile,
+	checkProofText,
+	notJson,
+	type ProofChecked,
+} from './proofs/check/index.ts';
