@@ -129,6 +129,40 @@ describe('a search for an answer', () => {
 	});
 });
 
+describe('a search for a cheaper release', () => {
+	it('stores a cheaper one, and then that no cheaper one is enough', async () => {
+		const made = await mycielskiSheet(shop, 'release', 4, 4, (known) => known);
+		const { draft, revision } = await desk(made);
+		// three that border in a row, all locked to one ink: to release the middle one is enough
+		const [{ a, b }] = draft.added;
+		const other = draft.added.find((pair) => pair.a !== a && (pair.a === b || pair.b === b));
+		if (!other) throw new Error('every region of the graph has two neighbours');
+		const third = other.a === b ? other.b : other.a;
+		const locks = Object.fromEntries([a, b, third].map((key) => [key, { ink: 0, cost: 1 }]));
+		const document = { ...draft, locks };
+		await saveDraft(shop, made.analyst, made.sheet, { revision, document });
+		const { colouring, regions } = await desk(made);
+		if (colouring?.status !== 'impossible') throw new Error('locks alike must collide');
+		const regionOf = (key: string) => regions.key.indexOf(key);
+		expect(colouring.explanation.release).toMatchObject({ locks: [regionOf(b)], proved: true });
+		const dear = { locks: [a, third].map(regionOf), cost: 2, proved: false, lowerBound: 0 };
+		const explanation = { ...colouring.explanation, release: dear };
+		await shop.db
+			.updateTable('drafts')
+			.set({ explanation: JSON.stringify({ status: 'impossible', explanation }) })
+			.where('sheet_id', '=', made.sheetId)
+			.where('revision', '=', revision + 1)
+			.execute();
+		const found = await searched(made);
+		expect(found).toMatchObject({ state: 'stored', gain: 'cheaper-release', question: 'release' });
+		expect(found.sentence).toContain('cost 1 in all');
+		expect((await desk(made)).colouring).toMatchObject({
+			explanation: { release: { locks: [regionOf(b)], cost: 1, proved: true } },
+		});
+		await expect(ask(made)).rejects.toThrow('Nothing is open');
+	});
+});
+
 describe('a search about a draft that moved on', () => {
 	it('is kept with its result, and the sheet stays as it is', async () => {
 		const made = await mycielskiSheet(shop, 'moved', 5, 'fewest', withInks(6));

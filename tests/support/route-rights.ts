@@ -77,6 +77,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/proof.json', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/proof.zip', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/searches', 'GET', 'sheet.read'],
+	['/sheets/[sheet]/searches/[search]', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/ties', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/ties/[other]', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/sheet.svg', 'GET', 'sheet.read'],

@@ -13,6 +13,8 @@ export interface Evidence {
 	strong: readonly number[];
 	/** regions drawn with a light outline */
 	light: readonly number[];
+	/** regions marked by a dot: many at once, whose outlines would hide the sheet */
+	dots: readonly number[];
 	/** the middle that every region of the ring touches */
 	hub: number | null;
 	ring: boolean;
@@ -40,6 +42,7 @@ const nothing: Evidence = {
 	words: '',
 	strong: [],
 	light: [],
+	dots: [],
 	hub: null,
 	ring: false,
 	alone: false,

@@ -88,9 +88,10 @@ function distinctLines(
 	const reader = weakestReader(inks[a]?.hex, inks[b]?.hex, seenBy);
 	return [
 		{
-			name: 'Smallest difference that touches',
-			value: `${distance.toFixed(1)}${reader ? `, ${readerWords[reader].short}` : ''}`,
+			name: 'Smallest difference',
+			value: distance.toFixed(1),
 		},
+		{ name: 'Seen by', value: reader ? readerWords[reader].short : 'nobody' },
 		{ name: 'Between inks', value: `${a + 1} and ${b + 1}` },
 		{ name: 'Along', value: length(metres) },
 		{ name: 'Mean difference', value: mean.toFixed(1) },
@@ -117,6 +118,6 @@ export function weakestSentence({ a, b, distance, avoidable }: WeakestNews): str
 	const pair = `Inks ${a + 1} and ${b + 1} are the two least apart (${distance.toFixed(1)})`;
 	if (avoidable === 'yes') return `${pair}. They need not touch anywhere.`;
 	if (avoidable === 'no')
-		return `${pair}. They must touch somewhere: without that, one ink fewer would have to do.`;
+		return `${pair}. They must touch somewhere: kept apart they would count as one ink, and one ink fewer does not do.`;
 	return `${pair}. Whether they must touch somewhere was not settled.`;
 }

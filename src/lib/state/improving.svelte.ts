@@ -57,7 +57,7 @@ export class Improving {
 
 	#worker: Worker | null = null;
 	#since = 0;
-	#shown: Int32Array | null = null;
+	#shown: Int32Array | null = $state.raw(null);
 
 	constructor(
 		private readonly desk: ImproveDesk,

@@ -13,6 +13,8 @@ export interface Trial {
 	 * is kept with the draft as it stands then
 	 */
 	arranges?: boolean;
+	/** it answers other rules than the draft has by now: it can be looked at, and not kept */
+	lookOnly?: boolean;
 }
 
 /** How a trial becomes a step of the draft. */
@@ -36,7 +38,7 @@ export class OnTrial {
 	/** Takes it over into the draft. */
 	keep() {
 		const trial = this.now;
-		if (!trial) return;
+		if (!trial || trial.lookOnly) return;
 		this.now = null;
 		this.take(trial);
 	}

@@ -1,4 +1,4 @@
-import type { GoalKind } from '../colouring/goal-wish.ts';
+import type { GoalKind, GoalWish } from '../colouring/goal-wish.ts';
 import { canonicalJson } from './canonical-json.ts';
 import { wholeDraft, type Draft, type EdgeTie, type GroupRule, type HandBorder } from './draft.ts';
 
@@ -25,7 +25,7 @@ export function rulesCompared(stored: Draft): Record<string, unknown> {
 			(ink) => `ink ${ink} reserved`,
 			() => true,
 		),
-		goals: draft.goals.map(({ kind, give }) => goalWords[kind] + givesWords(give)),
+		goals: draft.goals.map(aimInWords),
 		...members(draft.ties, (tie) => `tie to sheet ${tie.sheet}`, tieWords),
 		...listed('struck', draft.struck.map(unsigned)),
 		...listed('added', draft.added.map(unsigned)),
@@ -62,6 +62,14 @@ const goalWords: Record<GoalKind, string> = {
 	distinct: 'distinct neighbours',
 	'same-ink-apart': 'same ink far apart',
 };
+
+const aimInWords = ({ kind, give, readers, against }: GoalWish): string =>
+	goalWords[kind] +
+	(readers ? ` for ${readers.join(', ')} readers` : '') +
+	(against
+		? ` against ${'edition' in against ? 'edition' : 'revision'} ${Object.values(against)[0]}`
+		: '') +
+	givesWords(give);
 
 const givesWords = (give: number) =>
 	give === 0 ? '' : `, of which later goals may take ${Number((100 * give).toFixed(1))} %`;

@@ -51,12 +51,16 @@ export async function searchLonger({ input, port }: Task<SearchInput>): Promise<
 function telling(
 	problem: ColouringProblem,
 	tell: (step: string, share: number) => void,
-): Pick<ColouringProblem, 'bounds' | 'cancelled'> {
+): Pick<ColouringProblem, 'bounds' | 'cancelled' | 'releaseFound'> {
 	const most = mostConflicts(problem);
 	let words = 'Looking at the whole sheet.';
 	return {
 		bounds(atLeast, enough) {
 			words = boundsInWords(atLeast, enough);
+			tell(words, 0);
+		},
+		releaseFound({ cost, lowerBound }) {
+			words = releaseInWords(cost, lowerBound);
 			tell(words, 0);
 		},
 		cancelled(conflicts) {
@@ -73,6 +77,11 @@ export function boundsInWords(atLeast: number, enough: number | null): string {
 		return `${least}; ${enough} do. Whether ${enough - 1} do is being looked at.`;
 	return `${enough} inks do and no fewer. A proof to show is being looked for.`;
 }
+
+const figure = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 2 });
+
+const releaseInWords = (cost: number, atLeast: number): string =>
+	`Releasing locks that cost ${figure.format(cost)} in all is enough; any release costs at least ${figure.format(atLeast)}.`;
 
 /** With as many inks as before the sheet stays as it is: only what is known of it changes. */
 function kept(
