@@ -76,13 +76,26 @@ describe('an analyst', () => {
 			.poll(() => page.locator('#because').innerText())
 			.toMatch(/Oregon.*Idaho|Idaho.*Oregon/s);
 		await page.locator('#because').getByRole('button', { name: 'Show where' }).click();
+		await page.getByText(/^Solid outline: the locks in the way/).waitFor();
+		const ways = page.getByRole('table', { name: 'Ways out' });
+		await expect.poll(() => ways.getByRole('button').count(), { timeout: 30_000 }).toBe(2);
 		await picture(page, 'collision');
 		await expectAccessible(page);
 		await saved(page);
-		await page
-			.locator('#because')
-			.getByRole('button', { name: /^Release/ })
-			.click();
+		const before = await fills(page);
+		const undo = page.getByRole('button', { name: /^Undo: lock Idaho/ });
+		await ways.getByRole('button').last().click();
+		const bar = page.getByRole('group', { name: /^Trying: release/ });
+		await expect.poll(() => bar.evaluate((it) => it === document.activeElement)).toBe(true);
+		expect(await docket(page, 'Colours').innerText()).toContain('2 locks collide');
+		await picture(page, 'way-on-trial');
+		await expectAccessible(page);
+		await page.keyboard.press('Escape');
+		await bar.waitFor({ state: 'detached' });
+		await expect.poll(() => fills(page)).toEqual(before);
+		expect(await undo.count()).toBe(1);
+		await ways.getByRole('button').first().click();
+		await bar.getByRole('button', { name: 'Keep' }).click();
 		await expect
 			.poll(() => page.locator('#because').innerText(), { timeout: 30_000 })
 			.toMatch(/inks? (are|is) needed/);

@@ -1,6 +1,9 @@
 import { inkByBall } from '../../src/lib/engines/colouring/ball.ts';
 import { newBoard, type Board } from '../../src/lib/engines/colouring/board.ts';
+import { checkColouring } from '../../src/lib/engines/colouring/check-colouring.ts';
+import { colour } from '../../src/lib/engines/colouring/colour.ts';
 import { kempe, type KempeStats } from '../../src/lib/engines/colouring/kempe.ts';
+import type { ColouringProblem } from '../../src/lib/engines/colouring/problem.ts';
 import { Random } from '../../src/lib/engines/colouring/random.ts';
 import { buildGraph, smallestLastOrder } from '../../src/lib/engines/graph/index.ts';
 import { fixtureGraph } from './named-graphs.ts';
@@ -44,4 +47,35 @@ export function properness({ graph, ink }: Board): string | null {
 		}
 	}
 	return null;
+}
+
+/**
+ * The map with rules that can all be kept: a third of the regions locked as in a colouring found in a random
+ * order, on another third an ink forbidden that they do not have in it, a few pairs kept alike or apart.
+ */
+export function ruledProblem(map: AnyMap, seed: number): ColouringProblem {
+	const { board } = colourInOrder(map, seed, { chains: true, walk: 1_000 });
+	const inks = new Int32Array(map.regions);
+	const graph = buildGraph(map.regions, map.borders.a, map.borders.b);
+	for (let v = 0; v < graph.count; v++) inks[v] = board.ink[v];
+	const random = new Random(seed);
+	const locks = new Int32Array(map.regions).fill(-1);
+	const forbidden: [number, number][] = [];
+	const [alike, apart]: [number, number][][] = [[], []];
+	for (let r = 0; r < map.regions; r++) {
+		const part = random.below(3);
+		if (part === 0) locks[r] = inks[r];
+		if (part === 1) forbidden.push([r, (inks[r] + 1 + random.below(3)) % 4]);
+		const other = random.below(map.regions);
+		if (part < 2 || other === r || random.below(3) > 0) continue;
+		(inks[r] === inks[other] ? alike : apart).push([r, other]);
+	}
+	return { ...map, inks: 4, locks, forbidden, alike, apart, seed };
+}
+
+/** What is wrong with the engine's colouring of a problem that has one, or null. */
+export async function ruledFault(problem: ColouringProblem): Promise<string | null> {
+	const result = await colour(problem);
+	if (result.status !== 'coloured') return result.status;
+	return checkColouring(problem, result)[0] ?? null;
 }

@@ -98,7 +98,26 @@ export function scatteredMap(regions: number, seed: number, shuffle = true): Pla
 	};
 }
 
+/** The Delaunay triangulation of scattered points (C. Lawson's flips, 1977); numbered row by row. */
+export function delaunayMap(regions: number, seed: number): PlanarMap {
+	const width = Math.ceil(Math.sqrt(regions));
+	const height = Math.ceil(regions / width);
+	const { mesh, x, y } = scatteredMesh(width, height, new Random(seed));
+	for (let flipped = true; flipped;) {
+		flipped = false;
+		for (let e = 0; e < mesh.size; e++) if (flipIfCircled(mesh, x, y, e)) flipped = true;
+	}
+	return { regions: width * height, borders: mesh.edges() };
+}
+
 function lattice(width: number, height: number, random: Random): Triangulation {
+	const { mesh, x, y, halfEdges } = scatteredMesh(width, height, random);
+	for (let i = 0; i < 2 * halfEdges; i++) flipIfConvex(mesh, x, y, random.below(halfEdges));
+	return mesh;
+}
+
+/** Points about the crossings of a lattice, joined with their neighbours and across each cell. */
+function scatteredMesh(width: number, height: number, random: Random) {
 	const points = width * height;
 	const x = Float64Array.from({ length: points }, (_, i) => (i % width) + random.below(400) / 1000);
 	const y = Float64Array.from(
@@ -114,8 +133,7 @@ function lattice(width: number, height: number, random: Random): Triangulation {
 	for (let row = 0; row < height - 1; row++) {
 		for (let column = 0; column < width - 1; column++) layCell(mesh, width, row, column);
 	}
-	for (let i = 0; i < 2 * halfEdges; i++) flipIfConvex(mesh, x, y, random.below(halfEdges));
-	return mesh;
+	return { mesh, x, y, halfEdges };
 }
 
 /** Two triangles a cell: half-edges 0, 1, 2 of the lower (bottom, diagonal, left), 3, 4, 5 of the upper. */
@@ -134,4 +152,20 @@ function flipIfConvex(mesh: Triangulation, x: Float64Array, y: Float64Array, e: 
 	const turn = (a: number, b: number, c: number) =>
 		(x[b] - x[a]) * (y[c] - y[a]) - (y[b] - y[a]) * (x[c] - x[a]);
 	if (turn(p, s, r) > 1e-3 && turn(q, r, s) > 1e-3) mesh.flip(e);
+}
+
+/** Flips the diagonal of two triangles when the fourth corner lies within the circle of the other three. */
+function flipIfCircled(mesh: Triangulation, x: Float64Array, y: Float64Array, e: number): boolean {
+	if (mesh.twin[e] < 0) return false;
+	const [p, q, r, s] = mesh.around(e);
+	const [ax, ay, bx, by] = [x[p] - x[s], y[p] - y[s], x[q] - x[s], y[q] - y[s]];
+	const [cx, cy] = [x[r] - x[s], y[r] - y[s]];
+	const inside =
+		(ax * ax + ay * ay) * (bx * cy - cx * by) -
+		(bx * bx + by * by) * (ax * cy - cx * ay) +
+		(cx * cx + cy * cy) * (ax * by - bx * ay);
+	const turn = (x[q] - x[p]) * (y[r] - y[p]) - (y[q] - y[p]) * (x[r] - x[p]);
+	if (inside * Math.sign(turn) <= 1e-9) return false;
+	mesh.flip(e);
+	return true;
 }

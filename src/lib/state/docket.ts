@@ -145,12 +145,11 @@ function colours({ answer, draft, working }: DocketState): Said {
 	}
 	if (answer.status === 'undecided')
 		return { mark: 'warning', words: [{ text: 'Undecided', to: '#because' }, { text: '.' }, held] };
-	const proved = answer.lowerBound === answer.inksUsed;
 	return {
 		mark: 'clear',
 		words: [
 			{ text: `${counted(answer.inksUsed, 'ink')},` },
-			{ text: proved ? 'proved fewest' : `at least ${answer.lowerBound} needed`, to: '#because' },
+			{ text: boundWords(answer), to: '#because' },
 			{ text: '.' },
 			held,
 		],
@@ -220,4 +219,10 @@ function territories({ sheet, territories: known }: DocketState): DocketStage[] 
 	];
 	const mark = torn || outside ? 'error' : without ? 'warning' : 'clear';
 	return [{ ...stage, mark, words }];
+}
+
+function boundWords(answer: Extract<DeskColouring, { status: 'coloured' }>): string {
+	if (answer.proof.kind !== 'not-proved') return 'proved fewest';
+	const { lowerBound, inksUsed } = answer;
+	return lowerBound < inksUsed ? `at least ${lowerBound} needed` : 'no proof to show';
 }

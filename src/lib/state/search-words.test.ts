@@ -30,11 +30,11 @@ describe('what a colouring leaves open', () => {
 
 describe('how long', () => {
 	it('is estimated from the first try where that is known', () => {
-		expect(searchChoices(null).map(({ label }) => label)[0]).toBe(
-			'Longer: up to 20 times the steps of the first try',
-		);
-		expect(searchChoices(4_500).map(({ label }) => label.split(', ')[1])).toEqual([
-			...['at most about 2 minutes', 'at most about 15 minutes', 'at most about 3 hours'],
+		expect(searchChoices(null).map(({ label }) => label)).toEqual([
+			...['20 times as long', '200 times as long', '2,000 times as long'],
+		]);
+		expect(searchChoices(4_500).map(({ label }) => label.split(': ')[1])).toEqual([
+			...['up to 2 minutes', 'up to 15 minutes', 'up to 3 hours'],
 		]);
 	});
 

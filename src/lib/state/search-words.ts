@@ -28,17 +28,12 @@ function inksOpen(used: number, atLeast: number): string {
 	return `${known} ${open} is not known.`;
 }
 
-const names: Record<(typeof searchTimes)[number], string> = {
-	...{ 1: 'Longer', 10: 'Much longer', 100: 'Very long' },
-};
-
 /** The choices of how long, with an estimate from what the first try took, where that is known. */
 export const searchChoices = (took: number | null): { value: string; label: string }[] =>
 	searchTimes.map((times) => {
 		const factor = times * stepsOfThorough;
-		const most = took === null ? '' : `, at most about ${duration(took * factor)}`;
-		const steps = `up to ${count(factor)} times the steps of the first try`;
-		return { value: String(times), label: `${names[times]}: ${steps}${most}` };
+		const most = took === null ? '' : `: up to ${duration(took * factor)}`;
+		return { value: String(times), label: `${count(factor)} times as long${most}` };
 	});
 
 /** Milliseconds in words, rounded as an estimate is. */

@@ -83,7 +83,7 @@ function inkClosest(board: Board, wishes: Wishes, v: number, limits: Limits): bo
 function reSolve(board: Board, wishes: Wishes, ball: number[], limits: Limits): boolean {
 	const vertices = new Set(ball);
 	const { conflicts, cancelled } = limits;
-	const cluster: Cluster = { vertices, inks: null, cost: 0, open: true, conflicts };
+	const cluster: Cluster = { vertices, inks: null, cost: 0, open: true, conflicts, search: null };
 	solveCluster(board, wishes, cluster, board.ink, cancelled);
 	const { inks } = cluster;
 	if (!inks) return false;

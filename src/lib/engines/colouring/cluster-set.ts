@@ -21,12 +21,13 @@ export class ClusterSet {
 		this.join([v, ...targets.subarray(offsets[v], offsets[v + 1])]);
 	}
 
-	/** Puts the vertices, with all of the clusters they are in, into one cluster that is to be solved. */
+	/** Puts the vertices, with all of the clusters they are in, into the largest of these, to be solved. */
 	join(vertices: number[]): Cluster {
 		const met = new Set(vertices.map((v) => this.of.get(v)).filter((cluster) => !!cluster));
 		const [largest, ...others] = [...met].sort((a, b) => b.vertices.size - a.vertices.size);
 		const { conflicts } = this;
-		const into = largest ?? { vertices: new Set(), inks: null, cost: 0, open: true, conflicts };
+		const none = { inks: null, cost: 0, open: true, conflicts, search: null };
+		const into: Cluster = largest ?? { vertices: new Set(), ...none };
 		this.all.add(into);
 		for (const other of others) {
 			into.cost += other.cost;

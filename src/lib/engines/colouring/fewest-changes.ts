@@ -12,8 +12,6 @@ export interface ChangeSettings {
 }
 
 const firstConflicts = 500;
-/** Past so many changes in one cluster its whole ring is taken in at once, as measured to pay. */
-const manyChanges = 12;
 
 /**
  * Turns a proper board into one as close to the old inks as can be; returns a number of changes (by
@@ -86,17 +84,14 @@ function widen({ graph }: Board, old: Int32Array, clusters: ClusterSet): boolean
 	for (const cluster of [...clusters.all]) {
 		if (!cluster.inks || !clusters.all.has(cluster)) continue;
 		const ring: number[] = [];
-		let clash = false;
 		for (const [v, ink] of cluster.inks) {
 			for (let e = offsets[v]; e < offsets[v + 1]; e++) {
 				const w = targets[e];
 				if (cluster.vertices.has(w) || clusters.clusterOf(w)?.open) continue;
-				const clashes = inks[w] === ink;
-				clash ||= clashes;
-				if (clashes || cluster.cost > manyChanges) ring.push(w);
+				if (inks[w] === ink) ring.push(w);
 			}
 		}
-		if (!clash) continue;
+		if (ring.length === 0) continue;
 		clusters.join([...ring, cluster.vertices.values().next().value as number]);
 		widened = true;
 	}

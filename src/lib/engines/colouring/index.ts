@@ -32,7 +32,12 @@ export {
 	type ProofFile,
 	type RegionNames,
 } from './proofs/index.ts';
-export { checkProofFile, checkProofText, type ProofChecked } from './proofs/check/index.ts';
+export {
+	checkProofFile,
+	checkProofText,
+	notJson,
+	type ProofChecked,
+} from './proofs/check/index.ts';
 export { goalFigures, type GoalFigure } from './goal-figures.ts';
 export { goalKinds, type GoalKind, type GoalWish } from './goal-wish.ts';
 export { Improver, type AimFigure, type ImproveSettings } from './improve.ts';

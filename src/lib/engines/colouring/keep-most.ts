@@ -1,4 +1,4 @@
-import { Sat } from '../solver/sat.ts';
+import type { Sat } from '../solver/sat.ts';
 import { totalizer } from './totalizer.ts';
 
 export type Kept = { status: 'optimal'; cost: number } | { status: 'open'; lowerBound: number };
@@ -7,65 +7,72 @@ export type Kept = { status: 'optimal'; cost: number } | { status: 'open'; lower
 const trimConflicts = 200;
 
 /**
- * Breaks as little weight of the wishes as the clauses in `sat` allow; the assignment is then in `sat`.
- * 'open' when the conflicts ran out: breaking less than `lowerBound` is impossible all the same.
+ * Breaks as little weight of the wishes as the clauses in `sat` allow. Goes on where it stopped: wishes
+ * and clauses may be added between two searches, as neither makes what was found to be broken less.
  *
  * Source: core-guided search with soft cardinality constraints: B. Andres et al., Unsatisfiability-based
  * optimization in clasp, ICLP 2012; A. Morgado, C. Dodaro, J. Marques-Silva, CP 2014.
  */
-export function keepMost(
-	sat: Sat,
-	wishes: ReadonlyMap<number, number>,
-	budget: { conflicts: number; cancelled?: () => boolean },
-): Kept {
-	const weights = new Map(wishes);
-	const next = new Map<number, number>();
-	const last = sat.conflicts + budget.conflicts;
-	let lowerBound = 0;
-	for (;;) {
-		const conflicts = last - sat.conflicts;
-		if (conflicts <= 0) return { status: 'open', lowerBound };
-		const answer = sat.solve([...weights.keys()], { conflicts, cancelled: budget.cancelled });
-		if (answer === 'sat') return { status: 'optimal', cost: lowerBound };
-		const core = answer === 'unsat' ? trimmed(sat, sat.core()) : [];
-		if (core.length === 0) return { status: 'open', lowerBound };
-		lowerBound += relax(sat, core, weights, next);
-	}
-}
+export class KeepMost {
+	/** what is still to be kept; literals of totalizers among them */
+	private readonly weights = new Map<number, number>();
+	private readonly next = new Map<number, number>();
+	private lowerBound = 0;
 
-/** Leaves out what the core can spare. */
-function trimmed(sat: Sat, core: number[]): number[] {
-	for (let i = 0; i < core.length && core.length > 1;) {
-		const rest = core.filter((_, j) => j !== i);
-		if (sat.solve(rest, { conflicts: trimConflicts }) !== 'unsat') i++;
-		else core = sat.core();
-	}
-	return core;
-}
+	constructor(private readonly sat: Sat) {}
 
-/** Takes the least weight off a core and allows one of its wishes to be broken; that weight. */
-function relax(
-	sat: Sat,
-	core: number[],
-	weights: Map<number, number>,
-	next: Map<number, number>,
-): number {
-	const least = Math.min(...core.map((literal) => weights.get(literal) as number));
-	const add = (literal: number) => weights.set(literal, (weights.get(literal) ?? 0) + least);
-	for (const literal of core) {
-		const left = (weights.get(literal) as number) - least;
-		if (left > 0) weights.set(literal, left);
-		else weights.delete(literal);
-		const after = next.get(literal);
-		if (after !== undefined) add(after);
+	wish(literal: number, weight: number): void {
+		this.weights.set(literal, (this.weights.get(literal) ?? 0) + weight);
 	}
-	if (core.length > 1) {
-		const broken = totalizer(
-			sat,
-			core.map((literal) => -literal),
-		);
-		for (let i = 1; i + 1 < broken.length; i++) next.set(-broken[i], -broken[i + 1]);
-		add(-broken[1]);
+
+	/**
+	 * 'optimal': the assignment is in `sat`. 'open' when the conflicts ran out: breaking less than
+	 * `lowerBound` is impossible all the same.
+	 */
+	search(budget: { conflicts: number; cancelled?: () => boolean }): Kept {
+		const { sat } = this;
+		const last = sat.conflicts + budget.conflicts;
+		for (;;) {
+			const conflicts = last - sat.conflicts;
+			if (conflicts <= 0) return { status: 'open', lowerBound: this.lowerBound };
+			const limits = { conflicts, cancelled: budget.cancelled };
+			const answer = sat.solve([...this.weights.keys()], limits);
+			if (answer === 'sat') return { status: 'optimal', cost: this.lowerBound };
+			const core = answer === 'unsat' ? this.trimmed(sat.core()) : [];
+			if (core.length === 0) return { status: 'open', lowerBound: this.lowerBound };
+			this.lowerBound += this.relax(core);
+		}
 	}
-	return least;
+
+	/** Leaves out what the core can spare. */
+	private trimmed(core: number[]): number[] {
+		for (let i = 0; i < core.length && core.length > 1;) {
+			const rest = core.filter((_, j) => j !== i);
+			if (this.sat.solve(rest, { conflicts: trimConflicts }) !== 'unsat') i++;
+			else core = this.sat.core();
+		}
+		return core;
+	}
+
+	/** Takes the least weight off a core and allows one of its wishes to be broken; that weight. */
+	private relax(core: number[]): number {
+		const { weights, next } = this;
+		const least = Math.min(...core.map((literal) => weights.get(literal) as number));
+		for (const literal of core) {
+			const left = (weights.get(literal) as number) - least;
+			if (left > 0) weights.set(literal, left);
+			else weights.delete(literal);
+			const after = next.get(literal);
+			if (after !== undefined) this.wish(after, least);
+		}
+		if (core.length > 1) {
+			const broken = totalizer(
+				this.sat,
+				core.map((literal) => -literal),
+			);
+			for (let i = 1; i + 1 < broken.length; i++) next.set(-broken[i], -broken[i + 1]);
+			this.wish(-broken[1], least);
+		}
+		return least;
+	}
 }

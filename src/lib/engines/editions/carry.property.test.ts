@@ -48,7 +48,10 @@ const draft: fc.Arbitrary<Draft> = fc
 		locked: numbers,
 		banned: numbers,
 		reserved: fc.uniqueArray(fc.nat(5), { maxLength: 2 }),
-		ties: fc.constantFrom<Draft['ties']>([], [{ sheet: 4, name: 'Next', edition: null, revision: 2 }]),
+		ties: fc.constantFrom<Draft['ties']>(
+			[],
+			[{ sheet: 4, name: 'Next', edition: null, revision: 2 }],
+		),
 		goals: fc.constantFrom<Draft['goals']>([], [{ kind: 'even-area', give: 0.25 }]),
 		alike: pairs(2),
 		apart: pairs(5),

@@ -64,6 +64,17 @@ export function rulesAbout(draft: Draft, key: string): RuleEntry[] {
 	});
 }
 
+/** How many rules of each kind a draft has; one that stands there twice counts twice. */
+export const ruleCounts = (draft: RuleParts): Record<RuleKind, number> => ({
+	lock: Object.keys(draft.locks).length,
+	'forbidden ink': draft.forbidden.length,
+	'keep alike': draft.alike.length,
+	'keep apart': draft.apart.length,
+	'all alike': draft.groups.filter(({ kind }) => kind === 'alike').length,
+	'all different': draft.groups.filter(({ kind }) => kind === 'different').length,
+	'reserved ink': draft.reserved.length,
+});
+
 function entriesOf(draft: RuleParts): RuleEntry[] {
 	const entries = [
 		...Object.entries(draft.locks).map(lockEntry),

@@ -10,7 +10,7 @@ export interface ReplayLimits {
 	variables?: number;
 	/** literals looked at before giving up; without end when absent */
 	steps?: number;
-	/** literals in the lines of the proof before giving up, which keeps memory in bounds */
+	/** literals in the lines of the proof, each line counting as eight more, before giving up: for memory */
 	literals?: number;
 }
 
@@ -63,7 +63,7 @@ function replayLines(
 		const line = parse(text, known);
 		if (line === null) return { valid: false, reason: `line ${number} is not a clause` };
 		if (line === 'nothing') continue;
-		held += line.literals.length + 1;
+		held += line.literals.length + LINE;
 		if (held > most) return tooLong;
 		if (line.taken) replay.remove(line.literals);
 		else if (replay.follows(line.literals)) replay.add(line.literals);
@@ -77,6 +77,8 @@ function replayLines(
 }
 
 const HIGHEST = 2 ** 28;
+/** what keeping a line takes beside its literals, in literals */
+const LINE = 8;
 
 const isLiteral = (value: number) =>
 	Number.isInteger(value) && value !== 0 && Math.abs(value) <= HIGHEST;

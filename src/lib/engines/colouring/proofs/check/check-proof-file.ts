@@ -1,5 +1,6 @@
 import { checkClaim } from './check-claim.ts';
 import { limits } from './limits.ts';
+import { nestsDeeper } from './nesting.ts';
 import { readFile } from './read-file.ts';
 import { mapSentence } from './sentences.ts';
 
@@ -41,6 +42,9 @@ export function checkProofFile(input: unknown, steps = limits.steps): ProofCheck
 	};
 }
 
+/** The fault of a text that cannot be read at all. */
+export const notJson = 'The file is not JSON.';
+
 /** The same for the text of a file. */
 export function checkProofText(text: string, steps = limits.steps): ProofChecked {
 	if (text.length > limits.text) {
@@ -50,8 +54,9 @@ export function checkProofText(text: string, steps = limits.steps): ProofChecked
 			gaveUp: true,
 		};
 	}
+	if (nestsDeeper(text, limits.depth)) return refused('The file nests deeper than a proof file.');
 	const parsed = parsedJson(text);
-	return parsed ? checkProofFile(parsed.value, steps) : refused('The file is not JSON.');
+	return parsed ? checkProofFile(parsed.value, steps) : refused(notJson);
 }
 
 function parsedJson(text: string): { value: unknown } | null {

@@ -1,2 +1,2 @@
 /** The checker of proof files: it stands alone, so that a page can carry it and nothing else. */
-export { checkProofFile, checkProofText, type ProofChecked } from './check-proof-file.ts';
+export { checkProofFile, checkProofText, notJson, type ProofChecked } from './check-proof-file.ts';

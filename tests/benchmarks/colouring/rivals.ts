@@ -1,4 +1,4 @@
-import { smallestLastOrder, type RegionGraph } from '../../src/lib/engines/graph/index.ts';
+import { smallestLastOrder, type RegionGraph } from '../../../src/lib/engines/graph/index.ts';
 
 /** The two usual heuristics, written plainly, to stand beside the engine in the same run. */
 
