@@ -63,7 +63,7 @@ class ImproverHere {
 }
 
 function open(goals: GoalWish[] = [{ kind: 'even-count', give: 0 }]) {
-	const desk = new Desk({
+	const desk: Desk = new Desk({
 		...{ sheet: row(goals), address: '', userName: null, keeper: null, sentence: () => '' },
 		save: async (revision, document, sent) => ({
 			kind: 'saved',
