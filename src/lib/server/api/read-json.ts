@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import { nestsDeeper } from '../../engines/colouring/proofs/check/nesting.ts';
 import { bodyBytes } from './body-bytes.ts';
 import { ApiFault } from './fault.ts';
 
@@ -13,9 +14,14 @@ export function parseJson<S extends z.ZodType>(bytes: Uint8Array, schema: S): z.
 	return read.data;
 }
 
+/** No body asked for here is half as deep; parsing megabytes of open brackets takes minutes. */
+const deepest = 64;
+
 function jsonValue(bytes: Uint8Array): unknown {
 	try {
-		return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
+		const text = new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+		if (nestsDeeper(text, deepest)) throw new RangeError('it nests too deep');
+		return JSON.parse(text);
 	} catch (cause) {
 		throw Object.assign(new ApiFault(400, 'malformed', 'the body is not JSON'), { cause });
 	}
