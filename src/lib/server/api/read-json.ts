@@ -17,11 +17,24 @@ export function parseJson<S extends z.ZodType>(bytes: Uint8Array, schema: S): z.
 /** No body asked for here is half as deep; parsing megabytes of open brackets takes minutes. */
 const deepest = 64;
 
+function jsonIn(text: string): unknown {
+	if (nestsDeeper(text, deepest)) throw new RangeError('it nests too deep');
+	return JSON.parse(text);
+}
+
+/** What a page's script sent as JSON; undefined when it is none. */
+export async function jsonOf(request: Request): Promise<unknown> {
+	const text = await request.text();
+	try {
+		return jsonIn(text);
+	} catch {
+		return undefined;
+	}
+}
+
 function jsonValue(bytes: Uint8Array): unknown {
 	try {
-		const text = new TextDecoder('utf-8', { fatal: true }).decode(bytes);
-		if (nestsDeeper(text, deepest)) throw new RangeError('it nests too deep');
-		return JSON.parse(text);
+		return jsonIn(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
 	} catch (cause) {
 		throw Object.assign(new ApiFault(400, 'malformed', 'the body is not JSON'), { cause });
 	}
