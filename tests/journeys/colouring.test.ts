@@ -148,6 +148,27 @@ describe('an analyst colours a sheet with rules of the house', () => {
 		expect(await told.innerText()).toMatch(new RegExp(`^${rows === 1 ? 'One|1' : rows}`));
 	});
 
+	it('is given by the server what the browser answered for the same seed', async () => {
+		let pass = () => {};
+		const held = new Promise<void>((resolve) => (pass = resolve));
+		await page.route('**/draft', async (route) => {
+			await held;
+			await route.continue();
+		});
+		const before = await fills(page);
+		await page.getByRole('button', { name: 'Another arrangement' }).click();
+		await expect.poll(() => fills(page)).not.toEqual(before);
+		await expect.poll(() => because().innerText()).toMatch(/inks? (are|is) needed/);
+		const inBrowser = await fills(page);
+		const sent = page.waitForRequest('**/draft');
+		pass();
+		expect((await sent).postDataJSON()).not.toHaveProperty('inks');
+		await saved(page);
+		await page.reload();
+		await drawn(page);
+		expect(await fills(page)).toEqual(inBrowser);
+	});
+
 	it('reads rules on a phone', async () => {
 		const small = await openPage(browser, { viewport: phone });
 		await signInAs(small.page, 'analyst');
