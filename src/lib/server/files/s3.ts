@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import { createReadStream, createWriteStream } from 'node:fs';
 import type { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
+import { setTimeout } from 'node:timers/promises';
 import {
 	CopyObjectCommand,
 	DeleteObjectCommand,
@@ -73,16 +74,27 @@ async function receive(bucket: Bucket, spool: Spool, source: Readable): Promise<
 	return { digest, bytes, path, keep, discard };
 }
 
-/** The service copies by itself; the name by digest appears once the copy is whole. */
+/** How often a copy is looked at before it is given up, each time after a longer wait. */
+const looks = 6;
+
+/**
+ * The service copies by itself; the name by digest appears once the copy is whole. Some services show it
+ * short for a moment while another sender keeps the same bytes, so that one look is not enough.
+ */
 async function settle(bucket: Bucket, from: string, to: string, bytes: number): Promise<void> {
 	const { client, name: Bucket } = bucket;
-	const copied = await asFilesAway(async () => {
-		await client.send(new CopyObjectCommand({ Bucket, Key: to, CopySource: `${Bucket}/${from}` }));
-		return client.send(new HeadObjectCommand({ Bucket, Key: to }));
-	});
-	if (copied.ContentLength === bytes) return;
+	await asFilesAway(() =>
+		client.send(new CopyObjectCommand({ Bucket, Key: to, CopySource: `${Bucket}/${from}` })),
+	);
+	let found: number | undefined;
+	for (let look = 0; look < looks; look++) {
+		if (look > 0) await setTimeout(10 * 2 ** look);
+		const copied = await asFilesAway(() => client.send(new HeadObjectCommand({ Bucket, Key: to })));
+		found = copied.ContentLength;
+		if (found === bytes) return;
+	}
 	await remove(bucket, to);
-	throw new FilesAway(`${copied.ContentLength} of ${bytes} bytes were kept`);
+	throw new FilesAway(`${found} of ${bytes} bytes were kept`);
 }
 
 async function open(
