@@ -78,6 +78,11 @@ export class WaysOut {
 		trial.show({ label: way.label, document, answer: outcome.answer, inks: outcome.inks });
 	}
 
+	/** Drops a rule although others still collide: one step towards a colouring, which can be undone. */
+	takeAnyway({ way }: WayRow) {
+		this.#start.desk.draft.change(way.label, way.change);
+	}
+
 	/** Whether a row is what the sheet shows for a while. */
 	tries({ outcome }: WayRow): boolean {
 		return outcome.state === 'works' && this.#start.desk.trial.now?.inks === outcome.inks;

@@ -162,6 +162,32 @@ describe('ways out of a collision', () => {
 			expect(outcome).toMatchObject({ words: 'Not enough: the locks of D and E still collide.' });
 	});
 
+	it('drop one rule after the other where each alone is not enough', async () => {
+		const { desk } = await collide();
+		desk.draft.undo();
+		const alike: [string, string][] = [
+			['a', 'b'],
+			['c', 'd'],
+		];
+		desk.draft.change('two rules', (draft) => ({ ...draft, alike }));
+		await settled();
+		if (desk.answer?.status !== 'impossible') throw new Error('no collision');
+		const ways = open(desk, desk.answer.explanation);
+		await ways.work();
+		const [first] = ways.rows;
+		expect(first.outcome).toMatchObject({ state: 'fails' });
+		ways.takeAnyway(first);
+		expect(desk.draft.document.alike).toHaveLength(1);
+		await settled();
+		if (desk.answer?.status !== 'impossible') throw new Error('no collision');
+		const rest = open(desk, desk.answer.explanation);
+		await rest.work();
+		rest.try(rest.rows[0]);
+		desk.trial.keep();
+		expect(desk.draft.document.alike).toEqual([]);
+		expect(desk.answer?.status).toBe('coloured');
+	});
+
 	it('end when they are not wanted any more', async () => {
 		const { ways } = await collide();
 		let go = () => {};
