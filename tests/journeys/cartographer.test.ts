@@ -184,8 +184,7 @@ describe('a cartographer', () => {
 		await page.keyboard.press('Enter');
 		await page
 			.getByRole('complementary')
-			.getByText(/neighbours?$/)
-			.first()
+			.getByRole('heading', { name: /neighbours?$/ })
 			.waitFor();
 		await page.keyboard.press('Escape');
 		await expect

@@ -44,6 +44,7 @@ export class Flatness {
 	#makeWorker: (() => Worker) | null = null;
 	#worker: Worker | null = null;
 	#id = 0;
+	#judged: CountedGround | null = null;
 
 	constructor(planar: boolean) {
 		this.planar = planar;
@@ -55,7 +56,10 @@ export class Flatness {
 		return () => this.#stop();
 	}
 
+	/** The same borders are not judged twice: saving signs what was decided by hand and changes no pair. */
 	judge(ground: CountedGround) {
+		if (this.#judged && this.failure === '' && sameGround(this.#judged, ground)) return;
+		this.#judged = this.#makeWorker && ground;
 		const known = knownPlanar(ground);
 		this.failure = '';
 		this.#stop();
@@ -90,3 +94,10 @@ export class Flatness {
 		this.looking = false;
 	}
 }
+
+const sameGround = (one: CountedGround, other: CountedGround): boolean =>
+	one.set.id === other.set.id &&
+	(['a', 'b', 'kind'] as const).every((column) => {
+		const [left, right] = [one.counted[column], other.counted[column]];
+		return left.length === right.length && left.every((value, i) => value === right[i]);
+	});

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { bordersForSheet, crossedBorders, type BorderList } from '../engines/borders/index.ts';
-import { knownPlanar } from './flatness.svelte';
+import { Flatness, knownPlanar } from './flatness.svelte';
 import { crossedSentence, loneLinks } from './planarity-words';
 
 const keys = ['a', 'b', 'c', 'd', 'e'];
@@ -43,5 +43,27 @@ describe('whether the borders that count are planar', () => {
 		expect(
 			crossedBorders(5, bordersForSheet(keys, borders, { ...rules, added, struck })),
 		).toBeNull();
+	});
+
+	it('is not judged twice for the same pairs, whoever signed them', () => {
+		const flatness = new Flatness(true);
+		let made = 0;
+		flatness.work(() => ({ postMessage: () => made++, terminate() {} }) as unknown as Worker);
+		const judge = (added: { a: string; b: string }[]) =>
+			flatness.judge({
+				set,
+				borders,
+				counted: bordersForSheet(keys, borders, { ...rules, added }),
+			});
+		judge([{ a: 'd', b: 'e' }]);
+		judge([{ a: 'd', b: 'e' }]);
+		expect(made).toBe(1);
+		judge([
+			{ a: 'd', b: 'e' },
+			{ a: 'a', b: 'e' },
+		]);
+		judge([]);
+		judge([{ a: 'd', b: 'e' }]);
+		expect(made).toBeGreaterThan(1);
 	});
 });
