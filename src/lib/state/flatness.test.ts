@@ -58,12 +58,9 @@ describe('whether the borders that count are planar', () => {
 		judge([{ a: 'd', b: 'e' }]);
 		judge([{ a: 'd', b: 'e' }]);
 		expect(made).toBe(1);
-		judge([
-			{ a: 'd', b: 'e' },
-			{ a: 'a', b: 'e' },
-		]);
 		judge([]);
+		expect(made).toBe(1);
 		judge([{ a: 'd', b: 'e' }]);
-		expect(made).toBeGreaterThan(1);
+		expect(made).toBe(2);
 	});
 });
