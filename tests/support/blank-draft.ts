@@ -1,4 +1,5 @@
 import type { Draft } from '../../src/lib/engines/editions/draft.ts';
+import { wholeLayout } from '../../src/lib/engines/sheet/layout.ts';
 
 /** A draft for tests: two inks, nothing decided. */
 export const blankDraft = (changes: Partial<Draft> = {}): Draft => ({
@@ -25,7 +26,7 @@ export const blankDraft = (changes: Partial<Draft> = {}): Draft => ({
 	struck: [],
 	added: [],
 	seed: 0,
-	layout: {
+	layout: wholeLayout({
 		title: 'A title',
 		subtitle: '',
 		paper: 'A4',
@@ -37,6 +38,7 @@ export const blankDraft = (changes: Partial<Draft> = {}): Draft => ({
 		legend: true,
 		scaleBar: true,
 		credits: '',
-	},
+	}),
+	theme: null,
 	...changes,
 });

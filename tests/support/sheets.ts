@@ -1,12 +1,13 @@
 /** Sheets for tests: real boundaries, a colouring by the plainest rule, an everyday layout. */
 import type { Coverage } from '../../src/lib/engines/boundaries/coverage.ts';
 import type { SheetInput, SheetLayout } from '../../src/lib/engines/sheet/index.ts';
+import { wholeLayout } from '../../src/lib/engines/sheet/layout.ts';
 import { topologyOf } from './atlas.ts';
 import { bordersOf, coverageFrom, greedyColouring } from './coverage.ts';
 
 const outside = new Set(['02', '15', '60', '66', '69', '72', '78']);
 
-export const layout: SheetLayout = {
+export const layout: SheetLayout = wholeLayout({
 	title: 'Corran Pumps: sales districts 2027',
 	subtitle: 'As of 1 July 2026',
 	paper: 'A4',
@@ -18,7 +19,7 @@ export const layout: SheetLayout = {
 	legend: true,
 	scaleBar: true,
 	credits: 'Boundaries: U.S. Census Bureau, public domain.',
-};
+});
 
 export const inks = [
 	{ name: 'Ochre', hex: '#edb552' },

@@ -9,6 +9,12 @@ import {
 } from '../engines/editions/draft.ts';
 import { ruleLimits } from '../engines/editions/rule-limits.ts';
 import { papers } from '../engines/sheet/layout.ts';
+import { collarLook } from './layout/collar.ts';
+import { frameLayout } from './layout/frame.ts';
+import { hexColour } from './layout/hex.ts';
+import { lettering } from './layout/lettering.ts';
+import { lineLook } from './layout/lines.ts';
+import { theme } from './theme.ts';
 
 /** The shape and limits of a draft as it arrives from outside; `Draft` says what each part means. */
 
@@ -26,9 +32,19 @@ const sheetNumber = z
 	.max(2 ** 31 - 1);
 const reason = z.string().max(1_000);
 
+const hatch = z.strictObject({
+	kind: z.enum(['lines', 'crossed']),
+	angle: z.number().min(0).max(179),
+	spacingMm: z.number().min(0.4).max(50),
+	widthMm: z.number().min(0.05).max(10),
+	hex: hexColour,
+});
+
 export const ink = z.strictObject({
 	name: z.string().max(80),
 	hex: z.string().regex(/^#[0-9a-f]{6}$/, 'an ink is written #rrggbb in lower case'),
+	hatch: hatch.optional(),
+	fixed: z.literal(true).optional(),
 });
 
 const lock = z.strictObject({
@@ -100,6 +116,10 @@ export const sheetLayout = z.strictObject({
 	legend: z.boolean(),
 	scaleBar: z.boolean(),
 	credits: z.string().max(1_000),
+	frame: frameLayout,
+	lettering,
+	lines: lineLook,
+	collar: collarLook,
 });
 
 const handBorder = z.strictObject({
@@ -138,6 +158,7 @@ export const draftDocument = z.strictObject({
 	added: z.array(handBorder).max(mostRules),
 	seed: z.int().min(0).max(0xffffffff),
 	layout: sheetLayout,
+	theme,
 }) satisfies z.ZodType<Draft>;
 
 /** Body of `POST sheets/[sheet]/draft`: the draft, and the revision it was made from. */

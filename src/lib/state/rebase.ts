@@ -9,6 +9,7 @@ import { merger } from './merge';
  */
 export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft; both: string[] } {
 	const { both, pick, fields, members } = merger();
+	const [was, my, their] = [base.layout, mine.layout, theirs.layout];
 	return {
 		draft: {
 			inks: pick('number of inks', base.inks, mine.inks, theirs.inks),
@@ -37,7 +38,29 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 			struck: members(base.struck, mine.struck, theirs.struck),
 			added: members(base.added, mine.added, theirs.added),
 			seed: pick('seed', base.seed, mine.seed, theirs.seed),
-			layout: fields('layout', base.layout, mine.layout, theirs.layout),
+			layout: {
+				...fields('layout', was, my, their),
+				frame: fields('frame', was.frame, my.frame, their.frame),
+				lettering: {
+					...fields('lettering', was.lettering, my.lettering, their.lettering),
+					abbreviations: fields(
+						'abbreviation of',
+						was.lettering.abbreviations,
+						my.lettering.abbreviations,
+						their.lettering.abbreviations,
+					),
+					placed: fields(
+						'place of',
+						was.lettering.placed,
+						my.lettering.placed,
+						their.lettering.placed,
+					),
+					hidden: members(was.lettering.hidden, my.lettering.hidden, their.lettering.hidden),
+				},
+				lines: fields('lines', was.lines, my.lines, their.lines),
+				collar: fields('collar', was.collar, my.collar, their.collar),
+			},
+			theme: pick('theme', base.theme, mine.theme, theirs.theme),
 		},
 		both,
 	};

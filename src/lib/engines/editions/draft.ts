@@ -1,6 +1,7 @@
 import type { GoalWish } from '../colouring/goal-wish.ts';
+import type { Theme } from '../measures/theme.ts';
 import type { Ink } from '../palettes/palette.ts';
-import type { SheetLayout } from '../sheet/layout.ts';
+import { wholeLayout, type SheetLayout } from '../sheet/layout.ts';
 
 /**
  * Everything about a sheet that people decide, kept whole at every save so that any earlier state can
@@ -34,6 +35,8 @@ export interface Draft {
 	added: HandBorder[];
 	seed: number;
 	layout: SheetLayout;
+	/** the measure that the sheet shows in place of its colouring; null: the colouring */
+	theme: Theme | null;
 }
 
 export interface Lock {
@@ -108,10 +111,16 @@ const unasked = (): Pick<Draft, Unasked> => ({
 	reserved: [],
 	goals: [],
 	ties: [],
+	theme: null,
 });
-type Unasked = 'leastMetres' | 'waterKm' | 'groups' | 'reserved' | 'goals' | 'ties';
+type Unasked = 'leastMetres' | 'waterKm' | 'groups' | 'reserved' | 'goals' | 'ties' | 'theme';
 
 /** A stored document as a draft of today: what it does not say yet is as it was before it could be said. */
-export const wholeDraft = (
-	document: Omit<Draft, Unasked> & Partial<Pick<Draft, Unasked>>,
-): Draft => ({ ...unasked(), ...document });
+export const wholeDraft = ({ layout, ...document }: StoredDraft): Draft => ({
+	...unasked(),
+	...document,
+	layout: wholeLayout(layout),
+});
+
+type StoredDraft = Omit<Draft, Unasked | 'layout'> &
+	Partial<Pick<Draft, Unasked>> & { layout: Parameters<typeof wholeLayout>[0] };

@@ -31,6 +31,7 @@ const draft: Draft = {
 	added: [{ a: 'a', b: 'c', reason: 'ferry' }],
 	seed: 0,
 	layout,
+	theme: null,
 };
 
 const input = {

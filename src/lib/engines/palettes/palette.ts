@@ -6,6 +6,22 @@ export interface Ink {
 	name: string;
 	/** sRGB, `#rrggbb`, lower case */
 	hex: string;
+	/** drawn over the colour, so that the ink is told without hue */
+	hatch?: Hatch;
+	/** belongs to a brand: a mend leaves it as it is */
+	fixed?: true;
+}
+
+/** Lines drawn across every region of an ink, cut at its borders. */
+export interface Hatch {
+	kind: 'lines' | 'crossed';
+	/** degrees against the horizontal, anticlockwise, 0 to 179 */
+	angle: number;
+	/** from one line to the next, mm on the sheet */
+	spacingMm: number;
+	widthMm: number;
+	/** colour of the lines, `#rrggbb` */
+	hex: string;
 }
 
 export interface Palette {

@@ -35,8 +35,22 @@ export interface SheetInput {
 	locked?: Uint8Array;
 	/** what is issued and when, in words: `Edition 4, 1 December 2026` */
 	issue: string;
+	/** the classes of a measure, shown in place of the colouring and its inks */
+	theme?: SheetTheme | null;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
+}
+
+/** A themed map as the sheet needs it: figures are no part of it. */
+export interface SheetTheme {
+	/** class of every region, a number into `inks` */
+	classes: Int32Array;
+	/** an ink a class, named by its range; after them those of regions that are not told */
+	inks: Ink[];
+	/** heading of the legend */
+	title: string;
+	/** how the classes were made, in a sentence */
+	note: string;
 }
 
 /** Regions without an ink: a neutral that no palette is made of. */
@@ -106,6 +120,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
+		shapes: [],
 		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
 		rects: [...measured.rects, ...keys.rects],
 		unplaced: labels.unplaced,

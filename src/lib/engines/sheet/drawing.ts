@@ -1,4 +1,5 @@
 import type { Ink, Reader } from '../palettes/palette.ts';
+import type { DrawnShape } from './shapes.ts';
 
 /**
  * One description of a drawn sheet, read by every painter (SVG, canvas, PDF). Lengths are whole
@@ -24,6 +25,8 @@ export interface Drawing {
 	 * 'leader' for lines from a region to its name
 	 */
 	lines: LineLayer[];
+	/** everything else that is drawn, in no order: `shapes.ts` says what lies over what */
+	shapes: DrawnShape[];
 	texts: DrawnText[];
 	/** collar furniture: legend boxes, scale bar */
 	rects: DrawnRect[];
@@ -62,7 +65,7 @@ export interface LineLayer {
 }
 
 export interface DrawnText {
-	layer: 'label' | 'title' | 'collar' | 'legend';
+	layer: 'label' | 'title' | 'collar' | 'legend' | 'water' | 'graticule' | 'block';
 	text: string;
 	/** left end of the baseline */
 	x: number;

@@ -1,5 +1,12 @@
 /** From a coverage and a colouring to one drawn sheet, and from the drawing to SVG. */
-export { drawPlaced, drawSheet, inksInUse, uncoloured, type SheetInput } from './draw-sheet.ts';
+export {
+	drawPlaced,
+	drawSheet,
+	inksInUse,
+	uncoloured,
+	type SheetInput,
+	type SheetTheme,
+} from './draw-sheet.ts';
 export { recolour } from './recolour.ts';
 export { regionSizesMm } from './sizes.ts';
 export { sheetTable, type SheetRow } from './table.ts';
@@ -29,7 +36,8 @@ export { refineGround } from './canvas/refine.ts';
 export { regionAt } from './canvas/region-at.ts';
 export { type ChosenProjection } from './plane/projections.ts';
 export { paperLimits, paperSize } from './paper.ts';
-export { caution, papers, type SheetLayout } from './layout.ts';
+export { caution, papers, wholeLayout, type SheetLayout } from './layout.ts';
+export type { DrawnShape, ShapeLayer } from './shapes.ts';
 export { cutRing } from './plane/cut-open.ts';
 export { ringLonLat, type LonLat } from './plane/ring-lonlat.ts';
 export { isSetIn, textWidth } from './type/text-width.ts';

@@ -21,6 +21,7 @@ const rightFor: Record<keyof Draft, Action> = {
 	added: 'borders.edit',
 	seed: 'colours.edit',
 	layout: 'layout.edit',
+	theme: 'theme.edit',
 };
 
 /** Parts the colouring depends on; the others change only how it looks. */

@@ -1,4 +1,5 @@
 import type { Draft } from '../../engines/editions/draft.ts';
+import { wholeLayout } from '../../engines/sheet/layout.ts';
 
 /** What a sheet starts with: fewest inks, no locks, every border as found, a plain layout. */
 export function firstDraft(given: {
@@ -9,7 +10,7 @@ export function firstDraft(given: {
 	const { id, name, inks } = given.palette;
 	return {
 		inks: 'fewest',
-		palette: { id, name, inks: inks.map((ink) => ({ name: ink.name, hex: ink.hex })) },
+		palette: { id, name, inks: structuredClone(inks) },
 		locks: {},
 		forbidden: [],
 		alike: [],
@@ -24,7 +25,7 @@ export function firstDraft(given: {
 		struck: [],
 		added: [],
 		seed: 0,
-		layout: {
+		layout: wholeLayout({
 			title: given.title,
 			subtitle: '',
 			paper: 'A4',
@@ -36,6 +37,7 @@ export function firstDraft(given: {
 			legend: true,
 			scaleBar: true,
 			credits: '',
-		},
+		}),
+		theme: null,
 	};
 }
