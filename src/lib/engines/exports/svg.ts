@@ -22,12 +22,12 @@ const embed = (drawing: Drawing, files: FaceFiles): EmbeddedFace[] =>
  */
 export function exportSvg(
 	drawing: Drawing,
-	options: { fonts?: FaceFiles; language?: string } & Partial<SvgFileOptions> = {},
+	options: { fonts?: FaceFiles; language?: string; paper?: boolean } & Partial<SvgFileOptions> = {},
 ): Uint8Array {
-	const { fonts = {}, language, colours = 'class', letters = 'embedded' } = options;
+	const { fonts = {}, language, paper, colours = 'class', letters = 'embedded' } = options;
 	const outlines = lettersOf(fonts);
 	const svg = paintSvg(drawing, {
-		...{ fills: colours, language },
+		...{ fills: colours, language, paper },
 		...(letters === 'embedded' ? { fonts: embed(drawing, fonts) } : {}),
 		...(letters === 'outlines' ? { outline: (text) => outlineText(text, outlines) } : {}),
 	});

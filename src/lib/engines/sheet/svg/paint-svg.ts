@@ -26,6 +26,8 @@ export interface SvgOptions {
 	outline?: (text: DrawnText) => string;
 	/** language of the sheet (BCP 47), for whoever reads it aloud */
 	language?: string;
+	/** false leaves out the white of the paper */
+	paper?: boolean;
 }
 
 /** Layers of lines under their names in the file. */
@@ -52,7 +54,9 @@ export function paintSvg(drawing: Drawing, options: SvgOptions): string {
 		`<title id="${escapeXml(prefix)}title">${escapeXml(drawing.title)}</title>`,
 		`<desc id="${escapeXml(prefix)}description">${escapeXml(drawing.description)}</desc>`,
 		...styleBlock(drawing, options),
-		`<rect id="${escapeXml(prefix)}paper" width="100%" height="100%" fill="#ffffff"/>`,
+		...(options.paper === false
+			? []
+			: [`<rect id="${escapeXml(prefix)}paper" width="100%" height="100%" fill="#ffffff"/>`]),
 		...paintShapes(drawing, shapeLayersUnder, options),
 		...layer(prefix, 'fills', ' stroke="none"', paintFills(drawing, options)),
 		...paintShapes(drawing, shapeLayersOver, options),
