@@ -1,6 +1,6 @@
 /** Arithmetic mean; of no values, NaN. */
 export const mean = (values: readonly number[]): number =>
-	values.reduce((sum, value) => sum + value / values.length, 0) || (values.length ? 0 : NaN);
+	values.reduce((sum, value) => sum + value, 0) / values.length;
 
 /** Standard deviation of a sample, by n - 1; 0 for a single value. */
 export function standardDeviation(values: readonly number[]): number {

@@ -10,12 +10,20 @@ export function roundedLimits(limits: readonly number[], values: readonly number
 	let before = -Infinity;
 	return limits.map((limit, i) => {
 		const place = firstAbove(sorted, limit);
-		// on the value below is allowed, on the value above is not; nor may limits meet
-		const from = Math.max(place > 0 ? sorted[place - 1] : -Infinity, next(before));
-		const to = Math.min(sorted[place] ?? Infinity, limits[i + 1] ?? Infinity);
-		before = roundest(limit, from, to);
+		before = roundest(limit, {
+			after: before,
+			// on the value below is allowed, on the value above is not; nor may limits meet
+			from: place > 0 ? sorted[place - 1] : -Infinity,
+			to: Math.min(sorted[place] ?? Infinity, limits[i + 1] ?? Infinity),
+		});
 		return before;
 	});
+}
+
+interface Bounds {
+	after: number;
+	from: number;
+	to: number;
 }
 
 /** Number of sorted values that are not above a limit. */
@@ -29,16 +37,13 @@ function firstAbove(sorted: Float64Array, limit: number): number {
 	return low;
 }
 
-/** The least that is told from a limit by its place: anything above it will do. */
-const next = (value: number): number => value + Math.abs(value) * 2 ** -50;
-
-/** The roundest figure from `from` up to but without `to`, near to a limit that lies there. */
-function roundest(limit: number, from: number, to: number): number {
-	if (from <= 0 && to > 0 && from < 0 && -from < to * 1e3) return 0;
-	const largest = Math.floor(Math.log10(Math.max(Math.abs(limit), Number.MIN_VALUE))) + 1;
-	for (let place = largest; place > largest - 16; place--) {
+/** The roundest figure above `after`, from `from` up to but without `to`; a limit lies there. */
+function roundest(limit: number, bounds: Bounds): number {
+	if (limit === 0) return 0;
+	const highest = Math.floor(Math.log10(Math.abs(limit)));
+	for (let place = highest; place > highest - 16; place--) {
 		for (const step of [10, 5, 2, 1]) {
-			const near = nearest(limit, step, place - 1, from, to);
+			const near = nearest(limit, step, place, bounds);
 			if (near !== null) return near;
 		}
 	}
@@ -46,11 +51,11 @@ function roundest(limit: number, from: number, to: number): number {
 }
 
 /** The multiple of step * 10^place that is nearest to a limit within the bounds. */
-function nearest(limit: number, step: number, place: number, from: number, to: number) {
+function nearest(limit: number, step: number, place: number, { after, from, to }: Bounds) {
 	const times = limit / Number(`${step}e${place}`);
 	const fits = [Math.floor(times), Math.ceil(times)]
-		.map((whole) => Number(`${whole * step}e${place}`))
-		.filter((value) => value >= from && value < to);
+		.map((whole) => Number(`${whole * step}e${place}`) + 0)
+		.filter((value) => value > after && value >= from && value < to);
 	if (fits.length === 0) return null;
 	return fits.reduce((best, value) =>
 		Math.abs(value - limit) < Math.abs(best - limit) ? value : best,
