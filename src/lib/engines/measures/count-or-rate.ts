@@ -6,6 +6,8 @@ export interface CountJudgement {
 
 const rateWords =
 	/%|‰|\bper\b|\/|\b(rate|ratio|share|percent(age)?|average|mean|median|density|index|score|quota)s?\b/i;
+/** visits per week still grow with the region */
+const overTime = /(\bper\b|\ba\b|\/)\s*(day|week|month|quarter|year|annum)\b/gi;
 const amountUnits =
 	/^(h|hours?|min|minutes?|days?|eur|euros?|€|usd|\$|gbp|£|chf|k€|m€|t|tonnes?|kg|litres?|l|kwh|mwh|km|m)$/i;
 
@@ -20,7 +22,7 @@ export function judgeMeasure(
 	unit: string,
 	values: readonly (number | null)[],
 ): CountJudgement {
-	const said = [unit, name].find((text) => rateWords.test(text));
+	const said = [unit, name].find((text) => rateWords.test(text.replace(overTime, '')));
 	if (said !== undefined) return { kind: 'rate', because: `"${said}" is said of a rate` };
 	if (amountUnits.test(unit.trim())) {
 		return { kind: 'amount', because: `amounts in ${unit.trim()} add up from region to region` };

@@ -100,6 +100,7 @@ describe('counts and rates', () => {
 		['Accounts', '', [3, 12, 0, null], 'count'],
 		['Field hours', 'h', [3.5, 12.25], 'amount'],
 		['Turnover', 'EUR', [1200.5, 90], 'amount'],
+		['Visits', 'per week', [3, 12], 'count'],
 		['Visits per head', '', [2, 3], 'rate'],
 		['Share of members', '%', [10, 20], 'rate'],
 		['Potential', '', [0.25, 0.75], 'unknown'],
