@@ -30,4 +30,13 @@ export function withPixelSize(png: Uint8Array, dpi: number): Uint8Array {
 	return writeChunks([head, colours, sizeChunk(dpi), words('Software', 'Merestone'), ...rest]);
 }
 
-const told: ReadonlySet<string> = new Set(['pHYs', 'sRGB', 'gAMA', 'cHRM', 'iCCP', 'cICP', 'tIME', 'tEXt']);
+const told: ReadonlySet<string> = new Set([
+	'pHYs',
+	'sRGB',
+	'gAMA',
+	'cHRM',
+	'iCCP',
+	'cICP',
+	'tIME',
+	'tEXt',
+]);

@@ -12,7 +12,7 @@ export function readChunks(png: Uint8Array): Chunk[] {
 	if (signature.some((byte, i) => png[i] !== byte)) throw new RangeError('not a PNG file');
 	const view = new DataView(png.buffer, png.byteOffset, png.byteLength);
 	const chunks: Chunk[] = [];
-	for (let at = signature.length; at + 12 <= png.length; ) {
+	for (let at = signature.length; at + 12 <= png.length;) {
 		const length = view.getUint32(at);
 		if (at + 12 + length > png.length) throw new RangeError('a PNG file that ends too early');
 		const type = String.fromCharCode(...png.subarray(at + 4, at + 8));

@@ -16,7 +16,9 @@ export function pixelsOf(
 		const message = `Pixels an inch are a whole number from ${least} to ${greatest}.`;
 		return { status: 'refused', reason: 'bad-option', message };
 	}
-	const [width, height] = [widthMm, heightMm].map((mm) => Math.max(1, Math.round((mm / 25.4) * dpi)));
+	const [width, height] = [widthMm, heightMm].map((mm) =>
+		Math.max(1, Math.round((mm / 25.4) * dpi)),
+	);
 	if (width * height <= pixelLimit) return { status: 'fits', width, height };
 	const most = Math.floor(Math.sqrt(pixelLimit / (widthMm * heightMm)) * 25.4);
 	const message =
