@@ -97,12 +97,22 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		});
 		return around.map;
 	});
-	const { map, texts, legend, bar, scale } = around!;
+	const { map, texts, legend, bar, scale, blocks, obstacles } = around!;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
-		? labelSheet({ arcs, rings, sides, names, groups, areas: coverage.areasKm2, box: map, scale })
+		? labelSheet({
+				arcs,
+				rings,
+				sides,
+				names,
+				groups,
+				areas: coverage.areasKm2,
+				box: map,
+				scale,
+				obstacles,
+			})
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
@@ -120,8 +130,14 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
-		shapes: [],
-		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
+		shapes: blocks.flatMap(({ ground }) => ground ?? []),
+		texts: [
+			...inkLabels(labels.texts, fills),
+			...texts,
+			...measured.texts,
+			...keys.texts,
+			...blocks.flatMap((block) => block.texts),
+		],
 		rects: [...measured.rects, ...keys.rects],
 		unplaced: labels.unplaced,
 		notes: { projection: placed.chosen.sentence, scale: measured.sentence },
