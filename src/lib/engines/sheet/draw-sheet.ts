@@ -11,6 +11,7 @@ import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
 import { labelSheet } from './labels/label-sheet.ts';
+import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
@@ -37,6 +38,8 @@ export interface SheetInput {
 	issue: string;
 	/** the classes of a measure, shown in place of the colouring and its inks */
 	theme?: SheetTheme | null;
+	/** leaves hatches out, where a painter cuts them itself tile by tile */
+	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
 }
@@ -127,10 +130,17 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		...withLeaders(arcs, labels.leaders),
 		fills,
 		lines: [
-			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+			...lineLayers({
+				...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
+				look: layout.lines,
+				see: (hex) => see(hex, reader),
+			}),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
-		shapes: blocks.flatMap(({ ground }) => ground ?? []),
+		shapes: [
+			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, (hex) => see(hex, reader))),
+			...blocks.flatMap(({ ground }) => ground ?? []),
+		],
 		texts: [
 			...inkLabels(labels.texts, fills),
 			...texts,
