@@ -73,7 +73,12 @@ export async function askIn(
 		const message = `${mostOpenExports} files of the team are being made already. Wait for some of them.`;
 		throw new Conflict('too-many-open', message);
 	}
-	return insert(shop, trx, member, sheet, { request, digest, issue: about.issue, stem: about.stem });
+	return insert(shop, trx, member, sheet, {
+		request,
+		digest,
+		issue: about.issue,
+		stem: about.stem,
+	});
 }
 
 interface NewExport {
@@ -101,7 +106,13 @@ async function insert(
 	});
 	await shop.queue.send(trx, 'export', { exportId: made.id });
 	const { number: sheetNumber } = sheet;
-	const detail = { sheet: sheetNumber, number: made.number, kind, edition, revision: request.revision };
+	const detail = {
+		sheet: sheetNumber,
+		number: made.number,
+		kind,
+		edition,
+		revision: request.revision,
+	};
 	await record(trx, member, 'export.asked', { kind: 'export', id: made.id }, detail);
 	const row = await findExport(trx, sheet.id, made.number);
 	if (!row) throw new Error('what was just inserted is not there');
@@ -178,7 +189,12 @@ const noteOf = (row: ExportRow): ExportNote => ({
 	expiresAt: row.expires_at?.toISOString() ?? null,
 });
 
-const fileIn = ({ file_name, media_type, file_bytes, file_digest }: ExportRow): ExportNote['file'] =>
+const fileIn = ({
+	file_name,
+	media_type,
+	file_bytes,
+	file_digest,
+}: ExportRow): ExportNote['file'] =>
 	file_digest === null || file_bytes === null || media_type === null
 		? null
 		: { name: file_name, mediaType: media_type, bytes: file_bytes, digest: file_digest };
