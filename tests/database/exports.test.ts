@@ -13,10 +13,10 @@ import {
 	readEdition,
 } from '../../src/lib/server/services/edition.service.ts';
 import { endExpiredExports, stopExport } from '../../src/lib/server/services/export-end.service.ts';
+import { mostOpenExports } from '../../src/lib/server/services/ask-export.ts';
 import {
 	askForExport,
 	exportFileOf,
-	mostOpenExports,
 	readExport,
 	sheetExports,
 } from '../../src/lib/server/services/exports.service.ts';
@@ -229,6 +229,9 @@ describe('rights and limits', () => {
 
 	it('let so many wait at once and no more', async () => {
 		const dpi = (i: number) => ({ kind: 'png', edition: 1, options: { dpi: 72 + i } });
+		for (const { number, state } of await sheetExports(shop, designer, 1)) {
+			if (state === 'waiting') await stopExport(shop, designer, 1, number);
+		}
 		const numbers: number[] = [];
 		for (let i = 0; i < mostOpenExports; i++) numbers.push((await ask(dpi(i))).number);
 		await expect(ask(dpi(400))).rejects.toMatchObject({ code: 'too-many-open' });
