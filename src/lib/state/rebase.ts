@@ -64,6 +64,12 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 						their.lettering.placed,
 					),
 					hidden: members(was.lettering.hidden, my.lettering.hidden, their.lettering.hidden),
+					first: pick(
+						'names that come first',
+						was.lettering.first,
+						my.lettering.first,
+						their.lettering.first,
+					),
 				},
 				lines: fields('lines', was.lines, my.lines, their.lines),
 				collar: fields('collar', was.collar, my.collar, their.collar),
