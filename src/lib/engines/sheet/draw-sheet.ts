@@ -120,7 +120,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
-	const measured = drawScale(placed, map, bar);
+	const measured = drawScale(placed, bar);
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
