@@ -10,6 +10,8 @@ import type { Palette } from './palette.ts';
 export interface SearchMeans {
 	random: () => number;
 	known: readonly Palette[];
+	/** what the search for the fewest moves has found, null where it found nothing */
+	few: Attempt | null;
 }
 
 interface Mended {
@@ -25,17 +27,17 @@ const pullSteps = 6_000;
 const mostPulled = 4;
 
 /** Every free ink may move, and all of them together as little as can be found. */
-export const leastMovement: MendSearch = (task, locked, { random }) => {
+export const leastMovement: MendSearch = (task, locked, { random, few }) => {
 	const free = freeInks(task, locked);
 	if (free.length === 0) return null;
-	const few = smallestMend(task, locked, random);
 	const tries = [anneal(task, free, task.inks, leastSteps, random)];
 	if (few) tries.push(few, anneal(task, free, few.inks, leastSteps, random));
 	return mendedOnly(bestOf(tries));
 };
 
 /** Gaps in L* of 8 are safe in grey print; more is tried first, as far as the inks that all touch allow. */
-export const bestForGrey: MendSearch = (task, locked, { random }) => {
+export const bestForGrey: MendSearch = (task, locked, { random, few }) => {
+	if (!few) return null;
 	const widest = Math.min(14, Math.floor(90 / Math.max(1, task.inks.length - 1)));
 	for (const grey of [widest, (widest + greySafeFrom) / 2, greySafeFrom]) {
 		if (grey < greySafeFrom) continue;

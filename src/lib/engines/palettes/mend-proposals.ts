@@ -6,6 +6,7 @@ import { hatchesTell } from './hatch-tells.ts';
 import { mendTask, type MendTask, type PairAsk } from './mend-cost.ts';
 import { lockedInks, movesBetween } from './mend.ts';
 import { bestForGrey, fromKnownSet, leastMovement } from './mend-kinds.ts';
+import type { Attempt } from './mend-search.ts';
 import { smallestMend } from './mend-sets.ts';
 import { whyImpossible, whyNotFound } from './mend-reasons.ts';
 import type { PairDemand } from './pair-demands.ts';
@@ -64,11 +65,22 @@ export function* proposeMends(request: ProposalRequest): Generator<ProposalAnswe
 	const task = taskOf(request, inks, true);
 	const reason = whyImpossible(task, locked);
 	if (reason) return yield { status: 'impossible', reason };
+	yield* proposals(request, task, locked);
+}
+
+function* proposals(
+	request: ProposalRequest,
+	task: MendTask,
+	locked: readonly number[],
+): Generator<ProposalAnswer> {
+	// the lines of a hatch may stop showing on a fill that moved: then the fills must do without
+	const byFill = task.pairs.some(({ told }) => told) ? taskOf(request, task.inks, false) : null;
+	const few = smallestMend(task, locked, randomStream(request.seed ?? 0));
+	const fewByFill = byFill && smallestMend(byFill, locked, randomStream(request.seed ?? 0));
 	for (const kind of proposalKinds) {
 		const proposal =
-			searched(request, kind, task, locked) ??
-			// the lines of a hatch may stop showing on a fill that moved: then the fills must do without
-			searched(request, kind, taskOf(request, inks, false), locked);
+			searched(request, kind, task, locked, few) ??
+			(byFill && searched(request, kind, byFill, locked, fewByFill));
 		yield proposal
 			? { kind, status: 'proposed', proposal }
 			: { kind, status: 'not-found', reason: whyNotFound(task, locked) };
@@ -76,10 +88,7 @@ export function* proposeMends(request: ProposalRequest): Generator<ProposalAnswe
 }
 
 const searches: Record<ProposalKind, typeof leastMovement> = {
-	fewest: (task, locked, { random }) => {
-		const found = smallestMend(task, locked, random);
-		return found && { inks: found.inks };
-	},
+	fewest: (_task, _locked, { few }) => few && { inks: few.inks },
 	least: leastMovement,
 	grey: bestForGrey,
 	known: fromKnownSet,
@@ -90,9 +99,10 @@ function searched(
 	kind: ProposalKind,
 	task: MendTask,
 	locked: readonly number[],
+	few: Attempt | null,
 ): Proposal | null {
 	const random = randomStream((request.seed ?? 0) + proposalKinds.indexOf(kind));
-	const result = searches[kind](task, locked, { random, known: request.known });
+	const result = searches[kind](task, locked, { random, known: request.known, few });
 	if (!result || !meetsDemands(request.inks, result.inks, request.demands)) return null;
 	if (locked.some((ink) => result.inks[ink] !== task.inks[ink])) return null;
 	const moves = movesBetween(task.inks, result.inks);
