@@ -45,19 +45,22 @@ function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): 
 			weak: weak.length > 0,
 			regions: coverage.keys.length,
 		});
-		return around.map;
+		return around;
 	});
 	return { ...onTheMap(placed, around!), placed, around: around!, legendNote: '' };
 }
 
 /** Text blocks, and the legend where it is to stand on the map. */
-function onTheMap(placed: OnPaper, { map, blocks, legend, floating, obstacles }: Collar) {
+function onTheMap(placed: OnPaper, { blocks, legend, floating, obstacles }: Collar) {
 	const grounds = blocks.flatMap(({ ground }) => ground ?? []);
 	if (!floating) return { legend, obstacles, grounds };
 	const air = floating.size;
 	const size = { width: floating.width + 2 * air, height: floating.height + 2 * air };
-	const { arcs, sides } = placed;
-	const corner = emptyCorner(arcs, sides, map, size, obstacles);
+	const { arcs, sides, box, insets } = placed;
+	const corner = emptyCorner(arcs, sides, box, size, [
+		...obstacles,
+		...insets.map(({ outer }) => outer),
+	]);
 	if (!corner) return { legend: null, obstacles, grounds };
 	const { x, y } = corner.box;
 	return {

@@ -116,7 +116,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
 	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
-	const measured = drawScale(placed, map, bar);
+	const measured = drawScale(placed, bar);
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),

@@ -25,6 +25,6 @@ export function regionSizesMm(
 		projection: '',
 		issue: '',
 	});
-	const { arcs, rings } = placeOnPaper(coverage, layout, () => measured.map);
+	const { arcs, rings } = placeOnPaper(coverage, layout, () => measured);
 	return Float64Array.from(rings, (list) => smallerSide(arcs, list) / 100);
 }
