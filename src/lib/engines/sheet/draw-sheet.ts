@@ -16,6 +16,7 @@ import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
 import { placeOnPaper, type Placement } from './place-on-paper.ts';
+import { drawFrame } from './frame/draw-frame.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { cleanText } from './type/clean-text.ts';
@@ -85,7 +86,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 	const inks = input.inks.map((ink) => ({ ...ink, shown: see(ink.hex, reader) }));
 	const marked = weak.length > 0;
 	let around = null as ReturnType<typeof collar> | null;
-	const placed = placeOnPaper(coverage, layout, (sentence) => {
+	const frameFor = (sentence: string) => {
 		const coloured = colouring !== null;
 		around = collar({
 			layout,
@@ -95,19 +96,33 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			projection: sentence,
 			issue: input.issue,
 		});
-		return around.map;
-	});
-	const { map, texts, legend, bar, scale } = around!;
+		return around;
+	};
+	const placed = placeOnPaper(coverage, layout, frameFor, groups);
+	const { texts, legend, bar, scale } = around!;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
-		? labelSheet({ arcs, rings, sides, names, groups, areas: coverage.areasKm2, box: map, scale })
+		? labelSheet({
+				arcs,
+				rings,
+				sides,
+				names,
+				groups,
+				areas: coverage.areasKm2,
+				box: placed.box,
+				scale,
+			})
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
 	const measured = drawScale(placed, bar);
+	const frame = drawFrame({
+		...{ coverage, groups, layout, placed, scale, reader, see },
+		labels: labels.texts,
+	});
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
@@ -120,11 +135,22 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
-		shapes: [],
-		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
-		rects: [...measured.rects, ...keys.rects],
+		shapes: frame.shapes,
+		texts: [
+			...inkLabels(labels.texts, fills),
+			...texts,
+			...measured.texts,
+			...frame.texts,
+			...keys.texts,
+		],
+		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,
-		notes: { projection: placed.chosen.sentence, scale: measured.sentence },
+		notes: {
+			projection: placed.chosen.sentence,
+			scale: measured.sentence,
+			insets: frame.sentence,
+		},
+		frame: frame.report,
 		legend,
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };

@@ -35,6 +35,9 @@ export function recolour(
 		reader,
 		inks: drawn,
 		fills,
+		shapes: drawing.shapes.map((shape) =>
+			shape.set ? { ...shape, fill: asSeenBy(shape.set, reader) } : shape,
+		),
 		texts: [
 			...inkLabels(
 				drawing.texts.filter(({ layer }) => layer !== 'legend'),
