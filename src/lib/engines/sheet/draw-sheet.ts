@@ -18,6 +18,7 @@ import { paperSize } from './paper.ts';
 import { placeOnPaper, type Placement } from './place-on-paper.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
+import { legendInks, themedInput, type SheetTheme } from './themed.ts';
 import { cleanText } from './type/clean-text.ts';
 
 export interface SheetInput {
@@ -39,18 +40,6 @@ export interface SheetInput {
 	theme?: SheetTheme | null;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
-}
-
-/** A themed map as the sheet needs it: figures are no part of it. */
-export interface SheetTheme {
-	/** class of every region, a number into `inks` */
-	classes: Int32Array;
-	/** an ink a class, named by its range; after them those of regions that are not told */
-	inks: Ink[];
-	/** heading of the legend */
-	title: string;
-	/** how the classes were made, in a sentence */
-	note: string;
 }
 
 /** Regions without an ink: a neutral that no palette is made of. */
@@ -79,7 +68,8 @@ export function inksInUse(fills: { ink: number }[]): number[] {
 export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawing;
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
-export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
+export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Placement } {
+	const input = themedInput(asked);
 	const { coverage, layout, reader, colouring, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
 	const inks = input.inks.map((ink) => ({ ...ink, shown: see(ink.hex, reader) }));
@@ -106,7 +96,9 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
-	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
+	const keys = legend
+		? drawLegend(legend, inks, legendInks(fills, input.themed))
+		: { rects: [], texts: [] };
 	const measured = drawScale(placed, map, bar);
 	const drawing: Drawing = {
 		...paperSize(layout),
@@ -126,6 +118,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		unplaced: labels.unplaced,
 		notes: { projection: placed.chosen.sentence, scale: measured.sentence },
 		legend,
+		...(input.themed && { themed: input.themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }

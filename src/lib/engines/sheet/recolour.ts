@@ -2,8 +2,9 @@ import { asSeenBy as seen } from '../colour/index.ts';
 import type { Ink, Reader } from '../palettes/palette.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-import { fillHex, inkLabels, inksInUse } from './draw-sheet.ts';
+import { fillHex, inkLabels } from './draw-sheet.ts';
 import type { Drawing } from './drawing.ts';
+import { legendInks } from './themed.ts';
 
 /**
  * The same sheet in other colours: geometry, lettering and collar stay where they are and are shared
@@ -28,8 +29,10 @@ export function recolour(
 		const ink = colouring ? colouring[fill.region] : -1;
 		return { ...fill, ink, hex: fillHex(ink, drawn) };
 	});
-	const { legend } = drawing;
-	const keys = legend ? drawLegend(legend, drawn, inksInUse(fills)) : { rects: [], texts: [] };
+	const { legend, themed } = drawing;
+	const keys = legend
+		? drawLegend(legend, drawn, legendInks(fills, themed))
+		: { rects: [], texts: [] };
 	const next = {
 		...drawing,
 		reader,
