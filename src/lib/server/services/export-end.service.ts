@@ -58,10 +58,7 @@ export async function keepExport(
 }
 
 /** Nothing came of it: bytes that are already in their place go again, unless another row has them. */
-async function forget(
-	shop: Pick<Workshop, 'db' | 'files'>,
-	received: Received,
-): Promise<void> {
+async function forget(shop: Pick<Workshop, 'db' | 'files'>, received: Received): Promise<void> {
 	await received.discard();
 	await shop.db.transaction().execute((trx) => dropUnused(trx, shop.files, received.digest));
 }
