@@ -20,7 +20,8 @@ export interface DeskTheme {
 	figuresAt: string | null;
 }
 
-/** `sheets/[sheet]/theme`, for whoever may see figures */
-export interface ThemeFiguresGiven {
-	measures: (DeskMeasure & { takenAt: string | null })[];
+/** A measure as the stage of the theme is given it, for whoever may see figures. */
+export interface ThemeMeasure extends DeskMeasure {
+	/** when its table was taken over, ISO 8601 */
+	takenAt: string | null;
 }

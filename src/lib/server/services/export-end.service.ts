@@ -14,7 +14,7 @@ import { lockDigest } from '../repositories/files.repository.ts';
 import { findSheetById } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
-import { daysFromNow } from './exports.service.ts';
+import { daysFromNow } from './ask-export.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { dropUnused } from './stored-files.ts';
 
