@@ -6,18 +6,10 @@ import type { ExtraColumn } from './source.ts';
 
 function featureOf(coverage: Coverage, row: SheetRow, columns: readonly ExtraColumn[]) {
 	const polygons = polygonsOf(coverage, row.region);
-<<<<<<< HEAD
-	const { key, name, group, inkNumber, inkName, hex, theme } = row;
-	return {
-		type: 'Feature',
-		id: key,
-		properties: { key, name, group, inkNumber, inkName, hex, ...theme },
-=======
 	return {
 		type: 'Feature',
 		id: row.key,
 		properties: propertiesOf(row, columns),
->>>>>>> main
 		geometry:
 			polygons.length === 1
 				? { type: 'Polygon', coordinates: polygons[0] }
@@ -27,12 +19,8 @@ function featureOf(coverage: Coverage, row: SheetRow, columns: readonly ExtraCol
 
 /**
  * The coloured regions as GeoJSON (RFC 7946): one feature a line in region order, with the number of
-<<<<<<< HEAD
- * the ink from 1 as in the legend, its name and its hex digits, and of a themed sheet class and range. Full geometry, not the sheet's.
-=======
  * the ink from 1 as in the legend, its name and its hex digits, and the further columns: territory,
  * class of a theme. Full geometry, not the sheet's.
->>>>>>> main
  * Longitudes stay within -180 to 180. Byte for byte repeatable.
  */
 export function exportGeoJson(

@@ -109,15 +109,10 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
-<<<<<<< HEAD
 	const keys = legend
 		? drawLegend(legend, inks, legendInks(fills, input.themed))
 		: { rects: [], texts: [] };
-	const measured = drawScale(placed, map, bar);
-=======
-	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
 	const measured = drawScale(placed, bar);
->>>>>>> main
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),

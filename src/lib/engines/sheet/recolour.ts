@@ -2,16 +2,11 @@ import { asSeenBy as seen } from '../colour/index.ts';
 import type { Ink, Reader } from '../palettes/palette.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-<<<<<<< HEAD
 import { fillHex, inkLabels } from './draw-sheet.ts';
-import type { Drawing } from './drawing.ts';
-import { legendInks } from './themed.ts';
-=======
-import { fillHex, inkLabels, inksInUse } from './draw-sheet.ts';
 import type { Drawing, LineLayer } from './drawing.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { DrawnShape } from './shapes.ts';
->>>>>>> main
+import { legendInks } from './themed.ts';
 
 /**
  * The same sheet in other colours: geometry, lettering and collar stay where they are and are shared

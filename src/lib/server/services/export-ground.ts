@@ -44,15 +44,9 @@ async function draftGround(db: Db, sheetId: string, revision: number): Promise<E
 	const view = await boundaryView(db, row.boundary_set_id);
 	const draft = documentOf(row);
 	return {
-<<<<<<< HEAD
 		view,
 		theme: (await themeOnSheet(db, sheetId, view, draft.theme))?.shown ?? null,
-		...{ draft, inks: row.inks, at: row.saved_at, digest: null },
-=======
-		view: await boundaryView(db, row.boundary_set_id),
-		...{ draft: documentOf(row), inks: row.inks, at: row.saved_at, digest: null },
-		boundaries: null,
->>>>>>> main
+		...{ draft, inks: row.inks, at: row.saved_at, digest: null, boundaries: null },
 		lastEdition: editions.find((one) => one.revision <= revision)?.number ?? 0,
 	};
 }
@@ -70,12 +64,8 @@ async function editionGround(db: Db, sheetId: string, edition: number): Promise<
 	return {
 		...{ view, draft: wholeDraft(content.draft), at: row.issued_at, digest: row.digest },
 		inks: view.keys.map((key) => content.colouring[key]),
-<<<<<<< HEAD
 		theme: content.theme ? thawTheme(view.keys, content.theme) : null,
-		lastEdition: edition,
-=======
 		...{ lastEdition: edition, boundaries: content.boundaries.digest },
->>>>>>> main
 	};
 }
 

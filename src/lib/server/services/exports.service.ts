@@ -29,34 +29,8 @@ export async function askForExport(
 	return shop.db.transaction().execute(async (trx) => {
 		const sheet = await holdSheet(trx, member.team.id, isNumber(number) ? number : 0);
 		if (!sheet) throw new NotFound('sheet');
-<<<<<<< HEAD
-		return askIn(shop, trx, member, sheet, asked);
-	});
-}
-
-/** The same within a transaction that holds the sheet. */
-export async function askIn(
-	shop: Pick<Workshop, 'queue'>,
-	trx: Trx,
-	member: Member,
-	sheet: SheetRecord,
-	{ kind, edition, reader, options }: AskExport,
-): Promise<ExportNote> {
-	const revision = await revisionOf(trx, sheet, edition);
-	const request = { edition, revision, kind, reader, options: optionsFor(kind, options) };
-	const ground = await exportGround(trx, sheet, request);
-	const about = aboutExport(member.team, sheet, ground, request);
-	const digest = requestDigest(request, about, ground);
-	const standing = await findStanding(trx, sheet.id, digest);
-	if (standing) {
-		await keepLonger(trx, standing.id, daysKept);
-		return noteOf(standing);
-	}
-	if ((await countOpenExports(trx, member.team.id)) >= mostOpenExports) {
-=======
 		const note = await askIn(shop, trx, member, sheet, asked);
 		if (note) return note;
->>>>>>> main
 		const message = `${mostOpenExports} files of the team are being made already. Wait for some of them.`;
 		throw new Conflict('too-many-open', message);
 	});
