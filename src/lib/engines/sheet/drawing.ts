@@ -1,4 +1,5 @@
 import type { Ink, Reader } from '../palettes/palette.ts';
+import type { DrawnLettering } from './labels/set-name.ts';
 import type { DrawnShape } from './shapes.ts';
 
 /**
@@ -30,8 +31,10 @@ export interface Drawing {
 	texts: DrawnText[];
 	/** collar furniture: legend boxes, scale bar */
 	rects: DrawnRect[];
-	/** labels that did not fit and are listed instead */
+	/** regions whose name stands nowhere on the sheet, and is in the table only */
 	unplaced: number[];
+	/** how every name is set, and what is to be told of that */
+	lettering: DrawnLettering;
 	/** longer sentences about the drawing: projection, scale, how true the bar is */
 	notes: { projection: string; scale: string };
 	/** where the legend stands, so that it can be set anew when the inks in use change */
@@ -75,7 +78,10 @@ export interface DrawnText {
 	width: number;
 	face: 'sans' | 'sans-bold' | 'serif' | 'serif-bold' | 'serif-italic';
 	hex: string;
+	/** drawn under border lines, so that none is blotted; of a text `onFill` it is the fill's colour */
 	halo?: string;
+	/** added between two letters; part of `width` */
+	spacing?: number;
 	region?: number;
 	/** the label stands on its region's fill, from which its colour follows */
 	onFill?: boolean;

@@ -11,7 +11,6 @@ import type { SheetArcs } from '../plane/quantise.ts';
 
 /** Cell values that are no region. */
 export const paper = -1;
-export const taken = -2;
 export const outline = -3;
 
 export interface RegionRaster {
@@ -22,14 +21,14 @@ export interface RegionRaster {
 	/** upper left corner */
 	x: number;
 	y: number;
-	/** region number, `paper`, `taken` or `outline`, row by row */
+	/** region number, `paper` or `outline`, row by row */
 	owner: Int32Array;
 	/** columns and rows each region spans: left, right, top, bottom; right and bottom included */
 	spans: Int32Array;
 }
 
-/** Most cells in a grid: 4 bytes each, a few milliseconds to read through. */
-const mostCells = 1_000_000;
+/** Most cells in a grid: 7 bytes each with what is kept beside it, some milliseconds to read through. */
+const mostCells = 3_000_000;
 
 /**
  * In: the rings of every region, and of all arcs those that bound one. Rings of several regions given
@@ -119,7 +118,6 @@ function markOutline(raster: RegionRaster, { arcPoints, arcStarts }: SheetArcs, 
 		paintLine(
 			raster,
 			{ from, to: { x: arcPoints[2 * point], y: arcPoints[2 * point + 1] } },
-			null,
 			outline,
 		);
 	}
@@ -130,50 +128,22 @@ interface Line {
 	to: { x: number; y: number };
 }
 
-/** Gives the cells a line passes through a new owner, all or those of one owner; steps of half a cell. */
-export function paintLine(
-	raster: RegionRaster,
-	{ from, to }: Line,
-	of: number | null,
-	owner: number,
-): void {
+/** Gives the cells a line passes through a new owner; steps of half a cell. */
+function paintLine(raster: RegionRaster, { from, to }: Line, owner: number): void {
 	const [dx, dy] = [to.x - from.x, to.y - from.y];
 	const steps = Math.max(1, Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / raster.cell));
 	for (let step = 0; step <= steps; step++) {
 		const cell = cellAt(raster, from.x + (dx * step) / steps, from.y + (dy * step) / steps);
-		if (cell >= 0 && (of === null || raster.owner[cell] === of)) raster.owner[cell] = owner;
+		if (cell >= 0) raster.owner[cell] = owner;
 	}
 }
 
 /** First and last column and row that a box touches; may lie off the grid. */
-function cellsOf({ cell, x, y }: RegionRaster, box: Box): [number, number, number, number] {
+export function cellsOf({ cell, x, y }: RegionRaster, box: Box): [number, number, number, number] {
 	return [
 		Math.floor((box.x - x) / cell),
 		Math.ceil((box.x + box.width - x) / cell) - 1,
 		Math.floor((box.y - y) / cell),
 		Math.ceil((box.y + box.height - y) / cell) - 1,
 	];
-}
-
-/** Whether every cell a box touches has this owner; never for a box that leaves the grid. */
-export function allOwnedBy(raster: RegionRaster, box: Box, wanted: number): boolean {
-	const { columns, rows, owner } = raster;
-	const [left, right, top, bottom] = cellsOf(raster, box);
-	if (left < 0 || top < 0 || right >= columns || bottom >= rows) return false;
-	for (let row = top; row <= bottom; row++) {
-		for (let i = row * columns + left; i <= row * columns + right; i++) {
-			if (owner[i] !== wanted) return false;
-		}
-	}
-	return true;
-}
-
-/** Gives the cells a box touches a new owner, those of one owner only; the box lies on the grid. */
-export function paint(raster: RegionRaster, box: Box, of: number, owner: number): void {
-	const [left, right, top, bottom] = cellsOf(raster, box);
-	for (let row = top; row <= bottom; row++) {
-		for (let i = row * raster.columns + left; i <= row * raster.columns + right; i++) {
-			if (raster.owner[i] === of) raster.owner[i] = owner;
-		}
-	}
 }
