@@ -20,7 +20,12 @@ const fromCones = [
 
 /** OKLab of a colour in hex digits: L 0 to 1, a and b about -0.4 to 0.4. Throws on text that is no colour. */
 export function oklabOf(hex: string): Triple {
-	const [l, m, s] = times(toCones, linearOf(hex));
+	return oklabOfLinear(linearOf(hex));
+}
+
+/** OKLab of linear sRGB; channels outside 0 to 1 are allowed. */
+export function oklabOfLinear(linear: Triple): Triple {
+	const [l, m, s] = times(toCones, linear);
 	return times(conesToLab, [Math.cbrt(l), Math.cbrt(m), Math.cbrt(s)]);
 }
 

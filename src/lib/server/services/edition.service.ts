@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
 import type { DeskEdition } from '../../schemas/desk.ts';
@@ -7,7 +6,6 @@ import type { Trx } from '../database/connection.ts';
 import type { Received } from '../files/index.ts';
 import type { SheetFile } from '../jobs/paint.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import { readAttributesText, readGeometry } from '../repositories/boundaries.repository.ts';
 import {
 	findEditionFile,
 	insertEdition,
@@ -16,6 +14,7 @@ import {
 import { lockDigest } from '../repositories/files.repository.ts';
 import { holdSheet, type DraftRow, type SheetRecord } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
+import { boundariesDigest } from './boundaries-digest.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { dayInWords } from './day-in-words.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
@@ -135,7 +134,7 @@ async function seal(
 	colouring: number[],
 ): Promise<{ digest: string; stored: string }> {
 	const sealed = await shop.pool.run('sealEdition', {
-		boundariesDigest: await boundariesDigest(trx, view),
+		boundariesDigest: await boundariesDigest(trx, view.set.id),
 		keys: view.keys,
 		draft: documentOf(draft),
 		colouring,
@@ -154,14 +153,6 @@ const proofByKey = ({ keys }: BoundaryView, proof: Proof) => ({
 	regions: proof.regions.map((region) => keys[region]),
 	...(proof.borders ? { borders: proof.borders.map(([a, b]) => [keys[a], keys[b]]) } : {}),
 });
-
-/** Over the coverage and the attributes as they are stored. */
-async function boundariesDigest(trx: Trx, { set }: BoundaryView): Promise<string> {
-	const geometry = await readGeometry(trx, set.id);
-	if (!geometry) throw new NotFound('boundary set');
-	const hash = createHash('sha256').update(geometry);
-	return hash.update(await readAttributesText(trx, set.id)).digest('hex');
-}
 
 async function keepFiles(
 	shop: Workshop,

@@ -2,6 +2,7 @@ import {
 	boxOfRegion,
 	regionAt,
 	regionPath,
+	shapeLayersTop,
 	traceRegion,
 	type Area,
 	type Ground,
@@ -63,13 +64,13 @@ export class CanvasSurface implements Surface {
 			onsettled: (settled) => this.#settled(settled),
 			onfailure: host.onfailure,
 		});
-		this.#board.ground(drawn.ground, drawing.lines, null);
+		this.#board.ground(drawn.ground, drawing, null);
 		const pen = this.canvas.getContext('2d');
 		if (!pen) throw new Error('this browser gives no canvas to paint on');
 		this.#pen = pen;
 		describe(this.canvas, drawing);
 		host.canvas.replaceChildren(this.canvas);
-		this.#lettering = letteringOf(drawing);
+		this.#lettering = letteringOf(drawing, shapeLayersTop);
 		this.#letters = lettersIn(host.lettering, this.#lettering);
 	}
 
@@ -96,7 +97,7 @@ export class CanvasSurface implements Surface {
 		const ground = finer?.ground ?? this.#drawn.ground;
 		if (ground === this.#ground) return;
 		this.#ground = ground;
-		this.#board.ground(ground, this.#drawn.drawing.lines, finer?.area ?? null);
+		this.#board.ground(ground, this.#drawn.drawing, finer?.area ?? null);
 	}
 
 	regionAt(_target: EventTarget | null, [x, y]: Place): number {
@@ -139,7 +140,7 @@ export class CanvasSurface implements Surface {
 	paint(drawing: Drawing, words: (fill: RegionFill) => string) {
 		this.#words = (region) => words(drawing.fills[region]);
 		for (const { region, hex } of drawing.fills) this.#look.tint(region, hex);
-		this.#lettering = setLettering(this.#letters, drawing, this.#lettering);
+		this.#lettering = setLettering(this.#letters, drawing, this.#lettering, shapeLayersTop);
 		describe(this.canvas, drawing);
 		this.#show();
 	}

@@ -1,5 +1,7 @@
 import type { LineLayer } from '../drawing.ts';
+import { shapeLayersOver, shapeLayersUnder, type DrawnShape } from '../shapes.ts';
 import { meets, type Area, type Ground } from './ground.ts';
+import { paintShapes } from './paint-shapes.ts';
 
 /** What is asked of a canvas: the part of its two-dimensional context that painting needs. */
 export type Pen = Pick<
@@ -41,6 +43,8 @@ export interface Outline {
 export interface Picture {
 	ground: Ground;
 	lines: LineLayer[];
+	/** those below border lines are painted; frames, grounds and legend stay with the lettering */
+	shapes: DrawnShape[];
 	colours: Colours;
 	outline: Outline | null;
 }
@@ -52,7 +56,7 @@ const arcsAPath = 200;
 const fadedAlpha = 0.18;
 
 /**
- * Paints a part of a drawing: fills, then lines by rank, then the outline. In: `scale`, pixels to a
+ * Paints a part of a drawing: shapes and fills in their order, then lines by rank, then the outline. In: `scale`, pixels to a
  * hundredth of a millimetre; the area's top left corner comes to the canvas's. Out: the pixels that the
  * SVG painter's text gives, but for lettering and collar furniture, which stay text. Only what meets the
  * area is painted.
@@ -62,7 +66,9 @@ export function paintArea(pen: Pen, picture: Picture, area: Area, scale: number)
 	pen.fillStyle = '#ffffff';
 	pen.fillRect(0, 0, (area.right - area.left) * scale, (area.bottom - area.top) * scale);
 	pen.setTransform(scale, 0, 0, scale, -area.left * scale, -area.top * scale);
+	paintShapes(pen, picture.shapes, shapeLayersUnder, area);
 	paintFills(pen, picture, area);
+	paintShapes(pen, picture.shapes, shapeLayersOver, area);
 	pen.lineJoin = 'round';
 	pen.lineCap = 'round';
 	for (const { arcs, hex, width, dash } of picture.lines) {

@@ -3,9 +3,11 @@
  * names; every region is one path with an id, its key, its name and its ink; colours are attributes
  * or classes. No script, no style attribute, nothing outside the file.
  */
-import type { Drawing } from '../drawing.ts';
+import type { DrawnText, Drawing } from '../drawing.ts';
+import { shapeLayersOver, shapeLayersTop, shapeLayersUnder } from '../shapes.ts';
 import { escapeXml } from './escape.ts';
 import { paintFills } from './paint-fills.ts';
+import { paintShapes } from './paint-shapes.ts';
 import { paintTexts } from './paint-texts.ts';
 import { linesPath } from './path-data.ts';
 import { styleBlock } from './style-block.ts';
@@ -46,16 +48,33 @@ export function paintSvg(drawing: Drawing, options: SvgOptions): string {
 		`<desc id="${escapeXml(prefix)}description">${escapeXml(drawing.description)}</desc>`,
 		...styleBlock(drawing, options),
 		`<rect id="${escapeXml(prefix)}paper" width="100%" height="100%" fill="#ffffff"/>`,
+		...paintShapes(drawing, shapeLayersUnder, options),
 		...layer(prefix, 'fills', ' stroke="none"', paintFills(drawing, options)),
+		...paintShapes(drawing, shapeLayersOver, options),
 		...paintLines(drawing, prefix),
+		...paintShapes(drawing, frameLayers, options),
+		...mapTexts(drawing, options, 'graticule', 'graticule-figures'),
+		...mapTexts(drawing, options, 'water', 'water-names'),
 		...layer(prefix, 'labels', ' aria-hidden="true"', paintTexts(drawing, ['label'], options)),
 		...layer(prefix, 'collar', '', [
 			...paintRects(drawing),
+			...paintShapes(drawing, ['legend'], options),
 			...paintTexts(drawing, ['title', 'collar', 'legend'], options),
 		]),
+		...mapTexts(drawing, options, 'block', 'text-blocks'),
 		'</svg>',
 		'',
 	].join('\n');
+}
+
+/** Samples in the legend lie on its boxes, so they are painted with the collar. */
+const frameLayers = shapeLayersTop.filter((name) => name !== 'legend');
+
+/** Texts of a layer that not every sheet has, as a group of their own. */
+function mapTexts(drawing: Drawing, options: SvgOptions, kind: DrawnText['layer'], name: string) {
+	const texts = paintTexts(drawing, [kind], options);
+	const hidden = kind === 'block' ? '' : ' aria-hidden="true"';
+	return texts.length ? layer(options.idPrefix ?? '', name, hidden, texts) : [];
 }
 
 function layer(prefix: string, name: string, attributes: string, content: string[]): string[] {

@@ -1,6 +1,8 @@
 import type { Drawing } from '../drawing.ts';
 import { faceStyles, type Face } from '../type/face.ts';
 import { uncoloured } from '../draw-sheet.ts';
+import { shapesIn } from '../shapes.ts';
+import { inkClass } from './paint-shapes.ts';
 import type { SvgOptions } from './paint-svg.ts';
 
 /** A face to carry inside the file, as TrueType or WOFF2. */
@@ -35,7 +37,16 @@ export function styleBlock(drawing: Drawing, { fills, fonts = [] }: SvgOptions):
 			...[...faces].sort().map(faceRule),
 			`.ink-0{fill:${uncoloured}}`,
 			...drawing.inks.map(({ shown }, ink) => `.ink-${ink + 1}{fill:${shown}}`),
+			...hatchRules(drawing),
 		);
 	}
 	return rules.length ? ['<style>', ...rules, '</style>'] : [];
+}
+
+/** One rule a hatch, as for the inks. */
+function hatchRules(drawing: Drawing): string[] {
+	const rules = shapesIn(drawing, 'hatch')
+		.filter(({ ink, stroke }) => ink !== undefined && stroke)
+		.map((shape) => `.${inkClass(shape)}{stroke:${shape.stroke}}`);
+	return [...new Set(rules)];
 }
