@@ -1,6 +1,6 @@
-import { boxAround, isFree, type Ground } from './ground.ts';
+import { boxAround, isFree, isBorder, type Ground } from './ground.ts';
 import type { Pole } from './pole.ts';
-import { outline, paper, type RegionRaster } from './region-raster.ts';
+import { paper, type RegionRaster } from './region-raster.ts';
 import type { TextBox } from './text-box.ts';
 
 /** Distance of a label from the coast it stands off, in parts of its size. */
@@ -23,7 +23,7 @@ function shore(raster: RegionRaster, region: number, pole: Pole, dx: number, dy:
 	const { cell, columns, rows, owner } = raster;
 	let column = Math.floor((pole.x - raster.x) / cell);
 	let row = Math.floor((pole.y - raster.y) / cell);
-	const isOwn = (cellOwner: number) => cellOwner === region || cellOwner === outline;
+	const isOwn = (cellOwner: number) => cellOwner === region || isBorder(cellOwner);
 	let steps = 0;
 	while (
 		column >= 0 &&

@@ -1,6 +1,6 @@
 /** What placing names asks of the paper: who owns a cell, and whether something stands there already. */
 import type { Box } from '../plane/fit.ts';
-import { cellAt, cellsOf, outline, type RegionRaster } from './region-raster.ts';
+import { cellAt, cellsOf, edge, outline, type RegionRaster } from './region-raster.ts';
 import type { Leader } from './leader.ts';
 
 export interface Ground {
@@ -33,27 +33,42 @@ export function isFree({ raster, busy }: Ground, box: Box, wanted: number): bool
 	return true;
 }
 
-/** Share of a box's cells that are a region's own; 0 where anything stands in it or it leaves the grid. */
-export function ownShare({ raster, busy }: Ground, box: Box, region: number): number {
+/** Whether a cell is a border of either kind. */
+export const isBorder = (owner: number): boolean => owner === outline || owner === edge;
+
+/**
+ * Share of a box's cells that are a region's own; 0 where it is surely less than `least`, where anything
+ * or an edge is in it, or where it leaves the grid.
+ */
+export function ownShare(
+	{ raster, busy }: Ground,
+	box: Box,
+	region: number,
+	least: number,
+): number {
 	const { columns, rows, owner } = raster;
 	const [left, right, top, bottom] = cellsOf(raster, box);
 	if (left < 0 || top < 0 || right >= columns || bottom >= rows) return 0;
-	let [own, all] = [0, 0];
+	const most = (right - left + 1) * (bottom - top + 1) * (1 - least);
+	let [own, others] = [0, 0];
 	for (let row = top; row <= bottom; row++) {
 		for (let i = row * columns + left; i <= row * columns + right; i++) {
-			if (busy[i]) return 0;
+			const at = owner[i];
+			if (busy[i] || at === edge) return 0;
+			if (at === region) own++;
 			// a border is nobody's: neither for nor against
-			if (owner[i] === outline) continue;
-			all++;
-			if (owner[i] === region) own++;
+			else if (at !== outline && ++others > most) return 0;
 		}
 	}
-	return all ? own / all : 0;
+	return own ? own / (own + others) : 0;
 }
 
 /** Cells along a line, half a cell apart, from its beginning; -1 off the grid. */
 export function* cellsAlong(raster: RegionRaster, { from, to }: Leader): Generator<number> {
-	const steps = Math.max(1, Math.ceil((2 * Math.hypot(to.x - from.x, to.y - from.y)) / raster.cell));
+	const steps = Math.max(
+		1,
+		Math.ceil((2 * Math.hypot(to.x - from.x, to.y - from.y)) / raster.cell),
+	);
 	for (let step = 0; step <= steps; step++) {
 		const t = step / steps;
 		yield cellAt(raster, from.x + (to.x - from.x) * t, from.y + (to.y - from.y) * t);

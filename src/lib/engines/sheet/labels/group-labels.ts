@@ -8,7 +8,7 @@ import { headroom } from './headroom.ts';
 import { spotInside } from './inside.ts';
 import { linesOfName } from './lines-of-name.ts';
 import type { Pole } from './pole.ts';
-import { rasterise, type RegionRaster } from './region-raster.ts';
+import { outline, rasterise, type RegionRaster } from './region-raster.ts';
 import { setAt, textBox } from './text-box.ts';
 
 const face = 'serif-bold';
@@ -16,6 +16,8 @@ const face = 'serif-bold';
 const wanted = 0.85;
 /** Between spaced capitals, in parts of the type size. Source: Imhof 1975, spaced names for areas. */
 const spacing = 0.35;
+/** Clear above and below spaced capitals together, in parts of their size, so that they read as one. */
+const air = 0.8;
 
 export interface GroupInput {
 	arcs: SheetArcs;
@@ -45,7 +47,10 @@ function middlesOf({ owner, columns, x, y, cell }: RegionRaster, groups: number)
 function capitals(name: string): string {
 	const upper = name.toUpperCase();
 	if (!/\p{Script=Greek}/u.test(upper)) return upper;
-	return upper.normalize('NFD').replace(/\u0301/g, '').normalize('NFC');
+	return upper
+		.normalize('NFD')
+		.replace(/\u0301/g, '')
+		.normalize('NFC');
 }
 
 export interface GroupNames {
@@ -71,11 +76,8 @@ export function labelGroups(
 	const names = [...new Set(groups.filter((group) => group !== null))];
 	const members = names.map((name) => rings.filter((_, region) => groups[region] === name).flat());
 	const groupAt = (region: number) => (region < 0 ? undefined : groups[region]);
-	const raster = rasterise(
-		arcs,
-		members,
-		box,
-		(arc) => groupAt(sides.arcLeft[arc]) !== groupAt(sides.arcRight[arc]),
+	const raster = rasterise(arcs, members, box, (arc) =>
+		groupAt(sides.arcLeft[arc]) !== groupAt(sides.arcRight[arc]) ? outline : null,
 	);
 	const room = headroom(raster, busy);
 	const middles = middlesOf(raster, names.length);
@@ -88,7 +90,8 @@ export function labelGroups(
 			for (const lines of linesOfName(name, width)) {
 				const set = textBox(lines, face, size, apart);
 				const pole = middles[group];
-				const spot = spotInside(raster, room, group, pole, set.width + size / 2, set.height);
+				const [wide, high] = [set.width + size / 2, set.height + (spaced ? size * air : 0)];
+				const spot = spotInside(raster, room, group, pole, wide, high);
 				if (!spot) continue;
 				const rest = { layer: 'label', hex: '#000000', halo: '#ffffff' } as const;
 				return setAt(set, spot.x, spot.y, { ...rest, ...(apart ? { spacing: apart } : {}) });

@@ -1,9 +1,9 @@
 import { hundredths } from '../paper.ts';
 import type { PlacedName } from '../layout/lettering.ts';
 import type { Box } from '../plane/fit.ts';
-import { boxAround, cellsAlong, type Ground } from './ground.ts';
+import { boxAround, cellsAlong, isBorder, type Ground } from './ground.ts';
 import type { Leader } from './leader.ts';
-import { cellsOf, outline, paper } from './region-raster.ts';
+import { cellsOf, paper } from './region-raster.ts';
 import type { SetName } from './set-name.ts';
 import type { TextBox } from './text-box.ts';
 
@@ -30,7 +30,8 @@ export function setByHand(
 	const y = within(anchor.y + hundredths(place.dyMm), box.height / 2, paperBox.y, paperBox.height);
 	const around = boxAround(x, y, box.width, box.height);
 	const on = groundUnder(ground, around, region);
-	const leader = on === 'fill' || on === 'edge' ? null : leaderTo(ground, region, anchor, around, box);
+	const leader =
+		on === 'fill' || on === 'edge' ? null : leaderTo(ground, region, anchor, around, box);
 	return { region, how: 'hand', short: place.short, box, x, y, ground: on, leader };
 }
 
@@ -68,7 +69,7 @@ function leaderTo(
 	let off = 0;
 	for (const cell of cellsAlong(raster, line)) {
 		const owner = cell < 0 ? paper : raster.owner[cell];
-		off = owner === region || owner === outline ? 0 : off + raster.cell / 2;
+		off = owner === region || isBorder(owner) ? 0 : off + raster.cell / 2;
 	}
 	return off > size * farFrom ? line : null;
 }

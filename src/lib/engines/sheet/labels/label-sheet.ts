@@ -12,7 +12,13 @@ import { letteringNotes } from './lettering-notes.ts';
 import { nameTask } from './name-task.ts';
 import { setNumbers } from './numbers.ts';
 import { handNames, labelRegions, type NameTask } from './region-labels.ts';
-import { isOnSheet, noAnchor, type DrawnLettering, type HowNamed, type SetName } from './set-name.ts';
+import {
+	isOnSheet,
+	noAnchor,
+	type DrawnLettering,
+	type HowNamed,
+	type SetName,
+} from './set-name.ts';
 import { textsOf } from './texts-of-names.ts';
 
 /** Hundredths of a millimetre to a point (1/72 inch). */
@@ -24,10 +30,12 @@ const small = [6, 5.5, 5];
 /** For the level above. */
 const groupSizes = [10, 9, 8, 7];
 /** Beside names of regions, in spaced capitals. */
-const spacedSizes = [9, 8, 7, 6];
+const spacedSizes = [10, 9, 8, 7];
 /** A larger size may cost this share of the names that fit at the smallest. */
 const worth = 0.03;
 const enough = 0.6;
+/** Names of the level above stand between those of regions where this share of these has room enough. */
+const suits = 0.85;
 /** Without a level above, a map with some names says more than a map with none. */
 const enoughAlone = 0.2;
 
@@ -81,7 +89,8 @@ export function labelSheet(input: LabelInput): Labelled {
 	const size = sizeThatDoes(task, tried, hopeful / Math.max(1, names.length), asked);
 	const least = tried[tried.length - 1];
 	const set = size ? labelRegions(task, size) : handNames(task, least);
-	const above = grouped ? namesAbove(input, task, Boolean(size)) : null;
+	const roomy = set.filter(({ how }) => how !== 'over').length >= suits * names.length;
+	const above = grouped && (!size || roomy) ? namesAbove(input, task, Boolean(size)) : null;
 	const { numbered, list } = lettering.numbers
 		? numbersFor(input, task, set, size ?? least, !size)
 		: { numbered: [], list: [] };
@@ -109,7 +118,14 @@ function sizeThatDoes(
 	const least = tried[tried.length - 1];
 	const most = share(labelRegions(task, least));
 	if (most < asked) return null;
-	return tried.find((size) => size === least || share(labelRegions(task, size)) >= most - worth)!;
+	// the larger the type, the fewer names fit: halving finds the largest that does
+	let [low, high] = [0, tried.length - 1];
+	while (low < high) {
+		const middle = (low + high) >> 1;
+		if (share(labelRegions(task, tried[middle])) >= most - worth) high = middle;
+		else low = middle + 1;
+	}
+	return tried[low];
 }
 
 /** The level above: instead of regions in bold, or between their names in spaced capitals. */
@@ -164,7 +180,9 @@ function together(input: LabelInput, task: NameTask, names: SetName[], found: Fo
 		groups: above?.texts.length ? Math.round((above.size / point) * 10) / 10 : null,
 	};
 	const anchors = Int32Array.from(
-		task.anchors.flatMap((at) => (at ? [Math.round(at.x), Math.round(at.y)] : [noAnchor, noAnchor])),
+		task.anchors.flatMap((at) =>
+			at ? [Math.round(at.x), Math.round(at.y)] : [noAnchor, noAnchor],
+		),
 	);
 	const lettering = { how, short, numbers, anchors, points };
 	return {

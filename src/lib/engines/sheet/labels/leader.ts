@@ -1,6 +1,6 @@
-import { boxAround, cellsAlong, isFree, type Ground } from './ground.ts';
+import { boxAround, cellsAlong, isFree, isBorder, type Ground } from './ground.ts';
 import type { Pole } from './pole.ts';
-import { outline, paper } from './region-raster.ts';
+import { paper } from './region-raster.ts';
 import type { TextBox } from './text-box.ts';
 
 /** A thin line from inside a region to its name. */
@@ -11,7 +11,7 @@ export interface Leader {
 
 /** Directions tried, and distances in parts of the type size, nearest first. */
 const directions = 24;
-const distances = [2, 3, 4, 5, 6, 8, 10, 13];
+const distances = [2, 3, 4, 5, 6, 8, 10];
 /** Clear space round a name and between a name and its leader, in parts of the type size. */
 const clear = 0.3;
 /** Names this near to lining up with an earlier one, in parts of the type size, are lined up. */
@@ -26,7 +26,7 @@ function isClear(ground: Ground, region: number, line: Leader): boolean {
 		const owner = raster.owner[cell];
 		if (owner === paper) left = true;
 		if (busy[cell]) return false;
-		if (owner !== paper && owner !== outline && (owner !== region || left)) return false;
+		if (owner !== paper && !isBorder(owner) && (owner !== region || left)) return false;
 	}
 	return left;
 }
@@ -48,7 +48,12 @@ export interface Rails {
 }
 
 /** The same end moved onto the nearest rail, if there is one close by. */
-function onRail(to: Leader['to'], toRight: boolean, box: TextBox, rails: Rails): Leader['to'] | null {
+function onRail(
+	to: Leader['to'],
+	toRight: boolean,
+	box: TextBox,
+	rails: Rails,
+): Leader['to'] | null {
 	let best: number | null = null;
 	for (const x of toRight ? rails.right : rails.left) {
 		if (best === null || Math.abs(x - to.x) < Math.abs(best - to.x)) best = x;

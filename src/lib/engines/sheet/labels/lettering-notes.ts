@@ -63,7 +63,9 @@ function overlaps(names: SetName[]): [SetName, SetName][] {
 /** Names set by hand that lie over each other or over something else. */
 function handNotes(
 	set: SetName[],
-	obstacles: readonly Box[], nameOf: (region: number) => string): string[] {
+	obstacles: readonly Box[],
+	nameOf: (region: number) => string,
+): string[] {
 	const hand = set.filter(({ how }) => how === 'hand');
 	const pairs = overlaps(hand).map(([a, b]) => `${nameOf(a.region)} with ${nameOf(b.region)}`);
 	const over = hand.filter((one) => obstacles.some((box) => meet(box, boxOf(one))));

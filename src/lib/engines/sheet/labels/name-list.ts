@@ -25,7 +25,8 @@ export interface ListRoom {
 	width: number;
 	/** of the numbers */
 	figures: number;
-	rooms: { x: number; y: number; columns: number; rows: number }[];
+	/** `head` is 1 where a row is kept for the heading */
+	rooms: { x: number; y: number; columns: number; rows: number; head: number }[];
 	lines: number;
 }
 
@@ -37,49 +38,56 @@ export function listRoom(ground: Ground, names: string[], scale: number): ListRo
 	const size = Math.max(leastSize, Math.round(listSize * scale));
 	const figures = Math.ceil(textWidth('sans-bold', size, String(names.length)));
 	const widest = Math.max(0, ...names.map((name) => textWidth('sans', size, name)));
-	const width = Math.ceil(figures + size * 0.5 + Math.min(widest, size * widestName));
+	const width = Math.ceil(
+		Math.max(
+			figures + size * 0.5 + Math.min(widest, size * widestName),
+			textWidth('sans-bold', size, heading),
+		),
+	);
 	const room: ListRoom = { size, width, figures, rooms: [], lines: 0 };
 	const pad = size * clear;
-	const shape = (wide: number, high: number) => ({
-		columns: Math.floor((wide - 2 * pad + size * between) / (width + size * between)),
-		rows: Math.floor((high - 2 * pad) / (size * leading)),
-	});
 	while (room.rooms.length < mostRooms && room.lines < names.length) {
-		const extra = room.rooms.length ? 0 : 1;
-		const left = names.length - room.lines + extra;
+		const head = room.rooms.length ? 0 : 1;
+		const left = names.length - room.lines;
+		const shape = (wide: number, high: number) => ({
+			columns: Math.floor((wide - 2 * pad + size * between) / (width + size * between)),
+			rows: Math.floor((high - 2 * pad) / (size * leading)) - head,
+		});
 		// no more is worth anything than is needed, and of what suffices the smallest is best
 		const worth = (wide: number, high: number) => {
 			const { columns, rows } = shape(wide, high);
-			if (columns < 1 || rows < 2 + extra) return 0;
+			if (columns < 1 || rows < 1) return 0;
 			const held = Math.min(columns * rows, left);
 			return held + (held === left ? 1 / (1 + wide * high * 1e-6) : 0);
 		};
 		const box = emptyRoom(ground, worth);
 		if (!box) break;
-		const { columns, rows } = shape(box.width, box.height);
-		const used = Math.min(columns, Math.ceil(left / rows));
-		const needed = Math.min(rows, Math.ceil(left / used));
-		const placed = { x: Math.round(box.x + pad), y: Math.round(box.y + pad), columns: used, rows: needed };
+		const most = shape(box.width, box.height);
+		const columns = Math.min(most.columns, Math.ceil(left / most.rows));
+		const rows = Math.min(most.rows, Math.ceil(left / columns));
+		const placed = { x: Math.round(box.x + pad), y: Math.round(box.y + pad), columns, rows, head };
 		room.rooms.push(placed);
-		room.lines += used * needed - extra;
+		room.lines += columns * rows;
 		occupy(ground, roomBox(room, placed));
 	}
-	room.lines = Math.max(0, room.lines);
 	return room;
 }
 
-function roomBox({ size, width }: ListRoom, { x, y, columns, rows }: ListRoom['rooms'][number]): Box {
-	const across = columns * (width + size * between) - size * between;
-	return { x, y, width: across, height: rows * size * leading };
+const acrossAll = ({ size, width }: ListRoom, columns: number) =>
+	columns * (width + size * between) - size * between;
+
+function roomBox(room: ListRoom, { x, y, columns, rows, head }: ListRoom['rooms'][number]): Box {
+	const height = (rows + head) * room.size * leading;
+	return { x, y, width: acrossAll(room, columns), height };
 }
 
 /** The list, its names in the order of their numbers from 1; no more than there is room for. */
 export function drawList(room: ListRoom, names: string[]): DrawnText[] {
 	const { size, width, figures } = room;
-	const places = room.rooms.flatMap(({ x, y, columns, rows }) =>
+	const places = room.rooms.flatMap(({ x, y, columns, rows, head }) =>
 		Array.from({ length: columns * rows }, (_, i) => ({
 			x: Math.round(x + Math.floor(i / rows) * (width + size * between)),
-			y: Math.round(y + size * (leading * (i % rows) + 0.9)),
+			y: Math.round(y + size * (leading * ((i % rows) + head) + 0.9)),
 		})),
 	);
 	if (!names.length || !places.length) return [];
@@ -87,11 +95,12 @@ export function drawList(room: ListRoom, names: string[]): DrawnText[] {
 		const wide = Math.ceil(textWidth(face, size, text));
 		return { layer: 'collar', text, x, y, size, width: wide, face, hex: '#000000' };
 	};
-	const title = shortened('sans-bold', size, heading, width);
+	const [first] = room.rooms;
+	const title = shortened('sans-bold', size, heading, acrossAll(room, first.columns));
 	return [
-		...(title ? [set('sans-bold', title, places[0].x, places[0].y)] : []),
-		...names.slice(0, room.lines).flatMap((name, i) => {
-			const { x, y } = places[i + 1];
+		...(title ? [set('sans-bold', title, first.x, Math.round(first.y + size * 0.8))] : []),
+		...names.slice(0, places.length).flatMap((name, i) => {
+			const { x, y } = places[i];
 			const number = set('sans-bold', String(i + 1), x, y);
 			const start = Math.round(x + figures + size * 0.5);
 			const text = shortened('sans', size, name, x + width - start);

@@ -7,7 +7,7 @@ import type { LabelInput } from './label-sheet.ts';
 import { nameWays } from './name-ways.ts';
 import { nameOrder, neighbourCounts } from './order.ts';
 import { poleOf } from './pole.ts';
-import { rasterise } from './region-raster.ts';
+import { edge, outline, rasterise } from './region-raster.ts';
 import { labelFace, type NameTask } from './region-labels.ts';
 
 /** 1 for regions that border on nothing somewhere. */
@@ -44,13 +44,17 @@ function middleOf(arcs: SheetArcs, rings: Int32Array[]): { x: number; y: number 
  * the smallest: inside their region, or, on a coast, beside it.
  */
 export function nameTask(input: LabelInput, smallest: number): { task: NameTask; hopeful: number } {
-	const { arcs, rings, names, keys, box, lettering } = input;
-	const raster = rasterise(arcs, rings, box);
+	const { arcs, rings, names, keys, box, lettering, groups, sides } = input;
+	const groupAt = (region: number) => (region < 0 ? undefined : groups[region]);
+	const isEdge = (arc: number) => groupAt(sides.arcLeft[arc]) !== groupAt(sides.arcRight[arc]);
+	const raster = rasterise(arcs, rings, box, (arc) => (isEdge(arc) ? edge : outline));
 	const fixed = new Uint8Array(raster.owner.length);
 	for (const one of input.obstacles) occupy({ raster, busy: fixed }, one);
 	const coastal = coastalOf(input);
 	// no pole is sought where no name could stand anyway
-	const poles = rings.map((list) => (smallerSide(arcs, list) >= smallest / 2 ? poleOf(arcs, list) : null));
+	const poles = rings.map((list) =>
+		smallerSide(arcs, list) >= smallest / 2 ? poleOf(arcs, list) : null,
+	);
 	const anchors = poles.map((pole, region) => pole ?? middleOf(arcs, rings[region]));
 	poles.forEach((pole, region) => {
 		const at = anchors[region];
@@ -60,7 +64,7 @@ export function nameTask(input: LabelInput, smallest: number): { task: NameTask;
 	const hidden = new Set(lettering.hidden);
 	const known = (key: string) => numbers.get(key) ?? -1;
 	const figure =
-		lettering.priority === 'neighbours' ? neighbourCounts(input.sides, names.length) : input.areas;
+		lettering.priority === 'neighbours' ? neighbourCounts(sides, names.length) : input.areas;
 	const first = lettering.first.map(known).filter((region) => region >= 0);
 	const places = Object.entries(lettering.placed).filter(([key]) => !hidden.has(key));
 	const hand = places.map(([key, place]) => [known(key), place] as const);

@@ -1,7 +1,7 @@
 import type { DrawnText } from '../drawing.ts';
 import { isSetIn } from '../type/text-width.ts';
 import { headroom } from './headroom.ts';
-import { drawList, listRoom } from './name-list.ts';
+import { drawList, listRoom, type ListRoom } from './name-list.ts';
 import { keep, numberSpot, type NameTask } from './region-labels.ts';
 import type { SetName } from './set-name.ts';
 import { textBox } from './text-box.ts';
@@ -33,7 +33,13 @@ export function setNumbers(
 	const none = { numbered: [], list: [] };
 	const told = waiting.filter((region) => names[region] && isSetIn(face, names[region]));
 	if (!told.length) return none;
-	const room = listRoom(task.ground, told.map((region) => names[region]), scale);
+	const { busy } = task.ground;
+	const before = busy.slice();
+	const room = listRoom(
+		task.ground,
+		told.map((region) => names[region]),
+		scale,
+	);
 	if (!room.lines || (allOrNone && room.lines < told.length)) return none;
 	task.ground.room = headroom(task.ground.raster, task.ground.busy);
 	const widest = textBox(['8'.repeat(String(told.length).length)], face, size);
@@ -48,8 +54,28 @@ export function setNumbers(
 		numbered.push(name);
 	}
 	numbered.sort((a, b) => byName(names[a.region], names[b.region]) || a.region - b.region);
+	const listed = numbered.map(({ region }) => names[region]);
 	return {
 		numbered: numbered.map((name, i) => ({ ...name, box: textBox([String(i + 1)], face, size) })),
-		list: drawList(room, numbered.map(({ region }) => names[region])),
+		list: drawList(closest(task, before, room, numbered, names, scale), listed),
 	};
+}
+
+/** Room for just the names that are numbered, or what was kept for them where that turns out less. */
+function closest(
+	{ ground }: NameTask,
+	before: Uint8Array,
+	kept: ListRoom,
+	numbered: SetName[],
+	names: string[],
+	scale: number,
+): ListRoom {
+	ground.busy.set(before);
+	for (const name of numbered) keep(ground, name);
+	const room = listRoom(
+		ground,
+		numbered.map(({ region }) => names[region]),
+		scale,
+	);
+	return room.lines < numbered.length ? kept : room;
 }

@@ -3,7 +3,7 @@ import type { Pole } from './pole.ts';
 import type { TextBox } from './text-box.ts';
 
 /** Least part of a name that lies on its own region. */
-const mostlyOwn = 0.62;
+const mostlyOwn = 0.68;
 /** Places tried round the pole, in parts of the box across and down. */
 const across = [0, -0.12, 0.12, -0.24, 0.24];
 const down = [0, -0.3, 0.3];
@@ -12,7 +12,8 @@ const clear = 0.12;
 
 /**
  * The place round the pole where most of a name lies on its own region, the rest over its borders; it
- * covers no other name. Null where less than three fifths would.
+ * covers no other name, and crosses no coast and no border of the level above. Null where less than two
+ * thirds would. Source: Imhof 1975, names lie wholly on land or wholly on water.
  */
 export function spotOver(
 	ground: Ground,
@@ -26,7 +27,8 @@ export function spotOver(
 		for (const dx of across) {
 			const x = pole.x + dx * box.width;
 			const y = pole.y + dy * box.height;
-			const own = ownShare(ground, boxAround(x, y, box.width + pad, box.height + pad), region);
+			const around = boxAround(x, y, box.width + pad, box.height + pad);
+			const own = ownShare(ground, around, region, mostlyOwn);
 			if (own >= mostlyOwn && own > (best?.own ?? 0) + 0.02) best = { x, y, own };
 		}
 	}

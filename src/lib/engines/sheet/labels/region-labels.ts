@@ -50,7 +50,11 @@ function bestInside({ raster, room }: Ground, region: number, pole: Pole, boxes:
 	return best;
 }
 
-type Try = (region: number, pole: Pole, boxes: TextBox[]) => Omit<SetName, 'region' | 'short'> | null;
+type Try = (
+	region: number,
+	pole: Pole,
+	boxes: TextBox[],
+) => Omit<SetName, 'region' | 'short'> | null;
 
 const inside =
 	(ground: Ground): Try =>
@@ -120,7 +124,10 @@ export function handNames(task: NameTask, size: number): SetName[] {
 /** One line unless it is long: then the way that is nearest to three times as wide as high. */
 function narrowest(boxes: TextBox[]): TextBox | undefined {
 	const off = ({ width, height }: TextBox) => Math.abs(Math.log(width / (height * 3)));
-	return boxes.find(({ width, size }) => width < 9 * size) ?? boxes.toSorted((a, b) => off(a) - off(b))[0];
+	return (
+		boxes.find(({ width, size }) => width < 9 * size) ??
+		boxes.toSorted((a, b) => off(a) - off(b))[0]
+	);
 }
 
 /**
@@ -134,10 +141,12 @@ export function labelRegions(task: NameTask, size: number): SetName[] {
 	if (names.length) ground.room = headroom(ground.raster, ground.busy);
 	const rails: Rails = { right: [], left: [] };
 	let waiting = order.filter((region) => poles[region] && !task.hand.has(region));
+	const full = ways.map((one) => boxesOf(one.full, size));
+	const abbreviated = ways.map((one) => boxesOf(one.short, size));
 	const pass = (tried: Try, short: boolean) => {
 		waiting = waiting.filter((region) => {
-			const boxes = boxesOf(short ? ways[region].short : ways[region].full, size);
-			const found = tried(region, poles[region]!, boxes);
+			const boxes = short ? abbreviated[region] : full[region];
+			const found = boxes.length ? tried(region, poles[region]!, boxes) : null;
 			if (!found) return true;
 			const name = { region, short, ...found };
 			names.push(name);
@@ -160,7 +169,12 @@ export function labelRegions(task: NameTask, size: number): SetName[] {
 export function numberSpot(task: NameTask, region: number, box: TextBox, rails: Rails) {
 	const pole = task.poles[region];
 	if (!pole) return null;
-	for (const tried of [inside(task.ground), over(task.ground), beside(task), byLeader(task, rails)]) {
+	for (const tried of [
+		inside(task.ground),
+		over(task.ground),
+		beside(task),
+		byLeader(task, rails),
+	]) {
 		const found = tried(region, pole, [box]);
 		if (found) return found;
 	}

@@ -7,36 +7,39 @@ import type { SvgOptions } from './paint-svg.ts';
 /** Width of a halo in parts of the type size, on each side of the letter. */
 const halo = 0.11;
 
-/**
- * Texts of some layers, halos first as elements of their own: the order of painting within one element
- * is lost in some converters.
- */
+/** Texts of some layers, without their halos. */
 export function paintTexts(
 	{ texts }: Drawing,
 	layers: DrawnText['layer'][],
 	options: SvgOptions,
 ): string[] {
-	const chosen = texts.filter(({ layer }) => layers.includes(layer));
-	const halos = chosen
-		.filter((text) => text.halo)
-		.map((text) =>
-			element(
-				text,
-				`fill="none" stroke="${text.halo}" stroke-width="${Math.round(text.size * halo * 2)}" stroke-linejoin="round" aria-hidden="true"`,
-				options,
-			),
-		);
-	return [...halos, ...chosen.map((text) => element(text, `fill="${text.hex}"`, options))];
+	return texts
+		.filter(({ layer }) => layers.includes(layer))
+		.map((text) => element(text, `fill="${text.hex}"`, options));
+}
+
+/**
+ * Halos of the names, elements of their own: the order of painting within one element is lost in some
+ * converters, and they lie under the border lines, which must stay whole.
+ */
+export function paintHalos({ texts }: Drawing, options: SvgOptions): string[] {
+	return texts.flatMap((text) => {
+		if (text.layer !== 'label' || !text.halo) return [];
+		const width = Math.round(text.size * halo * 2);
+		const stroke = `fill="none" stroke="${text.halo}" stroke-width="${width}"`;
+		return element(text, `${stroke} stroke-linejoin="round"`, options);
+	});
 }
 
 function element(text: DrawnText, paint: string, { fills }: SvgOptions): string {
 	const { family, fallback, weight, italic } = faceStyles[text.face];
 	// without a style block kerning cannot be switched off, so the width is held by this attribute
-	const held = fills === 'attribute' || !isSetIn(text.face, text.text);
+	const held = !text.spacing && (fills === 'attribute' || !isSetIn(text.face, text.text));
 	const set =
 		fills === 'class'
 			? `class="${text.face}"`
 			: `font-family="'${family}','${family} Variable',${fallback}" font-weight="${weight}"${italic ? ' font-style="italic"' : ''}`;
 	const length = held && text.width > 0 ? ` textLength="${text.width}"` : '';
-	return `<text ${set} x="${text.x}" y="${text.y}" font-size="${text.size}"${length} ${paint}>${escapeXml(text.text)}</text>`;
+	const apart = text.spacing ? ` letter-spacing="${text.spacing}"` : '';
+	return `<text ${set}${apart} x="${text.x}" y="${text.y}" font-size="${text.size}"${length} ${paint}>${escapeXml(text.text)}</text>`;
 }
