@@ -10,6 +10,7 @@ import { collar } from './collar/collar.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
+import { hatchShapes } from './hatch/hatch-shapes.ts';
 import { labelSheet, unlettered } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
@@ -39,6 +40,8 @@ export interface SheetInput {
 	issue: string;
 	/** the classes of a measure, shown in place of the colouring and its inks */
 	theme?: SheetTheme | null;
+	/** leaves hatches out, where a painter cuts them itself tile by tile */
+	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
 }
@@ -99,7 +102,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		});
 		return around.map;
 	});
-	const { map, texts, legend, bar, scale } = around!;
+	const { map, texts, legend, bar, scale, blocks, obstacles } = around!;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
@@ -107,13 +110,13 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		? labelSheet({
 				...{ arcs, rings, sides, groups, scale, names: lettered(input) },
 				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
-				...{ box: map, obstacles: [], paper: paperBox(layout) },
+				...{ box: map, obstacles, paper: paperBox(layout) },
 			})
 		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
-	const measured = drawScale(placed, map, bar);
+	const measured = drawScale(placed, bar);
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
@@ -123,11 +126,24 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		...withLeaders(arcs, labels.leaders),
 		fills,
 		lines: [
-			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+			...lineLayers({
+				...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
+				look: layout.lines,
+				see: (hex) => see(hex, reader),
+			}),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
-		shapes: [],
-		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
+		shapes: [
+			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, (hex) => see(hex, reader))),
+			...blocks.flatMap(({ ground }) => ground ?? []),
+		],
+		texts: [
+			...inkLabels(labels.texts, fills),
+			...texts,
+			...measured.texts,
+			...keys.texts,
+			...blocks.flatMap((block) => block.texts),
+		],
 		rects: [...measured.rects, ...keys.rects],
 		unplaced: labels.unplaced,
 		lettering: labels.lettering,

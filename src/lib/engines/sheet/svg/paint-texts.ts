@@ -5,33 +5,44 @@ import { escapeXml } from './escape.ts';
 import type { SvgOptions } from './paint-svg.ts';
 
 /** Width of a halo in parts of the type size, on each side of the letter. */
-const halo = 0.11;
+export const haloShare = 0.11;
 
-/** Texts of some layers, without their halos. */
+/**
+ * Texts of some layers, halos first as elements of their own: the order of painting within one element
+ * is lost in some converters. Those of names are painted by `paintHalos`.
+ */
 export function paintTexts(
 	{ texts }: Drawing,
 	layers: DrawnText['layer'][],
 	options: SvgOptions,
 ): string[] {
-	return texts
-		.filter(({ layer }) => layers.includes(layer))
-		.map((text) => element(text, `fill="${text.hex}"`, options));
+	const chosen = texts.filter(({ layer }) => layers.includes(layer));
+	const around = chosen.filter(({ layer }) => layer !== 'label');
+	const letters = chosen.map((text) => element(text, `fill="${text.hex}"`, options));
+	return [...halosOf(around, options), ...letters].filter((one) => one !== '');
 }
 
-/**
- * Halos of the names, elements of their own: the order of painting within one element is lost in some
- * converters, and they lie under the border lines, which must stay whole.
- */
-export function paintHalos({ texts }: Drawing, options: SvgOptions): string[] {
-	return texts.flatMap((text) => {
-		if (text.layer !== 'label' || !text.halo) return [];
-		const width = Math.round(text.size * halo * 2);
-		const stroke = `fill="none" stroke="${text.halo}" stroke-width="${width}"`;
-		return element(text, `${stroke} stroke-linejoin="round"`, options);
-	});
-}
+/** Halos of the names, which lie under the border lines: those stay whole. */
+export const paintHalos = ({ texts }: Drawing, options: SvgOptions): string[] =>
+	halosOf(
+		texts.filter(({ layer }) => layer === 'label'),
+		options,
+	).filter((one) => one !== '');
 
-function element(text: DrawnText, paint: string, { fills }: SvgOptions): string {
+const halosOf = (texts: DrawnText[], options: SvgOptions): string[] =>
+	texts
+		.filter((text) => text.halo)
+		.map((text) =>
+			element(
+				text,
+				`fill="none" stroke="${text.halo}" stroke-width="${Math.round(text.size * haloShare * 2)}" stroke-linejoin="round" aria-hidden="true"`,
+				options,
+			),
+		);
+
+function element(text: DrawnText, paint: string, options: SvgOptions): string {
+	const { fills, outline } = options;
+	if (outline) return outlined(text, paint, outline(text));
 	const { family, fallback, weight, italic } = faceStyles[text.face];
 	// without a style block kerning cannot be switched off, so the width is held by this attribute
 	const held = !text.spacing && (fills === 'attribute' || !isSetIn(text.face, text.text));
@@ -42,4 +53,11 @@ function element(text: DrawnText, paint: string, { fills }: SvgOptions): string 
 	const length = held && text.width > 0 ? ` textLength="${text.width}"` : '';
 	const apart = text.spacing ? ` letter-spacing="${text.spacing}"` : '';
 	return `<text ${set}${apart} x="${text.x}" y="${text.y}" font-size="${text.size}"${length} ${paint}>${escapeXml(text.text)}</text>`;
+}
+
+/** Letters drawn as a path: what they say stands in its label. */
+function outlined({ text }: DrawnText, paint: string, path: string): string {
+	if (path === '') return '';
+	const words = paint.includes('aria-hidden') ? '' : ` role="img" aria-label="${escapeXml(text)}"`;
+	return `<path${words} ${paint} d="${path}"/>`;
 }
