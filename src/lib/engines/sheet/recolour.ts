@@ -3,7 +3,9 @@ import type { Ink, Reader } from '../palettes/palette.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import { fillHex, inkLabels, inksInUse } from './draw-sheet.ts';
-import type { Drawing } from './drawing.ts';
+import type { Drawing, LineLayer } from './drawing.ts';
+import { hatchShapes } from './hatch/hatch-shapes.ts';
+import type { DrawnShape } from './shapes.ts';
 
 /**
  * The same sheet in other colours: geometry, lettering and collar stay where they are and are shared
@@ -28,13 +30,17 @@ export function recolour(
 		const ink = colouring ? colouring[fill.region] : -1;
 		return { ...fill, ink, hex: fillHex(ink, drawn) };
 	});
-	const { legend } = drawing;
-	const keys = legend ? drawLegend(legend, drawn, inksInUse(fills)) : { rects: [], texts: [] };
+	const see = (hex: string) => asSeenBy(hex, reader);
+	const lines = seenLines(drawing, see);
+	const shown = { inks: drawn, fills, lines };
+	const keys = drawLegend(drawing.legend, shown, inksInUse(fills), see);
 	const next = {
 		...drawing,
 		reader,
 		inks: drawn,
 		fills,
+		lines,
+		shapes: newShapes({ ...drawing, fills, inks: drawn }, keys.shapes, see),
 		texts: [
 			...inkLabels(
 				drawing.texts.filter(({ layer }) => layer !== 'legend'),
@@ -45,4 +51,28 @@ export function recolour(
 		rects: [...drawing.rects.filter(({ layer }) => layer !== 'legend'), ...keys.rects],
 	};
 	return { ...next, description: describe(next) };
+}
+
+/** Hatches and samples in the legend made anew among the shapes that stay; the list stays where there are none. */
+function newShapes(
+	drawing: Drawing,
+	samples: DrawnShape[],
+	see: (hex: string) => string,
+): DrawnShape[] {
+	const others = drawing.shapes.filter(({ layer }) => layer !== 'hatch' && layer !== 'legend');
+	const hatches = hatchShapes(drawing, see);
+	const tinted = others.some(({ set }) => set !== undefined);
+	const kept = others.length === drawing.shapes.length && !tinted;
+	if (kept && !hatches.length && !samples.length) return drawing.shapes;
+	const shown = others.map((shape) =>
+		shape.set === undefined ? shape : { ...shape, fill: see(shape.set) },
+	);
+	return [...hatches, ...shown, ...samples];
+}
+
+/** Lines of a colour of their own as the reader sees them; the list itself stays where none changes. */
+function seenLines({ lines }: Drawing, see: (hex: string) => string): LineLayer[] {
+	const differs = lines.some(({ hex, own }) => own !== undefined && see(own) !== hex);
+	if (!differs) return lines;
+	return lines.map((line) => (line.own === undefined ? line : { ...line, hex: see(line.own) }));
 }

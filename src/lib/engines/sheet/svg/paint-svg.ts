@@ -9,7 +9,7 @@ import { escapeXml } from './escape.ts';
 import { paintFills } from './paint-fills.ts';
 import { paintShapes } from './paint-shapes.ts';
 import { paintTexts } from './paint-texts.ts';
-import { linesPath } from './path-data.ts';
+import { chainsPath, linesPath } from './path-data.ts';
 import { styleBlock } from './style-block.ts';
 import type { EmbeddedFace } from './style-block.ts';
 
@@ -91,10 +91,13 @@ function layer(prefix: string, name: string, attributes: string, content: string
 }
 
 function paintLines(drawing: Drawing, prefix: string): string[] {
-	const lines = drawing.lines.map(({ rank, width, hex, dash, arcs }) => {
+	const lines = drawing.lines.map(({ rank, width, hex, dash, arcs, chains }) => {
 		const dashes = dash ? ` stroke-dasharray="${dash.join(' ')}"` : '';
 		const name = lineNames[rank] ?? rank;
-		return `<g id="${escapeXml(prefix + name)}" stroke="${hex}" stroke-width="${width}"${dashes}><path d="${linesPath(drawing, arcs)}"/></g>`;
+		const path = chains ? chainsPath(drawing, chains) : linesPath(drawing, arcs);
+		// round ends would close the gaps of a fine dash
+		const cap = dash ? ' stroke-linecap="butt"' : '';
+		return `<g id="${escapeXml(prefix + name)}" stroke="${hex}" stroke-width="${width}"${dashes}${cap}><path d="${path}"/></g>`;
 	});
 	const attributes =
 		' fill="none" stroke-linejoin="round" stroke-linecap="round" aria-hidden="true"';
