@@ -1,5 +1,7 @@
 import { csvField } from '../measures/text/csv-field.ts';
 import type { SheetRow } from '../sheet/index.ts';
+import { headingOf } from './data-table.ts';
+import type { ExtraColumn } from './source.ts';
 
 export { csvField };
 
@@ -7,11 +9,15 @@ const columns = ['key', 'name', 'group', 'ink number', 'ink', 'hex', 'area km2']
 
 /**
  * The sheet as a table: RFC 4180, UTF-8, one line a region in region order, ink numbers from 1 as in
- * the legend, areas to the hundredth of a square kilometre. `byteOrderMark` helps spreadsheets that
+ * the legend, areas to the hundredth of a square kilometre, then the further columns. `byteOrderMark` helps spreadsheets that
  * would otherwise misread accents; data pipelines do better without. Byte for byte repeatable.
  */
-export function exportCsv(rows: SheetRow[], options: { byteOrderMark?: boolean } = {}): Uint8Array {
-	const lines = rows.map(({ key, name, group, inkNumber, inkName, hex, areaKm2 }) => [
+export function exportCsv(
+	rows: SheetRow[],
+	options: { byteOrderMark?: boolean } = {},
+	more: readonly ExtraColumn[] = [],
+): Uint8Array {
+	const lines = rows.map(({ region, key, name, group, inkNumber, inkName, hex, areaKm2 }) => [
 		key,
 		name,
 		group,
@@ -19,7 +25,9 @@ export function exportCsv(rows: SheetRow[], options: { byteOrderMark?: boolean }
 		inkName,
 		hex,
 		Math.round(areaKm2 * 100) / 100,
+		...more.map(({ values }) => values[region]),
 	]);
-	const text = [columns, ...lines].map((line) => `${line.map(csvField).join(',')}\r\n`).join('');
+	const headings = [...columns, ...more.map(headingOf)];
+	const text = [headings, ...lines].map((line) => `${line.map(csvField).join(',')}\r\n`).join('');
 	return new TextEncoder().encode(options.byteOrderMark ? `\ufeff${text}` : text);
 }
