@@ -5,6 +5,7 @@ import type { Reader } from '../../engines/palettes/index.ts';
 import type { Member } from '../access/member.ts';
 import type { SheetRecord } from '../repositories/sheets.repository.ts';
 import type { ExportGround } from './export-ground.ts';
+import { sheetLanguage } from '../jobs/sheet-language.ts';
 import { exportStem, issueWords } from './export-words.ts';
 
 /** A request as it is stored: everything that decides the bytes is said. */
@@ -34,7 +35,7 @@ export function aboutExport(
 		digest,
 		credits: draft.layout.credits,
 		stem: exportStem(taken),
-		language: 'en',
+		language: sheetLanguage,
 	};
 }
 
