@@ -14,6 +14,7 @@ import type { Evidence } from './evidence';
 import { Flatness } from './flatness.svelte';
 import { inkUse } from './ink-use';
 import { keeperWithInks, type Keeper } from './kept-drafts';
+import { NameHand } from './name-hand.svelte';
 import { OnTrial } from './on-trial.svelte';
 import { judgePalette } from './palette-judgement';
 import { problemOf } from './problem-of-draft';
@@ -23,6 +24,7 @@ import { numberRegions } from './rules-in-force';
 import type { SaveWithInks } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
 import { RuleHand } from './rule-hand.svelte';
+import { ThemeOnDesk } from './theme-on-desk.svelte';
 import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
@@ -78,6 +80,8 @@ export class Desk {
 	});
 	/** what the hand holds while rules are made */
 	readonly rules = new RuleHand(this);
+	/** the names of the sheet, moved and hidden by hand while the layout is open */
+	readonly names = new NameHand(this);
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
@@ -125,11 +129,13 @@ export class Desk {
 	);
 	/** what is planned on the sheet now, when it is territories */
 	planning = $derived(this.byTerritory ? this.territories : null);
-	/** what the sheet paints: the ink of every region, or of its territory */
-	paints = $derived(this.planning?.regionInks ?? this.inks);
-	uses = $derived.by(() =>
-		inkUse(this.paints, this.sheet.regions.areaKm2, this.shown.palette.inks.length),
-	);
+	/** the measure that the sheet shows in place of its colouring */
+	readonly theme = new ThemeOnDesk(this);
+	/** what the sheet paints: the ink of every region, of its territory, or its class of a measure */
+	paints = $derived.by(() => this.planning?.regionInks ?? this.theme.shown?.classes ?? this.inks);
+	/** the inks that these numbers name */
+	shownInks = $derived.by(() => this.theme.shown?.inks ?? this.shown.palette.inks);
+	uses = $derived.by(() => inkUse(this.paints, this.sheet.regions.areaKm2, this.shownInks.length));
 
 	constructor(start: DeskStart) {
 		const { sheet } = start;

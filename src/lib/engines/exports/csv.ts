@@ -9,25 +9,28 @@ const columns = ['key', 'name', 'group', 'ink number', 'ink', 'hex', 'area km2']
 
 /**
  * The sheet as a table: RFC 4180, UTF-8, one line a region in region order, ink numbers from 1 as in
- * the legend, areas to the hundredth of a square kilometre, then the further columns. `byteOrderMark` helps spreadsheets that
- * would otherwise misread accents; data pipelines do better without. Byte for byte repeatable.
+ * the legend, areas to the hundredth of a square kilometre, then the further columns. `byteOrderMark` helps
+ * spreadsheets that would otherwise misread accents; data pipelines do better without. A themed sheet adds
+ * class and range of each region, never its figure. Byte for byte repeatable.
  */
 export function exportCsv(
 	rows: SheetRow[],
 	options: { byteOrderMark?: boolean } = {},
 	more: readonly ExtraColumn[] = [],
 ): Uint8Array {
-	const lines = rows.map(({ region, key, name, group, inkNumber, inkName, hex, areaKm2 }) => [
-		key,
-		name,
-		group,
-		inkNumber,
-		inkName,
-		hex,
-		Math.round(areaKm2 * 100) / 100,
-		...more.map(({ values }) => values[region]),
+	const themed = rows.some(({ theme }) => theme);
+	const headings = [...columns, ...(themed ? ['class', 'range'] : []), ...more.map(headingOf)];
+	const lines = rows.map((row) => [
+		row.key,
+		row.name,
+		row.group,
+		row.inkNumber,
+		row.inkName,
+		row.hex,
+		Math.round(row.areaKm2 * 100) / 100,
+		...(themed ? [row.theme?.class, row.theme?.range] : []),
+		...more.map(({ values }) => values[row.region]),
 	]);
-	const headings = [...columns, ...more.map(headingOf)];
 	const text = [headings, ...lines].map((line) => `${line.map(csvField).join(',')}\r\n`).join('');
 	return new TextEncoder().encode(options.byteOrderMark ? `\ufeff${text}` : text);
 }

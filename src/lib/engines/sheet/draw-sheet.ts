@@ -10,20 +10,24 @@ import { arrange } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
-import { labelSheet } from './labels/label-sheet.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
+import { labelSheet, unlettered } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
-import { paperSize } from './paper.ts';
+import { paperBox, paperSize } from './paper.ts';
 import type { Placement } from './place-on-paper.ts';
+import { drawFrame } from './frame/draw-frame.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
+import { legendInks, themedInput, type SheetTheme } from './themed.ts';
 import { cleanText } from './type/clean-text.ts';
 
 export interface SheetInput {
 	coverage: Coverage;
 	borders: BorderList;
+	/** what the column of names says of every region, where names are taken from one */
+	named?: (string | null)[] | null;
 	/** the level above, one a region: a province's name, or null */
 	groups: (string | null)[];
 	/** ink number from 0 for every region; null while nothing is coloured */
@@ -42,18 +46,6 @@ export interface SheetInput {
 	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
-}
-
-/** A themed map as the sheet needs it: figures are no part of it. */
-export interface SheetTheme {
-	/** class of every region, a number into `inks` */
-	classes: Int32Array;
-	/** an ink a class, named by its range; after them those of regions that are not told */
-	inks: Ink[];
-	/** heading of the legend */
-	title: string;
-	/** how the classes were made, in a sentence */
-	note: string;
 }
 
 /** Regions without an ink: a neutral that no palette is made of. */
@@ -82,29 +74,24 @@ export function inksInUse(fills: { ink: number }[]): number[] {
 export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawing;
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
-export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
-	const { coverage, layout, reader, colouring, weak, groups } = input;
+export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Placement } {
+	const input = themedInput(asked);
+	const { coverage, layout, reader, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
 	const seenNow = (hex: string) => see(hex, reader);
 	const inks = input.inks.map((ink) => ({ ...ink, shown: seenNow(ink.hex) }));
 	const { placed, around, legend, obstacles, grounds, legendNote } = arrange(input, inks);
-	const { map, texts, bar, scale, blocks } = around;
+	const { texts, bar, scale, blocks } = around;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
 		? labelSheet({
-				arcs,
-				rings,
-				sides,
-				names,
-				groups,
-				areas: coverage.areasKm2,
-				box: map,
-				scale,
-				obstacles,
+				...{ arcs, rings, sides, groups, scale, names: lettered(input) },
+				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
+				...{ box: placed.box, obstacles, paper: paperBox(layout) },
 			})
-		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
+		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const lines = [
@@ -115,8 +102,12 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		}),
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
-	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
+	const keys = drawLegend(legend, { inks, fills, lines }, legendInks(fills, input.themed), seenNow);
 	const measured = drawScale(placed, bar);
+	const frame = drawFrame({
+		...{ coverage, groups, layout, placed, scale, reader, see },
+		labels: labels.texts,
+	});
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
@@ -128,6 +119,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		lines,
 		shapes: [
 			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, seenNow)),
+			...frame.shapes,
 			...grounds,
 			...keys.shapes,
 		],
@@ -135,16 +127,29 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			...inkLabels(labels.texts, fills),
 			...texts,
 			...measured.texts,
+			...frame.texts,
 			...keys.texts,
 			...blocks.flatMap((block) => block.texts),
 		],
-		rects: [...measured.rects, ...keys.rects],
+		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,
-		notes: { projection: placed.chosen.sentence, scale: measured.sentence, legend: legendNote },
+		lettering: labels.lettering,
+		notes: {
+			projection: placed.chosen.sentence,
+			scale: measured.sentence,
+			insets: frame.sentence,
+			legend: legendNote,
+		},
+		frame: frame.report,
 		legend,
+		...(input.themed && { themed: input.themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
+
+/** The names to be set: as a column has them, where it has one, composed as fonts hold letters. */
+const lettered = ({ coverage, named }: SheetInput): string[] =>
+	coverage.names.map((name, region) => cleanText(named?.[region] ?? name).normalize('NFC'));
 
 function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][]): RegionFill[] {
 	const { coverage, colouring, locked } = input;
@@ -163,14 +168,16 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 	});
 }
 
-/** Black or white for every label that stands on a fill, whichever reads better. */
-export function inkLabels<T extends { region?: number; onFill?: boolean; hex: string }>(
-	texts: T[],
-	fills: RegionFill[],
-): T[] {
-	return texts.map((text) =>
-		text.onFill && text.region !== undefined
-			? { ...text, hex: labelInk(fills[text.region].hex) }
-			: text,
-	);
+/**
+ * Black or white for every label that stands on a fill, whichever reads better; one that goes over the
+ * border keeps its fill around its letters.
+ */
+export function inkLabels<
+	T extends { region?: number; onFill?: boolean; hex: string; halo?: string },
+>(texts: T[], fills: RegionFill[]): T[] {
+	return texts.map((text) => {
+		if (!text.onFill || text.region === undefined) return text;
+		const { hex } = fills[text.region];
+		return { ...text, hex: labelInk(hex), ...(text.halo ? { halo: hex } : {}) };
+	});
 }

@@ -2,10 +2,11 @@ import { asSeenBy as seen } from '../colour/index.ts';
 import type { Ink, Reader } from '../palettes/palette.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-import { fillHex, inkLabels, inksInUse } from './draw-sheet.ts';
+import { fillHex, inkLabels } from './draw-sheet.ts';
 import type { Drawing, LineLayer } from './drawing.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { DrawnShape } from './shapes.ts';
+import { legendInks } from './themed.ts';
 
 /**
  * The same sheet in other colours: geometry, lettering and collar stay where they are and are shared
@@ -33,7 +34,7 @@ export function recolour(
 	const see = (hex: string) => asSeenBy(hex, reader);
 	const lines = seenLines(drawing, see);
 	const shown = { inks: drawn, fills, lines };
-	const keys = drawLegend(drawing.legend, shown, inksInUse(fills), see);
+	const keys = drawLegend(drawing.legend, shown, legendInks(fills, drawing.themed), see);
 	const next = {
 		...drawing,
 		reader,
@@ -61,8 +62,13 @@ function newShapes(
 ): DrawnShape[] {
 	const others = drawing.shapes.filter(({ layer }) => layer !== 'hatch' && layer !== 'legend');
 	const hatches = hatchShapes(drawing, see);
-	const same = others.length === drawing.shapes.length && !hatches.length && !samples.length;
-	return same ? drawing.shapes : [...hatches, ...others, ...samples];
+	const tinted = others.some(({ set }) => set !== undefined);
+	const kept = others.length === drawing.shapes.length && !tinted;
+	if (kept && !hatches.length && !samples.length) return drawing.shapes;
+	const shown = others.map((shape) =>
+		shape.set === undefined ? shape : { ...shape, fill: see(shape.set) },
+	);
+	return [...hatches, ...shown, ...samples];
 }
 
 /** Lines of a colour of their own as the reader sees them; the list itself stays where none changes. */

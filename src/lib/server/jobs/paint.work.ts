@@ -4,8 +4,9 @@ import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts
 import type { Draft } from '../../engines/editions/draft.ts';
 import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
-import { drawSheet, sheetTable } from '../../engines/sheet/index.ts';
+import { drawSheet, sheetTable, type SheetTheme } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
+import { sheetLanguage } from './sheet-language.ts';
 import type { Task } from './task-port.ts';
 
 export interface PaintInput {
@@ -17,6 +18,8 @@ export interface PaintInput {
 	groups: (string | null)[];
 	/** ink of each region; null while nothing is coloured */
 	colouring: number[] | null;
+	/** the classes of a measure, shown in place of it; null for none */
+	theme: SheetTheme | null;
 	reader: Reader;
 	/** what is issued and when, in words */
 	issue: string;
@@ -25,7 +28,7 @@ export interface PaintInput {
 /** A region whose ink the palette lacks is drawn as not coloured. */
 export function drawInput(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
-	const { draft, groups, reader, issue } = input;
+	const { draft, groups, reader, issue, theme } = input;
 	const { layout } = draft;
 	const { inks } = draft.palette;
 	const borders = bordersForSheet(coverage.keys, input.borders, draft);
@@ -34,7 +37,7 @@ export function drawInput(input: PaintInput) {
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
 	const drawing = drawSheet({
 		...{ coverage, borders, groups, inks, layout, reader, issue },
-		...{ colouring, locked, weak: [] },
+		...{ colouring, theme, locked, weak: [] },
 	});
 	return { coverage, drawing };
 }
@@ -58,7 +61,7 @@ export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 		{
 			extension: 'svg',
 			mediaType: 'image/svg+xml',
-			bytes: exportSvg(drawing, { fonts: faceFiles() }),
+			bytes: exportSvg(drawing, { fonts: faceFiles(), language: sheetLanguage }),
 		},
 		{
 			extension: 'geojson',

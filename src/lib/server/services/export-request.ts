@@ -5,6 +5,8 @@ import type { Reader } from '../../engines/palettes/index.ts';
 import type { Member } from '../access/member.ts';
 import type { SheetRecord } from '../repositories/sheets.repository.ts';
 import type { ExportGround } from './export-ground.ts';
+import { sheetLanguage } from '../jobs/sheet-language.ts';
+import { themeTag } from './theme-on-sheet.ts';
 import { exportStem, issueWords } from './export-words.ts';
 
 /** A request as it is stored: everything that decides the bytes is said. */
@@ -34,7 +36,7 @@ export function aboutExport(
 		digest,
 		credits: draft.layout.credits,
 		stem: exportStem(taken),
-		language: 'en',
+		language: sheetLanguage,
 	};
 }
 
@@ -42,9 +44,13 @@ export function aboutExport(
 export function requestDigest(
 	asked: ExportRequest,
 	about: ExportAbout,
-	boundarySetId: string,
+	{ view, theme }: Pick<ExportGround, 'view' | 'theme'>,
 ): string {
 	const { edition, revision, kind, options, reader } = asked;
-	const said = { ...{ edition, revision, kind, options, reader, about, boundarySetId } };
+	const boundarySetId = view.set.id;
+	const said = {
+		...{ edition, revision, kind, options, reader, about, boundarySetId },
+		...(theme && { theme: themeTag(theme) }),
+	};
 	return createHash('sha256').update(canonicalJson(said)).digest('hex');
 }
