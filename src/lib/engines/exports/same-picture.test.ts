@@ -48,7 +48,7 @@ describe.each([
 		pictures.svg = svgPicture(source, pixels.width);
 		const png = await exportPng(source, { dpi, ground: 'white' }, pixels.width, rasterise);
 		pictures.png = PNG.sync.read(Buffer.from(png));
-		pictures.pdf = pdfPicture(await exportPdf(source, { layers: true }), dpi);
+		pictures.pdf = fitted(pdfPicture(await exportPdf(source, { layers: true }), dpi), pixels);
 	}, 240_000);
 
 	it('is the same picture as SVG, text set as text, and as PNG', () => {
