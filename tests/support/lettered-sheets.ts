@@ -22,3 +22,20 @@ export async function tavaroeSheet(grouped = true): Promise<SheetInput> {
 		...(grouped ? { groups: provinces } : {}),
 	});
 }
+
+/** A square of six regions in two rows with the names given, some kilometres across. */
+export function namedSheet(names: string[]): SheetInput {
+	const coverage = squares(names, (i) => [(i % 3) * 0.3, Math.floor(i / 3) * 0.3, 0.3]);
+	return sheetOf(coverage, on('A4'));
+}
+
+/** A chain of islands, too small for their names, along a curve. */
+export function islandsSheet(): SheetInput {
+	const names = Array.from({ length: 24 }, (_, i) => `Isle of ${'ABCDEFGH'[i % 8]}orrin${i + 1}`);
+	const coverage = squares(names, (i) => [
+		4 * Math.cos(i / 8),
+		4 * Math.sin(i / 8) + 50,
+		0.04 + 0.02 * (i % 3),
+	]);
+	return sheetOf(coverage, on('A4'));
+}

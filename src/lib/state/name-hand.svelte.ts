@@ -2,18 +2,8 @@ import type { DrawnText } from '$lib/engines/sheet/drawing';
 import { noAnchor } from '$lib/engines/sheet/labels/set-name';
 import type { PlacedName } from '$lib/engines/sheet/layout/lettering';
 import type { Desk } from './desk.svelte';
+import { nameBoxes, type NameBox } from './name-boxes';
 import { abbreviate, hideNames, letNames, placeName } from './name-edits';
-
-/** A box on the paper, in hundredths of a millimetre. */
-export interface NameBox {
-	left: number;
-	top: number;
-	right: number;
-	bottom: number;
-}
-
-/** Parts of the type size above and below a baseline. */
-const [rise, drop] = [0.74, 0.23];
 
 /** The names of a sheet in somebody's hand, while its layout is open: moved, hidden, abbreviated. */
 export class NameHand {
@@ -53,13 +43,7 @@ export class NameHand {
 	#drawnBoxes(): Map<number, NameBox> {
 		const texts = this.desk.drawn?.drawing.texts ?? [];
 		if (this.#boxes?.of === texts) return this.#boxes.boxes;
-		const boxes = new Map<number, NameBox>();
-		for (const { layer, region, x, y, width, size } of texts) {
-			if (layer !== 'label' || region === undefined) continue;
-			const box = { left: x, top: y - rise * size, right: x + width, bottom: y + drop * size };
-			const whole = boxes.get(region);
-			boxes.set(region, whole ? joined(whole, box) : box);
-		}
+		const boxes = nameBoxes(texts);
 		this.#boxes = { of: texts, boxes };
 		return boxes;
 	}
@@ -122,11 +106,5 @@ export class NameHand {
 	}
 }
 
-const joined = (a: NameBox, b: NameBox): NameBox => ({
-	left: Math.min(a.left, b.left),
-	top: Math.min(a.top, b.top),
-	right: Math.max(a.right, b.right),
-	bottom: Math.max(a.bottom, b.bottom),
-});
 const inMm = (units: number): number => tidy(units / 100);
 const tidy = (mm: number): number => Math.round(mm * 100) / 100;

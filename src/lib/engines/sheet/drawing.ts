@@ -1,4 +1,5 @@
 import type { Ink, Reader } from '../palettes/palette.ts';
+import type { FrameReport } from './frame-report.ts';
 import type { DrawnLettering } from './labels/set-name.ts';
 import type { DrawnShape } from './shapes.ts';
 
@@ -35,8 +36,10 @@ export interface Drawing {
 	unplaced: number[];
 	/** how every name is set, and what is to be told of that */
 	lettering: DrawnLettering;
-	/** longer sentences about the drawing: projection, scale, how true the bar is */
-	notes: { projection: string; scale: string; legend: string };
+	/** longer sentences about the drawing: projection, scale and how true the bar is, insets, legend */
+	notes: { projection: string; scale: string; insets: string; legend: string };
+	/** what the frame came to, and what could not be done as asked */
+	frame: FrameReport;
 	/** where the legend stands, so that it can be set anew when the inks in use change */
 	legend: LegendPlace | null;
 }
