@@ -1,6 +1,7 @@
 import type { DrawnText } from '$lib/engines/sheet/drawing';
 import { noAnchor } from '$lib/engines/sheet/labels/set-name';
 import type { PlacedName } from '$lib/engines/sheet/layout/lettering';
+import type { ColumnValues } from '$lib/schemas/column-values';
 import type { Desk } from './desk.svelte';
 import { nameBoxes, type NameBox } from './name-boxes';
 import { abbreviate, hideNames, letNames, placeName } from './name-edits';
@@ -13,6 +14,11 @@ export class NameHand {
 	dragged: { region: number; dx: number; dy: number } | null = $state.raw(null);
 	/** for the live region: what the last gesture came to */
 	spoken = $state('');
+	/** names as a column of the boundary file has them; null: the sheet's own */
+	named: (string | null)[] | null = $state.raw(null);
+	/** why they could not be fetched; '' while all is well */
+	trouble = $state('');
+	#column: string | null = null;
 	#boxes: { of: readonly DrawnText[]; boxes: Map<number, NameBox> } | null = null;
 
 	constructor(private readonly desk: Desk) {}
@@ -27,6 +33,24 @@ export class NameHand {
 		return this.#layout.lettering;
 	}
 	keyOf = (region: number): string => this.desk.sheet.regions.key[region];
+
+	/** Fetches the names of a column of the boundary file; null goes back to the sheet's own. */
+	async takeFrom(column: string | null): Promise<void> {
+		if (column === this.#column) return;
+		this.#column = column;
+		this.trouble = '';
+		if (column === null) {
+			this.named = null;
+			return;
+		}
+		const query = new URLSearchParams({ name: column });
+		const response = await fetch(`${this.desk.address}/column?${query}`).catch(() => null);
+		const read = response?.ok ? ((await response.json()) as ColumnValues) : null;
+		if (this.#column !== column) return;
+		this.named = read?.values ?? null;
+		if (!read)
+			this.trouble = `The column ${column} could not be fetched; names are the sheet's own.`;
+	}
 
 	/** Where the name of a region stands as drawn; null for one that is not on the sheet. */
 	boxOf(region: number): NameBox | null {
