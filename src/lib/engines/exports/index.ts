@@ -1,4 +1,4 @@
-/** A sheet or an edition as files: SVG, GeoJSON, CSV. Bytes out, the same for the same input. */
+/** A sheet or an edition as files of every kind in `kinds.ts`. Bytes out, the same for the same input. */
 export { exportSvg, type FaceFiles } from './svg.ts';
 export { exportGeoJson } from './geojson.ts';
 export { exportBordersCol, exportBordersCsv, type BordersOut } from './borders.ts';
@@ -29,3 +29,6 @@ export type {
 	ExportTools,
 	ExtraColumn,
 } from './source.ts';
+export { territoryColumns, themeColumns } from './columns.ts';
+export { exportPdf } from './pdf/pdf.ts';
+export { pixelsOf } from './png/png.ts';

@@ -6,6 +6,7 @@ import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index
 import type { Reader } from '../../engines/palettes/index.ts';
 import { drawSheet, sheetTable, type SheetTheme } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
+import { sheetLanguage } from './sheet-language.ts';
 import type { Task } from './task-port.ts';
 
 export interface PaintInput {
@@ -62,7 +63,7 @@ export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 		{
 			extension: 'svg',
 			mediaType: 'image/svg+xml',
-			bytes: exportSvg(drawing, { fonts: faceFiles() }),
+			bytes: exportSvg(drawing, { fonts: faceFiles(), language: sheetLanguage }),
 		},
 		{
 			extension: 'geojson',
