@@ -51,6 +51,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 					inks: inks.map((ink) => ({ ...ink })),
 					borders,
 					groups: regions.group,
+					named: desk.names.named,
 					colouring: desk.inks.some((ink) => ink >= 0)
 						? desk.inks.map((ink) => (ink < inks.length ? ink : -1))
 						: null,

@@ -16,6 +16,8 @@ export interface PaintInput {
 	borders: BorderList;
 	draft: Draft;
 	groups: (string | null)[];
+	/** names as a column has them, where the layout takes them from one */
+	named?: (string | null)[] | null;
 	/** ink of each region; null while nothing is coloured */
 	colouring: number[] | null;
 	/** the classes of a measure, shown in place of it; null for none */
@@ -28,7 +30,7 @@ export interface PaintInput {
 /** A region whose ink the palette lacks is drawn as not coloured. */
 export function drawInput(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
-	const { draft, groups, reader, issue, theme } = input;
+	const { draft, groups, named, reader, issue, theme } = input;
 	const { layout } = draft;
 	const { inks } = draft.palette;
 	const borders = bordersForSheet(coverage.keys, input.borders, draft);
@@ -36,7 +38,7 @@ export function drawInput(input: PaintInput) {
 	const colouring =
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
 	const drawing = drawSheet({
-		...{ coverage, borders, groups, inks, layout, reader, issue },
+		...{ coverage, borders, groups, named, inks, layout, reader, issue },
 		...{ colouring, theme, locked, weak: [] },
 	});
 	return { coverage, drawing };
