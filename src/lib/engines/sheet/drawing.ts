@@ -33,7 +33,7 @@ export interface Drawing {
 	/** labels that did not fit and are listed instead */
 	unplaced: number[];
 	/** longer sentences about the drawing: projection, scale, how true the bar is */
-	notes: { projection: string; scale: string };
+	notes: { projection: string; scale: string; legend: string };
 	/** where the legend stands, so that it can be set anew when the inks in use change */
 	legend: LegendPlace | null;
 	/** set where the fills are classes of a measure and not a colouring */
@@ -110,10 +110,22 @@ export interface LegendPlace {
 	x: number;
 	y: number;
 	width: number;
+	/** room that is kept for it, enough for every ink of the palette */
+	height: number;
 	/** type size */
 	size: number;
 	columns: number;
 	/** from one column to the next */
 	step: number;
-	weak: boolean;
+	/** most lines that a name is set in; every row is as high as they need */
+	lines: number;
+	/** lines of its heading */
+	title: string[];
+	order: 'number' | 'name' | 'regions';
+	/** whether each ink tells how many regions have it */
+	counts: boolean;
+	/** what ranks of line stand for */
+	ranks: { rank: string; words: string }[];
+	/** what the double line stands for, in lines; none where there is none */
+	weak: string[];
 }
