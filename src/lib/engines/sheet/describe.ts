@@ -13,7 +13,8 @@ export function describe(drawing: Omit<Drawing, 'description'>): string {
 		? ` ${many(unplaced.length, 'name is', 'names are')} listed in the table and not on the map.`
 		: '';
 	const scale = notes.scale ? ` ${notes.scale}` : '';
-	return `Map of ${many(fills.length, 'region', 'regions')}${inks}.${listed} ${notes.projection}${scale} ${caution}`;
+	const insets = notes.insets ? ` ${notes.insets}` : '';
+	return `Map of ${many(fills.length, 'region', 'regions')}${inks}.${listed} ${notes.projection}${scale}${insets} ${caution}`;
 }
 
 function inkWords({ fills }: Pick<Drawing, 'fills'>): string {
