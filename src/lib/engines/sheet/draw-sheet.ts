@@ -102,7 +102,13 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		}),
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
-	const keys = drawLegend(legend, { inks, fills, lines }, legendInks(fills, input.themed), seenNow);
+	const { themed } = input;
+	const keys = drawLegend(
+		legend,
+		{ inks, fills, lines, themed },
+		legendInks(fills, themed),
+		seenNow,
+	);
 	const measured = drawScale(placed, bar);
 	const frame = drawFrame({
 		...{ coverage, groups, layout, placed, scale, reader, see },
@@ -142,7 +148,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		},
 		frame: frame.report,
 		legend,
-		...(input.themed && { themed: input.themed }),
+		...(themed && { themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
