@@ -1,10 +1,17 @@
-import { paintArea, type Ground, type LineLayer, type Pen } from '$lib/engines/sheet';
+import {
+	paintArea,
+	type DrawnShape,
+	type Ground,
+	type LineLayer,
+	type Pen,
+} from '$lib/engines/sheet';
 import { areaOf, type Spot } from '$lib/components/desk/canvas/tile-grid';
 import type { TileOrder, TileReply } from '$lib/components/desk/canvas/tile-messages';
 
 /** Paints tiles of a large sheet off the page's thread, one after the other, those wanted last. */
 let ground: Ground | null = null;
 let lines: LineLayer[] = [];
+let shapes: DrawnShape[] = [];
 let look: Extract<TileOrder, { kind: 'look' }> | null = null;
 let version = 0;
 let wanted: Spot[] = [];
@@ -16,7 +23,8 @@ function paint(spot: Spot): void {
 	const pen = canvas.getContext('2d', { alpha: false });
 	if (!pen) throw new Error('this browser gives no canvas to paint on');
 	const { colours, outline } = look;
-	paintArea(pen as unknown as Pen, { ground, lines, colours, outline }, areaOf(spot), spot.scale);
+	const picture = { ground, lines, shapes, colours, outline };
+	paintArea(pen as unknown as Pen, picture, areaOf(spot), spot.scale);
 	const bitmap = canvas.transferToImageBitmap();
 	self.postMessage({ spot, version, bitmap } satisfies TileReply, { transfer: [bitmap] });
 }
@@ -34,7 +42,7 @@ async function paintWanted(): Promise<void> {
 
 self.onmessage = async ({ data }: MessageEvent<TileOrder>) => {
 	if (data.kind === 'want') return want(data.spots);
-	if (data.kind === 'ground') ({ ground, lines } = data);
+	if (data.kind === 'ground') ({ ground, lines, shapes } = data);
 	else look = data;
 	version = data.version;
 };

@@ -6,7 +6,7 @@ import { colouringParts, problemOf } from '../../src/lib/state/problem-of-draft'
 import { numberRegions } from '../../src/lib/state/rules-in-force';
 
 /** The parts of a draft that decide nothing about which colourings keep its rules. */
-const passedOver = ['goals', 'layout', 'palette', 'ties'];
+const passedOver = ['goals', 'layout', 'palette', 'theme', 'ties'];
 
 const keys = ['a', 'b', 'c', 'd', 'e'];
 const borders = {

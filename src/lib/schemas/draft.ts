@@ -9,6 +9,7 @@ import {
 } from '../engines/editions/draft.ts';
 import { ruleLimits } from '../engines/editions/rule-limits.ts';
 import { papers } from '../engines/sheet/layout.ts';
+import { projectionKinds } from '../engines/sheet/layout/projection-kinds.ts';
 import { collarLook } from './layout/collar.ts';
 import { frameLayout } from './layout/frame.ts';
 import { hexColour } from './layout/hex.ts';
@@ -104,13 +105,7 @@ export const sheetLayout = z.strictObject({
 	paper: z.union([z.enum(papers), z.strictObject({ widthMm: millimetres, heightMm: millimetres })]),
 	orientation: z.enum(['landscape', 'portrait']),
 	marginMm: z.number().min(0).max(200),
-	projection: z.enum([
-		'auto',
-		'albers',
-		'lambert-azimuthal',
-		'cylindrical-equal-area',
-		'equal-earth',
-	]),
+	projection: z.enum(['auto', ...projectionKinds]),
 	labels: z.boolean(),
 	groupColumn: z.string().max(400).nullable(),
 	legend: z.boolean(),

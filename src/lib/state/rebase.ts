@@ -40,7 +40,15 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 			seed: pick('seed', base.seed, mine.seed, theirs.seed),
 			layout: {
 				...fields('layout', was, my, their),
-				frame: fields('frame', was.frame, my.frame, their.frame),
+				frame: {
+					...fields('frame', was.frame, my.frame, their.frame),
+					insetChoices: fields(
+						'inset',
+						was.frame.insetChoices,
+						my.frame.insetChoices,
+						their.frame.insetChoices,
+					),
+				},
 				lettering: {
 					...fields('lettering', was.lettering, my.lettering, their.lettering),
 					abbreviations: fields(
@@ -56,6 +64,12 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 						their.lettering.placed,
 					),
 					hidden: members(was.lettering.hidden, my.lettering.hidden, their.lettering.hidden),
+					first: pick(
+						'names that come first',
+						was.lettering.first,
+						my.lettering.first,
+						their.lettering.first,
+					),
 				},
 				lines: fields('lines', was.lines, my.lines, their.lines),
 				collar: fields('collar', was.collar, my.collar, their.collar),

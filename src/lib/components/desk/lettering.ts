@@ -1,4 +1,4 @@
-import { paintSvg } from '$lib/engines/sheet';
+import { paintSvg, shapeLayers, type ShapeLayer } from '$lib/engines/sheet';
 import type { Drawing } from '$lib/engines/sheet/drawing';
 
 /** Put before the ids of the sheet's elements, which share the page with others. */
@@ -10,22 +10,43 @@ export function parseSvg(text: string): SVGSVGElement {
 	return root as unknown as SVGSVGElement;
 }
 
-/** A drawing without fills and lines: names, legend and collar. */
-export const letteringOf = (drawing: Drawing): string =>
-	paintSvg({ ...drawing, fills: [], lines: [] }, { fills: 'attribute', idPrefix });
+/** A drawing without fills and lines: names, legend, collar, and the shapes of some layers. */
+export const letteringOf = (
+	drawing: Drawing,
+	layers: readonly ShapeLayer[] = shapeLayers,
+): string => {
+	const shapes = drawing.shapes.filter(({ layer }) => layers.includes(layer));
+	return paintSvg({ ...drawing, fills: [], lines: [], shapes }, { fills: 'attribute', idPrefix });
+};
+
+/** Groups that stay: regions are changed one by one, borders never. */
+const standing = new Set([`${idPrefix}fills`, `${idPrefix}borders`]);
 
 /**
- * Labels take the ink that reads on their fill, the legend lists the inks in use. `before`: the lettering
- * that stands, which is left alone when it is the same. Answers the lettering that stands now.
+ * Labels take the ink that reads on their fill, the legend lists the inks in use, hatches follow the inks.
+ * `before`: the lettering that stands, which is left alone when it is the same. Answers the lettering that
+ * stands now.
  */
-export function setLettering(svg: SVGSVGElement, drawing: Drawing, before: string): string {
-	const lettering = letteringOf(drawing);
+export function setLettering(
+	svg: SVGSVGElement,
+	drawing: Drawing,
+	before: string,
+	layers: readonly ShapeLayer[] = shapeLayers,
+): string {
+	const lettering = letteringOf(drawing, layers);
 	if (lettering === before) return before;
-	const fresh = parseSvg(lettering);
-	for (const name of ['labels', 'collar']) {
-		const now = svg.querySelector(`#${idPrefix}${name}`);
-		const next = fresh.querySelector(`#${idPrefix}${name}`);
-		if (now && next) now.replaceWith(document.importNode(next, true));
+	const groups = groupsOf(parseSvg(lettering));
+	const stay = new Map(groupsOf(svg).map((group) => [group.id, group]));
+	for (const [id, group] of stay) if (!standing.has(id)) group.remove();
+	let place: Element | null = null;
+	for (const group of groups.reverse()) {
+		const own = standing.has(group.id) ? stay.get(group.id) : undefined;
+		const next = own ?? document.importNode(group, true);
+		if (!own) svg.insertBefore(next, place);
+		place = next;
 	}
 	return lettering;
 }
+
+const groupsOf = (svg: SVGSVGElement): Element[] =>
+	[...svg.children].filter(({ localName }) => localName === 'g');

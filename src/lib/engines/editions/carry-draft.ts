@@ -15,6 +15,7 @@ import {
 	type RegionMatch,
 } from '../boundaries/recut/index.ts';
 import { carryGroups } from './carry-groups.ts';
+import { carryLettering } from './carry-lettering.ts';
 import { carryLocks } from './carry-locks.ts';
 import type { Draft } from './draft.ts';
 import { inkName } from './ink-name.ts';
@@ -46,7 +47,8 @@ export interface CarriedDraft {
  * `carryPins` says; bans of every part; what was between two regions that are one now is dropped, and
  * keep-alike where keep-apart stands. Struck borders follow where there is a border, added ones where
  * there are two regions. Groups follow as `carryGroups` says. Reserved inks, goals and ties name no
- * region and stay; a lock or ban that a tie asked for keeps its mark. A layout by a column that is missing is no longer by that column.
+ * region and stay; a lock or ban that a tie asked for keeps its mark. Names follow as `carryLettering`
+ * says. A layout by a column that is missing is no longer by that column.
  * Over the same boundaries a draft without doubled rules comes back as it was. Never throws.
  */
 export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = {}): CarriedDraft {
@@ -73,6 +75,7 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 	);
 	const groups = carryGroups(ground, draft.groups, counted, apart.list);
 	const layout = carryLayout(draft.layout, fresh.columns);
+	const names = carryLettering(ground, layout.layout.lettering);
 	return {
 		draft: {
 			...structuredClone(draft),
@@ -82,9 +85,9 @@ export function carryDraft(draft: Draft, match: RegionMatch, fresh: NewGround = 
 			alike: alike.list,
 			apart: apart.list,
 			groups: groups.list,
-			layout: layout.layout,
+			layout: { ...layout.layout, lettering: names.lettering },
 		},
-		rows: [locks, forbidden, alike, apart, groups, struck, added, layout].flatMap(
+		rows: [locks, forbidden, alike, apart, groups, struck, added, layout, names].flatMap(
 			({ rows }) => rows,
 		),
 	};
@@ -163,12 +166,28 @@ function carryHandBorders(
 }
 
 function carryLayout(layout: Draft['layout'], columns: readonly string[] | undefined) {
+	const copy = structuredClone(layout);
+	const isGone = (column: string | null): column is string =>
+		column !== null && columns !== undefined && !columns.includes(column);
+	const rows: CarriedRow[] = [];
+	const drop = (subject: string) =>
+		rows.push(
+			carriedRow(
+				{ what: 'layout', keys: [], subject },
+				'dropped',
+				[],
+				'the new file has no such column',
+			),
+		);
 	const { groupColumn } = layout;
-	if (groupColumn === null || !columns || columns.includes(groupColumn)) {
-		return { layout: structuredClone(layout), rows: [] };
+	const { nameColumn } = layout.lettering;
+	if (isGone(groupColumn)) {
+		drop(`The layout's grouping by the column ${quoted(groupColumn)}`);
+		copy.groupColumn = null;
 	}
-	const subject = `The layout's grouping by the column ${quoted(groupColumn)}`;
-	const carrying = { what: 'layout', keys: [], subject };
-	const rows = [carriedRow(carrying, 'dropped', [], 'the new file has no such column')];
-	return { layout: { ...structuredClone(layout), groupColumn: null }, rows };
+	if (isGone(nameColumn)) {
+		drop(`That names are taken from the column ${quoted(nameColumn)}`);
+		copy.lettering.nameColumn = null;
+	}
+	return { layout: copy, rows };
 }

@@ -7,3 +7,25 @@ export { subsetFont } from './subset-font.ts';
 export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';
 export { exportWorkbook } from './workbook.ts';
 export { exportProofZip } from './proof-files.ts';
+export { exportFile } from './export-file.ts';
+export {
+	dpiLimits,
+	exportKind,
+	exportKinds,
+	pixelLimit,
+	plainOptions,
+	quantumLimits,
+	type ExportKind,
+	type ExportKindId,
+	type ExportOptions,
+	type SingleKindId,
+	type SvgFileOptions,
+} from './kinds.ts';
+export type {
+	ExportAbout,
+	ExportedFile,
+	ExportOutcome,
+	ExportSource,
+	ExportTools,
+	ExtraColumn,
+} from './source.ts';

@@ -26,3 +26,20 @@ export { suggestRegions } from './join/suggestions.ts';
 export { checkJoin } from './check/check-join.ts';
 export { checkTaken } from './check/check-taken.ts';
 export { carryNumbers, carryTexts, type CarriedValues } from './carry-measures.ts';
+export { classMethods, mostClasses, type ClassMethod, type Theme, type ThemePer } from './theme.ts';
+export { themeFigures, type ThemeFigures, type ThemeGround } from './theme-figures.ts';
+export {
+	limitsHold,
+	limitsOf,
+	themeClasses,
+	toldFigures,
+	type ThemeClasses,
+} from './theme-classes.ts';
+export { classLimits } from './classing/class-limits.ts';
+export { classCounts, classOf } from './classing/class-of.ts';
+export { rangeWords, limitWords } from './classing/range-words.ts';
+export { roundedLimits } from './classing/rounded-limits.ts';
+export { varianceFit } from './classing/goodness.ts';
+export { histogram, type Histogram } from './classing/histogram.ts';
+export { checkClasses } from './classing/check-classes.ts';
+export { addsUp, judgeMeasure, type CountJudgement } from './count-or-rate.ts';

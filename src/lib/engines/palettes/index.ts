@@ -40,3 +40,6 @@ export { bestKnown } from './limits.ts';
 export { inkDistances } from './ink-distances.ts';
 export { tritanDoubts } from './tritan-doubts.ts';
 export { checkBorderLine, lineContrastAsked } from './border-line.ts';
+export { rampOf, ramps, type Ramp } from './ramps.ts';
+export { rampInks } from './ramp-inks.ts';
+export { judgeRamp, type RampVerdict, type ReaderVerdict } from './ramp-verdict.ts';

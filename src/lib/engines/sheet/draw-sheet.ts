@@ -11,6 +11,7 @@ import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
 import { labelSheet } from './labels/label-sheet.ts';
+import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
@@ -37,6 +38,8 @@ export interface SheetInput {
 	issue: string;
 	/** the classes of a measure, shown in place of the colouring and its inks */
 	theme?: SheetTheme | null;
+	/** leaves hatches out, where a painter cuts them itself tile by tile */
+	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
 }
@@ -97,17 +100,27 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		});
 		return around.map;
 	});
-	const { map, texts, legend, bar, scale } = around!;
+	const { map, texts, legend, bar, scale, blocks, obstacles } = around!;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
-		? labelSheet({ arcs, rings, sides, names, groups, areas: coverage.areasKm2, box: map, scale })
+		? labelSheet({
+				arcs,
+				rings,
+				sides,
+				names,
+				groups,
+				areas: coverage.areasKm2,
+				box: map,
+				scale,
+				obstacles,
+			})
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
-	const measured = drawScale(placed, map, bar);
+	const measured = drawScale(placed, bar);
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
@@ -117,11 +130,24 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		...withLeaders(arcs, labels.leaders),
 		fills,
 		lines: [
-			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+			...lineLayers({
+				...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
+				look: layout.lines,
+				see: (hex) => see(hex, reader),
+			}),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
-		shapes: [],
-		texts: [...inkLabels(labels.texts, fills), ...texts, ...measured.texts, ...keys.texts],
+		shapes: [
+			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, (hex) => see(hex, reader))),
+			...blocks.flatMap(({ ground }) => ground ?? []),
+		],
+		texts: [
+			...inkLabels(labels.texts, fills),
+			...texts,
+			...measured.texts,
+			...keys.texts,
+			...blocks.flatMap((block) => block.texts),
+		],
 		rects: [...measured.rects, ...keys.rects],
 		unplaced: labels.unplaced,
 		notes: { projection: placed.chosen.sentence, scale: measured.sentence },

@@ -32,12 +32,13 @@ export {
 	type Pen,
 	type Picture,
 } from './canvas/paint-area.ts';
+export { type Hatching } from './canvas/paint-hatches.ts';
 export { refineGround } from './canvas/refine.ts';
 export { regionAt } from './canvas/region-at.ts';
 export { type ChosenProjection } from './plane/projections.ts';
 export { paperLimits, paperSize } from './paper.ts';
 export { caution, papers, wholeLayout, type SheetLayout } from './layout.ts';
-export type { DrawnShape, ShapeLayer } from './shapes.ts';
+export { shapeLayers, shapeLayersTop, type DrawnShape, type ShapeLayer } from './shapes.ts';
 export { cutRing } from './plane/cut-open.ts';
 export { ringLonLat, type LonLat } from './plane/ring-lonlat.ts';
 export { isSetIn, textWidth } from './type/text-width.ts';

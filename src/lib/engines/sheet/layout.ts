@@ -1,5 +1,6 @@
 import { plainCollar, type CollarLook } from './layout/collar.ts';
 import { plainFrame, type FrameLayout } from './layout/frame.ts';
+import type { ProjectionKind } from './layout/projection-kinds.ts';
 import { plainLettering, type Lettering } from './layout/lettering.ts';
 import { plainLines, type LineLook } from './layout/lines.ts';
 
@@ -13,7 +14,7 @@ export interface SheetLayout {
 	orientation: 'landscape' | 'portrait';
 	marginMm: number;
 	/** 'auto' follows Snyder's guidance for the extent of the regions */
-	projection: 'auto' | 'albers' | 'lambert-azimuthal' | 'cylindrical-equal-area' | 'equal-earth';
+	projection: 'auto' | ProjectionKind;
 	labels: boolean;
 	/** column of the attribute table that names the level above (a province), or null */
 	groupColumn: string | null;

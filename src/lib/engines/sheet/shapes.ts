@@ -27,3 +27,14 @@ export type ShapeLayer =
 	| (typeof shapeLayersUnder)[number]
 	| (typeof shapeLayersOver)[number]
 	| (typeof shapeLayersTop)[number];
+
+/** All of them from the bottom up. */
+export const shapeLayers: readonly ShapeLayer[] = [
+	...shapeLayersUnder,
+	...shapeLayersOver,
+	...shapeLayersTop,
+];
+
+/** The shapes of one layer, in the order in which they are painted. */
+export const shapesIn = ({ shapes }: { shapes: DrawnShape[] }, layer: ShapeLayer): DrawnShape[] =>
+	shapes.filter((shape) => shape.layer === layer);

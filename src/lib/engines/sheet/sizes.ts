@@ -18,6 +18,6 @@ export function regionSizesMm(coverage: Coverage, layout: SheetLayout): Float64A
 		projection: '',
 		issue: '',
 	});
-	const { arcs, rings } = placeOnPaper(coverage, layout, () => measured.map);
+	const { arcs, rings } = placeOnPaper(coverage, layout, () => measured);
 	return Float64Array.from(rings, (list) => smallerSide(arcs, list) / 100);
 }

@@ -2,16 +2,29 @@ import { z } from 'zod';
 import { plainLettering, type Lettering } from '../../engines/sheet/layout/lettering.ts';
 
 const key = z.string().min(1).max(400);
-const place = z.number().min(-1_000).max(6_000);
+const keys = z.array(key).max(100_000);
+/** from the anchor of a region, in mm: no sheet is larger */
+const away = z.number().min(-5_000).max(5_000);
+const points = z.number().min(3).max(72).nullable();
+
+const placed = z.strictObject({
+	dxMm: away,
+	dyMm: away,
+	lines: z.literal([1, 2, 3]).nullable(),
+	short: z.boolean(),
+});
 
 export const lettering = z
 	.strictObject({
 		priority: z.enum(['area', 'neighbours']),
-		sizePt: z.number().min(3).max(72).nullable(),
+		first: keys,
+		sizePt: points,
+		groupSizePt: points,
 		groupNames: z.boolean(),
-		abbreviations: z.record(key, z.string().max(40)),
-		placed: z.record(key, z.strictObject({ xMm: place, yMm: place })),
-		hidden: z.array(key).max(100_000),
+		nameColumn: z.string().max(400).nullable(),
+		abbreviations: z.record(key, z.string().min(1).max(40)),
+		placed: z.record(key, placed),
+		hidden: keys,
 		numbers: z.boolean(),
 	})
 	.default(plainLettering) satisfies z.ZodType<Lettering>;

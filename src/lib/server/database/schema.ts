@@ -1,10 +1,12 @@
 import type { Generated, Insertable, JSONColumnType, Selectable } from 'kysely';
 import type { Moment, OptionalMoment, Whole } from './columns.ts';
+import type * as exported from './exports-tables.ts';
 import type * as palettes from './palette-tables.ts';
 import type * as recuts from './recut-tables.ts';
 import type * as searches from './search-tables.ts';
 import type * as territories from './territory-tables.ts';
 
+export type * from './exports-tables.ts';
 export type * from './palette-tables.ts';
 export type * from './recut-tables.ts';
 export type * from './search-tables.ts';
@@ -283,6 +285,7 @@ export interface Database {
 	display_levels: recuts.DisplayLevelTable;
 	recuts: recuts.RecutTable;
 	searches: searches.SearchTable;
+	exports: exported.ExportTable;
 }
 
 export type Row<T extends keyof Database> = Selectable<Database[T]>;

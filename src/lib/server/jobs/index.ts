@@ -4,6 +4,7 @@ import { config } from '../config.ts';
 import { database } from '../database/connection.ts';
 import { fileStore } from '../files/index.ts';
 import { log } from '../log.ts';
+import { runExport, wakeSilentExports } from './export.job.ts';
 import { runIntake, wakeSilentIntakes } from './intake.job.ts';
 import { createPool } from './pool.ts';
 import { jobNames, openBoss, queueOf, type JobData, type JobName } from './queue.ts';
@@ -20,6 +21,7 @@ type Handler<N extends JobName> = (
 
 /** Who does each job; every name has one. */
 export const handlers: { [N in JobName]: Handler<N> } = {
+	export: (shop, { exportId }, shutdown) => runExport(shop, exportId, shutdown),
 	intake: (shop, { intakeId }, shutdown) => runIntake(shop, intakeId, shutdown),
 	rebalance: (shop, { proposalId }, shutdown) => runRebalance(shop, proposalId, shutdown),
 	recut: (shop, { recutId }, shutdown) => runRecut(shop, recutId, shutdown),
@@ -77,7 +79,7 @@ async function takeJobs<N extends JobName>(
 const wake = (shop: Workshop) =>
 	Promise.all([
 		...[wakeSilentIntakes(shop), wakeSilentRebalances(shop)],
-		...[wakeSilentRecuts(shop), wakeSilentSearches(shop)],
+		...[wakeSilentRecuts(shop), wakeSilentSearches(shop), wakeSilentExports(shop)],
 	]).catch((error: unknown) =>
 		log.warn({ error: String(error) }, 'could not look for work left lying'),
 	);

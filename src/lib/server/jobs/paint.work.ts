@@ -23,7 +23,7 @@ export interface PaintInput {
 }
 
 /** A region whose ink the palette lacks is drawn as not coloured. */
-function draw(input: PaintInput) {
+export function drawInput(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
 	const { draft, groups, reader, issue } = input;
 	const { layout } = draft;
@@ -41,7 +41,7 @@ function draw(input: PaintInput) {
 
 /** Draws and paints a sheet as an SVG file, packed for its way. */
 export function paintSheet({ input }: Task<PaintInput>): { gzip: Uint8Array } {
-	return { gzip: gzipSync(exportSvg(draw(input).drawing, { fonts: faceFiles() })) };
+	return { gzip: gzipSync(exportSvg(drawInput(input).drawing, { fonts: faceFiles() })) };
 }
 
 export interface SheetFile {
@@ -52,7 +52,7 @@ export interface SheetFile {
 
 /** Every file an edition is issued as, all from one drawing. */
 export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
-	const { coverage, drawing } = draw(input);
+	const { coverage, drawing } = drawInput(input);
 	const rows = sheetTable(drawing, coverage, input.groups);
 	return [
 		{

@@ -4,10 +4,11 @@ import type { Db } from '../database/connection.ts';
 import { log } from '../log.ts';
 
 /** The jobs there are. Each has a handler in `index.ts`. */
-export const jobNames = ['intake', 'rebalance', 'recut', 'search'] as const;
+export const jobNames = ['export', 'intake', 'rebalance', 'recut', 'search'] as const;
 export type JobName = (typeof jobNames)[number];
 
 export interface JobData {
+	export: { exportId: string };
 	intake: { intakeId: string };
 	rebalance: { proposalId: string };
 	recut: { recutId: string };

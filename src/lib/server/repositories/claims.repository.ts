@@ -8,6 +8,7 @@ import type { Row } from '../database/schema.ts';
  */
 const working = {
 	...{ intakes: 'reading', recuts: 'reading', proposals: 'running', searches: 'running' },
+	exports: 'running',
 } as const;
 export type ClaimTable = keyof typeof working;
 

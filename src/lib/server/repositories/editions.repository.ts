@@ -46,6 +46,15 @@ const withIssuer = (db: Db) =>
 export const listEditions = (db: Db, sheetId: string) =>
 	withIssuer(db).where('sheet_id', '=', sheetId).orderBy('number', 'desc').execute();
 
+/** One whole, with its content. */
+export const findEdition = (db: Db, sheetId: string, number: number) =>
+	db
+		.selectFrom('editions')
+		.selectAll()
+		.where('sheet_id', '=', sheetId)
+		.where('number', '=', number)
+		.executeTakeFirst();
+
 /** Ink of each region by key; undefined where there is no such edition. */
 export async function readEditionColouring(
 	db: Db,

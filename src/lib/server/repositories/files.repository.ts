@@ -16,6 +16,7 @@ export async function digestIsUsed(db: Db, digest: string): Promise<boolean> {
 			or exists (select from intakes where file_digest = ${digest})
 			or exists (select from recuts where file_digest = ${digest})
 			or exists (select from edition_files where digest = ${digest})
+			or exists (select from exports where file_digest = ${digest})
 			or exists (select from measure_tables where state <> 'dropped'
 				and (file_digest = ${digest} or source ->> 'kept' = ${digest})) as used
 	`.execute(db);

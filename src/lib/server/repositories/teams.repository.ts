@@ -15,6 +15,9 @@ export const insertTeam = (db: Db, slug: string, name: string): Promise<TeamRow 
 export const findTeam = (db: Db, slug: string): Promise<TeamRow | undefined> =>
 	db.selectFrom('teams').selectAll().where('slug', '=', slug).executeTakeFirst();
 
+export const findTeamById = (db: Db, id: string): Promise<TeamRow | undefined> =>
+	db.selectFrom('teams').selectAll().where('id', '=', id).executeTakeFirst();
+
 export async function renameTeam(db: Db, teamId: string, name: string): Promise<void> {
 	await db.updateTable('teams').set({ name }).where('id', '=', teamId).execute();
 }

@@ -209,15 +209,16 @@ export async function readDraft(
 	};
 }
 
-/** Saves a new layout on top of whatever the draft is now. */
+/** Lays the fields of a layout over whatever the draft is now; what they do not say stays as it is. */
 export async function saveLayout(
 	shop: Workshop,
 	member: Member,
 	number: number,
-	layout: Draft['layout'],
+	fields: Partial<Draft['layout']>,
 ): Promise<SaveResult> {
 	requireAccess(member, 'layout.edit');
 	const { id, revision } = await sheetOf(shop.db, member, number);
 	const document = documentOf(await draftOf(shop.db, id, revision));
+	const layout = { ...document.layout, ...fields };
 	return saveDraft(shop, member, number, { revision, document: { ...document, layout } });
 }

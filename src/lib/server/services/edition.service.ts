@@ -1,13 +1,12 @@
-import { createHash } from 'node:crypto';
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
 import type { DeskEdition } from '../../schemas/desk.ts';
-import { requireAccess, type Member } from '../access/member.ts';
+import type { AskExport } from '../../schemas/export.ts';
+import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Received } from '../files/index.ts';
 import type { SheetFile } from '../jobs/paint.work.ts';
 import type { Workshop } from '../jobs/workshop.ts';
-import { readAttributesText, readGeometry } from '../repositories/boundaries.repository.ts';
 import {
 	findEditionFile,
 	insertEdition,
@@ -16,10 +15,12 @@ import {
 import { lockDigest } from '../repositories/files.repository.ts';
 import { holdSheet, type DraftRow, type SheetRecord } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
+import { boundariesDigest } from './boundaries-digest.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { dayInWords } from './day-in-words.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
+import { askIn } from './ask-export.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { editionsOf } from './sheet.service.ts';
@@ -98,10 +99,16 @@ async function issue(
 		},
 		kept,
 	);
+	// large sheets take seconds in print: made meanwhile, and there when somebody looks for it
+	if (mayDo(member, 'files.download')) await askIn(shop, trx, member, sheet, printFile(number));
 	const subject = { kind: 'sheet', id: sheet.id };
 	await record(trx, member, 'edition.issued', subject, { sheet: sheet.number, number, digest });
 	return { number, digest };
 }
+
+const printFile = (edition: number): AskExport => ({
+	...{ kind: 'pdf', edition, reader: 'typical', options: {} },
+});
 
 /** The draft's colouring, looked over by the checker once more. */
 async function checkedInks(shop: Workshop, view: BoundaryView, draft: DraftRow): Promise<number[]> {
@@ -135,7 +142,7 @@ async function seal(
 	colouring: number[],
 ): Promise<{ digest: string; stored: string }> {
 	const sealed = await shop.pool.run('sealEdition', {
-		boundariesDigest: await boundariesDigest(trx, view),
+		boundariesDigest: await boundariesDigest(trx, view.set.id),
 		keys: view.keys,
 		draft: documentOf(draft),
 		colouring,
@@ -154,14 +161,6 @@ const proofByKey = ({ keys }: BoundaryView, proof: Proof) => ({
 	regions: proof.regions.map((region) => keys[region]),
 	...(proof.borders ? { borders: proof.borders.map(([a, b]) => [keys[a], keys[b]]) } : {}),
 });
-
-/** Over the coverage and the attributes as they are stored. */
-async function boundariesDigest(trx: Trx, { set }: BoundaryView): Promise<string> {
-	const geometry = await readGeometry(trx, set.id);
-	if (!geometry) throw new NotFound('boundary set');
-	const hash = createHash('sha256').update(geometry);
-	return hash.update(await readAttributesText(trx, set.id)).digest('hex');
-}
 
 async function keepFiles(
 	shop: Workshop,

@@ -3,6 +3,7 @@ import { fileStore, type FileStore } from '../files/index.ts';
 import { log } from '../log.ts';
 import { removeOldUses } from '../repositories/limits.repository.ts';
 import { removeExpired } from '../repositories/sessions.repository.ts';
+import { endExpiredExports } from './export-end.service.ts';
 import { daysToAnswer, endUnanswered } from './intake-answer.service.ts';
 import { endUnansweredRecuts } from './recut-work.service.ts';
 
@@ -14,6 +15,7 @@ export async function tidy(db: Db = database(), files: FileStore = fileStore()):
 	await removeOldUses(db);
 	await endUnanswered(db, files);
 	await endUnansweredRecuts(db, files, daysToAnswer);
+	await endExpiredExports(db, files);
 }
 
 /** Tidies now and then. @returns ends it */

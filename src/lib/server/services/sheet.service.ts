@@ -18,6 +18,7 @@ import {
 } from '../repositories/boundaries.repository.ts';
 import { listLevels, readLevel } from '../repositories/display-levels.repository.ts';
 import { listEditionFiles, listEditions } from '../repositories/editions.repository.ts';
+import { exportFiles } from '../repositories/exports.repository.ts';
 import { measureFiles } from '../repositories/measures.repository.ts';
 import { holdRecutsOf } from '../repositories/recuts.repository.ts';
 import {
@@ -231,10 +232,11 @@ export async function removeSheet(
 		const recuts = await holdRecutsOf(trx, sheet.id);
 		const drafted = await setsOfDrafts(trx, sheet.id);
 		const tables = await measureFiles(trx, sheet.id);
+		const exported = await exportFiles(trx, sheet.id);
 		await deleteSheet(trx, sheet.id);
 		const subject = { kind: 'sheet', id: sheet.id };
 		await record(trx, member, 'sheet.deleted', subject, { sheet: number, name: sheet.name });
-		const digests = new Set([...tables, ...recuts.digests]);
+		const digests = new Set([...tables, ...exported, ...recuts.digests]);
 		for (const set of new Set([...drafted, ...recuts.sets])) {
 			for (const digest of await removeSet(trx, set)) digests.add(digest);
 		}

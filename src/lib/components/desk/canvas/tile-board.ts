@@ -1,5 +1,5 @@
 import { meets, type Area, type Colours, type Ground } from '$lib/engines/sheet';
-import type { LineLayer, Outline } from '$lib/engines/sheet';
+import type { Drawing, Outline } from '$lib/engines/sheet';
 import { areaOf, placeOf, spotsInSight, type Paper, type Sight, type Spot } from './tile-grid';
 import type { TileOrder, TileReply } from './tile-messages';
 
@@ -8,6 +8,8 @@ interface Tile {
 	bitmap: ImageBitmap;
 	stale: boolean;
 }
+
+type Drawn = Pick<Drawing, 'lines' | 'shapes'>;
 
 /** Milliseconds without a change of size before tiles of the new size are asked for. */
 const settling = 120;
@@ -56,8 +58,8 @@ export class TileBoard {
 	}
 
 	/** Other lines, of which only those within `area` differ where it is given. */
-	ground(ground: Ground, lines: LineLayer[], area: Area | null) {
-		this.#tell({ kind: 'ground', ground, lines, version: ++this.#version });
+	ground(ground: Ground, { lines, shapes }: Drawn, area: Area | null) {
+		this.#tell({ kind: 'ground', ground, lines, shapes, version: ++this.#version });
 		this.#age((spot) => area === null || overlap(areaOf(spot), area));
 	}
 

@@ -1,4 +1,4 @@
-import type { Colours, Ground, LineLayer, Outline } from '$lib/engines/sheet';
+import type { Colours, DrawnShape, Ground, LineLayer, Outline } from '$lib/engines/sheet';
 import type { Spot } from './tile-grid';
 
 /**
@@ -6,7 +6,7 @@ import type { Spot } from './tile-grid';
  * and look count their versions together.
  */
 export type TileOrder =
-	| { kind: 'ground'; ground: Ground; lines: LineLayer[]; version: number }
+	| { kind: 'ground'; ground: Ground; lines: LineLayer[]; shapes: DrawnShape[]; version: number }
 	| { kind: 'look'; colours: Colours; outline: Outline | null; version: number }
 	| { kind: 'want'; spots: Spot[] };
 

@@ -49,10 +49,10 @@ class WritingPen {
 	}
 }
 
-function pictureOf({ fills, lines }: Drawing, faded: Uint8Array | null = null): Picture {
+function pictureOf({ fills, lines, shapes }: Drawing, faded: Uint8Array | null = null): Picture {
 	const hexes = [...new Set(fills.map(({ hex }) => hex))];
 	const of = Uint8Array.from(fills, ({ hex }) => hexes.indexOf(hex));
-	return { ground, lines, colours: { hexes, of, faded }, outline: null };
+	return { ground, lines, shapes, colours: { hexes, of, faded }, outline: null };
 }
 
 function painted(picture: Picture, area: Area): WritingPen {

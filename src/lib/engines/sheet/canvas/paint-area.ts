@@ -1,5 +1,9 @@
 import type { LineLayer } from '../drawing.ts';
+import { shapeLayersOver, shapeLayersUnder, type DrawnShape } from '../shapes.ts';
 import { meets, type Area, type Ground } from './ground.ts';
+import { strokeChains } from './stroke-chains.ts';
+import { paintHatches, type Hatching } from './paint-hatches.ts';
+import { paintShapes } from './paint-shapes.ts';
 
 /** What is asked of a canvas: the part of its two-dimensional context that painting needs. */
 export type Pen = Pick<
@@ -28,6 +32,7 @@ export interface Colours {
 	of: Uint8Array;
 	/** 1 for a region that steps back; null for none */
 	faded: Uint8Array | null;
+	hatching?: Hatching | null;
 }
 
 /** Lines laid over all others, as wide on the screen whatever the size of the sheet. */
@@ -41,6 +46,8 @@ export interface Outline {
 export interface Picture {
 	ground: Ground;
 	lines: LineLayer[];
+	/** those below border lines are painted; frames, grounds and legend stay with the lettering */
+	shapes: DrawnShape[];
 	colours: Colours;
 	outline: Outline | null;
 }
@@ -52,7 +59,7 @@ const arcsAPath = 200;
 const fadedAlpha = 0.18;
 
 /**
- * Paints a part of a drawing: fills, then lines by rank, then the outline. In: `scale`, pixels to a
+ * Paints a part of a drawing: shapes and fills in their order, then lines by rank, then the outline. In: `scale`, pixels to a
  * hundredth of a millimetre; the area's top left corner comes to the canvas's. Out: the pixels that the
  * SVG painter's text gives, but for lettering and collar furniture, which stay text. Only what meets the
  * area is painted.
@@ -62,14 +69,23 @@ export function paintArea(pen: Pen, picture: Picture, area: Area, scale: number)
 	pen.fillStyle = '#ffffff';
 	pen.fillRect(0, 0, (area.right - area.left) * scale, (area.bottom - area.top) * scale);
 	pen.setTransform(scale, 0, 0, scale, -area.left * scale, -area.top * scale);
+	paintShapes(pen, picture.shapes, shapeLayersUnder, area);
 	paintFills(pen, picture, area);
+	paintShapes(pen, picture.shapes, ['lakes', 'hatch'], area);
+	const { hatching, faded } = picture.colours;
+	const alphaOf = (region: number) => (faded?.[region] ? fadedAlpha : 1);
+	if (hatching) paintHatches(pen, picture.ground, hatching, area, alphaOf);
+	paintShapes(pen, picture.shapes, shapeLayersOver.slice(2), area);
 	pen.lineJoin = 'round';
 	pen.lineCap = 'round';
-	for (const { arcs, hex, width, dash } of picture.lines) {
+	for (const { arcs, chains, hex, width, dash } of picture.lines) {
 		pen.setLineDash(dash ?? []);
-		strokeArcs(pen, picture.ground, arcs, { hex, width }, grown(area, width));
+		pen.lineCap = dash ? 'butt' : 'round';
+		if (chains) strokeChains(pen, picture.ground, chains, { hex, width });
+		else strokeArcs(pen, picture.ground, arcs, { hex, width }, grown(area, width));
 	}
 	pen.setLineDash([]);
+	pen.lineCap = 'round';
 	if (!picture.outline) return;
 	const { arcs, hex, width } = picture.outline;
 	strokeArcs(pen, picture.ground, arcs, { hex, width: width / scale }, grown(area, width / scale));

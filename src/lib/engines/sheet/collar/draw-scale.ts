@@ -1,7 +1,7 @@
 import type { DrawnRect, DrawnText } from '../drawing.ts';
-import type { Box } from '../plane/fit.ts';
+import type { SheetArcs } from '../plane/quantise.ts';
 import { groundScaleAt, type GroundScale } from '../plane/ground-scale.ts';
-import type { OnPaper } from '../place-on-paper.ts';
+import type { OnPaper, PlacedFrame } from '../place-on-paper.ts';
 import type { Collar } from './collar.ts';
 import { drawScaleBar } from './draw-scale-bar.ts';
 import { plainWithin, scaleBar, scaleError } from './scale-bar.ts';
@@ -9,17 +9,32 @@ import { plainWithin, scaleBar, scaleError } from './scale-bar.ts';
 /** Places at which the scale is measured. */
 const mostPlaces = 160;
 
-/** The scale at places spread evenly over all borders. */
-function sampled({ arcs, chosen, fit }: OnPaper): GroundScale[] {
-	const points = arcs.arcPoints.length / 2;
-	const step = Math.max(1, Math.floor(points / mostPlaces));
+/** The scale at places spread evenly over all borders of one frame. */
+export function sampledScales(
+	{ arcs, arcFrame }: Pick<OnPaper, 'arcs' | 'arcFrame'>,
+	frame: number,
+	{ chosen, fit }: PlacedFrame,
+): GroundScale[] {
+	const all = arcs.arcPoints.length / 2;
+	const points = arcFrame ? pointsOfFrame(arcs, arcFrame, frame) : null;
+	const step = Math.max(1, Math.floor((points?.length ?? all) / mostPlaces));
 	const scales: GroundScale[] = [];
-	for (let i = 0; i < points; i += step) {
-		const [x, y] = [arcs.arcPoints[2 * i], arcs.arcPoints[2 * i + 1]];
+	for (let i = 0; i < (points?.length ?? all); i += step) {
+		const point = points ? points[i] : i;
+		const [x, y] = [arcs.arcPoints[2 * point], arcs.arcPoints[2 * point + 1]];
 		const scale = groundScaleAt(chosen.projection, fit, x, y);
 		if (scale) scales.push(scale);
 	}
 	return scales;
+}
+
+function pointsOfFrame({ arcStarts }: SheetArcs, arcFrame: Uint8Array, frame: number): number[] {
+	const points: number[] = [];
+	arcFrame.forEach((own, arc) => {
+		if (own !== frame) return;
+		for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++) points.push(point);
+	});
+	return points;
 }
 
 export interface DrawnScale {
@@ -29,17 +44,17 @@ export interface DrawnScale {
 }
 
 /** The scale bar, if there is an honest one and it is wanted, and the scale in a sentence. */
-export function drawScale(placed: OnPaper, map: Box, bar: Collar['bar']): DrawnScale {
+export function drawScale(placed: OnPaper, bar: Collar['bar']): DrawnScale {
 	const none = { rects: [], texts: [] };
 	const centre = groundScaleAt(
 		placed.chosen.projection,
 		placed.fit,
-		map.x + map.width / 2,
-		map.y + map.height / 2,
+		placed.middle.x,
+		placed.middle.y,
 	);
 	if (!centre)
 		return { ...none, sentence: 'The scale at the centre of the sheet cannot be measured.' };
-	const places = sampled(placed);
+	const places = sampledScales(placed, 0, placed);
 	const perUnit = Math.sqrt(centre.across * centre.down);
 	const error = scaleError(perUnit, [centre, ...places]);
 	// metres a hundredth of a millimetre are 100,000 to one

@@ -10,6 +10,8 @@ export interface FrameLayout {
 	shiftMm: [number, number];
 	/** whether parts far off are set into boxes of their own */
 	insets: 'none' | 'auto';
+	/** what is decided by hand for a group of parts, by its name: see `Island.id` in insets/islands.ts */
+	insetChoices: Record<string, InsetChoice>;
 	/** degrees from one line to the next; null: none is drawn */
 	graticule: { step: number | 'auto'; figures: boolean } | null;
 	/** drawn only where it is honest */
@@ -21,12 +23,24 @@ export interface FrameLayout {
 	lakes: string | null;
 }
 
+export interface InsetChoice {
+	/** in the map's own frame, in a box of its own, or not on the sheet; null: as is chosen for it */
+	place: 'frame' | 'box' | 'out' | null;
+	/** upper left corner of its box on the paper, mm; null: where there is room */
+	cornerMm: [number, number] | null;
+	/** one to so many; null: a round figure that fits */
+	ratio: number | null;
+	/** written over its box; null: the names of its regions */
+	name: string | null;
+}
+
 export const plainFrame: FrameLayout = {
 	parallels: null,
 	centre: null,
 	ratio: null,
 	shiftMm: [0, 0],
 	insets: 'none',
+	insetChoices: {},
 	graticule: null,
 	northArrow: false,
 	neatLine: false,

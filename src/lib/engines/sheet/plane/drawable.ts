@@ -5,6 +5,7 @@
  */
 import type { Coverage } from '../../boundaries/coverage.ts';
 import { cutLine, cutRing } from './cut-open.ts';
+import { wrapLon } from './extent.ts';
 import { arcLonLat, ringLonLat, type LonLat } from './ring-lonlat.ts';
 import { nearPole, nearSeam, withoutSeams } from './seams.ts';
 
@@ -16,47 +17,76 @@ export interface Drawable {
 	arcRight: Int32Array;
 	/** rings of every region as signed arcs */
 	rings: Int32Array[][];
+	/** for each arc that was added the arc of the coverage that it stands for, or one of its ring */
+	addedFor: number[];
 }
 
 interface ExtraArc {
 	points: LonLat[];
 	left: number;
 	right: number;
+	from: number;
 }
 
-/** In: `crossed` as in `Extent`: whether the map is cut along 180 degrees and regions lie across. */
-export function drawable(coverage: Coverage, crossed: boolean): Drawable {
+/** Degrees kept clear of the cut, a tenth of a metre, so that rounding carries no place across it. */
+const clear = 1e-6;
+
+/**
+ * In: `cut`, the meridian along which the map is open, or null; `within`, the arcs that are drawn on
+ * that map (all unless given).
+ */
+export function drawable(
+	coverage: Coverage,
+	cut: number | null,
+	within: (arc: number) => boolean = () => true,
+): Drawable {
 	const arcs = coverage.arcStarts.length - 1;
 	const [left, right] = [coverage.arcLeft.slice(), coverage.arcRight.slice()];
 	const extra: ExtraArc[] = [];
 	const across = new Uint8Array(arcs);
 	for (let arc = 0; arc < arcs; arc++) {
-		if (crossed && isAcross(coverage, arc)) across[arc] = 1;
-		const pieces = linePieces(coverage, arc, across[arc] === 1);
+		if (cut !== null && within(arc) && isAcross(coverage, arc, cut)) across[arc] = 1;
+		const pieces = linePieces(coverage, arc, across[arc] ? cut : null);
 		if (!pieces) continue;
-		for (const points of pieces) extra.push({ points, left: left[arc], right: right[arc] });
+		for (const points of pieces)
+			extra.push({ points, left: left[arc], right: right[arc], from: arc });
 		left[arc] = right[arc] = -1;
 	}
 	const rings = coverage.keys.map((_, region) =>
 		ringsOf(coverage, region).flatMap((ring) => {
-			if (!ring.some((signed) => across[signed < 0 ? ~signed : signed])) return [ring];
-			return cutRing(ringLonLat(coverage, ring)).map((points) => {
-				extra.push({ points, left: -1, right: -1 });
+			const from = ring[0] < 0 ? ~ring[0] : ring[0];
+			if (cut === null || !ring.some((signed) => across[signed < 0 ? ~signed : signed]))
+				return [ring];
+			return cutRing(turned(ringLonLat(coverage, ring), cut)).map((points) => {
+				extra.push({ points: turnedBack(points, cut), left: -1, right: -1, from });
 				return Int32Array.of(arcs + extra.length - 1);
 			});
 		}),
 	);
-	return { ...withExtra(coverage, left, right, extra), rings };
+	const addedFor = extra.map(({ from }) => from);
+	return { ...withExtra(coverage, left, right, extra), rings, addedFor };
 }
 
+/** Places with the cut brought to 180 degrees, for the cutters, and back again. */
+const turned = (points: LonLat[], cut: number): LonLat[] =>
+	points.map(([lon, lat]) => [lon - cut + 180, lat]);
+const turnedBack = (points: LonLat[], cut: number): LonLat[] =>
+	points.map(([lon, lat]) => [
+		Math.min(180 - clear, Math.max(clear - 180, lon)) + cut - 180,
+		lat,
+	]);
+
 /** What is drawn of an arc in its stead, or null where it is drawn as it is. */
-function linePieces(coverage: Coverage, arc: number, across: boolean): LonLat[][] | null {
+function linePieces(coverage: Coverage, arc: number, cut: number | null): LonLat[][] | null {
 	const outer = coverage.arcLeft[arc] < 0 || coverage.arcRight[arc] < 0;
-	const cut = across ? cutLine(arcLonLat(coverage, arc)) : null;
-	if (!outer || !touchesSeam(coverage, arc)) return cut;
-	const pieces = cut ?? [arcLonLat(coverage, arc)];
+	const parted =
+		cut === null
+			? null
+			: cutLine(turned(arcLonLat(coverage, arc), cut)).map((piece) => turnedBack(piece, cut));
+	if (!outer || !touchesSeam(coverage, arc)) return parted;
+	const pieces = parted ?? [arcLonLat(coverage, arc)];
 	const open = pieces.map(withoutSeams);
-	if (!cut && open[0] === null) return null;
+	if (!parted && open[0] === null) return null;
 	return pieces.flatMap((piece, i) => open[i] ?? [piece]);
 }
 
@@ -67,12 +97,17 @@ function touchesSeam({ arcPoints, arcStarts }: Coverage, arc: number): boolean {
 	return false;
 }
 
-/** Whether an arc leaves -180 to 180, or jumps from one end of it to the other. */
-function isAcross({ arcPoints, arcStarts }: Coverage, arc: number): boolean {
-	for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++) {
-		const lon = arcPoints[2 * point];
-		if (lon > 180 || lon < -180) return true;
-		if (point > arcStarts[arc] && Math.abs(lon - arcPoints[2 * point - 2]) > 180) return true;
+/** Whether an arc runs from one side of the cut to the other. */
+function isAcross({ arcPoints, arcStarts }: Coverage, arc: number, cut: number): boolean {
+	const side = (lon: number) => {
+		const from = lon - cut + 180;
+		return Math.abs(from) <= 180 ? from : wrapLon(from);
+	};
+	let before = side(arcPoints[2 * arcStarts[arc]]);
+	for (let point = arcStarts[arc] + 1; point < arcStarts[arc + 1]; point++) {
+		const here = side(arcPoints[2 * point]);
+		if (Math.abs(here - before) > 180) return true;
+		before = here;
 	}
 	return false;
 }

@@ -24,13 +24,16 @@ export function wrapLon(lon: number): number {
 	return wrapped === 0 ? 0 : wrapped;
 }
 
+/** What of a coverage its extent is measured from. */
+export type GroundShape = Pick<Coverage, 'arcPoints' | 'arcStarts' | 'ringArcs' | 'ringStarts'>;
+
 interface Span {
 	west: number;
 	east: number;
 }
 
 /** From where to where each arc runs in longitude, west brought into -180 to 180. */
-function arcSpans({ arcPoints, arcStarts }: Coverage): Span[] {
+function arcSpans({ arcPoints, arcStarts }: GroundShape): Span[] {
 	const spans: Span[] = [];
 	for (let arc = 0; arc + 1 < arcStarts.length; arc++) {
 		let lon = arcPoints[2 * arcStarts[arc]];
@@ -65,7 +68,7 @@ function lastReach(spans: Span[]): number {
 }
 
 /** South and north limit; a ring that runs round the globe takes its pole in. */
-function latitudes({ arcPoints, arcStarts, ringArcs, ringStarts }: Coverage): [number, number] {
+function latitudes({ arcPoints, arcStarts, ringArcs, ringStarts }: GroundShape): [number, number] {
 	let [south, north] = [90, -90];
 	for (let i = 1; i < arcPoints.length; i += 2) {
 		south = Math.min(south, arcPoints[i]);
@@ -101,7 +104,7 @@ const worldSpan = 300;
  * In: a coverage with at least one arc. Out: the narrowest band of longitudes that holds every arc,
  * their latitudes, and where to cut the globe open: in the widest stretch nothing enters.
  */
-export function extentOf(coverage: Coverage): Extent {
+export function extentOf(coverage: GroundShape): Extent {
 	const spans = arcSpans(coverage);
 	const gap = widestGap(spans);
 	const [south, north] = latitudes(coverage);

@@ -187,7 +187,7 @@ describe('cutting at 180 degrees', () => {
 	it('keeps the areas of countries on a map of the world', () => {
 		const coverage = worldCoverage();
 		const box = { x: 0, y: 0, width: 40_000, height: 20_000 };
-		const { arcs, rings } = placeOnPaper(coverage, layout, () => box);
+		const { arcs, rings } = placeOnPaper(coverage, layout, () => ({ map: box, scale: 1 }));
 		const flat = rings.map((list) =>
 			Math.abs(list.reduce((sum, ring) => sum + ringDoubleArea(ringPoints(arcs, ring)), 0)),
 		);

@@ -7,16 +7,24 @@ import {
 	type GeoRawProjection,
 } from 'd3-geo';
 import { latitudeWords, longitudeWords } from './degrees.ts';
+import { wrapLon } from './extent.ts';
 
 /** A projection on the unit sphere, in words that stand on the sheet. */
 export interface ChosenProjection {
 	/** d3-geo, scale 1, nothing shifted: x to the right and y down, in radii of the sphere */
 	projection: GeoProjection;
 	sentence: string;
+	/** the meridian along which the map is open, degrees; null where it is open along none */
+	cut: number | null;
+	/** false where areas are not true */
+	equalArea: boolean;
 }
 
-const unit = <P extends GeoProjection>(projection: P): P =>
+export const unit = <P extends GeoProjection>(projection: P): P =>
 	projection.scale(1).translate([0, 0]).precision(0) as P;
+
+/** The meridian opposite to the central one. */
+export const opposite = (centre: number): number => wrapLon(centre + 180);
 
 type Formula = (a: number, b: number) => [number, number];
 
@@ -28,6 +36,8 @@ export function albers(south: number, north: number, centre: number): ChosenProj
 	return {
 		projection: unit(geoConicEqualArea().parallels([south, north]).rotate([-centre, 0])),
 		sentence: `Albers equal-area conic, parallels ${latitudeWords(south)} and ${latitudeWords(north)}, centre ${longitudeWords(centre)}.`,
+		cut: opposite(centre),
+		equalArea: true,
 	};
 }
 
@@ -38,6 +48,8 @@ export function lambertAzimuthal(lat: number, lon: number): ChosenProjection {
 	return {
 		projection: unit(geoAzimuthalEqualArea().rotate([-lon, -lat])),
 		sentence: `Lambert azimuthal equal-area, centre ${centre}.`,
+		cut: null,
+		equalArea: true,
 	};
 }
 
@@ -55,6 +67,8 @@ export function cylindrical(parallel: number, centre: number): ChosenProjection 
 			).rotate([-centre, 0]),
 		),
 		sentence: `Cylindrical equal-area, true along ${words}, centre ${longitudeWords(centre)}.`,
+		cut: opposite(centre),
+		equalArea: true,
 	};
 }
 
@@ -70,6 +84,8 @@ export function transverseCylindrical(centre: number): ChosenProjection {
 			).rotate([-centre, 0, 90]),
 		),
 		sentence: `Transverse cylindrical equal-area, true along ${longitudeWords(centre)}.`,
+		cut: null,
+		equalArea: true,
 	};
 }
 
@@ -78,5 +94,7 @@ export function equalEarth(centre: number): ChosenProjection {
 	return {
 		projection: unit(geoEqualEarth().rotate([-centre, 0])),
 		sentence: `Equal Earth, centre ${longitudeWords(centre)}.`,
+		cut: opposite(centre),
+		equalArea: true,
 	};
 }

@@ -1,4 +1,5 @@
 import type { Drawing } from '../drawing.ts';
+import type { DrawnShape } from '../shapes.ts';
 
 type Arcs = Pick<Drawing, 'arcPoints' | 'arcStarts'>;
 
@@ -57,10 +58,52 @@ export function linesPath(arcs: Arcs, list: Uint32Array): string {
 	return text;
 }
 
+/** Lines of several arcs, each one subpath, so that dashes run on from arc to arc. */
+export function chainsPath(arcs: Arcs, chains: readonly Int32Array[]): string {
+	return chains
+		.map((chain) => {
+			const parts = Array.from(chain, (signed) => steps(arcs, signed)).filter(
+				(text) => text !== '',
+			);
+			if (parts.length === 0) return '';
+			const ends = startOf(arcs, ~chain[chain.length - 1]) === startOf(arcs, chain[0]);
+			return `M${startOf(arcs, chain[0])}l${joined(parts)}${ends ? 'z' : ''}`;
+		})
+		.join('');
+}
+
 function isClosed({ arcPoints, arcStarts }: Arcs, arc: number): boolean {
 	const [first, last] = [arcStarts[arc], arcStarts[arc + 1] - 1];
 	return (
 		arcPoints[2 * first] === arcPoints[2 * last] &&
 		arcPoints[2 * first + 1] === arcPoints[2 * last + 1]
 	);
+}
+
+/**
+ * Paths of a shape, each a relative moveto and relative linetos, closed where the shape is. Paths of a
+ * single point paint nothing and are left out.
+ */
+export function shapePath({
+	points,
+	starts,
+	closed,
+}: Pick<DrawnShape, 'points' | 'starts' | 'closed'>): string {
+	const parts: string[] = [];
+	let [penX, penY] = [0, 0];
+	for (let path = 0; path + 1 < starts.length; path++) {
+		const [first, last] = [starts[path], starts[path + 1] - 1];
+		if (last <= first) continue;
+		const [x, y] = [points[2 * first], points[2 * first + 1]];
+		parts.push(parts.length ? `m${pair(x - penX, y - penY)}l` : `M${pair(x, y)}l`);
+		for (let i = first + 1; i <= last; i++) {
+			const step = pair(points[2 * i] - points[2 * i - 2], points[2 * i + 1] - points[2 * i - 1]);
+			parts.push(i > first + 1 && !step.startsWith('-') ? ` ${step}` : step);
+		}
+		if (closed) parts.push('z');
+		// after `z` the pen stands where the path began (SVG 2, section 9.3.4)
+		const end = closed ? first : last;
+		[penX, penY] = [points[2 * end], points[2 * end + 1]];
+	}
+	return parts.join('');
 }

@@ -1,0 +1,21 @@
+import type { Coverage } from '../../boundaries/coverage.ts';
+import type { Cluster } from './clusters.ts';
+
+/**
+ * What a group of parts is called: the name of its regions, of the level above where they share it, or
+ * `part of` the one region whose main part lies elsewhere.
+ */
+export function clusterName(
+	{ names, areasKm2 }: Pick<Coverage, 'names' | 'areasKm2'>,
+	groups: (string | null)[],
+	{ regions }: Pick<Cluster, 'regions'>,
+): string {
+	const [first, ...others] = regions;
+	const part = (one: Cluster['regions'][number]) =>
+		one.areaKm2 < areasKm2[one.region] / 2 ? `part of ${names[one.region]}` : names[one.region];
+	if (!others.length) return part(first);
+	const group = groups[first.region];
+	if (group && others.every(({ region }) => groups[region] === group)) return group;
+	if (others.length === 1) return `${part(first)} and ${part(others[0])}`;
+	return `${part(first)} and ${others.length} more`;
+}

@@ -1,0 +1,186 @@
+/**
+ * The insets of a sheet: a projection of its own for each, a box where there is room, its arcs on the
+ * paper. Where the map leaves no room, a strip of its box is kept free for them and the map grows smaller.
+ */
+import type { Coverage } from '../../boundaries/coverage.ts';
+import { drawnRings } from '../fills.ts';
+import type { SheetLayout } from '../layout.ts';
+import { partsOnly, withArcs, type LonLatArcs } from '../plane/arc-subsets.ts';
+import { chooseProjection, type ProjectionChoice } from '../plane/choose-projection.ts';
+import { extentOf } from '../plane/extent.ts';
+import { planeBoxOf, ratioOf, type MapFit } from '../plane/fit-map.ts';
+import { fitInto, type Box, type Fit } from '../plane/fit.ts';
+import { projectArcs } from '../plane/project-arcs.ts';
+import { quantise, type SheetArcs } from '../plane/quantise.ts';
+import { slackOf } from '../plane/slack.ts';
+import { cleanText } from '../type/clean-text.ts';
+import { clusterName } from './cluster-name.ts';
+import { freeGrid } from './free-grid.ts';
+import { insetDress } from './inset-size.ts';
+import { placeInsets, type InsetSpot, type InsetWish } from './place-insets.ts';
+import type { SharedOut } from './share-out.ts';
+
+export interface PlacedInset {
+	id: string;
+	name: string;
+	/** its frame, and where its regions stand in it */
+	outer: Box;
+	inner: Box;
+	/** 1 : n at its middle, and whether the map has the same */
+	ratio: number;
+	sameScale: boolean;
+	chosen: ProjectionChoice;
+	fit: Fit;
+	slack: number;
+}
+
+/** The map as far as it is known before the insets have their places. */
+export interface MapOnPaper {
+	box: Box;
+	/** type scale of the sheet */
+	scale: number;
+	chosen: ProjectionChoice;
+	fitIn: (box: Box) => MapFit;
+	arcsAt: (fit: Fit) => SheetArcs;
+	rings: Int32Array[][];
+}
+
+export interface InsetsOnPaper {
+	map: MapFit;
+	/** all arcs of the sheet */
+	arcs: SheetArcs;
+	insets: PlacedInset[];
+	told: string[];
+}
+
+/** Shares of the box that are kept free for insets, tried in turn. */
+const strips = [0, 0.2, 0.28, 0.38, 0.5];
+
+/** In: groups that get a box, and the arcs of each. */
+export function insetsOnPaper(
+	coverage: Coverage,
+	layout: SheetLayout,
+	groups: (string | null)[],
+	boxed: { cluster: SharedOut; arcs: Uint32Array; lines: LonLatArcs }[],
+	map: MapOnPaper,
+): InsetsOnPaper {
+	if (!boxed.length) {
+		const fitted = map.fitIn(map.box);
+		return { map: fitted, arcs: map.arcsAt(fitted.fit), insets: [], told: [] };
+	}
+	const drafts = boxed.map(({ cluster, lines }) =>
+		draftOf(coverage, layout, groups, cluster, lines, map.chosen),
+	);
+	const dress = insetDress(map.scale, layout.scaleBar);
+	for (const strip of strips) {
+		const fitted = map.fitIn(bestStrip(map, strip));
+		const arcs = map.arcsAt(fitted.fit);
+		const grid = freeGrid(arcs, drawnRings(map.rings, arcs), map.box);
+		const ground = { grid, dress, mapRatio: fitted.ratio ?? 1, scale: map.scale };
+		const spots = placeInsets(
+			drafts.map((draft) => draft.wish(fitted.fit, map.box)),
+			ground,
+		);
+		if (spots.includes(null) && strip !== strips[strips.length - 1]) continue;
+		return settled(boxed, drafts, spots, fitted, arcs);
+	}
+	throw new RangeError('no strips to try');
+}
+
+/** The box less a strip along its left side or its foot, whichever costs less scale. */
+function bestStrip({ box, fitIn }: MapOnPaper, share: number): Box {
+	if (!share) return box;
+	const [across, down] = [Math.round(box.width * share), Math.round(box.height * share)];
+	const beside = { ...box, x: box.x + across, width: box.width - across };
+	const above = { ...box, height: box.height - down };
+	return fitIn(beside).fit.scale >= fitIn(above).fit.scale ? beside : above;
+}
+
+type Draft = ReturnType<typeof draftOf>;
+
+function draftOf(
+	coverage: Coverage,
+	layout: SheetLayout,
+	groups: (string | null)[],
+	cluster: SharedOut,
+	lines: LonLatArcs,
+	mapProjection: ProjectionChoice,
+) {
+	const extent = extentOf(partsOnly(coverage, cluster.parts));
+	const chosen = chooseProjection(extent, { projection: 'auto' });
+	const slack = slackOf(extent);
+	const plane = projectArcs(lines, chosen.projection, slack);
+	const bounds = planeBoxOf(plane);
+	// measured at a size at which hundredths of a millimetre are small against the whole
+	const measured = fitInto(corners(bounds), { x: 0, y: 0, width: 1e5, height: 1e5 });
+	const ratio = ratioOf(chosen.projection, bounds, measured) ?? 1;
+	const atOne = measured.scale * ratio;
+	const choice = layout.frame.insetChoices[cluster.id];
+	const name = cleanText(choice?.name || clusterName(coverage, groups, cluster));
+	const wish = (fit: Fit, box: Box): InsetWish => ({
+		name,
+		width: atOne * (bounds.right - bounds.left),
+		height: atOne * (bounds.bottom - bounds.top),
+		towards: direction(extent, mapProjection, fit, box),
+		ratio: choice?.ratio ?? null,
+		cornerMm: choice?.cornerMm ?? null,
+	});
+	return { id: cluster.id, name, chosen, slack, plane, bounds, wish };
+}
+
+const corners = ({ left, right, top, bottom }: ReturnType<typeof planeBoxOf>) => ({
+	points: Float64Array.of(left, top, right, bottom),
+	starts: Uint32Array.of(0, 2),
+});
+
+/** From the middle of the map's box towards where the group would lie on the map. */
+function direction(
+	{ west, east, south, north }: ReturnType<typeof extentOf>,
+	{ projection }: ProjectionChoice,
+	{ scale, dx, dy }: Fit,
+	box: Box,
+): [number, number] {
+	const [x, y] = projection([(west + east) / 2, (south + north) / 2]) ?? [NaN, NaN];
+	const [right, down] = [
+		x * scale + dx - box.x - box.width / 2,
+		y * scale + dy - box.y - box.height / 2,
+	];
+	const away = Math.hypot(right, down);
+	return away > 0 && Number.isFinite(away) ? [right / away, down / away] : [0, 0];
+}
+
+function settled(
+	boxed: { arcs: Uint32Array }[],
+	drafts: Draft[],
+	spots: (InsetSpot | null)[],
+	map: MapFit,
+	arcs: SheetArcs,
+): InsetsOnPaper {
+	const told: string[] = [];
+	const patches: { arcs: Uint32Array; points: SheetArcs }[] = [];
+	const insets: PlacedInset[] = [];
+	spots.forEach((spot, i) => {
+		const { id, name, chosen, slack, plane, bounds } = drafts[i];
+		if (!spot) {
+			told.push(
+				`There is no room for a box for ${name}, so it is not on the sheet. Take a larger paper, or put it into the map's frame.`,
+			);
+			return insets.push(lost(drafts[i]));
+		}
+		told.push(...spot.told);
+		const fit = fitInto(corners(bounds), spot.inner);
+		patches.push({ arcs: boxed[i].arcs, points: quantise(plane, fit) });
+		const { outer, inner, ratio } = spot;
+		const sameScale = map.ratio !== null && Math.abs(ratio / map.ratio - 1) < 1e-9;
+		insets.push({ ...{ id, name, outer, inner, ratio, sameScale, chosen, fit, slack } });
+	});
+	return { map, arcs: patches.length ? withArcs(arcs, patches) : arcs, insets, told };
+}
+
+/** An inset without a box keeps its number, and nothing of it is drawn. */
+function lost({ id, name, chosen, slack }: Draft): PlacedInset {
+	const nowhere = { x: 0, y: 0, width: 0, height: 0 };
+	const fit = { scale: 0, dx: 0, dy: 0 };
+	return { ...{ id, name, chosen, slack, fit }, outer: nowhere, inner: nowhere, ratio: 0, sameScale: false };
+}
+

@@ -1,0 +1,165 @@
+/**
+ * Where the boxes of the insets stand and at which scale. Each is tried at the scale of the map and at
+ * round ratios, at every free place of the map's box; taken is the place that lies nearest to the true
+ * direction, at an edge, at the largest scale. What is set by hand is kept if it is free.
+ */
+import type { Box } from '../plane/fit.ts';
+import { isFree, type FreeGrid } from './free-grid.ts';
+import { insetFrame, type InsetDress } from './inset-size.ts';
+
+export interface InsetWish {
+	name: string;
+	/** size of the regions at 1 : 1, hundredths of a millimetre */
+	width: number;
+	height: number;
+	/** unit vector on the paper from the middle of the map; [0, 0] where there is no telling */
+	towards: [number, number];
+	ratio: number | null;
+	cornerMm: [number, number] | null;
+}
+
+export interface InsetSpot {
+	outer: Box;
+	inner: Box;
+	ratio: number;
+	/** what was set by hand and could not be kept */
+	told: string[];
+}
+
+/** Regions in an inset may take so much of the shorter side of the map's box, and at least so much, on A4. */
+const sides = { most: 0.42, least: 700 };
+/** A smaller scale is worth this many radians of direction; the scale of the map as many. */
+const perStep = 0.15;
+const sameScale = 0.6;
+/** Standing away from the edges by the whole box costs so much. */
+const offEdge = 2;
+const steps = [1, 1.25, 1.5, 2, 2.5, 3, 4, 5, 6, 8];
+/** Clear of regions and other boxes, on A4. */
+const clearance = 120;
+
+interface Ground {
+	grid: FreeGrid;
+	dress: InsetDress;
+	/** 1 : n of the map itself */
+	mapRatio: number;
+	scale: number;
+}
+
+/** Round ratios at which the regions are neither too large nor too small, the largest scale first. */
+function ratiosFor({ width, height, ratio }: InsetWish, { grid, mapRatio, scale }: Ground): number[] {
+	if (ratio !== null) return [ratio];
+	const longer = Math.max(width, height);
+	const most = sides.most * Math.min(grid.box.width, grid.box.height);
+	const least = Math.min(sides.least * scale, most / 3);
+	const fits = (one: number) => longer / one <= most && longer / one >= least;
+	const power = 10 ** Math.floor(Math.log10(longer / most));
+	const round = [power, 10 * power, 100 * power].flatMap((ten) => steps.map((step) => step * ten));
+	return [mapRatio, ...round].filter(fits).sort((a, b) => a - b);
+}
+
+const overlap = (a: Box, b: Box, apart: number): boolean =>
+	a.x < b.x + b.width + apart &&
+	b.x < a.x + a.width + apart &&
+	a.y < b.y + b.height + apart &&
+	b.y < a.y + a.height + apart;
+
+function isClear(box: Box, { grid, scale }: Ground, others: Box[]): boolean {
+	const apart = clearance * scale;
+	if (others.some((other) => overlap(box, other, apart))) return false;
+	// against the edges of the map's box nothing need be kept clear
+	const [left, top] = [Math.max(grid.box.x, box.x - apart), Math.max(grid.box.y, box.y - apart)];
+	const right = Math.min(grid.box.x + grid.box.width, box.x + box.width + apart);
+	const bottom = Math.min(grid.box.y + grid.box.height, box.y + box.height + apart);
+	if (box.x < left || box.y < top || box.x + box.width > right || box.y + box.height > bottom)
+		return false;
+	return isFree(grid, { x: left, y: top, width: right - left, height: bottom - top });
+}
+
+/** How ill a place suits: radians off the true direction, and the way to the nearest edges. */
+function cost(box: Box, [tx, ty]: [number, number], { box: map }: FreeGrid): number {
+	const [x, y] = [box.x + box.width / 2, box.y + box.height / 2];
+	const [dx, dy] = [x - map.x - map.width / 2, y - map.y - map.height / 2];
+	const away = Math.hypot(dx, dy) || 1;
+	const known = tx !== 0 || ty !== 0;
+	const off = known ? Math.acos(Math.min(1, Math.max(-1, (dx * tx + dy * ty) / away))) : 0;
+	const fromSide = Math.min(box.x - map.x, map.x + map.width - box.x - box.width) / map.width;
+	const fromEnd = Math.min(box.y - map.y, map.y + map.height - box.y - box.height) / map.height;
+	return off + offEdge * (fromSide + fromEnd);
+}
+
+const movedTo = (box: Box, x: number, y: number): Box => ({ ...box, x: box.x + x, y: box.y + y });
+
+/** The best free place for a frame of a size; null where there is none. */
+function bestPlace(frame: Box, wish: InsetWish, ground: Ground, others: Box[]) {
+	const { grid } = ground;
+	const [wide, high] = [grid.box.width - frame.width, grid.box.height - frame.height];
+	if (wide < 0 || high < 0) return null;
+	const places = (room: number) => {
+		const count = Math.max(1, Math.floor(room / grid.cell));
+		return Array.from({ length: count + 1 }, (_, i) => Math.round((room * i) / count));
+	};
+	let best: { box: Box; cost: number } | null = null;
+	for (const y of places(high)) {
+		for (const x of places(wide)) {
+			const box = movedTo(frame, grid.box.x + x, grid.box.y + y);
+			const costs = cost(box, wish.towards, grid);
+			if ((!best || costs < best.cost) && isClear(box, ground, others)) best = { box, cost: costs };
+		}
+	}
+	return best;
+}
+
+function spotFor(wish: InsetWish, ground: Ground, others: Box[]): Omit<InsetSpot, 'told'> | null {
+	let best: { spot: Omit<InsetSpot, 'told'>; cost: number } | null = null;
+	ratiosFor(wish, ground).forEach((ratio, step) => {
+		const [width, height] = [wish.width / ratio, wish.height / ratio];
+		const { outer, inner } = insetFrame(ground.dress, wish.name, ratio, width, height);
+		const found = wish.cornerMm
+			? byHand(outer, wish.cornerMm, ground, others)
+			: bestPlace(outer, wish, ground, others);
+		if (!found) return;
+		const total = found.cost + step * perStep - (ratio === ground.mapRatio ? sameScale : 0);
+		if (best && best.cost <= total) return;
+		const { box } = found;
+		best = { spot: { outer: box, inner: movedTo(inner, box.x, box.y), ratio }, cost: total };
+	});
+	return (best as { spot: Omit<InsetSpot, 'told'> } | null)?.spot ?? null;
+}
+
+function byHand(frame: Box, [x, y]: [number, number], ground: Ground, others: Box[]) {
+	const box = movedTo(frame, Math.round(100 * x), Math.round(100 * y));
+	return isClear(box, ground, others) ? { box, cost: 0 } : null;
+}
+
+/** What a wish falls back on, with what has to be told then. */
+function eased(wish: InsetWish): { wish: InsetWish; told: string[] }[] {
+	const name = `The box of ${wish.name}`;
+	const tries = [{ wish, told: [] as string[] }];
+	if (wish.cornerMm)
+		tries.push({
+			wish: { ...wish, cornerMm: null },
+			told: [`${name} would lie over the map, another box or the edge where you put it, so it stands where there is room.`],
+		});
+	if (wish.ratio !== null)
+		tries.push({
+			wish: { ...wish, cornerMm: null, ratio: null },
+			told: [`${name} finds no room at the scale you set, so it is drawn at one that fits.`],
+		});
+	return tries;
+}
+
+/** A spot for every wish, in their order; null for those that find no room. Boxes set by hand come first. */
+export function placeInsets(wishes: InsetWish[], ground: Ground): (InsetSpot | null)[] {
+	const spots: (InsetSpot | null)[] = wishes.map(() => null);
+	const order = wishes.map((_, i) => i).sort((a, b) => Number(!!wishes[b].cornerMm) - Number(!!wishes[a].cornerMm) || a - b);
+	for (const i of order) {
+		const others = spots.flatMap((spot) => (spot ? [spot.outer] : []));
+		for (const { wish, told } of eased(wishes[i])) {
+			const spot = spotFor(wish, ground, others);
+			if (!spot) continue;
+			spots[i] = { ...spot, told };
+			break;
+		}
+	}
+	return spots;
+}

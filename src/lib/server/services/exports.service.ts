@@ -1,0 +1,84 @@
+import type { AskExport, ExportNote } from '../../schemas/export.ts';
+import { requireAccess, type Member } from '../access/member.ts';
+import type { Workshop } from '../jobs/workshop.ts';
+import { findExport, listExports, type ExportRow } from '../repositories/exports.repository.ts';
+import { holdSheet } from '../repositories/sheets.repository.ts';
+import { askIn, isNumber, mostOpenExports, noteOf } from './ask-export.ts';
+import { sheetOf } from './draft.service.ts';
+import type { EditionFile } from './edition.service.ts';
+import { optionsFor, requireReader } from './export-options.ts';
+import { Conflict, NotFound } from './outcomes.ts';
+
+/** Told of a sheet, the newest first. */
+const mostListed = 200;
+
+/**
+ * Asks for a file of an edition or of the present draft. What was asked for before in the same words is
+ * answered with what is there: the file, or the job that makes it.
+ */
+export async function askForExport(
+	shop: Pick<Workshop, 'db' | 'queue'>,
+	member: Member,
+	number: number,
+	asked: AskExport,
+): Promise<ExportNote> {
+	requireAccess(member, 'files.download');
+	requireAccess(member, 'sheet.read');
+	requireReader(asked.kind, asked.reader);
+	optionsFor(asked.kind, asked.options);
+	return shop.db.transaction().execute(async (trx) => {
+		const sheet = await holdSheet(trx, member.team.id, isNumber(number) ? number : 0);
+		if (!sheet) throw new NotFound('sheet');
+		const note = await askIn(shop, trx, member, sheet, asked);
+		if (note) return note;
+		const message = `${mostOpenExports} files of the team are being made already. Wait for some of them.`;
+		throw new Conflict('too-many-open', message);
+	});
+}
+
+/** The files that were asked for of a sheet, the newest first: for its page, and for asking again and again. */
+export async function sheetExports(
+	shop: Pick<Workshop, 'db'>,
+	member: Member,
+	number: number,
+): Promise<ExportNote[]> {
+	requireAccess(member, 'files.download');
+	const sheet = await sheetOf(shop.db, member, number);
+	return (await listExports(shop.db, sheet.id, mostListed)).map(noteOf);
+}
+
+export async function readExport(
+	shop: Pick<Workshop, 'db'>,
+	member: Member,
+	number: number,
+	one: number,
+): Promise<ExportNote> {
+	return noteOf(await exportRow(shop, member, number, one));
+}
+
+/** The bytes of one that is done. */
+export async function exportFileOf(
+	shop: Pick<Workshop, 'db' | 'files'>,
+	member: Member,
+	number: number,
+	one: number,
+): Promise<EditionFile> {
+	const note = noteOf(await exportRow(shop, member, number, one));
+	const { file } = note;
+	if (!file) throw new Conflict('not-done', note.sentence || 'The file is not made yet.');
+	return { ...file, open: async () => (await shop.files.open(file.digest)).stream };
+}
+
+async function exportRow(
+	shop: Pick<Workshop, 'db'>,
+	member: Member,
+	number: number,
+	one: number,
+): Promise<ExportRow> {
+	requireAccess(member, 'files.download');
+	requireAccess(member, 'sheet.read');
+	const sheet = await sheetOf(shop.db, member, number);
+	const row = isNumber(one) ? await findExport(shop.db, sheet.id, one) : undefined;
+	if (!row) throw new NotFound('file');
+	return row;
+}
