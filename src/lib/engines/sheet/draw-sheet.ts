@@ -6,7 +6,7 @@ import { asSeenBy as seen, labelInk } from '../colour/index.ts';
 import type { BorderList } from '../borders/border-list.ts';
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
-import { collar } from './collar/collar.ts';
+import { arrange } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
@@ -16,7 +16,8 @@ import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
-import { placeOnPaper, type Placement } from './place-on-paper.ts';
+import type { Placement } from './place-on-paper.ts';
+import { drawFrame } from './frame/draw-frame.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { cleanText } from './type/clean-text.ts';
@@ -83,24 +84,12 @@ export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawi
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
 export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
-	const { coverage, layout, reader, colouring, weak, groups } = input;
+	const { coverage, layout, reader, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
-	const inks = input.inks.map((ink) => ({ ...ink, shown: see(ink.hex, reader) }));
-	const marked = weak.length > 0;
-	let around = null as ReturnType<typeof collar> | null;
-	const placed = placeOnPaper(coverage, layout, (sentence) => {
-		const coloured = colouring !== null;
-		around = collar({
-			layout,
-			inks,
-			coloured,
-			weak: marked,
-			projection: sentence,
-			issue: input.issue,
-		});
-		return around.map;
-	});
-	const { map, texts, legend, bar, scale, blocks, obstacles } = around!;
+	const seenNow = (hex: string) => see(hex, reader);
+	const inks = input.inks.map((ink) => ({ ...ink, shown: seenNow(ink.hex) }));
+	const { placed, around, legend, obstacles, grounds, legendNote } = arrange(input, inks);
+	const { texts, bar, scale, blocks } = around;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
@@ -112,15 +101,27 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 				names,
 				groups,
 				areas: coverage.areasKm2,
-				box: map,
+				box: placed.box,
 				scale,
 				obstacles,
 			})
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
-	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
+	const lines = [
+		...lineLayers({
+			...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
+			look: layout.lines,
+			see: seenNow,
+		}),
+		...leaderLayer(arcs, labels.leaders, scale),
+	];
+	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
 	const measured = drawScale(placed, bar);
+	const frame = drawFrame({
+		...{ coverage, groups, layout, placed, scale, reader, see },
+		labels: labels.texts,
+	});
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
@@ -129,28 +130,30 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		inks,
 		...withLeaders(arcs, labels.leaders),
 		fills,
-		lines: [
-			...lineLayers({
-				...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
-				look: layout.lines,
-				see: (hex) => see(hex, reader),
-			}),
-			...leaderLayer(arcs, labels.leaders, scale),
-		],
+		lines,
 		shapes: [
-			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, (hex) => see(hex, reader))),
-			...blocks.flatMap(({ ground }) => ground ?? []),
+			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, seenNow)),
+			...frame.shapes,
+			...grounds,
+			...keys.shapes,
 		],
 		texts: [
 			...inkLabels(labels.texts, fills),
 			...texts,
 			...measured.texts,
+			...frame.texts,
 			...keys.texts,
 			...blocks.flatMap((block) => block.texts),
 		],
-		rects: [...measured.rects, ...keys.rects],
+		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,
-		notes: { projection: placed.chosen.sentence, scale: measured.sentence },
+		notes: {
+			projection: placed.chosen.sentence,
+			scale: measured.sentence,
+			insets: frame.sentence,
+			legend: legendNote,
+		},
+		frame: frame.report,
 		legend,
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
