@@ -38,7 +38,7 @@ async function fetchCoverage(address: string): Promise<Coverage> {
 async function draw({ id, geometry, onCanvas, input, places }: DrawRequest): Promise<Drawn> {
 	drawnFrom = geometry;
 	const coverage = await coverageAt(geometry, geometry);
-	const { drawing, placement } = drawPlaced({ coverage, ...input });
+	const { drawing, placement } = drawPlaced({ coverage, ...input, bare: onCanvas });
 	const ground = onCanvas ? groundOf(drawing) : null;
 	last = ground && { ground, placement };
 	const found = {

@@ -15,6 +15,14 @@ import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts'
 import { replaceRulesByFile, rulesFile } from '../../src/lib/server/services/rules-csv.service.ts';
 import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
 import { sheetTies, tieGround } from '../../src/lib/server/services/ties.service.ts';
+import { askExport } from '../../src/lib/schemas/export.ts';
+import { stopExport } from '../../src/lib/server/services/export-end.service.ts';
+import {
+	askForExport,
+	exportFileOf,
+	readExport,
+	sheetExports,
+} from '../../src/lib/server/services/exports.service.ts';
 import {
 	beginSearch,
 	readSearch,
@@ -308,6 +316,14 @@ const walk: Walk = {
 	stopSearch: ['colours.edit', (member) => stopSearch(shop, member, 99, 1)],
 	sheetTies: ['sheet.read', (member) => sheetTies(shop, member, 99)],
 	tieGround: ['sheet.read', (member) => tieGround(shop, member, 99, { sheet: 98, within: 1 })],
+	askForExport: [
+		'files.download',
+		(member) => askForExport(shop, member, 99, askExport.parse({ kind: 'svg' })),
+	],
+	sheetExports: ['files.download', (member) => sheetExports(shop, member, 99)],
+	readExport: ['files.download', (member) => readExport(shop, member, 99, 1)],
+	exportFileOf: ['files.download', (member) => exportFileOf(shop, member, 99, 1)],
+	stopExport: ['files.download', (member) => stopExport(shop, member, 99, 1)],
 	sheetSearches: ['sheet.read', (member) => sheetSearches(shop, member, 99)],
 	readSearch: ['sheet.read', (member) => readSearch(shop, member, 99, 1)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],

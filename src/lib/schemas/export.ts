@@ -66,7 +66,10 @@ const chosen = <T extends z.ZodType>(schema: T) =>
 export const askExportForm = z
 	.object({
 		kind: askExport.shape.kind,
-		edition: z.preprocess((value) => (value === '' ? null : Number(value)), askExport.shape.edition),
+		edition: z.preprocess(
+			(value) => (value === '' ? null : Number(value)),
+			askExport.shape.edition,
+		),
 		reader: askExport.shape.reader,
 		colours: chosen(z.enum(['class', 'attribute'])),
 		letters: chosen(z.enum(['embedded', 'outlines', 'plain'])),

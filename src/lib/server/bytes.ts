@@ -41,7 +41,18 @@ export async function editionFileResponse(request: Request, file: EditionFile): 
 		'cache-control': 'private, max-age=31536000, immutable',
 	};
 	if (isHeld(request, file.digest)) return notModified(file.digest, headers);
-	return new Response(Readable.toWeb(await file.open()) as ReadableStream, {
+	return bytesOf(file, headers);
+}
+
+/** A stored file whose address may lead to another one day: the browser asks whether it is still the same. */
+export async function storedFileResponse(request: Request, file: EditionFile): Promise<Response> {
+	const headers = { etag: `"${file.digest}"`, 'cache-control': 'private, no-cache' };
+	if (isHeld(request, file.digest)) return notModified(file.digest, headers);
+	return bytesOf(file, headers);
+}
+
+const bytesOf = async (file: EditionFile, headers: Record<string, string>): Promise<Response> =>
+	new Response(Readable.toWeb(await file.open()) as ReadableStream, {
 		headers: {
 			...headers,
 			'content-type': file.mediaType,
@@ -50,7 +61,6 @@ export async function editionFileResponse(request: Request, file: EditionFile): 
 			'content-security-policy': svgPolicy,
 		},
 	});
-}
 
 /** A file that is made when it is asked for, to be kept by whoever asked. */
 export const fileResponse = (file: {

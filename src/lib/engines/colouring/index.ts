@@ -41,3 +41,5 @@ export {
 export { goalFigures, type GoalFigure } from './goal-figures.ts';
 export { goalKinds, type GoalKind, type GoalWish } from './goal-wish.ts';
 export { Improver, type AimFigure, type ImproveSettings } from './improve.ts';
+export { partInks, type Parting, type PartingQuestion } from './part-inks.ts';
+export { checkParting } from './check-parting.ts';

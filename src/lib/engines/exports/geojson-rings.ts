@@ -16,6 +16,12 @@ function settled(ring: LonLat[]): LonLat[] {
 	return shift ? ring.map(([lon, lat]) => [lon - shift, lat]) : ring;
 }
 
+/** Whether a ring comes to 180 degrees, or goes round a pole. */
+export function reachesSeam(ring: LonLat[]): boolean {
+	const turn = Math.abs(ring[ring.length - 1][0] - ring[0][0]) > 180;
+	return turn || settled(ring).some(([lon]) => Math.abs(lon) >= 180 - 1e-9);
+}
+
 function span(ring: LonLat[]): [number, number] {
 	let [west, east] = [Infinity, -Infinity];
 	for (const [lon] of ring) [west, east] = [Math.min(west, lon), Math.max(east, lon)];
@@ -51,8 +57,8 @@ export function polygonsOf(coverage: Coverage, region: number): LonLat[][][] {
 	);
 }
 
-/** Every piece of the outer ring with the pieces of holes that lie in it. */
-function cutPart([outer, ...holes]: LonLat[][]): LonLat[][][] {
+/** Every piece of the outer ring with the pieces of holes that lie in it, cut at 180 degrees. */
+export function cutPart([outer, ...holes]: LonLat[][]): LonLat[][][] {
 	const cutHoles = holes.flatMap(cutRing);
 	return cutRing(outer).map((piece) => [
 		piece,

@@ -1,14 +1,15 @@
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { SheetRow } from '../sheet/index.ts';
 import { polygonsOf } from './geojson-rings.ts';
+import { propertiesOf } from './properties.ts';
+import type { ExtraColumn } from './source.ts';
 
-function featureOf(coverage: Coverage, row: SheetRow) {
+function featureOf(coverage: Coverage, row: SheetRow, columns: readonly ExtraColumn[]) {
 	const polygons = polygonsOf(coverage, row.region);
-	const { key, name, group, inkNumber, inkName, hex } = row;
 	return {
 		type: 'Feature',
-		id: key,
-		properties: { key, name, group, inkNumber, inkName, hex },
+		id: row.key,
+		properties: propertiesOf(row, columns),
 		geometry:
 			polygons.length === 1
 				? { type: 'Polygon', coordinates: polygons[0] }
@@ -18,11 +19,16 @@ function featureOf(coverage: Coverage, row: SheetRow) {
 
 /**
  * The coloured regions as GeoJSON (RFC 7946): one feature a line in region order, with the number of
- * the ink from 1 as in the legend, its name and its hex digits. Full geometry, not the sheet's.
+ * the ink from 1 as in the legend, its name and its hex digits, and the further columns: territory,
+ * class of a theme. Full geometry, not the sheet's.
  * Longitudes stay within -180 to 180. Byte for byte repeatable.
  */
-export function exportGeoJson(coverage: Coverage, rows: SheetRow[]): Uint8Array {
-	const features = rows.map((row) => JSON.stringify(featureOf(coverage, row)));
+export function exportGeoJson(
+	coverage: Coverage,
+	rows: SheetRow[],
+	columns: readonly ExtraColumn[] = [],
+): Uint8Array {
+	const features = rows.map((row) => JSON.stringify(featureOf(coverage, row, columns)));
 	const text = `{"type":"FeatureCollection","features":[\n${features.join(',\n')}\n]}\n`;
 	return new TextEncoder().encode(text);
 }

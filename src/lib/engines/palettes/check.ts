@@ -5,7 +5,12 @@ import type { LabelVerdict, PairVerdict, PaletteVerdict, Thresholds, Touching } 
 import { touchingPairs } from './touching.ts';
 
 /** 12 in CIEDE2000 is what regions of 5 to 10 mm ask; 4.5 is WCAG 2.2, success criterion 1.4.3. */
-export const defaultThresholds: Thresholds = { ciede2000: 12, grey: 5, label: 4.5 };
+export const labelContrastAsked = 4.5;
+export const defaultThresholds: Thresholds = {
+	ciede2000: 12,
+	grey: 5,
+	label: labelContrastAsked,
+};
 
 /**
  * Checks a palette for every reader.

@@ -2,7 +2,7 @@
 export * from './palette.ts';
 export { housePalettes } from './house.ts';
 export { publishedPalettes } from './published.ts';
-export { checkPalette, defaultThresholds } from './check.ts';
+export { checkPalette, defaultThresholds, judgeLabel, labelContrastAsked } from './check.ts';
 export {
 	alikeBelow,
 	demandFor,
@@ -14,6 +14,27 @@ export {
 export { weakBorders, type SheetFills } from './weak-borders.ts';
 export { bordersSentence, verdictSentence } from './sentence.ts';
 export { mendPalette, type MendRequest, type MendResult } from './mend.ts';
+export { pairDemands, type PairDemand } from './pair-demands.ts';
+export {
+	isUnsafe,
+	pairsOnSheet,
+	type BesideColour,
+	type PairOnSheet,
+	type PairState,
+	type ReaderOnPair,
+	type SheetLook,
+} from './pairs-on-sheet.ts';
+export { contrastFor, hatchesTell, hatchShows, type Fill } from './hatch-tells.ts';
+export {
+	meetsDemands,
+	proposalKinds,
+	proposeMends,
+	type Proposal,
+	type ProposalAnswer,
+	type ProposalKind,
+	type ProposalRequest,
+} from './mend-proposals.ts';
+export { readDesignTokens, tokenLimits, type TokensRead } from './tokens/index.ts';
 export { bestKnown } from './limits.ts';
 export { inkDistances } from './ink-distances.ts';
 export { tritanDoubts } from './tritan-doubts.ts';

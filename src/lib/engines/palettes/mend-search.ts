@@ -81,9 +81,9 @@ function between([first, last]: readonly [number, number], share: number): numbe
 
 /** What one ink misses with its neighbours and by its label, and how far it has moved. */
 function inkCost(task: MendTask, state: State, ink: number): [missing: number, move: number] {
-	let missing = labelShortfall(task.asked, state.inks[ink]);
+	let missing = labelShortfall(task.label, state.inks[ink]);
 	for (const other of task.neighbours[ink]) {
-		missing += shortfall(task.asked, state.seen[ink], state.seen[other]);
+		missing += shortfall(task.asks[ink][other], state.seen[ink], state.seen[other]);
 	}
 	return [missing, moveOf(task, ink, state.seen[ink])];
 }
@@ -92,10 +92,10 @@ function stateOf(task: MendTask, from: readonly string[]): State {
 	const seen = from.map(appearanceOf);
 	const state: State = { inks: [...from], seen, places: from.map(oklabOf), missing: 0, move: 0 };
 	from.forEach((hex, ink) => {
-		state.missing += labelShortfall(task.asked, hex);
+		state.missing += labelShortfall(task.label, hex);
 		state.move += moveOf(task, ink, seen[ink]);
 		for (const other of task.neighbours[ink]) {
-			if (other > ink) state.missing += shortfall(task.asked, seen[ink], seen[other]);
+			if (other > ink) state.missing += shortfall(task.asks[ink][other], seen[ink], seen[other]);
 		}
 	});
 	return state;

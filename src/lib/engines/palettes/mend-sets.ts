@@ -21,13 +21,13 @@ const mostSpent = 15_000;
  */
 export function smallestMend(
 	task: MendTask,
-	pairs: readonly [number, number][],
 	locked: readonly number[],
 	random: () => number,
 ): Attempt | null {
+	const { pairs } = task;
 	const free = task.inks.map((_, ink) => ink).filter((ink) => !locked.includes(ink));
-	const failing = pairs.filter(([a, b]) => shortfall(task.asked, task.start[a], task.start[b]) > 0);
-	const needed = free.filter((ink) => labelShortfall(task.asked, task.inks[ink]) > 0);
+	const failing = failingPairs(task);
+	const needed = free.filter((ink) => labelShortfall(task.label, task.inks[ink]) > 0);
 	const pace = Math.min(1, cheapPairs / pairs.length);
 	let spent = 0;
 	for (let size = Math.max(1, needed.length); size <= free.length; size++) {
@@ -40,6 +40,10 @@ export function smallestMend(
 	}
 	return null;
 }
+
+/** The touching pairs that miss what is asked as they stand. */
+const failingPairs = ({ pairs, start }: MendTask): [number, number][] =>
+	pairs.filter((ask) => shortfall(ask, start[ask.a], start[ask.b]) > 0).map(({ a, b }) => [a, b]);
 
 /** A short look at every set, then a close one at the three most promising. */
 function bestOfSize(

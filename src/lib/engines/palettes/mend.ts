@@ -2,7 +2,7 @@ import { ciede2000 } from '../colour/ciede2000.ts';
 import { readHex } from '../colour/hex.ts';
 import { labOf } from '../colour/lab.ts';
 import { checkPalette, defaultThresholds } from './check.ts';
-import { mendTask } from './mend-cost.ts';
+import { flatAsks, mendTask } from './mend-cost.ts';
 import { whyImpossible, whyNotFound } from './mend-reasons.ts';
 import { smallestMend } from './mend-sets.ts';
 import type { Thresholds, Touching } from './palette.ts';
@@ -45,19 +45,20 @@ export function mendPalette(request: MendRequest): MendResult {
 	const stay = { inks, moves: inks.map(() => 0) };
 	if (checkPalette(inks, request.touching, asked).passes) return { status: 'not-needed', ...stay };
 
-	const pairs = touchingPairs(inks.length, request.touching);
-	const task = mendTask(inks, pairs, asked);
+	const pairs = flatAsks(touchingPairs(inks.length, request.touching), asked);
+	const task = mendTask(inks, inks, pairs, asked.label);
 	const never = whyImpossible(task, locked);
 	if (never) return { status: 'impossible', ...stay, reason: never };
 
-	const mended = smallestMend(task, pairs, locked, randomStream(request.seed ?? 0));
+	const mended = smallestMend(task, locked, randomStream(request.seed ?? 0));
 	if (!mended || !checkPalette(mended.inks, request.touching, asked).passes) {
 		return { status: 'not-found', ...stay, reason: whyNotFound(task, locked) };
 	}
 	return { status: 'mended', inks: mended.inks, moves: movesBetween(inks, mended.inks) };
 }
 
-function lockedInks(count: number, locked: readonly number[]): number[] {
+/** The locked inks, each once, ascending. Throws a RangeError on numbers that are no inks. */
+export function lockedInks(count: number, locked: readonly number[]): number[] {
 	for (const ink of locked) {
 		if (!Number.isInteger(ink) || ink < 0 || ink >= count) {
 			throw new RangeError(`No ink ${ink} among ${count}`);
@@ -66,7 +67,8 @@ function lockedInks(count: number, locked: readonly number[]): number[] {
 	return [...new Set(locked)].sort((a, b) => a - b);
 }
 
-function movesBetween(before: readonly string[], after: readonly string[]): number[] {
+/** How far each ink moved, CIEDE2000 for a typical reader; 0 for one that stayed. */
+export function movesBetween(before: readonly string[], after: readonly string[]): number[] {
 	return before.map((hex, ink) =>
 		hex === after[ink] ? 0 : ciede2000(labOf(hex), labOf(after[ink])),
 	);

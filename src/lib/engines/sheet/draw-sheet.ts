@@ -11,12 +11,14 @@ import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
 import { labelSheet } from './labels/label-sheet.ts';
+import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
 import { placeOnPaper, type Placement } from './place-on-paper.ts';
 import { drawFrame } from './frame/draw-frame.ts';
+import { frameObstacles } from './frame/obstacles.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { cleanText } from './type/clean-text.ts';
@@ -38,6 +40,8 @@ export interface SheetInput {
 	issue: string;
 	/** the classes of a measure, shown in place of the colouring and its inks */
 	theme?: SheetTheme | null;
+	/** leaves hatches out, where a painter cuts them itself tile by tile */
+	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
 }
@@ -99,7 +103,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		return around;
 	};
 	const placed = placeOnPaper(coverage, layout, frameFor, groups);
-	const { texts, legend, bar, scale } = around!;
+	const { texts, legend, bar, scale, blocks, obstacles } = around!;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
@@ -113,6 +117,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 				areas: coverage.areasKm2,
 				box: placed.box,
 				scale,
+				obstacles: [...obstacles, ...frameObstacles(placed, scale, layout.scaleBar)],
 			})
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
@@ -132,16 +137,25 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		...withLeaders(arcs, labels.leaders),
 		fills,
 		lines: [
-			...lineLayers({ sides, arcs, borders: input.borders, groups, weak, scale, fine }),
+			...lineLayers({
+				...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
+				look: layout.lines,
+				see: (hex) => see(hex, reader),
+			}),
 			...leaderLayer(arcs, labels.leaders, scale),
 		],
-		shapes: frame.shapes,
+		shapes: [
+			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, (hex) => see(hex, reader))),
+			...frame.shapes,
+			...blocks.flatMap(({ ground }) => ground ?? []),
+		],
 		texts: [
 			...inkLabels(labels.texts, fills),
 			...texts,
 			...measured.texts,
 			...frame.texts,
 			...keys.texts,
+			...blocks.flatMap((block) => block.texts),
 		],
 		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,

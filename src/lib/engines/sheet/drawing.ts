@@ -65,6 +65,13 @@ export interface LineLayer {
 	hex: string;
 	dash?: number[];
 	arcs: Uint32Array;
+	/**
+	 * the same arcs joined into long lines, signed as in rings, where dashes have to run on; drawn in place of
+	 * `arcs` where it is there
+	 */
+	chains?: Int32Array[];
+	/** the colour itself, where `hex` is what the reader sees of it */
+	own?: string;
 }
 
 export interface DrawnText {

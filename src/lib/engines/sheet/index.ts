@@ -32,6 +32,7 @@ export {
 	type Pen,
 	type Picture,
 } from './canvas/paint-area.ts';
+export { type Hatching } from './canvas/paint-hatches.ts';
 export { refineGround } from './canvas/refine.ts';
 export { regionAt } from './canvas/region-at.ts';
 export { type ChosenProjection } from './plane/projections.ts';

@@ -1,7 +1,10 @@
 import type { BorderList } from '../borders/border-list.ts';
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { WeakBorder } from '../palettes/palette.ts';
+import { chainsOf } from './chains.ts';
 import type { LineLayer } from './drawing.ts';
+import type { LineLook, RankLook } from './layout/lines.ts';
+import { hundredths } from './paper.ts';
 import type { SheetArcs } from './plane/quantise.ts';
 
 /** The regions on both sides of the arcs that are drawn, which may be more than the coverage's. */
@@ -20,6 +23,9 @@ export interface LineInput {
 	scale: number;
 	/** many small regions: borders drawn finer, so that they leave the fills room */
 	fine: boolean;
+	look: LineLook;
+	/** a colour as the drawing's reader sees it */
+	see: (hex: string) => string;
 }
 
 /**
@@ -35,6 +41,8 @@ export function lineLayers({
 	weak,
 	scale,
 	fine,
+	look,
+	see,
 }: LineInput): LineLayer[] {
 	const ranks: Record<'region' | 'group' | 'outer' | 'weak', number[]> = {
 		region: [],
@@ -57,13 +65,31 @@ export function lineLayers({
 		hex,
 		arcs: Uint32Array.from(list),
 	});
+	const ranked = (rank: 'region' | 'group' | 'outer', width: number): LineLayer => {
+		const plain = line(rank, width, '#000000', ranks[rank]);
+		const own = look[rank];
+		return own ? lookedAt(plain, own, arcs, see) : plain;
+	};
 	return [
-		line('region', fine ? widths.fineRegion : widths.region, '#000000', ranks.region),
-		line('group', widths.group, '#000000', ranks.group),
-		line('outer', widths.outer, '#000000', ranks.outer),
+		ranked('region', fine ? widths.fineRegion : widths.region),
+		ranked('group', widths.group),
+		ranked('outer', widths.outer),
 		line('weak', widths.weak, '#000000', ranks.weak),
 		line('weak-core', widths.weakCore, '#ffffff', ranks.weak),
 	].filter(({ arcs: list }) => list.length > 0);
+}
+
+/** A rank as somebody set it, in millimetres on this very sheet whatever its size. */
+function lookedAt(
+	plain: LineLayer,
+	{ widthMm, hex, dashMm }: RankLook,
+	arcs: SheetArcs,
+	see: (hex: string) => string,
+): LineLayer {
+	const looked = { ...plain, width: Math.max(2, hundredths(widthMm)), hex: see(hex), own: hex };
+	if (dashMm.length === 0) return looked;
+	const dash = dashMm.map((mm) => Math.max(1, hundredths(mm)));
+	return { ...looked, dash, chains: chainsOf(arcs, plain.arcs) };
 }
 
 function pairKey(a: number, b: number, regions: number): number {

@@ -7,6 +7,7 @@ import { colouringRequest, colouringResponse } from './check-colouring.ts';
 import { paletteRequest, paletteResponse } from './check-palette.ts';
 import { proofRequest, proofResponse } from './check-proof.ts';
 import { territoriesRequest, territoriesResponse } from './check-territories.ts';
+import { exportOperations } from './export-operations.ts';
 import * as handovers from './handovers.ts';
 import * as measures from './measures.ts';
 import { recutOperations } from './recut-operations.ts';
@@ -162,6 +163,7 @@ export const operations = {
 	...territoryOperations,
 	...recutOperations,
 	...searchOperations,
+	...exportOperations,
 	listEditions: {
 		...{ method: 'GET', path: `${sheet}/editions`, scope: 'editions:read', status: 200 },
 		...{ summary: 'Issued editions, the newest first.', answer: sheets.editionList },

@@ -51,7 +51,7 @@ function described(id: string, operation: Operation): Json {
 
 const parameter = (name: string): Json => ({
 	...{ name, in: 'path', required: true },
-	schema: ['sheet', 'edition', 'proposal', 'recut'].includes(name)
+	schema: ['sheet', 'edition', 'export', 'proposal', 'recut'].includes(name)
 		? { type: 'integer', minimum: 1 }
 		: { type: 'string' },
 });

@@ -4,7 +4,11 @@ import { findSheetById } from '../repositories/sheets.repository.ts';
 import { findTeamById } from '../repositories/teams.repository.ts';
 import { paintInput } from '../services/drawing.service.ts';
 import { failExport, keepExport, type MadeFile } from '../services/export-end.service.ts';
-import { exportGround, type ExportGround } from '../services/export-ground.ts';
+import {
+	exportGround,
+	requireSameBoundaries,
+	type ExportGround,
+} from '../services/export-ground.ts';
 import { aboutExport, requestDigest } from '../services/export-request.ts';
 import { Conflict, NotFound } from '../services/outcomes.ts';
 import { runClaimed, wakeSilent, type ClaimedJob } from './claimed-job.ts';
@@ -26,9 +30,7 @@ const exportJob = (shop: Workshop): ClaimedJob<'exports', Worked> => ({
 	table: 'exports',
 	work: (row, signal, progress) => work(shop, row, signal, progress),
 	settle: (claim, worked) =>
-		'refused' in worked
-			? failExport(shop, claim, worked.refused)
-			: keepExport(shop, claim, worked),
+		'refused' in worked ? failExport(shop, claim, worked.refused) : keepExport(shop, claim, worked),
 	fail: (claim, message) => failExport(shop, claim, message),
 	words: {
 		firstStep: 'Reading the sheet',
@@ -75,6 +77,7 @@ async function inputFor(
 		if (requestDigest(row, about, ground.view.set.id) !== row.request_digest) {
 			return { refused: 'The sheet has changed since the file was asked for. Ask for it again.' };
 		}
+		await requireSameBoundaries(shop.db, ground);
 		return { ...(await drawn(shop, row, ground)), about };
 	} catch (problem) {
 		if (problem instanceof NotFound || problem instanceof Conflict) {

@@ -31,7 +31,13 @@ export async function makeExport({ input, port }: Task<ExportInput>): Promise<Ex
 	const source = {
 		...{ drawing, coverage, about, columns: [], fonts: faceFiles() },
 		rows: sheetTable(drawing, coverage, groups),
-		borders: { title: about.title, keys, names, borders: knownGaps(input.borders, draft.waterKm), rules: draft },
+		borders: {
+			title: about.title,
+			keys,
+			names,
+			borders: knownGaps(input.borders, draft.waterKm),
+			rules: draft,
+		},
 	};
 	return exportFile(kind, source, options, {
 		rasterise,

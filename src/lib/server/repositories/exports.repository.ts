@@ -71,7 +71,13 @@ export type ExportEnd = Partial<
 export async function endExport(trx: Db, id: string, end: ExportEnd): Promise<boolean> {
 	const { numUpdatedRows } = await trx
 		.updateTable('exports')
-		.set({ ...end, step: '', share: end.state === 'done' ? 1 : 0, claim: null, updated_at: sql`now()` })
+		.set({
+			...end,
+			step: '',
+			share: end.state === 'done' ? 1 : 0,
+			claim: null,
+			updated_at: sql`now()`,
+		})
 		.where('id', '=', id)
 		.where('state', 'in', open)
 		.executeTakeFirst();

@@ -1,7 +1,8 @@
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
 import type { DeskEdition } from '../../schemas/desk.ts';
-import { requireAccess, type Member } from '../access/member.ts';
+import type { AskExport } from '../../schemas/export.ts';
+import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Trx } from '../database/connection.ts';
 import type { Received } from '../files/index.ts';
 import type { SheetFile } from '../jobs/paint.work.ts';
@@ -19,6 +20,7 @@ import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { dayInWords } from './day-in-words.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
+import { askIn } from './ask-export.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { editionsOf } from './sheet.service.ts';
@@ -97,10 +99,16 @@ async function issue(
 		},
 		kept,
 	);
+	// large sheets take seconds in print: made meanwhile, and there when somebody looks for it
+	if (mayDo(member, 'files.download')) await askIn(shop, trx, member, sheet, printFile(number));
 	const subject = { kind: 'sheet', id: sheet.id };
 	await record(trx, member, 'edition.issued', subject, { sheet: sheet.number, number, digest });
 	return { number, digest };
 }
+
+const printFile = (edition: number): AskExport => ({
+	...{ kind: 'pdf', edition, reader: 'typical', options: {} },
+});
 
 /** The draft's colouring, looked over by the checker once more. */
 async function checkedInks(shop: Workshop, view: BoundaryView, draft: DraftRow): Promise<number[]> {

@@ -14,7 +14,7 @@ import { lockDigest } from '../repositories/files.repository.ts';
 import { findSheetById } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
-import { daysFromNow } from './exports.service.ts';
+import { daysFromNow } from './ask-export.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { dropUnused } from './stored-files.ts';
 
@@ -58,10 +58,7 @@ export async function keepExport(
 }
 
 /** Nothing came of it: bytes that are already in their place go again, unless another row has them. */
-async function forget(
-	shop: Pick<Workshop, 'db' | 'files'>,
-	received: Received,
-): Promise<void> {
+async function forget(shop: Pick<Workshop, 'db' | 'files'>, received: Received): Promise<void> {
 	await received.discard();
 	await shop.db.transaction().execute((trx) => dropUnused(trx, shop.files, received.digest));
 }

@@ -20,6 +20,8 @@ export interface ExportGround {
 	lastEdition: number;
 	/** over the edition's content; null for a draft */
 	digest: string | null;
+	/** over the boundaries that were issued; null for a draft */
+	boundaries: string | null;
 }
 
 export async function exportGround(
@@ -38,13 +40,14 @@ async function draftGround(db: Db, sheetId: string, revision: number): Promise<E
 	return {
 		view: await boundaryView(db, row.boundary_set_id),
 		...{ draft: documentOf(row), inks: row.inks, at: row.saved_at, digest: null },
+		boundaries: null,
 		lastEdition: editions.find((one) => one.revision <= revision)?.number ?? 0,
 	};
 }
 
 /**
  * An edition is drawn from what was issued, on the boundaries it was issued with: those of the draft it was
- * issued from, which stay when the sheet is re-cut. That they are still the same is checked by their digest.
+ * issued from, which stay when the sheet is re-cut.
  */
 async function editionGround(db: Db, sheetId: string, edition: number): Promise<ExportGround> {
 	const row = await findEdition(db, sheetId, edition);
@@ -52,13 +55,19 @@ async function editionGround(db: Db, sheetId: string, edition: number): Promise<
 	const content = row.content as unknown as EditionContent;
 	const draft: DraftRow = await draftOf(db, sheetId, row.revision);
 	const view = await boundaryView(db, draft.boundary_set_id);
-	if ((await boundariesDigest(db, view.set.id)) !== content.boundaries.digest) {
-		const message = 'The stored boundaries are not those that this edition was issued with.';
-		throw new Conflict('other-boundaries', message);
-	}
 	return {
 		...{ view, draft: wholeDraft(content.draft), at: row.issued_at, digest: row.digest },
 		inks: view.keys.map((key) => content.colouring[key]),
-		lastEdition: edition,
+		...{ lastEdition: edition, boundaries: content.boundaries.digest },
 	};
+}
+
+/** Throws unless the stored boundaries are, byte for byte, those that the edition was issued with. */
+export async function requireSameBoundaries(
+	db: Db,
+	{ view, boundaries }: ExportGround,
+): Promise<void> {
+	if (boundaries === null || (await boundariesDigest(db, view.set.id)) === boundaries) return;
+	const message = 'The stored boundaries are not those that this edition was issued with.';
+	throw new Conflict('other-boundaries', message);
 }

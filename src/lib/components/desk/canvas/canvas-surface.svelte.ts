@@ -13,6 +13,7 @@ import type { DrawnSheet } from '$lib/state/drawn-sheet';
 import { arcsPath } from '$lib/state/sheet-places';
 import { letteringOf, parseSvg, setLettering } from '../lettering';
 import type { Place, Surface } from '../surface';
+import { hatchingOf } from './hatching';
 import { Look } from './look';
 import { TileBoard } from './tile-board';
 import { areaInSight, type Paper, type Sight } from './tile-grid';
@@ -50,12 +51,15 @@ export class CanvasSurface implements Surface {
 	#words: (region: number) => string = () => '';
 	#sight: Sight | null = null;
 	#frame = 0;
+	/** what the tiles show beside fills: a reader's eyesight changes coloured lines */
+	#laid: Drawing;
 
 	constructor(host: CanvasHost, drawn: DrawnSheet & { ground: Ground }) {
 		const { drawing } = drawn;
 		this.#host = host;
 		this.#drawn = drawn;
 		this.#ground = drawn.ground;
+		this.#laid = drawing;
 		this.#paper = { width: drawing.widthMm * 100, height: drawing.heightMm * 100 };
 		this.viewBox = `0 0 ${Math.round(this.#paper.width)} ${Math.round(this.#paper.height)}`;
 		this.#look = new Look(drawing);
@@ -97,7 +101,14 @@ export class CanvasSurface implements Surface {
 		const ground = finer?.ground ?? this.#drawn.ground;
 		if (ground === this.#ground) return;
 		this.#ground = ground;
-		this.#board.ground(ground, this.#drawn.drawing, finer?.area ?? null);
+		this.#board.ground(ground, this.#laid, finer?.area ?? null);
+	}
+
+	#lay(drawing: Drawing) {
+		const before = this.#laid;
+		this.#laid = drawing;
+		if (drawing.lines !== before.lines || drawing.shapes !== before.shapes)
+			this.#board.ground(this.#ground, drawing, null);
 	}
 
 	regionAt(_target: EventTarget | null, [x, y]: Place): number {
@@ -140,6 +151,8 @@ export class CanvasSurface implements Surface {
 	paint(drawing: Drawing, words: (fill: RegionFill) => string) {
 		this.#words = (region) => words(drawing.fills[region]);
 		for (const { region, hex } of drawing.fills) this.#look.tint(region, hex);
+		this.#look.hatch(hatchingOf(drawing));
+		this.#lay(drawing);
 		this.#lettering = setLettering(this.#letters, drawing, this.#lettering, shapeLayersTop);
 		describe(this.canvas, drawing);
 		this.#show();
@@ -203,7 +216,7 @@ export class CanvasSurface implements Surface {
 
 	/** Regions whose tiles still show their colour before, painted over the tiles. */
 	#touchUp(pen: CanvasRenderingContext2D, { x, y, scale }: Sight) {
-		const [line] = this.#drawn.drawing.lines;
+		const [line] = this.#laid.lines;
 		pen.setTransform(scale, 0, 0, scale, x, y);
 		pen.lineWidth = line?.width ?? 0;
 		pen.strokeStyle = line?.hex ?? '#000000';

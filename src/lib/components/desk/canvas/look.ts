@@ -1,4 +1,4 @@
-import type { Colours, Outline } from '$lib/engines/sheet';
+import type { Colours, Hatching, Outline } from '$lib/engines/sheet';
 import type { Drawing } from '$lib/engines/sheet/drawing';
 
 /** Changes of at most so many regions are painted over the tiles while those are made anew. */
@@ -13,6 +13,7 @@ export class Look {
 	#numbers = new Map<string, number>();
 	#of: Uint8Array;
 	#faded: Uint8Array | null = null;
+	#hatching: Hatching | null = null;
 	/** regions changed since; null when everything did */
 	#changed: Set<number> | null = null;
 	#dirty = true;
@@ -23,7 +24,12 @@ export class Look {
 
 	/** A copy, as it is now. */
 	get colours(): Colours {
-		return { hexes: [...this.#hexes], of: this.#of.slice(), faded: this.#faded };
+		return {
+			hexes: [...this.#hexes],
+			of: this.#of.slice(),
+			faded: this.#faded,
+			hatching: this.#hatching,
+		};
 	}
 
 	hexOf(region: number): string {
@@ -36,6 +42,21 @@ export class Look {
 		this.#of[region] = number;
 		this.#dirty = true;
 		this.#changed?.add(region);
+		if (this.#changed && this.#changed.size > few) this.#changed = null;
+	}
+
+	/** Hatches follow the inks; tiles cut them at the borders that they show. */
+	hatch(next: Hatching | null) {
+		const before = this.#hatching;
+		if (!next && !before) return;
+		const alike = JSON.stringify(next?.looks) === JSON.stringify(before?.looks);
+		this.#hatching = next;
+		if (!alike || !next || !before) return this.#all();
+		next.of.forEach((look, region) => {
+			if (look === before.of[region]) return;
+			this.#dirty = true;
+			this.#changed?.add(region);
+		});
 		if (this.#changed && this.#changed.size > few) this.#changed = null;
 	}
 

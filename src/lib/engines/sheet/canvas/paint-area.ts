@@ -1,6 +1,8 @@
 import type { LineLayer } from '../drawing.ts';
 import { shapeLayersOver, shapeLayersUnder, type DrawnShape } from '../shapes.ts';
 import { meets, type Area, type Ground } from './ground.ts';
+import { strokeChains } from './stroke-chains.ts';
+import { paintHatches, type Hatching } from './paint-hatches.ts';
 import { paintShapes } from './paint-shapes.ts';
 
 /** What is asked of a canvas: the part of its two-dimensional context that painting needs. */
@@ -30,6 +32,7 @@ export interface Colours {
 	of: Uint8Array;
 	/** 1 for a region that steps back; null for none */
 	faded: Uint8Array | null;
+	hatching?: Hatching | null;
 }
 
 /** Lines laid over all others, as wide on the screen whatever the size of the sheet. */
@@ -68,14 +71,21 @@ export function paintArea(pen: Pen, picture: Picture, area: Area, scale: number)
 	pen.setTransform(scale, 0, 0, scale, -area.left * scale, -area.top * scale);
 	paintShapes(pen, picture.shapes, shapeLayersUnder, area);
 	paintFills(pen, picture, area);
-	paintShapes(pen, picture.shapes, shapeLayersOver, area);
+	paintShapes(pen, picture.shapes, ['lakes', 'hatch'], area);
+	const { hatching, faded } = picture.colours;
+	const alphaOf = (region: number) => (faded?.[region] ? fadedAlpha : 1);
+	if (hatching) paintHatches(pen, picture.ground, hatching, area, alphaOf);
+	paintShapes(pen, picture.shapes, shapeLayersOver.slice(2), area);
 	pen.lineJoin = 'round';
 	pen.lineCap = 'round';
-	for (const { arcs, hex, width, dash } of picture.lines) {
+	for (const { arcs, chains, hex, width, dash } of picture.lines) {
 		pen.setLineDash(dash ?? []);
-		strokeArcs(pen, picture.ground, arcs, { hex, width }, grown(area, width));
+		pen.lineCap = dash ? 'butt' : 'round';
+		if (chains) strokeChains(pen, picture.ground, chains, { hex, width });
+		else strokeArcs(pen, picture.ground, arcs, { hex, width }, grown(area, width));
 	}
 	pen.setLineDash([]);
+	pen.lineCap = 'round';
 	if (!picture.outline) return;
 	const { arcs, hex, width } = picture.outline;
 	strokeArcs(pen, picture.ground, arcs, { hex, width: width / scale }, grown(area, width / scale));

@@ -10,6 +10,7 @@ import type { Box } from '../plane/fit.ts';
 import { cleanText } from '../type/clean-text.ts';
 import { foot } from './foot.ts';
 import { heading } from './heading.ts';
+import { textBlocks, type SetTextBlock } from './text-blocks.ts';
 import { legendColumns, legendHeight, legendRows } from './legend.ts';
 
 export interface Collar {
@@ -17,6 +18,10 @@ export interface Collar {
 	texts: DrawnText[];
 	legend: LegendPlace | null;
 	bar: { x: number; y: number; longest: number; size: number } | null;
+	/** text blocks and what hides the map under them */
+	blocks: SetTextBlock[];
+	/** where no name of the map may stand */
+	obstacles: Box[];
 	/** type and line scale that was used */
 	scale: number;
 }
@@ -71,6 +76,9 @@ function layOut(input: CollarInput, scale: number): Collar {
 	const high = Math.max(legendHigh, barHigh);
 	const row = bottom - base.height - (high ? high + air : 0);
 
+	const paper = { x: 0, y: 0, width: hundredths(widthMm), height: hundredths(heightMm) };
+	const small = { x: left, y: bottom - base.height, width, height: base.height };
+	const blocks = textBlocks(layout.collar.blocks, paper, small);
 	const mapTop = top + (head.height ? head.height + air : 0);
 	return {
 		map: { x: left, y: mapTop, width, height: row - air - mapTop },
@@ -78,6 +86,8 @@ function layOut(input: CollarInput, scale: number): Collar {
 		legend: showLegend
 			? { x: left + width - legendWidth, y: row, width: legendWidth, size, ...grid, weak }
 			: null,
+		blocks,
+		obstacles: blocks.map(({ box }) => box),
 		bar: layout.scaleBar ? { x: left, y: row, longest: Math.round(width * 0.2), size } : null,
 		scale,
 	};

@@ -49,7 +49,7 @@ export function drawFrame(input: FrameInput): DrawnFrame {
 	const { layout, placed, scale, labels, coverage } = input;
 	const { frame } = layout;
 	const gaps = frame.lakes ? enclosedGaps(coverage, placed.arcs) : [];
-	const seaInk = labelInk(frame.sea ? input.see(frame.sea, input.reader) : '#ffffff');
+	const seaInk = labelInk(frame.sea ?? '#ffffff');
 	const graticule = drawGraticule(placed, frame, scale, labels);
 	const insets = drawInsets(placed, scale, layout.scaleBar, seaInk);
 	const arrow = frame.northArrow

@@ -8,7 +8,7 @@
  */
 import type { Coverage } from '../../boundaries/coverage.ts';
 import { sweptKm2 } from '../../geometry/index.ts';
-import { runOn, type LonLat } from '../plane/ring-lonlat.ts';
+import { ringLonLat, runOn, type LonLat } from '../plane/ring-lonlat.ts';
 
 export interface Cluster {
 	/** key of the region that its largest part belongs to, and where that part lies to a degree */
@@ -57,19 +57,16 @@ function unionFind(count: number) {
 }
 
 /** Area of each part, km². */
-function partAreas({
-	arcPoints,
-	arcStarts,
-	ringArcs,
-	ringStarts,
-	partRings,
-}: Coverage): Float64Array {
+function partAreas(coverage: Coverage): Float64Array {
+	const { ringArcs, ringStarts, partRings } = coverage;
 	return Float64Array.from({ length: partRings.length - 1 }, (_, part) => {
 		let sum = 0;
-		for (let i = ringStarts[partRings[part]]; i < ringStarts[partRings[part + 1]]; i++) {
-			const arc = ringArcs[i] < 0 ? ~ringArcs[i] : ringArcs[i];
-			const swept = sweptKm2(arcPoints, arcStarts[arc], arcStarts[arc + 1] - 1);
-			sum += ringArcs[i] < 0 ? -swept : swept;
+		for (let ring = partRings[part]; ring < partRings[part + 1]; ring++) {
+			const points = ringLonLat(
+				coverage,
+				ringArcs.subarray(ringStarts[ring], ringStarts[ring + 1]),
+			);
+			sum += sweptKm2(Float64Array.from(points.flat()), 0, points.length - 1);
 		}
 		return Math.abs(sum);
 	});

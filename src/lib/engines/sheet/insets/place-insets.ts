@@ -22,6 +22,8 @@ export interface InsetSpot {
 	outer: Box;
 	inner: Box;
 	ratio: number;
+	/** how ill it suits: radians off the true direction, and what smallness and distance from the edge cost */
+	cost: number;
 	/** what was set by hand and could not be kept */
 	told: string[];
 }
@@ -29,7 +31,7 @@ export interface InsetSpot {
 /** Regions in an inset may take so much of the shorter side of the map's box, and at least so much, on A4. */
 const sides = { most: 0.42, least: 700 };
 /** A smaller scale is worth this many radians of direction; the scale of the map as many. */
-const perStep = 0.15;
+const perStep = 0.3;
 const sameScale = 0.6;
 /** Standing away from the edges by the whole box costs so much. */
 const offEdge = 2;
@@ -43,6 +45,7 @@ interface Ground {
 	/** 1 : n of the map itself */
 	mapRatio: number;
 	scale: number;
+	obstacles: readonly Box[];
 }
 
 /** Round ratios at which the regions are neither too large nor too small, the largest scale first. */
@@ -66,9 +69,9 @@ const overlap = (a: Box, b: Box, apart: number): boolean =>
 	a.y < b.y + b.height + apart &&
 	b.y < a.y + a.height + apart;
 
-function isClear(box: Box, { grid, scale }: Ground, others: Box[]): boolean {
+function isClear(box: Box, { grid, scale, obstacles }: Ground, others: Box[]): boolean {
 	const apart = clearance * scale;
-	if (others.some((other) => overlap(box, other, apart))) return false;
+	if ([...others, ...obstacles].some((other) => overlap(box, other, apart))) return false;
 	// against the edges of the map's box nothing need be kept clear
 	const [left, top] = [Math.max(grid.box.x, box.x - apart), Math.max(grid.box.y, box.y - apart)];
 	const right = Math.min(grid.box.x + grid.box.width, box.x + box.width + apart);
@@ -124,7 +127,10 @@ function spotFor(wish: InsetWish, ground: Ground, others: Box[]): Omit<InsetSpot
 		const total = found.cost + step * perStep - (ratio === ground.mapRatio ? sameScale : 0);
 		if (best && best.cost <= total) return;
 		const { box } = found;
-		best = { spot: { outer: box, inner: movedTo(inner, box.x, box.y), ratio }, cost: total };
+		best = {
+			spot: { outer: box, inner: movedTo(inner, box.x, box.y), ratio, cost: total },
+			cost: total,
+		};
 	});
 	return (best as { spot: Omit<InsetSpot, 'told'> } | null)?.spot ?? null;
 }

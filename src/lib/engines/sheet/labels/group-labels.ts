@@ -1,6 +1,7 @@
 import type { DrawnText } from '../drawing.ts';
 import { cleanText } from '../type/clean-text.ts';
 import { textWidth } from '../type/text-width.ts';
+import { blockOut } from './block-out.ts';
 import type { LabelInput } from './label-sheet.ts';
 import { headroom } from './headroom.ts';
 import { spotInside } from './inside.ts';
@@ -34,7 +35,7 @@ function middlesOf({ owner, columns, x, y, cell }: RegionRaster, groups: number)
  * Regions without a group have no name here. Groups whose name finds no room are left out.
  */
 export function labelGroups(
-	{ arcs, rings, sides, groups, box }: Omit<LabelInput, 'names' | 'areas' | 'scale'>,
+	{ arcs, rings, sides, groups, box, obstacles }: Omit<LabelInput, 'names' | 'areas' | 'scale'>,
 	sizes: number[],
 ): DrawnText[] {
 	const names = [...new Set(groups.filter((group) => group !== null))];
@@ -46,8 +47,9 @@ export function labelGroups(
 		box,
 		(arc) => groupAt(sides.arcLeft[arc]) !== groupAt(sides.arcRight[arc]),
 	);
-	const room = headroom(raster);
 	const middles = middlesOf(raster, names.length);
+	blockOut(raster, obstacles);
+	const room = headroom(raster);
 	const setIn = (size: number) =>
 		names.map((name, group) => {
 			const width = (text: string) => textWidth(face, size, text);

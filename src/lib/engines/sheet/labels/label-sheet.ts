@@ -7,6 +7,7 @@ import type { ArcSides } from '../lines.ts';
 import type { Box } from '../plane/fit.ts';
 import type { SheetArcs } from '../plane/quantise.ts';
 import { textWidth } from '../type/text-width.ts';
+import { blockOut } from './block-out.ts';
 import { labelGroups } from './group-labels.ts';
 import { headroom } from './headroom.ts';
 import { linesOfName } from './lines-of-name.ts';
@@ -36,6 +37,8 @@ export interface LabelInput {
 	areas: Float64Array;
 	box: Box;
 	scale: number;
+	/** boxes on the paper where no name may stand: text blocks, a legend on the map; `Collar.obstacles` */
+	obstacles: readonly Box[];
 }
 
 function coastalOf({ sides, names }: LabelInput): Uint8Array {
@@ -56,8 +59,9 @@ function hopefulOf({ arcs, rings, scale }: LabelInput, coastal: Uint8Array): Uin
 }
 
 function groundOf(input: LabelInput, coastal: Uint8Array, hopeful: Uint8Array): LabelGround {
-	const { arcs, rings, names, areas, box } = input;
+	const { arcs, rings, names, areas, box, obstacles } = input;
 	const raster = rasterise(arcs, rings, box);
+	blockOut(raster, obstacles);
 	return {
 		raster,
 		room: headroom(raster),

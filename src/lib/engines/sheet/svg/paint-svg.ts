@@ -9,7 +9,7 @@ import { escapeXml } from './escape.ts';
 import { paintFills } from './paint-fills.ts';
 import { paintShapes } from './paint-shapes.ts';
 import { paintTexts } from './paint-texts.ts';
-import { linesPath } from './path-data.ts';
+import { chainsPath, linesPath } from './path-data.ts';
 import { styleBlock } from './style-block.ts';
 import type { EmbeddedFace } from './style-block.ts';
 
@@ -22,6 +22,12 @@ export interface SvgOptions {
 	interactive?: boolean;
 	/** faces to carry inside the file; the page or the reader's machine provides them otherwise */
 	fonts?: EmbeddedFace[];
+	/** path data of a text's letters, where they are to be drawn and not set */
+	outline?: (text: DrawnText) => string;
+	/** language of the sheet (BCP 47), for whoever reads it aloud */
+	language?: string;
+	/** false leaves out the white of the paper */
+	paper?: boolean;
 }
 
 /** Layers of lines under their names in the file. */
@@ -42,12 +48,15 @@ export function paintSvg(drawing: Drawing, options: SvgOptions): string {
 	const { widthMm, heightMm } = drawing;
 	const prefix = options.idPrefix ?? '';
 	const size = `${Math.round(widthMm * 100)} ${Math.round(heightMm * 100)}`;
+	const language = options.language ? ` xml:lang="${escapeXml(options.language)}"` : '';
 	return [
-		`<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${size}" width="${widthMm}mm" height="${heightMm}mm" role="graphics-document" aria-labelledby="${escapeXml(prefix)}title ${escapeXml(prefix)}description">`,
+		`<svg xmlns="http://www.w3.org/2000/svg"${language} viewBox="0 0 ${size}" width="${widthMm}mm" height="${heightMm}mm" role="graphics-document" aria-labelledby="${escapeXml(prefix)}title ${escapeXml(prefix)}description">`,
 		`<title id="${escapeXml(prefix)}title">${escapeXml(drawing.title)}</title>`,
 		`<desc id="${escapeXml(prefix)}description">${escapeXml(drawing.description)}</desc>`,
 		...styleBlock(drawing, options),
-		`<rect id="${escapeXml(prefix)}paper" width="100%" height="100%" fill="#ffffff"/>`,
+		...(options.paper === false
+			? []
+			: [`<rect id="${escapeXml(prefix)}paper" width="100%" height="100%" fill="#ffffff"/>`]),
 		...paintShapes(drawing, shapeLayersUnder, options),
 		...layer(prefix, 'fills', ' stroke="none"', paintFills(drawing, options)),
 		...paintShapes(drawing, shapeLayersOver, options),
@@ -82,10 +91,13 @@ function layer(prefix: string, name: string, attributes: string, content: string
 }
 
 function paintLines(drawing: Drawing, prefix: string): string[] {
-	const lines = drawing.lines.map(({ rank, width, hex, dash, arcs }) => {
+	const lines = drawing.lines.map(({ rank, width, hex, dash, arcs, chains }) => {
 		const dashes = dash ? ` stroke-dasharray="${dash.join(' ')}"` : '';
 		const name = lineNames[rank] ?? rank;
-		return `<g id="${escapeXml(prefix + name)}" stroke="${hex}" stroke-width="${width}"${dashes}><path d="${linesPath(drawing, arcs)}"/></g>`;
+		const path = chains ? chainsPath(drawing, chains) : linesPath(drawing, arcs);
+		// round ends would close the gaps of a fine dash
+		const cap = dash ? ' stroke-linecap="butt"' : '';
+		return `<g id="${escapeXml(prefix + name)}" stroke="${hex}" stroke-width="${width}"${dashes}${cap}><path d="${path}"/></g>`;
 	});
 	const attributes =
 		' fill="none" stroke-linejoin="round" stroke-linecap="round" aria-hidden="true"';

@@ -5,7 +5,7 @@ import { escapeXml } from './escape.ts';
 import type { SvgOptions } from './paint-svg.ts';
 
 /** Width of a halo in parts of the type size, on each side of the letter. */
-const halo = 0.11;
+export const haloShare = 0.11;
 
 /**
  * Texts of some layers, halos first as elements of their own: the order of painting within one element
@@ -22,14 +22,17 @@ export function paintTexts(
 		.map((text) =>
 			element(
 				text,
-				`fill="none" stroke="${text.halo}" stroke-width="${Math.round(text.size * halo * 2)}" stroke-linejoin="round" aria-hidden="true"`,
+				`fill="none" stroke="${text.halo}" stroke-width="${Math.round(text.size * haloShare * 2)}" stroke-linejoin="round" aria-hidden="true"`,
 				options,
 			),
 		);
-	return [...halos, ...chosen.map((text) => element(text, `fill="${text.hex}"`, options))];
+	const letters = chosen.map((text) => element(text, `fill="${text.hex}"`, options));
+	return [...halos, ...letters].filter((one) => one !== '');
 }
 
-function element(text: DrawnText, paint: string, { fills }: SvgOptions): string {
+function element(text: DrawnText, paint: string, options: SvgOptions): string {
+	const { fills, outline } = options;
+	if (outline) return outlined(text, paint, outline(text));
 	const { family, fallback, weight, italic } = faceStyles[text.face];
 	// without a style block kerning cannot be switched off, so the width is held by this attribute
 	const held = fills === 'attribute' || !isSetIn(text.face, text.text);
@@ -39,4 +42,11 @@ function element(text: DrawnText, paint: string, { fills }: SvgOptions): string 
 			: `font-family="'${family}','${family} Variable',${fallback}" font-weight="${weight}"${italic ? ' font-style="italic"' : ''}`;
 	const length = held && text.width > 0 ? ` textLength="${text.width}"` : '';
 	return `<text ${set} x="${text.x}" y="${text.y}" font-size="${text.size}"${length} ${paint}>${escapeXml(text.text)}</text>`;
+}
+
+/** Letters drawn as a path: what they say stands in its label. */
+function outlined({ text }: DrawnText, paint: string, path: string): string {
+	if (path === '') return '';
+	const words = paint.includes('aria-hidden') ? '' : ` role="img" aria-label="${escapeXml(text)}"`;
+	return `<path${words} ${paint} d="${path}"/>`;
 }

@@ -58,6 +58,20 @@ export function linesPath(arcs: Arcs, list: Uint32Array): string {
 	return text;
 }
 
+/** Lines of several arcs, each one subpath, so that dashes run on from arc to arc. */
+export function chainsPath(arcs: Arcs, chains: readonly Int32Array[]): string {
+	return chains
+		.map((chain) => {
+			const parts = Array.from(chain, (signed) => steps(arcs, signed)).filter(
+				(text) => text !== '',
+			);
+			if (parts.length === 0) return '';
+			const ends = startOf(arcs, ~chain[chain.length - 1]) === startOf(arcs, chain[0]);
+			return `M${startOf(arcs, chain[0])}l${joined(parts)}${ends ? 'z' : ''}`;
+		})
+		.join('');
+}
+
 function isClosed({ arcPoints, arcStarts }: Arcs, arc: number): boolean {
 	const [first, last] = [arcStarts[arc], arcStarts[arc + 1] - 1];
 	return (

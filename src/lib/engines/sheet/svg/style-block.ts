@@ -28,13 +28,13 @@ function embedded({ face, format, base64 }: EmbeddedFace): string {
  * The style block: one rule an ink, so that a designer changes a colour in one place, and the faces.
  * Absent when colours are attributes and no face is carried, for pages that allow no style block.
  */
-export function styleBlock(drawing: Drawing, { fills, fonts = [] }: SvgOptions): string[] {
+export function styleBlock(drawing: Drawing, { fills, fonts = [], outline }: SvgOptions): string[] {
 	const rules = fonts.map(embedded);
 	if (fills === 'class') {
 		const faces = new Set(drawing.texts.map(({ face }) => face));
+		if (!outline) rules.push('text{font-kerning:none;font-variant-ligatures:none}');
+		if (!outline) rules.push(...[...faces].sort().map(faceRule));
 		rules.push(
-			'text{font-kerning:none;font-variant-ligatures:none}',
-			...[...faces].sort().map(faceRule),
 			`.ink-0{fill:${uncoloured}}`,
 			...drawing.inks.map(({ shown }, ink) => `.ink-${ink + 1}{fill:${shown}}`),
 			...hatchRules(drawing),

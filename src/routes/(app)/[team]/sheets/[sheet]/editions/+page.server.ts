@@ -1,15 +1,28 @@
 import { z } from 'zod';
+import { askExportForm, exportNumberForm } from '$lib/schemas/export';
 import { memberFor } from '$lib/server/access/guard';
 import { attempt, readForm } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
+import { forPage } from '$lib/server/page';
 import { issueEdition } from '$lib/server/services/edition.service';
-import type { Actions } from './$types';
+import { stopExport } from '$lib/server/services/export-end.service';
+import { askForExport, sheetExports } from '$lib/server/services/exports.service';
+import type { Actions, PageServerLoad } from './$types';
 
 const whatToIssue = z.object({
 	revision: z.coerce.number().int().positive(),
 	note: z.string().trim().max(2_000).default(''),
 });
 
+/** The files that were taken of editions and drafts, the newest first. */
+export const load = (async ({ locals, params }) => {
+	const member = memberFor(locals, 'files.download');
+	return {
+		exports: await forPage(() => sheetExports(workshop(), member, Number(params.sheet))),
+	};
+}) satisfies PageServerLoad;
+
+/** All answer `FormProblem` on failure. */
 export const actions = {
 	issue: async ({ locals, params, request }) => {
 		const member = memberFor(locals, 'edition.issue');
@@ -21,5 +34,20 @@ export const actions = {
 			note,
 		});
 		return issued.failure ?? { issued: issued.data.number };
+	},
+	take: async ({ locals, params, request }) => {
+		const member = memberFor(locals, 'files.download');
+		const form = await readForm(request, askExportForm);
+		if (form.failure) return form.failure;
+		const ask = () => askForExport(workshop(), member, Number(params.sheet), form.data);
+		const taken = await attempt(ask);
+		return taken.failure ?? { taken: taken.data.number };
+	},
+	stop: async ({ locals, params, request }) => {
+		const member = memberFor(locals, 'files.download');
+		const form = await readForm(request, exportNumberForm);
+		if (form.failure) return form.failure;
+		const stop = () => stopExport(workshop(), member, Number(params.sheet), form.data.export);
+		return (await attempt(stop)).failure;
 	},
 } satisfies Actions;
