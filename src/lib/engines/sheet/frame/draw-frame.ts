@@ -9,7 +9,7 @@ import type { DrawnRect, DrawnText } from '../drawing.ts';
 import { drawnRings } from '../fills.ts';
 import type { FrameReport } from '../frame-report.ts';
 import { drawGraticule } from '../graticule/draw-graticule.ts';
-import { clusterName } from '../insets/cluster-name.ts';
+import { clusterName, whereabouts } from '../insets/cluster-name.ts';
 import { drawInsets } from '../insets/draw-insets.ts';
 import { freeGrid } from '../insets/free-grid.ts';
 import { ratioWords } from '../insets/inset-size.ts';
@@ -48,7 +48,7 @@ const neat = { line: 25, outline: 12 };
 export function drawFrame(input: FrameInput): DrawnFrame {
 	const { layout, placed, scale, labels, coverage } = input;
 	const { frame } = layout;
-	const gaps = frame.lakes ? enclosedGaps(coverage, placed.arcs) : [];
+	const gaps = frame.lakes ? enclosedGaps(coverage, placed.arcs, placed.sides) : [];
 	const seaInk = labelInk(frame.sea ?? '#ffffff');
 	const graticule = drawGraticule(placed, frame, scale, labels);
 	const insets = drawInsets(placed, scale, layout.scaleBar, seaInk);
@@ -153,7 +153,7 @@ function reportOf(
 			const { id, regions, areaKm2, place, suits, speck } = cluster;
 			return {
 				...{ id, areaKm2, place, suits, speck, regions: regions.length },
-				name: cleanText(clusterName(coverage, groups, cluster)),
+				name: cleanText(`${clusterName(coverage, groups, cluster)}${whereabouts(cluster)}`),
 				ratio: box?.ratio ?? null,
 				cornerMm: box ? [box.outer.x / 100, box.outer.y / 100] : null,
 			};
