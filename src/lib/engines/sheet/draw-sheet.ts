@@ -6,7 +6,7 @@ import { asSeenBy as seen, labelInk } from '../colour/index.ts';
 import type { BorderList } from '../borders/border-list.ts';
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
-import { collar } from './collar/collar.ts';
+import { arrange, roomOn } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
@@ -16,7 +16,7 @@ import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
-import { placeOnPaper, type Placement } from './place-on-paper.ts';
+import type { Placement } from './place-on-paper.ts';
 import { drawFrame } from './frame/draw-frame.ts';
 import { frameObstacles } from './frame/obstacles.ts';
 import { drawScale } from './collar/draw-scale.ts';
@@ -85,25 +85,12 @@ export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawi
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
 export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
-	const { coverage, layout, reader, colouring, weak, groups } = input;
+	const { coverage, layout, reader, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
-	const inks = input.inks.map((ink) => ({ ...ink, shown: see(ink.hex, reader) }));
-	const marked = weak.length > 0;
-	let around = null as ReturnType<typeof collar> | null;
-	const frameFor = (sentence: string) => {
-		const coloured = colouring !== null;
-		around = collar({
-			layout,
-			inks,
-			coloured,
-			weak: marked,
-			projection: sentence,
-			issue: input.issue,
-		});
-		return around;
-	};
-	const placed = placeOnPaper(coverage, layout, frameFor, groups);
-	const { texts, legend, bar, scale, blocks, obstacles } = around!;
+	const seenNow = (hex: string) => see(hex, reader);
+	const inks = input.inks.map((ink) => ({ ...ink, shown: seenNow(ink.hex) }));
+	const { placed, around, legend, obstacles, grounds, legendNote } = arrange(input, inks);
+	const { texts, bar, scale, blocks } = around;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
@@ -122,11 +109,20 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
-	const keys = legend ? drawLegend(legend, inks, inksInUse(fills)) : { rects: [], texts: [] };
+	const lines = [
+		...lineLayers({
+			...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
+			look: layout.lines,
+			see: seenNow,
+		}),
+		...leaderLayer(arcs, labels.leaders, scale),
+	];
+	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
 	const measured = drawScale(placed, bar);
 	const frame = drawFrame({
-		...{ coverage, groups, layout, placed, scale, reader, see },
+		...{ coverage, groups, layout, placed, scale, reader, see, obstacles },
 		labels: labels.texts,
+		roomOn: (other) => roomOn(input, inks, other),
 	});
 	const drawing: Drawing = {
 		...paperSize(layout),
@@ -136,18 +132,12 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		inks,
 		...withLeaders(arcs, labels.leaders),
 		fills,
-		lines: [
-			...lineLayers({
-				...{ sides, arcs, borders: input.borders, groups, weak, scale, fine },
-				look: layout.lines,
-				see: (hex) => see(hex, reader),
-			}),
-			...leaderLayer(arcs, labels.leaders, scale),
-		],
+		lines,
 		shapes: [
-			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, (hex) => see(hex, reader))),
+			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, seenNow)),
 			...frame.shapes,
-			...blocks.flatMap(({ ground }) => ground ?? []),
+			...grounds,
+			...keys.shapes,
 		],
 		texts: [
 			...inkLabels(labels.texts, fills),
@@ -163,6 +153,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			projection: placed.chosen.sentence,
 			scale: measured.sentence,
 			insets: frame.sentence,
+			legend: legendNote,
 		},
 		frame: frame.report,
 		legend,

@@ -33,8 +33,8 @@ export interface Drawing {
 	rects: DrawnRect[];
 	/** labels that did not fit and are listed instead */
 	unplaced: number[];
-	/** longer sentences about the drawing: projection, scale and how true the bar is, insets */
-	notes: { projection: string; scale: string; insets: string };
+	/** longer sentences about the drawing: projection, scale and how true the bar is, insets, legend */
+	notes: { projection: string; scale: string; insets: string; legend: string };
 	/** what the frame came to, and what could not be done as asked */
 	frame: FrameReport;
 	/** where the legend stands, so that it can be set anew when the inks in use change */
@@ -106,10 +106,22 @@ export interface LegendPlace {
 	x: number;
 	y: number;
 	width: number;
+	/** room that is kept for it, enough for every ink of the palette */
+	height: number;
 	/** type size */
 	size: number;
 	columns: number;
 	/** from one column to the next */
 	step: number;
-	weak: boolean;
+	/** most lines that a name is set in; every row is as high as they need */
+	lines: number;
+	/** lines of its heading */
+	title: string[];
+	order: 'number' | 'name' | 'regions';
+	/** whether each ink tells how many regions have it */
+	counts: boolean;
+	/** what ranks of line stand for */
+	ranks: { rank: string; words: string }[];
+	/** what the double line stands for, in lines; none where there is none */
+	weak: string[];
 }

@@ -165,7 +165,7 @@ function joined(points: Float64Array, more: Float64Array): Float64Array {
 }
 
 /** Within an edge that is drawn the regions keep clear of it. */
-function padded(box: Box, { frame }: SheetLayout, scale: number): Box {
+export function padded(box: Box, { frame }: SheetLayout, scale: number): Box {
 	if (!frame.neatLine && !frame.sea && !frame.graticule) return box;
 	const air = Math.round(Math.min(clearOfEdge * scale, box.width / 10, box.height / 10));
 	return {

@@ -30,18 +30,17 @@ export function recolour(
 		const ink = colouring ? colouring[fill.region] : -1;
 		return { ...fill, ink, hex: fillHex(ink, drawn) };
 	});
-	const { legend } = drawing;
-	const keys = legend ? drawLegend(legend, drawn, inksInUse(fills)) : { rects: [], texts: [] };
+	const see = (hex: string) => asSeenBy(hex, reader);
+	const lines = seenLines(drawing, see);
+	const shown = { inks: drawn, fills, lines };
+	const keys = drawLegend(drawing.legend, shown, inksInUse(fills), see);
 	const next = {
 		...drawing,
 		reader,
 		inks: drawn,
 		fills,
-		shapes: seenShapes(
-			withHatches({ ...drawing, fills, inks: drawn }, (hex) => asSeenBy(hex, reader)),
-			(hex) => asSeenBy(hex, reader),
-		),
-		lines: seenLines(drawing, (hex) => asSeenBy(hex, reader)),
+		lines,
+		shapes: newShapes({ ...drawing, fills, inks: drawn }, keys.shapes, see),
 		texts: [
 			...inkLabels(
 				drawing.texts.filter(({ layer }) => layer !== 'legend'),
@@ -54,19 +53,21 @@ export function recolour(
 	return { ...next, description: describe(next) };
 }
 
-/** Hatches cut anew among the shapes that stay; the list itself stays where no ink was or is hatched. */
-function withHatches(drawing: Drawing, see: (hex: string) => string): DrawnShape[] {
-	const others = drawing.shapes.filter(({ layer }) => layer !== 'hatch');
+/** Hatches and samples in the legend made anew among the shapes that stay; the list stays where there are none. */
+function newShapes(
+	drawing: Drawing,
+	samples: DrawnShape[],
+	see: (hex: string) => string,
+): DrawnShape[] {
+	const others = drawing.shapes.filter(({ layer }) => layer !== 'hatch' && layer !== 'legend');
 	const hatches = hatchShapes(drawing, see);
-	return hatches.length || others.length < drawing.shapes.length
-		? [...hatches, ...others]
-		: drawing.shapes;
-}
-
-/** Water as the reader sees it; the list itself stays where none changes. */
-function seenShapes(shapes: DrawnShape[], see: (hex: string) => string): DrawnShape[] {
-	if (!shapes.some(({ set, fill }) => set !== undefined && see(set) !== fill)) return shapes;
-	return shapes.map((shape) => (shape.set ? { ...shape, fill: see(shape.set) } : shape));
+	const tinted = others.some(({ set }) => set !== undefined);
+	const kept = others.length === drawing.shapes.length && !tinted;
+	if (kept && !hatches.length && !samples.length) return drawing.shapes;
+	const shown = others.map((shape) =>
+		shape.set === undefined ? shape : { ...shape, fill: see(shape.set) },
+	);
+	return [...hatches, ...shown, ...samples];
 }
 
 /** Lines of a colour of their own as the reader sees them; the list itself stays where none changes. */

@@ -11,12 +11,15 @@ import { cleanText } from '../type/clean-text.ts';
 import { foot } from './foot.ts';
 import { heading } from './heading.ts';
 import { textBlocks, type SetTextBlock } from './text-blocks.ts';
-import { legendColumns, legendHeight, legendRows } from './legend.ts';
+import { planLegend, type LegendPlan } from './legend-plan.ts';
+import { besideMap, onMap } from './place-legend.ts';
 
 export interface Collar {
 	map: Box;
 	texts: DrawnText[];
 	legend: LegendPlace | null;
+	/** a legend that is still to find its corner on the map */
+	floating: LegendPlan | null;
 	bar: { x: number; y: number; longest: number; size: number } | null;
 	/** text blocks and what hides the map under them */
 	blocks: SetTextBlock[];
@@ -31,6 +34,8 @@ export interface CollarInput {
 	inks: DrawnInk[];
 	coloured: boolean;
 	weak: boolean;
+	/** how many there are */
+	regions: number;
 	projection: string;
 	issue: string;
 }
@@ -52,7 +57,7 @@ export function collar(input: CollarInput): Collar {
 }
 
 function layOut(input: CollarInput, scale: number): Collar {
-	const { layout, inks, coloured, weak } = input;
+	const { layout, inks, coloured } = input;
 	const { widthMm, heightMm } = paperSize(layout);
 	const margin = hundredths(
 		Math.min(Math.max(layout.marginMm, 2), Math.min(widthMm, heightMm) / 5),
@@ -66,12 +71,12 @@ function layOut(input: CollarInput, scale: number): Collar {
 	const size = Math.round(legendSize * scale);
 	const air = Math.round(size * 1.2);
 
+	const at = layout.collar.legendAt;
 	const barWidth = layout.scaleBar ? Math.round(width * 0.3) : 0;
 	const showLegend = layout.legend && coloured && inks.length > 0;
 	const legendWidth = width - (barWidth ? barWidth + 2 * size : 0);
-	const grid = showLegend ? legendColumns(inks, size, legendWidth) : { columns: 1, step: 0 };
-	const rows = showLegend ? legendRows({ ...grid, weak }, inks.length) : 0;
-	const legendHigh = legendHeight(rows, size);
+	const below = showLegend && at === 'foot' ? planLegend(input, size, legendWidth) : null;
+	const legendHigh = below?.height ?? 0;
 	const barHigh = layout.scaleBar ? Math.round(size * 2.3) : 0;
 	const high = Math.max(legendHigh, barHigh);
 	const row = bottom - base.height - (high ? high + air : 0);
@@ -80,12 +85,15 @@ function layOut(input: CollarInput, scale: number): Collar {
 	const small = { x: left, y: bottom - base.height, width, height: base.height };
 	const blocks = textBlocks(layout.collar.blocks, paper, small);
 	const mapTop = top + (head.height ? head.height + air : 0);
+	const map = { x: left, y: mapTop, width, height: row - air - mapTop };
+	const beside =
+		showLegend && (at === 'left' || at === 'right') ? besideMap(input, at, map, size) : null;
+	const legend = below && { ...below, x: left + width - legendWidth, y: row };
 	return {
-		map: { x: left, y: mapTop, width, height: row - air - mapTop },
+		map: beside?.map ?? map,
 		texts: [...head.texts, ...base.texts],
-		legend: showLegend
-			? { x: left + width - legendWidth, y: row, width: legendWidth, size, ...grid, weak }
-			: null,
+		legend: beside?.legend ?? legend,
+		floating: showLegend && at === 'corner' ? onMap(input, map, size) : null,
 		blocks,
 		obstacles: blocks.map(({ box }) => box),
 		bar: layout.scaleBar ? { x: left, y: row, longest: Math.round(width * 0.2), size } : null,

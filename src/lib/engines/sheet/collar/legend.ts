@@ -1,92 +1,132 @@
 import { labelInk } from '../../colour/index.ts';
-import type { DrawnInk, DrawnRect, DrawnText, LegendPlace } from '../drawing.ts';
-import { cleanText } from '../type/clean-text.ts';
-import { textWidth } from '../type/text-width.ts';
-import { shortened } from '../type/wrap-text.ts';
+import type { DrawnInk, DrawnRect, DrawnText, Drawing, LegendPlace } from '../drawing.ts';
+import { cutLines } from '../hatch/cut-lines.ts';
+import { familiesOf } from '../hatch/hatch-look.ts';
+import { segmentShape } from '../hatch/hatch-shapes.ts';
+import type { DrawnShape } from '../shapes.ts';
+import {
+	boxHigh,
+	boxWide,
+	countWords,
+	gap,
+	nameOf,
+	rowHeight,
+	rowsOf,
+	titleSize,
+} from './legend-plan.ts';
+import { cellOf, noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
+import { rankSamples, weakSample } from './legend-lines.ts';
 
-/** Parts of the type size. */
-const boxWide = 2;
-const boxHigh = 1.5;
-const rowHigh = 2;
-const gap = 0.5;
-const between = 1.6;
-
-const weakWords = 'Double line: two inks that some readers could not tell apart';
-
-const nameOf = (ink: DrawnInk, number: number): string =>
-	cleanText(ink.name) || `Ink ${number + 1}`;
-
-/** Rows of a legend with room for so many inks. */
-export function legendRows({ columns, weak }: Pick<LegendPlace, 'columns' | 'weak'>, inks: number) {
-	return Math.ceil(inks / columns) + (weak ? 1 : 0);
-}
-
-export const legendHeight = (rows: number, size: number): number =>
-	Math.ceil(rows * rowHigh * size);
-
-/** As many columns as the longest name allows in a width; at least one, and never wider than that. */
-export function legendColumns(inks: DrawnInk[], size: number, width: number) {
-	const names = inks.map((ink, number) => textWidth('sans', size, nameOf(ink, number)));
-	const step = Math.ceil(Math.max(...names, 0) + size * (boxWide + gap + between));
-	const columns = Math.floor((width + size * between) / step);
-	return columns < 1
-		? { columns: 1, step: Math.floor(width + size * between) }
-		: { columns: Math.min(columns, inks.length), step };
-}
+type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines'>;
 
 /**
- * The legend: a box for every ink in use, with its number, and its name beside it. In: `inUse` in
- * ascending order; those beyond the palette have no colour yet and no box. Out: rects and texts of layer `legend`; names too long for a column are shortened.
+ * The legend: a box for every ink in use, with its number and its hatch, and its name beside it; then what
+ * lines stand for. In: `inUse` in ascending order; those beyond the palette have no colour yet and no box;
+ * `see` gives a colour as the reader sees it. Out: rects, texts and shapes of layer `legend`, within the
+ * place; a name too long for its lines is shortened.
  */
-export function drawLegend(place: LegendPlace, inks: DrawnInk[], inUse: number[]) {
-	const used = inUse.filter((ink) => ink < inks.length);
-	const { size, columns, step } = place;
-	const rows = Math.ceil(used.length / columns);
-	const rects: DrawnRect[] = [];
-	const texts: DrawnText[] = [];
-	used.forEach((ink, i) => {
-		const x = Math.round(place.x + step * Math.floor(i / rows));
-		const y = Math.round(place.y + size * rowHigh * (i % rows));
-		const [wide, high] = [Math.round(size * boxWide), Math.round(size * boxHigh)];
-		rects.push(box(x, y, wide, high, inks[ink].shown));
-		const number = word('sans-bold', size, String(ink + 1), labelInk(inks[ink].shown));
-		const base = y + Math.round(high / 2 + size * 0.33);
-		texts.push({ ...number, x: Math.round(x + (wide - number.width) / 2), y: base });
-		const room = step - size * (boxWide + gap + between);
-		const name = shortened('sans', size, nameOf(inks[ink], ink), room);
-		const left = Math.round(x + size * (boxWide + gap));
-		if (name) texts.push({ ...word('sans', size, name, '#000000'), x: left, y: base });
+export function drawLegend(
+	place: LegendPlace | null,
+	shown: Shown,
+	inUse: readonly number[],
+	see: (hex: string) => string,
+): DrawnLegend {
+	if (!place) return noLegend;
+	const counts = countsOf(shown);
+	const used = ordered(
+		inUse.filter((ink) => ink < shown.inks.length),
+		place,
+		shown.inks,
+		counts,
+	);
+	const rows = rowsOf(place.columns, used.length);
+	const drawn = used.map((ink, i) => {
+		const at = cellOf(place, Math.floor(i / rows), i % rows);
+		const name = nameOf(shown.inks[ink], ink);
+		const words = place.counts ? `${name}, ${countWords(counts[ink])}` : name;
+		return entry(place, at, shown.inks[ink], ink, words, see);
 	});
-	return place.weak ? withWeak(place, rects, texts, rows) : { rects, texts };
+	const lines = [
+		...rankSamples(place, shown.lines, rows),
+		weakSample(place, rows + rowsOf(place.columns, place.ranks.length)),
+	];
+	return joined([{ ...noLegend, texts: titleOf(place) }, ...drawn, ...lines]);
 }
 
-function withWeak(place: LegendPlace, rects: DrawnRect[], texts: DrawnText[], rows: number) {
-	const { size, x } = place;
-	const y = Math.round(place.y + size * (rowHigh * rows + boxHigh / 2));
-	const wide = Math.round(size * boxWide);
-	const line = Math.max(8, Math.round(size / 10));
-	const sample = [-1.5, 0.5].map((step) => ({
-		...box(x, Math.round(y + step * line), wide, line, '#000000'),
-		stroke: null,
-		strokeWidth: 0,
+const joined = (parts: DrawnLegend[]): DrawnLegend => ({
+	rects: parts.flatMap(({ rects }) => rects),
+	texts: parts.flatMap(({ texts }) => texts),
+	shapes: parts.flatMap(({ shapes }) => shapes),
+});
+
+function countsOf({ inks, fills }: Shown): number[] {
+	const counts = inks.map(() => 0);
+	for (const { ink } of fills) if (ink >= 0 && ink < counts.length) counts[ink]++;
+	return counts;
+}
+
+function ordered(used: number[], { order }: LegendPlace, inks: DrawnInk[], counts: number[]) {
+	if (order === 'regions') return used.sort((a, b) => counts[b] - counts[a] || a - b);
+	if (order === 'number') return used;
+	const collator = new Intl.Collator('en-GB', { numeric: true });
+	return used.sort((a, b) => collator.compare(nameOf(inks[a], a), nameOf(inks[b], b)) || a - b);
+}
+
+function titleOf(place: LegendPlace): DrawnText[] {
+	const size = titleSize(place.size);
+	return place.title.map((line, i) => ({
+		...word('sans-bold', size, line, '#000000'),
+		x: place.x,
+		y: Math.round(place.y + size * (0.8 + 1.5 * i)),
 	}));
-	const words = shortened('sans', size, weakWords, place.width - size * (boxWide + gap));
-	const text = {
-		...word('sans', size, words, '#000000'),
-		x: Math.round(x + size * (boxWide + gap)),
+}
+
+function entry(
+	place: LegendPlace,
+	{ x, y }: { x: number; y: number },
+	ink: DrawnInk,
+	number: number,
+	words: string,
+	see: (hex: string) => string,
+): DrawnLegend {
+	const { size } = place;
+	const [wide, high] = [Math.round(size * boxWide), Math.round(size * boxHigh)];
+	const top = Math.round(y + (rowHeight(size, place.lines) - size * 0.5 - high) / 2);
+	const label = word('sans-bold', size, String(number + 1), labelInk(ink.shown));
+	const figure = {
+		...label,
+		...(ink.hatch && { halo: ink.shown }),
+		x: Math.round(x + (wide - label.width) / 2),
+		y: top + Math.round(high / 2 + size * 0.33),
 	};
+	const left = Math.round(x + size * (boxWide + gap));
 	return {
-		rects: [...rects, ...sample],
-		texts: [...texts, { ...text, y: Math.round(y + size * 0.33) }],
+		rects: [box(x, top, wide, high, ink.shown)],
+		texts: [figure, ...wordsBeside(place, words, left, top + high / 2)],
+		shapes: ink.hatch ? hatchedBox(ink, number, x, top, wide, high, see) : [],
 	};
+}
+
+/** The hatch as on the map; one so wide that a box would not show two of its lines is set closer. */
+function hatchedBox(
+	{ hatch }: DrawnInk,
+	ink: number,
+	x: number,
+	y: number,
+	wide: number,
+	high: number,
+	see: (hex: string) => string,
+): DrawnShape[] {
+	if (!hatch) return [];
+	const ring = [x, y, x + wide, y, x + wide, y + high, x, y + high];
+	const closest = (high / 2.2) * 0.01;
+	const look = { ...hatch, spacingMm: Math.min(hatch.spacingMm, closest) };
+	const parts = familiesOf(look).map((family) => cutLines([ring], family));
+	const shape = segmentShape(parts, look, see);
+	return shape ? [{ ...shape, layer: 'legend', ink }] : [];
 }
 
 function box(x: number, y: number, width: number, height: number, fill: string): DrawnRect {
 	const strokeWidth = Math.max(8, Math.round(height / 25));
 	return { layer: 'legend', x, y, width, height, fill, stroke: '#000000', strokeWidth };
-}
-
-function word(face: 'sans' | 'sans-bold', size: number, text: string, hex: string): DrawnText {
-	const width = Math.ceil(textWidth(face, size, text));
-	return { layer: 'legend', text, x: 0, y: 0, size, width, face, hex };
 }

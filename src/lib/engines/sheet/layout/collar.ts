@@ -1,9 +1,18 @@
 /** What stands beside the map, besides title, credits, scale bar and the caution. */
 export interface CollarLook {
-	legendAt: 'foot' | 'left' | 'right';
+	/** 'corner': in the emptiest corner of the map, or at the foot where all are taken */
+	legendAt: 'foot' | 'left' | 'right' | 'corner';
 	legendTitle: string;
+	/** null: as many as suit the names */
+	legendColumns: number | null;
+	/** by number, by name, or those of most regions first */
+	legendOrder: 'number' | 'name' | 'regions';
 	/** how many regions have each ink */
 	legendCounts: boolean;
+	/** what each rank of line stands for */
+	legendLines: boolean;
+	/** in place of the usual words; empty: as usual */
+	lineNames: { outer: string; group: string; region: string };
 	blocks: TextBlock[];
 	/** the team's template it was set by, which two sheets of a series share */
 	template: { id: string; name: string } | null;
@@ -24,7 +33,11 @@ export interface TextBlock {
 export const plainCollar: CollarLook = {
 	legendAt: 'foot',
 	legendTitle: '',
+	legendColumns: null,
+	legendOrder: 'number',
 	legendCounts: false,
+	legendLines: false,
+	lineNames: { outer: '', group: '', region: '' },
 	blocks: [],
 	template: null,
 };
