@@ -21,6 +21,7 @@ import { drawFrame } from './frame/draw-frame.ts';
 import { frameObstacles } from './frame/obstacles.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
+import { legendInks, themedInput, type SheetTheme } from './themed.ts';
 import { cleanText } from './type/clean-text.ts';
 
 export interface SheetInput {
@@ -44,18 +45,6 @@ export interface SheetInput {
 	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
-}
-
-/** A themed map as the sheet needs it: figures are no part of it. */
-export interface SheetTheme {
-	/** class of every region, a number into `inks` */
-	classes: Int32Array;
-	/** an ink a class, named by its range; after them those of regions that are not told */
-	inks: Ink[];
-	/** heading of the legend */
-	title: string;
-	/** how the classes were made, in a sentence */
-	note: string;
 }
 
 /** Regions without an ink: a neutral that no palette is made of. */
@@ -84,7 +73,8 @@ export function inksInUse(fills: { ink: number }[]): number[] {
 export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawing;
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
-export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
+export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Placement } {
+	const input = themedInput(asked);
 	const { coverage, layout, reader, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
 	const seenNow = (hex: string) => see(hex, reader);
@@ -117,7 +107,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		}),
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
-	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
+	const keys = drawLegend(legend, { inks, fills, lines }, legendInks(fills, input.themed), seenNow);
 	const measured = drawScale(placed, bar);
 	const frame = drawFrame({
 		...{ coverage, groups, layout, placed, scale, reader, see, obstacles },
@@ -157,6 +147,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		},
 		frame: frame.report,
 		legend,
+		...(input.themed && { themed: input.themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
