@@ -83,7 +83,7 @@ export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawi
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
 export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
-	const { coverage, layout, reader, colouring, weak, groups } = input;
+	const { coverage, layout, reader, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
 	const seenNow = (hex: string) => see(hex, reader);
 	const inks = input.inks.map((ink) => ({ ...ink, shown: seenNow(ink.hex) }));

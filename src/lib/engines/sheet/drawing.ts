@@ -110,7 +110,7 @@ export interface LegendPlace {
 	columns: number;
 	/** from one column to the next */
 	step: number;
-	/** most lines that a name is set in; every row is as high as they need */
+	/** most lines that a name is set in; a row is as high as its longest name needs */
 	lines: number;
 	/** lines of its heading */
 	title: string[];
