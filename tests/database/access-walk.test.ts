@@ -100,7 +100,14 @@ import {
 	removeMember,
 } from '../../src/lib/server/services/members.service.ts';
 import {
+	approvePalette,
+	endPaletteApproval,
+} from '../../src/lib/server/services/palette-approval.service.ts';
+import {
 	addPalette,
+	changePalette,
+	copyPalette,
+	readPalette,
 	removePalette,
 	teamPalettes,
 } from '../../src/lib/server/services/palette.service.ts';
@@ -284,6 +291,14 @@ const walk: Walk = {
 	readTokens: ['tokens.manage', (member) => readTokens(member)],
 	removeMember: ['members.manage', (member) => removeMember(member, id)],
 	removePalette: ['palette.edit', (member) => removePalette(shop, member, id)],
+	readPalette: ['sheet.read', (member) => readPalette(shop, member, id)],
+	copyPalette: ['palette.edit', (member) => copyPalette(shop, member, id)],
+	changePalette: [
+		'palette.edit',
+		(member) => changePalette(shop, member, id, { name: 'Walked', inks: [], revision: 1 }),
+	],
+	approvePalette: ['palette.approve', (member) => approvePalette(shop, member, id, 'f'.repeat(64))],
+	endPaletteApproval: ['palette.approve', (member) => endPaletteApproval(shop, member, id)],
 	removeSheet: ['sheet.delete', (member) => removeSheet(shop, member, 99)],
 	retryIntake: ['boundaries.upload', (member) => retryIntake(shop, member, id)],
 	saveDraft: ['sheet.read', (member) => saveDraft(shop, member, 99, sent)],

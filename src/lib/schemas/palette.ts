@@ -64,3 +64,6 @@ export const newPalette = z.object({
 
 /** What the page of palettes sends to have one deleted. */
 export const paletteId = z.object({ id: z.uuid() });
+
+/** What it sends to have one copied: an id of the team's, the house's or a published one. */
+export const paletteToCopy = z.object({ id: z.string().min(1).max(100) });

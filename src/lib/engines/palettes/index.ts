@@ -35,6 +35,7 @@ export {
 	type ProposalRequest,
 } from './mend-proposals.ts';
 export { readDesignTokens, tokenLimits, type TokensRead } from './tokens/index.ts';
+export { inksText, sameInks } from './same-inks.ts';
 export { bestKnown } from './limits.ts';
 export { inkDistances } from './ink-distances.ts';
 export { tritanDoubts } from './tritan-doubts.ts';

@@ -1,11 +1,13 @@
 import type { Generated, Insertable, JSONColumnType, Selectable } from 'kysely';
 import type { Moment, OptionalMoment, Whole } from './columns.ts';
 import type * as exported from './exports-tables.ts';
+import type * as palettes from './palette-tables.ts';
 import type * as recuts from './recut-tables.ts';
 import type * as searches from './search-tables.ts';
 import type * as territories from './territory-tables.ts';
 
 export type * from './exports-tables.ts';
+export type * from './palette-tables.ts';
 export type * from './recut-tables.ts';
 export type * from './search-tables.ts';
 export type * from './territory-tables.ts';
@@ -191,14 +193,6 @@ export interface IntakeTable {
 	/** earlier answers that were taken for this file too */
 	remembered: JSONColumnType<unknown[]> | null;
 }
-export interface PaletteTable {
-	id: Generated<string>;
-	team_id: string;
-	name: string;
-	inks: JSONColumnType<{ name: string; hex: string }[]>;
-	created_by: string | null;
-	created_at: Moment;
-}
 export interface SheetTable {
 	id: Generated<string>;
 	team_id: string;
@@ -270,7 +264,8 @@ export interface Database {
 	borders: BorderTable;
 	findings: FindingTable;
 	intakes: IntakeTable;
-	palettes: PaletteTable;
+	palettes: palettes.PaletteTable;
+	palette_approvals: palettes.PaletteApprovalTable;
 	sheets: SheetTable;
 	colourings: ColouringTable;
 	drafts: DraftTable;

@@ -1,7 +1,39 @@
+import type { Ink } from '../../engines/palettes/palette.ts';
 import type { Db } from '../database/connection.ts';
+import type { Row } from '../database/schema.ts';
+
+export type PaletteRow = Row<'palettes'>;
 
 export const listPalettes = (db: Db, teamId: string) =>
 	db.selectFrom('palettes').selectAll().where('team_id', '=', teamId).orderBy('name').execute();
+
+const one = (db: Db, teamId: string, id: string) =>
+	db.selectFrom('palettes').selectAll().where('team_id', '=', teamId).where('id', '=', id);
+
+export const findPalette = (db: Db, teamId: string, id: string): Promise<PaletteRow | undefined> =>
+	one(db, teamId, id).executeTakeFirst();
+
+/** The same, held until the transaction ends: nobody changes it meanwhile. */
+export const holdPalette = (trx: Db, teamId: string, id: string): Promise<PaletteRow | undefined> =>
+	one(trx, teamId, id).forUpdate().executeTakeFirst();
+
+export const paletteNames = async (db: Db, teamId: string): Promise<Set<string>> => {
+	const rows = await db
+		.selectFrom('palettes')
+		.select('name')
+		.where('team_id', '=', teamId)
+		.execute();
+	return new Set(rows.map(({ name }) => name));
+};
+
+export const countPalettes = async (db: Db, teamId: string): Promise<number> => {
+	const { count } = await db
+		.selectFrom('palettes')
+		.where('team_id', '=', teamId)
+		.select(({ fn }) => fn.countAll<number>().as('count'))
+		.executeTakeFirstOrThrow();
+	return Number(count);
+};
 
 /** Adds a palette; undefined when the team has one of this name already. */
 export const insertPalette = (
@@ -9,7 +41,9 @@ export const insertPalette = (
 	palette: {
 		teamId: string;
 		name: string;
-		inks: { name: string; hex: string }[];
+		inks: readonly Ink[];
+		source?: string | null;
+		licence?: string | null;
 		createdBy: string | null;
 	},
 ) =>
@@ -19,11 +53,29 @@ export const insertPalette = (
 			team_id: palette.teamId,
 			name: palette.name,
 			inks: JSON.stringify(palette.inks),
+			source: palette.source ?? null,
+			licence: palette.licence ?? null,
 			created_by: palette.createdBy,
 		})
 		.onConflict((conflict) => conflict.columns(['team_id', 'name']).doNothing())
 		.returning('id')
 		.executeTakeFirst();
+
+export const updatePalette = (
+	trx: Db,
+	id: string,
+	{ name, inks }: { name: string; inks: readonly Ink[] },
+) =>
+	trx
+		.updateTable('palettes')
+		.set(({ eb }) => ({
+			name,
+			inks: JSON.stringify(inks),
+			revision: eb('revision', '+', 1),
+			updated_at: new Date(),
+		}))
+		.where('id', '=', id)
+		.execute();
 
 export async function deletePalette(trx: Db, teamId: string, id: string): Promise<boolean> {
 	const { numDeletedRows } = await trx

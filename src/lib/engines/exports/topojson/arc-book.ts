@@ -31,7 +31,7 @@ export class ArcBook {
 
 	/** A closed line as signed arcs: those known where they lie in it, new ones between them. */
 	signedArcs(ring: LonLat[]): number[] {
-		const start = ring.findIndex((point) => this.#ends.has(nameOf([point])));
+		const start = ring.findIndex((point) => this.#isEnd(point));
 		const open = ring.slice(0, -1);
 		const from = Math.max(start, 0);
 		const turn = [...open.slice(from), ...open.slice(0, from), open[from % open.length]];
@@ -39,11 +39,16 @@ export class ArcBook {
 		let piece: LonLat[] = [turn[0]];
 		turn.slice(1).forEach((point, i) => {
 			piece.push(point);
-			if (!this.#ends.has(nameOf([point])) && i + 2 < turn.length) return;
+			if (!this.#isEnd(point) && i + 2 < turn.length) return;
 			signed.push(this.#find(piece));
 			piece = [point];
 		});
 		return signed;
+	}
+
+	/** Pieces end where arcs do, and where they were cut, so that both sides of a border have the same. */
+	#isEnd(point: LonLat): boolean {
+		return Math.abs(point[0]) === 180 || this.#ends.has(nameOf([point]));
 	}
 
 	#find(points: LonLat[]): number {
