@@ -52,7 +52,7 @@ async function draw({ id, geometry, onCanvas, input, places }: DrawRequest): Pro
 		drawing: ground ? bare : drawing,
 		svg: ground ? '' : paintSvg(drawing, { fills: 'attribute', idPrefix: 'sheet-' }),
 		ground,
-		sizesMm: ground ? null : regionSizesMm(coverage, input.layout),
+		sizesMm: ground ? null : regionSizesMm(coverage, input.layout, input.inks),
 		unitsPerMetre: placement.fit.scale / earthMetres,
 		...found,
 	};
@@ -72,7 +72,7 @@ async function answer(request: DrawRequest | RefineRequest): Promise<void> {
 	self.postMessage(await draw(request));
 	if (!request.onCanvas) return;
 	const coverage = await coverageAt(request.geometry, request.geometry);
-	const sizesMm = regionSizesMm(coverage, request.input.layout);
+	const sizesMm = regionSizesMm(coverage, request.input.layout, request.input.inks);
 	self.postMessage({ id: request.id, sizesMm } satisfies DrawReply);
 }
 

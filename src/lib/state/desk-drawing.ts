@@ -50,7 +50,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 						? desk.inks.map((ink) => (ink < inks.length ? ink : -1))
 						: null,
 					reader: 'typical',
-					weak: [],
+					weak: layout.lines.doubleWeak ? [...desk.palette.weak] : [],
 					issue: draftIssue(editions[0]?.number, desk.draft.revision, desk.draft.savedAt),
 				},
 				places: Float64Array.from(findings.flatMap(({ at }) => at ?? [0, 0])),

@@ -7,6 +7,8 @@ export {
 	type SheetInput,
 	type SheetTheme,
 } from './draw-sheet.ts';
+export { textBlocks } from './collar/text-blocks.ts';
+export { doubledBorders } from './doubled-borders.ts';
 export { recolour } from './recolour.ts';
 export { regionSizesMm } from './sizes.ts';
 export { sheetTable, type SheetRow } from './table.ts';

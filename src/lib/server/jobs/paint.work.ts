@@ -4,7 +4,7 @@ import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts
 import type { Draft } from '../../engines/editions/draft.ts';
 import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
-import { drawSheet, sheetTable } from '../../engines/sheet/index.ts';
+import { doubledBorders, drawSheet, sheetTable } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
 import type { Task } from './task-port.ts';
 
@@ -32,9 +32,10 @@ export function drawInput(input: PaintInput) {
 	const locked = Uint8Array.from(coverage.keys, (key) => (Object.hasOwn(draft.locks, key) ? 1 : 0));
 	const colouring =
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
+	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
 		...{ coverage, borders, groups, inks, layout, reader, issue },
-		...{ colouring, locked, weak: [] },
+		...{ colouring, locked, weak },
 	});
 	return { coverage, drawing };
 }
