@@ -36,9 +36,9 @@ export function arrange(input: SheetInput, inks: DrawnInk[]): Arranged {
 }
 
 function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): Arranged {
-	const { coverage, weak, colouring, issue } = input;
+	const { coverage, weak, colouring, issue, groups } = input;
 	let around = null as Collar | null;
-	const placed = placeOnPaper(coverage, layout, (projection) => {
+	const frameFor = (projection: string) => {
 		around = collar({
 			...{ layout, inks, projection, issue },
 			coloured: colouring !== null,
@@ -46,7 +46,8 @@ function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): 
 			regions: coverage.keys.length,
 		});
 		return around;
-	});
+	};
+	const placed = placeOnPaper(coverage, layout, frameFor, groups);
 	return { ...onTheMap(placed, around!), placed, around: around!, legendNote: '' };
 }
 

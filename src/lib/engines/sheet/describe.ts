@@ -13,5 +13,6 @@ export function describe({ fills, unplaced, notes }: Omit<Drawing, 'description'
 		? ` ${many(unplaced.length, 'name is', 'names are')} listed in the table and not on the map.`
 		: '';
 	const scale = notes.scale ? ` ${notes.scale}` : '';
-	return `Map of ${many(fills.length, 'region', 'regions')}${inks}.${listed} ${notes.projection}${scale} ${caution}`;
+	const insets = notes.insets ? ` ${notes.insets}` : '';
+	return `Map of ${many(fills.length, 'region', 'regions')}${inks}.${listed} ${notes.projection}${scale}${insets} ${caution}`;
 }

@@ -17,6 +17,7 @@ import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
 import { paperSize } from './paper.ts';
 import type { Placement } from './place-on-paper.ts';
+import { drawFrame } from './frame/draw-frame.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { cleanText } from './type/clean-text.ts';
@@ -88,7 +89,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 	const seenNow = (hex: string) => see(hex, reader);
 	const inks = input.inks.map((ink) => ({ ...ink, shown: seenNow(ink.hex) }));
 	const { placed, around, legend, obstacles, grounds, legendNote } = arrange(input, inks);
-	const { map, texts, bar, scale, blocks } = around;
+	const { texts, bar, scale, blocks } = around;
 	const fills = fillRegions(input, inks, placed.rings);
 	const names = coverage.names.map(cleanText);
 	const { arcs, rings, sides } = placed;
@@ -100,7 +101,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 				names,
 				groups,
 				areas: coverage.areasKm2,
-				box: map,
+				box: placed.box,
 				scale,
 				obstacles,
 			})
@@ -117,6 +118,10 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 	];
 	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
 	const measured = drawScale(placed, bar);
+	const frame = drawFrame({
+		...{ coverage, groups, layout, placed, scale, reader, see },
+		labels: labels.texts,
+	});
 	const drawing: Drawing = {
 		...paperSize(layout),
 		title: cleanText(layout.title),
@@ -128,6 +133,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		lines,
 		shapes: [
 			...(input.bare ? [] : hatchShapes({ ...arcs, fills, inks }, seenNow)),
+			...frame.shapes,
 			...grounds,
 			...keys.shapes,
 		],
@@ -135,12 +141,19 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			...inkLabels(labels.texts, fills),
 			...texts,
 			...measured.texts,
+			...frame.texts,
 			...keys.texts,
 			...blocks.flatMap((block) => block.texts),
 		],
-		rects: [...measured.rects, ...keys.rects],
+		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,
-		notes: { projection: placed.chosen.sentence, scale: measured.sentence, legend: legendNote },
+		notes: {
+			projection: placed.chosen.sentence,
+			scale: measured.sentence,
+			insets: frame.sentence,
+			legend: legendNote,
+		},
+		frame: frame.report,
 		legend,
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };

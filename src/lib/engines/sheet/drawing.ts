@@ -1,4 +1,5 @@
 import type { Ink, Reader } from '../palettes/palette.ts';
+import type { FrameReport } from './frame-report.ts';
 import type { DrawnShape } from './shapes.ts';
 
 /**
@@ -32,8 +33,10 @@ export interface Drawing {
 	rects: DrawnRect[];
 	/** labels that did not fit and are listed instead */
 	unplaced: number[];
-	/** longer sentences about the drawing: projection, scale, how true the bar is */
-	notes: { projection: string; scale: string; legend: string };
+	/** longer sentences about the drawing: projection, scale and how true the bar is, insets, legend */
+	notes: { projection: string; scale: string; insets: string; legend: string };
+	/** what the frame came to, and what could not be done as asked */
+	frame: FrameReport;
 	/** where the legend stands, so that it can be set anew when the inks in use change */
 	legend: LegendPlace | null;
 }

@@ -83,7 +83,9 @@ export function placeOnPaper(
 	const slack = slackOf(extent);
 	const own = ownArcs(ready, arcFrame, chosen, slack);
 	const outline = shownGlobe(layout, extent, chosen);
-	const bounds = planeBoxOf({ points: outline ? joined(own.plane.points, outline) : own.plane.points });
+	const bounds = planeBoxOf({
+		points: outline ? joined(own.plane.points, outline) : own.plane.points,
+	});
 	const box = mapBox(map, layout, extent, scale);
 	const boxed = parted.boxed.map((cluster, i) => {
 		const arcs = arcsOfFrame(arcFrame!, i + 1);
@@ -101,7 +103,9 @@ export function placeOnPaper(
 		rings: drawnRings(ready.rings, set.arcs),
 		told: [chosen.refused, ...set.map.told, ...set.told].filter((one) => one !== null),
 		middle: middleOf(bounds, fit),
-		globe: outline && Int32Array.from(outline, (at, i) => Math.round(at * fit.scale + (i % 2 ? fit.dy : fit.dx))),
+		globe:
+			outline &&
+			Int32Array.from(outline, (at, i) => Math.round(at * fit.scale + (i % 2 ? fit.dy : fit.dx))),
 	};
 }
 

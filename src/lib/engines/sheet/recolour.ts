@@ -61,8 +61,13 @@ function newShapes(
 ): DrawnShape[] {
 	const others = drawing.shapes.filter(({ layer }) => layer !== 'hatch' && layer !== 'legend');
 	const hatches = hatchShapes(drawing, see);
-	const same = others.length === drawing.shapes.length && !hatches.length && !samples.length;
-	return same ? drawing.shapes : [...hatches, ...others, ...samples];
+	const tinted = others.some(({ set }) => set !== undefined);
+	const kept = others.length === drawing.shapes.length && !tinted;
+	if (kept && !hatches.length && !samples.length) return drawing.shapes;
+	const shown = others.map((shape) =>
+		shape.set === undefined ? shape : { ...shape, fill: see(shape.set) },
+	);
+	return [...hatches, ...shown, ...samples];
 }
 
 /** Lines of a colour of their own as the reader sees them; the list itself stays where none changes. */

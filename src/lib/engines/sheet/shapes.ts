@@ -12,6 +12,8 @@ export interface DrawnShape {
 	strokeWidth: number;
 	/** line and gap in turn */
 	dash?: number[];
+	/** the fill as it was set, if the reader's eyes change it; `fill` is what that reader sees */
+	set?: string;
 	/** the ink that the shape belongs to, so that it can be set anew when inks change */
 	ink?: number;
 }

@@ -41,7 +41,7 @@ describe('scale bar', () => {
 		const drawing = drawSheet(sheetOf(statesCoverage()));
 		const bar = drawing.rects.find(({ layer }) => layer === 'scale')!;
 		const map = { x: 1200, y: 3000, width: 27_300, height: 13_000 };
-		const { chosen } = placeOnPaper(statesCoverage(), layout, () => map);
+		const { chosen } = placeOnPaper(statesCoverage(), layout, () => ({ map, scale: 1 }));
 		// the same projection at another size: both bars stand for the same share of the map's width
 		const across = drawing.arcPoints.filter((_, i) => i % 2 === 0);
 		const width = across.reduce((a, b) => Math.max(a, b)) - across.reduce((a, b) => Math.min(a, b));

@@ -10,7 +10,9 @@ const widest = { whole: '180° W', minutes: '180° 00′ W' };
 /** The box of the map within the strips that its figures stand in. */
 export function figureRoom(box: Box, scale: number, minutes: boolean): Box {
 	const size = figureSize(scale);
-	const across = Math.ceil(textWidth('sans', size, minutes ? widest.minutes : widest.whole) + size * 0.8);
+	const across = Math.ceil(
+		textWidth('sans', size, minutes ? widest.minutes : widest.whole) + size * 0.8,
+	);
 	const down = Math.round(size * 1.5);
 	return {
 		x: box.x + across,

@@ -34,7 +34,8 @@ export function graticuleSteps(asked: number | 'auto', extent: Extent): Graticul
 export function figureOf(value: number, positive: string, negative: string): string {
 	const size = Math.abs(value);
 	const inMinutes = Math.round(size * 60);
-	const side = size < 1e-9 || Math.abs(size - 180) < 1e-9 ? '' : ` ${value > 0 ? positive : negative}`;
+	const side =
+		size < 1e-9 || Math.abs(size - 180) < 1e-9 ? '' : ` ${value > 0 ? positive : negative}`;
 	if (Math.abs(size * 60 - inMinutes) > 1e-6) return `${Number(size.toFixed(3))}°${side}`;
 	const [degrees, rest] = [Math.floor(inMinutes / 60), inMinutes % 60];
 	return `${degrees}°${rest ? ` ${String(rest).padStart(2, '0')}′` : ''}${side}`;

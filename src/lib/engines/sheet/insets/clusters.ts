@@ -57,7 +57,13 @@ function unionFind(count: number) {
 }
 
 /** Area of each part, km². */
-function partAreas({ arcPoints, arcStarts, ringArcs, ringStarts, partRings }: Coverage): Float64Array {
+function partAreas({
+	arcPoints,
+	arcStarts,
+	ringArcs,
+	ringStarts,
+	partRings,
+}: Coverage): Float64Array {
 	return Float64Array.from({ length: partRings.length - 1 }, (_, part) => {
 		let sum = 0;
 		for (let i = ringStarts[partRings[part]]; i < ringStarts[partRings[part + 1]]; i++) {
@@ -69,7 +75,10 @@ function partAreas({ arcPoints, arcStarts, ringArcs, ringStarts, partRings }: Co
 	});
 }
 
-function eachPartArc({ ringArcs, ringStarts, partRings }: Coverage, visit: (part: number, arc: number) => void) {
+function eachPartArc(
+	{ ringArcs, ringStarts, partRings }: Coverage,
+	visit: (part: number, arc: number) => void,
+) {
 	for (let part = 0; part + 1 < partRings.length; part++) {
 		for (let i = ringStarts[partRings[part]]; i < ringStarts[partRings[part + 1]]; i++)
 			visit(part, ringArcs[i] < 0 ? ~ringArcs[i] : ringArcs[i]);
@@ -184,7 +193,9 @@ function clusterOf(coverage: Coverage, parts: number[], areas: Float64Array): Cl
 		areaKm2 += areas[part];
 	}
 	const largest = parts.reduce((best, part) => (areas[part] > areas[best] ? part : best), parts[0]);
-	const owner = regionParts.findIndex((first, i) => first <= largest && largest < regionParts[i + 1]);
+	const owner = regionParts.findIndex(
+		(first, i) => first <= largest && largest < regionParts[i + 1],
+	);
 	const arc = ringArcs[ringStarts[partRings[largest]]];
 	const at = 2 * arcStarts[arc < 0 ? ~arc : arc];
 	const place = `${Math.round(arcPoints[at])} ${Math.round(arcPoints[at + 1])}`;

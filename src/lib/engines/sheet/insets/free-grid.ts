@@ -38,7 +38,10 @@ function summed(takenCells: Uint8Array, columns: number, rows: number): Uint32Ar
 		for (let column = 0; column < columns; column++) {
 			const at = (row + 1) * (columns + 1) + column + 1;
 			sums[at] =
-				takenCells[row * columns + column] + sums[at - 1] + sums[at - columns - 1] - sums[at - columns - 2];
+				takenCells[row * columns + column] +
+				sums[at - 1] +
+				sums[at - columns - 1] -
+				sums[at - columns - 2];
 		}
 	}
 	return sums;

@@ -181,6 +181,11 @@ function settled(
 function lost({ id, name, chosen, slack }: Draft): PlacedInset {
 	const nowhere = { x: 0, y: 0, width: 0, height: 0 };
 	const fit = { scale: 0, dx: 0, dy: 0 };
-	return { ...{ id, name, chosen, slack, fit }, outer: nowhere, inner: nowhere, ratio: 0, sameScale: false };
+	return {
+		...{ id, name, chosen, slack, fit },
+		outer: nowhere,
+		inner: nowhere,
+		ratio: 0,
+		sameScale: false,
+	};
 }
-

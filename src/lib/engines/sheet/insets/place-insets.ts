@@ -46,7 +46,10 @@ interface Ground {
 }
 
 /** Round ratios at which the regions are neither too large nor too small, the largest scale first. */
-function ratiosFor({ width, height, ratio }: InsetWish, { grid, mapRatio, scale }: Ground): number[] {
+function ratiosFor(
+	{ width, height, ratio }: InsetWish,
+	{ grid, mapRatio, scale }: Ground,
+): number[] {
 	if (ratio !== null) return [ratio];
 	const longer = Math.max(width, height);
 	const most = sides.most * Math.min(grid.box.width, grid.box.height);
@@ -138,7 +141,9 @@ function eased(wish: InsetWish): { wish: InsetWish; told: string[] }[] {
 	if (wish.cornerMm)
 		tries.push({
 			wish: { ...wish, cornerMm: null },
-			told: [`${name} would lie over the map, another box or the edge where you put it, so it stands where there is room.`],
+			told: [
+				`${name} would lie over the map, another box or the edge where you put it, so it stands where there is room.`,
+			],
 		});
 	if (wish.ratio !== null)
 		tries.push({
@@ -151,7 +156,9 @@ function eased(wish: InsetWish): { wish: InsetWish; told: string[] }[] {
 /** A spot for every wish, in their order; null for those that find no room. Boxes set by hand come first. */
 export function placeInsets(wishes: InsetWish[], ground: Ground): (InsetSpot | null)[] {
 	const spots: (InsetSpot | null)[] = wishes.map(() => null);
-	const order = wishes.map((_, i) => i).sort((a, b) => Number(!!wishes[b].cornerMm) - Number(!!wishes[a].cornerMm) || a - b);
+	const order = wishes
+		.map((_, i) => i)
+		.sort((a, b) => Number(!!wishes[b].cornerMm) - Number(!!wishes[a].cornerMm) || a - b);
 	for (const i of order) {
 		const others = spots.flatMap((spot) => (spot ? [spot.outer] : []));
 		for (const { wish, told } of eased(wishes[i])) {

@@ -80,8 +80,7 @@ function wholeRegions(coverage: Coverage, clusters: Cluster[]) {
 	const most = new Float64Array(coverage.keys.length);
 	for (const { regions } of clusters)
 		for (const { region, areaKm2 } of regions) most[region] = Math.max(most[region], areaKm2);
-	return ({ regions }: Cluster) =>
-		regions.some(({ region, areaKm2 }) => areaKm2 === most[region]);
+	return ({ regions }: Cluster) => regions.some(({ region, areaKm2 }) => areaKm2 === most[region]);
 }
 
 /** Most points measured for one frame. */

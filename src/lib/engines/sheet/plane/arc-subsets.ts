@@ -4,7 +4,10 @@ import type { SheetArcs } from './quantise.ts';
 export type LonLatArcs = Pick<Coverage, 'arcPoints' | 'arcStarts'>;
 
 /** Some arcs by themselves, in the order given. */
-export function onlyArcs({ arcPoints, arcStarts }: LonLatArcs, arcs: ArrayLike<number>): LonLatArcs {
+export function onlyArcs(
+	{ arcPoints, arcStarts }: LonLatArcs,
+	arcs: ArrayLike<number>,
+): LonLatArcs {
 	const starts = new Uint32Array(arcs.length + 1);
 	for (let i = 0; i < arcs.length; i++)
 		starts[i + 1] = starts[i] + arcStarts[arcs[i] + 1] - arcStarts[arcs[i]];

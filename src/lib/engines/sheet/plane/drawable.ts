@@ -71,10 +71,7 @@ export function drawable(
 const turned = (points: LonLat[], cut: number): LonLat[] =>
 	points.map(([lon, lat]) => [lon - cut + 180, lat]);
 const turnedBack = (points: LonLat[], cut: number): LonLat[] =>
-	points.map(([lon, lat]) => [
-		Math.min(180 - clear, Math.max(clear - 180, lon)) + cut - 180,
-		lat,
-	]);
+	points.map(([lon, lat]) => [Math.min(180 - clear, Math.max(clear - 180, lon)) + cut - 180, lat]);
 
 /** What is drawn of an arc in its stead, or null where it is drawn as it is. */
 function linePieces(coverage: Coverage, arc: number, cut: number | null): LonLat[][] | null {

@@ -62,7 +62,10 @@ export function fitMap(
 	box: Box,
 	wish: FitWish,
 ): MapFit {
-	const largest = fitInto({ points: Float64Array.of(bounds.left, bounds.top, bounds.right, bounds.bottom) }, box);
+	const largest = fitInto(
+		{ points: Float64Array.of(bounds.left, bounds.top, bounds.right, bounds.bottom) },
+		box,
+	);
 	const ratio = ratioOf(projection, bounds, largest);
 	const told: string[] = [];
 	if (wish.ratio === null || ratio === null) {
@@ -99,7 +102,13 @@ function tooLargeWords(
 }
 
 /** In the middle of the box, then moved as far as the box allows. */
-function shifted(bounds: PlaneBox, box: Box, scale: number, shiftMm: [number, number], told: string[]) {
+function shifted(
+	bounds: PlaneBox,
+	box: Box,
+	scale: number,
+	shiftMm: [number, number],
+	told: string[],
+) {
 	const room = [
 		(box.width - scale * (bounds.right - bounds.left)) / 2,
 		(box.height - scale * (bounds.bottom - bounds.top)) / 2,

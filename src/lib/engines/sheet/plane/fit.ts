@@ -16,7 +16,7 @@ export interface Fit {
 }
 
 /** The largest fit of the arcs into a box, centred in it. */
-export function fitInto({ points }: PlaneArcs, box: Box): Fit {
+export function fitInto({ points }: Pick<PlaneArcs, 'points'>, box: Box): Fit {
 	let [left, right, top, bottom] = [Infinity, -Infinity, Infinity, -Infinity];
 	for (let i = 0; i < points.length; i += 2) {
 		left = Math.min(left, points[i]);

@@ -5,7 +5,8 @@ import type { LonLat } from './ring-lonlat.ts';
 const lonSlack = 0.001;
 const latSlack = 0.1;
 
-export const nearSeam = (lon: number): boolean => Math.abs(Math.abs(lonStep(0, lon)) - 180) < lonSlack;
+export const nearSeam = (lon: number): boolean =>
+	Math.abs(Math.abs(lonStep(0, lon)) - 180) < lonSlack;
 export const nearPole = (lat: number): boolean => Math.abs(lat) > 90 - latSlack;
 
 const onSeam = (a: LonLat, b: LonLat): boolean =>
