@@ -5,6 +5,7 @@ import type { Found, Question } from '../engines/boundaries/question.ts';
 import type { Explanation, Proof } from '../engines/colouring/problem.ts';
 import type { Draft } from '../engines/editions/draft.ts';
 import type { Action } from '../server/access/roles.ts';
+import type { DeskTheme } from './desk-theme.ts';
 import type { ReadingFields } from './upload.ts';
 
 /**
@@ -33,6 +34,8 @@ export interface DeskSheet {
 	editions: DeskEdition[];
 	/** figures joined to the regions, and tables under review; null for whoever may not see them */
 	measures: { count: number; missing: number; stale: number; open: number } | null;
+	/** the classes that the draft shows in place of its colouring; null for none */
+	theme: DeskTheme | null;
 	/** what the one who looks may do here */
 	rights: Action[];
 }

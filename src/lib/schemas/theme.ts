@@ -27,7 +27,10 @@ export const theme = z
 		rounded: z.boolean().default(false),
 		ramp: z.string().min(1).max(100),
 		reversed: z.boolean(),
-		middle: z.union([z.literal('mean'), z.number()]).nullable().default(null),
+		middle: z
+			.union([z.literal('mean'), z.number()])
+			.nullable()
+			.default(null),
 		suppressBelow: z.number().positive().max(1e12).nullable(),
 		title: z.string().max(300),
 	})

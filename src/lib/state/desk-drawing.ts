@@ -1,5 +1,5 @@
 import { date } from '$lib/components/format';
-import type { Area, Ground } from '$lib/engines/sheet';
+import type { Area, Ground, SheetTheme } from '$lib/engines/sheet';
 import type { Desk } from './desk.svelte';
 import { Drawer, type DrawReply, type Refined } from './drawer';
 import { drawnSheet } from './drawn-sheet';
@@ -49,6 +49,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 					colouring: desk.inks.some((ink) => ink >= 0)
 						? desk.inks.map((ink) => (ink < inks.length ? ink : -1))
 						: null,
+					theme: desk.theme.shown && unwrapped(desk.theme.shown),
 					reader: 'typical',
 					weak: layout.lines.doubleWeak ? [...desk.palette.weak] : [],
 					issue: draftIssue(editions[0]?.number, desk.draft.revision, desk.draft.savedAt),
@@ -68,6 +69,12 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 		stop: () => drawer.stop(),
 	};
 }
+
+/** Plain values, which can be sent to a worker. */
+const unwrapped = ({ inks, ...theme }: SheetTheme): SheetTheme => ({
+	...theme,
+	inks: inks.map((ink) => ({ ...ink })),
+});
 
 const finerOf = ({ area, finer, refined }: Refined): FinerGround => ({
 	area,

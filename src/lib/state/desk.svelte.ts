@@ -23,6 +23,7 @@ import { numberRegions } from './rules-in-force';
 import type { SaveWithInks } from './save-draft';
 import type { DrawnSheet } from './drawn-sheet';
 import { RuleHand } from './rule-hand.svelte';
+import { ThemeOnDesk } from './theme-on-desk.svelte';
 import { TerritoryDesk, type PlanOnShow, type TerritoryStart } from './territories.svelte';
 
 export interface DeskStart {
@@ -125,11 +126,13 @@ export class Desk {
 	);
 	/** what is planned on the sheet now, when it is territories */
 	planning = $derived(this.byTerritory ? this.territories : null);
-	/** what the sheet paints: the ink of every region, or of its territory */
-	paints = $derived(this.planning?.regionInks ?? this.inks);
-	uses = $derived.by(() =>
-		inkUse(this.paints, this.sheet.regions.areaKm2, this.shown.palette.inks.length),
-	);
+	/** the measure that the sheet shows in place of its colouring */
+	readonly theme = new ThemeOnDesk(this);
+	/** what the sheet paints: the ink of every region, of its territory, or its class of a measure */
+	paints = $derived.by(() => this.planning?.regionInks ?? this.theme.shown?.classes ?? this.inks);
+	/** the inks that these numbers name */
+	shownInks = $derived.by(() => this.theme.shown?.inks ?? this.shown.palette.inks);
+	uses = $derived.by(() => inkUse(this.paints, this.sheet.regions.areaKm2, this.shownInks.length));
 
 	constructor(start: DeskStart) {
 		const { sheet } = start;

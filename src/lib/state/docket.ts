@@ -4,6 +4,7 @@ import type { DeskColouring, DeskFinding, DeskSheet } from '$lib/schemas/desk';
 import type { MarkKind } from '$lib/components/Mark.svelte';
 import { count, counted, date } from '$lib/components/format';
 import type { Standing } from '$lib/engines/borders/standing';
+import { themeStage, type ThemeState } from './theme-words';
 
 /** A run of the words of a stage; with `to` it leads to the place its number speaks of. */
 export interface DocketWords {
@@ -18,6 +19,7 @@ export interface DocketStage {
 		| 'palette'
 		| 'layout'
 		| 'measures'
+		| 'theme'
 		| 'territories'
 		| 'editions';
 	title: string;
@@ -47,6 +49,8 @@ export interface DocketState {
 	palette: { mark: MarkKind | null; sentence: string };
 	/** names of the projection drawn, and how many labels had to be listed; null until it is drawn */
 	drawn: { projection: string; unplaced: number } | null;
+	/** the measure that the sheet shows; null while it shows its colouring */
+	theme: ThemeState | null;
 	/** what the territories come to; null until it is known */
 	territories: TerritoryState | null;
 	/** whether the draft was saved after the last edition was issued */
@@ -70,6 +74,7 @@ export const docket = (state: DocketState): DocketStage[] => [
 	},
 	{ id: 'layout', title: 'Layout', ...layout(state) },
 	...measures(state.sheet),
+	themeStage(state.theme),
 	...territories(state),
 	{ id: 'editions', title: 'Editions', ...editions(state) },
 ];

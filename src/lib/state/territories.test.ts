@@ -61,6 +61,7 @@ const sheet: DeskSheet = {
 	findings: [],
 	editions: [],
 	measures: null,
+	theme: null,
 	rights: ['measures.read', 'territories.edit'],
 };
 

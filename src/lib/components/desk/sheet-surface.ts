@@ -90,9 +90,10 @@ export class SheetSurface implements Surface {
 /** A region in words while the sheet is coloured by region. */
 export function inkWords(
 	{ name, key, ink }: RegionFill,
-	{ inks }: Drawing,
+	{ inks, themed }: Drawing,
 	locked: boolean,
 ): string {
+	if (themed) return `${name || key}, ${inks[ink]?.name ?? 'no data'}`;
 	if (ink < 0) return `${name || key}, no ink yet`;
 	return `${name || key}, ink ${ink + 1} ${inks[ink]?.name ?? ''}${locked ? ', locked' : ''}`;
 }

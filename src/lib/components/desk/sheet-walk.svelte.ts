@@ -74,7 +74,7 @@ export class SheetWalk {
 	#told(region: number): string {
 		const desk = this.#desk;
 		const plan = desk.planning;
-		const ink = desk.shown.palette.inks[desk.inks[region]]?.name ?? 'no ink';
+		const ink = desk.shownInks[desk.paints[region]]?.name ?? 'no ink';
 		const itself = plan ? regionWords(plan, region) : `${desk.nameOf(region)}, ${ink}`;
 		const beside = this.#beside(region);
 		const names = beside.slice(0, 8).map((other) => desk.nameOf(other));

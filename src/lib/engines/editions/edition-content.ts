@@ -1,5 +1,6 @@
 import { caution } from '../sheet/layout.ts';
 import type { Draft } from './draft.ts';
+import type { FrozenTheme } from './frozen-theme.ts';
 
 /**
  * What an edition is: everything that decides how its sheet looks and why it may be trusted, as plain
@@ -21,6 +22,8 @@ export interface EditionContent {
 	lowerBound: number;
 	/** as the colouring engine gave it, regions by key */
 	proof: unknown;
+	/** the classes shown in place of the colouring; absent where the sheet shows its colouring */
+	theme?: FrozenTheme;
 	caution: string;
 }
 
@@ -33,15 +36,22 @@ export interface EditionInput {
 	colouring: ArrayLike<number>;
 	lowerBound: number;
 	proof: unknown;
+	/** needed where the draft has a theme */
+	theme?: FrozenTheme | null;
 }
 
 export type EditionOutcome =
 	| { status: 'complete'; content: EditionContent }
-	| { status: 'incomplete'; reason: 'not-coloured' | 'duplicate-keys'; keys: string[] };
+	| {
+			status: 'incomplete';
+			reason: 'not-coloured' | 'duplicate-keys' | 'no-classes';
+			keys: string[];
+	  };
 
 /**
- * Puts an edition together. Refused when a region has no ink of the draft's palette, or when two
- * regions share a key: the content names regions by key. Copies what it is given; nothing is shared.
+ * Puts an edition together. Refused when a region has no ink of the draft's palette, when two regions
+ * share a key (the content names regions by key), or when the draft has a theme and regions are without a
+ * class of it. Copies what it is given; nothing is shared.
  */
 export function editionContent(input: EditionInput): EditionOutcome {
 	const { keys, colouring, draft } = input;
@@ -51,6 +61,9 @@ export function editionContent(input: EditionInput): EditionOutcome {
 	const seen = new Set<string>();
 	const twice = keys.filter((key) => seen.has(key) || !seen.add(key));
 	if (twice.length) return { status: 'incomplete', reason: 'duplicate-keys', keys: twice };
+	const { theme } = input;
+	const unclassed = draft.theme ? keys.filter((key) => !isClassed(theme, key)) : [];
+	if (unclassed.length) return { status: 'incomplete', reason: 'no-classes', keys: unclassed };
 	return {
 		status: 'complete',
 		content: {
@@ -61,7 +74,15 @@ export function editionContent(input: EditionInput): EditionOutcome {
 			inksUsed: keys.reduce((most, _, i) => Math.max(most, colouring[i] + 1), 0),
 			lowerBound: input.lowerBound,
 			proof: structuredClone(input.proof),
+			...(draft.theme && theme && { theme: structuredClone(theme) }),
 			caution,
 		},
 	};
 }
+
+const isClassed = (theme: FrozenTheme | null | undefined, key: string): boolean =>
+	theme !== null &&
+	theme !== undefined &&
+	Object.hasOwn(theme.classes, key) &&
+	theme.classes[key] >= 0 &&
+	theme.classes[key] < theme.inks.length;

@@ -5,6 +5,7 @@ export {
 	type EditionInput,
 	type EditionOutcome,
 } from './edition-content.ts';
+export { freezeTheme, thawTheme, type FrozenTheme } from './frozen-theme.ts';
 export { canonicalJson } from './canonical-json.ts';
 export { digestOf, verifyEdition } from './digest.ts';
 export {

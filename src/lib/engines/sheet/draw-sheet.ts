@@ -9,7 +9,7 @@ import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
 import { arrange } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
+import type { DrawnInk, DrawnText, Drawing, RegionFill } from './drawing.ts';
 import { labelSheet } from './labels/label-sheet.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { SheetLayout } from './layout.ts';
@@ -20,6 +20,7 @@ import type { Placement } from './place-on-paper.ts';
 import { drawFrame } from './frame/draw-frame.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
+import { legendInks, themedInput, type SheetTheme } from './themed.ts';
 import { cleanText } from './type/clean-text.ts';
 
 export interface SheetInput {
@@ -43,18 +44,6 @@ export interface SheetInput {
 	bare?: boolean;
 	/** how a reader sees a colour; that of the colour engine unless given */
 	asSeenBy?: (hex: string, reader: Reader) => string;
-}
-
-/** A themed map as the sheet needs it: figures are no part of it. */
-export interface SheetTheme {
-	/** class of every region, a number into `inks` */
-	classes: Int32Array;
-	/** an ink a class, named by its range; after them those of regions that are not told */
-	inks: Ink[];
-	/** heading of the legend */
-	title: string;
-	/** how the classes were made, in a sentence */
-	note: string;
 }
 
 /** Regions without an ink: a neutral that no palette is made of. */
@@ -83,7 +72,8 @@ export function inksInUse(fills: { ink: number }[]): number[] {
 export const drawSheet = (input: SheetInput): Drawing => drawPlaced(input).drawing;
 
 /** Draws a sheet, and tells where the ground came to lie on it, so that finer lines can be laid in. */
-export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Placement } {
+export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Placement } {
+	const input = themedInput(asked);
 	const { coverage, layout, reader, weak, groups } = input;
 	const see = input.asSeenBy ?? seen;
 	const seenNow = (hex: string) => see(hex, reader);
@@ -116,7 +106,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		}),
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
-	const keys = drawLegend(legend, { inks, fills, lines }, inksInUse(fills), seenNow);
+	const keys = drawLegend(legend, { inks, fills, lines }, legendInks(fills, input.themed), seenNow);
 	const measured = drawScale(placed, bar);
 	const frame = drawFrame({
 		...{ coverage, groups, layout, placed, scale, reader, see },
@@ -138,7 +128,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 			...keys.shapes,
 		],
 		texts: [
-			...inkLabels(labels.texts, fills),
+			...inkLabels(labels.texts, fills, inks),
 			...texts,
 			...measured.texts,
 			...frame.texts,
@@ -155,6 +145,7 @@ export function drawPlaced(input: SheetInput): { drawing: Drawing; placement: Pl
 		},
 		frame: frame.report,
 		legend,
+		...(input.themed && { themed: input.themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
@@ -176,14 +167,17 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 	});
 }
 
-/** Black or white for every label that stands on a fill, whichever reads better. */
-export function inkLabels<T extends { region?: number; onFill?: boolean; hex: string }>(
-	texts: T[],
-	fills: RegionFill[],
-): T[] {
-	return texts.map((text) =>
-		text.onFill && text.region !== undefined
-			? { ...text, hex: labelInk(fills[text.region].hex) }
-			: text,
-	);
+/**
+ * Black or white for every label that stands on a fill, whichever reads better. Where the fill is hatched the
+ * lines keep clear of the letters.
+ */
+export function inkLabels(texts: DrawnText[], fills: RegionFill[], inks: DrawnInk[]): DrawnText[] {
+	return texts.map((text) => {
+		if (!text.onFill || text.region === undefined) return text;
+		const { hex, ink } = fills[text.region];
+		const { halo, clears, ...bare } = text;
+		const own = clears ? undefined : halo;
+		if (inks[ink]?.hatch && !own) return { ...bare, hex: labelInk(hex), halo: hex, clears: true };
+		return { ...bare, hex: labelInk(hex), ...(own ? { halo: hex } : {}) };
+	});
 }

@@ -39,6 +39,13 @@ export interface Drawing {
 	frame: FrameReport;
 	/** where the legend stands, so that it can be set anew when the inks in use change */
 	legend: LegendPlace | null;
+	/** set where the fills are classes of a measure and not a colouring */
+	themed?: SheetThemed;
+}
+
+export interface SheetThemed {
+	/** how many of the inks are classes, lowest first; the others are of regions that are not told */
+	told: number;
 }
 
 export interface DrawnInk extends Ink {
@@ -86,6 +93,8 @@ export interface DrawnText {
 	face: 'sans' | 'sans-bold' | 'serif' | 'serif-bold' | 'serif-italic';
 	hex: string;
 	halo?: string;
+	/** the halo is there because the fill is hatched, and goes with the hatch */
+	clears?: true;
 	region?: number;
 	/** the label stands on its region's fill, from which its colour follows */
 	onFill?: boolean;

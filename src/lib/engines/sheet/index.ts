@@ -1,12 +1,7 @@
 /** From a coverage and a colouring to one drawn sheet, and from the drawing to SVG. */
-export {
-	drawPlaced,
-	drawSheet,
-	inksInUse,
-	uncoloured,
-	type SheetInput,
-	type SheetTheme,
-} from './draw-sheet.ts';
+export { drawPlaced, drawSheet, inksInUse, uncoloured, type SheetInput } from './draw-sheet.ts';
+export { sheetTheme, unlessTold, type ThemeSource } from './sheet-theme.ts';
+export { themeColumns, type SheetTheme, type ThemeColumns } from './themed.ts';
 export { textBlocks } from './collar/text-blocks.ts';
 export { doubledBorders } from './doubled-borders.ts';
 export { recolour } from './recolour.ts';
@@ -53,4 +48,5 @@ export type {
 	LegendPlace,
 	LineLayer,
 	RegionFill,
+	SheetThemed,
 } from './drawing.ts';

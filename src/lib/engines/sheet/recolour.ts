@@ -2,10 +2,11 @@ import { asSeenBy as seen } from '../colour/index.ts';
 import type { Ink, Reader } from '../palettes/palette.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-import { fillHex, inkLabels, inksInUse } from './draw-sheet.ts';
+import { fillHex, inkLabels } from './draw-sheet.ts';
 import type { Drawing, LineLayer } from './drawing.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
 import type { DrawnShape } from './shapes.ts';
+import { legendInks } from './themed.ts';
 
 /**
  * The same sheet in other colours: geometry, lettering and collar stay where they are and are shared
@@ -33,7 +34,7 @@ export function recolour(
 	const see = (hex: string) => asSeenBy(hex, reader);
 	const lines = seenLines(drawing, see);
 	const shown = { inks: drawn, fills, lines };
-	const keys = drawLegend(drawing.legend, shown, inksInUse(fills), see);
+	const keys = drawLegend(drawing.legend, shown, legendInks(fills, drawing.themed), see);
 	const next = {
 		...drawing,
 		reader,
@@ -45,6 +46,7 @@ export function recolour(
 			...inkLabels(
 				drawing.texts.filter(({ layer }) => layer !== 'legend'),
 				fills,
+				drawn,
 			),
 			...keys.texts,
 		],

@@ -1,5 +1,6 @@
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { Drawing } from './drawing.ts';
+import { themeColumns, type ThemeColumns } from './themed.ts';
 
 /** A region as a row: what the map shows of it, for readers who use the table instead. */
 export interface SheetRow {
@@ -15,6 +16,8 @@ export interface SheetRow {
 	areaKm2: number;
 	/** whether its name stands on the map */
 	labelled: boolean;
+	/** its class, where the sheet shows a measure: then `inkName` and `hex` are those of the class */
+	theme?: ThemeColumns;
 }
 
 /** The sheet as a table, one row a region in region order: the equal of the map without sight. */
@@ -24,6 +27,7 @@ export function sheetTable(
 	groups: (string | null)[],
 ): SheetRow[] {
 	const unplaced = new Set(drawing.unplaced);
+	const { themed, inks } = drawing;
 	return drawing.fills.map(({ region, key, name, ink }) => {
 		const used = ink < 0 ? null : drawing.inks[ink];
 		return {
@@ -36,6 +40,7 @@ export function sheetTable(
 			hex: used && used.hex,
 			areaKm2: coverage.areasKm2[region],
 			labelled: !unplaced.has(region),
+			...(themed && { theme: themeColumns({ inks, told: themed.told }, ink) }),
 		};
 	});
 }

@@ -74,7 +74,7 @@ async function inputFor(
 		if (!sheet || !team) return { refused: 'The sheet is not there any more.' };
 		const ground = await exportGround(shop.db, sheet, row);
 		const about = aboutExport(team, sheet, ground, row);
-		if (requestDigest(row, about, ground.view.set.id) !== row.request_digest) {
+		if (requestDigest(row, about, ground) !== row.request_digest) {
 			return { refused: 'The sheet has changed since the file was asked for. Ask for it again.' };
 		}
 		await requireSameBoundaries(shop.db, ground);
@@ -90,8 +90,8 @@ async function inputFor(
 async function drawn(
 	shop: Workshop,
 	{ kind, options, reader, issue }: Row<'exports'>,
-	{ view, draft, inks }: ExportGround,
+	{ view, draft, inks, theme }: ExportGround,
 ): Promise<Omit<ExportInput, 'about'>> {
-	const input = await paintInput(shop.db, view, draft, inks, reader, issue);
+	const input = await paintInput(shop.db, view, draft, inks, reader, issue, theme);
 	return { ...input, kind, options, names: view.names };
 }

@@ -4,7 +4,12 @@ import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts
 import type { Draft } from '../../engines/editions/draft.ts';
 import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
-import { doubledBorders, drawSheet, sheetTable } from '../../engines/sheet/index.ts';
+import {
+	doubledBorders,
+	drawSheet,
+	sheetTable,
+	type SheetTheme,
+} from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
 import type { Task } from './task-port.ts';
 
@@ -17,6 +22,8 @@ export interface PaintInput {
 	groups: (string | null)[];
 	/** ink of each region; null while nothing is coloured */
 	colouring: number[] | null;
+	/** the classes of a measure, shown in place of it; null for none */
+	theme: SheetTheme | null;
 	reader: Reader;
 	/** what is issued and when, in words */
 	issue: string;
@@ -25,7 +32,7 @@ export interface PaintInput {
 /** A region whose ink the palette lacks is drawn as not coloured. */
 export function drawInput(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
-	const { draft, groups, reader, issue } = input;
+	const { draft, groups, reader, issue, theme } = input;
 	const { layout } = draft;
 	const { inks } = draft.palette;
 	const borders = bordersForSheet(coverage.keys, input.borders, draft);
@@ -35,7 +42,7 @@ export function drawInput(input: PaintInput) {
 	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
 		...{ coverage, borders, groups, inks, layout, reader, issue },
-		...{ colouring, locked, weak },
+		...{ colouring, theme, locked, weak },
 	});
 	return { coverage, drawing };
 }

@@ -124,6 +124,23 @@ export const readMeasures = (db: Db, sheetId: string) =>
 		.execute();
 export type MeasureRow = Awaited<ReturnType<typeof readMeasures>>[number];
 
+/** Measures by their names, with their values and when their table was taken over. */
+export const readMeasuresNamed = (db: Db, sheetId: string, names: readonly string[]) =>
+	withTables(db, sheetId)
+		.where('measures.name', 'in', [...names])
+		.where('measures.kind', '=', 'number')
+		.select([
+			'measures.name',
+			'measures.unit',
+			'measures.values',
+			'measure_tables.name as table_name',
+			'measure_tables.taken_at',
+			'measure_tables.boundary_set_id',
+			'measure_tables.confidential',
+		])
+		.execute();
+export type NamedMeasure = Awaited<ReturnType<typeof readMeasuresNamed>>[number];
+
 /** The same without the long columns: how many are missing and what they add up to. */
 export const listMeasures = (db: Db, sheetId: string) =>
 	withTables(db, sheetId)

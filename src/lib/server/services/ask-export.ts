@@ -39,7 +39,7 @@ export async function askIn(
 	const request = { edition, revision, kind, reader, options: optionsFor(kind, options) };
 	const ground = await exportGround(trx, sheet, request);
 	const about = aboutExport(member.team, sheet, ground, request);
-	const digest = requestDigest(request, about, ground.view.set.id);
+	const digest = requestDigest(request, about, ground);
 	const standing = await findStanding(trx, sheet.id, digest);
 	if (standing) {
 		await keepLonger(trx, standing.id, daysKept);

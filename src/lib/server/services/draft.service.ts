@@ -28,6 +28,7 @@ import {
 } from './outcome-of-colouring.ts';
 import { NotFound } from './outcomes.ts';
 import { nameOfMember, personName } from './people.ts';
+import { requireThemeMeasures } from './theme-on-sheet.ts';
 
 export type SaveResult =
 	{ status: 'saved'; saved: DraftSaved } | { status: 'stale'; stale: DraftStale };
@@ -72,6 +73,11 @@ export async function saveDraft(
 	const after = signDraft(before, sent.document, by, new Date().toISOString());
 	const parts = changedParts(before, after);
 	for (const right of rightsFor(parts)) requireAccess(member, right);
+	if (parts.includes('theme') && after.theme) {
+		// limits set by hand would tell figures to whoever moves them
+		requireAccess(member, 'measures.read');
+		await requireThemeMeasures(shop.db, sheet.id, after.theme);
+	}
 	const shown = sent.inks;
 	const other = shown !== undefined && !isDeepStrictEqual(shown, current.inks);
 	if (other) requireAccess(member, 'colours.edit');

@@ -1,5 +1,6 @@
 import type { Reader } from '../../engines/palettes/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
+import type { SheetTheme } from '../../engines/sheet/index.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
 import type { PaintInput } from '../jobs/paint.work.ts';
@@ -11,6 +12,7 @@ import { dayInWords } from './day-in-words.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { NotFound } from './outcomes.ts';
 import { groupsOf } from './sheet.service.ts';
+import { themeOnSheet, themeTag } from './theme-on-sheet.ts';
 
 export interface SheetSvg {
 	/** changes whenever the file would */
@@ -33,14 +35,16 @@ export async function draftSvg(
 	const view = await boundaryView(shop.db, sheet.boundary_set_id);
 	const last = (await nextEditionNumber(shop.db, sheet.id)) - 1;
 	const issue = draftInWords(last, draft.revision, draft.saved_at);
-	const tag = `${sheet.id}-${draft.revision}-${last}-${reader}`;
+	const document = documentOf(draft);
+	const theme = (await themeOnSheet(shop.db, sheet.id, view, document.theme))?.shown ?? null;
+	const tag = `${sheet.id}-${draft.revision}-${last}-${reader}${themeTag(theme)}`;
 	return {
 		tag,
 		fileName: `${fileStem(sheet.name)}-draft-${draft.revision}.svg`,
 		paint: (signal) =>
 			kept(tag, async () => {
-				const document = documentOf(draft);
-				const input = await paintInput(shop.db, view, document, draft.inks, reader, issue);
+				const { inks } = draft;
+				const input = await paintInput(shop.db, view, document, inks, reader, issue, theme);
 				return (await shop.pool.run('paintSheet', input, { signal })).gzip;
 			}),
 	};
@@ -69,6 +73,7 @@ export async function paintInput(
 	colouring: number[] | null,
 	reader: Reader,
 	issue: string,
+	theme: SheetTheme | null,
 ): Promise<PaintInput> {
 	const geometry = await readGeometry(db, view.set.id);
 	if (!geometry) throw new NotFound('boundary set');
@@ -77,7 +82,7 @@ export async function paintInput(
 		borders: view.borders,
 		draft,
 		groups: await groupsOf(db, view, draft.layout.groupColumn),
-		...{ colouring, reader, issue },
+		...{ colouring, reader, issue, theme },
 	};
 }
 

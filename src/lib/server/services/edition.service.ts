@@ -1,5 +1,6 @@
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
+import { freezeTheme } from '../../engines/editions/index.ts';
 import type { DeskEdition } from '../../schemas/desk.ts';
 import type { AskExport } from '../../schemas/export.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
@@ -25,6 +26,7 @@ import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { editionsOf } from './sheet.service.ts';
 import { dropUnused } from './stored-files.ts';
+import { themeToIssue, type ThemeOnSheet } from './theme-on-sheet.ts';
 
 /**
  * Issues the draft of this revision as the sheet's next edition: content, digest and files together, all
@@ -77,11 +79,13 @@ async function issue(
 	const draft = await draftOf(trx, sheet.id, sheet.revision);
 	const view = await boundaryView(trx, sheet.boundary_set_id);
 	const inks = await checkedInks(shop, view, draft);
-	const { digest, stored } = await seal(shop, trx, view, draft, inks);
+	const theme = await themeToIssue(trx, sheet.id, view, documentOf(draft).theme);
+	const { digest, stored } = await seal(shop, trx, view, draft, inks, theme);
 	const number = await nextEditionNumber(trx, sheet.id);
 	const issuedAt = new Date();
 	const words = `Edition ${number}, ${dayInWords(issuedAt)}`;
-	const input = await paintInput(trx, view, documentOf(draft), inks, 'typical', words);
+	const shown = theme?.shown ?? null;
+	const input = await paintInput(trx, view, documentOf(draft), inks, 'typical', words, shown);
 	const files = await shop.pool.run('renderFiles', input);
 	const stem = `${fileStem(sheet.name)}-edition-${number}`;
 	const kept = await keepFiles(shop, trx, files, stem, received);
@@ -140,6 +144,7 @@ async function seal(
 	view: BoundaryView,
 	draft: DraftRow,
 	colouring: number[],
+	theme: ThemeOnSheet | null,
 ): Promise<{ digest: string; stored: string }> {
 	const sealed = await shop.pool.run('sealEdition', {
 		boundariesDigest: await boundariesDigest(trx, view.set.id),
@@ -148,6 +153,7 @@ async function seal(
 		colouring,
 		lowerBound: draft.lower_bound ?? 0,
 		proof: proofByKey(view, draft.proof as unknown as Proof),
+		theme: theme && freezeTheme(view.keys, theme.shown, theme.figuresAt),
 	});
 	if (sealed.status === 'complete') return sealed;
 	throw new Conflict(

@@ -1,4 +1,5 @@
-import type { EditionContent } from '../../engines/editions/index.ts';
+import { thawTheme, type EditionContent } from '../../engines/editions/index.ts';
+import type { SheetTheme } from '../../engines/sheet/index.ts';
 import { wholeDraft, type Draft } from '../../engines/editions/draft.ts';
 import type { Db } from '../database/connection.ts';
 import { findEdition, listEditions } from '../repositories/editions.repository.ts';
@@ -7,6 +8,7 @@ import { boundariesDigest } from './boundaries-digest.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { documentOf, draftOf } from './draft.service.ts';
 import { Conflict, NotFound } from './outcomes.ts';
+import { themeOnSheet } from './theme-on-sheet.ts';
 
 /** What an export is made from, found again at any time: an edition's own content, or one revision. */
 export interface ExportGround {
@@ -14,6 +16,8 @@ export interface ExportGround {
 	draft: Draft;
 	/** in region order; null while nothing is coloured */
 	inks: number[] | null;
+	/** the classes shown in place of the colouring: those issued, or of a draft those of today's figures */
+	theme: SheetTheme | null;
 	/** when it was issued, or the draft was saved */
 	at: Date;
 	/** the last edition issued of this draft or an earlier one, 0 for none */
@@ -37,10 +41,12 @@ export async function exportGround(
 async function draftGround(db: Db, sheetId: string, revision: number): Promise<ExportGround> {
 	const row = await draftOf(db, sheetId, revision);
 	const editions = await listEditions(db, sheetId);
+	const view = await boundaryView(db, row.boundary_set_id);
+	const draft = documentOf(row);
 	return {
-		view: await boundaryView(db, row.boundary_set_id),
-		...{ draft: documentOf(row), inks: row.inks, at: row.saved_at, digest: null },
-		boundaries: null,
+		view,
+		theme: (await themeOnSheet(db, sheetId, view, draft.theme))?.shown ?? null,
+		...{ draft, inks: row.inks, at: row.saved_at, digest: null, boundaries: null },
 		lastEdition: editions.find((one) => one.revision <= revision)?.number ?? 0,
 	};
 }
@@ -58,6 +64,7 @@ async function editionGround(db: Db, sheetId: string, edition: number): Promise<
 	return {
 		...{ view, draft: wholeDraft(content.draft), at: row.issued_at, digest: row.digest },
 		inks: view.keys.map((key) => content.colouring[key]),
+		theme: content.theme ? thawTheme(view.keys, content.theme) : null,
 		...{ lastEdition: edition, boundaries: content.boundaries.digest },
 	};
 }

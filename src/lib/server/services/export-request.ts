@@ -5,6 +5,7 @@ import type { Reader } from '../../engines/palettes/index.ts';
 import type { Member } from '../access/member.ts';
 import type { SheetRecord } from '../repositories/sheets.repository.ts';
 import type { ExportGround } from './export-ground.ts';
+import { themeTag } from './theme-on-sheet.ts';
 import { exportStem, issueWords } from './export-words.ts';
 
 /** A request as it is stored: everything that decides the bytes is said. */
@@ -42,9 +43,13 @@ export function aboutExport(
 export function requestDigest(
 	asked: ExportRequest,
 	about: ExportAbout,
-	boundarySetId: string,
+	{ view, theme }: Pick<ExportGround, 'view' | 'theme'>,
 ): string {
 	const { edition, revision, kind, options, reader } = asked;
-	const said = { ...{ edition, revision, kind, options, reader, about, boundarySetId } };
+	const boundarySetId = view.set.id;
+	const said = {
+		...{ edition, revision, kind, options, reader, about, boundarySetId },
+		...(theme && { theme: themeTag(theme) }),
+	};
 	return createHash('sha256').update(canonicalJson(said)).digest('hex');
 }

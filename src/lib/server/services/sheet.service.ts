@@ -37,6 +37,7 @@ import { Conflict, NotFound } from './outcomes.ts';
 import { personName } from './people.ts';
 import { removeSet } from './recut-held.ts';
 import { dropUnused } from './stored-files.ts';
+import { deskTheme, themeOnSheet } from './theme-on-sheet.ts';
 
 type Reading = Pick<Workshop, 'db'>;
 
@@ -87,6 +88,7 @@ export async function deskSheet(shop: Reading, member: Member, number: number): 
 		findings: await findingsOf(db, view.set.id),
 		editions: await editionsOf(db, sheet.id),
 		measures: mayDo(member, 'measures.read') ? await measureSummary(db, sheet) : null,
+		theme: deskTheme(await themeOnSheet(db, sheet.id, view, document.theme)),
 		rights: rightsOf(member),
 	};
 }
