@@ -1,5 +1,6 @@
 import type { ColumnType, Generated } from 'kysely';
 import type { Palette } from '../../engines/palettes/palette.ts';
+import type { SheetLayout } from '../../engines/sheet/layout.ts';
 import type { LayoutTemplate } from '../../engines/sheet/layout/template.ts';
 import type { Moment } from './columns.ts';
 
@@ -15,4 +16,17 @@ export interface LayoutTemplateTable {
 	created_by: string | null;
 	created_at: Moment;
 	updated_at: Moment;
+}
+
+/** What a template says. */
+export interface TemplateContent {
+	fields: LayoutTemplate;
+	ratio: number | null;
+	palette: Palette | null;
+}
+
+/** The parts of a stored draft that a template touches. */
+export interface SeriesParts {
+	layout: SheetLayout;
+	palette: Palette;
 }

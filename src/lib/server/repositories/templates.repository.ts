@@ -1,14 +1,6 @@
 import { sql } from 'kysely';
-import type { Palette } from '../../engines/palettes/palette.ts';
-import type { SheetLayout } from '../../engines/sheet/layout.ts';
-import type { LayoutTemplate } from '../../engines/sheet/layout/template.ts';
 import type { Db } from '../database/connection.ts';
-
-export interface TemplateContent {
-	fields: LayoutTemplate;
-	ratio: number | null;
-	palette: Palette | null;
-}
+import type { SeriesParts, TemplateContent } from '../database/schema.ts';
 
 const stored = ({ fields, ratio, palette }: TemplateContent) => ({
 	fields: JSON.stringify(fields),
@@ -96,8 +88,8 @@ export const sheetsByTemplate = (db: Db, teamId: string) =>
 			'sheets.name',
 			'sheets.revision',
 			sql<string>`drafts.document #>> '{layout,collar,template,id}'`.as('template'),
-			sql<SheetLayout>`drafts.document -> 'layout'`.as('layout'),
-			sql<Palette>`drafts.document -> 'palette'`.as('palette'),
+			sql<SeriesParts['layout']>`drafts.document -> 'layout'`.as('layout'),
+			sql<SeriesParts['palette']>`drafts.document -> 'palette'`.as('palette'),
 		])
 		.where('sheets.team_id', '=', teamId)
 		.where(sql`drafts.document #>> '{layout,collar,template,id}'`, 'is not', null)

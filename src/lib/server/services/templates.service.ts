@@ -5,6 +5,7 @@ import { templateOf } from '../../engines/sheet/layout/template.ts';
 import type { TemplateView } from '../../schemas/template.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
+import type { TemplateContent } from '../database/schema.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import {
 	deleteTemplate,
@@ -15,7 +16,6 @@ import {
 	sheetsByTemplate,
 	templateNamed,
 	updateTemplate,
-	type TemplateContent,
 } from '../repositories/templates.repository.ts';
 import { record } from './activity.service.ts';
 import { documentOf, draftOf, saveDraft, sheetOf, type SaveResult } from './draft.service.ts';
