@@ -31,6 +31,8 @@ const small = [6, 5.5, 5];
 const groupSizes = [10, 9, 8, 7];
 /** Beside names of regions, in spaced capitals. */
 const spacedSizes = [10, 9, 8, 7];
+/** Above so many names only the smallest sizes are tried, which bounds the time. */
+const mostAtEverySize = 8_000;
 /** A larger size may cost this share of the names that fit at the smallest. */
 const worth = 0.03;
 const enough = 0.6;
@@ -74,10 +76,12 @@ export function unlettered(regions: number): Labelled {
 const units = (points: number) => Math.round(points * point);
 
 /** Sizes to be tried, the largest first. */
-function sizesFor({ scale, lettering }: LabelInput): number[] {
+function sizesFor(input: LabelInput): number[] {
+	const { scale, lettering } = input;
 	if (lettering.sizePt !== null) return [units(lettering.sizePt)];
 	const all = [...sizes.map((one) => one * scale), ...small].filter((one) => one >= leastLegiblePt);
-	return [...new Set(all.map(units))].sort((a, b) => b - a);
+	const tried = [...new Set(all.map(units))].sort((a, b) => b - a);
+	return input.names.length > mostAtEverySize ? tried.slice(-2) : tried;
 }
 
 export function labelSheet(input: LabelInput): Labelled {
