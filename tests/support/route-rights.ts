@@ -72,6 +72,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/exports/[export]/file', 'GET', 'files.download'],
 	['/sheets/[sheet]/geometry', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/layout', 'action save', 'layout.edit'],
+	['/sheets/[sheet]/theme', 'load', 'sheet.read'],
 	['/sheets/[sheet]/measures', 'load', 'measures.read'],
 	['/sheets/[sheet]/measures', 'action upload', 'measures.edit'],
 	['/sheets/[sheet]/measures/[table]', 'load', 'measures.read'],

@@ -2,7 +2,12 @@ import { gzipSync } from 'node:zlib';
 import { decodeCoverage } from '../../engines/boundaries/index.ts';
 import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
-import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
+import {
+	exportCsv,
+	exportGeoJson,
+	exportSvg,
+	themeExtraColumns,
+} from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
 import { drawSheet, sheetTable, type SheetTheme } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
@@ -68,7 +73,7 @@ export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 		{
 			extension: 'geojson',
 			mediaType: 'application/geo+json',
-			bytes: exportGeoJson(coverage, rows),
+			bytes: exportGeoJson(coverage, rows, themeExtraColumns(rows)),
 		},
 		{
 			extension: 'csv',

@@ -17,10 +17,11 @@ import {
 import { cellOf, noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
 import { rankSamples, weakSample } from './legend-lines.ts';
 
-type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines'>;
+type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines' | 'themed'>;
 
 /**
- * The legend: a box for every ink in use, with its number and its hatch, and its name beside it; then what
+ * The legend: a box for every ink in use, with its number (none where it stands for regions that are not
+ * told) and its hatch, and its name beside it; then what
  * lines stand for. In: `inUse` in ascending order; those beyond the palette have no colour yet and no box;
  * `see` gives a colour as the reader sees it. Out: rects, texts and shapes of layer `legend`, within the
  * place; a name too long for its lines is shortened.
@@ -44,7 +45,8 @@ export function drawLegend(
 		const at = cellOf(place, Math.floor(i / rows), i % rows);
 		const name = nameOf(shown.inks[ink], ink);
 		const words = place.counts ? `${name}, ${countWords(counts[ink])}` : name;
-		return entry(place, at, shown.inks[ink], ink, words, see);
+		const numbered = ink < (shown.themed?.told ?? Infinity);
+		return entry(place, at, shown.inks[ink], { ink, numbered }, words, see);
 	});
 	const lines = [
 		...rankSamples(place, shown.lines, rows),
@@ -85,7 +87,7 @@ function entry(
 	place: LegendPlace,
 	{ x, y }: { x: number; y: number },
 	ink: DrawnInk,
-	number: number,
+	{ ink: number, numbered }: { ink: number; numbered: boolean },
 	words: string,
 	see: (hex: string) => string,
 ): DrawnLegend {
@@ -102,7 +104,7 @@ function entry(
 	const left = Math.round(x + size * (boxWide + gap));
 	return {
 		rects: [box(x, top, wide, high, ink.shown)],
-		texts: [figure, ...wordsBeside(place, words, left, top + high / 2)],
+		texts: [...(numbered ? [figure] : []), ...wordsBeside(place, words, left, top + high / 2)],
 		shapes: ink.hatch ? hatchedBox(ink, number, x, top, wide, high, see) : [],
 	};
 }
