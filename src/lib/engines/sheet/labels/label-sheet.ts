@@ -6,6 +6,7 @@
 import type { DrawnText } from '../drawing.ts';
 import { leastLegiblePt, type Lettering } from '../layout/lettering.ts';
 import type { Box } from '../plane/fit.ts';
+import { occupy } from './ground.ts';
 import { labelGroups, type GroupInput, type GroupNames } from './group-labels.ts';
 import type { Leader } from './leader.ts';
 import { letteringNotes } from './lettering-notes.ts';
@@ -19,6 +20,7 @@ import {
 	type HowNamed,
 	type SetName,
 } from './set-name.ts';
+import { boxOfText } from './text-box.ts';
 import { textsOf } from './texts-of-names.ts';
 
 /** Hundredths of a millimetre to a point (1/72 inch). */
@@ -140,7 +142,9 @@ function namesAbove(input: LabelInput, task: NameTask, isBeside: boolean): Group
 	const usual = (isBeside ? spacedSizes : groupSizes).map((one) => one * scale);
 	const tried = (own === null ? usual : [own]).map(units);
 	const found = labelGroups(input, tried, task.ground.busy, isBeside);
-	return isBeside && found.share < enough ? null : found;
+	if (isBeside && found.share < enough) return null;
+	for (const text of found.texts) occupy(task.ground, boxOfText(text));
+	return found;
 }
 
 function numbersFor(
