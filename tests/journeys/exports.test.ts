@@ -66,7 +66,7 @@ describe('a designer takes files', () => {
 		await approver.page.getByText('Edition 1 is issued').waitFor();
 		await approver.context.close();
 		({ page, complaints } = await openPage(browser));
-		page.setDefaultTimeout(60_000);
+		page.setDefaultTimeout(120_000);
 		await signInAs(page, 'designer');
 		await page.goto(`${sheet}/editions`);
 		await drawn(page);

@@ -14,6 +14,7 @@ import type { Evidence } from './evidence';
 import { Flatness } from './flatness.svelte';
 import { inkUse } from './ink-use';
 import { keeperWithInks, type Keeper } from './kept-drafts';
+import { NameHand } from './name-hand.svelte';
 import { OnTrial } from './on-trial.svelte';
 import { judgePalette } from './palette-judgement';
 import { problemOf } from './problem-of-draft';
@@ -79,6 +80,8 @@ export class Desk {
 	});
 	/** what the hand holds while rules are made */
 	readonly rules = new RuleHand(this);
+	/** the names of the sheet, moved and hidden by hand while the layout is open */
+	readonly names = new NameHand(this);
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);

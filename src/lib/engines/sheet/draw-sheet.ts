@@ -10,12 +10,12 @@ import { arrange } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
-import { labelSheet } from './labels/label-sheet.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
+import { labelSheet, unlettered } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
-import { paperSize } from './paper.ts';
+import { paperBox, paperSize } from './paper.ts';
 import type { Placement } from './place-on-paper.ts';
 import { drawFrame } from './frame/draw-frame.ts';
 import { drawScale } from './collar/draw-scale.ts';
@@ -26,6 +26,8 @@ import { cleanText } from './type/clean-text.ts';
 export interface SheetInput {
 	coverage: Coverage;
 	borders: BorderList;
+	/** what the column of names says of every region, where names are taken from one */
+	named?: (string | null)[] | null;
 	/** the level above, one a region: a province's name, or null */
 	groups: (string | null)[];
 	/** ink number from 0 for every region; null while nothing is coloured */
@@ -85,17 +87,11 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
 		? labelSheet({
-				arcs,
-				rings,
-				sides,
-				names,
-				groups,
-				areas: coverage.areasKm2,
-				box: placed.box,
-				scale,
-				obstacles,
+				...{ arcs, rings, sides, groups, scale, names: lettered(input) },
+				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
+				...{ box: placed.box, obstacles, paper: paperBox(layout) },
 			})
-		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
+		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const lines = [
@@ -137,6 +133,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		],
 		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,
+		lettering: labels.lettering,
 		notes: {
 			projection: placed.chosen.sentence,
 			scale: measured.sentence,
@@ -149,6 +146,10 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
+
+/** The names to be set: as a column has them, where it has one, composed as fonts hold letters. */
+const lettered = ({ coverage, named }: SheetInput): string[] =>
+	coverage.names.map((name, region) => cleanText(named?.[region] ?? name).normalize('NFC'));
 
 function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][]): RegionFill[] {
 	const { coverage, colouring, locked } = input;
@@ -167,14 +168,16 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 	});
 }
 
-/** Black or white for every label that stands on a fill, whichever reads better. */
-export function inkLabels<T extends { region?: number; onFill?: boolean; hex: string }>(
-	texts: T[],
-	fills: RegionFill[],
-): T[] {
-	return texts.map((text) =>
-		text.onFill && text.region !== undefined
-			? { ...text, hex: labelInk(fills[text.region].hex) }
-			: text,
-	);
+/**
+ * Black or white for every label that stands on a fill, whichever reads better; one that goes over the
+ * border keeps its fill around its letters.
+ */
+export function inkLabels<
+	T extends { region?: number; onFill?: boolean; hex: string; halo?: string },
+>(texts: T[], fills: RegionFill[]): T[] {
+	return texts.map((text) => {
+		if (!text.onFill || text.region === undefined) return text;
+		const { hex } = fills[text.region];
+		return { ...text, hex: labelInk(hex), ...(text.halo ? { halo: hex } : {}) };
+	});
 }
