@@ -51,12 +51,13 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 					inks: inks.map((ink) => ({ ...ink })),
 					borders,
 					groups: regions.group,
+					named: desk.names.named,
 					colouring: desk.inks.some((ink) => ink >= 0)
 						? desk.inks.map((ink) => (ink < inks.length ? ink : -1))
 						: null,
 					theme: desk.theme.shown && unwrapped(desk.theme.shown),
 					reader: 'typical',
-					weak: [],
+					weak: layout.lines.doubleWeak ? [...desk.palette.weak] : [],
 					issue: draftIssue(editions[0]?.number, desk.draft.revision, desk.draft.savedAt),
 				},
 				places: Float64Array.from(findings.flatMap(({ at }) => at ?? [0, 0])),

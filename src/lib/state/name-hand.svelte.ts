@@ -1,19 +1,10 @@
 import type { DrawnText } from '$lib/engines/sheet/drawing';
 import { noAnchor } from '$lib/engines/sheet/labels/set-name';
 import type { PlacedName } from '$lib/engines/sheet/layout/lettering';
+import type { ColumnValues } from '$lib/schemas/column-values';
 import type { Desk } from './desk.svelte';
+import { nameBoxes, type NameBox } from './name-boxes';
 import { abbreviate, hideNames, letNames, placeName } from './name-edits';
-
-/** A box on the paper, in hundredths of a millimetre. */
-export interface NameBox {
-	left: number;
-	top: number;
-	right: number;
-	bottom: number;
-}
-
-/** Parts of the type size above and below a baseline. */
-const [rise, drop] = [0.74, 0.23];
 
 /** The names of a sheet in somebody's hand, while its layout is open: moved, hidden, abbreviated. */
 export class NameHand {
@@ -23,6 +14,11 @@ export class NameHand {
 	dragged: { region: number; dx: number; dy: number } | null = $state.raw(null);
 	/** for the live region: what the last gesture came to */
 	spoken = $state('');
+	/** names as a column of the boundary file has them; null: the sheet's own */
+	named: (string | null)[] | null = $state.raw(null);
+	/** why they could not be fetched; '' while all is well */
+	trouble = $state('');
+	#column: string | null = null;
 	#boxes: { of: readonly DrawnText[]; boxes: Map<number, NameBox> } | null = null;
 
 	constructor(private readonly desk: Desk) {}
@@ -37,6 +33,24 @@ export class NameHand {
 		return this.#layout.lettering;
 	}
 	keyOf = (region: number): string => this.desk.sheet.regions.key[region];
+
+	/** Fetches the names of a column of the boundary file; null goes back to the sheet's own. */
+	async takeFrom(column: string | null): Promise<void> {
+		if (column === this.#column) return;
+		this.#column = column;
+		this.trouble = '';
+		if (column === null) {
+			this.named = null;
+			return;
+		}
+		const query = new URLSearchParams({ name: column });
+		const response = await fetch(`${this.desk.address}/column?${query}`).catch(() => null);
+		const read = response?.ok ? ((await response.json()) as ColumnValues) : null;
+		if (this.#column !== column) return;
+		this.named = read?.values ?? null;
+		if (!read)
+			this.trouble = `The column ${column} could not be fetched; names are the sheet's own.`;
+	}
 
 	/** Where the name of a region stands as drawn; null for one that is not on the sheet. */
 	boxOf(region: number): NameBox | null {
@@ -53,13 +67,7 @@ export class NameHand {
 	#drawnBoxes(): Map<number, NameBox> {
 		const texts = this.desk.drawn?.drawing.texts ?? [];
 		if (this.#boxes?.of === texts) return this.#boxes.boxes;
-		const boxes = new Map<number, NameBox>();
-		for (const { layer, region, x, y, width, size } of texts) {
-			if (layer !== 'label' || region === undefined) continue;
-			const box = { left: x, top: y - rise * size, right: x + width, bottom: y + drop * size };
-			const whole = boxes.get(region);
-			boxes.set(region, whole ? joined(whole, box) : box);
-		}
+		const boxes = nameBoxes(texts);
 		this.#boxes = { of: texts, boxes };
 		return boxes;
 	}
@@ -122,11 +130,5 @@ export class NameHand {
 	}
 }
 
-const joined = (a: NameBox, b: NameBox): NameBox => ({
-	left: Math.min(a.left, b.left),
-	top: Math.min(a.top, b.top),
-	right: Math.max(a.right, b.right),
-	bottom: Math.max(a.bottom, b.bottom),
-});
 const inMm = (units: number): number => tidy(units / 100);
 const tidy = (mm: number): number => Math.round(mm * 100) / 100;

@@ -3,6 +3,7 @@ export { exportSvg, type FaceFiles } from './svg.ts';
 export { exportGeoJson } from './geojson.ts';
 export { exportBordersCol, exportBordersCsv, type BordersOut } from './borders.ts';
 export { csvField, exportCsv } from './csv.ts';
+export { themeExtraColumns } from './theme-columns.ts';
 export { subsetFont } from './subset-font.ts';
 export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';
 export { exportWorkbook } from './workbook.ts';

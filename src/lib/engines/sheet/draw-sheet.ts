@@ -6,10 +6,10 @@ import { asSeenBy as seen, labelInk } from '../colour/index.ts';
 import type { BorderList } from '../borders/border-list.ts';
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
-import { arrange } from './arrange.ts';
+import { arrange, roomOn } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
+import type { DrawnInk, DrawnText, Drawing, RegionFill } from './drawing.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
 import { labelSheet, unlettered } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
@@ -18,6 +18,7 @@ import { lineLayers } from './lines.ts';
 import { paperBox, paperSize } from './paper.ts';
 import type { Placement } from './place-on-paper.ts';
 import { drawFrame } from './frame/draw-frame.ts';
+import { frameObstacles } from './frame/obstacles.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { legendInks, themedInput, type SheetTheme } from './themed.ts';
@@ -89,7 +90,8 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		? labelSheet({
 				...{ arcs, rings, sides, groups, scale, names: lettered(input) },
 				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
-				...{ box: placed.box, obstacles, paper: paperBox(layout) },
+				...{ box: placed.box, paper: paperBox(layout) },
+				obstacles: [...obstacles, ...frameObstacles(placed, scale, layout.scaleBar)],
 			})
 		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
@@ -102,11 +104,18 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		}),
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
-	const keys = drawLegend(legend, { inks, fills, lines }, legendInks(fills, input.themed), seenNow);
+	const { themed } = input;
+	const keys = drawLegend(
+		legend,
+		{ inks, fills, lines, themed },
+		legendInks(fills, themed),
+		seenNow,
+	);
 	const measured = drawScale(placed, bar);
 	const frame = drawFrame({
-		...{ coverage, groups, layout, placed, scale, reader, see },
+		...{ coverage, groups, layout, placed, scale, reader, see, obstacles },
 		labels: labels.texts,
+		roomOn: (other) => roomOn(input, inks, other),
 	});
 	const drawing: Drawing = {
 		...paperSize(layout),
@@ -124,7 +133,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 			...keys.shapes,
 		],
 		texts: [
-			...inkLabels(labels.texts, fills),
+			...inkLabels(labels.texts, fills, inks),
 			...texts,
 			...measured.texts,
 			...frame.texts,
@@ -142,7 +151,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		},
 		frame: frame.report,
 		legend,
-		...(input.themed && { themed: input.themed }),
+		...(themed && { themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
@@ -170,14 +179,15 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 
 /**
  * Black or white for every label that stands on a fill, whichever reads better; one that goes over the
- * border keeps its fill around its letters.
+ * border keeps its fill around its letters. Where the fill is hatched the lines keep clear of the letters.
  */
-export function inkLabels<
-	T extends { region?: number; onFill?: boolean; hex: string; halo?: string },
->(texts: T[], fills: RegionFill[]): T[] {
+export function inkLabels(texts: DrawnText[], fills: RegionFill[], inks: DrawnInk[]): DrawnText[] {
 	return texts.map((text) => {
 		if (!text.onFill || text.region === undefined) return text;
-		const { hex } = fills[text.region];
-		return { ...text, hex: labelInk(hex), ...(text.halo ? { halo: hex } : {}) };
+		const { hex, ink } = fills[text.region];
+		const { halo, clears, ...bare } = text;
+		const own = clears ? undefined : halo;
+		if (inks[ink]?.hatch && !own) return { ...bare, hex: labelInk(hex), halo: hex, clears: true };
+		return { ...bare, hex: labelInk(hex), ...(own ? { halo: hex } : {}) };
 	});
 }

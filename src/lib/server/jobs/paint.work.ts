@@ -2,9 +2,19 @@ import { gzipSync } from 'node:zlib';
 import { decodeCoverage } from '../../engines/boundaries/index.ts';
 import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
-import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
+import {
+	exportCsv,
+	exportGeoJson,
+	exportSvg,
+	themeExtraColumns,
+} from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
-import { drawSheet, sheetTable, type SheetTheme } from '../../engines/sheet/index.ts';
+import {
+	doubledBorders,
+	drawSheet,
+	sheetTable,
+	type SheetTheme,
+} from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
 import { sheetLanguage } from './sheet-language.ts';
 import type { Task } from './task-port.ts';
@@ -16,6 +26,8 @@ export interface PaintInput {
 	borders: BorderList;
 	draft: Draft;
 	groups: (string | null)[];
+	/** names as a column has them, where the layout takes them from one */
+	named?: (string | null)[] | null;
 	/** ink of each region; null while nothing is coloured */
 	colouring: number[] | null;
 	/** the classes of a measure, shown in place of it; null for none */
@@ -28,16 +40,17 @@ export interface PaintInput {
 /** A region whose ink the palette lacks is drawn as not coloured. */
 export function drawInput(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
-	const { draft, groups, reader, issue, theme } = input;
+	const { draft, groups, named, reader, issue, theme } = input;
 	const { layout } = draft;
 	const { inks } = draft.palette;
 	const borders = bordersForSheet(coverage.keys, input.borders, draft);
 	const locked = Uint8Array.from(coverage.keys, (key) => (Object.hasOwn(draft.locks, key) ? 1 : 0));
 	const colouring =
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
+	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
-		...{ coverage, borders, groups, inks, layout, reader, issue },
-		...{ colouring, theme, locked, weak: [] },
+		...{ coverage, borders, groups, named, inks, layout, reader, issue },
+		...{ colouring, theme, locked, weak },
 	});
 	return { coverage, drawing };
 }
@@ -66,7 +79,7 @@ export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 		{
 			extension: 'geojson',
 			mediaType: 'application/geo+json',
-			bytes: exportGeoJson(coverage, rows),
+			bytes: exportGeoJson(coverage, rows, themeExtraColumns(rows)),
 		},
 		{
 			extension: 'csv',

@@ -1,3 +1,4 @@
+import { count } from '../../format';
 import type { HowNamed } from '$lib/engines/sheet/labels/set-name';
 
 /** How a name is set, and why, for the table and the bar. */
@@ -28,3 +29,13 @@ export const whyWords: Record<HowNamed, string> = {
 	hidden: 'Somebody hid it.',
 	off: 'Names are switched off for this sheet.',
 };
+
+/** "92 inside, 36 over its border ...", the most first. */
+export function tallyWords(all: readonly HowNamed[]): string {
+	const counts = new Map<string, number>();
+	for (const how of all) counts.set(howWords[how], (counts.get(howWords[how]) ?? 0) + 1);
+	return [...counts]
+		.sort((a, b) => b[1] - a[1])
+		.map(([words, many]) => `${count(many)} ${words}`)
+		.join(', ');
+}

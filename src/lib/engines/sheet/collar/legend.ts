@@ -4,23 +4,16 @@ import { cutLines } from '../hatch/cut-lines.ts';
 import { familiesOf } from '../hatch/hatch-look.ts';
 import { segmentShape } from '../hatch/hatch-shapes.ts';
 import type { DrawnShape } from '../shapes.ts';
-import {
-	boxHigh,
-	boxWide,
-	countWords,
-	gap,
-	nameOf,
-	rowHeight,
-	rowsOf,
-	titleSize,
-} from './legend-plan.ts';
-import { cellOf, noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
-import { rankSamples, weakSample } from './legend-lines.ts';
+import { boxHigh, boxWide, countWords, gap, nameOf, titleSize } from './legend-plan.ts';
+import { gridOf, type Cell } from './legend-grid.ts';
+import { noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
+import { knownRanks, rankSamples, weakSample } from './legend-lines.ts';
 
-type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines'>;
+type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines' | 'themed'>;
 
 /**
- * The legend: a box for every ink in use, with its number and its hatch, and its name beside it; then what
+ * The legend: a box for every ink in use, with its number (none where it stands for regions that are not
+ * told) and its hatch, and its name beside it; then what
  * lines stand for. In: `inUse` in ascending order; those beyond the palette have no colour yet and no box;
  * `see` gives a colour as the reader sees it. Out: rects, texts and shapes of layer `legend`, within the
  * place; a name too long for its lines is shortened.
@@ -39,18 +32,26 @@ export function drawLegend(
 		shown.inks,
 		counts,
 	);
-	const rows = rowsOf(place.columns, used.length);
-	const drawn = used.map((ink, i) => {
-		const at = cellOf(place, Math.floor(i / rows), i % rows);
+	const words = used.map((ink) => {
 		const name = nameOf(shown.inks[ink], ink);
-		const words = place.counts ? `${name}, ${countWords(counts[ink])}` : name;
-		return entry(place, at, shown.inks[ink], ink, words, see);
+		return place.counts ? `${name}, ${countWords(counts[ink])}` : name;
 	});
-	const lines = [
-		...rankSamples(place, shown.lines, rows),
-		weakSample(place, rows + rowsOf(place.columns, place.ranks.length)),
-	];
-	return joined([{ ...noLegend, texts: titleOf(place) }, ...drawn, ...lines]);
+	const ranks = knownRanks(place, shown.lines);
+	const grid = gridOf(
+		place,
+		words,
+		ranks.map((rank) => rank.words),
+	);
+	const drawn = used.map((ink, i) => {
+		const numbered = ink < (shown.themed?.told ?? Infinity);
+		return entry(place, grid.inkCells[i], shown.inks[ink], { ink, numbered }, words[i], see);
+	});
+	return joined([
+		{ ...noLegend, texts: titleOf(place) },
+		...drawn,
+		...rankSamples(place, ranks, grid.rankCells),
+		weakSample(place, grid.end),
+	]);
 }
 
 const joined = (parts: DrawnLegend[]): DrawnLegend => ({
@@ -83,15 +84,15 @@ function titleOf(place: LegendPlace): DrawnText[] {
 
 function entry(
 	place: LegendPlace,
-	{ x, y }: { x: number; y: number },
+	{ x, y, high: row }: Cell,
 	ink: DrawnInk,
-	number: number,
+	{ ink: number, numbered }: { ink: number; numbered: boolean },
 	words: string,
 	see: (hex: string) => string,
 ): DrawnLegend {
 	const { size } = place;
 	const [wide, high] = [Math.round(size * boxWide), Math.round(size * boxHigh)];
-	const top = Math.round(y + (rowHeight(size, place.lines) - size * 0.5 - high) / 2);
+	const top = Math.round(y + (row - size * 0.5 - high) / 2);
 	const label = word('sans-bold', size, String(number + 1), labelInk(ink.shown));
 	const figure = {
 		...label,
@@ -102,7 +103,7 @@ function entry(
 	const left = Math.round(x + size * (boxWide + gap));
 	return {
 		rects: [box(x, top, wide, high, ink.shown)],
-		texts: [figure, ...wordsBeside(place, words, left, top + high / 2)],
+		texts: [...(numbered ? [figure] : []), ...wordsBeside(place, words, left, top + high / 2)],
 		shapes: ink.hatch ? hatchedBox(ink, number, x, top, wide, high, see) : [],
 	};
 }
