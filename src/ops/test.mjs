@@ -3,6 +3,7 @@ import { join, resolve } from 'node:path';
 import { run, endChildren, exitOnSignals } from './children.mjs';
 import { ensureChromium } from './chromium.mjs';
 import { ensureDependencies } from './install.mjs';
+import { ensurePoppler } from './poppler.mjs';
 import { startPostgres } from './postgres.mjs';
 import { startProduct } from './product.mjs';
 
@@ -71,7 +72,10 @@ async function everySuite() {
 		await check('lint', ['npx', 'eslint', '.']);
 	}
 	if (isWanted('types')) await check('types', ['npm', 'run', '--silent', 'check']);
-	if (isWanted('engines')) await suite('engines');
+	if (isWanted('engines')) {
+		ensurePoppler();
+		await suite('engines');
+	}
 	if (!isWanted('database') && !isWanted('journeys')) return;
 	const database = await startPostgres(join(dataDir, 'postgres'), { fresh: true });
 	try {

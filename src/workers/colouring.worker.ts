@@ -1,15 +1,12 @@
 import { colour } from '$lib/engines/colouring';
-import { mendPalette } from '$lib/engines/palettes/mend';
 import type { ColourReply, ColourRequest, ReleaseNews } from '$lib/state/colourer';
-import type { MendQuestion, MendReply } from '$lib/state/mending.svelte';
 
 /**
- * In: one colouring problem, or one palette to be mended, a message. Out: the engine's result, or how it
- * failed; a colouring's under the id it was asked for, and before it every better release of locks that
- * collide.
+ * In: one colouring problem a message. Out: the engine's result, or how it failed, under the id it was asked
+ * for, and before it every better release of locks that collide.
  */
-self.onmessage = async ({ data }: MessageEvent<ColourRequest | MendQuestion>) =>
-	self.postMessage('mend' in data ? mended(data) : await coloured(data));
+self.onmessage = async ({ data }: MessageEvent<ColourRequest>) =>
+	self.postMessage(await coloured(data));
 
 async function coloured({ id, problem }: ColourRequest): Promise<ColourReply> {
 	const started = performance.now();
@@ -20,14 +17,6 @@ async function coloured({ id, problem }: ColourRequest): Promise<ColourReply> {
 		return { id, result, milliseconds: performance.now() - started };
 	} catch (error) {
 		return { id, failed: messageOf(error) };
-	}
-}
-
-function mended({ mend }: MendQuestion): MendReply {
-	try {
-		return { result: mendPalette(mend) };
-	} catch (error) {
-		return { failed: messageOf(error) };
 	}
 }
 

@@ -9,7 +9,8 @@ import {
 	type Ground,
 	type Placement,
 } from '$lib/engines/sheet';
-import type { DrawReply, DrawRequest, Drawn, RefineRequest } from '$lib/state/drawer';
+import type { DrawReply, DrawRequest, Drawn, RefineRequest, WarmRequest } from '$lib/state/drawer';
+import { packFills } from '$lib/state/packed-fills';
 import { anchorsOf, placesOn, sharedArcs } from '$lib/state/sheet-places';
 
 /**
@@ -43,13 +44,14 @@ async function draw({ id, geometry, onCanvas, input, places }: DrawRequest): Pro
 	last = ground && { ground, placement };
 	const found = {
 		anchors: anchorsOf(drawing),
-		borderArcs: sharedArcs(coverage, input.borders),
+		borderArcs: ground ? null : sharedArcs(coverage, input.borders),
 		places: placesOn(drawing, coverage, places),
 	};
-	const bare = { ...drawing, fills: drawing.fills.map((fill) => ({ ...fill, rings: [] })) };
 	return {
 		id,
-		drawing: ground ? bare : drawing,
+		// tens of thousands of objects take longer on their way than all their lines
+		drawing: ground ? { ...drawing, fills: [] } : drawing,
+		fills: ground && packFills(drawing.fills),
 		svg: ground ? '' : paintSvg(drawing, { fills: 'attribute', idPrefix: 'sheet-' }),
 		ground,
 		sizesMm: ground ? null : regionSizesMm(coverage, input.layout, input.inks),
@@ -71,12 +73,25 @@ async function answer(request: DrawRequest | RefineRequest): Promise<void> {
 	if ('finer' in request) return self.postMessage(await refine(request));
 	self.postMessage(await draw(request));
 	if (!request.onCanvas) return;
-	const coverage = await coverageAt(request.geometry, request.geometry);
-	const sizesMm = regionSizesMm(coverage, request.input.layout, request.input.inks);
-	self.postMessage({ id: request.id, sizesMm } satisfies DrawReply);
+	// the first tiles are painted meanwhile: nobody waits for what follows
+	await new Promise((resolve) => setTimeout(resolve, aside));
+	const { geometry, input } = request;
+	const coverage = await coverageAt(geometry, geometry);
+	const sizesMm = regionSizesMm(coverage, input.layout, input.inks);
+	const borderArcs = sharedArcs(coverage, input.borders);
+	self.postMessage({ id: request.id, sizesMm, borderArcs } satisfies DrawReply);
+}
+/** milliseconds */
+const aside = 1_000;
+
+/** Has the geometry at hand before a drawing is asked for; a fault is told by the drawing, which asks again. */
+async function warm({ warm: address }: WarmRequest): Promise<void> {
+	drawnFrom = address;
+	await coverageAt(address, address).catch(() => fetched.delete(address));
 }
 
-self.onmessage = async ({ data }: MessageEvent<DrawRequest | RefineRequest>) => {
+self.onmessage = async ({ data }: MessageEvent<DrawRequest | RefineRequest | WarmRequest>) => {
+	if ('warm' in data) return warm(data);
 	try {
 		await answer(data);
 	} catch (error) {

@@ -127,6 +127,7 @@ import {
 	rereadTable,
 } from '../../src/lib/server/services/measure-upkeep.service.ts';
 import { uploadTable } from '../../src/lib/server/services/measure-upload.service.ts';
+import { themeMeasures } from '../../src/lib/server/services/theme-figures.service.ts';
 import { deskMeasures, measureTables } from '../../src/lib/server/services/measures.service.ts';
 import { sheetColumns, sheetForPage } from '../../src/lib/server/services/sheet-columns.service.ts';
 import {
@@ -249,6 +250,7 @@ const walk: Walk = {
 	rereadTable: ['measures.edit', (member) => rereadTable(shop, member, 99, 1, {})],
 	sweepRows: ['measures.edit', (member) => sweepRows(shop, member, 99, 1, { what: 'take-first' })],
 	takeTable: ['measures.edit', (member) => takeTable(shop, member, 99, 1, true)],
+	themeMeasures: ['sheet.read', (member) => themeMeasures(shop, member, 99)],
 	uploadTable: ['measures.edit', (member) => uploadTable(shop, member, 99, empty())],
 	createToken: ['tokens.manage', (member) => createToken(member, token)],
 	approveHandover: [

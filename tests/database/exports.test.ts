@@ -3,6 +3,7 @@ import { readFileSync } from 'node:fs';
 import { buffer } from 'node:stream/consumers';
 import { sql } from 'kysely';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { exportKinds } from '../../src/lib/engines/exports/index.ts';
 import { askExport } from '../../src/lib/schemas/export.ts';
 import { Forbidden, type Member } from '../../src/lib/server/access/member.ts';
 import { runExport } from '../../src/lib/server/jobs/export.job.ts';
@@ -122,6 +123,23 @@ describe('a file of an edition', () => {
 		expect(second.bytes.equals(first.bytes)).toBe(true);
 		expect(String(second.bytes)).not.toContain('Renamed since');
 	});
+
+	it(
+		'can be of every kind, each the same bytes whenever it is made',
+		{ timeout: 300_000 },
+		async () => {
+			const names = new Set<string>();
+			for (const { id, extension } of exportKinds) {
+				const first = await made({ kind: id, edition: 1 });
+				expect(first.note.file?.name).toBe(`tavaroe-edition-1.${extension}`);
+				names.add(first.note.file!.name);
+				await forget(first.note.number);
+				const second = await made({ kind: id, edition: 1 });
+				expect(second.bytes.equals(first.bytes), id).toBe(true);
+			}
+			expect(names.size).toBe(exportKinds.length);
+		},
+	);
 
 	it('is refused when the stored boundaries are not those it was issued with', async () => {
 		const { number } = await ask({ kind: 'csv', edition: 1, options: { byteOrderMark: false } });

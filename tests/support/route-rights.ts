@@ -79,6 +79,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/layout', 'action removeTemplate', 'layout.edit'],
 	['/sheets/[sheet]/layout', 'action applyTemplate', 'layout.edit'],
 	['/sheets/[sheet]/layout', 'action alike', 'layout.edit'],
+	['/sheets/[sheet]/theme', 'load', 'sheet.read'],
 	['/sheets/[sheet]/measures', 'load', 'measures.read'],
 	['/sheets/[sheet]/measures', 'action upload', 'measures.edit'],
 	['/sheets/[sheet]/measures/[table]', 'load', 'measures.read'],

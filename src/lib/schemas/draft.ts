@@ -129,6 +129,7 @@ export const draftDocument = z.strictObject({
 		id: z.string().min(1).max(100),
 		name: z.string().min(1).max(120),
 		inks: z.array(ink).min(1).max(64),
+		from: z.string().min(1).max(100).optional(),
 	}),
 	locks: z.record(key, lock),
 	forbidden: z

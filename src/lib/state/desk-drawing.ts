@@ -3,6 +3,7 @@ import type { Area, Ground, SheetTheme } from '$lib/engines/sheet';
 import type { Desk } from './desk.svelte';
 import { Drawer, type DrawReply, type Refined } from './drawer';
 import { drawnSheet } from './drawn-sheet';
+import { unpackFills } from './packed-fills';
 import { finerLevel, firstGeometry, levelAddress, showsOnCanvas } from './levels-for';
 
 /** The line that tells a draft from an issue, in the words that the server puts on the sheet. */
@@ -24,9 +25,13 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 	const drawer = new Drawer(makeWorker, (reply: DrawReply) => {
 		if ('failed' in reply) desk.drawFailure = reply.failed;
 		else if ('refined' in reply) desk.finer = finerOf(reply);
-		else if (!('drawing' in reply)) desk.sizesMm = reply.sizesMm;
-		else {
-			const { sizesMm, ...drawn } = reply;
+		else if (!('drawing' in reply)) {
+			desk.drawn?.learn(reply.borderArcs);
+			desk.sizesMm = reply.sizesMm;
+		} else {
+			const { sizesMm, fills, ...drawn } = reply;
+			const { drawing } = drawn;
+			if (fills) drawn.drawing = { ...drawing, fills: unpackFills(fills, desk.sheet.regions) };
 			desk.drawFailure = '';
 			desk.finer = null;
 			desk.drawn = drawnSheet(drawn);
@@ -46,6 +51,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 					inks: inks.map((ink) => ({ ...ink })),
 					borders,
 					groups: regions.group,
+					named: desk.names.named,
 					colouring: desk.inks.some((ink) => ink >= 0)
 						? desk.inks.map((ink) => (ink < inks.length ? ink : -1))
 						: null,

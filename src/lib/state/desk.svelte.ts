@@ -14,8 +14,9 @@ import type { Evidence } from './evidence';
 import { Flatness } from './flatness.svelte';
 import { inkUse } from './ink-use';
 import { keeperWithInks, type Keeper } from './kept-drafts';
+import { NameHand } from './name-hand.svelte';
 import { OnTrial } from './on-trial.svelte';
-import { judgePalette } from './palette-judgement';
+import { judgePalette, numbersIn, type PaletteJudgement } from './palette-judgement';
 import { problemOf } from './problem-of-draft';
 import { rebase } from './rebase';
 import { linkRegions, neighboursOf } from './region-links';
@@ -79,6 +80,8 @@ export class Desk {
 	});
 	/** what the hand holds while rules are made */
 	readonly rules = new RuleHand(this);
+	/** the names of the sheet, moved and hidden by hand while the layout is open */
+	readonly names = new NameHand(this);
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
@@ -115,15 +118,9 @@ export class Desk {
 	shown: Draft = $derived.by(() => this.trial.now?.document ?? this.draft.document);
 	/** its colouring: the last one that kept every rule; -1 where there is none */
 	inks: Int32Array = $derived.by(() => this.trial.now?.inks ?? this.colouring.inks);
-	palette = $derived.by(() =>
-		judgePalette(
-			this.shown.palette.inks,
-			this.inks,
-			this.sheet.borders,
-			this.standing,
-			this.sizesMm,
-		),
-	);
+	/** number in the sheet's list of each border that counts */
+	countedNumbers = $derived.by(() => numbersIn(this.sheet.borders, this.countedBorders));
+	palette = $derived.by(() => this.judge(this.shown, this.inks));
 	/** what is planned on the sheet now, when it is territories */
 	planning = $derived(this.byTerritory ? this.territories : null);
 	/** the measure that the sheet shows in place of its colouring */
@@ -170,6 +167,15 @@ export class Desk {
 	problemOf(document: Draft, previous: Int32Array | null): ColouringProblem {
 		const { borders, regions } = this.sheet;
 		return problemOf(document, regions.key, borders, this.numbers, previous);
+	}
+
+	/** How the palette of a document fares on this sheet with a colouring. */
+	judge({ palette, layout }: Draft, colouring: Int32Array): PaletteJudgement {
+		return judgePalette({
+			...{ inks: palette.inks, colouring, borders: this.countedBorders },
+			...{ numbers: this.countedNumbers, sizesMm: this.sizesMm },
+			look: { lineHex: layout.lines.region?.hex ?? '#000000', labels: layout.labels },
+		});
 	}
 
 	/** what is known about the draft as it stands */

@@ -72,19 +72,29 @@ export const usePalette =
 		palette: { id, name, inks: inks.map((ink) => ({ ...ink })) },
 	});
 
-/** Once an ink is changed by hand the palette is the sheet's own. */
+/** Other inks in place of the sheet's: once changed by hand the palette is the sheet's own. */
+export const withInks =
+	(inks: readonly Ink[], how = 'changed') =>
+	(draft: Draft): Draft => {
+		const { id, name, from } = draft.palette;
+		const origin = from ?? (id === 'own' ? undefined : id);
+		return {
+			...draft,
+			palette: {
+				id: 'own',
+				name: id === 'own' ? name : `${name}, ${how}`.slice(0, 120),
+				inks: [...inks],
+				...(origin ? { from: origin } : {}),
+			},
+		};
+	};
+
 export const changeInk =
 	(number: number, change: Partial<Ink>) =>
-	(draft: Draft): Draft => ({
-		...draft,
-		palette: {
-			id: 'own',
-			name: draft.palette.id === 'own' ? draft.palette.name : `${draft.palette.name}, changed`,
-			inks: draft.palette.inks.map((ink, index) =>
-				index === number ? { ...ink, ...change } : ink,
-			),
-		},
-	});
+	(draft: Draft): Draft =>
+		withInks(
+			draft.palette.inks.map((ink, index) => (index === number ? { ...ink, ...change } : ink)),
+		)(draft);
 
 export const setLayout =
 	(change: Partial<SheetLayout>) =>

@@ -1,4 +1,5 @@
 import type { Area, Drawing, Ground, SheetInput } from '$lib/engines/sheet';
+import type { PackedFills } from './packed-fills';
 import type { BorderArcs } from './sheet-places';
 
 export interface DrawRequest {
@@ -13,7 +14,9 @@ export interface DrawRequest {
 }
 export interface Drawn {
 	id: number;
+	/** for a canvas without its fills */
 	drawing: Drawing;
+	fills: PackedFills | null;
 	/** '' for a canvas */
 	svg: string;
 	ground: Ground | null;
@@ -22,13 +25,20 @@ export interface Drawn {
 	anchors: Float64Array;
 	/** how large each region shows, mm; for a canvas it is measured once the sheet stands */
 	sizesMm: Float64Array | null;
-	borderArcs: BorderArcs;
+	/** for a canvas they follow */
+	borderArcs: BorderArcs | null;
 	places: Float64Array;
 }
-/** Follows a drawing without sizes, which take a placing of their own. */
+/** Follows a drawing on a canvas: what the first tiles need not wait for. */
 export interface Sized {
 	id: number;
 	sizesMm: Float64Array;
+	borderArcs: BorderArcs;
+}
+/** Has the worker fetch and unpack a geometry before a drawing of it is asked for. */
+export interface WarmRequest {
+	/** address of its bytes */
+	warm: string;
 }
 export interface RefineRequest {
 	id: number;

@@ -26,19 +26,3 @@ export function inkUse(
 	for (let ink = 0; ink < uses.length; ink++) of(ink).areaShare /= whole || 1;
 	return uses;
 }
-
-/** The pairs of inks that touch on the sheet, a < b, each once. */
-export function touchingInks(
-	colouring: ArrayLike<number>,
-	pairs: { a: ArrayLike<number>; b: ArrayLike<number> },
-): [number, number][] {
-	const seen = new Map<string, [number, number]>();
-	for (let border = 0; border < pairs.a.length; border++) {
-		const one = colouring[pairs.a[border]];
-		const other = colouring[pairs.b[border]];
-		if (one < 0 || other < 0 || one === other) continue;
-		const pair: [number, number] = [Math.min(one, other), Math.max(one, other)];
-		seen.set(pair.join(), pair);
-	}
-	return [...seen.values()].sort((p, q) => p[0] - q[0] || p[1] - q[1]);
-}

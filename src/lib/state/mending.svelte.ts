@@ -1,51 +1,41 @@
-import type { MendRequest, MendResult } from '$lib/engines/palettes';
-
-export interface MendQuestion {
-	mend: MendRequest;
-}
-export type MendReply = { result: MendResult } | { failed: string };
+import type { ProposalAnswer, ProposalRequest } from '$lib/engines/palettes';
+import { PaletteWorker } from './palette-worker';
 
 /**
- * Has a mend of the palette looked for in a worker of its own, so that neither the page nor a lock set
- * meanwhile waits for it. Holds the one proposal there is.
+ * Has mends of the palette looked for in a worker of its own, so that neither the page nor a lock set
+ * meanwhile waits for it. Holds what was proposed so far, in the order of its kinds.
  */
 export class Mending {
-	proposal: MendResult | null = $state.raw(null);
+	answers: ProposalAnswer[] = $state.raw([]);
 	working = $state(false);
 	/** the search ended without an answer: what it said */
 	failure = $state('');
-	readonly #makeWorker: () => Worker;
-	#worker: Worker | null = null;
+	readonly #worker: PaletteWorker;
 
 	constructor(makeWorker: () => Worker) {
-		this.#makeWorker = makeWorker;
+		this.#worker = new PaletteWorker(makeWorker);
 	}
 
-	ask(request: MendRequest) {
+	ask(request: ProposalRequest) {
 		this.drop();
 		this.working = true;
-		const worker = (this.#worker = this.#makeWorker());
-		worker.onmessage = ({ data }: MessageEvent<MendReply>) => this.#settle(data);
-		worker.onerror = ({ message }) => this.#settle({ failed: message });
-		worker.postMessage({ mend: request } satisfies MendQuestion);
+		this.#worker.ask({ mend: request }, (reply) => {
+			if ('answer' in reply) this.answers = [...this.answers, reply.answer];
+			else this.working = false;
+			if ('failed' in reply) this.failure = reply.failed;
+		});
+	}
+
+	/** Ends a search that is going on; what was proposed stays. */
+	stop() {
+		this.#worker.drop();
+		this.working = false;
 	}
 
 	/** Ends a search that is going on and forgets what was proposed. */
 	drop() {
-		this.#end();
-		this.proposal = null;
+		this.stop();
+		this.answers = [];
 		this.failure = '';
-	}
-
-	#settle(reply: MendReply) {
-		this.#end();
-		if ('failed' in reply) this.failure = reply.failed;
-		else this.proposal = reply.result;
-	}
-
-	#end() {
-		this.#worker?.terminate();
-		this.#worker = null;
-		this.working = false;
 	}
 }

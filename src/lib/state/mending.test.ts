@@ -1,21 +1,25 @@
 import { describe, expect, it } from 'vitest';
-import { mendPalette, type MendRequest } from '../engines/palettes/index.ts';
-import { Mending, type MendQuestion, type MendReply } from './mending.svelte.ts';
+import { proposeMends, type ProposalRequest } from '../engines/palettes/index.ts';
+import { Mending } from './mending.svelte.ts';
+import type { PaletteQuestion, PaletteReply } from './palette-worker.ts';
 
 /** Stands in for the browser's worker: keeps what it is sent, answers when told to. */
 class QuietWorker {
-	onmessage: ((event: { data: MendReply }) => void) | null = null;
+	onmessage: ((event: { data: PaletteReply }) => void) | null = null;
 	onerror: ((event: { message: string }) => void) | null = null;
 	ended = false;
-	asked: MendQuestion[] = [];
-	postMessage(question: MendQuestion) {
+	asked: PaletteQuestion[] = [];
+	postMessage(question: PaletteQuestion) {
 		this.asked.push(structuredClone(question));
 	}
 	terminate() {
 		this.ended = true;
 	}
 	answer() {
-		this.onmessage?.({ data: { result: mendPalette(this.asked[0].mend) } });
+		const [question] = this.asked;
+		if (!('mend' in question)) return;
+		for (const answer of proposeMends(question.mend)) this.onmessage?.({ data: { answer } });
+		this.onmessage?.({ data: { ended: true } });
 	}
 }
 
@@ -29,25 +33,44 @@ function bench() {
 	return { mending, workers };
 }
 
-const request: MendRequest = { inks: ['#777777', '#7a7a7a'], touching: [[0, 1]] };
+const request: ProposalRequest = {
+	inks: [
+		{ name: 'One', hex: '#777777' },
+		{ name: 'Two', hex: '#7a7a7a' },
+	],
+	demands: [
+		{
+			...{ a: 0, b: 1, ciede2000: 12, grey: 5, borders: 1, tightest: 0 },
+			...{ sizesMm: [9, 9], needsMore: false },
+		},
+	],
+	locked: [],
+	known: [],
+};
 
-describe('a mend looked for off the page', () => {
-	it('is the engine’s own answer, and its worker ends with it', () => {
+describe('mends looked for off the page', () => {
+	it('are the engine’s own answers, and the worker ends with them', () => {
 		const { mending, workers } = bench();
 		mending.ask(request);
-		expect(mending).toMatchObject({ working: true, proposal: null });
+		expect(mending).toMatchObject({ working: true, answers: [] });
 		workers[0].answer();
 		expect(mending).toMatchObject({ working: false, failure: '' });
-		expect(mending.proposal).toEqual(mendPalette(request));
+		expect(mending.answers).toEqual([...proposeMends(request)]);
 		expect(workers[0].ended).toBe(true);
 	});
 
-	it('can be stopped, and then proposes nothing', () => {
+	it('can be stopped, and what was found stays until it is dropped', () => {
 		const { mending, workers } = bench();
 		mending.ask(request);
-		mending.drop();
+		const [first] = proposeMends(request);
+		workers[0].onmessage?.({ data: { answer: first } });
+		mending.stop();
 		expect(workers[0].ended).toBe(true);
-		expect(mending).toMatchObject({ working: false, proposal: null, failure: '' });
+		expect(mending).toMatchObject({ working: false, answers: [first], failure: '' });
+		workers[0].answer();
+		expect(mending.answers).toEqual([first]);
+		mending.drop();
+		expect(mending.answers).toEqual([]);
 	});
 
 	it('leaves the search before when asked anew', () => {
@@ -62,6 +85,6 @@ describe('a mend looked for off the page', () => {
 		const { mending, workers } = bench();
 		mending.ask(request);
 		workers[0].onerror?.({ message: 'out of memory' });
-		expect(mending).toMatchObject({ working: false, proposal: null, failure: 'out of memory' });
+		expect(mending).toMatchObject({ working: false, answers: [], failure: 'out of memory' });
 	});
 });

@@ -137,13 +137,13 @@ export class TerritoryDesk {
 		return this.entries.filter(({ key }) => Object.hasOwn(saved, key) && now[key] !== saved[key]);
 	});
 	palette = $derived.by(() =>
-		judgePalette(
-			this.desk.draft.document.palette.inks,
-			this.inks,
-			this.borders,
-			new Array<'counts'>(this.borders.a.length).fill('counts'),
-			null,
-		),
+		judgePalette({
+			inks: this.desk.draft.document.palette.inks,
+			colouring: this.inks,
+			borders: this.borders,
+			sizesMm: null,
+			look: { lineHex: '#000000', labels: true },
+		}),
 	);
 
 	constructor({ given, save, keeper, desk }: TerritoryStart) {

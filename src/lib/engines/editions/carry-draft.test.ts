@@ -208,3 +208,38 @@ describe('the colouring before', () => {
 		expect(result.changes?.count).toBe(1);
 	});
 });
+
+describe('names', () => {
+	const at = { dxMm: 2, dyMm: -1, lines: 2, short: true } as const;
+	const withNames = (lettering: Partial<Draft['layout']['lettering']>) => {
+		const { layout } = blankDraft({});
+		return carried({
+			layout: { ...layout, lettering: { ...layout.lettering, ...lettering } },
+		});
+	};
+	it('go with place and abbreviation to the largest piece, and are hidden on every piece', () => {
+		const result = withNames({ placed: { c: at, d: at }, hidden: ['c'], first: ['d', 'a'] });
+		const { lettering } = result.draft.layout;
+		expect(Object.keys(lettering.placed)).toHaveLength(2);
+		expect(lettering.placed.D).toEqual(at);
+		expect(lettering.hidden.toSorted()).toEqual(['c', 'c2']);
+		expect(lettering.first).toEqual(['D', 'a']);
+		expect(words(result)).toContain('The place of the name of "d", set by hand, follows to "D".');
+	});
+	it('of merged regions are one, and those of a region that is gone are told as dropped', () => {
+		const result = withNames({ abbreviations: { e: 'E.', f: 'F.', b: 'B.' }, hidden: ['b'] });
+		expect(result.draft.layout.lettering.abbreviations).toEqual({ ef: 'E.' });
+		expect(result.draft.layout.lettering.hidden).toEqual([]);
+		expect(result.rows.map(({ outcome }) => outcome)).toEqual([
+			...['followed', 'doubled', 'dropped'],
+			'dropped',
+		]);
+	});
+	it('from a column that is missing are the sheet’s own again', () => {
+		const { layout } = blankDraft({});
+		const own = { ...layout, lettering: { ...layout.lettering, nameColumn: 'label' } };
+		const { draft, rows } = carried({ layout: own }, { ...fresh, columns: ['code'] });
+		expect(draft.layout.lettering.nameColumn).toBeNull();
+		expect(rows.map(({ what }) => what)).toEqual(['layout']);
+	});
+});

@@ -9,7 +9,7 @@ import { wholeLayout, type SheetLayout } from '../sheet/layout.ts';
  */
 export interface Draft {
 	inks: number | 'fewest';
-	palette: { id: string; name: string; inks: Ink[] };
+	palette: SheetPalette;
 	/** region key -> pinned ink (number from 0), what dropping it costs, and who set it when */
 	locks: Record<string, Lock>;
 	forbidden: ForbiddenInk[];
@@ -37,6 +37,16 @@ export interface Draft {
 	layout: SheetLayout;
 	/** the measure that the sheet shows in place of its colouring; null: the colouring */
 	theme: Theme | null;
+}
+
+/** The inks a sheet is printed from: a copy, so that a palette changed later changes no sheet. */
+export interface SheetPalette {
+	/** id of the palette it was taken from, or `own` once it was changed here */
+	id: string;
+	name: string;
+	inks: Ink[];
+	/** of the sheet's own: id of the palette it was made from, where there is one */
+	from?: string;
 }
 
 export interface Lock {

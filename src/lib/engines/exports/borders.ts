@@ -8,7 +8,7 @@ import {
 	type ReasonedRules,
 	type Standing,
 } from '../borders/index.ts';
-import { exportTableCsv } from './data-table.ts';
+import { exportTableCsv, type DataTable } from './data-table.ts';
 import { plainLine } from './plain-line.ts';
 
 export interface BordersOut {
@@ -46,7 +46,10 @@ const metres = (heading: string) => ({ heading, unit: 'm', kind: 'number' as con
  * Every pair of a sheet as a table: RFC 4180, UTF-8, in region order, metres to the centimetre; whether
  * the pair counts, why not, and what was decided by hand with its reason. Byte for byte repeatable.
  */
-export function exportBordersCsv({ keys, names, borders, rules }: BordersOut): Uint8Array {
+export const exportBordersCsv = (out: BordersOut): Uint8Array => exportTableCsv(borderTable(out));
+
+/** The same table, for a workbook. */
+export function borderTable({ keys, names, borders, rules }: BordersOut): DataTable {
 	const rows = sheetBorderRows(keys, borders, rules).map((row) => {
 		const gap = isAcross(row.kind);
 		const far = Math.round(row.metres * 100) / 100;
@@ -63,7 +66,7 @@ export function exportBordersCsv({ keys, names, borders, rules }: BordersOut): U
 		...[metres('shared line'), metres('gap')],
 		...['counts', 'why not', 'by hand', 'reason', 'by', 'on'].map(text),
 	];
-	return exportTableCsv({ name: 'Borders', columns, rows });
+	return { name: 'Borders', columns, rows };
 }
 
 /**

@@ -16,7 +16,7 @@ export interface DataColumn {
 	kind: 'text' | 'number' | 'date';
 }
 
-export const headingOf = ({ heading, unit }: DataColumn): string =>
+export const headingOf = ({ heading, unit }: Pick<DataColumn, 'heading' | 'unit'>): string =>
 	unit ? `${heading} (${unit})` : heading;
 
 /**

@@ -1,8 +1,9 @@
-/** A sheet or an edition as files: SVG, GeoJSON, CSV. Bytes out, the same for the same input. */
+/** A sheet or an edition as files of every kind in `kinds.ts`. Bytes out, the same for the same input. */
 export { exportSvg, type FaceFiles } from './svg.ts';
 export { exportGeoJson } from './geojson.ts';
 export { exportBordersCol, exportBordersCsv, type BordersOut } from './borders.ts';
 export { csvField, exportCsv } from './csv.ts';
+export { themeExtraColumns } from './theme-columns.ts';
 export { subsetFont } from './subset-font.ts';
 export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';
 export { exportWorkbook } from './workbook.ts';
@@ -29,3 +30,6 @@ export type {
 	ExportTools,
 	ExtraColumn,
 } from './source.ts';
+export { territoryColumns, themeColumns } from './columns.ts';
+export { exportPdf } from './pdf/pdf.ts';
+export { pixelsOf } from './png/png.ts';

@@ -1,4 +1,4 @@
-import { strToU8, unzipSync, zipSync } from 'fflate';
+import { strToU8, unzipSync, zipSync, type ZippableFile } from 'fflate';
 
 /** Written into every entry in place of the time of writing. */
 const fixedTime = '2026-01-01T00:00:00';
@@ -16,3 +16,14 @@ export function zipOf(files: Record<string, string>): Uint8Array {
 	const entries = Object.entries(files).map(([name, text]) => [name, strToU8(text)]);
 	return zipSync(Object.fromEntries(entries), { level: 9, mtime: fixedTime });
 }
+
+/** Files by name as one zip, in that order; what is packed already is stored as it is. */
+export function zipOfFiles(files: readonly { name: string; bytes: Uint8Array }[]): Uint8Array {
+	const entries = files.map(({ name, bytes }): [string, ZippableFile] => [
+		name,
+		[bytes, { level: packed.test(name) ? 0 : 6 }],
+	]);
+	return zipSync(Object.fromEntries(entries), { mtime: fixedTime });
+}
+
+const packed = /\.(pdf|png|svgz|xlsx|zip)$/;

@@ -7,7 +7,8 @@ const widest = 48;
 /**
  * Tables as one workbook (Office Open XML, ECMA-376), one worksheet each: headings with their units in a
  * row that stays in sight, numbers as numbers, dates as dates, everything else as text. A text that begins
- * like a formula stays a text cell, so nothing in it is ever run. A number that is not finite is left empty.
+ * like a formula stays a text cell, so nothing in it is ever run; signs that XML forbids are
+ * left out, and a text over 32,767 signs, the most a cell holds, is cut. A number that is not finite is left empty.
  * The same tables give the same bytes. Pure: nothing of Node is used. Throws on a worksheet name that the
  * format forbids (over 31 signs, or one of \ / ? * [ ] :), a programmer's error.
  */
@@ -24,7 +25,7 @@ export async function exportWorkbook(tables: readonly DataTable[]): Promise<Uint
 
 function sheetData({ columns, rows }: DataTable): SheetData {
 	const heading = columns.map((column): Cell => ({
-		value: headingOf(column),
+		value: fitting(headingOf(column)),
 		type: String,
 		fontWeight: 'bold',
 	}));
@@ -37,8 +38,18 @@ function cellOf({ kind }: DataColumn, value: string | number | null): Cell {
 		return Number.isFinite(value) ? { value, type: Number } : null;
 	}
 	if (kind === 'date') return dateCell(String(value));
-	return { value: String(value), type: String };
+	return { value: fitting(String(value)), type: String };
 }
+
+/** The most letters a cell holds (ECMA-376 part 1, 18.3.1.4 as the applications limit it). */
+const longest = 32_767;
+/** Characters that no XML document may have (XML 1.0, 2.2), lone surrogates among them. */
+const illegal = /[^\t\n\r\u{20}-\u{d7ff}\u{e000}-\u{fffd}\u{10000}-\u{10ffff}]/gu;
+
+const fitting = (text: string): string => {
+	const legal = text.replace(illegal, '');
+	return legal.length > longest ? `${legal.slice(0, longest - 2).replace(illegal, '')}…` : legal;
+};
 
 function dateCell(text: string): Cell {
 	const value = new Date(`${text}T00:00:00Z`);

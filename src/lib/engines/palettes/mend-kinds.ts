@@ -1,6 +1,7 @@
 import { ciede2000 } from '../colour/ciede2000.ts';
 import { labOf } from '../colour/lab.ts';
 import { greySafeFrom } from './demand.ts';
+import { appearanceOf } from './appearance.ts';
 import type { MendTask } from './mend-cost.ts';
 import { anneal, isBetter, type Attempt } from './mend-search.ts';
 import { smallestMend } from './mend-sets.ts';
@@ -59,7 +60,7 @@ function withGrey(task: MendTask, grey: number): MendTask {
 
 /**
  * Lays each well-known set on the free inks, nearest colours to each other, and takes the one that keeps
- * what is asked with the least movement; else the nearest few are pulled towards it.
+ * what is asked with the least movement; else the nearest that keeps it once moved a little.
  */
 export const fromKnownSet: MendSearch = (task, locked, { known, random }) => {
 	const free = freeInks(task, locked);
@@ -76,12 +77,13 @@ export const fromKnownSet: MendSearch = (task, locked, { known, random }) => {
 		.sort((one, two) => (isBetter(one.attempt, two.attempt) ? -1 : 1));
 	if (laid.length === 0) return null;
 	if (laid[0].attempt.missing === 0) return { inks: laid[0].attempt.inks, from: laid[0].name };
-	const pulled = laid.slice(0, mostPulled).map(({ name, attempt }) => ({
-		name,
-		attempt: anneal(task, free, attempt.inks, pullSteps, random),
-	}));
-	const best = pulled.reduce((one, two) => (isBetter(two.attempt, one.attempt) ? two : one));
-	return best.attempt.missing === 0 ? { inks: best.attempt.inks, from: best.name } : null;
+	for (const { name, attempt } of laid.slice(0, mostPulled)) {
+		// as near to the set as can be, not to where the inks stood
+		const fromSet = { ...task, start: attempt.inks.map(appearanceOf) };
+		const pulled = anneal(fromSet, free, attempt.inks, pullSteps, random);
+		if (pulled.missing === 0) return { inks: pulled.inks, from: name };
+	}
+	return null;
 };
 
 /** The closest pairs of ink and colour first, then exchanges while they bring the sum down. */

@@ -4,7 +4,8 @@ import { whiteGround } from './collar/text-blocks.ts';
 import type { SheetInput } from './draw-sheet.ts';
 import type { DrawnInk, LegendPlace } from './drawing.ts';
 import type { SheetLayout } from './layout.ts';
-import { placeOnPaper, type OnPaper } from './place-on-paper.ts';
+import { figureRoom } from './graticule/figure-room.ts';
+import { padded, placeOnPaper, type OnPaper } from './place-on-paper.ts';
 import type { Box } from './plane/fit.ts';
 import type { DrawnShape } from './shapes.ts';
 
@@ -36,19 +37,28 @@ export function arrange(input: SheetInput, inks: DrawnInk[]): Arranged {
 }
 
 function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): Arranged {
-	const { coverage, weak, colouring, issue, groups } = input;
+	const { coverage, groups } = input;
 	let around = null as Collar | null;
-	const frameFor = (projection: string) => {
-		around = collar({
-			...{ layout, inks, projection, issue },
-			coloured: colouring !== null,
-			weak: weak.length > 0,
-			regions: coverage.keys.length,
-		});
-		return around;
-	};
+	const frameFor = (projection: string) => (around = collarOf(input, inks, layout, projection));
 	const placed = placeOnPaper(coverage, layout, frameFor, groups);
 	return { ...onTheMap(placed, around!), placed, around: around!, legendNote: '' };
+}
+
+function collarOf(input: SheetInput, inks: DrawnInk[], layout: SheetLayout, projection: string) {
+	const { coverage, weak, colouring, issue } = input;
+	return collar({
+		...{ layout, inks, projection, issue },
+		coloured: colouring !== null,
+		weak: weak.length > 0,
+		regions: coverage.keys.length,
+	});
+}
+
+/** The box that another layout would leave for the regions, about: figures are reckoned whole degrees. */
+export function roomOn(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): Box {
+	const { map, scale } = collarOf(input, inks, layout, '');
+	const within = layout.frame.graticule?.figures ? figureRoom(map, scale, true) : map;
+	return padded(within, layout, scale);
 }
 
 /** Text blocks, and the legend where it is to stand on the map. */

@@ -41,6 +41,21 @@ function isInside(drawing: Drawing, region: number, x: number, y: number): boole
 	return inside;
 }
 
+/** Share of 45 places in a text's box that lie in one of some regions. */
+function shareIn(drawing: Drawing, text: DrawnText, regions: number[]): number {
+	const [left, top, right, bottom] = boxOf(text);
+	const steps = [0.1, 0.3, 0.5, 0.7, 0.9];
+	const places = steps.flatMap((down) =>
+		[...steps, 0.2, 0.4, 0.6, 0.8].map((across): [number, number] => [
+			left + (right - left) * across,
+			top + (bottom - top) * down,
+		]),
+	);
+	const within = ([x, y]: [number, number]) =>
+		regions.some((region) => isInside(drawing, region, x, y));
+	return places.filter(within).length / places.length;
+}
+
 /** Places along every leader, an eighth of it apart. */
 function leaderPlaces({ lines, arcPoints, arcStarts }: Drawing): [number, number][] {
 	const arcs = lines.find(({ rank }) => rank === 'leader')?.arcs ?? new Uint32Array();
@@ -76,7 +91,12 @@ describe('labels', () => {
 				const labels = drawing.texts.filter((text) => text.layer === 'label');
 				expect(overlaps(labels)).toEqual([]);
 				expect(strays(drawing)).toEqual([]);
-				for (const label of labels) {
+				for (const label of labels.filter(({ halo }) => halo)) {
+					expect(shareIn(drawing, label, [label.region!])).toBeGreaterThan(0.55);
+					const all = drawing.fills.map(({ region }) => region);
+					expect(shareIn(drawing, label, all)).toBe(1);
+				}
+				for (const label of labels.filter(({ halo }) => !halo)) {
 					const [left, top, right, bottom] = boxOf(label);
 					for (const x of [left, (left + right) / 2, right]) {
 						for (const y of [top, bottom]) {

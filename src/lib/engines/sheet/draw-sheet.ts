@@ -6,18 +6,19 @@ import { asSeenBy as seen, labelInk } from '../colour/index.ts';
 import type { BorderList } from '../borders/border-list.ts';
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
-import { arrange } from './arrange.ts';
+import { arrange, roomOn } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
 import type { DrawnInk, DrawnText, Drawing, RegionFill } from './drawing.ts';
-import { labelSheet } from './labels/label-sheet.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
+import { labelSheet, unlettered } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
 import { leaderLayer, withLeaders } from './leader-lines.ts';
 import { lineLayers } from './lines.ts';
-import { paperSize } from './paper.ts';
+import { paperBox, paperSize } from './paper.ts';
 import type { Placement } from './place-on-paper.ts';
 import { drawFrame } from './frame/draw-frame.ts';
+import { frameObstacles } from './frame/obstacles.ts';
 import { drawScale } from './collar/draw-scale.ts';
 import { smallerSide } from './smaller-side.ts';
 import { legendInks, themedInput, type SheetTheme } from './themed.ts';
@@ -26,6 +27,8 @@ import { cleanText } from './type/clean-text.ts';
 export interface SheetInput {
 	coverage: Coverage;
 	borders: BorderList;
+	/** what the column of names says of every region, where names are taken from one */
+	named?: (string | null)[] | null;
 	/** the level above, one a region: a province's name, or null */
 	groups: (string | null)[];
 	/** ink number from 0 for every region; null while nothing is coloured */
@@ -85,17 +88,12 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 	const { arcs, rings, sides } = placed;
 	const labels = layout.labels
 		? labelSheet({
-				arcs,
-				rings,
-				sides,
-				names,
-				groups,
-				areas: coverage.areasKm2,
-				box: placed.box,
-				scale,
-				obstacles,
+				...{ arcs, rings, sides, groups, scale, names: lettered(input) },
+				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
+				...{ box: placed.box, paper: paperBox(layout) },
+				obstacles: [...obstacles, ...frameObstacles(placed, scale, layout.scaleBar)],
 			})
-		: { texts: [], leaders: [], unplaced: names.map((_, region) => region) };
+		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);
 	const fine = (small[Math.floor(small.length / 2)] ?? 0) < fineBelow;
 	const lines = [
@@ -106,11 +104,18 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		}),
 		...leaderLayer(arcs, labels.leaders, scale),
 	];
-	const keys = drawLegend(legend, { inks, fills, lines }, legendInks(fills, input.themed), seenNow);
+	const { themed } = input;
+	const keys = drawLegend(
+		legend,
+		{ inks, fills, lines, themed },
+		legendInks(fills, themed),
+		seenNow,
+	);
 	const measured = drawScale(placed, bar);
 	const frame = drawFrame({
-		...{ coverage, groups, layout, placed, scale, reader, see },
+		...{ coverage, groups, layout, placed, scale, reader, see, obstacles },
 		labels: labels.texts,
+		roomOn: (other) => roomOn(input, inks, other),
 	});
 	const drawing: Drawing = {
 		...paperSize(layout),
@@ -137,6 +142,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		],
 		rects: [...measured.rects, ...frame.rects, ...keys.rects],
 		unplaced: labels.unplaced,
+		lettering: labels.lettering,
 		notes: {
 			projection: placed.chosen.sentence,
 			scale: measured.sentence,
@@ -145,10 +151,14 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 		},
 		frame: frame.report,
 		legend,
-		...(input.themed && { themed: input.themed }),
+		...(themed && { themed }),
 	};
 	return { drawing: { ...drawing, description: describe(drawing) }, placement: placed };
 }
+
+/** The names to be set: as a column has them, where it has one, composed as fonts hold letters. */
+const lettered = ({ coverage, named }: SheetInput): string[] =>
+	coverage.names.map((name, region) => cleanText(named?.[region] ?? name).normalize('NFC'));
 
 function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][]): RegionFill[] {
 	const { coverage, colouring, locked } = input;
@@ -168,8 +178,8 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 }
 
 /**
- * Black or white for every label that stands on a fill, whichever reads better. Where the fill is hatched the
- * lines keep clear of the letters.
+ * Black or white for every label that stands on a fill, whichever reads better. One that goes over
+ * the border, or stands on a hatched fill, keeps its fill around its letters.
  */
 export function inkLabels(texts: DrawnText[], fills: RegionFill[], inks: DrawnInk[]): DrawnText[] {
 	return texts.map((text) => {

@@ -1,5 +1,6 @@
 import type { Ink, Reader } from '../palettes/palette.ts';
 import type { FrameReport } from './frame-report.ts';
+import type { DrawnLettering } from './labels/set-name.ts';
 import type { DrawnShape } from './shapes.ts';
 
 /**
@@ -31,8 +32,10 @@ export interface Drawing {
 	texts: DrawnText[];
 	/** collar furniture: legend boxes, scale bar */
 	rects: DrawnRect[];
-	/** labels that did not fit and are listed instead */
+	/** regions whose name stands nowhere on the sheet, and is in the table only */
 	unplaced: number[];
+	/** how every name is set, and what is to be told of that */
+	lettering: DrawnLettering;
 	/** longer sentences about the drawing: projection, scale and how true the bar is, insets, legend */
 	notes: { projection: string; scale: string; insets: string; legend: string };
 	/** what the frame came to, and what could not be done as asked */
@@ -92,9 +95,12 @@ export interface DrawnText {
 	width: number;
 	face: 'sans' | 'sans-bold' | 'serif' | 'serif-bold' | 'serif-italic';
 	hex: string;
+	/** drawn under border lines, so that none is blotted; of a text `onFill` it is the fill's colour */
 	halo?: string;
 	/** the halo is there because the fill is hatched, and goes with the hatch */
 	clears?: true;
+	/** added between two letters; part of `width` */
+	spacing?: number;
 	region?: number;
 	/** the label stands on its region's fill, from which its colour follows */
 	onFill?: boolean;

@@ -9,13 +9,15 @@ const width = 10;
 export function withLeaders({ arcPoints, arcStarts }: SheetArcs, leaders: Leader[]): SheetArcs {
 	if (!leaders.length) return { arcPoints, arcStarts };
 	const end = arcPoints.length / 2;
-	return {
-		arcPoints: Int32Array.from([
-			...arcPoints,
-			...leaders.flatMap(({ from, to }) => [from.x, from.y, to.x, to.y]),
-		]),
-		arcStarts: Uint32Array.from([...arcStarts, ...leaders.map((_, i) => end + 2 * (i + 1))]),
-	};
+	const points = new Int32Array(arcPoints.length + 4 * leaders.length);
+	const starts = new Uint32Array(arcStarts.length + leaders.length);
+	points.set(arcPoints);
+	starts.set(arcStarts);
+	leaders.forEach(({ from, to }, i) => {
+		points.set([from.x, from.y, to.x, to.y], arcPoints.length + 4 * i);
+		starts[arcStarts.length + i] = end + 2 * (i + 1);
+	});
+	return { arcPoints: points, arcStarts: starts };
 }
 
 /** The layer that draws them; `arcs` are those of the sheet without leaders. */

@@ -41,5 +41,19 @@ export function paperScale(widthMm: number, heightMm: number): number {
 	return Math.min(3, Math.max(0.5, Math.sqrt(Math.min(widthMm, heightMm) / 210)));
 }
 
+/** The paper but for a narrow edge that printers cannot reach, in hundredths of a millimetre. */
+export function paperBox(layout: SheetLayout) {
+	const { widthMm, heightMm } = paperSize(layout);
+	const edge = hundredths(unprinted);
+	return {
+		x: edge,
+		y: edge,
+		width: hundredths(widthMm) - 2 * edge,
+		height: hundredths(heightMm) - 2 * edge,
+	};
+}
+/** mm; common practice, no source */
+const unprinted = 3;
+
 /** Millimetres as the whole hundredths a drawing is made of. */
 export const hundredths = (mm: number): number => Math.round(mm * 100);

@@ -61,7 +61,15 @@ export interface OnPaper extends Placement {
 }
 
 /** What the collar leaves for the map when a sentence stands at its foot. */
-export type FrameFor = (sentence: string) => { map: Box; scale: number };
+export type FrameFor = (sentence: string) => {
+	map: Box;
+	scale: number;
+	/** where something of the collar stands on the map's box */
+	obstacles?: readonly Box[];
+};
+
+/** Regions keep so far from an edge that is drawn, on A4. */
+const clearOfEdge = 250;
 
 /** From here on a map shows the whole globe. */
 const worldSpan = 300;
@@ -77,7 +85,11 @@ export function placeOnPaper(
 	const extent = extentOf(parted.own ? partsOnly(coverage, parted.own) : coverage);
 	const chosen = chooseProjection(extent, layout);
 	const missing = missingWords(coverage, groups, parted);
-	const { map, scale } = frameFor(missing ? `${chosen.sentence} ${missing}` : chosen.sentence);
+	const {
+		map,
+		scale,
+		obstacles = [],
+	} = frameFor(missing ? `${chosen.sentence} ${missing}` : chosen.sentence);
 	const ready = drawable(coverage, chosen.cut, (arc) => !parted.arcFrame?.[arc]);
 	const arcFrame = parted.arcFrame && withAdded(parted.arcFrame, ready);
 	const slack = slackOf(extent);
@@ -92,8 +104,14 @@ export function placeOnPaper(
 		return { cluster, arcs, lines: onlyArcs(ready, arcs) };
 	});
 	const set = insetsOnPaper(coverage, layout, groups, boxed, {
-		...{ box, scale, chosen, rings: ready.rings },
-		fitIn: (within) => fitMap(bounds, chosen.projection, within, layout.frame),
+		...{ box, scale, chosen, obstacles, rings: ready.rings },
+		fitIn: (within) =>
+			fitMap(
+				bounds,
+				chosen.projection,
+				outline ? within : padded(within, layout, scale),
+				layout.frame,
+			),
 		arcsAt: (fit) => own.arcsAt(fit, box),
 	});
 	const { fit, ratio, tooLarge } = set.map;
@@ -144,6 +162,18 @@ function joined(points: Float64Array, more: Float64Array): Float64Array {
 	all.set(points);
 	all.set(more, points.length);
 	return all;
+}
+
+/** Within an edge that is drawn the regions keep clear of it. */
+export function padded(box: Box, { frame }: SheetLayout, scale: number): Box {
+	if (!frame.neatLine && !frame.sea && !frame.graticule) return box;
+	const air = Math.round(Math.min(clearOfEdge * scale, box.width / 10, box.height / 10));
+	return {
+		x: box.x + air,
+		y: box.y + air,
+		width: box.width - 2 * air,
+		height: box.height - 2 * air,
+	};
 }
 
 function mapBox(map: Box, { frame }: SheetLayout, extent: Extent, scale: number): Box {

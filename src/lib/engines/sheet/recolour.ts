@@ -31,10 +31,11 @@ export function recolour(
 		const ink = colouring ? colouring[fill.region] : -1;
 		return { ...fill, ink, hex: fillHex(ink, drawn) };
 	});
+	const { themed } = drawing;
 	const see = (hex: string) => asSeenBy(hex, reader);
 	const lines = seenLines(drawing, see);
-	const shown = { inks: drawn, fills, lines };
-	const keys = drawLegend(drawing.legend, shown, legendInks(fills, drawing.themed), see);
+	const shown = { inks: drawn, fills, lines, themed };
+	const keys = drawLegend(drawing.legend, shown, legendInks(fills, themed), see);
 	const next = {
 		...drawing,
 		reader,

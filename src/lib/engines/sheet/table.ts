@@ -1,5 +1,6 @@
 import type { Coverage } from '../boundaries/coverage.ts';
 import type { Drawing } from './drawing.ts';
+import { isOnSheet } from './labels/set-name.ts';
 import { themeColumns, type ThemeColumns } from './themed.ts';
 
 /** A region as a row: what the map shows of it, for readers who use the table instead. */
@@ -14,7 +15,7 @@ export interface SheetRow {
 	/** the ink itself, whoever the drawing's reader is */
 	hex: string | null;
 	areaKm2: number;
-	/** whether its name stands on the map */
+	/** whether its name stands on the map, or a number that the sheet's list explains */
 	labelled: boolean;
 	/** its class, where the sheet shows a measure: then `inkName` and `hex` are those of the class */
 	theme?: ThemeColumns;
@@ -26,7 +27,6 @@ export function sheetTable(
 	coverage: Pick<Coverage, 'areasKm2'>,
 	groups: (string | null)[],
 ): SheetRow[] {
-	const unplaced = new Set(drawing.unplaced);
 	const { themed, inks } = drawing;
 	return drawing.fills.map(({ region, key, name, ink }) => {
 		const used = ink < 0 ? null : drawing.inks[ink];
@@ -39,7 +39,7 @@ export function sheetTable(
 			inkName: used && used.name,
 			hex: used && used.hex,
 			areaKm2: coverage.areasKm2[region],
-			labelled: !unplaced.has(region),
+			labelled: isOnSheet(drawing.lettering.how[region]),
 			...(themed && { theme: themeColumns({ inks, told: themed.told }, ink) }),
 		};
 	});

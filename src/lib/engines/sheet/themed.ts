@@ -40,7 +40,12 @@ export function themedInput<T extends Shown>(input: T): T & { themed?: SheetThem
 		layout: {
 			...layout,
 			credits: [theme.note, credits].filter(Boolean).join('\n'),
-			collar: { ...collar, legendTitle: collar.legendTitle || theme.title },
+			collar: {
+				...collar,
+				legendTitle: collar.legendTitle || theme.title,
+				// from low to high, whatever the inks of the colouring are ordered by
+				legendOrder: 'number',
+			},
 		},
 		themed: { told: theme.told },
 	};

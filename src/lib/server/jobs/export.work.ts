@@ -1,5 +1,6 @@
 import {
 	exportFile,
+	themeExtraColumns,
 	type ExportAbout,
 	type ExportKindId,
 	type ExportOutcome,
@@ -28,9 +29,9 @@ export async function makeExport({ input, port }: Task<ExportInput>): Promise<Ex
 	tell('Writing the file', 0.4);
 	const { kind, options, about, groups, names, draft } = input;
 	const { keys } = coverage;
+	const rows = sheetTable(drawing, coverage, groups);
 	const source = {
-		...{ drawing, coverage, about, columns: [], fonts: faceFiles() },
-		rows: sheetTable(drawing, coverage, groups),
+		...{ drawing, coverage, about, columns: themeExtraColumns(rows), fonts: faceFiles(), rows },
 		borders: {
 			title: about.title,
 			keys,

@@ -2,7 +2,12 @@ import { gzipSync } from 'node:zlib';
 import { decodeCoverage } from '../../engines/boundaries/index.ts';
 import { bordersForSheet, type BorderList } from '../../engines/borders/index.ts';
 import type { Draft } from '../../engines/editions/draft.ts';
-import { exportCsv, exportGeoJson, exportSvg } from '../../engines/exports/index.ts';
+import {
+	exportCsv,
+	exportGeoJson,
+	exportSvg,
+	themeExtraColumns,
+} from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
 import {
 	doubledBorders,
@@ -11,6 +16,7 @@ import {
 	type SheetTheme,
 } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
+import { sheetLanguage } from './sheet-language.ts';
 import type { Task } from './task-port.ts';
 
 export interface PaintInput {
@@ -20,6 +26,8 @@ export interface PaintInput {
 	borders: BorderList;
 	draft: Draft;
 	groups: (string | null)[];
+	/** names as a column has them, where the layout takes them from one */
+	named?: (string | null)[] | null;
 	/** ink of each region; null while nothing is coloured */
 	colouring: number[] | null;
 	/** the classes of a measure, shown in place of it; null for none */
@@ -32,7 +40,7 @@ export interface PaintInput {
 /** A region whose ink the palette lacks is drawn as not coloured. */
 export function drawInput(input: PaintInput) {
 	const coverage = decodeCoverage(input.geometry);
-	const { draft, groups, reader, issue, theme } = input;
+	const { draft, groups, named, reader, issue, theme } = input;
 	const { layout } = draft;
 	const { inks } = draft.palette;
 	const borders = bordersForSheet(coverage.keys, input.borders, draft);
@@ -41,7 +49,7 @@ export function drawInput(input: PaintInput) {
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
 	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
-		...{ coverage, borders, groups, inks, layout, reader, issue },
+		...{ coverage, borders, groups, named, inks, layout, reader, issue },
 		...{ colouring, theme, locked, weak },
 	});
 	return { coverage, drawing };
@@ -66,12 +74,12 @@ export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 		{
 			extension: 'svg',
 			mediaType: 'image/svg+xml',
-			bytes: exportSvg(drawing, { fonts: faceFiles() }),
+			bytes: exportSvg(drawing, { fonts: faceFiles(), language: sheetLanguage }),
 		},
 		{
 			extension: 'geojson',
 			mediaType: 'application/geo+json',
-			bytes: exportGeoJson(coverage, rows),
+			bytes: exportGeoJson(coverage, rows, themeExtraColumns(rows)),
 		},
 		{
 			extension: 'csv',

@@ -77,11 +77,13 @@ export async function paintInput(
 ): Promise<PaintInput> {
 	const geometry = await readGeometry(db, view.set.id);
 	if (!geometry) throw new NotFound('boundary set');
+	const { nameColumn } = draft.layout.lettering;
 	return {
 		geometry,
 		borders: view.borders,
 		draft,
 		groups: await groupsOf(db, view, draft.layout.groupColumn),
+		named: nameColumn === null ? null : await groupsOf(db, view, nameColumn),
 		...{ colouring, reader, issue, theme },
 	};
 }

@@ -5,6 +5,7 @@ import type { Reader } from '../../engines/palettes/index.ts';
 import type { Member } from '../access/member.ts';
 import type { SheetRecord } from '../repositories/sheets.repository.ts';
 import type { ExportGround } from './export-ground.ts';
+import { sheetLanguage } from '../jobs/sheet-language.ts';
 import { themeTag } from './theme-on-sheet.ts';
 import { exportStem, issueWords } from './export-words.ts';
 
@@ -35,7 +36,7 @@ export function aboutExport(
 		digest,
 		credits: draft.layout.credits,
 		stem: exportStem(taken),
-		language: 'en',
+		language: sheetLanguage,
 	};
 }
 

@@ -7,13 +7,16 @@ const names = { moveTo: 'M', lineTo: 'L', quadraticCurveTo: 'Q', bezierCurveTo: 
 const short = (value: number): string => String(Math.round(value * 10) / 10 || 0);
 
 /** A text's letters as SVG path data in the sheet's units, standing where the text would. */
-export function outlineText({ face, size, text, x, y }: DrawnText, letters: Letters): string {
+export function outlineText(
+	{ face, size, text, x, y, spacing = 0 }: DrawnText,
+	letters: Letters,
+): string {
 	let path = '';
 	let left = x;
 	for (const character of text) {
 		const glyph = letters(face, character);
 		path += outlineAt(glyph, left, y, size / 1000);
-		left += (glyph.advance * size) / 1000;
+		left += (glyph.advance * size) / 1000 + spacing;
 	}
 	return path;
 }

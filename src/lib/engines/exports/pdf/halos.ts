@@ -25,7 +25,7 @@ export function haloOperators(
 				`q ${decimal(scale)} 0 0 ${decimal(-scale)} ${decimal(x)} ${text.y} cm\n${path}S Q`,
 			);
 		}
-		x += glyph.advance * scale;
+		x += glyph.advance * scale + (text.spacing ?? 0);
 	}
 	return parts.length > 1 ? parts.join('\n') : '';
 }

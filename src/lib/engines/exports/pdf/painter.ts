@@ -30,6 +30,7 @@ export class PdfPainter {
 		this.#shapes(shapeLayersUnder);
 		this.#figure('Fills', fillParts(drawing));
 		this.#shapes(shapeLayersOver);
+		this.#nameHalos();
 		for (const line of drawing.lines) {
 			this.#figure(lineWords(line.rank), [lineOperators(drawing, line)]);
 		}
@@ -63,12 +64,18 @@ export class PdfPainter {
 		this.document.addContent('Q');
 	}
 
+	/** Under the border lines, which stay whole where a name goes over one. */
+	#nameHalos(): void {
+		const names = this.drawing.texts.filter(({ layer, halo }) => layer === 'label' && halo);
+		if (names.length) this.layers.within(textWords.label, () => this.#halos(names));
+	}
+
 	/** Texts on the map belong to the figure; their halos are none of its content. */
 	#names(layer: DrawnText['layer']): void {
 		const texts = this.drawing.texts.filter((text) => text.layer === layer);
 		if (!texts.length) return;
 		this.layers.within(textWords[layer], () => {
-			this.#halos(texts);
+			if (layer !== 'label') this.#halos(texts);
 			this.contents.figure.push(this.document.markStructureContent('Figure'));
 			texts.forEach((text) => this.#set(text));
 			this.document.endMarkedContent();
@@ -101,9 +108,10 @@ export class PdfPainter {
 		this.document.endMarkedContent();
 	}
 
-	#set({ face, size, hex, text, x, y }: DrawnText): void {
+	#set({ face, size, hex, text, x, y, spacing = 0 }: DrawnText): void {
 		this.document.font(face, size * pointsPerUnit).fillColor(hex);
-		const options = { lineBreak: false, baseline: 'alphabetic' } as const;
+		const apart = spacing ? { characterSpacing: spacing * pointsPerUnit } : {};
+		const options = { lineBreak: false, baseline: 'alphabetic', ...apart } as const;
 		this.document.text(text, Number(decimal(x * pointsPerUnit)), y * pointsPerUnit, options);
 	}
 }

@@ -9,10 +9,11 @@ import { gridOf, type Cell } from './legend-grid.ts';
 import { noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
 import { knownRanks, rankSamples, weakSample } from './legend-lines.ts';
 
-type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines'>;
+type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines' | 'themed'>;
 
 /**
- * The legend: a box for every ink in use, with its number and its hatch, and its name beside it; then what
+ * The legend: a box for every ink in use, with its number (none where it stands for regions that are not
+ * told) and its hatch, and its name beside it; then what
  * lines stand for. In: `inUse` in ascending order; those beyond the palette have no colour yet and no box;
  * `see` gives a colour as the reader sees it. Out: rects, texts and shapes of layer `legend`, within the
  * place; a name too long for its lines is shortened.
@@ -41,9 +42,11 @@ export function drawLegend(
 		words,
 		ranks.map((rank) => rank.words),
 	);
-	const drawn = used.map((ink, i) =>
-		entry(place, grid.inkCells[i], shown.inks[ink], ink, words[i], see),
-	);
+	const told = shown.themed?.told ?? Infinity;
+	const drawn = used.map((ink, i) => {
+		const number = { ink, numbered: ink < told };
+		return entry(place, grid.inkCells[i], shown.inks[ink], number, words[i], see);
+	});
 	return joined([
 		{ ...noLegend, texts: titleOf(place) },
 		...drawn,
@@ -84,7 +87,7 @@ function entry(
 	place: LegendPlace,
 	{ x, y, high: row }: Cell,
 	ink: DrawnInk,
-	number: number,
+	{ ink: number, numbered }: { ink: number; numbered: boolean },
 	words: string,
 	see: (hex: string) => string,
 ): DrawnLegend {
@@ -101,7 +104,7 @@ function entry(
 	const left = Math.round(x + size * (boxWide + gap));
 	return {
 		rects: [box(x, top, wide, high, ink.shown)],
-		texts: [figure, ...wordsBeside(place, words, left, top + high / 2)],
+		texts: [...(numbered ? [figure] : []), ...wordsBeside(place, words, left, top + high / 2)],
 		shapes: ink.hatch ? hatchedBox(ink, number, x, top, wide, high, see) : [],
 	};
 }

@@ -6,10 +6,9 @@ import { labelInk } from '../../colour/index.ts';
 import type { Reader } from '../../palettes/palette.ts';
 import type { Coverage } from '../../boundaries/coverage.ts';
 import type { DrawnRect, DrawnText } from '../drawing.ts';
-import { drawnRings } from '../fills.ts';
 import type { FrameReport } from '../frame-report.ts';
 import { drawGraticule } from '../graticule/draw-graticule.ts';
-import { clusterName } from '../insets/cluster-name.ts';
+import { clusterName, whereabouts } from '../insets/cluster-name.ts';
 import { drawInsets } from '../insets/draw-insets.ts';
 import { freeGrid } from '../insets/free-grid.ts';
 import { ratioWords } from '../insets/inset-size.ts';
@@ -20,6 +19,7 @@ import type { DrawnShape } from '../shapes.ts';
 import { cleanText } from '../type/clean-text.ts';
 import { enclosedGaps } from './lakes.ts';
 import { northArrow } from './north-arrow.ts';
+import { paperThatFits } from './paper-that-fits.ts';
 
 export interface DrawnFrame {
 	shapes: DrawnShape[];
@@ -38,6 +38,10 @@ export interface FrameInput {
 	scale: number;
 	/** names on the map, which the arrow and figures keep clear of */
 	labels: DrawnText[];
+	/** where something of the collar stands on the map's box */
+	obstacles: readonly Box[];
+	/** the box that another layout would leave for the map, between its figures */
+	roomOn: (layout: SheetLayout) => Box;
 	reader: Reader;
 	see: (hex: string, reader: Reader) => string;
 }
@@ -48,18 +52,11 @@ const neat = { line: 25, outline: 12 };
 export function drawFrame(input: FrameInput): DrawnFrame {
 	const { layout, placed, scale, labels, coverage } = input;
 	const { frame } = layout;
-	const gaps = frame.lakes ? enclosedGaps(coverage, placed.arcs) : [];
-	const seaInk = labelInk(frame.sea ? input.see(frame.sea, input.reader) : '#ffffff');
+	const gaps = frame.lakes ? enclosedGaps(coverage, placed.arcs, placed.sides) : [];
+	const seaInk = labelInk(frame.sea ?? '#ffffff');
 	const graticule = drawGraticule(placed, frame, scale, labels);
 	const insets = drawInsets(placed, scale, layout.scaleBar, seaInk);
-	const arrow = frame.northArrow
-		? northArrow(
-				placed,
-				freeGrid(placed.arcs, drawnRings(placed.rings, placed.arcs), placed.box),
-				scale,
-				[...labels, ...graticule.texts],
-			)
-		: { shapes: [], texts: [], reason: null };
+	const arrow = frame.northArrow ? arrowOf(input, graticule.texts) : noArrow;
 	return {
 		shapes: [
 			...(frame.sea ? [tint('sea', [groundOf(placed)], frame.sea, input)] : []),
@@ -77,13 +74,26 @@ export function drawFrame(input: FrameInput): DrawnFrame {
 		rects: insets.rects,
 		report: reportOf(
 			input,
-			[...placed.told, ...graticule.told],
+			[...toldOf(input), ...graticule.told],
 			arrow.reason,
 			graticule.steps,
 			gaps.length,
 		),
 		sentence: sentenceOf(placed),
 	};
+}
+
+const noArrow = { shapes: [], texts: [], reason: null };
+
+function arrowOf({ placed, scale, labels, obstacles }: FrameInput, figures: DrawnText[]) {
+	const grid = freeGrid(placed.arcs, placed.rings, placed.box);
+	return northArrow(placed, grid, scale, [...labels, ...figures], obstacles);
+}
+
+/** What could not be done as asked. */
+function toldOf({ placed, layout, roomOn }: FrameInput): string[] {
+	if (!placed.tooLarge) return placed.told;
+	return [...placed.told, paperThatFits(placed.tooLarge, layout, roomOn)];
 }
 
 const corners = ({ x, y, width, height }: Box): number[] => [
@@ -153,7 +163,7 @@ function reportOf(
 			const { id, regions, areaKm2, place, suits, speck } = cluster;
 			return {
 				...{ id, areaKm2, place, suits, speck, regions: regions.length },
-				name: cleanText(clusterName(coverage, groups, cluster)),
+				name: cleanText(`${clusterName(coverage, groups, cluster)}${whereabouts(cluster)}`),
 				ratio: box?.ratio ?? null,
 				cornerMm: box ? [box.outer.x / 100, box.outer.y / 100] : null,
 			};

@@ -1,17 +1,23 @@
 /**
  * Gaps that regions enclose, as closed paths on the paper. In: the coverage's outer edges and where they
- * came to lie. Out: one path a gap. Walked with the gap on the left, taking the leftmost way where several
+ * came to lie; the sides of the lines that are drawn. Out: one path a gap. Walked with the gap on the left, taking the leftmost way where several
  * edges meet, a gap runs anticlockwise and the ground around the regions clockwise (faces of a planar map,
  * as in Edmonds 1960). Gaps across the cut of the map are left out.
  */
 import type { Coverage } from '../../boundaries/coverage.ts';
 import { ringDoubleArea, ringPoints } from '../fills.ts';
+import type { ArcSides } from '../lines.ts';
 import type { SheetArcs } from '../plane/quantise.ts';
 
 /** Smaller gaps, in square hundredths of a millimetre, are slips of the file or not to be seen. */
 const least = 400;
 
-export function enclosedGaps(coverage: Coverage, arcs: SheetArcs): number[][] {
+export function enclosedGaps(coverage: Coverage, arcs: SheetArcs, drawn: ArcSides): number[][] {
+	// an edge that is drawn in pieces, or not, was cut by the supplier or by the map
+	const isCut = (edge: number) => {
+		const arc = edge < 0 ? ~edge : edge;
+		return drawn.arcLeft[arc] < 0 && drawn.arcRight[arc] < 0;
+	};
 	const edges = outerEdges(coverage);
 	const leaving = new Map<string, number[]>();
 	for (const edge of edges) {
@@ -23,7 +29,7 @@ export function enclosedGaps(coverage: Coverage, arcs: SheetArcs): number[][] {
 	for (const edge of edges) {
 		if (used.has(edge)) continue;
 		const ring = walk(coverage, edge, leaving, used);
-		if (!ring) continue;
+		if (!ring || ring.some(isCut)) continue;
 		const points = ringPoints(arcs, Int32Array.from(ring));
 		if (points.length >= 6 && ringDoubleArea(points) > 2 * least) gaps.push(points);
 	}

@@ -54,6 +54,7 @@ export function northArrow(
 	grid: FreeGrid,
 	scale: number,
 	texts: DrawnText[],
+	obstacles: readonly Box[],
 ): DrawnArrow {
 	const off = northOff(placed);
 	const none = (reason: string) => ({ shapes: [], texts: [], reason });
@@ -63,7 +64,8 @@ export function northArrow(
 			`No north arrow is drawn: north turns up to ${off.toFixed(off < 10 ? 1 : 0)}° away from straight up on this map, and an arrow is honest only within ${honestWithin}°. A graticule shows north everywhere.`,
 		);
 	const size = { width: Math.round(high * 0.4 * scale), height: Math.round(high * scale) };
-	const spot = freeCorner(placed, grid, size, texts);
+	const others = [...placed.insets.map(({ outer }) => outer), ...obstacles];
+	const spot = freeCorner(placed.box, grid, size, texts, others);
 	if (!spot)
 		return none('No north arrow is drawn: there is no free place for it beside the regions.');
 	return { ...drawn(spot, scale), reason: null };
@@ -71,10 +73,11 @@ export function northArrow(
 
 /** The first free place: the upper right corner, then along the upper edge, then elsewhere at the edges. */
 function freeCorner(
-	{ box, insets }: OnPaper,
+	box: Box,
 	grid: FreeGrid,
 	{ width, height }: { width: number; height: number },
 	texts: DrawnText[],
+	others: readonly Box[],
 ): Box | null {
 	const air = Math.round(height * 0.2);
 	const rights = [box.x + box.width - width - air, box.x + air];
@@ -98,7 +101,7 @@ function freeCorner(
 				width: width + 2 * air,
 				height: height + 2 * air,
 			};
-			if (insets.some(({ outer }) => meets(outer, stand))) return false;
+			if (others.some((other) => meets(other, stand))) return false;
 			if (texts.some((text) => overlaps(text, asText(stand)))) return false;
 			return isFree(grid, stand);
 		});

@@ -72,7 +72,7 @@ export function graticuleFigures({ lines, seen }: Graticule, ground: FigureGroun
 			hex: '#000000',
 		};
 		if (more.length) figure.halo = '#ffffff';
-		if ([...figures, ...more].some((other) => overlaps(figure, other))) return false;
+		if ([...figures, ...ground.labels].some((other) => overlaps(figure, other))) return false;
 		figures.push(figure);
 		return true;
 	};

@@ -1,4 +1,6 @@
 import type { Coverage } from '../../boundaries/coverage.ts';
+import { latitudeWords, longitudeWords } from '../plane/degrees.ts';
+import { wrapLon } from '../plane/extent.ts';
 import type { Cluster } from './clusters.ts';
 
 /**
@@ -19,3 +21,7 @@ export function clusterName(
 	if (others.length === 1) return `${part(first)} and ${part(others[0])}`;
 	return `${part(first)} and ${others.length} more`;
 }
+
+/** Where a group lies, to a degree: ` (79° N 20° E)`. */
+export const whereabouts = ({ at: [lon, lat] }: Pick<Cluster, 'at'>): string =>
+	` (${latitudeWords(Math.round(lat))} ${longitudeWords(wrapLon(Math.round(lon)))})`;

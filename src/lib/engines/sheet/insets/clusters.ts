@@ -8,17 +8,21 @@
  */
 import type { Coverage } from '../../boundaries/coverage.ts';
 import { sweptKm2 } from '../../geometry/index.ts';
-import { runOn, type LonLat } from '../plane/ring-lonlat.ts';
+import { ringLonLat, runOn, type LonLat } from '../plane/ring-lonlat.ts';
 
 export interface Cluster {
 	/** key of the region that its largest part belongs to, and where that part lies to a degree */
 	id: string;
+	/** longitude and latitude of a place in its largest part, degrees */
+	at: [number, number];
 	parts: number[];
 	areaKm2: number;
 	/** area of each region in it, largest first */
 	regions: { region: number; areaKm2: number }[];
 }
 
+/** Half the surface of the WGS 84 ellipsoid. */
+const halfGlobeKm2 = 255_032_811;
 const earthKm = 6371.0088;
 const gapLimits = { share: 0.35, least: 100, most: 300 };
 
@@ -57,19 +61,19 @@ function unionFind(count: number) {
 }
 
 /** Area of each part, km². */
-function partAreas({
-	arcPoints,
-	arcStarts,
-	ringArcs,
-	ringStarts,
-	partRings,
-}: Coverage): Float64Array {
+function partAreas(coverage: Coverage): Float64Array {
+	const { ringArcs, ringStarts, partRings } = coverage;
 	return Float64Array.from({ length: partRings.length - 1 }, (_, part) => {
 		let sum = 0;
-		for (let i = ringStarts[partRings[part]]; i < ringStarts[partRings[part + 1]]; i++) {
-			const arc = ringArcs[i] < 0 ? ~ringArcs[i] : ringArcs[i];
-			const swept = sweptKm2(arcPoints, arcStarts[arc], arcStarts[arc + 1] - 1);
-			sum += ringArcs[i] < 0 ? -swept : swept;
+		for (let ring = partRings[part]; ring < partRings[part + 1]; ring++) {
+			const points = ringLonLat(
+				coverage,
+				ringArcs.subarray(ringStarts[ring], ringStarts[ring + 1]),
+			);
+			const swept = sweptKm2(Float64Array.from(points.flat()), 0, points.length - 1);
+			const turns = Math.abs(points[points.length - 1][0] - points[0][0]) > 180;
+			// a ring round a pole parts its half of the globe
+			sum += turns ? halfGlobeKm2 - Math.abs(swept) : swept;
 		}
 		return Math.abs(sum);
 	});
@@ -198,10 +202,11 @@ function clusterOf(coverage: Coverage, parts: number[], areas: Float64Array): Cl
 	);
 	const arc = ringArcs[ringStarts[partRings[largest]]];
 	const at = 2 * arcStarts[arc < 0 ? ~arc : arc];
-	const place = `${Math.round(arcPoints[at])} ${Math.round(arcPoints[at + 1])}`;
+	const place: [number, number] = [arcPoints[at], arcPoints[at + 1]];
 	const regions = [...byRegion].map(([number, area]) => ({ region: number, areaKm2: area }));
 	return {
-		id: `${keys[owner]} @ ${place}`,
+		id: `${keys[owner]} @ ${place.map(Math.round).join(' ')}`,
+		at: place,
 		...{ parts, areaKm2 },
 		regions: regions.sort((a, b) => b.areaKm2 - a.areaKm2 || a.region - b.region),
 	};

@@ -16,19 +16,25 @@ export interface FreeGrid {
 	sums: Uint32Array;
 }
 
-const cellsAcross = 160;
+const cellsAcross = 140;
+/** Side of a cell of a small raster: see `rasterise`. */
+const rasterCell = 20;
 
-export function freeGrid(arcs: SheetArcs, rings: Int32Array[][], box: Box): FreeGrid {
-	const cell = Math.max(20, Math.ceil(Math.max(box.width, box.height) / cellsAcross));
-	const [columns, rows] = [Math.ceil(box.width / cell), Math.ceil(box.height / cell)];
-	const takenCells = new Uint8Array(columns * rows);
-	const raster = rasterise(arcs, rings, box);
-	raster.owner.forEach((owner, i) => {
-		if (owner === paper) return;
-		const column = Math.floor(((i % raster.columns) * raster.cell) / cell);
-		const row = Math.floor((Math.floor(i / raster.columns) * raster.cell) / cell);
-		if (column < columns && row < rows) takenCells[row * columns + column] = 1;
+export function freeGrid(
+	{ arcPoints, arcStarts }: SheetArcs,
+	rings: Int32Array[][],
+	box: Box,
+): FreeGrid {
+	const cell = Math.max(rasterCell, Math.ceil(Math.max(box.width, box.height) / cellsAcross));
+	// the raster's cells are of one size, so the sheet is made smaller for it
+	const less = rasterCell / cell;
+	const small: SheetArcs = { arcPoints: arcPoints.map((at) => Math.round(at * less)), arcStarts };
+	const { x, y, width, height } = box;
+	const raster = rasterise(small, rings, {
+		...{ x: x * less, y: y * less, width: width * less, height: height * less },
 	});
+	const { columns, rows } = raster;
+	const takenCells = Uint8Array.from(raster.owner, (owner) => (owner === paper ? 0 : 1));
 	return { box, cell, columns, rows, sums: summed(takenCells, columns, rows) };
 }
 

@@ -43,6 +43,8 @@ export interface MapOnPaper {
 	fitIn: (box: Box) => MapFit;
 	arcsAt: (fit: Fit) => SheetArcs;
 	rings: Int32Array[][];
+	/** where something of the collar stands on the box */
+	obstacles: readonly Box[];
 }
 
 export interface InsetsOnPaper {
@@ -54,7 +56,10 @@ export interface InsetsOnPaper {
 }
 
 /** Shares of the box that are kept free for insets, tried in turn. */
-const strips = [0, 0.2, 0.28, 0.38, 0.5];
+const strips = [0, 0.12, 0.2, 0.28, 0.38, 0.5];
+/** What the map's growing smaller costs, against the costs of `placeInsets`; and an inset without room. */
+const lossWeight = 5;
+const noRoom = 20;
 
 /** In: groups that get a box, and the arcs of each. */
 export function insetsOnPaper(
@@ -72,19 +77,25 @@ export function insetsOnPaper(
 		draftOf(coverage, layout, groups, cluster, lines, map.chosen),
 	);
 	const dress = insetDress(map.scale, layout.scaleBar);
+	let best: { cost: number; settle: () => InsetsOnPaper } | null = null;
+	const largest = map.fitIn(map.box).fit.scale;
 	for (const strip of strips) {
 		const fitted = map.fitIn(bestStrip(map, strip));
+		const loss = lossWeight * (1 - fitted.fit.scale / largest);
+		// a wider strip costs more than all that it could gain
+		if (best && loss >= best.cost) break;
 		const arcs = map.arcsAt(fitted.fit);
 		const grid = freeGrid(arcs, drawnRings(map.rings, arcs), map.box);
 		const ground = { grid, dress, mapRatio: fitted.ratio ?? 1, scale: map.scale };
 		const spots = placeInsets(
 			drafts.map((draft) => draft.wish(fitted.fit, map.box)),
-			ground,
+			{ ...ground, obstacles: map.obstacles },
 		);
-		if (spots.includes(null) && strip !== strips[strips.length - 1]) continue;
-		return settled(boxed, drafts, spots, fitted, arcs);
+		const cost = spots.reduce((sum, spot) => sum + (spot ? spot.cost : noRoom), loss);
+		if (best && best.cost <= cost) continue;
+		best = { cost, settle: () => settled(boxed, drafts, spots, fitted, arcs) };
 	}
-	throw new RangeError('no strips to try');
+	return best!.settle();
 }
 
 /** The box less a strip along its left side or its foot, whichever costs less scale. */

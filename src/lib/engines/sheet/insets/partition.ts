@@ -3,7 +3,7 @@ import type { SheetLayout } from '../layout.ts';
 import type { Drawable } from '../plane/drawable.ts';
 import type { Box } from '../plane/fit.ts';
 import { cleanText } from '../type/clean-text.ts';
-import { clusterName } from './cluster-name.ts';
+import { clusterName, whereabouts } from './cluster-name.ts';
 import { clustersOf } from './clusters.ts';
 import { shareOut, type SharedOut } from './share-out.ts';
 
@@ -66,6 +66,8 @@ export function missingWords(
 	{ clusters }: Partition,
 ): string {
 	const out = clusters.filter(({ place }) => place === 'out');
-	const names = new Set(out.map((one) => cleanText(clusterName(coverage, groups, one))));
+	const names = new Set(
+		out.map((one) => cleanText(`${clusterName(coverage, groups, one)}${whereabouts(one)}`)),
+	);
 	return names.size ? `Not on this sheet: ${[...names].join(', ')}.` : '';
 }

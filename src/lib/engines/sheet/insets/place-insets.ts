@@ -22,14 +22,19 @@ export interface InsetSpot {
 	outer: Box;
 	inner: Box;
 	ratio: number;
+	/** how ill it suits: radians off the true direction, and what smallness and distance from the edge cost */
+	cost: number;
 	/** what was set by hand and could not be kept */
 	told: string[];
 }
 
-/** Regions in an inset may take so much of the shorter side of the map's box, and at least so much, on A4. */
-const sides = { most: 0.42, least: 700 };
+/**
+ * Regions in an inset may be as long as these shares of the map's box, and are at least so long on A4; if
+ * they are drawn larger than on the map, at most so long.
+ */
+const sides = { ofShorter: 0.42, ofBox: 0.3, least: 700, enlarged: 1700 };
 /** A smaller scale is worth this many radians of direction; the scale of the map as many. */
-const perStep = 0.15;
+const perStep = 0.3;
 const sameScale = 0.6;
 /** Standing away from the edges by the whole box costs so much. */
 const offEdge = 2;
@@ -43,21 +48,31 @@ interface Ground {
 	/** 1 : n of the map itself */
 	mapRatio: number;
 	scale: number;
+	obstacles: readonly Box[];
 }
 
 /** Round ratios at which the regions are neither too large nor too small, the largest scale first. */
-function ratiosFor(
-	{ width, height, ratio }: InsetWish,
-	{ grid, mapRatio, scale }: Ground,
-): number[] {
-	if (ratio !== null) return [ratio];
-	const longer = Math.max(width, height);
-	const most = sides.most * Math.min(grid.box.width, grid.box.height);
-	const least = Math.min(sides.least * scale, most / 3);
-	const fits = (one: number) => longer / one <= most && longer / one >= least;
-	const power = 10 ** Math.floor(Math.log10(longer / most));
-	const round = [power, 10 * power, 100 * power].flatMap((ten) => steps.map((step) => step * ten));
-	return [mapRatio, ...round].filter(fits).sort((a, b) => a - b);
+function ratiosFor(wish: InsetWish, { grid, mapRatio, scale }: Ground): number[] {
+	if (wish.ratio !== null) return [wish.ratio];
+	const { width, height } = grid.box;
+	const shorter = sides.ofShorter * Math.min(width, height);
+	const across = Math.max(shorter, sides.ofBox * width);
+	const down = Math.max(shorter, sides.ofBox * height);
+	const longer = Math.max(wish.width, wish.height);
+	const least = Math.min(sides.least * scale, shorter / 3);
+	const fits = (ratio: number) => {
+		const within = wish.width / ratio <= across && wish.height / ratio <= down;
+		const most = ratio < mapRatio * 0.999 ? sides.enlarged * scale : Infinity;
+		return within && longer / ratio >= least && longer / ratio <= most;
+	};
+	const power = 10 ** Math.floor(Math.log10(longer / Math.max(across, down)) - 1);
+	const tens = [power, 10 * power, 100 * power, 1000 * power];
+	const round = tens.flatMap((ten) => steps.map((step) => step * ten)).filter(fits);
+	const all = fits(mapRatio) ? [mapRatio, ...round] : round;
+	// what is as long as the paper at every scale is as large as fits
+	return all.length
+		? all.sort((a, b) => a - b)
+		: [Math.max(wish.width / across, wish.height / down)];
 }
 
 const overlap = (a: Box, b: Box, apart: number): boolean =>
@@ -66,9 +81,9 @@ const overlap = (a: Box, b: Box, apart: number): boolean =>
 	a.y < b.y + b.height + apart &&
 	b.y < a.y + a.height + apart;
 
-function isClear(box: Box, { grid, scale }: Ground, others: Box[]): boolean {
+function isClear(box: Box, { grid, scale, obstacles }: Ground, others: Box[]): boolean {
 	const apart = clearance * scale;
-	if (others.some((other) => overlap(box, other, apart))) return false;
+	if ([...others, ...obstacles].some((other) => overlap(box, other, apart))) return false;
 	// against the edges of the map's box nothing need be kept clear
 	const [left, top] = [Math.max(grid.box.x, box.x - apart), Math.max(grid.box.y, box.y - apart)];
 	const right = Math.min(grid.box.x + grid.box.width, box.x + box.width + apart);
@@ -98,7 +113,7 @@ function bestPlace(frame: Box, wish: InsetWish, ground: Ground, others: Box[]) {
 	const [wide, high] = [grid.box.width - frame.width, grid.box.height - frame.height];
 	if (wide < 0 || high < 0) return null;
 	const places = (room: number) => {
-		const count = Math.max(1, Math.floor(room / grid.cell));
+		const count = Math.max(1, Math.floor(room / (1.5 * grid.cell)));
 		return Array.from({ length: count + 1 }, (_, i) => Math.round((room * i) / count));
 	};
 	let best: { box: Box; cost: number } | null = null;
@@ -124,7 +139,10 @@ function spotFor(wish: InsetWish, ground: Ground, others: Box[]): Omit<InsetSpot
 		const total = found.cost + step * perStep - (ratio === ground.mapRatio ? sameScale : 0);
 		if (best && best.cost <= total) return;
 		const { box } = found;
-		best = { spot: { outer: box, inner: movedTo(inner, box.x, box.y), ratio }, cost: total };
+		best = {
+			spot: { outer: box, inner: movedTo(inner, box.x, box.y), ratio, cost: total },
+			cost: total,
+		};
 	});
 	return (best as { spot: Omit<InsetSpot, 'told'> } | null)?.spot ?? null;
 }

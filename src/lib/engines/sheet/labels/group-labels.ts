@@ -1,18 +1,31 @@
 import type { DrawnText } from '../drawing.ts';
+import type { ArcSides } from '../lines.ts';
+import type { Box } from '../plane/fit.ts';
+import type { SheetArcs } from '../plane/quantise.ts';
 import { cleanText } from '../type/clean-text.ts';
-import { textWidth } from '../type/text-width.ts';
-import { blockOut } from './block-out.ts';
-import type { LabelInput } from './label-sheet.ts';
+import { isSetIn, textWidth } from '../type/text-width.ts';
 import { headroom } from './headroom.ts';
 import { spotInside } from './inside.ts';
 import { linesOfName } from './lines-of-name.ts';
 import type { Pole } from './pole.ts';
-import { rasterise, type RegionRaster } from './region-raster.ts';
+import { outline, rasterise, type RegionRaster } from './region-raster.ts';
 import { setAt, textBox } from './text-box.ts';
 
 const face = 'serif-bold';
 /** A smaller size is tried until this share of the names fits. */
 const wanted = 0.85;
+/** Between spaced capitals, in parts of the type size. Source: Imhof 1975, spaced names for areas. */
+const spacing = 0.35;
+/** Clear above and below spaced capitals together, in parts of their size, so that they read as one. */
+const air = 0.8;
+
+export interface GroupInput {
+	arcs: SheetArcs;
+	rings: Int32Array[][];
+	sides: ArcSides;
+	groups: (string | null)[];
+	box: Box;
+}
 
 /** The middle of the cells of each owner. */
 function middlesOf({ owner, columns, x, y, cell }: RegionRaster, groups: number): Pole[] {
@@ -30,43 +43,68 @@ function middlesOf({ owner, columns, x, y, cell }: RegionRaster, groups: number)
 	}));
 }
 
+/** Capitals as they are cut for signs: Greek ones have no accent. */
+function capitals(name: string): string {
+	const upper = name.toUpperCase();
+	if (!/\p{Script=Greek}/u.test(upper)) return upper;
+	return upper
+		.normalize('NFD')
+		.replace(/\u0301/g, '')
+		.normalize('NFC');
+}
+
+export interface GroupNames {
+	texts: DrawnText[];
+	/** type size that was used */
+	size: number;
+	/** share of the groups that are named */
+	share: number;
+}
+
 /**
- * Names of the level above at one of the sizes, the first that suits, each inside its group and haloed because it crosses several fills.
- * Regions without a group have no name here. Groups whose name finds no room are left out.
+ * Names of the level above at one of the sizes, the first that suits, each inside its group and haloed
+ * because it crosses several fills; over nothing that is `busy`. `spaced`: in spaced capitals, between
+ * the names of regions. Regions without a group have no name here; groups whose name finds no room, or
+ * has letters that the fonts lack, are left out.
  */
 export function labelGroups(
-	{ arcs, rings, sides, groups, box, obstacles }: Omit<LabelInput, 'names' | 'areas' | 'scale'>,
+	{ arcs, rings, sides, groups, box }: GroupInput,
 	sizes: number[],
-): DrawnText[] {
+	busy: Uint8Array | undefined,
+	spaced: boolean,
+): GroupNames {
 	const names = [...new Set(groups.filter((group) => group !== null))];
 	const members = names.map((name) => rings.filter((_, region) => groups[region] === name).flat());
 	const groupAt = (region: number) => (region < 0 ? undefined : groups[region]);
-	const raster = rasterise(
-		arcs,
-		members,
-		box,
-		(arc) => groupAt(sides.arcLeft[arc]) !== groupAt(sides.arcRight[arc]),
+	const raster = rasterise(arcs, members, box, (arc) =>
+		groupAt(sides.arcLeft[arc]) !== groupAt(sides.arcRight[arc]) ? outline : null,
 	);
+	const room = headroom(raster, busy);
 	const middles = middlesOf(raster, names.length);
-	blockOut(raster, obstacles);
-	const room = headroom(raster);
-	const setIn = (size: number) =>
-		names.map((name, group) => {
-			const width = (text: string) => textWidth(face, size, text);
-			for (const lines of linesOfName(cleanText(name), width)) {
-				const set = textBox(lines, face, size);
-				const middle = middles[group];
-				const spot = spotInside(raster, room, group, middle, set.width, set.height);
-				if (spot) {
-					return setAt(set, spot.x, spot.y, { layer: 'label', hex: '#000000', halo: '#ffffff' });
-				}
+	const said = names.map((name) => (spaced ? capitals(cleanText(name)) : cleanText(name)));
+	const setIn = (size: number) => {
+		const apart = spaced ? Math.round(size * spacing) : 0;
+		const width = (text: string) => textWidth(face, size, text) + apart * text.length;
+		return said.map((name, group): DrawnText[] => {
+			if (!isSetIn(face, name)) return [];
+			for (const lines of linesOfName(name, width)) {
+				const set = textBox(lines, face, size, apart);
+				const pole = middles[group];
+				const [wide, high] = [set.width + size / 2, set.height + (spaced ? size * air : 0)];
+				const spot = spotInside(raster, room, group, pole, wide, high);
+				if (!spot) continue;
+				const rest = { layer: 'label', hex: '#000000', halo: '#ffffff' } as const;
+				return setAt(set, spot.x, spot.y, { ...rest, ...(apart ? { spacing: apart } : {}) });
 			}
 			return [];
 		});
+	};
 	let labels: DrawnText[][] = [];
-	for (const size of sizes) {
+	let [size, share] = [0, 0];
+	for (size of sizes) {
 		labels = setIn(size);
-		if (labels.filter((lines) => lines.length).length >= wanted * names.length) break;
+		share = labels.filter((lines) => lines.length).length / Math.max(1, names.length);
+		if (share >= wanted) break;
 	}
-	return labels.flat();
+	return { texts: labels.flat(), size, share };
 }

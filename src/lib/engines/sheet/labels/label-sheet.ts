@@ -3,108 +3,192 @@
  * a level, because a size that follows the room would look like rank. A level is lettered where at
  * least 60 % of it fits; else the level above is, and the regions are listed beside the map.
  */
-import type { ArcSides } from '../lines.ts';
+import type { DrawnText } from '../drawing.ts';
+import { leastLegiblePt, type Lettering } from '../layout/lettering.ts';
 import type { Box } from '../plane/fit.ts';
-import type { SheetArcs } from '../plane/quantise.ts';
-import { textWidth } from '../type/text-width.ts';
-import { blockOut } from './block-out.ts';
-import { labelGroups } from './group-labels.ts';
-import { headroom } from './headroom.ts';
-import { linesOfName } from './lines-of-name.ts';
-import { poleOf } from './pole.ts';
-import { labelFace, labelRegions, type Labelled, type LabelGround } from './region-labels.ts';
-import { smallerSide } from '../smaller-side.ts';
-import { rasterise } from './region-raster.ts';
+import { labelGroups, type GroupInput, type GroupNames } from './group-labels.ts';
+import type { Leader } from './leader.ts';
+import { letteringNotes } from './lettering-notes.ts';
+import { nameTask } from './name-task.ts';
+import { setNumbers } from './numbers.ts';
+import { handNames, labelRegions, type NameTask } from './region-labels.ts';
+import {
+	isOnSheet,
+	noAnchor,
+	type DrawnLettering,
+	type HowNamed,
+	type SetName,
+} from './set-name.ts';
+import { textsOf } from './texts-of-names.ts';
 
-/** Type sizes on A4, hundredths of a millimetre: 9, 8, 7 and 6 point, and 5 if it must be. */
-const sizes = [318, 282, 247, 212];
-const smallest = 176;
-/** For the level above: 10, 9, 8 and 7 point. */
-const groupSizes = [353, 318, 282, 247];
+/** Hundredths of a millimetre to a point (1/72 inch). */
+export const point = 2540 / 72;
+/** Type sizes on A4, in points; grown with the paper, but never below what can be read. */
+const sizes = [9, 8, 7, 6, 5];
+/** Tried on large paper as well, before the names are given up. */
+const small = [6, 5.5, 5];
+/** For the level above. */
+const groupSizes = [10, 9, 8, 7];
+/** Beside names of regions, in spaced capitals. */
+const spacedSizes = [10, 9, 8, 7];
 /** A larger size may cost this share of the names that fit at the smallest. */
 const worth = 0.03;
 const enough = 0.6;
+/** Names of the level above stand between those of regions where this share of these has room enough. */
+const suits = 0.85;
 /** Without a level above, a map with some names says more than a map with none. */
 const enoughAlone = 0.2;
 
-export interface LabelInput {
-	arcs: SheetArcs;
-	rings: Int32Array[][];
-	sides: ArcSides;
+export interface LabelInput extends GroupInput {
+	keys: string[];
 	/** cleaned, in region order */
 	names: string[];
-	groups: (string | null)[];
 	areas: Float64Array;
-	box: Box;
 	scale: number;
-	/** boxes on the paper where no name may stand: text blocks, a legend on the map; `Collar.obstacles` */
+	lettering: Lettering;
+	/** what stands on the map already: insets' frames, text blocks, a legend laid over it */
 	obstacles: readonly Box[];
+	/** the whole paper without its edge, which names set by hand do not leave */
+	paper: Box;
 }
 
-function coastalOf({ sides, names }: LabelInput): Uint8Array {
-	const coastal = new Uint8Array(names.length);
-	sides.arcLeft.forEach((left, arc) => {
-		const right = sides.arcRight[arc];
-		if (left < 0 && right >= 0) coastal[right] = 1;
-		if (right < 0 && left >= 0) coastal[left] = 1;
-	});
-	return coastal;
+export interface Labelled {
+	texts: DrawnText[];
+	leaders: Leader[];
+	unplaced: number[];
+	lettering: DrawnLettering;
 }
 
-/** 1 for regions where some name might stand: inside, or, on a coast, beside them. */
-function hopefulOf({ arcs, rings, scale }: LabelInput, coastal: Uint8Array): Uint8Array {
-	return Uint8Array.from(rings, (list, region) =>
-		coastal[region] || smallerSide(arcs, list) >= smallest * scale ? 1 : 0,
-	);
-}
-
-function groundOf(input: LabelInput, coastal: Uint8Array, hopeful: Uint8Array): LabelGround {
-	const { arcs, rings, names, areas, box, obstacles } = input;
-	const raster = rasterise(arcs, rings, box);
-	blockOut(raster, obstacles);
+/** What a sheet without names tells of its lettering. */
+export function unlettered(regions: number): Labelled {
+	const how = Array.from({ length: regions }, (): HowNamed => 'off');
+	const none = { numbers: new Uint32Array(regions), short: new Uint8Array(regions) };
+	const anchors = new Int32Array(2 * regions).fill(noAnchor);
+	const points = { regions: null, groups: null };
 	return {
-		raster,
-		room: headroom(raster),
-		// no pole is sought where no name could stand anyway
-		poles: rings.map((list, region) => (hopeful[region] ? poleOf(arcs, list) : null)),
-		ways: names.map((name) =>
-			name ? linesOfName(name, (text) => textWidth(labelFace, 1000, text)) : [],
-		),
-		coastal,
-		order: names.map((_, region) => region).sort((a, b) => areas[b] - areas[a] || a - b),
+		...{ texts: [], leaders: [], unplaced: how.map((_, region) => region) },
+		lettering: { how, ...none, anchors, points, notes: [] },
 	};
 }
 
-export function labelSheet(input: LabelInput): Labelled {
-	const { names, groups } = input;
-	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
-	const asked = grouped ? enough : enoughAlone;
-	const coastal = coastalOf(input);
-	const hopeful = hopefulOf(input, coastal);
-	// a sheet of specks: not even looked at, for too few of its names could stand
-	const possible = hopeful.reduce((sum, one) => sum + one, 0) / Math.max(1, names.length);
-	const named = possible >= asked && nameRegions(input, groundOf(input, coastal, hopeful), asked);
-	if (named) return named;
-	const unplaced = names.map((_, region) => region);
-	if (!grouped) return { texts: [], leaders: [], unplaced };
-	const scaled = groupSizes.map((size) => Math.round(size * input.scale));
-	return { texts: labelGroups(input, scaled), leaders: [], unplaced };
+const units = (points: number) => Math.round(points * point);
+
+/** Sizes to be tried, the largest first. */
+function sizesFor({ scale, lettering }: LabelInput): number[] {
+	if (lettering.sizePt !== null) return [units(lettering.sizePt)];
+	const all = [...sizes.map((one) => one * scale), ...small].filter((one) => one >= leastLegiblePt);
+	return [...new Set(all.map(units))].sort((a, b) => b - a);
 }
 
-/** Names at the largest size that costs few of them; null where fewer than are asked for find room. */
-function nameRegions(
-	{ names, scale }: LabelInput,
-	ground: LabelGround,
+export function labelSheet(input: LabelInput): Labelled {
+	const { groups, names, lettering } = input;
+	const grouped = new Set(groups.filter((group) => group !== null)).size > 1;
+	const asked = grouped ? enough : enoughAlone;
+	const tried = sizesFor(input);
+	const { task, hopeful } = nameTask(input, tried[tried.length - 1]);
+	const size = sizeThatDoes(task, tried, hopeful / Math.max(1, names.length), asked);
+	const least = tried[tried.length - 1];
+	const set = size ? labelRegions(task, size) : handNames(task, least);
+	const roomy = set.filter(({ how }) => how !== 'over').length >= suits * names.length;
+	const above = grouped && (!size || roomy) ? namesAbove(input, task, Boolean(size)) : null;
+	const { numbered, list } = lettering.numbers
+		? numbersFor(input, task, set, size ?? least, !size)
+		: { numbered: [], list: [] };
+	return together(input, task, [...set, ...numbered], {
+		size: size ?? (set.length ? least : null),
+		above,
+		list,
+		isFew: !size,
+	});
+}
+
+/** The largest size that costs few of the names that fit at the smallest; null where too few do. */
+function sizeThatDoes(
+	task: NameTask,
+	tried: number[],
+	possible: number,
 	asked: number,
-): Labelled | null {
-	// a name at the end of a leader counts half: better smaller and in its place
-	const share = ({ unplaced, leaders }: Labelled) =>
-		1 - (unplaced.length + leaders.length / 2) / Math.max(1, names.length);
-	const least = labelRegions(ground, Math.round(smallest * scale));
-	if (share(least) < asked) return null;
-	for (const size of sizes) {
-		const found = labelRegions(ground, Math.round(size * scale));
-		if (share(found) >= share(least) - worth) return found;
+): number | null {
+	// a sheet of specks: not even looked at, for too few of its names could stand
+	if (possible < asked) return null;
+	// a name at the end of a leader or over a border counts less: better smaller and in its place
+	const share = (names: SetName[]) =>
+		names.reduce((sum, { how }) => sum + (how === 'leader' || how === 'over' ? 0.7 : 1), 0) /
+		Math.max(1, task.ways.length);
+	const least = tried[tried.length - 1];
+	const most = share(labelRegions(task, least));
+	if (most < asked) return null;
+	// the larger the type, the fewer names fit: halving finds the largest that does
+	let [low, high] = [0, tried.length - 1];
+	while (low < high) {
+		const middle = (low + high) >> 1;
+		if (share(labelRegions(task, tried[middle])) >= most - worth) high = middle;
+		else low = middle + 1;
 	}
-	return least;
+	return tried[low];
+}
+
+/** The level above: instead of regions in bold, or between their names in spaced capitals. */
+function namesAbove(input: LabelInput, task: NameTask, isBeside: boolean): GroupNames | null {
+	const { lettering, scale } = input;
+	if (!lettering.groupNames) return null;
+	const own = lettering.groupSizePt;
+	const usual = (isBeside ? spacedSizes : groupSizes).map((one) => one * scale);
+	const tried = (own === null ? usual : [own]).map(units);
+	const found = labelGroups(input, tried, task.ground.busy, isBeside);
+	return isBeside && found.share < enough ? null : found;
+}
+
+function numbersFor(
+	{ names, scale, lettering, keys }: LabelInput,
+	task: NameTask,
+	set: SetName[],
+	size: number,
+	allOrNone: boolean,
+) {
+	const done = new Set(set.map(({ region }) => region));
+	const hidden = new Set(lettering.hidden);
+	const waiting = task.order.filter((region) => !done.has(region) && !hidden.has(keys[region]));
+	return setNumbers(task, waiting, names, size, scale, allOrNone);
+}
+
+interface Found {
+	size: number | null;
+	above: GroupNames | null;
+	list: DrawnText[];
+	/** whether too few names of regions fit */
+	isFew: boolean;
+}
+
+function together(input: LabelInput, task: NameTask, names: SetName[], found: Found): Labelled {
+	const { size, above, list, isFew } = found;
+	const hidden = new Set(input.lettering.hidden);
+	const how = input.names.map((name, region): HowNamed => {
+		if (hidden.has(input.keys[region])) return 'hidden';
+		if (!name) return 'nameless';
+		return task.ways[region].lacking ? 'letters' : 'listed';
+	});
+	const short = new Uint8Array(how.length);
+	const numbers = new Uint32Array(how.length);
+	for (const name of names) {
+		how[name.region] = name.how;
+		if (name.short) short[name.region] = 1;
+		if (name.how === 'number') numbers[name.region] = Number(name.box.lines[0].text);
+	}
+	const points = {
+		regions: size && Math.round((size / point) * 10) / 10,
+		groups: above?.texts.length ? Math.round((above.size / point) * 10) / 10 : null,
+	};
+	const anchors = Int32Array.from(
+		task.anchors.flatMap((at) =>
+			at ? [Math.round(at.x), Math.round(at.y)] : [noAnchor, noAnchor],
+		),
+	);
+	const lettering = { how, short, numbers, anchors, points };
+	return {
+		texts: [...(above?.texts ?? []), ...textsOf(names), ...list],
+		leaders: names.flatMap(({ leader }) => leader ?? []),
+		unplaced: how.flatMap((one, region) => (isOnSheet(one) || one === 'hidden' ? [] : region)),
+		lettering: { ...lettering, notes: letteringNotes(input, task, names, { ...lettering, isFew }) },
+	};
 }

@@ -11,8 +11,9 @@ import type { SheetArcs } from '../plane/quantise.ts';
 
 /** Cell values that are no region. */
 export const paper = -1;
-export const taken = -2;
 export const outline = -3;
+/** A coast, or a border of the level above: no name lies across one. */
+export const edge = -4;
 
 export interface RegionRaster {
 	/** side of a cell, hundredths of a millimetre */
@@ -22,24 +23,26 @@ export interface RegionRaster {
 	/** upper left corner */
 	x: number;
 	y: number;
-	/** region number, `paper`, `taken` or `outline`, row by row */
+	/** region number, `paper`, `outline` or `edge`, row by row */
 	owner: Int32Array;
 	/** columns and rows each region spans: left, right, top, bottom; right and bottom included */
 	spans: Int32Array;
 }
 
-/** Most cells in a grid: 4 bytes each, a few milliseconds to read through. */
-const mostCells = 1_000_000;
+type Border = typeof outline | typeof edge | null;
+
+/** Most cells in a grid: 7 bytes each with what is kept beside it, some milliseconds to read through. */
+const mostCells = 3_000_000;
 
 /**
- * In: the rings of every region, and of all arcs those that bound one. Rings of several regions given
+ * In: the rings of every region, and what each arc is: the outline of one, an edge, or nothing. Rings of several regions given
  * as one region melt together, for their common borders cancel.
  */
 export function rasterise(
 	arcs: SheetArcs,
 	regions: Int32Array[][],
 	box: Box,
-	bounds: (arc: number) => boolean = () => true,
+	bounds: (arc: number) => Border = () => outline,
 ): RegionRaster {
 	const cell = Math.max(20, Math.ceil(Math.sqrt((box.width * box.height) / mostCells)));
 	const columns = Math.ceil(box.width / cell);
@@ -48,8 +51,11 @@ export function rasterise(
 	const spans = new Int32Array(4 * regions.length);
 	const raster = { cell, columns, rows, x: box.x, y: box.y, owner, spans };
 	regions.forEach((rings, region) => paintRegion(raster, region, arcs, rings));
-	for (let arc = 0; arc + 1 < arcs.arcStarts.length; arc++) {
-		if (bounds(arc)) markOutline(raster, arcs, arc);
+	// edges last, so that they are whole where both run through one cell
+	for (const border of [outline, edge] as const) {
+		for (let arc = 0; arc + 1 < arcs.arcStarts.length; arc++) {
+			if (bounds(arc) === border) markOutline(raster, arcs, arc, border);
+		}
 	}
 	return raster;
 }
@@ -112,68 +118,31 @@ export function cellAt(
 	return column >= 0 && row >= 0 && column < columns && row < rows ? row * columns + column : -1;
 }
 
-/** Marks every cell an arc passes through. */
-function markOutline(raster: RegionRaster, { arcPoints, arcStarts }: SheetArcs, arc: number): void {
-	for (let point = arcStarts[arc] + 1; point < arcStarts[arc + 1]; point++) {
-		const from = { x: arcPoints[2 * point - 2], y: arcPoints[2 * point - 1] };
-		paintLine(
-			raster,
-			{ from, to: { x: arcPoints[2 * point], y: arcPoints[2 * point + 1] } },
-			null,
-			outline,
-		);
-	}
-}
-
-interface Line {
-	from: { x: number; y: number };
-	to: { x: number; y: number };
-}
-
-/** Gives the cells a line passes through a new owner, all or those of one owner; steps of half a cell. */
-export function paintLine(
+/** Marks every cell an arc passes through, in steps of half a cell. */
+function markOutline(
 	raster: RegionRaster,
-	{ from, to }: Line,
-	of: number | null,
-	owner: number,
+	{ arcPoints, arcStarts }: SheetArcs,
+	arc: number,
+	border: number,
 ): void {
-	const [dx, dy] = [to.x - from.x, to.y - from.y];
-	const steps = Math.max(1, Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / raster.cell));
-	for (let step = 0; step <= steps; step++) {
-		const cell = cellAt(raster, from.x + (dx * step) / steps, from.y + (dy * step) / steps);
-		if (cell >= 0 && (of === null || raster.owner[cell] === of)) raster.owner[cell] = owner;
+	const { cell, owner } = raster;
+	for (let i = 2 * arcStarts[arc]; i < 2 * arcStarts[arc + 1] - 2; i += 2) {
+		const [x, y] = [arcPoints[i], arcPoints[i + 1]];
+		const [dx, dy] = [arcPoints[i + 2] - x, arcPoints[i + 3] - y];
+		const steps = Math.max(1, Math.ceil((2 * Math.max(Math.abs(dx), Math.abs(dy))) / cell));
+		for (let step = 0; step <= steps; step++) {
+			const at = cellAt(raster, x + (dx * step) / steps, y + (dy * step) / steps);
+			if (at >= 0) owner[at] = border;
+		}
 	}
 }
 
 /** First and last column and row that a box touches; may lie off the grid. */
-function cellsOf({ cell, x, y }: RegionRaster, box: Box): [number, number, number, number] {
+export function cellsOf({ cell, x, y }: RegionRaster, box: Box): [number, number, number, number] {
 	return [
 		Math.floor((box.x - x) / cell),
 		Math.ceil((box.x + box.width - x) / cell) - 1,
 		Math.floor((box.y - y) / cell),
 		Math.ceil((box.y + box.height - y) / cell) - 1,
 	];
-}
-
-/** Whether every cell a box touches has this owner; never for a box that leaves the grid. */
-export function allOwnedBy(raster: RegionRaster, box: Box, wanted: number): boolean {
-	const { columns, rows, owner } = raster;
-	const [left, right, top, bottom] = cellsOf(raster, box);
-	if (left < 0 || top < 0 || right >= columns || bottom >= rows) return false;
-	for (let row = top; row <= bottom; row++) {
-		for (let i = row * columns + left; i <= row * columns + right; i++) {
-			if (owner[i] !== wanted) return false;
-		}
-	}
-	return true;
-}
-
-/** Gives the cells a box touches a new owner, those of one owner only; the box lies on the grid. */
-export function paint(raster: RegionRaster, box: Box, of: number, owner: number): void {
-	const [left, right, top, bottom] = cellsOf(raster, box);
-	for (let row = top; row <= bottom; row++) {
-		for (let i = row * raster.columns + left; i <= row * raster.columns + right; i++) {
-			if (raster.owner[i] === of) raster.owner[i] = owner;
-		}
-	}
 }

@@ -21,8 +21,11 @@ export interface TextBox {
 	height: number;
 }
 
-export function textBox(lines: string[], face: Face, size: number): TextBox {
-	const set = lines.map((text) => ({ text, width: Math.ceil(textWidth(face, size, text)) }));
+/** `spacing`: what is added between two letters, in the unit of `size`. */
+export function textBox(lines: string[], face: Face, size: number, spacing = 0): TextBox {
+	const wide = (text: string) =>
+		textWidth(face, size, text) + spacing * Math.max(0, [...text].length - 1);
+	const set = lines.map((text) => ({ text, width: Math.ceil(wide(text)) }));
 	return {
 		lines: set,
 		face,

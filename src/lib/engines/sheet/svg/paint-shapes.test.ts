@@ -89,7 +89,7 @@ describe('shapes as SVG', () => {
 		const { groups, paths } = parse(paintSvg({ ...drawing, shapes }, { fills: 'attribute' }));
 		expect(groups).toEqual([
 			...['sea', 'fills', 'lakes', 'hatches', 'graticule', 'water'],
-			...['borders', 'borders-region', 'borders-outer', 'leaders'],
+			...['halos', 'borders', 'borders-region', 'borders-outer', 'leaders'],
 			...['inset-frames', 'neat-line', 'text-grounds', 'north-arrow'],
 			...['labels', 'collar', 'legend-samples'],
 		]);

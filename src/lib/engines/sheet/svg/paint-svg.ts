@@ -8,7 +8,7 @@ import { shapeLayersOver, shapeLayersTop, shapeLayersUnder } from '../shapes.ts'
 import { escapeXml } from './escape.ts';
 import { paintFills } from './paint-fills.ts';
 import { paintShapes } from './paint-shapes.ts';
-import { paintTexts } from './paint-texts.ts';
+import { paintHalos, paintTexts } from './paint-texts.ts';
 import { chainsPath, linesPath } from './path-data.ts';
 import { styleBlock } from './style-block.ts';
 import type { EmbeddedFace } from './style-block.ts';
@@ -60,6 +60,7 @@ export function paintSvg(drawing: Drawing, options: SvgOptions): string {
 		...paintShapes(drawing, shapeLayersUnder, options),
 		...layer(prefix, 'fills', ' stroke="none"', paintFills(drawing, options)),
 		...paintShapes(drawing, shapeLayersOver, options),
+		...halos(drawing, options),
 		...paintLines(drawing, prefix),
 		...paintShapes(drawing, frameLayers, options),
 		...mapTexts(drawing, options, 'graticule', 'graticule-figures'),
@@ -78,6 +79,13 @@ export function paintSvg(drawing: Drawing, options: SvgOptions): string {
 
 /** Samples in the legend lie on its boxes, so they are painted with the collar. */
 const frameLayers = shapeLayersTop.filter((name) => name !== 'legend');
+
+/** Under the border lines, which stay whole where a name goes over one. */
+function halos(drawing: Drawing, options: SvgOptions): string[] {
+	const painted = paintHalos(drawing, options);
+	const prefix = options.idPrefix ?? '';
+	return painted.length ? layer(prefix, 'halos', ' aria-hidden="true"', painted) : [];
+}
 
 /** Texts of a layer that not every sheet has, as a group of their own. */
 function mapTexts(drawing: Drawing, options: SvgOptions, kind: DrawnText['layer'], name: string) {
