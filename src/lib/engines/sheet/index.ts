@@ -50,3 +50,4 @@ export type {
 	RegionFill,
 	SheetThemed,
 } from './drawing.ts';
+export type { ClusterReport, FrameReport } from './frame-report.ts';
