@@ -178,8 +178,8 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 }
 
 /**
- * Black or white for every label that stands on a fill, whichever reads better; one that goes over the
- * border keeps its fill around its letters. Where the fill is hatched the lines keep clear of the letters.
+ * Black or white for every label that stands on a fill, whichever reads better. One that goes over
+ * the border, or stands on a hatched fill, keeps its fill around its letters.
  */
 export function inkLabels(texts: DrawnText[], fills: RegionFill[], inks: DrawnInk[]): DrawnText[] {
 	return texts.map((text) => {

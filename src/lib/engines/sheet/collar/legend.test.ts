@@ -73,7 +73,7 @@ describe('a legend of twelve inks', () => {
 				expect(drawing.rects.filter(({ layer }) => layer === 'legend')).toHaveLength(12);
 				expect(words(drawing, 'collar').join(' ')).toContain(caution);
 			}),
-			{ numRuns: 14 },
+			{ numRuns: 8 },
 		);
 	});
 
