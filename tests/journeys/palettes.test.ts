@@ -91,7 +91,9 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 		it('finds it failing on a sheet, keeps the pair from touching by another colouring, and undoes it', async () => {
 			await page.goto(`${sheet}/palette`);
 			await drawn(page);
-			await page.getByLabel('Palette', { exact: true }).selectOption({ label: `${brand}, 6 inks` });
+			await page
+				.getByRole('combobox', { name: 'Palette', exact: true })
+				.selectOption({ label: `${brand}, 6 inks` });
 			await expect.poll(verdict).toContain('Poppy and Leather look alike to');
 			await saved(page);
 			const before = await fills(page);
@@ -136,7 +138,7 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			expect(await page.getByLabel('Value of ink 1').inputValue()).toBe('#e41a1c');
 			expect(await page.getByLabel('Value of ink 2').inputValue()).not.toBe('#a65628');
 
-			await page.getByLabel('Where').selectOption({ label: `over ${brand}` });
+			await page.getByLabel('Where', { exact: true }).selectOption({ label: `over ${brand}` });
 			await page.getByRole('button', { name: 'Keep the palette' }).click();
 			await page.getByText(`Kept as ${brand}`).waitFor();
 		});
@@ -182,7 +184,9 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await open('analyst');
 			await page.goto(`${sheet}/palette`);
 			await drawn(page);
-			await page.getByLabel('Palette', { exact: true }).selectOption({ label: `${brand}, 6 inks` });
+			await page
+				.getByRole('combobox', { name: 'Palette', exact: true })
+				.selectOption({ label: `${brand}, 6 inks` });
 			await page.getByText(/The inks are as approved by .+ on \d+ \w+ \d{4}/).waitFor();
 			await picture(page, 'palette-approved');
 			await saved(page);
