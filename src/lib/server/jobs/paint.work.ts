@@ -70,6 +70,7 @@ export interface SheetFile {
 export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 	const { coverage, drawing } = drawInput(input);
 	const rows = sheetTable(drawing, coverage, input.groups);
+	const columns = themeExtraColumns(rows);
 	return [
 		{
 			extension: 'svg',
@@ -79,12 +80,12 @@ export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
 		{
 			extension: 'geojson',
 			mediaType: 'application/geo+json',
-			bytes: exportGeoJson(coverage, rows, themeExtraColumns(rows)),
+			bytes: exportGeoJson(coverage, rows, columns),
 		},
 		{
 			extension: 'csv',
 			mediaType: 'text/csv; charset=utf-8',
-			bytes: exportCsv(rows, { byteOrderMark: true }),
+			bytes: exportCsv(rows, { byteOrderMark: true }, columns),
 		},
 	];
 }
