@@ -54,7 +54,7 @@ async function draw({ id, geometry, onCanvas, input, places }: DrawRequest): Pro
 		fills: ground && packFills(drawing.fills),
 		svg: ground ? '' : paintSvg(drawing, { fills: 'attribute', idPrefix: 'sheet-' }),
 		ground,
-		sizesMm: ground ? null : regionSizesMm(coverage, input.layout),
+		sizesMm: ground ? null : regionSizesMm(coverage, input.layout, input.inks),
 		unitsPerMetre: placement.fit.scale / earthMetres,
 		...found,
 	};
@@ -77,7 +77,7 @@ async function answer(request: DrawRequest | RefineRequest): Promise<void> {
 	await new Promise((resolve) => setTimeout(resolve, aside));
 	const { geometry, input } = request;
 	const coverage = await coverageAt(geometry, geometry);
-	const sizesMm = regionSizesMm(coverage, input.layout);
+	const sizesMm = regionSizesMm(coverage, input.layout, input.inks);
 	const borderArcs = sharedArcs(coverage, input.borders);
 	self.postMessage({ id: request.id, sizesMm, borderArcs } satisfies DrawReply);
 }

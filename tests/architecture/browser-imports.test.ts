@@ -17,12 +17,15 @@ function browserFiles(): string[] {
 		.filter((file) => !file.includes('/src/workers/') || file.endsWith('.worker.ts'));
 }
 
+/** Packages that only the server needs: they would make every page wait. */
+const heavy = new Set(['shapefile', 'pdfkit', 'fontkit', '@resvg/resvg-js']);
+
 /** Files that a file imports at run time, types left out. */
 function importsOf(file: string): string[] {
 	const text = readFileSync(file, 'utf8');
 	const found = text.matchAll(/(?:^|\s)(?:im|ex)port\s+(?!type\b)[^'";]*?from\s+'([^']+)'/g);
 	return [...found].flatMap(([, name]) => {
-		if (name === 'shapefile') return [name];
+		if (heavy.has(name)) return [name];
 		if (!/^\.|^\$lib/.test(name)) return [];
 		const path = name.startsWith('$lib')
 			? join(root, 'src/lib', name.slice(4))
@@ -32,7 +35,7 @@ function importsOf(file: string): string[] {
 	});
 }
 
-it('nothing that runs in the browser carries the readers of boundary files', () => {
+it('nothing that runs in the browser carries readers of boundary files or writers of pages and pictures', () => {
 	const from = new Map<string, string>();
 	const queue = browserFiles();
 	expect(queue.length).toBeGreaterThan(50);
@@ -40,10 +43,12 @@ it('nothing that runs in the browser carries the readers of boundary files', () 
 		for (const next of importsOf(file)) {
 			if (from.has(next)) continue;
 			from.set(next, relative(root, file));
-			if (next !== 'shapefile') queue.push(next);
+			if (!heavy.has(next)) queue.push(next);
 		}
 	}
-	const readers = [...from].filter(([file]) => /boundaries\/readers\/|^shapefile$/.test(file));
+	const readers = [...from].filter(
+		([file]) => /boundaries\/readers\//.test(file) || heavy.has(file),
+	);
 	expect(readers).toEqual([]);
 	expect([...from.keys()].some((file) => file.endsWith('boundaries/codec.ts'))).toBe(true);
 });

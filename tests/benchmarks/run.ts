@@ -3,7 +3,7 @@ interface Benchmark {
 	run(): AsyncIterable<object> | Promise<object[]>;
 }
 
-const alone = ['boundaries', 'colouring', 'goals', 'lettering', 'tables', 'territories'];
+const alone = ['boundaries', 'colouring', 'goals', 'lettering', 'sheet', 'tables', 'territories'];
 /** run only when named, because a product must be running */
 const withProduct = ['large-sheet', 'lock-toggle'];
 const names = [...alone, ...withProduct];

@@ -144,6 +144,15 @@ import {
 	readTokens,
 	withdrawToken,
 } from '../../src/lib/server/services/tokens.service.ts';
+import { setAlike } from '../../src/lib/server/services/series.service.ts';
+import {
+	applyTemplate,
+	keepTemplate,
+	readTemplates,
+	removeTemplate,
+	renameTemplate,
+	replaceTemplate,
+} from '../../src/lib/server/services/templates.service.ts';
 import { join, newTeam, openHouse } from '../support/house.ts';
 import { walkOfRecuts } from '../support/recut-walk.ts';
 import { servicesForMembers } from '../support/member-services.ts';
@@ -165,6 +174,7 @@ afterAll(async () => {
 const id = randomUUID();
 const empty = () => new Request('http://localhost/', { method: 'POST', body: new FormData() });
 const sent = { revision: 1 } as Parameters<typeof saveDraft>[3];
+const pattern = { name: 'Walk', ratio: false, palette: false };
 type Layout = Parameters<typeof saveLayout>[3];
 const figures = { unit: '', values: { a: 1 }, mode: 'replace', confidential: true } as const;
 const token = { name: 'Walk', scopes: [], days: 1 };
@@ -295,6 +305,19 @@ const walk: Walk = {
 	removePalette: ['palette.edit', (member) => removePalette(shop, member, id)],
 	readPalette: ['sheet.read', (member) => readPalette(shop, member, id)],
 	copyPalette: ['palette.edit', (member) => copyPalette(shop, member, id)],
+	readTemplates: ['sheet.read', (member) => readTemplates(shop, member)],
+	keepTemplate: ['layout.edit', (member) => keepTemplate(shop, member, 99, pattern)],
+	replaceTemplate: [
+		'layout.edit',
+		(member) => replaceTemplate(shop, member, 99, { id, revision: 1, ...pattern }),
+	],
+	renameTemplate: [
+		'layout.edit',
+		(member) => renameTemplate(shop, member, { id, revision: 1, name: 'Walked' }),
+	],
+	removeTemplate: ['layout.edit', (member) => removeTemplate(shop, member, id)],
+	applyTemplate: ['layout.edit', (member) => applyTemplate(shop, member, 99, { id, revision: 1 })],
+	setAlike: ['layout.edit', (member) => setAlike(shop, member, { id, sheets: [] })],
 	changePalette: [
 		'palette.edit',
 		(member) => changePalette(shop, member, id, { name: 'Walked', inks: [], revision: 1 }),

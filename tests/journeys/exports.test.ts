@@ -21,6 +21,13 @@ import { statesGeoJson } from '../support/uploads.ts';
 let regions = 0;
 const patience = { timeout: 120_000 };
 
+/** A page that waits for jobs on a machine that has other work. */
+async function patient(browser: Browser) {
+	const opened = await openPage(browser);
+	opened.page.setDefaultTimeout(180_000);
+	return opened;
+}
+
 /** Takes one kind by a press and answers what came. */
 async function take(page: Page, within: Locator, words: string): Promise<[string, Buffer]> {
 	const kind = within.getByRole('group', { name: words, exact: true });
@@ -52,25 +59,24 @@ describe('a designer takes files', () => {
 
 	beforeAll(async () => {
 		browser = await startBrowser();
-		const maker = await openPage(browser);
+		const maker = await patient(browser);
 		await signInAs(maker.page, 'cartographer');
 		await enterTeam(maker.page);
 		sheet = await uploadSheet(maker.page, statesGeoJson(), 'States to hand out, journey');
 		regions = await maker.page.locator('main svg [data-key]').count();
 		await maker.context.close();
-		const approver = await openPage(browser);
+		const approver = await patient(browser);
 		await signInAs(approver.page, 'approver');
 		await approver.page.goto(`${sheet}/editions`);
 		await drawn(approver.page);
 		await approver.page.getByRole('button', { name: 'Issue edition 1' }).click();
 		await approver.page.getByText('Edition 1 is issued').waitFor();
 		await approver.context.close();
-		({ page, complaints } = await openPage(browser));
-		page.setDefaultTimeout(60_000);
+		({ page, complaints } = await patient(browser));
 		await signInAs(page, 'designer');
 		await page.goto(`${sheet}/editions`);
 		await drawn(page);
-	}, 300_000);
+	}, 600_000);
 	afterAll(() => browser.close());
 
 	const edition = () => page.getByRole('article', { name: 'Edition 1' });

@@ -5,6 +5,8 @@ import { expectAccessible, openPage, picture, signInAs, startBrowser } from '../
 import { enterTeam, saved, uploadSheet } from '../support/desk.ts';
 import { textFile } from '../support/uploads.ts';
 
+/** Drawing anew takes a moment on a busy machine. */
+const soon = { timeout: 30_000 };
 const territories = ['60', '66', '69', '72', '78'];
 
 function fiftyStates() {
@@ -44,10 +46,10 @@ describe('a cartographer laying out the map', () => {
 		await expectAccessible(page);
 
 		await form.getByLabel('Set parts far off into boxes').check();
-		await expect.poll(() => form.getByText(/inset 1 : /).count()).toBe(2);
-		await expect.poll(sheetText).toContain('Hawaii');
+		await expect.poll(() => form.getByText(/inset 1 : /).count(), soon).toBe(2);
+		await expect.poll(sheetText, soon).toContain('Hawaii');
 		await form.getByLabel('Graticule').check();
-		await expect.poll(sheetText).toContain('100° W');
+		await expect.poll(sheetText, soon).toContain('100° W');
 		await form.getByLabel('Line round the map').check();
 		await form.getByLabel('Tint around the regions').check();
 
@@ -58,7 +60,7 @@ describe('a cartographer laying out the map', () => {
 		await form.getByLabel('Projection', { exact: true }).selectOption('albers');
 		await form.getByLabel('Southern parallel, °').fill('29.5');
 		await form.getByLabel('Northern parallel, °').fill('45.5');
-		await expect.poll(sheetText).toContain('parallels 29.5° N and 45.5° N');
+		await expect.poll(sheetText, soon).toContain('parallels 29.5° N and 45.5° N');
 		await form.getByLabel('Southern parallel, °').fill('-45.5');
 		await form.getByText(/alike on both sides of the equator/).waitFor();
 		await form.getByLabel('Southern parallel, °').fill('29.5');
@@ -68,7 +70,9 @@ describe('a cartographer laying out the map', () => {
 		await form.getByText('No paper up to A0 would take it.').waitFor();
 		await form.getByLabel('Scale, 1 :').first().fill('40000000');
 		await form.getByText(/does not fit its place/).waitFor({ state: 'detached' });
-		await expect.poll(() => page.getByText('About 1 : 40,000,000 at the centre').count()).toBe(1);
+		await expect
+			.poll(() => page.getByText('About 1 : 40,000,000 at the centre').count(), soon)
+			.toBe(1);
 
 		await form.getByLabel('Projection', { exact: true }).selectOption('mercator');
 		await form.getByText('Areas are not true on it').waitFor();
@@ -79,8 +83,8 @@ describe('a cartographer laying out the map', () => {
 
 		await saved(page);
 		await page.reload();
-		await expect.poll(() => form.getByLabel('Graticule').isChecked()).toBe(true);
+		await expect.poll(() => form.getByLabel('Graticule').isChecked(), soon).toBe(true);
 		expect(await form.getByLabel('Scale, 1 :').first().inputValue()).toBe('40000000');
-		await expect.poll(() => onSheet('inset').count()).toBeGreaterThan(0);
+		await expect.poll(() => onSheet('inset').count(), soon).toBeGreaterThan(0);
 	});
 });

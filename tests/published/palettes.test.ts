@@ -1,16 +1,23 @@
+import { differenceCiede2000, lab65, type Rgb } from 'culori';
 import { describe, expect, it } from 'vitest';
 import {
 	ciede2000,
 	labOfLinear,
 	linearOf,
 	readHex,
+	seenLinear,
 	tritanSecondOpinion,
 } from '../../src/lib/engines/colour/index.ts';
 import {
 	checkPalette,
+	housePalettes,
+	isUnsafe,
+	pairDemands,
+	pairsOnSheet,
 	publishedPalettes,
 	readers,
 	verdictSentence,
+	type Ink,
 	type Reader,
 } from '../../src/lib/engines/palettes/index.ts';
 import fillSets from './values/map-fill-sets.json';
@@ -46,6 +53,50 @@ describe('map fill sets', () => {
 	});
 });
 
+/** A sheet on which every ink touches every other, in regions of 7 mm. */
+function onSheet(inks: readonly Ink[]) {
+	const pairs = inks.flatMap((_, b) => inks.slice(0, b).map((_, a) => [a, b] as const));
+	const borders = {
+		a: Uint32Array.from(pairs, ([a]) => a),
+		b: Uint32Array.from(pairs, ([, b]) => b),
+		kind: new Uint8Array(pairs.length),
+		metres: new Float64Array(pairs.length),
+		at: new Float64Array(2 * pairs.length),
+	};
+	const demands = pairDemands({
+		...{ borders, colouring: inks.map((_, ink) => ink), inks: inks.map(({ hex }) => hex) },
+		sizesMm: inks.map(() => 7),
+	});
+	const judged = pairsOnSheet(inks, demands, { lineHex: '#000000', labels: true });
+	const seen = judged.flatMap(({ a, b, readers: all }) =>
+		all
+			.filter(({ reader }) => reader !== 'grey')
+			.map(({ reader, found }) => ({ pair: `${a} ${b}`, reader, value: found })),
+	);
+	const closest = seen.reduce((one, two) => (two.value < one.value ? two : one));
+	return { unsafe: judged.filter(isUnsafe).length, closest };
+}
+
+function culoriClosest(inks: readonly Ink[]) {
+	const difference = differenceCiede2000();
+	const eyes = readers.filter((reader) => reader !== 'grey');
+	const labs = inks.map(({ hex }) =>
+		eyes.map((reader) => {
+			const [r, g, b] = seenLinear(linearOf(hex), reader);
+			return lab65({ mode: 'lrgb', r, g, b } as unknown as Rgb);
+		}),
+	);
+	const all = inks.flatMap((_, b) =>
+		inks.slice(0, b).flatMap((_, a) =>
+			eyes.map((reader, e) => ({
+				pair: `${a} ${b}`,
+				...{ reader, value: difference(labs[a][e], labs[b][e]) },
+			})),
+		),
+	);
+	return all.reduce((one, two) => (two.value < one.value ? two : one));
+}
+
 describe('published palettes', () => {
 	// minimum over typical, protan, deutan and tritan, measured apart from this product
 	it.each([
@@ -72,6 +123,25 @@ describe('published palettes', () => {
 			expect(verdictSentence(verdict, inks)).toMatch(/^[A-Z][\w ]+ and [A-Z][\w ]+ look alike to /);
 		},
 	);
+
+	// every ink touches every other in regions of 7 mm; which pair is closest was found by culori 4.0.2 on
+	// the same simulated colours, apart from this product's own measure
+	it.each([
+		...['brewer-set1', 'brewer-set2', 'brewer-set3', 'brewer-dark2', 'brewer-paired'],
+		...['brewer-pastel1', 'brewer-pastel2', 'brewer-accent', 'okabe-ito', 'tol-bright', 'tol-pale'],
+	])('%s fails on a sheet where all its inks touch', (id) => {
+		const { inks } = publishedPalette(id);
+		const { unsafe, closest } = onSheet(inks);
+		expect(unsafe).toBeGreaterThan(0);
+		const measured = culoriClosest(inks);
+		expect(closest.pair).toBe(measured.pair);
+		expect(closest.reader).toBe(measured.reader);
+		expect(closest.value).toBeCloseTo(measured.value, 3);
+	});
+
+	it.each(housePalettes)('$name of the house passes on such a sheet', ({ inks }) => {
+		expect(onSheet(inks).unsafe).toBe(0);
+	});
 
 	it('each names its source and licence and has sound, distinct inks', () => {
 		expect(new Set(publishedPalettes.map((palette) => palette.id)).size).toBe(19);

@@ -38,7 +38,7 @@ async function squares(names: string[], at: (i: number) => Square): Promise<Shee
 		const geometry = { type: 'Polygon' as const, coordinates: [ring] };
 		return { type: 'Feature' as const, properties: { code: `k${i}`, name }, geometry };
 	});
-	const { coverage } = await acceptedFeatures(features, { keyColumn: 'code', nameColumn: 'name' });
+	const { coverage } = await acceptedFeatures(features, { keyField: 'code', nameField: 'name' });
 	return sheetOf(coverage, on('A4'));
 }
 

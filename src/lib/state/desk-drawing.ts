@@ -57,7 +57,7 @@ export function drawInto(desk: Desk, makeWorker: () => Worker) {
 						: null,
 					theme: desk.theme.shown && unwrapped(desk.theme.shown),
 					reader: 'typical',
-					weak: [],
+					weak: layout.lines.doubleWeak ? [...desk.palette.weak] : [],
 					issue: draftIssue(editions[0]?.number, desk.draft.revision, desk.draft.savedAt),
 				},
 				places: Float64Array.from(findings.flatMap(({ at }) => at ?? [0, 0])),

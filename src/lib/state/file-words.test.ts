@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { exportKinds } from '../engines/exports/kinds.ts';
-import { differsBy, isUsual, purposes } from './file-words.ts';
+import type { ExportNote } from '../schemas/export.ts';
+import { differsBy, filesOf, isUsual, purposes } from './file-words.ts';
 
 const svg = { kind: 'svg', reader: 'typical' } as const;
 
@@ -8,6 +9,20 @@ describe('words about files', () => {
 	it('name every kind once', () => {
 		const named = purposes.flatMap(({ kinds }) => kinds);
 		expect([...named].sort()).toEqual(exportKinds.map(({ id }) => id).sort());
+	});
+
+	it('are about the files that are still of interest', () => {
+		const note = (number: number, state: ExportNote['state'], kind: 'pdf' | 'css'): ExportNote => ({
+			...{ number, state, kind, edition: 2, revision: 9, reader: 'typical', options: {} },
+			...{ step: '', share: 0, sentence: '', file: null, createdBy: null, expiresAt: null },
+			...{ createdAt: '', updatedAt: '' },
+		});
+		const all = [
+			...[note(4, 'failed', 'css'), note(3, 'done', 'pdf')],
+			...[note(2, 'failed', 'pdf'), note(1, 'cancelled', 'css')],
+		];
+		expect(filesOf(all, 2, 9).map(({ number }) => number)).toEqual([4, 3]);
+		expect(filesOf(all, null, 9)).toEqual([]);
 	});
 
 	it('say only what is not as usual', () => {

@@ -55,7 +55,10 @@ export function differsBy({ kind, reader, options }: AskedFile): string {
 	return [...unusual({ kind, options }), ...seen].join(', ');
 }
 
-/** Of one edition, or of the draft as it stands; those that were stopped are of no interest any more. */
+/**
+ * Of one edition, or of the draft as it stands; those that were stopped, and those that failed and were asked
+ * for again, are of no interest any more.
+ */
 export const filesOf = (
 	exports: readonly ExportNote[],
 	edition: number | null,
@@ -65,5 +68,15 @@ export const filesOf = (
 		(one) =>
 			one.state !== 'cancelled' &&
 			one.edition === edition &&
-			(edition !== null || one.revision === revision),
+			(edition !== null || one.revision === revision) &&
+			!(one.state === 'failed' && exports.some((later) => isAgain(later, one))),
 	);
+
+const isAgain = (later: ExportNote, one: ExportNote): boolean =>
+	later.number > one.number &&
+	later.state !== 'cancelled' &&
+	later.edition === one.edition &&
+	later.revision === one.revision &&
+	later.kind === one.kind &&
+	later.reader === one.reader &&
+	JSON.stringify(later.options) === JSON.stringify(one.options);

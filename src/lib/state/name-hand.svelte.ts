@@ -43,7 +43,7 @@ export class NameHand {
 			this.named = null;
 			return;
 		}
-		const query = new URLSearchParams({ name: column });
+		const query = `name=${encodeURIComponent(column)}`;
 		const response = await fetch(`${this.desk.address}/column?${query}`).catch(() => null);
 		const read = response?.ok ? ((await response.json()) as ColumnValues) : null;
 		if (this.#column !== column) return;

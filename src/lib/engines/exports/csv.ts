@@ -28,7 +28,7 @@ export function exportCsv(
 		row.inkName,
 		row.hex,
 		Math.round(row.areaKm2 * 100) / 100,
-		...(themed ? [row.theme?.class, row.theme?.range] : []),
+		...(themed ? [row.theme?.class ?? null, row.theme?.range ?? null] : []),
 		...more.map(({ values }) => values[row.region]),
 	]);
 	const text = [headings, ...lines].map((line) => `${line.map(csvField).join(',')}\r\n`).join('');

@@ -11,7 +11,6 @@ import {
 	exportFile,
 	exportKinds,
 	territoryColumns,
-	themeColumns,
 	type ExportedFile,
 	type ExportKindId,
 	type ExportOptions,
@@ -24,11 +23,14 @@ const columnsOf = (regions: number) => [
 			i % 4 ? { key: `t${i % 3}`, name: `=Territory ${i % 3}` } : null,
 		),
 	),
-	...themeColumns({
-		classes: Int32Array.from({ length: regions }, (_, i) => (i % 5) - 1),
-		inks: [0, 1, 2, 3].map((one) => ({ name: `${one} to ${one + 1}`, hex: '#aabbcc' })),
-		...{ title: 'accounts per 1,000 km²', note: '' },
-	}),
+	{
+		...{ id: 'class', heading: 'class', kind: 'number' as const },
+		values: Array.from({ length: regions }, (_, i) => i % 5 || null),
+	},
+	{
+		...{ id: 'rate', heading: 'accounts', unit: 'per 1,000 km²', kind: 'number' as const },
+		values: Array.from({ length: regions }, (_, i) => (i === 5 ? Number.NaN : i / 4)),
+	},
 ];
 
 const source = sourceOf(
@@ -104,10 +106,10 @@ describe('the workbook, read by read-excel-file 9.3.17', () => {
 		const [head, ...regions] = sheets.get('Regions')!;
 		expect(head).toEqual([
 			...['key', 'name', 'group', 'ink number', 'ink', 'hex', 'area (km²)'],
-			...['territory', 'territory name', 'class', 'accounts per 1,000 km²'],
+			...['territory', 'territory name', 'class', 'accounts (per 1,000 km²)'],
 		]);
 		expect(regions.map(([key]) => key)).toEqual(source.coverage.keys);
-		expect(regions[1].slice(7)).toEqual(['t1', '=Territory 1', 1, '0 to 1']);
+		expect(regions[1].slice(7)).toEqual(['t1', '=Territory 1', 1, 0.25]);
 		expect(regions[3][9]).toBe(3);
 		const [, ...inks] = sheets.get('Inks')!;
 		expect(inks.map(([number, name]) => [number, name])).toEqual(
@@ -142,15 +144,16 @@ describe('rows and features', () => {
 			'territory name': "'=Territory 1",
 			class: '1',
 		});
-		expect(data[3]).toMatchObject({ class: '3', 'accounts per 1,000 km²': '2 to 3' });
+		expect(data[3]).toMatchObject({ class: '3', 'accounts (per 1,000 km²)': '0.75' });
 		expect(data[4]).toMatchObject({ territory: '', 'territory name': '' });
 	});
 
 	it('carry them in GeoJSON and TopoJSON under names of letters', async () => {
 		const { features } = JSON.parse(text((await made('geojson', source)).bytes));
 		expect(features[3].properties).toMatchObject({
-			...{ territory: 't0', territoryName: '=Territory 0', themeClass: 3, themeRange: '2 to 3' },
+			...{ territory: 't0', territoryName: '=Territory 0', class: 3, rate: 0.75 },
 		});
+		expect(features[5].properties).toMatchObject({ class: null, rate: null });
 		const topology = JSON.parse(text((await made('topojson', source)).bytes));
 		expect(topology.objects.regions.geometries[3].properties).toEqual(features[3].properties);
 	});

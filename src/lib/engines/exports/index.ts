@@ -30,6 +30,6 @@ export type {
 	ExportTools,
 	ExtraColumn,
 } from './source.ts';
-export { territoryColumns, themeColumns } from './columns.ts';
+export { territoryColumns } from './columns.ts';
 export { exportPdf } from './pdf/pdf.ts';
 export { pixelsOf } from './png/png.ts';

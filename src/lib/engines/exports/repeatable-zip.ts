@@ -5,10 +5,17 @@ const fixedTime = '2026-01-01T00:00:00';
 
 /**
  * The same zip with one fixed time on every entry, so that the same content gives the same bytes on any
- * day and in any time zone. Entries keep their order.
+ * day and in any time zone. Entries keep their order; `mended` may put others in their place.
  */
-export function repeatableZip(bytes: Uint8Array): Uint8Array {
-	return zipSync(unzipSync(bytes), { level: 9, mtime: fixedTime });
+export function repeatableZip(
+	bytes: Uint8Array,
+	mended: (name: string, entry: Uint8Array) => Uint8Array = (_, entry) => entry,
+): Uint8Array {
+	const entries = Object.entries(unzipSync(bytes)).map(([name, entry]) => [
+		name,
+		mended(name, entry),
+	]);
+	return zipSync(Object.fromEntries(entries), { level: 9, mtime: fixedTime });
 }
 
 /** Texts by file name as one zip, in that order; the same bytes on any day. */

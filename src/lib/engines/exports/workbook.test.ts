@@ -89,6 +89,25 @@ describe('a workbook', () => {
 		);
 	});
 
+	it('keeps names that programs mistake for their own, and leaves out what XML forbids', async () => {
+		const texts = [
+			'__proto__',
+			'constructor',
+			'toString',
+			'\ue000constructor',
+			'\ue000x',
+			'a\u0000b\ud800c',
+		];
+		const columns = [{ heading: 'valueOf', kind: 'text' as const }];
+		const [{ data }] = await read(
+			await exportWorkbook([{ name: 'T', columns, rows: texts.map((text) => [text]) }]),
+		);
+		expect(data.flat()).toEqual(['valueOf', ...texts.slice(0, 5), 'abc']);
+		const long = await exportWorkbook([{ name: 'T', columns, rows: [['ж'.repeat(40_000)]] }]);
+		// 32,767 signs is what the applications take in one cell (from memory, as they document it)
+		expect(String((await read(long))[0].data[1][0]).length).toBeLessThanOrEqual(32_767);
+	});
+
 	it('leaves out a number that is none', async () => {
 		const rows = [[Number.NaN], [Infinity], [4]];
 		const columns = [{ heading: 'n', kind: 'number' as const }];

@@ -20,7 +20,7 @@ export async function exportWorkbook(tables: readonly DataTable[]): Promise<Uint
 		stickyRowsCount: 1,
 	}));
 	const blob = await writeExcelFile(sheets).toBlob();
-	return repeatableZip(new Uint8Array(await blob.arrayBuffer()));
+	return repeatableZip(new Uint8Array(await blob.arrayBuffer()), withoutGuards);
 }
 
 function sheetData({ columns, rows }: DataTable): SheetData {
@@ -48,8 +48,22 @@ const illegal = /[^\t\n\r\u{20}-\u{d7ff}\u{e000}-\u{fffd}\u{10000}-\u{10ffff}]/g
 
 const fitting = (text: string): string => {
 	const legal = text.replace(illegal, '');
-	return legal.length > longest ? `${legal.slice(0, longest - 2).replace(illegal, '')}…` : legal;
+	const short =
+		legal.length > longest ? `${legal.slice(0, longest - 2).replace(illegal, '')}…` : legal;
+	return short in {} || short.startsWith(guard) ? guard + short : short;
 };
+
+/**
+ * The package keeps texts as names of an object's members, so that `constructor` or `__proto__` would be
+ * something else: those wear a sign in front of them until the file is made.
+ */
+const guard = '\ue000';
+
+function withoutGuards(name: string, entry: Uint8Array): Uint8Array {
+	if (name !== 'xl/sharedStrings.xml') return entry;
+	const text = new TextDecoder().decode(entry).replaceAll(`>${guard}`, '>');
+	return new TextEncoder().encode(text);
+}
 
 function dateCell(text: string): Cell {
 	const value = new Date(`${text}T00:00:00Z`);

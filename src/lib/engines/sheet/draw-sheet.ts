@@ -9,7 +9,7 @@ import type { Ink, Reader, WeakBorder } from '../palettes/palette.ts';
 import { arrange, roomOn } from './arrange.ts';
 import { drawLegend } from './collar/legend.ts';
 import { describe } from './describe.ts';
-import type { DrawnInk, Drawing, RegionFill } from './drawing.ts';
+import type { DrawnInk, DrawnText, Drawing, RegionFill } from './drawing.ts';
 import { hatchShapes } from './hatch/hatch-shapes.ts';
 import { labelSheet, unlettered } from './labels/label-sheet.ts';
 import type { SheetLayout } from './layout.ts';
@@ -133,7 +133,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 			...keys.shapes,
 		],
 		texts: [
-			...inkLabels(labels.texts, fills),
+			...inkLabels(labels.texts, fills, inks),
 			...texts,
 			...measured.texts,
 			...frame.texts,
@@ -178,15 +178,16 @@ function fillRegions(input: SheetInput, inks: DrawnInk[], rings: Int32Array[][])
 }
 
 /**
- * Black or white for every label that stands on a fill, whichever reads better; one that goes over the
- * border keeps its fill around its letters.
+ * Black or white for every label that stands on a fill, whichever reads better. One that goes over
+ * the border, or stands on a hatched fill, keeps its fill around its letters.
  */
-export function inkLabels<
-	T extends { region?: number; onFill?: boolean; hex: string; halo?: string },
->(texts: T[], fills: RegionFill[]): T[] {
+export function inkLabels(texts: DrawnText[], fills: RegionFill[], inks: DrawnInk[]): DrawnText[] {
 	return texts.map((text) => {
 		if (!text.onFill || text.region === undefined) return text;
-		const { hex } = fills[text.region];
-		return { ...text, hex: labelInk(hex), ...(text.halo ? { halo: hex } : {}) };
+		const { hex, ink } = fills[text.region];
+		const { halo, clears, ...bare } = text;
+		const own = clears ? undefined : halo;
+		if (inks[ink]?.hatch && !own) return { ...bare, hex: labelInk(hex), halo: hex, clears: true };
+		return { ...bare, hex: labelInk(hex), ...(own ? { halo: hex } : {}) };
 	});
 }

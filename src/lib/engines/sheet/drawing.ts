@@ -99,6 +99,8 @@ export interface DrawnText {
 	halo?: string;
 	/** added between two letters; part of `width` */
 	spacing?: number;
+	/** the halo is there because the fill is hatched, and goes with the hatch */
+	clears?: true;
 	region?: number;
 	/** the label stands on its region's fill, from which its colour follows */
 	onFill?: boolean;
@@ -126,7 +128,7 @@ export interface LegendPlace {
 	columns: number;
 	/** from one column to the next */
 	step: number;
-	/** most lines that a name is set in; every row is as high as they need */
+	/** most lines that a name is set in; a row is as high as its longest name needs */
 	lines: number;
 	/** lines of its heading */
 	title: string[];

@@ -2,6 +2,8 @@
 export { drawPlaced, drawSheet, inksInUse, uncoloured, type SheetInput } from './draw-sheet.ts';
 export { sheetTheme, unlessTold, type ThemeSource } from './sheet-theme.ts';
 export { themeColumns, type SheetTheme, type ThemeColumns } from './themed.ts';
+export { textBlocks } from './collar/text-blocks.ts';
+export { doubledBorders } from './doubled-borders.ts';
 export { recolour } from './recolour.ts';
 export { regionSizesMm } from './sizes.ts';
 export { sheetTable, type SheetRow } from './table.ts';
@@ -48,3 +50,4 @@ export type {
 	RegionFill,
 	SheetThemed,
 } from './drawing.ts';
+export type { ClusterReport, FrameReport } from './frame-report.ts';

@@ -4,6 +4,9 @@ import type { ProjectionKind } from './layout/projection-kinds.ts';
 import { plainLettering, type Lettering } from './layout/lettering.ts';
 import { plainLines, type LineLook } from './layout/lines.ts';
 
+export type { CollarLook, TextBlock } from './layout/collar.ts';
+export type { LineLook, RankLook } from './layout/lines.ts';
+
 export const papers = ['A5', 'A4', 'A3', 'A2', 'A1', 'A0'] as const;
 
 /** How the sheet is laid out; everything the reader sees beside fills and borders. Lengths in mm. */

@@ -47,6 +47,7 @@ export function recolour(
 			...inkLabels(
 				drawing.texts.filter(({ layer }) => layer !== 'legend'),
 				fills,
+				drawn,
 			),
 			...keys.texts,
 		],

@@ -4,12 +4,14 @@ import type * as exported from './exports-tables.ts';
 import type * as palettes from './palette-tables.ts';
 import type * as recuts from './recut-tables.ts';
 import type * as searches from './search-tables.ts';
+import type * as templates from './template-tables.ts';
 import type * as territories from './territory-tables.ts';
 
 export type * from './exports-tables.ts';
 export type * from './palette-tables.ts';
 export type * from './recut-tables.ts';
 export type * from './search-tables.ts';
+export type * from './template-tables.ts';
 export type * from './territory-tables.ts';
 
 /** Row types, one interface a table, kept beside `migrations/`. */
@@ -286,6 +288,7 @@ export interface Database {
 	recuts: recuts.RecutTable;
 	searches: searches.SearchTable;
 	exports: exported.ExportTable;
+	layout_templates: templates.LayoutTemplateTable;
 }
 
 export type Row<T extends keyof Database> = Selectable<Database[T]>;

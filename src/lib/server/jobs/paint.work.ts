@@ -9,7 +9,12 @@ import {
 	themeExtraColumns,
 } from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
-import { drawSheet, sheetTable, type SheetTheme } from '../../engines/sheet/index.ts';
+import {
+	doubledBorders,
+	drawSheet,
+	sheetTable,
+	type SheetTheme,
+} from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
 import { sheetLanguage } from './sheet-language.ts';
 import type { Task } from './task-port.ts';
@@ -42,9 +47,10 @@ export function drawInput(input: PaintInput) {
 	const locked = Uint8Array.from(coverage.keys, (key) => (Object.hasOwn(draft.locks, key) ? 1 : 0));
 	const colouring =
 		input.colouring && Int32Array.from(input.colouring, (ink) => (ink < inks.length ? ink : -1));
+	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
 		...{ coverage, borders, groups, named, inks, layout, reader, issue },
-		...{ colouring, theme, locked, weak: [] },
+		...{ colouring, theme, locked, weak },
 	});
 	return { coverage, drawing };
 }

@@ -13,7 +13,7 @@ import type { DrawnSheet } from '$lib/state/drawn-sheet';
 import { arcsPath } from '$lib/state/sheet-places';
 import { letteringOf, parseSvg, setLettering } from '../lettering';
 import type { Place, Surface } from '../surface';
-import { hatchingOf } from './hatching';
+import { hatchingOf, sameOnTiles } from './hatching';
 import { Look } from './look';
 import { TileBoard } from './tile-board';
 import { areaInSight, type Paper, type Sight } from './tile-grid';
@@ -107,7 +107,7 @@ export class CanvasSurface implements Surface {
 	#lay(drawing: Drawing) {
 		const before = this.#laid;
 		this.#laid = drawing;
-		if (drawing.lines !== before.lines || drawing.shapes !== before.shapes)
+		if (drawing.lines !== before.lines || !sameOnTiles(drawing, before))
 			this.#board.ground(this.#ground, drawing, null);
 	}
 

@@ -17,9 +17,9 @@ export class PdfLayers {
 	/** Adds what `paint` paints to the layer of that name. */
 	within(name: string, paint: () => void): void {
 		if (!this.#wanted) return paint();
-		this.#document.addContent(`/OC /${this.#nameOf(name)} BDC`);
+		this.#document.operators(`/OC /${this.#nameOf(name)} BDC`);
 		paint();
-		this.#document.addContent('EMC');
+		this.#document.operators('EMC');
 	}
 
 	#nameOf(words: string): string {

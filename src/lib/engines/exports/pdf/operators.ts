@@ -9,7 +9,7 @@ export function fillParts(drawing: Drawing): string[] {
 	return drawing.fills.flatMap(({ hex, rings }) => {
 		if (!rings.length) return [];
 		const colour = hex === last ? '' : `${rgb((last = hex))} rg\n`;
-		return [`${colour}${ringsOperators(drawing, rings)}f`];
+		return [`${colour}${ringsOperators(drawing, rings)}`];
 	});
 }
 
@@ -17,7 +17,7 @@ const dashes = (dash: number[] | undefined): string => `[${(dash ?? []).join(' '
 
 export function lineOperators(drawing: Drawing, { width, hex, dash, arcs }: LineLayer): string {
 	const path = linesOperators(drawing, arcs);
-	return `${rgb(hex)} RG ${width} w 1 j 1 J ${dashes(dash)}\n${path}S`;
+	return `q ${rgb(hex)} RG ${width} w 1 j 1 J ${dashes(dash)}\n${path}Q`;
 }
 
 /** Layers of lines that bend are joined round, as in the SVG. */

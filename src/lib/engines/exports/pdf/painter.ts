@@ -59,9 +59,9 @@ export class PdfPainter {
 
 	#inUnits(parts: string[]): void {
 		const scale = pointsPerUnit.toFixed(8);
-		this.document.addContent(`q ${scale} 0 0 ${scale} 0 0 cm 4 M`);
-		for (const part of parts) this.document.addContent(part);
-		this.document.addContent('Q');
+		this.document.operators(`q ${scale} 0 0 ${scale} 0 0 cm 4 M`);
+		for (const part of parts) this.document.operators(part);
+		this.document.operators('Q');
 	}
 
 	/** Under the border lines, which stay whole where a name goes over one. */

@@ -6,12 +6,13 @@ import type { ExportAbout } from '../source.ts';
 import { pointsPerUnit } from './numbers.ts';
 
 const maker = 'Merestone';
+const encoder = new TextEncoder();
 
 /** What the package has and its types do not tell. */
 interface Inside {
 	_root: { data: Record<string, unknown> };
 	ref(data: Record<string, unknown>): PdfReference;
-	page: { resources: { data: Record<string, unknown> } };
+	page: { resources: { data: Record<string, unknown> }; write(bytes: Uint8Array): void };
 }
 
 export interface PdfReference {
@@ -63,6 +64,11 @@ export class SheetDocument extends PDFDocument {
 <dc:description><rdf:Alt><rdf:li xml:lang="x-default">${text(subject)}</rdf:li></rdf:Alt></dc:description>
 </rdf:Description>
 <rdf:Description rdf:about="" xmlns:pdf="http://ns.adobe.com/pdf/1.3/"><pdf:Producer>${maker}</pdf:Producer></rdf:Description>`);
+	}
+
+	/** Operators on the page: as bytes, because the package turns text into them letter by letter. */
+	operators(text: string): void {
+		this.#inside.page.write(encoder.encode(`${text}\n`));
 	}
 
 	/** A dictionary among the document's objects; `end` it once it is whole. */

@@ -1,23 +1,32 @@
 import type { DrawnRect, LegendPlace, LineLayer } from '../drawing.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { boxHigh, boxWide, gap, leading } from './legend-plan.ts';
-import { cellOf, noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
+import type { Cell } from './legend-grid.ts';
+import { noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
 
-/** Samples of the ranks of line that are drawn, below the inks; `row` is the first that is free. */
-export function rankSamples(place: LegendPlace, lines: LineLayer[], row: number): DrawnLegend[] {
-	const { size, columns, ranks } = place;
-	const known = ranks.flatMap(({ rank, words }) => {
+interface KnownRank {
+	line: LineLayer;
+	words: string;
+}
+
+/** The ranks that a legend is to explain and that are drawn. */
+export const knownRanks = ({ ranks }: LegendPlace, lines: LineLayer[]): KnownRank[] =>
+	ranks.flatMap(({ rank, words }) => {
 		const line = lines.find((one) => one.rank === rank);
 		return line ? [{ line, words }] : [];
 	});
-	return known.map(({ line, words }, i) => {
-		const at = cellOf(place, i % columns, row + Math.floor(i / columns));
-		const y = Math.round(at.y + (size * boxHigh) / 2);
-		const wide = Math.round(size * boxWide);
+
+/** Samples of ranks of line, each in its cell. */
+export function rankSamples(place: LegendPlace, ranks: KnownRank[], cells: Cell[]): DrawnLegend[] {
+	const { size } = place;
+	const wide = Math.round(size * boxWide);
+	return ranks.map(({ line, words }, i) => {
+		const { x, y: top, high } = cells[i];
+		const y = Math.round(top + (high - size * 0.5) / 2);
 		return {
 			rects: [],
-			texts: wordsBeside(place, words, Math.round(at.x + size * (boxWide + gap)), y),
-			shapes: [sample(line, at.x, y, wide)],
+			texts: wordsBeside(place, words, Math.round(x + size * (boxWide + gap)), y),
+			shapes: [sample(line, x, y, wide)],
 		};
 	});
 }
@@ -36,10 +45,10 @@ function sample({ hex, width, dash }: LineLayer, x: number, y: number, wide: num
 }
 
 /** Two strokes, as borders that some readers could miss are drawn, and what they mean. */
-export function weakSample(place: LegendPlace, row: number): DrawnLegend {
+export function weakSample(place: LegendPlace, top: number): DrawnLegend {
 	if (place.weak.length === 0) return noLegend;
 	const { size, x, weak } = place;
-	const y = Math.round(cellOf(place, 0, row).y + (size * boxHigh) / 2);
+	const y = Math.round(top + (size * boxHigh) / 2);
 	const wide = Math.round(size * boxWide);
 	const line = Math.max(8, Math.round(size / 10));
 	const strokes = [-1.5, 0.5].map((step): DrawnRect => ({

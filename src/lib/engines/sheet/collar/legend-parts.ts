@@ -2,7 +2,7 @@ import type { DrawnRect, DrawnText, LegendPlace } from '../drawing.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { textWidth } from '../type/text-width.ts';
 import { shortened, wrapText } from '../type/wrap-text.ts';
-import { headHeight, leading, roomIn, rowHeight } from './legend-plan.ts';
+import { leading, roomIn } from './legend-plan.ts';
 
 export interface DrawnLegend {
 	rects: DrawnRect[];
@@ -11,15 +11,6 @@ export interface DrawnLegend {
 }
 
 export const noLegend: DrawnLegend = { rects: [], texts: [], shapes: [] };
-
-/** Upper left corner of an entry, by column and row below the heading. */
-export function cellOf(place: LegendPlace, column: number, row: number) {
-	const high = rowHeight(place.size, place.lines);
-	return {
-		x: Math.round(place.x + place.step * column),
-		y: Math.round(place.y + headHeight(place) + high * row),
-	};
-}
 
 /** Words in as many lines as the place allows, centred on a height. */
 export function wordsBeside(place: LegendPlace, text: string, x: number, middle: number) {

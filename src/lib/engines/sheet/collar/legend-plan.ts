@@ -73,11 +73,8 @@ export function planLegend(input: LegendInput, size: number, width: number): Leg
 		...{ width, height: 0, size, title, ranks, weak, ...grid },
 		...{ order: legendOrder, counts: legendCounts },
 	};
-	return {
-		...plan,
-		height: heightOf(plan, inks.length),
-		width: Math.min(width, naturalWidth(plan)),
-	};
+	const height = heightOf(plan, words.slice(0, inks.length), words.slice(inks.length));
+	return { ...plan, height, width: Math.min(width, naturalWidth(plan)) };
 }
 
 function naturalWidth({ columns, step, size, weak, title }: LegendPlan): number {
@@ -94,11 +91,26 @@ function naturalWidth({ columns, step, size, weak, title }: LegendPlan): number 
 
 export const rowsOf = (columns: number, entries: number): number => Math.ceil(entries / columns);
 
-function heightOf(plan: LegendPlan, inks: number): number {
-	const { size, columns, ranks, weak, lines } = plan;
-	const rows = rowsOf(columns, inks) + rowsOf(columns, ranks.length);
+/** Lines that a text takes in its column. */
+export function linesOf(plan: Pick<LegendPlan, 'lines' | 'step' | 'size'>, text: string): number {
+	if (plan.lines === 1) return 1;
+	return Math.min(plan.lines, wrapText('sans', plan.size, text, roomIn(plan)).length);
+}
+
+/**
+ * A row is as high as the longest of its names needs, so whichever inks are in use and in whatever order, the
+ * rows are together no higher than those of as many of the longest names.
+ */
+function heightOf(plan: LegendPlan, inks: string[], ranks: string[]): number {
+	const { size, columns, weak } = plan;
+	const tallest = (texts: string[]) =>
+		texts
+			.map((text) => rowHeight(size, linesOf(plan, text)))
+			.sort((a, b) => b - a)
+			.slice(0, rowsOf(columns, texts.length))
+			.reduce((sum, high) => sum + high, 0);
 	const below = weak.length ? rowHeight(size, weak.length) : 0;
-	return headHeight(plan) + Math.ceil(rows * rowHeight(size, lines) + below);
+	return headHeight(plan) + Math.ceil(tallest(inks) + tallest(ranks) + below);
 }
 
 function rankWords({ collar, groupColumn }: SheetLayout): LegendPlan['ranks'] {
@@ -106,7 +118,9 @@ function rankWords({ collar, groupColumn }: SheetLayout): LegendPlan['ranks'] {
 	const { outer, group, region } = collar.lineNames;
 	return [
 		{ rank: 'outer', words: cleanText(outer) || 'Outer boundary' },
-		...(groupColumn ? [{ rank: 'group', words: cleanText(group) || 'Upper-level boundary' }] : []),
+		...(groupColumn
+			? [{ rank: 'group', words: cleanText(group) || 'Boundary of the level above' }]
+			: []),
 		{ rank: 'region', words: cleanText(region) || 'Boundary of regions' },
 	];
 }
@@ -134,9 +148,9 @@ function gridOf(
 	);
 	const narrow = step <= even.step ? { ...even, step, lines: 1 } : even;
 	if (asked !== null) return narrow;
-	const tall = ({ columns, lines }: Grid) => rowsOf(columns, inks) * rowHeight(size, lines);
+	const tall = ({ columns }: Grid) => rowsOf(columns, inks);
 	const one = { columns: natural, step, lines: 1 };
-	return natural >= 1 && tall(one) <= tall(narrow) * 1.2 ? one : narrow;
+	return natural >= 1 && tall(one) <= tall(narrow) + 1 ? one : narrow;
 }
 
 /** Columns of one width, names wrapped in them. */

@@ -4,18 +4,10 @@ import { cutLines } from '../hatch/cut-lines.ts';
 import { familiesOf } from '../hatch/hatch-look.ts';
 import { segmentShape } from '../hatch/hatch-shapes.ts';
 import type { DrawnShape } from '../shapes.ts';
-import {
-	boxHigh,
-	boxWide,
-	countWords,
-	gap,
-	nameOf,
-	rowHeight,
-	rowsOf,
-	titleSize,
-} from './legend-plan.ts';
-import { cellOf, noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
-import { rankSamples, weakSample } from './legend-lines.ts';
+import { boxHigh, boxWide, countWords, gap, nameOf, titleSize } from './legend-plan.ts';
+import { gridOf, type Cell } from './legend-grid.ts';
+import { noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
+import { knownRanks, rankSamples, weakSample } from './legend-lines.ts';
 
 type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines' | 'themed'>;
 
@@ -40,19 +32,26 @@ export function drawLegend(
 		shown.inks,
 		counts,
 	);
-	const rows = rowsOf(place.columns, used.length);
-	const drawn = used.map((ink, i) => {
-		const at = cellOf(place, Math.floor(i / rows), i % rows);
+	const words = used.map((ink) => {
 		const name = nameOf(shown.inks[ink], ink);
-		const words = place.counts ? `${name}, ${countWords(counts[ink])}` : name;
-		const numbered = ink < (shown.themed?.told ?? Infinity);
-		return entry(place, at, shown.inks[ink], { ink, numbered }, words, see);
+		return place.counts ? `${name}, ${countWords(counts[ink])}` : name;
 	});
-	const lines = [
-		...rankSamples(place, shown.lines, rows),
-		weakSample(place, rows + rowsOf(place.columns, place.ranks.length)),
-	];
-	return joined([{ ...noLegend, texts: titleOf(place) }, ...drawn, ...lines]);
+	const ranks = knownRanks(place, shown.lines);
+	const grid = gridOf(
+		place,
+		words,
+		ranks.map((rank) => rank.words),
+	);
+	const drawn = used.map((ink, i) => {
+		const numbered = ink < (shown.themed?.told ?? Infinity);
+		return entry(place, grid.inkCells[i], shown.inks[ink], { ink, numbered }, words[i], see);
+	});
+	return joined([
+		{ ...noLegend, texts: titleOf(place) },
+		...drawn,
+		...rankSamples(place, ranks, grid.rankCells),
+		weakSample(place, grid.end),
+	]);
 }
 
 const joined = (parts: DrawnLegend[]): DrawnLegend => ({
@@ -85,7 +84,7 @@ function titleOf(place: LegendPlace): DrawnText[] {
 
 function entry(
 	place: LegendPlace,
-	{ x, y }: { x: number; y: number },
+	{ x, y, high: row }: Cell,
 	ink: DrawnInk,
 	{ ink: number, numbered }: { ink: number; numbered: boolean },
 	words: string,
@@ -93,7 +92,7 @@ function entry(
 ): DrawnLegend {
 	const { size } = place;
 	const [wide, high] = [Math.round(size * boxWide), Math.round(size * boxHigh)];
-	const top = Math.round(y + (rowHeight(size, place.lines) - size * 0.5 - high) / 2);
+	const top = Math.round(y + (row - size * 0.5 - high) / 2);
 	const label = word('sans-bold', size, String(number + 1), labelInk(ink.shown));
 	const figure = {
 		...label,

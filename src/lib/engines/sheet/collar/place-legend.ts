@@ -2,9 +2,9 @@ import type { LegendPlace } from '../drawing.ts';
 import type { Box } from '../plane/fit.ts';
 import { planLegend, type LegendInput, type LegendPlan } from './legend-plan.ts';
 
-/** Greatest share of the map's width that a legend beside it or on it may take. */
-const besideShare = 0.3;
-const cornerShare = 0.4;
+/** Shares of the map's width that a legend may take, tried in turn until no name takes more than two lines. */
+const besideShares = [0.14, 0.18, 0.22, 0.26, 0.3];
+const cornerShares = [...besideShares, 0.36];
 /** A legend that is too high is set smaller, down to this share of its type. */
 const smallestType = 0.6;
 
@@ -15,11 +15,20 @@ export interface BesideMap {
 }
 
 /** A plan that is no higher than a height, in smaller type if it must be. */
-function within(input: LegendInput, size: number, width: number, height: number): LegendPlan {
-	let plan = planLegend(input, size, width);
+function within(input: LegendInput, size: number, shares: number[], map: Box, height: number) {
+	let plan = narrowest(input, size, shares, map);
 	for (let type = size; plan.height > height && type > size * smallestType;) {
 		type = Math.max(Math.round(type * 0.93), 1);
-		plan = planLegend(input, type, width);
+		plan = narrowest(input, type, shares, map);
+	}
+	return plan;
+}
+
+function narrowest(input: LegendInput, size: number, shares: number[], map: Box): LegendPlan {
+	let plan = planLegend(input, size, Math.round(map.width * shares[0]));
+	for (const share of shares.slice(1)) {
+		if (plan.lines <= 2 && plan.title.length <= 2 && plan.weak.length <= 4) break;
+		plan = planLegend(input, size, Math.round(map.width * share));
 	}
 	return plan;
 }
@@ -32,7 +41,7 @@ export function besideMap(
 	size: number,
 ): BesideMap {
 	const asked = oneColumn(input);
-	const plan = within(asked, size, Math.round(map.width * besideShare), map.height);
+	const plan = within(asked, size, besideShares, map, map.height);
 	const air = Math.round(size * 1.6);
 	const x = side === 'left' ? map.x : map.x + map.width - plan.width;
 	return {
@@ -47,7 +56,7 @@ export function besideMap(
 
 /** A legend that is to stand on the map, wherever there is room. */
 export const onMap = (input: LegendInput, map: Box, size: number): LegendPlan =>
-	within(oneColumn(input), size, Math.round(map.width * cornerShare), map.height * 0.7);
+	within(oneColumn(input), size, cornerShares, map, map.height * 0.7);
 
 /** Beside and on the map names stand under one another unless columns are asked for. */
 function oneColumn(input: LegendInput): LegendInput {

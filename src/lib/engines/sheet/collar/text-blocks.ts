@@ -3,9 +3,10 @@ import type { TextBlock } from '../layout/collar.ts';
 import { hundredths } from '../paper.ts';
 import type { Box } from '../plane/fit.ts';
 import type { DrawnShape } from '../shapes.ts';
+import type { Face } from '../type/face.ts';
 import { cleanText } from '../type/clean-text.ts';
 import { textWidth } from '../type/text-width.ts';
-import { wrapText } from '../type/wrap-text.ts';
+import { shortened, wrapText } from '../type/wrap-text.ts';
 
 /** Hundredths of a millimetre to a point of type, a seventy-second of an inch. */
 export const hundredthsPerPoint = 2540 / 72;
@@ -27,7 +28,8 @@ export interface SetTextBlock {
 /**
  * Text blocks on the paper. In: blocks in mm from the paper's upper left corner; the paper, and the box of
  * the caution, in hundredths of a millimetre. Out: for every block that says something, its lines, no wider
- * than the block, and its box, which is moved just far enough to lie on the paper and above the caution.
+ * than the block, and its box, which is moved just far enough to lie on the paper and above the caution. What
+ * finds no room above the caution is left out, and an ellipsis says so.
  */
 export function textBlocks(blocks: readonly TextBlock[], paper: Box, caution: Box): SetTextBlock[] {
 	return blocks.flatMap((block) => {
@@ -45,13 +47,15 @@ export function textBlocks(blocks: readonly TextBlock[], paper: Box, caution: Bo
 
 function setOne(
 	block: TextBlock,
-	lines: string[],
+	all: string[],
 	size: number,
 	width: number,
 	paper: Box,
 	caution: Box,
 ): SetTextBlock {
 	const air = block.ground ? Math.round(size * groundAir) : 0;
+	const room = (caution.y || paper.height) - 2 * air;
+	const lines = cutTo(all, Math.floor((room / size - 1.02) / leading) + 1, block.face, size, width);
 	const wide = Math.ceil(Math.max(...lines.map((line) => textWidth(block.face, size, line))));
 	const high = Math.ceil(size * (1.02 + leading * (lines.length - 1)));
 	const wanted = {
@@ -69,6 +73,13 @@ function setOne(
 		return text ? [{ layer: 'block' as const, ...drawn }] : [];
 	});
 	return { texts, ground: block.ground ? whiteGround(box) : null, box };
+}
+
+function cutTo(lines: string[], most: number, face: Face, size: number, width: number): string[] {
+	if (lines.length <= most) return lines;
+	const kept = lines.slice(0, Math.max(1, most));
+	const last = kept.pop() ?? '';
+	return [...kept, shortened(face, size, `${last}…`, width)];
 }
 
 function onPaper(box: Box, paper: Box): Box {

@@ -27,7 +27,7 @@ const costs = { one: 0.9, all: 0.8 };
 /** A group as large as this share of the largest always stays in the frame. */
 const alwaysIn = 1 / 3;
 /** Smaller on the map than this, in hundredths of a millimetre, or than this share of the largest group. */
-const specks = { side: 300, share: 1 / 1000 };
+const specks = { side: 220, share: 1 / 1000 };
 /** Most boxes made unasked, and most groups that are tried for the frame. */
 const mostBoxes = 6;
 const mostTried = 40;

@@ -6,6 +6,7 @@
 import type { DrawnText } from '../drawing.ts';
 import { leastLegiblePt, type Lettering } from '../layout/lettering.ts';
 import type { Box } from '../plane/fit.ts';
+import { occupy } from './ground.ts';
 import { labelGroups, type GroupInput, type GroupNames } from './group-labels.ts';
 import type { Leader } from './leader.ts';
 import { letteringNotes } from './lettering-notes.ts';
@@ -19,6 +20,7 @@ import {
 	type HowNamed,
 	type SetName,
 } from './set-name.ts';
+import { boxOfText } from './text-box.ts';
 import { textsOf } from './texts-of-names.ts';
 
 /** Hundredths of a millimetre to a point (1/72 inch). */
@@ -31,6 +33,8 @@ const small = [6, 5.5, 5];
 const groupSizes = [10, 9, 8, 7];
 /** Beside names of regions, in spaced capitals. */
 const spacedSizes = [10, 9, 8, 7];
+/** Above so many names only the smallest sizes are tried, which bounds the time. */
+const mostAtEverySize = 8_000;
 /** A larger size may cost this share of the names that fit at the smallest. */
 const worth = 0.03;
 const enough = 0.6;
@@ -74,10 +78,12 @@ export function unlettered(regions: number): Labelled {
 const units = (points: number) => Math.round(points * point);
 
 /** Sizes to be tried, the largest first. */
-function sizesFor({ scale, lettering }: LabelInput): number[] {
+function sizesFor(input: LabelInput): number[] {
+	const { scale, lettering } = input;
 	if (lettering.sizePt !== null) return [units(lettering.sizePt)];
 	const all = [...sizes.map((one) => one * scale), ...small].filter((one) => one >= leastLegiblePt);
-	return [...new Set(all.map(units))].sort((a, b) => b - a);
+	const tried = [...new Set(all.map(units))].sort((a, b) => b - a);
+	return input.names.length > mostAtEverySize ? tried.slice(-2) : tried;
 }
 
 export function labelSheet(input: LabelInput): Labelled {
@@ -136,7 +142,9 @@ function namesAbove(input: LabelInput, task: NameTask, isBeside: boolean): Group
 	const usual = (isBeside ? spacedSizes : groupSizes).map((one) => one * scale);
 	const tried = (own === null ? usual : [own]).map(units);
 	const found = labelGroups(input, tried, task.ground.busy, isBeside);
-	return isBeside && found.share < enough ? null : found;
+	if (isBeside && found.share < enough) return null;
+	for (const text of found.texts) occupy(task.ground, boxOfText(text));
+	return found;
 }
 
 function numbersFor(

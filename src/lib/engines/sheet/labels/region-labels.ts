@@ -112,7 +112,8 @@ export function handNames(task: NameTask, size: number): SetName[] {
 	for (const [region, place] of hand) {
 		const lines = place.short && ways[region].short.length ? ways[region].short : ways[region].full;
 		const boxes = boxesOf(lines, size);
-		const box = place.lines ? boxes[place.lines - 1] : narrowest(boxes);
+		const asked = place.lines && boxes[Math.min(place.lines, boxes.length) - 1];
+		const box = asked || narrowest(boxes);
 		const anchor = anchors[region];
 		if (!box || !anchor) continue;
 		names.push(setByHand(ground, region, anchor, place, box, paperBox));
