@@ -17,7 +17,8 @@ describe('ramps', () => {
 				// half a step of an 8-bit channel either way
 				expect(Math.max(...light(inks))).toBeLessThan(92.6);
 				expect(Math.min(...light(inks))).toBeGreaterThan(23.4);
-				expect(rampInks(ramp, classes, { reversed: true }).sort()).toEqual([...inks].sort());
+				const round = rampInks(ramp, classes, { reversed: true });
+				if (ramp.kind === 'sequential') expect(round).toEqual([...inks].reverse());
 			}
 		},
 	);

@@ -44,9 +44,13 @@ describe('a themed sheet', () => {
 
 	it('still draws the border between regions of one class', () => {
 		const plain = drawSheet(sheetOf(coverage));
-		const arcs = (lines: typeof plain.lines) =>
-			lines.reduce((sum, line) => sum + line.arcs.length, 0);
-		expect(arcs(drawing.lines)).toBe(arcs(plain.lines));
+		const arcs = ({ lines }: typeof plain) =>
+			lines
+				.filter(({ rank }) => rank === 'region')
+				.reduce((sum, line) => sum + line.arcs.length, 0);
+		expect(arcs(plain)).toBeGreaterThan(100);
+		// a taller legend leaves the map a little less room, and the shortest arcs shrink to nothing
+		expect(Math.abs(arcs(drawing) - arcs(plain))).toBeLessThan(4);
 	});
 
 	it('is seen through other eyes as if it were drawn for them', () => {
