@@ -171,7 +171,7 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 		it('approves it as it stands, and the sheet says so until its inks change', async () => {
 			await open('approver');
 			await page.goto(`${team}/palettes`);
-			await page.getByRole('button', { name: `Approve as it stands: ${brand}` }).click();
+			await page.getByRole('button', { name: `Approve as it stands ${brand}` }).click();
 			await page.getByText('The palette is approved as it stands.').waitFor();
 			const row = page.getByRole('article', { name: brand });
 			expect(await row.innerText()).toMatch(/Approved by .+ on \d+ \w+ \d{4}/);
