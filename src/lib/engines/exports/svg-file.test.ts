@@ -3,7 +3,7 @@ import fc from 'fast-check';
 import { SaxesParser } from 'saxes';
 import { describe, expect, it } from 'vitest';
 import { hatchedInks, hostileSource, sourceOf } from '../../../../tests/support/export-source.ts';
-import { statesCoverage } from '../../../../tests/support/sheets.ts';
+import { layout, statesCoverage } from '../../../../tests/support/sheets.ts';
 import { elementId } from '../sheet/index.ts';
 import { exportFile, type ExportSource, type SvgFileOptions } from './index.ts';
 
@@ -172,12 +172,10 @@ describe('names', () => {
 	});
 
 	it('with letters that no face has are told', async () => {
-		const coverage = statesCoverage();
-		coverage.names[0] = '東京';
-		const outcome = await exportFile('svg', sourceOf(coverage));
+		const titled = sourceOf(statesCoverage(), { layout: { ...layout, title: '東京' } });
+		const outcome = await exportFile('svg', titled);
 		if (outcome.status === 'refused') throw new Error(outcome.message);
-		const set = sourceOf(coverage).drawing.texts.some(({ text: words }) => words === '東京');
-		expect(set).toBe(true);
+		expect(titled.drawing.texts.some(({ text: words }) => words === '東京')).toBe(true);
 		expect(outcome.file.notes).toEqual([
 			'1 text holds letters that the sheet’s typefaces lack: “東京”.',
 		]);

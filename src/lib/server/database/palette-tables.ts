@@ -2,6 +2,8 @@ import type { Generated, JSONColumnType } from 'kysely';
 import type { Ink } from '../../engines/palettes/palette.ts';
 import type { Moment, OptionalMoment } from './columns.ts';
 
+export type PaletteInk = Ink;
+
 /** Row types of the team's palettes and of their approvals. */
 export interface PaletteTable {
 	id: Generated<string>;

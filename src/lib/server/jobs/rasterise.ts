@@ -6,7 +6,11 @@ import { Resvg } from '@resvg/resvg-js';
  * Out: a PNG, eight bits a channel with alpha; the same bytes for the same input. No face of this machine
  * is loaded. Memory: four bytes a pixel, and as much again while the picture is packed.
  */
-export function rasterise(svg: Uint8Array, width: number, ground: string | null): Promise<Uint8Array> {
+export function rasterise(
+	svg: Uint8Array,
+	width: number,
+	ground: string | null,
+): Promise<Uint8Array> {
 	const resvg = new Resvg(Buffer.from(svg.buffer, svg.byteOffset, svg.byteLength), {
 		fitTo: { mode: 'width', value: width },
 		font: { loadSystemFonts: false },

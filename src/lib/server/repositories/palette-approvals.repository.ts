@@ -1,5 +1,5 @@
-import type { Ink } from '../../engines/palettes/palette.ts';
 import type { Db } from '../database/connection.ts';
+import type { PaletteInk } from '../database/palette-tables.ts';
 
 /** Approvals of a team's palettes, those in force first, then the newest. */
 export const listApprovals = (db: Db, teamId: string) =>
@@ -21,7 +21,7 @@ export const insertApproval = (
 		team_id: string;
 		palette_id: string;
 		name: string;
-		inks: readonly Ink[];
+		inks: readonly PaletteInk[];
 		digest: string;
 		approved_by: string | null;
 	},

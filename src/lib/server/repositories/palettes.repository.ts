@@ -1,5 +1,5 @@
-import type { Ink } from '../../engines/palettes/palette.ts';
 import type { Db } from '../database/connection.ts';
+import type { PaletteInk } from '../database/palette-tables.ts';
 import type { Row } from '../database/schema.ts';
 
 export type PaletteRow = Row<'palettes'>;
@@ -41,7 +41,7 @@ export const insertPalette = (
 	palette: {
 		teamId: string;
 		name: string;
-		inks: readonly Ink[];
+		inks: readonly PaletteInk[];
 		source?: string | null;
 		licence?: string | null;
 		createdBy: string | null;
@@ -64,7 +64,7 @@ export const insertPalette = (
 export const updatePalette = (
 	trx: Db,
 	id: string,
-	{ name, inks }: { name: string; inks: readonly Ink[] },
+	{ name, inks }: { name: string; inks: readonly PaletteInk[] },
 ) =>
 	trx
 		.updateTable('palettes')

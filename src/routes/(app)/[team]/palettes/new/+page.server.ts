@@ -11,6 +11,9 @@ export const load = (({ locals }) => {
 	memberFor(locals, 'palette.edit');
 }) satisfies PageServerLoad;
 
+const refusal = (status: number, refused: string, within: string, groups: string[] = []) =>
+	fail(status, { refused, groups, within });
+
 export const actions = {
 	/** Reads a Design Tokens file into the form; nothing is kept yet. */
 	read: async ({ locals, request }) => {
@@ -21,12 +24,11 @@ export const actions = {
 			.trim()
 			.slice(0, 1_000);
 		if (!(file instanceof File) || file.size === 0)
-			return fail(400, { refused: 'Choose a Design Tokens file first.' });
+			return refusal(400, 'Choose a Design Tokens file first.', within);
 		if (file.size > 4 * tokenLimits.characters)
-			return fail(413, { refused: 'The file is too large to be a Design Tokens file.' });
+			return refusal(413, 'The file is too large to be a Design Tokens file.', within);
 		const read = readDesignTokens(await file.text(), within);
-		if (read.status === 'refused')
-			return fail(422, { refused: read.message, groups: read.groups ?? [], within });
+		if (read.status === 'refused') return refusal(422, read.message, within, read.groups);
 		const name = file.name.replace(/(\.tokens)?(\.json)?$/i, '').slice(0, 120) || 'From a file';
 		return { name, rows: rowsOf(read.inks), notes: read.notes, file: file.name };
 	},
