@@ -44,6 +44,8 @@ export default defineConfig({
 					include: ['tests/journeys/**/*.test.ts'],
 					fileParallelism: false,
 					testTimeout: 300_000,
+					// a sheet is drawn anew in well under a second, but not beside everything else on two cores
+					expect: { poll: { timeout: 15_000 } },
 					hookTimeout: 120_000,
 				},
 			},

@@ -36,7 +36,7 @@ describe('a cartographer laying out the map', () => {
 	});
 
 	const onSheet = (layer: string) => page.locator(`main svg [id$="${layer}"]`);
-	const sheetText = () => page.locator('main svg').first().textContent();
+	const sheetText = () => page.locator('main svg:has([data-key])').first().textContent();
 
 	it('chooses projection, parallels, scale, insets and graticule, and is refused a north arrow', async () => {
 		const sheet = await uploadSheet(page, fiftyStates(), 'Fifty states, journey');
@@ -66,7 +66,7 @@ describe('a cartographer laying out the map', () => {
 		await form.getByLabel('Southern parallel, °').fill('29.5');
 
 		await form.getByLabel('Scale, 1 :').first().fill('1000000');
-		await form.getByText(/the map does not fit its place: \d+ mm too wide/).waitFor();
+		await form.getByText(/the map does not fit its place: [\d,]+ mm too wide/).waitFor();
 		await form.getByText('No paper up to A0 would take it.').waitFor();
 		await form.getByLabel('Scale, 1 :').first().fill('40000000');
 		await form.getByText(/does not fit its place/).waitFor({ state: 'detached' });

@@ -178,7 +178,7 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await expectAccessible(page);
 			await page.goto(`${sheet}/palette`);
 			await drawn(page);
-			await page.getByText(/^Changed since: the inks are not those of/).waitFor();
+			await page.getByText(/Changed since: the inks are not those of/).waitFor();
 			await context.close();
 
 			await open('analyst');

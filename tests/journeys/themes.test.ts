@@ -114,7 +114,7 @@ describe('a themed map', () => {
 
 		const typical = await fills(page);
 		for (const reader of ['deutan', 'grey print']) {
-			await page.getByRole('radio', { name: reader }).check({ force: true });
+			await page.getByRole('radio', { name: reader, exact: true }).check({ force: true });
 			await expect.poll(() => fills(page)).not.toEqual(typical);
 			await picture(page, `theme-${reader.split(' ')[0]}`);
 		}
