@@ -72,7 +72,7 @@ describe('a cartographer laying out the map', () => {
 		await form.getByText(/does not fit its place/).waitFor({ state: 'detached' });
 		await expect
 			.poll(() => page.getByText('About 1 : 40,000,000 at the centre').count(), soon)
-			.toBe(1);
+			.toBeGreaterThan(0);
 
 		await form.getByLabel('Projection', { exact: true }).selectOption('mercator');
 		await form.getByText('Areas are not true on it').waitFor();

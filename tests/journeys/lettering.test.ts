@@ -89,6 +89,8 @@ describe('names on a sheet', () => {
 		await bar().getByLabel('Abbreviation').fill('Md.');
 		await expect.poll(() => label('Md\\.').count()).toBe(1);
 
+		// so large that several names find no room
+		await page.getByLabel('Size, pt', { exact: true }).fill('11');
 		const numbers = page.getByLabel('Numbers and a list');
 		await numbers.check();
 		const collar = page.locator('#sheet-collar');
