@@ -114,9 +114,6 @@ export const removeExpired = (trx: Db, id: string) =>
 		.returning('file_digest')
 		.executeTakeFirst();
 
-export const removeExport = (trx: Db, id: string) =>
-	trx.deleteFrom('exports').where('id', '=', id).returning('file_digest').executeTakeFirst();
-
 /** Digests of every file that was taken of a sheet. */
 export async function exportFiles(db: Db, sheetId: string): Promise<string[]> {
 	const rows = await db
