@@ -7,11 +7,9 @@ import { groundScaleAt } from '../plane/ground-scale.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { textWidth } from '../type/text-width.ts';
 import { shortened } from '../type/wrap-text.ts';
-import { insetDress, ratioWords, type InsetDress } from './inset-size.ts';
+import { frameWidth, insetDress, ratioWords, type InsetDress } from './inset-size.ts';
 import type { PlacedInset } from './insets-on-paper.ts';
 
-/** Width of a frame on A4. */
-const line = 16;
 /** A bar shorter than this, in type sizes, says nothing. */
 const shortestBar = 4;
 
@@ -43,7 +41,7 @@ function frameOf({ outer: { x, y, width, height } }: PlacedInset, scale: number)
 		points: Int32Array.of(x, y, x + width, y, x + width, y + height, x, y + height),
 		starts: Uint32Array.of(0, 4),
 		...{ closed: true, fill: null, stroke: '#000000' },
-		strokeWidth: Math.max(8, Math.round(line * scale)),
+		strokeWidth: frameWidth(scale),
 	};
 }
 

@@ -1,6 +1,11 @@
 import type { Box } from '../plane/fit.ts';
 import { textWidth } from '../type/text-width.ts';
 
+/** Width of a frame on A4. */
+const line = 16;
+
+export const frameWidth = (scale: number): number => Math.max(8, Math.round(line * scale));
+
 /** Small print over an inset on A4: 6.5 point. */
 const smallPrint = 229;
 
