@@ -68,14 +68,15 @@ function onTheMap(placed: OnPaper, around: Collar, { frame }: SheetLayout) {
 	if (!floating) return { legend, obstacles, grounds };
 	const air = floating.size;
 	const size = { width: floating.width + 2 * air, height: floating.height + 2 * air };
-	const { arcs, sides, box, insets } = placed;
+	const { arcs, sides, box, insets, globe } = placed;
 	const corner = emptyCorner(arcs, sides, box, size, [
 		...obstacles,
 		...insets.map(({ outer }) => outer),
 	]);
 	if (!corner) return { legend: null, obstacles, grounds };
 	const { x, y } = corner.box;
-	const isEdged = Boolean(frame.sea || frame.graticule || frame.neatLine);
+	// beside the globe the paper is bare
+	const isEdged = !globe && Boolean(frame.sea || frame.graticule || frame.neatLine);
 	const ground: LegendGround = {
 		air,
 		line: isEdged ? frameWidth(scale) : 0,
