@@ -92,6 +92,7 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
 				...{ box: placed.box, paper: paperBox(layout) },
 				obstacles: [...obstacles, ...frameObstacles(placed, scale)],
+				frames: placed.insets.filter(({ ratio }) => ratio > 0).map(({ outer }) => outer),
 			})
 		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);

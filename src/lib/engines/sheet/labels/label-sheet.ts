@@ -35,8 +35,14 @@ const groupSizes = [10, 9, 8, 7];
 const spacedSizes = [10, 9, 8, 7];
 /** Above so many names only the smallest sizes are tried, which bounds the time. */
 const mostAtEverySize = 8_000;
-/** Type larger by a point is worth this share of the names: small type on a roomy map reads ill. */
+/**
+ * Type larger by a point is worth this share of the names, and below the second figure twice as much: small type
+ * on a roomy map reads ill. Common practice, no source.
+ */
 const perPoint = 0.02;
+const smallBelow = 6;
+/** A name that stands off its region, or over a border, counts less: better smaller and in its place. */
+const countsFor: Partial<Record<HowNamed, number>> = { beside: 0.9, leader: 0.7, over: 0.7 };
 /** What a larger size may by chance fit more than the smallest. */
 const chance = 0.03;
 const enough = 0.6;
@@ -54,6 +60,8 @@ export interface LabelInput extends GroupInput {
 	lettering: Lettering;
 	/** what stands on the map already: insets' frames, text blocks, a legend laid over it */
 	obstacles: readonly Box[];
+	/** insets' frames, each as a whole */
+	frames: readonly Box[];
 	/** the whole paper without its edge, which names set by hand do not leave */
 	paper: Box;
 }
@@ -119,14 +127,12 @@ function sizeThatDoes(
 ): number | null {
 	// a sheet of specks: not even looked at, for too few of its names could stand
 	if (possible < asked) return null;
-	// a name at the end of a leader or over a border counts less: better smaller and in its place
 	const share = (names: SetName[]) =>
-		names.reduce((sum, { how }) => sum + (how === 'leader' || how === 'over' ? 0.7 : 1), 0) /
-		Math.max(1, task.ways.length);
+		names.reduce((sum, { how }) => sum + (countsFor[how] ?? 1), 0) / Math.max(1, task.ways.length);
 	const least = tried[tried.length - 1];
 	const most = share(labelRegions(task, least));
 	if (most < asked) return null;
-	const larger = (size: number) => ((size - least) / point) * perPoint;
+	const larger = (size: number) => worthOfSize(size / point) - worthOfSize(least / point);
 	let best = { size: least, worth: most };
 	for (const size of tried.slice(0, -1)) {
 		// neither this nor any smaller could do better
@@ -137,6 +143,8 @@ function sizeThatDoes(
 	}
 	return best.size;
 }
+
+const worthOfSize = (points: number): number => perPoint * (points + Math.min(points, smallBelow));
 
 /** The level above: instead of regions in bold, or between their names in spaced capitals. */
 function namesAbove(input: LabelInput, task: NameTask, isBeside: boolean): GroupNames | null {

@@ -70,7 +70,10 @@ export function nameTask(input: LabelInput, smallest: number): { task: NameTask;
 	const hand = places.map(([key, place]) => [known(key), place] as const);
 	return {
 		task: {
-			ground: { raster, busy: fixed.slice(), room: headroom(raster, fixed) },
+			ground: {
+				...{ raster, busy: fixed.slice(), room: headroom(raster, fixed) },
+				frames: input.frames,
+			},
 			...{ fixed, paperBox: input.paper, poles, anchors, coastal },
 			ways: names.map((name, region) => {
 				const { abbreviations } = lettering;
