@@ -36,10 +36,10 @@ const spacedSizes = [10, 9, 8, 7];
 /** Above so many names only the smallest sizes are tried, which bounds the time. */
 const mostAtEverySize = 8_000;
 /**
- * Type larger by a point is worth this share of the names, and below the second figure twice as much: small type
- * on a roomy map reads ill. Common practice, no source.
+ * Type larger by a point is worth this share of the names, and below the second figure three times as much: small
+ * type on a roomy map reads ill. Common practice, no source.
  */
-const perPoint = 0.02;
+const perPoint = 0.015;
 const smallBelow = 6;
 /** A name that stands off its region, or over a border, counts less: better smaller and in its place. */
 const countsFor: Partial<Record<HowNamed, number>> = { beside: 0.9, leader: 0.7, over: 0.7 };
@@ -144,7 +144,8 @@ function sizeThatDoes(
 	return best.size;
 }
 
-const worthOfSize = (points: number): number => perPoint * (points + Math.min(points, smallBelow));
+const worthOfSize = (points: number): number =>
+	perPoint * (points + 2 * Math.min(points, smallBelow));
 
 /** The level above: instead of regions in bold, or between their names in spaced capitals. */
 function namesAbove(input: LabelInput, task: NameTask, isBeside: boolean): GroupNames | null {
