@@ -12,7 +12,7 @@ export {
 	needsLabelOrHatch,
 } from './demand.ts';
 export { weakBorders, type SheetFills } from './weak-borders.ts';
-export { bordersSentence, verdictSentence } from './sentence.ts';
+export { bordersSentence, toWhom, verdictSentence } from './sentence.ts';
 export { mendPalette, type MendRequest, type MendResult } from './mend.ts';
 export { pairDemands, type PairDemand } from './pair-demands.ts';
 export {

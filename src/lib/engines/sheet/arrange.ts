@@ -49,7 +49,7 @@ function collarOf(input: SheetInput, inks: DrawnInk[], layout: SheetLayout, proj
 	return collar({
 		...{ layout, inks, projection, issue },
 		coloured: colouring !== null,
-		weak: weak.length > 0,
+		weak: new Set(weak.map(({ reader }) => reader)),
 		regions: coverage.keys.length,
 	});
 }
