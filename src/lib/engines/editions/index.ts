@@ -5,7 +5,13 @@ export {
 	type EditionInput,
 	type EditionOutcome,
 } from './edition-content.ts';
-export { freezeTheme, thawTheme, type FrozenTheme } from './frozen-theme.ts';
+export { freezeTheme, thawFigures, thawTheme, type FrozenTheme } from './frozen-theme.ts';
+export {
+	freezeTerritories,
+	thawTerritories,
+	type FrozenTerritories,
+	type RegionTerritory,
+} from './frozen-territories.ts';
 export { canonicalJson } from './canonical-json.ts';
 export { digestOf, verifyEdition } from './digest.ts';
 export {
