@@ -21,6 +21,7 @@ export {
 	type Differences,
 	type InkChange,
 } from './differences.ts';
+export { changeSentences } from './change-sentences.ts';
 export type { Draft } from './draft.ts';
 export { carryDraft, type CarriedDraft, type NewGround } from './carry-draft.ts';
 export { colouringProblem, strangersIn, type RuleGround } from './colouring-problem.ts';
