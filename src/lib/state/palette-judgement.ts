@@ -128,7 +128,7 @@ function stateOf(
 	if (bare)
 		return {
 			mark: 'warning',
-			sentence: `${counted(bare.bare, 'region')} of ${names(bare)} under 3.5 mm ${bare.bare === 1 ? 'has' : 'have'} neither a label nor a hatch`,
+			sentence: `Every reader can tell the fills apart, but ${counted(bare.bare, 'region')} of ${names(bare)} under 3.5 mm ${bare.bare === 1 ? 'has' : 'have'} neither a label nor a hatch`,
 		};
 	return { mark: 'clear', sentence: 'Every reader can tell apart all inks that touch' };
 }
