@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { classMethods, type Theme } from '$lib/engines/measures/theme';
 import { theme as themeSchema } from '$lib/schemas/theme';
-import { autoTitle } from './theme-words';
+import { autoTitle, untoldWords } from './theme-words';
 
 const per = (times: number, measure = 'people') => ({ kind: 'measure', measure, times }) as const;
 
@@ -28,4 +28,13 @@ it('a heading made of the longest names can be saved', () => {
 	};
 	const title = autoTitle(theme, 'unit');
 	expect(themeSchema.safeParse({ ...theme, title }).success).toBe(true);
+});
+
+it('a theme that gives no region a class says why', () => {
+	const words = (...classes: number[]) =>
+		untoldWords({ classes: Int32Array.from(classes), told: 3 });
+	expect(words(0, 3, 4)).toBe('');
+	expect(words(3, 3)).toMatch(/^No region has a figure/);
+	expect(words(4, 4)).toMatch(/every count is suppressed/);
+	expect(words(3, 4)).toMatch(/missing or suppressed/);
 });

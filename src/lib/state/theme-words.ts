@@ -1,6 +1,7 @@
 import { counted } from '$lib/components/format';
 import type { ClassMethod, Theme } from '$lib/engines/measures/theme';
 import type { ReaderVerdict, RampVerdict } from '$lib/engines/palettes/ramp-verdict';
+import type { SheetTheme } from '$lib/engines/sheet/themed';
 import type { ThemeTrouble } from '$lib/schemas/desk-theme';
 import type { DocketStage, DocketWords } from './docket';
 
@@ -47,6 +48,16 @@ export const troubleWords: Record<ThemeTrouble, string> = {
 	stale:
 		'The figures are joined to earlier boundaries, so every region is without data. Join the table again.',
 };
+
+/** What is said where no region has a class; '' where one has. */
+export function untoldWords({ classes, told }: Pick<SheetTheme, 'classes' | 'told'>): string {
+	if (classes.some((one) => one < told)) return '';
+	const noData = classes.filter((one) => one === told).length;
+	if (noData === classes.length)
+		return 'No region has a figure: every value is missing, or has nothing that it can be divided by.';
+	if (noData === 0) return 'No region has a class: every count is suppressed.';
+	return 'No region has a class: every figure is missing or suppressed.';
+}
 
 /** "Classes 1 and 2 differ by 6.7, of 10 asked" */
 export function pairWords({ a, b, found, asked, reader }: ReaderVerdict): string {
