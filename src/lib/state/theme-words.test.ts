@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { classMethods, type Theme } from '$lib/engines/measures/theme';
 import { theme as themeSchema } from '$lib/schemas/theme';
-import { autoTitle, untoldWords } from './theme-words';
+import { autoTitle, pairWords, untoldWords } from './theme-words';
 
 const per = (times: number, measure = 'people') => ({ kind: 'measure', measure, times }) as const;
 
@@ -37,4 +37,11 @@ it('a theme that gives no region a class says why', () => {
 	expect(words(3, 3)).toMatch(/^No region has a figure/);
 	expect(words(4, 4)).toMatch(/every count is suppressed/);
 	expect(words(3, 4)).toMatch(/missing or suppressed/);
+});
+
+it('a difference that misses what is asked is not rounded up to it', () => {
+	const pair = { a: 0, b: 1, next: true, found: 9.98, asked: 10, severity: 'warning' } as const;
+	expect(pairWords({ ...pair, reader: 'deutan' })).toBe(
+		'Classes 1 and 2 differ least: 9.9, 10 asked',
+	);
 });

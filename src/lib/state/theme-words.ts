@@ -1,4 +1,4 @@
-import { counted } from '$lib/components/format';
+import { counted, roundedDown } from '$lib/components/format';
 import type { ClassMethod, Theme } from '$lib/engines/measures/theme';
 import type { ReaderVerdict, RampVerdict } from '$lib/engines/palettes/ramp-verdict';
 import type { SheetTheme } from '$lib/engines/sheet/themed';
@@ -62,7 +62,7 @@ export function untoldWords({ classes, told }: Pick<SheetTheme, 'classes' | 'tol
 /** "Classes 1 and 2 differ by 6.7, of 10 asked" */
 export function pairWords({ a, b, found, asked, reader }: ReaderVerdict): string {
 	const by = reader === 'grey' ? 'in lightness' : '';
-	const pair = `Classes ${a + 1} and ${b + 1} differ least: ${found.toFixed(1)}`;
+	const pair = `Classes ${a + 1} and ${b + 1} differ least: ${roundedDown(found)}`;
 	return `${pair}${by && ` ${by}`}, ${asked} asked`;
 }
 
