@@ -66,7 +66,7 @@ async function showPeople(
 ): Promise<void> {
 	const { draft, revision, regions } = await deskSheet(shop, member, number);
 	const asked: Theme = {
-		...{ measure, per: { kind: 'area' }, isRate: false, method: 'natural-breaks', classes: 6 },
+		...{ measure, per: { kind: 'area' }, isRate: false, method: 'quantiles', classes: 6 },
 		...{ breaks: [], rounded: true, ramp: 'house-dusk', reversed: false, middle: null },
 		...{ suppressBelow: null, figuresInFiles: true, title: 'People per km²' },
 	};

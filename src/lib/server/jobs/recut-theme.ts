@@ -22,7 +22,9 @@ export function themeRow(
 		(name) => measures.find(({ carried }) => carried.name === name)?.numbers,
 	);
 	const subject = `The theme of ${measure}`;
-	const row = { stage: 'draft', what: 'theme', keys: [], now: [] } as const;
+	const row: Omit<CarriedRow, 'outcome' | 'words'> = {
+		...{ stage: 'draft', what: 'theme', keys: [], now: [] },
+	};
 	if (numbers.some((one) => !one)) {
 		const words = `${subject} stands, but has no figures of the boundaries that it was on.`;
 		return [{ ...row, outcome: 'dropped', words }];
