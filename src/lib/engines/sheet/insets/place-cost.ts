@@ -6,8 +6,10 @@ const perOctave = 1.3;
 /** A scale so many times smaller than the map's shows next to nothing, and each half costs as much again. */
 const tooSmall = 4;
 const sameScale = 0.6;
+/** Standing in line with another inset saves so much. */
+export const inLine = 0.15;
 /** No inset can save more than this. */
-export const bestOfAll = sameScale;
+export const bestOfAll = sameScale + inLine;
 /** Standing away from the edges by the whole box costs so much. */
 const offEdge = 2;
 /** Lying on the wrong side of another inset costs up to so much. */
@@ -47,6 +49,24 @@ export function swaps(
 		return both ? sum + swapped * Math.max(0, -(ax * dx + ay * dy) / both) : sum;
 	}, 0);
 }
+
+/** Left and upper edges that bring a frame into line with the sides of insets that have their place. */
+export function inLineWith({ width, height }: Box, others: Standing[]): [number[], number[]] {
+	return [
+		others.flatMap(({ outer }) => [outer.x, outer.x + outer.width - width]),
+		others.flatMap(({ outer }) => [outer.y, outer.y + outer.height - height]),
+	];
+}
+
+/** Whether a box shares the line of a side with another inset. */
+export const isInLine = ({ x, y, width, height }: Box, others: Standing[]): boolean =>
+	others.some(
+		({ outer }) =>
+			x === outer.x ||
+			y === outer.y ||
+			x + width === outer.x + outer.width ||
+			y + height === outer.y + outer.height,
+	);
 
 export const isSame = (ratio: number, mapRatio: number): boolean =>
 	Math.abs(ratio / mapRatio - 1) < 1e-9;

@@ -6,7 +6,16 @@
 import type { Box } from '../plane/fit.ts';
 import { isFree, type FreeGrid } from './free-grid.ts';
 import { insetFrame, type InsetDress, type InsetFrame } from './inset-size.ts';
-import { isSame, placeCost, scaleCost, swaps, type Standing } from './place-cost.ts';
+import {
+	inLine,
+	inLineWith,
+	isInLine,
+	isSame,
+	placeCost,
+	scaleCost,
+	swaps,
+	type Standing,
+} from './place-cost.ts';
 
 export interface InsetWish {
 	name: string;
@@ -99,18 +108,31 @@ function bestPlace(frame: Box, wish: InsetWish, ground: Ground, others: Standing
 	const { grid } = ground;
 	const [wide, high] = [grid.box.width - frame.width, grid.box.height - frame.height];
 	if (wide < 0 || high < 0) return null;
-	const places = (room: number) => {
+	const places = (room: number, inLine: number[]) => {
 		const count = Math.max(1, Math.floor(room / (1.5 * grid.cell)));
-		return Array.from({ length: count + 1 }, (_, i) => Math.round((room * i) / count));
+		const even = Array.from({ length: count + 1 }, (_, i) => Math.round((room * i) / count));
+		return [...even, ...inLine.filter((at) => at >= 0 && at <= room)];
 	};
+	const [across, down] = inLineWith(frame, others);
+	const [xs, ys] = [
+		places(
+			wide,
+			across.map((x) => x - grid.box.x),
+		),
+		places(
+			high,
+			down.map((y) => y - grid.box.y),
+		),
+	];
 	let best: { box: Box; cost: number } | null = null;
-	for (const y of places(high)) {
-		for (const x of places(wide)) {
+	for (const y of ys) {
+		for (const x of xs) {
 			const box = movedTo(frame, grid.box.x + x, grid.box.y + y);
 			const most = best?.cost ?? below;
 			const alone = placeCost(box, wish.towards, grid.box);
-			if (alone >= most) continue;
-			const costs = alone + swaps(box, wish.towards, others);
+			if (alone - inLine >= most) continue;
+			const own = isInLine(box, others) ? alone - inLine : alone;
+			const costs = own + swaps(box, wish.towards, others);
 			if (costs < most && isClear(box, ground, others)) best = { box, cost: costs };
 		}
 	}
