@@ -39,6 +39,13 @@ export const nameOf = (ink: DrawnInk, number: number): string =>
 export const countWords = (count: number): string =>
 	`${count.toLocaleString('en-GB')} ${count === 1 ? 'region' : 'regions'}`;
 
+/** The widest text of as many digits: a figure with fewer narrow ones may not ask for more room. */
+function widestOf(text: string, size: number): string {
+	const wide = (digit: string) => textWidth('sans', size, digit);
+	const widest = [...'0123456789'].reduce((most, one) => (wide(one) > wide(most) ? one : most));
+	return text.replace(/\d/g, widest);
+}
+
 /** Height of a row whose names take so many lines. */
 export const rowHeight = (size: number, lines: number): number =>
 	size * (lines <= 1 ? rowHigh : 0.5 + leading * lines);
@@ -62,7 +69,7 @@ export function planLegend(input: LegendInput, size: number, width: number): Leg
 	const heading = cleanText(legendTitle);
 	const title = heading ? wrapText('sans-bold', titleSize(size), heading, width) : [];
 	const ranks = rankWords(layout);
-	const counted = legendCounts ? `, ${countWords(regions)}` : '';
+	const counted = legendCounts ? `, ${widestOf(countWords(regions), size)}` : '';
 	const words = [
 		...inks.map((ink, number) => nameOf(ink, number) + counted),
 		...ranks.map((rank) => rank.words),

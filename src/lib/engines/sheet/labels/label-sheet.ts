@@ -35,8 +35,10 @@ const groupSizes = [10, 9, 8, 7];
 const spacedSizes = [10, 9, 8, 7];
 /** Above so many names only the smallest sizes are tried, which bounds the time. */
 const mostAtEverySize = 8_000;
-/** A larger size may cost this share of the names that fit at the smallest. */
-const worth = 0.03;
+/** Type larger by a point is worth this share of the names: small type on a roomy map reads ill. */
+const perPoint = 0.02;
+/** What a larger size may by chance fit more than the smallest. */
+const chance = 0.03;
 const enough = 0.6;
 /** Names of the level above stand between those of regions where this share of these has room enough. */
 const suits = 0.85;
@@ -108,7 +110,7 @@ export function labelSheet(input: LabelInput): Labelled {
 	});
 }
 
-/** The largest size that costs few of the names that fit at the smallest; null where too few do. */
+/** The size that suits best, more names against larger type; null where too few fit at the smallest. */
 function sizeThatDoes(
 	task: NameTask,
 	tried: number[],
@@ -124,14 +126,16 @@ function sizeThatDoes(
 	const least = tried[tried.length - 1];
 	const most = share(labelRegions(task, least));
 	if (most < asked) return null;
-	// the larger the type, the fewer names fit: halving finds the largest that does
-	let [low, high] = [0, tried.length - 1];
-	while (low < high) {
-		const middle = (low + high) >> 1;
-		if (share(labelRegions(task, tried[middle])) >= most - worth) high = middle;
-		else low = middle + 1;
+	const larger = (size: number) => ((size - least) / point) * perPoint;
+	let best = { size: least, worth: most };
+	for (const size of tried.slice(0, -1)) {
+		// neither this nor any smaller could do better
+		if (most + chance + larger(size) <= best.worth) break;
+		const fits = share(labelRegions(task, size));
+		const worth = fits + larger(size);
+		if (fits >= asked && worth >= best.worth) best = { size, worth };
 	}
-	return tried[low];
+	return best.size;
 }
 
 /** The level above: instead of regions in bold, or between their names in spaced capitals. */
