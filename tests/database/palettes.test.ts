@@ -118,6 +118,19 @@ describe('the team’s palettes', () => {
 		});
 		const names = (await teamPalettes(shop, designer)).map(({ name }) => name);
 		expect(names).toContain('Okabe and Ito, copy 2');
+		// another value is not the published one, another name or a hatch is
+		const copy = await readPalette(shop, designer, first);
+		const renamed = copy.inks.map((ink) => ({ ...ink, name: `${ink.name} of ours` }));
+		const sourceAfter = async (inks: Ink[], revision: number) => {
+			await changePalette(shop, designer, first, { name: copy.name, inks, revision });
+			return (await readPalette(shop, designer, first)).source;
+		};
+		expect(await sourceAfter(renamed, 1)).toBe(copy.source);
+		const [one, ...rest] = renamed;
+		for (const revision of [2, 3])
+			expect(await sourceAfter([{ ...one, hex: `#12345${revision}` }, ...rest], revision)).toBe(
+				`changed from ${copy.source}`,
+			);
 		await expect(copyPalette(shop, designer, 'no-such')).rejects.toBeInstanceOf(NotFound);
 	});
 });

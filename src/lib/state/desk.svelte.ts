@@ -170,8 +170,11 @@ export class Desk {
 		return problemOf(document, regions.key, borders, this.numbers, previous);
 	}
 
-	/** How the palette of a document fares on this sheet with a colouring. */
-	judge({ palette, layout }: Draft, colouring: Int32Array): PaletteJudgement {
+	/** How the palette of a document, or the colours of classes, fare on this sheet with a colouring. */
+	judge(
+		{ palette, layout }: { palette: Pick<Draft['palette'], 'inks'>; layout: Draft['layout'] },
+		colouring: Int32Array,
+	): PaletteJudgement {
 		return judgePalette({
 			...{ inks: palette.inks, colouring, borders: this.countedBorders },
 			...{ numbers: this.countedNumbers, sizesMm: this.sizesMm },

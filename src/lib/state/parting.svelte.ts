@@ -20,6 +20,8 @@ export class PartingOnDesk {
 	working = $state(false);
 	unparted: Unparted | null = $state.raw(null);
 	failure = $state('');
+	/** regions that have another ink in the colouring that is on trial; null while there is none */
+	changed: number | null = $state(null);
 	readonly #worker: PaletteWorker;
 
 	constructor(
@@ -63,6 +65,7 @@ export class PartingOnDesk {
 		this.working = false;
 		this.unparted = null;
 		this.failure = '';
+		this.changed = null;
 	}
 
 	#settle(parting: Parting, label: string) {
@@ -72,7 +75,8 @@ export class PartingOnDesk {
 			this.unparted = parting;
 			return;
 		}
-		const { inksUsed, colouring } = parting;
+		const { inksUsed, colouring, changes } = parting;
+		this.changed = changes;
 		// more inks than are needed: the draft asks for so many, else it would be coloured with fewer again
 		const more = document.inks === 'fewest' && inksUsed > this.#fewest();
 		const shown = more ? { ...document, inks: inksUsed } : document;

@@ -61,6 +61,7 @@ describe('unsafe inks kept from touching', () => {
 		expect(now?.answer).toMatchObject({ status: 'coloured', inksUsed: 3, lowerBound: 2 });
 		expect(now?.answer).toMatchObject({ proof: { kind: 'not-proved' }, sentence: 'Said.' });
 		const shown = [...(now?.inks ?? [])];
+		expect(parting.changed).toBe(shown.filter((ink, region) => ink !== region % 2).length);
 		ring.a.forEach((a, i) => {
 			const pair = [shown[a], shown[ring.b[i]]].sort().join();
 			expect(['0,0', '1,1', '2,2', '0,1']).not.toContain(pair);

@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { classMethods, type Theme } from '$lib/engines/measures/theme';
 import { theme as themeSchema } from '$lib/schemas/theme';
-import { autoTitle, pairWords, untoldWords } from './theme-words';
+import { autoTitle, inSentence, pairWords, themeStage, untoldWords } from './theme-words';
 
 const per = (times: number, measure = 'people') => ({ kind: 'measure', measure, times }) as const;
 
@@ -44,4 +44,19 @@ it('a difference that misses what is asked is not rounded up to it', () => {
 	expect(pairWords({ ...pair, reader: 'deutan' })).toBe(
 		'Classes 1 and 2 differ least: 9.9, 10 asked',
 	);
+});
+
+it('the docket tells that classes look alike, and where that is put right', () => {
+	const well = { title: 'Visits', told: 5, untold: 0, trouble: null, holds: true };
+	const stage = (alike: boolean) => themeStage({ ...well, misleads: false, alike });
+	expect(stage(false)).toMatchObject({ mark: 'clear' });
+	expect(stage(true).mark).toBe('warning');
+	expect(stage(true).words.at(-1)).toEqual({ text: 'Some classes look alike', to: '#classes' });
+});
+
+it('a sentence about inks is one about classes', () => {
+	expect(inSentence('Every reader can tell apart all inks that touch')).toBe(
+		'every reader can tell apart all classes that touch',
+	);
+	expect(inSentence('No inks touch yet')).toBe('no classes touch yet');
 });

@@ -66,6 +66,10 @@ export function pairWords({ a, b, found, asked, reader }: ReaderVerdict): string
 	return `${pair}${by && ` ${by}`}, ${asked} asked`;
 }
 
+/** A sentence of the palette's as part of one about classes. */
+export const inSentence = (sentence: string): string =>
+	sentence.replace(/\binks\b/g, 'classes').replace(/^(Every|No)\b/, (word) => word.toLowerCase());
+
 /** One sentence about a ramp in so many classes. */
 export function rampSentence(
 	{ readers, ordered }: RampVerdict,
@@ -89,6 +93,8 @@ export interface ThemeState {
 	holds: boolean;
 	/** whether a count fills areas and nobody said that it is a rate */
 	misleads: boolean;
+	/** whether some reader takes two classes for one another */
+	alike: boolean;
 }
 
 /** What the docket says of the theme. */
@@ -96,7 +102,7 @@ export function themeStage(theme: ThemeState | null): DocketStage {
 	const stage = { id: 'theme', title: 'Theme' } as const;
 	if (!theme)
 		return { ...stage, mark: null, words: [{ text: 'None: the sheet shows its colouring' }] };
-	const { title, told, untold, trouble, holds, misleads } = theme;
+	const { title, told, untold, trouble, holds, misleads, alike } = theme;
 	const shown: DocketWords = {
 		text: `${title || 'A measure'} in ${counted(told, 'class', 'classes')}`,
 		to: '#classes',
@@ -105,7 +111,8 @@ export function themeStage(theme: ThemeState | null): DocketStage {
 	if (trouble) more.push({ text: 'Its figures are missing', to: '#theme' });
 	else if (!holds) more.push({ text: 'Limits are of earlier figures', to: '#theme' });
 	else if (misleads) more.push({ text: 'A count fills areas', to: '#theme' });
+	else if (alike) more.push({ text: 'Some classes look alike', to: '#classes' });
 	else if (untold) more.push({ text: `${counted(untold, 'region')} not told`, to: '#classes' });
-	const mark = trouble ? 'error' : !holds || misleads ? 'warning' : 'clear';
+	const mark = trouble ? 'error' : !holds || misleads || alike ? 'warning' : 'clear';
 	return { ...stage, mark, words: [shown, { text: '.' }, ...more] };
 }

@@ -3,6 +3,7 @@ export * from './palette.ts';
 export { housePalettes } from './house.ts';
 export { publishedPalettes } from './published.ts';
 export { checkPalette, defaultThresholds, judgeLabel, labelContrastAsked } from './check.ts';
+export { checkInks } from './check-inks.ts';
 export {
 	alikeBelow,
 	demandFor,

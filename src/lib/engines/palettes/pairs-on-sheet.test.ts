@@ -1,5 +1,7 @@
+import { differenceCiede2000, lab65, type Rgb } from 'culori';
 import { describe, expect, it } from 'vitest';
 import type { BorderList } from '../borders/border-list.ts';
+import { linearOf, tritanSecondOpinion } from '../colour/index.ts';
 import {
 	isUnsafe,
 	pairDemands,
@@ -161,5 +163,30 @@ describe('the verdict on a pair', () => {
 		const [poppyLeather, poppyChalk] = pair([], { groups }, pale);
 		expect(poppyLeather.line).toMatchObject({ rank: 'region', passes: true });
 		expect(poppyChalk.line).toMatchObject({ rank: 'group', passes: false });
+	});
+
+	it('notes where an older model of tritan eyesight (Brettel 1997) would not pass a pair', () => {
+		const two: Ink[] = [
+			{ name: 'Sky blue', hex: '#56b4e9' },
+			{ name: 'Bluish green', hex: '#009e73' },
+		];
+		const doubt = (mm: number, pair = two) => {
+			const ground = { borders: bordersOf([[0, 1]]), colouring: [0, 1], sizesMm: [mm, mm] };
+			const [judged] = pairsOnSheet(
+				pair,
+				pairDemands({ ...ground, inks: pair.map(({ hex }) => hex) }),
+				black,
+			);
+			return judged.tritanDoubt;
+		};
+		// reference library: culori 4.0.2 on what the older model makes of the two
+		const [a, b] = two.map(({ hex }) => {
+			const [red, green, blue] = tritanSecondOpinion(linearOf(hex));
+			return lab65({ mode: 'lrgb', r: red, g: green, b: blue } as unknown as Rgb);
+		});
+		expect(doubt(7)).toBeCloseTo(differenceCiede2000()(a, b), 3);
+		expect(doubt(12)).toBeNull();
+		const hatch = { kind: 'lines', angle: 45, spacingMm: 2, widthMm: 0.3, hex: '#000000' } as const;
+		expect(doubt(7, [two[0], { ...two[1], hatch }])).toBeNull();
 	});
 });

@@ -1,3 +1,4 @@
+import { ciede2000 } from '../colour/ciede2000.ts';
 import { contrast } from '../colour/contrast.ts';
 import { readers, type Reader } from '../colour/reader.ts';
 import { appearanceOf, found } from './appearance.ts';
@@ -6,6 +7,7 @@ import { alikeBelow, greySafeFrom } from './demand.ts';
 import { hatchesTell } from './hatch-tells.ts';
 import type { LineRank, PairDemand } from './pair-demands.ts';
 import type { Ink } from './palette.ts';
+import { secondOpinionOf } from './tritan-doubts.ts';
 
 /**
  * How a reader fares: `clear`; `near`: enough, though not yet safe in grey print; `hatch`: told apart by the
@@ -35,6 +37,11 @@ export interface PairOnSheet extends PairDemand {
 	line: { rank: LineRank; contrast: [number, number]; passes: boolean };
 	/** null where no region is under 3.5 mm */
 	beside: BesideColour | null;
+	/**
+	 * CIEDE2000 for tritan readers by the older model (Brettel et al. 1997), where it misses what is asked and
+	 * that of the check does not: models of this deficiency differ most. A note, no verdict; else null
+	 */
+	tritanDoubt: number | null;
 	mark: 'clear' | 'warning' | 'error';
 }
 
@@ -56,6 +63,7 @@ export function pairsOnSheet(
 ): PairOnSheet[] {
 	const seen = inks.map(({ hex }) => appearanceOf(hex));
 	const hexes = inks.map(({ hex }) => hex);
+	const second = hexes.map(secondOpinionOf);
 	const onInks = {
 		region: checkBorderLine(lines.region, hexes),
 		group: checkBorderLine(lines.group, hexes),
@@ -86,8 +94,15 @@ export function pairsOnSheet(
 			...rest,
 			contrast: contrast(inks[a].hex, inks[b].hex),
 			mark: markOf(rest),
+			tritanDoubt: doubtOf(judged, ciede2000(second[a], second[b]), () => told('tritan')),
 		};
 	});
+}
+
+function doubtOf(judged: readonly ReaderOnPair[], second: number, told: () => boolean) {
+	const first = judged.find(({ reader }) => reader === 'tritan');
+	if (!first || first.found < first.asked || second >= first.asked) return null;
+	return told() ? null : second;
 }
 
 function faintest(lines: PairOnSheet['line'][]): PairOnSheet['line'] {

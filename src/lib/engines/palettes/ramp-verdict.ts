@@ -23,7 +23,7 @@ export interface RampVerdict {
 	byClass: { readers: Reader[]; severity: 'clear' | 'warning' | 'error' }[];
 	/** L* rises or falls from class to class, so that grey print keeps the order */
 	ordered: boolean;
-	/** classes on which a black border line has less than 3:1 */
+	/** classes on which the border line has less than 3:1, so that regions of one class run together */
 	faintLines: number[];
 	/** nothing worse than a warning for any reader */
 	usable: boolean;
@@ -33,13 +33,14 @@ export interface RampVerdict {
 const asked = 10;
 
 /**
- * What every reader sees of the colours of classes. In: `#rrggbb`, lowest class first. Out: for each reader
+ * What every reader sees of the colours of classes. In: `#rrggbb`, lowest class first; the
+ * colour of the line between regions. Out: for each reader
  * the pair of classes that is told apart least, all pairs looked at, since any two classes may touch.
  * Error below 5 in CIEDE2000, warning below 10. In grey print classes are amounts that must be read off, so
  * it is stricter than for a colouring: an error below 5 in L*, a warning below 8.
  * Source: as `checkPalette`; WCAG 2.2, 1.4.11 for the line.
  */
-export function judgeRamp(hexes: readonly string[]): RampVerdict {
+export function judgeRamp(hexes: readonly string[], lineHex = '#000000'): RampVerdict {
 	const seen = hexes.map(appearanceOf);
 	const all = readers.flatMap((reader) =>
 		hexes.flatMap((_, b) =>
@@ -59,7 +60,7 @@ export function judgeRamp(hexes: readonly string[]): RampVerdict {
 		readers: worst,
 		byClass: hexes.map((_, one) => ofClass(all, one)),
 		ordered: rises.every((one) => one > 0) || rises.every((one) => one < 0),
-		faintLines: checkBorderLine('#000000', hexes).flatMap(({ ink, passes }) => (passes ? [] : ink)),
+		faintLines: checkBorderLine(lineHex, hexes).flatMap(({ ink, passes }) => (passes ? [] : ink)),
 		usable: worst.every(({ severity }) => severity !== 'error'),
 	};
 }

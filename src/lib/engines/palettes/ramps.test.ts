@@ -70,6 +70,12 @@ describe('ramps', () => {
 		});
 	});
 
+	it('are told where the border line that is drawn is lost on them', () => {
+		const dark = ['#f0f0f0', '#303030'];
+		expect(judgeRamp(dark).faintLines).toEqual([1]);
+		expect(judgeRamp(dark, '#ffffff').faintLines).toEqual([0]);
+	});
+
 	it('to both sides turn where they are asked to', () => {
 		const own = ramps.find(({ id }) => id === 'house-ochre-slate') ?? expect.fail('no such ramp');
 		const lightness = light(rampInks(own, 5, { turn: 1 }));

@@ -66,13 +66,13 @@ export const insertPalette = (
 export async function updatePalette(
 	trx: Db,
 	id: string,
-	{ name, inks }: { name: string; inks: readonly PaletteInk[] },
+	{ name, inks, source }: { name: string; inks: readonly PaletteInk[]; source: string | null },
 ): Promise<boolean> {
 	try {
 		await trx
 			.updateTable('palettes')
 			.set(({ eb }) => ({
-				name,
+				...{ name, source },
 				inks: JSON.stringify(inks),
 				revision: eb('revision', '+', 1),
 				updated_at: new Date(),

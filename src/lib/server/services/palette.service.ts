@@ -111,7 +111,8 @@ export async function changePalette(
 				'Somebody else changed this palette meanwhile. Load the page again to see it; nothing was overwritten.',
 			);
 		if (row.name === palette.name && sameInks(row.inks, palette.inks)) return;
-		if (!(await updatePalette(trx, id, palette)))
+		const source = sourceAfter(row, palette.inks);
+		if (!(await updatePalette(trx, id, { ...palette, source })))
 			throw new Refused('The team has a palette of this name already.', 'name');
 		const ended = await endApproval(trx, id);
 		const renamed = row.name === palette.name ? {} : { before: row.name };
@@ -119,6 +120,20 @@ export async function changePalette(
 		await record(trx, member, 'palette.changed', { kind: 'palette', id }, detail);
 	});
 }
+
+const changedFrom = 'changed from ';
+
+/** Values that were published are said to be so only while they are the published ones. */
+function sourceAfter(
+	{ source, inks: before }: { source: string | null; inks: Ink[] },
+	inks: Ink[],
+) {
+	const values = (list: readonly Ink[]) => list.map(({ hex }) => hex).join();
+	if (!source || source.startsWith(changedFrom) || values(before) === values(inks)) return source;
+	return `${changedFrom}${source}`.slice(0, mostSource);
+}
+/** characters that the table takes */
+const mostSource = 1_000;
 
 /** Sheets that use it keep their copy. */
 export async function removePalette(shop: Reading, member: Member, id: string): Promise<void> {

@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest';
 import type { Proposal, ProposalAnswer } from '$lib/engines/palettes';
-import { together, unmendedWords } from './mend-words';
+import { searchWords, together, unmendedWords } from './mend-words';
 
 const proposal = (kind: Proposal['kind'], inks: string[]): Proposal => ({
 	...{ kind, inks, moves: [4], moved: 1, total: 4, least: 13, leastGrey: 6 },
@@ -37,4 +37,15 @@ it('proposals that come to the same inks are one', () => {
 		proposal('least', ['#1']),
 	]);
 	expect(blocks.map(({ kinds }) => kinds)).toEqual([['fewest', 'least'], ['grey']]);
+});
+
+it('the search says how far it is, and how it ended', () => {
+	const at = { working: true, failure: '', found: 0, ended: false };
+	expect(searchWords(at)).toBe('Looking for inks that every reader can tell apart.');
+	expect(searchWords({ ...at, found: 2 })).toMatch(/; 2 found so far\.$/);
+	const end = { ...at, working: false };
+	expect(searchWords(end)).toBe('');
+	expect(searchWords({ ...end, failure: 'out of memory' })).toContain('(out of memory)');
+	expect(searchWords({ ...end, ended: true })).toBe('No mend was found.');
+	expect(searchWords({ ...end, ended: true, found: 1 })).toBe('1 mend found.');
 });

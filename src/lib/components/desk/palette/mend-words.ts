@@ -1,3 +1,4 @@
+import { counted } from '../../format';
 import type { Proposal, ProposalAnswer, ProposalKind } from '$lib/engines/palettes';
 
 /** What each proposal puts first. */
@@ -40,4 +41,22 @@ export function unmendedWords(answers: readonly ProposalAnswer[]): string[] {
 		'kind' in answer && answer.status === 'not-found' ? [unfound[answer.kind]] : [],
 	);
 	return missing.length ? [`Not found within the effort: ${missing.join('; ')}.`] : [];
+}
+
+/** How far the search for mends is, in a sentence that is read out; '' before it began. */
+export function searchWords(search: {
+	working: boolean;
+	failure: string;
+	found: number;
+	/** whether anything was answered */
+	ended: boolean;
+}): string {
+	const { working, failure, found, ended } = search;
+	if (working) {
+		const soFar = found ? `; ${found} found so far` : '';
+		return `Looking for inks that every reader can tell apart${soFar}.`;
+	}
+	if (failure) return `The search ended without an answer (${failure}).`;
+	if (!ended) return '';
+	return found ? `${counted(found, 'mend')} found.` : 'No mend was found.';
 }
