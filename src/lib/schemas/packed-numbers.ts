@@ -25,6 +25,7 @@ export function unpackNumbers(text: string): number[] {
 	for (let i = 0; i < text.length; i++) {
 		const digit = digits[text.charCodeAt(i)] ?? none;
 		if (digit === none) throw new RangeError('The numbers are spoilt.');
+		if (digit === half && before === 0) throw new RangeError('The numbers are spoilt.');
 		if (digit >= half) before = (before + digit - half) * half;
 		else {
 			numbers.push(before + digit - 1);

@@ -35,10 +35,10 @@ function groupsApart(group: (string | null)[]): DeskSheetApart['group'] {
 
 /** The whole sheet again, with the columns that it was given apart from. */
 export function wholeSheet(
-	{ firstPicture: _, borderCount: __, ...sheet }: DeskSheetApart,
+	{ firstPicture: _, borderCount: __, group, ...sheet }: DeskSheetApart,
 	{ regions, borders }: SheetColumns,
 ): DeskSheet {
-	const { colouring, theme, group } = sheet;
+	const { colouring, theme } = sheet;
 	const lastInks = sheet.lastInks === null ? null : unpackNumbers(sheet.lastInks);
 	return {
 		...sheet,
