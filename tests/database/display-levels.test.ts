@@ -72,7 +72,10 @@ describe('a large sheet', () => {
 	});
 
 	it('has a picture to show first, in which every region large enough has its cells', async () => {
+		const before = await shop.db.selectFrom('first_pictures').select('tag').execute();
 		const { firstPicture: tag } = (await sheetForPage(shop, member, 1)) as DeskSheetApart;
+		// it was made when the land was read
+		expect(before).toEqual([{ tag }]);
 		const packed = await sheetFirstPicture(shop, member, 1, tag);
 		const { buffer } = Uint8Array.from(gunzipSync(packed));
 		const picture = decodeFirstPicture(buffer);

@@ -2,6 +2,9 @@ import type { DeskColouring, DeskSheet, DeskSheetApart } from './desk.ts';
 import { packNumbers, unpackNumbers } from './packed-numbers.ts';
 import type { SheetColumns } from './sheet-columns.ts';
 
+/** Sheets of more regions than this come to the page in two parts. */
+export const mostWhole = 4_000;
+
 /**
  * A large sheet as its page is given it: without what never changes, and with long lists as short texts,
  * which a page is quicker to write and to read than lists.

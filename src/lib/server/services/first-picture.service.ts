@@ -39,6 +39,18 @@ export async function sheetFirstPicture(
 	return made;
 }
 
+/** Has the picture of a new large sheet ready before anybody opens it. */
+export async function prepareFirstPicture(
+	shop: Making,
+	team: Member['team'],
+	number: number,
+): Promise<void> {
+	// by nobody's hand: it reads the sheet and keeps what is anyhow made for whoever may see it
+	const maker: Member = { team, userId: null, tokenId: null, roles: [], actions: ['sheet.read'] };
+	const sheet = await deskSheet(shop, maker, number);
+	await make(shop, sheet, firstPictureTag(sheet));
+}
+
 async function make(shop: Making, sheet: DeskSheet, tag: string): Promise<Uint8Array> {
 	const { draft, boundarySet, regions, borders, theme, lastInks, editions } = sheet;
 	const [level] = boundarySet.levels;

@@ -1,6 +1,6 @@
 import { promisify } from 'node:util';
 import { gzip } from 'node:zlib';
-import { sheetApart } from '../../schemas/sheet-apart.ts';
+import { mostWhole, sheetApart } from '../../schemas/sheet-apart.ts';
 import { encodeColumns } from '../../schemas/sheet-columns.ts';
 import type { DeskSheet, DeskSheetApart } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
@@ -11,9 +11,6 @@ import { firstPictureTag } from './first-picture-tag.ts';
 import { deskSheet } from './sheet.service.ts';
 
 type Reading = Pick<Workshop, 'db'>;
-
-/** Sheets of more regions than this come to the page in two parts. */
-const mostWhole = 4_000;
 
 /** A sheet as its page is given it: of a large one the regions and borders are fetched apart, once. */
 export async function sheetForPage(
