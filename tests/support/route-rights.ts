@@ -71,6 +71,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/editions/[number]/inks', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/exports', 'GET', 'files.download'],
 	['/sheets/[sheet]/exports/[export]/file', 'GET', 'files.download'],
+	['/sheets/[sheet]/first-picture', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/geometry', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/layout', 'load', 'sheet.read'],
 	['/sheets/[sheet]/layout', 'action save', 'layout.edit'],

@@ -23,6 +23,7 @@ import { rebase } from './rebase';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions } from './rules-in-force';
 import type { SaveWithInks } from './save-draft';
+import type { ShownFirst } from './first-picture';
 import type { DrawnSheet } from './drawn-sheet';
 import { RuleHand } from './rule-hand.svelte';
 import { ThemeOnDesk } from './theme-on-desk.svelte';
@@ -86,6 +87,8 @@ export class Desk {
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
+	/** what a large sheet shows until it is painted from `drawn`; null for others, and afterwards */
+	first: ShownFirst | null = $state.raw(null);
 	/** finer lines for the part of the sheet that is looked at, on a canvas */
 	finer: FinerGround | null = $state.raw(null);
 	/** asks for them: an area of the paper, and pixels to a hundredth of a millimetre */

@@ -14,6 +14,7 @@ import {
 	doubledBorders,
 	drawSheet,
 	sheetTable,
+	type SheetInput,
 	type SheetTheme,
 } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
@@ -39,7 +40,7 @@ export interface PaintInput {
 }
 
 /** A region whose ink the palette lacks is drawn as not coloured. */
-export function drawInput(input: PaintInput) {
+export function drawInput(input: PaintInput, how: Pick<SheetInput, 'bare'> = {}) {
 	const coverage = decodeCoverage(input.geometry);
 	const { draft, groups, named, reader, issue, theme } = input;
 	const { layout } = draft;
@@ -51,7 +52,7 @@ export function drawInput(input: PaintInput) {
 	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
 		...{ coverage, borders, groups, named, inks, layout, reader, issue },
-		...{ colouring, theme, locked, weak },
+		...{ colouring, theme, locked, weak, ...how },
 	});
 	return { coverage, drawing };
 }
