@@ -36,6 +36,10 @@ import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
 import { editionInks, revisionInks } from '../../src/lib/server/services/earlier-inks.service.ts';
 import {
+	editionChanges,
+	themedEditions,
+} from '../../src/lib/server/services/edition-changes.service.ts';
+import {
 	editionFile,
 	issueEdition,
 	readEdition,
@@ -297,6 +301,8 @@ const walk: Walk = {
 	],
 	readDraft: ['sheet.read', (member) => readDraft(shop, member, 99, 1)],
 	editionInks: ['sheet.read', (member) => editionInks(shop, member, 99, 1)],
+	editionChanges: ['sheet.read', (member) => editionChanges(shop, member, 99, 1)],
+	themedEditions: ['sheet.read', (member) => themedEditions(shop, member, 99)],
 	revisionInks: ['sheet.read', (member) => revisionInks(shop, member, 99, 1)],
 	readEdition: ['sheet.read', (member) => readEdition(shop, member, 99, 1)],
 	readInvitations: ['members.manage', (member) => readInvitations(member)],

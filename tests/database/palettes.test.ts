@@ -95,6 +95,18 @@ describe('the team’s palettes', () => {
 		await expect(readPalette(shop, designer, 'no uuid')).rejects.toBeInstanceOf(NotFound);
 	});
 
+	it('of which two take one name at once: one gets it, the other is told', async () => {
+		const both = await Promise.all(
+			['One of two', 'Two of two'].map((name) => addPalette(shop, designer, { name, inks })),
+		);
+		const renamed = await Promise.allSettled(
+			both.map((id) => changePalette(shop, designer, id, { name: 'Same', inks, revision: 1 })),
+		);
+		const refused = renamed.filter((one) => one.status === 'rejected');
+		expect(refused).toHaveLength(1);
+		expect(refused[0].reason).toBeInstanceOf(Refused);
+	});
+
 	it('are copied from published ones with source and licence, each copy under a name of its own', async () => {
 		const first = await copyPalette(shop, designer, 'okabe-ito');
 		const second = await copyPalette(shop, designer, first);

@@ -67,6 +67,7 @@ export const routeRights: [path: string, entry: string, action: Action][] = [
 	['/sheets/[sheet]/editions', 'action stop', 'files.download'],
 	['/sheets/[sheet]/editions', 'action take', 'files.download'],
 	['/sheets/[sheet]/editions/[number]/[file]', 'GET', 'files.download'],
+	['/sheets/[sheet]/editions/[number]/changes', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/editions/[number]/inks', 'GET', 'sheet.read'],
 	['/sheets/[sheet]/exports', 'GET', 'files.download'],
 	['/sheets/[sheet]/exports/[export]/file', 'GET', 'files.download'],

@@ -3,6 +3,7 @@ import { bordersForSheet, kindCode, standingsForSheet } from '$lib/engines/borde
 import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Area } from '$lib/engines/sheet';
+import { isOnSheet } from '$lib/engines/sheet/labels/set-name';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
@@ -177,8 +178,18 @@ export class Desk {
 		return judgePalette({
 			...{ inks: palette.inks, colouring, borders: this.countedBorders },
 			...{ numbers: this.countedNumbers, sizesMm: this.sizesMm },
-			look: { lineHex: layout.lines.region?.hex ?? '#000000', labels: layout.labels },
+			...{ groups: this.sheet.regions.group, labelled: this.#labelled(layout) },
+			lines: {
+				region: layout.lines.region?.hex ?? '#000000',
+				group: layout.lines.group?.hex ?? '#000000',
+			},
 		});
+	}
+
+	/** Which regions the sheet itself names, as it was drawn last. */
+	#labelled({ labels }: Draft['layout']): ((region: number) => boolean) | undefined {
+		const how = this.drawn?.drawing.lettering.how;
+		return labels && how ? (region) => isOnSheet(how[region]) : undefined;
 	}
 
 	/** what is known about the draft as it stands */

@@ -133,6 +133,8 @@ export class ThemeOnDesk {
 		const after: Theme = { ...before, ...part };
 		const others = after.measure !== before.measure || after.per !== before.per;
 		if (others && after.method === 'by-hand') after.method = 'natural-breaks';
+		// said of one measure, not of whichever comes after it
+		if (others) delete after.figuresInFiles;
 		if (before.title === this.#titleOf(before) && part.title === undefined)
 			after.title = this.#titleOf(after);
 		this.#put(label, after, run, !limiting.some((one) => one in part));

@@ -1,19 +1,29 @@
-import { count, counted } from '$lib/components/format';
+import { counted, roundedDown } from '$lib/components/format';
 import type { ClassMethod, Theme } from '$lib/engines/measures/theme';
 import type { ReaderVerdict, RampVerdict } from '$lib/engines/palettes/ramp-verdict';
+import type { SheetTheme } from '$lib/engines/sheet/themed';
 import type { ThemeTrouble } from '$lib/schemas/desk-theme';
 import type { DocketStage, DocketWords } from './docket';
 
+/** The longest heading of a legend that a theme can have. */
+const longestTitle = 300;
+
 /** Heading of the legend while nobody wrote another: the figure, its unit, what it is divided by. */
-export function autoTitle({ measure, per }: Theme, unit: string): string {
+export function autoTitle({ measure, per }: Pick<Theme, 'measure' | 'per'>, unit: string): string {
 	const what = unit ? `${measure}, ${unit}` : measure;
-	if (per.kind === 'area') return `${what} per km²`;
-	if (per.kind === 'measure')
-		return per.times === 1
-			? `${what} per ${per.measure}`
-			: `${what} per ${count(per.times)} ${per.measure}`;
-	return what;
+	return `${what}${perWords(per)}`.slice(0, longestTitle);
 }
+
+function perWords(per: Theme['per']): string {
+	if (per.kind === 'none') return '';
+	if (per.kind === 'area') return ' per km²';
+	return per.times === 1
+		? ` per ${per.measure}`
+		: ` per ${manyDigits.format(per.times)} ${per.measure}`;
+}
+
+/** `For every 0.5` is half, and never the nought that a whole number would make of it. */
+const manyDigits = new Intl.NumberFormat('en-GB', { maximumSignificantDigits: 15 });
 
 export const methodWords: Record<ClassMethod, { label: string; what: string }> = {
 	'natural-breaks': {
@@ -39,10 +49,20 @@ export const troubleWords: Record<ThemeTrouble, string> = {
 		'The figures are joined to earlier boundaries, so every region is without data. Join the table again.',
 };
 
+/** What is said where no region has a class; '' where one has. */
+export function untoldWords({ classes, told }: Pick<SheetTheme, 'classes' | 'told'>): string {
+	if (classes.some((one) => one < told)) return '';
+	const noData = classes.filter((one) => one === told).length;
+	if (noData === classes.length)
+		return 'No region has a figure: every value is missing, or has nothing that it can be divided by.';
+	if (noData === 0) return 'No region has a class: every count is suppressed.';
+	return 'No region has a class: every figure is missing or suppressed.';
+}
+
 /** "Classes 1 and 2 differ by 6.7, of 10 asked" */
 export function pairWords({ a, b, found, asked, reader }: ReaderVerdict): string {
 	const by = reader === 'grey' ? 'in lightness' : '';
-	const pair = `Classes ${a + 1} and ${b + 1} differ least: ${found.toFixed(1)}`;
+	const pair = `Classes ${a + 1} and ${b + 1} differ least: ${roundedDown(found)}`;
 	return `${pair}${by && ` ${by}`}, ${asked} asked`;
 }
 

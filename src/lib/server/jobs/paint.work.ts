@@ -6,7 +6,8 @@ import {
 	exportCsv,
 	exportGeoJson,
 	exportSvg,
-	themeExtraColumns,
+	furtherColumns,
+	type FurtherValues,
 } from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
 import {
@@ -67,11 +68,16 @@ export interface SheetFile {
 	bytes: Uint8Array;
 }
 
+export interface FilesInput extends PaintInput {
+	/** what tables tell beside what is drawn */
+	further: FurtherValues;
+}
+
 /** Every file an edition is issued as, all from one drawing. */
-export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
+export function renderFiles({ input }: Task<FilesInput>): SheetFile[] {
 	const { coverage, drawing } = drawInput(input);
 	const rows = sheetTable(drawing, coverage, input.groups);
-	const columns = themeExtraColumns(rows);
+	const columns = furtherColumns(rows, input.further);
 	return [
 		{
 			extension: 'svg',

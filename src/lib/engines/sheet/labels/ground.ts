@@ -12,6 +12,8 @@ export interface Ground {
 	counts: CellCounts;
 	/** from `headroom`: never above anything that was there before names */
 	room: Uint16Array;
+	/** frames of insets: a name stands on the same side of each as its region */
+	frames: readonly Box[];
 }
 
 /** Marks every cell that a box touches as taken; parts off the grid are left out. */
@@ -83,6 +85,18 @@ export function* cellsAlong(raster: RegionRaster, { from, to }: Leader): Generat
 /** Marks a leader as taken, so that no name and no other leader crosses it. */
 export function occupyLine({ raster, busy }: Ground, line: Leader): void {
 	for (const cell of cellsAlong(raster, line)) if (cell >= 0) busy[cell] = 1;
+}
+
+/** Whether a box lies wholly in the frames that a place lies in, and touches no other. */
+export function isWithSame({ frames }: Ground, at: { x: number; y: number }, box: Box): boolean {
+	return frames.every(({ x, y, width, height }) => {
+		if (at.x > x && at.x < x + width && at.y > y && at.y < y + height) {
+			const across = box.x >= x && box.x + box.width <= x + width;
+			return across && box.y >= y && box.y + box.height <= y + height;
+		}
+		const beside = box.x + box.width <= x || box.x >= x + width;
+		return beside || box.y + box.height <= y || box.y >= y + height;
+	});
 }
 
 export const boxAround = (x: number, y: number, width: number, height: number): Box => ({

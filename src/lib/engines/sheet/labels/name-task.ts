@@ -72,7 +72,7 @@ export function nameTask(input: LabelInput, smallest: number): { task: NameTask;
 	return {
 		task: {
 			ground: {
-				...{ raster, counts: countCells(raster) },
+				...{ raster, counts: countCells(raster), frames: input.frames },
 				...{ busy: fixed.slice(), room: headroom(raster, fixed) },
 			},
 			...{ fixed, paperBox: input.paper, poles, anchors, coastal },
