@@ -62,7 +62,7 @@ it('says the share of a box that going through its cells says, wherever it is en
 				};
 				const ground = {
 					...{ raster, counts: countCells(raster), busy: Uint8Array.from(busy) },
-					room: new Uint16Array(owner.length),
+					...{ room: new Uint16Array(owner.length), frames: [] },
 				};
 				const told = byEveryCell(raster, busy, box, region);
 				const said = ownShare(ground, box, region, 0.6);
