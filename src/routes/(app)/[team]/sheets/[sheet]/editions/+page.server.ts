@@ -4,6 +4,7 @@ import { memberFor } from '$lib/server/access/guard';
 import { attempt, readForm } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
+import { themedEditions } from '$lib/server/services/edition-changes.service';
 import { issueEdition } from '$lib/server/services/edition.service';
 import { stopExport } from '$lib/server/services/export-end.service';
 import { askForExport, sheetExports } from '$lib/server/services/exports.service';
@@ -14,11 +15,12 @@ const whatToIssue = z.object({
 	note: z.string().trim().max(2_000).default(''),
 });
 
-/** The files that were taken of editions and drafts, the newest first. */
+/** The files that were taken of editions and drafts, and the editions that show a measure. */
 export const load = (async ({ locals, params }) => {
 	const member = memberFor(locals, 'files.download');
 	return {
 		exports: await forPage(() => sheetExports(workshop(), member, Number(params.sheet))),
+		themed: await forPage(() => themedEditions(workshop(), member, Number(params.sheet))),
 	};
 }) satisfies PageServerLoad;
 
