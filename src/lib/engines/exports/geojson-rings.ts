@@ -1,5 +1,6 @@
 import type { Coverage } from '../boundaries/coverage.ts';
-import { cutRing, ringLonLat, type LonLat } from '../sheet/index.ts';
+import { ringLonLat, type LonLat } from '../sheet/index.ts';
+import { cutPart, span } from './cut-part.ts';
 
 /** Seven decimals of a degree are about a centimetre; more would be noise. */
 const rounded = (value: number): number => Number(value.toFixed(7)) || 0;
@@ -22,21 +23,6 @@ export function reachesSeam(ring: LonLat[]): boolean {
 	return turn || settled(ring).some(([lon]) => Math.abs(lon) >= 180 - 1e-9);
 }
 
-function span(ring: LonLat[]): [number, number] {
-	let [west, east] = [Infinity, -Infinity];
-	for (const [lon] of ring) [west, east] = [Math.min(west, lon), Math.max(east, lon)];
-	return [west, east];
-}
-
-function encloses(ring: LonLat[], [x, y]: LonLat): boolean {
-	let inside = false;
-	ring.forEach(([x0, y0], i) => {
-		const [x1, y1] = ring[(i || ring.length) - 1];
-		if (y0 > y !== y1 > y && x < ((x1 - x0) * (y - y0)) / (y1 - y0) + x0) inside = !inside;
-	});
-	return inside;
-}
-
 /**
  * The polygons of a region as RFC 7946 wants them: outer rings anticlockwise and holes clockwise
  * (3.1.6), as in the coverage; parts across 180 degrees cut there (3.1.9); rings closed.
@@ -55,13 +41,4 @@ export function polygonsOf(coverage: Coverage, region: number): LonLat[][][] {
 	return polygons.map((rings) =>
 		rings.map((ring) => ring.map(([lon, lat]): LonLat => [rounded(lon), rounded(lat)])),
 	);
-}
-
-/** Every piece of the outer ring with the pieces of holes that lie in it, cut at 180 degrees. */
-export function cutPart([outer, ...holes]: LonLat[][]): LonLat[][][] {
-	const cutHoles = holes.flatMap(cutRing);
-	return cutRing(outer).map((piece) => [
-		piece,
-		...cutHoles.filter((hole) => encloses(piece, hole[Math.floor(hole.length / 2)])),
-	]);
 }

@@ -37,6 +37,16 @@ describe.each([
 				layout: { ...layout, frame: { ...layout.frame, sea: '#cfe0ea', neatLine: true } },
 			}),
 	],
+	[
+		'49 states parted by wide dashes',
+		() =>
+			sourceOf(statesCoverage(), {
+				layout: {
+					...layout,
+					lines: { ...layout.lines, region: { widthMm: 1, hex: '#000000', dashMm: [3, 2] } },
+				},
+			}),
+	],
 	['3,108 counties', () => sourceOf(countiesCoverage())],
 ])('%s', (name, make) => {
 	const pictures: Record<string, PNG> = {};

@@ -9,6 +9,12 @@ import { padded, placeOnPaper, type OnPaper } from './place-on-paper.ts';
 import type { Box } from './plane/fit.ts';
 import type { DrawnShape } from './shapes.ts';
 
+/** What of a sheet tells where everything stands. */
+export type ArrangeInput = Pick<
+	SheetInput,
+	'coverage' | 'groups' | 'layout' | 'weak' | 'colouring' | 'issue'
+>;
+
 /** The map on the paper and everything that stands around or on it, before names are set. */
 export interface Arranged {
 	placed: OnPaper;
@@ -28,7 +34,7 @@ const taken = 'The legend stands at the foot, because regions reach into every c
  * Places the map within its collar. A legend that is wanted on the map goes to its emptiest corner; where
  * regions reach into all four, the sheet is arranged with the legend at its foot and says so.
  */
-export function arrange(input: SheetInput, inks: DrawnInk[]): Arranged {
+export function arrange(input: ArrangeInput, inks: DrawnInk[]): Arranged {
 	const once = arrangeOnce(input, inks, input.layout);
 	if (!once.around.floating || once.legend) return once;
 	const { layout } = input;
@@ -36,7 +42,7 @@ export function arrange(input: SheetInput, inks: DrawnInk[]): Arranged {
 	return { ...arrangeOnce(input, inks, atFoot), legendNote: taken };
 }
 
-function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): Arranged {
+function arrangeOnce(input: ArrangeInput, inks: DrawnInk[], layout: SheetLayout): Arranged {
 	const { coverage, groups } = input;
 	let around = null as Collar | null;
 	const frameFor = (projection: string) => (around = collarOf(input, inks, layout, projection));
@@ -44,7 +50,7 @@ function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): 
 	return { ...onTheMap(placed, around!, layout), placed, around: around!, legendNote: '' };
 }
 
-function collarOf(input: SheetInput, inks: DrawnInk[], layout: SheetLayout, projection: string) {
+function collarOf(input: ArrangeInput, inks: DrawnInk[], layout: SheetLayout, projection: string) {
 	const { coverage, weak, colouring, issue } = input;
 	return collar({
 		...{ layout, inks, projection, issue },
@@ -55,7 +61,7 @@ function collarOf(input: SheetInput, inks: DrawnInk[], layout: SheetLayout, proj
 }
 
 /** The box that another layout would leave for the regions, about: figures are reckoned whole degrees. */
-export function roomOn(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): Box {
+export function roomOn(input: ArrangeInput, inks: DrawnInk[], layout: SheetLayout): Box {
 	const { map, scale } = collarOf(input, inks, layout, '');
 	const within = layout.frame.graticule?.figures ? figureRoom(map, scale, true) : map;
 	return padded(within, layout, scale);

@@ -1,5 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { layout, sheetOf, statesCoverage } from '../../../../tests/support/sheets.ts';
+import type { Ground } from './canvas/ground.ts';
+import type { Pen } from './canvas/paint-area.ts';
+import { strokeChains } from './canvas/stroke-chains.ts';
 import { chainsOf } from './chains.ts';
 import { drawSheet } from './draw-sheet.ts';
 import type { LineLayer } from './drawing.ts';
@@ -18,6 +21,24 @@ const arcs = {
 	arcPoints: Int32Array.from(paths.flat()),
 	arcStarts: Uint32Array.from([0, ...paths.map((_, i) => paths.slice(0, i + 1).flat().length / 2)]),
 };
+
+describe('chains on a canvas', () => {
+	it('are closed where they come back, as in the SVG, and left open elsewhere', () => {
+		const calls: string[] = [];
+		const pen = {
+			...{ beginPath() {}, moveTo() {}, lineTo() {} },
+			...{ closePath: () => calls.push('close'), stroke: () => calls.push('stroke') },
+		};
+		const square = {
+			arcPoints: Int32Array.of(0, 0, 100, 0, 100, 100, 100, 100, 0, 100, 0, 0),
+			arcStarts: Uint32Array.of(0, 3, 6),
+		};
+		const look = { hex: '#000000', width: 10 };
+		const chains = [Int32Array.of(0, 1), Int32Array.of(~1, ~0), Int32Array.of(0)];
+		strokeChains(pen as unknown as Pen, square as Ground, chains, look);
+		expect(calls).toEqual(['close', 'stroke', 'close', 'stroke', 'stroke']);
+	});
+});
 
 describe('chains', () => {
 	it('go on straight where several lines meet, and close rings', () => {

@@ -17,6 +17,22 @@ describe('sizes on the sheet', () => {
 		expect(sizes[coverage.names.indexOf('Rhode Island')]).toBeLessThan(5);
 	});
 
+	it.each(['foot', 'left', 'right', 'corner'] as const)(
+		'are those of the drawing with twelve inks in a legend at the %s, to a fiftieth',
+		(legendAt) => {
+			const twelve = Array.from({ length: 12 }, (_, i) => ({
+				...{ name: `An ink with a longer name, number ${i + 1}`, hex: '#88aabb' },
+			}));
+			const set = { ...layout, collar: { ...layout.collar, legendAt } };
+			const drawing = drawSheet(sheetOf(coverage, { layout: set, inks: twelve }));
+			const sizes = regionSizesMm(coverage, set, twelve);
+			const colorado = coverage.names.indexOf('Colorado');
+			const ys = ringPoints(drawing, drawing.fills[colorado].rings[0]).filter((_, i) => i % 2);
+			const height = (Math.max(...ys) - Math.min(...ys)) / 100;
+			expect(Math.abs(sizes[colorado] / height - 1)).toBeLessThan(0.02);
+		},
+	);
+
 	it('grow with the paper as its side does', () => {
 		const a4 = regionSizesMm(coverage, layout);
 		const a2 = regionSizesMm(coverage, { ...layout, paper: 'A2' });

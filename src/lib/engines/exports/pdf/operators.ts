@@ -1,7 +1,7 @@
 /** Layers of a drawing as content of a page, each part whole by itself (ISO 32000-1, 8.4 and 8.5). */
 import type { Drawing, DrawnRect, DrawnShape, LineLayer, ShapeLayer } from '../../sheet/index.ts';
 import { rgb } from './numbers.ts';
-import { linesOperators, ringsOperators, shapeOperators } from './paths.ts';
+import { chainsOperators, linesOperators, ringsOperators, shapeOperators } from './paths.ts';
 
 /** One part a region, so that none grows without bound; a change of colour is told only where there is one. */
 export function fillParts(drawing: Drawing): string[] {
@@ -15,9 +15,11 @@ export function fillParts(drawing: Drawing): string[] {
 
 const dashes = (dash: number[] | undefined): string => `[${(dash ?? []).join(' ')}] 0 d`;
 
-export function lineOperators(drawing: Drawing, { width, hex, dash, arcs }: LineLayer): string {
-	const path = linesOperators(drawing, arcs);
-	return `q ${rgb(hex)} RG ${width} w 1 j 1 J ${dashes(dash)}\n${path}Q`;
+/** One layer of lines. Ends are round, but for dashes: round ends would close the gaps of a fine one. */
+export function lineOperators(drawing: Drawing, line: LineLayer): string {
+	const { width, hex, dash, arcs, chains } = line;
+	const path = chains ? chainsOperators(drawing, chains) : linesOperators(drawing, arcs);
+	return `q ${rgb(hex)} RG ${width} w 1 j ${dash ? 0 : 1} J ${dashes(dash)}\n${path}Q`;
 }
 
 /** Layers of lines that bend are joined round, as in the SVG. */

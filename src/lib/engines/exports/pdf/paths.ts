@@ -64,6 +64,19 @@ export function linesOperators(arcs: Arcs, list: ArrayLike<number>): string {
 	return text;
 }
 
+/** Lines of several arcs, each one path, so that dashes run on from arc to arc; closed where it comes back. */
+export function chainsOperators(arcs: Arcs, chains: readonly Int32Array[]): string {
+	let text = '';
+	for (const chain of chains) {
+		const path = Array.from(chain, (signed, i) => walk(arcs, signed, i === 0, nowhere)).join('');
+		const [from, to] = [startOf(arcs, chain[0]), startOf(arcs, ~chain[chain.length - 1])];
+		text += `${path}${from.x === to.x && from.y === to.y ? 's' : 'S'}\n`;
+	}
+	return text;
+}
+
+const nowhere: Origin = { x: 0, y: 0 };
+
 export function shapeOperators({ points, starts, closed }: DrawnShape): string {
 	let text = '';
 	for (let path = 0; path + 1 < starts.length; path++) {

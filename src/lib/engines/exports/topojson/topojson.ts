@@ -4,7 +4,8 @@
  */
 import type { Coverage } from '../../boundaries/coverage.ts';
 import { ringLonLat, type SheetRow } from '../../sheet/index.ts';
-import { reachesSeam, cutPart } from '../geojson-rings.ts';
+import { cutPart } from '../cut-part.ts';
+import { reachesSeam } from '../geojson-rings.ts';
 import { propertiesOf } from '../properties.ts';
 import type { ExtraColumn } from '../source.ts';
 import { ArcBook } from './arc-book.ts';

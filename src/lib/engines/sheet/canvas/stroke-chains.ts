@@ -27,6 +27,14 @@ export function strokeChains(
 				begun = true;
 			}
 		}
+		if (comesBack(ground, chain)) pen.closePath();
 		pen.stroke();
 	}
+}
+
+/** Whether a line ends where it begins: its corner there is joined, as in the SVG. */
+function comesBack({ arcPoints: p, arcStarts }: Ground, chain: Int32Array): boolean {
+	const endOf = (signed: number) => (signed < 0 ? arcStarts[~signed] : arcStarts[signed + 1] - 1);
+	const [from, to] = [endOf(~chain[0]), endOf(chain[chain.length - 1])];
+	return p[2 * from] === p[2 * to] && p[2 * from + 1] === p[2 * to + 1];
 }

@@ -1,26 +1,26 @@
 import type { DrawnRect, DrawnText } from '../drawing.ts';
 import type { SheetArcs } from '../plane/quantise.ts';
 import { groundScaleAt, type GroundScale } from '../plane/ground-scale.ts';
+import { spreadPlaces } from '../plane/spread-places.ts';
 import type { OnPaper, PlacedFrame } from '../place-on-paper.ts';
 import type { Collar } from './collar.ts';
 import { drawScaleBar } from './draw-scale-bar.ts';
 import { plainWithin, scaleBar, scaleError } from './scale-bar.ts';
 
-/** Places at which the scale is measured. */
+/** About how many places the scale is measured at. */
 const mostPlaces = 160;
 
-/** The scale at places spread evenly over all borders of one frame. */
+/** The scale at places spread evenly over all borders of one frame, those furthest out among them. */
 export function sampledScales(
 	{ arcs, arcFrame }: Pick<OnPaper, 'arcs' | 'arcFrame'>,
 	frame: number,
 	{ chosen, fit }: PlacedFrame,
 ): GroundScale[] {
-	const all = arcs.arcPoints.length / 2;
-	const points = arcFrame ? pointsOfFrame(arcs, arcFrame, frame) : null;
-	const step = Math.max(1, Math.floor((points?.length ?? all) / mostPlaces));
+	const points = arcFrame
+		? pointsOfFrame(arcs, arcFrame, frame)
+		: Uint32Array.from({ length: arcs.arcPoints.length / 2 }, (_, i) => i);
 	const scales: GroundScale[] = [];
-	for (let i = 0; i < (points?.length ?? all); i += step) {
-		const point = points ? points[i] : i;
+	for (const point of spreadPlaces(arcs.arcPoints, points, mostPlaces)) {
 		const [x, y] = [arcs.arcPoints[2 * point], arcs.arcPoints[2 * point + 1]];
 		const scale = groundScaleAt(chosen.projection, fit, x, y);
 		if (scale) scales.push(scale);

@@ -8,6 +8,7 @@ import { overlaps } from '../graticule/figures.ts';
 import { groundAt } from '../graticule/seen-degrees.ts';
 import { isFree, type FreeGrid } from '../insets/free-grid.ts';
 import type { OnPaper } from '../place-on-paper.ts';
+import { spreadPlaces } from '../plane/spread-places.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { textWidth } from '../type/text-width.ts';
 
@@ -26,9 +27,8 @@ export function northOff({ arcs, arcFrame, chosen, fit }: OnPaper): number | nul
 		for (let point = arcStarts[arc]; point < arcStarts[arc + 1]; point++) places.push(point);
 	}
 	let worst: number | null = null;
-	const step = Math.max(1, Math.floor(places.length / mostPlaces));
-	for (let i = 0; i < places.length; i += step) {
-		const [x, y] = [arcPoints[2 * places[i]], arcPoints[2 * places[i] + 1]];
+	for (const place of spreadPlaces(arcPoints, places, mostPlaces)) {
+		const [x, y] = [arcPoints[2 * place], arcPoints[2 * place + 1]];
 		const here = groundAt(chosen.projection, fit, x, y);
 		if (!here || Math.abs(here[1]) > 89.9) continue;
 		const [x0, y0] = chosen.projection(here)!;

@@ -4,7 +4,7 @@ import type { OnPaper } from '../place-on-paper.ts';
 import type { Box } from '../plane/fit.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { graticuleFigures } from './figures.ts';
-import { graticuleLines, mostLines } from './lines.ts';
+import { graticuleLines, mostLines, type Graticule } from './lines.ts';
 import { graticuleSteps, type GraticuleSteps } from './step.ts';
 
 /** Width on A4: finer than any border. */
@@ -29,11 +29,7 @@ export function drawGraticule(
 	if (!graticule) return { shapes: [], texts: [], steps: null, told: [] };
 	const steps = graticuleSteps(graticule.step, placed.extent);
 	const drawn = graticuleLines(placed, steps);
-	const told = drawn.lines.length
-		? []
-		: [
-				`No graticule is drawn: at ${steps.lat}° no line crosses the map, or more than ${mostLines} would.`,
-			];
+	const told = toldOf(drawn, steps);
 	const lines = drawn.lines.flatMap(({ pieces }) => pieces);
 	const ground = { box: placed.box, globe: placed.globe !== null, scale, labels, taken };
 	return {
@@ -53,6 +49,16 @@ export function drawGraticule(
 		steps,
 		told,
 	};
+}
+
+/** What is not drawn of it, and why. */
+function toldOf({ lines, crowded }: Graticule, { lat, lon }: GraticuleSteps): string[] {
+	if (!lines.length && !crowded.length)
+		return [`No graticule is drawn: at ${lat}° no line crosses the map.`];
+	return crowded.map((kind) => {
+		const [words, step] = kind === 'meridian' ? ['meridians', lon] : ['parallels', lat];
+		return `No ${words} are drawn: at ${step}° there would be more than ${mostLines}.`;
+	});
 }
 
 /** Paths as a drawing holds them, places that fall together taken once. */

@@ -62,10 +62,11 @@ function isOver(figure: DrawnText, { x, y, width, height }: Box): boolean {
 	return left < x + width && x < right && top < y + height && y < bottom;
 }
 
+/** Those at the edge stand on paper; those on the map have a halo, for they stand on lines and fills. */
 export function graticuleFigures({ lines, seen }: Graticule, ground: FigureGround): DrawnText[] {
 	const size = figureSize(ground.scale);
 	const figures: DrawnText[] = [];
-	const put = (text: string, place: (width: number) => Place, more: DrawnText[] = []): boolean => {
+	const put = (text: string, place: (width: number) => Place, onMap = false): boolean => {
 		const width = Math.ceil(textWidth('sans', size, text));
 		const [x, y] = place(width).map(Math.round);
 		const figure: DrawnText = {
@@ -78,7 +79,7 @@ export function graticuleFigures({ lines, seen }: Graticule, ground: FigureGroun
 			face: 'sans',
 			hex: '#000000',
 		};
-		if (more.length) figure.halo = '#ffffff';
+		if (onMap) figure.halo = '#ffffff';
 		if ([...figures, ...ground.labels].some((other) => overlaps(figure, other))) return false;
 		if (ground.taken.some((box) => isOver(figure, box))) return false;
 		figures.push(figure);
@@ -115,8 +116,8 @@ function endsOf({ kind, pieces }: GraticuleLine, { box, globe }: FigureGround) {
 function alongMeridians(
 	lines: GraticuleLine[],
 	size: number,
-	{ box, labels }: FigureGround,
-	put: (text: string, place: (width: number) => Place, more: DrawnText[]) => boolean,
+	{ box }: FigureGround,
+	put: (text: string, place: (width: number) => Place, onMap: boolean) => boolean,
 ): void {
 	const within = ([x, y]: Place, width: number) =>
 		x - width / 2 > box.x + size &&
@@ -129,8 +130,7 @@ function alongMeridians(
 		const places = line.pieces.flat().filter((place) => within(place, width));
 		for (let i = 0; i < places.length; i += Math.max(1, Math.floor(places.length / 24))) {
 			const [x, y] = places[i];
-			const blocked = labels.length ? labels : [];
-			if (put(text, (wide) => [x - wide / 2, y + size * 0.26], blocked)) break;
+			if (put(text, (wide) => [x - wide / 2, y + size * 0.26], true)) break;
 		}
 	}
 }

@@ -87,7 +87,29 @@ describe('the graticule', () => {
 			);
 		expect(step(20).texts.map(({ text }) => text)).toContain('100° W');
 		expect(step(20).texts.map(({ text }) => text)).not.toContain('110° W');
-		expect(step(0.01).frame.told.join()).toMatch(/No graticule is drawn/);
+		expect(step(0.01).frame.told.join()).toMatch(/No meridians are drawn.*No parallels are drawn/);
+	});
+
+	it('says so where it draws parallels alone, because meridians would be too many', () => {
+		const graticule = { step: 0.4, figures: true };
+		const { frame, shapes } = drawSheet(
+			sheetOf(statesCoverage(), {
+				layout: withGraticule({ frame: { ...layout.frame, graticule } }),
+			}),
+		);
+		expect(shapes.some(({ layer }) => layer === 'graticule')).toBe(true);
+		expect(frame.told).toEqual(['No meridians are drawn: at 0.4° there would be more than 120.']);
+	});
+
+	it.each([true, false])('figures round a pole have a halo, names drawn or not: %s', (labels) => {
+		const drawing = drawSheet(
+			sheetOf(worldCoverage(['Antarctica']), { layout: withGraticule({ labels }) }),
+		);
+		const parallels = drawing.texts.filter(
+			({ layer, text }) => layer === 'graticule' && text.endsWith('S'),
+		);
+		expect(parallels.length).toBeGreaterThan(0);
+		expect(parallels.every(({ halo }) => halo === '#ffffff')).toBe(true);
 	});
 });
 

@@ -19,6 +19,8 @@ export interface GraticuleLine {
 export interface Graticule {
 	lines: GraticuleLine[];
 	seen: SeenDegrees;
+	/** kinds of which there would be too many, so that none is drawn */
+	crowded: GraticuleLine['kind'][];
 }
 
 /** Degrees kept clear of the meridian where the map is open. */
@@ -63,13 +65,26 @@ export function graticuleLines(placed: OnPaper, steps: GraticuleSteps): Graticul
 			const places = spread(west, east).map((lon): [number, number] => [middle + lon, lat]);
 			return { kind: 'parallel', value: lat, pieces: walk(places) };
 		});
-	return { lines: [...meridians, ...parallels].filter(({ pieces }) => pieces.length), seen };
+	const crowded = [
+		...(tooMany(middle + west, middle + east, steps.lon) ? ['meridian' as const] : []),
+		...(tooMany(south, north, steps.lat) ? ['parallel' as const] : []),
+	];
+	const lines = [...meridians, ...parallels].filter(({ pieces }) => pieces.length);
+	return { lines, seen, crowded };
 }
+
+/** Number of the first multiple of a step within limits, and how many there are. */
+function counted(from: number, to: number, step: number): { first: number; count: number } {
+	const first = Math.ceil(from / step - 1e-9);
+	return { first, count: Math.floor(to / step + 1e-9) - first + 1 };
+}
+
+const tooMany = (from: number, to: number, step: number): boolean =>
+	counted(from, to, step).count > mostLines;
 
 /** Multiples of a step within limits; none where they would be too many. */
 function multiples(from: number, to: number, step: number): number[] {
-	const first = Math.ceil(from / step - 1e-9);
-	const count = Math.floor(to / step + 1e-9) - first + 1;
+	const { first, count } = counted(from, to, step);
 	if (!(count > 0) || count > mostLines) return [];
 	const all = Array.from({ length: count }, (_, i) => Number(((first + i) * step).toFixed(9)));
 	// both ends of a whole turn are one meridian

@@ -65,7 +65,10 @@ describe('a template', () => {
 	});
 
 	it('of an earlier time, or with fields of nowhere, changes only what is known', () => {
-		const odd = { paper: 'A5', 'frame.tilt': 3, 'collar.blocks': [block], nothing: 1 };
+		const odd = {
+			...{ paper: 'A5', 'frame.tilt': 3, 'collar.blocks': [block], nothing: 1 },
+			...{ constructor: 2, toString: 'x' },
+		};
 		const set = withTemplate(layout, odd, null);
 		expect(set).toEqual({ ...layout, paper: 'A5' });
 	});

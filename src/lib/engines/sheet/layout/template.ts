@@ -46,7 +46,7 @@ export function withTemplate(
 	const next = structuredClone(layout) as unknown as Record<string, Record<string, unknown>>;
 	const known = templateOf(layout);
 	for (const [field, value] of Object.entries(template)) {
-		if (!(field in known)) continue;
+		if (!Object.hasOwn(known, field)) continue;
 		const [part, name] = field.split('.');
 		if (name === undefined) Object.assign(next, { [part]: structuredClone(value) });
 		else next[part][name] = structuredClone(value);
