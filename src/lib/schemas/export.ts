@@ -82,6 +82,21 @@ export const askExportForm = z
 		options: exportChoices.parse(options),
 	}));
 
+const mostFollowed = 100;
+const number = z
+	.string()
+	.regex(/^[1-9]\d{0,8}$/)
+	.transform(Number);
+
+/** `?of=3,5`: how far these are; without it, all that are told. */
+export const exportsAsked = z.object({
+	of: z
+		.string()
+		.transform((list) => list.split(','))
+		.pipe(z.array(number).max(mostFollowed))
+		.optional(),
+});
+
 export const exportNumberForm = z.object({ export: z.coerce.number().int().min(1) });
 
 export interface ExportNote {
@@ -105,6 +120,12 @@ export interface ExportNote {
 	updatedAt: string;
 	/** when the file is dropped; null: kept as long as the edition */
 	expiresAt: string | null;
+}
+
+/** The same for a page, which offers to stop it. */
+export interface DeskExport extends ExportNote {
+	/** whether whoever looks may stop it, while it is open */
+	mayStop: boolean;
 }
 
 export const isOpenExport = ({ state }: Pick<ExportNote, 'state'>): boolean =>

@@ -6,7 +6,7 @@ import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
 import { issueEdition } from '$lib/server/services/edition.service';
 import { stopExport } from '$lib/server/services/export-end.service';
-import { askForExport, sheetExports } from '$lib/server/services/exports.service';
+import { askForExport, deskExports } from '$lib/server/services/exports.service';
 import type { Actions, PageServerLoad } from './$types';
 
 const whatToIssue = z.object({
@@ -15,10 +15,11 @@ const whatToIssue = z.object({
 });
 
 /** The files that were taken of editions and drafts, the newest first. */
-export const load = (async ({ locals, params }) => {
+export const load = (async ({ locals, params, depends }) => {
 	const member = memberFor(locals, 'files.download');
+	depends('merestone:exports');
 	return {
-		exports: await forPage(() => sheetExports(workshop(), member, Number(params.sheet))),
+		exports: await forPage(() => deskExports(workshop(), member, Number(params.sheet))),
 	};
 }) satisfies PageServerLoad;
 
