@@ -38,7 +38,7 @@ export const exportChoices = z.strictObject({
 	byteOrderMark: z.boolean().optional().describe('csv: helps spreadsheets to read accents'),
 	kinds: z
 		.array(z.enum(singles))
-		.min(1)
+		.min(1, 'Tick at least one kind of file for the package.')
 		.max(singles.length)
 		.optional()
 		.describe('zip: which files it holds'),
@@ -75,7 +75,11 @@ export const askExportForm = z
 		letters: chosen(z.enum(['embedded', 'outlines', 'plain'])),
 		dpi: chosen(z.coerce.number().pipe(exportChoices.shape.dpi.unwrap())),
 		ground: chosen(z.enum(['white', 'none'])),
-		kinds: chosen(z.preprocess((value) => [value].flat(), exportChoices.shape.kinds.unwrap())),
+		// the form of a package says an empty one too, so that none ticked is none and not the usual ones
+		kinds: z.preprocess(
+			(value) => (value === undefined ? value : [value].flat().filter((one) => one !== '')),
+			exportChoices.shape.kinds,
+		),
 	})
 	.transform(({ kind, edition, reader, ...options }): AskExport => ({
 		...{ kind, edition, reader },
