@@ -183,6 +183,16 @@ describe('a file of the draft', () => {
 		expect(String(later.bytes)).toContain('Another title');
 	});
 
+	it('is of the revision that was looked at, or none', async () => {
+		const { revision } = await deskSheet(shop, maker, 1);
+		const asked = askExport.parse({ kind: 'css' });
+		const stale = askForExport(shop, designer, 1, asked, revision - 1);
+		await expect(stale).rejects.toMatchObject({ code: 'stale' });
+		const note = await askForExport(shop, designer, 1, asked, revision);
+		expect(note).toMatchObject({ revision, edition: null });
+		await stopExport(shop, designer, 1, note.number);
+	});
+
 	it('is kept for as long again when it is asked for again', async () => {
 		const { note } = await made({ kind: 'tokens' });
 		await shop.db

@@ -70,6 +70,8 @@ export const askExportForm = z
 			(value) => (value === '' ? null : Number(value)),
 			askExport.shape.edition,
 		),
+		/** the draft that was looked at */
+		revision: chosen(z.coerce.number().int().min(1)),
 		reader: askExport.shape.reader,
 		colours: chosen(z.enum(['class', 'attribute'])),
 		letters: chosen(z.enum(['embedded', 'outlines', 'plain'])),
@@ -81,10 +83,10 @@ export const askExportForm = z
 			exportChoices.shape.kinds,
 		),
 	})
-	.transform(({ kind, edition, reader, ...options }): AskExport => ({
-		...{ kind, edition, reader },
-		options: exportChoices.parse(options),
-	}));
+	.transform(({ kind, edition, revision, reader, ...options }) => {
+		const asked: AskExport = { kind, edition, reader, options: exportChoices.parse(options) };
+		return { asked, revision };
+	});
 
 const mostFollowed = 100;
 const number = z

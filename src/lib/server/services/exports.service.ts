@@ -20,13 +20,15 @@ const most = { edition: 1_000, draft: 200 };
 
 /**
  * Asks for a file of an edition or of the present draft. What was asked for before in the same words is
- * answered with what is there: the file, or the job that makes it.
+ * answered with what is there: the file, or the job that makes it. With the revision of the draft that was
+ * looked at, no other is taken.
  */
 export async function askForExport(
 	shop: Pick<Workshop, 'db' | 'queue'>,
 	member: Member,
 	number: number,
 	asked: AskExport,
+	revision?: number,
 ): Promise<ExportNote> {
 	requireAccess(member, 'files.download');
 	requireAccess(member, 'sheet.read');
@@ -35,6 +37,10 @@ export async function askForExport(
 	return shop.db.transaction().execute(async (trx) => {
 		const sheet = await holdSheet(trx, member.team.id, isNumber(number) ? number : 0);
 		if (!sheet) throw new NotFound('sheet');
+		if (asked.edition === null && (revision ?? sheet.revision) !== sheet.revision) {
+			const stale = 'The draft was saved again since; load the page again to look at it first.';
+			throw new Conflict('stale', stale);
+		}
 		const note = await askIn(shop, trx, member, sheet, asked);
 		if (note) return note;
 		const message = `${mostOpenExports} files of the team are being made already. Wait for some of them.`;

@@ -40,7 +40,8 @@ export const actions = {
 		const member = memberFor(locals, 'files.download');
 		const form = await readForm(request, askExportForm);
 		if (form.failure) return form.failure;
-		const ask = () => askForExport(workshop(), member, Number(params.sheet), form.data);
+		const { asked, revision } = form.data;
+		const ask = () => askForExport(workshop(), member, Number(params.sheet), asked, revision);
 		const taken = await attempt(ask);
 		return taken.failure ?? { taken: taken.data.number };
 	},
