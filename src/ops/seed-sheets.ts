@@ -17,14 +17,15 @@ const keptDistricts = ['0101', '0711', '1006'];
 /**
  * Gives a team that has no sheet the sample republic: read, coloured, with a few locks, issued once. The
  * same services do it that answer people, so whatever holds for a sheet holds for this one.
+ * @returns its number, null where the team had sheets
  */
-export async function seedDemoSheets(member: Member): Promise<void> {
-	const shop = seedingWorkshop();
-	if ((await sheetList(shop, member)).length > 0) return;
+export async function seedDemoSheet(shop: Workshop, member: Member): Promise<number | null> {
+	if ((await sheetList(shop, member)).length > 0) return null;
 	const number = await takeIn(shop, member);
 	await arrange(shop, member, number);
 	const { revision } = await deskSheet(shop, member, number);
 	await issueEdition(shop, member, number, revision, 'First edition of the districts.');
+	return number;
 }
 
 /** Jobs are done here and now, so nothing is asked of a worker, and nobody is held up. */
@@ -36,6 +37,11 @@ export function seedingWorkshop(): Workshop {
 
 async function takeIn(shop: Workshop, member: Member): Promise<number> {
 	const { id } = await beginSampleIntake(shop, member, path.join(root, 'sample-data'));
+	return readIn(shop, member, id);
+}
+
+/** Reads what was taken in, to its end. */
+export async function readIn(shop: Workshop, member: Member, id: string): Promise<number> {
 	await runIntake(shop, id, new AbortController().signal);
 	const { sheet, state, refusal } = await intakeStatus(shop, member, id);
 	if (sheet === null)

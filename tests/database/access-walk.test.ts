@@ -11,6 +11,7 @@ import { actions, allows, may, roles, type Action } from '../../src/lib/server/a
 import { readActivity } from '../../src/lib/server/services/activity.service.ts';
 import { borderFile } from '../../src/lib/server/services/border-files.service.ts';
 import { columnOfSheet } from '../../src/lib/server/services/column-values.service.ts';
+import { sheetFirstPicture } from '../../src/lib/server/services/first-picture.service.ts';
 import { measureSheetGaps } from '../../src/lib/server/services/gaps.service.ts';
 import { replaceRulesByFile, rulesFile } from '../../src/lib/server/services/rules-csv.service.ts';
 import { sheetProof } from '../../src/lib/server/services/proof.service.ts';
@@ -35,6 +36,10 @@ import { sheetBordersAnswer } from '../../src/lib/server/services/check.service.
 import { readDraft, saveDraft, saveLayout } from '../../src/lib/server/services/draft.service.ts';
 import { draftSvg } from '../../src/lib/server/services/drawing.service.ts';
 import { editionInks, revisionInks } from '../../src/lib/server/services/earlier-inks.service.ts';
+import {
+	editionChanges,
+	themedEditions,
+} from '../../src/lib/server/services/edition-changes.service.ts';
 import {
 	editionFile,
 	issueEdition,
@@ -297,6 +302,8 @@ const walk: Walk = {
 	],
 	readDraft: ['sheet.read', (member) => readDraft(shop, member, 99, 1)],
 	editionInks: ['sheet.read', (member) => editionInks(shop, member, 99, 1)],
+	editionChanges: ['sheet.read', (member) => editionChanges(shop, member, 99, 1)],
+	themedEditions: ['sheet.read', (member) => themedEditions(shop, member, 99)],
 	revisionInks: ['sheet.read', (member) => revisionInks(shop, member, 99, 1)],
 	readEdition: ['sheet.read', (member) => readEdition(shop, member, 99, 1)],
 	readInvitations: ['members.manage', (member) => readInvitations(member)],
@@ -369,6 +376,7 @@ const walk: Walk = {
 	sheetSearches: ['sheet.read', (member) => sheetSearches(shop, member, 99)],
 	readSearch: ['sheet.read', (member) => readSearch(shop, member, 99, 1)],
 	sheetEditions: ['sheet.read', (member) => sheetEditions(shop, member, 99)],
+	sheetFirstPicture: ['sheet.read', (member) => sheetFirstPicture(shop, member, 99, 'tag')],
 	sheetGeometry: ['sheet.read', (member) => sheetGeometry(shop, member, 99)],
 	sheetList: ['sheet.read', (member) => sheetList(shop, member)],
 	teamPalettes: ['sheet.read', (member) => teamPalettes(shop, member)],

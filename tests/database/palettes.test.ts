@@ -95,6 +95,18 @@ describe('the team’s palettes', () => {
 		await expect(readPalette(shop, designer, 'no uuid')).rejects.toBeInstanceOf(NotFound);
 	});
 
+	it('of which two take one name at once: one gets it, the other is told', async () => {
+		const both = await Promise.all(
+			['One of two', 'Two of two'].map((name) => addPalette(shop, designer, { name, inks })),
+		);
+		const renamed = await Promise.allSettled(
+			both.map((id) => changePalette(shop, designer, id, { name: 'Same', inks, revision: 1 })),
+		);
+		const refused = renamed.filter((one) => one.status === 'rejected');
+		expect(refused).toHaveLength(1);
+		expect(refused[0].reason).toBeInstanceOf(Refused);
+	});
+
 	it('are copied from published ones with source and licence, each copy under a name of its own', async () => {
 		const first = await copyPalette(shop, designer, 'okabe-ito');
 		const second = await copyPalette(shop, designer, first);
@@ -106,6 +118,19 @@ describe('the team’s palettes', () => {
 		});
 		const names = (await teamPalettes(shop, designer)).map(({ name }) => name);
 		expect(names).toContain('Okabe and Ito, copy 2');
+		// another value is not the published one, another name or a hatch is
+		const copy = await readPalette(shop, designer, first);
+		const renamed = copy.inks.map((ink) => ({ ...ink, name: `${ink.name} of ours` }));
+		const sourceAfter = async (inks: Ink[], revision: number) => {
+			await changePalette(shop, designer, first, { name: copy.name, inks, revision });
+			return (await readPalette(shop, designer, first)).source;
+		};
+		expect(await sourceAfter(renamed, 1)).toBe(copy.source);
+		const [one, ...rest] = renamed;
+		for (const revision of [2, 3])
+			expect(await sourceAfter([{ ...one, hex: `#12345${revision}` }, ...rest], revision)).toBe(
+				`changed from ${copy.source}`,
+			);
 		await expect(copyPalette(shop, designer, 'no-such')).rejects.toBeInstanceOf(NotFound);
 	});
 });

@@ -59,7 +59,7 @@ describe('aims', () => {
 		await improve.click();
 		await aims().getByRole('button', { name: 'Keep' }).waitFor();
 		await expect.poll(() => fills(page)).not.toEqual(before);
-		expect(await aims().getByRole('table').innerText()).toContain('Least used ink');
+		await expect.poll(() => aims().getByRole('table').innerText()).toContain('Least used ink');
 		await expectAccessible(page);
 		await aims().getByRole('button', { name: 'Drop' }).click();
 		await expect.poll(() => fills(page)).toEqual(before);

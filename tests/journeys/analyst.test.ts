@@ -62,7 +62,7 @@ describe('an analyst', () => {
 		await saved(page);
 		await page.reload();
 		await drawn(page);
-		expect(await docket(page, 'Colours').innerText()).toContain('1 lock');
+		await expect.poll(() => docket(page, 'Colours').innerText()).toContain('1 lock');
 		expect((await fills(page))['39']).toBe('#648fdf');
 		expect(complaints).toEqual([]);
 	});
@@ -87,7 +87,7 @@ describe('an analyst', () => {
 		await ways.getByRole('button').last().click();
 		const bar = page.getByRole('group', { name: /^Trying: release/ });
 		await expect.poll(() => bar.evaluate((it) => it === document.activeElement)).toBe(true);
-		expect(await docket(page, 'Colours').innerText()).toContain('2 locks collide');
+		await expect.poll(() => docket(page, 'Colours').innerText()).toContain('2 locks collide');
 		await picture(page, 'way-on-trial');
 		await expectAccessible(page);
 		await page.keyboard.press('Escape');
@@ -169,6 +169,6 @@ describe('an analyst', () => {
 	it('may not issue an edition and is told who can', async () => {
 		await page.goto(`${sheet}/editions`);
 		expect(await page.getByRole('button', { name: /^Issue/ }).count()).toBe(0);
-		expect(await page.getByRole('complementary').innerText()).toMatch(/approver/i);
+		await expect.poll(() => page.getByRole('complementary').innerText()).toMatch(/approver/i);
 	});
 });

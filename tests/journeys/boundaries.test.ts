@@ -68,7 +68,7 @@ describe('boundaries as they come', () => {
 		await expect
 			.poll(() => page.evaluate<string>('document.activeElement.textContent'))
 			.toMatch(/coordinate system/);
-		expect(await main().innerText()).toMatch(/Features\s+184/);
+		await expect.poll(() => main().innerText()).toMatch(/Features\s+184/);
 		await expectAccessible(page);
 		await picture(page, 'boundaries-question');
 
@@ -77,7 +77,7 @@ describe('boundaries as they come', () => {
 		await system.fill('EPSG:1');
 		await answer().click();
 		await expect.poll(() => system.getAttribute('aria-invalid')).toBe('true');
-		expect(await system.inputValue()).toBe('EPSG:1');
+		await expect.poll(() => system.inputValue()).toBe('EPSG:1');
 		await system.fill('EPSG:32625');
 		await page.getByText('Columns with the key and the name').click();
 		await page.getByLabel('Key', { exact: true }).selectOption('CODE');
@@ -94,7 +94,7 @@ describe('boundaries as they come', () => {
 			.toMatch(/181 regions.*finding/s);
 
 		await toBoundaries(page, sheet);
-		expect(await beside().innerText()).toMatch(/Key\s+CODE/);
+		await expect.poll(() => beside().innerText()).toMatch(/Key\s+CODE/);
 		await expectAccessible(page);
 		await picture(page, 'boundaries-findings');
 		await readFindings();
@@ -110,7 +110,7 @@ describe('boundaries as they come', () => {
 		await page.getByLabel('Kind').selectOption({ label: 'overlaps' });
 		const rows = page.getByRole('table', { name: 'Table of findings' }).getByRole('row');
 		await expect.poll(() => rows.count()).toBe(2);
-		expect(await rows.nth(1).innerText()).toMatch(/0108.*0910/s);
+		await expect.poll(() => rows.nth(1).innerText()).toMatch(/0108.*0910/s);
 		await expectAccessible(page);
 		await rows.nth(1).getByRole('button').click();
 		await drawn(page);
@@ -141,14 +141,14 @@ describe('boundaries as they come', () => {
 		await page.getByLabel(/^Cut the outline of 0101/).check();
 		await page.getByRole('button', { name: 'Preview these mends (12)' }).click();
 		await compared(page);
-		expect(await main().innerText()).toContain('180 regions instead of 181');
+		await expect.poll(() => main().innerText()).toContain('180 regions instead of 181');
 		await expectAccessible(page);
 		await picture(page, 'boundaries-mends');
 		await page.getByRole('button', { name: 'Apply these boundaries' }).click();
 		await page.getByText(/^Applied on/).waitFor();
 		await toBoundaries(page, sheet);
 		await expect.poll(() => docket(page, 'Boundaries').innerText()).toContain('180 regions');
-		expect(await beside().innerText()).toContain('12 mends in force');
+		await expect.poll(() => beside().innerText()).toContain('12 mends in force');
 	}
 
 	async function strike(sheet: string, one: string, other: string) {
@@ -172,14 +172,14 @@ describe('boundaries as they come', () => {
 		await page.getByRole('button', { name: 'Upload and compare' }).click();
 		await compared(page);
 		const groups = page.locator('#regions tbody');
-		expect(await groups.innerText()).toMatch(/Merrennes \(0512\).*split/s);
-		expect(await groups.innerText()).toMatch(/Cerrœrn \(0807\).*merged/s);
-		expect(await groups.innerText()).toMatch(/Raskstrå \(0318\).*gone/s);
-		expect(await groups.innerText()).toMatch(/new\s+Nyhólm \(0421\)/s);
+		await expect.poll(() => groups.innerText()).toMatch(/Merrennes \(0512\).*split/s);
+		await expect.poll(() => groups.innerText()).toMatch(/Cerrœrn \(0807\).*merged/s);
+		await expect.poll(() => groups.innerText()).toMatch(/Raskstrå \(0318\).*gone/s);
+		await expect.poll(() => groups.innerText()).toMatch(/new\s+Nyhólm \(0421\)/s);
 
 		// the struck border goes to both halves, which lie against Quellaške
 		await choose('regions', 'Merrennes (0512)').click();
-		expect(await page.locator('#follows').innerText()).toMatch(/0512/);
+		await expect.poll(() => page.locator('#follows').innerText()).toMatch(/0512/);
 		await expectAccessible(page);
 		await picture(page, 'boundaries-newer');
 
@@ -200,18 +200,18 @@ describe('boundaries as they come', () => {
 
 		await page.getByRole('button', { name: 'Apply these boundaries' }).click();
 		await page.getByText(/^Applied on/).waitFor();
-		expect(await page.locator('#follows').innerText()).toContain('What followed');
+		await expect.poll(() => page.locator('#follows').innerText()).toContain('What followed');
 		await toBoundaries(page, sheet);
-		expect(await beside().innerText()).toContain(later);
+		await expect.poll(() => beside().innerText()).toContain(later);
 		await expect.poll(() => docket(page, 'Borders').innerText()).toContain('struck out');
 
 		await page.getByRole('link', { name: /^Put back/ }).click();
 		await page.getByRole('button', { name: 'Put back', exact: true }).click();
 		await page.getByText(/^Put back on/).waitFor();
 		await toBoundaries(page, sheet);
-		expect(await beside().innerText()).toContain(dirty);
-		expect(await docket(page, 'Borders').innerText()).toMatch(/struck out/);
-		expect(await beside().innerText()).toContain('12 mends in force');
+		await expect.poll(() => beside().innerText()).toContain(dirty);
+		await expect.poll(() => docket(page, 'Borders').innerText()).toMatch(/struck out/);
+		await expect.poll(() => beside().innerText()).toContain('12 mends in force');
 	}
 
 	it('are answered, mended, applied and put back by keyboard alone', async () => {

@@ -67,8 +67,10 @@ describe('a cartographer', () => {
 		await picture(page, 'upload');
 		const sheet = await uploadSheet(page, statesGeoJson(), 'States, journey');
 		await expect.poll(() => docket(page, 'Boundaries').innerText()).toContain('49 regions');
-		expect(await docket(page, 'Borders').innerText()).toContain('107 by line, 2 by point');
-		expect(await docket(page, 'Colours').innerText()).toMatch(/4 inks,\s*proved fewest/);
+		await expect
+			.poll(() => docket(page, 'Borders').innerText())
+			.toContain('107 by line, 2 by point');
+		await expect.poll(() => docket(page, 'Colours').innerText()).toMatch(/4 inks,\s*proved fewest/);
 		await expect
 			.poll(() => page.locator('#because').innerText())
 			.toMatch(/^Four inks are needed because .*ring of odd length/s);
@@ -84,9 +86,11 @@ describe('a cartographer', () => {
 
 	it('takes the same states as a zipped shapefile to the same neighbours', async () => {
 		const sheet = await uploadSheet(page, statesShapefile(), 'States by shapefile, journey');
-		expect(await docket(page, 'Boundaries').innerText()).toContain('49 regions');
-		expect(await docket(page, 'Borders').innerText()).toContain('107 by line, 2 by point');
-		expect(await docket(page, 'Colours').innerText()).toMatch(/4 inks,\s*proved fewest/);
+		await expect.poll(() => docket(page, 'Boundaries').innerText()).toContain('49 regions');
+		await expect
+			.poll(() => docket(page, 'Borders').innerText())
+			.toContain('107 by line, 2 by point');
+		await expect.poll(() => docket(page, 'Colours').innerText()).toMatch(/4 inks,\s*proved fewest/);
 		const elements = parseSvg(await download(page, sheet));
 		expect(elements.filter(({ attributes }) => attributes['data-key'] !== undefined)).toHaveLength(
 			49,
@@ -97,7 +101,9 @@ describe('a cartographer', () => {
 		const counties = await uploadSheet(page, countiesGeoJson(), 'Counties, journey');
 		expect(await page.locator('main svg [data-key]').count()).toBe(3141);
 		// one of the 3,142 rows (Falls Church, 51610) has no area left in this simplified file, and is told
-		expect(await docket(page, 'Boundaries').innerText()).toMatch(/3,141 regions.*finding/s);
+		await expect
+			.poll(() => docket(page, 'Boundaries').innerText())
+			.toMatch(/3,141 regions.*finding/s);
 		await picture(page, 'counties');
 		const file = parseSvg(await download(page, counties));
 		expect(file.filter(({ attributes }) => attributes['data-key'] !== undefined)).toHaveLength(
@@ -105,7 +111,7 @@ describe('a cartographer', () => {
 		);
 		await uploadSheet(page, countriesGeoJson(), 'Countries, journey');
 		/** world-atlas 110m: 177 countries, 313 pairs with a line (topojson-client neighbors) */
-		expect(await docket(page, 'Borders').innerText()).toContain('313 by line');
+		await expect.poll(() => docket(page, 'Borders').innerText()).toContain('313 by line');
 		await picture(page, 'countries');
 	});
 
@@ -139,7 +145,7 @@ describe('a cartographer', () => {
 		await chooseAndSend(page, file, 'Refused, journey');
 		await page.waitForURL(/\/intakes\//);
 		await page.getByRole('heading', { name: 'The file was refused' }).waitFor({ timeout: 60_000 });
-		expect(await page.getByRole('main').innerText()).toMatch(says);
+		await expect.poll(() => page.getByRole('main').innerText()).toMatch(says);
 		expect(page.url()).not.toMatch(/sheets\/\d/);
 		await picture(page, `refused-${file.name}`);
 		await expectAccessible(page);

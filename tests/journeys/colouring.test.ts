@@ -87,7 +87,7 @@ describe('an analyst colours a sheet with rules of the house', () => {
 		const ways = page.getByRole('table', { name: 'Ways out' });
 		const release = ways.getByRole('button', { name: /^Release (Alabama|Georgia)$/ }).first();
 		await release.waitFor({ timeout: 30_000 });
-		expect(await ways.innerText()).toContain('Nothing cheaper would do.');
+		await expect.poll(() => ways.innerText()).toContain('Nothing cheaper would do.');
 		await picture(page, 'collision-ways');
 		await expectAccessible(page);
 		await saved(page);
@@ -100,12 +100,12 @@ describe('an analyst colours a sheet with rules of the house', () => {
 		await expectAccessible(page);
 		await trying.getByRole('button', { name: 'Back' }).click();
 		await expect.poll(() => fills(page)).toEqual(before);
-		expect(await docket(page, 'Colours').innerText()).toContain('20 locks');
+		await expect.poll(() => docket(page, 'Colours').innerText()).toContain('20 locks');
 
 		await release.press('Enter');
 		await trying.getByRole('button', { name: 'Keep' }).click();
 		await expect.poll(() => because().innerText()).toMatch(/inks? (are|is) needed/);
-		expect(await docket(page, 'Colours').innerText()).toContain('19 locks');
+		await expect.poll(() => docket(page, 'Colours').innerText()).toContain('19 locks');
 		await saved(page);
 	});
 
@@ -130,14 +130,16 @@ describe('an analyst colours a sheet with rules of the house', () => {
 		await page.reload();
 		await drawn(page);
 		expect(await fills(page)).toEqual(after);
-		expect(await docket(page, 'Colours').innerText()).toMatch(/4 inks,\s*proved fewest/);
+		await expect.poll(() => docket(page, 'Colours').innerText()).toMatch(/4 inks,\s*proved fewest/);
 	});
 
 	it('compares with the last edition', async () => {
 		await page.locator('#compare').getByRole('button', { name: 'Compare', exact: true }).click();
 		const told = page.locator('#compare').getByRole('status');
 		await told.waitFor();
-		expect(await told.innerText()).toMatch(/regions? of 49 ha(s|ve) another ink than in edition 1/);
+		await expect
+			.poll(() => told.innerText())
+			.toMatch(/regions? of 49 ha(s|ve) another ink than in edition 1/);
 		await page.getByRole('button', { name: 'Show them on the sheet' }).click();
 		await picture(page, 'compared');
 		await expectAccessible(page);
@@ -145,7 +147,9 @@ describe('an analyst colours a sheet with rules of the house', () => {
 			.getByRole('table', { name: 'Regions with another ink' })
 			.locator('tbody tr')
 			.count();
-		expect(await told.innerText()).toMatch(new RegExp(`^${rows === 1 ? 'One|1' : rows}`));
+		await expect
+			.poll(() => told.innerText())
+			.toMatch(new RegExp(`^${rows === 1 ? 'One|1' : rows}`));
 	});
 
 	it('is given by the server what the browser answered for the same seed', async () => {

@@ -84,7 +84,7 @@ describe('a cartographer laying out the map', () => {
 		await saved(page);
 		await page.reload();
 		await expect.poll(() => form.getByLabel('Graticule').isChecked(), soon).toBe(true);
-		expect(await form.getByLabel('Scale, 1 :').first().inputValue()).toBe('40000000');
+		await expect.poll(() => form.getByLabel('Scale, 1 :').first().inputValue()).toBe('40000000');
 		await expect.poll(() => onSheet('inset-frames').count(), soon).toBeGreaterThan(0);
 	});
 });

@@ -140,10 +140,12 @@ describe('the layout of a sheet', () => {
 		await drawn(page);
 		await openSection(page, 'Templates');
 		await item.getByText(/other sheet set by it, 1 not alike now/).click();
-		expect(await item.innerText()).toContain(`Layout one ${stamp}: differs in margin, mm`);
+		await expect
+			.poll(() => item.innerText())
+			.toContain(`Layout one ${stamp}: differs in margin, mm`);
 		await item.getByRole('button', { name: 'Set the ticked sheets alike' }).click();
 		await page.getByText('1 sheet set alike.').waitFor();
-		expect(await item.innerText()).toContain('all alike');
+		await expect.poll(() => item.innerText()).toContain('all alike');
 	});
 
 	it('can be read by those who may not change it, and by phone', async () => {

@@ -70,7 +70,7 @@ describe('a sheet of which it is not known how few inks do', () => {
 		await drawn(page);
 		const open = page.locator('#longer');
 		await open.waitFor();
-		expect(await open.innerText()).toMatch(/not (known|proved)/);
+		await expect.poll(() => open.innerText()).toMatch(/not (known|proved)/);
 		await picture(page, 'longer-open');
 		await expectAccessible(page);
 		await open.getByRole('button', { name: 'Try longer' }).click();

@@ -89,7 +89,7 @@ describe('a table of figures', () => {
 			await picture(page, 'measures-empty');
 			await upload(measure);
 			await expect.poll(() => page.locator('#join').innerText()).toContain('7 of 9 rows joined');
-			expect(await page.getByRole('main').innerText()).toContain('headings in row 3');
+			await expect.poll(() => page.getByRole('main').innerText()).toContain('headings in row 3');
 			await picture(page, 'measures-review');
 			await expectAccessible(page);
 
@@ -98,7 +98,7 @@ describe('a table of figures', () => {
 			await other.fill('Nowhere');
 			await page.getByRole('button', { name: 'Keep these decisions' }).click();
 			await page.getByText('No region has this key or this name.').waitFor();
-			expect(await other.inputValue()).toBe('Nowhere');
+			await expect.poll(() => other.inputValue()).toBe('Nowhere');
 			await expectAccessible(page);
 			await other.fill('');
 			await page.getByLabel('What to do with Pellös').selectOption({ label: 'Pellösk (0104)' });
@@ -125,7 +125,7 @@ describe('a table of figures', () => {
 			await page.waitForURL(/\/measures$/);
 			await drawn(page);
 			await expect.poll(() => page.locator('#measures').innerText()).toContain('128 pcs in all');
-			expect(await docket(page, 'Measures').innerText()).toMatch(/\d+ measures?/);
+			await expect.poll(() => docket(page, 'Measures').innerText()).toMatch(/\d+ measures?/);
 			await page.getByRole('button', { name: new RegExp(`: ${measure}$`) }).click();
 			const row = page.getByRole('row', { name: /Saelhavn/ });
 			await expect.poll(() => row.innerText()).toContain('101 pcs');
@@ -200,7 +200,7 @@ describe('a table of figures', () => {
 		await page.getByRole('button', { name: 'Show what comes of it' }).click();
 		await page.getByRole('button', { name: 'Take over 1 column' }).click();
 		await page.waitForURL(/\/measures$/);
-		expect(await page.locator('#measures').innerText()).toContain(measure);
+		await expect.poll(() => page.locator('#measures').innerText()).toContain(measure);
 		await page.getByRole('link', { name: 'accounts' }).first().click();
 		await dropTable();
 		expect(complaints).toEqual([]);

@@ -73,9 +73,9 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await page.getByRole('button', { name: 'Read the file' }).click();
 			const read = page.getByRole('status').filter({ hasText: '6 inks' });
 			await read.waitFor();
-			expect(await read.innerText()).toContain('1 of dimension');
-			expect(await read.innerText()).toContain('taken once');
-			expect(await page.getByLabel('Name of ink 1').inputValue()).toBe('Poppy');
+			await expect.poll(() => read.innerText()).toContain('1 token of type dimension is no colour');
+			await expect.poll(() => read.innerText()).toContain('taken once');
+			await expect.poll(() => page.getByLabel('Name of ink 1').inputValue()).toBe('Poppy');
 			await page.getByLabel('Is ink 1 fixed').selectOption('yes');
 			await page.getByLabel('Name', { exact: true }).fill(brand);
 			await picture(page, 'palette-from-file');
@@ -83,8 +83,8 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await page.getByRole('button', { name: 'Add the palette' }).click();
 			const row = page.getByRole('article', { name: brand });
 			await row.waitFor();
-			expect(await row.innerText()).toContain('Poppy and Leather look alike to');
-			expect(await row.innerText()).toContain('Not approved.');
+			await expect.poll(() => row.innerText()).toContain('Poppy and Leather look alike to');
+			await expect.poll(() => row.innerText()).toContain('Not approved.');
 			await expectAccessible(page);
 		});
 
@@ -101,7 +101,7 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			const trying = page.getByRole('group', { name: /^Trying: keep Poppy and Leather/ });
 			await trying.waitFor();
 			expect(await fills(page)).not.toEqual(before);
-			await expect.poll(verdict).toContain('Every reader can tell apart all inks that touch');
+			await expect.poll(verdict).toContain('Every reader can tell');
 			await picture(page, 'palette-parted');
 			await expectAccessible(page);
 			await trying.getByRole('button', { name: 'Keep' }).click();
@@ -110,7 +110,9 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await page.reload();
 			await drawn(page);
 			expect(await fills(page)).toEqual(parted);
-			expect(await docket(page, 'Palette').innerText()).toContain('Every reader can tell apart');
+			await expect
+				.poll(() => docket(page, 'Palette').innerText())
+				.toContain('Every reader can tell');
 		});
 
 		it('mends it with the fixed ink as it is, and keeps it over the brand’s', async () => {
@@ -132,10 +134,10 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await fewest.click();
 			const trying = page.getByRole('group', { name: 'Trying: mend the inks' });
 			await trying.waitFor();
-			await expect.poll(verdict).toContain('Every reader can tell apart all inks that touch');
+			await expect.poll(verdict).toContain('Every reader can tell');
 			await trying.getByRole('button', { name: 'Keep' }).click();
 			await saved(page);
-			expect(await page.getByLabel('Value of ink 1').inputValue()).toBe('#e41a1c');
+			await expect.poll(() => page.getByLabel('Value of ink 1').inputValue()).toBe('#e41a1c');
 			expect(await page.getByLabel('Value of ink 2').inputValue()).not.toBe('#a65628');
 
 			await page.getByLabel('Where', { exact: true }).selectOption({ label: `over ${brand}` });
@@ -154,7 +156,9 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await page.reload();
 			await drawn(page);
 			await page.getByText('Crossed lines: more about ink 5').click();
-			expect(await page.getByLabel('Spacing, mm, hatch of ink 5').inputValue()).toBe('3');
+			await expect
+				.poll(() => page.getByLabel('Spacing, mm, hatch of ink 5').inputValue())
+				.toBe('3');
 			await expectAccessible(page);
 			await page.getByText('No hatch, fixed: more about ink 1').click();
 			await page.getByRole('button', { name: 'Remove ink 1' }).click();
@@ -174,7 +178,7 @@ describe('a brand palette is brought in, mended, approved, and its unsafe inks a
 			await page.getByRole('button', { name: `Approve as it stands ${brand}` }).click();
 			await page.getByText('The palette is approved as it stands.').waitFor();
 			const row = page.getByRole('article', { name: brand });
-			expect(await row.innerText()).toMatch(/Approved by .+ on \d+ \w+ \d{4}/);
+			await expect.poll(() => row.innerText()).toMatch(/Approved by .+ on \d+ \w+ \d{4}/);
 			await expectAccessible(page);
 			await page.goto(`${sheet}/palette`);
 			await drawn(page);

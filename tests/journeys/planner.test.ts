@@ -96,7 +96,7 @@ describe('the planner', () => {
 		await told(page, '1 territory is torn');
 		const over = page.getByRole('row', { name: /Thyruvar/ });
 		await expect.poll(() => over.innerText()).toContain('22.5 % over');
-		expect(await docket(page, 'Territories').innerText()).toContain('outside 10 %');
+		await expect.poll(() => docket(page, 'Territories').innerText()).toContain('outside 10 %');
 		await picture(page, 'planner-today');
 		await expectAccessible(page);
 	});
@@ -115,8 +115,10 @@ describe('the planner', () => {
 		await page.getByRole('link', { name: /^Proposals/ }).click();
 		await told(page, /^None yet/);
 		await expectAccessible(page);
-		const first = await ask('Within 10 %', async () =>
-			expect(await page.getByLabel('Visits, hours a year').inputValue()).toBe('10'),
+		const first = await ask(
+			'Within 10 %',
+			async () =>
+				await expect.poll(() => page.getByLabel('Visits, hours a year').inputValue()).toBe('10'),
 		);
 		await expect
 			.poll(() => first.innerText())
@@ -177,7 +179,7 @@ describe('the planner', () => {
 		const table = page.getByRole('table', { name: 'Today beside the proposals' });
 		await expect.poll(() => table.getByRole('columnheader').count()).toBe(4);
 		const outside = table.getByRole('row', { name: /^Territories outside/ });
-		expect(await outside.innerText()).toMatch(/3\s+none\s+none\s+none/);
+		await expect.poll(() => outside.innerText()).toMatch(/3\s+none\s+none\s+none/);
 		await picture(page, 'planner-comparison');
 		await expectAccessible(page);
 	});

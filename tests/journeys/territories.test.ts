@@ -98,7 +98,9 @@ describe('a planner', () => {
 
 	it('makes territories from a column and sees at once who is outside a tolerance', async () => {
 		await expectAccessible(page);
-		expect(await page.getByRole('complementary').innerText()).toContain('No territories yet.');
+		await expect
+			.poll(() => page.getByRole('complementary').innerText())
+			.toContain('No territories yet.');
 		await picture(page, 'territories-none');
 		await joinVisits(browser, sheet);
 		await page.reload();
@@ -238,7 +240,7 @@ describe('a planner', () => {
 		await open({ viewport: phone }, 'approver');
 		await expectAccessible(page);
 		expect(await hand().count()).toBe(0);
-		expect(await page.getByRole('banner').innerText()).toContain('Read only');
+		await expect.poll(() => page.getByRole('banner').innerText()).toContain('Read only');
 		const width = await page.evaluate(() => document.documentElement.scrollWidth);
 		expect(width).toBeLessThanOrEqual(phone.width);
 		await picture(page, 'territories-phone');

@@ -94,7 +94,9 @@ describe('a themed map', () => {
 		await picture(page, 'theme-count');
 		await page.getByRole('button', { name: 'Show it per km²' }).click();
 		await page.getByText('A count on areas misleads').waitFor({ state: 'detached' });
-		expect(await page.getByLabel('Heading of the legend').inputValue()).toBe('Visits per km²');
+		await expect
+			.poll(() => page.getByLabel('Heading of the legend').inputValue())
+			.toBe('Visits per km²');
 
 		await page.getByLabel('Suppress counts below').fill('5');
 		await page.keyboard.press('Tab');
@@ -108,7 +110,7 @@ describe('a themed map', () => {
 		await expect
 			.poll(async () => Number(await limit.getAttribute('aria-valuenow')))
 			.toBeGreaterThan(from);
-		expect(await page.getByLabel('Classes by').inputValue()).toBe('by-hand');
+		await expect.poll(() => page.getByLabel('Classes by').inputValue()).toBe('by-hand');
 		await expectAccessible(page);
 		await picture(page, 'theme-made');
 

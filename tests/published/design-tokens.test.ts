@@ -29,7 +29,7 @@ describe('Design Tokens Format Module 2025.10', () => {
 	});
 
 	it('5.2.2: a type is never guessed from the value', () => {
-		expect(refusal({ a: { $value: srgb([1, 0, 0]) } })).toContain('1 of no type');
+		expect(refusal({ a: { $value: srgb([1, 0, 0]) } })).toContain('1 token without a type');
 	});
 
 	it('5.2.4, example 7: what is deprecated is read and said', () => {
@@ -81,7 +81,7 @@ describe('Design Tokens Format Module 2025.10', () => {
 		};
 		expect(hexes(file)).toEqual({ primary: '#0066cc', secondary: '#6699ff', success: '#00cc66' });
 		expect(read(file)).toMatchObject({
-			notes: ['Left out, being no colours: tokens, 1 of string.'],
+			notes: ['1 token of type string is no colour and is left out.'],
 		});
 	});
 

@@ -67,7 +67,7 @@ function onSheet(inks: readonly Ink[]) {
 		...{ borders, colouring: inks.map((_, ink) => ink), inks: inks.map(({ hex }) => hex) },
 		sizesMm: inks.map(() => 7),
 	});
-	const judged = pairsOnSheet(inks, demands, { lineHex: '#000000', labels: true });
+	const judged = pairsOnSheet(inks, demands, { region: '#000000', group: '#000000' });
 	const seen = judged.flatMap(({ a, b, readers: all }) =>
 		all
 			.filter(({ reader }) => reader !== 'grey')

@@ -54,3 +54,6 @@ const hundredth = new Intl.NumberFormat('en-GB', { maximumFractionDigits: 2 });
 /** A figure as it was measured, its unit behind it: "12,480", "3.75 h", "0.0125 FTE". */
 export const figure = (value: number, unit = ''): string =>
 	`${(Math.abs(value) < 1 ? threeDigits : hundredth).format(value)}${unit && ` ${unit}`}`;
+
+/** 11.96 -> "11.9": rounded down, so that what misses a demand is never shown as reaching it. */
+export const roundedDown = (value: number): string => (Math.floor(value * 10) / 10).toFixed(1);

@@ -41,13 +41,28 @@ export interface DeskSheet {
 }
 
 /** A large sheet as its page is given it; regions and borders follow from `GET sheets/[sheet]/columns`. */
-export interface DeskSheetApart extends Omit<DeskSheet, 'regions' | 'borders'> {
+export interface DeskSheetApart extends Omit<
+	DeskSheet,
+	'regions' | 'borders' | 'colouring' | 'lastInks' | 'theme'
+> {
 	regions: null;
 	borders: null;
 	borderCount: number;
-	/** as in `DeskRegions`; null where no column is chosen */
-	group: (string | null)[] | null;
+	/** names of the level above, and which of them each region has; null where no column is chosen */
+	group: { names: (string | null)[]; of: PackedNumbers } | null;
+	/** one that stands has the inks of `lastInks` */
+	colouring:
+		| Omit<Extract<DeskColouring, { status: 'coloured' }>, 'inks'>
+		| Exclude<DeskColouring, { status: 'coloured' }>
+		| null;
+	lastInks: PackedNumbers | null;
+	theme: (Omit<DeskTheme, 'classes'> & { classes: PackedNumbers }) | null;
+	/** tag of the picture that is shown first: `GET sheets/[sheet]/first-picture?tag=` */
+	firstPicture: string;
 }
+
+/** From `packNumbers`. */
+export type PackedNumbers = string;
 
 export interface DeskBoundarySet {
 	id: string;

@@ -53,6 +53,12 @@ describe('a sheet’s inks sent to be kept', () => {
 		'are refused where they are not inks: %s',
 		(inks) => expect(keptPalette.safeParse({ name: 'A', inks }).success).toBe(false),
 	);
+	it('name the revision of the palette that they are kept over', () => {
+		const inks = JSON.stringify([{ name: 'a', hex: '#ffffff' }]);
+		const over = '7b2a1c1e-4c7e-4a7c-9a53-0c1d2e3f4a5b';
+		expect(keptPalette.safeParse({ over, inks, revision: '4' }).data?.revision).toBe(4);
+		expect(keptPalette.safeParse({ over, inks, revision: 'x' }).success).toBe(false);
+	});
 	it('are read', () => {
 		const inks = [{ name: 'a', hex: '#ffffff', fixed: true }];
 		expect(keptPalette.safeParse({ over: '', name: 'A', inks: JSON.stringify(inks) }).data).toEqual(

@@ -92,10 +92,19 @@ export const rowsOf = (inks: readonly Ink[]): InkRow[] =>
 		...{ width: String(hatch?.widthMm ?? 0.25), line: hatch?.hex ?? '#000000' },
 	}));
 
+/** What a change was made from. */
+export const revisionField = z.coerce
+	.number()
+	.int()
+	.min(1)
+	.max(2 ** 31 - 1);
+
 /** A sheet's palette that is kept as one of the team's: under a name, or over one that there is. */
 export const keptPalette = z.object({
 	name: name.optional().or(z.literal('')),
 	over: z.uuid().optional().or(z.literal('')),
+	/** of the palette that it is kept over, as the page showed it */
+	revision: revisionField.optional().or(z.literal('')),
 	inks: z
 		.string()
 		.max(50_000)
@@ -116,8 +125,3 @@ function parsed(text: string): unknown {
 }
 
 export const approvalForm = z.object({ id: z.uuid(), digest: z.string().regex(/^[0-9a-f]{64}$/) });
-export const revisionField = z.coerce
-	.number()
-	.int()
-	.min(1)
-	.max(2 ** 31 - 1);

@@ -32,6 +32,7 @@ export const theme = z
 			.nullable()
 			.default(null),
 		suppressBelow: z.number().positive().max(1e12).nullable(),
+		figuresInFiles: z.boolean().optional(),
 		title: z.string().max(300),
 	})
 	.nullable()

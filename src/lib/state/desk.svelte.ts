@@ -3,6 +3,7 @@ import { bordersForSheet, kindCode, standingsForSheet } from '$lib/engines/borde
 import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { Area } from '$lib/engines/sheet';
+import { isOnSheet } from '$lib/engines/sheet/labels/set-name';
 import type { Reader } from '$lib/engines/palettes/palette';
 import type { DeskColouring, DeskSheet, DraftSaved } from '$lib/schemas/desk';
 import type { DeskTerritories } from '$lib/schemas/desk-territories';
@@ -22,6 +23,7 @@ import { rebase } from './rebase';
 import { linkRegions, neighboursOf } from './region-links';
 import { numberRegions } from './rules-in-force';
 import type { SaveWithInks } from './save-draft';
+import type { ShownFirst } from './first-picture';
 import type { DrawnSheet } from './drawn-sheet';
 import { RuleHand } from './rule-hand.svelte';
 import { ThemeOnDesk } from './theme-on-desk.svelte';
@@ -85,6 +87,8 @@ export class Desk {
 	/** whether the borders that count can be drawn in a plane */
 	readonly flatness: Flatness;
 	drawn: DrawnSheet | null = $state.raw(null);
+	/** what a large sheet shows until it is painted from `drawn`; null for others, and afterwards */
+	first: ShownFirst | null = $state.raw(null);
 	/** finer lines for the part of the sheet that is looked at, on a canvas */
 	finer: FinerGround | null = $state.raw(null);
 	/** asks for them: an area of the paper, and pixels to a hundredth of a millimetre */
@@ -169,13 +173,26 @@ export class Desk {
 		return problemOf(document, regions.key, borders, this.numbers, previous);
 	}
 
-	/** How the palette of a document fares on this sheet with a colouring. */
-	judge({ palette, layout }: Draft, colouring: Int32Array): PaletteJudgement {
+	/** How the palette of a document, or the colours of classes, fare on this sheet with a colouring. */
+	judge(
+		{ palette, layout }: { palette: Pick<Draft['palette'], 'inks'>; layout: Draft['layout'] },
+		colouring: Int32Array,
+	): PaletteJudgement {
 		return judgePalette({
 			...{ inks: palette.inks, colouring, borders: this.countedBorders },
 			...{ numbers: this.countedNumbers, sizesMm: this.sizesMm },
-			look: { lineHex: layout.lines.region?.hex ?? '#000000', labels: layout.labels },
+			...{ groups: this.sheet.regions.group, labelled: this.#labelled(layout) },
+			lines: {
+				region: layout.lines.region?.hex ?? '#000000',
+				group: layout.lines.group?.hex ?? '#000000',
+			},
 		});
+	}
+
+	/** Which regions the sheet itself names, as it was drawn last. */
+	#labelled({ labels }: Draft['layout']): ((region: number) => boolean) | undefined {
+		const how = this.drawn?.drawing.lettering.how;
+		return labels && how ? (region) => isOnSheet(how[region]) : undefined;
 	}
 
 	/** what is known about the draft as it stands */

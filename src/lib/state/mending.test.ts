@@ -38,12 +38,7 @@ const request: ProposalRequest = {
 		{ name: 'One', hex: '#777777' },
 		{ name: 'Two', hex: '#7a7a7a' },
 	],
-	demands: [
-		{
-			...{ a: 0, b: 1, ciede2000: 12, grey: 5, borders: 1, tightest: 0 },
-			...{ sizesMm: [9, 9], needsMore: false },
-		},
-	],
+	demands: [{ a: 0, b: 1, ciede2000: 12, grey: 5, sizesMm: [9, 9] }],
 	locked: [],
 	known: [],
 };

@@ -7,6 +7,8 @@ export interface Merger {
 	fields<T extends object>(name: string, base: T, mine: T, theirs: T): T;
 	/** by member: theirs, less what I took away, plus what I put in */
 	members<T>(base: readonly T[], mine: readonly T[], theirs: readonly T[]): T[];
+	/** of a list whose members are edited in place: by their numbers while nobody put in or took away one */
+	places<T>(name: string, base: readonly T[], mine: readonly T[], theirs: readonly T[]): T[];
 }
 
 export function merger(): Merger {
@@ -25,7 +27,27 @@ export function merger(): Merger {
 		}
 		return merged as T;
 	};
-	return { both, pick, fields, members };
+	const places = <T>(
+		name: string,
+		base: readonly T[],
+		mine: readonly T[],
+		theirs: readonly T[],
+	): T[] => {
+		if (base.length === mine.length && base.length === theirs.length)
+			return base.map((was, i) => pick(`${name} ${i + 1}`, was, mine[i], theirs[i]));
+		if (editedByBoth(base, mine, theirs)) both.push(`${name}s`);
+		return members(base, mine, theirs);
+	};
+	return { both, pick, fields, members, places };
+}
+
+/** An object without the members that are merged by themselves, which would else be told as clashes whole. */
+export function without<T extends object, K extends keyof T>(whole: T, ...names: K[]): Omit<T, K> {
+	const left = new Set<string | number | symbol>(names);
+	return Object.fromEntries(Object.entries(whole).filter(([name]) => !left.has(name))) as Omit<
+		T,
+		K
+	>;
 }
 
 const same = (one: unknown, other: unknown): boolean =>
@@ -49,4 +71,13 @@ function members<T>(base: readonly T[], mine: readonly T[], theirs: readonly T[]
 	const kept = theirs.filter((item) => !was.has(text(item)) || my.has(text(item)));
 	const put = mine.filter((item) => !was.has(text(item)) && !their.has(text(item)));
 	return [...kept, ...put];
+}
+
+/** Whether one member is gone on both sides, and each side has something of its own in its place. */
+function editedByBoth<T>(base: readonly T[], mine: readonly T[], theirs: readonly T[]): boolean {
+	const [was, my, their] = [base, mine, theirs].map((list) => new Set(list.map(text)));
+	const put = (side: Set<string>, other: Set<string>) =>
+		[...side].some((item) => !was.has(item) && !other.has(item));
+	const gone = [...was].some((item) => !my.has(item) && !their.has(item));
+	return gone && put(my, their) && put(their, my);
 }

@@ -14,7 +14,6 @@ const list = (pairs: [number, number, number?][]) => ({
 	at: new Float64Array(2 * pairs.length),
 });
 const hand = 3;
-const look = { lineHex: '#000000', labels: true };
 const whole = list([
 	[0, 1],
 	[1, 2, 1],
@@ -29,7 +28,7 @@ describe('the palette on a sheet', () => {
 		]);
 		const numbers = numbersIn(whole, borders);
 		expect([...numbers]).toEqual([0, -1]);
-		const judged = judgePalette({ inks, colouring, borders, numbers, sizesMm: [9, 20, 20], look });
+		const judged = judgePalette({ inks, colouring, borders, numbers, sizesMm: [9, 20, 20] });
 		expect(judged.mark).toBe('error');
 		expect(judged.sentence).toMatch(/^Poppy and Leather look alike to .*protan.* along 1 border$/);
 		expect(judged.unsafe.map(({ a, b, at, border }) => [a, b, at, border])).toEqual([
@@ -41,14 +40,14 @@ describe('the palette on a sheet', () => {
 	it('asks more on smaller paper, and the usual 12 until the sheet is drawn', () => {
 		const borders = list([[0, 1]]);
 		const asked = (sizesMm: number[] | null) =>
-			judgePalette({ inks, colouring, borders, sizesMm, look }).pairs[0].ciede2000;
+			judgePalette({ inks, colouring, borders, sizesMm }).pairs[0].ciede2000;
 		expect([asked([20, 20, 20]), asked([8, 20, 20]), asked([4, 20, 20]), asked(null)]).toEqual([
 			10, 12, 15, 12,
 		]);
 	});
 
 	it('says that no inks touch where none do', () => {
-		const none = judgePalette({ inks, colouring, borders: list([]), sizesMm: null, look });
+		const none = judgePalette({ inks, colouring, borders: list([]), sizesMm: null });
 		expect(none).toMatchObject({ mark: null, sentence: 'No inks touch yet', pairs: [] });
 	});
 
@@ -56,14 +55,29 @@ describe('the palette on a sheet', () => {
 		const borders = list([[0, 1]]);
 		const line = judgePalette({
 			...{ inks, colouring, borders, sizesMm: [9, 9, 9] },
-			look: { ...look, lineHex: '#e5e5e5' },
+			lines: { region: '#e5e5e5', group: '#000000' },
 		});
 		expect(line).toMatchObject({ mark: 'warning', weak: [] });
 		expect(line.sentence).toContain('the border line between Poppy and Chalk');
-		const bare = judgePalette({
-			...{ inks, colouring, borders, sizesMm: [2, 9, 9] },
-			look: { ...look, labels: false },
+		const small = { inks, colouring, borders, sizesMm: [2, 9, 9] };
+		expect(judgePalette(small)).toMatchObject({
+			mark: 'warning',
+			sentence: expect.stringMatching(
+				/but 1 region of Poppy and Chalk under 3.5 mm has neither a label nor a hatch$/,
+			),
 		});
-		expect(bare.sentence).toContain('neither a label nor a hatch');
+		// a name on the large region beside it does not help the small one
+		expect(judgePalette({ ...small, labelled: (region) => region === 1 }).mark).toBe('warning');
+		expect(judgePalette({ ...small, labelled: (region) => region === 0 }).mark).toBe('clear');
+	});
+
+	it('looks at the line that is drawn: between two of the level above it is another', () => {
+		const borders = list([[0, 1]]);
+		const pale = { region: '#000000', group: '#e5e5e5' };
+		const markOf = (groups?: string[]) =>
+			judgePalette({ inks, colouring, borders, sizesMm: [9, 9, 9], lines: pale, groups }).mark;
+		expect([markOf(), markOf(['n', 'n', 's']), markOf(['n', 's', 's'])]).toEqual([
+			...['clear', 'clear', 'warning'],
+		]);
 	});
 });

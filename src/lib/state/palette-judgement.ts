@@ -8,10 +8,12 @@ import {
 	readers,
 	weakBorders,
 	type PairOnSheet,
-	type SheetLook,
+	type SheetFills,
+	type SheetLines,
 } from '$lib/engines/palettes';
 import type { Ink, LabelVerdict, Reader, WeakBorder } from '$lib/engines/palettes/palette';
 import type { BorderList } from '$lib/engines/borders/border-list';
+import { counted } from '$lib/components/format';
 import type { MarkKind } from '$lib/components/Mark.svelte';
 
 /** A border that a reader could miss, with the regions on both its sides. */
@@ -53,8 +55,14 @@ export interface Judged {
 	numbers?: Int32Array;
 	/** printed size of each region, mm; null until the sheet is drawn */
 	sizesMm: ArrayLike<number> | null;
-	look: SheetLook;
+	/** colours of its border lines; black when absent */
+	lines?: SheetLines;
+	/** the level above of each region, whether the sheet says a region's name: as for `pairDemands` */
+	groups?: SheetFills['groups'];
+	labelled?: SheetFills['labelled'];
 }
+
+const blackLines: SheetLines = { region: '#000000', group: '#000000' };
 
 /** Until the sheet is drawn nobody knows how large regions show; this size asks for the usual 12. */
 const usualSizeMm = 5;
@@ -65,19 +73,21 @@ export function judgePalette({
 	borders,
 	numbers,
 	sizesMm,
-	look,
+	lines = blackLines,
+	groups,
+	labelled,
 	...given
 }: Judged): PaletteJudgement {
 	const colouring = given.colouring.map((ink) => (ink < inks.length ? ink : -1));
 	const sheet = {
-		...{ borders, colouring, pointTouches: true },
+		...{ borders, colouring, groups, labelled, pointTouches: true },
 		inks: inks.map(({ hex }) => hex),
 		hatches: inks.map(({ hatch }) => hatch),
 		sizesMm: sizesMm ?? new Float64Array(colouring.length).fill(usualSizeMm),
 	};
 	const numberOf = (border: number) => numbers?.[border] ?? border;
 	const weak = weakBorders(sheet);
-	const pairs = pairsOnSheet(inks, pairDemands(sheet), look).map((pair): PairOnDesk => {
+	const pairs = pairsOnSheet(inks, pairDemands(sheet), lines).map((pair): PairOnDesk => {
 		const [a, b] = [borders.a[pair.tightest], borders.b[pair.tightest]];
 		const smallerFirst = sheet.sizesMm[a] <= sheet.sizesMm[b];
 		return { ...pair, at: smallerFirst ? [a, b] : [b, a], border: numberOf(pair.tightest) };
@@ -108,7 +118,7 @@ function stateOf(
 	);
 	if (weak) return { mark: mark === 'error' ? 'error' : 'warning', sentence: weak };
 	const line = pairs.find(({ line }) => !line.passes);
-	const bare = pairs.find(({ needsMore, beside }) => needsMore && beside === 'nothing');
+	const bare = pairs.find(({ beside }) => beside === 'nothing');
 	const names = (pair: PairOnDesk) => `${inks[pair.a].name} and ${inks[pair.b].name}`;
 	if (line)
 		return {
@@ -118,7 +128,7 @@ function stateOf(
 	if (bare)
 		return {
 			mark: 'warning',
-			sentence: `Regions of ${names(bare)} under 3.5 mm have neither a label nor a hatch to tell them by`,
+			sentence: `Every reader can tell the fills apart, but ${counted(bare.bare, 'region')} of ${names(bare)} under 3.5 mm ${bare.bare === 1 ? 'has' : 'have'} neither a label nor a hatch`,
 		};
 	return { mark: 'clear', sentence: 'Every reader can tell apart all inks that touch' };
 }

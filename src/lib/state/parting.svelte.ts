@@ -1,5 +1,6 @@
-import type { Parting } from '$lib/engines/colouring/part-inks';
-import type { ColouringResult } from '$lib/engines/colouring/problem';
+import { checkParting } from '$lib/engines/colouring/check-parting';
+import type { Parting, PartingQuestion } from '$lib/engines/colouring/part-inks';
+import type { ColouringProblem, ColouringResult } from '$lib/engines/colouring/problem';
 import type { Draft } from '$lib/engines/editions/draft';
 import type { DeskColouring } from '$lib/schemas/desk';
 import { deskColouring } from './colouring-on-desk.svelte';
@@ -19,6 +20,8 @@ export class PartingOnDesk {
 	working = $state(false);
 	unparted: Unparted | null = $state.raw(null);
 	failure = $state('');
+	/** regions that have another ink in the colouring that is on trial; null while there is none */
+	changed: number | null = $state(null);
 	readonly #worker: PaletteWorker;
 
 	constructor(
@@ -40,8 +43,20 @@ export class PartingOnDesk {
 		this.#worker.ask({ part: question }, (reply) => {
 			this.working = false;
 			if ('failed' in reply) this.failure = reply.failed;
-			if ('parting' in reply) this.#settle(reply.parting, document, label);
+			if (!('parting' in reply)) return;
+			if (this.#holdsNow(reply.parting, document, question)) this.#settle(reply.parting, label);
+			else this.failure = 'the draft was changed meanwhile; ask again';
 		});
+	}
+
+	/** Whether an answer still answers: the draft may have been edited, or saved, since it was asked. */
+	#holdsNow(parting: Parting, asked: Draft, { unsafe, inks, problem }: PartingQuestion): boolean {
+		const { document } = this.desk.draft;
+		if (document === asked) return true;
+		const now = this.desk.problemOf(document, null);
+		if (parting.status !== 'parted') return sameQuestion(problem, now);
+		const count = Math.min(inks, document.palette.inks.length);
+		return checkParting({ problem: now, unsafe, inks: count }, parting.colouring).length === 0;
 	}
 
 	/** Ends a search that is going on and forgets what was said. */
@@ -50,14 +65,18 @@ export class PartingOnDesk {
 		this.working = false;
 		this.unparted = null;
 		this.failure = '';
+		this.changed = null;
 	}
 
-	#settle(parting: Parting, document: Draft, label: string) {
+	#settle(parting: Parting, label: string) {
+		// shown on the draft as it is by now: what was edited meanwhile stays
+		const { document } = this.desk.draft;
 		if (parting.status !== 'parted') {
 			this.unparted = parting;
 			return;
 		}
-		const { inksUsed, colouring } = parting;
+		const { inksUsed, colouring, changes } = parting;
+		this.changed = changes;
 		// more inks than are needed: the draft asks for so many, else it would be coloured with fewer again
 		const more = document.inks === 'fewest' && inksUsed > this.#fewest();
 		const shown = more ? { ...document, inks: inksUsed } : document;
@@ -81,3 +100,7 @@ export class PartingOnDesk {
 		return deskColouring(result, this.sentence(result, document));
 	}
 }
+
+/** Whether two problems ask the same: names of locks and the like are no part of them. */
+const sameQuestion = (one: ColouringProblem, two: ColouringProblem): boolean =>
+	JSON.stringify(one) === JSON.stringify(two);

@@ -1,5 +1,5 @@
 import type { TerritoryDraft, TerritoryEntry } from '$lib/engines/territories/territory-draft';
-import { merger, type Merger } from './merge';
+import { merger, without, type Merger } from './merge';
 
 /**
  * Two people changed the territories of one sheet. Out: theirs with my changes on top, and what both had
@@ -26,7 +26,12 @@ export function rebaseTerritories(
 			waterLinks: members(base.waterLinks, mine.waterLinks, theirs.waterLinks),
 			handLinks: members(base.handLinks, mine.handLinks, theirs.handLinks),
 			wishes: {
-				...fields('wish', base.wishes, mine.wishes, theirs.wishes),
+				...fields(
+					'wish',
+					without(base.wishes, 'tolerances'),
+					without(mine.wishes, 'tolerances'),
+					without(theirs.wishes, 'tolerances'),
+				),
 				tolerances: fields(
 					'tolerance of',
 					base.wishes.tolerances,

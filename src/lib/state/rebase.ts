@@ -1,5 +1,6 @@
 import type { Draft } from '$lib/engines/editions/draft';
 import { merger } from './merge';
+import { rebaseLayout } from './rebase-layout';
 
 /**
  * Two people changed the same draft. In: the draft both began from, mine, and theirs (already saved).
@@ -8,8 +9,8 @@ import { merger } from './merge';
  * and by rule; nothing else of theirs is lost.
  */
 export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft; both: string[] } {
-	const { both, pick, fields, members } = merger();
-	const [was, my, their] = [base.layout, mine.layout, theirs.layout];
+	const merge = merger();
+	const { both, pick, fields, members } = merge;
 	return {
 		draft: {
 			inks: pick('number of inks', base.inks, mine.inks, theirs.inks),
@@ -38,42 +39,7 @@ export function rebase(base: Draft, mine: Draft, theirs: Draft): { draft: Draft;
 			struck: members(base.struck, mine.struck, theirs.struck),
 			added: members(base.added, mine.added, theirs.added),
 			seed: pick('seed', base.seed, mine.seed, theirs.seed),
-			layout: {
-				...fields('layout', was, my, their),
-				frame: {
-					...fields('frame', was.frame, my.frame, their.frame),
-					insetChoices: fields(
-						'inset',
-						was.frame.insetChoices,
-						my.frame.insetChoices,
-						their.frame.insetChoices,
-					),
-				},
-				lettering: {
-					...fields('lettering', was.lettering, my.lettering, their.lettering),
-					abbreviations: fields(
-						'abbreviation of',
-						was.lettering.abbreviations,
-						my.lettering.abbreviations,
-						their.lettering.abbreviations,
-					),
-					placed: fields(
-						'place of',
-						was.lettering.placed,
-						my.lettering.placed,
-						their.lettering.placed,
-					),
-					hidden: members(was.lettering.hidden, my.lettering.hidden, their.lettering.hidden),
-					first: pick(
-						'names that come first',
-						was.lettering.first,
-						my.lettering.first,
-						their.lettering.first,
-					),
-				},
-				lines: fields('lines', was.lines, my.lines, their.lines),
-				collar: fields('collar', was.collar, my.collar, their.collar),
-			},
+			layout: rebaseLayout(merge, base.layout, mine.layout, theirs.layout),
 			theme: pick('theme', base.theme, mine.theme, theirs.theme),
 		},
 		both,

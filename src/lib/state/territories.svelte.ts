@@ -142,7 +142,6 @@ export class TerritoryDesk {
 			colouring: this.inks,
 			borders: this.borders,
 			sizesMm: null,
-			look: { lineHex: '#000000', labels: true },
 		}),
 	);
 

@@ -59,9 +59,23 @@ export class ThemeOnDesk {
 	shown: SheetTheme | null = $derived.by(() =>
 		this.apart || this.#desk.planning || this.#desk.trial.now ? null : this.onSheet,
 	);
+	/** what every reader sees of the classes, whichever of them touch */
 	verdict = $derived.by(() => {
 		const on = this.onSheet;
-		return on && judgeRamp(on.inks.slice(0, on.told).map(({ hex }) => hex));
+		const { region } = this.#desk.draft.document.layout.lines;
+		return (
+			on &&
+			judgeRamp(
+				on.inks.slice(0, on.told).map(({ hex }) => hex),
+				region?.hex,
+			)
+		);
+	});
+	/** the same of those that touch on this sheet, hatches among them, at its printed size */
+	judged = $derived.by(() => {
+		const on = this.onSheet;
+		const { layout } = this.#desk.draft.document;
+		return on && this.#desk.judge({ palette: { inks: on.inks }, layout }, on.classes);
 	});
 
 	/** why the theme has nothing to show */
@@ -81,14 +95,14 @@ export class ThemeOnDesk {
 	}
 
 	/** what the measure is taken for; null without figures */
-	judged = $derived.by(() => {
+	kind = $derived.by(() => {
 		const { measure } = this;
 		return measure && judgeMeasure(measure.name, measure.unit, measure.values);
 	});
 	/** whether a total fills areas, and nobody said that it is a rate */
 	misleads = $derived.by(() => {
-		const { theme, judged } = this;
-		return Boolean(theme && judged && addsUp(judged) && !theme.isRate && theme.per.kind === 'none');
+		const { theme, kind } = this;
+		return Boolean(theme && kind && addsUp(kind) && !theme.isRate && theme.per.kind === 'none');
 	});
 	/** for the docket */
 	state: ThemeState | null = $derived.by(() => {
@@ -97,7 +111,8 @@ export class ThemeOnDesk {
 		const { title, told } = onSheet;
 		const untold = onSheet.classes.reduce((sum, one) => sum + Number(one >= told), 0);
 		const { trouble, holds, misleads } = this;
-		return { title, told, untold, trouble, holds, misleads };
+		const alike = this.judged?.mark === 'error' || this.verdict?.usable === false;
+		return { title, told, untold, trouble, holds, misleads, alike };
 	});
 
 	groundOf(theme: Theme): ThemeGround | null {
@@ -133,6 +148,8 @@ export class ThemeOnDesk {
 		const after: Theme = { ...before, ...part };
 		const others = after.measure !== before.measure || after.per !== before.per;
 		if (others && after.method === 'by-hand') after.method = 'natural-breaks';
+		// said of one measure, not of whichever comes after it
+		if (others) delete after.figuresInFiles;
 		if (before.title === this.#titleOf(before) && part.title === undefined)
 			after.title = this.#titleOf(after);
 		this.#put(label, after, run, !limiting.some((one) => one in part));

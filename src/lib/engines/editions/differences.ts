@@ -1,9 +1,12 @@
 import { canonicalJson } from './canonical-json.ts';
+import { wholeDraft } from './draft.ts';
 import type { EditionContent } from './edition-content.ts';
+import { layoutCompared } from './layout-compared.ts';
 import { rulesCompared } from './rules-compared.ts';
+import { classRanges, figuresCompared, territoriesCompared } from './shown-compared.ts';
 
-/** What is compared: an edition, or a draft with the colouring it has now. */
-export type Comparable = Pick<EditionContent, 'draft' | 'colouring'> & {
+/** What is compared: an edition, or a draft with the colouring, classes and territories it has now. */
+export type Comparable = Pick<EditionContent, 'draft' | 'colouring' | 'theme' | 'territories'> & {
 	boundaries: { digest: string };
 };
 
@@ -15,7 +18,7 @@ export interface InkChange {
 }
 
 export interface Change {
-	/** what changed: a member of the palette, the rules or the layout */
+	/** what changed: a member of the palette, the rules, the theme or the layout */
 	what: string;
 	before: unknown;
 	after: unknown;
@@ -29,7 +32,16 @@ export interface Differences {
 	palette: Change[];
 	/** locks, forbidden and reserved inks, pairs and groups, borders decided by hand, goals, ties, inks */
 	rules: Change[];
+	/** `collar legendTitle`: parts of the layout by their members */
 	layout: Change[];
+	/** measure, classes, limits, ramp and so on, each by its name; `shown` where one state has no theme */
+	theme: Change[];
+	/** range that a region is in, by key; null in a state without a theme */
+	classes: Change[];
+	/** `taken over`, and `figure of KEY` where both states hold figures */
+	figures: Change[];
+	/** `region KEY`: the territory it is in, by key; `name of KEY` of a territory */
+	territories: Change[];
 	same: boolean;
 }
 
@@ -58,6 +70,17 @@ function paletteOf({ draft }: Comparable) {
 	return { name: draft.palette.name, ...Object.fromEntries(inks) };
 }
 
+function themeChanges(before: Comparable, after: Comparable): Change[] {
+	const [was, is] = [before, after].map(({ draft }) => wholeDraft(draft).theme);
+	if (was && is) return changed(was, is);
+	return changed({ shown: was?.measure ?? null }, { shown: is?.measure ?? null });
+}
+
+/** Of two themed states; that figures came or went with the theme says the theme. */
+function figureChanges({ theme: was }: Comparable, { theme: is }: Comparable): Change[] {
+	return was && is ? changed(figuresCompared(was, is), figuresCompared(is, was)) : [];
+}
+
 /**
  * What changed between two states of a sheet. Regions are matched by key, so boundaries may differ.
  * Guarantee: `same` exactly when nothing is listed and the boundaries are the same.
@@ -68,9 +91,16 @@ export function differences(before: Comparable, after: Comparable): Differences 
 		regions: regionChanges(before, after),
 		palette: changed(paletteOf(before), paletteOf(after)),
 		rules: changed(rulesCompared(before.draft), rulesCompared(after.draft)),
-		layout: changed(before.draft.layout, after.draft.layout),
+		layout: changed(layoutCompared(before.draft), layoutCompared(after.draft)),
+		theme: themeChanges(before, after),
+		classes: changed(classRanges(before.theme), classRanges(after.theme)),
+		figures: figureChanges(before, after),
+		territories: changed(
+			territoriesCompared(before.territories),
+			territoriesCompared(after.territories),
+		),
 	};
-	const { boundariesChanged, regions, palette, rules, layout } = found;
-	const lists = [regions, palette, rules, layout];
-	return { ...found, same: !boundariesChanged && lists.every((list) => list.length === 0) };
+	const { boundariesChanged, ...lists } = found;
+	const none = Object.values<unknown[]>(lists).every((list) => list.length === 0);
+	return { ...found, same: !boundariesChanged && none };
 }

@@ -1,5 +1,6 @@
 import { caution } from '../sheet/layout.ts';
 import type { Draft } from './draft.ts';
+import type { FrozenTerritories } from './frozen-territories.ts';
 import type { FrozenTheme } from './frozen-theme.ts';
 
 /**
@@ -24,6 +25,8 @@ export interface EditionContent {
 	proof: unknown;
 	/** the classes shown in place of the colouring; absent where the sheet shows its colouring */
 	theme?: FrozenTheme;
+	/** which territory every region is in; absent where the sheet has none */
+	territories?: FrozenTerritories;
 	caution: string;
 }
 
@@ -38,6 +41,7 @@ export interface EditionInput {
 	proof: unknown;
 	/** needed where the draft has a theme */
 	theme?: FrozenTheme | null;
+	territories?: FrozenTerritories | null;
 }
 
 export type EditionOutcome =
@@ -61,7 +65,7 @@ export function editionContent(input: EditionInput): EditionOutcome {
 	const seen = new Set<string>();
 	const twice = keys.filter((key) => seen.has(key) || !seen.add(key));
 	if (twice.length) return { status: 'incomplete', reason: 'duplicate-keys', keys: twice };
-	const { theme } = input;
+	const { theme, territories } = input;
 	const unclassed = draft.theme ? keys.filter((key) => !isClassed(theme, key)) : [];
 	if (unclassed.length) return { status: 'incomplete', reason: 'no-classes', keys: unclassed };
 	return {
@@ -75,6 +79,7 @@ export function editionContent(input: EditionInput): EditionOutcome {
 			lowerBound: input.lowerBound,
 			proof: structuredClone(input.proof),
 			...(draft.theme && theme && { theme: structuredClone(theme) }),
+			...(territories && { territories: structuredClone(territories) }),
 			caution,
 		},
 	};

@@ -126,6 +126,10 @@ describe('differences', () => {
 			palette: [],
 			rules: [],
 			layout: [],
+			theme: [],
+			classes: [],
+			figures: [],
+			territories: [],
 			same: true,
 		});
 	});

@@ -5,7 +5,13 @@ export {
 	type EditionInput,
 	type EditionOutcome,
 } from './edition-content.ts';
-export { freezeTheme, thawTheme, type FrozenTheme } from './frozen-theme.ts';
+export { freezeTheme, thawFigures, thawTheme, type FrozenTheme } from './frozen-theme.ts';
+export {
+	freezeTerritories,
+	thawTerritories,
+	type FrozenTerritories,
+	type RegionTerritory,
+} from './frozen-territories.ts';
 export { canonicalJson } from './canonical-json.ts';
 export { digestOf, verifyEdition } from './digest.ts';
 export {
@@ -15,6 +21,7 @@ export {
 	type Differences,
 	type InkChange,
 } from './differences.ts';
+export { changeSentences } from './change-sentences.ts';
 export type { Draft } from './draft.ts';
 export { carryDraft, type CarriedDraft, type NewGround } from './carry-draft.ts';
 export { colouringProblem, strangersIn, type RuleGround } from './colouring-problem.ts';

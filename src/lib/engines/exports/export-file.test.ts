@@ -10,12 +10,12 @@ import { caution } from '../sheet/layout.ts';
 import {
 	exportFile,
 	exportKinds,
-	territoryColumns,
 	type ExportedFile,
 	type ExportKindId,
 	type ExportOptions,
 	type ExportSource,
 } from './index.ts';
+import { territoryColumns } from './territory-columns.ts';
 
 const columnsOf = (regions: number) => [
 	...territoryColumns(

@@ -3,7 +3,7 @@ export { exportSvg, type FaceFiles } from './svg.ts';
 export { exportGeoJson } from './geojson.ts';
 export { exportBordersCol, exportBordersCsv, type BordersOut } from './borders.ts';
 export { csvField, exportCsv } from './csv.ts';
-export { themeExtraColumns } from './theme-columns.ts';
+export { furtherColumns } from './further-columns.ts';
 export { subsetFont } from './subset-font.ts';
 export { exportTableCsv, type DataColumn, type DataTable } from './data-table.ts';
 export { exportWorkbook } from './workbook.ts';
@@ -29,7 +29,7 @@ export type {
 	ExportSource,
 	ExportTools,
 	ExtraColumn,
+	FurtherValues,
 } from './source.ts';
-export { territoryColumns } from './columns.ts';
 export { exportPdf } from './pdf/pdf.ts';
 export { pixelsOf } from './png/png.ts';

@@ -30,6 +30,14 @@ export interface ExtraColumn {
 	values: (string | number | null)[];
 }
 
+/** What the tables of a sheet tell beside what is drawn on it, a value a region in region order. */
+export interface FurtherValues {
+	/** null: the sheet has no territories */
+	territories: readonly ({ key: string; name: string } | null)[] | null;
+	/** of a theme whose figures files may carry, suppressed ones left out; null: no figures */
+	figures: { title: string; values: readonly (number | null)[] } | null;
+}
+
 export interface ExportAbout {
 	/** title of the sheet */
 	title: string;

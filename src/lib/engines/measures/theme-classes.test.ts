@@ -43,6 +43,16 @@ describe('figures of a theme', () => {
 		expect(told.noDenominator).toEqual([1, 4]);
 	});
 
+	it('are not told where next to nothing divides them, and can still be parted', () => {
+		const ground = { values: [1e300, 1, 2, 3], areasKm2: [1e-20, 1, 1, 1], denominators: null };
+		const perArea = { ...theme, per: { kind: 'area' } } as const;
+		expect(themeFigures(perArea, ground)).toMatchObject({
+			...{ figures: [null, 1, 2, 3], noData: [0], noDenominator: [0] },
+		});
+		for (const method of classMethods)
+			expect(limitsOf({ ...perArea, method }, ground).every(Number.isFinite)).toBe(true);
+	});
+
 	it('are suppressed where the count is small, before they are divided, and nought is told', () => {
 		const told = themeFigures(
 			{ per: { kind: 'area' }, suppressBelow: 5 },

@@ -37,11 +37,13 @@ export function themeFigures(
 			return void told.suppressed.push(region);
 		}
 		const by = divisor(per, areasKm2[region], denominators?.[region]);
-		if (by === null) {
+		const figure = by === null ? null : (value / by) * (per.kind === 'measure' ? per.times : 1);
+		// divided by next to nothing, a figure grows past every number that there is
+		if (figure === null || !Number.isFinite(figure)) {
 			told.noData.push(region);
 			return void told.noDenominator.push(region);
 		}
-		told.figures[region] = per.kind === 'measure' ? (value / by) * per.times : value / by;
+		told.figures[region] = figure;
 	});
 	return told;
 }

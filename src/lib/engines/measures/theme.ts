@@ -20,6 +20,8 @@ export interface Theme {
 	middle: 'mean' | number | null;
 	/** regions whose count is above 0 and below this are not told; null: every figure is */
 	suppressBelow: number | null;
+	/** files and editions carry the figures that are told, besides their classes; absent: they do not */
+	figuresInFiles?: boolean;
 	/** heading of the legend: what the figures are and their unit */
 	title: string;
 }

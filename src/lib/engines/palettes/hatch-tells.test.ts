@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { asSeenBy, contrast } from '../colour/index.ts';
 import { contrastFor, hatchesTell, hatchShows, readers, type Hatch } from './index.ts';
@@ -62,5 +63,31 @@ describe('two fills of one and the same colour', () => {
 	it('are not told apart on regions too small for the lines', () => {
 		expect(hatchesTell(fill({}), fill(), 'typical', [3, 20])).toBe(false);
 		expect(hatchesTell(fill({}), fill(), 'typical', [20, 3])).toBe(true);
+	});
+
+	it('are not told apart by one and the same hatch, though one region is too small to show it', () => {
+		expect(hatchesTell(fill({}), fill({}), 'typical', [20, 3])).toBe(false);
+		expect(hatchesTell(fill({}), fill({ angle: 135 }), 'typical', [20, 3])).toBe(true);
+	});
+
+	it('and are told apart on larger regions wherever they are on smaller ones', () => {
+		const hatch = fc.option(
+			fc.record({
+				kind: fc.constantFrom('lines' as const, 'crossed' as const),
+				angle: fc.integer({ min: 0, max: 179 }),
+				spacingMm: fc.integer({ min: 1, max: 8 }),
+				widthMm: fc.constant(0.3),
+				hex: fc.constantFrom('#000000', '#ffffff', '#e41a1c'),
+			}),
+			{ nil: undefined },
+		);
+		const size = fc.integer({ min: 1, max: 20 });
+		const sizes = fc.tuple(size, size);
+		fc.assert(
+			fc.property(hatch, hatch, sizes, sizes, (one, two, [a, b], [moreA, moreB]) => {
+				if (!hatchesTell(fill(one), fill(two), 'typical', [a, b])) return;
+				expect(hatchesTell(fill(one), fill(two), 'typical', [a + moreA, b + moreB])).toBe(true);
+			}),
+		);
 	});
 });

@@ -31,10 +31,11 @@ export function hatchShows({ hex, hatch }: Fill, reader: Reader, sizeMm: number)
 /**
  * Whether hatches alone tell two fills apart for a reader, whatever their colours: one shows its hatch and
  * the other shows none, or both show one and they differ in kind, by at least 30 degrees in direction, or
- * at least twofold in spacing. A hatch that does not show for this reader counts as none.
+ * at least twofold in spacing. A hatch that does not show for this reader counts as none. Two hatches that
+ * do not differ tell nothing, even where only one of the regions is large enough to show its own.
  *
  * In: the two fills and how large each shows, in mm (the smallest region of the ink along the border or
- * borders in question).
+ * borders in question). What holds for these sizes holds for all larger ones.
  */
 export function hatchesTell(
 	one: Fill,
@@ -42,9 +43,10 @@ export function hatchesTell(
 	reader: Reader,
 	[sizeOne, sizeTwo]: readonly [number, number],
 ): boolean {
-	const [showsOne, showsTwo] = [hatchShows(one, reader, sizeOne), hatchShows(two, reader, sizeTwo)];
-	if (!showsOne || !showsTwo) return showsOne !== showsTwo;
-	return one.hatch !== undefined && two.hatch !== undefined && differ(one.hatch, two.hatch);
+	const shows = hatchShows(one, reader, sizeOne) || hatchShows(two, reader, sizeTwo);
+	if (!shows) return false;
+	const both = hatchShows(one, reader, Infinity) && hatchShows(two, reader, Infinity);
+	return !both || !one.hatch || !two.hatch || differ(one.hatch, two.hatch);
 }
 
 function differ(one: Hatch, two: Hatch): boolean {

@@ -3,6 +3,7 @@ export * from './palette.ts';
 export { housePalettes } from './house.ts';
 export { publishedPalettes } from './published.ts';
 export { checkPalette, defaultThresholds, judgeLabel, labelContrastAsked } from './check.ts';
+export { checkInks } from './check-inks.ts';
 export {
 	alikeBelow,
 	demandFor,
@@ -12,9 +13,9 @@ export {
 	needsLabelOrHatch,
 } from './demand.ts';
 export { weakBorders, type SheetFills } from './weak-borders.ts';
-export { bordersSentence, verdictSentence } from './sentence.ts';
+export { bordersSentence, toWhom, verdictSentence } from './sentence.ts';
 export { mendPalette, type MendRequest, type MendResult } from './mend.ts';
-export { pairDemands, type PairDemand } from './pair-demands.ts';
+export { pairDemands, type AskedOfInks, type LineRank, type PairDemand } from './pair-demands.ts';
 export {
 	isUnsafe,
 	pairsOnSheet,
@@ -22,7 +23,7 @@ export {
 	type PairOnSheet,
 	type PairState,
 	type ReaderOnPair,
-	type SheetLook,
+	type SheetLines,
 } from './pairs-on-sheet.ts';
 export { contrastFor, hatchesTell, hatchShows, type Fill } from './hatch-tells.ts';
 export {

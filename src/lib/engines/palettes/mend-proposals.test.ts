@@ -6,15 +6,14 @@ import {
 	proposeMends,
 	publishedPalettes,
 	readers,
+	type AskedOfInks,
 	type Ink,
-	type PairDemand,
 	type Proposal,
 	type ProposalRequest,
 } from './index.ts';
 
-const demand = (a: number, b: number, ciede2000: number): PairDemand => ({
-	...{ a, b, ciede2000, grey: 5, borders: 1, tightest: 0 },
-	...{ sizesMm: [20, 20] as [number, number], needsMore: false },
+const demand = (a: number, b: number, ciede2000: number): AskedOfInks => ({
+	...{ a, b, ciede2000, grey: 5, sizesMm: [20, 20] },
 });
 const allPairs = (count: number, asked: (a: number, b: number) => number) =>
 	Array.from({ length: count }, (_, b) => b).flatMap((b) =>
@@ -38,7 +37,7 @@ function measured(one: string, two: string, reader: (typeof readers)[number]): n
 	return reader === 'grey' ? Math.abs(a.l - b.l) : differenceCiede2000()(a, b);
 }
 
-function expectToMeet({ inks }: Proposal, demands: readonly PairDemand[]) {
+function expectToMeet({ inks }: Proposal, demands: readonly AskedOfInks[]) {
 	for (const { a, b, ciede2000, grey } of demands)
 		for (const reader of readers) {
 			const asked = reader === 'grey' ? grey : ciede2000;

@@ -9,7 +9,7 @@ import { bestForGrey, fromKnownSet, leastMovement } from './mend-kinds.ts';
 import type { Attempt } from './mend-search.ts';
 import { smallestMend } from './mend-sets.ts';
 import { whyImpossible, whyNotFound } from './mend-reasons.ts';
-import type { PairDemand } from './pair-demands.ts';
+import type { AskedOfInks } from './pair-demands.ts';
 import type { Ink, Palette } from './palette.ts';
 import { randomStream } from './random.ts';
 
@@ -20,7 +20,7 @@ export type ProposalKind = (typeof proposalKinds)[number];
 export interface ProposalRequest {
 	inks: readonly Ink[];
 	/** what is asked of each pair that touches on the sheet, as `pairDemands` finds it */
-	demands: readonly PairDemand[];
+	demands: readonly AskedOfInks[];
 	/** numbers of the inks that stay as they are */
 	locked: readonly number[];
 	/** sets that `known` may start from: published ones, the house's, the team's */
@@ -133,7 +133,7 @@ function taskOf(request: ProposalRequest, inks: readonly string[], hatches: bool
 export function meetsDemands(
 	inks: readonly Ink[],
 	hexes: readonly string[],
-	demands: readonly PairDemand[],
+	demands: readonly AskedOfInks[],
 ): boolean {
 	const fills = inks.map((ink, number) => ({ ...ink, hex: hexes[number] }));
 	const seen = hexes.map(appearanceOf);
@@ -149,7 +149,7 @@ export function meetsDemands(
 
 function leastOf(
 	hexes: readonly string[],
-	demands: readonly PairDemand[],
+	demands: readonly AskedOfInks[],
 ): Pick<Proposal, 'least' | 'leastGrey'> {
 	const seen = hexes.map(appearanceOf);
 	const of = (grey: boolean) =>

@@ -1,6 +1,15 @@
+import { differenceCiede2000, lab65, type Rgb } from 'culori';
 import { describe, expect, it } from 'vitest';
 import type { BorderList } from '../borders/border-list.ts';
-import { isUnsafe, pairDemands, pairsOnSheet, weakBorders, type Ink } from './index.ts';
+import { linearOf, tritanSecondOpinion } from '../colour/index.ts';
+import {
+	isUnsafe,
+	pairDemands,
+	pairsOnSheet,
+	weakBorders,
+	type Ink,
+	type SheetFills,
+} from './index.ts';
 
 /** Red and brown of one published set: a protan reader sees 3.1 between them. */
 const inks: Ink[] = [
@@ -17,7 +26,7 @@ const bordersOf = (pairs: [number, number, number?][]): BorderList => ({
 	at: new Float64Array(2 * pairs.length),
 });
 const hand = 3;
-const sheet = {
+const sheet: SheetFills = {
 	borders: bordersOf([
 		[0, 1],
 		[0, 2],
@@ -29,7 +38,7 @@ const sheet = {
 	inks: hexes,
 	sizesMm: [12, 11, 6, 4, 2],
 };
-const look = { lineHex: '#000000', labels: true };
+const black = { region: '#000000', group: '#000000' };
 
 describe('what touching inks are asked for', () => {
 	it('is by the smallest region on the borders between them, with the tightest border named', () => {
@@ -42,7 +51,7 @@ describe('what touching inks are asked for', () => {
 				borders: 1,
 				tightest: 0,
 				sizesMm: [12, 11],
-				needsMore: false,
+				...{ needsMore: false, bare: 0, ranks: ['region'] },
 			},
 			{
 				a: 0,
@@ -52,7 +61,7 @@ describe('what touching inks are asked for', () => {
 				borders: 3,
 				tightest: 4,
 				sizesMm: [4, 2],
-				needsMore: true,
+				...{ needsMore: true, bare: 1, ranks: ['region'] },
 			},
 			{
 				a: 1,
@@ -62,7 +71,7 @@ describe('what touching inks are asked for', () => {
 				borders: 1,
 				tightest: 2,
 				sizesMm: [11, 2],
-				needsMore: true,
+				...{ needsMore: true, bare: 1, ranks: ['region'] },
 			},
 		]);
 	});
@@ -74,18 +83,19 @@ describe('what touching inks are asked for', () => {
 	});
 
 	it('grows with smaller paper', () => {
-		const half = { ...sheet, sizesMm: sheet.sizesMm.map((mm) => mm / 3) };
+		const half = { ...sheet, sizesMm: Array.from(sheet.sizesMm, (mm) => mm / 3) };
 		expect(pairDemands(sheet)[0].ciede2000).toBe(10);
 		expect(pairDemands(half)[0]).toMatchObject({ ciede2000: 15, needsMore: false });
 	});
 });
 
 describe('the verdict on a pair', () => {
-	const pair = (change: Partial<Ink>[], labels = true, lineHex = '#000000') =>
+	const everywhere = { ...sheet, labelled: () => true };
+	const pair = (change: Partial<Ink>[], ground: Partial<typeof sheet> = {}, lines = black) =>
 		pairsOnSheet(
 			inks.map((ink, i) => ({ ...ink, ...change[i] })),
-			pairDemands(sheet),
-			{ ...look, labels, lineHex },
+			pairDemands({ ...everywhere, ...ground }),
+			lines,
 		);
 
 	it('is an error where a reader sees less than 5', () => {
@@ -110,21 +120,73 @@ describe('the verdict on a pair', () => {
 		const [poppyLeather] = pair([{}, { hatch }]);
 		expect(poppyLeather.readers.map(({ state }) => state)).not.toContain('alike');
 		expect(poppyLeather.readers.find(({ reader }) => reader === 'protan')?.state).toBe('hatch');
-		expect(poppyLeather).toMatchObject({ mark: 'clear', beside: 'hatch' });
+		expect(poppyLeather).toMatchObject({ mark: 'clear', beside: null });
 		const hatches = [undefined, hatch, undefined];
 		const bare = weakBorders(sheet).filter(({ border }) => border === 0);
 		expect(bare.length).toBeGreaterThan(0);
 		expect(weakBorders({ ...sheet, hatches }).filter(({ border }) => border === 0)).toEqual([]);
 	});
 
-	it('asks more than a fill where a region is under 3.5 mm: a label or a hatch', () => {
-		expect(pair([])[1]).toMatchObject({ needsMore: true, beside: 'labels', mark: 'clear' });
-		expect(pair([], false)[1]).toMatchObject({ beside: 'nothing', mark: 'warning' });
+	it('asks more than a fill where a region is under 3.5 mm: a label that is there, or a hatch', () => {
+		const labelled = (...regions: number[]) => ({ labelled: (r: number) => regions.includes(r) });
+		expect(pair([])[1]).toMatchObject({
+			needsMore: true,
+			bare: 0,
+			beside: 'labels',
+			mark: 'clear',
+		});
+		// region 4 shows 2 mm large; the names of all others do not help it
+		expect(pair([], labelled(0, 1, 2, 3))[1]).toMatchObject({
+			...{ bare: 1, beside: 'nothing', mark: 'warning' },
+		});
+		expect(pair([], labelled(4))[1]).toMatchObject({ beside: 'labels', mark: 'clear' });
+		const hatch = {
+			kind: 'lines',
+			angle: 45,
+			spacingMm: 0.8,
+			widthMm: 0.2,
+			hex: '#000000',
+		} as const;
+		const chalkHatched = pair([{}, {}, { hatch }], labelled());
+		expect(chalkHatched[1]).toMatchObject({ beside: 'hatch', mark: 'clear' });
 	});
 
 	it('asks 3:1 of the border line against both fills (WCAG 2.2, 1.4.11)', () => {
-		const [, poppyChalk] = pair([], true, '#949494');
-		expect(poppyChalk.line.passes).toBe(false);
+		const [, poppyChalk] = pair([], {}, { ...black, region: '#949494' });
+		expect(poppyChalk.line).toMatchObject({ rank: 'region', passes: false });
 		expect(poppyChalk.mark).toBe('warning');
+	});
+
+	it('asks it of the line that is drawn: between two of the level above it is another', () => {
+		const pale = { ...black, group: '#949494' };
+		const groups = ['n', 'n', 's', 's', 's'];
+		const [poppyLeather, poppyChalk] = pair([], { groups }, pale);
+		expect(poppyLeather.line).toMatchObject({ rank: 'region', passes: true });
+		expect(poppyChalk.line).toMatchObject({ rank: 'group', passes: false });
+	});
+
+	it('notes where an older model of tritan eyesight (Brettel 1997) would not pass a pair', () => {
+		const two: Ink[] = [
+			{ name: 'Sky blue', hex: '#56b4e9' },
+			{ name: 'Bluish green', hex: '#009e73' },
+		];
+		const doubt = (mm: number, pair = two) => {
+			const ground = { borders: bordersOf([[0, 1]]), colouring: [0, 1], sizesMm: [mm, mm] };
+			const [judged] = pairsOnSheet(
+				pair,
+				pairDemands({ ...ground, inks: pair.map(({ hex }) => hex) }),
+				black,
+			);
+			return judged.tritanDoubt;
+		};
+		// reference library: culori 4.0.2 on what the older model makes of the two
+		const [a, b] = two.map(({ hex }) => {
+			const [red, green, blue] = tritanSecondOpinion(linearOf(hex));
+			return lab65({ mode: 'lrgb', r: red, g: green, b: blue } as unknown as Rgb);
+		});
+		expect(doubt(7)).toBeCloseTo(differenceCiede2000()(a, b), 3);
+		expect(doubt(12)).toBeNull();
+		const hatch = { kind: 'lines', angle: 45, spacingMm: 2, widthMm: 0.3, hex: '#000000' } as const;
+		expect(doubt(7, [two[0], { ...two[1], hatch }])).toBeNull();
 	});
 });

@@ -19,9 +19,11 @@ export interface ReaderVerdict {
 
 export interface RampVerdict {
 	readers: ReaderVerdict[];
+	/** for each class the readers who could take it for some other, and how badly */
+	byClass: { readers: Reader[]; severity: 'clear' | 'warning' | 'error' }[];
 	/** L* rises or falls from class to class, so that grey print keeps the order */
 	ordered: boolean;
-	/** classes on which a black border line has less than 3:1 */
+	/** classes on which the border line has less than 3:1, so that regions of one class run together */
 	faintLines: number[];
 	/** nothing worse than a warning for any reader */
 	usable: boolean;
@@ -31,31 +33,47 @@ export interface RampVerdict {
 const asked = 10;
 
 /**
- * What every reader sees of the colours of classes. In: `#rrggbb`, lowest class first. Out: for each reader
- * the pair of classes that is told apart least, all pairs looked at, since any two classes may touch;
- * severity as elsewhere: error below 5 in CIEDE2000 or in L*, warning below 10, for grey print below 8.
+ * What every reader sees of the colours of classes. In: `#rrggbb`, lowest class first; the
+ * colour of the line between regions. Out: for each reader
+ * the pair of classes that is told apart least, all pairs looked at, since any two classes may touch.
+ * Error below 5 in CIEDE2000, warning below 10. In grey print classes are amounts that must be read off, so
+ * it is stricter than for a colouring: an error below 5 in L*, a warning below 8.
  * Source: as `checkPalette`; WCAG 2.2, 1.4.11 for the line.
  */
-export function judgeRamp(hexes: readonly string[]): RampVerdict {
+export function judgeRamp(hexes: readonly string[], lineHex = '#000000'): RampVerdict {
 	const seen = hexes.map(appearanceOf);
-	const verdicts = readers.flatMap((reader) => {
-		let worst: ReaderVerdict | null = null;
-		for (let b = 1; b < hexes.length; b++) {
-			for (let a = 0; a < b; a++) {
+	const all = readers.flatMap((reader) =>
+		hexes.flatMap((_, b) =>
+			hexes.slice(0, b).map((_, a): ReaderVerdict => {
 				const value = found(reader, seen[a], seen[b]);
-				if (worst && worst.found <= value) continue;
-				worst = { reader, a, b, next: b === a + 1, found: value, ...severityOf(reader, value) };
-			}
-		}
-		return worst ?? [];
+				return { reader, a, b, next: b === a + 1, found: value, ...severityOf(reader, value) };
+			}),
+		),
+	);
+	const worst = readers.flatMap((reader) => {
+		const of = all.filter((one) => one.reader === reader);
+		return of.length ? of.reduce((one, two) => (two.found < one.found ? two : one)) : [];
 	});
 	const light = hexes.map((hex) => labOf(hex)[0]);
 	const rises = light.map((one, i) => Math.sign(one - (light[i - 1] ?? one))).slice(1);
 	return {
-		readers: verdicts,
+		readers: worst,
+		byClass: hexes.map((_, one) => ofClass(all, one)),
 		ordered: rises.every((one) => one > 0) || rises.every((one) => one < 0),
-		faintLines: checkBorderLine('#000000', hexes).flatMap(({ ink, passes }) => (passes ? [] : ink)),
-		usable: verdicts.every(({ severity }) => severity !== 'error'),
+		faintLines: checkBorderLine(lineHex, hexes).flatMap(({ ink, passes }) => (passes ? [] : ink)),
+		usable: worst.every(({ severity }) => severity !== 'error'),
+	};
+}
+
+function ofClass(all: readonly ReaderVerdict[], one: number): RampVerdict['byClass'][number] {
+	const close = all.filter(
+		({ a, b, severity }) => severity !== 'clear' && (a === one || b === one),
+	);
+	const seenBy = new Set(close.map(({ reader }) => reader));
+	const bad = close.some(({ severity }) => severity === 'error');
+	return {
+		readers: readers.filter((reader) => seenBy.has(reader)),
+		severity: bad ? 'error' : close.length ? 'warning' : 'clear',
 	};
 }
 

@@ -50,6 +50,32 @@ describe('ramps', () => {
 		]);
 	});
 
+	it('are told class by class, not by the closest pair alone', () => {
+		const own = ramps.find(({ id }) => id === 'house-ochre-slate') ?? expect.fail('no such ramp');
+		const hexes = rampInks(own, 7);
+		const { byClass, readers } = judgeRamp(hexes);
+		// both sides of the middle take equal steps of L*, so that 1 and 7, 2 and 6, 3 and 5 print alike
+		expect(byClass.map(({ readers: close }) => close.includes('grey'))).toEqual([
+			...[true, true, true, false, true, true, true],
+		]);
+		expect(byClass.filter(({ severity }) => severity === 'error').length).toBeGreaterThan(
+			new Set(readers.filter(({ reader }) => reader === 'grey').flatMap(({ a, b }) => [a, b])).size,
+		);
+		// each class on its own, measured anew against every other
+		byClass.forEach(({ severity }, one) => {
+			const others = hexes.filter((_, other) => other !== one);
+			const worst = others.map((hex) => judgeRamp([hexes[one], hex]).readers).flat();
+			const bad = worst.some((verdict) => verdict.severity === 'error');
+			expect(severity === 'error').toBe(bad);
+		});
+	});
+
+	it('are told where the border line that is drawn is lost on them', () => {
+		const dark = ['#f0f0f0', '#303030'];
+		expect(judgeRamp(dark).faintLines).toEqual([1]);
+		expect(judgeRamp(dark, '#ffffff').faintLines).toEqual([0]);
+	});
+
 	it('to both sides turn where they are asked to', () => {
 		const own = ramps.find(({ id }) => id === 'house-ochre-slate') ?? expect.fail('no such ramp');
 		const lightness = light(rampInks(own, 5, { turn: 1 }));

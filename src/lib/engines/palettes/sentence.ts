@@ -91,7 +91,8 @@ function onlyGrey(missing: ReadonlySet<Reader>): boolean {
 	return missing.size === 1 && missing.has('grey');
 }
 
-function toWhom(missing: ReadonlySet<Reader>): string {
+/** Who is meant, in words: `to protan and deutan readers and in grey print`. */
+export function toWhom(missing: ReadonlySet<Reader>): string {
 	const eyes = readers.filter((reader) => reader !== 'grey' && missing.has(reader));
 	const print = missing.has('grey') ? ['in grey print'] : [];
 	const people = eyes.length === 0 ? [] : [`to ${listed(eyes)} readers`];

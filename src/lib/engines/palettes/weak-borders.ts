@@ -14,12 +14,16 @@ export interface SheetFills {
 	inks: readonly string[];
 	/** the hatch of each ink, where it has one; none when absent */
 	hatches?: readonly (Hatch | undefined)[];
-	/** printed size of each region: the side of a square of its area on the sheet, in mm */
+	/** printed size of each region in mm, as `regionSizesMm` of the sheet measures it */
 	sizesMm: ArrayLike<number>;
 	/** whether regions that meet in a point only must be told apart too; false when absent */
 	pointTouches?: boolean;
 	/** borders struck out by hand, by their number in the list */
 	struck?: ReadonlySet<number>;
+	/** the level above of each region: another line is drawn between two of them; one level when absent */
+	groups?: readonly (string | null)[];
+	/** whether the sheet itself says a region's name or the number of it; none when absent */
+	labelled?: (region: number) => boolean;
 }
 
 const point = borderKinds.indexOf('point');

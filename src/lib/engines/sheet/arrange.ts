@@ -1,10 +1,10 @@
 import { collar, type Collar } from './collar/collar.ts';
 import { emptyCorner } from './collar/empty-corner.ts';
-import { whiteGround } from './collar/text-blocks.ts';
 import type { SheetInput } from './draw-sheet.ts';
-import type { DrawnInk, LegendPlace } from './drawing.ts';
+import type { DrawnInk, LegendGround, LegendPlace } from './drawing.ts';
 import type { SheetLayout } from './layout.ts';
 import { figureRoom } from './graticule/figure-room.ts';
+import { frameWidth } from './insets/inset-size.ts';
 import { padded, placeOnPaper, type OnPaper } from './place-on-paper.ts';
 import type { Box } from './plane/fit.ts';
 import type { DrawnShape } from './shapes.ts';
@@ -16,7 +16,7 @@ export interface Arranged {
 	legend: LegendPlace | null;
 	/** where no name may stand */
 	obstacles: Box[];
-	/** white grounds under text blocks, and under a legend on the map */
+	/** white grounds under text blocks */
 	grounds: DrawnShape[];
 	/** where the legend could not stand as asked, in a sentence; '' otherwise */
 	legendNote: string;
@@ -41,7 +41,7 @@ function arrangeOnce(input: SheetInput, inks: DrawnInk[], layout: SheetLayout): 
 	let around = null as Collar | null;
 	const frameFor = (projection: string) => (around = collarOf(input, inks, layout, projection));
 	const placed = placeOnPaper(coverage, layout, frameFor, groups);
-	return { ...onTheMap(placed, around!), placed, around: around!, legendNote: '' };
+	return { ...onTheMap(placed, around!, layout), placed, around: around!, legendNote: '' };
 }
 
 function collarOf(input: SheetInput, inks: DrawnInk[], layout: SheetLayout, projection: string) {
@@ -49,7 +49,7 @@ function collarOf(input: SheetInput, inks: DrawnInk[], layout: SheetLayout, proj
 	return collar({
 		...{ layout, inks, projection, issue },
 		coloured: colouring !== null,
-		weak: weak.length > 0,
+		weak: new Set(weak.map(({ reader }) => reader)),
 		regions: coverage.keys.length,
 	});
 }
@@ -62,21 +62,30 @@ export function roomOn(input: SheetInput, inks: DrawnInk[], layout: SheetLayout)
 }
 
 /** Text blocks, and the legend where it is to stand on the map. */
-function onTheMap(placed: OnPaper, { blocks, legend, floating, obstacles }: Collar) {
+function onTheMap(placed: OnPaper, around: Collar, { frame }: SheetLayout) {
+	const { blocks, legend, floating, obstacles, scale } = around;
 	const grounds = blocks.flatMap(({ ground }) => ground ?? []);
 	if (!floating) return { legend, obstacles, grounds };
 	const air = floating.size;
 	const size = { width: floating.width + 2 * air, height: floating.height + 2 * air };
-	const { arcs, sides, box, insets } = placed;
+	const { arcs, sides, box, insets, globe } = placed;
 	const corner = emptyCorner(arcs, sides, box, size, [
 		...obstacles,
 		...insets.map(({ outer }) => outer),
 	]);
 	if (!corner) return { legend: null, obstacles, grounds };
 	const { x, y } = corner.box;
+	// beside the globe the paper is bare
+	const isEdged = !globe && Boolean(frame.sea || frame.graticule || frame.neatLine);
+	const ground: LegendGround = {
+		air,
+		line: isEdged ? frameWidth(scale) : 0,
+		right: x > box.x,
+		bottom: y > box.y,
+	};
 	return {
-		legend: { ...floating, x: x + air, y: y + air },
+		legend: { ...floating, x: x + air, y: y + air, ground },
 		obstacles: [...obstacles, corner.box],
-		grounds: [whiteGround(corner.box), ...grounds],
+		grounds,
 	};
 }

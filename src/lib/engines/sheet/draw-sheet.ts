@@ -91,7 +91,8 @@ export function drawPlaced(asked: SheetInput): { drawing: Drawing; placement: Pl
 				...{ arcs, rings, sides, groups, scale, names: lettered(input) },
 				...{ keys: coverage.keys, areas: coverage.areasKm2, lettering: layout.lettering },
 				...{ box: placed.box, paper: paperBox(layout) },
-				obstacles: [...obstacles, ...frameObstacles(placed, scale, layout.scaleBar)],
+				obstacles: [...obstacles, ...frameObstacles(placed, scale)],
+				frames: placed.insets.filter(({ ratio }) => ratio > 0).map(({ outer }) => outer),
 			})
 		: unlettered(names.length);
 	const small = rings.map((list) => smallerSide(arcs, list)).sort((a, b) => a - b);

@@ -139,4 +139,16 @@ export interface LegendPlace {
 	ranks: { rank: string; words: string }[];
 	/** what the double line stands for, in lines; none where there is none */
 	weak: string[];
+	/** on the map: the ground under it */
+	ground?: LegendGround;
+}
+
+/** A white ground, no larger than the entries need, in the corner of the legend's place that is the map's. */
+export interface LegendGround {
+	/** from the entries to its edge */
+	air: number;
+	/** width of the line round it, 0 for none */
+	line: number;
+	right: boolean;
+	bottom: boolean;
 }

@@ -29,6 +29,9 @@ export {
 	type Pen,
 	type Picture,
 } from './canvas/paint-area.ts';
+export { firstPicture, type FirstPicture } from './first-picture/first-picture.ts';
+export { decodeFirstPicture, encodeFirstPicture } from './first-picture/first-picture-bytes.ts';
+export { paintFirstPicture } from './first-picture/paint-first-picture.ts';
 export { type Hatching } from './canvas/paint-hatches.ts';
 export { refineGround } from './canvas/refine.ts';
 export { regionAt } from './canvas/region-at.ts';

@@ -10,7 +10,10 @@ import type { SheetArcs } from './plane/quantise.ts';
 /** The regions on both sides of the arcs that are drawn, which may be more than the coverage's. */
 export type ArcSides = Pick<Coverage, 'arcLeft' | 'arcRight'>;
 
-/** Line widths on A4 in hundredths of a millimetre: each rank clearly heavier than the one below. */
+/**
+ * Line widths on A4 in hundredths of a millimetre: each rank clearly heavier than the one below. An outer edge
+ * is a coast as often as not, and drawn fine; around a level above it is as heavy as that, so that it closes.
+ */
 const widths = { region: 14, fineRegion: 9, group: 38, outer: 22, weak: 90, weakCore: 40 };
 
 export interface LineInput {
@@ -73,7 +76,7 @@ export function lineLayers({
 	return [
 		ranked('region', fine ? widths.fineRegion : widths.region),
 		ranked('group', widths.group),
-		ranked('outer', widths.outer),
+		ranked('outer', ranks.group.length ? widths.group : widths.outer),
 		line('weak', widths.weak, '#000000', ranks.weak),
 		line('weak-core', widths.weakCore, '#ffffff', ranks.weak),
 	].filter(({ arcs: list }) => list.length > 0);

@@ -56,13 +56,16 @@ export function recolour(
 	return { ...next, description: describe(next) };
 }
 
+/** What follows from the inks in use. */
+const setAnew: readonly DrawnShape['layer'][] = ['hatch', 'legend-ground', 'legend'];
+
 /** Hatches and samples in the legend made anew among the shapes that stay; the list stays where there are none. */
 function newShapes(
 	drawing: Drawing,
 	samples: DrawnShape[],
 	see: (hex: string) => string,
 ): DrawnShape[] {
-	const others = drawing.shapes.filter(({ layer }) => layer !== 'hatch' && layer !== 'legend');
+	const others = drawing.shapes.filter(({ layer }) => !setAnew.includes(layer));
 	const hatches = hatchShapes(drawing, see);
 	const tinted = others.some(({ set }) => set !== undefined);
 	const kept = others.length === drawing.shapes.length && !tinted;

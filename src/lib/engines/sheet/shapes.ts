@@ -23,7 +23,14 @@ export const shapeLayersUnder = ['sea'] as const;
 /** above the fills and below border lines */
 export const shapeLayersOver = ['lakes', 'hatch', 'graticule', 'water'] as const;
 /** above border lines and below names */
-export const shapeLayersTop = ['inset', 'neat-line', 'ground', 'north', 'legend'] as const;
+export const shapeLayersTop = [
+	'inset',
+	'legend-ground',
+	'neat-line',
+	'ground',
+	'north',
+	'legend',
+] as const;
 
 export type ShapeLayer =
 	| (typeof shapeLayersUnder)[number]

@@ -1,3 +1,4 @@
+import { limitWords } from '../measures/classing/range-words.ts';
 import type { ThemeClasses } from '../measures/theme-classes.ts';
 import type { Theme } from '../measures/theme.ts';
 import type { Hatch, Ink } from '../palettes/palette.ts';
@@ -48,8 +49,14 @@ export function sheetTheme(theme: Theme, classes: ThemeClasses, source: ThemeSou
 	};
 }
 
-/** Where a diverging ramp turns, counted in classes: on a limit, or within the class that holds its middle. */
-function turnOf({ middle }: Theme, { limits, mean }: ThemeClasses): number | undefined {
+/**
+ * Where a diverging ramp turns, counted in classes: on a limit, or within the class that holds its middle;
+ * undefined for the middle class.
+ */
+export function turnOf(
+	{ middle }: Pick<Theme, 'middle'>,
+	{ limits, mean }: Pick<ThemeClasses, 'limits' | 'mean'>,
+): number | undefined {
 	const value = middle === 'mean' ? mean : middle;
 	if (value === null) return undefined;
 	const on = limits.indexOf(value);
@@ -74,7 +81,7 @@ function noteOf(theme: Theme, { suppressed }: ThemeClasses, source: ThemeSource)
 	return [
 		`${method}; a figure on a limit is in the lower class.`,
 		suppressed.length && theme.suppressBelow !== null
-			? `Counts above 0 and below ${theme.suppressBelow.toLocaleString('en-GB')} are suppressed.`
+			? `Counts above 0 and below ${limitWords([theme.suppressBelow])[0]} are suppressed.`
 			: '',
 		from ? `Figures: ${from}.` : '',
 	]

@@ -20,7 +20,7 @@ export function regionSizesMm(
 		layout,
 		inks: inks.map((ink) => ({ ...ink, shown: ink.hex })),
 		coloured: beside && inks.length > 0,
-		weak: false,
+		weak: new Set(),
 		regions: coverage.keys.length,
 		projection: '',
 		issue: '',

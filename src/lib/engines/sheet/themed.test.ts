@@ -60,6 +60,17 @@ describe('a themed sheet', () => {
 		expect(again.description).toBe(fresh.description);
 	});
 
+	it('says of small counts below which figure they are suppressed, fractions too', () => {
+		const noteFor = (suppressBelow: number) =>
+			sheetTheme(
+				{ ...theme, suppressBelow },
+				{ ...classes, suppressed: [7] },
+				{ table: null, date: null, holds: true },
+			).note;
+		expect(noteFor(1500)).toContain('below 1,500 are suppressed');
+		expect(noteFor(0.0004)).toContain('below 0.0004 are suppressed');
+	});
+
 	it('tells class and range in its table, and no figure', () => {
 		const rows = sheetTable(
 			drawing,

@@ -43,6 +43,15 @@ export interface DisplayLevelTable {
 	geometry: Buffer;
 }
 
+export interface FirstPictureTable {
+	boundary_set_id: string;
+	/** of everything else that decides the picture */
+	tag: string;
+	/** packed with gzip; empty where nothing is drawn */
+	picture: Buffer;
+	made_at: Moment;
+}
+
 export type RecutKind = 'file' | 'reading' | 'mends';
 export type RecutState =
 	| 'waiting'

@@ -285,6 +285,7 @@ export interface Database {
 	gaps: recuts.GapTable;
 	pieces: recuts.PieceTable;
 	display_levels: recuts.DisplayLevelTable;
+	first_pictures: recuts.FirstPictureTable;
 	recuts: recuts.RecutTable;
 	searches: searches.SearchTable;
 	exports: exported.ExportTable;

@@ -90,8 +90,8 @@ async function inputFor(
 async function drawn(
 	shop: Workshop,
 	{ kind, options, reader, issue }: Row<'exports'>,
-	{ view, draft, inks, theme }: ExportGround,
+	{ view, draft, inks, theme, further }: ExportGround,
 ): Promise<Omit<ExportInput, 'about'>> {
 	const input = await paintInput(shop.db, view, draft, inks, reader, issue, theme);
-	return { ...input, kind, options, names: view.names };
+	return { ...input, further, kind, options, names: view.names };
 }

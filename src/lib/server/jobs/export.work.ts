@@ -1,6 +1,6 @@
 import {
 	exportFile,
-	themeExtraColumns,
+	furtherColumns,
 	type ExportAbout,
 	type ExportKindId,
 	type ExportOutcome,
@@ -8,11 +8,11 @@ import {
 import { knownGaps } from '../../engines/borders/known-gaps.ts';
 import { sheetTable } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
-import { drawInput, type PaintInput } from './paint.work.ts';
+import { drawInput, type FilesInput } from './paint.work.ts';
 import { rasterise } from './rasterise.ts';
 import { teller, type Task } from './task-port.ts';
 
-export interface ExportInput extends PaintInput {
+export interface ExportInput extends FilesInput {
 	kind: ExportKindId;
 	/** those of the kind, each of them said */
 	options: Record<string, unknown>;
@@ -31,7 +31,8 @@ export async function makeExport({ input, port }: Task<ExportInput>): Promise<Ex
 	const { keys } = coverage;
 	const rows = sheetTable(drawing, coverage, groups);
 	const source = {
-		...{ drawing, coverage, about, columns: themeExtraColumns(rows), fonts: faceFiles(), rows },
+		...{ drawing, coverage, about, fonts: faceFiles(), rows },
+		columns: furtherColumns(rows, input.further),
 		borders: {
 			title: about.title,
 			keys,

@@ -6,6 +6,10 @@ import {
 	refuseIntake,
 } from '../services/intake-end.service.ts';
 import { knownAnswers } from '../services/reading-answers.service.ts';
+import { mostWhole } from '../../schemas/sheet-apart.ts';
+import { log } from '../log.ts';
+import { sheetOfIntake } from '../repositories/intakes.repository.ts';
+import { prepareFirstPicture } from '../services/first-picture.service.ts';
 import { runClaimed, wakeSilent, type ClaimedJob } from './claimed-job.ts';
 import type { ReadOutcome } from './read.work.ts';
 import type { Progress } from './tasks.ts';
@@ -22,8 +26,12 @@ export const wakeSilentIntakes = (shop: Workshop) =>
 const intakeJob = (shop: Workshop): ClaimedJob<'intakes', ReadOutcome> => ({
 	table: 'intakes',
 	work: (intake, signal, progress) => read(shop, intake, signal, progress),
-	settle: (claim, outcome) => {
-		if (outcome.status === 'accepted') return acceptIntake(shop, claim, outcome);
+	settle: async (claim, outcome) => {
+		if (outcome.status === 'accepted') {
+			const kept = await acceptIntake(shop, claim, outcome);
+			if (kept) await prepare(shop, claim.id);
+			return kept;
+		}
 		return outcome.question
 			? askIntake(shop, claim, outcome.question, outcome.taken)
 			: refuseIntake(shop, claim, outcome);
@@ -36,6 +44,17 @@ const intakeJob = (shop: Workshop): ClaimedJob<'intakes', ReadOutcome> => ({
 		fault: 'The file could not be read because of a fault here.',
 	},
 });
+
+/** What can be made again is no reason to call a sheet that stands a failure. */
+async function prepare(shop: Workshop, intakeId: string): Promise<void> {
+	try {
+		const made = await sheetOfIntake(shop.db, intakeId);
+		if (!made || made.region_count <= mostWhole) return;
+		await prepareFirstPicture(shop, { id: made.team_id, slug: '', name: '' }, made.number);
+	} catch (error) {
+		log.warn({ intake: intakeId, error: String(error) }, 'the first picture is left for later');
+	}
+}
 
 async function read(
 	shop: Workshop,

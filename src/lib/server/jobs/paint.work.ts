@@ -6,13 +6,15 @@ import {
 	exportCsv,
 	exportGeoJson,
 	exportSvg,
-	themeExtraColumns,
+	furtherColumns,
+	type FurtherValues,
 } from '../../engines/exports/index.ts';
 import type { Reader } from '../../engines/palettes/index.ts';
 import {
 	doubledBorders,
 	drawSheet,
 	sheetTable,
+	type SheetInput,
 	type SheetTheme,
 } from '../../engines/sheet/index.ts';
 import { faceFiles } from './faces.ts';
@@ -38,7 +40,7 @@ export interface PaintInput {
 }
 
 /** A region whose ink the palette lacks is drawn as not coloured. */
-export function drawInput(input: PaintInput) {
+export function drawInput(input: PaintInput, how: Pick<SheetInput, 'bare'> = {}) {
 	const coverage = decodeCoverage(input.geometry);
 	const { draft, groups, named, reader, issue, theme } = input;
 	const { layout } = draft;
@@ -50,7 +52,7 @@ export function drawInput(input: PaintInput) {
 	const weak = doubledBorders({ coverage, borders, colouring, inks, layout });
 	const drawing = drawSheet({
 		...{ coverage, borders, groups, named, inks, layout, reader, issue },
-		...{ colouring, theme, locked, weak },
+		...{ colouring, theme, locked, weak, ...how },
 	});
 	return { coverage, drawing };
 }
@@ -66,11 +68,16 @@ export interface SheetFile {
 	bytes: Uint8Array;
 }
 
+export interface FilesInput extends PaintInput {
+	/** what tables tell beside what is drawn */
+	further: FurtherValues;
+}
+
 /** Every file an edition is issued as, all from one drawing. */
-export function renderFiles({ input }: Task<PaintInput>): SheetFile[] {
+export function renderFiles({ input }: Task<FilesInput>): SheetFile[] {
 	const { coverage, drawing } = drawInput(input);
 	const rows = sheetTable(drawing, coverage, input.groups);
-	const columns = themeExtraColumns(rows);
+	const columns = furtherColumns(rows, input.further);
 	return [
 		{
 			extension: 'svg',

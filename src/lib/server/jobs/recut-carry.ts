@@ -10,6 +10,7 @@ import type { BorderList } from '../../engines/borders/index.ts';
 import { carryNumbers, carryTexts } from '../../engines/measures/index.ts';
 import { carryTerritories } from '../../engines/territories/carry-territories.ts';
 import type { TerritoryDraft } from '../../engines/territories/territory-draft.ts';
+import { themeRow } from './recut-theme.ts';
 import type { CarriedRow, RecutDecision } from '../../schemas/recut.ts';
 
 /** What people decided on the boundaries that stand. */
@@ -48,7 +49,10 @@ export interface CarriedOver {
 export function carryOver(match: RegionMatch, standing: Standing, fresh: Fresh): CarriedOver {
 	const draft = carryDraft(standing.draft, match, fresh);
 	const territories = standing.territories && carryTerritories(standing.territories, match, fresh);
-	const measures = standing.measures.map((measure) => carryMeasure(measure, match));
+	const { theme } = draft.draft;
+	const measures = standing.measures.map((measure) =>
+		carryMeasure(measure, match, !isRate(measure, theme)),
+	);
 	return {
 		draft: draft.draft,
 		previous: standing.inks && carryInks(standing.inks, match),
@@ -58,21 +62,28 @@ export function carryOver(match: RegionMatch, standing: Standing, fresh: Fresh):
 			...draft.rows.map((row) => toldOf('draft', row)),
 			...(territories?.rows ?? []).map((row) => toldOf('territories', row)),
 			...measures.map(({ row }) => row),
+			...(theme ? themeRow(theme, measures, match) : []),
 		],
 	};
 }
 
 const toldOf = (stage: CarriedRow['stage'], row: EngineRow): CarriedRow => ({ stage, ...row });
 
-/** Numbers are taken to add up where regions are merged: counts and hours do, and nobody says of a rate that it is one. */
-function carryMeasure(measure: StandingMeasure, match: RegionMatch) {
-	const numbers = measure.values && carryNumbers(measure.values, match, true);
+/** Only the theme of a sheet says that a measure is a rate. */
+const isRate = ({ name }: StandingMeasure, theme: Draft['theme']): boolean =>
+	theme?.measure === name && theme.isRate;
+
+/** Numbers are taken to add up where regions are merged, as counts and hours do, unless it is said of one that it is a rate. */
+function carryMeasure(measure: StandingMeasure, match: RegionMatch, addsUp: boolean) {
+	const numbers = measure.values && carryNumbers(measure.values, match, addsUp);
 	const words = measure.texts && carryTexts(measure.texts, match);
 	const { carried, summed, lost } = numbers ?? words ?? { carried: 0, summed: 0, lost: 0 };
 	const told = [
 		`${carried} carried over`,
 		summed > 0 ? `${summed} added up from merged regions` : '',
-		lost > 0 ? `${lost} regions are without one because theirs were split or redrawn` : '',
+		lost > 0
+			? `${lost} regions are without one because theirs were ${addsUp ? 'split or redrawn' : 'split, redrawn or merged'}`
+			: '',
 	].filter((phrase) => phrase !== '');
 	const row: CarriedRow = {
 		...{ stage: 'measures', what: 'measure', keys: [], now: [], outcome: 'changed' },
@@ -82,7 +93,7 @@ function carryMeasure(measure: StandingMeasure, match: RegionMatch) {
 	const carriedOn: StandingMeasure = {
 		...{ id, name, values: numbers?.values ?? null, texts: words?.values ?? null },
 	};
-	return { carried: carriedOn, row };
+	return { carried: carriedOn, numbers, row };
 }
 
 /** The matching as people corrected it. */

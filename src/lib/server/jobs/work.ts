@@ -2,6 +2,8 @@
 export { writeBorders } from './border-files.work.ts';
 export { readRulesTable, writeRules } from './rules-csv.work.ts';
 export { arrangeDraft, colourDraft, recheck } from './colour.work.ts';
+export { compareEditions } from './compare-editions.work.ts';
+export { paintFirst } from './first-picture.work.ts';
 export { makeExport } from './export.work.ts';
 export { findPieces } from './pieces.work.ts';
 export { writeProof } from './proof.work.ts';

@@ -70,6 +70,22 @@ export async function readEditionColouring(
 	return row?.colouring;
 }
 
+/** Those that show a measure, by what they name it; the newest first. */
+export const listThemedEditions = (db: Db, sheetId: string) =>
+	db
+		.selectFrom('editions')
+		.select([
+			'number',
+			'issued_at',
+			sql<string | null>`content #>> '{theme,figuresAt}'`.as('figures_at'),
+			sql<string>`content #>> '{draft,theme,measure}'`.as('measure'),
+			sql<string | null>`content #>> '{draft,theme,per,measure}'`.as('divisor'),
+		])
+		.where('sheet_id', '=', sheetId)
+		.where(sql<boolean>`content #>> '{draft,theme,measure}' is not null`)
+		.orderBy('number', 'desc')
+		.execute();
+
 export const listEditionFiles = (db: Db, sheetId: string) =>
 	db
 		.selectFrom('edition_files')

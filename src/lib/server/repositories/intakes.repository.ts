@@ -89,3 +89,13 @@ export const unanswered = (db: Db, days: number) =>
 		.where('state', '=', 'asking')
 		.where('updated_at', '<', sql<Date>`now() - make_interval(days => ${days})`)
 		.execute();
+
+/** The sheet that came of an upload, and how large it is. */
+export const sheetOfIntake = (db: Db, id: string) =>
+	db
+		.selectFrom('intakes')
+		.innerJoin('sheets', 'sheets.id', 'intakes.sheet_id')
+		.innerJoin('boundary_sets', 'boundary_sets.id', 'sheets.boundary_set_id')
+		.select(['sheets.team_id', 'sheets.number', 'boundary_sets.region_count'])
+		.where('intakes.id', '=', id)
+		.executeTakeFirst();

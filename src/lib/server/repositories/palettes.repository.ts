@@ -1,3 +1,4 @@
+import { DatabaseError } from 'pg';
 import type { Db } from '../database/connection.ts';
 import type { PaletteInk } from '../database/palette-tables.ts';
 import type { Row } from '../database/schema.ts';
@@ -61,21 +62,33 @@ export const insertPalette = (
 		.returning('id')
 		.executeTakeFirst();
 
-export const updatePalette = (
+/** Changes a palette; false, and the transaction is lost, when the team has another of this name. */
+export async function updatePalette(
 	trx: Db,
 	id: string,
-	{ name, inks }: { name: string; inks: readonly PaletteInk[] },
-) =>
-	trx
-		.updateTable('palettes')
-		.set(({ eb }) => ({
-			name,
-			inks: JSON.stringify(inks),
-			revision: eb('revision', '+', 1),
-			updated_at: new Date(),
-		}))
-		.where('id', '=', id)
-		.execute();
+	{ name, inks, source }: { name: string; inks: readonly PaletteInk[]; source: string | null },
+): Promise<boolean> {
+	try {
+		await trx
+			.updateTable('palettes')
+			.set(({ eb }) => ({
+				...{ name, source },
+				inks: JSON.stringify(inks),
+				revision: eb('revision', '+', 1),
+				updated_at: new Date(),
+			}))
+			.where('id', '=', id)
+			.execute();
+		return true;
+	} catch (problem) {
+		// two may take a name at once, so that only the table itself can tell
+		if (problem instanceof DatabaseError && problem.code === uniqueViolation) return false;
+		throw problem;
+	}
+}
+
+/** SQLSTATE, PostgreSQL manual, appendix A */
+const uniqueViolation = '23505';
 
 export async function deletePalette(trx: Db, teamId: string, id: string): Promise<boolean> {
 	const { numDeletedRows } = await trx

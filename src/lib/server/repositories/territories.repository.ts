@@ -12,6 +12,19 @@ export const findTerritoryDraft = (db: Db, sheetId: string, revision: number) =>
 		.executeTakeFirst();
 export type TerritoryDraftRow = NonNullable<Awaited<ReturnType<typeof findTerritoryDraft>>>;
 
+/** The territories of a sheet as they are now; none before anybody saved some. */
+export const currentTerritoryDraft = (db: Db, sheetId: string) =>
+	db
+		.selectFrom('sheets')
+		.innerJoin('territory_drafts', (join) =>
+			join
+				.onRef('territory_drafts.sheet_id', '=', 'sheets.id')
+				.onRef('territory_drafts.revision', '=', 'sheets.territory_revision'),
+		)
+		.select('territory_drafts.document')
+		.where('sheets.id', '=', sheetId)
+		.executeTakeFirst();
+
 /** Inks of the last revision that had any, by territory key. */
 export async function latestTerritoryInks(
 	db: Db,

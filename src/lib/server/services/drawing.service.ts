@@ -88,7 +88,8 @@ export async function paintInput(
 	};
 }
 
-const draftInWords = (last: number, revision: number, savedAt: Date): string =>
+/** Which draft a sheet shows. In: the number of its last edition, 0 for none. */
+export const draftInWords = (last: number, revision: number, savedAt: Date): string =>
 	last > 0
 		? `Draft after edition ${last}, ${dayInWords(savedAt)}`
 		: `Draft ${revision}, ${dayInWords(savedAt)}`;

@@ -1,6 +1,5 @@
 import { Readable } from 'node:stream';
 import type { Proof } from '../../engines/colouring/index.ts';
-import { freezeTheme } from '../../engines/editions/index.ts';
 import type { DeskEdition } from '../../schemas/desk.ts';
 import type { AskExport } from '../../schemas/export.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
@@ -22,11 +21,11 @@ import { dayInWords } from './day-in-words.ts';
 import { documentOf, draftOf, sheetOf } from './draft.service.ts';
 import { fileStem, paintInput } from './drawing.service.ts';
 import { askIn } from './ask-export.ts';
+import { frozenParts, type FrozenParts } from './frozen-parts.ts';
 import { CheckFailed } from './outcome-of-colouring.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { editionsOf } from './sheet.service.ts';
 import { dropUnused } from './stored-files.ts';
-import { themeToIssue, type ThemeOnSheet } from './theme-on-sheet.ts';
 
 /**
  * Issues the draft of this revision as the sheet's next edition: content, digest and files together, all
@@ -79,14 +78,14 @@ async function issue(
 	const draft = await draftOf(trx, sheet.id, sheet.revision);
 	const view = await boundaryView(trx, sheet.boundary_set_id);
 	const inks = await checkedInks(shop, view, draft);
-	const theme = await themeToIssue(trx, sheet.id, view, documentOf(draft).theme);
-	const { digest, stored } = await seal(shop, trx, view, draft, inks, theme);
+	const document = documentOf(draft);
+	const { content, shown, further } = await frozenParts(trx, sheet.id, view, document.theme);
+	const { digest, stored } = await seal(shop, trx, view, draft, inks, content);
 	const number = await nextEditionNumber(trx, sheet.id);
 	const issuedAt = new Date();
 	const words = `Edition ${number}, ${dayInWords(issuedAt)}`;
-	const shown = theme?.shown ?? null;
-	const input = await paintInput(trx, view, documentOf(draft), inks, 'typical', words, shown);
-	const files = await shop.pool.run('renderFiles', input);
+	const input = await paintInput(trx, view, document, inks, 'typical', words, shown);
+	const files = await shop.pool.run('renderFiles', { ...input, further });
 	const stem = `${fileStem(sheet.name)}-edition-${number}`;
 	const kept = await keepFiles(shop, trx, files, stem, received);
 	await insertEdition(
@@ -144,7 +143,7 @@ async function seal(
 	view: BoundaryView,
 	draft: DraftRow,
 	colouring: number[],
-	theme: ThemeOnSheet | null,
+	frozen: FrozenParts['content'],
 ): Promise<{ digest: string; stored: string }> {
 	const sealed = await shop.pool.run('sealEdition', {
 		boundariesDigest: await boundariesDigest(trx, view.set.id),
@@ -153,7 +152,7 @@ async function seal(
 		colouring,
 		lowerBound: draft.lower_bound ?? 0,
 		proof: proofByKey(view, draft.proof as unknown as Proof),
-		theme: theme && freezeTheme(view.keys, theme.shown, theme.figuresAt),
+		...frozen,
 	});
 	if (sealed.status === 'complete') return sealed;
 	throw new Conflict(

@@ -1,4 +1,5 @@
 import { thawTheme, type EditionContent } from '../../engines/editions/index.ts';
+import type { FurtherValues } from '../../engines/exports/index.ts';
 import type { SheetTheme } from '../../engines/sheet/index.ts';
 import { wholeDraft, type Draft } from '../../engines/editions/draft.ts';
 import type { Db } from '../database/connection.ts';
@@ -7,7 +8,9 @@ import type { DraftRow, SheetRecord } from '../repositories/sheets.repository.ts
 import { boundariesDigest } from './boundaries-digest.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { documentOf, draftOf } from './draft.service.ts';
+import { issuedFurther, presentFurther } from './further-values.ts';
 import { Conflict, NotFound } from './outcomes.ts';
+import { territoriesOnSheet } from './territories-on-sheet.ts';
 import { themeOnSheet } from './theme-on-sheet.ts';
 
 /** What an export is made from, found again at any time: an edition's own content, or one revision. */
@@ -18,6 +21,8 @@ export interface ExportGround {
 	inks: number[] | null;
 	/** the classes shown in place of the colouring: those issued, or of a draft those of today's figures */
 	theme: SheetTheme | null;
+	/** territories and figures for the tables, issued or of today like the classes */
+	further: FurtherValues;
 	/** when it was issued, or the draft was saved */
 	at: Date;
 	/** the last edition issued of this draft or an earlier one, 0 for none */
@@ -43,9 +48,12 @@ async function draftGround(db: Db, sheetId: string, revision: number): Promise<E
 	const editions = await listEditions(db, sheetId);
 	const view = await boundaryView(db, row.boundary_set_id);
 	const draft = documentOf(row);
+	const theme = await themeOnSheet(db, sheetId, view, draft.theme);
+	const territories = await territoriesOnSheet(db, sheetId, view);
 	return {
 		view,
-		theme: (await themeOnSheet(db, sheetId, view, draft.theme))?.shown ?? null,
+		theme: theme?.shown ?? null,
+		further: presentFurther(view.keys, theme, territories),
 		...{ draft, inks: row.inks, at: row.saved_at, digest: null, boundaries: null },
 		lastEdition: editions.find((one) => one.revision <= revision)?.number ?? 0,
 	};
@@ -65,6 +73,7 @@ async function editionGround(db: Db, sheetId: string, edition: number): Promise<
 		...{ view, draft: wholeDraft(content.draft), at: row.issued_at, digest: row.digest },
 		inks: view.keys.map((key) => content.colouring[key]),
 		theme: content.theme ? thawTheme(view.keys, content.theme) : null,
+		further: issuedFurther(view.keys, content),
 		...{ lastEdition: edition, boundaries: content.boundaries.digest },
 	};
 }

@@ -44,13 +44,15 @@ export function aboutExport(
 export function requestDigest(
 	asked: ExportRequest,
 	about: ExportAbout,
-	{ view, theme }: Pick<ExportGround, 'view' | 'theme'>,
+	{ view, theme, further }: Pick<ExportGround, 'view' | 'theme' | 'further'>,
 ): string {
 	const { edition, revision, kind, options, reader } = asked;
 	const boundarySetId = view.set.id;
 	const said = {
 		...{ edition, revision, kind, options, reader, about, boundarySetId },
 		...(theme && { theme: themeTag(theme) }),
+		...(further.territories && { territories: further.territories }),
+		...(further.figures && { figures: further.figures }),
 	};
 	return createHash('sha256').update(canonicalJson(said)).digest('hex');
 }

@@ -93,34 +93,47 @@ async function add(trx: Db, member: Member, palette: Inks & Partial<Palette>): P
 
 /**
  * Gives a palette other inks or another name. What changes ends its approval. Sheets that use it keep
- * their copy. `revision`: what the change was made from; null overwrites whatever there is.
+ * their copy. `revision`: what the change was made from; a later one is told, and nothing is overwritten.
  */
 export async function changePalette(
 	shop: Reading,
 	member: Member,
 	id: string,
-	{ revision, ...palette }: Inks & { revision: number | null },
+	{ revision, ...palette }: Inks & { revision: number },
 ): Promise<void> {
 	requireAccess(member, 'palette.edit');
 	await shop.db.transaction().execute(async (trx) => {
 		const row = await holdPalette(trx, member.team.id, id);
 		if (!row) throw new NotFound('palette');
-		if (revision !== null && row.revision !== revision)
+		if (row.revision !== revision)
 			throw new Conflict(
 				'stale',
 				'Somebody else changed this palette meanwhile. Load the page again to see it; nothing was overwritten.',
 			);
 		if (row.name === palette.name && sameInks(row.inks, palette.inks)) return;
-		const taken = await paletteNames(trx, member.team.id);
-		if (row.name !== palette.name && taken.has(palette.name))
+		const source = sourceAfter(row, palette.inks);
+		if (!(await updatePalette(trx, id, { ...palette, source })))
 			throw new Refused('The team has a palette of this name already.', 'name');
-		await updatePalette(trx, id, palette);
 		const ended = await endApproval(trx, id);
 		const renamed = row.name === palette.name ? {} : { before: row.name };
 		const detail = { name: palette.name, ...renamed, 'approval ended': ended ? 'yes' : 'no' };
 		await record(trx, member, 'palette.changed', { kind: 'palette', id }, detail);
 	});
 }
+
+const changedFrom = 'changed from ';
+
+/** Values that were published are said to be so only while they are the published ones. */
+function sourceAfter(
+	{ source, inks: before }: { source: string | null; inks: Ink[] },
+	inks: Ink[],
+) {
+	const values = (list: readonly Ink[]) => list.map(({ hex }) => hex).join();
+	if (!source || source.startsWith(changedFrom) || values(before) === values(inks)) return source;
+	return `${changedFrom}${source}`.slice(0, mostSource);
+}
+/** characters that the table takes */
+const mostSource = 1_000;
 
 /** Sheets that use it keep their copy. */
 export async function removePalette(shop: Reading, member: Member, id: string): Promise<void> {

@@ -1,17 +1,16 @@
 import { promisify } from 'node:util';
 import { gzip } from 'node:zlib';
+import { mostWhole, sheetApart } from '../../schemas/sheet-apart.ts';
 import { encodeColumns } from '../../schemas/sheet-columns.ts';
 import type { DeskSheet, DeskSheetApart } from '../../schemas/desk.ts';
 import { requireAccess, type Member } from '../access/member.ts';
 import type { Workshop } from '../jobs/workshop.ts';
 import { boundaryView, type BoundaryView } from './boundary-view.ts';
 import { sheetOf } from './draft.service.ts';
+import { firstPictureTag } from './first-picture-tag.ts';
 import { deskSheet } from './sheet.service.ts';
 
 type Reading = Pick<Workshop, 'db'>;
-
-/** Sheets of more regions than this come to the page in two parts. */
-const mostWhole = 4_000;
 
 /** A sheet as its page is given it: of a large one the regions and borders are fetched apart, once. */
 export async function sheetForPage(
@@ -21,14 +20,7 @@ export async function sheetForPage(
 ): Promise<DeskSheet | DeskSheetApart> {
 	const sheet = await deskSheet(shop, member, number);
 	if (sheet.regions.key.length <= mostWhole) return sheet;
-	const { group } = sheet.regions;
-	return {
-		...sheet,
-		borders: null,
-		regions: null,
-		borderCount: sheet.borders.a.length,
-		group: group.some((name) => name !== null) ? group : null,
-	};
+	return sheetApart(sheet, firstPictureTag(sheet));
 }
 
 /** Packed once and kept as long as the view it was made of. */

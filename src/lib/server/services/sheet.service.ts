@@ -5,7 +5,7 @@ import type {
 	SheetRow,
 	SourceNote,
 } from '../../schemas/desk.ts';
-import type { BoundaryOptions } from '../../engines/boundaries/index.ts';
+import type { BoundaryOptions, Found } from '../../engines/boundaries/index.ts';
 import { actions, type Action } from '../access/roles.ts';
 import { mayDo, requireAccess, type Member } from '../access/member.ts';
 import type { Db } from '../database/connection.ts';
@@ -112,7 +112,8 @@ const boundarySetNote = ({ set }: BoundaryView): Omit<DeskSheet['boundarySet'], 
 	planarWitness: set.planar_witness as DeskSheet['boundarySet']['planarWitness'],
 	source: set.source as unknown as SourceNote,
 	columns: set.columns,
-	found: set.found as unknown as DeskSheet['boundarySet']['found'],
+	// how the file lies was shown when it was asked about
+	found: set.found && { ...(set.found as unknown as Found), sketch: null },
 	...recipeOf(set),
 	gapsKm: set.gaps_km,
 });

@@ -16,7 +16,7 @@ import { Conflict, Unfit } from './outcomes.ts';
 
 /**
  * What a theme comes to on a sheet: classes and ranges, which everybody who sees the sheet may see. Figures
- * are read here and go no further.
+ * are read here and go no further, unless the theme says that files carry them.
  */
 export interface ThemeOnSheet {
 	shown: SheetTheme;
@@ -26,6 +26,8 @@ export interface ThemeOnSheet {
 	holds: boolean;
 	/** ISO 8601 */
 	figuresAt: string | null;
+	/** for files, suppressed ones left out; null unless the theme and the tables let files carry them */
+	figures: (number | null)[] | null;
 }
 
 export async function themeOnSheet(
@@ -57,8 +59,12 @@ export async function themeOnSheet(
 	return {
 		shown: sheetTheme(theme, classes, source),
 		...{ trouble, holds, figuresAt: takenAt?.toISOString() ?? null },
+		figures: theme.figuresInFiles && !isConfidential(rows) ? classes.figures : null,
 	};
 }
+
+const isConfidential = (rows: readonly Pick<NamedMeasure, 'confidential'>[]): boolean =>
+	rows.some(({ confidential }) => confidential);
 
 /** A measure that is gone, or in the order of earlier boundaries, tells nothing of these regions. */
 function troubleOf(
@@ -94,6 +100,7 @@ export async function themeToIssue(
 	theme: Theme | null,
 ): Promise<ThemeOnSheet | null> {
 	const on = await themeOnSheet(db, sheetId, view, theme);
+	if (on && !on.trouble && theme?.figuresInFiles && !on.figures) throw confidentialFigures();
 	if (!on?.trouble) return on;
 	const why =
 		on.trouble === 'gone'
@@ -105,12 +112,20 @@ export async function themeToIssue(
 	);
 }
 
-/** Refuses a theme of measures that the sheet has not. */
+const confidentialFigures = () =>
+	new Conflict(
+		'confidential-figures',
+		'The theme writes its figures into files, and they are marked as confidential. Leave them out of files, or join them again without that mark.',
+	);
+
+/** Refuses a theme of measures that the sheet has not, or that would write confidential ones into files. */
 export async function requireThemeMeasures(db: Db, sheetId: string, theme: Theme): Promise<void> {
 	const { measure, per } = theme;
 	const names = per.kind === 'measure' ? [measure, per.measure] : [measure];
 	const rows = await readMeasuresNamed(db, sheetId, names);
 	const unknown = names.find((name) => !rows.some((row) => row.name === name));
-	if (unknown === undefined) return;
-	throw new Unfit('unknown-measure', `The sheet has no measure ${JSON.stringify(unknown)}.`);
+	if (unknown !== undefined) {
+		throw new Unfit('unknown-measure', `The sheet has no measure ${JSON.stringify(unknown)}.`);
+	}
+	if (theme.figuresInFiles && isConfidential(rows)) throw confidentialFigures();
 }

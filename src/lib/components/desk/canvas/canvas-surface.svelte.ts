@@ -9,6 +9,7 @@ import {
 } from '$lib/engines/sheet';
 import type { Drawing, RegionFill } from '$lib/engines/sheet/drawing';
 import type { FinerGround } from '$lib/state/desk-drawing';
+import { layFirst, type ShownFirst } from '$lib/state/first-picture';
 import type { DrawnSheet } from '$lib/state/drawn-sheet';
 import { arcsPath } from '$lib/state/sheet-places';
 import { letteringOf, parseSvg, setLettering } from '../lettering';
@@ -30,6 +31,10 @@ export interface CanvasHost {
 	/** asks for finer lines for what is in sight, at so many pixels a unit */
 	refine: (area: Area, pixelsPerUnit: number) => void;
 	onfailure: (message: string) => void;
+	/** shown under the tiles until all in sight are there for the first time */
+	first: ShownFirst | null;
+	/** they are there */
+	onfirst: () => void;
 }
 
 /**
@@ -53,6 +58,7 @@ export class CanvasSurface implements Surface {
 	#frame = 0;
 	/** what the tiles show beside fills: a reader's eyesight changes coloured lines */
 	#laid: Drawing;
+	#first: ShownFirst | null;
 
 	constructor(host: CanvasHost, drawn: DrawnSheet & { ground: Ground }) {
 		const { drawing } = drawn;
@@ -60,6 +66,7 @@ export class CanvasSurface implements Surface {
 		this.#drawn = drawn;
 		this.#ground = drawn.ground;
 		this.#laid = drawing;
+		this.#first = host.first;
 		this.#paper = { width: drawing.widthMm * 100, height: drawing.heightMm * 100 };
 		this.viewBox = `0 0 ${Math.round(this.#paper.width)} ${Math.round(this.#paper.height)}`;
 		this.#look = new Look(drawing);
@@ -192,6 +199,8 @@ export class CanvasSurface implements Surface {
 		this.canvas.setAttribute('aria-busy', String(!settled));
 		if (!settled) return;
 		this.#look.settled();
+		this.#first = null;
+		this.#host.onfirst();
 		const sight = this.#sight;
 		if (sight) this.#host.refine(areaInSight(sight), sight.scale);
 	}
@@ -210,6 +219,7 @@ export class CanvasSurface implements Surface {
 		pen.fillStyle = '#ffffff';
 		const { width, height } = this.#paper;
 		pen.fillRect(sight.x, sight.y, width * sight.scale, height * sight.scale);
+		if (this.#first) layFirst(pen, this.#first, sight);
 		this.#board.layOut(pen);
 		this.#touchUp(pen, sight);
 	}

@@ -8,6 +8,7 @@ export const shapeWords: Record<ShapeLayer, string> = {
 	graticule: 'Graticule',
 	water: 'Water',
 	inset: 'Inset frames',
+	'legend-ground': 'Ground of the legend',
 	'neat-line': 'Neat line',
 	ground: 'Grounds of texts',
 	north: 'North arrow',

@@ -183,6 +183,34 @@ describe('SLD 1.1', () => {
 		expect(Number(width.text)).toBeCloseTo(line.width / 100 / 0.28, 3);
 	});
 
+	it('has a rule a class of a themed sheet, titled with its range, and those that are not told', () => {
+		const inkNames = ['up to 10', '10 to 20', 'over 20', 'no data', 'suppressed'];
+		const coverage = statesCoverage();
+		const theme = {
+			...{ told: 3, title: 'Visits', note: '' },
+			inks: inkNames.map((name, i) => ({ name, hex: hatchedInks[i % 4].hex })),
+			// nobody is in the middle class, which is a class all the same
+			classes: Int32Array.from(coverage.keys, (_, i) => [0, 2, 3, 4][i % 4]),
+		};
+		const themed = styleOf(sourceOf(coverage, { theme }));
+		expect(faults(themed)).toEqual([]);
+		const rules = all(all(themed, 'se:FeatureTypeStyle')[0], 'se:Rule').map((rule) => [
+			all(rule, 'se:Name')[0].text,
+			all(rule, 'se:Title')[0].text,
+			all(rule, 'ogc:Literal')[0]?.text ?? null,
+			all(rule, 'se:SvgParameter')[0].text,
+		]);
+		const hex = (i: number) => theme.inks[i].hex;
+		expect(rules).toEqual([
+			['class-1', 'Class 1: up to 10', '1', hex(0)],
+			['class-2', 'Class 2: 10 to 20', '2', hex(1)],
+			['class-3', 'Class 3: over 20', '3', hex(2)],
+			['no-data', 'no data', '4', hex(3)],
+			['suppressed', 'suppressed', '5', hex(4)],
+			['no-ink', 'No ink', null, '#f2f2f2'],
+		]);
+	});
+
 	it('stands where nothing is coloured, and is the same bytes every time', () => {
 		const bare = sourceOf(statesCoverage(), { colouring: null });
 		expect(faults(styleOf(bare))).toEqual([]);

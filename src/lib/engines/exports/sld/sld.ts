@@ -3,7 +3,8 @@
  * 05-078r4), Symbology Encoding 1.1.0 (OGC 05-077r4), Filter Encoding 1.1.0 (OGC 04-095).
  */
 import { labelInk } from '../../colour/index.ts';
-import type { Drawing, DrawnInk } from '../../sheet/index.ts';
+import type { Drawing, DrawnInk, SheetThemed } from '../../sheet/index.ts';
+import { legendInks } from '../../sheet/themed.ts';
 import { cleanText } from '../../sheet/type/clean-text.ts';
 import { faceStyles } from '../../sheet/type/face.ts';
 import type { ExportAbout } from '../source.ts';
@@ -22,20 +23,20 @@ const namespaces = {
 
 /**
  * One layer, `regions`, for the columns of the GeoJSON and TopoJSON files: a rule an ink that is in use,
- * by `inkNumber`, with fill and hatch, and one for all else; then the borders, as those between regions
+ * by `inkNumber`, with fill and hatch, and one for all else. Of a themed sheet a rule a class, empty ones
+ * too, titled with its range, and those of regions that are not told; then the borders, as those between regions
  * are drawn on the sheet; then the names, by `name`, in the ink that reads on each fill. Lengths are in
  * pixels of 0.28 mm, the standard's own. A hatch is a graphic fill that carries its tile as SVG, because
  * the standard has no lines among its marks. Byte for byte repeatable.
  */
 export function exportSld(drawing: Drawing, about: ExportAbout): Uint8Array {
-	const used = drawing.inks
-		.map((ink, number) => ({ ink, number }))
-		.filter(({ number }) => drawing.fills.some(({ ink }) => ink === number));
+	const { themed, inks } = drawing;
+	const used = legendInks(drawing.fills, themed).map((number) => ({ ink: inks[number], number }));
 	const style = el('sld:UserStyle', {}, [
-		el('se:Name', {}, [text('inks')]),
+		el('se:Name', {}, [themed ? 'classes' : 'inks']),
 		description(about.title, `${about.issue}. ${drawing.notes.projection}`),
 		el('sld:IsDefault', {}, ['1']),
-		styleOf('fills', [...used.map(fillRule), elseRule]),
+		styleOf('fills', [...used.map((one) => fillRule(one, themed)), elseRule]),
 		styleOf('borders', [borderRule(drawing)]),
 		styleOf(
 			'names',
@@ -69,15 +70,25 @@ const isInk = (number: number): string =>
 const titled = (title: string): string =>
 	el('se:Description', {}, [el('se:Title', {}, [text(cleanText(title))])]);
 
-function fillRule({ ink, number }: Numbered): string {
+function fillRule({ ink, number }: Numbered, themed: SheetThemed | undefined): string {
 	return el('se:Rule', {}, [
-		el('se:Name', {}, [`ink-${number + 1}`]),
-		titled(ink.name || `Ink ${number + 1}`),
+		...(themed ? classNames(ink, number, themed) : inkNames(ink, number)),
 		isInk(number),
 		solid(ink.hex),
 		...(ink.hatch ? hatchSymbolizers(ink.hatch) : []),
 	]);
 }
+
+const inkNames = ({ name }: DrawnInk, number: number): string[] => [
+	el('se:Name', {}, [`ink-${number + 1}`]),
+	titled(name || `Ink ${number + 1}`),
+];
+
+/** The ink of a class is named by its range; those after the classes tell why a region has none. */
+const classNames = ({ name }: DrawnInk, number: number, { told }: SheetThemed): string[] =>
+	number < told
+		? [el('se:Name', {}, [`class-${number + 1}`]), titled(`Class ${number + 1}: ${name}`)]
+		: [el('se:Name', {}, [name.replaceAll(' ', '-')]), titled(name)];
 
 const solid = (hex: string): string =>
 	el('se:PolygonSymbolizer', { version: '1.1.0' }, [

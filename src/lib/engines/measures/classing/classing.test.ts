@@ -142,6 +142,11 @@ describe('range words', () => {
 		const words = limitWords([1.00000001, 1.00000002]);
 		expect(new Set(words).size).toBe(2);
 	});
+	it('write what is vast or tiny with an exponent, not as a row of noughts', () => {
+		expect(limitWords([-2e20, 2.5e-12, 0, 1e14, 1e308])).toEqual([
+			...['-2E20', '2.5E-12', '0', '100,000,000,000,000', '1E308'],
+		]);
+	});
 });
 
 describe('goodness and histogram', () => {

@@ -1,6 +1,6 @@
 /**
  * Limits as figures for people: grouped by thousands, as short as they can be while each is told from the
- * next and, where it has at most seven digits, exact.
+ * next and, where it has at most seven digits, exact. From 10^15 on and below 10^-9 with an exponent: "1E20".
  */
 export function limitWords(limits: readonly number[]): string[] {
 	for (let digits = 5; digits <= 15; digits++) {
@@ -10,10 +10,15 @@ export function limitWords(limits: readonly number[]): string[] {
 	return limits.map(String);
 }
 
+/** Beyond these a figure written out is a row of noughts that nobody counts. */
+const [tiny, vast] = [1e-9, 1e15];
+
 function limitWord(limit: number, digits: number): string {
 	const exact = Number(limit.toPrecision(7)) === limit;
+	const size = Math.abs(limit);
 	return limit.toLocaleString('en-GB', {
 		maximumSignificantDigits: exact ? 7 : digits,
+		notation: size >= vast || (size > 0 && size < tiny) ? 'scientific' : 'standard',
 	});
 }
 

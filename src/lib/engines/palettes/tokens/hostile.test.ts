@@ -62,6 +62,21 @@ describe('a file that is not what it should be', () => {
 		expect(refusal(`{${groups.join()}}`)).toMatch(/50000|levels deep/);
 	});
 
+	it('says what is left out, type by type, and no more than can be read', () => {
+		const tokens = Object.fromEntries(
+			Array.from({ length: 30 }, (_, i) => [`t${i}`, { $type: `kind${i >> 1}`, $value: 1 }]),
+		);
+		const answer = readDesignTokens(
+			JSON.stringify({ ...tokens, red: JSON.parse(red), x: { $value: 1 } }),
+		);
+		const notes = answer.status === 'read' ? answer.notes : expect.fail('refused');
+		expect(notes[0]).toBe('2 tokens of type kind0 are no colours and are left out.');
+		expect(notes).toHaveLength(13);
+		expect(notes[12]).toBe('Tokens of 4 more types are left out.');
+		const untyped = readDesignTokens(`{"red":${red},"x":{"$value":1}}`);
+		expect(untyped).toMatchObject({ notes: ['1 token without a type is left out.'] });
+	});
+
 	it('names that programs know are names like others', () => {
 		const answer = readDesignTokens(
 			`{"constructor":{"toString":${red}},"b":{"$type":"color","$value":"{constructor.toString}"}}`,

@@ -18,6 +18,9 @@ export type TokensRead =
 			/** groups to choose from when there are too many colours */ groups?: string[];
 	  };
 
+/** Other types of tokens that are told one by one. */
+const mostTypesTold = 12;
+
 interface Found {
 	path: string[];
 	hex: string;
@@ -46,7 +49,7 @@ class Reading {
 	private readonly found: Found[] = [];
 	private readonly notes: string[] = [];
 	private readonly aliases: { path: string[]; from: string[]; hex: string }[] = [];
-	private readonly others = new Map<string, number>();
+	private readonly others = new Map<string | null, number>();
 	private walked = 0;
 
 	constructor(private readonly groups: Groups) {}
@@ -99,7 +102,7 @@ class Reading {
 		// 5.2.2: its own type, else that of the token it refers to, else that of the nearest group
 		const targetType = reached?.from ? (reached.type ?? this.inherited(reached.from)) : null;
 		const type = typeOf(token) ?? (alias ? targetType : null) ?? above;
-		if (type !== 'color') return this.other(type ?? 'no type');
+		if (type !== 'color') return this.other(type);
 		if (!reached) return void this.notes.push(`${name} is left out: its alias leads nowhere.`);
 		const read = readColour(this.groups, reached.value);
 		if ('unfit' in read) return void this.notes.push(`${name} is left out: ${read.unfit}.`);
@@ -110,7 +113,7 @@ class Reading {
 		if (token.get('$deprecated')) this.notes.push(`${name} is marked as deprecated; it was read.`);
 	}
 
-	private other(type: string) {
+	private other(type: string | null) {
 		this.others.set(type, (this.others.get(type) ?? 0) + 1);
 	}
 
@@ -131,11 +134,18 @@ class Reading {
 			);
 	}
 
+	/** "1 token of type dimension is no colour and is left out.", a sentence a type. */
 	private leftOut(): string[] {
-		const kinds = [...this.others].map(([type, count]) => `${count} of ${type.slice(0, 40)}`);
-		return kinds.length
-			? [`Left out, being no colours: tokens, ${kinds.slice(0, 12).join(', ')}.`]
-			: [];
+		const others = [...this.others].map(([type, count]) => {
+			const [tokens, are] = count === 1 ? ['token', 'is'] : ['tokens', 'are'];
+			return type === null
+				? `${count} ${tokens} without a type ${are} left out.`
+				: `${count} ${tokens} of type ${type.slice(0, 40)} ${are} no ${count === 1 ? 'colour' : 'colours'} and ${are} left out.`;
+		});
+		const more = others.length - mostTypesTold;
+		return more > 0
+			? [...others.slice(0, mostTypesTold), `Tokens of ${more} more types are left out.`]
+			: others;
 	}
 
 	private nothing(): string {

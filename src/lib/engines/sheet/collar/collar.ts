@@ -3,6 +3,7 @@
  * Out: texts and rects inside the margins, and places for the legend and the scale bar. Where the
  * paper is too small, all type shrinks together until the map has at least two fifths of its height.
  */
+import type { Reader } from '../../palettes/palette.ts';
 import type { DrawnInk, DrawnText, LegendPlace } from '../drawing.ts';
 import type { SheetLayout } from '../layout.ts';
 import { hundredths, paperScale, paperSize } from '../paper.ts';
@@ -33,7 +34,8 @@ export interface CollarInput {
 	layout: SheetLayout;
 	inks: DrawnInk[];
 	coloured: boolean;
-	weak: boolean;
+	/** who could miss some of the borders drawn double; none where none is */
+	weak: ReadonlySet<Reader>;
 	/** how many there are */
 	regions: number;
 	projection: string;

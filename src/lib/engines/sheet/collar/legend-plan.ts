@@ -1,3 +1,5 @@
+import type { Reader } from '../../palettes/palette.ts';
+import { toWhom } from '../../palettes/sentence.ts';
 import type { DrawnInk, LegendPlace } from '../drawing.ts';
 import type { SheetLayout } from '../layout.ts';
 import { cleanText } from '../type/clean-text.ts';
@@ -20,12 +22,14 @@ const mostLines = 3;
 /** Where names in one line ask for more rows than this, longer ones are wrapped. */
 const rowsBeforeWrapping = 3;
 
-const weakWords = 'Double line: two inks that some readers could not tell apart';
+const weakWords = (readers: ReadonlySet<Reader>) =>
+	`Double line: two inks that look rather alike ${toWhom(readers)}`;
 
 export interface LegendInput {
 	layout: SheetLayout;
 	inks: DrawnInk[];
-	weak: boolean;
+	/** who could miss some of the borders drawn double */
+	weak: ReadonlySet<Reader>;
 	/** how many there are on the sheet */
 	regions: number;
 }
@@ -38,6 +42,13 @@ export const nameOf = (ink: DrawnInk, number: number): string =>
 /** How many regions have an ink, after its name. */
 export const countWords = (count: number): string =>
 	`${count.toLocaleString('en-GB')} ${count === 1 ? 'region' : 'regions'}`;
+
+/** The widest text of as many digits: a figure with fewer narrow ones may not ask for more room. */
+function widestOf(text: string, size: number): string {
+	const wide = (digit: string) => textWidth('sans', size, digit);
+	const widest = [...'0123456789'].reduce((most, one) => (wide(one) > wide(most) ? one : most));
+	return text.replace(/\d/g, widest);
+}
 
 /** Height of a row whose names take so many lines. */
 export const rowHeight = (size: number, lines: number): number =>
@@ -62,13 +73,15 @@ export function planLegend(input: LegendInput, size: number, width: number): Leg
 	const heading = cleanText(legendTitle);
 	const title = heading ? wrapText('sans-bold', titleSize(size), heading, width) : [];
 	const ranks = rankWords(layout);
-	const counted = legendCounts ? `, ${countWords(regions)}` : '';
+	const counted = legendCounts ? `, ${widestOf(countWords(regions), size)}` : '';
 	const words = [
 		...inks.map((ink, number) => nameOf(ink, number) + counted),
 		...ranks.map((rank) => rank.words),
 	];
 	const grid = gridOf(words, inks.length, size, width, legendColumns);
-	const weak = input.weak ? wrapText('sans', size, weakWords, width - size * (boxWide + gap)) : [];
+	const weak = input.weak.size
+		? wrapText('sans', size, weakWords(input.weak), width - size * (boxWide + gap))
+		: [];
 	const plan = {
 		...{ width, height: 0, size, title, ranks, weak, ...grid },
 		...{ order: legendOrder, counts: legendCounts },

@@ -103,6 +103,17 @@ describe('a legend of twelve inks', () => {
 		expect(counts.filter(Boolean)).toEqual(expected.filter(Boolean).sort((a, b) => b - a));
 	});
 
+	it('says every count whole, whichever digits it has', () => {
+		// figures of the face differ in width: 30 and 39 are wider than 49, all regions there are
+		const four = inks.slice(0, 4);
+		for (let first = 1; first < 47; first++) {
+			const colouring = all.map((_, region) => (region < first ? 2 : [0, 1, 3][region % 3]));
+			const input = sheet({}, { legendCounts: true });
+			const told = words(drawSheet({ ...input, inks: four, colouring }), 'legend');
+			expect(told.filter((one) => one.includes('…'))).toEqual([]);
+		}
+	});
+
 	it('says what the lines stand for only where they are drawn', () => {
 		const lineNames = { outer: 'Coast and frontier', group: '', region: '' };
 		const input = sheet({ groupColumn: 'province' }, { legendLines: true, lineNames });

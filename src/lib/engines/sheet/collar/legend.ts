@@ -5,6 +5,7 @@ import { familiesOf } from '../hatch/hatch-look.ts';
 import { segmentShape } from '../hatch/hatch-shapes.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { boxHigh, boxWide, countWords, gap, nameOf, titleSize } from './legend-plan.ts';
+import { onGround } from './legend-ground.ts';
 import { gridOf, type Cell } from './legend-grid.ts';
 import { noLegend, word, wordsBeside, type DrawnLegend } from './legend-parts.ts';
 import { knownRanks, rankSamples, weakSample } from './legend-lines.ts';
@@ -16,7 +17,7 @@ type Shown = Pick<Drawing, 'inks' | 'fills' | 'lines' | 'themed'>;
  * told) and its hatch, and its name beside it; then what
  * lines stand for. In: `inUse` in ascending order; those beyond the palette have no colour yet and no box;
  * `see` gives a colour as the reader sees it. Out: rects, texts and shapes of layer `legend`, within the
- * place; a name too long for its lines is shortened.
+ * place; a name too long for its lines is shortened. On the map it stands on a white ground.
  */
 export function drawLegend(
 	place: LegendPlace | null,
@@ -46,12 +47,13 @@ export function drawLegend(
 		const numbered = ink < (shown.themed?.told ?? Infinity);
 		return entry(place, grid.inkCells[i], shown.inks[ink], { ink, numbered }, words[i], see);
 	});
-	return joined([
+	const all = joined([
 		{ ...noLegend, texts: titleOf(place) },
 		...drawn,
 		...rankSamples(place, ranks, grid.rankCells),
 		weakSample(place, grid.end),
 	]);
+	return onGround(all, place);
 }
 
 const joined = (parts: DrawnLegend[]): DrawnLegend => ({

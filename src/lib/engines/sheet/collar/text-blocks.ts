@@ -103,7 +103,7 @@ function above(box: Box, caution: Box): Box {
 }
 
 /** A white rectangle that hides what lies under a text. */
-export function whiteGround({ x, y, width, height }: Box): DrawnShape {
+function whiteGround({ x, y, width, height }: Box): DrawnShape {
 	return {
 		layer: 'ground',
 		points: Int32Array.of(x, y, x + width, y, x + width, y + height, x, y + height),

@@ -54,7 +54,8 @@ export function drawFrame(input: FrameInput): DrawnFrame {
 	const { frame } = layout;
 	const gaps = frame.lakes ? enclosedGaps(coverage, placed.arcs, placed.sides) : [];
 	const seaInk = labelInk(frame.sea ?? '#ffffff');
-	const graticule = drawGraticule(placed, frame, scale, labels);
+	const taken = [...input.obstacles, ...placed.insets.map(({ outer }) => outer)];
+	const graticule = drawGraticule(placed, frame, scale, labels, taken);
 	const insets = drawInsets(placed, scale, layout.scaleBar, seaInk);
 	const arrow = frame.northArrow ? arrowOf(input, graticule.texts) : noArrow;
 	return {

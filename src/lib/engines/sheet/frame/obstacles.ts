@@ -1,5 +1,4 @@
 /** Where no name may stand because of the map's frame. */
-import { insetDress } from '../insets/inset-size.ts';
 import type { OnPaper } from '../place-on-paper.ts';
 import type { Box } from '../plane/fit.ts';
 
@@ -9,14 +8,13 @@ const band = 30;
 const rows = 60;
 
 /** Boxes along the frames of insets, over and under what stands in them, and beside the globe. */
-export function frameObstacles(placed: OnPaper, scale: number, bar: boolean): Box[] {
-	const { head, foot } = insetDress(scale, bar);
+export function frameObstacles(placed: OnPaper, scale: number): Box[] {
 	const half = Math.round(band * scale);
 	const insets = placed.insets.filter(({ ratio }) => ratio > 0);
 	return [
-		...insets.flatMap(({ outer: { x, y, width, height } }): Box[] => [
-			{ x, y, width, height: head },
-			{ x, y: y + height - foot, width, height: foot },
+		...insets.flatMap(({ outer: { x, y, width, height }, inner }): Box[] => [
+			{ x, y, width, height: inner.y - y },
+			{ x, y: inner.y + inner.height, width, height: y + height - inner.y - inner.height },
 			{ x: x - half, y, width: 2 * half, height },
 			{ x: x + width - half, y, width: 2 * half, height },
 			{ x, y: y - half, width, height: 2 * half },

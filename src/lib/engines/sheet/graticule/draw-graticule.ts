@@ -1,6 +1,7 @@
 import type { DrawnText } from '../drawing.ts';
 import type { FrameLayout } from '../layout/frame.ts';
 import type { OnPaper } from '../place-on-paper.ts';
+import type { Box } from '../plane/fit.ts';
 import type { DrawnShape } from '../shapes.ts';
 import { graticuleFigures } from './figures.ts';
 import { graticuleLines, mostLines } from './lines.ts';
@@ -17,12 +18,13 @@ export interface DrawnGraticule {
 	told: string[];
 }
 
-/** The graticule that the layout asks for. In: `labels`, the names on the map. */
+/** The graticule that the layout asks for. In: `labels`, the names on the map; `taken`, what else stands on it. */
 export function drawGraticule(
 	placed: OnPaper,
 	{ graticule }: Pick<FrameLayout, 'graticule'>,
 	scale: number,
 	labels: DrawnText[],
+	taken: readonly Box[],
 ): DrawnGraticule {
 	if (!graticule) return { shapes: [], texts: [], steps: null, told: [] };
 	const steps = graticuleSteps(graticule.step, placed.extent);
@@ -33,7 +35,7 @@ export function drawGraticule(
 				`No graticule is drawn: at ${steps.lat}° no line crosses the map, or more than ${mostLines} would.`,
 			];
 	const lines = drawn.lines.flatMap(({ pieces }) => pieces);
-	const ground = { box: placed.box, globe: placed.globe !== null, scale, labels };
+	const ground = { box: placed.box, globe: placed.globe !== null, scale, labels, taken };
 	return {
 		shapes: lines.length
 			? [

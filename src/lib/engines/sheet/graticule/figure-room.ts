@@ -1,11 +1,12 @@
 import type { Box } from '../plane/fit.ts';
 import { textWidth } from '../type/text-width.ts';
+import { minuteMark } from './step.ts';
 
 /** Figures at the edge on A4: 6.5 point. */
 export const figureSize = (scale: number): number => Math.round(229 * scale);
 
 /** Widest figure that is reckoned with. */
-const widest = { whole: '180° W', minutes: '180° 00′ W' };
+const widest = { whole: '180° W', minutes: `180° 00${minuteMark} W` };
 
 /** The box of the map within the strips that its figures stand in. */
 export function figureRoom(box: Box, scale: number, minutes: boolean): Box {

@@ -19,6 +19,8 @@ export interface FigureGround {
 	scale: number;
 	/** names on the map, which figures along a meridian keep clear of */
 	labels: DrawnText[];
+	/** what stands on the map, which they keep clear of as well: insets, a legend, texts */
+	taken: readonly Box[];
 }
 
 const wordsOf = ({ kind, value }: GraticuleLine): string =>
@@ -55,6 +57,11 @@ export function overlaps(a: DrawnText, b: DrawnText): boolean {
 	return l < r2 && l2 < r && t < u2 && t2 < u;
 }
 
+function isOver(figure: DrawnText, { x, y, width, height }: Box): boolean {
+	const [left, top, right, bottom] = boxOf(figure);
+	return left < x + width && x < right && top < y + height && y < bottom;
+}
+
 export function graticuleFigures({ lines, seen }: Graticule, ground: FigureGround): DrawnText[] {
 	const size = figureSize(ground.scale);
 	const figures: DrawnText[] = [];
@@ -73,6 +80,7 @@ export function graticuleFigures({ lines, seen }: Graticule, ground: FigureGroun
 		};
 		if (more.length) figure.halo = '#ffffff';
 		if ([...figures, ...ground.labels].some((other) => overlaps(figure, other))) return false;
+		if (ground.taken.some((box) => isOver(figure, box))) return false;
 		figures.push(figure);
 		return true;
 	};

@@ -7,7 +7,7 @@ import {
 	worldCoverage,
 } from '../../../../../tests/support/sheets.ts';
 import type { Coverage } from '../../boundaries/coverage.ts';
-import { drawSheet } from '../index.ts';
+import { drawSheet, isSetIn } from '../index.ts';
 import type { SheetLayout } from '../layout.ts';
 import { placeOnPaper } from '../place-on-paper.ts';
 import { lonStep } from '../plane/extent.ts';
@@ -96,11 +96,12 @@ describe('figures', () => {
 		[-96, '96° W'],
 		[0, '0°'],
 		[180, '180°'],
-		[4.5, '4° 30′ E'],
-		[10 / 60, '0° 10′ E'],
+		[4.5, "4° 30' E"],
+		[10 / 60, "0° 10' E"],
 		[0.125, '0.125° E'],
 	])('%d is %s', (value, words) => {
 		expect(figureOf(value, 'E', 'W')).toBe(words);
+		expect(isSetIn('sans', words)).toBe(true);
 	});
 });
 

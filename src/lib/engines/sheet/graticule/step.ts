@@ -30,7 +30,10 @@ export function graticuleSteps(asked: number | 'auto', extent: Extent): Graticul
 	return { lat, lon: turn ? 30 : evenStep(lat / narrow / 1.5) };
 }
 
-/** A figure at a line: `120° W`, `4° 30′ N`, `0°`; decimals where a step does not fall on minutes. */
+/** The faces of figures have no prime (U+2032); the upright mark is read as one. */
+export const minuteMark = "'";
+
+/** A figure at a line: `120° W`, `4° 30' N`, `0°`; decimals where a step does not fall on minutes. */
 export function figureOf(value: number, positive: string, negative: string): string {
 	const size = Math.abs(value);
 	const inMinutes = Math.round(size * 60);
@@ -38,5 +41,5 @@ export function figureOf(value: number, positive: string, negative: string): str
 		size < 1e-9 || Math.abs(size - 180) < 1e-9 ? '' : ` ${value > 0 ? positive : negative}`;
 	if (Math.abs(size * 60 - inMinutes) > 1e-6) return `${Number(size.toFixed(3))}°${side}`;
 	const [degrees, rest] = [Math.floor(inMinutes / 60), inMinutes % 60];
-	return `${degrees}°${rest ? ` ${String(rest).padStart(2, '0')}′` : ''}${side}`;
+	return `${degrees}°${rest ? ` ${String(rest).padStart(2, '0')}${minuteMark}` : ''}${side}`;
 }

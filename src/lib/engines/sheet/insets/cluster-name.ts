@@ -1,3 +1,4 @@
+import { cleanText } from '../type/clean-text.ts';
 import type { Coverage } from '../../boundaries/coverage.ts';
 import { latitudeWords, longitudeWords } from '../plane/degrees.ts';
 import { wrapLon } from '../plane/extent.ts';
@@ -25,3 +26,21 @@ export function clusterName(
 /** Where a group lies, to a degree: ` (79° N 20° E)`. */
 export const whereabouts = ({ at: [lon, lat] }: Pick<Cluster, 'at'>): string =>
 	` (${latitudeWords(Math.round(lat))} ${longitudeWords(wrapLon(Math.round(lon)))})`;
+
+/**
+ * What stands over each inset: the name that was given, else what the group is called; where several are
+ * called alike, with the place of each.
+ */
+export function insetNames(
+	coverage: Pick<Coverage, 'names' | 'areasKm2'>,
+	groups: (string | null)[],
+	clusters: Cluster[],
+	choices: Record<string, { name: string | null }>,
+): string[] {
+	const called = clusters.map((one) => clusterName(coverage, groups, one));
+	return clusters.map((one, i) => {
+		const own = choices[one.id]?.name;
+		const alike = called.filter((other) => other === called[i]).length > 1;
+		return cleanText(own || (alike ? called[i] + whereabouts(one) : called[i]));
+	});
+}

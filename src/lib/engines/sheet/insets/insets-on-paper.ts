@@ -13,10 +13,10 @@ import { fitInto, type Box, type Fit } from '../plane/fit.ts';
 import { projectArcs } from '../plane/project-arcs.ts';
 import { quantise, type SheetArcs } from '../plane/quantise.ts';
 import { slackOf } from '../plane/slack.ts';
-import { cleanText } from '../type/clean-text.ts';
-import { clusterName } from './cluster-name.ts';
+import { insetNames } from './cluster-name.ts';
 import { freeGrid } from './free-grid.ts';
-import { insetDress } from './inset-size.ts';
+import { insetDress, type InsetHead } from './inset-size.ts';
+import { bestOfAll, isSame } from './place-cost.ts';
 import { placeInsets, type InsetSpot, type InsetWish } from './place-insets.ts';
 import type { SharedOut } from './share-out.ts';
 
@@ -26,6 +26,9 @@ export interface PlacedInset {
 	/** its frame, and where its regions stand in it */
 	outer: Box;
 	inner: Box;
+	/** words over it; whether a bar stands under it */
+	head: InsetHead;
+	bar: boolean;
 	/** 1 : n at its middle, and whether the map has the same */
 	ratio: number;
 	sameScale: boolean;
@@ -56,10 +59,12 @@ export interface InsetsOnPaper {
 }
 
 /** Shares of the box that are kept free for insets, tried in turn. */
-const strips = [0, 0.12, 0.2, 0.28, 0.38, 0.5];
+const strips = [0.12, 0.2, 0.28, 0.38, 0.5];
 /** What the map's growing smaller costs, against the costs of `placeInsets`; and an inset without room. */
-const lossWeight = 5;
+const lossWeight = 12;
 const noRoom = 20;
+/** What another side than the one that costs least may cost more, to lie nearer to the true direction. */
+const sideWorth = 0.2;
 
 /** In: groups that get a box, and the arcs of each. */
 export function insetsOnPaper(
@@ -73,17 +78,20 @@ export function insetsOnPaper(
 		const fitted = map.fitIn(map.box);
 		return { map: fitted, arcs: map.arcsAt(fitted.fit), insets: [], told: [] };
 	}
-	const drafts = boxed.map(({ cluster, lines }) =>
-		draftOf(coverage, layout, groups, cluster, lines, map.chosen),
+	const names = insetNames(
+		coverage,
+		groups,
+		boxed.map(({ cluster }) => cluster),
+		layout.frame.insetChoices,
+	);
+	const drafts = boxed.map(({ cluster, lines }, i) =>
+		draftOf(coverage, layout, names[i], cluster, lines, map.chosen),
 	);
 	const dress = insetDress(map.scale, layout.scaleBar);
 	let best: { cost: number; settle: () => InsetsOnPaper } | null = null;
-	const largest = map.fitIn(map.box).fit.scale;
-	for (const strip of strips) {
-		const fitted = map.fitIn(bestStrip(map, strip));
-		const loss = lossWeight * (1 - fitted.fit.scale / largest);
-		// a wider strip costs more than all that it could gain
-		if (best && loss >= best.cost) break;
+	for (const { fitted, loss } of freedRooms(map)) {
+		// what costs more than all that it could gain
+		if (best && loss - bestOfAll * drafts.length >= best.cost) break;
 		const arcs = map.arcsAt(fitted.fit);
 		const grid = freeGrid(arcs, drawnRings(map.rings, arcs), map.box);
 		const ground = { grid, dress, mapRatio: fitted.ratio ?? 1, scale: map.scale };
@@ -98,13 +106,32 @@ export function insetsOnPaper(
 	return best!.settle();
 }
 
-/** The box less a strip along its left side or its foot, whichever costs less scale. */
-function bestStrip({ box, fitIn }: MapOnPaper, share: number): Box {
-	if (!share) return box;
+/**
+ * The map fitted beside a strip that is kept free along one side of its box, or beside none; what that costs in
+ * scale, the least first. Where the box is longer than the map, a strip costs nothing and only moves it.
+ */
+function freedRooms({ box, fitIn }: MapOnPaper): { fitted: MapFit; loss: number }[] {
+	const whole = fitIn(box);
+	const rooms = strips.flatMap((strip) => {
+		const beside = sidesLess(box, strip).map((room) => {
+			const fitted = fitIn(room);
+			return { fitted, loss: lossWeight * (1 - fitted.fit.scale / whole.fit.scale) };
+		});
+		const least = Math.min(...beside.map(({ loss }) => loss));
+		return beside.filter(({ loss }) => loss <= least + sideWorth);
+	});
+	const all = [{ fitted: whole, loss: 0 }, ...rooms];
+	return all.sort((a, b) => a.loss - b.loss);
+}
+
+/** The box less a share of it left, below, above and right. */
+function sidesLess(box: Box, share: number): Box[] {
 	const [across, down] = [Math.round(box.width * share), Math.round(box.height * share)];
-	const beside = { ...box, x: box.x + across, width: box.width - across };
-	const above = { ...box, height: box.height - down };
-	return fitIn(beside).fit.scale >= fitIn(above).fit.scale ? beside : above;
+	const [narrow, low] = [
+		{ ...box, width: box.width - across },
+		{ ...box, height: box.height - down },
+	];
+	return [{ ...narrow, x: box.x + across }, low, { ...low, y: box.y + down }, narrow];
 }
 
 type Draft = ReturnType<typeof draftOf>;
@@ -112,7 +139,7 @@ type Draft = ReturnType<typeof draftOf>;
 function draftOf(
 	coverage: Coverage,
 	layout: SheetLayout,
-	groups: (string | null)[],
+	name: string,
 	cluster: SharedOut,
 	lines: LonLatArcs,
 	mapProjection: ProjectionChoice,
@@ -127,7 +154,6 @@ function draftOf(
 	const ratio = ratioOf(chosen.projection, bounds, measured) ?? 1;
 	const atOne = measured.scale * ratio;
 	const choice = layout.frame.insetChoices[cluster.id];
-	const name = cleanText(choice?.name || clusterName(coverage, groups, cluster));
 	const wish = (fit: Fit, box: Box): InsetWish => ({
 		name,
 		width: atOne * (bounds.right - bounds.left),
@@ -181,9 +207,10 @@ function settled(
 		told.push(...spot.told);
 		const fit = fitInto(corners(bounds), spot.inner);
 		patches.push({ arcs: boxed[i].arcs, points: quantise(plane, fit) });
-		const { outer, inner, ratio } = spot;
-		const sameScale = map.ratio !== null && Math.abs(ratio / map.ratio - 1) < 1e-9;
-		insets.push({ ...{ id, name, outer, inner, ratio, sameScale, chosen, fit, slack } });
+		const { outer, inner, head, bar, ratio } = spot;
+		const sameScale = map.ratio !== null && isSame(ratio, map.ratio);
+		const set = { outer, inner, head, bar, ratio, sameScale };
+		insets.push({ ...{ id, name, chosen, fit, slack }, ...set });
 	});
 	return { map, arcs: patches.length ? withArcs(arcs, patches) : arcs, insets, told };
 }
@@ -196,6 +223,7 @@ function lost({ id, name, chosen, slack }: Draft): PlacedInset {
 		...{ id, name, chosen, slack, fit },
 		outer: nowhere,
 		inner: nowhere,
+		...{ head: { name: [], scale: '' }, bar: false },
 		ratio: 0,
 		sameScale: false,
 	};

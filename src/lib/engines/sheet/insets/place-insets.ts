@@ -5,7 +5,17 @@
  */
 import type { Box } from '../plane/fit.ts';
 import { isFree, type FreeGrid } from './free-grid.ts';
-import { insetFrame, type InsetDress } from './inset-size.ts';
+import { insetFrame, type InsetDress, type InsetFrame } from './inset-size.ts';
+import {
+	inLine,
+	inLineWith,
+	isInLine,
+	isSame,
+	placeCost,
+	scaleCost,
+	swaps,
+	type Standing,
+} from './place-cost.ts';
 
 export interface InsetWish {
 	name: string;
@@ -21,6 +31,8 @@ export interface InsetWish {
 export interface InsetSpot {
 	outer: Box;
 	inner: Box;
+	head: InsetFrame['head'];
+	bar: boolean;
 	ratio: number;
 	/** how ill it suits: radians off the true direction, and what smallness and distance from the edge cost */
 	cost: number;
@@ -32,12 +44,7 @@ export interface InsetSpot {
  * Regions in an inset may be as long as these shares of the map's box, and are at least so long on A4; if
  * they are drawn larger than on the map, at most so long.
  */
-const sides = { ofShorter: 0.42, ofBox: 0.3, least: 700, enlarged: 1700 };
-/** A smaller scale is worth this many radians of direction; the scale of the map as many. */
-const perStep = 0.3;
-const sameScale = 0.6;
-/** Standing away from the edges by the whole box costs so much. */
-const offEdge = 2;
+const sides = { ofShorter: 0.5, ofBox: 0.3, least: 700, enlarged: 1700 };
 const steps = [1, 1.25, 1.5, 2, 2.5, 3, 4, 5, 6, 8];
 /** Clear of regions and other boxes, on A4. */
 const clearance = 120;
@@ -81,9 +88,10 @@ const overlap = (a: Box, b: Box, apart: number): boolean =>
 	a.y < b.y + b.height + apart &&
 	b.y < a.y + a.height + apart;
 
-function isClear(box: Box, { grid, scale, obstacles }: Ground, others: Box[]): boolean {
+function isClear(box: Box, { grid, scale, obstacles }: Ground, others: Standing[]): boolean {
 	const apart = clearance * scale;
-	if ([...others, ...obstacles].some((other) => overlap(box, other, apart))) return false;
+	if (others.some(({ outer }) => overlap(box, outer, apart))) return false;
+	if (obstacles.some((other) => overlap(box, other, apart))) return false;
 	// against the edges of the map's box nothing need be kept clear
 	const [left, top] = [Math.max(grid.box.x, box.x - apart), Math.max(grid.box.y, box.y - apart)];
 	const right = Math.min(grid.box.x + grid.box.width, box.x + box.width + apart);
@@ -93,61 +101,70 @@ function isClear(box: Box, { grid, scale, obstacles }: Ground, others: Box[]): b
 	return isFree(grid, { x: left, y: top, width: right - left, height: bottom - top });
 }
 
-/** How ill a place suits: radians off the true direction, and the way to the nearest edges. */
-function cost(box: Box, [tx, ty]: [number, number], { box: map }: FreeGrid): number {
-	const [x, y] = [box.x + box.width / 2, box.y + box.height / 2];
-	const [dx, dy] = [x - map.x - map.width / 2, y - map.y - map.height / 2];
-	const away = Math.hypot(dx, dy) || 1;
-	const known = tx !== 0 || ty !== 0;
-	const off = known ? Math.acos(Math.min(1, Math.max(-1, (dx * tx + dy * ty) / away))) : 0;
-	const fromSide = Math.min(box.x - map.x, map.x + map.width - box.x - box.width) / map.width;
-	const fromEnd = Math.min(box.y - map.y, map.y + map.height - box.y - box.height) / map.height;
-	return off + offEdge * (fromSide + fromEnd);
-}
-
 const movedTo = (box: Box, x: number, y: number): Box => ({ ...box, x: box.x + x, y: box.y + y });
 
-/** The best free place for a frame of a size; null where there is none. */
-function bestPlace(frame: Box, wish: InsetWish, ground: Ground, others: Box[]) {
+/** The best free place for a frame of a size that costs less than `below`; null where there is none. */
+function bestPlace(frame: Box, wish: InsetWish, ground: Ground, others: Standing[], below: number) {
 	const { grid } = ground;
 	const [wide, high] = [grid.box.width - frame.width, grid.box.height - frame.height];
 	if (wide < 0 || high < 0) return null;
-	const places = (room: number) => {
+	const places = (room: number, inLine: number[]) => {
 		const count = Math.max(1, Math.floor(room / (1.5 * grid.cell)));
-		return Array.from({ length: count + 1 }, (_, i) => Math.round((room * i) / count));
+		const even = Array.from({ length: count + 1 }, (_, i) => Math.round((room * i) / count));
+		return [...even, ...inLine.filter((at) => at >= 0 && at <= room)];
 	};
+	const [across, down] = inLineWith(frame, others);
+	const [xs, ys] = [
+		places(
+			wide,
+			across.map((x) => x - grid.box.x),
+		),
+		places(
+			high,
+			down.map((y) => y - grid.box.y),
+		),
+	];
 	let best: { box: Box; cost: number } | null = null;
-	for (const y of places(high)) {
-		for (const x of places(wide)) {
+	for (const y of ys) {
+		for (const x of xs) {
 			const box = movedTo(frame, grid.box.x + x, grid.box.y + y);
-			const costs = cost(box, wish.towards, grid);
-			if ((!best || costs < best.cost) && isClear(box, ground, others)) best = { box, cost: costs };
+			const most = best?.cost ?? below;
+			const alone = placeCost(box, wish.towards, grid.box);
+			if (alone - inLine >= most) continue;
+			const own = isInLine(box, others) ? alone - inLine : alone;
+			const costs = own + swaps(box, wish.towards, others);
+			if (costs < most && isClear(box, ground, others)) best = { box, cost: costs };
 		}
 	}
 	return best;
 }
 
-function spotFor(wish: InsetWish, ground: Ground, others: Box[]): Omit<InsetSpot, 'told'> | null {
-	let best: { spot: Omit<InsetSpot, 'told'>; cost: number } | null = null;
-	ratiosFor(wish, ground).forEach((ratio, step) => {
+function spotFor(
+	wish: InsetWish,
+	ground: Ground,
+	others: Standing[],
+): Omit<InsetSpot, 'told'> | null {
+	let best: Omit<InsetSpot, 'told'> | null = null;
+	const ratios = ratiosFor(wish, ground);
+	for (const ratio of ratios) {
 		const [width, height] = [wish.width / ratio, wish.height / ratio];
-		const { outer, inner } = insetFrame(ground.dress, wish.name, ratio, width, height);
+		const sameScale = isSame(ratio, ground.mapRatio);
+		const frame = insetFrame(ground.dress, wish.name, { ratio, sameScale }, width, height);
+		const { outer, inner, head, bar } = frame;
+		const own = scaleCost(ratio, ratios[0], ground.mapRatio);
+		const most: number = (best?.cost ?? Infinity) - own;
 		const found = wish.cornerMm
 			? byHand(outer, wish.cornerMm, ground, others)
-			: bestPlace(outer, wish, ground, others);
-		if (!found) return;
-		const total = found.cost + step * perStep - (ratio === ground.mapRatio ? sameScale : 0);
-		if (best && best.cost <= total) return;
+			: bestPlace(outer, wish, ground, others, most);
+		if (!found || found.cost >= most) continue;
 		const { box } = found;
-		best = {
-			spot: { outer: box, inner: movedTo(inner, box.x, box.y), ratio, cost: total },
-			cost: total,
-		};
-	});
-	return (best as { spot: Omit<InsetSpot, 'told'> } | null)?.spot ?? null;
+		const place = { outer: box, inner: movedTo(inner, box.x, box.y) };
+		best = { ...place, head, bar, ratio, cost: found.cost + own };
+	}
+	return best;
 }
 
-function byHand(frame: Box, [x, y]: [number, number], ground: Ground, others: Box[]) {
+function byHand(frame: Box, [x, y]: [number, number], ground: Ground, others: Standing[]) {
 	const box = movedTo(frame, Math.round(100 * x), Math.round(100 * y));
 	return isClear(box, ground, others) ? { box, cost: 0 } : null;
 }
@@ -178,7 +195,9 @@ export function placeInsets(wishes: InsetWish[], ground: Ground): (InsetSpot | n
 		.map((_, i) => i)
 		.sort((a, b) => Number(!!wishes[b].cornerMm) - Number(!!wishes[a].cornerMm) || a - b);
 	for (const i of order) {
-		const others = spots.flatMap((spot) => (spot ? [spot.outer] : []));
+		const others = spots.flatMap((spot, other) =>
+			spot ? [{ outer: spot.outer, towards: wishes[other].towards }] : [],
+		);
 		for (const { wish, told } of eased(wishes[i])) {
 			const spot = spotFor(wish, ground, others);
 			if (!spot) continue;

@@ -1,4 +1,4 @@
-import { boxAround, isFree, isBorder, type Ground } from './ground.ts';
+import { boxAround, isFree, isBorder, isWithSame, type Ground } from './ground.ts';
 import type { Pole } from './pole.ts';
 import { paper, type RegionRaster } from './region-raster.ts';
 import type { TextBox } from './text-box.ts';
@@ -42,7 +42,7 @@ function shore(raster: RegionRaster, region: number, pole: Pole, dx: number, dy:
 /**
  * The centre of a label set on empty paper next to its region: right, left, above, below, in this
  * order, straight opposite its middle before somewhat along the coast. Null where other regions, other
- * labels or the edge of the map are in the way. Source for the order of places: Imhof 1975,
+ * labels, the frame of an inset or the edge of the map are in the way. Source for the order of places: Imhof 1975,
  * "Positioning names on maps", for point-like features.
  */
 export function spotBeside(
@@ -61,9 +61,8 @@ export function spotBeside(
 				const out = coasts[side] + gap * gaps;
 				const x = pole.x + dx * (out + width / 2) + (dy ? shift * width : 0);
 				const y = pole.y + dy * (out + height / 2) + (dx ? shift * height * 2 : 0);
-				if (isFree(ground, boxAround(x, y, width + 2 * pad, height + 2 * pad), paper)) {
-					return { x, y };
-				}
+				const around = boxAround(x, y, width + 2 * pad, height + 2 * pad);
+				if (isFree(ground, around, paper) && isWithSame(ground, pole, around)) return { x, y };
 			}
 		}
 	}

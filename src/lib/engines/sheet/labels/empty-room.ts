@@ -1,12 +1,12 @@
 import type { Box } from '../plane/fit.ts';
 import type { Ground } from './ground.ts';
-import { paper } from './region-raster.ts';
+import { cellsOf, paper } from './region-raster.ts';
 
 /** Squares the map's box is looked at in, along its longer side. */
 const squares = 160;
 
-/** 1 for squares in which nothing lies, row by row. */
-function emptySquares({ raster, busy }: Ground) {
+/** 1 for squares in which nothing lies, row by row; what is within an inset is no room of the map's. */
+function emptySquares({ raster, busy, frames }: Ground) {
 	const { columns, rows, owner, cell } = raster;
 	const side = Math.max(1, Math.ceil(Math.max(columns, rows) / squares));
 	const [wide, high] = [Math.floor(columns / side), Math.floor(rows / side)];
@@ -16,6 +16,13 @@ function emptySquares({ raster, busy }: Ground) {
 			const i = row * columns + column;
 			if (owner[i] === paper && !busy[i]) continue;
 			empty[Math.floor(row / side) * wide + Math.floor(column / side)] = 0;
+		}
+	}
+	for (const frame of frames) {
+		const [left, right, top, bottom] = cellsOf(raster, frame).map((at) => Math.floor(at / side));
+		for (let row = Math.max(0, top); row <= Math.min(bottom, high - 1); row++) {
+			if (right >= 0 && left < wide)
+				empty.fill(0, row * wide + Math.max(0, left), row * wide + Math.min(right + 1, wide));
 		}
 	}
 	return { empty, wide, high, side: side * cell };

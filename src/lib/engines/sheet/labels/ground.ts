@@ -1,4 +1,5 @@
 /** What placing names asks of the paper: who owns a cell, and whether something stands there already. */
+import { mostShare, type CellCounts } from './cell-counts.ts';
 import type { Box } from '../plane/fit.ts';
 import { cellAt, cellsOf, edge, outline, type RegionRaster } from './region-raster.ts';
 import type { Leader } from './leader.ts';
@@ -7,8 +8,12 @@ export interface Ground {
 	raster: RegionRaster;
 	/** 1 for cells where something stands: collar furniture first, then names and leaders as they are set */
 	busy: Uint8Array;
+	/** of the raster */
+	counts: CellCounts;
 	/** from `headroom`: never above anything that was there before names */
 	room: Uint16Array;
+	/** frames of insets: a name stands on the same side of each as its region */
+	frames: readonly Box[];
 }
 
 /** Marks every cell that a box touches as taken; parts off the grid are left out. */
@@ -41,14 +46,16 @@ export const isBorder = (owner: number): boolean => owner === outline || owner =
  * or an edge is in it, or where it leaves the grid.
  */
 export function ownShare(
-	{ raster, busy }: Ground,
+	{ raster, busy, counts }: Ground,
 	box: Box,
 	region: number,
 	least: number,
 ): number {
 	const { columns, rows, owner } = raster;
-	const [left, right, top, bottom] = cellsOf(raster, box);
+	const cells = cellsOf(raster, box);
+	const [left, right, top, bottom] = cells;
 	if (left < 0 || top < 0 || right >= columns || bottom >= rows) return 0;
+	if (mostShare(counts, columns, region, cells) < least) return 0;
 	const most = (right - left + 1) * (bottom - top + 1) * (1 - least);
 	let [own, others] = [0, 0];
 	for (let row = top; row <= bottom; row++) {
@@ -78,6 +85,18 @@ export function* cellsAlong(raster: RegionRaster, { from, to }: Leader): Generat
 /** Marks a leader as taken, so that no name and no other leader crosses it. */
 export function occupyLine({ raster, busy }: Ground, line: Leader): void {
 	for (const cell of cellsAlong(raster, line)) if (cell >= 0) busy[cell] = 1;
+}
+
+/** Whether a box lies wholly in the frames that a place lies in, and touches no other. */
+export function isWithSame({ frames }: Ground, at: { x: number; y: number }, box: Box): boolean {
+	return frames.every(({ x, y, width, height }) => {
+		if (at.x > x && at.x < x + width && at.y > y && at.y < y + height) {
+			const across = box.x >= x && box.x + box.width <= x + width;
+			return across && box.y >= y && box.y + box.height <= y + height;
+		}
+		const beside = box.x + box.width <= x || box.x >= x + width;
+		return beside || box.y + box.height <= y || box.y >= y + height;
+	});
 }
 
 export const boxAround = (x: number, y: number, width: number, height: number): Box => ({

@@ -35,8 +35,16 @@ const groupSizes = [10, 9, 8, 7];
 const spacedSizes = [10, 9, 8, 7];
 /** Above so many names only the smallest sizes are tried, which bounds the time. */
 const mostAtEverySize = 8_000;
-/** A larger size may cost this share of the names that fit at the smallest. */
-const worth = 0.03;
+/**
+ * Type larger by a point is worth this share of the names, and below the second figure three times as much: small
+ * type on a roomy map reads ill. Common practice, no source.
+ */
+const perPoint = 0.015;
+const smallBelow = 6;
+/** A name that stands off its region, or over a border, counts less: better smaller and in its place. */
+const countsFor: Partial<Record<HowNamed, number>> = { beside: 0.9, leader: 0.7, over: 0.7 };
+/** What a larger size may by chance fit more than the smallest. */
+const chance = 0.03;
 const enough = 0.6;
 /** Names of the level above stand between those of regions where this share of these has room enough. */
 const suits = 0.85;
@@ -52,6 +60,8 @@ export interface LabelInput extends GroupInput {
 	lettering: Lettering;
 	/** what stands on the map already: insets' frames, text blocks, a legend laid over it */
 	obstacles: readonly Box[];
+	/** insets' frames, each as a whole */
+	frames: readonly Box[];
 	/** the whole paper without its edge, which names set by hand do not leave */
 	paper: Box;
 }
@@ -108,7 +118,7 @@ export function labelSheet(input: LabelInput): Labelled {
 	});
 }
 
-/** The largest size that costs few of the names that fit at the smallest; null where too few do. */
+/** The size that suits best, more names against larger type; null where too few fit at the smallest. */
 function sizeThatDoes(
 	task: NameTask,
 	tried: number[],
@@ -117,22 +127,25 @@ function sizeThatDoes(
 ): number | null {
 	// a sheet of specks: not even looked at, for too few of its names could stand
 	if (possible < asked) return null;
-	// a name at the end of a leader or over a border counts less: better smaller and in its place
 	const share = (names: SetName[]) =>
-		names.reduce((sum, { how }) => sum + (how === 'leader' || how === 'over' ? 0.7 : 1), 0) /
-		Math.max(1, task.ways.length);
+		names.reduce((sum, { how }) => sum + (countsFor[how] ?? 1), 0) / Math.max(1, task.ways.length);
 	const least = tried[tried.length - 1];
 	const most = share(labelRegions(task, least));
 	if (most < asked) return null;
-	// the larger the type, the fewer names fit: halving finds the largest that does
-	let [low, high] = [0, tried.length - 1];
-	while (low < high) {
-		const middle = (low + high) >> 1;
-		if (share(labelRegions(task, tried[middle])) >= most - worth) high = middle;
-		else low = middle + 1;
+	const larger = (size: number) => worthOfSize(size / point) - worthOfSize(least / point);
+	let best = { size: least, worth: most };
+	for (const size of tried.slice(0, -1)) {
+		// neither this nor any smaller could do better
+		if (most + chance + larger(size) <= best.worth) break;
+		const fits = share(labelRegions(task, size));
+		const worth = fits + larger(size);
+		if (fits >= asked && worth >= best.worth) best = { size, worth };
 	}
-	return tried[low];
+	return best.size;
 }
+
+const worthOfSize = (points: number): number =>
+	perPoint * (points + 2 * Math.min(points, smallBelow));
 
 /** The level above: instead of regions in bold, or between their names in spaced capitals. */
 function namesAbove(input: LabelInput, task: NameTask, isBeside: boolean): GroupNames | null {

@@ -1,6 +1,7 @@
 import { ringDoubleArea, ringPoints } from '../fills.ts';
 import type { SheetArcs } from '../plane/quantise.ts';
 import { smallerSide } from '../smaller-side.ts';
+import { countCells } from './cell-counts.ts';
 import { headroom } from './headroom.ts';
 import { occupy } from './ground.ts';
 import type { LabelInput } from './label-sheet.ts';
@@ -70,7 +71,10 @@ export function nameTask(input: LabelInput, smallest: number): { task: NameTask;
 	const hand = places.map(([key, place]) => [known(key), place] as const);
 	return {
 		task: {
-			ground: { raster, busy: fixed.slice(), room: headroom(raster, fixed) },
+			ground: {
+				...{ raster, counts: countCells(raster), frames: input.frames },
+				...{ busy: fixed.slice(), room: headroom(raster, fixed) },
+			},
 			...{ fixed, paperBox: input.paper, poles, anchors, coastal },
 			ways: names.map((name, region) => {
 				const { abbreviations } = lettering;

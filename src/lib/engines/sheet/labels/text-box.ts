@@ -53,6 +53,21 @@ export function setAt(
 	}));
 }
 
+/** The box of every line of a text set centred at a place, `pad` wider and higher in all. */
+export function lineBoxes(
+	{ lines, size, height }: TextBox,
+	x: number,
+	y: number,
+	pad: number,
+): Box[] {
+	return lines.map(({ width }, i) => ({
+		x: x - (width + pad) / 2,
+		y: y - height / 2 + size * leading * i - pad / 2,
+		width: width + pad,
+		height: size * (rise + drop) + pad,
+	}));
+}
+
 /** The box that one line of drawn text takes up on the paper. */
 export function boxOfText({ x, y, width, size }: DrawnText): Box {
 	return { x, y: y - size * rise, width, height: size * (rise + drop) };

@@ -90,7 +90,7 @@ describe('shapes as SVG', () => {
 		expect(groups).toEqual([
 			...['sea', 'fills', 'lakes', 'hatches', 'graticule', 'water'],
 			...['halos', 'borders', 'borders-region', 'borders-outer', 'leaders'],
-			...['inset-frames', 'neat-line', 'text-grounds', 'north-arrow'],
+			...['inset-frames', 'legend-ground', 'neat-line', 'text-grounds', 'north-arrow'],
 			...['labels', 'collar', 'legend-samples'],
 		]);
 		for (const layer of ['sea', 'hatches', 'north-arrow', 'legend-samples']) {

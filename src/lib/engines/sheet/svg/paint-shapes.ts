@@ -32,6 +32,7 @@ export const shapeGroups: Record<ShapeLayer, string> = {
 	graticule: 'graticule',
 	water: 'water',
 	inset: 'inset-frames',
+	'legend-ground': 'legend-ground',
 	'neat-line': 'neat-line',
 	ground: 'text-grounds',
 	north: 'north-arrow',

@@ -4,6 +4,7 @@ import { memberFor } from '$lib/server/access/guard';
 import { attempt, readForm } from '$lib/server/forms';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
+import { themedEditions } from '$lib/server/services/edition-changes.service';
 import { issueEdition } from '$lib/server/services/edition.service';
 import { stopExport } from '$lib/server/services/export-end.service';
 import { askForExport, deskExports } from '$lib/server/services/exports.service';
@@ -14,12 +15,13 @@ const whatToIssue = z.object({
 	note: z.string().trim().max(2_000).default(''),
 });
 
-/** The files that were taken of editions and drafts, the newest first. */
+/** The files that were taken of editions and drafts, and the editions that show a measure. */
 export const load = (async ({ locals, params, depends }) => {
 	const member = memberFor(locals, 'files.download');
 	depends('merestone:exports');
 	return {
 		exports: await forPage(() => deskExports(workshop(), member, Number(params.sheet))),
+		themed: await forPage(() => themedEditions(workshop(), member, Number(params.sheet))),
 	};
 }) satisfies PageServerLoad;
 

@@ -26,13 +26,19 @@ export const actions = {
 			const said = Object.values(form.failure.data.errors).flat()[0];
 			return fail(400, { keepFault: said ?? 'That could not be kept.' });
 		}
-		const { inks, over, name } = form.data;
+		const { inks, over, name, revision } = form.data;
 		const shop = workshop();
 		if (!over && !name) return fail(400, { keepFault: 'Give the palette a name.' });
+		if (over && !revision)
+			return fail(400, { keepFault: 'Load the page again: it is out of date.' });
 		const kept = await attempt(async () => {
 			if (!over) return { id: await addPalette(shop, member, { name: name ?? '', inks }), name };
 			const before = await readPalette(shop, member, over);
-			await changePalette(shop, member, over, { name: before.name, inks, revision: null });
+			await changePalette(shop, member, over, {
+				name: before.name,
+				inks,
+				revision: Number(revision),
+			});
 			return { id: over, name: before.name };
 		});
 		if (!kept.failure) return { kept: { id: kept.data.id, name: kept.data.name ?? '' } };
