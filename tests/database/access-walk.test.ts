@@ -20,6 +20,7 @@ import { askExport } from '../../src/lib/schemas/export.ts';
 import { stopExport } from '../../src/lib/server/services/export-end.service.ts';
 import {
 	askForExport,
+	deskExports,
 	exportFileOf,
 	readExport,
 	sheetExports,
@@ -369,6 +370,7 @@ const walk: Walk = {
 	],
 	sheetExports: ['files.download', (member) => sheetExports(shop, member, 99)],
 	readExport: ['files.download', (member) => readExport(shop, member, 99, 1)],
+	deskExports: ['files.download', (member) => deskExports(shop, member, 99)],
 	exportFileOf: ['files.download', (member) => exportFileOf(shop, member, 99, 1)],
 	stopExport: ['files.download', (member) => stopExport(shop, member, 99, 1)],
 	sheetSearches: ['sheet.read', (member) => sheetSearches(shop, member, 99)],

@@ -17,6 +17,7 @@ import { endExpiredExports, stopExport } from '../../src/lib/server/services/exp
 import { mostOpenExports } from '../../src/lib/server/services/ask-export.ts';
 import {
 	askForExport,
+	deskExports,
 	exportFileOf,
 	readExport,
 	sheetExports,
@@ -29,11 +30,13 @@ let shop: TestWorkshop;
 let maker: Member;
 let designer: Member;
 let approver: Member;
+let admin: Member;
 beforeAll(async () => {
 	shop = await createWorkshop();
 	maker = await createMember(shop.db, 'exports', 'cartographer', 'analyst');
 	designer = await createMember(shop.db, 'exports', 'designer');
 	approver = await createMember(shop.db, 'exports', 'approver');
+	admin = await createMember(shop.db, 'exports', 'admin');
 	const file = readFileSync('sample-data/tavaroe.geojson');
 	await ingest(shop, maker, 'tavaroe.geojson', file, { keyField: 'code', nameField: 'name' });
 	const { revision } = await deskSheet(shop, approver, 1);
@@ -180,6 +183,28 @@ describe('a file of the draft', () => {
 		expect(String(later.bytes)).toContain('Another title');
 	});
 
+	it('is of the revision that was looked at, or none', async () => {
+		const { revision } = await deskSheet(shop, maker, 1);
+		const asked = askExport.parse({ kind: 'css' });
+		const stale = askForExport(shop, designer, 1, asked, revision - 1);
+		await expect(stale).rejects.toMatchObject({ code: 'stale' });
+		const note = await askForExport(shop, designer, 1, asked, revision);
+		expect(note).toMatchObject({ revision, edition: null });
+		await stopExport(shop, designer, 1, note.number);
+	});
+
+	it('is kept for as long again when it is asked for again', async () => {
+		const { note } = await made({ kind: 'tokens' });
+		await shop.db
+			.updateTable('exports')
+			.set({ expires_at: new Date(Date.now() + 3_600_000) })
+			.where('number', '=', note.number)
+			.execute();
+		const again = await ask({ kind: 'tokens' });
+		expect(again.number).toBe(note.number);
+		expect(new Date(again.expiresAt!).getTime()).toBeGreaterThan(Date.now() + 6 * 86_400_000);
+	});
+
 	it('is dropped when its time is over, and the bytes with it unless another row has them', async () => {
 		const { note } = await made({ kind: 'csv' });
 		const { digest } = note.file!;
@@ -227,6 +252,46 @@ describe('stopping', () => {
 	});
 });
 
+/** As a page is told of them. */
+const offered = async (member: Member, one: number) =>
+	(await deskExports(shop, member, 1, [one])).map(({ number, mayStop }) => [number, mayStop]);
+
+describe('somebody else’s file', () => {
+	it('is stopped by the one who asked or by an admin, by nobody else', async () => {
+		const asked = { kind: 'svg', edition: 1, reader: 'grey' };
+		const { number } = await ask(asked);
+		expect(await offered(approver, number)).toEqual([[number, false]]);
+		await expect(stopExport(shop, approver, 1, number)).rejects.toBeInstanceOf(Forbidden);
+		const token: Member = { ...approver, userId: null, roles: [], actions: ['files.download'] };
+		await expect(stopExport(shop, token, 1, number)).rejects.toBeInstanceOf(Forbidden);
+		expect(await readExport(shop, designer, 1, number)).toMatchObject({ state: 'waiting' });
+		expect(await offered(designer, number)).toEqual([[number, true]]);
+		await stopExport(shop, designer, 1, number);
+		const again = await ask(asked);
+		expect(await offered(admin, again.number)).toEqual([[again.number, true]]);
+		await stopExport(shop, admin, 1, again.number);
+	});
+});
+
+describe('the list', () => {
+	it('keeps files of editions, however many drafts were taken since', async () => {
+		const { number } = await ask({ kind: 'css', edition: 1 });
+		const row = await rowOf(number);
+		const { id: _, options, ...same } = row;
+		const drafts = Array.from({ length: 250 }, (_one, i) => ({
+			...same,
+			...{ number: 100_000 + i, edition: null, options: JSON.stringify(options) },
+			...{ state: 'cancelled' as const, request_digest: String(i), expires_at: new Date(0) },
+			...{ file_digest: null, file_bytes: null, media_type: null },
+		}));
+		await shop.db.insertInto('exports').values(drafts).execute();
+		const listed = (await sheetExports(shop, designer, 1)).map((one) => one.number);
+		await endExpiredExports(shop.db, shop.files);
+		expect(listed).toContain(number);
+		expect(listed).toEqual([...listed].sort((a, b) => b - a));
+	});
+});
+
 describe('rights and limits', () => {
 	it('are those of the team, and what is another team’s is not there', async () => {
 		const stranger = await createMember(shop.db, 'export-strangers', 'designer');
@@ -248,7 +313,7 @@ describe('rights and limits', () => {
 	it('let so many wait at once and no more', async () => {
 		const dpi = (i: number) => ({ kind: 'png', edition: 1, options: { dpi: 72 + i } });
 		for (const { number, state } of await sheetExports(shop, designer, 1)) {
-			if (state === 'waiting') await stopExport(shop, designer, 1, number);
+			if (state === 'waiting') await stopExport(shop, admin, 1, number);
 		}
 		const numbers: number[] = [];
 		for (let i = 0; i < mostOpenExports; i++) numbers.push((await ask(dpi(i))).number);

@@ -147,6 +147,23 @@ describe('a template', () => {
 		expect((await desk(second)).draft.layout.paper).toBe('A3');
 	});
 
+	it('has its name alone, also where two are given one at once', async () => {
+		const ids = await Promise.all(
+			['Left', 'Right'].map((name) => keepTemplate(shop, cartographer, first, { name, ...plain })),
+		);
+		const same = await Promise.allSettled([
+			...ids.map((one) =>
+				renameTemplate(shop, cartographer, { id: one, revision: 1, name: 'Middle' }),
+			),
+			keepTemplate(shop, cartographer, second, { name: 'MIDDLE', ...plain }),
+		]);
+		const refused = same.flatMap((one) => (one.status === 'rejected' ? [one.reason] : []));
+		expect(refused).toHaveLength(2);
+		for (const reason of refused) expect(reason).toBeInstanceOf(Refused);
+		for (const { id: one, name } of await readTemplates(shop, cartographer))
+			if (/left|right|middle/i.test(name)) await removeTemplate(shop, cartographer, one);
+	});
+
 	it('is not for those without the right, nor for another team', async () => {
 		const mine = await keepTemplate(shop, cartographer, first, { name: 'Ours', ...plain });
 		expect(await readTemplates(shop, stranger)).toEqual([]);

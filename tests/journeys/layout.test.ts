@@ -158,6 +158,8 @@ describe('the layout of a sheet', () => {
 		await openSection(page, 'Templates');
 		expect(await page.getByLabel('Outer boundary: drawn').isDisabled()).toBe(true);
 		expect(await page.getByRole('button', { name: 'Keep as a template' }).count()).toBe(0);
+		expect(await page.getByRole('button', { name: 'Add a text block' }).count()).toBe(0);
+		expect(await page.getByText('Drag a name on the sheet').count()).toBe(0);
 		await expectAccessible(page);
 		await picture(page, 'layout-phone');
 	});

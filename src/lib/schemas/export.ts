@@ -38,7 +38,7 @@ export const exportChoices = z.strictObject({
 	byteOrderMark: z.boolean().optional().describe('csv: helps spreadsheets to read accents'),
 	kinds: z
 		.array(z.enum(singles))
-		.min(1)
+		.min(1, 'Tick at least one kind of file for the package.')
 		.max(singles.length)
 		.optional()
 		.describe('zip: which files it holds'),
@@ -70,17 +70,38 @@ export const askExportForm = z
 			(value) => (value === '' ? null : Number(value)),
 			askExport.shape.edition,
 		),
+		/** the draft that was looked at */
+		revision: chosen(z.coerce.number().int().min(1)),
 		reader: askExport.shape.reader,
 		colours: chosen(z.enum(['class', 'attribute'])),
 		letters: chosen(z.enum(['embedded', 'outlines', 'plain'])),
 		dpi: chosen(z.coerce.number().pipe(exportChoices.shape.dpi.unwrap())),
 		ground: chosen(z.enum(['white', 'none'])),
-		kinds: chosen(z.preprocess((value) => [value].flat(), exportChoices.shape.kinds.unwrap())),
+		// the form of a package says an empty one too, so that none ticked is none and not the usual ones
+		kinds: z.preprocess(
+			(value) => (value === undefined ? value : [value].flat().filter((one) => one !== '')),
+			exportChoices.shape.kinds,
+		),
 	})
-	.transform(({ kind, edition, reader, ...options }): AskExport => ({
-		...{ kind, edition, reader },
-		options: exportChoices.parse(options),
-	}));
+	.transform(({ kind, edition, revision, reader, ...options }) => {
+		const asked: AskExport = { kind, edition, reader, options: exportChoices.parse(options) };
+		return { asked, revision };
+	});
+
+const mostFollowed = 100;
+const number = z
+	.string()
+	.regex(/^[1-9]\d{0,8}$/)
+	.transform(Number);
+
+/** `?of=3,5`: how far these are; without it, all that are told. */
+export const exportsAsked = z.object({
+	of: z
+		.string()
+		.transform((list) => list.split(','))
+		.pipe(z.array(number).max(mostFollowed))
+		.optional(),
+});
 
 export const exportNumberForm = z.object({ export: z.coerce.number().int().min(1) });
 
@@ -105,6 +126,12 @@ export interface ExportNote {
 	updatedAt: string;
 	/** when the file is dropped; null: kept as long as the edition */
 	expiresAt: string | null;
+}
+
+/** The same for a page, which offers to stop it. */
+export interface DeskExport extends ExportNote {
+	/** whether whoever looks may stop it, while it is open */
+	mayStop: boolean;
 }
 
 export const isOpenExport = ({ state }: Pick<ExportNote, 'state'>): boolean =>

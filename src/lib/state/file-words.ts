@@ -1,5 +1,5 @@
 import { exportKind, plainOptions, type ExportKindId } from '$lib/engines/exports/kinds';
-import type { ExportNote } from '$lib/schemas/export';
+import { isOpenExport, type ExportNote } from '$lib/schemas/export';
 import { readerWords } from '$lib/components/desk/reader-words';
 
 /** The kinds by what they are for, in the order in which a designer looks for them. */
@@ -59,17 +59,24 @@ export function differsBy({ kind, reader, options }: AskedFile): string {
  * Of one edition, or of the draft as it stands; those that were stopped, and those that failed and were asked
  * for again, are of no interest any more.
  */
-export const filesOf = (
-	exports: readonly ExportNote[],
+export const filesOf = <T extends ExportNote>(
+	exports: readonly T[],
 	edition: number | null,
 	revision: number,
-): ExportNote[] =>
+): T[] =>
 	exports.filter(
 		(one) =>
 			one.state !== 'cancelled' &&
 			one.edition === edition &&
 			(edition !== null || one.revision === revision) &&
 			!(one.state === 'failed' && exports.some((later) => isAgain(later, one))),
+	);
+
+/** Of drafts before this one: what is there, and what is on its way. */
+export const earlierFiles = <T extends ExportNote>(exports: readonly T[], revision: number): T[] =>
+	exports.filter(
+		(one) =>
+			one.edition === null && one.revision !== revision && (one.file !== null || isOpenExport(one)),
 	);
 
 const isAgain = (later: ExportNote, one: ExportNote): boolean =>

@@ -33,4 +33,34 @@ describe('following proposals', () => {
 		await vi.advanceTimersByTimeAsync(5_000);
 		expect(told).toHaveLength(3);
 	});
+
+	it('says that no answer comes, also where a page comes in its place, and goes on asking', async () => {
+		const page = '<!doctype html><title>Sign in</title>';
+		const replies = [() => page, () => '[]', () => Promise.reject(new TypeError('torn'))];
+		const fetcher = vi.fn(async () => new Response(await (replies.shift() ?? (() => '{}'))()));
+		const reached: boolean[] = [];
+		const stop = followProposals(
+			'/status',
+			known,
+			{ told: () => undefined, ended: () => undefined, reached: (yes) => reached.push(yes) },
+			fetcher as unknown as typeof fetch,
+		);
+		await vi.advanceTimersByTimeAsync(4_500);
+		stop();
+		expect(reached).toEqual([false, true, false, false]);
+	});
+
+	it('asks no more while the page is loaded anew', async () => {
+		const done = [{ number: 1, state: 'kept', step: '', share: 1 }];
+		let loaded = () => {};
+		const ended = vi.fn(() => new Promise<void>((resolve) => (loaded = resolve)));
+		const handlers = { told: () => undefined, ended };
+		const stop = followProposals('/status', known, handlers, answers(done));
+		await vi.advanceTimersByTimeAsync(10_000);
+		expect(ended).toHaveBeenCalledOnce();
+		loaded();
+		await vi.advanceTimersByTimeAsync(1_500);
+		expect(ended).toHaveBeenCalledTimes(2);
+		stop();
+	});
 });

@@ -38,18 +38,34 @@ export class NameHand {
 	async takeFrom(column: string | null): Promise<void> {
 		if (column === this.#column) return;
 		this.#column = column;
+		await this.tryAgain();
+	}
+
+	/** Fetches them once more, after they could not be. */
+	async tryAgain(): Promise<void> {
+		const column = this.#column;
 		this.trouble = '';
 		if (column === null) {
 			this.named = null;
 			return;
 		}
-		const query = `name=${encodeURIComponent(column)}`;
-		const response = await fetch(`${this.desk.address}/column?${query}`).catch(() => null);
-		const read = response?.ok ? ((await response.json()) as ColumnValues) : null;
+		const values = await this.#fetched(column);
 		if (this.#column !== column) return;
-		this.named = read?.values ?? null;
-		if (!read)
-			this.trouble = `The column ${column} could not be fetched; names are the sheet's own.`;
+		this.named = values;
+		if (!values)
+			this.trouble = `The column ${column} could not be fetched; names are the sheet’s own.`;
+	}
+
+	/** Null where nothing came, or something else than a value for each region. */
+	async #fetched(column: string): Promise<(string | null)[] | null> {
+		const query = `name=${encodeURIComponent(column)}`;
+		try {
+			const response = await fetch(`${this.desk.address}/column?${query}`);
+			const { values } = (response.ok ? await response.json() : {}) as Partial<ColumnValues>;
+			return values?.length === this.desk.sheet.regions.key.length ? values : null;
+		} catch {
+			return null;
+		}
 	}
 
 	/** Where the name of a region stands as drawn; null for one that is not on the sheet. */

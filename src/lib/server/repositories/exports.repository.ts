@@ -27,10 +27,21 @@ const notes = (db: Db, sheetId: string) =>
 		.select(['User.name as by_name', 'User.email as by_email'])
 		.where('exports.sheet_id', '=', sheetId);
 
-/** The newest first. */
-export const listExports = (db: Db, sheetId: string, most: number) =>
-	notes(db, sheetId).orderBy('exports.number', 'desc').limit(most).execute();
+/** Those of editions, which are kept, or those of drafts, which come and go; the newest first. */
+export const listExports = (db: Db, sheetId: string, of: 'edition' | 'draft', most: number) =>
+	notes(db, sheetId)
+		.where('exports.edition', of === 'edition' ? 'is not' : 'is', null)
+		.orderBy('exports.number', 'desc')
+		.limit(most)
+		.execute();
 export type ExportRow = Awaited<ReturnType<typeof listExports>>[number];
+
+/** Of these numbers, the newest first. */
+export const exportsNumbered = (db: Db, sheetId: string, numbers: readonly number[]) =>
+	notes(db, sheetId)
+		.where('exports.number', 'in', numbers.length ? numbers : [0])
+		.orderBy('exports.number', 'desc')
+		.execute();
 
 export const findExport = (db: Db, sheetId: string, number: number) =>
 	notes(db, sheetId).where('exports.number', '=', number).executeTakeFirst();

@@ -51,6 +51,12 @@ export const insertTemplate = (
 		.returning('id')
 		.executeTakeFirst();
 
+/** Lets one after another add or name a template of a team, until the transaction ends. */
+export async function holdTemplateNames(trx: Db, teamId: string): Promise<void> {
+	const held = `template names of ${teamId}`;
+	await sql`select pg_advisory_xact_lock(hashtextextended(${held}, 0))`.execute(trx);
+}
+
 export async function templateNamed(db: Db, teamId: string, name: string) {
 	return db
 		.selectFrom('layout_templates')

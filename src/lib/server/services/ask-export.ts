@@ -43,7 +43,9 @@ export async function askIn(
 	const standing = await findStanding(trx, sheet.id, digest);
 	if (standing) {
 		await keepLonger(trx, standing.id, daysKept);
-		return noteOf(standing);
+		// gone where its time was over and somebody tidied just now: then it is made again
+		const kept = await findExport(trx, sheet.id, standing.number);
+		if (kept) return noteOf(kept);
 	}
 	if ((await countOpenExports(trx, member.team.id)) >= mostOpenExports) return null;
 	return insert(shop, trx, member, sheet, {

@@ -1,5 +1,5 @@
 import type { FileStore, Received } from '../files/index.ts';
-import { requireAccess, type Member } from '../access/member.ts';
+import { Forbidden, requireAccess, type Member } from '../access/member.ts';
 import type { Db, Trx } from '../database/connection.ts';
 import type { Row } from '../database/schema.ts';
 import type { Workshop } from '../jobs/workshop.ts';
@@ -15,6 +15,7 @@ import { findSheetById } from '../repositories/sheets.repository.ts';
 import { record } from './activity.service.ts';
 import { sheetOf } from './draft.service.ts';
 import { daysFromNow } from './ask-export.ts';
+import { mayStopExport } from './export-rights.ts';
 import { Conflict, NotFound } from './outcomes.ts';
 import { dropUnused } from './stored-files.ts';
 
@@ -94,7 +95,7 @@ async function note(
 	await record(trx, actor, `export.${verb}`, subject, said);
 }
 
-/** Stops one that waits or is being made; whoever may take files may stop one, and ask for it again. */
+/** Stops one that waits or is being made; it can be asked for again. */
 export async function stopExport(
 	shop: Pick<Workshop, 'db'>,
 	member: Member,
@@ -102,11 +103,13 @@ export async function stopExport(
 	one: number,
 ): Promise<void> {
 	requireAccess(member, 'files.download');
+	requireAccess(member, 'sheet.read');
 	const { id } = await sheetOf(shop.db, member, number);
 	await shop.db.transaction().execute(async (trx) => {
 		const known = Number.isSafeInteger(one) && one > 0 && one < 2 ** 31;
 		const row = known ? await holdExport(trx, id, one) : undefined;
 		if (!row) throw new NotFound('file');
+		if (!mayStopExport(member, row)) throw new Forbidden('team.manage');
 		const end = { state: 'cancelled', sentence: 'It was stopped.' } as const;
 		if (!(await endExport(trx, row.id, { ...end, expires_at: daysFromNow(daysTold) }))) {
 			throw new Conflict('not-open', 'It has ended already.');

@@ -11,6 +11,7 @@ import {
 	deleteTemplate,
 	findTemplate,
 	holdTemplate,
+	holdTemplateNames,
 	insertTemplate,
 	listTemplates,
 	sheetsByTemplate,
@@ -60,6 +61,7 @@ export async function keepTemplate(
 	requireAccess(member, 'layout.edit');
 	const content = await contentOf(shop.db, member, number, shared);
 	return shop.db.transaction().execute(async (trx) => {
+		await holdTemplateNames(trx, member.team.id);
 		if ((await listTemplates(trx, member.team.id)).length >= mostTemplates)
 			throw new Refused(`A team keeps ${mostTemplates} templates at most. Remove one first.`);
 		const entry = { ...content, teamId: member.team.id, name, createdBy: member.userId };
@@ -95,6 +97,7 @@ export async function renameTemplate(
 	await shop.db.transaction().execute(async (trx) => {
 		const { name: before } = await held(trx, member, id, revision);
 		if (before === name) return;
+		await holdTemplateNames(trx, member.team.id);
 		const taken = await templateNamed(trx, member.team.id, name);
 		if (taken && taken.id !== id)
 			throw new Refused('The team has a template of this name already.', 'name');

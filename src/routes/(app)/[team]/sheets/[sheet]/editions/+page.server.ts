@@ -7,7 +7,7 @@ import { forPage } from '$lib/server/page';
 import { themedEditions } from '$lib/server/services/edition-changes.service';
 import { issueEdition } from '$lib/server/services/edition.service';
 import { stopExport } from '$lib/server/services/export-end.service';
-import { askForExport, sheetExports } from '$lib/server/services/exports.service';
+import { askForExport, deskExports } from '$lib/server/services/exports.service';
 import type { Actions, PageServerLoad } from './$types';
 
 const whatToIssue = z.object({
@@ -16,10 +16,11 @@ const whatToIssue = z.object({
 });
 
 /** The files that were taken of editions and drafts, and the editions that show a measure. */
-export const load = (async ({ locals, params }) => {
+export const load = (async ({ locals, params, depends }) => {
 	const member = memberFor(locals, 'files.download');
+	depends('merestone:exports');
 	return {
-		exports: await forPage(() => sheetExports(workshop(), member, Number(params.sheet))),
+		exports: await forPage(() => deskExports(workshop(), member, Number(params.sheet))),
 		themed: await forPage(() => themedEditions(workshop(), member, Number(params.sheet))),
 	};
 }) satisfies PageServerLoad;
@@ -41,7 +42,8 @@ export const actions = {
 		const member = memberFor(locals, 'files.download');
 		const form = await readForm(request, askExportForm);
 		if (form.failure) return form.failure;
-		const ask = () => askForExport(workshop(), member, Number(params.sheet), form.data);
+		const { asked, revision } = form.data;
+		const ask = () => askForExport(workshop(), member, Number(params.sheet), asked, revision);
 		const taken = await attempt(ask);
 		return taken.failure ?? { taken: taken.data.number };
 	},

@@ -1,12 +1,16 @@
-import { json } from '@sveltejs/kit';
+import { error, json } from '@sveltejs/kit';
+import { exportsAsked } from '$lib/schemas/export';
 import { memberFor } from '$lib/server/access/guard';
 import { workshop } from '$lib/server/jobs/workshop';
 import { forPage } from '$lib/server/page';
-import { sheetExports } from '$lib/server/services/exports.service';
+import { deskExports } from '$lib/server/services/exports.service';
 import type { RequestHandler } from './$types';
 
-/** How far files are, as `ExportNote[]`, the newest first: for asking again and again. */
-export const GET = (async ({ locals, params }) => {
+/** How far files are, as `DeskExport[]`, the newest first: for asking again and again. */
+export const GET = (async ({ locals, params, url }) => {
 	const member = memberFor(locals, 'files.download');
-	return json(await forPage(() => sheetExports(workshop(), member, Number(params.sheet))));
+	const asked = exportsAsked.safeParse(Object.fromEntries(url.searchParams));
+	if (!asked.success) error(400, 'Files are named by their numbers.');
+	const { of } = asked.data;
+	return json(await forPage(() => deskExports(workshop(), member, Number(params.sheet), of)));
 }) satisfies RequestHandler;

@@ -9,8 +9,8 @@ import type { RequestHandler } from './$types';
 export const GET = (async ({ locals, params, request }) => {
 	const member = memberFor(locals, 'files.download');
 	const { sheet, number, file: name } = params;
-	const file = await forPage(() =>
-		editionFile(workshop(), member, Number(sheet), Number(number), name),
-	);
-	return editionFileResponse(request, file);
+	return forPage(async () => {
+		const file = await editionFile(workshop(), member, Number(sheet), Number(number), name);
+		return editionFileResponse(request, file);
+	});
 }) satisfies RequestHandler;

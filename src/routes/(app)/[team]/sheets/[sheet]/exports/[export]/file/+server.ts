@@ -9,8 +9,7 @@ import type { RequestHandler } from './$types';
 export const GET = (async ({ locals, params, request }) => {
 	const member = memberFor(locals, 'files.download');
 	const [sheet, one] = [Number(params.sheet), Number(params.export)];
-	return storedFileResponse(
-		request,
-		await forPage(() => exportFileOf(workshop(), member, sheet, one)),
+	return forPage(async () =>
+		storedFileResponse(request, await exportFileOf(workshop(), member, sheet, one)),
 	);
 }) satisfies RequestHandler;
