@@ -61,6 +61,8 @@ async function arrange(shop: Workshop, member: Member, number: number): Promise<
 		title: 'Republic of Tavaröe',
 		subtitle: 'Districts and provinces',
 		groupColumn: 'province',
+		// districts too small for their names have a number, and a list beside them
+		lettering: { ...draft.layout.lettering, numbers: true },
 		credits: 'Tavaröe Survey Office. An invented country; free to use (CC0-1.0).',
 	};
 	const document = { ...draft, locks: Object.fromEntries(locks), layout };

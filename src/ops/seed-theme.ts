@@ -66,8 +66,8 @@ async function showPeople(
 ): Promise<void> {
 	const { draft, revision, regions } = await deskSheet(shop, member, number);
 	const asked: Theme = {
-		...{ measure, per: { kind: 'area' }, isRate: false, method: 'quantiles', classes: 6 },
-		...{ breaks: [], rounded: true, ramp: 'house-dusk', reversed: false, middle: null },
+		...{ measure, per: { kind: 'area' }, isRate: false, method: 'quantiles', classes: 4 },
+		...{ breaks: [], rounded: true, ramp: 'viridis', reversed: false, middle: null },
 		...{ suppressBelow: null, figuresInFiles: true, title: 'People per km²' },
 	};
 	const values = regions.key.map((key) => people[key] ?? null);

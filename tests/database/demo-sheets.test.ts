@@ -23,10 +23,10 @@ it('a newcomer finds a coloured and a themed sheet, both issued', async () => {
 	const sheets = await sheetList(shop, several);
 	expect(sheets.map(({ number }) => number).sort()).toEqual([1, 2]);
 	const { theme, editions } = await deskSheet(shop, several, 2);
-	expect(theme).toMatchObject({ told: 6, trouble: null, holds: true, title: 'People per km²' });
+	expect(theme).toMatchObject({ told: 4, trouble: null, holds: true, title: 'People per km²' });
 	// every district of the sample republic has people
-	expect(theme?.classes.every((one) => one < 6)).toBe(true);
-	expect(new Set(theme?.classes).size).toBe(6);
+	expect(theme?.classes.every((one) => one < 4)).toBe(true);
+	expect(new Set(theme?.classes).size).toBe(4);
 	expect(editions.map(({ number }) => number)).toEqual([1]);
 	expect(await seedDemoSheet(shop, several)).toBeNull();
 });
